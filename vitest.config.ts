@@ -1,0 +1,39 @@
+import { defineConfig } from 'vitest/config';
+
+/** Unit, component and API tests. The browser journeys run under Playwright in tests/e2e. */
+export default defineConfig({
+  test: {
+    // a promise rejected without a handler fails the run
+    dangerouslyIgnoreUnhandledErrors: false,
+    projects: [
+      {
+        test: {
+          name: 'unit',
+          include: ['shared/**/*.test.ts', 'server/**/*.unit.test.ts', 'server/media/**/*.test.ts', 'tests/architecture/**/*.test.ts', 'docker-free-scripts/**/*.test.ts', 'src/video/**/*.test.ts', 'src/api/**/*.test.ts'],
+          exclude: ['**/node_modules/**'],
+          environment: 'node',
+        },
+      },
+      {
+        test: {
+          name: 'api',
+          include: ['server/**/*.test.ts', 'tests/api/**/*.test.ts'],
+          exclude: ['**/node_modules/**', 'server/**/*.unit.test.ts', 'server/media/**/*.test.ts'],
+          environment: 'node',
+          globalSetup: ['tests/support/cluster.ts'],
+          maxWorkers: 2,
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+      {
+        test: {
+          name: 'web',
+          include: ['src/**/*.test.tsx', 'src/features/**/*.test.ts', 'src/app/**/*.test.ts', 'src/ui/**/*.test.ts'],
+          environment: 'jsdom',
+          setupFiles: ['tests/support/web-setup.ts'],
+        },
+      },
+    ],
+  },
+});
