@@ -1,0 +1,85 @@
+import * as z from 'zod';
+import { email, id, moment } from './primitives.ts';
+import { json, none, route } from './route.ts';
+
+export const role = z.enum(['owner', 'supervisor', 'coach']).meta({ id: 'Role' });
+export type Role = z.infer<typeof role>;
+
+export const signInBody = z
+  .object({ email, password: z.string().min(1, 'Write your password.').max(200) })
+  .meta({ id: 'SignIn' });
+
+/** The person signed in and the practice they work in. */
+export const me = z
+  .object({
+    user: z.object({ id, name: z.string(), email: z.string(), role }),
+    practice: z.object({ id, name: z.string() }),
+    session: z.object({ id, expiresAt: moment }),
+  })
+  .meta({ id: 'Me' });
+export type Me = z.infer<typeof me>;
+
+export const sessionRow = z
+  .object({
+    id,
+    device: z.string(),
+    createdAt: moment,
+    lastSeenAt: moment,
+    current: z.boolean(),
+  })
+  .meta({ id: 'Session' });
+export type SessionRow = z.infer<typeof sessionRow>;
+
+export const accountRoutes = {
+  signIn: route({
+    method: 'post',
+    path: '/api/sign-in',
+    summary: 'Open a session; the answer sets an httpOnly cookie.',
+    audience: 'anyone',
+    body: signInBody,
+    status: 200,
+    answer: json(me),
+    problems: ['sign-in-refused', 'too-many-tries'],
+  }),
+  signOut: route({
+    method: 'post',
+    path: '/api/sign-out',
+    summary: 'End this session. Fine to call without one.',
+    audience: 'anyone',
+    status: 204,
+    answer: none,
+  }),
+  signOutEverywhere: route({
+    method: 'post',
+    path: '/api/sign-out-everywhere',
+    summary: 'End every session of this account, this one included.',
+    audience: 'staff',
+    status: 204,
+    answer: none,
+  }),
+  me: route({
+    method: 'get',
+    path: '/api/me',
+    summary: 'Who is signed in.',
+    audience: 'staff',
+    status: 200,
+    answer: json(me),
+  }),
+  sessions: route({
+    method: 'get',
+    path: '/api/sessions',
+    summary: 'The open sessions of this account.',
+    audience: 'staff',
+    status: 200,
+    answer: json(z.object({ items: z.array(sessionRow) })),
+  }),
+  endSession: route({
+    method: 'delete',
+    path: '/api/sessions/:id',
+    summary: 'Sign out on one device.',
+    audience: 'staff',
+    params: z.object({ id }),
+    status: 204,
+    answer: none,
+  }),
+};

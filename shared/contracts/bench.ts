@@ -1,0 +1,46 @@
+import * as z from 'zod';
+import { call } from './calls.ts';
+import { clipWithFrames } from './clips.ts';
+import { comment } from './comments.ts';
+import { id, personRef, side } from './primitives.ts';
+import { mark, rep } from './reps.ts';
+import { json, route } from './route.ts';
+
+/** Everything that opening the Bench needs, in one answer; the video comes beside it. */
+export const benchDocument = z
+  .object({
+    clip: clipWithFrames,
+    visit: z.object({ id, day: z.iso.date() }),
+    athlete: personRef,
+    reps: z.array(z.object({ rep, marks: z.array(mark) })),
+    comments: z.array(comment),
+    /** Figures of a side are shown only where it has a call. */
+    calls: z.array(call),
+    /** Sides for which the 'planted thigh turns little' assumption is on. */
+    assumption: z.array(side),
+    /** Other reps of the same visit, for the reading over all reps: their clips and marks. */
+    otherReps: z.array(
+      z.object({
+        clip: clipWithFrames.omit({ frames: true }),
+        rep,
+        marks: z.array(mark),
+        milliseconds: z.array(z.number()),
+      }),
+    ),
+    may: z.object({ mark: z.boolean(), comment: z.boolean() }),
+  })
+  .meta({ id: 'BenchDocument' });
+export type BenchDocument = z.infer<typeof benchDocument>;
+
+export const benchRoutes = {
+  bench: route({
+    method: 'get',
+    path: '/api/clips/:id/bench',
+    summary: 'A clip with its reps, marks, comments and calls, in one answer.',
+    audience: 'staff',
+    params: z.object({ id }),
+    status: 200,
+    answer: json(benchDocument),
+    problems: ['not-found'],
+  }),
+};

@@ -1,0 +1,373 @@
+import * as z from 'zod';
+import {
+  cameraStood,
+  day,
+  framePoint,
+  id,
+  millimetres,
+  moment,
+  pageOf,
+  pageQuery,
+  personRef,
+  side,
+  version,
+  view,
+} from './primitives.ts';
+import { bytes, json, none, route } from './route.ts';
+
+export const clipState = z
+  .enum(['waiting', 'preparing', 'ready', 'refused'])
+  .meta({ id: 'ClipState', description: 'waiting and preparing turn into ready or refused.' });
+export type ClipState = z.infer<typeof clipState>;
+
+/** Exact times of the prepared frames: frame n is shown at ticks[n] × num/den seconds. */
+export const frameTable = z
+  .object({
+    count: z.int(),
+    timeBase: z.object({ num: z.int(), den: z.int() }),
+    ticks: z.array(z.int()),
+  })
+  .meta({ id: 'FrameTable' });
+export type FrameTable = z.infer<typeof frameTable>;
+
+/**
+ * How millimetres per pixel are known: two points on a thing of known length that stands where the athlete
+ * stands (a rod, or crown and floor for body height), or typed in.
+ */
+export const scale = z
+  .discriminatedUnion('from', [
+    z.object({
+      from: z.literal('rod'),
+      a: framePoint,
+      b: framePoint,
+      lengthMm: millimetres(100, 4000),
+    }),
+    z.object({
+      from: z.literal('body-height'),
+      a: framePoint,
+      b: framePoint,
+      lengthMm: millimetres(700, 2400),
+    }),
+    z.object({ from: z.literal('typed'), mmPerPx: z.number().min(0.05).max(20) }),
+  ])
+  .meta({ id: 'Scale' });
+export type Scale = z.infer<typeof scale>;
+
+/** What the measurement needs to know of the camera. Null is unknown, and what needs it is not measured. */
+export const clipGeometry = z
+  .object({
+    scale: scale.nullable(),
+    distanceMm: millimetres(500, 20_000).nullable(),
+    lensHeightMm: millimetres(0, 3000).nullable(),
+    /** From the line between both ASIS to the tip. */
+    beltPointerMm: millimetres(30, 600).nullable(),
+    /** From the skin to the tip; the engine adds the way to the femur's axis. */
+    thighPointerMm: millimetres(30, 600).nullable(),
+    /** Two points of a plumb line, top and bottom; null takes the picture as upright. */
+    plumb: z.object({ top: framePoint, bottom: framePoint }).nullable(),
+  })
+  .meta({ id: 'ClipGeometry' });
+export type ClipGeometry = z.infer<typeof clipGeometry>;
+
+export const refusal = z
+  .object({ code: z.string(), sentence: z.string(), usablePartSeconds: z.number().nullable() })
+  .meta({ id: 'Refusal', description: 'Why a clip was refused, and what to do.' });
+
+export const clip = z
+  .object({
+    id,
+    visitId: id,
+    name: z.string(),
+    state: clipState,
+    /** 0–100 while preparing; null where it is not known. */
+    progress: z.number().nullable(),
+    secondsLeft: z.number().nullable(),
+    refusal: refusal.nullable(),
+    view,
+    cameraStood,
+    /** The clip's default; every rep has its own. */
+    supportSide: side.nullable(),
+    mirrored: z.boolean(),
+    bytes: z.int(),
+    /** Of the upright source frame, px; null until probed. */
+    width: z.int().nullable(),
+    height: z.int().nullable(),
+    durationSeconds: z.number().nullable(),
+    frameRate: z
+      .object({
+        /** Median over the clip; the exact times stand in the frame table. */
+        perSecond: z.number(),
+        variable: z.boolean(),
+        minPerSecond: z.number(),
+        maxPerSecond: z.number(),
+      })
+      .nullable(),
+    /** Of the prepared copy that the Bench plays, px. */
+    copy: z
+      .object({ width: z.int(), height: z.int(), allIntra: z.boolean(), bytes: z.int() })
+      .nullable(),
+    geometry: clipGeometry,
+    /** Derived from `geometry.scale`; null where the scale is unknown. */
+    mmPerPx: z.number().nullable(),
+    repCount: z.int(),
+    uploadedBy: personRef,
+    uploadedAt: moment,
+    version,
+  })
+  .meta({ id: 'Clip' });
+export type Clip = z.infer<typeof clip>;
+
+export const clipWithFrames = clip
+  .extend({ frames: frameTable.nullable() })
+  .meta({ id: 'ClipWithFrames' });
+export type ClipWithFrames = z.infer<typeof clipWithFrames>;
+
+/** The fields that travel beside the file of a form upload; form fields are text. */
+export const clipUploadFields = z
+  .object({
+    view,
+    supportSide: side.optional(),
+    mirrored: z
+      .enum(['true', 'false'])
+      .default('false')
+      .transform((value) => value === 'true'),
+  })
+  .refine((value) => value.view === 'front' || value.view === 'back' || value.supportSide, {
+    path: ['supportSide'],
+    message: 'A side view needs to know which leg the athlete stands on.',
+  })
+  .meta({ id: 'ClipUpload' });
+
+/** What opens a resumable upload; the bytes then follow by the tus protocol at `uploadUrl`. */
+export const uploadBody = z
+  .object({
+    name: z.string().trim().min(1).max(255),
+    bytes: z.int().min(1, 'The file is empty. Film it again, or choose another file.'),
+    view,
+    supportSide: side.nullable().default(null),
+    mirrored: z.boolean().default(false),
+  })
+  .refine((value) => value.view === 'front' || value.view === 'back' || value.supportSide, {
+    path: ['supportSide'],
+    message: 'A side view needs to know which leg the athlete stands on.',
+  })
+  .meta({ id: 'UploadBody' });
+
+export const upload = z
+  .object({ id, uploadUrl: z.string(), bytes: z.int(), received: z.int() })
+  .meta({ id: 'Upload' });
+
+export const clipEdit = z
+  .object({
+    view,
+    supportSide: side.nullable(),
+    mirrored: z.boolean(),
+    geometry: clipGeometry,
+    version,
+  })
+  .partial()
+  .required({ version: true })
+  .meta({ id: 'ClipEdit' });
+
+/** One line of the practice's list of clips. */
+export const clipRow = z
+  .object({
+    id,
+    visitId: id,
+    athlete: personRef,
+    visitDay: day,
+    name: z.string(),
+    state: clipState,
+    view,
+    supportSide: side.nullable(),
+    durationSeconds: z.number().nullable(),
+    repCount: z.int(),
+    markedFrames: z.int(),
+    uploadedAt: moment,
+  })
+  .meta({ id: 'ClipRow' });
+export type ClipRow = z.infer<typeof clipRow>;
+
+const params = z.object({ id });
+const frameParams = z.object({ id, index: z.coerce.number().int().min(0).max(1_000_000) });
+
+export const clipRoutes = {
+  listClips: route({
+    method: 'get',
+    path: '/api/clips',
+    summary: 'The clips that this person may see, newest first.',
+    audience: 'staff',
+    query: z.object({ state: clipState.optional(), athleteId: id.optional(), ...pageQuery }),
+    status: 200,
+    answer: json(pageOf(clipRow)),
+  }),
+  uploadClip: route({
+    method: 'post',
+    path: '/api/visits/:id/clips',
+    summary:
+      'Send a clip as a form, with the file in the field `clip`. For scripts; the pages send resumably.',
+    audience: 'staff',
+    params,
+    body: clipUploadFields,
+    multipart: { file: 'clip' },
+    status: 201,
+    answer: json(clip),
+    problems: [
+      'not-found',
+      'not-allowed',
+      'consent-missing',
+      'safety-check-missing',
+      'safety-check-stops',
+      'upload-incomplete',
+      'body-too-large',
+      'storage-full',
+      'support-side-needed',
+    ],
+  }),
+  openUpload: route({
+    method: 'post',
+    path: '/api/visits/:id/uploads',
+    summary: 'Open a resumable upload (tus 1.0.0). The last byte makes the clip, with the same id.',
+    audience: 'staff',
+    params,
+    body: uploadBody,
+    status: 201,
+    answer: json(upload),
+    problems: [
+      'not-found',
+      'not-allowed',
+      'consent-missing',
+      'safety-check-missing',
+      'safety-check-stops',
+      'body-too-large',
+      'storage-full',
+      'support-side-needed',
+    ],
+  }),
+  cancelUpload: route({
+    method: 'delete',
+    path: '/api/uploads/:id',
+    summary: 'Give up a resumable upload; what was received is thrown away.',
+    audience: 'staff',
+    params,
+    status: 204,
+    answer: none,
+    problems: ['not-found'],
+  }),
+  clip: route({
+    method: 'get',
+    path: '/api/clips/:id',
+    summary: 'One clip: state, size, exact frame times, scale, distance, lens height, pointers.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: json(clipWithFrames),
+    problems: ['not-found'],
+  }),
+  editClip: route({
+    method: 'patch',
+    path: '/api/clips/:id',
+    summary: 'Correct how a clip was filmed.',
+    audience: 'staff',
+    params,
+    body: clipEdit,
+    status: 200,
+    answer: json(clip),
+    problems: ['not-found', 'not-allowed', 'edited-meanwhile', 'support-side-needed'],
+  }),
+  deleteClip: route({
+    method: 'delete',
+    path: '/api/clips/:id',
+    summary: 'Delete a clip with its reps, marks and files.',
+    audience: 'staff',
+    params,
+    status: 204,
+    answer: none,
+    problems: ['not-found', 'not-allowed'],
+  }),
+  usePart: route({
+    method: 'post',
+    path: '/api/clips/:id/use-part',
+    summary:
+      'Prepare the part that is there of a truncated clip, or the named part of one that is too long.',
+    audience: 'staff',
+    params,
+    body: z
+      .object({
+        fromSeconds: z.number().min(0).default(0),
+        toSeconds: z.number().positive().nullable().default(null),
+      })
+      .meta({ id: 'UsePart' }),
+    status: 202,
+    answer: json(clip),
+    problems: ['not-found', 'not-allowed'],
+  }),
+  clipVideo: route({
+    method: 'get',
+    path: '/api/clips/:id/video',
+    summary: 'The prepared copy for the Bench; answers ranges.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: bytes(['video/mp4'], true),
+    problems: [
+      'not-found',
+      'clip-not-ready',
+      'clip-refused',
+      'range-not-satisfiable',
+      'clip-missing-in-storage',
+    ],
+  }),
+  clipPoster: route({
+    method: 'get',
+    path: '/api/clips/:id/poster',
+    summary: 'One picture of the clip.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: bytes(['image/jpeg']),
+    problems: ['not-found', 'clip-not-ready', 'clip-refused', 'clip-missing-in-storage'],
+  }),
+  clipStrip: route({
+    method: 'get',
+    path: '/api/clips/:id/strip',
+    summary: 'Evenly spaced small pictures side by side, for the time strip.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: bytes(['image/jpeg']),
+    problems: ['not-found', 'clip-not-ready', 'clip-refused', 'clip-missing-in-storage'],
+  }),
+  clipSheet: route({
+    method: 'get',
+    path: '/api/clips/:id/sheets/:index',
+    summary: 'Thirty frames of the copy as one picture, for browsers that cannot decode by frame.',
+    audience: 'staff',
+    params: frameParams,
+    status: 200,
+    answer: bytes(['image/jpeg']),
+    problems: [
+      'not-found',
+      'clip-not-ready',
+      'clip-refused',
+      'frame-out-of-range',
+      'clip-missing-in-storage',
+    ],
+  }),
+  clipFrame: route({
+    method: 'get',
+    path: '/api/clips/:id/frames/:index',
+    summary: 'The exact frame at the phone’s own resolution.',
+    audience: 'staff',
+    params: frameParams,
+    status: 200,
+    answer: bytes(['image/png', 'image/jpeg']),
+    problems: [
+      'not-found',
+      'clip-not-ready',
+      'clip-refused',
+      'frame-out-of-range',
+      'clip-missing-in-storage',
+    ],
+  }),
+};

@@ -1,0 +1,35 @@
+import * as z from 'zod';
+import { clipState } from './clips.ts';
+import { id, side } from './primitives.ts';
+import { eventStream, route } from './route.ts';
+
+/** What a tab is told. An event says that something changed, never what it says: the tab asks again. */
+export const liveEvent = z
+  .discriminatedUnion('type', [
+    z.object({
+      type: z.literal('clip'),
+      clipId: id,
+      visitId: id,
+      state: clipState,
+      progress: z.number().nullable(),
+      secondsLeft: z.number().nullable(),
+    }),
+    z.object({ type: z.literal('marks'), clipId: id, repId: id, byUserId: id }),
+    z.object({ type: z.literal('comments'), clipId: id, byUserId: id }),
+    z.object({ type: z.literal('reading'), visitId: id, side }),
+    z.object({ type: z.literal('signed-out') }),
+  ])
+  .meta({ id: 'LiveEvent' });
+export type LiveEvent = z.infer<typeof liveEvent>;
+
+export const eventRoutes = {
+  events: route({
+    method: 'get',
+    path: '/api/events',
+    summary:
+      'Server-sent events of this practice, as far as this person may see; one stream per tab.',
+    audience: 'staff',
+    status: 200,
+    answer: eventStream,
+  }),
+};

@@ -1,0 +1,67 @@
+/**
+ * Every way in which the API says no, by code. The status and the title of a code are fixed here;
+ * the detail of one occurrence is written where it is thrown (RFC 9457 problem details).
+ */
+export const PROBLEMS = {
+  // who you are
+  'sign-in-needed': [401, 'Sign in first.'],
+  'sign-in-refused': [401, 'This e-mail address and password do not belong together.'],
+  'foreign-origin': [403, 'This request came from another site.'],
+  'not-allowed': [403, 'Your role does not include this.'],
+  'too-many-tries': [429, 'Too many tries. Wait a little, then try again.'],
+  // what you asked for
+  'not-found': [404, 'There is nothing here, or nothing that you may see.'],
+  'invalid-input': [422, 'Some of what was sent cannot be used.'],
+  'unreadable-body': [400, 'The request could not be read.'],
+  'body-too-large': [413, 'That is more than this address takes.'],
+  'unsupported-media-type': [415, 'This address does not take that kind of content.'],
+  'range-not-satisfiable': [416, 'The file has no such part.'],
+  'edited-meanwhile': [
+    409,
+    'Somebody else changed this meanwhile. Look at the newer version, then try again.',
+  ],
+  // consent and safety
+  'consent-missing': [
+    409,
+    'There is no valid consent for filming. Record it on the athlete’s page first.',
+  ],
+  'safety-check-missing': [409, 'Ask the safety questions of this visit first.'],
+  'safety-check-stops': [
+    409,
+    'A safety answer speaks against filming. Speak with the person who treats this athlete.',
+  ],
+  // clips
+  'clip-not-ready': [409, 'The clip is still being prepared.'],
+  'clip-refused': [409, 'This clip was refused and has no pictures to show.'],
+  'clip-missing-in-storage': [503, 'The clip’s file cannot be reached right now.'],
+  'upload-incomplete': [400, 'The upload ended before the file was complete. Send it again.'],
+  'support-side-needed': [422, 'A side view needs to know which leg the athlete stands on.'],
+  'frame-out-of-range': [422, 'The clip has no such frame.'],
+  'upload-gone': [410, 'This upload is no longer known. Start it again.'],
+  // reps, calls and readings
+  'boundaries-out-of-order': [422, 'The moments of a rep must follow each other.'],
+  'landmark-not-in-view': [422, 'This landmark is not marked in this view.'],
+  'call-first': [409, 'Record your call by eye first. Figures are shown after it.'],
+  // replays
+  'pass-phrase-needed': [401, 'This replay asks for a pass phrase.'],
+  // the house
+  'storage-full': [507, 'There is no room left to keep this. Tell the owner of the practice.'],
+  'shutting-down': [503, 'Redshank is restarting. Try again in a moment.'],
+  unexpected: [500, 'Something went wrong on our side.'],
+} as const satisfies Record<string, readonly [status: number, title: string]>;
+
+export type ProblemCode = keyof typeof PROBLEMS;
+
+/** One fault of an input: where it is (`body.givenName`) and what to do about it. */
+export type Fault = { path: string; message: string };
+
+/** The body of `application/problem+json`. `requestId` finds the log line. */
+export type ProblemBody = {
+  type: string;
+  code: ProblemCode;
+  title: string;
+  status: number;
+  detail?: string;
+  requestId: string;
+  faults?: Fault[];
+};

@@ -1,0 +1,182 @@
+import * as z from 'zod';
+import { call } from './calls.ts';
+import { comment } from './comments.ts';
+import { frameTable } from './clips.ts';
+import { frameIndex, id, moment, personRef, side, text, view } from './primitives.ts';
+import { bytes, json, none, route } from './route.ts';
+import { readingCode } from './readings.ts';
+import { overlayMarks, replayCourse } from './replay-parts.ts';
+
+export const replayBody = z
+  .object({
+    visitId: id,
+    side,
+    /** The rep that is played. */
+    repId: id,
+    /** The marked span, both inclusive; the whole rep where left out. */
+    fromFrame: frameIndex.optional(),
+    toFrame: frameIndex.optional(),
+    showReading: z.boolean().default(true),
+    showCall: z.boolean().default(true),
+    /** A sentence of the coach's own to the athlete. */
+    message: text(1000, 0).default(''),
+    days: z.int().min(1).max(180).default(30),
+    passPhrase: z.string().min(6, 'At least 6 characters.').max(100).nullable().default(null),
+  })
+  .meta({ id: 'ReplayBody' });
+
+export const replay = z
+  .object({
+    id,
+    visitId: id,
+    side,
+    repId: id,
+    fromFrame: frameIndex,
+    toFrame: frameIndex,
+    showReading: z.boolean(),
+    showCall: z.boolean(),
+    message: z.string(),
+    passPhrase: z.boolean(),
+    state: z.enum(['live', 'lapsed', 'revoked']),
+    openings: z.int(),
+    lastOpenedAt: moment.nullable(),
+    expiresAt: moment,
+    by: personRef,
+    at: moment,
+  })
+  .meta({ id: 'Replay' });
+export type Replay = z.infer<typeof replay>;
+
+/** What the athlete's page gets: this and nothing else of the practice. */
+export const publicReplay = z
+  .object({
+    athleteGivenName: z.string(),
+    practice: z.object({ name: z.string(), contact: z.string() }),
+    coachName: z.string(),
+    visitDay: z.iso.date(),
+    side,
+    view,
+    /** Size of the upright source frame, px; overlay coordinates are in it. */
+    width: z.int(),
+    height: z.int(),
+    frames: frameTable,
+    fromFrame: frameIndex,
+    toFrame: frameIndex,
+    /** Frames to stop at; null where the rep has no such moment. */
+    moments: z.object({
+      quiet: frameIndex.nullable(),
+      sixty: frameIndex.nullable(),
+      ninety: frameIndex.nullable(),
+      top: frameIndex.nullable(),
+    }),
+    overlay: overlayMarks,
+    course: replayCourse.nullable(),
+    reading: z
+      .object({
+        code: readingCode,
+        label: z.string(),
+        change: z.number().nullable(),
+        plusMinus: z.number().nullable(),
+        probability: z.number().nullable(),
+        repsUsed: z.int(),
+        repsAgreeing: z.int(),
+      })
+      .nullable(),
+    call: call.pick({ seen: true, confidence: true }).nullable(),
+    message: z.string(),
+    comments: z.array(
+      comment
+        .pick({ body: true, fromFrame: true, toFrame: true, shape: true })
+        .extend({ by: z.string() }),
+    ),
+    expiresAt: moment,
+  })
+  .meta({ id: 'PublicReplay' });
+export type PublicReplay = z.infer<typeof publicReplay>;
+
+const params = z.object({ id });
+/** 256 random bits, base64url. */
+const token = z.string().regex(/^[A-Za-z0-9_-]{43}$/);
+const linkParams = z.object({ token });
+
+export const replayRoutes = {
+  listReplays: route({
+    method: 'get',
+    path: '/api/replays',
+    summary: 'The replay links of a visit, newest first.',
+    audience: 'staff',
+    query: z.object({ visitId: id }),
+    status: 200,
+    answer: json(z.object({ items: z.array(replay) })),
+    problems: ['not-found'],
+  }),
+  makeReplay: route({
+    method: 'post',
+    path: '/api/replays',
+    summary: 'Make a replay link. The address is in this answer and nowhere else afterwards.',
+    audience: 'staff',
+    body: replayBody,
+    status: 201,
+    answer: json(z.object({ replay, url: z.string() })),
+    problems: [
+      'not-found',
+      'not-allowed',
+      'consent-missing',
+      'call-first',
+      'clip-not-ready',
+      'frame-out-of-range',
+    ],
+  }),
+  revokeReplay: route({
+    method: 'post',
+    path: '/api/replays/:id/revoke',
+    summary: 'Kill a replay link at once.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: json(replay),
+    problems: ['not-found', 'not-allowed'],
+  }),
+  openReplay: route({
+    method: 'get',
+    path: '/api/r/:token',
+    summary:
+      'The athlete’s replay. Any failure is the same 404; a live link with a pass phrase asks for it.',
+    audience: 'link',
+    params: linkParams,
+    status: 200,
+    answer: json(publicReplay),
+    problems: ['not-found', 'pass-phrase-needed', 'too-many-tries'],
+  }),
+  unlockReplay: route({
+    method: 'post',
+    path: '/api/r/:token/unlock',
+    summary: 'Give the pass phrase; the answer sets a cookie for this link only.',
+    audience: 'link',
+    params: linkParams,
+    body: z.object({ passPhrase: z.string().min(1).max(100) }).meta({ id: 'Unlock' }),
+    status: 204,
+    answer: none,
+    problems: ['not-found', 'pass-phrase-needed', 'too-many-tries'],
+  }),
+  replayVideo: route({
+    method: 'get',
+    path: '/api/r/:token/video',
+    summary: 'The small copy that the replay plays; answers ranges.',
+    audience: 'link',
+    params: linkParams,
+    status: 200,
+    answer: bytes(['video/mp4'], true),
+    problems: ['not-found', 'pass-phrase-needed', 'range-not-satisfiable'],
+  }),
+  replayPoster: route({
+    method: 'get',
+    path: '/api/r/:token/poster',
+    summary: 'One picture of the replay.',
+    audience: 'link',
+    params: linkParams,
+    status: 200,
+    answer: bytes(['image/jpeg']),
+    problems: ['not-found', 'pass-phrase-needed'],
+  }),
+};

@@ -1,0 +1,31 @@
+import { accountRoutes } from './accounts.ts';
+import { athleteRoutes } from './athletes.ts';
+import { benchRoutes } from './bench.ts';
+import { callRoutes } from './calls.ts';
+import { clipRoutes } from './clips.ts';
+import { commentRoutes } from './comments.ts';
+import { eventRoutes } from './events.ts';
+import { readingRoutes } from './readings.ts';
+import { repRoutes } from './reps.ts';
+import { replayRoutes } from './replays.ts';
+import { systemRoutes } from './system.ts';
+import { todayRoutes } from './today.ts';
+import { visitRoutes } from './visits.ts';
+
+/** Every route of the product by name. A route that is not here is not served. */
+export const routes = {
+  ...systemRoutes,
+  ...accountRoutes,
+  ...todayRoutes,
+  ...athleteRoutes,
+  ...visitRoutes,
+  ...clipRoutes,
+  ...repRoutes,
+  ...benchRoutes,
+  ...callRoutes,
+  ...readingRoutes,
+  ...commentRoutes,
+  ...replayRoutes,
+  ...eventRoutes,
+};
+export type RouteName = keyof typeof routes;

@@ -1,0 +1,59 @@
+import * as z from 'zod';
+import { id, moment, personRef, side } from './primitives.ts';
+import { json, route } from './route.ts';
+
+/** One thing that waits for this person. Each kind opens one exact place. */
+export const waiting = z
+  .discriminatedUnion('kind', [
+    z.object({
+      kind: z.literal('clip-preparing'),
+      clipId: id,
+      visitId: id,
+      name: z.string(),
+      progress: z.number().nullable(),
+    }),
+    z.object({
+      kind: z.literal('clip-refused'),
+      clipId: id,
+      visitId: id,
+      name: z.string(),
+      sentence: z.string(),
+    }),
+    z.object({ kind: z.literal('call-missing'), visitId: id, side }),
+    z.object({
+      kind: z.literal('rep-unmarked'),
+      clipId: id,
+      repNumber: z.int().nullable(),
+      side: side.nullable(),
+    }),
+    z.object({ kind: z.literal('reading-ready'), visitId: id, side, label: z.string() }),
+    z.object({
+      kind: z.literal('comment-open'),
+      clipId: id,
+      commentId: id,
+      frame: z.int(),
+      body: z.string(),
+      by: personRef,
+    }),
+    z.object({ kind: z.literal('consent-lapses'), until: z.iso.date() }),
+    z.object({ kind: z.literal('link-lapses'), visitId: id, replayId: id, expiresAt: moment }),
+  ])
+  .and(z.object({ athlete: personRef, at: moment }))
+  .meta({ id: 'Waiting' });
+export type Waiting = z.infer<typeof waiting>;
+
+export const today = z
+  .object({ items: z.array(waiting), athletes: z.int(), visitsThisWeek: z.int() })
+  .meta({ id: 'Today' });
+export type Today = z.infer<typeof today>;
+
+export const todayRoutes = {
+  today: route({
+    method: 'get',
+    path: '/api/today',
+    summary: 'What waits for this person, most pressing first.',
+    audience: 'staff',
+    status: 200,
+    answer: json(today),
+  }),
+};
