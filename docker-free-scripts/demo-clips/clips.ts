@@ -1,0 +1,135 @@
+import { BODIES, type BodyName } from './model/bodies.ts';
+import type { CameraPlan } from './model/camera.ts';
+import type { Pointers } from './model/landmarks.ts';
+import type { Script, Side } from './model/script.ts';
+import { type Habits, USUAL_HABITS } from './model/stance.ts';
+import type { TurnShapeName } from './model/turn-shapes.ts';
+
+export type Container = 'phone-hevc' | 'h264' | 'vp9';
+
+/** One demo clip: who is filmed, how, doing what, and the kind of file it becomes. */
+export interface ClipPlan {
+  readonly name: string;
+  readonly file: string;
+  readonly container: Container;
+  readonly fps: number;
+  readonly body: BodyName;
+  readonly view: 'front' | 'lifted-side';
+  readonly camera: CameraPlan;
+  readonly pointers: Pointers;
+  /** how the hip turns when this side supports */
+  readonly shapes: Readonly<Record<Side, TurnShapeName>>;
+  readonly habits: Habits;
+  readonly script: Script;
+}
+
+const FRONT: CameraPlan = {
+  focalPx: 1700,
+  distance: 3000,
+  lensHeight: 950,
+  pan: 0,
+  tilt: 0,
+  roll: 0,
+  facing: 0,
+};
+
+const THREE_RIGHT: Script = {
+  seed: 11,
+  reps: ['right', 'right', 'right'],
+  top: 106,
+  firstQuietS: 1.6,
+  quietBetweenS: 1,
+  slowness: 1,
+};
+
+export const ROD_MM = 1000;
+
+export const CLIPS: readonly ClipPlan[] = [
+  {
+    name: 'right-early',
+    file: 'right-early.mov',
+    container: 'phone-hevc',
+    fps: 60,
+    body: 'woman',
+    view: 'front',
+    camera: { ...FRONT, pan: 0.6, tilt: -0.5, roll: 0.3 },
+    pointers: { belt: 140, thigh: 125 },
+    shapes: { left: 'early', right: 'early' },
+    habits: USUAL_HABITS,
+    script: THREE_RIGHT,
+  },
+  {
+    name: 'left-expected',
+    file: 'left-expected.mp4',
+    container: 'h264',
+    fps: 60,
+    body: 'man',
+    view: 'front',
+    camera: { ...FRONT, focalPx: 1640, pan: -0.8, roll: -0.2 },
+    pointers: { belt: 150, thigh: 140 },
+    shapes: { left: 'expected', right: 'expected' },
+    habits: { ...USUAL_HABITS, quietPelvisYaw: -1.2, footTurnOut: 12, hikeAt90: 4 },
+    script: { ...THREE_RIGHT, seed: 23, reps: ['left', 'left', 'left'], top: 109 },
+  },
+  {
+    name: 'both-sides',
+    file: 'both-sides.mp4',
+    container: 'h264',
+    fps: 30,
+    body: 'child',
+    view: 'front',
+    camera: { ...FRONT, focalPx: 1760, distance: 2900, lensHeight: 880, pan: 0.3 },
+    pointers: { belt: 125, thigh: 115 },
+    shapes: { left: 'expected', right: 'early' },
+    habits: { ...USUAL_HABITS, footTurnOut: 6, leanAt90: 4 },
+    script: {
+      ...THREE_RIGHT,
+      seed: 37,
+      reps: ['right', 'left', 'right', 'left', 'right', 'left'],
+      top: 112,
+      quietBetweenS: 0.9,
+      slowness: 0.9,
+    },
+  },
+  {
+    name: 'right-side',
+    file: 'right-side.mp4',
+    container: 'h264',
+    fps: 30,
+    body: 'woman',
+    view: 'lifted-side',
+    camera: { ...FRONT, facing: -90, pan: 0.2 },
+    pointers: { belt: 140, thigh: 125 },
+    shapes: { left: 'early', right: 'early' },
+    habits: USUAL_HABITS,
+    script: { ...THREE_RIGHT, seed: 41, reps: ['right', 'right'] },
+  },
+  {
+    name: 'bare-still',
+    file: 'bare-still.webm',
+    container: 'vp9',
+    fps: 30,
+    body: 'olderMan',
+    view: 'front',
+    camera: { ...FRONT, focalPx: 1660, tilt: 0.4 },
+    pointers: { belt: null, thigh: null },
+    shapes: { left: 'still', right: 'still' },
+    habits: { ...USUAL_HABITS, quietPelvisYaw: 0.4, footTurnOut: 14, hikeAt90: 3 },
+    script: { ...THREE_RIGHT, seed: 53, top: 101 },
+  },
+  {
+    name: 'short-lift',
+    file: 'short-lift.mp4',
+    container: 'h264',
+    fps: 30,
+    body: 'olderWoman',
+    view: 'front',
+    camera: { ...FRONT, focalPx: 1720, roll: 0.4 },
+    pointers: { belt: 140, thigh: 120 },
+    shapes: { left: 'still', right: 'still' },
+    habits: { ...USUAL_HABITS, hikeAt90: 9, leanAt90: 6 },
+    script: { ...THREE_RIGHT, seed: 67, reps: ['left', 'left', 'left'], top: 75 },
+  },
+];
+
+export const bodyOf = (clip: ClipPlan): (typeof BODIES)[BodyName] => BODIES[clip.body];
