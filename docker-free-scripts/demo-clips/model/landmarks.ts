@@ -1,4 +1,4 @@
-import { OUTLINE_BEHIND, STRAP_ABOVE_KNEE, STRAP_SKIN } from './bodies.ts';
+import { HIP_INWARD, OUTLINE_BEHIND, STRAP_ABOVE_KNEE, STRAP_SKIN } from './bodies.ts';
 import type { Leg, Skeleton } from './skeleton.ts';
 import { along, type Vec } from './vec.ts';
 
@@ -59,6 +59,7 @@ export const landmarksOf = (bones: Skeleton, worn: Pointers): ReadonlyMap<Landma
     along(bones.asisMiddle, pelvis, [-OUTLINE_BEHIND, sign * body.pelvisHalfWidth, 0]);
   const acromion = (sign: number): Vec =>
     along(bones.acromionMiddle, trunk, [0, (sign * body.acromionWidth) / 2, 0]);
+  const trochanterOut = body.pelvisHalfWidth + 14 - (0.5 - HIP_INWARD) * body.asisWidth;
   const strap = strapMiddle(support);
   const foot = (ahead: number): Vec =>
     along(support.ankle, support.foot, [ahead, 0, 22 - body.ankleHeight]);
@@ -78,10 +79,7 @@ export const landmarksOf = (bones: Skeleton, worn: Pointers): ReadonlyMap<Landma
     ['acromion-lifted', acromion(lifted.sign)],
     ['toe-support', foot(body.ankleToToe)],
     ['heel-support', foot(-body.ankleToHeel)],
-    [
-      'trochanter',
-      along(bones.hipMiddle, pelvis, [0, lifted.sign * (body.pelvisHalfWidth + 14), 0]),
-    ],
+    ['trochanter', along(lifted.hip, lifted.thigh, [0, lifted.sign * trochanterOut, 0])],
     ['knee-lateral', along(lifted.knee, lifted.thigh, [0, lifted.sign * halfKnee, 0])],
     ['acromion', acromion(lifted.sign)],
   ]);
