@@ -9,13 +9,12 @@ const SOURCES = [
   'shared',
   'migrations',
   'public',
-  'index.html',
   'package.json',
   'package-lock.json',
   'tsconfig.json',
   'docker-free-scripts/build-server.mjs',
 ];
-const CONFIG = /^(vite|tailwind|postcss|mikro-orm)\.config\.[a-z]+$/;
+const AT_THE_ROOT = /^(vite|tailwind|postcss|mikro-orm)\.config\.[a-z]+$|\.html$/;
 const TEST = /\.(test|spec)\.tsx?$/;
 
 function* filesUnder(path) {
@@ -28,7 +27,7 @@ function* filesUnder(path) {
 }
 
 const hash = createHash('sha256');
-const roots = [...SOURCES, ...readdirSync('.').filter((name) => CONFIG.test(name))];
+const roots = [...SOURCES, ...readdirSync('.').filter((name) => AT_THE_ROOT.test(name))];
 for (const file of roots.flatMap((root) => [...filesUnder(root)])) {
   hash.update(file).update('\0').update(readFileSync(file)).update('\0');
 }

@@ -13,15 +13,14 @@ source "$scripts/postgres/server.sh"
 folder_of() { printf '%s/redshank-throwaway-%s' "${TMPDIR:-/tmp}" "$1"; }
 
 start() {
-  local watched=$1 password port dir
+  local watched=$1 password port dir said
   password=$(random_password)
   port=$(node "$scripts/port.mjs" free)
   dir=$(folder_of "$port")
-  {
-    pg_make "$dir" "$password"
-    pg_start "$dir" "$port" fsync=off synchronous_commit=off full_page_writes=off wal_level=minimal \
-      max_wal_senders=0 max_connections=200 max_wal_size=4GB
-  } >&2 || fail 'The throwaway database did not start.' "Its log is $dir/server.log."
+  said=$(pg_make "$dir" "$password" 2>&1) || fail 'The throwaway database could not be made.' "$said"
+  said=$(pg_start "$dir" "$port" fsync=off synchronous_commit=off full_page_writes=off wal_level=minimal \
+    max_wal_senders=0 max_connections=200 max_wal_size=4GB 2>&1) ||
+    fail 'The throwaway database did not start.' "$said" "Its log is $dir/server.log."
   {
     printf '\\set owner_password %s\n\\set app_password %s\n\\set jobs_password %s\n' "$password" "$password" "$password"
     cat -- "$scripts/postgres/roles.sql"
