@@ -1,0 +1,68 @@
+import { decimal } from '../figures.ts';
+import type { CourseScale } from './course-scale.ts';
+
+const signed = (value: number) => `${value > 0 ? '+' : ''}${decimal(value, 0)}`;
+const GATES = [60, 90];
+
+/** Axes, the named zero, and 60° and 90° as dotted ink gates with bold ticks. */
+export function CourseAxes({ scale }: { scale: CourseScale }) {
+  const { x, y, left, right, top, bottom, compact, xTicks, yTicks } = scale;
+  return (
+    <g>
+      {yTicks.map((tick) => (
+        <g key={tick}>
+          <path
+            d={`M${left} ${y(tick)}H${right}`}
+            className={tick === 0 ? 'plot-zero' : 'plot-grid'}
+          />
+          <text x={left - 8} y={y(tick) + 5} textAnchor="end">
+            {signed(tick)}
+          </text>
+        </g>
+      ))}
+      <path d={`M${left} ${bottom}H${right}`} className="plot-axis" />
+      {GATES.map((gate) => (
+        <path key={gate} d={`M${x(gate)} ${top - 6}V${bottom}`} className="plot-gate" />
+      ))}
+      {xTicks.map((tick) => {
+        const gate = GATES.includes(tick);
+        return (
+          <g key={tick}>
+            <path
+              d={`M${x(tick)} ${bottom}v${gate ? 7 : 5}`}
+              className="plot-axis"
+              strokeWidth={gate ? 2 : 1}
+            />
+            <text
+              x={x(tick)}
+              y={bottom + 22}
+              textAnchor="middle"
+              className={gate ? 'plot-strong' : undefined}
+            >
+              {tick}°
+            </text>
+          </g>
+        );
+      })}
+      <text x={0} y={12}>
+        {compact ? 'turn, degrees' : 'turn of the support hip, degrees'}
+      </text>
+      <text x={right} y={bottom + 42} textAnchor="end">
+        {compact ? 'lift' : 'lift: lifted thigh from the vertical, degrees'}
+      </text>
+      {!compact && (
+        <>
+          <text x={left + 8} y={top + 14} className="plot-over">
+            turns out (external) ↑
+          </text>
+          <text x={left + 8} y={bottom - 10} className="plot-over">
+            turns in (internal) ↓
+          </text>
+          <text x={right - 2} y={y(0) - 7} textAnchor="end" className="plot-over">
+            0 = quiet stance
+          </text>
+        </>
+      )}
+    </g>
+  );
+}

@@ -1,0 +1,69 @@
+import { describe, expect, it } from 'vitest';
+import { courseScale, turnRange } from './course-scale.ts';
+import { runsOf, turnAt, wedgePath } from './course-shapes.ts';
+
+const point = (lift: number, turn: number, carried = true) => ({
+  lift,
+  turn,
+  low: turn - 1,
+  high: turn + 1,
+  carried,
+});
+
+describe('turnRange', () => {
+  it('never shows less than −10° to +20°', () => {
+    expect(turnRange([])).toEqual([-10, 20]);
+    expect(turnRange([3, 7])).toEqual([-10, 20]);
+  });
+  it('grows in whole steps and passes over what is not a number', () => {
+    expect(turnRange([-13.2, 21, Number.NaN])).toEqual([-15, 25]);
+  });
+});
+
+describe('courseScale', () => {
+  it('puts out on top and more lift to the right', () => {
+    const scale = courseScale(700, 372, []);
+    expect(scale.y(20)).toBe(scale.top);
+    expect(scale.y(-10)).toBe(scale.bottom);
+    expect(scale.x(90)).toBeGreaterThan(scale.x(60));
+    expect(scale.xTicks).toEqual([15, 30, 45, 60, 75, 90, 105]);
+  });
+  it('says less where there is little room, but always 60 and 90', () => {
+    const scale = courseScale(328, 296, []);
+    expect(scale.compact).toBe(true);
+    expect(scale.xTicks).toEqual([30, 60, 90]);
+    expect(scale.yTicks).toEqual([-10, 0, 10, 20]);
+  });
+});
+
+describe('runsOf', () => {
+  it('breaks a curve where no marked frame carries it, without a hole', () => {
+    const curve = [point(60, 0), point(70, 1), point(80, 2, false), point(90, 3), point(95, 4)];
+    expect(runsOf(curve).map((run) => [run.carried, run.points.map((each) => each.lift)])).toEqual([
+      [true, [60, 70]],
+      [false, [70, 80, 90]],
+      [true, [90, 95]],
+    ]);
+  });
+  it('has none for fewer than two points', () => {
+    expect(runsOf([point(60, 0)])).toEqual([]);
+  });
+});
+
+describe('turnAt', () => {
+  it('reads between points, and nothing beyond them', () => {
+    const curve = [point(60, 2), point(70, 4)];
+    expect(turnAt(curve, 60)).toBe(2);
+    expect(turnAt(curve, 65)).toBe(3);
+    expect(turnAt(curve, 71)).toBeNull();
+  });
+});
+
+describe('wedgePath', () => {
+  it('starts at the course’s own value at 60°', () => {
+    const scale = courseScale(700, 372, []);
+    const path = wedgePath(3, [-1, -12], scale);
+    expect(path.startsWith(`M${scale.x(60)},${scale.y(3)}L`)).toBe(true);
+    expect(path.endsWith(`${scale.x(90)},${scale.y(-9)}Z`)).toBe(true);
+  });
+});

@@ -1,0 +1,77 @@
+import { area, line } from 'd3-shape';
+import type { CourseScale } from './course-scale.ts';
+
+/** One point of a drawn course; the reading's `CurvePoint` fits in. Degrees. */
+export interface CourseCurvePoint {
+  readonly lift: number;
+  readonly turn: number;
+  readonly low: number;
+  readonly high: number;
+  /** False where no marked frame lies within reach: drawn dotted. */
+  readonly carried: boolean;
+}
+export type CourseCurve = readonly CourseCurvePoint[];
+
+/** A stretch of a curve that is drawn in one way; stretches share their end points. */
+export interface Run {
+  readonly carried: boolean;
+  readonly points: CourseCurve;
+}
+
+/** Splits a curve where marked frames begin or cease to carry it. */
+export const runsOf = (curve: CourseCurve): Run[] => {
+  const runs: { carried: boolean; points: CourseCurvePoint[] }[] = [];
+  for (const [n, point] of curve.entries()) {
+    const before = curve[n - 1];
+    if (!before) continue;
+    // a stretch is carried only where both its ends are
+    const carried = before.carried && point.carried;
+    const run = runs.at(-1);
+    if (run && run.carried === carried) run.points.push(point);
+    else runs.push({ carried, points: [before, point] });
+  }
+  return runs;
+};
+
+export const linePath = (points: CourseCurve, scale: CourseScale): string =>
+  line<CourseCurvePoint>(
+    (point) => scale.x(point.lift),
+    (point) => scale.y(point.turn),
+  )([...points]) ?? '';
+
+export const bandPath = (points: CourseCurve, scale: CourseScale): string =>
+  area<CourseCurvePoint>(
+    (point) => scale.x(point.lift),
+    (point) => scale.y(point.low),
+    (point) => scale.y(point.high),
+  )([...points]) ?? '';
+
+/** Turn of a curve at a lift, between its points; null outside them. */
+export const turnAt = (curve: CourseCurve, lift: number): number | null => {
+  for (const [n, point] of curve.entries()) {
+    if (point.lift === lift) return point.turn;
+    const before = curve[n - 1];
+    if (before && before.lift < lift && lift < point.lift) {
+      const share = (lift - before.lift) / (point.lift - before.lift);
+      return before.turn + share * (point.turn - before.turn);
+    }
+  }
+  return null;
+};
+
+/**
+ * Where the change from 60° to 90° ends for each judgement, degrees: the expected turn-in from −1°
+ * to −12°, holding still from −1° to +1°. From our model, no source; drawing only.
+ */
+export const WEDGE = { in: [-1, -12], still: [-1, 1] } as const;
+
+/** A triangle from the course's own value at 60° to a range at 90°. */
+export const wedgePath = (
+  at60: number,
+  [from, to]: readonly [number, number],
+  scale: CourseScale,
+): string => {
+  const apex = `${scale.x(60)},${scale.y(at60)}`;
+  const x90 = scale.x(90);
+  return `M${apex}L${x90},${scale.y(at60 + from)}L${x90},${scale.y(at60 + to)}Z`;
+};
