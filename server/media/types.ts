@@ -1,6 +1,9 @@
+import type { FrameRate } from '#shared/timing/frame-rate.ts';
+import type { Seconds } from '#shared/timing/units.ts';
+
 /** Plain facts that leave this room. No database, no HTTP, no queue: other rooms call and keep. */
 
-/** An exact fraction, lowest terms, `den` > 0. */
+/** An exact fraction, lowest terms, `den` above 0. */
 export interface Rational {
   readonly num: number;
   readonly den: number;
@@ -28,8 +31,8 @@ export interface FrameTable {
 }
 
 /** Measured from the frame table, never read from the header. Frames per second. */
-export type FrameRate =
-  | { readonly kind: 'constant'; readonly rate: Rational }
+export type MeasuredRate =
+  | { readonly kind: 'constant'; readonly rate: FrameRate }
   | {
       readonly kind: 'variable';
       /** from the longest, the median and the shortest distance between two frames */
@@ -58,11 +61,11 @@ export interface ClipFacts {
   readonly rotation: 0 | 90 | 180 | 270;
   readonly pixelAspect: Rational;
   readonly dynamicRange: DynamicRange;
-  readonly frameRate: FrameRate;
+  readonly frameRate: MeasuredRate;
   /** frames that a player would show */
   readonly frameCount: number;
-  /** from the first frame's instant to the end of the last, seconds */
-  readonly duration: number;
+  /** from the first frame's instant to the end of the last */
+  readonly duration: Seconds;
   /** the first frame's instant on the file's clock; the copies start at 0 */
   readonly startOffset: Timestamp;
   /** cover pictures beside the clip, which are left out */
@@ -70,10 +73,10 @@ export interface ClipFacts {
   readonly hasSound: boolean;
 }
 
-/** The part of a clip to prepare, seconds from its first frame; `to` is not included. */
+/** The part of a clip to prepare, from its first frame on; `to` is not included. */
 export interface Part {
-  readonly from: number;
-  readonly to: number;
+  readonly from: Seconds;
+  readonly to: Seconds;
 }
 
 export type PreparationStage = 'checking' | 'copying' | 'finishing';
