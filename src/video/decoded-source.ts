@@ -1,0 +1,182 @@
+import type { FrameIndex } from '#shared/timing/units.ts';
+import type { CopyBytes } from './copy-bytes.ts';
+import { chooseConfig } from './decoder-config.ts';
+import { type DemuxedCopy, demuxCopy } from './demux-copy.ts';
+import { abortReason, VideoError } from './errors.ts';
+import { FarthestCache } from './farthest-cache.ts';
+import { FrameDecoder } from './frame-decoder.ts';
+import { checkIndex } from './frame-times.ts';
+import { measurePaintMethod } from './paint-method.ts';
+import { keepPixels, type PaintMethod } from './pixel-picture.ts';
+import { nextToPrefetch, windowWithin } from './prefetch.ts';
+import type { ClipSource, FrameRequest, FrameSource, Picture } from './types.ts';
+
+interface Job {
+  readonly index: FrameIndex;
+  resolve: (picture: Picture) => void;
+  reject: (error: unknown) => void;
+}
+
+/** Exact frames by one decoder: cache, prefetch while stepping, wanted frames before prefetched. */
+export class DecodedSource implements FrameSource {
+  readonly kind = 'decoder';
+  readonly frameCount: number;
+  readonly width: number;
+  readonly height: number;
+  readonly frameTable: ClipSource['frameTable'];
+  readonly #bytes: CopyBytes;
+  readonly #copy: DemuxedCopy;
+  readonly #decoder: FrameDecoder<Picture>;
+  readonly #cache: FarthestCache<Picture>;
+  readonly #jobs: Job[] = [];
+  #method: PaintMethod = 'draw';
+  #playhead: FrameIndex | null = null;
+  #direction: 1 | -1 = 1;
+  #stepping = false;
+  #running = false;
+  #closed = false;
+
+  private constructor(
+    clip: ClipSource,
+    bytes: CopyBytes,
+    copy: DemuxedCopy,
+    config: VideoDecoderConfig,
+    cacheBytes: number,
+  ) {
+    this.frameCount = clip.frameTable.length;
+    this.frameTable = clip.frameTable;
+    this.width = clip.width;
+    this.height = clip.height;
+    this.#bytes = bytes;
+    this.#copy = copy;
+    this.#cache = new FarthestCache(cacheBytes);
+    this.#decoder = new FrameDecoder(copy, config, (index, frame) => this.#keep(index, frame));
+  }
+
+  /**
+   * Opens the copy and decodes its first frame, which proves that this browser can; the rest of
+   * the bytes follows in the background. Owns `bytes` from here on.
+   */
+  static async open(
+    clip: ClipSource,
+    bytes: CopyBytes,
+    cacheBytes: number,
+  ): Promise<DecodedSource> {
+    const copy = await demuxCopy(bytes, clip.frameTable);
+    const config = await chooseConfig(copy.config);
+    const source = new DecodedSource(clip, bytes, copy, config, cacheBytes);
+    const first = await source.frame(0 as FrameIndex, { intent: 'scrub' });
+    await measurePaintMethod(first, (method) => (source.#method = method));
+    void bytes.fill();
+    return source;
+  }
+
+  get paintMethod(): PaintMethod {
+    return this.#method;
+  }
+
+  get decoderRemakes(): number {
+    return this.#decoder.remakes;
+  }
+
+  holds(index: FrameIndex): boolean {
+    return this.#cache.has(index);
+  }
+
+  onProgress: FrameSource['onProgress'] = (listener) => this.#bytes.onProgress(listener);
+
+  async frame(index: FrameIndex, { signal, intent }: FrameRequest = {}): Promise<Picture> {
+    if (this.#closed) throw new VideoError('closed');
+    checkIndex(this.frameTable, index);
+    if (signal?.aborted) throw abortReason(signal);
+    this.#moveTo(index, intent);
+    const picture = this.#cache.get(index) ?? this.#enqueue(index, signal);
+    void this.#run();
+    return picture;
+  }
+
+  close(): void {
+    if (this.#closed) return;
+    this.#closed = true;
+    this.#decoder.close();
+    this.#copy.close();
+    this.#bytes.close();
+    this.#cache.clear();
+    for (const job of this.#jobs.splice(0)) job.reject(new VideoError('closed'));
+  }
+
+  #moveTo(index: FrameIndex, intent: FrameRequest['intent']): void {
+    const moved = this.#playhead === null ? 0 : index - this.#playhead;
+    this.#stepping = (intent ?? (Math.abs(moved) === 1 ? 'step' : 'scrub')) === 'step';
+    if (moved !== 0) this.#direction = moved > 0 ? 1 : -1;
+    this.#playhead = index;
+    this.#cache.movePlayhead(index);
+  }
+
+  #enqueue(index: FrameIndex, signal: AbortSignal | undefined): Promise<Picture> {
+    return new Promise((resolve, reject) => {
+      const job = { index, resolve, reject };
+      this.#jobs.push(job);
+      if (!signal) return;
+      const abort = (): void => {
+        const at = this.#jobs.indexOf(job);
+        if (at >= 0) this.#jobs.splice(at, 1);
+        reject(abortReason(signal));
+      };
+      signal.addEventListener('abort', abort, { once: true });
+      const forget = (): void => signal.removeEventListener('abort', abort);
+      job.resolve = (picture) => (forget(), resolve(picture));
+      job.reject = (error) => (forget(), reject(error as Error));
+    });
+  }
+
+  async #run(): Promise<void> {
+    if (this.#running) return;
+    this.#running = true;
+    while (!this.#closed) {
+      const job = this.#jobs.shift();
+      if (job) await this.#serve(job);
+      else if (!(await this.#prefetchOne())) break;
+    }
+    this.#running = false;
+  }
+
+  async #serve(job: Job): Promise<void> {
+    try {
+      job.resolve(this.#cache.get(job.index) ?? (await this.#decoder.decode(job.index)));
+    } catch (error) {
+      job.reject(error);
+    }
+  }
+
+  async #keep(index: FrameIndex, frame: VideoFrame): Promise<Picture> {
+    const held = this.#cache.get(index);
+    if (held) {
+      frame.close();
+      return held;
+    }
+    const picture = await keepPixels(index, frame, () => this.#method);
+    if (!this.#closed) this.#cache.put(index, picture);
+    return picture;
+  }
+
+  /** False when there is nothing to prefetch; a failure is left to whoever wants that frame. */
+  async #prefetchOne(): Promise<boolean> {
+    if (!this.#stepping || this.#playhead === null || this.#cache.size === 0) return false;
+    const next = nextToPrefetch({
+      playhead: this.#playhead,
+      direction: this.#direction,
+      frameCount: this.frameCount,
+      window: windowWithin(this.#cache.budgetBytes, this.#cache.bytes / this.#cache.size),
+      holds: (index) => this.#cache.has(index),
+    });
+    if (next === null) return false;
+    try {
+      await this.#decoder.decode(next);
+    } catch {
+      return false;
+    }
+    // evicted at once: all that is nearer is held, and going on would go on for ever
+    return this.#cache.has(next);
+  }
+}
