@@ -1,0 +1,15 @@
+import { queryOptions } from '@tanstack/react-query';
+import { routes } from '#shared/contracts/routes.ts';
+import { call } from './client.ts';
+
+/** Who is signed in, and in which practice. */
+export const meQuery = queryOptions({
+  queryKey: ['me'],
+  queryFn: ({ signal }) => call(routes.me, { signal }),
+  staleTime: 5 * 60_000,
+});
+
+export const sessionsQuery = queryOptions({
+  queryKey: ['sessions'],
+  queryFn: ({ signal }) => call(routes.sessions, { signal }),
+});

@@ -1,0 +1,86 @@
+import { useQueryClient, type QueryClient } from '@tanstack/react-query';
+import { useEffect } from 'react';
+import type { LiveEvent } from '#shared/contracts/events.ts';
+import { meQuery } from './accounts.queries.ts';
+import { athletesKey } from './athletes.queries.ts';
+import { benchOptions, clipOptions, commentsOptions } from './bench.queries.ts';
+import { openLiveEvents } from './live-events.ts';
+import { sidesKey } from './readings.queries.ts';
+import { todayQuery } from './today.queries.ts';
+import { visitOptions } from './visits.queries.ts';
+
+const heard = new Set<(event: LiveEvent) => void>();
+
+/** Keeps the tab's stream open and asks again for what an event says has changed. Used once, by the frame. */
+export function useLiveConnection(onSignedOut: () => void): void {
+  const client = useQueryClient();
+  useEffect(
+    () =>
+      openLiveEvents({
+        onEvent: (event) => {
+          if (event.type === 'signed-out') onSignedOut();
+          else refresh(client, event);
+          for (const listener of heard) listener(event);
+        },
+        onResume: () => void client.invalidateQueries(),
+      }),
+    [client, onSignedOut],
+  );
+}
+
+/** Lets a page hear events itself. `listener` must keep its identity (`useCallback`). */
+export function useLiveEvents(listener: (event: LiveEvent) => void): void {
+  useEffect(() => {
+    heard.add(listener);
+    return () => void heard.delete(listener);
+  }, [listener]);
+}
+
+/** What each event makes old. Own marks are not asked for again: the tab that placed them knows them. */
+export function refresh(client: QueryClient, event: Exclude<LiveEvent, { type: 'signed-out' }>) {
+  const invalidate = (queryKey: readonly unknown[], exact = false) =>
+    void client.invalidateQueries({ queryKey, exact });
+  const me = client.getQueryData(meQuery.queryKey);
+  switch (event.type) {
+    case 'clip':
+      refreshClip(client, event);
+      break;
+    case 'marks':
+      if (event.byUserId !== me?.user.id) invalidate(benchOptions(event.clipId).queryKey);
+      break;
+    case 'comments':
+      invalidate(commentsOptions(event.clipId).queryKey);
+      if (event.byUserId !== me?.user.id) invalidate(benchOptions(event.clipId).queryKey);
+      invalidate(todayQuery.queryKey);
+      break;
+    case 'reading':
+      invalidate(sidesKey(event.visitId));
+      invalidate(todayQuery.queryKey);
+      invalidate(athletesKey);
+      break;
+  }
+}
+
+/** Progress is shown from the event itself; only a change of state is worth a question. */
+function refreshClip(client: QueryClient, event: Extract<LiveEvent, { type: 'clip' }>) {
+  const visitKey = visitOptions(event.visitId).queryKey;
+  const known = client.getQueryData(visitKey)?.clips.find((clip) => clip.id === event.clipId);
+  if (known && known.state === event.state) {
+    const { progress, secondsLeft } = event;
+    client.setQueryData(
+      visitKey,
+      (page) =>
+        page && {
+          ...page,
+          clips: page.clips.map((clip) =>
+            clip.id === event.clipId ? { ...clip, progress, secondsLeft } : clip,
+          ),
+        },
+    );
+    return;
+  }
+  void client.invalidateQueries({ queryKey: visitKey, exact: true });
+  void client.invalidateQueries({ queryKey: clipOptions(event.clipId).queryKey });
+  void client.invalidateQueries({ queryKey: benchOptions(event.clipId).queryKey });
+  void client.invalidateQueries({ queryKey: todayQuery.queryKey });
+}

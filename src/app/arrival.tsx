@@ -1,0 +1,18 @@
+import { useEffect, useRef } from 'react';
+import { useLocation } from 'react-router-dom';
+
+/** After going to another page the focus stands at its heading, so that a screen reader starts there. */
+export function Arrival() {
+  const { pathname, hash } = useLocation();
+  const before = useRef(pathname);
+  useEffect(() => {
+    if (before.current === pathname || hash !== '') return;
+    before.current = pathname;
+    // a page may have given the focus to a field of its own
+    if (document.activeElement instanceof HTMLInputElement) return;
+    const start =
+      document.querySelector<HTMLElement>('h1[tabindex]') ?? document.querySelector('main');
+    start?.focus({ preventScroll: true });
+  }, [pathname, hash]);
+  return null;
+}

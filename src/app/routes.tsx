@@ -1,0 +1,39 @@
+import type { ComponentType } from 'react';
+import type { RouteObject } from 'react-router-dom';
+import { ErrorPage } from './error-page.tsx';
+import { NotFoundPage } from './not-found-page.tsx';
+import { Root } from './root.tsx';
+import { Starting } from './starting.tsx';
+import { StaffFrame } from './staff-frame.tsx';
+
+/** A page whose code is fetched when it is first opened. */
+const lazily =
+  (load: () => Promise<ComponentType>): (() => Promise<{ Component: ComponentType }>) =>
+  async () => ({ Component: await load() });
+
+/** Every page of the product. A page that is not here does not exist. */
+export const pages: RouteObject[] = [
+  {
+    Component: Root,
+    ErrorBoundary: ErrorPage,
+    HydrateFallback: Starting,
+    children: [
+      {
+        path: 'sign-in',
+        lazy: lazily(() =>
+          import('#src/features/accounts/sign-in-page.tsx').then((page) => page.SignInPage),
+        ),
+      },
+      {
+        Component: StaffFrame,
+        children: [
+          {
+            // inside the frame, so that a page that fails keeps its navigation
+            ErrorBoundary: ErrorPage,
+            children: [{ path: '*', Component: NotFoundPage }],
+          },
+        ],
+      },
+    ],
+  },
+];

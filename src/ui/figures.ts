@@ -1,0 +1,59 @@
+/** How numbers are written everywhere: a true minus, one decimal for angles, a sign on turn. */
+const MINUS = '−';
+
+/** `1.5`, `−1.5`; 0 never carries a minus. */
+export function decimal(value: number, digits = 1): string {
+  const text = value.toFixed(digits);
+  return Number(text) === 0 ? (0).toFixed(digits) : text.replace('-', MINUS);
+}
+
+/** An angle without a sign of its own direction, degrees: `62.0°`. */
+export const degrees = (value: number, digits = 1): string => `${decimal(value, digits)}°`;
+
+/** A turn, degrees, external positive: `+6.8°`, `−1.2°`, `0.0°`. */
+export function turn(value: number, digits = 1): string {
+  const text = degrees(value, digits);
+  return Number(value.toFixed(digits)) > 0 ? `+${text}` : text;
+}
+
+/** What stands behind a value: `± 3.6`. */
+export const plusMinus = (value: number, digits = 1): string => `± ${decimal(value, digits)}`;
+
+/** A file's size: `211 MB`, `1.8 GB`. */
+export function fileSize(bytes: number): string {
+  if (bytes < 1e3) return `${bytes} bytes`;
+  if (bytes < 1e6) return `${Math.round(bytes / 1e3)} kB`;
+  if (bytes < 1e9) return `${(bytes / 1e6).toFixed(bytes < 1e7 ? 1 : 0)} MB`;
+  return `${(bytes / 1e9).toFixed(1)} GB`;
+}
+
+/** A short stretch of time left, rounded so that it does not jump about: `about 50 s`, `about 3 min`. */
+export function roughly(seconds: number): string {
+  if (seconds < 8) return 'a few seconds';
+  if (seconds < 90) return `about ${Math.ceil(seconds / 10) * 10} s`;
+  if (seconds < 3600) return `about ${Math.round(seconds / 60)} min`;
+  return `about ${decimal(seconds / 3600)} h`;
+}
+
+/** A body height or a distance in metres: `1.74 m`. */
+export const metres = (mm: number): string => `${(mm / 1000).toFixed(2)} m`;
+
+const SMALL = [
+  'no',
+  'one',
+  'two',
+  'three',
+  'four',
+  'five',
+  'six',
+  'seven',
+  'eight',
+  'nine',
+  'ten',
+  'eleven',
+  'twelve',
+];
+/** Counts up to twelve in words, as in running text. */
+export const inWords = (count: number): string => SMALL[count] ?? String(count);
+
+export const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

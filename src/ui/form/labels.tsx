@@ -1,0 +1,19 @@
+import { createContext, useContext, useEffect, useState, type ReactNode } from 'react';
+
+/** What each field of a form is called, so that the summary can name it. */
+const LabelsContext = createContext<Map<string, ReactNode>>(new Map());
+
+export function LabelsProvider({ children }: { children: ReactNode }) {
+  const [labels] = useState(() => new Map<string, ReactNode>());
+  return <LabelsContext value={labels}>{children}</LabelsContext>;
+}
+
+export function useLabel(name: string, label: ReactNode): void {
+  const labels = useContext(LabelsContext);
+  useEffect(() => {
+    labels.set(name, label);
+    return () => void labels.delete(name);
+  }, [labels, name, label]);
+}
+
+export const useLabels = () => useContext(LabelsContext);

@@ -1,0 +1,25 @@
+import type { Side } from '#shared/contracts/primitives.ts';
+
+/** Addresses of the pages. The route table in app and every link are made from these. */
+export const paths = {
+  today: () => '/',
+  signIn: () => '/sign-in',
+  athletes: () => '/athletes',
+  newAthlete: () => '/athletes/new',
+  athlete: (id: string) => `/athletes/${id}`,
+  editAthlete: (id: string) => `/athletes/${id}/edit`,
+  newConsent: (athleteId: string) => `/athletes/${athleteId}/consents/new`,
+  newVisit: (athleteId: string) => `/athletes/${athleteId}/visits/new`,
+  visit: (id: string) => `/visits/${id}`,
+  call: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}/call`,
+  reading: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}`,
+  /** The Bench, at a frame (from 0) and a comment where they are given. */
+  bench: (clipId: string, at: { frame?: number; comment?: string } = {}) => {
+    const search = new URLSearchParams();
+    if (at.frame !== undefined) search.set('frame', String(at.frame));
+    if (at.comment !== undefined) search.set('comment', at.comment);
+    return `/clips/${clipId}${search.size === 0 ? '' : `?${search}`}`;
+  },
+  setUps: () => '/practice/set-ups',
+  method: () => '/method',
+} as const;
