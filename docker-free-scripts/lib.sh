@@ -60,7 +60,7 @@ step() {
     rm -f -- "$step_log"
   else
     say "✗ $label ($((SECONDS - started)) s). The end of $step_log:"
-    tail -n 40 -- "$step_log" | sed 's/^/    /' >&2
+    tail -n "${step_lines:-40}" -- "$step_log" | sed 's/^/    /' >&2
   fi
   return "$status"
 }
