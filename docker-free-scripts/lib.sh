@@ -25,7 +25,7 @@ fail() {
 
 is_root() { [[ $EUID -eq 0 ]]; }
 
-random_password() { node -p 'require("node:crypto").randomBytes(24).toString("hex")'; }
+random_password() { node -e 'process.stdout.write(require("node:crypto").randomBytes(24).toString("hex") + "\n")'; }
 
 # Writes standard input to a file that only its owner can read; the file appears whole or not at all.
 write_secret() {

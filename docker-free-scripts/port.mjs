@@ -27,7 +27,8 @@ async function freePort() {
 
 const [command, host, given] = process.argv.slice(2);
 if (command === 'free') {
-  console.log(await freePort());
+  // not console.log, which colours a number where FORCE_COLOR is set
+  process.stdout.write(`${await freePort()}\n`);
 } else if (command === 'check') {
   const port = /^\d{1,5}$/.test(given ?? '') ? Number(given) : 0;
   process.exitCode = port >= 1 && port <= 65535 ? await statusOf(host, port) : 2;

@@ -1,0 +1,37 @@
+import { defineConfig } from '@playwright/test';
+import { chromium } from './tests/e2e/support/chromium.ts';
+
+/**
+ * frames: pages served by the test itself, no server. journeys: the built app, started once for the whole run with
+ * its own database, data folder and mailbox; they share it, so each journey makes its own athletes.
+ */
+export default defineConfig({
+  testDir: 'tests/e2e',
+  outputDir: 'tests/.out/e2e',
+  // one at a time: the app, its ffmpeg and a browser that decodes in software already fill two cores
+  workers: 1,
+  retries: 0,
+  forbidOnly: Boolean(process.env.CI),
+  timeout: 90_000,
+  expect: { timeout: 10_000 },
+  reporter: 'list',
+  use: {
+    launchOptions: chromium,
+    viewport: { width: 1440, height: 900 },
+    locale: 'en-GB',
+    timezoneId: 'UTC',
+    trace: 'retain-on-failure',
+    screenshot: 'only-on-failure',
+  },
+  projects: [
+    { name: 'frames', testDir: 'tests/e2e/frames' },
+    {
+      name: 'app-start',
+      testMatch: 'support/app-start.ts',
+      teardown: 'app-stop',
+      timeout: 180_000,
+    },
+    { name: 'app-stop', testMatch: 'support/app-stop.ts' },
+    { name: 'journeys', testDir: 'tests/e2e/journeys', dependencies: ['app-start'] },
+  ],
+});
