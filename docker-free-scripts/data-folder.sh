@@ -2,14 +2,18 @@
 # REDSHANK_DATA: database, uploads and secrets of one instance, and the lock that keeps it to one start at a time.
 # Sourced after lib.sh.
 
-use_data_folder() {
+# Sets REDSHANK_DATA (absolute) and REDSHANK_SECRETS_DIR, touching nothing.
+resolve_data_folder() {
   local given=${REDSHANK_DATA:-$repo/redshank-data}
   # npm changes into the repository; INIT_CWD is where the person typed.
   [[ $given == /* ]] || given=${INIT_CWD:-$PWD}/$given
   REDSHANK_DATA=$(realpath -m -- "$given")
   REDSHANK_SECRETS_DIR=$REDSHANK_DATA/secrets
   export REDSHANK_DATA REDSHANK_SECRETS_DIR
+}
 
+use_data_folder() {
+  resolve_data_folder
   mkdir -p -m 700 -- "$REDSHANK_DATA" 2>/dev/null || true
   [[ -d $REDSHANK_DATA && -w $REDSHANK_DATA && -x $REDSHANK_DATA ]] ||
     fail "The data folder $REDSHANK_DATA cannot be made or written by $(id -un)." \

@@ -35,7 +35,7 @@ trap finish EXIT
 trap 'exit 130' INT TERM HUP
 
 # The person's own settings must not decide what the tests see.
-unset NODE_ENV PORT HOST PUBLIC_URL DATABASE_URL DATABASE_OWNER_URL DATABASE_JOBS_URL
+unset NODE_ENV PORT HOST PUBLIC_URL TRUST_PROXY DATABASE_URL DATABASE_OWNER_URL DATABASE_JOBS_URL
 for stray in "${!REDSHANK_@}"; do [[ $stray == REDSHANK_TEST_PG ]] || unset "$stray"; done
 [[ -t 2 ]] || export NO_COLOR=1
 

@@ -19,6 +19,12 @@ const root = new URL('../../', import.meta.url);
 const watched = Number(process.argv[2]);
 const ended = new AbortController();
 
+/** The person's own settings must not decide what the tests see. */
+function withoutSettings(env: NodeJS.ProcessEnv): NodeJS.ProcessEnv {
+  const setting = /^(REDSHANK_.*|DATABASE_.*|NODE_ENV|TRUST_PROXY|FORCE_COLOR)$/;
+  return Object.fromEntries(Object.entries(env).filter(([name]) => !setting.test(name)));
+}
+
 async function answers(url: string, app: ChildProcess): Promise<void> {
   for (;;) {
     if (app.exitCode !== null) throw new Error(`the app ended with status ${app.exitCode}`);
@@ -62,7 +68,7 @@ async function run(): Promise<void> {
     cwd: root,
     stdio: ['ignore', 'inherit', 'inherit'],
     env: {
-      ...process.env,
+      ...withoutSettings(process.env),
       HOST: '127.0.0.1',
       PORT: port,
       PUBLIC_URL: url,
@@ -72,7 +78,7 @@ async function run(): Promise<void> {
       DATABASE_URL: database.appUrl,
       DATABASE_OWNER_URL: database.ownerUrl,
       DATABASE_JOBS_URL: database.jobsUrl,
-      SMTP_URL: mail.url,
+      REDSHANK_SMTP_URL: mail.url,
     },
   });
   undo.push(() => stopped(app));

@@ -4,7 +4,7 @@ import { buffer } from 'node:stream/consumers';
 import { SMTPServer } from 'smtp-server';
 
 export interface MailCatcher {
-  /** what the app gets as SMTP_URL */
+  /** what the app gets as REDSHANK_SMTP_URL */
   url: string;
   stop(): Promise<void>;
 }
