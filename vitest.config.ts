@@ -9,7 +9,7 @@ export default defineConfig({
       {
         test: {
           name: 'unit',
-          include: ['shared/**/*.test.ts', 'server/**/*.unit.test.ts', 'server/media/**/*.test.ts', 'tests/architecture/**/*.test.ts', 'docker-free-scripts/**/*.test.ts', 'src/video/**/*.test.ts', 'src/api/**/*.test.ts'],
+          include: ['shared/**/*.test.ts', 'server/**/*.unit.test.ts', 'server/media/**/*.test.ts', 'tests/architecture/**/*.test.ts', 'docker-free-scripts/**/*.test.ts', 'src/video/**/*.test.ts', 'src/api/**/*.test.ts', 'src/canvas/**/*.test.ts'],
           exclude: ['**/node_modules/**'],
           environment: 'node',
         },

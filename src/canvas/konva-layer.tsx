@@ -1,0 +1,160 @@
+import type Konva from 'konva';
+import { useEffect, useRef, type RefObject } from 'react';
+import { Layer, Shape, Stage } from 'react-konva/lib/ReactKonvaCore';
+import { type FramePoint, stagePoint } from '#shared/geometry/points.ts';
+import type { LandmarkId } from '#shared/landmarks/types.ts';
+import type { MarkShape, Primitive } from '#shared/overlay/types.ts';
+import type { Hand } from './hand.ts';
+import { hitRadii } from './hit-radius.ts';
+import { paintOverlay } from './overlay-painter.ts';
+import { paintMark } from './paint-marks.ts';
+import { type Size, toFrame, toStage, type Viewport } from './viewport.ts';
+
+export type Moved = { readonly landmark: LandmarkId; readonly point: FramePoint } | null;
+
+export interface KonvaLayerProps {
+  size: Size;
+  viewport: Viewport;
+  hand: Hand;
+  /** What is drawn, with one mark elsewhere while it is being moved. */
+  draw: (moved: Moved) => readonly Primitive[];
+  /** False where this person may only look. */
+  movable: boolean;
+  onMove: (landmark: LandmarkId, point: FramePoint) => void;
+  onSelect: (landmark: LandmarkId) => void;
+  /** Set when a press has landed on a mark, so that the stage leaves it alone. */
+  pressedRef: RefObject<boolean>;
+}
+
+type Owned = MarkShape & { readonly landmark: LandmarkId };
+const ownsLandmark = (drawn: Primitive): drawn is Owned =>
+  (drawn.kind === 'ring' || drawn.kind === 'diamond' || drawn.kind === 'bracket') &&
+  drawn.landmark !== null &&
+  drawn.state !== 'next';
+
+const ORIGIN = stagePoint(0, 0);
+
+/** The transparent stage over the picture: lines below, a node of its own for every mark above. */
+export default function KonvaLayer(props: KonvaLayerProps) {
+  const { size, viewport, hand, draw } = props;
+  const lines = useRef<Konva.Layer>(null);
+  const marks = draw(null).filter(ownsLandmark);
+  const places = marks.map((mark) => toStage(viewport, mark.at));
+  const radii = hitRadii(places);
+
+  useEffect(() => hand.subscribe(() => lines.current?.batchDraw()), [hand]);
+
+  return (
+    <Stage width={size.width} height={size.height} className="absolute inset-0">
+      <Layer ref={lines} listening={false}>
+        <Shape
+          sceneFunc={(context) =>
+            paintOverlay(
+              context._context,
+              draw(hand.get().moved).filter((each) => !ownsLandmark(each)),
+              { viewport, bounds: size },
+            )
+          }
+        />
+      </Layer>
+      <Layer>
+        {marks.map((mark, n) => (
+          <MarkNode
+            key={mark.landmark}
+            {...props}
+            mark={mark}
+            place={places[n] ?? ORIGIN}
+            radius={radii[n] ?? 0}
+          />
+        ))}
+      </Layer>
+    </Stage>
+  );
+}
+
+/** A press that wanders less than this selects instead of dragging, CSS px. */
+const DRAG_DISTANCE = 3;
+
+function MarkNode({
+  mark,
+  place,
+  radius,
+  viewport,
+  hand,
+  movable,
+  onMove,
+  onSelect,
+  pressedRef,
+}: KonvaLayerProps & { mark: Owned; place: { x: number; y: number }; radius: number }) {
+  const node = useRef<Konva.Shape>(null);
+  const { landmark } = mark;
+  const { x, y } = place;
+
+  useEffect(() => {
+    const put = () => {
+      const shape = node.current;
+      if (!shape || shape.isDragging()) return;
+      const { moved } = hand.get();
+      shape.position(moved?.landmark === landmark ? toStage(viewport, moved.point) : { x, y });
+    };
+    put();
+    return hand.subscribe(put);
+  }, [hand, landmark, viewport, x, y]);
+
+  // Escape, or a second finger, puts the mark back as if it had not been touched
+  useEffect(() => {
+    const restore = () => {
+      const shape = node.current;
+      if (!shape?.isDragging()) return;
+      hand.set({ moved: null, holding: false });
+      shape.stopDrag();
+      shape.position({ x, y });
+    };
+    const onKey = (event: KeyboardEvent) => {
+      if (event.key !== 'Escape' || !node.current?.isDragging()) return;
+      event.stopPropagation();
+      restore();
+    };
+    const onTouch = (event: TouchEvent) => {
+      if (event.touches.length > 1) restore();
+    };
+    window.addEventListener('keydown', onKey, true);
+    window.addEventListener('touchstart', onTouch);
+    return () => {
+      window.removeEventListener('keydown', onKey, true);
+      window.removeEventListener('touchstart', onTouch);
+    };
+  }, [hand, x, y]);
+
+  const here = (event: Konva.KonvaEventObject<DragEvent>) =>
+    toFrame(viewport, stagePoint(event.target.x(), event.target.y()));
+  return (
+    <Shape
+      ref={node}
+      x={x}
+      y={y}
+      draggable={movable}
+      dragDistance={DRAG_DISTANCE}
+      sceneFunc={(context) => paintMark(context._context, mark, ORIGIN)}
+      hitFunc={(context, shape) => {
+        context.beginPath();
+        context.arc(0, 0, radius, 0, 2 * Math.PI, false);
+        context.closePath();
+        context.fillStrokeShape(shape);
+      }}
+      fill="transparent"
+      onPointerDown={(event) => {
+        if (event.evt.button === 0) pressedRef.current = true;
+      }}
+      onPointerClick={() => onSelect(landmark)}
+      onDragStart={() => hand.set({ holding: true })}
+      onDragMove={(event) => hand.set({ moved: { landmark, point: here(event) } })}
+      onDragEnd={(event) => {
+        const { moved } = hand.get();
+        const point = here(event);
+        hand.set({ moved: null, holding: false });
+        if (moved) onMove(landmark, point);
+      }}
+    />
+  );
+}
