@@ -15,7 +15,7 @@ export interface Limits {
 export const readLimits: Limits = {
   memoryBytes: 2 * 1024 ** 3,
   cpuSeconds: 300,
-  fileBytes: 64 * 1024 ** 2,
+  fileBytes: 256 * 1024 ** 2,
 };
 /** 7,200 frames of 4K HEVC with tone mapping took under an hour of one core. */
 export const prepareLimits: Limits = {

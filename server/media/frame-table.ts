@@ -13,6 +13,8 @@ export interface PacketScan {
   readonly lastDuration: number | null;
   /** packets of the picture without any time */
   readonly untimed: number;
+  /** packets of the picture that are decoded but never shown */
+  readonly discarded: number;
   /** end of the last packet of any stream, seconds; null where unknown */
   readonly endSeconds: number | null;
   /** the scan was given up: more packets than any clip has */
@@ -34,6 +36,7 @@ export async function scanPackets(
 ): Promise<PacketScan> {
   const shown: ScannedPacket[] = [];
   let untimed = 0;
+  let discarded = 0;
   let endSeconds: number | null = null;
   let endless = false;
   const onLine = (line: string): void | false => {
@@ -44,8 +47,9 @@ export async function scanPackets(
       const end = ((packet.pts + (packet.duration ?? 0)) * timeBase.num) / timeBase.den;
       endSeconds = Math.max(endSeconds ?? end, end);
     }
-    if (packet.stream !== pictureIndex || packet.discarded) return;
-    if (packet.pts === null) untimed += 1;
+    if (packet.stream !== pictureIndex) return;
+    if (packet.discarded) discarded += 1;
+    else if (packet.pts === null) untimed += 1;
     else shown.push({ pts: packet.pts, duration: packet.duration });
     endless = shown.length + untimed > maxScannedFrames;
     return endless ? false : undefined;
@@ -56,6 +60,7 @@ export async function scanPackets(
     ticks: shown.map((packet) => packet.pts),
     lastDuration: shown.at(-1)?.duration ?? null,
     untimed,
+    discarded,
     endSeconds,
     endless,
   };

@@ -67,3 +67,9 @@ export const colourTags = (traits: PictureTraits): string[] =>
         '-color_range',
         'tv',
       ];
+
+/** As ffmpeg hands the picture to the first filter: turned upright, pixels not yet square. */
+export const turnedSize = (picture: { coded: Size; rotation: number }): Size =>
+  picture.rotation === 90 || picture.rotation === 270
+    ? { width: picture.coded.height, height: picture.coded.width }
+    : picture.coded;

@@ -26,10 +26,18 @@ export function planCopies(upright: Size, frames: number, perSecond: number): Co
   return {
     bench: planBench(upright, frames),
     replay: { ...fitEven(upright, replayLongEdge), gop: Math.max(1, Math.round(perSecond)) },
-    poster: { ...fitEven(upright, posterLongEdge), frame: Math.floor(frames / 2) },
-    strip: planStrip(upright, frames),
+    ...planPictures(upright, frames),
   };
 }
+
+/** Which frames poster and strip show; made again where fewer frames came out than were promised. */
+export const planPictures = (
+  upright: Size,
+  frames: number,
+): Pick<CopyPlan, 'poster' | 'strip'> => ({
+  poster: { ...fitEven(upright, posterLongEdge), frame: Math.floor(frames / 2) },
+  strip: planStrip(upright, frames),
+});
 
 function planBench(upright: Size, frames: number): CopyPlan['bench'] {
   const gop = frames <= allIntraMaxFrames ? 1 : 5;

@@ -1,14 +1,9 @@
 import { inputArgs, type FfmpegJob, type PictureSource } from './ffmpeg-job.ts';
 import { colourTags, type PictureTraits, toPixels } from './picture-filters.ts';
 import type { CopyPlan } from './plan-copies.ts';
-import { secondsOf } from './rational.ts';
+import { seekArgs, type TickSpan, trim } from './tick-span.ts';
 import type { Rational } from './types.ts';
-
-/** Whole ticks of the original's clock: the first one wanted, and the first one no longer wanted. */
-export interface TickSpan {
-  readonly from: number;
-  readonly to: number;
-}
+import type { CopyPaths } from './copy-paths.ts';
 
 export interface PreparationPlan {
   readonly source: PictureSource;
@@ -18,48 +13,64 @@ export interface PreparationPlan {
   /** null prepares the whole clip */
   readonly span: TickSpan | null;
   readonly threads: number;
-  readonly paths: { bench: string; replay: string; poster: string; strip: string };
+  readonly paths: CopyPaths;
 }
 
 /** All copies from one decode: the picture is scaled and tone mapped once, then split. */
 export function preparationJob(plan: PreparationPlan): FfmpegJob {
   const { source, copies, paths, span } = plan;
   return {
-    input: { path: source.path, args: inputArgs(source.demuxer, plan.threads, seek(plan)) },
+    input: {
+      path: source.path,
+      args: inputArgs(source.demuxer, plan.threads, span ? seekArgs(span, plan.timeBase) : []),
+    },
     graph: [
       chain(`[0:${source.streamIndex}]`, [
-        ...(span ? [`trim=start_pts=${span.from}:end_pts=${span.to}`] : []),
+        ...(span ? [trim(span)] : []),
         'setpts=PTS-STARTPTS',
         ...toPixels(plan.traits, copies.bench, 'yuv420p'),
         'split=4[bench][r][p][s]',
       ]),
       chain('[r]', [scale(copies.replay), 'setsar=1[replay]']),
-      // the first frame stands in where the clip ends before the middle one
-      chain('[p]', [pick([0, copies.poster.frame]), scale(copies.poster), 'setsar=1[poster]']),
-      chain('[s]', [
-        pick(copies.strip.frames),
-        scale(copies.strip.tile),
-        `tile=${copies.strip.frames.length}x1[strip]`,
-      ]),
+      ...pictureChains(copies),
     ].join(';'),
     outputs: [
       { path: paths.bench, args: ['-map', '[bench]', ...video(plan), ...bench(copies.bench.gop)] },
       { path: paths.replay, args: ['-map', '[replay]', ...video(plan), ...replay(copies)] },
-      { path: paths.poster, args: ['-map', '[poster]', ...picture(3)] },
-      { path: paths.strip, args: ['-map', '[strip]', ...picture(4)] },
+      ...pictureOutputs(paths),
     ],
   };
 }
 
+/** Poster and strip once more, from the bench copy: where frames were lost, their places have moved. */
+export const picturesJob = (
+  copies: Pick<CopyPlan, 'poster' | 'strip'>,
+  paths: CopyPaths,
+): FfmpegJob => ({
+  input: { path: paths.bench, args: inputArgs('mov', 1) },
+  graph: ['[0:0]split=2[p][s]', ...pictureChains(copies)].join(';'),
+  outputs: pictureOutputs(paths),
+});
+
 /**
- * Starts at the key frame before the span and keeps the original's clock, so that `trim` can compare
- * whole ticks; the seconds only need to lie before the span.
+ * Each picture is written over by the next, from the first frame on: ffmpeg reports no progress
+ * before every output has begun. The strip is a row that moves one tile to the left per picked
+ * frame, so that its last state holds the wanted ones.
  */
-function seek({ span, timeBase }: PreparationPlan): string[] {
-  if (!span) return [];
-  const from = Math.max(0, secondsOf({ ticks: span.from, timeBase }) - 0.01);
-  return ['-copyts', '-noaccurate_seek', '-seek_timestamp', '1', '-ss', from.toFixed(6)];
-}
+const pictureChains = ({ poster, strip }: Pick<CopyPlan, 'poster' | 'strip'>): string[] => [
+  chain('[p]', [pick([0, poster.frame]), scale(poster), 'setsar=1[poster]']),
+  chain('[s]', [pick([0, ...strip.frames]), scale(strip.tile), row(strip.frames.length)]),
+];
+
+const row = (tiles: number) =>
+  tiles === 1
+    ? 'null[strip]'
+    : `tile=${tiles}x1:overlap=${tiles - 1}:init_padding=${tiles - 1}[strip]`;
+
+const pictureOutputs = (paths: CopyPaths) => [
+  { path: paths.poster, args: ['-map', '[poster]', ...picture(3)] },
+  { path: paths.strip, args: ['-map', '[strip]', ...picture(4)] },
+];
 
 /**
  * `passthrough` keeps every frame with its own time; the encoder counts in the original's ticks, or

@@ -30,7 +30,8 @@ export type MediaRefusalCode = keyof RefusalFigures;
 
 type Sentences = { [Code in MediaRefusalCode]: (figures: RefusalFigures[Code]) => string };
 
-const s = (seconds: number) => `${seconds.toFixed(1)} s`;
+const s = (seconds: number) =>
+  seconds < 120 ? `${seconds.toFixed(1)} s` : `${(seconds / 60).toFixed(1)} min`;
 const gb = (bytes: number) => `${(bytes / 1024 ** 3).toFixed(1)} GB`;
 const formats = 'MP4, MOV or WebM';
 

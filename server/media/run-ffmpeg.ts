@@ -2,7 +2,7 @@ import ffmpeg from 'fluent-ffmpeg';
 import { confine, confinement, type Limits } from './confinement.ts';
 import { MediaFailure } from './failures.ts';
 import type { FfmpegJob } from './ffmpeg-job.ts';
-import { throwForMachine, type ToolOutcome } from './tool-outcome.ts';
+import { throwForMachine, type ToolOutcome, withoutPaths } from './tool-outcome.ts';
 
 export interface RunOptions {
   readonly limits: Limits;
@@ -61,9 +61,13 @@ export async function runFfmpeg(job: FfmpegJob, options: RunOptions): Promise<Ff
   command.on('start', () => (signal?.aborted ? stop() : undefined));
   signal?.addEventListener('abort', stop, { once: true });
   try {
-    const end = await new Promise<Pick<ToolOutcome, 'exitCode' | 'signal'>>((resolve) => {
+    const end = await new Promise<ProcessEnd>((resolve, reject) => {
       command.once('end', () => resolve({ exitCode: 0, signal: null }));
-      command.once('error', (error: Error) => resolve(readEnd(error.message)));
+      command.once('error', (error: Error) => {
+        const known = readEnd(error.message);
+        if (known) resolve(known);
+        else reject(new MediaFailure('tool-failed', withoutPaths([error.message])));
+      });
       command.run();
     });
     if (signal?.aborted) throw new MediaFailure('cancelled');
@@ -75,10 +79,11 @@ export async function runFfmpeg(job: FfmpegJob, options: RunOptions): Promise<Ff
   }
 }
 
-/** fluent-ffmpeg reports the end in words. */
-export function readEnd(message: string): Pick<ToolOutcome, 'exitCode' | 'signal'> {
+type ProcessEnd = Pick<ToolOutcome, 'exitCode' | 'signal'>;
+
+/** fluent-ffmpeg reports the end in words; null where they are not about the process's end. */
+export function readEnd(message: string): ProcessEnd | null {
   const killed = /killed with signal (SIG\w+)/.exec(message)?.[1];
   const code = /exited with code (\d+)/.exec(message)?.[1];
-  if (!killed && !code) throw new MediaFailure('tool-failed', message.slice(0, 200));
-  return { exitCode: code ? Number(code) : null, signal: killed ?? null };
+  return killed || code ? { exitCode: code ? Number(code) : null, signal: killed ?? null } : null;
 }

@@ -42,6 +42,8 @@ export interface PictureHeader {
 
 export interface FileHeader {
   readonly picture: PictureHeader | null;
+  /** seconds per tick of every stream, by its index */
+  readonly timeBases: ReadonlyMap<number, Rational>;
   readonly attachedPictures: number;
   readonly hasSound: boolean;
   readonly declaredSeconds: number | null;
@@ -54,6 +56,12 @@ export function parseHeader(json: string): FileHeader {
   const moving = pictures.filter((s) => s.disposition?.attached_pic !== 1);
   return {
     picture: moving[0] ? pictureHeader(moving[0]) : null,
+    timeBases: new Map(
+      streams.flatMap((s) => {
+        const timeBase = parseRational(s.time_base);
+        return timeBase ? [[s.index, timeBase] as const] : [];
+      }),
+    ),
     attachedPictures: pictures.length - moving.length,
     hasSound: streams.some((s) => s.codec_type === 'audio'),
     declaredSeconds: positive(format.duration),
