@@ -3,6 +3,7 @@ import { LANDMARK_IDS } from './types.ts';
 
 const FRONT: readonly View[] = ['front'];
 const FRONT_AND_BACK: readonly View[] = ['front', 'back'];
+const ALL_VIEWS: readonly View[] = ['front', 'back', 'lifted-side', 'support-side'];
 const SIDES: readonly View[] = ['lifted-side', 'support-side'];
 const ALL_SETS: readonly LandmarkSetId[] = ['bare', 'belt', 'belt+thigh'];
 const BARE: readonly LandmarkSetId[] = ['bare'];
@@ -116,7 +117,7 @@ const TABLE: Readonly<Record<LandmarkId, Omit<Landmark, 'id'>>> = {
     role: 'support',
     errorClass: 'anatomical',
     sets: ALL_SETS,
-    views: FRONT_AND_BACK,
+    views: ALL_VIEWS,
   },
   'ankle-lifted': {
     label: 'Middle of the lifted ankle',
@@ -124,7 +125,7 @@ const TABLE: Readonly<Record<LandmarkId, Omit<Landmark, 'id'>>> = {
     role: 'lifted',
     errorClass: 'anatomical',
     sets: ALL_SETS,
-    views: FRONT_AND_BACK,
+    views: ALL_VIEWS,
   },
   'acromion-support': {
     label: 'Shoulder corner, support side',

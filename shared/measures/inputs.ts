@@ -41,3 +41,12 @@ export interface CameraInput {
 export interface AthleteInput {
   readonly bodyHeightMm: number | null;
 }
+
+/** Typical error of one anatomical mark, px of the source: 3 until the coach's own is known. */
+export interface MarkError {
+  readonly anatomicalPx: number;
+  /** Frames marked twice it rests on; 0 for the assumed 3 px. */
+  readonly doublyMarkedFrames: number;
+}
+
+export const ASSUMED_MARK_ERROR: MarkError = { anatomicalPx: 3, doublyMarkedFrames: 0 };

@@ -2,6 +2,7 @@ import type { CourseFrame, RepInput, RepPhases } from '#shared/course/types.ts';
 import type { Degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId, Side } from '#shared/landmarks/types.ts';
 import type { SubstitutionChange } from '#shared/measures/change.ts';
+import type { MarkError } from '#shared/measures/inputs.ts';
 import type { PlacedWarning, Reason, RepFault, Settle } from './reasons.ts';
 
 /** Everything a reading depends on: the same input gives the same result to the last digit. */
@@ -13,14 +14,13 @@ export interface ReadingInput {
   /** 'The planted thigh turns little', turned on by the coach; counts only with belt alone. */
   readonly thighTurnsLittle: boolean;
   readonly markError: MarkError;
+  /** The practice's own repeated lifts, which replace the assumed systematic error of their set. */
+  readonly ownSystematic: {
+    readonly set: LandmarkSetId;
+    readonly u: Degrees;
+    readonly lifts: number;
+  } | null;
   readonly reps: readonly RepInput[];
-}
-
-/** Typical error of one anatomical mark, px of the source: 3 until the coach's own is known. */
-export interface MarkError {
-  readonly anatomicalPx: number;
-  /** Frames marked twice it rests on; 0 for the assumed 3 px. */
-  readonly doublyMarkedFrames: number;
 }
 
 export const READING_CODES = [

@@ -1,0 +1,86 @@
+import { radians, toDegrees } from '#shared/geometry/units.ts';
+import type { LandmarkId } from '#shared/landmarks/types.ts';
+import { CONSTANTS } from './constants.ts';
+import { normalDraws } from './draws.ts';
+import { hipCentre } from './hip-centre.ts';
+import type { LevelFrame } from './level.ts';
+import { liftFromHeights } from './lift-formula.ts';
+import { sideLift, sideLiftHalfWidth, SIDE_LANDMARKS } from './lift-from-side.ts';
+import { type Measure, measured, missing, type Setting, type Value } from './measure.ts';
+import type { Missing } from './missing.ts';
+import { lacks } from './need.ts';
+
+const FRONT_LANDMARKS: readonly LandmarkId[] = ['asis-support', 'asis-lifted', 'lifted-knee'];
+const DRAWS = 200;
+const SEED = 60_90;
+
+/** Lift of one frame of a front clip, degrees, numeric also where it is too low to be shown. */
+const frontLift = (frame: LevelFrame, { rig, reference }: Setting): number | Missing => {
+  const lack = lacks(frame, FRONT_LANDMARKS);
+  if (lack) return lack;
+  const { 'asis-support': support, 'asis-lifted': lifted, 'lifted-knee': knee } = frame.marks;
+  const { width, thigh, horizon } = reference;
+  if (width === null || thigh === null || horizon === null) return { code: 'no-quiet-stance' };
+  if (!support || !lifted || !knee) return { code: 'marks-coincide' };
+  const hip = hipCentre(lifted, support, width);
+  const lift = toDegrees(radians(liftFromHeights(knee.v, hip.v, thigh, horizon, rig.focal)));
+  return Number.isFinite(lift) ? lift : { code: 'marks-coincide' };
+};
+
+/** Lift of one frame in the view of its clip, degrees; or why there is none. */
+export const liftOf = (frame: LevelFrame, setting: Setting): number | Missing => {
+  const { view } = setting.rig.camera;
+  if (view === 'front') return frontLift(frame, setting);
+  if (view === 'back') return { code: 'view-cannot-show-it', view };
+  return sideLift(frame, setting);
+};
+
+/** Standard deviation of lift from the random errors of the frame's marks, degrees. */
+const liftSpread = (frame: LevelFrame, setting: Setting): number => {
+  const next = normalDraws(SEED);
+  let sum = 0;
+  let squares = 0;
+  for (let i = 0; i < DRAWS; i += 1) {
+    const marks = { ...frame.marks };
+    for (const id of FRONT_LANDMARKS) {
+      const mark = marks[id];
+      if (mark)
+        marks[id] = { ...mark, u: mark.u + mark.error * next(), v: mark.v + mark.error * next() };
+    }
+    const lift = frontLift({ ...frame, marks }, setting);
+    if (typeof lift !== 'number') continue;
+    sum += lift;
+    squares += lift * lift;
+  }
+  return Math.sqrt(Math.max(0, (squares - (sum * sum) / DRAWS) / (DRAWS - 1)));
+};
+
+/** ± of lift beside one frame (95 %): marks, and the model with or without the lens height. */
+export const liftHalfWidth = (frame: LevelFrame, setting: Setting): number => {
+  if (setting.rig.camera.view !== 'front') return sideLiftHalfWidth(frame, setting);
+  const model =
+    setting.rig.camera.lensHeightMm === null
+      ? CONSTANTS.liftModelErrorNoLens.value
+      : CONSTANTS.liftModelError.value;
+  return Math.hypot(1.96 * liftSpread(frame, setting), model);
+};
+
+const value = (frame: LevelFrame, setting: Setting): Value => {
+  const lift = liftOf(frame, setting);
+  return typeof lift === 'number' ? measured(lift, liftHalfWidth(frame, setting)) : missing(lift);
+};
+
+export const lift: Measure = {
+  id: 'lift',
+  label: 'Lift of the thigh',
+  unit: 'degrees',
+  sign: 'plus: the lifted thigh rises forward from the vertical',
+  views: ['front', 'lifted-side', 'support-side'],
+  landmarks: (_set, view) => (view === 'front' ? FRONT_LANDMARKS : SIDE_LANDMARKS),
+  zero: 'quiet stance',
+  substitution: false,
+  againstQuiet: true,
+  smallestChange: null,
+  source: 'from our model, no source',
+  value,
+};

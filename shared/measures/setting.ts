@@ -1,0 +1,12 @@
+import type { LandmarkSetId } from '#shared/landmarks/types.ts';
+import type { LevelFrame } from './level.ts';
+import type { Setting } from './measure.ts';
+import { referenceOf } from './reference.ts';
+import type { Rig } from './rig.ts';
+import { turnZeroOf } from './turn-zero.ts';
+
+/** Everything measures of one rep share, from its quiet frames. */
+export const settingOf = (rig: Rig, quiet: readonly LevelFrame[], set: LandmarkSetId): Setting => {
+  const reference = referenceOf(quiet, rig);
+  return { rig, reference, set, turnZero: turnZeroOf({ rig, reference, set }) };
+};

@@ -1,0 +1,89 @@
+import { drawnSpread, type RiseDraws } from '#shared/course/rise-draws.ts';
+import { type Beta, dot, terms } from '#shared/course/rise-fit.ts';
+import { degrees } from '#shared/geometry/units.ts';
+import { CONSTANTS } from '#shared/measures/constants.ts';
+import type { CurvePoint } from './types.ts';
+
+const FROM = CONSTANTS.gateFrom.value;
+const TO = CONSTANTS.gateTo.value;
+const BEFORE = 30;
+/** A marked frame carries the curve this far, degrees: from our model, no source. */
+const REACH = 8;
+const STEP = 1;
+
+/** One rep's fit as it enters a drawn course. */
+export interface DrawnFit {
+  readonly thigh: Beta;
+  readonly pelvis: Beta;
+  readonly sFit: number;
+  readonly draws: RiseDraws;
+  /** Its share of the course: 1 for a rep alone. */
+  readonly share: number;
+  /** Lifts of the frames that carry weight. */
+  readonly lifts: readonly number[];
+}
+
+/** How uncertain the change at 90° is: random and systematic part, degrees. */
+export interface BandWidths {
+  readonly uR: number;
+  readonly uS: number;
+  /** How much of the thigh part counts; 1 without the assumption. */
+  readonly lambda: number;
+}
+
+const scaled = (beta: Beta, by: number): Beta => [
+  beta[0] * by,
+  beta[1] * by,
+  beta[2] * by,
+  beta[3] * by,
+];
+
+const minus = (a: Beta, b: Beta): Beta => [a[0] - b[0], a[1] - b[1], a[2] - b[2], a[3] - b[3]];
+
+/** Grows from nothing at 60° to all of it at 90° and at 30°, and stays so beyond. */
+const grown = (lift: number): number =>
+  Math.min(1, lift >= FROM ? (lift - FROM) / (TO - FROM) : (FROM - lift) / (FROM - BEFORE));
+
+/** Random spread of the curve's change from 60° to a lift: each rep's draws, added in quadrature. */
+const randomSpread = (fits: readonly DrawnFit[], lift: number, lambda: number): number => {
+  const change = minus(terms(lift), terms(FROM));
+  return Math.hypot(
+    ...fits.map(
+      ({ draws, sFit, share }) =>
+        share * sFit * drawnSpread(draws, [...scaled(change, lambda), ...change]),
+    ),
+  );
+};
+
+/**
+ * The drawn course: weighted mean of the fits. Its band (95 %, under our error model) judges the
+ * change from 60°: it is closed there, and at 90° exactly d ± 1.96 u around the value at 60°.
+ */
+export const courseCurve = (
+  fits: readonly DrawnFit[],
+  { uR, uS, lambda }: BandWidths,
+): readonly CurvePoint[] => {
+  const lifts = fits.flatMap((fit) => fit.lifts);
+  if (lifts.length === 0) return [];
+  const low = Math.ceil(Math.min(...lifts));
+  const high = Math.floor(Math.max(...lifts));
+  const scale = uR / randomSpread(fits, TO, lambda);
+  if (!Number.isFinite(scale)) return [];
+  const curve: CurvePoint[] = [];
+  for (let lift = low; lift <= high; lift += STEP) {
+    const x = terms(lift);
+    const turn = fits.reduce(
+      (sum, fit) => sum + fit.share * (lambda * dot(x, fit.thigh) + dot(x, fit.pelvis)),
+      0,
+    );
+    const u = Math.hypot(scale * randomSpread(fits, lift, lambda), uS * grown(lift));
+    curve.push({
+      lift: degrees(lift),
+      turn: degrees(turn),
+      low: degrees(turn - 1.96 * u),
+      high: degrees(turn + 1.96 * u),
+      carried: lifts.some((each) => Math.abs(each - lift) <= REACH),
+    });
+  }
+  return curve;
+};

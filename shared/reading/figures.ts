@@ -1,0 +1,68 @@
+import { degrees } from '#shared/geometry/units.ts';
+import { CONSTANTS } from '#shared/measures/constants.ts';
+import type { Pooled } from './pool.ts';
+import { studentAbove, studentQuantile } from './student.ts';
+import type { ReadingFigures } from './types.ts';
+
+/** Systematic error of a landmark set: u and its growth q with the change itself. */
+export interface Systematic {
+  readonly u: number;
+  readonly q: number;
+}
+
+const REP2 = CONSTANTS.repSpread.value ** 2;
+const PRIOR2 = CONSTANTS.prior.value ** 2;
+const SYSTEMATIC_NU = 20;
+const CLEAR = 1;
+const FLAT = 5;
+const BEFORE_60 = 8;
+const NINE_IN_TEN = 1.2816;
+
+/** u₀²: a part that all reps share, a part that differs, and true spread between reps. */
+export const systematicVariance = ({ u }: Systematic, reps: number): number =>
+  u * u * (0.7 + 0.3 / reps) + REP2 / reps;
+
+/** Welch–Satterthwaite, with 20 degrees of freedom for the systematic part. */
+export const freedom = (uR2: number, nuR: number, uS2: number): number =>
+  (uR2 + uS2) ** 2 / (uR2 ** 2 / nuR + uS2 ** 2 / SYSTEMATIC_NU);
+
+/** Uncertainty, belief after the weak prior, probabilities, and the smallest turn found. */
+export const figuresOf = (
+  pooled: Pooled,
+  reps: number,
+  systematic: Systematic,
+  thighTurnsLittle: boolean,
+): ReadingFigures => {
+  const { d, uR, nuR } = pooled;
+  const u02 = systematicVariance(systematic, reps);
+  const uR2 = uR * uR;
+  const uC0 = Math.sqrt(uR2 + u02);
+  const uS2 = u02 + (systematic.q * d) ** 2;
+  const uC2 = uR2 + uS2;
+  const nu = freedom(uR2, nuR, uS2);
+  const g = PRIOR2 / (PRIOR2 + uC2);
+  const m = g * d;
+  const sM = Math.sqrt(g * uC2);
+  const above = (x: number): number => studentAbove((x - m) / sM, nu);
+  const uPre = Math.sqrt(pooled.uPre ** 2 + u02);
+  return {
+    d: degrees(d),
+    uC: degrees(Math.sqrt(uC2)),
+    uR: degrees(uR),
+    uS: degrees(Math.sqrt(uS2)),
+    uC0: degrees(uC0),
+    nu,
+    m: degrees(m),
+    sM: degrees(sM),
+    pEarly: above(CLEAR),
+    pIn: 1 - above(-CLEAR),
+    pFlat: above(-FLAT) - above(FLAT),
+    pBefore60: studentAbove((BEFORE_60 - pooled.pre) / uPre, nu),
+    pNotBack: above(0),
+    mdt90: degrees(CLEAR + (studentQuantile(0.95, nu) + NINE_IN_TEN) * uC0),
+    pelvis: { value: degrees(pooled.dPelvis), u: degrees(pooled.uPelvis) },
+    thigh: { value: degrees(pooled.dThigh), u: degrees(pooled.uThigh) },
+    pre: { value: degrees(pooled.pre), u: degrees(uPre) },
+    lambda: thighTurnsLittle ? pooled.lambda : null,
+  };
+};

@@ -1,0 +1,117 @@
+import { drawnSpread, type RiseDraws } from '#shared/course/rise-draws.ts';
+import { type Beta, CHANGE, dot, PRE, type RiseFit } from '#shared/course/rise-fit.ts';
+import { CONSTANTS } from '#shared/measures/constants.ts';
+
+const REP = CONSTANTS.repSpread.value;
+const THIGH = CONSTANTS.thighSpread.value;
+
+/** One usable rep, fitted and drawn. */
+export interface FittedRep {
+  readonly fit: RiseFit;
+  readonly draws: RiseDraws;
+  /** Changes 60° → 90° of the turn and its parts, and 30° → 60°, with random uncertainty. */
+  readonly d: number;
+  readonly u: number;
+  readonly dPelvis: number;
+  readonly uPelvis: number;
+  readonly dThigh: number;
+  readonly uThigh: number;
+  readonly pre: number;
+  readonly uPre: number;
+}
+
+const NOTHING: Beta = [0, 0, 0, 0];
+
+/** Null where the draws carry no spread: marks that coincide. */
+export const fittedRep = (fit: RiseFit, draws: RiseDraws): FittedRep | null => {
+  const spread = (thigh: Beta, pelvis: Beta): number =>
+    fit.sFit * drawnSpread(draws, [...thigh, ...pelvis]);
+  const rep: FittedRep = {
+    fit,
+    draws,
+    d: dot(CHANGE, fit.turn),
+    u: spread(CHANGE, CHANGE),
+    dPelvis: dot(CHANGE, fit.pelvis),
+    uPelvis: spread(NOTHING, CHANGE),
+    dThigh: dot(CHANGE, fit.thigh),
+    uThigh: spread(CHANGE, NOTHING),
+    pre: dot(PRE, fit.turn),
+    uPre: spread(PRE, PRE),
+  };
+  const { d, u, uPelvis, uThigh, pre, uPre } = rep;
+  return Number.isFinite(d + u + uPelvis + uThigh + pre + uPre) ? rep : null;
+};
+
+/** The reps together: random parts only. */
+export interface Pooled {
+  readonly shares: readonly number[];
+  readonly d: number;
+  readonly uR: number;
+  readonly nuR: number;
+  readonly dPelvis: number;
+  readonly uPelvis: number;
+  readonly dThigh: number;
+  readonly uThigh: number;
+  readonly pre: number;
+  readonly uPre: number;
+  /** How much of the thigh part counts; 1 without the assumption. */
+  readonly lambda: number;
+}
+
+/** Shares ∝ 1/(u² + 1.5²): true turn differs from rep to rep, so none may outweigh all others. */
+export const sharesOf = (uncertainties: readonly number[]): readonly number[] => {
+  const weights = uncertainties.map((u) => 1 / (u * u + REP * REP));
+  const sum = weights.reduce((a, b) => a + b, 0);
+  return weights.map((weight) => weight / sum);
+};
+
+/** Widens where the reps differ more than their errors explain; never narrows. */
+export const disagreement = (
+  changes: readonly number[],
+  uncertainties: readonly number[],
+  shares: readonly number[],
+): number => {
+  const n = changes.length;
+  if (n < 2) return 1;
+  const mean = changes.reduce((sum, d, i) => sum + d * (shares[i] ?? 0), 0);
+  const chi2 = changes.reduce(
+    (sum, d, i) => sum + (d - mean) ** 2 / ((uncertainties[i] ?? NaN) ** 2 + 2 * REP * REP),
+    0,
+  );
+  return Math.max(1, (3 + chi2) / (3 + n - 1));
+};
+
+/** At least one rep. */
+export const pool = (reps: readonly FittedRep[], thighTurnsLittle: boolean): Pooled => {
+  const uncertainties = reps.map((rep) => rep.u);
+  const shares = sharesOf(uncertainties);
+  const mean = (read: (rep: FittedRep) => number): number =>
+    reps.reduce((sum, rep, i) => sum + (shares[i] ?? 0) * read(rep), 0);
+  const squares = (read: (rep: FittedRep) => number): number =>
+    reps.reduce((sum, rep, i) => sum + ((shares[i] ?? 0) * read(rep)) ** 2, 0);
+  const widened = disagreement(
+    reps.map((rep) => rep.d),
+    uncertainties,
+    shares,
+  );
+  const dPelvis = mean((rep) => rep.dPelvis);
+  const dThigh = mean((rep) => rep.dThigh);
+  const thighVariance = squares((rep) => rep.uThigh) + (thighTurnsLittle ? REP * REP : 0);
+  const lambda = thighTurnsLittle ? (THIGH * THIGH) / (THIGH * THIGH + thighVariance) : 1;
+  const random = thighTurnsLittle
+    ? squares((rep) => rep.uPelvis) + lambda * thighVariance
+    : squares((rep) => rep.u);
+  return {
+    shares,
+    d: dPelvis + lambda * dThigh,
+    uR: Math.sqrt(random * widened),
+    nuR: reps.reduce((sum, rep) => sum + rep.fit.nu, 0),
+    dPelvis,
+    uPelvis: Math.sqrt(squares((rep) => rep.uPelvis)),
+    dThigh: lambda * dThigh,
+    uThigh: Math.sqrt(lambda * thighVariance),
+    pre: mean((rep) => rep.pre),
+    uPre: Math.sqrt(squares((rep) => rep.uPre)),
+    lambda,
+  };
+};

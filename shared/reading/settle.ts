@@ -1,0 +1,126 @@
+import { degrees } from '#shared/geometry/units.ts';
+import { type LandmarkSetId, LANDMARK_SETS } from '#shared/landmarks/types.ts';
+import { LEAST_QUIET } from '#shared/measures/reference.ts';
+import type { Assessed } from './assess.ts';
+import { systematicVariance, type Systematic } from './figures.ts';
+import type { RepFault, Settle } from './reasons.ts';
+import type { Decision } from './rule.ts';
+import { LIMITS } from './rule.ts';
+import type { ReadingFigures } from './types.ts';
+import { inBand } from './usable.ts';
+
+/** Typical uncertainty of the change with one rep and with three, degrees: from our model. */
+const TYPICAL: Readonly<Record<LandmarkSetId, readonly [one: number, three: number]>> = {
+  bare: [16.0 / 1.96, 10.5 / 1.96],
+  belt: [13.5 / 1.96, 8.8 / 1.96],
+  'belt+thigh': [5.5 / 1.96, 3.9 / 1.96],
+};
+
+/** Marked frames recommended at each end of the window. */
+const AT_EACH_END = 4;
+const ENDS = [
+  { from: 54, to: 66 },
+  { from: 84, to: 96 },
+] as const;
+
+const forFault = (fault: RepFault, { rep, shown }: Assessed): Settle | null => {
+  switch (fault.code) {
+    case 'scale-missing':
+      return { code: 'give-scale' };
+    case 'distance-missing':
+      return { code: 'give-distance' };
+    case 'belt-pointer-length-missing':
+      return { code: 'give-pointer-length', pointer: 'belt' };
+    case 'thigh-pointer-length-missing':
+      return { code: 'give-pointer-length', pointer: 'thigh' };
+    case 'view-cannot-show-turn':
+      return { code: 'film-from-front' };
+    case 'landmarks-missing':
+      return { code: 'mark-landmarks', rep: rep.id, landmarks: fault.landmarks };
+    case 'few-quiet': {
+      const footOff = shown?.phases.boundaries.footOff ?? null;
+      const before = rep.frames.filter(({ time }) => footOff === null || time < footOff).length;
+      return footOff !== null && before >= LEAST_QUIET && !rep.sharedQuiet
+        ? { code: 'stand-still-first' }
+        : { code: 'mark-quiet-frames', rep: rep.id, more: fault.need - fault.have };
+    }
+    case 'few-near-60':
+    case 'few-near-90':
+    case 'few-across-window':
+    case 'few-in-rise': {
+      const reached = shown?.fMax ?? null;
+      if (reached !== null && reached < LIMITS.liftShort && fault.code !== 'few-near-60')
+        return { code: 'lift-higher', reached, needed: degrees(LIMITS.liftShort) };
+      return {
+        code: 'mark-frames',
+        rep: rep.id,
+        from: fault.from ?? degrees(0),
+        to: fault.to ?? degrees(180),
+        more: fault.need - fault.have,
+      };
+    }
+    default:
+      return null;
+  }
+};
+
+const once = (all: readonly Settle[]): readonly Settle[] => {
+  const seen = new Set<string>();
+  return all.filter((settle) => {
+    const key = JSON.stringify(settle);
+    if (seen.has(key)) return false;
+    seen.add(key);
+    return true;
+  });
+};
+
+/** More marks at the ends of the window, another rep, a richer set: with what each would bring. */
+const forUnsettled = (
+  used: readonly Assessed[],
+  set: LandmarkSetId,
+  figures: ReadingFigures,
+  systematic: Systematic,
+): readonly Settle[] => {
+  const settle: Settle[] = [];
+  for (const { rep, shown } of used)
+    for (const end of ENDS) {
+      const have = (shown?.frames ?? []).filter(
+        ({ inFit, lift }) => inFit && lift !== null && inBand(lift, end),
+      ).length;
+      if (have < AT_EACH_END)
+        settle.push({
+          code: 'mark-frames',
+          rep: rep.id,
+          from: degrees(end.from),
+          to: degrees(end.to),
+          more: AT_EACH_END - have,
+        });
+    }
+  const n = used.length;
+  const from = figures.uC0;
+  const random = (figures.uR ** 2 * n) / (n + 1);
+  const u = degrees(Math.sqrt(random + systematicVariance(systematic, n + 1)));
+  if (u < from) settle.push({ code: 'another-rep', u, from });
+  for (const richer of LANDMARK_SETS.slice(LANDMARK_SETS.indexOf(set) + 1)) {
+    const typical = degrees(TYPICAL[richer][n >= 3 ? 1 : 0]);
+    if (typical < from) settle.push({ code: 'richer-set', set: richer, u: typical, from });
+  }
+  return settle;
+};
+
+/** What would settle a reading that is not settled; empty where it is. */
+export const settleOf = (
+  decision: Decision,
+  reps: readonly Assessed[],
+  reading: {
+    readonly set: LandmarkSetId;
+    readonly figures: ReadingFigures;
+    readonly systematic: Systematic;
+  } | null,
+): readonly Settle[] => {
+  if (decision.code === 'lift-stops-short' || !reading)
+    return once(reps.flatMap((rep) => rep.faults.flatMap((fault) => forFault(fault, rep) ?? [])));
+  if (decision.line !== 2 && decision.line !== 7) return [];
+  const used = reps.filter((rep) => rep.used !== null);
+  return forUnsettled(used, reading.set, reading.figures, reading.systematic);
+};
