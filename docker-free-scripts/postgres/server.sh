@@ -7,7 +7,8 @@ pg_bin() {
   local version=${1:-} dir best='' best_major=0 major
   for dir in /usr/lib/postgresql/*/bin "$(dirname "$(command -v initdb || echo /none)")"; do
     [[ -x $dir/initdb && -x $dir/pg_ctl && -x $dir/psql ]] || continue
-    major=$("$dir/initdb" --version | grep -oE '[0-9]+' | head -n 1)
+    [[ $("$dir/initdb" --version) =~ [0-9]+ ]] || continue
+    major=${BASH_REMATCH[0]}
     [[ -z $version || $major == "$version" ]] || continue
     ((major >= 15 && major > best_major)) && best=$dir best_major=$major
   done
