@@ -18,6 +18,8 @@ export const liveEvent = z
     z.object({ type: z.literal('comments'), clipId: id, byUserId: id }),
     z.object({ type: z.literal('reading'), visitId: id, side }),
     z.object({ type: z.literal('signed-out') }),
+    /** Told after a gap: events may have been missed, so ask again for all that is shown. */
+    z.object({ type: z.literal('missed') }),
   ])
   .meta({ id: 'LiveEvent' });
 export type LiveEvent = z.infer<typeof liveEvent>;

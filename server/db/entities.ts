@@ -1,0 +1,44 @@
+import { Session } from '../features/accounts/session.entity.ts';
+import { Supervision } from '../features/accounts/supervision.entity.ts';
+import { User } from '../features/accounts/user.entity.ts';
+import { Athlete } from '../features/athletes/athlete.entity.ts';
+import { Consent } from '../features/athletes/consent.entity.ts';
+import { Call } from '../features/calls/call.entity.ts';
+import { Clip } from '../features/clips/clip.entity.ts';
+import { Upload } from '../features/clips/upload.entity.ts';
+import { Comment } from '../features/comments/comment.entity.ts';
+import { MarkCommand } from '../features/marks/mark-command.entity.ts';
+import { Mark } from '../features/marks/mark.entity.ts';
+import { AuditEntry } from '../features/practice/audit-entry.entity.ts';
+import { Practice } from '../features/practice/practice.entity.ts';
+import { Reading } from '../features/readings/reading.entity.ts';
+import { SideSetting } from '../features/readings/side-setting.entity.ts';
+import { Replay } from '../features/replays/replay.entity.ts';
+import { Rep } from '../features/reps/rep.entity.ts';
+import { SetUp } from '../features/visits/set-up.entity.ts';
+import { Visit } from '../features/visits/visit.entity.ts';
+import { JobOutbox } from '../jobs/job-outbox.entity.ts';
+
+/** Every table of the product. A new one is added here, then `npm run orm migration:create`. */
+export const entities = [
+  Practice,
+  AuditEntry,
+  User,
+  Supervision,
+  Session,
+  Athlete,
+  Consent,
+  SetUp,
+  Visit,
+  Clip,
+  Upload,
+  Rep,
+  Mark,
+  MarkCommand,
+  Call,
+  Reading,
+  SideSetting,
+  Comment,
+  Replay,
+  JobOutbox,
+];

@@ -1,0 +1,35 @@
+import { type Migration, Migrator } from '@mikro-orm/migrations';
+import { type Constructor, MikroORM } from '@mikro-orm/postgresql';
+import { Migration20261201122058_tables } from '../../migrations/Migration20261201122058_tables.ts';
+import { Migration20261201122100_walls } from '../../migrations/Migration20261201122100_walls.ts';
+import { ormOptions } from './orm-options.ts';
+
+/** Every migration in order; imported, so that the bundle carries them. */
+const migrationsList: { name: string; class: Constructor<Migration> }[] = [
+  { name: 'Migration20261201122058_tables', class: Migration20261201122058_tables },
+  { name: 'Migration20261201122100_walls', class: Migration20261201122100_walls },
+];
+
+/** Any number, the same in every process that may migrate at the same time. */
+const MIGRATION_LOCK = 4_600_001;
+
+/**
+ * Brings the schema up to date as its owner. One process at a time: the others wait, then find nothing to do.
+ * Either all pending migrations are done or none.
+ */
+export const migrate = async (ownerUrl: string): Promise<void> => {
+  const orm = await MikroORM.init({
+    ...ormOptions(ownerUrl),
+    extensions: [Migrator],
+    migrations: { migrationsList, snapshot: false, silent: true },
+  });
+  try {
+    await orm.em.fork().transactional(async (em) => {
+      await em.execute('select pg_advisory_xact_lock(?)', [MIGRATION_LOCK]);
+      const transaction = em.getTransactionContext<object>();
+      await orm.getMigrator().up(transaction ? { transaction } : {});
+    });
+  } finally {
+    await orm.close(true);
+  }
+};

@@ -1,0 +1,48 @@
+import { Client } from 'pg';
+import type { Logger } from 'pino';
+import { EVENT_CHANNEL, type ToldEvent } from './tell.ts';
+
+const RETRY_MS = 1000;
+
+/**
+ * Listens for events on a connection of its own, which a pool would hand to others. A lost connection is opened
+ * again; what was told meanwhile is lost to this process, so `onGap` lets the tabs ask anew.
+ * @returns stops listening
+ */
+export const listenForEvents = async (options: {
+  readonly url: string;
+  readonly log: Logger;
+  readonly onEvent: (event: ToldEvent) => void;
+  readonly onGap: () => void;
+}): Promise<() => Promise<void>> => {
+  const { url, log, onEvent, onGap } = options;
+  let stopped = false;
+  let client: Client;
+  let timer: NodeJS.Timeout | undefined;
+
+  const open = async (): Promise<void> => {
+    client = new Client({ connectionString: url, keepAlive: true });
+    client.on('notification', ({ payload }) => {
+      if (payload) onEvent(JSON.parse(payload) as ToldEvent);
+    });
+    client.on('error', () => undefined);
+    client.on('end', () => {
+      if (!stopped) reopen();
+    });
+    await client.connect();
+    await client.query(`listen ${EVENT_CHANNEL}`);
+  };
+  const reopen = (): void => {
+    log.warn('the connection for live events was lost and is opened again');
+    timer = setTimeout(() => {
+      open().then(onGap, reopen);
+    }, RETRY_MS);
+  };
+
+  await open();
+  return async () => {
+    stopped = true;
+    clearTimeout(timer);
+    await client.end().catch(() => undefined);
+  };
+};

@@ -1,0 +1,38 @@
+import { routes } from '#shared/contracts/routes.ts';
+import { signInLimits } from '../../http/rate-limit.ts';
+import type { Feature } from '../../main/feature.ts';
+import { presentMe, presentSession } from './accounts.presenter.ts';
+import { endSession, openSessions, signIn, signOutEverywhere } from './accounts.service.ts';
+
+export const accountsFeature: Feature = ({ serve, ground }) => {
+  const { sessions, inPractice } = ground;
+
+  serve(
+    routes.signIn,
+    async ({ body, req, res }) => {
+      const session = await signIn(ground, body, req.get('user-agent'));
+      sessions.setCookie(res, session.id);
+      return presentMe(session);
+    },
+    ...signInLimits(),
+  );
+
+  serve(routes.signOut, async ({ req, res }) => {
+    const session = await sessions.find(req, res);
+    if (session) await inPractice(session.actor, (unit) => endSession(unit, session.id));
+    sessions.clearCookie(res);
+  });
+
+  serve(routes.signOutEverywhere, async ({ work, res }) => {
+    await work(signOutEverywhere);
+    sessions.clearCookie(res);
+  });
+
+  serve(routes.me, ({ session }) => presentMe(session));
+
+  serve(routes.sessions, async ({ work, session }) => ({
+    items: (await work(openSessions)).map((row) => presentSession(row, session.id)),
+  }));
+
+  serve(routes.endSession, ({ params, work }) => work((unit) => endSession(unit, params.id)));
+};

@@ -1,0 +1,23 @@
+import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
+import { madeAt, ownedRow } from '#server/db/columns.ts';
+import { User } from '../accounts/user.entity.ts';
+
+/** The person filmed. `coach` decides who may see them and all that hangs on them. */
+export const Athlete = defineEntity({
+  name: 'Athlete',
+  indexes: [{ properties: ['practiceId', 'familyName', 'givenName'] }],
+  properties: {
+    ...ownedRow(),
+    coach: p.manyToOne(User).ref(),
+    givenName: p.text(),
+    familyName: p.text(),
+    birthDate: p.date(),
+    heightMm: p.double().nullable(),
+    sport: p.text().default(''),
+    cautions: p.text().default(''),
+    contactEmail: p.text().nullable(),
+    createdAt: madeAt(),
+    version: p.integer().version(),
+  },
+});
+export type Athlete = InferEntity<typeof Athlete>;

@@ -1,0 +1,30 @@
+import { defineEntity, p } from '@mikro-orm/core';
+import { moment, ownPractice } from '#server/db/columns.ts';
+
+/**
+ * One landmark on one frame of one rep. Read and written in bulk by raw SQL; this is its shape.
+ * A removed mark stays as a row with `present` false, so that `revision` goes on counting.
+ */
+export const Mark = defineEntity({
+  name: 'Mark',
+  properties: {
+    repId: p.uuid().primary(),
+    frame: p.integer().primary(),
+    landmark: p.text().primary(),
+    practiceId: ownPractice(),
+    present: p.boolean(),
+    hidden: p.boolean(),
+    /** Pixels of the upright source frame; null where hidden or removed. */
+    u: p.double().nullable(),
+    v: p.double().nullable(),
+    source: p.enum(['hand', 'tracked']),
+    looked: p.boolean(),
+    /** 0–1 for a tracked mark. */
+    confidence: p.double().nullable(),
+    /** Long edge, px, of the picture on which it was placed; 0 where it was never placed. */
+    pictureLongEdge: p.integer(),
+    revision: p.integer(),
+    byUser: p.uuid(),
+    at: moment(),
+  },
+});

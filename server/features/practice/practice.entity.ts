@@ -1,0 +1,15 @@
+import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
+import { madeAt } from '#server/db/columns.ts';
+
+/** The organisation that every other row belongs to; `id` is what they call `practice_id`. */
+export const Practice = defineEntity({
+  name: 'Practice',
+  properties: {
+    id: p.uuid().primary(),
+    name: p.text(),
+    /** How an athlete reaches the practice; shown on the replay. */
+    contact: p.text().default(''),
+    createdAt: madeAt(),
+  },
+});
+export type Practice = InferEntity<typeof Practice>;

@@ -1,0 +1,38 @@
+import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
+import { side } from '#shared/contracts/primitives.ts';
+import { readingCode } from '#shared/contracts/readings.ts';
+import type { ReadingInput, ReadingResult } from '#shared/reading/types.ts';
+import { madeAt, ownedRow } from '#server/db/columns.ts';
+import { User } from '../accounts/user.entity.ts';
+import { Visit } from '../visits/visit.entity.ts';
+
+/** A reading as it was made. Other inputs make another row; the same inputs find this one again. */
+export const Reading = defineEntity({
+  name: 'Reading',
+  uniques: [{ properties: ['visit', 'side', 'inputHash'] }],
+  properties: {
+    ...ownedRow(),
+    visit: p.manyToOne(Visit).ref(),
+    side: p.enum(side.options),
+    engine: p.integer(),
+    /** SHA-256 of the canonical inputs, hex; the seed is its first 32 bits. */
+    inputHash: p.text(),
+    seed: p.bigint('number'),
+    inputs: p.json<ReadingInput>().lazy(),
+    result: p.json<ReadingResult>().lazy(),
+    code: p.enum(readingCode.options),
+    /** 'Turns out early' already before 60° of lift. */
+    before60: p.boolean(),
+    /** Turn from 60° to 90° of lift and its u_c, degrees, external positive. */
+    change: p.double().nullable(),
+    u: p.double().nullable(),
+    pEarly: p.double().nullable(),
+    /** The smallest early turn found nine times in ten, degrees. */
+    smallestFound: p.double().nullable(),
+    provisional: p.boolean(),
+    assumption: p.boolean(),
+    by: p.manyToOne(User).ref(),
+    at: madeAt(),
+  },
+});
+export type Reading = InferEntity<typeof Reading>;

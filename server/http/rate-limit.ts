@@ -1,0 +1,44 @@
+import { createHash } from 'node:crypto';
+import type { Request, RequestHandler } from 'express';
+import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
+import { Problem } from './problem.ts';
+
+/**
+ * Counts failed tries and refuses further ones with 'too-many-tries'. Counted in memory: with several web
+ * processes each counts for itself, which multiplies the limit by their number and no more.
+ */
+const limit = (tries: number, minutes: number, keyOf: (req: Request) => string): RequestHandler =>
+  rateLimit({
+    windowMs: minutes * 60_000,
+    limit: tries,
+    keyGenerator: keyOf,
+    skipSuccessfulRequests: true,
+    standardHeaders: 'draft-7',
+    legacyHeaders: false,
+    handler: (_req, _res, next) => {
+      next(new Problem('too-many-tries'));
+    },
+  });
+
+/** IPv6 by its /56, which one subscriber usually holds. */
+const addressOf = (req: Request): string => ipKeyGenerator(req.ip ?? 'unknown', 56);
+
+/** Hashed, so that no address lies in memory as typed. */
+const digest = (text: string): string => createHash('sha256').update(text).digest('base64url');
+
+const emailOf = (req: Request): string => {
+  const body = (req.body ?? {}) as { email?: unknown };
+  return digest(typeof body.email === 'string' ? body.email.trim().toLowerCase() : '');
+};
+
+/** Failed sign-ins: 10 in a quarter of an hour per account, 50 per address (a practice shares one). */
+export const signInLimits = (): RequestHandler[] => [
+  limit(50, 15, addressOf),
+  limit(10, 15, emailOf),
+];
+
+/** Wrong pass phrases: 8 in a quarter of an hour per link and address, 40 per link from anywhere. */
+export const passPhraseLimits = (): RequestHandler[] => [
+  limit(40, 15, (req) => digest(String(req.params.token))),
+  limit(8, 15, (req) => `${digest(String(req.params.token))} ${addressOf(req)}`),
+];

@@ -1,0 +1,96 @@
+import express, { type Request, type RequestHandler, type Response, type Router } from 'express';
+import type * as z from 'zod';
+import type { UserActor } from '#shared/access/actors.ts';
+import type { Route } from '#shared/contracts/route.ts';
+import type { InPractice, Unit } from '../db/in-practice.ts';
+import { checkAnswer } from './check-answer.ts';
+import { parseParams, parseParts } from './parse.ts';
+import type { OpenSession } from './session.ts';
+import { staffOf } from './session.ts';
+
+type Parsed<R, K extends string> =
+  R extends Record<K, infer S extends z.ZodType> ? z.output<S> : Record<never, never>;
+
+type AnswerOf<R extends Route> = R['answer'] extends {
+  kind: 'json';
+  schema: infer S extends z.ZodType;
+}
+  ? z.input<S>
+  : void;
+
+/** What a handler of a staff route gets beside its input. */
+interface StaffPart {
+  readonly actor: UserActor;
+  readonly session: OpenSession;
+  /** One unit of work of this actor; see `inPractice`. */
+  readonly work: <T>(work: (unit: Unit<UserActor>) => Promise<T>) => Promise<T>;
+}
+
+/** A request as its contract describes it, parsed. Streams are written to `res` by the handler itself. */
+export type Asked<R extends Route> = {
+  readonly params: Parsed<R, 'params'>;
+  readonly query: Parsed<R, 'query'>;
+  /** Empty for a form with a file: see `parseFields`. */
+  readonly body: R extends { multipart: object } ? Record<never, never> : Parsed<R, 'body'>;
+  readonly req: Request;
+  readonly res: Response;
+} & (R['audience'] extends 'staff' ? StaffPart : Record<never, never>);
+
+export type Serve = <const R extends Route>(
+  route: R,
+  handler: (asked: Asked<R>) => Promise<AnswerOf<R>> | AnswerOf<R>,
+  ...before: readonly RequestHandler[]
+) => void;
+
+/** Enough for 5,000 marks at once from staff; a sign-in or a pass phrase needs little. */
+const BODY_LIMIT = { staff: '4mb', anyone: '32kb', link: '32kb' } as const;
+
+export interface ServeOptions {
+  readonly router: Router;
+  readonly inPractice: InPractice;
+  readonly whoIs: RequestHandler;
+  /** Check every answer against its contract: on in tests and development. */
+  readonly checkAnswers: boolean;
+  /** Told of every route that is served. */
+  readonly onRoute?: (route: Route) => void;
+}
+
+/** Makes the helper by which a feature serves a route of the contracts: who asks, parse, handle, answer. */
+export const makeServe =
+  ({ router, inPractice, whoIs, checkAnswers, onRoute }: ServeOptions): Serve =>
+  (route, handler, ...before) => {
+    onRoute?.(route);
+    const steps: RequestHandler[] = [];
+    if (route.audience === 'staff') steps.push(whoIs);
+    if (route.body && !route.multipart)
+      steps.push(express.json({ limit: BODY_LIMIT[route.audience] }));
+    steps.push(...before, async (req, res) => {
+      const params = parseParams(route.params, req.params);
+      const [query, body] = parseParts([
+        { name: 'query', schema: route.query, value: req.query },
+        {
+          name: 'body',
+          schema: route.multipart ? undefined : route.body,
+          value: (req.body as unknown) ?? {},
+        },
+      ]);
+      const staff = route.audience === 'staff' ? staffPart(res, inPractice) : {};
+      const answer = await handler({ params, query, body, req, res, ...staff } as Asked<
+        typeof route
+      >);
+      if (route.answer.kind === 'json') {
+        if (checkAnswers) checkAnswer(route, answer);
+        res.status(route.status).json(answer);
+      } else if (route.answer.kind === 'none') res.status(route.status).end();
+    });
+    router[route.method](route.path, ...steps);
+  };
+
+const staffPart = (res: Response, inPractice: InPractice): StaffPart => {
+  const session = staffOf(res);
+  return {
+    actor: session.actor,
+    session,
+    work: (work) => inPractice(session.actor, work),
+  };
+};

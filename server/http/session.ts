@@ -1,0 +1,149 @@
+import { parseCookie, stringifySetCookie } from 'cookie';
+import type { EntityManager } from '@mikro-orm/postgresql';
+import type { Request, RequestHandler, Response } from 'express';
+import jwt from 'jsonwebtoken';
+import * as z from 'zod';
+import type { Role, UserActor } from '#shared/access/actors.ts';
+import { Problem } from './problem.ts';
+
+const COOKIE = 'redshank_session';
+const TOKEN_MINUTES = 10;
+/** A session that was not used for this long is over, whatever its last day. */
+const IDLE_HOURS = 12;
+const SEEN_EVERY_SECONDS = 60;
+
+/** A session as the database confirms it on every request. */
+export interface OpenSession {
+  readonly id: string;
+  readonly expiresAt: Date;
+  readonly actor: UserActor;
+  readonly user: {
+    readonly id: string;
+    readonly name: string;
+    readonly email: string;
+    readonly role: Role;
+  };
+  readonly practice: { readonly id: string; readonly name: string };
+}
+
+const claims = z.object({ sid: z.uuid(), exp: z.int() });
+
+type SessionRow = {
+  session_id: string;
+  expires_at: string;
+  last_seen_at: string;
+  user_id: string;
+  user_name: string;
+  email: string;
+  role: Role;
+  practice_id: string;
+  practice_name: string;
+  coach_ids: string[];
+};
+
+export interface SessionKeeper {
+  /** Refuses with 'sign-in-needed' where no session is open; otherwise `staffOf` tells who it is. */
+  readonly whoIs: RequestHandler;
+  /** The session of this request's cookie, or null. */
+  readonly find: (req: Request, res: Response) => Promise<OpenSession | null>;
+  readonly findById: (id: string) => Promise<OpenSession | null>;
+  /** The value of a `Set-Cookie` header that carries this session. */
+  readonly cookieFor: (sessionId: string) => string;
+  readonly setCookie: (res: Response, sessionId: string) => void;
+  readonly clearCookie: (res: Response) => void;
+}
+
+/**
+ * The cookie holds a token of ten minutes that names the session; the session's row decides. A token past its
+ * ten minutes is good for one thing only, a new token, and only while the session itself is neither revoked,
+ * over, nor idle for too long.
+ * @param db rows of the narrow look-up functions, outside any practice
+ */
+export const keepSessions = (options: {
+  readonly db: () => EntityManager;
+  readonly key: string;
+  readonly secure: boolean;
+}): SessionKeeper => {
+  const { db, key, secure } = options;
+
+  const cookieFor = (sessionId: string): string => {
+    const token = jwt.sign({ sid: sessionId }, key, {
+      algorithm: 'HS256',
+      expiresIn: TOKEN_MINUTES * 60,
+    });
+    return cookie(token, IDLE_HOURS * 3600);
+  };
+  const setCookie = (res: Response, sessionId: string): void => {
+    res.append('Set-Cookie', cookieFor(sessionId));
+  };
+  const clearCookie = (res: Response): void => {
+    res.append('Set-Cookie', cookie('', 0));
+  };
+  const cookie = (value: string, maxAge: number): string =>
+    stringifySetCookie(COOKIE, value, {
+      httpOnly: true,
+      sameSite: 'lax',
+      path: '/',
+      secure,
+      maxAge,
+    });
+
+  const findById = async (id: string): Promise<OpenSession | null> => {
+    const [row] = await db().execute<SessionRow[]>('select * from find_session(?)', [id]);
+    if (!row) return null;
+    const idle = Date.now() - new Date(row.last_seen_at).getTime();
+    if (idle > IDLE_HOURS * 3_600_000) return null;
+    if (idle > SEEN_EVERY_SECONDS * 1000) await db().execute('select touch_session(?)', [id]);
+    return sessionOf(row);
+  };
+
+  const find = async (req: Request, res: Response): Promise<OpenSession | null> => {
+    const token = parseCookie(req.headers.cookie ?? '')[COOKIE];
+    const named = token === undefined ? null : readToken(token, key);
+    if (!named) return null;
+    const session = await findById(named.sid);
+    // Half of its time is left for the requests that are already under way.
+    if (session && named.exp - Date.now() / 1000 < (TOKEN_MINUTES * 60) / 2)
+      setCookie(res, session.id);
+    return session;
+  };
+
+  const whoIs: RequestHandler = async (req, res, next) => {
+    const session = await find(req, res);
+    if (!session) throw new Problem('sign-in-needed');
+    (res.locals as { session?: OpenSession }).session = session;
+    next();
+  };
+
+  return { whoIs, find, findById, cookieFor, setCookie, clearCookie };
+};
+
+const readToken = (token: string, key: string): z.infer<typeof claims> | null => {
+  try {
+    const payload = jwt.verify(token, key, { algorithms: ['HS256'], ignoreExpiration: true });
+    return claims.safeParse(payload).data ?? null;
+  } catch {
+    return null;
+  }
+};
+
+const sessionOf = (row: SessionRow): OpenSession => ({
+  id: row.session_id,
+  expiresAt: new Date(row.expires_at),
+  user: { id: row.user_id, name: row.user_name, email: row.email, role: row.role },
+  practice: { id: row.practice_id, name: row.practice_name },
+  actor: {
+    kind: 'user',
+    id: row.user_id,
+    practiceId: row.practice_id,
+    role: row.role,
+    coachIds: row.coach_ids,
+  },
+});
+
+/** Who asks, behind `whoIs`. */
+export const staffOf = (res: Response): OpenSession => {
+  const { session } = res.locals as { session?: OpenSession };
+  if (!session) throw new Problem('sign-in-needed');
+  return session;
+};

@@ -1,0 +1,16 @@
+import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
+import { madeAt, moment, ownedRow } from '#server/db/columns.ts';
+
+/** A job that is committed with the state it belongs to and relayed to the queue under the same id. */
+export const JobOutbox = defineEntity({
+  name: 'JobOutbox',
+  indexes: [{ properties: ['sentAt', 'createdAt'] }],
+  properties: {
+    ...ownedRow(),
+    queue: p.text(),
+    payload: p.json<Record<string, unknown>>(),
+    createdAt: madeAt(),
+    sentAt: moment().nullable(),
+  },
+});
+export type JobOutbox = InferEntity<typeof JobOutbox>;

@@ -1,0 +1,116 @@
+import { randomUUID } from 'node:crypto';
+import { Client } from 'pg';
+import PgBoss from 'pg-boss';
+import type { Ground } from '../main/ground.ts';
+import type { AnyJobHandler } from './job.ts';
+import { Locks } from './locks.ts';
+import { Relay } from './relay.ts';
+
+const BUSY_RETRY_SECONDS = 10;
+
+type Carried = { practiceId: string; payload: unknown };
+
+export interface Worker {
+  /** Aborts what runs, waits for it to end, lets go of the database. */
+  readonly stop: () => Promise<void>;
+}
+
+/** Starts the queue, the relay that feeds it, and one loop per kind of job. */
+export const startWorker = async (
+  ground: Ground,
+  handlers: readonly AnyJobHandler[],
+): Promise<Worker> => {
+  const { log, config } = ground;
+  const jobsUrl = config.database.jobs;
+  const stopping = new AbortController();
+
+  const boss = new PgBoss({
+    connectionString: jobsUrl,
+    schema: 'pgboss',
+    application_name: 'redshank worker',
+    max: 3,
+    schedule: false,
+    archiveCompletedAfterSeconds: 24 * 3600,
+    deleteAfterDays: 7,
+  });
+  boss.on('error', (error) => {
+    log.error({ err: error }, 'the queue reports an error');
+  });
+  await boss.start();
+  const locks = await Locks.open(jobsUrl, () => {
+    log.error('the connection that holds the locks was lost; jobs in work are stopped');
+    stopping.abort();
+  });
+
+  for (const handler of handlers) {
+    await boss.createQueue(handler.queue, {
+      name: handler.queue,
+      policy: 'standard',
+      retryLimit: handler.retryLimit,
+      retryDelay: 5,
+      retryBackoff: true,
+      expireInMinutes: handler.expireInMinutes,
+    });
+    await queueUnfinished(jobsUrl, boss, locks, handler);
+  }
+  const relay = await Relay.start(jobsUrl, boss, log);
+  for (const handler of handlers) {
+    await boss.work<Carried>(
+      handler.queue,
+      { batchSize: 1, pollingIntervalSeconds: 0.5 },
+      async ([job]) => {
+        if (!job) return;
+        await runOne(job, handler);
+      },
+    );
+  }
+
+  const runOne = async (job: PgBoss.Job<Carried>, handler: AnyJobHandler): Promise<void> => {
+    const { practiceId, payload } = job.data;
+    const started = Date.now();
+    const names = { job: job.id, queue: handler.queue };
+    try {
+      const outcome = await locks.hold(handler.lockKey(payload), () =>
+        handler.run({ ground, practiceId, payload, signal: stopping.signal }),
+      );
+      if (outcome === 'busy') {
+        await boss.send(handler.queue, job.data, { startAfter: BUSY_RETRY_SECONDS });
+      }
+      log.info({ ...names, outcome, ms: Date.now() - started }, 'job done');
+    } catch (error) {
+      if (!stopping.signal.aborted) log.error({ ...names, err: error }, 'job failed');
+      throw error;
+    }
+  };
+
+  return {
+    stop: async () => {
+      stopping.abort();
+      await relay.stop();
+      await boss.stop({ graceful: true, wait: true, timeout: 10_000 });
+      await locks.close();
+    },
+  };
+};
+
+/** Queues anew what a killed worker left: rows that say they are in work while nobody holds their lock. */
+const queueUnfinished = async (
+  jobsUrl: string,
+  boss: PgBoss,
+  locks: Locks,
+  { queue, unfinished, lockKey }: AnyJobHandler,
+): Promise<void> => {
+  if (!unfinished) return;
+  const client = new Client({ connectionString: jobsUrl });
+  await client.connect();
+  try {
+    const { rows } = await client.query<Record<string, unknown>>(unfinished.sql);
+    for (const row of rows) {
+      const { practiceId, payload } = unfinished.read(row);
+      if (!(await locks.isFree(lockKey(payload)))) continue;
+      await boss.send(queue, { practiceId, payload } satisfies Carried, { id: randomUUID() });
+    }
+  } finally {
+    await client.end();
+  }
+};
