@@ -31,7 +31,7 @@ choose_instance_dir() {
     base=/var/lib/redshank/$(printf '%s' "$REDSHANK_DATA" | sha256sum | cut -c 1-16)
     instance_dir=$base
     while [[ -e $instance_dir ]]; do
-      say "  $instance_dir belongs to an earlier data folder of this name and is left as it is"
+      say "  $instance_dir belongs to an earlier data folder of this name and is left as it is (not wanted any more: rm -rf $instance_dir)"
       n=$((n + 1))
       instance_dir=$base-$n
     done
