@@ -63,24 +63,40 @@ export function refresh(client: QueryClient, event: Exclude<LiveEvent, { type: '
 
 /** Progress is shown from the event itself; only a change of state is worth a question. */
 function refreshClip(client: QueryClient, event: Extract<LiveEvent, { type: 'clip' }>) {
-  const visitKey = visitOptions(event.visitId).queryKey;
-  const known = client.getQueryData(visitKey)?.clips.find((clip) => clip.id === event.clipId);
-  if (known && known.state === event.state) {
-    const { progress, secondsLeft } = event;
-    client.setQueryData(
-      visitKey,
-      (page) =>
-        page && {
-          ...page,
-          clips: page.clips.map((clip) =>
-            clip.id === event.clipId ? { ...clip, progress, secondsLeft } : clip,
-          ),
-        },
-    );
+  const { clipId, visitId, state, progress, secondsLeft } = event;
+  const visitKey = visitOptions(visitId).queryKey;
+  const known =
+    client.getQueryData(visitKey)?.clips.find((clip) => clip.id === clipId)?.state ??
+    (client
+      .getQueryData(todayQuery.queryKey)
+      ?.items.some((item) => item.kind === 'clip-preparing' && item.clipId === clipId)
+      ? 'preparing'
+      : undefined);
+  if (known !== state) {
+    void client.invalidateQueries({ queryKey: visitKey, exact: true });
+    void client.invalidateQueries({ queryKey: clipOptions(clipId).queryKey });
+    void client.invalidateQueries({ queryKey: benchOptions(clipId).queryKey });
+    void client.invalidateQueries({ queryKey: todayQuery.queryKey });
     return;
   }
-  void client.invalidateQueries({ queryKey: visitKey, exact: true });
-  void client.invalidateQueries({ queryKey: clipOptions(event.clipId).queryKey });
-  void client.invalidateQueries({ queryKey: benchOptions(event.clipId).queryKey });
-  void client.invalidateQueries({ queryKey: todayQuery.queryKey });
+  client.setQueryData(
+    visitKey,
+    (page) =>
+      page && {
+        ...page,
+        clips: page.clips.map((clip) =>
+          clip.id === clipId ? { ...clip, progress, secondsLeft } : clip,
+        ),
+      },
+  );
+  client.setQueryData(
+    todayQuery.queryKey,
+    (page) =>
+      page && {
+        ...page,
+        items: page.items.map((item) =>
+          item.kind === 'clip-preparing' && item.clipId === clipId ? { ...item, progress } : item,
+        ),
+      },
+  );
 }

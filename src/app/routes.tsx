@@ -30,7 +30,55 @@ export const pages: RouteObject[] = [
           {
             // inside the frame, so that a page that fails keeps its navigation
             ErrorBoundary: ErrorPage,
-            children: [{ path: '*', Component: NotFoundPage }],
+            children: [
+              {
+                index: true,
+                lazy: lazily(() =>
+                  import('#src/features/today/today-page.tsx').then((page) => page.TodayPage),
+                ),
+              },
+              {
+                path: 'athletes',
+                lazy: lazily(() =>
+                  import('#src/features/athletes/athlete-list-page.tsx').then(
+                    (page) => page.AthleteListPage,
+                  ),
+                ),
+              },
+              {
+                path: 'athletes/new',
+                lazy: lazily(() =>
+                  import('#src/features/athletes/new-athlete-page.tsx').then(
+                    (page) => page.NewAthletePage,
+                  ),
+                ),
+              },
+              {
+                path: 'athletes/:id',
+                lazy: lazily(() =>
+                  import('#src/features/athletes/athlete-page.tsx').then(
+                    (page) => page.AthletePage,
+                  ),
+                ),
+              },
+              {
+                path: 'athletes/:id/edit',
+                lazy: lazily(() =>
+                  import('#src/features/athletes/edit-athlete-page.tsx').then(
+                    (page) => page.EditAthletePage,
+                  ),
+                ),
+              },
+              {
+                path: 'athletes/:id/consents/new',
+                lazy: lazily(() =>
+                  import('#src/features/athletes/new-consent-page.tsx').then(
+                    (page) => page.NewConsentPage,
+                  ),
+                ),
+              },
+              { path: '*', Component: NotFoundPage },
+            ],
           },
         ],
       },

@@ -1,0 +1,89 @@
+import { useQuery } from '@tanstack/react-query';
+import { useCallback } from 'react';
+import { Link, useSearchParams } from 'react-router-dom';
+import { athleteListOptions } from '#src/api/athletes.queries.ts';
+import { useMe } from '#src/api/me.ts';
+import { Button, ButtonLink } from '#src/ui/button.tsx';
+import { Page } from '#src/ui/page.tsx';
+import { Pager } from '#src/ui/pager.tsx';
+import { paths } from '#src/ui/paths.ts';
+import { Empty, ErrorState, Loading, SkeletonLines } from '#src/ui/states.tsx';
+import { AthleteTable } from './athlete-table.tsx';
+import { changed, queryOf, type ListField } from './list-address.ts';
+import { ListFilters } from './list-filters.tsx';
+
+/** The athletes that this person may see. Search, filter, order and page stand in the address. */
+export function AthleteListPage() {
+  const [search, setSearch] = useSearchParams();
+  const { user } = useMe();
+  const list = useQuery(athleteListOptions(queryOf(search)));
+  const onChange = useCallback(
+    (field: ListField, value: string) =>
+      setSearch((now) => changed(now, field, value), { replace: true, preventScrollReset: true }),
+    [setSearch],
+  );
+  const filtered = ['q', 'consent', 'coach'].some((field) => search.has(field));
+  const coach = search.get('coach');
+  const coachName = list.data?.items.find((athlete) => athlete.coach.id === coach)?.coach.name;
+  return (
+    <Page
+      title="Athletes"
+      lead={user.role === 'coach' ? undefined : 'Everyone whose coach you may look after.'}
+      actions={<ButtonLink to={paths.newAthlete()}>Add an athlete</ButtonLink>}
+    >
+      <ListFilters search={search} onChange={onChange} />
+      <div className="mt-4 flex min-h-[44px] flex-wrap items-center gap-x-4">
+        <p role="status" className="text-soft">
+          {list.data && (list.data.total === 1 ? '1 athlete' : `${list.data.total} athletes`)}
+        </p>
+        {coach !== null && (
+          <Button look="plain" onClick={() => onChange('coach', '')}>
+            Only {coachName ?? 'one coach'}: show all
+          </Button>
+        )}
+      </div>
+      <div className="border-t border-rule pt-6" aria-busy={list.isPlaceholderData || undefined}>
+        {list.isPending && (
+          <Loading label="Loading athletes">
+            <SkeletonLines count={8} />
+          </Loading>
+        )}
+        {list.isError && <ErrorState error={list.error} onRetry={() => void list.refetch()} />}
+        {list.data && list.data.items.length > 0 && (
+          <AthleteTable
+            athletes={list.data.items}
+            showCoach={user.role !== 'coach'}
+            coachAddress={(id) => `?${changed(search, 'coach', id)}`}
+          />
+        )}
+        {list.data?.items.length === 0 &&
+          (filtered ? (
+            <Empty
+              title="Nobody fits"
+              action={<Link to={paths.athletes()}>Show all athletes</Link>}
+            >
+              Try fewer letters, or another filter.
+            </Empty>
+          ) : (
+            <Empty
+              title="No athletes yet"
+              action={
+                <ButtonLink look="primary" to={paths.newAthlete()}>
+                  Add the first athlete
+                </ButtonLink>
+              }
+            >
+              An athlete is the person filmed. Visits, consent and readings are kept with them.
+            </Empty>
+          ))}
+        {list.data && (
+          <Pager
+            {...list.data}
+            label="athletes"
+            to={(page) => `?${changed(search, 'page', String(page))}`}
+          />
+        )}
+      </div>
+    </Page>
+  );
+}

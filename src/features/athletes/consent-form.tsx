@@ -1,0 +1,136 @@
+import { zodResolver } from '@hookform/resolvers/zod';
+import { useQueryClient } from '@tanstack/react-query';
+import { useForm, useWatch } from 'react-hook-form';
+import { useNavigate } from 'react-router-dom';
+import type * as z from 'zod';
+import { consentBody, type Athlete, type Purpose } from '#shared/contracts/athletes.ts';
+import { routes } from '#shared/contracts/routes.ts';
+import { athletesKey } from '#src/api/athletes.queries.ts';
+import { call } from '#src/api/client.ts';
+import { todayQuery } from '#src/api/today.queries.ts';
+import { Button, ButtonLink } from '#src/ui/button.tsx';
+import { today, yearsOn } from '#src/ui/days.ts';
+import { CheckboxField, SegmentedField } from '#src/ui/form/choice-fields.tsx';
+import { Fault } from '#src/ui/form/field-frame.tsx';
+import { Form } from '#src/ui/form/form.tsx';
+import { TextField } from '#src/ui/form/text-field.tsx';
+import { paths } from '#src/ui/paths.ts';
+import { useStatus } from '#src/ui/status.tsx';
+import { PURPOSES, PURPOSE_WORDS } from '#src/ui/words.ts';
+
+type Typed = z.input<typeof consentBody>;
+
+const PURPOSE_NOTES: Record<Purpose, string> = {
+  assessment:
+    'Clips are kept in this practice and seen by its coach and supervisor. Nothing works without this.',
+  supervision: 'An experienced colleague elsewhere looks at clips and marks.',
+  teaching: 'Shown to others who learn; never with the face.',
+  'sharing-by-link': 'A link opens one replay and nothing else. It can be ended at any time.',
+};
+
+export function ConsentForm({ athlete, next }: { athlete: Athlete; next: string }) {
+  const client = useQueryClient();
+  const navigate = useNavigate();
+  const say = useStatus();
+  const form = useForm({
+    resolver: zodResolver(consentBody),
+    defaultValues: {
+      // a minor cannot give it alone; nothing else is chosen beforehand
+      givenBy: athlete.minor ? 'guardian' : 'athlete',
+      guardianName: null,
+      guardianRelation: null,
+      assent: false,
+      purposes: [],
+      validUntil: yearsOn(today(), 1),
+      how: '',
+    } as Typed,
+  });
+  const byGuardian = useWatch({ control: form.control, name: 'givenBy' }) === 'guardian';
+  const purposesFault = form.formState.errors.purposes?.message;
+
+  const send = async (body: z.output<typeof consentBody>) => {
+    const guardian =
+      body.givenBy === 'guardian' ? {} : { guardianName: null, guardianRelation: null };
+    await call(routes.recordConsent, {
+      params: { id: athlete.id },
+      body: { ...body, ...guardian },
+    });
+    await Promise.all([
+      client.invalidateQueries({ queryKey: athletesKey }),
+      client.invalidateQueries({ queryKey: todayQuery.queryKey }),
+    ]);
+    say('The consent is recorded.');
+    await navigate(next);
+  };
+  return (
+    <Form form={form} send={send} className="max-w-form space-y-7">
+      {athlete.minor ? (
+        <p>
+          {athlete.givenName} is under 18: a guardian gives the consent, and {athlete.givenName} is
+          asked as well.
+        </p>
+      ) : (
+        <SegmentedField<Typed>
+          name="givenBy"
+          legend="Given by"
+          choices={[
+            { value: 'athlete', label: `${athlete.givenName}` },
+            { value: 'guardian', label: 'A guardian' },
+          ]}
+        />
+      )}
+      {byGuardian && (
+        <div className="grid gap-6 phone:grid-cols-2">
+          <TextField<Typed> name="guardianName" label="Guardian’s name" emptyIsNull />
+          <TextField<Typed> name="guardianRelation" label="Relation" optional emptyIsNull />
+        </div>
+      )}
+      <fieldset>
+        <legend className="mb-1 font-bold">They agree to</legend>
+        {purposesFault !== undefined && <Fault>{purposesFault}</Fault>}
+        {PURPOSES.map((purpose) => (
+          <CheckboxField<Typed>
+            key={purpose}
+            name="purposes"
+            value={purpose}
+            label={PURPOSE_WORDS[purpose]}
+            note={PURPOSE_NOTES[purpose]}
+            quiet
+          />
+        ))}
+      </fieldset>
+      {athlete.minor && (
+        <CheckboxField<Typed>
+          name="assent"
+          label={`${athlete.givenName} was asked in words that fit their age, and said yes`}
+          note="Leave it empty where they said no, and do not film."
+        />
+      )}
+      <TextField<Typed>
+        name="validUntil"
+        type="date"
+        label="Valid until"
+        hint="You are reminded before it lapses."
+      />
+      <TextField<Typed>
+        name="how"
+        label="How it was given"
+        optional
+        hint="On paper, kept in the file; on the tablet; by letter …"
+      />
+      <div className="flex flex-wrap gap-3">
+        <Button
+          type="submit"
+          look="primary"
+          busy={form.formState.isSubmitting}
+          busyLabel="Saving …"
+        >
+          Record the consent
+        </Button>
+        <ButtonLink look="plain" to={paths.athlete(athlete.id)} className="px-2">
+          Leave without saving
+        </ButtonLink>
+      </div>
+    </Form>
+  );
+}

@@ -1,0 +1,100 @@
+import type { Side } from '#shared/contracts/primitives.ts';
+import type { VisitRow } from '#shared/contracts/visits.ts';
+import { shortDay } from '#src/ui/days.ts';
+import { plusMinus, turn } from '#src/ui/figures.ts';
+import { Section } from '#src/ui/page.tsx';
+import { since, trendOf, type Trend, type TrendPoint } from './trend.ts';
+import { TrendPlot } from './trend-plot.tsx';
+
+/** How the readings of both sides went over the visits. Nothing is shown before something was measured. */
+export function TrendSection({ visits }: { visits: readonly VisitRow[] }) {
+  const trend = trendOf(visits);
+  if (trend.left.length + trend.right.length === 0) return null;
+  const unmeasured = visits.filter(({ id }) =>
+    [...trend.left, ...trend.right].every((point) => point.visitId !== id),
+  ).length;
+  return (
+    <Section
+      title="Trend"
+      note={
+        unmeasured > 0
+          ? 'Measured visits only: what was seen by eye has no place on this axis.'
+          : 'Measured visits.'
+      }
+      margin={
+        <>
+          <Changes side="right" points={trend.right} />
+          <Changes side="left" points={trend.left} />
+          <p>
+            The bars are 95 % errors under our error model. Two visits differ only where they are
+            further apart than both errors together.
+          </p>
+        </>
+      }
+    >
+      <TrendPlot trend={trend} />
+      <AsTable trend={trend} />
+    </Section>
+  );
+}
+
+function Changes({ side, points }: { side: Side; points: readonly TrendPoint[] }) {
+  const latest = points.at(-1);
+  if (latest === undefined) return null;
+  const before = points.at(-2);
+  const first = points[0];
+  const earlier = [...new Set([before, first])].filter(
+    (point): point is TrendPoint => point !== undefined && point !== latest,
+  );
+  return (
+    <div>
+      <p className="font-bold text-ink">Standing on the {side}</p>
+      {earlier.length === 0 && <p>One measured visit; a change needs a second.</p>}
+      {earlier.map((point) => {
+        const { day, difference, plusMinus: error, changed } = since(point, latest);
+        return (
+          <p key={day}>
+            Since {shortDay(day)} {turn(difference)} {plusMinus(error)}.{' '}
+            {changed ? 'Changed by more than the error.' : 'No change that this test can show.'}
+          </p>
+        );
+      })}
+    </div>
+  );
+}
+
+/** The plot's figures for those who do not see it. */
+function AsTable({ trend }: { trend: Trend }) {
+  return (
+    <div className="sr-only">
+      <table>
+        <caption>Turn from 60° to 90° of lift at each measured visit</caption>
+        <thead>
+          <tr>
+            <th scope="col">Visit</th>
+            <th scope="col">Side stood on</th>
+            <th scope="col">Turn and 95 % error</th>
+            <th scope="col">Reading</th>
+          </tr>
+        </thead>
+        <tbody>
+          {(['right', 'left'] as const).flatMap((side) =>
+            trend[side].map((point) => (
+              <tr key={`${side} ${point.visitId}`}>
+                <td>{shortDay(point.day)}</td>
+                <td>{side}</td>
+                <td>
+                  {turn(point.change)} {plusMinus(point.plusMinus)}
+                </td>
+                <td>
+                  {point.label}
+                  {point.provisional && ', provisional'}
+                </td>
+              </tr>
+            )),
+          )}
+        </tbody>
+      </table>
+    </div>
+  );
+}

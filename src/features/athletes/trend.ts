@@ -1,0 +1,58 @@
+import type { Side } from '#shared/contracts/primitives.ts';
+import type { VisitRow } from '#shared/contracts/visits.ts';
+
+/** One measured visit of one side; angles in degrees, external positive. */
+export type TrendPoint = {
+  visitId: string;
+  day: string;
+  label: string;
+  change: number;
+  /** 1.96 u_c */
+  plusMinus: number;
+  /** u_c */
+  u: number;
+  provisional: boolean;
+};
+export type Trend = Record<Side, TrendPoint[]>;
+
+/** The measured visits of both sides, oldest first. A call by eye has no place here. */
+export function trendOf(visits: readonly VisitRow[]): Trend {
+  const oldestFirst = [...visits].sort((a, b) => a.day.localeCompare(b.day));
+  const points = (side: Side) =>
+    oldestFirst.flatMap(({ id, day, sides }): TrendPoint[] => {
+      const reading = sides.find((own) => own.side === side)?.reading;
+      if (!reading) return [];
+      const { label, change, plusMinus, u, provisional } = reading;
+      if (change === null || plusMinus === null || u === null) return [];
+      return [{ visitId: id, day, label, change, plusMinus, u, provisional }];
+    });
+  return { right: points('right'), left: points('left') };
+}
+
+export type Since = {
+  /** The earlier visit. */
+  day: string;
+  /** Degrees, later minus earlier. */
+  difference: number;
+  /** 1.96 √(u₁² + u₂²), degrees. */
+  plusMinus: number;
+  changed: boolean;
+};
+
+/** How the latest visit of a side stands against an earlier one: changed only beyond the joint error. */
+export function since(earlier: TrendPoint, latest: TrendPoint): Since {
+  const difference = latest.change - earlier.change;
+  const plusMinus = 1.96 * Math.hypot(earlier.u, latest.u);
+  return { day: earlier.day, difference, plusMinus, changed: Math.abs(difference) > plusMinus };
+}
+
+/** Bounds of the turn axis, degrees, in steps of ten around every error bar and zero. */
+export function turnBounds(trend: Trend): [low: number, high: number] {
+  const points = [...trend.left, ...trend.right];
+  const low = Math.min(-10, ...points.map(({ change, plusMinus }) => change - plusMinus));
+  const high = Math.max(10, ...points.map(({ change, plusMinus }) => change + plusMinus));
+  return [Math.floor(low / 10) * 10, Math.ceil(high / 10) * 10];
+}
+
+/** A calendar day as a number that grows by one a day. */
+export const dayNumber = (day: string): number => Date.parse(day) / 86_400_000;

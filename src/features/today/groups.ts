@@ -1,0 +1,35 @@
+import type { Role } from '#shared/contracts/accounts.ts';
+import type { Task, TaskGroup } from './task-of.ts';
+
+const NAMES: Record<TaskGroup, string> = {
+  review: 'Readings',
+  call: 'To call by eye',
+  mark: 'To mark',
+  answer: 'To answer',
+  film: 'To send or film again',
+  prepare: 'Being prepared',
+  lapse: 'About to lapse',
+};
+
+/** A coach works from the clip to the reading; a supervisor starts with what others brought. */
+const ORDER: Record<Role, readonly TaskGroup[]> = {
+  coach: ['call', 'mark', 'answer', 'film', 'review', 'prepare', 'lapse'],
+  supervisor: ['review', 'answer', 'call', 'mark', 'film', 'prepare', 'lapse'],
+  owner: ['lapse', 'review', 'answer', 'call', 'mark', 'film', 'prepare'],
+};
+
+export type Group = { group: TaskGroup; name: string; tasks: Task[] };
+
+/** The tasks in groups; within a group they keep the server's order, most pressing first. */
+export function groupTasks(tasks: readonly Task[], role: Role): Group[] {
+  return ORDER[role]
+    .map((group) => ({
+      group,
+      name: NAMES[group],
+      tasks: tasks.filter((task) => task.group === group),
+    }))
+    .filter(({ tasks: own }) => own.length > 0);
+}
+
+/** Groups in which a person can do something now; what is being prepared only takes time. */
+export const isWork = (task: Task): boolean => task.group !== 'prepare';
