@@ -6,8 +6,10 @@ export const PRACTICE_FILTER = 'practice';
 
 /** The practice that this entity manager works for. Throws outside `inPractice`. */
 export const practiceOf = (em: EntityManager): string => {
-  const { practice } = (em.getFilterParams(PRACTICE_FILTER) ?? {});
-  if (practice === undefined) throw new Error('No practice is set: write inside inPractice().');
+  const practice: unknown = em.getFilterParams(PRACTICE_FILTER)?.practice;
+  if (typeof practice !== 'string') {
+    throw new Error('No practice is set: write inside inPractice().');
+  }
   return practice;
 };
 

@@ -5,6 +5,7 @@ import type { Feature } from '../main/feature.ts';
 import type { Ground } from '../main/ground.ts';
 import { logRequests } from './logging.ts';
 import { servePages } from './pages.ts';
+import { Problem } from './problem.ts';
 import { problemHandler, unknownRoute } from './problem-handler.ts';
 import { requestIds } from './request-id.ts';
 import { neverStored, ownOriginOnly, securityHeaders } from './security.ts';
@@ -15,19 +16,30 @@ export interface AppOptions {
   /** The built pages; without it only the interface is served. */
   readonly pages?: string;
   readonly onRoute?: (route: Route) => void;
+  /** True while the server stops: requests on connections that are still open are sent elsewhere. */
+  readonly isClosing?: () => boolean;
 }
 
 export const tokenHash = (token: string): string =>
   createHash('sha256').update(token).digest('hex');
 
 /** The web server's one chain: who and what in front, features in the middle, problems at the end. */
-export const makeApp = (ground: Ground, { features, pages, onRoute }: AppOptions): Express => {
+export const makeApp = (
+  ground: Ground,
+  { features, pages, onRoute, isClosing }: AppOptions,
+): Express => {
   const { config, log, sessions, inPractice, orm } = ground;
   const app = express();
   app.disable('x-powered-by');
+  app.disable('etag');
   app.set('trust proxy', config.trustProxy);
   app.use(requestIds);
   app.use(logRequests(log, (res) => String(res.getHeader('X-Request-Id'))));
+  app.use((_req, res, next) => {
+    if (!isClosing?.()) return next();
+    res.setHeader('Connection', 'close');
+    throw new Problem('shutting-down');
+  });
   app.use(...securityHeaders(config.publicUrl.startsWith('https:')));
   app.use('/api', neverStored, ownOriginOnly(config.publicUrl));
 

@@ -44,7 +44,7 @@ export class Locks {
   }
 
   async close(): Promise<void> {
-    await this.#client.end();
+    await this.#client.end().catch(() => undefined);
   }
 }
 

@@ -27,14 +27,21 @@ export class Relay {
     this.#log = log;
   }
 
-  static async start(jobsUrl: string, boss: PgBoss, log: Logger): Promise<Relay> {
+  static async start(
+    jobsUrl: string,
+    boss: PgBoss,
+    log: Logger,
+    onLost: () => void,
+  ): Promise<Relay> {
     const client = new Client({ connectionString: jobsUrl, keepAlive: true });
     const relay = new Relay(client, boss, log);
     client.on('notification', () => {
       relay.wake();
     });
     client.on('error', (error) => {
-      log.error({ err: error }, 'the outbox cannot be read');
+      if (relay.#stopped) return;
+      log.error({ err: error }, 'the connection to the outbox was lost');
+      onLost();
     });
     await client.connect();
     await client.query(`listen ${OUTBOX_CHANNEL}`);
@@ -85,6 +92,6 @@ export class Relay {
     this.#stopped = true;
     clearInterval(this.#timer);
     await this.#running;
-    await this.#client.end();
+    await this.#client.end().catch(() => undefined);
   }
 }

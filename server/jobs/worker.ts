@@ -19,6 +19,8 @@ export interface Worker {
 export const startWorker = async (
   ground: Ground,
   handlers: readonly AnyJobHandler[],
+  /** A connection that the worker stands on broke: stop it and start another. */
+  onLost: () => void,
 ): Promise<Worker> => {
   const { log, config } = ground;
   const jobsUrl = config.database.jobs;
@@ -38,8 +40,10 @@ export const startWorker = async (
   });
   await boss.start();
   const locks = await Locks.open(jobsUrl, () => {
+    if (stopping.signal.aborted) return;
     log.error('the connection that holds the locks was lost; jobs in work are stopped');
     stopping.abort();
+    onLost();
   });
 
   for (const handler of handlers) {
@@ -53,7 +57,7 @@ export const startWorker = async (
     });
     await queueUnfinished(jobsUrl, boss, locks, handler);
   }
-  const relay = await Relay.start(jobsUrl, boss, log);
+  const relay = await Relay.start(jobsUrl, boss, log, onLost);
   for (const handler of handlers) {
     await boss.work<Carried>(
       handler.queue,

@@ -111,7 +111,7 @@ export const readConfig = (env: NodeJS.ProcessEnv): Config => {
     uploads: resolve(read.REDSHANK_UPLOADS ?? join(data, 'uploads')),
     demo: read.REDSHANK_DEMO ?? read.NODE_ENV !== 'production',
     demoPassword: read.REDSHANK_DEMO_PASSWORD,
-    logLevel: read.REDSHANK_LOG ?? 'info',
+    logLevel: read.REDSHANK_LOG ?? (read.NODE_ENV === 'production' ? 'info' : 'warn'),
     bucket: read.REDSHANK_S3_BUCKET
       ? {
           name: read.REDSHANK_S3_BUCKET,

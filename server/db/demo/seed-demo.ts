@@ -1,0 +1,50 @@
+import { Client } from 'pg';
+import type { Ground } from '../../main/ground.ts';
+import { DEMO_ACCOUNTS, GREYWATER, PENNYWORT } from './accounts.ts';
+import { demoPassword, keepDemoPassword } from './demo-password.ts';
+import { seedGreywater } from './greywater.ts';
+import { seedPennywort } from './pennywort.ts';
+
+/** Any number, the same in every process: two that start together make one demo. */
+const DEMO_LOCK = 4_600_003;
+
+const SEEDS = [
+  [GREYWATER, seedGreywater],
+  [PENNYWORT, seedPennywort],
+] as const;
+
+/** What a start prints about the demo. */
+export interface Demo {
+  readonly lines: readonly string[];
+}
+
+/**
+ * Makes the demo once, into a database in which there is nothing else. A demo that was cut short is completed,
+ * practice by practice.
+ * @returns the accounts to print, or null where this instance has no demo
+ */
+export const seedDemo = async (ground: Ground): Promise<Demo | null> => {
+  const client = new Client({ connectionString: ground.config.database.owner });
+  await client.connect();
+  try {
+    await client.query('select pg_advisory_lock($1)', [DEMO_LOCK]);
+    const { rows } = await client.query<{ id: string }>('select id from practice');
+    const there = new Set(rows.map((row) => row.id));
+    const demoIsThere = there.has(GREYWATER);
+    const foreign = [...there].some((id) => id !== GREYWATER && id !== PENNYWORT);
+    if (!demoIsThere && (foreign || !ground.config.demo)) return null;
+    const password = await demoPassword(ground);
+    if (!foreign) {
+      for (const [id, seed] of SEEDS) if (!there.has(id)) await seed(ground, password);
+    }
+    if (demoIsThere) await keepDemoPassword(ground, password);
+    return { lines: linesOf(password) };
+  } finally {
+    await client.end();
+  }
+};
+
+const linesOf = (password: string): string[] => [
+  'Demo accounts, all with the password '.concat(password),
+  ...Object.values(DEMO_ACCOUNTS).map(({ email, role }) => `  ${email.padEnd(34)} ${role}`),
+];

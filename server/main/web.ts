@@ -1,0 +1,69 @@
+import { createServer, type Server } from 'node:http';
+import { join } from 'node:path';
+import { listenForEvents } from '../events/listen.ts';
+import { makeApp } from '../http/app.ts';
+import { features } from './features.ts';
+import type { Ground } from './ground.ts';
+import { repoRoot } from './root.ts';
+
+/** A connection on which nothing moves for this long is cut; live streams send a heartbeat every 20 s. */
+const IDLE_MS = 60_000;
+/** Requests under way get this long to end when the server stops. */
+const GRACE_MS = 5000;
+
+export interface Web {
+  readonly stop: () => Promise<void>;
+}
+
+const listen = (server: Server, port: number, host: string): Promise<void> =>
+  new Promise((resolve, reject) => {
+    server.once('error', reject);
+    server.listen(port, host, () => {
+      server.off('error', reject);
+      resolve();
+    });
+  });
+
+/** Serves the interface and the pages. */
+export const startWeb = async (ground: Ground): Promise<Web> => {
+  const { config, events, log } = ground;
+  let closing = false;
+  const stopListening = await listenForEvents({
+    url: config.database.app,
+    log,
+    onEvent: (event) => {
+      events.publish(event);
+    },
+    onGap: () => {
+      events.closeAll();
+    },
+  });
+  const app = makeApp(ground, {
+    features,
+    pages: join(repoRoot(), 'dist', 'web'),
+    isClosing: () => closing,
+  });
+  // A long upload is fine as long as it moves.
+  const server = createServer({ requestTimeout: 0 }, app);
+  server.setTimeout(IDLE_MS);
+  await listen(server, config.port, config.host);
+
+  return {
+    stop: async () => {
+      closing = true;
+      const closed = new Promise<void>((resolve) => {
+        server.close(() => {
+          resolve();
+        });
+      });
+      events.closeAll();
+      server.closeIdleConnections();
+      const cut = setTimeout(() => {
+        server.closeAllConnections();
+      }, GRACE_MS);
+      await closed;
+      clearTimeout(cut);
+      await stopListening();
+    },
+  };
+};
