@@ -43,6 +43,7 @@ step_log=''
 step() {
   local label=$1 status=0 started=$SECONDS ticker
   shift
+  [[ -t 2 ]] || say "… $label"
   step_log=$(mktemp "${TMPDIR:-/tmp}/redshank-step.XXXXXX")
   set -m
   "$@" </dev/null >"$step_log" 2>&1 9>&- &
@@ -65,17 +66,16 @@ step() {
   return "$status"
 }
 
-# On a terminal a running count of seconds; in a log one line at the start and one every half minute.
+# On a terminal a running count of seconds; in a log a line every half minute.
 tick() {
-  local label=$1 pid=$2 started=$SECONDS
+  local label=$1 pid=$2 started=$SECONDS next=30
   exec 9>&-
-  [[ -t 2 ]] || say "… $label"
-  while kill -0 "$pid" 2>/dev/null; do
+  while sleep 1 >/dev/null 2>&1 && kill -0 "$pid" 2>/dev/null; do
     if [[ -t 2 ]]; then
       printf '\r\033[K… %s (%d s)' "$label" $((SECONDS - started)) >&2
-      sleep 1
-    else
-      sleep 30 && kill -0 "$pid" 2>/dev/null && say "… $label ($((SECONDS - started)) s)"
+    elif ((SECONDS - started >= next)); then
+      say "… $label ($((SECONDS - started)) s)"
+      next=$((next + 30))
     fi
   done
 }
