@@ -26,9 +26,6 @@ export interface RepCourse {
   readonly fMax: Degrees | null;
 }
 
-const degreesOrNull = (value: number | null): Degrees | null =>
-  value === null ? null : degrees(value);
-
 const courseFrame = (
   frame: LevelFrame,
   phase: FramePhase,
@@ -49,15 +46,14 @@ const courseFrame = (
     frame: frame.frame,
     time: frame.time,
     phase,
-    lift: degreesOrNull(height),
-    liftHalfWidth:
-      height === null || !withHalfWidths ? null : degrees(liftHalfWidth(frame, setting)),
-    turn: degreesOrNull(known?.turn ?? null),
-    turnHalfWidth: known && degrees(turnHalfWidth(known.variance + known.zeroVariance, setting)),
-    femurYaw: degreesOrNull(known?.femurYaw ?? null),
-    pelvisYaw: degreesOrNull(known?.pelvisYaw ?? null),
-    thighPart: degreesOrNull(known?.thighPart ?? null),
-    pelvisPart: degreesOrNull(known?.pelvisPart ?? null),
+    lift: height,
+    liftHalfWidth: height === null || !withHalfWidths ? null : liftHalfWidth(frame, setting),
+    turn: known?.turn ?? null,
+    turnHalfWidth: known && turnHalfWidth(known.variance + known.zeroVariance, setting),
+    femurYaw: known?.femurYaw ?? null,
+    pelvisYaw: known?.pelvisYaw ?? null,
+    thighPart: known?.thighPart ?? null,
+    pelvisPart: known?.pelvisPart ?? null,
     weight,
     inFit: phase === 'rise' && weight !== null && weight > 0,
     missing: {

@@ -1,3 +1,4 @@
+import type { Degrees } from '#shared/geometry/units.ts';
 import type { LevelFrame } from '#shared/measures/level.ts';
 import { liftOf } from '#shared/measures/lift.ts';
 import type { Setting } from '#shared/measures/measure.ts';
@@ -14,7 +15,7 @@ import type { BoundaryId, FramePhase, RepBoundaries, RepPhases } from './types.t
 export interface Divided {
   readonly phases: RepPhases;
   readonly setting: Setting;
-  readonly lifts: readonly (number | null)[];
+  readonly lifts: readonly (Degrees | null)[];
 }
 
 export interface Dividing {
@@ -33,7 +34,7 @@ const IDS: readonly BoundaryId[] = [
   'footDown',
 ];
 
-const liftsOf = (frames: readonly LevelFrame[], setting: Setting): readonly (number | null)[] =>
+const liftsOf = (frames: readonly LevelFrame[], setting: Setting): readonly (Degrees | null)[] =>
   frames.map((frame) => {
     const lift = liftOf(frame, setting);
     return typeof lift === 'number' ? lift : null;

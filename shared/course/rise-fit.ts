@@ -1,24 +1,25 @@
+import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import { corner } from './corner.ts';
 import { solveInPlace } from './linear.ts';
 
 export const TERMS = 4;
-const FROM = CONSTANTS.gateFrom.value;
-const TO = CONSTANTS.gateTo.value;
-const BEFORE = 30;
+const FROM = degrees(CONSTANTS.gateFrom.value);
+const TO = degrees(CONSTANTS.gateTo.value);
+const BEFORE = degrees(30);
 const RIDGE = [1e-9, 1e-7, 1e-7, 1e-5] as const;
 /** Strength of the belief that marks err as assumed: counts like six further frames. */
 const PRIOR_FRAMES = 6;
 
-/** [1, F−60, H(F−60), H(F−90)] of one lift, degrees. */
-export const terms = (lift: number): readonly [number, number, number, number] => [
+/** [1, F−60, H(F−60), H(F−90)] of one lift. */
+export const terms = (lift: Degrees): readonly [number, number, number, number] => [
   1,
   lift - FROM,
   corner(lift - FROM),
   corner(lift - TO),
 ];
 
-const difference = (to: number, from: number): readonly [number, number, number, number] => {
+const difference = (to: Degrees, from: Degrees): readonly [number, number, number, number] => {
   const a = terms(to);
   const b = terms(from);
   return [a[0] - b[0], a[1] - b[1], a[2] - b[2], a[3] - b[3]];
@@ -137,7 +138,8 @@ export const fitRise = (
   const nu = PRIOR_FRAMES + used - TERMS;
   let squares = PRIOR_FRAMES;
   for (let i = 0; i < used; i += 1) {
-    const rest = (thighPart[i] ?? NaN) + (pelvisPart[i] ?? NaN) - dot(terms(lifts[i] ?? NaN), turn);
+    const rest =
+      (thighPart[i] ?? NaN) + (pelvisPart[i] ?? NaN) - dot(terms(degrees(lifts[i] ?? NaN)), turn);
     squares += (weights[i] ?? NaN) * rest * rest;
   }
   const sFit = Math.sqrt(squares / nu);

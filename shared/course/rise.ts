@@ -1,3 +1,4 @@
+import type { Degrees } from '#shared/geometry/units.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import { type Milliseconds, milliseconds } from '#shared/timing/units.ts';
 import { medianOfThree } from './robust.ts';
@@ -61,10 +62,10 @@ const findFootDown = (
   return null;
 };
 
-/** `lifts` in degrees, one per frame, null where unknown. */
+/** `lifts`: one per frame, null where unknown. */
 export const findRise = (
   times: readonly Milliseconds[],
-  lifts: readonly (number | null)[],
+  lifts: readonly (Degrees | null)[],
   stance: Stance,
   moved: Partial<RepBoundaries>,
 ): Rise => {

@@ -25,7 +25,10 @@ const closeCall = ({ p_er, p_ir, p_flat, p_pre, u }: GoldenReference): boolean =
     [p_ir, 0.95],
     [p_flat, 0.8],
     [p_pre, 0.975],
-  ].some(([p, limit]) => p != null && limit != null && Math.abs(p - limit) <= 0.03) ||
+  ].some(
+    ([p, limit]) =>
+      typeof p === 'number' && typeof limit === 'number' && Math.abs(p - limit) <= 0.03,
+  ) ||
   (u !== null && Math.abs(u - 6) <= 0.5);
 
 const compareFigures = (figures: ReadingFigures, reference: GoldenReference): void => {

@@ -1,7 +1,7 @@
 import { deriveReading } from '#shared/reading/derive.ts';
 import type { ReadingCode } from '#shared/reading/types.ts';
 import { TrialError } from './trial-error.ts';
-import { readingInputOf, trialOf, type TrialSet } from './trial.ts';
+import { readingInputOf, TRIAL_SETS, trialOf, type TrialSet } from './trial.ts';
 
 /** One printed line: a trial read with one landmark set. Null where there is no usable rep. */
 export interface EvaluatedLine {
@@ -29,7 +29,7 @@ export const linesOf = (
 ): { readonly lines: readonly EvaluatedLine[]; readonly error: string | null } => {
   try {
     const trial = trialOf(parse(line));
-    const lines = trial.sets.map((set): EvaluatedLine => {
+    const lines = TRIAL_SETS.map((set): EvaluatedLine => {
       const { code, figures } = deriveReading(readingInputOf(trial, set));
       return {
         id: trial.id,

@@ -24,8 +24,6 @@ export interface Trial {
   readonly id: string;
   readonly supportSide: Side;
   readonly reps: readonly RepInput[];
-  /** Sets whose marks and pointer lengths the file holds. */
-  readonly sets: readonly TrialSet[];
 }
 
 const SCHEMA = 'redshank-trial/1';
@@ -150,16 +148,10 @@ export const trialOf = (value: unknown): Trial => {
   if (stance !== 'L' && stance !== 'R') throw new TrialError(`stance must be 'L' or 'R'`);
   const side: Side = stance === 'L' ? 'left' : 'right';
   const camera = cameraOf(trial);
-  const reps = list(field(trial, 'reps'), 'reps').map((rep, at) => repOf(rep, at, side, camera));
-  const marked = (id: LandmarkId): boolean =>
-    reps.some((rep) => rep.frames.some((frame) => frame.marks[id] !== undefined));
-  const belt = marked('belt-tip') && camera.beltPointerMm !== null;
-  const thigh = belt && marked('thigh-tip') && camera.thighPointerMm !== null;
   return {
     id: text(field(trial, 'id'), 'id'),
     supportSide: side,
-    reps,
-    sets: TRIAL_SETS.filter((set) => set === 'bare' || (set === 'belt+thigh' ? thigh : belt)),
+    reps: list(field(trial, 'reps'), 'reps').map((rep, at) => repOf(rep, at, side, camera)),
   };
 };
 

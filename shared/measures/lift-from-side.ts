@@ -19,7 +19,7 @@ export const forward = ({ rig }: Setting): 1 | -1 | null => {
 
 /** Angle of a line that hangs down from `top` against the vertical, positive towards the toes. */
 export const hanging = (top: FramePoint, bottom: FramePoint, ahead: 1 | -1): Degrees =>
-  degrees(toDegrees(radians(Math.atan2(ahead * (bottom.u - top.u), bottom.v - top.v))));
+  toDegrees(radians(Math.atan2(ahead * (bottom.u - top.u), bottom.v - top.v)));
 
 const thighAngle = (frame: LevelFrame, ahead: 1 | -1): number => {
   const { trochanter, 'knee-lateral': knee } = frame.marks;
@@ -38,21 +38,21 @@ const quietMean = (setting: Setting, read: (frame: LevelFrame) => number): numbe
 };
 
 /** Elevation of the thigh the side camera sees, degrees, minus its quiet mean. */
-export const sideLift = (frame: LevelFrame, setting: Setting): number | Missing => {
+export const sideLift = (frame: LevelFrame, setting: Setting): Degrees | Missing => {
   const lack = lacks(frame, SIDE_LANDMARKS);
   if (lack) return lack;
   const ahead = forward(setting);
   if (ahead === null) return { code: 'toe-direction-missing' };
   const quiet = quietMean(setting, (each) => thighAngle(each, ahead));
   if (quiet === null) return { code: 'no-quiet-stance' };
-  const lift = thighAngle(frame, ahead) - quiet;
+  const lift = degrees(thighAngle(frame, ahead) - quiet);
   return Number.isFinite(lift) ? lift : { code: 'marks-coincide' };
 };
 
-export const sideLiftHalfWidth = (frame: LevelFrame, setting: Setting): number => {
+export const sideLiftHalfWidth = (frame: LevelFrame, setting: Setting): Degrees => {
   const ahead = forward(setting) ?? 1;
   const spread = propagate(frame, SIDE_LANDMARKS, (each) => thighAngle(each, ahead));
-  return Math.hypot(1.96 * spread, CONSTANTS.liftModelError.value);
+  return degrees(Math.hypot(1.96 * spread, CONSTANTS.liftModelError.value));
 };
 
 export const thighAgainstTrunk: Measure = {

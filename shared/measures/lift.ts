@@ -1,4 +1,4 @@
-import { radians, toDegrees } from '#shared/geometry/units.ts';
+import { type Degrees, degrees, toDegrees } from '#shared/geometry/units.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { CONSTANTS } from './constants.ts';
 import { normalDraws } from './draws.ts';
@@ -15,7 +15,7 @@ const DRAWS = 200;
 const SEED = 60_90;
 
 /** Lift of one frame of a front clip, degrees, numeric also where it is too low to be shown. */
-const frontLift = (frame: LevelFrame, { rig, reference }: Setting): number | Missing => {
+const frontLift = (frame: LevelFrame, { rig, reference }: Setting): Degrees | Missing => {
   const lack = lacks(frame, FRONT_LANDMARKS);
   if (lack) return lack;
   const { 'asis-support': support, 'asis-lifted': lifted, 'lifted-knee': knee } = frame.marks;
@@ -23,12 +23,12 @@ const frontLift = (frame: LevelFrame, { rig, reference }: Setting): number | Mis
   if (width === null || thigh === null || horizon === null) return { code: 'no-quiet-stance' };
   if (!support || !lifted || !knee) return { code: 'marks-coincide' };
   const hip = hipCentre(lifted, support, width);
-  const lift = toDegrees(radians(liftFromHeights(knee.v, hip.v, thigh, horizon, rig.focal)));
+  const lift = toDegrees(liftFromHeights(knee.v, hip.v, thigh, horizon, rig.focal));
   return Number.isFinite(lift) ? lift : { code: 'marks-coincide' };
 };
 
 /** Lift of one frame in the view of its clip, degrees; or why there is none. */
-export const liftOf = (frame: LevelFrame, setting: Setting): number | Missing => {
+export const liftOf = (frame: LevelFrame, setting: Setting): Degrees | Missing => {
   const { view } = setting.rig.camera;
   if (view === 'front') return frontLift(frame, setting);
   if (view === 'back') return { code: 'view-cannot-show-it', view };
@@ -56,13 +56,13 @@ const liftSpread = (frame: LevelFrame, setting: Setting): number => {
 };
 
 /** ± of lift beside one frame (95 %): marks, and the model with or without the lens height. */
-export const liftHalfWidth = (frame: LevelFrame, setting: Setting): number => {
+export const liftHalfWidth = (frame: LevelFrame, setting: Setting): Degrees => {
   if (setting.rig.camera.view !== 'front') return sideLiftHalfWidth(frame, setting);
   const model =
     setting.rig.camera.lensHeightMm === null
       ? CONSTANTS.liftModelErrorNoLens.value
       : CONSTANTS.liftModelError.value;
-  return Math.hypot(1.96 * liftSpread(frame, setting), model);
+  return degrees(Math.hypot(1.96 * liftSpread(frame, setting), model));
 };
 
 const value = (frame: LevelFrame, setting: Setting): Value => {

@@ -1,4 +1,4 @@
-import { toDegrees, radians } from '#shared/geometry/units.ts';
+import { type Degrees, degrees, radians, toDegrees } from '#shared/geometry/units.ts';
 import { SYSTEMATIC } from './constants.ts';
 import type { LevelFrame } from './level.ts';
 import { type Measure, measured, missing, type Setting, type Value } from './measure.ts';
@@ -7,12 +7,12 @@ import { femurYaw, isYaw, pelvisYaw, turnLandmarks } from './turn-parts.ts';
 
 /** Turn of one frame and its parts, degrees, external positive, zero at quiet stance. */
 export interface Turn {
-  readonly turn: number;
-  readonly thighPart: number;
-  readonly pelvisPart: number;
+  readonly turn: Degrees;
+  readonly thighPart: Degrees;
+  readonly pelvisPart: Degrees;
   /** Directions of femur and pelvis, positive to the athlete's left, not zeroed. */
-  readonly femurYaw: number;
-  readonly pelvisYaw: number;
+  readonly femurYaw: Degrees;
+  readonly pelvisYaw: Degrees;
   /** Variance of this frame alone, and of the quiet stance's mean, degrees². */
   readonly variance: number;
   readonly zeroVariance: number;
@@ -21,7 +21,7 @@ export interface Turn {
 }
 
 const DEGREES2 = (180 / Math.PI) ** 2;
-const inDegrees = (angle: number): number => toDegrees(radians(angle));
+const inDegrees = (angle: number): Degrees => toDegrees(radians(angle));
 
 export const turnOf = (frame: LevelFrame, setting: Setting): Turn | Missing => {
   if (setting.rig.camera.view !== 'front')
@@ -38,7 +38,7 @@ export const turnOf = (frame: LevelFrame, setting: Setting): Turn | Missing => {
   const variance = (femur.variance + pelvis.variance) * DEGREES2;
   if (!Number.isFinite(thighPart + pelvisPart + variance)) return { code: 'marks-coincide' };
   return {
-    turn: thighPart + pelvisPart,
+    turn: degrees(thighPart + pelvisPart),
     thighPart,
     pelvisPart,
     femurYaw: toDegrees(femur.yaw),
@@ -52,9 +52,9 @@ export const turnOf = (frame: LevelFrame, setting: Setting): Turn | Missing => {
 
 export const isTurn = (result: Turn | Missing): result is Turn => 'turn' in result;
 
-/** ± of a turn beside one frame (95 %): the frame, the quiet stance it is counted from, the model. */
-export const turnHalfWidth = (variance: number, setting: Setting): number =>
-  1.96 * Math.sqrt(variance + SYSTEMATIC[setting.set].u ** 2);
+/** ± of a turn beside one frame (95 %) from its variance in degrees²: the frame, the quiet stance it is counted from, the model. */
+export const turnHalfWidth = (variance: number, setting: Setting): Degrees =>
+  degrees(1.96 * Math.sqrt(variance + SYSTEMATIC[setting.set].u ** 2));
 
 const pick = (
   frame: LevelFrame,

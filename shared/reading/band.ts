@@ -1,11 +1,11 @@
 import { drawnSpread, type RiseDraws } from '#shared/course/rise-draws.ts';
 import { type Beta, dot, terms } from '#shared/course/rise-fit.ts';
-import { degrees } from '#shared/geometry/units.ts';
+import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import type { CurvePoint } from './types.ts';
 
-const FROM = CONSTANTS.gateFrom.value;
-const TO = CONSTANTS.gateTo.value;
+const FROM = degrees(CONSTANTS.gateFrom.value);
+const TO = degrees(CONSTANTS.gateTo.value);
 const BEFORE = 30;
 /** A marked frame carries the curve this far, degrees: from our model, no source. */
 const REACH = 8;
@@ -20,13 +20,13 @@ export interface DrawnFit {
   /** Its share of the course: 1 for a rep alone. */
   readonly share: number;
   /** Lifts of the frames that carry weight. */
-  readonly lifts: readonly number[];
+  readonly lifts: readonly Degrees[];
 }
 
-/** How uncertain the change at 90° is: random and systematic part, degrees. */
+/** How uncertain the change at 90° is: random and systematic part. */
 export interface BandWidths {
-  readonly uR: number;
-  readonly uS: number;
+  readonly uR: Degrees;
+  readonly uS: Degrees;
   /** How much of the thigh part counts; 1 without the assumption. */
   readonly lambda: number;
 }
@@ -45,7 +45,7 @@ const grown = (lift: number): number =>
   Math.min(1, lift >= FROM ? (lift - FROM) / (TO - FROM) : (FROM - lift) / (FROM - BEFORE));
 
 /** Random spread of the curve's change from 60° to a lift: each rep's draws, added in quadrature. */
-const randomSpread = (fits: readonly DrawnFit[], lift: number, lambda: number): number => {
+const randomSpread = (fits: readonly DrawnFit[], lift: Degrees, lambda: number): number => {
   const change = minus(terms(lift), terms(FROM));
   return Math.hypot(
     ...fits.map(
@@ -70,7 +70,8 @@ export const courseCurve = (
   const scale = uR / randomSpread(fits, TO, lambda);
   if (!Number.isFinite(scale)) return [];
   const curve: CurvePoint[] = [];
-  for (let lift = low; lift <= high; lift += STEP) {
+  for (let at = low; at <= high; at += STEP) {
+    const lift = degrees(at);
     const x = terms(lift);
     const turn = fits.reduce(
       (sum, fit) => sum + fit.share * (lambda * dot(x, fit.thigh) + dot(x, fit.pelvis)),
@@ -78,7 +79,7 @@ export const courseCurve = (
     );
     const u = Math.hypot(scale * randomSpread(fits, lift, lambda), uS * grown(lift));
     curve.push({
-      lift: degrees(lift),
+      lift,
       turn: degrees(turn),
       low: degrees(turn - 1.96 * u),
       high: degrees(turn + 1.96 * u),

@@ -46,7 +46,7 @@ const returnPast90 = (
   if (sum === 0) return null;
   const to = high.reduce((total, { fMax, share }) => total + (fMax * share) / sum, 0);
   const past = (beta: Parameters<typeof dot>[0]): number =>
-    dot(terms(to), beta) - dot(terms(90), beta);
+    dot(terms(degrees(to)), beta) - dot(terms(degrees(90)), beta);
   const change = high.reduce(
     (total, { fit, share }) =>
       total + ((past(fit.pelvis) + lambda * past(fit.thigh)) * share) / sum,

@@ -46,9 +46,9 @@ export const figuresOf = (
   const above = (x: number): number => studentAbove((x - m) / sM, nu);
   const uPre = Math.sqrt(pooled.uPre ** 2 + u02);
   return {
-    d: degrees(d),
+    d,
     uC: degrees(Math.sqrt(uC2)),
-    uR: degrees(uR),
+    uR,
     uS: degrees(Math.sqrt(uS2)),
     uC0: degrees(uC0),
     nu,
@@ -60,9 +60,9 @@ export const figuresOf = (
     pBefore60: studentAbove((BEFORE_60 - pooled.pre) / uPre, nu),
     pNotBack: above(0),
     mdt90: degrees(CLEAR + (studentQuantile(0.95, nu) + NINE_IN_TEN) * uC0),
-    pelvis: { value: degrees(pooled.dPelvis), u: degrees(pooled.uPelvis) },
-    thigh: { value: degrees(pooled.dThigh), u: degrees(pooled.uThigh) },
-    pre: { value: degrees(pooled.pre), u: degrees(uPre) },
+    pelvis: { value: pooled.dPelvis, u: pooled.uPelvis },
+    thigh: { value: pooled.dThigh, u: pooled.uThigh },
+    pre: { value: pooled.pre, u: degrees(uPre) },
     lambda: thighTurnsLittle ? pooled.lambda : null,
   };
 };

@@ -1,5 +1,6 @@
 import { drawnSpread, type RiseDraws } from '#shared/course/rise-draws.ts';
 import { type Beta, CHANGE, dot, PRE, type RiseFit } from '#shared/course/rise-fit.ts';
+import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 
 const REP = CONSTANTS.repSpread.value;
@@ -10,32 +11,32 @@ export interface FittedRep {
   readonly fit: RiseFit;
   readonly draws: RiseDraws;
   /** Changes 60° → 90° of the turn and its parts, and 30° → 60°, with random uncertainty. */
-  readonly d: number;
-  readonly u: number;
-  readonly dPelvis: number;
-  readonly uPelvis: number;
-  readonly dThigh: number;
-  readonly uThigh: number;
-  readonly pre: number;
-  readonly uPre: number;
+  readonly d: Degrees;
+  readonly u: Degrees;
+  readonly dPelvis: Degrees;
+  readonly uPelvis: Degrees;
+  readonly dThigh: Degrees;
+  readonly uThigh: Degrees;
+  readonly pre: Degrees;
+  readonly uPre: Degrees;
 }
 
 const NOTHING: Beta = [0, 0, 0, 0];
 
 /** Null where the draws carry no spread: marks that coincide. */
 export const fittedRep = (fit: RiseFit, draws: RiseDraws): FittedRep | null => {
-  const spread = (thigh: Beta, pelvis: Beta): number =>
-    fit.sFit * drawnSpread(draws, [...thigh, ...pelvis]);
+  const spread = (thigh: Beta, pelvis: Beta): Degrees =>
+    degrees(fit.sFit * drawnSpread(draws, [...thigh, ...pelvis]));
   const rep: FittedRep = {
     fit,
     draws,
-    d: dot(CHANGE, fit.turn),
+    d: degrees(dot(CHANGE, fit.turn)),
     u: spread(CHANGE, CHANGE),
-    dPelvis: dot(CHANGE, fit.pelvis),
+    dPelvis: degrees(dot(CHANGE, fit.pelvis)),
     uPelvis: spread(NOTHING, CHANGE),
-    dThigh: dot(CHANGE, fit.thigh),
+    dThigh: degrees(dot(CHANGE, fit.thigh)),
     uThigh: spread(CHANGE, NOTHING),
-    pre: dot(PRE, fit.turn),
+    pre: degrees(dot(PRE, fit.turn)),
     uPre: spread(PRE, PRE),
   };
   const { d, u, uPelvis, uThigh, pre, uPre } = rep;
@@ -45,21 +46,21 @@ export const fittedRep = (fit: RiseFit, draws: RiseDraws): FittedRep | null => {
 /** The reps together: random parts only. */
 export interface Pooled {
   readonly shares: readonly number[];
-  readonly d: number;
-  readonly uR: number;
+  readonly d: Degrees;
+  readonly uR: Degrees;
   readonly nuR: number;
-  readonly dPelvis: number;
-  readonly uPelvis: number;
-  readonly dThigh: number;
-  readonly uThigh: number;
-  readonly pre: number;
-  readonly uPre: number;
+  readonly dPelvis: Degrees;
+  readonly uPelvis: Degrees;
+  readonly dThigh: Degrees;
+  readonly uThigh: Degrees;
+  readonly pre: Degrees;
+  readonly uPre: Degrees;
   /** How much of the thigh part counts; 1 without the assumption. */
   readonly lambda: number;
 }
 
 /** Shares ∝ 1/(u² + 1.5²): true turn differs from rep to rep, so none may outweigh all others. */
-export const sharesOf = (uncertainties: readonly number[]): readonly number[] => {
+export const sharesOf = (uncertainties: readonly Degrees[]): readonly number[] => {
   const weights = uncertainties.map((u) => 1 / (u * u + REP * REP));
   const sum = weights.reduce((a, b) => a + b, 0);
   return weights.map((weight) => weight / sum);
@@ -67,8 +68,8 @@ export const sharesOf = (uncertainties: readonly number[]): readonly number[] =>
 
 /** Widens where the reps differ more than their errors explain; never narrows. */
 export const disagreement = (
-  changes: readonly number[],
-  uncertainties: readonly number[],
+  changes: readonly Degrees[],
+  uncertainties: readonly Degrees[],
   shares: readonly number[],
 ): number => {
   const n = changes.length;
@@ -103,15 +104,15 @@ export const pool = (reps: readonly FittedRep[], thighTurnsLittle: boolean): Poo
     : squares((rep) => rep.u);
   return {
     shares,
-    d: dPelvis + lambda * dThigh,
-    uR: Math.sqrt(random * widened),
+    d: degrees(dPelvis + lambda * dThigh),
+    uR: degrees(Math.sqrt(random * widened)),
     nuR: reps.reduce((sum, rep) => sum + rep.fit.nu, 0),
-    dPelvis,
-    uPelvis: Math.sqrt(squares((rep) => rep.uPelvis)),
-    dThigh: lambda * dThigh,
-    uThigh: Math.sqrt(lambda * thighVariance),
-    pre: mean((rep) => rep.pre),
-    uPre: Math.sqrt(squares((rep) => rep.uPre)),
+    dPelvis: degrees(dPelvis),
+    uPelvis: degrees(Math.sqrt(squares((rep) => rep.uPelvis))),
+    dThigh: degrees(lambda * dThigh),
+    uThigh: degrees(Math.sqrt(lambda * thighVariance)),
+    pre: degrees(mean((rep) => rep.pre)),
+    uPre: degrees(Math.sqrt(squares((rep) => rep.uPre))),
     lambda,
   };
 };

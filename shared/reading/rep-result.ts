@@ -1,7 +1,7 @@
 import type { RepCourse } from '#shared/course/course-of-rep.ts';
 import { substitutionsOf } from '#shared/course/substitutions.ts';
 import type { CourseFrame } from '#shared/course/types.ts';
-import { degrees } from '#shared/geometry/units.ts';
+import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { liftHalfWidth } from '#shared/measures/lift.ts';
 import type { Assessed } from './assess.ts';
 import { courseCurve, type DrawnFit } from './band.ts';
@@ -21,10 +21,10 @@ export const drawnFit = ({ data, fitted }: UsedRep, share: number): DrawnFit => 
   sFit: fitted.fit.sFit,
   draws: fitted.draws,
   share,
-  lifts: [...data.lifts],
+  lifts: Array.from(data.lifts, degrees),
 });
 
-const change = (value: number, u: number): Change => ({ value: degrees(value), u: degrees(u) });
+const change = (value: Degrees, u: Degrees): Change => ({ value, u });
 
 const repFit = ({ fitted }: UsedRep, share: number): RepFit => ({
   beta: fitted.fit.turn,
@@ -43,7 +43,7 @@ const withHalfWidths = (course: RepCourse): readonly CourseFrame[] =>
     const marks = course.level[i];
     return frame.lift === null || !marks
       ? frame
-      : { ...frame, liftHalfWidth: degrees(liftHalfWidth(marks, course.setting)) };
+      : { ...frame, liftHalfWidth: liftHalfWidth(marks, course.setting) };
   });
 
 export const repResult = (
@@ -73,9 +73,11 @@ export const repResult = (
     curve: alone
       ? courseCurve([drawnFit(used, 1)], {
           uR: used.fitted.u,
-          uS: Math.sqrt(
-            systematicVariance(standing.systematic, 1) +
-              (standing.systematic.q * used.fitted.d) ** 2,
+          uS: degrees(
+            Math.sqrt(
+              systematicVariance(standing.systematic, 1) +
+                (standing.systematic.q * used.fitted.d) ** 2,
+            ),
           ),
           lambda: 1,
         })

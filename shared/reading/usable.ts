@@ -1,6 +1,6 @@
 import type { RepCourse } from '#shared/course/course-of-rep.ts';
 import type { CourseFrame, RepInput } from '#shared/course/types.ts';
-import { degrees } from '#shared/geometry/units.ts';
+import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { landmarksOf } from '#shared/landmarks/table.ts';
 import type { LandmarkId, LandmarkSetId, Side } from '#shared/landmarks/types.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
@@ -24,7 +24,7 @@ export const LEAST_FRAMES: readonly Least[] = [
   { code: 'few-in-rise', need: 7, from: CONSTANTS.leastLift.value, to: null },
 ];
 
-export const inBand = (lift: number, { from, to }: Pick<Least, 'from' | 'to'>): boolean =>
+export const inBand = (lift: Degrees, { from, to }: Pick<Least, 'from' | 'to'>): boolean =>
   lift >= from && (to === null || lift <= to);
 
 const notFinite = (rep: RepInput): readonly LandmarkId[] => {
@@ -56,7 +56,7 @@ export const faultsOfInput = (rep: RepInput, side: Side): readonly RepFault[] =>
 };
 
 /** Lifts of the rise frames that carry a turn. */
-const turnedLifts = (frames: readonly CourseFrame[]): readonly number[] =>
+const turnedLifts = (frames: readonly CourseFrame[]): readonly Degrees[] =>
   frames.flatMap(({ phase, lift, turn }) =>
     phase === 'rise' && lift !== null && turn !== null ? [lift] : [],
   );
