@@ -1,0 +1,59 @@
+import { guardLeaving } from '#src/api/leaving.ts';
+import { inWords, capital } from '#src/ui/figures.ts';
+import { createMarkQueue, type MarkQueue, type Settled } from './mark-queue.ts';
+import { newId } from './new-id.ts';
+import { countOf } from './queue-core.ts';
+import { browserStorage, memoryStorage } from './queue-storage.ts';
+import { sendMarks } from './send-marks.ts';
+
+const queues = new Map<string, MarkQueue>();
+/** Only the marks of the person who is signed in now are asked about at sign-out. */
+let current: string | null = null;
+
+/** Locks want https or this machine; without them a single tab is the rule. */
+const alone = (name: string) => async (work: () => Promise<void>) => {
+  if ('locks' in navigator) await navigator.locks.request(name, work);
+  else await work();
+};
+
+/**
+ * The queue of one person in this browser. It belongs to the person, not to the session: it outlives
+ * an expired sign-in and a reload, and is sent by one tab at a time.
+ */
+export const markQueueOf = (userId: string): MarkQueue => {
+  current = userId;
+  const known = queues.get(userId);
+  if (known) return known;
+  const name = `redshank-marks-${userId}`;
+  const channel = 'BroadcastChannel' in window ? new BroadcastChannel(name) : null;
+  const queue = createMarkQueue({
+    storage: 'indexedDB' in window ? browserStorage(userId) : memoryStorage(),
+    send: sendMarks,
+    alone: alone(name),
+    tellTabs: (settled) => channel?.postMessage(settled),
+    newId,
+    later(work, ms) {
+      const timer = setTimeout(work, ms);
+      return () => clearTimeout(timer);
+    },
+  });
+  queues.set(userId, queue);
+  channel?.addEventListener('message', (event: MessageEvent<Settled | null>) => {
+    void queue.heard(event.data);
+  });
+  window.addEventListener('online', () => void queue.drain());
+  document.addEventListener('visibilitychange', () => {
+    if (document.visibilityState === 'visible') void queue.drain();
+  });
+  guardLeaving(() => Promise.resolve(current === userId ? sentence(queue) : null));
+  void queue.drain();
+  return queue;
+};
+
+const sentence = (queue: MarkQueue): string | null => {
+  const { waiting, disputed } = countOf(queue.snapshot().marks);
+  const count = waiting + disputed;
+  if (count === 0) return null;
+  const marks = count === 1 ? 'mark is' : 'marks are';
+  return `${capital(inWords(count))} ${marks} not sent yet. They stay on this device and are sent when you sign in here again.`;
+};
