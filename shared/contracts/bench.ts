@@ -11,7 +11,7 @@ export const benchDocument = z
   .object({
     clip: clipWithFrames,
     visit: z.object({ id, day: z.iso.date() }),
-    athlete: personRef,
+    athlete: personRef.extend({ heightMm: z.number().nullable() }),
     reps: z.array(z.object({ rep, marks: z.array(mark) })),
     comments: z.array(comment),
     /** Figures of a side are shown only where it has a call. */

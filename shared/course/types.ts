@@ -27,6 +27,7 @@ export const EXCLUSION_REASONS = [
   'lost-balance',
   'pain',
   'another-drill',
+  'other',
 ] as const;
 export type ExclusionReason = (typeof EXCLUSION_REASONS)[number];
 
