@@ -5,6 +5,7 @@ import type { Route } from '#shared/contracts/route.ts';
 import type { InPractice, Unit } from '../db/in-practice.ts';
 import { checkAnswer } from './check-answer.ts';
 import { parseParams, parseParts } from './parse.ts';
+import { Problem } from './problem.ts';
 import type { OpenSession } from './session.ts';
 import { staffOf } from './session.ts';
 
@@ -63,7 +64,7 @@ export const makeServe =
     const steps: RequestHandler[] = [];
     if (route.audience === 'staff') steps.push(whoIs);
     if (route.body && !route.multipart)
-      steps.push(express.json({ limit: BODY_LIMIT[route.audience] }));
+      steps.push(jsonOnly, express.json({ limit: BODY_LIMIT[route.audience] }));
     steps.push(...before, async (req, res) => {
       const params = parseParams(route.params, req.params);
       const [query, body] = parseParts([
@@ -85,6 +86,13 @@ export const makeServe =
     });
     router[route.method](route.path, ...steps);
   };
+
+/** No body at all is a fault of fields, not of content. */
+const jsonOnly: RequestHandler = (req, _res, next) => {
+  const hasBody = 'transfer-encoding' in req.headers || Number(req.headers['content-length']) > 0;
+  if (hasBody && !req.is('json')) throw new Problem('unsupported-media-type', 'Send JSON.');
+  next();
+};
 
 const staffPart = (res: Response, inPractice: InPractice): StaffPart => {
   const session = staffOf(res);

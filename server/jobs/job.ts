@@ -31,6 +31,8 @@ export interface JobHandler<P> {
   readonly expireInMinutes: number;
   /** How often it is tried again after an error; a clip that is refused is not an error. */
   readonly retryLimit: number;
+  /** Before the first further try; later ones wait longer. 5 where left out. */
+  readonly retryDelaySeconds?: number;
   /**
    * What should be in work by the rows' own state, asked at the start of a worker. What nobody holds the lock of
    * is queued anew: its worker was killed. The query runs as `redshank_jobs`.
@@ -46,6 +48,7 @@ export interface AnyJobHandler {
   readonly queue: string;
   readonly expireInMinutes: number;
   readonly retryLimit: number;
+  readonly retryDelaySeconds: number;
   readonly lockKey: (payload: unknown) => string;
   readonly run: (context: JobContext<unknown>) => Promise<void>;
   readonly unfinished?: {
@@ -61,6 +64,7 @@ export const handles = <P>(handler: JobHandler<P>): AnyJobHandler => {
     queue: handler.type.queue,
     expireInMinutes: handler.expireInMinutes,
     retryLimit: handler.retryLimit,
+    retryDelaySeconds: handler.retryDelaySeconds ?? 5,
     lockKey: (payload) => `${handler.type.queue} ${handler.lockKey(parse(payload))}`,
     run: (context) => handler.run({ ...context, payload: parse(context.payload) }),
     ...(handler.unfinished ? { unfinished: handler.unfinished } : {}),

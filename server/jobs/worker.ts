@@ -51,7 +51,7 @@ export const startWorker = async (
       name: handler.queue,
       policy: 'standard',
       retryLimit: handler.retryLimit,
-      retryDelay: 5,
+      retryDelay: handler.retryDelaySeconds,
       retryBackoff: true,
       expireInMinutes: handler.expireInMinutes,
     });
