@@ -58,9 +58,12 @@ export const picturesJob = (
  * frame, so that its last state holds the wanted ones.
  */
 const pictureChains = ({ poster, strip }: Pick<CopyPlan, 'poster' | 'strip'>): string[] => [
-  chain('[p]', [pick([0, poster.frame]), scale(poster), 'setsar=1[poster]']),
-  chain('[s]', [pick([0, ...strip.frames]), scale(strip.tile), row(strip.frames.length)]),
+  chain('[p]', [pick([0, poster.frame]), scale(poster), 'setsar=1', `${apart}[poster]`]),
+  chain('[s]', [pick([0, ...strip.frames]), scale(strip.tile), apart, row(strip.frames.length)]),
 ];
+
+/** A second apart, or uneven frames would fall on one tick of the picture encoder's clock. */
+const apart = 'settb=1/1,setpts=N';
 
 const row = (tiles: number) =>
   tiles === 1

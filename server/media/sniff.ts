@@ -37,7 +37,7 @@ const magic: readonly (readonly [RegExp, Found])[] = [
     /^(\xef\xbb\xbf)?\s*(ffconcat version|file\s+('[^']+'|\S+)\s*(\n|$))/,
     { kind: 'playlist', found: 'concat' },
   ],
-  [/^(\xef\xbb\xbf)?\s*v=0\r?\n[^]*?[\n](o|s|c|m)=/, { kind: 'playlist', found: 'SDP' }],
+  [/^(\xef\xbb\xbf)?\s*v=0\r?\n[osc]=/, { kind: 'playlist', found: 'SDP' }],
   [/^\s*\[playlist\]/i, { kind: 'playlist', found: 'PLS' }],
   [/^RIFF[^]{4}AVI /, { kind: 'foreign', found: 'an AVI file' }],
   [/^FLV\x01/, { kind: 'foreign', found: 'a Flash video' }],
