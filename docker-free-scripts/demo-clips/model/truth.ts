@@ -1,5 +1,5 @@
 import type { TruthFile } from '#tests/fixtures/clips/truth.ts';
-import { bodyOf, ROD_MM } from '../clips.ts';
+import { bodyOf, type ClipPlan, ROD_MM } from '../clips.ts';
 import { type Angles, anglesOf } from './angles.ts';
 import { type Camera, intoRoom, makeCamera, PICTURE } from './camera.ts';
 import { FRONT_LANDMARKS, type LandmarkId, landmarksOf, SIDE_LANDMARKS } from './landmarks.ts';
@@ -7,8 +7,8 @@ import { type FrameFacts, phaseOf, repTruth } from './rep-truth.ts';
 import type { Take } from './take.ts';
 import type { Vec } from './vec.ts';
 
-/** The rod stands beside the person, in the plane of the ankles, on the lifted side's far end. */
-export const ROD_Y = 620;
+/** The rod stands beside the person in the plane of the ankles, across from the chair. */
+export const rodY = (clip: ClipPlan): number => (clip.script.reps[0] === 'left' ? -600 : 600);
 
 const round = (value: number, digits: number): number => Number(value.toFixed(digits));
 
@@ -58,7 +58,7 @@ export const clipTruth = (take: Take, hidden: TruthFile['frames']['hidden'] = {}
   const column = (name: keyof Angles): number[] =>
     frames.map((frame) => round(frame.angles[name], 3));
   const rodEnd = (z: number): [number, number] => {
-    const [u, v] = camera.project([0, ROD_Y, z] satisfies Vec);
+    const [u, v] = camera.project([0, rodY(clip), z] satisfies Vec);
     return [round(u, 2), round(v, 2)];
   };
   return {

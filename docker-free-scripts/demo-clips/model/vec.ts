@@ -17,7 +17,7 @@ export const add = (a: Vec, b: Vec): Vec => [a[0] + b[0], a[1] + b[1], a[2] + b[
 export const sub = (a: Vec, b: Vec): Vec => [a[0] - b[0], a[1] - b[1], a[2] - b[2]];
 export const scale = (a: Vec, s: number): Vec => [a[0] * s, a[1] * s, a[2] * s];
 export const dot = (a: Vec, b: Vec): number => a[0] * b[0] + a[1] * b[1] + a[2] * b[2];
-export const length = (a: Vec): number => Math.hypot(a[0], a[1], a[2]);
+export const length = (a: Vec): number => Math.sqrt(dot(a, a));
 export const unit = (a: Vec): Vec => scale(a, 1 / length(a));
 export const mix = (a: Vec, b: Vec, t: number): Vec => add(scale(a, 1 - t), scale(b, t));
 
