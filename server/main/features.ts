@@ -1,7 +1,23 @@
 import { eventsFeature } from '../events/events.routes.ts';
 import { accountsFeature } from '../features/accounts/accounts.routes.ts';
+import { athletesFeature } from '../features/athletes/athletes.routes.ts';
+import { benchFeature } from '../features/bench/bench.routes.ts';
+import { callsFeature } from '../features/calls/calls.routes.ts';
+import { commentsFeature } from '../features/comments/comments.routes.ts';
+import { repsFeature } from '../features/reps/reps.routes.ts';
 import { systemFeature } from '../features/system/system.routes.ts';
+import { visitsFeature } from '../features/visits/visits.routes.ts';
 import type { Feature } from './feature.ts';
 
 /** Every feature that is served. */
-export const features: readonly Feature[] = [systemFeature, accountsFeature, eventsFeature];
+export const features: readonly Feature[] = [
+  systemFeature,
+  accountsFeature,
+  athletesFeature,
+  visitsFeature,
+  callsFeature,
+  repsFeature,
+  commentsFeature,
+  benchFeature,
+  eventsFeature,
+];

@@ -2,7 +2,7 @@ import * as z from 'zod';
 import { call } from './calls.ts';
 import { clipWithFrames } from './clips.ts';
 import { comment } from './comments.ts';
-import { id, personRef, side } from './primitives.ts';
+import { frameIndex, id, personRef, side } from './primitives.ts';
 import { mark, rep } from './reps.ts';
 import { json, route } from './route.ts';
 
@@ -24,7 +24,8 @@ export const benchDocument = z
         clip: clipWithFrames.omit({ frames: true }),
         rep,
         marks: z.array(mark),
-        milliseconds: z.array(z.number()),
+        /** When each marked frame is shown, milliseconds from the clip's first. */
+        times: z.array(z.object({ frame: frameIndex, milliseconds: z.number() })),
       }),
     ),
     may: z.object({ mark: z.boolean(), comment: z.boolean() }),

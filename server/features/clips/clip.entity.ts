@@ -7,7 +7,7 @@ import {
   type FrameTable,
 } from '#shared/contracts/clips.ts';
 import { cameraStood, side, view } from '#shared/contracts/primitives.ts';
-import { madeAt, ownedRow } from '#server/db/columns.ts';
+import { madeAt, ownedRow, real } from '#server/db/columns.ts';
 import type { ClipFacts, Part, Timestamp } from '#server/media/types.ts';
 import { User } from '../accounts/user.entity.ts';
 import { Visit } from '../visits/visit.entity.ts';
@@ -53,7 +53,7 @@ export const Clip = defineEntity({
     /** Upright source frame, px. */
     width: p.integer().nullable(),
     height: p.integer().nullable(),
-    durationSeconds: p.double().nullable(),
+    durationSeconds: real().$type<number>().nullable(),
     frameRate: p.json<NonNullable<ClipShape['frameRate']>>().nullable(),
     frameCount: p.integer().nullable(),
     /** Every frame's exact time: thousands of numbers, so loaded only where asked for. */
@@ -69,8 +69,8 @@ export const Clip = defineEntity({
     acceptRemains: p.boolean().default(false),
     geometry: p.json<ClipGeometry>(),
     /** 0–100 while preparing. */
-    progress: p.double().nullable(),
-    secondsLeft: p.double().nullable(),
+    progress: real().$type<number>().nullable(),
+    secondsLeft: real().$type<number>().nullable(),
     uploadedBy: p.manyToOne(User).ref(),
     uploadedAt: madeAt(),
     version: p.integer().version(),

@@ -1,5 +1,5 @@
 import { defineEntity, p } from '@mikro-orm/core';
-import { moment, ownPractice } from '#server/db/columns.ts';
+import { moment, ownPractice, real } from '#server/db/columns.ts';
 
 /**
  * One landmark on one frame of one rep. Read and written in bulk by raw SQL; this is its shape.
@@ -15,12 +15,12 @@ export const Mark = defineEntity({
     present: p.boolean(),
     hidden: p.boolean(),
     /** Pixels of the upright source frame; null where hidden or removed. */
-    u: p.double().nullable(),
-    v: p.double().nullable(),
+    u: real().nullable(),
+    v: real().nullable(),
     source: p.enum(['hand', 'tracked']),
     looked: p.boolean(),
     /** 0–1 for a tracked mark. */
-    confidence: p.double().nullable(),
+    confidence: real().nullable(),
     /** Long edge, px, of the picture on which it was placed; 0 where it was never placed. */
     pictureLongEdge: p.integer(),
     revision: p.integer(),

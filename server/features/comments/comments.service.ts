@@ -1,0 +1,123 @@
+import type * as z from 'zod';
+import type { Action } from '#shared/access/actions.ts';
+import type { UserActor } from '#shared/access/actors.ts';
+import type { commentBody, commentEdit } from '#shared/contracts/comments.ts';
+import type { Unit } from '#server/db/in-practice.ts';
+import { tell } from '../../events/tell.ts';
+import { found, need } from '../../http/need.ts';
+import { Problem } from '../../http/problem.ts';
+import { User } from '../accounts/user.entity.ts';
+import type { Athlete } from '../athletes/athlete.entity.ts';
+import { clipInSight, needFrames } from '../clips/clip-in-sight.ts';
+import { Comment } from './comment.entity.ts';
+import { COMMENT_ORDER } from './comments.presenter.ts';
+
+type Of = Unit<UserActor>;
+
+const tellComments = ({ em, actor }: Of, athlete: Athlete, clipId: string) =>
+  tell(
+    { em, actor },
+    { coachId: athlete.coach.id },
+    {
+      type: 'comments',
+      clipId,
+      byUserId: actor.id,
+    },
+  );
+
+/** The comments of a clip, by moment. */
+export const commentsOfClip = async (unit: Of, clipId: string): Promise<Comment[]> => {
+  await clipInSight(unit, clipId, 'athlete.read');
+  return (await unit.em.find(
+    Comment,
+    { clip: clipId },
+    { populate: ['by', 'resolvedBy'], orderBy: COMMENT_ORDER },
+  )) as Comment[];
+};
+
+/** Comments at a frame or a span; an answer stands where the comment it answers stands. */
+export const addComment = async (
+  unit: Of,
+  clipId: string,
+  body: z.output<typeof commentBody>,
+): Promise<Comment> => {
+  const { em, actor } = unit;
+  const { clip, athlete } = await clipInSight(unit, clipId, 'comment.add');
+  const answered = body.answerTo
+    ? found(await em.findOne(Comment, { id: body.answerTo, clip: clipId }))
+    : null;
+  const place = answered ?? body;
+  needFrames(clip, place.fromFrame, place.toFrame);
+  const comment = em.create(Comment, {
+    clip,
+    // an answer to an answer joins the same thread
+    answerTo: answered ? (answered.answerTo ?? answered.id) : null,
+    body: body.body,
+    fromFrame: place.fromFrame,
+    toFrame: place.toFrame,
+    shape: body.shape,
+    shared: body.shared,
+    by: em.getReference(User, actor.id),
+  });
+  await em.flush();
+  await em.populate(comment, ['by']);
+  await tellComments(unit, athlete, clipId);
+  return comment as Comment;
+};
+
+const commentInSight = async (
+  { em, actor }: Of,
+  id: string,
+  action: Action,
+): Promise<{ comment: Comment; athlete: Athlete }> => {
+  const comment = found(
+    await em.findOne(Comment, { id }, { populate: ['clip.visit.athlete', 'by', 'resolvedBy'] }),
+  );
+  const athlete = comment.clip.unwrap().visit.unwrap().athlete.unwrap() as Athlete;
+  need(actor, action, {
+    kind: 'comment',
+    practiceId: comment.practiceId,
+    coachId: athlete.coach.id,
+    byUserId: comment.by.id,
+  });
+  return { comment: comment as Comment, athlete };
+};
+
+/** Changes one's own words or their sharing; resolving is open to all who may read. */
+export const editComment = async (
+  unit: Of,
+  id: string,
+  { body, shared, resolved }: z.output<typeof commentEdit>,
+): Promise<Comment> => {
+  const { em, actor } = unit;
+  const words = body !== undefined || shared !== undefined;
+  const { comment, athlete } = await commentInSight(
+    unit,
+    id,
+    words ? 'comment.edit' : 'comment.resolve',
+  );
+  if (body !== undefined && body !== comment.body) {
+    comment.body = body;
+    comment.editedAt = new Date();
+  }
+  if (shared !== undefined) comment.shared = shared;
+  if (resolved !== undefined && resolved !== Boolean(comment.resolvedAt)) {
+    comment.resolvedBy = resolved ? em.getReference(User, actor.id, { wrapped: true }) : null;
+    comment.resolvedAt = resolved ? new Date() : null;
+  }
+  await em.flush();
+  await em.populate(comment, ['resolvedBy']);
+  await tellComments(unit, athlete, comment.clip.id);
+  return comment;
+};
+
+/** Takes back one's own comment, as long as nobody has answered it. */
+export const deleteComment = async (unit: Of, id: string): Promise<void> => {
+  const { comment, athlete } = await commentInSight(unit, id, 'comment.delete');
+  const answers = await unit.em.count(Comment, { answerTo: id });
+  if (answers > 0)
+    throw new Problem('not-allowed', 'Somebody has answered this comment: resolve it instead.');
+  unit.em.remove(comment);
+  await unit.em.flush();
+  await tellComments(unit, athlete, comment.clip.id);
+};
