@@ -5,12 +5,12 @@ import { framePoint } from '#shared/geometry/points.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import type { MarkValue } from '#shared/landmarks/commands.ts';
 import { frameIndex, type FrameIndex, milliseconds } from '#shared/timing/units.ts';
-import { engineMarks, timesOf } from './engine-input.ts';
+import { engineMarks, timesOf } from '#shared/records/engine-input.ts';
 import { expectedPlace } from './expected-place.ts';
 import { firstFrame } from './first-frames.ts';
 import { frameAtLift, hillOf, liftAt } from './hill.ts';
 import { isDone, ledLandmarks, nextLandmark, proposedSet, tallyOf } from './led.ts';
-import { markedFrames, marksWith } from './marks.ts';
+import { markedFrames, marksWith } from '#shared/records/stored-marks.ts';
 
 const at = (u: number, v: number, over: Partial<MarkValue> = {}): MarkValue => ({
   to: 'point',
@@ -176,7 +176,7 @@ describe('what to mark first', () => {
   it('five quiet frames over the first second', () => {
     expect(suggest([])).toEqual({ frame: 0, why: 'quiet' });
     const three = [0, 13, 25].map((n) => courseFrame(n, null, 'quiet'));
-    expect(suggest(three)).toEqual({ frame: 38, why: 'quiet' });
+    expect(suggest(three)).toEqual({ frame: 37, why: 'quiet' });
   });
 
   const quiet = [0, 12, 25, 37, 50].map((n) => courseFrame(n, null, 'quiet'));

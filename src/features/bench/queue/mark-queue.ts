@@ -25,6 +25,8 @@ export interface Settled {
   readonly repId: string;
   readonly outcomes: readonly MarkOutcome[];
   readonly rep: Rep;
+  /** By command, the mark it was about: an answer may say that nothing is stored. */
+  readonly touched: ReadonlyMap<string, Pick<Mark, 'frame' | 'landmark'>>;
 }
 
 /** How a sending failed: later again, after a sign-in, or never, for this reason. */
@@ -127,7 +129,8 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
       if ('outcomes' in answer) {
         wait = FIRST_WAIT_MS;
         const ids = answer.outcomes.map(newId);
-        const settled = { clipId: first.clipId, repId: first.repId, ...answer };
+        const touched = new Map(batch.map((each) => [each.id, each]));
+        const settled = { clipId: first.clipId, repId: first.repId, touched, ...answer };
         // the page first learns what is stored, then what no longer waits: nothing flickers
         tell(settled);
         await change((queue) => {

@@ -45,7 +45,13 @@ export const markQueueOf = (userId: string): MarkQueue => {
   document.addEventListener('visibilitychange', () => {
     if (document.visibilityState === 'visible') void queue.drain();
   });
-  guardLeaving(() => Promise.resolve(current === userId ? sentence(queue) : null));
+  guardLeaving({
+    wouldLose: () => Promise.resolve(current === userId ? sentence(queue) : null),
+    // asked for and agreed to: nothing of this person may be left on a shared device
+    discard: () => {
+      if (current === userId) void queue.letGo(queue.snapshot().marks.map((each) => each.id));
+    },
+  });
   void queue.drain();
   return queue;
 };
@@ -55,5 +61,5 @@ const sentence = (queue: MarkQueue): string | null => {
   const count = waiting + disputed;
   if (count === 0) return null;
   const marks = count === 1 ? 'mark is' : 'marks are';
-  return `${capital(inWords(count))} ${marks} not sent yet. They stay on this device and are sent when you sign in here again.`;
+  return `${capital(inWords(count))} ${marks} not sent yet. Signing out takes them off this device.`;
 };

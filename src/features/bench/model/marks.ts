@@ -1,1 +1,0 @@
-export * from '#shared/records/stored-marks.ts';

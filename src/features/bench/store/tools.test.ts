@@ -1,0 +1,44 @@
+import { describe, expect, it } from 'vitest';
+import { framePoint } from '#shared/geometry/points.ts';
+import { draftShape, shapeOf, toolAsks, withPoint } from './tools.ts';
+
+describe('a line on the picture', () => {
+  it('asks for one end, then the other, then for nothing', () => {
+    const start = { kind: 'line', of: 'rod', points: [] } as const;
+    expect(toolAsks(start)).toBe('One end of the rod');
+    const one = withPoint({ ...start, points: [] as const }, framePoint(1, 2));
+    expect(toolAsks(one)).toBe('The other end of the rod');
+    const two = withPoint(one, framePoint(1, 90));
+    expect(toolAsks(two)).toBeNull();
+    expect(two.points).toEqual([framePoint(1, 2), framePoint(1, 90)]);
+  });
+
+  it('a further press begins anew', () => {
+    const full = {
+      kind: 'line' as const,
+      of: 'plumb' as const,
+      points: [framePoint(1, 2), framePoint(1, 90)],
+    };
+    expect(withPoint(full, framePoint(5, 5)).points).toEqual([framePoint(5, 5)]);
+  });
+});
+
+describe('what a comment points at', () => {
+  it('a point is whole at once', () => {
+    const tool = { kind: 'shape' as const, of: 'point' as const, points: [framePoint(3, 4)] };
+    expect(shapeOf(tool)).toEqual({ kind: 'point', u: 3, v: 4 });
+  });
+
+  it('a ring needs its edge, and is never too small to see', () => {
+    const ring = { kind: 'shape' as const, of: 'ring' as const, points: [framePoint(0, 0)] };
+    expect(shapeOf(ring)).toBeNull();
+    expect(draftShape(ring)).toEqual({ kind: 'point', u: 0, v: 0 });
+    expect(shapeOf(withPoint(ring, framePoint(30, 40)))).toEqual({
+      kind: 'ring',
+      u: 0,
+      v: 0,
+      radius: 50,
+    });
+    expect(shapeOf(withPoint(ring, framePoint(1, 0)))).toMatchObject({ radius: 6 });
+  });
+});

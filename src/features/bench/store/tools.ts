@@ -1,0 +1,72 @@
+import { distance, type FramePoint } from '#shared/geometry/points.ts';
+import type { Scale } from '#shared/contracts/clips.ts';
+import type { Shape } from '#shared/contracts/comments.ts';
+import type { NoteShape } from '#shared/overlay/notes.ts';
+
+/** What a press on the picture does. */
+export type Tool =
+  /** Places the landmark that is asked for. */
+  | { readonly kind: 'mark' }
+  /** Moves the picture; nothing is placed. */
+  | { readonly kind: 'look' }
+  /** Two points on a thing of known length, or on a plumb line. */
+  | { readonly kind: 'line'; readonly of: LineOf; readonly points: readonly FramePoint[] }
+  /** What a comment points at: a point, or a ring by its middle and its edge. */
+  | {
+      readonly kind: 'shape';
+      readonly of: 'point' | 'ring';
+      readonly points: readonly FramePoint[];
+    };
+export type LineOf = Extract<Scale['from'], 'rod' | 'body-height'> | 'plumb';
+
+export const MARK: Tool = { kind: 'mark' };
+export const LOOK: Tool = { kind: 'look' };
+
+/** What the tool still wants, in words; null where it wants nothing. */
+export const toolAsks = (tool: Tool): string | null => {
+  if (tool.kind === 'line') {
+    if (tool.points.length >= 2) return null;
+    const first = tool.points.length === 0;
+    if (tool.of === 'rod') return first ? 'One end of the rod' : 'The other end of the rod';
+    if (tool.of === 'body-height')
+      return first ? 'The crown of the head' : 'The floor at the heels';
+    return first ? 'The upper end of the plumb line' : 'The lower end of the plumb line';
+  }
+  if (tool.kind === 'shape') {
+    if (tool.of === 'point') return tool.points.length === 0 ? 'What you mean' : null;
+    if (tool.points.length >= 2) return null;
+    return tool.points.length === 0 ? 'The middle of the ring' : 'The edge of the ring';
+  }
+  return null;
+};
+
+/** The tool with one more point; a full one begins anew. */
+export const withPoint = <T extends Extract<Tool, { points: readonly FramePoint[] }>>(
+  tool: T,
+  point: FramePoint,
+): T => {
+  const full = toolAsks(tool) === null;
+  return { ...tool, points: full ? [point] : [...tool.points, point] };
+};
+
+/** A ring is never smaller than this, source px: a touch cannot draw less. */
+const LEAST_RADIUS = 6;
+
+/** The shape drawn so far; null until it is whole. */
+export const shapeOf = (tool: Tool): Shape | null => {
+  if (tool.kind !== 'shape') return null;
+  const [middle, edge] = tool.points;
+  if (!middle) return null;
+  if (tool.of === 'point') return { kind: 'point', u: middle.u, v: middle.v };
+  if (!edge) return null;
+  const radius = Math.min(5000, Math.max(LEAST_RADIUS, distance(middle, edge)));
+  return { kind: 'ring', u: middle.u, v: middle.v, radius };
+};
+
+/** What is drawn while the tool is in use: the whole shape, or its first point. */
+export const draftShape = (tool: Tool): NoteShape | null => {
+  const whole = shapeOf(tool);
+  if (whole) return whole;
+  const first = tool.kind === 'shape' ? tool.points[0] : undefined;
+  return first ? { kind: 'point', u: first.u, v: first.v } : null;
+};
