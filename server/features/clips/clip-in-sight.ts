@@ -32,7 +32,7 @@ export const clipInSight = async (
   );
   const athlete = clip.visit.unwrap().athlete.unwrap() as Athlete;
   needCaseload(actor, action, athlete);
-  return { clip: clip as Clip, athlete };
+  return { clip: clip, athlete };
 };
 
 /**

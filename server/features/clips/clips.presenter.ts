@@ -27,7 +27,7 @@ export const presentClip = (clip: Clip, repCount: number): ClipShape => ({
   geometry: clip.geometry,
   mmPerPx: mmPerPxOf(clip.geometry.scale),
   repCount,
-  uploadedBy: presentPerson(clip.uploadedBy.unwrap() as User),
+  uploadedBy: presentPerson(clip.uploadedBy.unwrap()),
   uploadedAt: clip.uploadedAt.toISOString(),
   version: clip.version,
 });

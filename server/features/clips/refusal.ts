@@ -9,6 +9,6 @@ export const presentRefusal = (
   figures: Record<string, string | number> | null,
 ): ClipWithFrames['refusal'] => {
   if (code === null || !isCode(code)) return null;
-  const refusal = new MediaRefusal(code, (figures ?? {}) as never);
+  const refusal = new MediaRefusal(code, figures ?? {});
   return { code, sentence: refusal.sentence, usablePartSeconds: refusal.usableSeconds };
 };

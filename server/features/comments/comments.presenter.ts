@@ -16,13 +16,13 @@ export const presentComment = (comment: Comment, readerId: string): CommentShape
   toFrame: comment.toFrame,
   shape: comment.shape ?? null,
   shared: comment.shared,
-  by: presentPerson(comment.by.unwrap() as User),
+  by: presentPerson(comment.by.unwrap()),
   at: comment.at.toISOString(),
   editedAt: comment.editedAt?.toISOString() ?? null,
   resolved:
     comment.resolvedBy && comment.resolvedAt
       ? {
-          by: presentPerson(comment.resolvedBy.unwrap() as User),
+          by: presentPerson(comment.resolvedBy.unwrap()),
           at: comment.resolvedAt.toISOString(),
         }
       : null,

@@ -28,11 +28,11 @@ const tellComments = ({ em, actor }: Of, athlete: Athlete, clipId: string) =>
 /** The comments of a clip, by moment. */
 export const commentsOfClip = async (unit: Of, clipId: string): Promise<Comment[]> => {
   await clipInSight(unit, clipId, 'athlete.read');
-  return (await unit.em.find(
+  return await unit.em.find(
     Comment,
     { clip: clipId },
     { populate: ['by', 'resolvedBy'], orderBy: COMMENT_ORDER },
-  )) as Comment[];
+  );
 };
 
 /** Comments at a frame or a span; an answer stands where the comment it answers stands. */
@@ -62,7 +62,7 @@ export const addComment = async (
   await em.flush();
   await em.populate(comment, ['by']);
   await tellComments(unit, athlete, clipId);
-  return comment as Comment;
+  return comment;
 };
 
 const commentInSight = async (
@@ -80,7 +80,7 @@ const commentInSight = async (
     coachId: athlete.coach.id,
     byUserId: comment.by.id,
   });
-  return { comment: comment as Comment, athlete };
+  return { comment: comment, athlete };
 };
 
 /** Changes one's own words or their sharing; resolving is open to all who may read. */
