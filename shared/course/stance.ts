@@ -24,6 +24,12 @@ const ankleGap = ({ marks }: LevelFrame): number | null => {
   return lifted && support ? lifted.v - support.v : null;
 };
 
+/** Random error of that gap, px, from the first frame that carries it. */
+const gapError = (frames: readonly LevelFrame[]): number => {
+  const first = frames.find((frame) => ankleGap(frame) !== null)?.marks;
+  return Math.hypot(first?.['ankle-lifted']?.error ?? 0, first?.['ankle-support']?.error ?? 0);
+};
+
 const pelvisU = ({ marks }: LevelFrame): number | null => {
   const { 'asis-support': support, 'asis-lifted': lifted } = marks;
   return lifted && support ? (lifted.u + support.u) / 2 : null;
@@ -82,12 +88,15 @@ export const findStance = (
 ): Stance => {
   const standing = shared ?? frames;
   const gaps = firstValues(standing, ankleGap);
-  const base = gaps.length >= LEAST_BASELINE ? median(gaps) : null;
+  const unrest = mmPerPx * (robustSpread(gaps) ?? 0);
+  const calm = Math.max(CONSTANTS.still.value, 3 * mmPerPx * gapError(standing));
+  // a clip that begins in the middle of a lift has no stance to measure heights from
+  const base = gaps.length >= LEAST_BASELINE && unrest <= calm ? median(gaps) : null;
   const height = (frame: LevelFrame): number | null => {
     const gap = ankleGap(frame);
     return gap === null || base === null ? null : mmPerPx * (base - gap);
   };
-  const spread = Math.max(LEAST_SPREAD_MM, mmPerPx * (robustSpread(gaps) ?? 0));
+  const spread = Math.max(LEAST_SPREAD_MM, unrest);
   const threshold = Math.max(CONSTANTS.footOff.value, 4 * spread);
   const still = Math.max(CONSTANTS.still.value, 3 * spread);
   const heights = frames.map(height);

@@ -97,7 +97,8 @@ export const madeMarks = (side: Side, pose: Pose): Marks => {
     'strap-inner': turned(strap, pose.femur, 0, -sigma * 65),
     'strap-outer': turned(strap, pose.femur, 0, sigma * 65),
     'ankle-support': [0, sigma * hipY, 75],
-    'ankle-lifted': [lifted[0], lifted[1], lifted[2] - SHANK],
+    // the knee bends: the foot hangs half-way behind it
+    'ankle-lifted': [lifted[0] / 2, lifted[1], lifted[2] - SHANK],
     'acromion-support': [0, shoulders[1] + sigma * 180, shoulders[2]],
     'acromion-lifted': [0, shoulders[1] - sigma * 180, shoulders[2]],
     'toe-support': [160, sigma * (hipY + 30), 20],

@@ -16,6 +16,9 @@ const TYPICAL: Readonly<Record<LandmarkSetId, readonly [one: number, three: numb
   'belt+thigh': [5.5 / 1.96, 3.9 / 1.96],
 };
 
+/** With so many marked frames a foot that never leaves the floor is a clip without quiet stance. */
+const MANY = 7;
+
 /** Marked frames recommended at each end of the window. */
 const AT_EACH_END = 4;
 const ENDS = [
@@ -37,6 +40,8 @@ const forFault = (fault: RepFault, { rep, shown }: Assessed): Settle | null => {
       return { code: 'film-from-front' };
     case 'landmarks-missing':
       return { code: 'mark-landmarks', rep: rep.id, landmarks: fault.landmarks };
+    case 'no-foot-off':
+      return rep.frames.length >= MANY ? { code: 'stand-still-first' } : null;
     case 'few-quiet': {
       const footOff = shown?.phases.boundaries.footOff ?? null;
       const before = rep.frames.filter(({ time }) => footOff === null || time < footOff).length;
