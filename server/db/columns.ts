@@ -30,3 +30,6 @@ export const moment = () => p.datetime(3);
 
 /** The moment at which the row was made. */
 export const madeAt = () => moment().onCreate(() => new Date());
+
+/** A 64-bit floating point number: degrees, millimetres, pixels. */
+export const real = () => p.double().$type<number>();

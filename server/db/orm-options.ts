@@ -1,6 +1,7 @@
 import { defineConfig, type Options } from '@mikro-orm/postgresql';
 import { PRACTICE_FILTER } from './columns.ts';
 import { entities } from './entities.ts';
+import { idAtCreation } from './id-at-creation.ts';
 
 /**
  * What the server and the command line agree on. The tenancy filter has a parameter and no default, so a find,
@@ -19,6 +20,7 @@ export const ormOptions = (clientUrl: string): Options =>
         default: true,
       },
     },
+    subscribers: [idAtCreation],
     // foreign keys are written by hand: each carries the practice
     schemaGenerator: { createForeignKeyConstraints: false },
     forceUtcTimezone: true,

@@ -19,18 +19,19 @@ const framesOf = (stack: string | undefined): string[] =>
     .slice(0, 12);
 
 /**
- * An error as it may be kept. A database error's message carries the row that was written, so of those only the
- * SQLSTATE, table and constraint stay.
+ * An error as it may be kept. The messages of the database and of the ORM carry the row that was written, so of
+ * those only the kind, SQLSTATE, table and constraint stay.
  */
 export const loggedError = (error: unknown): Record<string, unknown> => {
   if (!(error instanceof Error)) return { type: typeof error };
   const { code, table, constraint, sqlState } = error as Error & Record<string, unknown>;
-  const fromDatabase = /^[0-9A-Z]{5}$/.test(typeof code === 'string' ? code : '') || sqlState;
+  const hasRow =
+    /^[0-9A-Z]{5}$/.test(typeof code === 'string' ? code : '') || sqlState || 'getEntity' in error;
   return {
     type: error.constructor.name,
-    ...(fromDatabase ? { code, table, constraint } : { message: error.message.slice(0, 500) }),
+    ...(hasRow ? { code, table, constraint } : { message: error.message.slice(0, 500) }),
     at: framesOf(error.stack),
-    ...(error.cause === undefined || fromDatabase ? {} : { cause: loggedError(error.cause) }),
+    ...(error.cause === undefined || hasRow ? {} : { cause: loggedError(error.cause) }),
   };
 };
 

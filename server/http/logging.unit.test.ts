@@ -1,4 +1,5 @@
 import { Writable } from 'node:stream';
+import { ValidationError } from '@mikro-orm/core';
 import { pino } from 'pino';
 import { describe, expect, it } from 'vitest';
 import { loggedError, loggedPath } from './logging.ts';
@@ -26,6 +27,12 @@ describe('a logged error', () => {
     const logged = loggedError(fromDatabase);
     expect(logged).toMatchObject({ code: '23505', table: 'athlete', constraint: 'athlete_pkey' });
     expect(JSON.stringify(logged)).not.toContain('Robin');
+  });
+
+  it('of the ORM keeps its kind, and not the entity', () => {
+    const error = new ValidationError(`Value is required\nentity: Athlete { name: 'Robin' }`);
+    expect(loggedError(error)).toMatchObject({ type: 'ValidationError' });
+    expect(JSON.stringify(loggedError(error))).not.toContain('Robin');
   });
 
   it('keeps the message of other errors, and where they came from', () => {

@@ -43,7 +43,7 @@ export const startApi = async (env: NodeJS.ProcessEnv = {}): Promise<Api> => {
     NODE_ENV: 'test',
     PUBLIC_URL: 'http://redshank.test',
     REDSHANK_DATA: folder,
-    REDSHANK_LOG: 'silent',
+    REDSHANK_LOG: process.env.REDSHANK_LOG ?? 'silent',
     DATABASE_URL: database.appUrl,
     DATABASE_OWNER_URL: database.ownerUrl,
     DATABASE_JOBS_URL: database.jobsUrl,

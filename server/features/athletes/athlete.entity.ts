@@ -1,5 +1,5 @@
 import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
-import { madeAt, ownedRow } from '#server/db/columns.ts';
+import { madeAt, ownedRow, real } from '#server/db/columns.ts';
 import { User } from '../accounts/user.entity.ts';
 
 /** The person filmed. `coach` decides who may see them and all that hangs on them. */
@@ -12,7 +12,7 @@ export const Athlete = defineEntity({
     givenName: p.text(),
     familyName: p.text(),
     birthDate: p.date(),
-    heightMm: p.double().nullable(),
+    heightMm: real().nullable(),
     sport: p.text().default(''),
     cautions: p.text().default(''),
     contactEmail: p.text().nullable(),

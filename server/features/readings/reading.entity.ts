@@ -2,7 +2,7 @@ import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
 import { side } from '#shared/contracts/primitives.ts';
 import { readingCode } from '#shared/contracts/readings.ts';
 import type { ReadingInput, ReadingResult } from '#shared/reading/types.ts';
-import { madeAt, ownedRow } from '#server/db/columns.ts';
+import { madeAt, ownedRow, real } from '#server/db/columns.ts';
 import { User } from '../accounts/user.entity.ts';
 import { Visit } from '../visits/visit.entity.ts';
 
@@ -24,11 +24,11 @@ export const Reading = defineEntity({
     /** 'Turns out early' already before 60° of lift. */
     before60: p.boolean(),
     /** Turn from 60° to 90° of lift and its u_c, degrees, external positive. */
-    change: p.double().nullable(),
-    u: p.double().nullable(),
-    pEarly: p.double().nullable(),
+    change: real().nullable(),
+    u: real().nullable(),
+    pEarly: real().nullable(),
     /** The smallest early turn found nine times in ten, degrees. */
-    smallestFound: p.double().nullable(),
+    smallestFound: real().nullable(),
     provisional: p.boolean(),
     assumption: p.boolean(),
     by: p.manyToOne(User).ref(),

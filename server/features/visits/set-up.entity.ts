@@ -1,5 +1,5 @@
 import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
-import { ownedRow } from '#server/db/columns.ts';
+import { ownedRow, real } from '#server/db/columns.ts';
 import { User } from '../accounts/user.entity.ts';
 
 /** A practice's saved way of filming; lengths in millimetres. */
@@ -8,11 +8,11 @@ export const SetUp = defineEntity({
   properties: {
     ...ownedRow(),
     name: p.text(),
-    distanceMm: p.double(),
-    lensHeightMm: p.double().nullable(),
-    rodMm: p.double().nullable(),
-    beltPointerMm: p.double().nullable(),
-    thighPointerMm: p.double().nullable(),
+    distanceMm: real(),
+    lensHeightMm: real().nullable(),
+    rodMm: real().nullable(),
+    beltPointerMm: real().nullable(),
+    thighPointerMm: real().nullable(),
     lastUsed: p.date().nullable(),
     savedBy: p.manyToOne(User).ref(),
   },

@@ -1,0 +1,53 @@
+import type { Athlete, Consent as ConsentShape } from '#shared/contracts/athletes.ts';
+import { presentPerson } from '../accounts/accounts.presenter.ts';
+import type { User } from '../accounts/user.entity.ts';
+import type { Page } from './athlete-list.ts';
+import type { AthleteRow } from './athlete-rows.ts';
+import type { Consent } from './consent.entity.ts';
+import { isMinor, today } from './days.ts';
+
+export const presentAthlete = (row: AthleteRow): Athlete => ({
+  id: row.id,
+  givenName: row.given_name,
+  familyName: row.family_name,
+  birthDate: row.birth_date,
+  minor: isMinor(row.birth_date),
+  heightMm: row.height_mm,
+  sport: row.sport,
+  cautions: row.cautions,
+  contactEmail: row.contact_email,
+  coach: { id: row.coach_id, name: row.coach_name },
+  consentedTo: row.consented_to ?? [],
+  consentUntil: row.consent_until,
+  lastVisit: row.last_visit,
+  visitCount: row.visit_count,
+  version: row.version,
+  createdAt: new Date(row.created_at).toISOString(),
+});
+
+export const presentAthletes = (page: Page<AthleteRow>) => ({
+  ...page,
+  items: page.items.map(presentAthlete),
+});
+
+const stateOf = (consent: Consent): ConsentShape['state'] => {
+  if (consent.withdrawnAt) return 'withdrawn';
+  return consent.validUntil < today() ? 'lapsed' : 'valid';
+};
+
+/** @param consent with `recordedBy` loaded */
+export const presentConsent = (consent: Consent): ConsentShape => ({
+  id: consent.id,
+  givenBy: consent.givenBy,
+  guardianName: consent.guardianName ?? null,
+  guardianRelation: consent.guardianRelation ?? null,
+  assent: consent.assent,
+  purposes: consent.purposes,
+  validFrom: consent.validFrom,
+  validUntil: consent.validUntil,
+  how: consent.how,
+  state: stateOf(consent),
+  recordedBy: presentPerson(consent.recordedBy.unwrap()),
+  recordedAt: consent.recordedAt.toISOString(),
+  withdrawnAt: consent.withdrawnAt?.toISOString() ?? null,
+});

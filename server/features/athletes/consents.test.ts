@@ -1,0 +1,162 @@
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { type Api, startApi } from '#tests/support/api.ts';
+import { product } from '../../db/in-practice.ts';
+import { makeClip } from '../clips/clip.factory.ts';
+import { AuditEntry } from '../practice/audit-entry.entity.ts';
+import { Replay } from '../replays/replay.entity.ts';
+import { makeRep } from '../reps/rep.factory.ts';
+import { makeVisit } from '../visits/visit.factory.ts';
+import type { Athlete } from './athlete.entity.ts';
+import { makeAthlete, makeConsent } from './athlete.factory.ts';
+import { hasConsent } from './consent-check.ts';
+import { daysLater, today } from './days.ts';
+
+let api: Api;
+let adult: Athlete;
+let minor: Athlete;
+beforeAll(async () => {
+  api = await startApi();
+});
+afterAll(() => api.close());
+beforeEach(async () => {
+  const { coach, practiceId } = api.world;
+  [adult, minor] = await api.ground.inPractice(product(practiceId), ({ em }) =>
+    Promise.resolve([
+      makeAthlete(em, { coach }),
+      makeAthlete(em, { coach, birthDate: daysLater(today(), -15 * 365) }),
+    ]),
+  );
+});
+
+const BODY = {
+  givenBy: 'athlete',
+  purposes: ['assessment', 'sharing-by-link'],
+  validUntil: daysLater(today(), 90),
+  how: 'On the tablet.',
+};
+const record = async (athlete: Athlete, body: object) =>
+  (await api.as(api.world.coach)).post(`/api/athletes/${athlete.id}/consents`).send(body);
+
+const consented = (purpose: 'assessment' | 'sharing-by-link', athlete = adult) =>
+  api.ground.inPractice(product(api.world.practiceId), ({ em }) =>
+    hasConsent(em, athlete.id, purpose),
+  );
+
+describe('a consent', () => {
+  it('is recorded with who, what for and until when, and counts at once', async () => {
+    expect(await consented('assessment')).toBe(false);
+    const answer = await record(adult, BODY);
+    expect(answer.status).toBe(201);
+    expect(answer.body).toMatchObject({
+      givenBy: 'athlete',
+      guardianName: null,
+      purposes: ['assessment', 'sharing-by-link'],
+      validFrom: today(),
+      validUntil: BODY.validUntil,
+      state: 'valid',
+      recordedBy: { id: api.world.coach.id },
+      withdrawnAt: null,
+    });
+    expect(await consented('assessment')).toBe(true);
+    const coach = await api.as(api.world.coach);
+    const { body } = await coach.get(`/api/athletes/${adult.id}`);
+    expect(body).toMatchObject({
+      consentedTo: ['assessment', 'sharing-by-link'],
+      consentUntil: BODY.validUntil,
+    });
+  });
+
+  it('of a minor comes from a guardian who is named', async () => {
+    const own = await record(minor, BODY);
+    expect(own.status).toBe(422);
+    expect(own.body.faults[0].path).toBe('body.givenBy');
+    const unnamed = await record(minor, { ...BODY, givenBy: 'guardian' });
+    expect(unnamed.body.faults[0].path).toBe('body.guardianName');
+    const good = await record(minor, {
+      ...BODY,
+      givenBy: 'guardian',
+      guardianName: 'Kim Sedge',
+      guardianRelation: 'Mother',
+      assent: true,
+    });
+    expect(good.status).toBe(201);
+  });
+
+  it('cannot end before it begins, nor leave assessment out', async () => {
+    const past = await record(adult, { ...BODY, validUntil: daysLater(today(), -1) });
+    expect(past.body.faults).toEqual([
+      { path: 'body.validUntil', message: 'Choose today or a later day.' },
+    ]);
+    const without = await record(adult, { ...BODY, purposes: ['teaching'] });
+    expect(without.body.faults[0].path).toBe('body.purposes');
+  });
+
+  it('lapses by itself the day after its last', async () => {
+    const { coach, practiceId } = api.world;
+    await api.ground.inPractice(product(practiceId), ({ em }) => {
+      makeConsent(em, {
+        athlete: adult,
+        recordedBy: coach,
+        validFrom: daysLater(today(), -10),
+        validUntil: daysLater(today(), -1),
+      });
+      return Promise.resolve();
+    });
+    expect(await consented('assessment')).toBe(false);
+    const agent = await api.as(coach);
+    const { body } = await agent.get(`/api/athletes/${adult.id}/consents`);
+    expect(body.items[0].state).toBe('lapsed');
+  });
+
+  it('is withdrawn once, stays visible, and its links die with it', async () => {
+    const { coach, practiceId } = api.world;
+    const { id } = (await record(adult, BODY)).body as { id: string };
+    const replay = await api.ground.inPractice(product(practiceId), ({ em }) => {
+      const visit = makeVisit(em, { athlete: adult, coach });
+      const clip = makeClip(em, { visit, uploadedBy: coach });
+      const rep = makeRep(em, { clip, createdBy: coach });
+      return Promise.resolve(
+        em.create(Replay, {
+          visit,
+          rep,
+          side: 'right',
+          fromFrame: 0,
+          toFrame: 100,
+          showReading: true,
+          showCall: true,
+          message: '',
+          tokenHash: id,
+          expiresAt: new Date(Date.now() + 1e9),
+          by: coach,
+          passPhraseHash: null,
+        }),
+      );
+    });
+    const agent = await api.as(coach);
+    const first = await agent.post(`/api/consents/${id}/withdraw`).expect(200);
+    expect(first.body.state).toBe('withdrawn');
+    const again = await agent.post(`/api/consents/${id}/withdraw`).expect(200);
+    expect(again.body.withdrawnAt).toBe(first.body.withdrawnAt);
+    expect(await consented('assessment')).toBe(false);
+    const dead = await api.ground.inPractice(product(practiceId), ({ em }) =>
+      em.findOneOrFail(Replay, { id: replay.id }),
+    );
+    expect(dead.revokedAt).toBeInstanceOf(Date);
+    const { body } = await agent.get(`/api/athletes/${adult.id}/consents`);
+    expect(body.items).toHaveLength(1);
+    const trail = await api.ground.inPractice(product(practiceId), ({ em }) =>
+      em.find(AuditEntry, { subjectId: id }, { orderBy: { at: 'asc' } }),
+    );
+    expect(trail.map(({ action }) => action)).toEqual(['consent.record', 'consent.withdraw']);
+    expect(trail.every(({ byUser }) => byUser === coach.id)).toBe(true);
+  });
+
+  it('is nobody else’s to withdraw', async () => {
+    const { id } = (await record(adult, BODY)).body as { id: string };
+    const { supervisor, otherCoach, foreignOwner } = api.world;
+    const path = `/api/consents/${id}/withdraw`;
+    await (await api.as(supervisor)).post(path).expect(403);
+    await (await api.as(otherCoach)).post(path).expect(404);
+    await (await api.as(foreignOwner)).post(path).expect(404);
+  });
+});

@@ -1,0 +1,18 @@
+import type { Call as CallShape } from '#shared/contracts/calls.ts';
+import { presentPerson } from '../accounts/accounts.presenter.ts';
+import type { User } from '../accounts/user.entity.ts';
+import type { Call } from './call.entity.ts';
+
+/** @param call with `by` loaded */
+export const presentCall = (call: Call): CallShape => ({
+  id: call.id,
+  visitId: call.visit.id,
+  side: call.side,
+  seen: call.seen,
+  substitutions: call.substitutions,
+  confidence: call.confidence,
+  handsFelt: call.handsFelt,
+  by: presentPerson(call.by.unwrap()),
+  at: call.at.toISOString(),
+  beforeFigures: call.beforeFigures,
+});

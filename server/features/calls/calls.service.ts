@@ -1,0 +1,47 @@
+import type * as z from 'zod';
+import type { UserActor } from '#shared/access/actors.ts';
+import type { callBody } from '#shared/contracts/calls.ts';
+import type { Side } from '#shared/contracts/primitives.ts';
+import type { Unit } from '#server/db/in-practice.ts';
+import { User } from '../accounts/user.entity.ts';
+import { audit } from '../practice/audit.ts';
+import { SideSetting } from '../readings/side-setting.entity.ts';
+import { visitInSight } from '../visits/visit-in-sight.ts';
+import { Call } from './call.entity.ts';
+
+/** Oldest first. */
+export const listCalls = async (
+  unit: Unit<UserActor>,
+  visitId: string,
+  side: Side,
+): Promise<Call[]> => {
+  await visitInSight(unit, visitId, 'athlete.read');
+  return unit.em.find(
+    Call,
+    { visit: visitId, side },
+    { orderBy: { at: 'asc', id: 'asc' }, populate: ['by'] },
+  );
+};
+
+/** Keeps a call beside those that are there. It knows whether a figure of this side had been shown before. */
+export const recordCall = async (
+  unit: Unit<UserActor>,
+  visitId: string,
+  side: Side,
+  given: z.infer<typeof callBody>,
+): Promise<Call> => {
+  const { em, actor } = unit;
+  const { visit } = await visitInSight(unit, visitId, 'call.record');
+  const setting = await em.findOne(SideSetting, { visit: visitId, side });
+  const call = em.create(Call, {
+    ...given,
+    substitutions: [...new Set(given.substitutions)],
+    visit,
+    side,
+    by: await em.findOneOrFail(User, { id: actor.id }),
+    beforeFigures: !setting?.figuresShownAt,
+  });
+  audit(unit, 'call.record', call.id, { visit: visitId, side });
+  await em.flush();
+  return call;
+};

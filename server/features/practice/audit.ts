@@ -1,0 +1,46 @@
+import type { EntityManager } from '@mikro-orm/postgresql';
+import type { LinkActor, UserActor } from '#shared/access/actors.ts';
+import type { ProductActor } from '../../db/in-practice.ts';
+import { AuditEntry } from './audit-entry.entity.ts';
+
+/** What is written down, by what it was done to. */
+export type AuditedAction =
+  | 'account.sign-in'
+  | 'athlete.add'
+  | 'athlete.edit'
+  | 'consent.record'
+  | 'consent.withdraw'
+  | 'visit.add'
+  | 'visit.safety'
+  | 'set-up.save'
+  | 'set-up.delete'
+  | 'call.record'
+  | 'clip.upload'
+  | 'clip.delete'
+  | 'rep.delete'
+  | 'reading.assume'
+  | 'comment.delete'
+  | 'replay.make'
+  | 'replay.revoke'
+  | 'replay.open';
+
+/**
+ * Writes down who did what, in the same transaction as what was done.
+ * @param subjectId of the row it was done to; its kind is the first word of the action
+ * @param detail ids, codes and counts; never a name, a password or a token
+ */
+export const audit = (
+  { em, actor }: { em: EntityManager; actor: UserActor | LinkActor | ProductActor },
+  action: AuditedAction,
+  subjectId: string,
+  detail: Record<string, string | number | boolean | null> | null = null,
+): void => {
+  em.create(AuditEntry, {
+    actor: actor.kind,
+    byUser: actor.kind === 'user' ? actor.id : null,
+    action,
+    subject: action.split('.')[0] ?? action,
+    subjectId,
+    detail,
+  });
+};
