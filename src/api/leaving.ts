@@ -1,8 +1,10 @@
-/**
- * What would be lost by signing out: marks that are not sent yet, a clip that is half sent. Each guard
- * answers with a sentence, or null where nothing would be lost.
- */
-export type LeavingGuard = () => Promise<string | null>;
+/** Work on this device that signing out would throw away: marks not sent yet, a clip half sent. */
+export type LeavingGuard = {
+  /** One sentence, or null where nothing would be lost. */
+  wouldLose: () => Promise<string | null>;
+  /** Called once the person has signed out: nothing of theirs may be left here. */
+  discard: () => void;
+};
 const guards = new Set<LeavingGuard>();
 
 /** Returns how to take the guard away. */
@@ -12,6 +14,10 @@ export function guardLeaving(guard: LeavingGuard): () => void {
 }
 
 export async function whatWouldBeLost(): Promise<string[]> {
-  const answers = await Promise.all([...guards].map((guard) => guard()));
+  const answers = await Promise.all([...guards].map((guard) => guard.wouldLose()));
   return answers.filter((answer) => answer !== null);
+}
+
+export function discardAll(): void {
+  for (const guard of guards) guard.discard();
 }

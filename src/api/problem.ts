@@ -63,17 +63,24 @@ const isFault = (value: unknown): value is Fault =>
 const textOf = (value: unknown): string | undefined =>
   typeof value === 'string' && value !== '' ? value : undefined;
 
-/** Reads an answer that says no. A body that is no problem document (a proxy's page) becomes `unexpected`. */
-export async function problemOf(response: Response): Promise<ApiProblem> {
-  const body: unknown = await response.json().catch(() => null);
+/**
+ * A no by its status and body. A body that is no problem document (a proxy's page) becomes `unexpected`,
+ * or `shutting-down` for the answers of a gateway whose server restarts.
+ */
+export function problemFrom(status: number, body: unknown, requestId?: string | null): ApiProblem {
   const fields: Record<string, unknown> =
     typeof body === 'object' && body !== null ? Object.fromEntries(Object.entries(body)) : {};
-  // a gateway in front of the server answers like this while the server restarts
-  const fallback = [502, 503, 504].includes(response.status) ? 'shutting-down' : 'unexpected';
+  const fallback = [502, 503, 504].includes(status) ? 'shutting-down' : 'unexpected';
   return new ApiProblem(isCode(fields.code) ? fields.code : fallback, {
-    status: response.status,
+    status,
     detail: textOf(fields.detail),
     faults: Array.isArray(fields.faults) ? fields.faults.filter(isFault) : [],
-    requestId: textOf(fields.requestId) ?? response.headers.get('x-request-id') ?? undefined,
+    requestId: textOf(fields.requestId) ?? requestId ?? undefined,
   });
+}
+
+/** Reads an answer that says no. */
+export async function problemOf(response: Response): Promise<ApiProblem> {
+  const body: unknown = await response.json().catch(() => null);
+  return problemFrom(response.status, body, response.headers.get('x-request-id'));
 }

@@ -3,7 +3,7 @@ import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { routes } from '#shared/contracts/routes.ts';
 import { call } from '#src/api/client.ts';
-import { whatWouldBeLost } from '#src/api/leaving.ts';
+import { discardAll, whatWouldBeLost } from '#src/api/leaving.ts';
 import { useMe } from '#src/api/me.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Dialog } from '#src/ui/dialog.tsx';
@@ -28,6 +28,7 @@ export function PersonMenu() {
     onSuccess: async (_, where) => {
       await navigate(paths.signIn());
       client.clear();
+      discardAll();
       say(where === 'here' ? 'You are signed out.' : 'You are signed out on every device.');
     },
     onError: (error) => say(`You are still signed in. ${error.message}`),

@@ -77,6 +77,26 @@ export const pages: RouteObject[] = [
                   ),
                 ),
               },
+              {
+                path: 'athletes/:id/visits/new',
+                lazy: lazily(() =>
+                  import('#src/features/visits/new-visit-page.tsx').then(
+                    (page) => page.NewVisitPage,
+                  ),
+                ),
+              },
+              {
+                path: 'visits/:id',
+                lazy: lazily(() =>
+                  import('#src/features/visits/visit-page.tsx').then((page) => page.VisitPage),
+                ),
+              },
+              {
+                path: 'practice/set-ups',
+                lazy: lazily(() =>
+                  import('#src/features/practice/set-ups-page.tsx').then((page) => page.SetUpsPage),
+                ),
+              },
               { path: '*', Component: NotFoundPage },
             ],
           },

@@ -15,7 +15,7 @@ export type Choice<V extends string> = {
  */
 export function Segmented<V extends string>({
   legend,
-  hideLegend = false,
+  labelledBy,
   choices,
   value,
   onChange,
@@ -24,8 +24,9 @@ export function Segmented<V extends string>({
   disabled = false,
   ref,
 }: {
-  legend: ReactNode;
-  hideLegend?: boolean;
+  /** Stands above; leave it out where `labelledBy` names words that stand elsewhere. */
+  legend?: ReactNode;
+  labelledBy?: string;
   choices: readonly Choice<V>[];
   value: V | null;
   onChange: (value: V) => void;
@@ -37,17 +38,25 @@ export function Segmented<V extends string>({
 }) {
   const id = useId();
   return (
-    <fieldset
-      disabled={disabled}
+    <div
+      role="radiogroup"
+      aria-labelledby={labelledBy ?? `${id}-legend`}
       aria-invalid={error !== undefined || undefined}
       aria-describedby={error === undefined ? undefined : `${id}-fault`}
     >
-      <legend className={cx('font-bold', hideLegend ? 'sr-only' : 'mb-1')}>{legend}</legend>
+      {legend !== undefined && (
+        <p id={`${id}-legend`} className="mb-1 font-bold">
+          {legend}
+        </p>
+      )}
       <div
         className={
           cards
             ? 'grid gap-2 phone:grid-cols-2'
-            : 'inline-flex max-w-full flex-wrap gap-px rounded border border-edge bg-edge'
+            : cx(
+                'inline-flex max-w-full flex-wrap gap-px rounded border bg-edge',
+                error === undefined ? 'border-edge' : 'border-alarm ring-1 ring-alarm',
+              )
         }
       >
         {choices.map(({ value: own, label, note }, n) => {
@@ -59,7 +68,7 @@ export function Segmented<V extends string>({
                 'focus-ring-within relative block has-[:focus-visible]:z-10',
                 cards
                   ? 'rounded border px-3.5 pb-3 pt-2.5'
-                  : 'min-h-[42px] grow px-4 py-[9px] text-center first:rounded-l-[3px] last:rounded-r-[3px]',
+                  : 'min-h-[42px] grow whitespace-nowrap px-4 py-[9px] text-center first:rounded-l-[3px] last:rounded-r-[3px]',
                 chosen ? 'bg-ink text-mud' : cards ? 'border-edge' : 'bg-mud hover:bg-sheet',
                 chosen && (cards ? 'border-ink' : 'font-bold'),
               )}
@@ -70,6 +79,7 @@ export function Segmented<V extends string>({
                 name={id}
                 value={own}
                 checked={chosen}
+                disabled={disabled}
                 onChange={() => onChange(own)}
                 className="absolute inset-0 m-0 h-full w-full cursor-pointer opacity-0 disabled:cursor-not-allowed"
               />
@@ -86,6 +96,6 @@ export function Segmented<V extends string>({
         })}
       </div>
       {error !== undefined && <Fault id={`${id}-fault`}>{error}</Fault>}
-    </fieldset>
+    </div>
   );
 }

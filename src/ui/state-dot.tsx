@@ -23,7 +23,11 @@ export function StateDot({
 }) {
   return (
     <span
-      className={cx('inline-flex items-start gap-2', COLOURS[kind], !wrap && 'whitespace-nowrap')}
+      className={cx(
+        'inline-flex items-start gap-2 align-top',
+        COLOURS[kind],
+        !wrap && 'whitespace-nowrap',
+      )}
     >
       <svg width="12" height="24" viewBox="-6 -12 12 24" aria-hidden="true" className="flex-none">
         {kind === 'bad' ? (

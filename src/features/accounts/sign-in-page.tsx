@@ -6,6 +6,7 @@ import { signInBody } from '#shared/contracts/accounts.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { meQuery } from '#src/api/accounts.queries.ts';
 import { call } from '#src/api/client.ts';
+import { discardAll } from '#src/api/leaving.ts';
 import { Bird } from '#src/ui/bird.tsx';
 import { Button } from '#src/ui/button.tsx';
 import { Form } from '#src/ui/form/form.tsx';
@@ -45,7 +46,8 @@ export function SignInPage() {
         className="space-y-5"
         send={async (body) => {
           const me = await call(routes.signIn, { body });
-          // nothing of another person may be left
+          // nothing of another person may be left; one's own unsent work goes on
+          if (client.getQueryData(meQuery.queryKey)?.user.id !== me.user.id) discardAll();
           client.clear();
           client.setQueryData(meQuery.queryKey, me);
           await navigate(place, { replace: true });

@@ -6,6 +6,7 @@ import { call } from '#src/api/client.ts';
 import { ButtonLink } from '#src/ui/button.tsx';
 import { ConfirmButton } from '#src/ui/confirm.tsx';
 import { longDay, moment } from '#src/ui/days.ts';
+import { Fold } from '#src/ui/fold.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { StateDot } from '#src/ui/state-dot.tsx';
@@ -122,21 +123,21 @@ function ValidConsent({ athlete, consent }: { athlete: Athlete; consent: Consent
 
 function PastConsents({ consents }: { consents: readonly Consent[] }) {
   return (
-    <details className="mt-4 text-note text-soft">
-      <summary className="inline-flex min-h-[44px] items-center underline underline-offset-[3px]">
-        Earlier consents ({consents.length})
-      </summary>
-      <ul>
-        {consents.map((consent) => (
-          <li key={consent.id} className="border-b border-rule py-2 last:border-0">
-            From {longDay(consent.validFrom)} to {longDay(consent.validUntil)}
-            {consent.state === 'withdrawn' && consent.withdrawnAt !== null
-              ? `, withdrawn ${moment(consent.withdrawnAt)}`
-              : ', lapsed'}
-            : {consent.purposes.map((purpose) => PURPOSE_WORDS[purpose].toLowerCase()).join('; ')}.
-          </li>
-        ))}
-      </ul>
-    </details>
+    <div className="mt-2 text-note text-soft">
+      <Fold title={`Earlier consents (${consents.length})`}>
+        <ul>
+          {consents.map((consent) => (
+            <li key={consent.id} className="border-b border-rule py-2 last:border-0">
+              From {longDay(consent.validFrom)} to {longDay(consent.validUntil)}
+              {consent.state === 'withdrawn' && consent.withdrawnAt !== null
+                ? `, withdrawn ${moment(consent.withdrawnAt)}`
+                : ', lapsed'}
+              : {consent.purposes.map((purpose) => PURPOSE_WORDS[purpose].toLowerCase()).join('; ')}
+              .
+            </li>
+          ))}
+        </ul>
+      </Fold>
+    </div>
   );
 }

@@ -13,7 +13,6 @@ export function SegmentedField<F extends FieldValues = FieldValues>({
 }: {
   name: FieldPath<F>;
   legend: ReactNode;
-  hideLegend?: boolean;
   choices: readonly Choice<string>[];
   cards?: boolean;
 }) {

@@ -1,0 +1,75 @@
+import { useEffect } from 'react';
+import type { Clip } from '#shared/contracts/clips.ts';
+import type { Visit } from '#shared/contracts/visits.ts';
+import { Button } from '#src/ui/button.tsx';
+import { Section } from '#src/ui/page.tsx';
+import { Empty } from '#src/ui/states.tsx';
+import { useStatus } from '#src/ui/status.tsx';
+import { detailsComplete, type ClipDetails } from '../uploads/upload-item.ts';
+import { uploads } from '../uploads/uploads.ts';
+import { useUploads } from '../use-uploads.ts';
+import { ClipRow } from './clip-row.tsx';
+import { DropZone } from './drop-zone.tsx';
+import { UploadRow } from './upload-row.tsx';
+
+const FIRST_DETAILS: ClipDetails = { view: 'front', supportSide: null, mirrored: false };
+
+/** Clips of this visit: chosen, on their way, being prepared, ready or refused. */
+export function UploadStep({
+  visit,
+  clips,
+  open,
+}: {
+  visit: Visit;
+  clips: readonly Clip[];
+  /** Consent and safety check are there. */
+  open: boolean;
+}) {
+  const items = useUploads(visit.id);
+  const say = useStatus();
+  useEffect(() => uploads.forgetSent(new Set(clips.map(({ id }) => id))), [clips]);
+  const here = items.filter(({ uploadId }) => !clips.some(({ id }) => id === uploadId));
+  const ready = here.filter(
+    (item) => item.phase === 'chosen' && item.look?.outcome === 'clip' && detailsComplete(item),
+  );
+
+  const take = (files: readonly File[]) => {
+    // the next clip is mostly filmed like the last one
+    const { view, supportSide, mirrored } = items.at(-1) ?? FIRST_DETAILS;
+    for (const file of files)
+      void uploads.add(visit.id, file, { view, supportSide, mirrored }).then((added) => {
+        if (added === 'already-there') say(`${file.name} is on the list already.`);
+        if (added === 'resumed') say(`${file.name} goes on where it stopped.`);
+      });
+  };
+  return (
+    <Section id="upload" title="4 Upload" wide>
+      {open ? (
+        <DropZone onFiles={take} />
+      ) : (
+        <Empty title="Closed until consent and safety check are there">
+          Clips are taken once filming is consented to and the safety questions are answered.
+        </Empty>
+      )}
+      {ready.length > 1 && (
+        <Button
+          look="primary"
+          className="mt-5"
+          onClick={() => ready.forEach(({ key }) => uploads.send(key))}
+        >
+          Send all {ready.length}
+        </Button>
+      )}
+      {(here.length > 0 || clips.length > 0) && (
+        <ul className="mt-2" aria-label="Clips of this visit">
+          {here.map((item) => (
+            <UploadRow key={item.key} item={item} only={ready.length <= 1} onFiles={take} />
+          ))}
+          {clips.map((clip) => (
+            <ClipRow key={clip.id} clip={clip} />
+          ))}
+        </ul>
+      )}
+    </Section>
+  );
+}

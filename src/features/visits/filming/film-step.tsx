@@ -1,0 +1,70 @@
+import { useState } from 'react';
+import type { Visit } from '#shared/contracts/visits.ts';
+import { Button } from '#src/ui/button.tsx';
+import { Fold } from '#src/ui/fold.tsx';
+import { Section } from '#src/ui/page.tsx';
+import { FilmingGuide } from '../guide/filming-guide.tsx';
+import { FilmingForm } from './filming-form.tsx';
+import { FILMING, lengthWords } from './filming-words.ts';
+import { SaveSetUp } from './save-set-up.tsx';
+import { SetUpChips } from './set-up-chips.tsx';
+
+/** How this visit is filmed: a saved set-up in one touch, its figures, and the guide. */
+export function FilmStep({
+  visit,
+  unfold,
+}: {
+  visit: Visit;
+  /** Before the first clip the guide stands open. */
+  unfold: boolean;
+}) {
+  const { filming } = visit;
+  const known = FILMING.some(({ key }) => filming[key] !== null);
+  const [editing, setEditing] = useState(false);
+  return (
+    <Section
+      id="film"
+      title="3 Film"
+      note="Vermilion: the leg stood on. Teal: the leg lifted."
+      wide
+    >
+      <SetUpChips visit={visit} />
+      {editing ? (
+        <FilmingForm key={visit.version} visit={visit} onDone={() => setEditing(false)} />
+      ) : (
+        <>
+          <dl className="mt-5 grid grid-cols-2 gap-x-10 gap-y-3 phone:flex phone:flex-wrap">
+            {FILMING.map(({ key, label, unit, without }) => {
+              const value = filming[key];
+              return (
+                <div key={key} className={value === null ? 'max-w-[11em]' : undefined}>
+                  <dt className="text-note leading-5 text-soft">{label}</dt>
+                  {value === null ? (
+                    <dd className="text-note leading-5">
+                      not known<span className="text-soft">: {without}</span>
+                    </dd>
+                  ) : (
+                    <dd className="text-filled font-light tracking-[-0.01em]">
+                      {lengthWords(value, unit)}
+                    </dd>
+                  )}
+                </div>
+              );
+            })}
+          </dl>
+          <div className="mt-3 flex flex-wrap gap-x-6">
+            <Button look="plain" onClick={() => setEditing(true)}>
+              {known ? 'Change these figures' : 'Write the figures down'}
+            </Button>
+            {filming.distanceMm !== null && <SaveSetUp filming={filming} />}
+          </div>
+        </>
+      )}
+      <div className="mt-6">
+        <Fold title="How to film it" open={unfold}>
+          <FilmingGuide filming={filming} />
+        </Fold>
+      </div>
+    </Section>
+  );
+}

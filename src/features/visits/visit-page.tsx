@@ -1,0 +1,67 @@
+import { useQuery } from '@tanstack/react-query';
+import { useParams } from 'react-router-dom';
+import type { Clip } from '#shared/contracts/clips.ts';
+import type { Visit } from '#shared/contracts/visits.ts';
+import { athleteOptions } from '#src/api/athletes.queries.ts';
+import { visitOptions } from '#src/api/visits.queries.ts';
+import { longDay, shortDay } from '#src/ui/days.ts';
+import { Page } from '#src/ui/page.tsx';
+import { paths } from '#src/ui/paths.ts';
+import { ErrorState, Loading, Skeleton, SkeletonLines } from '#src/ui/states.tsx';
+import { CallStep } from './call-step.tsx';
+import { UploadStep } from './clips/upload-step.tsx';
+import { ConsentStep } from './consent-step.tsx';
+import { FilmStep } from './filming/film-step.tsx';
+import { SafetyStep } from './safety/safety-step.tsx';
+import { VisitSteps } from './visit-steps.tsx';
+
+/** One day's testing of one athlete, from the consent to the call by eye. */
+export function VisitPage() {
+  const { id = '' } = useParams();
+  const page = useQuery(visitOptions(id));
+  if (page.data) return <Opened visit={page.data.visit} clips={page.data.clips} />;
+  return (
+    <Page
+      title={page.isError ? 'Visit' : <Skeleton className="h-11 w-72 max-w-full" />}
+      documentTitle="Visit"
+    >
+      {page.isError ? (
+        <ErrorState error={page.error} onRetry={() => void page.refetch()} />
+      ) : (
+        <Loading label="Loading the visit">
+          <SkeletonLines count={8} />
+        </Loading>
+      )}
+    </Page>
+  );
+}
+
+function Opened({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
+  const athlete = useQuery(athleteOptions(visit.athlete.id));
+  const consented = athlete.data?.consentedTo.includes('assessment');
+  // clips that are here stay to be worked on; nothing new is filmed without both
+  const open = consented === true && visit.safety?.mayFilm === true;
+  return (
+    <Page
+      title={`Visit of ${shortDay(visit.day)}`}
+      documentTitle={`${visit.athlete.name}, ${longDay(visit.day)}`}
+      crumbs={[
+        { label: 'Athletes', to: paths.athletes() },
+        { label: visit.athlete.name, to: paths.athlete(visit.athlete.id) },
+        { label: 'visit' },
+      ]}
+      lead={
+        <>
+          <VisitSteps consented={consented === true} visit={visit} clips={clips} />
+          {visit.note !== '' && <p className="mt-3 text-body text-soft">{visit.note}</p>}
+        </>
+      }
+    >
+      <ConsentStep athlete={athlete} visit={visit} />
+      <SafetyStep visit={visit} />
+      <FilmStep visit={visit} unfold={clips.length === 0} />
+      <UploadStep visit={visit} clips={clips} open={open} />
+      <CallStep visit={visit} clips={clips} />
+    </Page>
+  );
+}
