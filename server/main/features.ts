@@ -4,8 +4,10 @@ import { athletesFeature } from '../features/athletes/athletes.routes.ts';
 import { benchFeature } from '../features/bench/bench.routes.ts';
 import { callsFeature } from '../features/calls/calls.routes.ts';
 import { commentsFeature } from '../features/comments/comments.routes.ts';
+import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { repsFeature } from '../features/reps/reps.routes.ts';
 import { systemFeature } from '../features/system/system.routes.ts';
+import { todayFeature } from '../features/today/today.routes.ts';
 import { visitsFeature } from '../features/visits/visits.routes.ts';
 import type { Feature } from './feature.ts';
 
@@ -13,10 +15,12 @@ import type { Feature } from './feature.ts';
 export const features: readonly Feature[] = [
   systemFeature,
   accountsFeature,
+  todayFeature,
   athletesFeature,
   visitsFeature,
   callsFeature,
   repsFeature,
+  readingsFeature,
   commentsFeature,
   benchFeature,
   eventsFeature,

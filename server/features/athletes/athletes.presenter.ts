@@ -1,6 +1,5 @@
 import type { Athlete, Consent as ConsentShape } from '#shared/contracts/athletes.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
-import type { User } from '../accounts/user.entity.ts';
 import type { Page } from './athlete-list.ts';
 import type { AthleteRow } from './athlete-rows.ts';
 import type { Consent } from './consent.entity.ts';

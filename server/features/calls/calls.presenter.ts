@@ -1,6 +1,5 @@
 import type { Call as CallShape } from '#shared/contracts/calls.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
-import type { User } from '../accounts/user.entity.ts';
 import type { Call } from './call.entity.ts';
 
 /** @param call with `by` loaded */

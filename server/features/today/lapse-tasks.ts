@@ -1,0 +1,53 @@
+import type { UserActor } from '#shared/access/actors.ts';
+import type { Unit } from '#server/db/in-practice.ts';
+import { daysLater, today } from '../athletes/days.ts';
+import {
+  answeredFor,
+  AT_MOST,
+  ATHLETE,
+  type Named,
+  type WaitingItem,
+  whoAndWhen,
+} from './scope.ts';
+
+/** Long enough before to ask at the next visit. */
+const CONSENT_DAYS = 14;
+const LINK_DAYS = 3;
+
+type ConsentRow = Named & { until: string };
+type LinkRow = Named & { visit_id: string; replay_id: string; expires_at: Date | string };
+
+/** Athletes whose last valid consent to filming ends soon. */
+export const consentTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
+  const scope = answeredFor(actor);
+  const rows = await em.execute<ConsentRow[]>(
+    `select ${ATHLETE}, max(x.recorded_at) as at, max(x.valid_until)::text as until
+     from consent x join athlete a on a.id = x.athlete_id
+     where ${scope.sql} and x.withdrawn_at is null and 'assessment' = any (x.purposes)
+       and x.valid_from <= ?::date
+     group by a.id having max(x.valid_until) between ?::date and ?::date
+     order by until, a.id limit ${AT_MOST}`,
+    [...scope.params, today(), today(), daysLater(today(), CONSENT_DAYS)],
+  );
+  return rows.map((row) => ({ kind: 'consent-lapses', until: row.until, ...whoAndWhen(row) }));
+};
+
+/** Replay links that end soon. */
+export const linkTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
+  const scope = answeredFor(actor);
+  const rows = await em.execute<LinkRow[]>(
+    `select ${ATHLETE}, p.at, p.visit_id, p.id as replay_id, p.expires_at
+     from replay p join visit v on v.id = p.visit_id join athlete a on a.id = v.athlete_id
+     where ${scope.sql} and p.revoked_at is null
+       and p.expires_at between now() and now() + interval '${LINK_DAYS} days'
+     order by p.expires_at limit ${AT_MOST}`,
+    [...scope.params],
+  );
+  return rows.map((row) => ({
+    kind: 'link-lapses',
+    visitId: row.visit_id,
+    replayId: row.replay_id,
+    expiresAt: new Date(row.expires_at).toISOString(),
+    ...whoAndWhen(row),
+  }));
+};

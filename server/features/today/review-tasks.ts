@@ -1,0 +1,84 @@
+import type { UserActor } from '#shared/access/actors.ts';
+import type { Side } from '#shared/contracts/primitives.ts';
+import { READING_LABELS, type ReadingCode } from '#shared/contracts/readings.ts';
+import type { Unit } from '#server/db/in-practice.ts';
+import { inSightSql } from '../athletes/caseload.ts';
+import { AT_MOST, ATHLETE, type Named, type WaitingItem, whoAndWhen } from './scope.ts';
+
+/** Older readings are history, not work. */
+const READING_DAYS = 14;
+
+type ReadingRow = Named & { visit_id: string; side: Side; code: ReadingCode; before60: boolean };
+type CommentRow = Named & {
+  clip_id: string;
+  comment_id: string;
+  frame: number;
+  body: string;
+  by_id: string;
+  by_name: string;
+};
+
+/**
+ * Recent readings that wait for the next hand: the coach's until a replay shows them to the athlete, anybody
+ * else's until that person has commented on the visit since. A side without a call by eye shows no reading.
+ */
+export const readingTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
+  const inSight = inSightSql(actor, 'a.coach_id');
+  const rows = await em.execute<ReadingRow[]>(
+    `select ${ATHLETE}, r.at, r.visit_id, r.side, r.code, r.before60
+     from side_setting s
+     join reading r on r.id = s.reading_id
+     join visit v on v.id = s.visit_id
+     join athlete a on a.id = v.athlete_id
+     where ${inSight.sql} and r.at > now() - interval '${READING_DAYS} days'
+       and exists (select from call where call.visit_id = s.visit_id and call.side = s.side)
+       and case when a.coach_id = ?
+         then not exists (select from replay p where p.visit_id = s.visit_id and p.side = s.side)
+         else not exists (
+           select from comment m join clip c on c.id = m.clip_id
+           where c.visit_id = s.visit_id and m.by_id = ? and m.at > r.at
+         ) end
+     order by r.at limit ${AT_MOST}`,
+    [...inSight.params, actor.id, actor.id],
+  );
+  return rows.map((row) => ({
+    kind: 'reading-ready',
+    visitId: row.visit_id,
+    side: row.side,
+    label: READING_LABELS[row.code].concat(row.before60 ? ', before 60°' : ''),
+    ...whoAndWhen(row),
+  }));
+};
+
+/** Open threads whose last word is somebody else's: on one's own athletes, or begun or joined by oneself. */
+export const commentTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
+  const inSight = inSightSql(actor, 'a.coach_id');
+  const rows = await em.execute<CommentRow[]>(
+    `select ${ATHLETE}, last.at, m.clip_id, m.id as comment_id, m.from_frame as frame, last.body, u.id as by_id,
+       u.name as by_name
+     from comment m
+     join clip c on c.id = m.clip_id
+     join visit v on v.id = c.visit_id
+     join athlete a on a.id = v.athlete_id
+     join lateral (
+       select w.by_id, w.body, w.at from comment w where w.id = m.id or w.answer_to = m.id
+       order by w.at desc, w.id limit 1
+     ) last on true
+     join account u on u.id = last.by_id
+     where m.answer_to is null and m.resolved_at is null and ${inSight.sql} and last.by_id <> ?
+       and (a.coach_id = ? or exists (
+         select from comment w where (w.id = m.id or w.answer_to = m.id) and w.by_id = ?
+       ))
+     order by last.at limit ${AT_MOST}`,
+    [...inSight.params, actor.id, actor.id, actor.id],
+  );
+  return rows.map((row) => ({
+    kind: 'comment-open',
+    clipId: row.clip_id,
+    commentId: row.comment_id,
+    frame: row.frame,
+    body: row.body,
+    by: { id: row.by_id, name: row.by_name },
+    ...whoAndWhen(row),
+  }));
+};
