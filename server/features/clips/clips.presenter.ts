@@ -1,7 +1,6 @@
 import type { Clip as ClipShape, ClipWithFrames } from '#shared/contracts/clips.ts';
 import { mmPerPxOf } from '#shared/records/scale.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
-import type { User } from '../accounts/user.entity.ts';
 import type { Clip } from './clip.entity.ts';
 import { presentRefusal } from './refusal.ts';
 

@@ -1,6 +1,5 @@
 import type { Comment as CommentShape } from '#shared/contracts/comments.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
-import type { User } from '../accounts/user.entity.ts';
 import type { Comment } from './comment.entity.ts';
 
 /** By moment; answers stand at the moment of what they answer and follow it in time. */

@@ -1,0 +1,63 @@
+import type { EntityManager } from '@mikro-orm/postgresql';
+import type { Side } from '#shared/contracts/primitives.ts';
+import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { canonicalText } from '#shared/reading/canonical.ts';
+import { sha256Hex } from '#shared/reading/sha256.ts';
+import type { ReadingInput } from '#shared/reading/types.ts';
+import type { Athlete } from '../athletes/athlete.entity.ts';
+import { Clip } from '../clips/clip.entity.ts';
+import { repInput, timesOfClip } from '../reps/reps.presenter.ts';
+import { type NumberedRep, storedReps } from '../reps/stored-reps.ts';
+
+/** What a side's reading is derived from, with the rows that it came from. */
+export interface SideInputs {
+  readonly input: ReadingInput;
+  /** SHA-256 of the canonical inputs, hex. */
+  readonly hash: string;
+  readonly reps: readonly NumberedRep[];
+  /** Who placed the latest of its marks. */
+  readonly markedBy: string;
+}
+
+/** Every marked rep of a visit, of both sides, clip by clip. */
+export const markedReps = async (
+  em: EntityManager,
+  visitId: string,
+  athlete: Athlete,
+): Promise<NumberedRep[]> => {
+  const clips = (await em.find(
+    Clip,
+    { visit: visitId, state: 'ready' },
+    { populate: ['frames'], orderBy: { uploadedAt: 'asc', id: 'asc' } },
+  )) as Clip[];
+  return (await storedReps(em, clips, athlete)).filter(({ marks }) => marks.length > 0);
+};
+
+const latestHand = (reps: readonly NumberedRep[]): string | null => {
+  const marks = reps.flatMap((stored) => stored.marks);
+  const [first] = marks;
+  return first
+    ? marks.reduce((latest, mark) => (mark.at > latest.at ? mark : latest), first).byUser
+    : null;
+};
+
+/** The inputs of one side; null where none of its reps carries a mark. */
+export const sideInputs = (
+  all: readonly NumberedRep[],
+  side: Side,
+  thighTurnsLittle: boolean,
+): SideInputs | null => {
+  const reps = all.filter(({ rep }) => rep.supportSide === side);
+  const markedBy = latestHand(reps);
+  if (markedBy === null) return null;
+  const input: ReadingInput = {
+    engine: 1,
+    supportSide: side,
+    set: null,
+    thighTurnsLittle,
+    markError: ASSUMED_MARK_ERROR,
+    ownSystematic: null,
+    reps: reps.flatMap((stored) => repInput(stored, timesOfClip(stored.clip)) ?? []),
+  };
+  return { input, hash: sha256Hex(canonicalText(input)), reps, markedBy };
+};
