@@ -9,7 +9,16 @@ export default defineConfig({
       {
         test: {
           name: 'unit',
-          include: ['shared/**/*.test.ts', 'server/**/*.unit.test.ts', 'server/media/**/*.test.ts', 'tests/architecture/**/*.test.ts', 'docker-free-scripts/**/*.test.ts', 'src/video/**/*.test.ts', 'src/api/**/*.test.ts', 'src/canvas/**/*.test.ts'],
+          include: [
+            'shared/**/*.test.ts',
+            'server/**/*.unit.test.ts',
+            'server/media/**/*.test.ts',
+            'tests/architecture/**/*.test.ts',
+            'docker-free-scripts/**/*.test.ts',
+            'src/video/**/*.test.ts',
+            'src/api/**/*.test.ts',
+            'src/canvas/**/*.test.ts',
+          ],
           exclude: ['**/node_modules/**'],
           environment: 'node',
         },
@@ -29,7 +38,12 @@ export default defineConfig({
       {
         test: {
           name: 'web',
-          include: ['src/**/*.test.tsx', 'src/features/**/*.test.ts', 'src/app/**/*.test.ts', 'src/ui/**/*.test.ts'],
+          include: [
+            'src/**/*.test.tsx',
+            'src/features/**/*.test.ts',
+            'src/app/**/*.test.ts',
+            'src/ui/**/*.test.ts',
+          ],
           environment: 'jsdom',
           setupFiles: ['tests/support/web-setup.ts'],
         },
