@@ -46,9 +46,19 @@ export const markErrorPx = (id: LandmarkId, mark: PlacedMark, error: MarkError):
   Math.max(1, mark.scale) *
   (mark.source === 'tracked' ? CONSTANTS.trackedFactor.value : 1);
 
+/** Far outside any picture, or placed on one a thousand times coarser: a fault, not a mark. */
+const FURTHEST_PX = 1e6;
+const COARSEST = 1000;
+
+/** False for a mark that no picture can hold: not a number, or absurdly far. */
+export const isPlausible = ({ point, scale }: PlacedMark): boolean =>
+  Math.abs(point.u) <= FURTHEST_PX &&
+  Math.abs(point.v) <= FURTHEST_PX &&
+  Math.abs(scale) <= COARSEST;
+
 /**
  * Rotates the marks of a frame so that the plumb line is vertical, and mirrors a picture taken from
- * behind, which negates every u difference. Marks that are not finite numbers are left out.
+ * behind, which negates every u difference. Marks that no picture can hold are left out.
  */
 export const levelFrame = (
   input: FrameInput,
@@ -73,7 +83,7 @@ export const levelFrame = (
     marks[id] = {
       u: camera.view === 'back' ? camera.width - point.u : point.u,
       v: point.v,
-      error: scaled,
+      error: markErrorPx(id, mark, error),
       hollow: mark.source === 'tracked' && !mark.looked,
     };
   }

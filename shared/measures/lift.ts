@@ -12,7 +12,8 @@ import { lacks } from './need.ts';
 
 const FRONT_LANDMARKS: readonly LandmarkId[] = ['asis-support', 'asis-lifted', 'lifted-knee'];
 const DRAWS = 200;
-const SEED = 60_90;
+const PER_DRAW = 5;
+const SEED = 6090;
 
 /** Lift of one frame of a front clip, degrees, numeric also where it is too low to be shown. */
 const frontLift = (frame: LevelFrame, { rig, reference }: Setting): Degrees | Missing => {
@@ -35,31 +36,41 @@ export const liftOf = (frame: LevelFrame, setting: Setting): Degrees | Missing =
   return sideLift(frame, setting);
 };
 
-/** Standard deviation of lift from the random errors of the frame's marks, degrees. */
-const liftSpread = (frame: LevelFrame, setting: Setting): number => {
+/** Deviates of every draw: the same for each frame, so that a dragged mark moves its ± smoothly. */
+const deviates = ((): Float64Array => {
   const next = normalDraws(SEED);
-  let sum = 0;
+  return Float64Array.from({ length: DRAWS * PER_DRAW }, next);
+})();
+
+/** Standard deviation of lift from the random errors of the frame's marks, degrees. */
+const liftSpread = (frame: LevelFrame, { rig, reference }: Setting): number => {
+  const { 'asis-support': support, 'asis-lifted': lifted, 'lifted-knee': knee } = frame.marks;
+  const { width, thigh, horizon } = reference;
+  if (!support || !lifted || !knee || width === null || thigh === null || horizon === null)
+    return NaN;
+  let mean = 0;
   let squares = 0;
-  for (let i = 0; i < DRAWS; i += 1) {
-    const marks = { ...frame.marks };
-    for (const id of FRONT_LANDMARKS) {
-      const mark = marks[id];
-      if (mark)
-        marks[id] = { ...mark, u: mark.u + mark.error * next(), v: mark.v + mark.error * next() };
-    }
-    const lift = frontLift({ ...frame, marks }, setting);
-    if (typeof lift !== 'number') continue;
-    sum += lift;
-    squares += lift * lift;
+  for (let n = 0; n < DRAWS; n += 1) {
+    const z = (k: number): number => deviates[n * PER_DRAW + k] ?? NaN;
+    const hip = hipCentre(
+      { u: lifted.u + lifted.error * z(0), v: lifted.v + lifted.error * z(1) },
+      { u: support.u + support.error * z(2), v: support.v + support.error * z(3) },
+      width,
+    );
+    const kneeV = knee.v + knee.error * z(4);
+    const lift = toDegrees(liftFromHeights(kneeV, hip.v, thigh, horizon, rig.focal));
+    const away = lift - mean;
+    mean += away / (n + 1);
+    squares += away * (lift - mean);
   }
-  return Math.sqrt(Math.max(0, (squares - (sum * sum) / DRAWS) / (DRAWS - 1)));
+  return Math.sqrt(squares / (DRAWS - 1));
 };
 
 /** ± of lift beside one frame (95 %): marks, and the model with or without the lens height. */
 export const liftHalfWidth = (frame: LevelFrame, setting: Setting): Degrees => {
   if (setting.rig.camera.view !== 'front') return sideLiftHalfWidth(frame, setting);
   const model =
-    setting.rig.camera.lensHeightMm === null
+    setting.rig.lensHeightMm === null
       ? CONSTANTS.liftModelErrorNoLens.value
       : CONSTANTS.liftModelError.value;
   return degrees(Math.hypot(1.96 * liftSpread(frame, setting), model));

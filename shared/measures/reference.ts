@@ -42,9 +42,9 @@ export const referenceOf = (frames: readonly LevelFrame[], rig: Rig): Reference 
   const knee = means['lifted-knee'];
   const ankle = means['ankle-support'];
   const hip = support && lifted && width ? hipCentre(lifted, support, width) : null;
-  const lens = rig.camera.lensHeightMm;
+  const lens = rig.lensHeightMm;
   const horizon =
-    lens !== null && Number.isFinite(lens)
+    lens !== null
       ? ankle
         ? ankle.v - (lens - CONSTANTS.ankleHeight.value) / rig.mmPerPx
         : null

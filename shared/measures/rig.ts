@@ -18,10 +18,17 @@ export interface Rig {
   readonly beltPointerPx: number | null;
   readonly thighPointerPx: number | null;
   readonly footPx: number | null;
+  /** Lens above the floor, mm; null makes lift less certain. */
+  readonly lensHeightMm: number | null;
 }
 
+const SMALLEST = 1e-3;
+const LARGEST = 1e6;
+const HIGHEST_LENS_MM = 1e5;
+
+/** A length or scale that can be meant, mm or mm/px; anything else counts as not given. */
 const known = (value: number | null): value is number =>
-  value !== null && Number.isFinite(value) && value > 0;
+  value !== null && value >= SMALLEST && value <= LARGEST;
 
 /** Null inputs that nothing can be computed without. */
 export const rigOf = (camera: CameraInput, athlete: AthleteInput, side: Side): Rig | Missing => {
@@ -34,6 +41,10 @@ export const rigOf = (camera: CameraInput, athlete: AthleteInput, side: Side): R
     side,
     sigma: side === 'left' ? 1 : -1,
     mmPerPx: k,
+    lensHeightMm:
+      camera.lensHeightMm !== null && Math.abs(camera.lensHeightMm) <= HIGHEST_LENS_MM
+        ? camera.lensHeightMm
+        : null,
     focal: camera.distanceMm / k,
     centre: camera.width / 2,
     outlineDepthPx: CONSTANTS.outlineDepth.value / k,

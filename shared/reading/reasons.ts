@@ -7,7 +7,7 @@ import type { TimestampFault } from '#shared/timing/timestamps.ts';
 export type RepFault =
   | { readonly code: 'excluded'; readonly reason: ExclusionReason }
   | { readonly code: 'bad-timestamps'; readonly fault: TimestampFault }
-  | { readonly code: 'marks-not-finite'; readonly landmarks: readonly LandmarkId[] }
+  | { readonly code: 'marks-implausible'; readonly landmarks: readonly LandmarkId[] }
   | { readonly code: 'no-frames' }
   | { readonly code: 'other-side' }
   | { readonly code: 'view-cannot-show-turn'; readonly view: View }

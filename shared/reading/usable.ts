@@ -4,6 +4,7 @@ import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { landmarksOf } from '#shared/landmarks/table.ts';
 import type { LandmarkId, LandmarkSetId, Side } from '#shared/landmarks/types.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
+import { isPlausible } from '#shared/measures/level.ts';
 import { missingLengths } from '#shared/measures/rig.ts';
 import { LEAST_QUIET } from '#shared/measures/reference.ts';
 import { timestampFault } from '#shared/timing/timestamps.ts';
@@ -27,13 +28,12 @@ export const LEAST_FRAMES: readonly Least[] = [
 export const inBand = (lift: Degrees, { from, to }: Pick<Least, 'from' | 'to'>): boolean =>
   lift >= from && (to === null || lift <= to);
 
-const notFinite = (rep: RepInput): readonly LandmarkId[] => {
+const implausible = (rep: RepInput): readonly LandmarkId[] => {
   const bad = new Set<LandmarkId>();
   for (const { marks } of [...rep.frames, ...(rep.sharedQuiet ?? [])])
     for (const id of Object.keys(marks) as LandmarkId[]) {
       const mark = marks[id];
-      if (mark && !mark.hidden && !Number.isFinite(mark.point.u + mark.point.v + mark.scale))
-        bad.add(id);
+      if (mark && !mark.hidden && !isPlausible(mark)) bad.add(id);
     }
   return [...bad];
 };
@@ -50,8 +50,8 @@ export const faultsOfInput = (rep: RepInput, side: Side): readonly RepFault[] =>
     timestampFault(rep.frames.map((frame) => frame.time)) ??
     timestampFault(rep.sharedQuiet?.map((frame) => frame.time) ?? []);
   if (fault) faults.push({ code: 'bad-timestamps', fault });
-  const landmarks = notFinite(rep);
-  if (landmarks.length > 0) faults.push({ code: 'marks-not-finite', landmarks });
+  const landmarks = implausible(rep);
+  if (landmarks.length > 0) faults.push({ code: 'marks-implausible', landmarks });
   return faults;
 };
 

@@ -70,7 +70,7 @@ const warningsOf = (course: RepCourse): readonly Warning[] => {
       limit: limits.framesPerSecond,
     });
   if (camera.mirrored) warnings.push({ code: 'mirrored' });
-  if (camera.lensHeightMm === null && camera.view === 'front')
+  if (course.setting.rig.lensHeightMm === null && camera.view === 'front')
     warnings.push({
       code: 'lens-height-missing',
       liftHalfWidth: degrees(CONSTANTS.liftModelErrorNoLens.value),
