@@ -111,7 +111,7 @@ export const addArm = (
 ): void => {
   const { trunk, body } = bones;
   const inward = 0.5 * body.acromionWidth - 0.016 * body.height;
-  const shoulder = along(bones.acromionMiddle, trunk, [-8, sign * inward, -0.0165 * body.height]);
+  const shoulder = along(bones.acromionMiddle, trunk, [-8, sign * inward, -0.0115 * body.height]);
   const limb = (index: number): Axes => {
     const [out, ahead] = HOLDS[hold][index] ?? [0, 0];
     return hanging(trunk, sign, out + (hold === 'hanging' ? 4 * balancing : 0), ahead);

@@ -60,10 +60,10 @@ export const trunkShapes = (body: Body, fullChest: boolean): TrunkShapes => {
     [0.66 * top, chest - 36, fullChest ? 116 : 106, 94, 0],
     [0.8 * top, chest - 24, fullChest ? 102 : 99, 98, -4],
     [0.89 * top, chest - 18, 84, 94, -9],
-    [0.955 * top, chest - 13, 68, 82, -13],
-    [1.0 * top, chest - 24, 57, 70, -15],
-    [1.03 * top, chest - 54, 50, 60, -14],
-    [1.055 * top, chest - 88, 47, 55, -12],
+    [0.965 * top, chest - 12, 68, 82, -13],
+    [1.01 * top, chest - 21, 57, 70, -15],
+    [1.038 * top, chest - 50, 50, 60, -14],
+    [1.06 * top, chest - 84, 47, 55, -12],
     [1.08 * top, 56, 46, 53, -9],
   ];
   const neck: readonly Section[] = [

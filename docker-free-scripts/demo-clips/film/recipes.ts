@@ -50,7 +50,7 @@ export const encodeArguments = (
         ...['-vf', `settb=1/${PHONE_TICKS},setpts=${quoted(phoneClock())},transpose=2,${TO_YUV}`],
         ...['-fps_mode', 'passthrough', '-enc_time_base', `1/${PHONE_TICKS}`],
         ...['-video_track_timescale', String(PHONE_TICKS)],
-        ...['-c:v', 'libx265', '-preset', 'fast', '-crf', '25', '-tag:v', 'hvc1'],
+        ...['-c:v', 'libx265', '-preset', 'fast', '-crf', '24', '-tag:v', 'hvc1'],
         ...['-x265-params', 'log-level=error:keyint=120:bframes=3', ...COLOURS],
         ...['-c:a', 'aac', '-b:a', '48k', '-ac', '1'],
         ...[
@@ -64,13 +64,13 @@ export const encodeArguments = (
     case 'h264':
       return [
         ...start,
-        ...['-vf', TO_YUV, '-c:v', 'libx264', '-preset', 'medium', '-crf', '25'],
+        ...['-vf', TO_YUV, '-c:v', 'libx264', '-preset', 'medium', '-crf', '23'],
         ...['-g', '120', '-an', ...COLOURS, '-movflags', '+faststart', ...end],
       ];
     case 'vp9':
       return [
         ...start,
-        ...['-vf', TO_YUV, '-c:v', 'libvpx-vp9', '-crf', '33', '-b:v', '0'],
+        ...['-vf', TO_YUV, '-c:v', 'libvpx-vp9', '-crf', '31', '-b:v', '0'],
         ...['-deadline', 'good', '-cpu-used', '4', '-row-mt', '1', '-g', '120', '-an'],
         ...COLOURS,
         ...end,

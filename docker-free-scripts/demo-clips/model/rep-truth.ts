@@ -27,7 +27,8 @@ const whenPassing = (
   return read(before.angles) + t * (read(next.angles) - read(before.angles));
 };
 
-const round = (value: number, digits = 3): number => Number(value.toFixed(digits));
+// adding nothing turns −0 into 0, which JSON cannot tell apart
+const round = (value: number, digits = 3): number => Number(value.toFixed(digits)) + 0;
 
 /** Boundaries and the change of turn of one rep, from the frames of the whole clip. */
 export const repTruth = (frames: readonly FrameFacts[], rep: number, plan: RepPlan): RepTruth => {

@@ -10,7 +10,8 @@ import type { Vec } from './vec.ts';
 /** The rod stands beside the person in the plane of the ankles, across from the chair. */
 export const rodY = (clip: ClipPlan): number => (clip.script.reps[0] === 'left' ? -600 : 600);
 
-const round = (value: number, digits: number): number => Number(value.toFixed(digits));
+// adding nothing turns −0 into 0, which JSON cannot tell apart
+const round = (value: number, digits: number): number => Number(value.toFixed(digits)) + 0;
 
 /** Pixels of every landmark of the view, in the person's posture at `seconds`. */
 export const marksAt = (
