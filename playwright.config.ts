@@ -2,8 +2,9 @@ import { defineConfig } from '@playwright/test';
 import { chromium } from './tests/e2e/support/chromium.ts';
 
 /**
- * frames: pages served by the test itself, no server. journeys: the built app, started once for the whole run with
- * its own database, data folder and mailbox; they share it, so each journey makes its own athletes.
+ * frames: pages served by the test itself, no server. commands: npm start as a person types it. journeys: the built
+ * app, started once for the whole run with its own database, data folder and mailbox; they share it, so each journey
+ * makes its own athletes.
  */
 export default defineConfig({
   testDir: 'tests/e2e',
@@ -25,6 +26,7 @@ export default defineConfig({
   },
   projects: [
     { name: 'frames', testDir: 'tests/e2e/frames' },
+    { name: 'commands', testDir: 'tests/e2e/commands' },
     {
       name: 'app-start',
       testMatch: 'support/app-start.ts',

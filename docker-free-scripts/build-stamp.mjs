@@ -1,6 +1,22 @@
-/** Prints one hash over everything the build reads, so that an unchanged checkout is not built again. */
+/**
+ * Remembers in dist/ what was built, as one hash over everything the build reads, so that an unchanged checkout is
+ * not built again.
+ *
+ *   node build-stamp.mjs check   exit status 0 if dist/ is made of the present sources, 1 if not
+ *   node build-stamp.mjs begin   before a build: until `end`, dist/ counts as not built
+ *   node build-stamp.mjs end     after it; what was changed meanwhile counts as not built
+ */
 import { createHash } from 'node:crypto';
-import { existsSync, readFileSync, readdirSync, statSync } from 'node:fs';
+import {
+  existsSync,
+  mkdirSync,
+  readFileSync,
+  readdirSync,
+  renameSync,
+  rmSync,
+  statSync,
+  writeFileSync,
+} from 'node:fs';
 import { join } from 'node:path';
 
 const SOURCES = [
@@ -26,9 +42,37 @@ function* filesUnder(path) {
   for (const name of readdirSync(path).sort()) yield* filesUnder(join(path, name));
 }
 
-const hash = createHash('sha256');
-const roots = [...SOURCES, ...readdirSync('.').filter((name) => AT_THE_ROOT.test(name))];
-for (const file of roots.flatMap((root) => [...filesUnder(root)])) {
-  hash.update(file).update('\0').update(readFileSync(file)).update('\0');
+function hashOfSources() {
+  const hash = createHash('sha256');
+  const roots = [...SOURCES, ...readdirSync('.').filter((name) => AT_THE_ROOT.test(name))];
+  for (const file of roots.flatMap((root) => [...filesUnder(root)])) {
+    hash.update(file).update('\0').update(readFileSync(file)).update('\0');
+  }
+  return hash.digest('hex');
 }
-console.log(hash.digest('hex'));
+
+const BUILT = 'dist/.built-from';
+const BUILDING = 'dist/.building-from';
+
+const commands = {
+  check() {
+    const built = existsSync('dist/server/main.js') && existsSync(BUILT);
+    process.exitCode = built && readFileSync(BUILT, 'utf8') === hashOfSources() ? 0 : 1;
+  },
+  begin() {
+    mkdirSync('dist', { recursive: true });
+    rmSync(BUILT, { force: true });
+    writeFileSync(BUILDING, hashOfSources());
+  },
+  end() {
+    renameSync(BUILDING, BUILT);
+  },
+};
+
+const command = commands[process.argv[2]];
+if (command === undefined) {
+  console.error('usage: node build-stamp.mjs check | begin | end');
+  process.exitCode = 64;
+} else {
+  command();
+}

@@ -79,8 +79,7 @@ check_checkout() {
   else
     hint 'node_modules is missing or older than package-lock.json' 'npm start installs it (needs the npm registry).'
   fi
-  local stamp=dist/.built-from
-  if [[ -f $stamp && $(<"$stamp") == "$(node "$scripts/build-stamp.mjs")" ]]; then
+  if node "$scripts/build-stamp.mjs" check; then
     good 'Pages and server are built from the present sources'
   else
     hint 'Pages and server are not built from the present sources' 'npm start builds them.'
