@@ -12,7 +12,7 @@ import { pool } from './pool.ts';
 import { drawnFit, repResult } from './rep-result.ts';
 import { decide, decideWithoutRep } from './rule.ts';
 import { settleOf } from './settle.ts';
-import { sha256Hex, sha256Words } from './sha256.ts';
+import { hexOf, sha256Words } from './sha256.ts';
 import type { ReadingInput, ReadingResult } from './types.ts';
 import { hollowFrames, placedWarnings } from './warnings.ts';
 
@@ -70,11 +70,11 @@ const candidates = (reps: readonly Assessed[]): readonly Assessed[] =>
  * itself. Never throws for bad marks, times or missing inputs: they come back as typed faults.
  */
 export const deriveReading = (input: ReadingInput): ReadingResult => {
-  const text = canonicalText(input);
-  const seed = sha256Words(text)[0] ?? 0;
+  const hash = sha256Words(canonicalText(input));
+  const seed = hash[0] ?? 0;
   const { set, reps } = assess(input, seed);
   const used = reps.flatMap((rep) => rep.used ?? []);
-  const head = { engine: 1, inputHash: sha256Hex(text), supportSide: input.supportSide } as const;
+  const head = { engine: 1, inputHash: hexOf(hash), supportSide: input.supportSide } as const;
   const courses = reps.flatMap(({ shown, faults }) =>
     shown && !faults.some(({ code }) => code === 'excluded') ? [shown] : [],
   );

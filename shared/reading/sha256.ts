@@ -66,6 +66,8 @@ export const sha256Words = (text: string): Uint32Array => {
   return state;
 };
 
-/** The same as 64 hexadecimal digits. */
-export const sha256Hex = (text: string): string =>
-  Array.from(sha256Words(text), (word) => word.toString(16).padStart(8, '0')).join('');
+/** Words as 64 hexadecimal digits. */
+export const hexOf = (words: Uint32Array): string =>
+  Array.from(words, (word) => word.toString(16).padStart(8, '0')).join('');
+
+export const sha256Hex = (text: string): string => hexOf(sha256Words(text));
