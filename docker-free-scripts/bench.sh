@@ -12,7 +12,11 @@ source "$scripts/build.sh"
 
 cd "$repo" || exit
 need_node
-trap 'stop_step; exit 130' INT TERM HUP
+
+# Told to stop, it ends what runs; the browser and the servers of a measurement end with their parent.
+running=''
+trap 'stop_step; [[ -z $running ]] || kill -TERM "$running" 2>/dev/null; exit 130' INT TERM HUP
+
 need_packages postgresql ffmpeg chromium
 need_node_modules
 need_build
@@ -20,4 +24,6 @@ need_build
 REDSHANK_TEST_PG=$("$BASH" "$scripts/postgres/throwaway.sh" start $$)
 export REDSHANK_TEST_PG
 trap '"$BASH" "$scripts/postgres/throwaway.sh" stop "$REDSHANK_TEST_PG"' EXIT
-node --import tsx tests/bench/run.ts "$@"
+node --import tsx tests/bench/run.ts "$@" &
+running=$!
+wait "$running"
