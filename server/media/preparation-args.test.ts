@@ -28,11 +28,11 @@ describe('preparation', () => {
     expect(words.some((word) => word.includes(' '))).toBe(false);
   });
 
-  it('decodes once and scales the large picture once', () => {
+  it('decodes once and scales each picture from the next larger one', () => {
     const { graph, outputs } = preparationJob(plan);
     expect(graph.split(';')).toEqual([
-      '[0:1]setpts=PTS-STARTPTS,format=yuv420p,setsar=1,split=4[bench][r][p][s]',
-      '[r]scale=540:960,setsar=1[replay]',
+      '[0:1]setpts=PTS-STARTPTS,format=yuv420p,setsar=1,split=2[bench][r]',
+      '[r]scale=540:960,setsar=1,split=3[replay][p][s]',
       `[p]select='eq(n,0)+eq(n,150)',scale=360:640,setsar=1,settb=1/1,setpts=N[poster]`,
       expect.stringMatching(
         /^\[s\]select='eq\(n,0\)\+eq\(n,6\)\+.*tile=24x1:overlap=23:init_padding=23\[strip\]$/,

@@ -16,7 +16,7 @@ export interface PreparationPlan {
   readonly paths: CopyPaths;
 }
 
-/** All copies from one decode: the picture is scaled and tone mapped once, then split. */
+/** All copies from one decode: each smaller picture is scaled from the next larger one. */
 export function preparationJob(plan: PreparationPlan): FfmpegJob {
   const { source, copies, paths, span } = plan;
   return {
@@ -29,9 +29,9 @@ export function preparationJob(plan: PreparationPlan): FfmpegJob {
         ...(span ? [trim(span)] : []),
         'setpts=PTS-STARTPTS',
         ...toPixels(plan.traits, copies.bench, 'yuv420p'),
-        'split=4[bench][r][p][s]',
+        'split=2[bench][r]',
       ]),
-      chain('[r]', [scale(copies.replay), 'setsar=1[replay]']),
+      chain('[r]', [scale(copies.replay), 'setsar=1', 'split=3[replay][p][s]']),
       ...pictureChains(copies),
     ].join(';'),
     outputs: [
@@ -113,7 +113,7 @@ const bench = (gop: 1 | 5): string[] =>
 
 const replay = ({ replay: { gop } }: CopyPlan): string[] => [
   '-preset',
-  'veryfast',
+  'superfast',
   '-crf',
   '24',
   '-g',

@@ -1,12 +1,16 @@
 import { stat } from 'node:fs/promises';
 import type { CopyPaths } from './copy-paths.ts';
+import { copyArgs } from './ffprobe-args.ts';
+import { tableOf } from './frame-table.ts';
 import { MediaFailure } from './failures.ts';
 import type { CopyPlan } from './plan-copies.ts';
-import { type ProbedClip, probe } from './probe.ts';
+import type { ProbedClip } from './probe.ts';
+import { parseRational } from './rational.ts';
 import { MediaRefusal } from './refusals.ts';
 import type { FfmpegOutcome } from './run-ffmpeg.ts';
+import { runFfprobe } from './run-ffprobe.ts';
 import { withoutPaths } from './tool-outcome.ts';
-import type { FrameTable } from './types.ts';
+import type { FrameTable, Rational } from './types.ts';
 
 /** ffmpeg's own code for 'more than two thirds of the frames could not be decoded'. */
 const mostlyUndecodable = 69;
@@ -23,14 +27,38 @@ export async function readFrames(
   signal: AbortSignal | undefined,
 ): Promise<FrameTable> {
   const failed = outcome.exitCode !== 0 && outcome.exitCode !== mostlyUndecodable;
-  if (failed) throw undecodable(clip, outcome);
-  const made = await probe(paths.bench, { signal }).catch((error: unknown) => {
-    throw error instanceof MediaRefusal ? undecodable(clip, outcome) : error;
-  });
-  const { width, height } = made.facts.upright;
+  const copy = failed ? null : await readCopy(paths.bench, signal);
+  if (!copy) throw undecodable(clip, outcome);
+  const { width, height } = copy;
   if (width !== copies.bench.width || height !== copies.bench.height)
     throw new MediaFailure('tool-failed', `the bench copy came out as ${width} × ${height}`);
-  return made.frames;
+  return copy.frames;
+}
+
+/** Null where there is no picture in it. */
+async function readCopy(path: string, signal: AbortSignal | undefined) {
+  const ticks: number[] = [];
+  let stream: { width: number; height: number; timeBase: Rational } | null = null;
+  await runFfprobe(
+    copyArgs(path),
+    (line) => {
+      const [kind, first, second, third] = line.split(',');
+      if (kind === 'packet' && !second?.includes('D')) ticks.push(Number(first));
+      const timeBase = kind === 'stream' ? parseRational(third) : null;
+      if (timeBase) stream = { width: Number(first), height: Number(second), timeBase };
+    },
+    signal,
+  );
+  return readTable(ticks, stream);
+}
+
+function readTable(
+  ticks: number[],
+  stream: { width: number; height: number; timeBase: Rational } | null,
+) {
+  if (!stream || ticks.length === 0 || !ticks.every(Number.isSafeInteger)) return null;
+  ticks.sort((a, b) => a - b);
+  return { width: stream.width, height: stream.height, frames: tableOf(ticks, stream.timeBase) };
 }
 
 /** The clip's fault where the decoder says so, else the machine's. */
