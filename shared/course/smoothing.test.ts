@@ -106,6 +106,23 @@ describe('the line that is shown', () => {
     expect(starts([frame(0, 10), frame(251, 20), frame(500, 30)])).toEqual([0, 251]);
   });
 
+  it('filters a dense and even run both ways at 6 Hz, and a sparse one by local lines', () => {
+    const lifts = Array.from({ length: 40 }, (_, i) => 50 + 3 * i + (i % 2 === 0 ? 2 : -2));
+    const dense = shownSeries(
+      lifts.map((lift, i) => frame((i * 1000) / 60, lift)),
+      'lift',
+      degrees(400),
+    ).map(({ value }) => value);
+    for (const [i, value] of smoothBothWays(lifts, 6, 60).entries())
+      expect(dense[i]).toBeCloseTo(value, 9);
+    const sparse = lifts.map((lift, i) => frame(i * 100, lift));
+    const lines = localLinear(
+      sparse.map(({ time }) => time),
+      lifts,
+    );
+    expect(shownSeries(sparse, 'lift', degrees(400)).map(({ value }) => value)).toEqual(lines);
+  });
+
   it('breaks at 500 ms in quiet stance and at the top', () => {
     expect(starts([frame(0, 0, 'quiet'), frame(500, 0, 'quiet'), frame(1001, 0, 'quiet')])).toEqual(
       [0, 1001],

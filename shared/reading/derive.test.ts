@@ -198,6 +198,22 @@ describe('what is missing', () => {
   });
 });
 
+describe('what would settle a reading that is not settled', () => {
+  const unsettled = deriveReading(inputOf([madeRep('left', from60(0.1))], { set: 'bare' }));
+
+  it('is another rep, a richer set, and more marks at the ends of the window', () => {
+    expect([2, 7]).toContain(unsettled.line);
+    const of = (code: string) => unsettled.settle.find((each) => each.code === code);
+    const from = unsettled.figures?.uC0 ?? NaN;
+    expect(of('another-rep')).toMatchObject({ from });
+    const rep = of('another-rep');
+    expect(rep?.code === 'another-rep' && rep.u < from).toBe(true);
+    const sets = unsettled.settle.flatMap((each) => (each.code === 'richer-set' ? [each.set] : []));
+    expect(sets).toContain('belt+thigh');
+    expect(of('mark-frames')).toMatchObject({ rep: 'made', from: 54, to: 66, more: 1 });
+  });
+});
+
 describe('reps that do not count', () => {
   it('stay visible with the coach’s reason and change nothing else', () => {
     const out: RepInput = { ...madeRep('left', from60(-0.4), { id: 'b' }), excluded: 'hopped' };
