@@ -3,6 +3,9 @@ import { accountsFeature } from '../features/accounts/accounts.routes.ts';
 import { athletesFeature } from '../features/athletes/athletes.routes.ts';
 import { benchFeature } from '../features/bench/bench.routes.ts';
 import { callsFeature } from '../features/calls/calls.routes.ts';
+import { clipsFeature } from '../features/clips/clips.routes.ts';
+import { formUploadFeature } from '../features/clips/form-upload.ts';
+import { resumableUploadFeature } from '../features/clips/resumable-upload.ts';
 import { commentsFeature } from '../features/comments/comments.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { repsFeature } from '../features/reps/reps.routes.ts';
@@ -18,6 +21,9 @@ export const features: readonly Feature[] = [
   todayFeature,
   athletesFeature,
   visitsFeature,
+  clipsFeature,
+  formUploadFeature,
+  resumableUploadFeature,
   callsFeature,
   repsFeature,
   readingsFeature,

@@ -1,4 +1,6 @@
+import { prepareClipJob } from '../features/clips/jobs/prepare-clip.ts';
+import { fillDemoJob } from '../db/demo/fill-demo.job.ts';
 import type { AnyJobHandler } from '../jobs/job.ts';
 
 /** Every kind of job that a worker does. */
-export const jobs: readonly AnyJobHandler[] = [];
+export const jobs: readonly AnyJobHandler[] = [prepareClipJob, fillDemoJob];

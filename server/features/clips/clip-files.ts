@@ -1,0 +1,22 @@
+import type { ClipFiles } from './clip.entity.ts';
+
+/** Everything of one clip lies under this prefix, so that deleting it leaves nothing. */
+export const clipPrefix = (practiceId: string, clipId: string): string =>
+  `${practiceId}/clips/${clipId}`;
+
+export const clipFiles = (practiceId: string, clipId: string) => {
+  const prefix = clipPrefix(practiceId, clipId);
+  return {
+    original: `${prefix}/original`,
+    bench: `${prefix}/bench.mp4`,
+    replay: `${prefix}/replay.mp4`,
+    poster: `${prefix}/poster.jpg`,
+    strip: `${prefix}/strip.jpg`,
+  } as const satisfies ClipFiles;
+};
+
+/** Pictures that are made when first asked for, and kept. */
+export const frameKey = (practiceId: string, clipId: string, index: number): string =>
+  `${clipPrefix(practiceId, clipId)}/frames/${index}.jpg`;
+export const sheetKey = (practiceId: string, clipId: string, index: number): string =>
+  `${clipPrefix(practiceId, clipId)}/sheets/${index}.jpg`;

@@ -1,0 +1,88 @@
+import type * as z from 'zod';
+import type { UserActor } from '#shared/access/actors.ts';
+import type { clipEdit } from '#shared/contracts/clips.ts';
+import { cameraStoodOf } from '#shared/records/views.ts';
+import { seconds } from '#shared/timing/units.ts';
+import type { Unit } from '#server/db/in-practice.ts';
+import { tell } from '../../events/tell.ts';
+import { Problem } from '../../http/problem.ts';
+import { enqueue } from '../../jobs/job.ts';
+import { audit } from '../practice/audit.ts';
+import { Rep } from '../reps/rep.entity.ts';
+import { type ClipInSight, clipInSight } from './clip-in-sight.ts';
+import { PREPARE_CLIP } from './jobs/prepare-clip-type.ts';
+import type { Clip } from './clip.entity.ts';
+
+type Of = Unit<UserActor>;
+
+const tellClip = (unit: Of, { clip, athlete }: ClipInSight) =>
+  tell(
+    unit,
+    { coachId: athlete.coach.id },
+    {
+      type: 'clip',
+      clipId: clip.id,
+      visitId: clip.visit.id,
+      state: clip.state,
+      progress: clip.progress ?? null,
+      secondsLeft: clip.secondsLeft ?? null,
+    },
+  );
+
+export const countReps = ({ em }: Of, clipId: string): Promise<number> =>
+  em.count(Rep, { clip: clipId });
+
+/** Corrects how a clip was filmed, if nobody has changed it meanwhile. */
+export const editClip = async (
+  unit: Of,
+  id: string,
+  edit: z.output<typeof clipEdit>,
+): Promise<Clip> => {
+  const sight = await clipInSight(unit, id, 'clip.edit');
+  const { clip } = sight;
+  if (clip.version !== edit.version) throw new Problem('edited-meanwhile');
+  const { view, supportSide, mirrored, geometry } = edit;
+  if (view !== undefined) clip.view = view;
+  if (supportSide !== undefined) clip.supportSide = supportSide;
+  if (mirrored !== undefined) clip.mirrored = mirrored;
+  if (geometry !== undefined) clip.geometry = geometry;
+  if (view !== undefined || supportSide !== undefined) {
+    const stood = cameraStoodOf(clip.view, clip.supportSide ?? null);
+    if (stood === null) throw new Problem('support-side-needed');
+    clip.cameraStood = stood;
+  }
+  await unit.em.flush();
+  await tellClip(unit, sight);
+  return clip;
+};
+
+/** Deletes the clip's rows; whoever asked then deletes its files. */
+export const deleteClip = async (unit: Of, id: string): Promise<void> => {
+  const { clip } = await clipInSight(unit, id, 'clip.delete');
+  audit(unit, 'clip.delete', id, { visit: clip.visit.id });
+  unit.em.remove(clip);
+};
+
+/** Prepares the part that is there of a cut file, or the named part of a long one. */
+export const usePart = async (
+  unit: Of,
+  id: string,
+  { fromSeconds, toSeconds }: { fromSeconds: number; toSeconds: number | null },
+): Promise<Clip> => {
+  const sight = await clipInSight(unit, id, 'clip.edit');
+  const { clip } = sight;
+  if (clip.state !== 'refused') throw new Problem('not-allowed', 'This clip was not refused.');
+  if (toSeconds !== null && toSeconds <= fromSeconds)
+    throw new Problem('invalid-input', undefined, [
+      { path: 'body.toSeconds', message: 'A part ends after it starts.' },
+    ]);
+  clip.acceptRemains = true;
+  clip.part = toSeconds === null ? null : { from: seconds(fromSeconds), to: seconds(toSeconds) };
+  clip.state = 'waiting';
+  clip.refusalCode = null;
+  clip.refusalFigures = null;
+  await enqueue(unit, PREPARE_CLIP, { clipId: id });
+  await unit.em.flush();
+  await tellClip(unit, sight);
+  return clip;
+};

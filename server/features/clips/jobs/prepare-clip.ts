@@ -1,0 +1,96 @@
+import { join } from 'node:path';
+import { prepareClip } from '#server/media/prepare-clip.ts';
+import { MediaRefusal } from '#server/media/refusals.ts';
+import { scrubLocation } from '#server/media/scrub-location.ts';
+import type { PreparedClip } from '#server/media/types.ts';
+import { product } from '../../../db/in-practice.ts';
+import { handles, type JobContext } from '../../../jobs/job.ts';
+import type { Ground } from '../../../main/ground.ts';
+import { Clip } from '../clip.entity.ts';
+import { clipFiles } from '../clip-files.ts';
+import { keepPrepared, keepRefusal } from './keep-outcome.ts';
+import { PREPARE_CLIP } from './prepare-clip-type.ts';
+import { tellClipState, tellProgress } from './tell-progress.ts';
+
+/** What preparation needs to know; null where the clip is gone or done. */
+const begin = (ground: Ground, practiceId: string, clipId: string) =>
+  ground.inPractice(product(practiceId), async (unit) => {
+    const clip = await unit.em.findOne(Clip, { id: clipId }, { populate: ['visit.athlete'] });
+    if (!clip || clip.state === 'ready' || clip.state === 'refused') return null;
+    clip.state = 'preparing';
+    clip.progress = 0;
+    clip.secondsLeft = null;
+    await unit.em.flush();
+    await tellClipState(unit, clip);
+    return {
+      original: clip.files.original,
+      originalName: clip.name,
+      part: clip.part ?? undefined,
+      acceptRemains: clip.acceptRemains,
+    };
+  });
+
+/** Moves the copies to their place; each appears there whole. */
+const store = async (
+  { storage }: Ground,
+  practiceId: string,
+  clipId: string,
+  made: PreparedClip,
+): Promise<void> => {
+  const files = clipFiles(practiceId, clipId);
+  await storage.putFile(files.bench, made.bench.path, 'video/mp4');
+  await storage.putFile(files.replay, made.replay.path, 'video/mp4');
+  await storage.putFile(files.poster, made.poster.path, 'image/jpeg');
+  await storage.putFile(files.strip, made.strip.path, 'image/jpeg');
+};
+
+/**
+ * Prepares one clip. Killed at any instant it leaves the clip waiting or preparing, and runs again from the start;
+ * the row says 'ready' only once every copy lies in its place.
+ */
+const run = async ({
+  ground,
+  practiceId,
+  payload: { clipId },
+  signal,
+}: JobContext<{ clipId: string }>): Promise<void> => {
+  const asked = await begin(ground, practiceId, clipId);
+  if (!asked) return;
+  const { original, ...options } = asked;
+  const { storage } = ground;
+  await storage.withTempDir(async (folder) => {
+    try {
+      const made = await storage.withLocalFile(original, async (path) => {
+        await scrubLocation(path);
+        return prepareClip({
+          ...options,
+          original: path,
+          outDir: join(folder, 'copies'),
+          onProgress: tellProgress(ground, practiceId, clipId),
+          signal,
+        });
+      });
+      await store(ground, practiceId, clipId, made);
+      await keepPrepared(ground, practiceId, clipId, made);
+    } catch (error) {
+      if (!(error instanceof MediaRefusal)) throw error;
+      await keepRefusal(ground, practiceId, clipId, error as MediaRefusal);
+    }
+  });
+};
+
+export const prepareClipJob = handles({
+  type: PREPARE_CLIP,
+  lockKey: ({ clipId }) => clipId,
+  run,
+  expireInMinutes: 60,
+  retryLimit: 5,
+  retryDelaySeconds: 5,
+  unfinished: {
+    sql: 'select clip_id, practice_id from clips_to_prepare()',
+    read: (row) => ({
+      practiceId: String(row.practice_id),
+      payload: { clipId: String(row.clip_id) },
+    }),
+  },
+});
