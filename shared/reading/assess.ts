@@ -6,7 +6,7 @@ import type { RepFault } from './reasons.ts';
 import type { ReadingInput } from './types.ts';
 import { bestShown, faultsOfCourse, faultsOfInput } from './usable.ts';
 
-/** One rep with every landmark set, before one is chosen. */
+/** One rep with every landmark set that may be chosen. */
 interface Candidate {
   readonly rep: RepInput;
   readonly inputFaults: readonly RepFault[];
@@ -34,7 +34,8 @@ const candidateOf = (rep: RepInput, input: ReadingInput): Candidate => {
   const courses = new Map<LandmarkSetId, RepCourse>();
   const courseFaults = new Map<LandmarkSetId, readonly RepFault[]>();
   const ordered = !inputFaults.some(({ code }) => code === 'bad-timestamps');
-  for (const set of ordered ? LANDMARK_SETS : []) {
+  const sets = input.set === null ? LANDMARK_SETS : [input.set];
+  for (const set of ordered ? sets : []) {
     const course = courseOfRep(rep, set, input.markError, { halfWidths: false });
     if (isCourse(course)) {
       courses.set(set, course);
