@@ -46,6 +46,7 @@ export default defineConfig({
           ],
           environment: 'jsdom',
           setupFiles: ['tests/support/web-setup.ts'],
+          testTimeout: 20_000,
         },
       },
     ],

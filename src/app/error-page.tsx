@@ -18,12 +18,19 @@ export function ErrorPage() {
       )
     : new Error('This page broke. What you had saved is safe.');
   return (
+    <Page title="That did not work">
+      <ErrorState error={shown}>
+        <Button onClick={() => window.location.reload()}>Load the page again</Button>
+      </ErrorState>
+    </Page>
+  );
+}
+
+/** The same where even the frame broke, or a page without a frame. */
+export function RootErrorPage() {
+  return (
     <main>
-      <Page title="That did not work">
-        <ErrorState error={shown}>
-          <Button onClick={() => window.location.reload()}>Load the page again</Button>
-        </ErrorState>
-      </Page>
+      <ErrorPage />
     </main>
   );
 }

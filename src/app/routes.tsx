@@ -1,6 +1,6 @@
 import type { ComponentType } from 'react';
 import type { RouteObject } from 'react-router-dom';
-import { ErrorPage } from './error-page.tsx';
+import { ErrorPage, RootErrorPage } from './error-page.tsx';
 import { NotFoundPage } from './not-found-page.tsx';
 import { Root } from './root.tsx';
 import { Starting } from './starting.tsx';
@@ -15,7 +15,7 @@ const lazily =
 export const pages: RouteObject[] = [
   {
     Component: Root,
-    ErrorBoundary: ErrorPage,
+    ErrorBoundary: RootErrorPage,
     HydrateFallback: Starting,
     children: [
       {

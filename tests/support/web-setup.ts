@@ -15,5 +15,12 @@ HTMLDialogElement.prototype.showModal ??= function showModal(this: HTMLDialogEle
 HTMLDialogElement.prototype.close ??= function close(this: HTMLDialogElement) {
   this.removeAttribute('open');
 };
+/** Nothing has a size here, so nothing changes it. */
+class SilentResizeObserver implements ResizeObserver {
+  observe() {}
+  unobserve() {}
+  disconnect() {}
+}
+globalThis.ResizeObserver ??= SilentResizeObserver;
 Element.prototype.scrollIntoView ??= () => undefined;
 window.scrollTo = () => undefined;

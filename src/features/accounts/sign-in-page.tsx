@@ -1,6 +1,4 @@
-import { zodResolver } from '@hookform/resolvers/zod';
 import { useQueryClient } from '@tanstack/react-query';
-import { useForm } from 'react-hook-form';
 import { useNavigate, useSearchParams } from 'react-router-dom';
 import { signInBody } from '#shared/contracts/accounts.ts';
 import { routes } from '#shared/contracts/routes.ts';
@@ -11,14 +9,12 @@ import { Bird } from '#src/ui/bird.tsx';
 import { Button } from '#src/ui/button.tsx';
 import { Form } from '#src/ui/form/form.tsx';
 import { TextField } from '#src/ui/form/text-field.tsx';
+import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import { ownPlace } from './own-place.ts';
 
 /** Opens a session and goes on to where the person wanted to be. */
 export function SignInPage() {
-  const form = useForm({
-    resolver: zodResolver(signInBody),
-    defaultValues: { email: '', password: '' },
-  });
+  const form = useZodForm(signInBody, { email: '', password: '' });
   const client = useQueryClient();
   const navigate = useNavigate();
   const [search] = useSearchParams();

@@ -1,5 +1,3 @@
-import { zodResolver } from '@hookform/resolvers/zod';
-import { useForm } from 'react-hook-form';
 import type * as z from 'zod';
 import { athleteBody } from '#shared/contracts/athletes.ts';
 import { Button, ButtonLink } from '#src/ui/button.tsx';
@@ -7,6 +5,7 @@ import { today } from '#src/ui/days.ts';
 import { Form } from '#src/ui/form/form.tsx';
 import { LengthField } from '#src/ui/form/length-field.tsx';
 import { TextArea, TextField } from '#src/ui/form/text-field.tsx';
+import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 
 type Typed = z.input<typeof athleteBody>;
 export type AthleteValues = z.output<typeof athleteBody>;
@@ -35,7 +34,7 @@ export function AthleteForm({
   back: string;
   send: (values: AthleteValues) => Promise<unknown>;
 }) {
-  const form = useForm({ resolver: zodResolver(athleteBody), defaultValues: initial });
+  const form = useZodForm(athleteBody, initial);
   return (
     <Form form={form} send={send} className="max-w-form space-y-6">
       <div className="grid gap-6 phone:grid-cols-2">

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useCallback } from 'react';
+import { useCallback, useEffect, useRef } from 'react';
 import { Link, useSearchParams } from 'react-router-dom';
 import { athleteListOptions } from '#src/api/athletes.queries.ts';
 import { useMe } from '#src/api/me.ts';
@@ -17,9 +17,16 @@ export function AthleteListPage() {
   const [search, setSearch] = useSearchParams();
   const { user } = useMe();
   const list = useQuery(athleteListOptions(queryOf(search)));
+  // two changes in one moment (a search that is still being typed, then a filter) build on each other
+  const latest = useRef(search);
+  useEffect(() => {
+    latest.current = search;
+  }, [search]);
   const onChange = useCallback(
-    (field: ListField, value: string) =>
-      setSearch((now) => changed(now, field, value), { replace: true, preventScrollReset: true }),
+    (field: ListField, value: string) => {
+      latest.current = changed(latest.current, field, value);
+      void setSearch(latest.current, { replace: true, preventScrollReset: true });
+    },
     [setSearch],
   );
   const filtered = ['q', 'consent', 'coach'].some((field) => search.has(field));

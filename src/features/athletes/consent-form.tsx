@@ -1,6 +1,5 @@
-import { zodResolver } from '@hookform/resolvers/zod';
 import { useQueryClient } from '@tanstack/react-query';
-import { useForm, useWatch } from 'react-hook-form';
+import { useWatch } from 'react-hook-form';
 import { useNavigate } from 'react-router-dom';
 import type * as z from 'zod';
 import { consentBody, type Athlete, type Purpose } from '#shared/contracts/athletes.ts';
@@ -14,6 +13,7 @@ import { CheckboxField, SegmentedField } from '#src/ui/form/choice-fields.tsx';
 import { Fault } from '#src/ui/form/field-frame.tsx';
 import { Form } from '#src/ui/form/form.tsx';
 import { TextField } from '#src/ui/form/text-field.tsx';
+import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import { paths } from '#src/ui/paths.ts';
 import { useStatus } from '#src/ui/status.tsx';
 import { PURPOSES, PURPOSE_WORDS } from '#src/ui/words.ts';
@@ -32,18 +32,15 @@ export function ConsentForm({ athlete, next }: { athlete: Athlete; next: string 
   const client = useQueryClient();
   const navigate = useNavigate();
   const say = useStatus();
-  const form = useForm({
-    resolver: zodResolver(consentBody),
-    defaultValues: {
-      // a minor cannot give it alone; nothing else is chosen beforehand
-      givenBy: athlete.minor ? 'guardian' : 'athlete',
-      guardianName: null,
-      guardianRelation: null,
-      assent: false,
-      purposes: [],
-      validUntil: yearsOn(today(), 1),
-      how: '',
-    } as Typed,
+  const form = useZodForm(consentBody, {
+    // a minor cannot give it alone; nothing else is chosen beforehand
+    givenBy: athlete.minor ? 'guardian' : 'athlete',
+    guardianName: null,
+    guardianRelation: null,
+    assent: false,
+    purposes: [],
+    validUntil: yearsOn(today(), 1),
+    how: '',
   });
   const byGuardian = useWatch({ control: form.control, name: 'givenBy' }) === 'guardian';
   const purposesFault = form.formState.errors.purposes?.message;

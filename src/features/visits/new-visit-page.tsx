@@ -1,6 +1,4 @@
-import { zodResolver } from '@hookform/resolvers/zod';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { useForm } from 'react-hook-form';
 import { useNavigate, useParams } from 'react-router-dom';
 import type * as z from 'zod';
 import type { Athlete } from '#shared/contracts/athletes.ts';
@@ -12,6 +10,7 @@ import { Button, ButtonLink } from '#src/ui/button.tsx';
 import { today } from '#src/ui/days.ts';
 import { Form } from '#src/ui/form/form.tsx';
 import { TextArea, TextField } from '#src/ui/form/text-field.tsx';
+import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import { Page, Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { Caution, Empty, ErrorState, Loading } from '#src/ui/states.tsx';
@@ -61,10 +60,7 @@ type Typed = z.input<typeof visitBody>;
 function OpenVisit({ athlete }: { athlete: Athlete }) {
   const client = useQueryClient();
   const navigate = useNavigate();
-  const form = useForm({
-    resolver: zodResolver(visitBody),
-    defaultValues: { day: today(), note: '' } as Typed,
-  });
+  const form = useZodForm(visitBody, { day: today(), note: '' });
   return (
     <Form
       form={form}

@@ -1,16 +1,15 @@
-import { zodResolver } from '@hookform/resolvers/zod';
-import { useForm } from 'react-hook-form';
 import { filming as filmingSchema, type Visit } from '#shared/contracts/visits.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Form } from '#src/ui/form/form.tsx';
 import { LengthField } from '#src/ui/form/length-field.tsx';
+import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import { useStatus } from '#src/ui/status.tsx';
 import { useVisitEdit } from '../use-visit-edit.ts';
 import { FILMING } from './filming-words.ts';
 
 /** The figures by hand. An empty field is not known, and what needs it is not measured. */
 export function FilmingForm({ visit, onDone }: { visit: Visit; onDone: () => void }) {
-  const form = useForm({ resolver: zodResolver(filmingSchema), defaultValues: visit.filming });
+  const form = useZodForm(filmingSchema, visit.filming);
   const edit = useVisitEdit(visit);
   const say = useStatus();
   return (

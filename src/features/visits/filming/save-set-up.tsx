@@ -1,7 +1,5 @@
-import { zodResolver } from '@hookform/resolvers/zod';
 import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
 import { routes } from '#shared/contracts/routes.ts';
 import { setUpBody, type Visit } from '#shared/contracts/visits.ts';
 import { call } from '#src/api/client.ts';
@@ -10,6 +8,7 @@ import { Button } from '#src/ui/button.tsx';
 import { Dialog } from '#src/ui/dialog.tsx';
 import { Form } from '#src/ui/form/form.tsx';
 import { TextField } from '#src/ui/form/text-field.tsx';
+import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import { useStatus } from '#src/ui/status.tsx';
 
 const nameOnly = setUpBody.pick({ name: true });
@@ -30,7 +29,7 @@ export function SaveSetUp({ filming }: { filming: Visit['filming'] }) {
 }
 
 function NameForm({ filming, onDone }: { filming: Visit['filming']; onDone: () => void }) {
-  const form = useForm({ resolver: zodResolver(nameOnly), defaultValues: { name: '' } });
+  const form = useZodForm(nameOnly, { name: '' });
   const client = useQueryClient();
   const say = useStatus();
   return (

@@ -1,6 +1,5 @@
-import { zodResolver } from '@hookform/resolvers/zod';
 import { useQueryClient } from '@tanstack/react-query';
-import { useForm, useWatch, type DefaultValues } from 'react-hook-form';
+import { useWatch, type DefaultValues } from 'react-hook-form';
 import { routes } from '#shared/contracts/routes.ts';
 import { SAFETY_QUESTIONS, type Visit } from '#shared/contracts/visits.ts';
 import { call } from '#src/api/client.ts';
@@ -9,6 +8,7 @@ import { Button } from '#src/ui/button.tsx';
 import { CheckboxField } from '#src/ui/form/choice-fields.tsx';
 import { Form } from '#src/ui/form/form.tsx';
 import { TextField } from '#src/ui/form/text-field.tsx';
+import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import { Caution } from '#src/ui/states.tsx';
 import { useStatus } from '#src/ui/status.tsx';
 import {
@@ -35,11 +35,8 @@ export function SafetyForm({
   const { id, name, minor } = { ...visit.athlete, name: visit.athlete.name.split(' ')[0] };
   const client = useQueryClient();
   const say = useStatus();
-  const form = useForm<SafetyTyped, unknown, SafetyValues>({
-    resolver: zodResolver(safetyFormFor(minor)),
-    // unanswered is no value of the contract: that is what makes it a fault
-    defaultValues: unanswered(minor) as DefaultValues<SafetyTyped>,
-  });
+  // unanswered is no value of the contract: that is what makes it a fault
+  const form = useZodForm(safetyFormFor(minor), unanswered(minor) as DefaultValues<SafetyTyped>);
   const answers: Partial<Record<string, boolean>> =
     useWatch({ control: form.control, name: 'answers' }) ?? {};
   const yes = yesAnswers(answers);

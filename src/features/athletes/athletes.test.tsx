@@ -1,0 +1,187 @@
+import { screen, waitFor, within } from '@testing-library/react';
+import { describe, expect, it } from 'vitest';
+import { routes } from '#shared/contracts/routes.ts';
+import { Refuse } from '#tests/support/fake-api.ts';
+import { aConsent, anAthlete, athleteId, aVisitRow, consentId } from '#tests/support/records.ts';
+import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
+
+const page = (total: number, items = [anAthlete()]) => ({ items, total, page: 1, pageSize: 25 });
+/** The athlete's page with its parts; consents and visits empty unless given. */
+const athleteApi = (athlete = anAthlete()) =>
+  signedInApi()
+    .on(routes.athlete, () => athlete)
+    .on(routes.listConsents, () => ({ items: [] }))
+    .on(routes.listVisits, () => ({ items: [] }));
+
+describe('the list of athletes', () => {
+  it('keeps search, filter and page in the address', async () => {
+    const api = signedInApi().on(routes.listAthletes, () => page(57));
+    const { user, place } = renderAt('/athletes');
+    await user.type(await screen.findByLabelText('Name or sport'), 'ines');
+    await waitFor(() => expect(place()).toBe('/athletes?q=ines'));
+    await user.selectOptions(screen.getByLabelText('Consent'), 'none');
+    await user.click(await screen.findByRole('link', { name: 'Next' }));
+    await waitFor(() => expect(place()).toBe('/athletes?q=ines&consent=none&page=2'));
+    await waitFor(() =>
+      expect(Object.fromEntries(api.calls(routes.listAthletes).at(-1)?.query ?? [])).toEqual({
+        q: 'ines',
+        consent: 'none',
+        page: '2',
+      }),
+    );
+    expect(screen.getByLabelText('Name or sport')).toHaveValue('ines');
+  });
+
+  it('tells an empty practice from a search without a hit', async () => {
+    signedInApi().on(routes.listAthletes, ({ query }) => page(0, query.has('q') ? [] : []));
+    const { router } = renderAt('/athletes');
+    expect(await screen.findByText('No athletes yet')).toBeVisible();
+    await router.navigate('/athletes?q=nobody');
+    expect(await screen.findByText('Nobody fits')).toBeVisible();
+  });
+});
+
+describe('adding an athlete', () => {
+  it('sends millimetres and null for what is not known, then leads to the athlete', async () => {
+    const api = athleteApi().on(routes.addAthlete, () => anAthlete());
+    const { user, place } = renderAt('/athletes/new');
+    await user.type(await screen.findByLabelText('Given name'), 'Ines');
+    await user.type(screen.getByLabelText('Family name'), 'Marlow');
+    await user.type(screen.getByLabelText('Date of birth'), '2004-05-02');
+    await user.type(screen.getByLabelText(/^Body height/), '174,5');
+    await user.click(screen.getByRole('button', { name: 'Add' }));
+    await waitFor(() => expect(place()).toBe(`/athletes/${athleteId}`));
+    expect(api.calls(routes.addAthlete)[0]?.body).toEqual({
+      givenName: 'Ines',
+      familyName: 'Marlow',
+      birthDate: '2004-05-02',
+      heightMm: 1745,
+      sport: '',
+      cautions: '',
+      contactEmail: null,
+    });
+  });
+
+  it('shows a fault of the server at its field, in the field’s own unit', async () => {
+    athleteApi().on(
+      routes.addAthlete,
+      () =>
+        new Refuse('invalid-input', {
+          faults: [{ path: 'body.heightMm', message: 'At most 2400 mm.' }],
+        }),
+    );
+    const { user } = renderAt('/athletes/new');
+    await user.type(await screen.findByLabelText('Given name'), 'Ines');
+    await user.type(screen.getByLabelText('Family name'), 'Marlow');
+    await user.type(screen.getByLabelText('Date of birth'), '2004-05-02');
+    await user.click(screen.getByRole('button', { name: 'Add' }));
+    const height = await screen.findByLabelText(/^Body height/);
+    await waitFor(() => expect(height).toBeInvalid());
+    expect(height).toHaveAccessibleDescription(/At most 240 cm\./);
+  });
+});
+
+describe('changing an athlete', () => {
+  it('never writes over a newer version, and offers to load it', async () => {
+    let stored = anAthlete({ version: 1 });
+    const api = athleteApi()
+      .on(routes.athlete, () => stored)
+      .on(routes.editAthlete, ({ body }) =>
+        (body as { version: number }).version === stored.version
+          ? stored
+          : new Refuse('edited-meanwhile'),
+      );
+    const { user, place } = renderAt(`/athletes/${athleteId}/edit`);
+    const sport = await screen.findByLabelText(/^Sport/);
+    stored = anAthlete({ version: 2, sport: 'sprint' });
+    await user.clear(sport);
+    await user.type(sport, 'long jump');
+    await user.click(screen.getByRole('button', { name: 'Save' }));
+    await user.click(await screen.findByRole('button', { name: 'Load the newer version' }));
+    await waitFor(() => expect(screen.getByLabelText(/^Sport/)).toHaveValue('sprint'));
+    await user.click(screen.getByRole('button', { name: 'Save' }));
+    await waitFor(() => expect(place()).toBe(`/athletes/${athleteId}`));
+    expect(
+      api.calls(routes.editAthlete).map(({ body }) => (body as { version: number }).version),
+    ).toEqual([1, 2]);
+  });
+});
+
+describe('consent', () => {
+  it('takes a minor’s only from a named guardian, with nothing ticked beforehand', async () => {
+    const api = athleteApi(anAthlete({ minor: true, consentedTo: [], consentUntil: null })).on(
+      routes.recordConsent,
+      () => aConsent(),
+    );
+    const { user, place } = renderAt(`/athletes/${athleteId}/consents/new?then=visit`);
+    const save = await screen.findByRole('button', { name: 'Record the consent' });
+    expect(screen.queryByRole('checkbox', { checked: true })).toBeNull();
+    await user.click(screen.getByRole('checkbox', { name: /^Filming and marking/ }));
+    await user.click(save);
+    expect(await screen.findByRole('alert')).toHaveTextContent('Write who gave the consent.');
+    expect(api.calls(routes.recordConsent)).toHaveLength(0);
+    await user.type(screen.getByLabelText('Guardian’s name'), 'Anita Marlow');
+    await user.click(screen.getByRole('checkbox', { name: /was asked in words/ }));
+    await user.click(save);
+    await waitFor(() => expect(place()).toBe(`/athletes/${athleteId}/visits/new`));
+    expect(api.calls(routes.recordConsent)[0]?.body).toMatchObject({
+      givenBy: 'guardian',
+      guardianName: 'Anita Marlow',
+      assent: true,
+      purposes: ['assessment'],
+    });
+  });
+
+  it('is withdrawn only after a question', async () => {
+    const api = athleteApi()
+      .on(routes.listConsents, () => ({ items: [aConsent()] }))
+      .on(routes.withdrawConsent, () => aConsent({ state: 'withdrawn' }));
+    const { user } = renderAt(`/athletes/${athleteId}`);
+    await user.click(await screen.findByRole('button', { name: 'Withdraw' }));
+    expect(api.calls(routes.withdrawConsent)).toHaveLength(0);
+    await user.click(screen.getByRole('button', { name: 'Withdraw it' }));
+    await waitFor(() => expect(api.calls(routes.withdrawConsent)[0]?.params.id).toBe(consentId));
+  });
+});
+
+describe('the athlete’s page', () => {
+  it('keeps what was seen and what was measured apart', async () => {
+    athleteApi().on(routes.listVisits, () => ({
+      items: [
+        aVisitRow({
+          sides: [
+            {
+              side: 'right',
+              call: 'unsure',
+              reading: {
+                code: 'early-turn-out',
+                label: 'Turns out early',
+                change: 6.8,
+                plusMinus: 3.6,
+                u: 1.84,
+                provisional: true,
+              },
+            },
+            { side: 'left', call: 'on-time', reading: null },
+          ],
+        }),
+      ],
+    }));
+    renderAt(`/athletes/${athleteId}`);
+    const table = await screen.findByRole('table', { name: 'Visits' });
+    const [, right, left] = within(table).getAllByRole('row')[1]?.children ?? [];
+    expect(right).toHaveTextContent('Turns out early+6.8° ± 3.6, by eye: unsureprovisional');
+    expect(left).toHaveTextContent('Turned in on timeseen by the coach, not measured');
+  });
+
+  it('leads to the consent before it leads to a visit', async () => {
+    athleteApi(anAthlete({ consentedTo: [], consentUntil: null }));
+    renderAt(`/athletes/${athleteId}`);
+    await screen.findByRole('heading', { name: 'Ines Marlow' });
+    expect(screen.queryByRole('link', { name: 'New visit' })).toBeNull();
+    expect(screen.getAllByRole('link', { name: 'Record the consent' })[0]).toHaveAttribute(
+      'href',
+      `/athletes/${athleteId}/consents/new`,
+    );
+  });
+});

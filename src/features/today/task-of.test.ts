@@ -1,0 +1,83 @@
+import { describe, expect, it } from 'vitest';
+import type { Waiting } from '#shared/contracts/today.ts';
+import { athleteId, clipId, otherId, visitId } from '#tests/support/records.ts';
+import { groupTasks, isWork } from './groups.ts';
+import { taskOf } from './task-of.ts';
+
+const common = {
+  athlete: { id: athleteId, name: 'Ines Marlow' },
+  at: '2026-03-03T16:20:00Z',
+};
+const items: Waiting[] = [
+  { ...common, kind: 'clip-preparing', clipId, visitId, name: 'IMG_1.MOV', progress: 42.4 },
+  {
+    ...common,
+    kind: 'clip-refused',
+    clipId,
+    visitId,
+    name: 'IMG_2.MOV',
+    sentence: 'Send it again.',
+  },
+  { ...common, kind: 'call-missing', visitId, side: 'right' },
+  { ...common, kind: 'rep-unmarked', clipId, repNumber: 2, side: 'left' },
+  { ...common, kind: 'reading-ready', visitId, side: 'left', label: 'Turns out early' },
+  {
+    ...common,
+    kind: 'comment-open',
+    clipId,
+    commentId: otherId,
+    frame: 4,
+    body: 'is the heel down?',
+    by: { id: otherId, name: 'Tobias Lindqvist' },
+  },
+  { ...common, kind: 'consent-lapses', until: '2026-03-09' },
+  { ...common, kind: 'link-lapses', visitId, replayId: otherId, expiresAt: '2026-03-12T00:00:00Z' },
+];
+
+describe('taskOf', () => {
+  it('opens the exact place of each kind', () => {
+    expect(items.map((item) => [item.kind, taskOf(item).action.to])).toEqual([
+      ['clip-preparing', `/visits/${visitId}`],
+      ['clip-refused', `/visits/${visitId}#clip-${clipId}`],
+      ['call-missing', `/visits/${visitId}/sides/right/call`],
+      ['rep-unmarked', `/clips/${clipId}`],
+      ['reading-ready', `/visits/${visitId}/sides/left`],
+      ['comment-open', `/clips/${clipId}?frame=4&comment=${otherId}`],
+      ['consent-lapses', `/athletes/${athleteId}/consents/new`],
+      ['link-lapses', `/visits/${visitId}`],
+    ]);
+  });
+
+  it('gives every row a key of its own and names athlete and side', () => {
+    const tasks = items.map(taskOf);
+    expect(new Set(tasks.map(({ key }) => key)).size).toBe(items.length);
+    expect(tasks[3]?.title).toBe('Ines Marlow, left support, rep 2');
+    expect(tasks[0]?.detail).toBe('Being prepared, 42 %.');
+  });
+
+  it('does not let a long comment fill the page', () => {
+    const [comment] = items.filter((item) => item.kind === 'comment-open');
+    if (comment === undefined) throw new Error('no comment among the items');
+    const { title } = taskOf({ ...comment, body: 'is the heel down? '.repeat(20) });
+    expect(title.length).toBeLessThan(110);
+    expect(title).toMatch(/ …”$/);
+  });
+});
+
+describe('groupTasks', () => {
+  const order = (role: 'coach' | 'supervisor') =>
+    groupTasks(items.map(taskOf), role).map(({ group }) => group);
+  it('lets a coach start with the call, a supervisor with what others brought', () => {
+    expect(order('coach')[0]).toBe('call');
+    expect(order('supervisor').slice(0, 2)).toEqual(['review', 'answer']);
+  });
+  it('keeps every task in some group for every role', () => {
+    for (const role of ['coach', 'supervisor', 'owner'] as const)
+      expect(groupTasks(items.map(taskOf), role).flatMap(({ tasks }) => tasks)).toHaveLength(
+        items.length,
+      );
+  });
+  it('does not count what only takes time as work', () => {
+    expect(items.map(taskOf).filter(isWork)).toHaveLength(items.length - 1);
+  });
+});

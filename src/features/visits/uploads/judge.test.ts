@@ -1,0 +1,72 @@
+import { describe, expect, it } from 'vitest';
+import { seconds } from '#shared/timing/units.ts';
+import type { LookedAtClip } from '#src/video/look-at-file.ts';
+import { judge, LARGEST_BYTES } from './judge.ts';
+
+const look = (change: Partial<LookedAtClip> = {}): LookedAtClip => ({
+  outcome: 'clip',
+  container: 'mov',
+  codec: 'hevc',
+  width: 1080,
+  height: 1920,
+  rotation: 90,
+  length: seconds(7.2),
+  frameRate: { kind: 'constant', fps: 240, gaps: 0 },
+  frames: 1728,
+  hdr: false,
+  decodableHere: false,
+  cutShort: false,
+  ...change,
+});
+const constant = (fps: number) => ({ kind: 'constant' as const, fps, gaps: 0 });
+
+describe('judge', () => {
+  it('calls a clip good that this browser cannot even decode', () => {
+    expect(judge(look(), 48e6)).toEqual({
+      grade: 'good',
+      facts: '240 frames per second, 1080 × 1920, 7.2 s',
+      advice: [],
+      sendable: true,
+    });
+  });
+
+  it('says so where the rate varies, and leaves out a rate that is not known', () => {
+    const varying = { kind: 'variable' as const, averageFps: 57.6, lowestFps: 30, highestFps: 60 };
+    expect(judge(look({ frameRate: varying }), 1).facts).toBe(
+      'about 58 frames per second, varying, 1080 × 1920, 7.2 s',
+    );
+    expect(judge(look({ frameRate: null }), 1).facts).toBe('1080 × 1920, 7.2 s');
+  });
+
+  it.each([
+    ['30 frames per second', { frameRate: constant(30) }, 'weak', /at 60 frames per second/],
+    ['15 frames per second', { frameRate: constant(15) }, 'again', /15 show too little/],
+    ['720p', { width: 720, height: 1280 }, 'weak', /at 1080p/],
+    ['a thumbnail', { width: 180, height: 320 }, 'again', /too small/],
+    ['a lying phone', { width: 1920, height: 1080 }, 'weak', /Filmed lying/],
+    ['two seconds', { length: seconds(2) }, 'weak', /three still seconds/],
+    ['five minutes', { length: seconds(300) }, 'weak', /part that matters/],
+    ['a cut file', { cutShort: true }, 'again', /end of the file is missing/],
+  ] as const)('says what to do about %s', (_, change, grade, words) => {
+    const verdict = judge(look(change), 48e6);
+    expect(verdict.grade).toBe(grade);
+    expect(verdict.advice.join(' ')).toMatch(words);
+    expect(verdict.sendable).toBe(true);
+  });
+
+  it('does not send what is too large to be taken, or holds nothing', () => {
+    expect(judge(look(), LARGEST_BYTES + 1)).toMatchObject({ grade: 'again', sendable: false });
+    const empty = { outcome: 'empty' as const, advice: 'The file is empty.' };
+    expect(judge(empty, 0)).toEqual({
+      grade: 'again',
+      facts: null,
+      advice: ['The file is empty.'],
+      sendable: false,
+    });
+  });
+
+  it('lets a file be sent that only this device cannot read', () => {
+    const other = { outcome: 'not-a-video' as const, advice: 'Choose an MP4.' };
+    expect(judge(other, 5).sendable).toBe(true);
+  });
+});
