@@ -21,6 +21,8 @@ export interface ClipPlan {
   readonly shapes: Readonly<Record<Side, TurnShapeName>>;
   readonly habits: Habits;
   readonly script: Script;
+  /** lift at which a picture is kept beside the clip, degrees */
+  readonly posterLift: number | null;
 }
 
 const FRONT: CameraPlan = {
@@ -56,6 +58,7 @@ export const CLIPS: readonly ClipPlan[] = [
     pointers: { belt: 140, thigh: 125 },
     shapes: { left: 'early', right: 'early' },
     habits: USUAL_HABITS,
+    posterLift: 80,
     script: THREE_RIGHT,
   },
   {
@@ -69,6 +72,7 @@ export const CLIPS: readonly ClipPlan[] = [
     pointers: { belt: 150, thigh: 140 },
     shapes: { left: 'expected', right: 'expected' },
     habits: { ...USUAL_HABITS, quietPelvisYaw: -1.2, footTurnOut: 12, hikeAt90: 4 },
+    posterLift: null,
     script: { ...THREE_RIGHT, seed: 23, reps: ['left', 'left', 'left'], top: 109 },
   },
   {
@@ -82,6 +86,7 @@ export const CLIPS: readonly ClipPlan[] = [
     pointers: { belt: 125, thigh: 115 },
     shapes: { left: 'expected', right: 'early' },
     habits: { ...USUAL_HABITS, footTurnOut: 6, leanAt90: 4 },
+    posterLift: null,
     script: {
       ...THREE_RIGHT,
       seed: 37,
@@ -102,6 +107,7 @@ export const CLIPS: readonly ClipPlan[] = [
     pointers: { belt: 140, thigh: 125 },
     shapes: { left: 'early', right: 'early' },
     habits: USUAL_HABITS,
+    posterLift: null,
     script: { ...THREE_RIGHT, seed: 41, reps: ['right', 'right'] },
   },
   {
@@ -115,6 +121,7 @@ export const CLIPS: readonly ClipPlan[] = [
     pointers: { belt: null, thigh: null },
     shapes: { left: 'still', right: 'still' },
     habits: { ...USUAL_HABITS, quietPelvisYaw: 0.4, footTurnOut: 14, hikeAt90: 3 },
+    posterLift: null,
     script: { ...THREE_RIGHT, seed: 53, top: 101 },
   },
   {
@@ -128,6 +135,7 @@ export const CLIPS: readonly ClipPlan[] = [
     pointers: { belt: 140, thigh: 120 },
     shapes: { left: 'still', right: 'still' },
     habits: { ...USUAL_HABITS, hikeAt90: 9, leanAt90: 6 },
+    posterLift: null,
     script: { ...THREE_RIGHT, seed: 67, reps: ['left', 'left', 'left'], top: 75 },
   },
 ];

@@ -10,6 +10,7 @@ import { Encoder } from './encoder.ts';
 import { checkTimes } from './probe.ts';
 import { encodeArguments } from './recipes.ts';
 import { turnUpright } from './rotation.ts';
+import { momentOfLift, writePicture } from './still.ts';
 
 export type Runs = TruthFile['frames']['hidden'];
 
@@ -40,8 +41,13 @@ export const filmClip = async (
   const file = join(folder, clip.file);
   const encoder = new Encoder(encodeArguments(clip, file, (timesMs.at(-1) ?? 0) / 1000));
   const hidden: Runs = {};
+  const { posterLift } = clip;
+  const posterMs = posterLift === null ? Infinity : momentOfLift(clip, posterLift) * 1000;
+  const posterFrame = timesMs.findIndex((ms) => ms >= posterMs);
   await paintFrames(clip, workerFile, timesMs, async (painted) => {
     extendRuns(hidden, painted.frame, painted.hidden);
+    if (painted.frame === posterFrame)
+      await writePicture(painted.picture, join(folder, `${clip.name}.jpg`));
     await encoder.write(painted.picture);
     report(painted.frame + 1, timesMs.length);
   });

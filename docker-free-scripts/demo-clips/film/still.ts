@@ -1,9 +1,8 @@
-import { writeFileSync } from 'node:fs';
-import { PNG } from 'pngjs';
 import type { ClipPlan } from '../clips.ts';
 import { PICTURE } from '../model/camera.ts';
 import { makeTake } from '../model/take.ts';
 import { paintFrames } from './director.ts';
+import { Encoder } from './encoder.ts';
 
 /** First moment of the first rise at which the thigh passes `lift`; the quiet stance for 0. Seconds. */
 export const momentOfLift = (clip: ClipPlan, lift: number): number => {
@@ -15,20 +14,24 @@ export const momentOfLift = (clip: ClipPlan, lift: number): number => {
   throw new RangeError(`${clip.name} never lifts the thigh to ${lift}°`);
 };
 
-/** One picture of a clip as PNG. */
-export const writeStill = async (
+/** Writes one painted picture; the file's ending says whether as JPEG or PNG. */
+export const writePicture = async (picture: Uint8Array, file: string): Promise<void> => {
+  const size = `${PICTURE.width}x${PICTURE.height}`;
+  const encoder = new Encoder([
+    ...['-y', '-v', 'error', '-f', 'rawvideo', '-pix_fmt', 'rgb24', '-s', size, '-i', 'pipe:0'],
+    ...['-frames:v', '1', '-update', '1', '-q:v', '2', '-bitexact', file],
+  ]);
+  await encoder.write(picture);
+  await encoder.finish();
+};
+
+/** Paints and writes one picture of a clip. */
+export const writeStill = (
   clip: ClipPlan,
   workerFile: string,
   lift: number,
   file: string,
-): Promise<void> => {
-  await paintFrames(clip, workerFile, [momentOfLift(clip, lift) * 1000], ({ picture }) => {
-    const png = new PNG({ ...PICTURE });
-    for (let at = 0; at < PICTURE.width * PICTURE.height; at += 1) {
-      png.data.set(picture.subarray(3 * at, 3 * at + 3), 4 * at);
-      png.data[4 * at + 3] = 255;
-    }
-    writeFileSync(file, PNG.sync.write(png));
-    return Promise.resolve();
-  });
-};
+): Promise<void> =>
+  paintFrames(clip, workerFile, [momentOfLift(clip, lift) * 1000], ({ picture }) =>
+    writePicture(picture, file),
+  );

@@ -17,6 +17,18 @@ export const TO_LAMP: Vec = unit(sub(LAMP, CENTRE));
 const ACROSS: Vec = unit(cross([0, 0, 1], TO_LAMP));
 const UPWARD: Vec = cross(TO_LAMP, ACROSS);
 
+/** Half the breadth and the height of all the person ever takes from the lamp, mm. */
+const BROAD = 760;
+const TALL = 1150;
+
+/** Whether the person could ever shade a point of the room that looks `spread` mm around itself. */
+export const mayShade = (x: number, y: number, z: number, spread: number): boolean => {
+  const point: Vec = [x - CENTRE[0], y - CENTRE[1], z - CENTRE[2]];
+  return (
+    Math.abs(dot(point, ACROSS)) < BROAD + spread && Math.abs(dot(point, UPWARD)) < TALL + spread
+  );
+};
+
 /** Turns of the pattern of looks, so that neighbouring pixels do not repeat it. */
 const TURNS = 16;
 

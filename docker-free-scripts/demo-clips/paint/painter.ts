@@ -22,6 +22,18 @@ const OFFSETS: readonly (readonly [number, number])[] = [
   [-0.1, -0.3],
 ].map(([x, y]) => [(x ?? 0) * 1.3, (y ?? 0) * 1.3] as const);
 const MARGIN = 6;
+/** The middle of the exposure last. */
+const ORDER = [0, 1, 3, 4, 2] as const;
+/** Developed pictures of the empty room, each with its own noise. */
+const EMPTY_ROOMS = 6;
+const NOTHING: Box = { left: PICTURE.width, top: PICTURE.height, right: 0, bottom: 0 };
+
+const around = (a: Box, b: Box): Box => ({
+  left: Math.min(a.left, b.left),
+  top: Math.min(a.top, b.top),
+  right: Math.max(a.right, b.right),
+  bottom: Math.max(a.bottom, b.bottom),
+});
 
 export interface Posture {
   readonly bones: Skeleton;
@@ -51,33 +63,34 @@ export class Painter {
   );
   private readonly roomShade: RoomShade;
   private readonly grainOf: Float32Array;
-  private readonly base: Uint8ClampedArray;
+  private readonly emptyRooms: readonly Uint8ClampedArray[];
+  /** where light of the person lies in `light` */
+  private painted: Box = NOTHING;
 
   constructor(private readonly plan: PainterPlan) {
     this.roomShade = new RoomShade(plan.room);
     this.grainOf = makeGrain(plan.seed);
-    this.base = this.emptyRoom();
+    const room = this.emptyRoom();
+    this.emptyRooms = Array.from({ length: EMPTY_ROOMS }, (_, i) => this.grained(room, i));
   }
 
   /**
-   * The picture of one exposure. `postureAt(share)` gives the posture at a share of the exposure from
-   * −½ to ½; `seen` is asked for the near depth afterwards by `hides`.
+   * One picture. `postureAt(share)` gives the posture at a share of the exposure from −½ to ½; the
+   * middle one is drawn last, so that `hides` afterwards tells what covers what.
    */
   paint(frame: number, postureAt: (share: number) => Posture): Uint8Array {
     const { plan, light } = this;
     const middle = postureAt(0);
     this.place(middle);
     this.shadow.draw(this.surfaces);
-    const room = this.roomShade.shade(this.shadow, blockersOf(middle.bones, this.intoRoom));
-    const boxes: Box[] = [];
-    const order = [0, 1, 3, 4, 2];
-    light.fill(0);
-    for (const exposure of order) {
+    this.roomShade.update(this.shadow, blockersOf(middle.bones, this.intoRoom));
+    this.clearLight();
+    for (const exposure of ORDER) {
       const posture = postureAt((exposure - (EXPOSURES - 1) / 2) / EXPOSURES);
       this.place(posture);
       shadeCrowding(this.surfaces, blockersOf(posture.bones, this.intoRoom));
       const box = this.project(OFFSETS[exposure] ?? [0, 0]);
-      boxes.push(box);
+      this.painted = around(this.painted, box);
       this.depth.clear(box);
       this.depth.fill(this.surfaces);
       shadePerson({
@@ -92,7 +105,7 @@ export class Painter {
         light,
       });
     }
-    return this.develop(frame, room);
+    return this.develop(frame);
   }
 
   /** Whether something stands nearer to the lens than a point, after `paint`. */
@@ -165,9 +178,27 @@ export class Painter {
     };
   }
 
-  private emptyRoom(): Uint8ClampedArray {
+  private clearLight(): void {
+    const { left, top, right, bottom } = this.painted;
+    for (let row = top; row < bottom; row += 1)
+      this.light.fill(0, 4 * (row * PICTURE.width + left), 4 * (row * PICTURE.width + right));
+    this.painted = NOTHING;
+  }
+
+  /** The empty room through the sensor: the same noise on all three channels. */
+  private grained(room: Float32Array, which: number): Uint8ClampedArray {
+    const { grainOf, plan } = this;
+    const start = grainStart(plan.seed, -1 - which);
+    return Uint8ClampedArray.from(
+      room,
+      (value, i) =>
+        value + plan.grain * (grainOf[(start + Math.floor(i / 3)) & GRAIN_MASK] as number),
+    );
+  }
+
+  private emptyRoom(): Float32Array {
     const { room } = this.plan;
-    const out = new Uint8ClampedArray(PICTURE.width * PICTURE.height * 3);
+    const out = new Float32Array(PICTURE.width * PICTURE.height * 3);
     for (let at = 0; at < PICTURE.width * PICTURE.height; at += 1) {
       const shade = this.vignette[at] as number;
       for (let c = 0; c < 3; c += 1)
@@ -178,32 +209,28 @@ export class Painter {
     return out;
   }
 
-  private develop(frame: number, shades: Float32Array): Uint8Array {
-    const { light, grainOf, base } = this;
+  private develop(frame: number): Uint8Array {
+    const { light, grainOf, vignette } = this;
     const { room, grain, seed } = this.plan;
-    const { width, height } = PICTURE;
-    const out = new Uint8ClampedArray(width * height * 3);
-    let noise = grainStart(seed, frame);
-    for (let at = 0; at < width * height; at += 1) {
-      const covered = (light[4 * at + 3] as number) / EXPOSURES;
-      const lamp = shades[2 * at] as number;
-      const open = shades[2 * at + 1] as number;
-      noise = (noise + 1) & GRAIN_MASK;
-      const speck = grain * (grainOf[noise] as number);
-      if (covered === 0 && lamp === 1 && open === 1) {
-        out[3 * at] = (base[3 * at] as number) + speck;
-        out[3 * at + 1] = (base[3 * at + 1] as number) + speck;
-        out[3 * at + 2] = (base[3 * at + 2] as number) + speck;
-        continue;
+    const { shades, area } = this.roomShade;
+    const start = grainStart(seed, frame);
+    const out = new Uint8ClampedArray(this.emptyRooms[start % EMPTY_ROOMS] ?? []);
+    const { left, top, right, bottom } = around(area, this.painted);
+    for (let row = top; row < bottom; row += 1)
+      for (let at = row * PICTURE.width + left; at < row * PICTURE.width + right; at += 1) {
+        const covered = (light[4 * at + 3] as number) / EXPOSURES;
+        const lamp = shades[2 * at] as number;
+        const open = shades[2 * at + 1] as number;
+        if (covered === 0 && lamp === 1 && open === 1) continue;
+        const speck = grain * (grainOf[(start + at) & GRAIN_MASK] as number);
+        const shade = vignette[at] as number;
+        for (let c = 0; c < 3; c += 1) {
+          const behind =
+            (room[12 * at + c] as number) * lamp + (room[12 * at + 3 + c] as number) * open;
+          const seen = (light[4 * at + c] as number) / EXPOSURES + (1 - covered) * behind;
+          out[3 * at + c] = developed(seen * shade) + speck;
+        }
       }
-      const shade = this.vignette[at] as number;
-      for (let c = 0; c < 3; c += 1) {
-        const behind =
-          (room[12 * at + c] as number) * lamp + (room[12 * at + 3 + c] as number) * open;
-        const seen = (light[4 * at + c] as number) / EXPOSURES + (1 - covered) * behind;
-        out[3 * at + c] = developed(seen * shade) + speck;
-      }
-    }
     return new Uint8Array(out.buffer);
   }
 }
