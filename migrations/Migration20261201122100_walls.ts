@@ -92,7 +92,9 @@ export class Migration20261201122100_walls extends Migration {
       this.addSql(`grant ${rights ?? 'select, insert, update, delete'} on "${table}" to redshank_app;`);
     }
     // The owner runs the functions below and needs no more than they read and write.
-    for (const table of ['practice', 'account', 'supervision', 'session', 'clip', 'replay', 'rep', 'job_outbox']) {
+    for (const table of [
+      ...['practice', 'account', 'supervision', 'session', 'visit', 'consent', 'clip', 'replay', 'rep', 'job_outbox'],
+    ]) {
       this.addSql(`create policy for_functions on "${table}" for select to redshank_owner using (true);`);
     }
     for (const table of ['session', 'job_outbox']) {
@@ -138,8 +140,11 @@ export class Migration20261201122100_walls extends Migration {
       language sql stable security definer set search_path = pg_catalog, public, pg_temp
       as $$
         select r.id, r.practice_id, r.visit_id, r.rep_id, e.clip_id, r.pass_phrase_hash
-        from public.replay r join public.rep e on e.id = r.rep_id
-        where r.token_hash = wanted_hash and r.revoked_at is null and r.expires_at > now()
+        from public.replay r join public.rep e on e.id = r.rep_id join public.visit v on v.id = r.visit_id
+        where r.token_hash = wanted_hash and r.revoked_at is null and r.expires_at > now() and exists (
+          select from public.consent c where c.athlete_id = v.athlete_id and c.withdrawn_at is null
+          and (now() at time zone 'utc')::date between c.valid_from and c.valid_until
+          and 'sharing-by-link' = any (c.purposes))
       $$;`);
     for (const signature of ['find_sign_in(text)', 'find_session(uuid)', 'touch_session(uuid)', 'find_replay(text)']) {
       this.addSql(`revoke all on function ${signature} from public;`);

@@ -8,6 +8,7 @@ import { formUploadFeature } from '../features/clips/form-upload.ts';
 import { resumableUploadFeature } from '../features/clips/resumable-upload.ts';
 import { commentsFeature } from '../features/comments/comments.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
+import { replaysFeature } from '../features/replays/replays.routes.ts';
 import { repsFeature } from '../features/reps/reps.routes.ts';
 import { systemFeature } from '../features/system/system.routes.ts';
 import { todayFeature } from '../features/today/today.routes.ts';
@@ -27,6 +28,7 @@ export const features: readonly Feature[] = [
   callsFeature,
   repsFeature,
   readingsFeature,
+  replaysFeature,
   commentsFeature,
   benchFeature,
   eventsFeature,

@@ -30,7 +30,7 @@ export const byHand = (moved: HandBoundaries): Boundaries => ({
 });
 
 /** The richest set with any of its own landmarks marked; the moments do not depend on the others. */
-const shownSet = (rep: RepInput): LandmarkSetId =>
+export const shownSet = (rep: RepInput): LandmarkSetId =>
   [...LANDMARK_SETS]
     .reverse()
     .find((set) =>

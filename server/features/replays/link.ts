@@ -1,0 +1,71 @@
+import { createHash, randomBytes, timingSafeEqual } from 'node:crypto';
+import { parseCookie, stringifySetCookie } from 'cookie';
+import type { Request, Response } from 'express';
+import type { LinkActor } from '#shared/access/actors.ts';
+import { tokenHash } from '../../http/app.ts';
+import { Problem } from '../../http/problem.ts';
+import type { Ground } from '../../main/ground.ts';
+
+const COOKIE = 'redshank_replay';
+/** How long a pass phrase that was given once is not asked for again on that device. */
+const UNLOCKED_HOURS = 12;
+
+/** 256 random bits, base64url. Kept nowhere but in the address that is handed out. */
+export const newToken = (): string => randomBytes(32).toString('base64url');
+
+interface LinkRow {
+  readonly replay_id: string;
+  readonly practice_id: string;
+  readonly pass_phrase_hash: string | null;
+}
+
+/** A link that is live: neither lapsed nor revoked, its consent valid. */
+export interface LiveLink {
+  readonly actor: LinkActor;
+  readonly passPhraseHash: string | null;
+}
+
+/** @throws Problem 'not-found', whatever the reason */
+export const liveLink = async ({ orm }: Pick<Ground, 'orm'>, token: string): Promise<LiveLink> => {
+  const [row] = await orm.em
+    .fork()
+    .execute<LinkRow[]>('select * from find_replay(?)', [tokenHash(token)]);
+  if (!row) throw new Problem('not-found');
+  return {
+    actor: { kind: 'link', practiceId: row.practice_id, replayId: row.replay_id },
+    passPhraseHash: row.pass_phrase_hash,
+  };
+};
+
+/** Known only to who holds the stored hash of the pass phrase, so that nobody else can make it. */
+const proof = (token: string, passPhraseHash: string): string =>
+  createHash('sha256').update(`${passPhraseHash} ${token}`).digest('base64url');
+
+const same = (a: string, b: string): boolean =>
+  a.length === b.length && timingSafeEqual(Buffer.from(a), Buffer.from(b));
+
+/** Remembers on this device, for this link alone, that the pass phrase was given. */
+export const unlock = (
+  res: Response,
+  token: string,
+  passPhraseHash: string,
+  secure: boolean,
+): void => {
+  res.append(
+    'Set-Cookie',
+    stringifySetCookie(COOKIE, proof(token, passPhraseHash), {
+      httpOnly: true,
+      sameSite: 'lax',
+      path: `/api/r/${token}`,
+      secure,
+      maxAge: UNLOCKED_HOURS * 3600,
+    }),
+  );
+};
+
+/** @throws Problem 'pass-phrase-needed' */
+export const needUnlocked = (req: Request, token: string, { passPhraseHash }: LiveLink): void => {
+  if (passPhraseHash === null) return;
+  const given = parseCookie(req.headers.cookie ?? '')[COOKIE] ?? '';
+  if (!same(given, proof(token, passPhraseHash))) throw new Problem('pass-phrase-needed');
+};

@@ -1,0 +1,160 @@
+import type { LinkActor } from '#shared/access/actors.ts';
+import type { PublicReplay } from '#shared/contracts/replays.ts';
+import type { ReadingResult } from '#shared/reading/types.ts';
+import { viewOf } from '#shared/records/views.ts';
+import type { Unit } from '#server/db/in-practice.ts';
+import { found, need } from '../../http/need.ts';
+import { Problem } from '../../http/problem.ts';
+import type { Athlete } from '../athletes/athlete.entity.ts';
+import { Call } from '../calls/call.entity.ts';
+import type { Clip } from '../clips/clip.entity.ts';
+import { Comment } from '../comments/comment.entity.ts';
+import { COMMENT_ORDER } from '../comments/comments.presenter.ts';
+import { readMarks } from '../marks/mark-store.ts';
+import { audit } from '../practice/audit.ts';
+import { Practice } from '../practice/practice.entity.ts';
+import { readingLabel } from '../readings/readings.presenter.ts';
+import { SideSetting } from '../readings/side-setting.entity.ts';
+import type { Rep } from '../reps/rep.entity.ts';
+import { Replay } from './replay.entity.ts';
+import { spanOf } from './span.ts';
+
+type Of = Unit<LinkActor>;
+
+/** The replay of this link with its rep, clip and people. */
+export const replayOfLink = async ({ em, actor }: Of) => {
+  need(actor, 'replay.open', {
+    kind: 'replay',
+    practiceId: actor.practiceId,
+    replayId: actor.replayId,
+  });
+  const replay = found(
+    await em.findOne(
+      Replay,
+      { id: actor.replayId },
+      { populate: ['rep.clip.frames', 'visit.athlete', 'visit.coach'] },
+    ),
+  );
+  const rep = replay.rep.unwrap() as Rep;
+  return { replay, rep, clip: rep.clip.unwrap() as Clip };
+};
+
+/** Reps whose own change goes the way of the reading. */
+const agreeing = ({ code, reps }: ReadingResult): number => {
+  const goesWith: Partial<Record<ReadingResult['code'], (change: number) => boolean>> = {
+    'early-turn-out': (change) => change > 0,
+    'expected-turn-in': (change) => change < 0,
+    'holds-still': (change) => Math.abs(change) < 5,
+  };
+  const test = goesWith[code];
+  return test ? reps.filter(({ used, fit }) => used && fit && test(fit.change.value)).length : 0;
+};
+
+const probabilityOf = ({ code, figures }: ReadingResult): number | null => {
+  if (!figures) return null;
+  switch (code) {
+    case 'early-turn-out':
+      return Math.max(figures.pEarly, figures.pBefore60);
+    case 'expected-turn-in':
+      return figures.pIn;
+    case 'holds-still':
+      return figures.pFlat;
+    default:
+      return null;
+  }
+};
+
+const readingOf = async ({ em }: Of, replay: Replay): Promise<PublicReplay['reading']> => {
+  if (!replay.showReading) return null;
+  const setting = await em.findOne(
+    SideSetting,
+    { visit: replay.visit.id, side: replay.side },
+    { populate: ['reading.result'] },
+  );
+  const reading = setting?.reading?.unwrap();
+  const result = reading?.result.unwrap();
+  if (!reading || !result) return null;
+  return {
+    code: reading.code,
+    label: readingLabel(reading.code, reading.before60),
+    change: reading.change ?? null,
+    plusMinus: reading.u === null || reading.u === undefined ? null : 1.96 * reading.u,
+    probability: probabilityOf(result),
+    repsUsed: result.reps.filter(({ used }) => used).length,
+    repsAgreeing: agreeing(result),
+  };
+};
+
+const callOf = async ({ em }: Of, replay: Replay): Promise<PublicReplay['call']> => {
+  if (!replay.showCall) return null;
+  const call = await em.findOne(
+    Call,
+    { visit: replay.visit.id, side: replay.side },
+    { orderBy: { at: 'asc', id: 'asc' } },
+  );
+  return call && { seen: call.seen, confidence: call.confidence };
+};
+
+const sharedComments = async (
+  { em }: Of,
+  clip: Clip,
+  { fromFrame, toFrame }: Replay,
+): Promise<PublicReplay['comments']> => {
+  const comments = await em.find(
+    Comment,
+    { clip: clip.id, shared: true, fromFrame: { $lte: toFrame }, toFrame: { $gte: fromFrame } },
+    { populate: ['by'], orderBy: COMMENT_ORDER },
+  );
+  return comments.map((comment) => ({
+    body: comment.body,
+    fromFrame: comment.fromFrame,
+    toFrame: comment.toFrame,
+    shape: comment.shape ?? null,
+    by: comment.by.unwrap().name,
+  }));
+};
+
+/** Everything that leaves by a link, and nothing else; each opening is counted and written down. */
+export const openReplay = async (unit: Of): Promise<PublicReplay> => {
+  const { em } = unit;
+  const { replay, rep, clip } = await replayOfLink(unit);
+  const { width, height } = clip;
+  const frames = clip.frames.unwrap();
+  if (!frames || !width || !height) throw new Problem('not-found');
+  const visit = replay.visit.unwrap();
+  const athlete = visit.athlete.unwrap() as Athlete;
+  const practice = await em.findOneOrFail(Practice, { id: replay.practiceId });
+  const reading = await readingOf(unit, replay);
+  const stored = {
+    rep,
+    clip,
+    marks: await readMarks(em, [rep.id]),
+    bodyHeightMm: athlete.heightMm ?? null,
+  };
+  const span = { from: replay.fromFrame, to: replay.toFrame };
+  const shown = spanOf(stored, span, replay.showReading);
+  await em.execute(
+    'update replay set openings = openings + 1, last_opened_at = now() where id = ?',
+    [replay.id],
+  );
+  audit(unit, 'replay.open', replay.id);
+  return {
+    athleteGivenName: athlete.givenName,
+    practice: { name: practice.name, contact: practice.contact },
+    coachName: visit.coach.unwrap().name,
+    visitDay: visit.day,
+    side: replay.side,
+    view: viewOf(clip.cameraStood, rep.supportSide),
+    width,
+    height,
+    frames,
+    fromFrame: replay.fromFrame,
+    toFrame: replay.toFrame,
+    ...shown,
+    reading,
+    call: await callOf(unit, replay),
+    message: replay.message,
+    comments: await sharedComments(unit, clip, replay),
+    expiresAt: replay.expiresAt.toISOString(),
+  };
+};

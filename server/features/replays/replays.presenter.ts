@@ -1,0 +1,28 @@
+import type { Replay as ReplayShape } from '#shared/contracts/replays.ts';
+import { presentPerson } from '../accounts/accounts.presenter.ts';
+import type { Replay } from './replay.entity.ts';
+
+const stateOf = ({ revokedAt, expiresAt }: Replay): ReplayShape['state'] => {
+  if (revokedAt) return 'revoked';
+  return expiresAt.getTime() <= Date.now() ? 'lapsed' : 'live';
+};
+
+/** @param replay with `by` and the lazy `passPhraseHash` loaded; the hash itself never leaves */
+export const presentReplay = (replay: Replay): ReplayShape => ({
+  id: replay.id,
+  visitId: replay.visit.id,
+  side: replay.side,
+  repId: replay.rep.id,
+  fromFrame: replay.fromFrame,
+  toFrame: replay.toFrame,
+  showReading: replay.showReading,
+  showCall: replay.showCall,
+  message: replay.message,
+  passPhrase: Boolean(replay.passPhraseHash?.unwrap()),
+  state: stateOf(replay),
+  openings: replay.openings,
+  lastOpenedAt: replay.lastOpenedAt?.toISOString() ?? null,
+  expiresAt: replay.expiresAt.toISOString(),
+  by: presentPerson(replay.by.unwrap()),
+  at: replay.at.toISOString(),
+});

@@ -1,0 +1,93 @@
+import type * as z from 'zod';
+import type { UserActor } from '#shared/access/actors.ts';
+import type { replayBody } from '#shared/contracts/replays.ts';
+import type { Unit } from '#server/db/in-practice.ts';
+import { tokenHash } from '../../http/app.ts';
+import { found, needCaseload } from '../../http/need.ts';
+import { Problem } from '../../http/problem.ts';
+import { hashPassword } from '../accounts/password.ts';
+import { User } from '../accounts/user.entity.ts';
+import { needConsent } from '../athletes/consent-check.ts';
+import { Call } from '../calls/call.entity.ts';
+import { needFrames } from '../clips/clip-in-sight.ts';
+import { audit } from '../practice/audit.ts';
+import { repInSight } from '../reps/rep-in-sight.ts';
+import { visitInSight } from '../visits/visit-in-sight.ts';
+import { newToken } from './link.ts';
+import { Replay } from './replay.entity.ts';
+
+type Of = Unit<UserActor>;
+const DAY_MS = 86_400_000;
+
+/** The links of a visit, newest first. */
+export const listReplays = async (unit: Of, visitId: string): Promise<Replay[]> => {
+  await visitInSight(unit, visitId, 'athlete.read');
+  return unit.em.find(
+    Replay,
+    { visit: visitId },
+    { populate: ['by', 'passPhraseHash'], orderBy: { at: 'desc', id: 'desc' } },
+  );
+};
+
+/** The pass phrase's hash, made before the transaction: it takes a third of a second. */
+export const hashOf = (passPhrase: string | null): Promise<string | null> =>
+  passPhrase === null ? Promise.resolve(null) : hashPassword(passPhrase);
+
+/**
+ * Makes a link. Its token is returned once and kept nowhere.
+ * @throws Problem 'consent-missing' without consent to sharing by link, 'call-first' without a call by eye
+ */
+export const makeReplay = async (
+  unit: Of,
+  body: z.output<typeof replayBody>,
+  passPhraseHash: string | null,
+): Promise<{ replay: Replay; token: string }> => {
+  const { em, actor } = unit;
+  const { visit, athlete } = await visitInSight(unit, body.visitId, 'replay.make');
+  const { rep, clip } = await repInSight(unit, body.repId, 'replay.make');
+  if (clip.visit.id !== visit.id || rep.supportSide !== body.side)
+    throw new Problem('invalid-input', undefined, [
+      { path: 'body.repId', message: 'Choose a rep of this visit, standing on this side.' },
+    ]);
+  await needConsent(em, athlete.id, 'sharing-by-link');
+  if ((await em.count(Call, { visit: visit.id, side: body.side })) === 0)
+    throw new Problem('call-first');
+  const { fromFrame = rep.startFrame, toFrame = rep.endFrame } = body;
+  needFrames(clip, fromFrame, toFrame);
+  if (toFrame <= fromFrame)
+    throw new Problem('invalid-input', undefined, [
+      { path: 'body.toFrame', message: 'The span ends after it starts.' },
+    ]);
+  const token = newToken();
+  const replay = em.create(Replay, {
+    visit,
+    side: body.side,
+    rep,
+    fromFrame,
+    toFrame,
+    showReading: body.showReading,
+    showCall: body.showCall,
+    message: body.message,
+    tokenHash: tokenHash(token),
+    passPhraseHash,
+    expiresAt: new Date(Date.now() + body.days * DAY_MS),
+    by: await em.findOneOrFail(User, { id: actor.id }),
+  });
+  audit(unit, 'replay.make', replay.id, { visit: visit.id, side: body.side });
+  await em.flush();
+  return { replay, token };
+};
+
+/** Kills a link at once; doing it twice is fine. */
+export const revokeReplay = async (unit: Of, id: string): Promise<Replay> => {
+  const replay = found(
+    await unit.em.findOne(Replay, { id }, { populate: ['visit.athlete', 'by', 'passPhraseHash'] }),
+  );
+  needCaseload(unit.actor, 'replay.revoke', replay.visit.unwrap().athlete.unwrap());
+  if (!replay.revokedAt) {
+    replay.revokedAt = new Date();
+    audit(unit, 'replay.revoke', id);
+  }
+  await unit.em.flush();
+  return replay;
+};
