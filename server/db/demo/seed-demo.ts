@@ -1,17 +1,15 @@
 import { Client } from 'pg';
 import type { Ground } from '../../main/ground.ts';
-import { DEMO_ACCOUNTS, GREYWATER, PENNYWORT } from './accounts.ts';
+import { DEMO_ACCOUNTS } from './accounts.ts';
 import { demoPassword, keepDemoPassword } from './demo-password.ts';
-import { seedGreywater } from './greywater.ts';
-import { seedPennywort } from './pennywort.ts';
+import { GREYWATER_STORY } from './greywater-story.ts';
+import { PENNYWORT_STORY } from './pennywort-story.ts';
+import { seedPractice } from './seed-practice.ts';
 
 /** Any number, the same in every process: two that start together make one demo. */
 const DEMO_LOCK = 4_600_003;
 
-const SEEDS = [
-  [GREYWATER, seedGreywater],
-  [PENNYWORT, seedPennywort],
-] as const;
+const STORIES = [GREYWATER_STORY, PENNYWORT_STORY];
 
 /** What a start prints about the demo. */
 export interface Demo {
@@ -30,12 +28,13 @@ export const seedDemo = async (ground: Ground): Promise<Demo | null> => {
     await client.query('select pg_advisory_lock($1)', [DEMO_LOCK]);
     const { rows } = await client.query<{ id: string }>('select id from practice');
     const there = new Set(rows.map((row) => row.id));
-    const demoIsThere = there.has(GREYWATER);
-    const foreign = [...there].some((id) => id !== GREYWATER && id !== PENNYWORT);
+    const demoIsThere = there.has(GREYWATER_STORY.id);
+    const foreign = [...there].some((id) => STORIES.every((story) => story.id !== id));
     if (!demoIsThere && (foreign || !ground.config.demo)) return null;
     const password = await demoPassword(ground);
     if (!foreign) {
-      for (const [id, seed] of SEEDS) if (!there.has(id)) await seed(ground, password);
+      for (const story of STORIES)
+        if (!there.has(story.id)) await seedPractice(ground, story, password);
     }
     if (demoIsThere) await keepDemoPassword(ground, password);
     return { lines: linesOf(password) };

@@ -1,0 +1,171 @@
+import { ref } from '@mikro-orm/core';
+import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
+import { type Api, startApi } from '#tests/support/api.ts';
+import { User } from '../../features/accounts/user.entity.ts';
+import { Clip } from '../../features/clips/clip.entity.ts';
+import { PREPARE_CLIP } from '../../features/clips/jobs/prepare-clip-type.ts';
+import { Reading } from '../../features/readings/reading.entity.ts';
+import { handles } from '../../jobs/job.ts';
+import { startWorker, type Worker } from '../../jobs/worker.ts';
+import { product } from '../in-practice.ts';
+import { DEMO_ACCOUNTS, GREYWATER, PENNYWORT } from './accounts.ts';
+import { fillDemoJob } from './fill-demo.job.ts';
+import { GREYWATER_STORY } from './greywater-story.ts';
+import { PENNYWORT_STORY } from './pennywort-story.ts';
+import { seedDemo } from './seed-demo.ts';
+import { seedPractice } from './seed-practice.ts';
+import { storyId } from './story-id.ts';
+import { clipsOf } from './story.ts';
+import { readTruth } from './truth.ts';
+
+const STORIES = [GREYWATER_STORY, PENNYWORT_STORY];
+const PLACED = new Map(
+  STORIES.flatMap((story) =>
+    clipsOf(story).map((placed) => [storyId(story.id, ...placed.clipPlace), placed] as const),
+  ),
+);
+
+/** What preparation finds, without ffmpeg: the size and the frame times that the truth gives. */
+const prepareByTruth = handles({
+  type: PREPARE_CLIP,
+  lockKey: ({ clipId }) => clipId,
+  expireInMinutes: 1,
+  retryLimit: 3,
+  retryDelaySeconds: 1,
+  run: async ({ ground, practiceId, payload: { clipId } }) => {
+    const source = PLACED.get(clipId)?.clip.source;
+    const rendered = source && 'rendered' in source ? source.rendered : null;
+    const truth = rendered === null ? null : await readTruth(rendered);
+    const count = truth?.frames.values.lift.length ?? 0;
+    await ground.inPractice(product(practiceId), async ({ em }) => {
+      const clip = await em.findOneOrFail(Clip, { id: clipId }, { populate: ['frames'] });
+      em.assign(
+        clip,
+        truth
+          ? {
+              state: 'ready',
+              ...truth.picture,
+              frameCount: count,
+              frames: ref({
+                count,
+                timeBase: { num: 1, den: 60 },
+                ticks: Array.from({ length: count }, (_, frame) => frame),
+              }),
+            }
+          : { state: 'refused', refusalCode: 'not-a-video', refusalFigures: {} },
+      );
+    });
+  },
+});
+
+let api: Api;
+let worker: Worker;
+beforeAll(async () => {
+  api = await startApi();
+  // the world of the other tests is a practice that is not the demo's
+  for (const story of STORIES) await seedPractice(api.ground, story, 'marsh and mud');
+  worker = await startWorker(api.ground, [prepareByTruth, fillDemoJob], () => undefined);
+  await vi.waitFor(
+    async () => {
+      const readings = await api.ground.inPractice(product(GREYWATER), ({ em }) =>
+        em.count(Reading),
+      );
+      expect(readings).toBe(6);
+    },
+    { timeout: 50_000, interval: 200 },
+  );
+}, 60_000);
+afterAll(async () => {
+  await worker.stop();
+  await api.close();
+});
+
+const userOf = (account: { practiceId: string; email: string }): Promise<User> =>
+  api.ground.inPractice(product(account.practiceId), ({ em }) =>
+    em.findOneOrFail(User, { email: account.email }),
+  );
+
+describe('the demo', () => {
+  it('shows every kind of reading that its clips can give', async () => {
+    const rows = await api.ground.inPractice(product(GREYWATER), ({ em }) =>
+      em.execute<
+        {
+          name: string;
+          day: string;
+          code: string;
+          provisional: boolean;
+          change: number;
+          u: number;
+        }[]
+      >(
+        `select a.given_name as name, r.code, r.provisional, r.change, r.u
+         from reading r join visit v on v.id = r.visit_id join athlete a on a.id = v.athlete_id
+         order by a.given_name, v.day`,
+      ),
+    );
+    expect(rows.map(({ name, code, provisional }) => [name, code, provisional])).toEqual([
+      ['Mara', 'early-turn-out', false],
+      ['Mara', 'not-measurable', false],
+      ['Nia', 'early-turn-out', true],
+      ['Otto', 'cannot-tell', false],
+      ['Runa', 'lift-stops-short', false],
+      ['Teo', 'expected-turn-in', false],
+    ]);
+  });
+
+  it('gives each of its people something to do', async () => {
+    const kinds = async (account: (typeof DEMO_ACCOUNTS)['coach']) => {
+      const { body } = await (await api.as(await userOf(account))).get('/api/today').expect(200);
+      return new Set((body.items as { kind: string }[]).map(({ kind }) => kind));
+    };
+    const coach = await kinds(DEMO_ACCOUNTS.coach);
+    for (const kind of [
+      'comment-open',
+      'call-missing',
+      'rep-unmarked',
+      'clip-refused',
+      'consent-lapses',
+    ]) {
+      expect(coach).toContain(kind);
+    }
+    expect(await kinds(DEMO_ACCOUNTS.supervisor)).toContain('reading-ready');
+    expect(await kinds(DEMO_ACCOUNTS.owner)).toContain('consent-lapses');
+  });
+
+  it('keeps its two practices apart', async () => {
+    const foreign = await api.as(await userOf(DEMO_ACCOUNTS.foreignCoach));
+    const list = await foreign.get('/api/athletes').expect(200);
+    expect(list.body.items.map((row: { givenName: string }) => row.givenName)).toEqual(['Ash']);
+    const clip = [...PLACED.keys()][0] ?? '';
+    await foreign.get(`/api/clips/${clip}/bench`).expect(404);
+  });
+
+  it('is not doubled when its job runs again', async () => {
+    const before = await api.ground.inPractice(product(PENNYWORT), ({ em }) =>
+      em.execute<{ clips: number; reps: number }[]>(
+        'select (select count(*)::int from clip) as clips, (select count(*)::int from rep) as reps',
+      ),
+    );
+    await fillDemoJob.run({
+      ground: api.ground,
+      practiceId: PENNYWORT,
+      payload: {},
+      signal: new AbortController().signal,
+    });
+    const after = await api.ground.inPractice(product(PENNYWORT), ({ em }) =>
+      em.execute(
+        'select (select count(*)::int from clip) as clips, (select count(*)::int from rep) as reps',
+      ),
+    );
+    expect(after).toEqual(before);
+    expect(before).toEqual([{ clips: 1, reps: 2 }]);
+  });
+});
+
+describe('making the demo', () => {
+  it('is for an empty database alone', async () => {
+    const used = await startApi();
+    expect(await seedDemo(used.ground)).toBeNull();
+    await used.close();
+  });
+});
