@@ -4,6 +4,7 @@ import { product } from '../../../db/in-practice.ts';
 import type { Ground } from '../../../main/ground.ts';
 import { Clip } from '../clip.entity.ts';
 import { clipFiles } from '../clip-files.ts';
+import { lockClip } from './lock-clip.ts';
 import { tellClipState } from './tell-progress.ts';
 
 const rateOf = (rate: MeasuredRate) => {
@@ -26,6 +27,7 @@ export const keepPrepared = (
   made: PreparedClip,
 ): Promise<void> =>
   inPractice(product(practiceId), async (unit) => {
+    await lockClip(unit.em, clipId);
     const clip = await unit.em.findOne(
       Clip,
       { id: clipId },
@@ -76,6 +78,7 @@ export const keepRefusal = (
   refusal: MediaRefusal,
 ): Promise<void> =>
   inPractice(product(practiceId), async (unit) => {
+    await lockClip(unit.em, clipId);
     const clip = await unit.em.findOne(Clip, { id: clipId }, { populate: ['visit.athlete'] });
     if (!clip) return;
     unit.em.assign(clip, {

@@ -9,12 +9,14 @@ import type { Ground } from '../../../main/ground.ts';
 import { Clip } from '../clip.entity.ts';
 import { clipFiles } from '../clip-files.ts';
 import { keepPrepared, keepRefusal } from './keep-outcome.ts';
+import { lockClip } from './lock-clip.ts';
 import { PREPARE_CLIP } from './prepare-clip-type.ts';
 import { tellClipState, tellProgress } from './tell-progress.ts';
 
 /** What preparation needs to know; null where the clip is gone or done. */
 const begin = (ground: Ground, practiceId: string, clipId: string) =>
   ground.inPractice(product(practiceId), async (unit) => {
+    await lockClip(unit.em, clipId);
     const clip = await unit.em.findOne(Clip, { id: clipId }, { populate: ['visit.athlete'] });
     if (!clip || clip.state === 'ready' || clip.state === 'refused') return null;
     clip.state = 'preparing';
