@@ -92,6 +92,12 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'clips/:id',
+                lazy: lazily(() =>
+                  import('#src/features/bench/bench-page.tsx').then((page) => page.BenchPage),
+                ),
+              },
+              {
                 path: 'practice/set-ups',
                 lazy: lazily(() =>
                   import('#src/features/practice/set-ups-page.tsx').then((page) => page.SetUpsPage),

@@ -1,4 +1,4 @@
-import { lazy, Suspense, useEffect, useRef, type ReactNode } from 'react';
+import { lazy, Suspense, useEffect, useRef, type ReactNode, type RefObject } from 'react';
 import type { FramePoint } from '#shared/geometry/points.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
@@ -12,6 +12,12 @@ import { useSize } from './use-size.ts';
 import { beyondCopy, fit, resized, type Size, type Viewport } from './viewport.ts';
 
 const KonvaLayer = lazy(() => import('./konva-layer.tsx'));
+
+export interface Shown {
+  readonly viewport: Viewport;
+  /** Of the stage, CSS px. */
+  readonly size: Size;
+}
 
 export interface ClipStageProps {
   /** Upright source frame, px. */
@@ -33,15 +39,17 @@ export interface ClipStageProps {
   onSelect: (landmark: LandmarkId) => void;
   /** A press anywhere on the stage, so that the page can take the focus there. */
   onPress: () => void;
+  /** Told what is on show, for what happens outside of painting. */
+  shownRef: RefObject<Shown | null>;
   /** Stands over the picture, in its coordinates: slider, handles. */
-  children: (shown: { viewport: Viewport; size: Size }) => ReactNode;
+  children: (shown: Shown) => ReactNode;
   className?: string;
 }
 
 const WHOLE: Viewport = { scale: 1, x: 0, y: 0 };
 
 /** The clip: picture below, transparent stage above, one viewport for both. */
-export function ClipStage({ children, className, ...props }: ClipStageProps) {
+export function ClipStage({ children, className, shownRef, ...props }: ClipStageProps) {
   const { frame, copy, board, hand, draw, movable, mode } = props;
   const { onViewport, onPlace, onMove, onSelect, onPress } = props;
   const stage = useRef<HTMLDivElement>(null);
@@ -60,6 +68,9 @@ export function ClipStage({ children, className, ...props }: ClipStageProps) {
     onViewport,
     onPlace,
     onPress,
+  });
+  useEffect(() => {
+    shownRef.current = size && { viewport, size };
   });
   const sharper = size !== null && beyondCopy(viewport, frame, copy, window.devicePixelRatio);
   return (

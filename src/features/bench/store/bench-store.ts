@@ -39,6 +39,8 @@ export interface BenchState {
   readonly lastPlaced: LandmarkId | null;
   readonly desk: Desk;
   readonly playing: boolean;
+  /** The list of keys is open. */
+  readonly keysOpen: boolean;
   readonly history: History<BenchStep>;
   readonly taste: Taste;
 }
@@ -58,6 +60,7 @@ export const createBenchStore = (
     chosen: null,
     lastPlaced: null,
     playing: false,
+    keysOpen: false,
     history: emptyHistory(),
     taste: loadTaste(),
   }));

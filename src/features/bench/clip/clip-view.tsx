@@ -1,0 +1,143 @@
+import { useEffect, useMemo, useRef } from 'react';
+import { type FramePoint, stagePoint } from '#shared/geometry/points.ts';
+import { landmark as landmarkOf } from '#shared/landmarks/table.ts';
+import { LANDMARK_IDS, type LandmarkId } from '#shared/landmarks/types.ts';
+import { ClipStage, type Shown } from '#src/canvas/clip-stage.tsx';
+import { type MarkHandle, MarkHandles } from '#src/canvas/mark-handles.tsx';
+import { centredOn, toFrame } from '#src/canvas/viewport.ts';
+import { useMarking } from '../actions/use-marking.ts';
+import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { marksOn } from '../model/bench-model.ts';
+import { MARK, withPoint } from '../store/tools.ts';
+import { useNarrow } from '../use-media.ts';
+import { fullFrameUrl } from './clip-source.ts';
+import { CornerGlass } from './corner-glass.tsx';
+import { FrameSlider } from './frame-slider.tsx';
+import { PictureState } from './picture-state.tsx';
+import { ZoomButtons } from './zoom-buttons.tsx';
+import { useDraw } from './use-draw.ts';
+import type { Pictures } from './use-pictures.ts';
+import { useTarget } from './use-target.ts';
+
+/** On a phone the stage shows this many source px across, so that a finger can aim. */
+const NARROW_SHARE = 0.5;
+
+/** The clip: picture, overlay, slider and the handles of its marks. */
+export function ClipView({ pictures }: { pictures: Pictures }) {
+  const { clipId, store, hand, board, frameSize, copySize } = useBenchTools();
+  const document = useBenchDocument();
+  const { current } = useBenchModel();
+  const frame = useBench((state) => state.frame);
+  const viewport = useBench((state) => state.viewport);
+  const tool = useBench((state) => state.tool);
+  const marking = useMarking();
+  const draw = useDraw();
+  const target = useTarget();
+  const narrow = useNarrow();
+  const slider = useRef<HTMLDivElement>(null);
+  const shown = useRef<Shown>(null);
+  const expected = target?.expected ?? null;
+
+  // a cross that was moved by keyboard belongs to the landmark it was moved for
+  useEffect(() => hand.set({ cross: null }), [hand, frame, target?.landmark]);
+
+  // on a phone the picture goes to where the landmark asked for is expected
+  useEffect(() => {
+    const size = shown.current?.size;
+    if (!narrow || !expected || !size) return;
+    const scale = size.width / (frameSize.width * NARROW_SHARE);
+    store.setState({ viewport: centredOn(expected, scale, frameSize, size) });
+  }, [narrow, expected, frameSize, store]);
+
+  const placeAt = (point: FramePoint) => {
+    if (tool.kind === 'line' || tool.kind === 'shape')
+      store.setState({ tool: withPoint(tool, point) });
+    else if (target?.landmark) marking.place(target.landmark, point);
+  };
+  /** Without a pointer: the keyboard's cross, else the expected place, else the middle of what is shown. */
+  const enter = () => {
+    const { aim, cross } = hand.get();
+    const at = aim ?? cross ?? expected;
+    const view = shown.current;
+    if (at) placeAt(at);
+    else if (view)
+      placeAt(toFrame(view.viewport, stagePoint(view.size.width / 2, view.size.height / 2)));
+  };
+  const select = (id: LandmarkId) => {
+    store.setState({ chosen: id, tool: MARK });
+    const handle = slider.current?.parentElement?.querySelector<HTMLElement>(
+      `[data-landmark="${id}"]:not([data-asked])`,
+    );
+    handle?.focus({ preventScroll: true });
+  };
+
+  const marks = marksOn(current, frame);
+  const handles = useMemo((): Omit<MarkHandle, 'at'>[] => {
+    return LANDMARK_IDS.filter((id) => marks[id]?.to === 'point').map((id) => {
+      const mark = marks[id];
+      const tracked = mark?.to === 'point' && !mark.looked;
+      return {
+        landmark: id,
+        label: `${landmarkOf(id).label}, ${tracked ? 'tracked, not looked at' : 'placed'}`,
+        asked: false,
+      };
+    });
+  }, [marks]);
+
+  return (
+    <ClipStage
+      className="bench-clip"
+      frame={frameSize}
+      copy={copySize}
+      board={board}
+      // the sharp picture must be that of the frame on show, and none while frames fly past
+      fullFrameUrl={pictures.shown === frame ? fullFrameUrl(clipId, frame) : null}
+      viewport={viewport}
+      onViewport={(next) => store.setState({ viewport: next })}
+      hand={hand}
+      draw={draw}
+      mode={target ? 'place' : 'pan'}
+      movable={document.may.mark}
+      onPlace={placeAt}
+      onMove={(id, point) => marking.place(id, point)}
+      onSelect={select}
+      shownRef={shown}
+      onPress={() => slider.current?.focus({ preventScroll: true })}
+    >
+      {(view) => {
+        const middle = toFrame(
+          view.viewport,
+          stagePoint(view.size.width / 2, view.size.height / 2),
+        );
+        const all: MarkHandle[] = handles.flatMap((handle) => {
+          const mark = marks[handle.landmark];
+          return mark?.to === 'point' ? [{ ...handle, at: mark.point }] : [];
+        });
+        if (target)
+          all.push({
+            landmark: target.landmark ?? 'acromion',
+            label: `Place here with Enter: ${target.words}. Arrows move the cross.`,
+            at: expected ?? middle,
+            asked: true,
+          });
+        return (
+          <>
+            <FrameSlider ref={slider} onEnter={enter} />
+            <MarkHandles
+              handles={all}
+              viewport={view.viewport}
+              hand={hand}
+              onMove={(id, point) => marking.place(id, point)}
+              onPlace={placeAt}
+              onRemove={marking.remove}
+              onLeave={() => slider.current?.focus({ preventScroll: true })}
+            />
+            {narrow && <CornerGlass draw={draw} target={target} />}
+            <ZoomButtons />
+            <PictureState pictures={pictures} />
+          </>
+        );
+      }}
+    </ClipStage>
+  );
+}

@@ -1,0 +1,73 @@
+import type { FrameMarks } from '#shared/landmarks/commands.ts';
+import type { LandmarkId } from '#shared/landmarks/types.ts';
+import { hipCentre } from '#shared/measures/hip-centre.ts';
+import { noteLine, noteShape } from '#shared/overlay/notes.ts';
+import { overlay } from '#shared/overlay/overlay.ts';
+import type { HipCentres } from '#shared/overlay/segments.ts';
+import type { Primitive } from '#shared/overlay/types.ts';
+import type { FrameValues } from '#shared/overlay/value-labels.ts';
+import { engineMarks } from '#shared/records/engine-input.ts';
+import type { BenchModel } from '../model/bench-model.ts';
+import { draftShape, type Tool } from '../store/tools.ts';
+import type { Shape } from '#shared/contracts/comments.ts';
+import type { ClipGeometry } from '#shared/contracts/clips.ts';
+
+/** Hip centres of a frame, by the ASIS distance of the rep's quiet stance. */
+export const hipsOf = (marks: FrameMarks, width: number | null): HipCentres => {
+  const support = marks['asis-support'];
+  const lifted = marks['asis-lifted'];
+  if (support?.to !== 'point' || lifted?.to !== 'point' || width === null)
+    return { support: null, lifted: null };
+  return {
+    support: hipCentre(support.point, lifted.point, width),
+    lifted: hipCentre(lifted.point, support.point, width),
+  };
+};
+
+export interface Drawn {
+  readonly model: BenchModel;
+  readonly marks: FrameMarks;
+  readonly sourceLongEdge: number;
+  /** Null: no figures on the picture. */
+  readonly values: FrameValues | null;
+  readonly conflicts: ReadonlySet<LandmarkId>;
+  /** What the comments at this frame point at. */
+  readonly shapes: readonly Shape[];
+  readonly tool: Tool;
+  readonly geometry: ClipGeometry;
+  /** Rod and plumb line are drawn while the set-up is open. */
+  readonly setUp: boolean;
+}
+
+/** Everything on the picture of one frame: marks and values, then what people pointed at. */
+export const drawnOn = (drawn: Drawn): Primitive[] => {
+  const { model, marks, values, conflicts, shapes, tool, geometry, setUp } = drawn;
+  const { current, view } = model;
+  const side = current?.rep.supportSide ?? 'left';
+  const width = current?.course?.setting.reference.width ?? null;
+  const draft = draftShape(tool);
+  return [
+    ...(setUp ? setUpLines(geometry, tool) : []),
+    ...overlay({
+      view,
+      supportSide: side,
+      marks: engineMarks(marks, drawn.sourceLongEdge),
+      hips: hipsOf(marks, width),
+      values,
+      conflicts,
+    }),
+    ...shapes.map(noteShape),
+    ...(draft ? [noteShape(draft)] : []),
+  ];
+};
+
+const setUpLines = ({ scale, plumb }: ClipGeometry, tool: Tool): Primitive[] => {
+  const drawing = tool.kind === 'line' ? tool : null;
+  const [a, b] = drawing?.points ?? [];
+  const stored = scale && scale.from !== 'typed' ? scale : null;
+  return [
+    ...(stored && !(drawing && drawing.of !== 'plumb') ? noteLine(stored.a, stored.b) : []),
+    ...(plumb && drawing?.of !== 'plumb' ? noteLine(plumb.top, plumb.bottom) : []),
+    ...(a && b ? noteLine(a, b) : a ? [noteShape({ kind: 'point', ...a })] : []),
+  ];
+};

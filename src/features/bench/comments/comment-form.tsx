@@ -1,0 +1,106 @@
+import { useId, useState } from 'react';
+import { Button } from '#src/ui/button.tsx';
+import { Checkbox } from '#src/ui/checkbox.tsx';
+import { FIELD_BOX } from '#src/ui/form/field-frame.tsx';
+import { ErrorState } from '#src/ui/states.tsx';
+import { useBench, useBenchTools } from '../bench-context.ts';
+import { MARK, shapeOf, toolAsks } from '../store/tools.ts';
+import { useComments } from './use-comments.ts';
+
+/** A comment at the frame on show, or from a frame on to the one on show, with a shape if wished. */
+export function CommentForm() {
+  const { store } = useBenchTools();
+  const { add } = useComments();
+  const frame = useBench((state) => state.frame);
+  const tool = useBench((state) => state.tool);
+  const [body, setBody] = useState('');
+  const [from, setFrom] = useState<number | null>(null);
+  const [shared, setShared] = useState(false);
+  const [busy, setBusy] = useState(false);
+  const [error, setError] = useState<unknown>(null);
+  const id = useId();
+  const drawing = tool.kind === 'shape' ? tool : null;
+  const asks = drawing && toolAsks(drawing);
+  const [fromFrame, toFrame] =
+    from === null ? [frame, frame] : from <= frame ? [from, frame] : [frame, from];
+
+  const draw = (of: 'point' | 'ring') =>
+    store.setState({
+      tool: drawing?.of === of ? MARK : { kind: 'shape', of, points: [] },
+    });
+  const send = async () => {
+    if (body.trim() === '') return;
+    setBusy(true);
+    setError(null);
+    try {
+      await add({ body, fromFrame, toFrame, shape: shapeOf(tool), shared });
+      setBody('');
+      setFrom(null);
+      setShared(false);
+      if (drawing) store.setState({ tool: MARK });
+    } catch (problem) {
+      setError(problem);
+    } finally {
+      setBusy(false);
+    }
+  };
+  return (
+    <section aria-label="New comment" className="border-t border-rule py-4">
+      <label htmlFor={id} className="font-bold">
+        {fromFrame === toFrame
+          ? `Comment at frame ${frame}`
+          : `Comment from frame ${fromFrame} to ${toFrame}`}
+      </label>
+      <textarea
+        id={id}
+        rows={2}
+        maxLength={2000}
+        data-comment-field=""
+        className={FIELD_BOX}
+        value={body}
+        onChange={(event) => setBody(event.target.value)}
+        onKeyDown={(event) => {
+          if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) void send();
+        }}
+      />
+      <div className="mt-2 flex flex-wrap gap-2">
+        <Button
+          className="!px-3 text-note"
+          aria-pressed={from !== null}
+          onClick={() => setFrom(from === null ? frame : null)}
+        >
+          {from === null ? 'A stretch from here' : `From ${from}: step to its end`}
+        </Button>
+        <Button
+          className="!px-3 text-note"
+          aria-pressed={drawing?.of === 'point'}
+          onClick={() => draw('point')}
+        >
+          Point
+        </Button>
+        <Button
+          className="!px-3 text-note"
+          aria-pressed={drawing?.of === 'ring'}
+          onClick={() => draw('ring')}
+        >
+          Ring
+        </Button>
+      </div>
+      {drawing && (
+        <p role="status" className="mt-2 text-note">
+          {asks === null ? 'Drawn on the picture.' : `Press on the picture: ${asks.toLowerCase()}.`}
+        </p>
+      )}
+      <Checkbox
+        label="Show it to the athlete on a replay"
+        checked={shared}
+        onChange={(event) => setShared(event.target.checked)}
+        className="border-0"
+      />
+      {error !== null && <ErrorState error={error} />}
+      <Button look="primary" busy={busy} disabled={body.trim() === ''} onClick={() => void send()}>
+        Comment
+      </Button>
+    </section>
+  );
+}

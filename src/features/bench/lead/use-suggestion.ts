@@ -1,0 +1,47 @@
+import { useMemo } from 'react';
+import type { Degrees } from '#shared/geometry/units.ts';
+import { frameIndex, type FrameIndex } from '#shared/timing/units.ts';
+import { useBenchModel, useBenchTools } from '../bench-context.ts';
+import { firstFrame, type Suggestion } from '../model/first-frames.ts';
+import { useReading } from '../reading/use-reading.ts';
+
+export interface NextFrame {
+  readonly frame: FrameIndex;
+  /** Why, before there is a reading. */
+  readonly why: Suggestion['why'] | null;
+  /** Lift there, where it is known. */
+  readonly lift: Degrees | null;
+  /** ± of the reading over all reps, now and with this frame marked. */
+  readonly gain: { readonly now: Degrees; readonly then: Degrees } | null;
+}
+
+/**
+ * The frame worth marking next: what is missing before there is a reading, then the one that would
+ * make the reading most certain. Null where another frame would not help.
+ */
+export function useNextFrame(): NextFrame | null {
+  const { times } = useBenchTools();
+  const { current, figures } = useBenchModel();
+  const { offers } = useReading();
+  return useMemo(() => {
+    if (!current || current.rep.excluded) return null;
+    const { startFrame, endFrame } = current.rep;
+    const first = firstFrame(
+      [frameIndex(startFrame), frameIndex(endFrame)],
+      times,
+      current.frames,
+      current.hill,
+    );
+    if (first) return { frame: first.frame, why: first.why, lift: null, gain: null };
+    const offer = offers.find((each) => each.rep === current.rep.id);
+    if (!offer) return null;
+    const { halfWidthNow: now, halfWidthThen: then } = offer;
+    return {
+      frame: offer.frame,
+      why: null,
+      lift: offer.lift,
+      // the gain is a figure too: it is not shown before the call by eye
+      gain: figures && now !== null && then !== null ? { now, then } : null,
+    };
+  }, [current, figures, offers, times]);
+}

@@ -1,0 +1,116 @@
+import { scaleLinear, type ScaleLinear } from 'd3-scale';
+import { frameAt } from '#shared/timing/timestamps.ts';
+import {
+  frameIndex,
+  type FrameIndex,
+  type Milliseconds,
+  milliseconds,
+} from '#shared/timing/units.ts';
+
+/** Where things lie on the strip, CSS px. Time runs to the right by the clip's exact times. */
+export interface StripLayout {
+  readonly width: number;
+  readonly height: number;
+  readonly left: number;
+  readonly right: number;
+  /** Top of the hill and its base line. */
+  readonly top: number;
+  readonly base: number;
+  readonly compact: boolean;
+  readonly from: FrameIndex;
+  readonly to: FrameIndex;
+  readonly x: (frame: number) => number;
+  /** Degrees of lift to px, highest shown 110°. */
+  readonly y: ScaleLinear<number, number>;
+  /** The frame under a place. */
+  readonly frameAtX: (x: number) => FrameIndex;
+  /** Whole seconds, or tenths of a short span, with their places. */
+  readonly ticks: readonly { readonly x: number; readonly text: string }[];
+}
+
+const HIGHEST_LIFT = 110;
+
+export const stripLayout = (
+  size: { readonly width: number; readonly height: number },
+  span: readonly [FrameIndex, FrameIndex],
+  times: readonly Milliseconds[],
+): StripLayout => {
+  const { width, height } = size;
+  const compact = width < 560;
+  const left = compact ? 34 : 46;
+  const right = width - (compact ? 6 : 14);
+  const top = compact ? 26 : 34;
+  const base = height - 34;
+  const [from, to] = span;
+  const start = times[from] ?? 0;
+  const end = times[to] ?? start;
+  const time = scaleLinear([start, Math.max(end, start + 1)], [left, right]);
+  const frameAtX = (x: number): FrameIndex => {
+    const wanted = Math.max(start, Math.min(end, time.invert(x)));
+    const shown = frameAt(times, milliseconds(wanted)) ?? from;
+    const next = frameIndex(Math.min(to, shown + 1));
+    const nearer = Math.abs((times[next] ?? 0) - wanted) < Math.abs((times[shown] ?? 0) - wanted);
+    return nearer ? next : shown;
+  };
+  const seconds = scaleLinear([start / 1000, end / 1000], [left, right]);
+  const ticks = seconds.ticks(Math.max(2, Math.floor((right - left) / 110))).map((at) => ({
+    x: seconds(at),
+    text: `${Number(at.toFixed(2))} s`,
+  }));
+  return {
+    width,
+    height,
+    left,
+    right,
+    top,
+    base,
+    compact,
+    from,
+    to,
+    x: (frame) => time(times[frame] ?? start),
+    y: scaleLinear([0, HIGHEST_LIFT], [base, top]),
+    frameAtX,
+    ticks,
+  };
+};
+
+/** Labels that would run into the one before them are left out; the ends come first. */
+export const spacedLabels = <T extends { readonly x: number; readonly text: string }>(
+  labels: readonly T[],
+  pxPerLetter = 7,
+  gap = 10,
+): T[] => {
+  const shown: T[] = [];
+  let free = -Infinity;
+  for (const label of [...labels].sort((a, b) => a.x - b.x)) {
+    if (label.x < free) continue;
+    shown.push(label);
+    free = label.x + label.text.length * pxPerLetter + gap;
+  }
+  return shown;
+};
+
+export interface Pin<T> {
+  readonly item: T;
+  readonly x: number;
+  /** Room for the pin, px; too little for words shows initials alone. */
+  readonly room: number;
+}
+
+const LEAST_ROOM = 84;
+const MOST_ROOM = 190;
+const INITIALS = 34;
+
+/** Pins in one row: each gets the room up to the next one. */
+export const pinRow = <T>(
+  items: readonly T[],
+  frameOf: (item: T) => number,
+  { x, right }: Pick<StripLayout, 'x' | 'right'>,
+): Pin<T>[] => {
+  const sorted = items.map((item) => ({ item, x: x(frameOf(item)) })).sort((a, b) => a.x - b.x);
+  return sorted.map((pin, n) => {
+    const next = sorted[n + 1]?.x ?? right + INITIALS;
+    const free = next - pin.x - 6;
+    return { ...pin, room: free < LEAST_ROOM ? INITIALS : Math.min(MOST_ROOM, free) };
+  });
+};

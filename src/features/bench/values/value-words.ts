@@ -1,0 +1,69 @@
+import { landmark } from '#shared/landmarks/table.ts';
+import type { LandmarkId } from '#shared/landmarks/types.ts';
+import type { FrameValue } from '#shared/measures/frame-values.ts';
+import type { Measure } from '#shared/measures/measure.ts';
+import type { Missing } from '#shared/measures/missing.ts';
+import { LEAST_SHOWN_LIFT } from '#shared/overlay/figures.ts';
+import { decimal, degrees, plusMinus, turn } from '#src/ui/figures.ts';
+
+const names = (ids: readonly LandmarkId[]): string => {
+  const [first] = ids;
+  if (first === undefined) return '';
+  const label = landmark(first).label.toLowerCase();
+  return ids.length === 1 ? label : `${label} and ${ids.length - 1} more`;
+};
+
+/** Why a value is not there, short enough for a cell of the table. */
+export const missingWords = (missing: Missing): string => {
+  switch (missing.code) {
+    case 'landmark-not-marked':
+      return `mark ${names(missing.landmarks)}`;
+    case 'landmark-hidden':
+      return `hidden: ${names(missing.landmarks)}`;
+    case 'no-quiet-stance':
+      return 'mark three quiet frames first';
+    case 'scale-missing':
+      return 'give the scale';
+    case 'distance-missing':
+      return 'give the distance';
+    case 'belt-pointer-length-missing':
+      return 'give the belt pointer’s length';
+    case 'thigh-pointer-length-missing':
+      return 'give the thigh pointer’s length';
+    case 'body-height-missing':
+      return 'body height not known';
+    case 'toe-direction-missing':
+      return 'side of the camera not known';
+    case 'view-cannot-show-it':
+      return 'not seen in this view';
+    case 'only-between-lifts':
+      return `from ${missing.from}° to ${missing.to}° of lift`;
+    case 'marks-coincide':
+      return 'marks lie on each other';
+  }
+};
+
+/** What would have to be filled in before it can be measured; the set-up holds it. */
+export const isSetUp = ({ code }: Missing): boolean =>
+  code === 'scale-missing' ||
+  code === 'distance-missing' ||
+  code === 'belt-pointer-length-missing' ||
+  code === 'thigh-pointer-length-missing';
+
+/** Values that carry a sign of their own direction; lift does not. */
+const UNSIGNED: ReadonlySet<string> = new Set(['lift', 'thigh-against-trunk']);
+
+export const valueText = ({ id, unit }: Measure, value: number, fromFront: boolean): string => {
+  if (unit === 'millimetres') return `${value > 0 ? '+' : ''}${decimal(value, 0)} mm`;
+  if (id === 'lift' && fromFront && value < LEAST_SHOWN_LIFT) return `< ${LEAST_SHOWN_LIFT}°`;
+  return UNSIGNED.has(id) ? degrees(value) : turn(value);
+};
+
+export const halfWidthText = (
+  { measure, value }: FrameValue,
+  fromFront: boolean,
+): string | null => {
+  if (value.halfWidth === null) return null;
+  const blind = measure.id === 'lift' && fromFront && value.value < LEAST_SHOWN_LIFT;
+  return blind ? null : plusMinus(value.halfWidth, measure.unit === 'millimetres' ? 0 : 1);
+};

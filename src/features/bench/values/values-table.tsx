@@ -1,0 +1,126 @@
+import type { FrameValue } from '#shared/measures/frame-values.ts';
+import { MEASURES } from '#shared/measures/registry.ts';
+import { cx } from '#src/ui/class-names.ts';
+import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { EXTRAS, type Extra } from '../model/led.ts';
+import { type FrameFigures } from './frame-figures.ts';
+import { useFrameFigures } from './use-frame-figures.ts';
+import { halfWidthText, isSetUp, missingWords, valueText } from './value-words.ts';
+
+/** Parts of the turn stand under it. */
+const PARTS: ReadonlySet<string> = new Set(['pelvis-part', 'thigh-part']);
+
+/** Every value of the frame on show, each with its ±, or with what it lacks. */
+export function ValuesTable() {
+  const frame = useBench((state) => state.frame);
+  const { view } = useBenchModel();
+  const figures = useFrameFigures();
+  const shown = MEASURES.filter(({ views }) => views.some((each) => each === view));
+  return (
+    <table className="bench-values">
+      <caption className="sr-only">Values of frame {frame}</caption>
+      <thead>
+        <tr>
+          <th scope="col">Values of frame {frame}, turn zero at quiet stance</th>
+          <th scope="col">
+            <span className="sr-only">value</span>
+          </th>
+          <th scope="col" className="whitespace-nowrap">
+            ± 95 %
+          </th>
+        </tr>
+      </thead>
+      <tbody>
+        {shown.map((measure) => (
+          <ValueRow
+            key={measure.id}
+            label={measure.label}
+            sign={measure.sign}
+            part={PARTS.has(measure.id)}
+            value={figures?.values.find((each) => each.measure.id === measure.id) ?? null}
+            figures={figures}
+          />
+        ))}
+      </tbody>
+    </table>
+  );
+}
+
+function ValueRow({
+  label,
+  sign,
+  part,
+  value,
+  figures,
+}: {
+  label: string;
+  sign: string;
+  part: boolean;
+  value: FrameValue | null;
+  figures: FrameFigures | null;
+}) {
+  const { view } = useBenchModel();
+  const front = view === 'front';
+  const provisional = value?.measure.id === 'turn' && figures?.shown?.provisional;
+  return (
+    <tr>
+      <th scope="row" title={sign} className={cx(part && 'pl-4 text-soft')}>
+        {label}
+        {provisional && <span className="ml-1 text-caption text-ochre">provisional</span>}
+      </th>
+      {value && value.value.missing === null ? (
+        <>
+          <td className={cx('bench-value', !part && 'font-bold')}>
+            {valueText(value.measure, value.value.value, front)}
+          </td>
+          <td className="whitespace-nowrap text-soft">{halfWidthText(value, front)}</td>
+        </>
+      ) : (
+        <td colSpan={2} className="text-soft">
+          {value?.value.missing ? <Lacking value={value} /> : '–'}
+        </td>
+      )}
+    </tr>
+  );
+}
+
+const extraOf = (value: FrameValue): Extra | null => {
+  const { missing } = value.value;
+  if (missing?.code !== 'landmark-not-marked') return null;
+  return (
+    (Object.keys(EXTRAS) as Extra[]).find((extra) =>
+      EXTRAS[extra].some((id) => missing.landmarks.some((each) => each === id)),
+    ) ?? null
+  );
+};
+
+/** What is missing, with the way to give it where there is one. */
+function Lacking({ value }: { value: FrameValue }) {
+  const { store } = useBenchTools();
+  const { missing } = value.value;
+  if (!missing) return null;
+  const extra = extraOf(value);
+  const link = 'inline-block min-h-[24px] text-left text-ink underline underline-offset-[3px]';
+  if (extra)
+    return (
+      <button
+        type="button"
+        className={link}
+        onClick={() =>
+          store.setState((state) => ({
+            taste: { ...state.taste, extras: [...new Set([...state.taste.extras, extra])] },
+            chosen: EXTRAS[extra][0],
+          }))
+        }
+      >
+        {extra === 'shoulders' ? 'mark both shoulders' : 'mark toe and heel'}
+      </button>
+    );
+  if (isSetUp(missing))
+    return (
+      <button type="button" className={link} onClick={() => store.setState({ desk: 'set-up' })}>
+        {missingWords(missing)}
+      </button>
+    );
+  return <>{missingWords(missing)}</>;
+}
