@@ -22,12 +22,17 @@ export const probedTimes = async (file: string): Promise<readonly number[]> => {
   return times.map((time) => (time - (times[0] ?? 0)) * 1000);
 };
 
-/** Fails unless the file shows as many pictures as the truth has, each at its time within 1 ms. */
+/** Files give times in millionths of a second. */
+const TOLERANCE_MS = 0.002;
+
+/** Fails unless the file shows as many pictures as the truth has, each at its time. */
 export const checkTimes = async (file: string, timesMs: readonly number[]): Promise<void> => {
   const found = await probedTimes(file);
   if (found.length !== timesMs.length)
     throw new Error(`${file} holds ${found.length} pictures instead of ${timesMs.length}`);
-  const wrong = found.findIndex((time, index) => Math.abs(time - (timesMs[index] ?? NaN)) > 1);
+  const wrong = found.findIndex(
+    (time, index) => Math.abs(time - (timesMs[index] ?? NaN)) > TOLERANCE_MS,
+  );
   if (wrong >= 0)
     throw new Error(
       `${file}: picture ${wrong} stands at ${found[wrong]} ms, not ${timesMs[wrong]} ms`,

@@ -28,8 +28,13 @@ describe('the phone’s clock', () => {
 });
 
 describe('the other clips', () => {
-  it.each(['left-expected', 'both-sides', 'bare-still'])('%s runs evenly', (name) => {
+  it.each([
+    ['left-expected', 1e-6],
+    ['both-sides', 1e-6],
+    // whole milliseconds: 33 or 34
+    ['bare-still', 1],
+  ])('%s runs evenly', (name, most) => {
     const steps = gaps(clip(name));
-    expect(Math.max(...steps) - Math.min(...steps)).toBeLessThan(1e-6);
+    expect(Math.max(...steps) - Math.min(...steps)).toBeLessThanOrEqual(most);
   });
 });

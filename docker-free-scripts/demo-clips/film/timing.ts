@@ -21,13 +21,23 @@ export const phoneClock = (): string => {
   return `if(eq(N,0),0,10*N+10*(${lost})+floor(mod(7*N*N+3*N,31)/11)-1)`;
 };
 
+/** When picture `index` is shown, ms, as the container can say it: Matroska counts whole ms. */
+const timeOf = ({ container, fps }: ClipPlan, index: number): number => {
+  const even = (index * 1000) / fps;
+  switch (container) {
+    case 'phone-hevc':
+      return (phoneTick(index) * 1000) / PHONE_TICKS;
+    case 'h264':
+      return even;
+    case 'vp9':
+      return Math.round(even);
+  }
+};
+
 /** Time of every picture from the first one on, ms, over at least `seconds`. */
 export const frameTimes = (clip: ClipPlan, seconds: number): readonly number[] => {
-  const at = (index: number): number =>
-    clip.container === 'phone-hevc'
-      ? (phoneTick(index) * 1000) / PHONE_TICKS
-      : (index * 1000) / clip.fps;
   const times: number[] = [];
-  for (let index = 0; at(index) <= seconds * 1000; index += 1) times.push(at(index));
+  for (let index = 0; timeOf(clip, index) <= seconds * 1000; index += 1)
+    times.push(timeOf(clip, index));
   return times;
 };

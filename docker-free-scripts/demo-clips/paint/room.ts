@@ -7,6 +7,8 @@ import type { RoomScene } from './room-scene.ts';
 
 /** Channels kept of every pixel of the empty room. */
 export const ROOM_CHANNELS = 12;
+/** The first of them are means over the pixel. */
+const LIGHT_CHANNELS = 6;
 /** lamp light r g b, room light r g b, point x y z, normal x y z */
 export type RoomPicture = Float32Array;
 
@@ -71,6 +73,7 @@ export const paintRoom = (
 ): void => {
   const { width, height } = PICTURE;
   const { focalPx } = camera.plan;
+  const middle = Math.floor((side * side) / 2);
   for (let row = top; row < bottom; row += 1)
     for (let column = 0; column < width; column += 1) {
       const random = seededRandom(row * width + column);
@@ -91,11 +94,12 @@ export const paintRoom = (
           const room = GROUND[c] + (SKY[c] - GROUND[c]) * sky;
           picture[at + c] = (picture[at + c] ?? 0) + hit.tint[c] * LAMP_COLOUR[c] * lamp;
           picture[at + 3 + c] = (picture[at + 3 + c] ?? 0) + hit.tint[c] * room * open;
-          picture[at + 6 + c] = (picture[at + 6 + c] ?? 0) + point[c];
-          picture[at + 9 + c] = (picture[at + 9 + c] ?? 0) + hit.normal[c];
+          // one point, not a mean: between two surfaces there is nothing for a shadow to fall on
+          if (ray === middle)
+            [picture[at + 6 + c], picture[at + 9 + c]] = [point[c], hit.normal[c]];
         }
       }
-      for (let c = 0; c < ROOM_CHANNELS; c += 1)
+      for (let c = 0; c < LIGHT_CHANNELS; c += 1)
         picture[at + c] = (picture[at + c] ?? 0) / (side * side);
     }
 };
