@@ -92,6 +92,20 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'visits/:id/sides/:side',
+                lazy: lazily(() =>
+                  import('#src/features/readings/reading-page.tsx').then(
+                    (page) => page.ReadingPage,
+                  ),
+                ),
+              },
+              {
+                path: 'visits/:id/sides/:side/call',
+                lazy: lazily(() =>
+                  import('#src/features/readings/call/call-page.tsx').then((page) => page.CallPage),
+                ),
+              },
+              {
                 path: 'clips/:id',
                 lazy: lazily(() =>
                   import('#src/features/bench/bench-page.tsx').then((page) => page.BenchPage),

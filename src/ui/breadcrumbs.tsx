@@ -12,7 +12,7 @@ export function Breadcrumbs({ crumbs }: { crumbs: readonly Crumb[] }) {
           {crumb.to === undefined ? (
             <span>{crumb.label}</span>
           ) : (
-            <Link to={crumb.to} className="-my-2.5 py-2.5">
+            <Link to={crumb.to} className="tap">
               {crumb.label}
             </Link>
           )}

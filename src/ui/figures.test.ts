@@ -24,7 +24,7 @@ describe('figures', () => {
       '0.0°',
       '0.0°',
     ]);
-    expect(plusMinus(3.64)).toBe('± 3.6');
+    expect(plusMinus(3.64)).toBe('±\u00a03.6');
   });
   it('writes sizes as people read them', () => {
     expect([999, 4_200, 5_120_000, 211_000_000, 1_830_000_000].map(fileSize)).toEqual([

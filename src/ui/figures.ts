@@ -16,8 +16,8 @@ export function turn(value: number, digits = 1): string {
   return Number(value.toFixed(digits)) > 0 ? `+${text}` : text;
 }
 
-/** What stands behind a value: `± 3.6`. */
-export const plusMinus = (value: number, digits = 1): string => `± ${decimal(value, digits)}`;
+/** What stands behind a value: `± 3.6`, never broken over two lines. */
+export const plusMinus = (value: number, digits = 1): string => `±\u00a0${decimal(value, digits)}`;
 
 /** A file's size: `211 MB`, `1.8 GB`. */
 export function fileSize(bytes: number): string {

@@ -45,9 +45,9 @@ function Known({ athlete, crumbs }: { athlete: Athlete; crumbs: { label: string;
       title={fullName(athlete)}
       crumbs={crumbs}
       lead={
-        <span className="text-body text-soft">
+        <p className="text-body text-soft">
           {aboutAthlete(athlete)} Coach {athlete.coach.name}. {visits}
-        </span>
+        </p>
       }
       actions={
         <>

@@ -21,7 +21,7 @@ export function AthleteTable({
       label: 'Athlete',
       cell: (athlete) => (
         <>
-          <Link to={paths.athlete(athlete.id)} className="-my-2.5 inline-block py-2.5 font-bold">
+          <Link to={paths.athlete(athlete.id)} className="tap font-bold">
             {fullName(athlete)}
           </Link>
           <span className="block text-note text-soft">
@@ -58,7 +58,7 @@ export function AthleteTable({
       cell: ({ coach }) => (
         <Link
           to={coachAddress(coach.id)}
-          className="-my-2.5 inline-block py-2.5"
+          className="tap"
           aria-label={`${coach.name}: only their athletes`}
         >
           {coach.name}

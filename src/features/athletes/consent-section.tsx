@@ -100,9 +100,9 @@ function ValidConsent({ athlete, consent }: { athlete: Athlete; consent: Consent
     <li className="flex flex-wrap items-center justify-between gap-x-6 text-note text-soft">
       <p>
         Given by {giver(consent, athlete)} on {longDay(consent.validFrom)}
-        {consent.how !== '' && `, ${consent.how}`}
-        {consent.assent && `; ${athlete.givenName} agreed too`}. Recorded by{' '}
-        {consent.recordedBy.name}.
+        {consent.assent && `; ${athlete.givenName} agreed too`}.{' '}
+        {consent.how !== '' && `${consent.how.replace(/\.$/, '')}. `}
+        Recorded by {consent.recordedBy.name}.
       </p>
       <ConfirmButton
         look="plain"

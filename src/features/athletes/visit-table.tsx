@@ -17,7 +17,7 @@ const COLUMNS: Column<VisitRow>[] = [
     label: 'Visit',
     cell: (visit) => (
       <>
-        <Link to={paths.visit(visit.id)} className="-my-2.5 inline-block py-2.5 font-bold">
+        <Link to={paths.visit(visit.id)} className="tap font-bold">
           {longDay(visit.day)}
         </Link>
         <span className="block text-note text-soft">
@@ -52,7 +52,9 @@ function SideCell({ visit, side, own }: { visit: VisitRow; side: Side; own?: Sid
     return (
       <>
         {name}
-        <Link to={paths.reading(visit.id, side)}>{own.call && SEEN_WORDS[own.call]}</Link>
+        <Link className="tap" to={paths.reading(visit.id, side)}>
+          {own.call && SEEN_WORDS[own.call]}
+        </Link>
         <span className="block text-note text-soft">seen by the coach, not measured</span>
       </>
     );
@@ -60,7 +62,9 @@ function SideCell({ visit, side, own }: { visit: VisitRow; side: Side; own?: Sid
   return (
     <>
       {name}
-      <Link to={paths.reading(visit.id, side)}>{label}</Link>
+      <Link className="tap" to={paths.reading(visit.id, side)}>
+        {label}
+      </Link>
       <span className="block text-note text-soft">
         {change !== null && error !== null && `${turn(change)} ${plusMinus(error)}, `}
         {own.call === null ? 'no call by eye' : `by eye: ${SEEN_WORDS[own.call].toLowerCase()}`}

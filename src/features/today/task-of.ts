@@ -21,7 +21,8 @@ const sideOf = (side: 'left' | 'right' | null) =>
   side === null ? 'both sides' : supportWords(side);
 const repOf = (number: number | null) => (number === null ? '' : `, rep ${number}`);
 /** Comments can be long: the row shows enough to know which one it is. */
-const opening = (text: string) => (text.length > 72 ? `${text.slice(0, 70).trimEnd()} …` : text);
+const opening = (text: string) =>
+  text.length > 72 ? `${text.slice(0, 72).replace(/[\s,;:]+\S*$/, '')} …` : text;
 
 export function taskOf(item: Waiting): Task {
   const who = item.athlete.name;

@@ -63,13 +63,13 @@ function SideCall({ visitId, side }: { visitId: string; side: Side }) {
           <StateDot kind="done" wrap>
             {SEEN_WORDS[latest.seen]}, by {latest.by.name}, {moment(latest.at)}
           </StateDot>
-          <Link to={paths.reading(visitId, side)} className="-my-2.5 py-2.5">
+          <Link to={paths.reading(visitId, side)} className="tap">
             Open the reading
           </Link>
         </>
       )}
       {calls.data && !latest && (
-        <Link to={paths.call(visitId, side)} className="-my-2.5 py-2.5">
+        <Link to={paths.call(visitId, side)} className="tap">
           Make the call
         </Link>
       )}

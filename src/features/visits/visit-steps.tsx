@@ -48,7 +48,7 @@ export function VisitSteps({
           {to === undefined ? (
             name
           ) : (
-            <a href={to} className="no-underline hover:underline">
+            <a href={to} className="tap no-underline hover:underline">
               {name}
             </a>
           )}

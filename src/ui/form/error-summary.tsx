@@ -1,6 +1,9 @@
-import type { Ref } from 'react';
+import type { ReactNode, Ref } from 'react';
 import { useFormContext, useFormState } from 'react-hook-form';
 import { useLabels } from './labels.tsx';
+
+/** A label that is a question or a sentence needs no colon after it. */
+const endsItself = (label: ReactNode) => typeof label === 'string' && /[.?!]$/.test(label);
 
 /** Every `{ message }` in the tree of errors with its path. */
 function flatten(errors: object, before = ''): { path: string; message: string }[] {
@@ -44,7 +47,12 @@ export function ErrorSummary({ ref }: { ref: Ref<HTMLDivElement> }) {
                   className="min-h-[32px] text-left underline underline-offset-[3px]"
                   onClick={() => setFocus(path)}
                 >
-                  {labels.has(path) && <>{labels.get(path)}: </>}
+                  {labels.has(path) && (
+                    <>
+                      {labels.get(path)}
+                      {endsItself(labels.get(path)) ? ' ' : ': '}
+                    </>
+                  )}
                   {message}
                 </button>
               </li>

@@ -3,7 +3,14 @@ import { cx } from '#src/ui/class-names.ts';
 import { FileButton } from './file-button.tsx';
 
 /** Drop, choose or record. The buttons do the same as dropping, so nobody needs to drag. */
-export function DropZone({ onFiles }: { onFiles: (files: readonly File[]) => void }) {
+export function DropZone({
+  primary,
+  onFiles,
+}: {
+  /** Nothing else on the page is more pressing. */
+  primary: boolean;
+  onFiles: (files: readonly File[]) => void;
+}) {
   const [over, setOver] = useState(false);
   const drop = (event: DragEvent) => {
     event.preventDefault();
@@ -34,7 +41,7 @@ export function DropZone({ onFiles }: { onFiles: (files: readonly File[]) => voi
         <FileButton multiple onFiles={onFiles}>
           Choose files
         </FileButton>
-        <FileButton record look="primary" onFiles={onFiles}>
+        <FileButton record look={primary ? 'primary' : 'secondary'} onFiles={onFiles}>
           Record
         </FileButton>
       </div>

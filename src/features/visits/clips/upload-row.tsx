@@ -4,7 +4,7 @@ import { StateDot, type StateKind } from '#src/ui/state-dot.tsx';
 import { Skeleton } from '#src/ui/states.tsx';
 import { clipWords } from '#src/ui/words.ts';
 import { judge, type Verdict } from '../uploads/judge.ts';
-import { percentOf, type UploadItem } from '../uploads/upload-item.ts';
+import { detailsComplete, percentOf, type UploadItem } from '../uploads/upload-item.ts';
 import { uploads } from '../uploads/uploads.ts';
 import { DetailsChoice } from './details-choice.tsx';
 import { LocalPicture } from './local-picture.tsx';
@@ -34,13 +34,19 @@ export function UploadRow({
       state={<UploadActions item={item} verdict={verdict} primary={only} onFiles={onFiles} />}
     >
       <Look item={item} verdict={verdict} />
-      {item.phase === 'chosen' && verdict?.sendable === true && (
+      {asksDetails(item) && (
         <DetailsChoice item={item} onChange={(details) => uploads.describe(item.key, details)} />
       )}
       {moving && <Progress percent={percentOf(item)} label={`${item.name}, sent`} />}
     </RowFrame>
   );
 }
+
+/** Asked of a clip; of a file that is none only where it could not be sent otherwise. */
+const asksDetails = (item: UploadItem) =>
+  item.phase === 'chosen' &&
+  item.look !== null &&
+  (item.look.outcome === 'clip' || !detailsComplete(item));
 
 const KIND: Record<Verdict['grade'], StateKind> = { good: 'done', weak: 'wait', again: 'bad' };
 

@@ -45,7 +45,7 @@ export function UploadStep({
   return (
     <Section id="upload" title="4 Upload" wide>
       {open ? (
-        <DropZone onFiles={take} />
+        <DropZone primary={here.length === 0 && clips.length === 0} onFiles={take} />
       ) : (
         <Empty title="Closed until consent and safety check are there">
           Clips are taken once filming is consented to and the safety questions are answered.

@@ -33,11 +33,11 @@ export function FilmStep({
         <FilmingForm key={visit.version} visit={visit} onDone={() => setEditing(false)} />
       ) : (
         <>
-          <dl className="mt-5 grid grid-cols-2 gap-x-10 gap-y-3 phone:flex phone:flex-wrap">
+          <dl className="mt-5 grid grid-cols-2 gap-x-8 gap-y-3 phone:grid-cols-3 desk:grid-cols-5">
             {FILMING.map(({ key, label, unit, without }) => {
               const value = filming[key];
               return (
-                <div key={key} className={value === null ? 'max-w-[11em]' : undefined}>
+                <div key={key}>
                   <dt className="text-note leading-5 text-soft">{label}</dt>
                   {value === null ? (
                     <dd className="text-note leading-5">

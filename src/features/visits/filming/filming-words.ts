@@ -26,7 +26,7 @@ export const FILMING: readonly Figure[] = [
     label: 'Lens height',
     unit: 'm',
     hint: 'From the floor. Put it at the height of the pelvis.',
-    without: 'lift is known to ± 7° instead of ± 2°',
+    without: 'lift is known to ±\u00a07° instead of ±\u00a02°',
   },
   {
     key: 'rodMm',
