@@ -5,6 +5,7 @@ import { found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import type { OpenSession } from '../../http/session.ts';
 import type { Ground } from '../../main/ground.ts';
+import { audit } from '../practice/audit.ts';
 import { deviceName } from './device.ts';
 import { passwordFits } from './password.ts';
 import { Session } from './session.entity.ts';
@@ -33,6 +34,9 @@ export const signIn = async (
       user: em.getReference(User, row.user_id),
       device: deviceName(userAgent),
       expiresAt: new Date(Date.now() + SESSION_DAYS * 86_400_000),
+    });
+    audit({ em, actor: { kind: 'user', id: row.user_id } }, 'account.sign-in', row.user_id, {
+      session: session.id,
     });
     await em.flush();
     return session.id;

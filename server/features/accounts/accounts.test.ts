@@ -1,5 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
+import { product } from '../../db/in-practice.ts';
+import { AuditEntry } from '../practice/audit-entry.entity.ts';
 import { TEST_PASSWORD } from './user.factory.ts';
 
 let api: Api;
@@ -27,6 +29,15 @@ describe('signing in', () => {
     expect(cookie).toContain('SameSite=Lax');
     const me = await api.nobody.get('/api/me').set('Cookie', cookie.split(';')[0] ?? '');
     expect(me.body).toEqual(answer.body);
+  });
+
+  it('stands in the audit trail', async () => {
+    const { owner, practiceId } = api.world;
+    await signIn(owner.email).expect(200);
+    const trail = await api.ground.inPractice(product(practiceId), ({ em }) =>
+      em.find(AuditEntry, { subjectId: owner.id }),
+    );
+    expect(trail).toMatchObject([{ action: 'account.sign-in', actor: 'user', byUser: owner.id }]);
   });
 
   it('answers the same for an unknown address and a wrong password', async () => {

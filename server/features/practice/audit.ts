@@ -1,6 +1,4 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import type { LinkActor, UserActor } from '#shared/access/actors.ts';
-import type { ProductActor } from '../../db/in-practice.ts';
 import { AuditEntry } from './audit-entry.entity.ts';
 
 /** What is written down, by what it was done to. */
@@ -24,13 +22,16 @@ export type AuditedAction =
   | 'replay.revoke'
   | 'replay.open';
 
+/** Who did it: a user by id, a replay link, or the product itself. */
+type Doer = { readonly kind: 'user'; readonly id: string } | { readonly kind: 'link' | 'product' };
+
 /**
  * Writes down who did what, in the same transaction as what was done.
  * @param subjectId of the row it was done to; its kind is the first word of the action
  * @param detail ids, codes and counts; never a name, a password or a token
  */
 export const audit = (
-  { em, actor }: { em: EntityManager; actor: UserActor | LinkActor | ProductActor },
+  { em, actor }: { readonly em: EntityManager; readonly actor: Doer },
   action: AuditedAction,
   subjectId: string,
   detail: Record<string, string | number | boolean | null> | null = null,

@@ -55,7 +55,7 @@ export const tellProgress = (
         secondsLeft,
         clipId,
       ]);
-      await tellClipState(unit, clip as Clip, { progress: percent, secondsLeft });
+      await tellClipState(unit, clip, { progress: percent, secondsLeft });
     })
       .catch((error: unknown) => {
         log.warn({ err: error }, 'progress of a clip could not be told');
