@@ -34,6 +34,13 @@ export default defineConfig({
       timeout: 180_000,
     },
     { name: 'app-stop', testMatch: 'support/app-stop.ts' },
-    { name: 'journeys', testDir: 'tests/e2e/journeys', dependencies: ['app-start'] },
+    {
+      name: 'journeys',
+      testDir: 'tests/e2e/journeys',
+      dependencies: ['app-start'],
+      timeout: 300_000,
+      // the app prepares the demo's clips meanwhile
+      expect: { timeout: 30_000 },
+    },
   ],
 });

@@ -1,0 +1,14 @@
+/** What the chapters of the story hand on to each other. */
+export interface Run {
+  readonly familyName: string;
+  athleteId: string;
+  visitId: string;
+  clipId: string;
+}
+
+export const loadedRun = (): Run => ({
+  familyName: `Alder ${process.pid}`,
+  athleteId: '',
+  visitId: '',
+  clipId: '',
+});
