@@ -2,12 +2,17 @@ import { type Migration, Migrator } from '@mikro-orm/migrations';
 import { type Constructor, MikroORM } from '@mikro-orm/postgresql';
 import { Migration20261201122058_tables } from '../../migrations/Migration20261201122058_tables.ts';
 import { Migration20261201122100_walls } from '../../migrations/Migration20261201122100_walls.ts';
+import { Migration20261201133912_stale_readings } from '../../migrations/Migration20261201133912_stale_readings.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
 const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   { name: 'Migration20261201122058_tables', class: Migration20261201122058_tables },
   { name: 'Migration20261201122100_walls', class: Migration20261201122100_walls },
+  {
+    name: 'Migration20261201133912_stale_readings',
+    class: Migration20261201133912_stale_readings,
+  },
 ];
 
 /** Any number, the same in every process that may migrate at the same time. */

@@ -6,6 +6,7 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../practice/audit.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
+import { readingIsStale } from '../readings/stale.ts';
 import { visitInSight } from '../visits/visit-in-sight.ts';
 import { Call } from './call.entity.ts';
 
@@ -43,5 +44,6 @@ export const recordCall = async (
   });
   audit(unit, 'call.record', call.id, { visit: visitId, side });
   await em.flush();
+  await readingIsStale(unit, visitId, side);
   return call;
 };

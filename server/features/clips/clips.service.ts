@@ -8,6 +8,7 @@ import { tell } from '../../events/tell.ts';
 import { Problem } from '../../http/problem.ts';
 import { enqueue } from '../../jobs/job.ts';
 import { audit } from '../practice/audit.ts';
+import { readingsAreStale } from '../readings/stale.ts';
 import { Rep } from '../reps/rep.entity.ts';
 import { type ClipInSight, clipInSight } from './clip-in-sight.ts';
 import { PREPARE_CLIP } from './jobs/prepare-clip-type.ts';
@@ -51,6 +52,7 @@ export const editClip = async (
     if (stood === null) throw new Problem('support-side-needed');
     clip.cameraStood = stood;
   }
+  await readingsAreStale(unit, clip.visit.id);
   await unit.em.flush();
   await tellClip(unit, sight);
   return clip;
@@ -61,6 +63,7 @@ export const deleteClip = async (unit: Of, id: string): Promise<void> => {
   const { clip } = await clipInSight(unit, id, 'clip.delete');
   audit(unit, 'clip.delete', id, { visit: clip.visit.id });
   unit.em.remove(clip);
+  await readingsAreStale(unit, clip.visit.id);
 };
 
 /** Prepares the part that is there of a cut file, or the named part of a long one. */

@@ -8,6 +8,7 @@ import { tell } from '../../events/tell.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { needFrames } from '../clips/clip-in-sight.ts';
+import { readingIsStale } from '../readings/stale.ts';
 import { type RepInSight, repInSight } from '../reps/rep-in-sight.ts';
 import { applyCommands, changedRows, type Outcome, placeOf } from './apply-commands.ts';
 import { lockMarks, type MarkRow, readMarks, uuidArray, writeMarks } from './mark-store.ts';
@@ -81,7 +82,8 @@ export const saveMarks = async (
   const rows = changedRows(outcomes);
   await writeMarks(em, actor.practiceId, rows);
   await rememberCommands(unit, repId, outcomes);
-  if (rows.length > 0)
+  if (rows.length > 0) {
+    await readingIsStale(unit, sight.clip.visit.id, sight.rep.supportSide);
     await tell(
       unit,
       { coachId: sight.athlete.coach.id },
@@ -92,6 +94,7 @@ export const saveMarks = async (
         byUserId: actor.id,
       },
     );
+  }
   return { sight, outcomes };
 };
 

@@ -43,23 +43,25 @@ const stored = (
 ): Promise<Reading | null> =>
   em.findOne(Reading, { visit: visitId, side, inputHash }, { populate: ['result', 'by'] });
 
-/**
- * The reading of the marks as they stand. The same inputs find the row again; other inputs make another, and the
- * old one stays as it was made.
- */
-export const currentReading = async (
+/** The reading that these inputs gave before, if they did. */
+export const knownReading = async (
+  em: EntityManager,
+  setting: SideSetting,
+  { hash }: SideInputs,
+): Promise<Reading | null> => {
+  const known = await stored(em, setting.visit.id, setting.side, hash);
+  if (known) setting.reading = ref(known);
+  return known;
+};
+
+/** Keeps a new reading. Two who derive the same at once keep one: the second finds the first one's row. */
+export const keepReading = async (
   em: EntityManager,
   setting: SideSetting,
   inputs: SideInputs,
+  result: ReadingResult,
 ): Promise<Reading> => {
   const visitId = setting.visit.id;
-  const known = await stored(em, visitId, setting.side, inputs.hash);
-  if (known) {
-    setting.reading = ref(known);
-    return known;
-  }
-  const result = await deriveApart(inputs.input);
-  // two who ask at once derive the same: the second finds the first one's row
   await em.execute(
     `insert into reading (id, practice_id, visit_id, side, engine, input_hash, seed, inputs, result, code, before60,
         change, u, p_early, smallest_found, provisional, assumption, by_id, at)
@@ -78,8 +80,19 @@ export const currentReading = async (
       JSON.stringify(columnsOf(result)),
     ],
   );
-  const made = await stored(em, visitId, setting.side, inputs.hash);
+  const made = await knownReading(em, setting, inputs);
   if (!made) throw new Error('A reading was written and is not there.');
-  setting.reading = ref(made);
   return made;
 };
+
+/**
+ * The reading of the marks as they stand. The same inputs find the row again; other inputs make another, and the
+ * old one stays as it was made.
+ */
+export const currentReading = async (
+  em: EntityManager,
+  setting: SideSetting,
+  inputs: SideInputs,
+): Promise<Reading> =>
+  (await knownReading(em, setting, inputs)) ??
+  keepReading(em, setting, inputs, await deriveApart(inputs.input));

@@ -6,6 +6,7 @@ import { type Api, startApi } from '#tests/support/api.ts';
 import { type GoldenClip, goldenClip } from '#tests/support/golden.ts';
 import { makeClip } from '../clips/clip.factory.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
+import { deriveReadingJob } from './jobs/derive-reading.ts';
 
 let api: Api;
 let coach: Awaited<ReturnType<Api['as']>>;
@@ -165,5 +166,41 @@ describe('a reading', () => {
       await stranger.put(`${side}/assumption`).send({ on: true }).expect(404);
     }
     await api.nobody.get(`${side}/reading`).expect(401);
+  });
+});
+
+describe('the lists', () => {
+  it('show a side’s reading as its marks stand, without anybody opening it', async () => {
+    const { side, clip, visit } = await marked(goldenClip('g01_early_big_thigh'));
+    await coach.post(`${side}/call`).send(seen('early')).expect(201);
+    const waiting = () =>
+      api.ground.inPractice(api.world.coach, ({ em }) =>
+        em.execute<{ payload: { visitId: string; side: string } }[]>(
+          `select payload from job_outbox where queue = 'derive-reading' and payload ->> 'visitId' = ?`,
+          [visit.id],
+        ),
+      );
+    const [job] = await waiting();
+    if (!job) throw new Error('No job was asked for.');
+    const derive = () =>
+      deriveReadingJob.run({
+        ground: api.ground,
+        practiceId: api.world.practiceId,
+        payload: job.payload,
+        signal: new AbortController().signal,
+      });
+    await derive();
+    const { body } = await coach.get(`/api/athletes/${api.world.athlete.id}/visits`).expect(200);
+    const row = body.items.find(({ id }: { id: string }) => id === visit.id);
+    expect(row.sides).toMatchObject([{ call: 'early', reading: { code: 'early-turn-out' } }]);
+    // three more changes ask for one more job, not for three
+    const reps = await coach.get(`/api/clips/${clip.id}/reps`);
+    for (const rep of reps.body.items)
+      await coach
+        .patch(`/api/reps/${rep.id}`)
+        .send({ version: rep.version, excludedNote: 'Looked at.' })
+        .expect(200);
+    const sideName = side.endsWith('left') ? 'left' : 'right';
+    expect((await waiting()).filter(({ payload }) => payload.side === sideName)).toHaveLength(2);
   });
 });

@@ -14,6 +14,8 @@ export const SideSetting = defineEntity({
     side: p.enum(side.options),
     /** 'The planted thigh turns little'. */
     assumption: p.boolean().default(false),
+    /** What the reading rests on has changed since, and a job that makes it anew is asked for. */
+    stale: p.boolean().default(false),
     /** When a figure of this side was first shown to anyone. */
     figuresShownAt: moment().nullable(),
     /** The reading of the marks as they stand; undoing a change finds an older one again. */

@@ -8,6 +8,7 @@ import { found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { type ClipInSight, clipInSight, needFrames } from '../clips/clip-in-sight.ts';
+import { readingsAreStale } from '../readings/stale.ts';
 import { needOrder } from './boundary-order.ts';
 import { type HandBoundaries, Rep } from './rep.entity.ts';
 import { repInSight } from './rep-in-sight.ts';
@@ -29,8 +30,10 @@ export const presentStored = async (
     found((await storedReps(em, [clip], athlete)).find(({ rep }) => rep.id === repId)),
   );
 
-const tellClip = (unit: Unit<UserActor>, { clip, athlete }: ClipInSight, repId: string) =>
-  tell(
+/** Tells the tabs, and has the readings that rest on the clip made anew. */
+const tellClip = async (unit: Unit<UserActor>, { clip, athlete }: ClipInSight, repId: string) => {
+  await readingsAreStale(unit, clip.visit.id);
+  await tell(
     unit,
     { coachId: athlete.coach.id },
     {
@@ -40,6 +43,7 @@ const tellClip = (unit: Unit<UserActor>, { clip, athlete }: ClipInSight, repId: 
       byUserId: unit.actor.id,
     },
   );
+};
 
 /** Names a span of a clip as a rep. */
 export const addRep = async (
