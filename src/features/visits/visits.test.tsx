@@ -228,19 +228,4 @@ describe('clips', () => {
       mirrored: false,
     });
   });
-
-  it('asks a side view which leg is stood on', async () => {
-    const { user } = visitApi({ visit: open });
-    await screen.findByRole('button', { name: 'Choose files' });
-    const input = document.querySelector<HTMLInputElement>('input[type=file][multiple]');
-    await user.upload(
-      input as HTMLInputElement,
-      new File(['x'], 'side.mov', { type: 'video/quicktime' }),
-    );
-    await user.click(await screen.findByRole('radio', { name: 'Lifted side' }));
-    expect(screen.getByRole('button', { name: 'Send side.mov' })).toBeDisabled();
-    expect(screen.queryByRole('radio', { name: 'Both, in turn' })).toBeNull();
-    await user.click(screen.getByRole('radio', { name: 'Left' }));
-    expect(screen.getByRole('button', { name: 'Send side.mov' })).toBeEnabled();
-  });
 });

@@ -20,7 +20,7 @@ export function FilmingGuide({ filming }: { filming: Visit['filming'] }) {
         title="Phone at pelvis height, level"
       >
         2.5 to 3.5 m in front for 1080p, up to 4 m for 4K. Measure the lens height: guessed 40 cm
-        wrong, lift is ± 7° instead of ± 2°.
+        wrong, lift is ±&nbsp;7° instead of ±&nbsp;2°.
       </Step>
       <Step drawing={<AboveDrawing />} title="Square on, something to hold, something to measure">
         Chair or wall within reach on the side of the standing leg. A rod of known length beside the
