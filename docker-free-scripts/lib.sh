@@ -66,16 +66,17 @@ step() {
   return "$status"
 }
 
-# On a terminal a running count of seconds; in a log a line every half minute.
+# On a terminal a running count of seconds; in a log a line every half minute (or $step_every seconds).
 tick() {
-  local label=$1 pid=$2 started=$SECONDS next=30
+  local label=$1 pid=$2 started=$SECONDS every=${step_every:-30}
+  local next=$every
   exec 9>&-
   while sleep 1 >/dev/null 2>&1 && kill -0 "$pid" 2>/dev/null; do
     if [[ -t 2 ]]; then
       printf '\r\033[K… %s (%d s)' "$label" $((SECONDS - started)) >&2
     elif ((SECONDS - started >= next)); then
       say "… $label ($((SECONDS - started)) s)"
-      next=$((next + 30))
+      next=$((next + every))
     fi
   done
 }

@@ -53,7 +53,7 @@ export REDSHANK_TEST_PG
 run() {
   local id=$1 label=$2 kind=$3 minutes=$4 status=0 started=$SECONDS
   shift 4
-  step_lines=300 step "$label" timeout --kill-after=20 "${minutes}m" "$@" || status=$?
+  step_every=120 step_lines=300 step "$label" timeout --kill-after=20 "${minutes}m" "$@" || status=$?
   printf '%s\t%s\t%s\t%s\t%s\n' "$id" "$label" "$kind" "$status" $((SECONDS - started)) >>"$report/steps.tsv"
 }
 
