@@ -46,7 +46,7 @@ export default defineConfig({
           ],
           environment: 'jsdom',
           setupFiles: ['tests/support/web-setup.ts'],
-          testTimeout: 20_000,
+          testTimeout: 60_000,
         },
       },
     ],

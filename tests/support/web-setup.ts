@@ -1,6 +1,9 @@
 import '@testing-library/jest-dom/vitest';
-import { cleanup } from '@testing-library/react';
+import { cleanup, configure } from '@testing-library/react';
 import { afterEach } from 'vitest';
+
+// how long a page may take to come on a busy machine; nothing waits so long that goes right
+configure({ asyncUtilTimeout: 10_000 });
 
 afterEach(() => {
   cleanup();
