@@ -1,13 +1,14 @@
 import type { FrameIndex } from '#shared/timing/units.ts';
 import type { CopyBytes } from './copy-bytes.ts';
-import { chooseConfig } from './decoder-config.ts';
+import { chooseMode, type DecodeMode } from './decoder-config.ts';
 import { type DemuxedCopy, demuxCopy } from './demux-copy.ts';
 import { abortReason, VideoError } from './errors.ts';
 import { FarthestCache } from './farthest-cache.ts';
 import { FrameDecoder } from './frame-decoder.ts';
 import { checkIndex } from './frame-times.ts';
+import { longestGroup } from './keyframes.ts';
 import { measurePaintMethod } from './paint-method.ts';
-import { keepPixels, type PaintMethod } from './pixel-picture.ts';
+import { type PaintMethod, PixelPicture } from './pixel-picture.ts';
 import { nextToPrefetch, windowWithin } from './prefetch.ts';
 import type { ClipSource, FrameRequest, FrameSource, Picture } from './types.ts';
 
@@ -26,8 +27,8 @@ export class DecodedSource implements FrameSource {
   readonly frameTable: ClipSource['frameTable'];
   readonly #bytes: CopyBytes;
   readonly #copy: DemuxedCopy;
-  readonly #decoder: FrameDecoder<Picture>;
-  readonly #cache: FarthestCache<Picture>;
+  readonly #decoder: FrameDecoder<PixelPicture>;
+  readonly #cache: FarthestCache<PixelPicture>;
   readonly #jobs: Job[] = [];
   #method: PaintMethod = 'draw';
   #playhead: FrameIndex | null = null;
@@ -40,7 +41,7 @@ export class DecodedSource implements FrameSource {
     clip: ClipSource,
     bytes: CopyBytes,
     copy: DemuxedCopy,
-    config: VideoDecoderConfig,
+    mode: DecodeMode,
     cacheBytes: number,
   ) {
     this.frameCount = clip.frameTable.length;
@@ -50,7 +51,7 @@ export class DecodedSource implements FrameSource {
     this.#bytes = bytes;
     this.#copy = copy;
     this.#cache = new FarthestCache(cacheBytes);
-    this.#decoder = new FrameDecoder(copy, config, (index, frame) => this.#keep(index, frame));
+    this.#decoder = new FrameDecoder(copy, mode, (index, frame) => this.#keep(index, frame));
   }
 
   /**
@@ -63,8 +64,8 @@ export class DecodedSource implements FrameSource {
     cacheBytes: number,
   ): Promise<DecodedSource> {
     const copy = await demuxCopy(bytes, clip.frameTable);
-    const config = await chooseConfig(copy.config);
-    const source = new DecodedSource(clip, bytes, copy, config, cacheBytes);
+    const mode = await chooseMode(copy.config, longestGroup(copy.keys, copy.frameCount));
+    const source = new DecodedSource(clip, bytes, copy, mode, cacheBytes);
     const first = await source.frame(0 as FrameIndex, { intent: 'scrub' });
     await measurePaintMethod(first, (method) => (source.#method = method));
     void bytes.fill();
@@ -143,26 +144,30 @@ export class DecodedSource implements FrameSource {
 
   async #serve(job: Job): Promise<void> {
     try {
-      job.resolve(this.#cache.get(job.index) ?? (await this.#decoder.decode(job.index)));
+      await this.#decoder.idle();
+      const which = this.#stepping ? 'group' : 'wanted';
+      job.resolve(this.#cache.get(job.index) ?? (await this.#decoder.decode(job.index, which)));
     } catch (error) {
       job.reject(error);
     }
   }
 
-  async #keep(index: FrameIndex, frame: VideoFrame): Promise<Picture> {
+  #keep(index: FrameIndex, frame: VideoFrame): PixelPicture {
     const held = this.#cache.get(index);
     if (held) {
       frame.close();
       return held;
     }
-    const picture = await keepPixels(index, frame, () => this.#method);
-    if (!this.#closed) this.#cache.put(index, picture);
+    const picture = new PixelPicture(index, frame, () => this.#method);
+    this.#cache.put(index, picture);
     return picture;
   }
 
   /** False when there is nothing to prefetch; a failure is left to whoever wants that frame. */
   async #prefetchOne(): Promise<boolean> {
     if (!this.#stepping || this.#playhead === null || this.#cache.size === 0) return false;
+    await this.#decoder.idle();
+    if (this.#jobs.length > 0) return true;
     const next = nextToPrefetch({
       playhead: this.#playhead,
       direction: this.#direction,
@@ -172,7 +177,8 @@ export class DecodedSource implements FrameSource {
     });
     if (next === null) return false;
     try {
-      await this.#decoder.decode(next);
+      const picture = await this.#decoder.decode(next, 'group');
+      await picture.givenBack;
     } catch {
       return false;
     }

@@ -21,6 +21,7 @@ import { checkPacketsAgainstTable } from './frame-times.ts';
 export interface DemuxedCopy {
   /** Frames that decode by themselves, rising, beginning with 0. */
   readonly keys: readonly FrameIndex[];
+  readonly frameCount: number;
   readonly config: VideoDecoderConfig;
   /** The chunk's timestamp is the frame index itself, so that no rounding can blur which is which. */
   chunk(index: FrameIndex): Promise<EncodedVideoChunk>;
@@ -87,6 +88,7 @@ export const demuxCopy = async (
     if (!config) throw new VideoError('unsupported', 'the copy has an unknown codec');
     return {
       keys: packets.flatMap((packet, k) => (packet.type === 'key' ? [k as FrameIndex] : [])),
+      frameCount: packets.length,
       config,
       async chunk(index) {
         const known = packets[index];

@@ -1,9 +1,10 @@
 import type { FrameIndex } from '#shared/timing/units.ts';
+import type { DecodeMode } from './decoder-config.ts';
 import type { DemuxedCopy } from './demux-copy.ts';
 import { VideoError } from './errors.ts';
-import { planDecode } from './keyframes.ts';
+import { endOfGroup, planDecode } from './keyframes.ts';
 
-/** A frame that takes longer means a decoder that hangs: it is made anew. */
+/** A frame, or a flush, that takes longer means a decoder that hangs: it is made anew. */
 const WATCHDOG_MS = 1500;
 /** Some decoders hold a picture back until more packets or a flush come: flush after this. */
 const FLUSH_AFTER_MS = 250;
@@ -12,35 +13,39 @@ const FLUSHES_TO_LEARN = 3;
 
 interface Wait<T> {
   readonly index: FrameIndex;
-  flushed: boolean;
   readonly arrived: (kept: T) => void;
   readonly failed: (error: unknown) => void;
+  nudged: boolean;
 }
 
-/** Keeps what is needed of a frame and closes it. */
-export type KeepFrame<T> = (index: FrameIndex, frame: VideoFrame) => Promise<T>;
+/** Makes of a frame what is needed, and owns it from then on. */
+export type KeepFrame<T> = (index: FrameIndex, frame: VideoFrame) => T;
+
+/** `group`: its neighbours will be wanted too, so they are kept, and decoded where that is cheap. */
+export type KeepWhich = 'wanted' | 'group';
 
 /**
  * One `VideoDecoder`, kept for the life of the clip and made anew when it hangs or fails.
- * Call `decode` one at a time. Every frame that comes out, wanted or on the way to it, goes to
- * `keep`, which closes it; frames that come out of a decoder given up are closed here.
+ * Call `decode` one at a time. What comes out goes to `keep`, which closes it in the end; frames
+ * that nobody wants, or that come late out of a decoder given up, are closed here.
  */
 export class FrameDecoder<T> {
   readonly #copy: DemuxedCopy;
-  readonly #config: VideoDecoderConfig;
+  readonly #mode: DecodeMode;
   readonly #keep: KeepFrame<T>;
-  readonly #keeping = new Set<FrameIndex>();
   #decoder: VideoDecoder | null = null;
   /** The last packet handed over without a gap; null: the next one must be a key frame. */
   #fed: FrameIndex | null = null;
   #wait: Wait<T> | null = null;
+  #which: KeepWhich = 'wanted';
+  #flushing: Promise<void> = Promise.resolve();
   #flushesNeeded = 0;
   #remakes = 0;
   #closed = false;
 
-  constructor(copy: DemuxedCopy, config: VideoDecoderConfig, keep: KeepFrame<T>) {
+  constructor(copy: DemuxedCopy, mode: DecodeMode, keep: KeepFrame<T>) {
     this.#copy = copy;
-    this.#config = config;
+    this.#mode = mode;
     this.#keep = keep;
   }
 
@@ -49,11 +54,17 @@ export class FrameDecoder<T> {
     return this.#remakes;
   }
 
+  /** Settles, never rejects, when frames of an earlier request no longer come out. */
+  idle(): Promise<void> {
+    return this.#flushing;
+  }
+
   /**
    * What `keep` made of this frame.
    * Rejects with `VideoError`: damaged, stalled, closed, or what loading its bytes gave.
    */
-  async decode(index: FrameIndex): Promise<T> {
+  async decode(index: FrameIndex, which: KeepWhich): Promise<T> {
+    this.#which = which;
     const chunks = await this.#load(index);
     try {
       return await this.#run(index, chunks);
@@ -81,8 +92,11 @@ export class FrameDecoder<T> {
   }
 
   async #load(index: FrameIndex): Promise<EncodedVideoChunk[]> {
-    const { from, to } = planDecode(this.#copy.keys, index, this.#fed);
-    const places = Array.from({ length: to - from + 1 }, (_, k) => (from + k) as FrameIndex);
+    const { keys, frameCount } = this.#copy;
+    const { from, to } = planDecode(keys, index, this.#fed);
+    const whole = this.#mode.flushEach && this.#which === 'group';
+    const last = whole ? endOfGroup(keys, index, frameCount) : to;
+    const places = Array.from({ length: last - from + 1 }, (_, k) => (from + k) as FrameIndex);
     const chunks = await Promise.all(places.map((place) => this.#copy.chunk(place)));
     if (this.#closed) throw new VideoError('closed');
     return chunks;
@@ -91,15 +105,15 @@ export class FrameDecoder<T> {
   async #run(index: FrameIndex, chunks: readonly EncodedVideoChunk[]): Promise<T> {
     const decoder = (this.#decoder ??= this.#make());
     const arrival = new Promise<T>((arrived, failed) => {
-      this.#wait = { index, flushed: false, arrived, failed };
+      this.#wait = { index, arrived, failed, nudged: false };
     });
     const hangs = (): void => this.#wait?.failed(new VideoError('stalled', `frame ${index}`));
     const watchdog = setTimeout(hangs, WATCHDOG_MS);
-    const flushAfter = this.#flushesNeeded >= FLUSHES_TO_LEARN ? 0 : FLUSH_AFTER_MS;
-    const nudge = setTimeout(() => void this.#flush(decoder), flushAfter);
+    const nudge = setTimeout(() => this.#nudge(decoder), FLUSH_AFTER_MS);
     try {
       for (const chunk of chunks) decoder.decode(chunk);
       this.#fed = index;
+      if (this.#mode.flushEach || this.#flushesNeeded >= FLUSHES_TO_LEARN) this.#flush(decoder);
       return await arrival;
     } finally {
       clearTimeout(watchdog);
@@ -108,52 +122,58 @@ export class FrameDecoder<T> {
     }
   }
 
+  #nudge(decoder: VideoDecoder): void {
+    if (!this.#wait || this.#fed === null) return;
+    this.#wait.nudged = true;
+    this.#flush(decoder);
+  }
+
   /** Brings out what the decoder holds back; afterwards its next packet must be a key frame. */
-  async #flush(decoder: VideoDecoder): Promise<void> {
+  #flush(decoder: VideoDecoder): void {
     const wait = this.#wait;
-    if (!wait || this.#keeping.has(wait.index)) return;
     this.#fed = null;
-    wait.flushed = true;
-    try {
-      await decoder.flush();
-      if (this.#keeping.has(wait.index)) return;
-      wait.failed(new VideoError('damaged', `frame ${wait.index} did not come out`));
-    } catch (error) {
-      wait.failed(error);
-    }
+    this.#flushing = new Promise((settle) => {
+      const hangs = (): void => {
+        if (this.#decoder === decoder) this.#discard();
+        settle();
+      };
+      const watchdog = setTimeout(hangs, WATCHDOG_MS);
+      decoder
+        .flush()
+        .then(() => wait?.failed(new VideoError('damaged', `frame ${wait.index} did not come out`)))
+        .catch((error: unknown) => wait?.failed(error))
+        .finally(() => {
+          clearTimeout(watchdog);
+          settle();
+        });
+    });
   }
 
   #make(): VideoDecoder {
     this.#fed = null;
     const decoder: VideoDecoder = new VideoDecoder({
-      output: (frame) => void this.#output(decoder, frame),
+      output: (frame) => this.#output(decoder, frame),
       error: (error) => {
         if (this.#decoder === decoder) this.#wait?.failed(error);
       },
     });
-    decoder.configure(this.#config);
+    decoder.configure(this.#mode.config);
     return decoder;
   }
 
-  async #output(from: VideoDecoder, frame: VideoFrame): Promise<void> {
+  #output(from: VideoDecoder, frame: VideoFrame): void {
     const index = frame.timestamp as FrameIndex;
-    if (this.#closed || this.#decoder !== from) return frame.close();
-    this.#keeping.add(index);
+    const wait = this.#wait?.index === index ? this.#wait : null;
+    if (this.#decoder !== from || !(wait || this.#which === 'group')) return frame.close();
     try {
-      const kept = await this.#keep(index, frame);
-      const wait = this.#waitFor(index);
+      const kept = this.#keep(index, frame);
       if (!wait) return;
-      this.#flushesNeeded = wait.flushed ? this.#flushesNeeded + 1 : 0;
+      this.#flushesNeeded = wait.nudged ? this.#flushesNeeded + 1 : 0;
       wait.arrived(kept);
     } catch (error) {
-      this.#waitFor(index)?.failed(error);
-    } finally {
-      this.#keeping.delete(index);
+      frame.close();
+      wait?.failed(error);
     }
-  }
-
-  #waitFor(index: FrameIndex): Wait<T> | null {
-    return this.#wait?.index === index ? this.#wait : null;
   }
 
   #discard(): void {

@@ -1,4 +1,5 @@
 import type { FrameIndex } from '#shared/timing/units.ts';
+import { VideoError } from './errors.ts';
 import type { Picture } from './types.ts';
 
 /** `convert`: the browser converts to RGBA in memory, then puts the pixels. `draw`: drawImage. */
@@ -36,37 +37,66 @@ const paintConverted = async (
 };
 
 /** Pixels in the decoder's own format (1.5 bytes each for 4:2:0), in memory of our own. */
-class PixelPicture implements Picture {
+interface OwnPixels {
+  readonly data: ArrayBuffer;
+  readonly init: VideoFrameBufferInit;
+}
+
+const copyPixels = async (frame: VideoFrame): Promise<OwnPixels> => {
+  const { format, visibleRect, displayWidth, displayHeight, timestamp } = frame;
+  const data = new ArrayBuffer(frame.allocationSize(copyOptions(frame)));
+  const layout = await frame.copyTo(data, copyOptions(frame));
+  return {
+    data,
+    init: {
+      format: format ?? 'RGBA',
+      codedWidth: visibleRect?.width ?? frame.codedWidth,
+      codedHeight: visibleRect?.height ?? frame.codedHeight,
+      displayWidth,
+      displayHeight,
+      layout,
+      timestamp,
+      ...(format === null ? {} : { colorSpace: frame.colorSpace.toJSON() }),
+    },
+  };
+};
+
+/** A frame that lives on a graphics card shows no format: have it converted. */
+const copyOptions = ({ format }: VideoFrame): VideoFrameCopyToOptions =>
+  format === null ? { format: 'RGBA' } : {};
+
+/**
+ * A decoded frame, copied into memory of our own and then closed: a decoder lends its frames from
+ * a pool of a few and stops without a word once all are out, so none is kept. Until the copy is
+ * made it paints from the frame itself, which saves a cold jump that wait.
+ */
+export class PixelPicture implements Picture {
   readonly index: FrameIndex;
   readonly width: number;
   readonly height: number;
+  readonly bytes: number;
   readonly verified = true;
-  readonly #data: ArrayBuffer;
-  readonly #init: VideoFrameBufferInit;
+  /** Settles, never rejects, once the frame was given back to the decoder. */
+  readonly givenBack: Promise<void>;
   readonly #method: () => PaintMethod;
+  #borrowed: VideoFrame | null;
+  #own: OwnPixels | null = null;
 
-  constructor(
-    index: FrameIndex,
-    data: ArrayBuffer,
-    init: VideoFrameBufferInit,
-    method: () => PaintMethod,
-  ) {
+  /** Owns the frame from here on. */
+  constructor(index: FrameIndex, frame: VideoFrame, method: () => PaintMethod) {
     this.index = index;
-    this.width = init.displayWidth ?? init.codedWidth;
-    this.height = init.displayHeight ?? init.codedHeight;
-    this.#data = data;
-    this.#init = init;
+    this.width = frame.displayWidth;
+    this.height = frame.displayHeight;
+    this.bytes = frame.allocationSize(copyOptions(frame));
     this.#method = method;
-  }
-
-  get bytes(): number {
-    return this.#data.byteLength;
+    this.#borrowed = frame;
+    this.givenBack = this.#giveBack(frame);
   }
 
   async paint(context: CanvasRenderingContext2D, current: () => boolean): Promise<boolean> {
-    const frame = new VideoFrame(this.#data, this.#init);
-    const { codedWidth, codedHeight } = this.#init;
-    const squarePixels = codedWidth === this.width && codedHeight === this.height;
+    const frame = this.#toFrame();
+    const { width = 0, height = 0 } = frame.visibleRect ?? {};
+    const squarePixels = width === this.width && height === this.height;
     try {
       if (this.#method() === 'convert' && squarePixels)
         return await paintConverted(frame, context, current);
@@ -77,35 +107,16 @@ class PixelPicture implements Picture {
       frame.close();
     }
   }
-}
 
-/**
- * Copies a decoded frame into memory of our own and closes it. A decoder lends its frames from a
- * pool of a few and stops without a word once all are out, so none is ever kept.
- */
-export const keepPixels = async (
-  index: FrameIndex,
-  frame: VideoFrame,
-  method: () => PaintMethod,
-): Promise<Picture> => {
-  try {
-    const { format, visibleRect, displayWidth, displayHeight } = frame;
-    // a frame that lives on a graphics card shows no format: have it converted
-    const converted = format === null ? ({ format: 'RGBA' } as const) : {};
-    const data = new ArrayBuffer(frame.allocationSize(converted));
-    const layout = await frame.copyTo(data, converted);
-    const init: VideoFrameBufferInit = {
-      format: format ?? 'RGBA',
-      codedWidth: visibleRect?.width ?? frame.codedWidth,
-      codedHeight: visibleRect?.height ?? frame.codedHeight,
-      displayWidth,
-      displayHeight,
-      layout,
-      timestamp: index,
-      ...(format === null ? {} : { colorSpace: frame.colorSpace.toJSON() }),
-    };
-    return new PixelPicture(index, data, init, method);
-  } finally {
+  async #giveBack(frame: VideoFrame): Promise<void> {
+    this.#own = await copyPixels(frame).catch(() => null);
+    this.#borrowed = null;
     frame.close();
   }
-};
+
+  #toFrame(): VideoFrame {
+    if (this.#own) return new VideoFrame(this.#own.data, this.#own.init);
+    if (this.#borrowed) return this.#borrowed.clone();
+    throw new VideoError('damaged', `the pixels of frame ${this.index} could not be copied`);
+  }
+}

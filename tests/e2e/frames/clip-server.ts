@@ -1,6 +1,6 @@
 import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
-import { join } from 'node:path';
+import { join, relative } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import type { PreparedTestCopy } from '../../fixtures/video/prepare-copy.ts';
 import { type RangeServer, startRangeServer } from '../../fixtures/video/range-server.ts';
@@ -20,7 +20,7 @@ export const startClipServer = async (): Promise<ClipServer> => {
     ...server,
     folder,
     request: ({ path, timeBase, ticks, width, height }) => ({
-      ...{ url: `/clips/${path.split('/').at(-1)}`, timeBase, ticks, width, height },
+      ...{ url: `/clips/${relative(folder, path)}`, timeBase, ticks, width, height },
     }),
     async close() {
       await server.close();
