@@ -52,7 +52,8 @@ export function FrameSlider({ ref, onEnter }: { ref: Ref<HTMLDivElement>; onEnte
       onEnter();
       return;
     }
-    const to = steppedTo(event.key, frame, count, bounds);
+    // keys can come faster than the page is drawn: each counts from where the one before it led
+    const to = steppedTo(event.key, store.getState().frame, count, bounds);
     if (to === null) return;
     event.preventDefault();
     store.setState({ playing: false });
