@@ -21,3 +21,10 @@ export const commentsOptions = (clipId: string) =>
     queryKey: ['clips', clipId, 'comments'],
     queryFn: ({ signal }) => call(routes.listComments, { params: { id: clipId }, signal }),
   });
+
+/** The reps of a clip, in order. */
+export const repsOptions = (clipId: string) =>
+  queryOptions({
+    queryKey: ['clips', clipId, 'reps'],
+    queryFn: ({ signal }) => call(routes.listReps, { params: { id: clipId }, signal }),
+  });

@@ -16,6 +16,8 @@ export interface CoursePlotProps {
   /** The reps behind it, where there are several. */
   repCurves?: readonly CourseCurve[];
   points: readonly CoursePoint[];
+  /** Further turns that have to fit, so that two plots share their scale. */
+  reach?: readonly number[];
   /** One or two sentences where there is nothing to draw yet. */
   empty?: readonly string[];
   /** Drawn over the course: markers, brackets, tags. */
@@ -32,6 +34,7 @@ export function CoursePlot({
   curve,
   repCurves = [],
   points,
+  reach = [],
   empty,
   children,
 }: CoursePlotProps) {
@@ -43,7 +46,7 @@ export function CoursePlot({
       {width !== null && width > 0 && (
         <CourseDrawing
           {...{ label, curve, repCurves, points, empty, children }}
-          scale={courseScale(width, drawn, turnsOf(curve, points))}
+          scale={courseScale(width, drawn, [...turnsOf(curve, points), ...reach])}
         />
       )}
     </div>
@@ -69,7 +72,7 @@ function CourseDrawing({
   empty,
   children,
   scale,
-}: Omit<CoursePlotProps, 'height'> & { scale: CourseScale }) {
+}: Omit<CoursePlotProps, 'height' | 'reach'> & { scale: CourseScale }) {
   const at60 = turnAt(curve, 60);
   const { width, height, top, bottom, left, right } = scale;
   return (

@@ -1,0 +1,58 @@
+import { Link } from 'react-router-dom';
+import type { Reading } from '#shared/contracts/readings.ts';
+import { degrees, inWords, turn } from '#src/ui/figures.ts';
+import { Section } from '#src/ui/page.tsx';
+import { paths } from '#src/ui/paths.ts';
+import { ReadingCourse } from './reading-course.tsx';
+import { RepKey } from './rep-key.tsx';
+
+/** The central picture with how to read it and what may be missed. */
+export function CourseSection({ reading }: { reading: Reading }) {
+  const { result, side } = reading;
+  const { figures, returnPast90 } = result;
+  const used = result.reps.filter((rep) => rep.used);
+  const frames = used.reduce((sum, rep) => sum + (rep.fit?.used ?? 0), 0);
+  const note =
+    used.length > 0
+      ? `${frames} frames in the rise of ${inWords(used.length)} ${used.length === 1 ? 'rep' : 'reps'}`
+      : undefined;
+  return (
+    <Section
+      title="Course"
+      note={note}
+      margin={
+        <>
+          {result.course.length > 0 && (
+            <p>
+              <b className="text-ink">How to read it.</b> Right is a higher thigh, up is a hip that
+              turns out. What counts is the change between the dotted lines. The band, pinched at
+              60°, holds 95 of 100 true changes, under our error model. Green hatch: turning in, as
+              expected. Grey hatch: holding still, not a pass.
+            </p>
+          )}
+          {figures && (
+            <p>
+              <b className="text-ink">What may be missed.</b> An early turn smaller than{' '}
+              {degrees(figures.mdt90)} may be missed with these marks.
+            </p>
+          )}
+          <RepKey reading={reading} />
+          {reading.provisional && <p>Hollow points rest on marks nobody has looked at.</p>}
+          {returnPast90 && (
+            <p>
+              From 90° to {degrees(returnPast90.to, 0)} the turn changes by{' '}
+              {turn(returnPast90.change)}. That is described only; nothing is read from it.
+            </p>
+          )}
+          <p>
+            <Link to={paths.method()} className="inline-block py-2">
+              How each number is computed
+            </Link>
+          </p>
+        </>
+      }
+    >
+      <ReadingCourse result={result} side={side} />
+    </Section>
+  );
+}

@@ -1,0 +1,67 @@
+import type { Side } from '#shared/contracts/primitives.ts';
+import type { ReadingResult } from '#shared/reading/types.ts';
+import { degrees, inWords, plusMinus, turn } from '#src/ui/figures.ts';
+import { CourseBracket, CourseOnset } from '#src/ui/plots/course-markers.tsx';
+import { CoursePlot } from '#src/ui/plots/course-plot.tsx';
+import { turnAt } from '#src/ui/plots/course-shapes.ts';
+import { coursePoints } from './course-data.ts';
+
+const label = ({ course, figures, reps }: ReadingResult, side: Side): string => {
+  const used = reps.filter(({ used }) => used).length;
+  const [at60, at90] = [turnAt(course, 60), turnAt(course, 90)];
+  if (!figures || at60 === null || at90 === null)
+    return `Course of the ${side} support side: nothing could be fitted.`;
+  return `Course of the ${side} support side over ${inWords(used)} ${used === 1 ? 'rep' : 'reps'}: turn ${turn(at60)} at 60° of lift, ${turn(at90)} at 90°; change ${turn(figures.d)} ${plusMinus(1.96 * figures.uC)}.`;
+};
+
+/** The courses of one side: points of each rep, line and band of all, the change as a bracket. */
+export function ReadingCourse({
+  result,
+  side,
+  height,
+  small = false,
+  reach,
+}: {
+  result: ReadingResult;
+  side: Side;
+  height?: number;
+  /** Without the lines of the single reps, for a pair of plots. */
+  small?: boolean;
+  /** Further turns that have to fit, so that two plots share their scale. */
+  reach?: readonly number[];
+}) {
+  const { course, figures, onset, reps } = result;
+  const used = reps.filter((rep) => rep.used);
+  const at60 = turnAt(course, 60);
+  return (
+    <CoursePlot
+      label={label(result, side)}
+      height={height}
+      curve={course}
+      repCurves={used.length > 1 && !small ? used.map(({ curve }) => curve) : []}
+      points={coursePoints(reps)}
+      reach={reach}
+      empty={course.length > 0 ? undefined : ['No course can be drawn from these marks.']}
+    >
+      {(scale) => (
+        <>
+          {at60 !== null && figures && (
+            <CourseBracket at60={at60} change={figures.d} words={turn(figures.d)} scale={scale} />
+          )}
+          {onset && !small && (
+            <CourseOnset
+              low={onset.low}
+              high={onset.high}
+              words={
+                scale.compact
+                  ? 'starts here'
+                  : `starts somewhere here: ${degrees(onset.low, 0)} to ${degrees(onset.high, 0)}`
+              }
+              scale={scale}
+            />
+          )}
+        </>
+      )}
+    </CoursePlot>
+  );
+}

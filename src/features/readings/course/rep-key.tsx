@@ -1,0 +1,55 @@
+import { Link } from 'react-router-dom';
+import type { Reading } from '#shared/contracts/readings.ts';
+import type { RepResult } from '#shared/reading/types.ts';
+import { capital, plusMinus, turn } from '#src/ui/figures.ts';
+import { paths } from '#src/ui/paths.ts';
+import { repSymbol } from '#src/ui/plots/course-points.tsx';
+import { repFaultWords } from '../words/rep-fault-words.ts';
+import { repName } from '../words/rep-names.ts';
+
+/** Each rep with its symbol and its own change; what is left out says why and stays open to be looked at. */
+export function RepKey({ reading }: { reading: Reading }) {
+  const used = reading.result.reps.filter(({ used }) => used);
+  const left = reading.result.reps.filter(({ used }) => !used);
+  return (
+    <ul className="space-y-1">
+      {used.map((rep, n) => (
+        <li key={rep.id} className="flex items-baseline gap-2 text-ink">
+          <svg
+            width="12"
+            height="12"
+            viewBox="-6 -6 12 12"
+            aria-hidden="true"
+            className="flex-none self-center"
+          >
+            <path d={repSymbol(n)} className="fill-shank" />
+          </svg>
+          <span>
+            <RepLink reading={reading} rep={rep} />{' '}
+            {rep.fit &&
+              `${turn(rep.fit.change.value)} ${plusMinus(1.96 * rep.fit.change.u)}, ${rep.fit.used} frames`}
+          </span>
+        </li>
+      ))}
+      {left.map((rep) => (
+        <li key={rep.id} className="flex items-baseline gap-2">
+          <span aria-hidden="true" className="w-3 flex-none">
+            –
+          </span>
+          <span>
+            <RepLink reading={reading} rep={rep} />{' '}
+            {rep.why.length > 0 ? `left out: ${rep.why.map(repFaultWords).join('; ')}` : 'left out'}
+          </span>
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+function RepLink({ reading, rep }: { reading: Reading; rep: RepResult }) {
+  const clipId = reading.reps.find((each) => each.id === rep.id)?.clipId;
+  const name = capital(repName(reading, rep.id));
+  const frame = rep.frames.find(({ phase }) => phase === 'rise')?.frame ?? rep.frames[0]?.frame;
+  if (clipId === undefined) return <>{name}</>;
+  return <Link to={paths.bench(clipId, frame === undefined ? {} : { frame })}>{name}</Link>;
+}

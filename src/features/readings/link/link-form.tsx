@@ -1,0 +1,95 @@
+import { useQueryClient } from '@tanstack/react-query';
+import type * as z from 'zod';
+import type { SidePage } from '#shared/contracts/readings.ts';
+import { replayBody } from '#shared/contracts/replays.ts';
+import { routes } from '#shared/contracts/routes.ts';
+import { call } from '#src/api/client.ts';
+import { replaysOptions } from '#src/api/readings.queries.ts';
+import { Button } from '#src/ui/button.tsx';
+import { CheckboxField } from '#src/ui/form/choice-fields.tsx';
+import { Form } from '#src/ui/form/form.tsx';
+import { SelectField, TextArea, TextField } from '#src/ui/form/text-field.tsx';
+import { useZodForm } from '#src/ui/form/use-zod-form.ts';
+import type { NamedRep } from '../side-clips.ts';
+import { DaysField } from './days-field.tsx';
+import { repChoice } from './rep-choice.ts';
+
+const formBody = replayBody.omit({ visitId: true, side: true, fromFrame: true, toFrame: true });
+
+/** `onMade` gets the address; it is in no later answer. */
+export function LinkForm({
+  page,
+  reps,
+  onMade,
+}: {
+  page: SidePage;
+  reps: readonly NamedRep[];
+  onMade: (address: string) => void;
+}) {
+  const client = useQueryClient();
+  const measured = page.reading !== null;
+  const form = useZodForm(formBody, {
+    repId: preferred(page, reps),
+    message: '',
+    days: 30,
+    passPhrase: null,
+    showReading: measured,
+    showCall: true,
+  });
+  const send = async (body: z.output<typeof formBody>) => {
+    const made = await call(routes.makeReplay, {
+      body: { ...body, visitId: page.visit.id, side: page.side },
+    });
+    void client.invalidateQueries({ queryKey: replaysOptions(page.visit.id).queryKey });
+    onMade(made.url);
+  };
+  return (
+    <Form form={form} send={send} className="max-w-form space-y-5">
+      <div className="grid gap-5 phone:grid-cols-2">
+        <SelectField
+          name="repId"
+          label="Rep that is played"
+          options={reps.map((named) => ({
+            value: named.rep.id,
+            label: repChoice(named, new Set(reps.map(({ clip }) => clip.id)).size > 1),
+          }))}
+        />
+        <DaysField />
+      </div>
+      <TextArea
+        name="message"
+        label={`A sentence of your own to ${page.athlete.name}`}
+        hint="In words a person without training understands."
+        optional
+      />
+      <TextField
+        name="passPhrase"
+        label="Pass phrase"
+        hint="At least 6 characters, asked before anything is shown. It cannot be looked up later."
+        optional
+        emptyIsNull
+      />
+      <div>
+        {measured && <CheckboxField name="showReading" label="Show the measured reading" />}
+        <CheckboxField
+          name="showCall"
+          label="Show the call by eye"
+          note="Labelled: seen by your coach, not measured."
+        />
+      </div>
+      <Button type="submit" busy={form.formState.isSubmitting} busyLabel="Making the link…">
+        Make a link
+      </Button>
+    </Form>
+  );
+}
+
+/** A rep that counts in the reading rather than one that was left out. */
+const preferred = ({ reading }: SidePage, reps: readonly NamedRep[]): string => {
+  const used = new Set(reading?.result.reps.filter((rep) => rep.used).map(({ id }) => id));
+  const best =
+    reps.find(({ rep }) => used.has(rep.id)) ??
+    reps.find(({ rep }) => rep.excluded === null) ??
+    reps[0];
+  return best?.rep.id ?? '';
+};

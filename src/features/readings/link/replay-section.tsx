@@ -1,0 +1,70 @@
+import { useQuery } from '@tanstack/react-query';
+import { useState } from 'react';
+import type { SidePage } from '#shared/contracts/readings.ts';
+import { athleteOptions } from '#src/api/athletes.queries.ts';
+import { replaysOptions } from '#src/api/readings.queries.ts';
+import { ButtonLink } from '#src/ui/button.tsx';
+import { Section } from '#src/ui/page.tsx';
+import { paths } from '#src/ui/paths.ts';
+import { Empty, ErrorState, Loading } from '#src/ui/states.tsx';
+import { useSideReps } from '../side-clips.ts';
+import { LinkAddress } from './link-address.tsx';
+import { LinkForm } from './link-form.tsx';
+import { LinkList } from './link-list.tsx';
+
+/** The athlete's replay: make a link, hand its address over once, see whether it was opened, end it. */
+export function ReplaySection({ page }: { page: SidePage }) {
+  const { athlete, visit, side } = page;
+  const person = useQuery(athleteOptions(athlete.id));
+  const links = useQuery(replaysOptions(visit.id));
+  const { reps, pending, error, retry } = useSideReps(visit.id, side);
+  const [address, setAddress] = useState<string | null>(null);
+  const own = links.data?.items.filter((link) => link.side === side) ?? [];
+  const failed = [person, links].find(({ isError, data }) => isError && !data);
+  const consented = person.data?.consentedTo.includes('sharing-by-link') ?? false;
+  return (
+    <Section
+      id="replay"
+      title="Replay for the athlete"
+      note="One rep behind a link, in plain words."
+      margin={
+        <>
+          <p>
+            The link opens this one replay and nothing else of the practice. Whoever has it can open
+            it until it lapses or you end it.
+          </p>
+          <p>A pass phrase is told by voice, not sent beside the link.</p>
+        </>
+      }
+    >
+      {failed || error ? (
+        <ErrorState
+          error={failed?.error ?? error}
+          onRetry={() => (failed ? void failed.refetch() : retry())}
+        />
+      ) : !person.data || !links.data || pending ? (
+        <Loading label="Loading the links" />
+      ) : (
+        <>
+          {address !== null && <LinkAddress address={address} onDone={() => setAddress(null)} />}
+          {!consented ? (
+            <Empty
+              title="There is no consent to a replay by link"
+              action={<ButtonLink to={paths.newConsent(athlete.id)}>Record the consent</ButtonLink>}
+            >
+              {athlete.name} has not agreed to ‘A replay behind a link, for the athlete’, or that
+              consent has ended. Links that were made are dead until it is given again.
+            </Empty>
+          ) : reps.length === 0 ? (
+            <Empty title="No rep of this side is named yet">
+              A replay plays one rep. Open a clip on the Bench and name its reps first.
+            </Empty>
+          ) : (
+            address === null && <LinkForm page={page} reps={reps} onMade={setAddress} />
+          )}
+          <LinkList links={own} reps={reps} />
+        </>
+      )}
+    </Section>
+  );
+}

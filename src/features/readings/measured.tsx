@@ -1,0 +1,29 @@
+import type { Reading, SidePage } from '#shared/contracts/readings.ts';
+import { CourseSection } from './course/course-section.tsx';
+import { ReadingHead } from './head/reading-head.tsx';
+import { HistorySection } from './history/history-section.tsx';
+import { ReplaySection } from './link/replay-section.tsx';
+import { PartsSection } from './parts/parts-section.tsx';
+import { AssumptionSection } from './reasons/assumption-section.tsx';
+import { ReasonsSection } from './reasons/reasons-section.tsx';
+import { SettleSection } from './reasons/settle-section.tsx';
+import { BothSides } from './sides/both-sides.tsx';
+import { SubstitutionsSection } from './substitutions/substitutions-section.tsx';
+
+/** The page of a side that has marks, whatever they add up to. */
+export function Measured({ page, reading }: { page: SidePage; reading: Reading }) {
+  return (
+    <>
+      <ReadingHead page={page} reading={reading} />
+      <SettleSection reading={reading} />
+      <CourseSection reading={reading} />
+      <PartsSection reading={reading} />
+      <SubstitutionsSection reading={reading} />
+      <BothSides page={page} reading={reading} />
+      <ReasonsSection reading={reading} />
+      <AssumptionSection page={page} />
+      <ReplaySection page={page} />
+      <HistorySection page={page} />
+    </>
+  );
+}

@@ -1,0 +1,89 @@
+import type { Reading } from '#shared/contracts/readings.ts';
+import type { Side } from '#shared/contracts/primitives.ts';
+import type { ReadingFigures } from '#shared/reading/types.ts';
+import { turnDial } from '#shared/overlay/dials.ts';
+import { OverlaySvg } from '#src/canvas/overlay-svg.tsx';
+import { degrees, turn } from '#src/ui/figures.ts';
+import { Section } from '#src/ui/page.tsx';
+import { SideMark } from '#src/ui/side-mark.tsx';
+import { partsAtGates, type Parts } from './parts-at-gates.ts';
+
+/** Where the turn comes from: pelvis over a planted thigh, or the thigh itself, drawn from above. */
+export function PartsSection({ reading }: { reading: Reading }) {
+  const { result, side, provisional } = reading;
+  const parts = partsAtGates(result);
+  const { figures } = result;
+  if (!parts || !figures) return null;
+  return (
+    <Section
+      title="Pelvis and thigh"
+      margin={
+        <>
+          <p className="flex items-center gap-2">
+            <SideMark kind="midline" /> belt pointer, shows the pelvis
+          </p>
+          <p className="flex items-center gap-2">
+            <SideMark kind="support" /> support thigh
+          </p>
+          <p>Dashed: the athlete’s own quiet stance. It is zero here, not an anatomical zero.</p>
+        </>
+      }
+    >
+      <div className="flex flex-wrap gap-4">
+        <GateDial name="At 60° of lift" parts={parts.at60} side={side} provisional={provisional} />
+        <GateDial name="At 90° of lift" parts={parts.at90} side={side} provisional={provisional} />
+      </div>
+      <p className="mt-4 max-w-lead">{partsSentence(figures)}</p>
+    </Section>
+  );
+}
+
+const partsSentence = ({ pelvis, thigh }: ReadingFigures): string => {
+  const swing = pelvis.value > 0 ? 'away from the support side' : 'towards the support side';
+  const told = (part: { value: number; u: number }) => Math.abs(part.value) > 1.96 * part.u;
+  const first = told(pelvis)
+    ? `From 60° to 90° the pelvis turns ${swing} by ${degrees(Math.abs(pelvis.value))}.`
+    : 'From 60° to 90° the pelvis stays within its error.';
+  const second = told(thigh)
+    ? `The planted thigh turns ${thigh.value > 0 ? 'outwards' : 'inwards'} by ${degrees(Math.abs(thigh.value))}.`
+    : 'The planted thigh stays within its error.';
+  return `${first} ${second}`;
+};
+
+function GateDial({
+  name,
+  parts: { pelvis, thigh },
+  side,
+  provisional,
+}: {
+  name: string;
+  parts: Parts;
+  side: Side;
+  provisional: boolean;
+}) {
+  const { primitives, width, height } = turnDial({
+    supportSide: side,
+    pelvisPart: pelvis,
+    thighPart: thigh,
+    provisional,
+  });
+  return (
+    <figure className="w-[232px] max-w-full">
+      <div className="rounded bg-dusk p-3">
+        <OverlaySvg
+          primitives={primitives}
+          width={width}
+          height={height}
+          label={`${name}, from above: pelvis part ${turn(pelvis)}, thigh part ${turn(thigh)}`}
+          className="h-auto w-full"
+        />
+      </div>
+      <figcaption className="mt-1 text-note">
+        <b>{name}</b>: turn {turn(pelvis + thigh)}
+        <span className="block text-soft">
+          pelvis {turn(pelvis)}, thigh {turn(thigh)}
+        </span>
+      </figcaption>
+    </figure>
+  );
+}

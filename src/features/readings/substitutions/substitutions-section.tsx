@@ -1,0 +1,92 @@
+import { Link } from 'react-router-dom';
+import type { Reading } from '#shared/contracts/readings.ts';
+import { decimal, degrees, turn } from '#src/ui/figures.ts';
+import { Section } from '#src/ui/page.tsx';
+import { paths } from '#src/ui/paths.ts';
+import { type Column, Table } from '#src/ui/table.tsx';
+import { missingWords } from '../words/missing-words.ts';
+import { directionWords } from '../words/substitution-words.ts';
+import { ChangeBar } from './change-bar.tsx';
+import { type ChangeRow, changeRows } from './changes.ts';
+
+const changeText = ({ change, unit }: ChangeRow): string => {
+  if (change === null) return '';
+  return unit === 'degrees' ? turn(change) : `${change > 0 ? '+' : ''}${decimal(change, 0)} mm`;
+};
+
+const COLUMNS: readonly Column<ChangeRow>[] = [
+  {
+    key: 'measure',
+    label: 'Change from quiet stance to the top',
+    cell: (row) => (
+      <>
+        <b>{row.label}</b>{' '}
+        <span className="text-soft">
+          {row.change === null ? '' : directionWords(row.id, row.change)}
+        </span>
+      </>
+    ),
+  },
+  {
+    key: 'change',
+    label: 'change',
+    cell: (row) =>
+      row.missing ? (
+        <span className="text-soft">{missingWords(row.missing)}</span>
+      ) : (
+        <span className={row.beyond ? 'font-bold' : 'text-soft'}>{changeText(row)}</span>
+      ),
+  },
+  {
+    key: 'bar',
+    label: '−10 … 0 … +10° (mm: 20)',
+    cell: (row) => (
+      <div className="w-[200px] max-w-full">
+        <ChangeBar row={row} />
+      </div>
+    ),
+  },
+  {
+    key: 'limit',
+    label: 'can be told from none beyond',
+    end: true,
+    cell: (row) =>
+      row.smallest === null ? (
+        <span className="text-soft">not known</span>
+      ) : (
+        <>
+          <span className="text-soft tablet:hidden">told from none beyond </span>
+          {row.unit === 'degrees' ? degrees(row.smallest) : `${decimal(row.smallest, 0)} mm`}
+        </>
+      ),
+  },
+];
+
+/** What else moved, each change against what can be told from none. */
+export function SubstitutionsSection({ reading }: { reading: Reading }) {
+  const rows = changeRows(reading.result);
+  const seen = rows.filter(
+    ({ missing, change }) => change !== null || missing?.code !== 'view-cannot-show-it',
+  );
+  const tilt = rows.find(({ id }) => id === 'pelvic-tilt');
+  return (
+    <Section
+      title="Substitutions"
+      wide
+      note="What else moved. Grey: too small to tell from none. Zero is the quiet stance. Mean of the reps; the limit is that of one."
+    >
+      {seen.length === 0 ? (
+        <p className="text-soft">Nothing of it can be shown from these marks.</p>
+      ) : (
+        <Table caption="Substitutions" columns={COLUMNS} rows={seen} rowKey={({ id }) => id} />
+      )}
+      {(!tilt || tilt.change === null) && (
+        <p className="mt-4 max-w-lead">
+          <b>Pelvic tilt:</b> not seen from the front; film the support side to rule it in or out. A
+          pelvis tipped forward would make turning out harder, so the two are read together.{' '}
+          <Link to={paths.visit(reading.visitId)}>Film it</Link>
+        </p>
+      )}
+    </Section>
+  );
+}

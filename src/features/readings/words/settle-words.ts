@@ -1,0 +1,77 @@
+import type { Settle } from '#shared/reading/reasons.ts';
+import { capital, degrees, inWords, plusMinus } from '#src/ui/figures.ts';
+import { landmarkNames } from './landmark-words.ts';
+import type { NameOf } from './rep-names.ts';
+
+export interface SettleWords {
+  /** What to do. */
+  readonly act: string;
+  /** What it would bring, where that is known. */
+  readonly gain: string | null;
+}
+
+const becomes = (from: number, to: number): string =>
+  `${plusMinus(1.96 * from)}° would become about ${plusMinus(1.96 * to)}°`;
+const frames = (count: number, kind = ''): string =>
+  `${inWords(count)} more ${kind}${count === 1 ? 'frame' : 'frames'}`;
+
+/** What would settle a reading that is not settled. */
+export const settleWords = (settle: Settle, nameOf: NameOf): SettleWords => {
+  switch (settle.code) {
+    case 'mark-frames':
+      return {
+        act: `Mark ${frames(settle.more)} of ${nameOf(settle.rep)} with a lift from ${degrees(settle.from, 0)} to ${degrees(settle.to, 0)}`,
+        gain: 'Marks at the ends of the window are worth most.',
+      };
+    case 'mark-quiet-frames':
+      return {
+        act: `Mark ${frames(settle.more, 'quiet ')} of ${nameOf(settle.rep)}`,
+        gain: 'They say where zero is.',
+      };
+    case 'give-scale':
+      return {
+        act: 'Give the scale: two ends of the rod, or the body height',
+        gain: 'Without it no turn can be computed.',
+      };
+    case 'give-distance':
+      return {
+        act: 'Give the distance from the lens to the athlete',
+        gain: 'Without it no turn can be computed.',
+      };
+    case 'give-pointer-length':
+      return {
+        act: `Give the length of the ${settle.pointer} pointer`,
+        gain: 'The pointer then counts.',
+      };
+    case 'mark-landmarks':
+      return {
+        act: `Mark on ${nameOf(settle.rep)}: ${landmarkNames(settle.landmarks)}`,
+        gain: null,
+      };
+    case 'film-from-front':
+      return {
+        act: 'Film the lift from the front',
+        gain: 'The turn cannot be measured from another view.',
+      };
+    case 'lift-higher':
+      return {
+        act: `Lift higher: ${degrees(settle.reached, 0)} was reached, ${degrees(settle.needed, 0)} is needed`,
+        gain: 'Only as far as it goes without pain.',
+      };
+    case 'stand-still-first':
+      return {
+        act: 'Stand still for three seconds first, then film again',
+        gain: 'Zero is the athlete’s own quiet stance.',
+      };
+    case 'another-rep':
+      return { act: 'Add another rep', gain: capital(becomes(settle.from, settle.u)) };
+    case 'richer-set':
+      return {
+        act:
+          settle.set === 'belt+thigh'
+            ? 'Film once more with belt and thigh pointers'
+            : 'Film once more with a belt pointer',
+        gain: capital(becomes(settle.from, settle.u)),
+      };
+  }
+};
