@@ -1,4 +1,3 @@
-import { createHash } from 'node:crypto';
 import express, { type Express, Router } from 'express';
 import type { Route } from '#shared/contracts/route.ts';
 import type { Feature } from '../main/feature.ts';
@@ -10,6 +9,7 @@ import { problemHandler, unknownRoute } from './problem-handler.ts';
 import { requestIds } from './request-id.ts';
 import { neverStored, ownOriginOnly, securityHeaders } from './security.ts';
 import { makeServe } from './serve.ts';
+import { tokenHash } from './token-hash.ts';
 
 export interface AppOptions {
   readonly features: readonly Feature[];
@@ -19,9 +19,6 @@ export interface AppOptions {
   /** True while the server stops: requests on connections that are still open are sent elsewhere. */
   readonly isClosing?: () => boolean;
 }
-
-export const tokenHash = (token: string): string =>
-  createHash('sha256').update(token).digest('hex');
 
 /** The web server's one chain: who and what in front, features in the middle, problems at the end. */
 export const makeApp = (

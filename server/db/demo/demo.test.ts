@@ -9,6 +9,7 @@ import { handles } from '../../jobs/job.ts';
 import { startWorker, type Worker } from '../../jobs/worker.ts';
 import { product } from '../in-practice.ts';
 import { DEMO_ACCOUNTS, GREYWATER, PENNYWORT } from './accounts.ts';
+import { demoReplayLine } from './demo-replay.ts';
 import { fillDemoJob } from './fill-demo.job.ts';
 import { GREYWATER_STORY } from './greywater-story.ts';
 import { PENNYWORT_STORY } from './pennywort-story.ts';
@@ -130,6 +131,13 @@ describe('the demo', () => {
     }
     expect(await kinds(DEMO_ACCOUNTS.supervisor)).toContain('reading-ready');
     expect(await kinds(DEMO_ACCOUNTS.owner)).toContain('consent-lapses');
+  });
+
+  it('hands one athlete a link that opens', async () => {
+    const line = await demoReplayLine(api.ground);
+    const token = /\/r\/(\S+)/.exec(line)?.[1] ?? '';
+    const { body } = await api.nobody.get(`/api/r/${token}`).expect(200);
+    expect(body).toMatchObject({ athleteGivenName: 'Mara', reading: { code: 'early-turn-out' } });
   });
 
   it('keeps its two practices apart', async () => {

@@ -31,8 +31,11 @@ const geometryOf = ({ setUp, rod }: DemoTruth): ClipGeometry => ({
   plumb: null,
 });
 
-const repId = ({ practiceId }: Hands, { clipPlace }: PlacedClip, index: number): string =>
-  storyId(practiceId, 'rep', ...clipPlace, index);
+export const demoRepId = (
+  { practiceId }: Hands,
+  { clipPlace }: PlacedClip,
+  index: number,
+): string => storyId(practiceId, 'rep', ...clipPlace, index);
 
 /** The first frame of the rise at which the thigh has come so far. */
 const frameAtLift = (truth: DemoTruth, thread: ThreadStory): number => {
@@ -91,7 +94,7 @@ const addReps = async (
     const rep = truth.reps[index];
     if (!rep) throw new RangeError(`The clip has no rep ${index}.`);
     em.create(Rep, {
-      id: repId(hands, placed, index),
+      id: demoRepId(hands, placed, index),
       clip,
       supportSide: rep.supportSide,
       startFrame: rep.firstFrame,
@@ -107,7 +110,7 @@ const addReps = async (
     const rep = truth.reps[index];
     if (!rep) continue;
     const marks = marksOfRep(truth, rep, {
-      repId: repId(hands, placed, index),
+      repId: demoRepId(hands, placed, index),
       byUser: hands.coach,
       at: hourOf(placed.visit.daysAgo, 11),
       seed: source.seed + index,

@@ -11,6 +11,7 @@ import { product } from '../in-practice.ts';
 import { layFile, truthOf } from './clip-file.ts';
 import { fillClip, type Hands } from './fill-clip.ts';
 import { FILL_DEMO } from './fill-demo-type.ts';
+import { makeDemoReplay } from './demo-replay.ts';
 import { GREYWATER_STORY } from './greywater-story.ts';
 import { PENNYWORT_STORY } from './pennywort-story.ts';
 import { storyId } from './story-id.ts';
@@ -108,6 +109,7 @@ const run = async ({
     await sendClip(ground, hands, placed);
     const truth = await truthOf(placed.clip);
     await ground.inPractice(product(practiceId), ({ em }) => fillClip(em, hands, placed, truth));
+    await makeDemoReplay(ground, hands, placed);
   }
   await waitUntilPrepared(ground, practiceId, signal);
   await deriveReadings(ground, hands, story);

@@ -16,7 +16,10 @@ export interface Hand {
   readonly hollow?: boolean;
 }
 
-/** Places and noise of one rep's marks; covered landmarks are marked hidden. */
+/**
+ * Places and noise of one rep's marks. Something covered is marked hidden, unless a landmark set rests on it: that
+ * the coach finds again from its neighbours and from the frames around, half as well.
+ */
 export const marksOfRep = (
   truth: DemoTruth,
   rep: DemoRep,
@@ -27,8 +30,10 @@ export const marksOfRep = (
   const shown = landmarksIn(truth.view).filter((id) => marks[id]);
   return framesToMark(truth, rep).flatMap((frame, index) =>
     shown.map((id) => {
-      const covered = (hidden[id] ?? []).some(([from, to]) => frame >= from && frame <= to);
-      const spread = landmark(id).errorClass === 'pointer' ? spreadPx / 2 : spreadPx;
+      const { errorClass, sets } = landmark(id);
+      const unseen = (hidden[id] ?? []).some(([from, to]) => frame >= from && frame <= to);
+      const covered = unseen && sets.length === 0;
+      const spread = spreadPx * (errorClass === 'pointer' ? 0.5 : 1) * (unseen ? 2 : 1);
       const [du, dv] = [spread * noise(), spread * noise()];
       const tracked = hollow && index % 3 === 1 && !covered;
       return {

@@ -1,6 +1,7 @@
 import { Client } from 'pg';
 import type { Ground } from '../../main/ground.ts';
 import { DEMO_ACCOUNTS } from './accounts.ts';
+import { demoReplayLine } from './demo-replay.ts';
 import { demoPassword, keepDemoPassword } from './demo-password.ts';
 import { GREYWATER_STORY } from './greywater-story.ts';
 import { PENNYWORT_STORY } from './pennywort-story.ts';
@@ -37,7 +38,7 @@ export const seedDemo = async (ground: Ground): Promise<Demo | null> => {
         if (!there.has(story.id)) await seedPractice(ground, story, password);
     }
     if (demoIsThere) await keepDemoPassword(ground, password);
-    return { lines: linesOf(password) };
+    return { lines: [...linesOf(password), await demoReplayLine(ground)] };
   } finally {
     await client.end();
   }

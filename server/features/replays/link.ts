@@ -2,8 +2,8 @@ import { createHash, randomBytes, timingSafeEqual } from 'node:crypto';
 import { parseCookie, stringifySetCookie } from 'cookie';
 import type { Request, Response } from 'express';
 import type { LinkActor } from '#shared/access/actors.ts';
-import { tokenHash } from '../../http/app.ts';
 import { Problem } from '../../http/problem.ts';
+import { tokenHash } from '../../http/token-hash.ts';
 import type { Ground } from '../../main/ground.ts';
 
 const COOKIE = 'redshank_replay';

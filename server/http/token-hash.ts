@@ -1,0 +1,5 @@
+import { createHash } from 'node:crypto';
+
+/** What is kept of a link's token: SHA-256, hex. A token has 256 random bits, so it needs no salt and no slowness. */
+export const tokenHash = (token: string): string =>
+  createHash('sha256').update(token).digest('hex');
