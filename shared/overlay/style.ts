@@ -10,15 +10,15 @@ export const OVERLAY_SIZES = {
   mark: 2.4,
   /** Dark edge on each side of a stroke: orange on skin alone is 1.2 : 1. */
   halo: 2.25,
-  ringRadius: 7.5,
-  diamondHalf: 8.5,
-  bracketHalf: 7.5,
+  ringRadius: 6.25,
+  diamondHalf: 7.5,
+  bracketHalf: 6.5,
   /** How far a bracket's ends turn in. */
-  bracketLip: 4,
-  dot: 1.8,
+  bracketLip: 3.5,
+  dot: 1.6,
   nextRadius: 14,
   text: 16,
-  textGap: 16,
+  textGap: 14,
 } as const;
 
 /** Dash and gap, output pixels. */

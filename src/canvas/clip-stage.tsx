@@ -39,6 +39,8 @@ export interface ClipStageProps {
   onSelect: (landmark: LandmarkId) => void;
   /** A press anywhere on the stage, so that the page can take the focus there. */
   onPress: () => void;
+  /** Told when the stage has got another width, CSS px. */
+  onMeasured?: (width: number) => void;
   /** Told what is on show, for what happens outside of painting. */
   shownRef: RefObject<Shown | null>;
   /** Stands over the picture, in its coordinates: slider, handles. */
@@ -69,6 +71,11 @@ export function ClipStage({ children, className, shownRef, ...props }: ClipStage
     onPlace,
     onPress,
   });
+  const width = size?.width ?? null;
+  const { onMeasured } = props;
+  useEffect(() => {
+    if (width !== null) onMeasured?.(width);
+  }, [width, onMeasured]);
   useEffect(() => {
     shownRef.current = size && { viewport, size };
   });

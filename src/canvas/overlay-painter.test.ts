@@ -118,7 +118,7 @@ describe('paintOverlay', () => {
       landmark: null,
     };
     expect(paint([drawn], 2).find(([name]) => name === 'arc')?.[3]).toBe(60);
-    expect(paint([{ ...drawn, radius: null }], 2).find(([name]) => name === 'arc')?.[3]).toBe(7.5);
+    expect(paint([{ ...drawn, radius: null }], 2).find(([name]) => name === 'arc')?.[3]).toBe(6.25);
   });
 
   it('keeps words inside the picture', () => {

@@ -81,7 +81,7 @@ export function OverlaySvg({
                 x={drawn.at.u}
                 y={drawn.at.v}
                 fontSize="14"
-                fill={stroke}
+                fill={drawn.role === 'note' ? 'var(--color-dusk-soft)' : stroke}
                 textAnchor={
                   drawn.towards === 'left' ? 'end' : drawn.towards === 'right' ? 'start' : 'middle'
                 }

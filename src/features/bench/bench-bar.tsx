@@ -7,6 +7,7 @@ import { useBench, useBenchDocument, useBenchModel, useBenchTools } from './benc
 import { SaveState } from './save-state.tsx';
 import type { Desk } from './store/bench-store.ts';
 import { MARK } from './store/tools.ts';
+import { useNarrow } from './use-media.ts';
 
 const DESKS: readonly { desk: Desk; label: string }[] = [
   { desk: 'course', label: 'Course' },
@@ -24,9 +25,11 @@ export function BenchBar() {
   const { athlete, visit, clip } = useBenchDocument();
   const { current, reps } = useBenchModel();
   const { canUndo, canRedo, undo, redo } = useUndo();
+  const narrow = useNarrow();
   const what = current
     ? `${supportWords(current.rep.supportSide)}, ${VIEW_WORDS[current.rep.view]}, rep ${current.rep.number} of ${reps.length}`
     : `${clipWords(clip)}, no rep yet`;
+  const short = current ? `${current.rep.supportSide}, rep ${current.rep.number}` : 'no rep yet';
   return (
     <div className="bench-bar">
       <title>{`${athlete.name}, ${what} · Redshank`}</title>
@@ -38,22 +41,25 @@ export function BenchBar() {
           /
         </span>
         <Link to={paths.visit(visit.id)} className="whitespace-nowrap py-2.5 text-soft">
-          {shortDay(visit.day)}
+          {narrow ? '←' : shortDay(visit.day)}
+          {narrow && <span className="sr-only">Back to the visit of {shortDay(visit.day)}</span>}
         </Link>
-        <span aria-hidden="true" className="text-soft">
+        <span aria-hidden="true" className="hidden text-soft tablet:inline">
           /
         </span>
         <h1 tabIndex={-1} className="truncate font-bold">
-          {what}
+          {narrow ? `${athlete.name}, ${short}` : what}
         </h1>
       </nav>
       <div className="ml-auto flex items-center gap-1">
         <div className="hidden tablet:block">
           <SaveState />
         </div>
-        <button type="button" className={BUTTON} disabled={!canUndo} onClick={undo}>
-          Undo
-        </button>
+        {!narrow && (
+          <button type="button" className={BUTTON} disabled={!canUndo} onClick={undo}>
+            Undo
+          </button>
+        )}
         <button type="button" className={BUTTON} disabled={!canRedo} onClick={redo}>
           Redo
         </button>

@@ -1,10 +1,10 @@
-import { useEffect, useMemo, useRef } from 'react';
+import { useEffect, useEffectEvent, useMemo, useRef, useState } from 'react';
 import { type FramePoint, stagePoint } from '#shared/geometry/points.ts';
 import { landmark as landmarkOf } from '#shared/landmarks/table.ts';
 import { LANDMARK_IDS, type LandmarkId } from '#shared/landmarks/types.ts';
 import { ClipStage, type Shown } from '#src/canvas/clip-stage.tsx';
 import { type MarkHandle, MarkHandles } from '#src/canvas/mark-handles.tsx';
-import { centredOn, toFrame } from '#src/canvas/viewport.ts';
+import { type Size, toFrame } from '#src/canvas/viewport.ts';
 import { useMarking } from '../actions/use-marking.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { marksOn } from '../model/bench-model.ts';
@@ -12,15 +12,13 @@ import { MARK, withPoint } from '../store/tools.ts';
 import { useNarrow } from '../use-media.ts';
 import { fullFrameUrl } from './clip-source.ts';
 import { CornerGlass } from './corner-glass.tsx';
+import { narrowView } from './narrow-view.ts';
 import { FrameSlider } from './frame-slider.tsx';
 import { PictureState } from './picture-state.tsx';
 import { ZoomButtons } from './zoom-buttons.tsx';
 import { useDraw } from './use-draw.ts';
 import type { Pictures } from './use-pictures.ts';
 import { useTarget } from './use-target.ts';
-
-/** On a phone the stage shows this many source px across, so that a finger can aim. */
-const NARROW_SHARE = 0.5;
 
 /** The clip: picture, overlay, slider and the handles of its marks. */
 export function ClipView({ pictures }: { pictures: Pictures }) {
@@ -34,6 +32,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   const draw = useDraw();
   const target = useTarget();
   const narrow = useNarrow();
+  const [width, setWidth] = useState(0);
   const slider = useRef<HTMLDivElement>(null);
   const shown = useRef<Shown>(null);
   const expected = target?.expected ?? null;
@@ -41,13 +40,15 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   // a cross that was moved by keyboard belongs to the landmark it was moved for
   useEffect(() => hand.set({ cross: null }), [hand, frame, target?.landmark]);
 
-  // on a phone the picture goes to where the landmark asked for is expected
+  // on a phone the picture goes to what is to be seen; a finger may move it until the next one
+  const marks = marksOn(current, frame);
+  const place = useEffectEvent((size: Size) =>
+    store.setState({ viewport: narrowView(expected, marks, frameSize, size) }),
+  );
   useEffect(() => {
     const size = shown.current?.size;
-    if (!narrow || !expected || !size) return;
-    const scale = size.width / (frameSize.width * NARROW_SHARE);
-    store.setState({ viewport: centredOn(expected, scale, frameSize, size) });
-  }, [narrow, expected, frameSize, store]);
+    if (narrow && size) place(size);
+  }, [narrow, expected, frame, width]);
 
   const placeAt = (point: FramePoint) => {
     if (tool.kind === 'line' || tool.kind === 'shape')
@@ -71,7 +72,6 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
     handle?.focus({ preventScroll: true });
   };
 
-  const marks = marksOn(current, frame);
   const handles = useMemo((): Omit<MarkHandle, 'at'>[] => {
     return LANDMARK_IDS.filter((id) => marks[id]?.to === 'point').map((id) => {
       const mark = marks[id];
@@ -102,6 +102,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
       onMove={(id, point) => marking.place(id, point)}
       onSelect={select}
       shownRef={shown}
+      onMeasured={setWidth}
       onPress={() => slider.current?.focus({ preventScroll: true })}
     >
       {(view) => {

@@ -15,7 +15,10 @@ export function CourseDesk() {
   const { store } = useBenchTools();
   const { current, figures } = useBenchModel();
   const between = useMedia('(min-width: 901px) and (max-width: 1199px)');
-  const tight = useMedia('(min-width: 901px) and (max-width: 1439px)');
+  const wide = useMedia('(min-width: 1200px)');
+  const low = useMedia('(max-height: 960px)');
+  // the values must be seen below it without scrolling
+  const height = between ? 284 : wide && low ? 300 : undefined;
   if (!current)
     return (
       <div className="max-w-[34em] py-4">
@@ -51,7 +54,7 @@ export function CourseDesk() {
           </p>
         </div>
       ) : (
-        <CourseView height={between ? 284 : tight ? 330 : undefined} />
+        <CourseView height={height} />
       )}
       {between ? (
         <FoldedValues />

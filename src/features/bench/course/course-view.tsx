@@ -52,7 +52,7 @@ export function CourseView({ height }: { height?: number }) {
             narrow ? 'the course follows.' : 'the course draws itself as you go on.',
           ];
   return (
-    <>
+    <div className="bench-course">
       <CourseTravel>
         <CoursePlot
           label={courseLabel(current.frames, current.rep.number)}
@@ -80,8 +80,9 @@ export function CourseView({ height }: { height?: number }) {
       </CourseTravel>
       {curve.length > 0 && (
         <p className="text-caption text-soft">
-          Band: 95 % of the change from 60°, under our error model. Hollow points rest on marks
-          nobody has looked at.
+          Band: 95 % of the change from 60°, under our error model.
+          {points.some((point) => point.hollow) &&
+            ' Hollow points rest on marks nobody has looked at.'}
         </p>
       )}
       {narrow && next && nextLift !== null && (
@@ -90,6 +91,6 @@ export function CourseView({ height }: { height?: number }) {
           {next.gain && `${gainWords(next).replace('reading', 'Reading')}.`}
         </p>
       )}
-    </>
+    </div>
   );
 }

@@ -1,7 +1,8 @@
 import { useRef } from 'react';
 import { Magnifier } from '#src/canvas/magnifier.tsx';
 import { useSize } from '#src/canvas/use-size.ts';
-import { useBench, useBenchTools } from '../bench-context.ts';
+import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { marksOn } from '../model/bench-model.ts';
 import { useDraw } from '../clip/use-draw.ts';
 import type { Target } from '../clip/use-target.ts';
 import { MAGNIFICATIONS } from '../store/taste.ts';
@@ -12,6 +13,12 @@ export function GlassPanel({ target }: { target: Target | null }) {
   const { hand, board, frameSize, copySize, store } = useBenchTools();
   const magnify = useBench((state) => state.taste.magnify);
   const draw = useDraw();
+  const { current, led } = useBenchModel();
+  const frame = useBench((state) => state.frame);
+  const marks = marksOn(current, frame);
+  // with nothing asked for it rests on the first mark there is
+  const first = led.map((id) => marks[id]).find((mark) => mark?.to === 'point');
+  const resting = target?.expected ?? (first?.to === 'point' ? first.point : null);
   const box = useRef<HTMLDivElement>(null);
   const size = useSize(box);
   const stronger = () => {
@@ -31,7 +38,7 @@ export function GlassPanel({ target }: { target: Target | null }) {
             height={size.height}
             enlarge={magnify}
             hand={hand}
-            resting={target?.expected ?? null}
+            resting={resting}
             draw={draw}
             className="block rounded-[2px]"
           />

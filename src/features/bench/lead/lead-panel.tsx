@@ -50,7 +50,7 @@ export function LeadPanel() {
       </div>
       {!narrow && <GlassPanel target={target} />}
       {narrow && <ThumbButtons asked={target?.landmark ?? null} />}
-      {inRep && !narrow && (
+      {inRep && !narrow && target && (
         <p className="text-note text-dusk-soft">
           On this frame: <span className="text-dusk-ink">{tallyWords(tally)}</span>
         </p>
@@ -63,7 +63,7 @@ export function LeadPanel() {
           <LandmarkSetChoice />
         </div>
       )}
-      {!narrow && <KeyHints />}
+      {!narrow && target && <KeyHints />}
     </div>
   );
 }

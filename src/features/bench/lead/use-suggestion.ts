@@ -22,16 +22,19 @@ export interface NextFrame {
 export function useNextFrame(): NextFrame | null {
   const { times } = useBenchTools();
   const { current, figures } = useBenchModel();
-  const { offers } = useReading();
+  const { offers, result } = useReading();
   return useMemo(() => {
     if (!current || current.rep.excluded) return null;
     const { startFrame, endFrame } = current.rep;
-    const first = firstFrame(
-      [frameIndex(startFrame), frameIndex(endFrame)],
-      times,
-      current.frames,
-      current.hill,
-    );
+    const used = result?.reps.some((each) => each.id === current.rep.id && each.used) ?? false;
+    const first = used
+      ? null
+      : firstFrame(
+          [frameIndex(startFrame), frameIndex(endFrame)],
+          times,
+          current.frames,
+          current.hill,
+        );
     if (first) return { frame: first.frame, why: first.why, lift: null, gain: null };
     const offer = offers.find((each) => each.rep === current.rep.id);
     if (!offer) return null;
@@ -43,5 +46,5 @@ export function useNextFrame(): NextFrame | null {
       // the gain is a figure too: it is not shown before the call by eye
       gain: figures && now !== null && then !== null ? { now, then } : null,
     };
-  }, [current, figures, offers, times]);
+  }, [current, figures, offers, result, times]);
 }

@@ -48,7 +48,9 @@ export const firstFrame = (
   const start = times[from] ?? 0;
   const end = times[to] ?? start;
   const marked = new Set(frames.map((each) => each.frame));
-  const early = frames.filter((each) => each.time <= start + QUIET_SPAN_MS);
+  const early = frames.filter(
+    (each) => each.phase === 'quiet' || each.time <= start + QUIET_SPAN_MS,
+  );
   if (early.length < QUIET) {
     const step = Math.min(QUIET_SPAN_MS, (end - start) / 4) / (QUIET - 1);
     for (let n = 0; n < QUIET; n += 1) {

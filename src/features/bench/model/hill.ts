@@ -9,6 +9,15 @@ export interface HillPoint {
   readonly lift: Degrees;
 }
 
+/**
+ * The hill as it is drawn: quiet stance is the ground. From the front a lift that low is no number,
+ * and its scatter would look like hills of its own.
+ */
+export const drawnHill = (frames: readonly CourseFrame[]): HillPoint[] =>
+  frames.flatMap(({ frame, time, lift, phase }) =>
+    lift === null ? [] : [{ frame, time, lift: phase === 'quiet' ? degrees(0) : lift }],
+  );
+
 /** The lift over the rep as its marked frames give it. */
 export const hillOf = (frames: readonly CourseFrame[]): HillPoint[] =>
   frames.flatMap(({ frame, time, lift }) => (lift === null ? [] : [{ frame, time, lift }]));

@@ -4,7 +4,7 @@ import { useSize } from '#src/canvas/use-size.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { useNextFrame } from '../lead/use-suggestion.ts';
 import type { BenchModel } from '../model/bench-model.ts';
-import { liftAt } from '../model/hill.ts';
+import { drawnHill, liftAt } from '../model/hill.ts';
 import { goTo } from '../store/bench-store.ts';
 import { momentsOf } from './moments.ts';
 import { StripHill } from './strip-hill.tsx';
@@ -31,6 +31,7 @@ const spanOf = (
  */
 export function LiftStrip() {
   const { times } = useBenchTools();
+  const { comments } = useBenchDocument();
   const model = useBenchModel();
   const naming = useBench((state) => state.desk === 'reps');
   const box = useRef<HTMLDivElement>(null);
@@ -41,7 +42,7 @@ export function LiftStrip() {
       {size && (
         <Strip
           whole={whole}
-          layout={stripLayout(size, spanOf(model, whole, times.length), times)}
+          layout={stripLayout(size, spanOf(model, whole, times.length), times, comments.length > 0)}
         />
       )}
     </div>
@@ -57,7 +58,8 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
   const frame = useBench((state) => state.frame);
   const next = useNextFrame();
   const { x, y, base, left, right, width, height, compact, from, to } = layout;
-  const hill = figures && current && current.hill.length > 1 && !whole ? current.hill : null;
+  const hill =
+    figures && current && current.hill.length > 1 && !whole ? drawnHill(current.frames) : null;
   const moments =
     current && !whole ? momentsOf(current.rep, current.course?.phases ?? null, times) : [];
   const time = times[frame];
@@ -92,7 +94,14 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
         viewBox={`0 0 ${width} ${height}`}
         aria-hidden="true"
       >
-        {hill && <StripHill hill={hill} layout={layout} fromFront={model.view === 'front'} />}
+        {hill && (
+          <StripHill
+            hill={hill}
+            layout={layout}
+            fromFront={model.view === 'front'}
+            sayBlind={!nextInside || nextLift !== null}
+          />
+        )}
         <path d={`M${left} ${base}H${right}`} className="plot-axis" />
         {moments.length === 0 &&
           layout.ticks.map((tick) => (
@@ -129,7 +138,11 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
         )}
         {inside && (
           <g>
-            <path d={`M${x(frame)} 2V${base + 6}`} strokeWidth="2" className="stroke-ink" />
+            <path
+              d={`M${x(frame)} ${layout.tagTop}V${base + 6}`}
+              strokeWidth="2"
+              className="stroke-ink"
+            />
             {lift !== null && (
               <circle
                 cx={x(frame)}
@@ -139,7 +152,9 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
                 className="fill-ink stroke-mud"
               />
             )}
-            <FrameTag x={x(frame)} text={`frame ${frame}`} right={right} />
+            {!compact && (
+              <FrameTag x={x(frame)} y={layout.tagTop} text={`frame ${frame}`} right={right} />
+            )}
           </g>
         )}
       </svg>
@@ -154,12 +169,12 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
 
 const TAG = 84;
 
-function FrameTag({ x, text, right }: { x: number; text: string; right: number }) {
+function FrameTag({ x, y, text, right }: { x: number; y: number; text: string; right: number }) {
   const at = x + TAG > right ? x - TAG : x;
   return (
     <>
-      <rect x={at} y="2" width={TAG} height="22" className="fill-ink" />
-      <text x={at + TAG / 2} y="18" textAnchor="middle" className="fill-mud font-bold">
+      <rect x={at} y={y} width={TAG} height="22" className="fill-ink" />
+      <text x={at + TAG / 2} y={y + 16} textAnchor="middle" className="fill-mud font-bold">
         {text}
       </text>
     </>

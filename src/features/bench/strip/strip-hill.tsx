@@ -12,10 +12,13 @@ export function StripHill({
   hill,
   layout,
   fromFront,
+  sayBlind,
 }: {
   hill: readonly HillPoint[];
   layout: StripLayout;
   fromFront: boolean;
+  /** False where other words stand in the way. */
+  sayBlind: boolean;
 }) {
   const id = useId();
   const { x, y, base, left, right, compact } = layout;
@@ -61,7 +64,7 @@ export function StripHill({
           </text>
         </g>
       ))}
-      {fromFront && !compact && (
+      {fromFront && sayBlind && !compact && (
         <text x={left + 44} y={base - 24} className="plot-over">
           under 20° the front view is blind
         </text>

@@ -46,6 +46,8 @@ describe('labels and pins', () => {
 
   it('shows words only where there is room for them', () => {
     const pins = pinRow([0, 1, 5], (frame) => frame, { x: (frame) => frame * 50, right: 400 });
-    expect(pins.map((pin) => pin.room)).toEqual([34, 190, 178]);
+    expect(pins.map((pin) => pin.room)).toEqual([34, 190, 144]);
+    const [late] = pinRow([7], () => 7, { x: () => 390, right: 400 });
+    expect(late).toMatchObject({ x: 390, room: 34, left: 366 });
   });
 });

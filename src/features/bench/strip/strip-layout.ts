@@ -17,6 +17,8 @@ export interface StripLayout {
   readonly top: number;
   readonly base: number;
   readonly compact: boolean;
+  /** The row of pins above, and under it that of the frame's tag. */
+  readonly tagTop: number;
   readonly from: FrameIndex;
   readonly to: FrameIndex;
   readonly x: (frame: number) => number;
@@ -29,17 +31,20 @@ export interface StripLayout {
 }
 
 const HIGHEST_LIFT = 110;
+const PIN_ROW = 28;
 
 export const stripLayout = (
   size: { readonly width: number; readonly height: number },
   span: readonly [FrameIndex, FrameIndex],
   times: readonly Milliseconds[],
+  pins = false,
 ): StripLayout => {
   const { width, height } = size;
   const compact = width < 560;
   const left = compact ? 34 : 46;
   const right = width - (compact ? 6 : 14);
-  const top = compact ? 26 : 34;
+  const tagTop = pins ? PIN_ROW : 2;
+  const top = tagTop + (compact ? 8 : 32);
   const base = height - 34;
   const [from, to] = span;
   const start = times[from] ?? 0;
@@ -65,6 +70,7 @@ export const stripLayout = (
     top,
     base,
     compact,
+    tagTop,
     from,
     to,
     x: (frame) => time(times[frame] ?? start),
@@ -92,7 +98,9 @@ export const spacedLabels = <T extends { readonly x: number; readonly text: stri
 
 export interface Pin<T> {
   readonly item: T;
+  /** Where the moment is, and where the pin's box begins so that it stays on the strip. */
   readonly x: number;
+  readonly left: number;
   /** Room for the pin, px; too little for words shows initials alone. */
   readonly room: number;
 }
@@ -109,8 +117,9 @@ export const pinRow = <T>(
 ): Pin<T>[] => {
   const sorted = items.map((item) => ({ item, x: x(frameOf(item)) })).sort((a, b) => a.x - b.x);
   return sorted.map((pin, n) => {
-    const next = sorted[n + 1]?.x ?? right + INITIALS;
+    const next = sorted[n + 1]?.x ?? right;
     const free = next - pin.x - 6;
-    return { ...pin, room: free < LEAST_ROOM ? INITIALS : Math.min(MOST_ROOM, free) };
+    const room = free < LEAST_ROOM ? INITIALS : Math.min(MOST_ROOM, free);
+    return { ...pin, room, left: Math.min(pin.x, right - room) };
   });
 };

@@ -36,6 +36,8 @@ export function StripMoments({
     x: layout.x(frameOf(placed)) + 4,
     text: MOMENT_WORDS[placed.moment],
   }));
+  const atEdge = ({ x, text }: { x: number; text: string }) =>
+    x + text.length * 7 + 8 > layout.width;
   const labelled = new Set(spacedLabels(shown).map((each) => each.moment));
 
   const send = async (moment: Moment, frame: number | null) => {
@@ -92,10 +94,16 @@ export function StripMoments({
           aria-valuenow={movable ? frameOf(placed) : undefined}
           aria-valuetext={movable ? `frame ${frameOf(placed)}` : undefined}
           title={MOMENT_NAMES[placed.moment]}
-          className={`absolute h-8 min-w-6 -translate-x-1 touch-none select-none whitespace-nowrap border-l pl-1 text-caption ${
+          className={`absolute h-8 min-w-6 touch-none select-none whitespace-nowrap text-caption ${
+            atEdge(placed) ? 'border-r pr-1 text-right' : '-translate-x-1 border-l pl-1'
+          } ${
             movable ? 'cursor-ew-resize' : ''
-          } ${placed.byHand ? 'border-l-2 border-ink text-ink' : 'border-ink/60 text-soft'}`}
-          style={{ left: placed.x, top: layout.base + 1 }}
+          } ${placed.byHand ? '!border-x-2 border-y-0 border-ink font-bold text-ink' : 'border-ink/60 text-soft'}`}
+          style={{
+            top: layout.base + 1,
+            // at the right edge the words stand before their line
+            ...(atEdge(placed) ? { right: layout.width - placed.x + 4 } : { left: placed.x }),
+          }}
           onKeyDown={movable ? onKeyDown(placed) : undefined}
           onKeyUp={() => finish(placed)}
           onBlur={() => finish(placed)}

@@ -20,7 +20,7 @@ export function StripPins({ layout }: { layout: StripLayout }) {
   };
   return (
     <ul aria-label="Comments on this clip">
-      {pins.map(({ item, x, room }) => (
+      {pins.map(({ item, x, left, room }) => (
         <li key={item.id}>
           <span
             aria-hidden="true"
@@ -35,7 +35,7 @@ export function StripPins({ layout }: { layout: StripLayout }) {
             className={`absolute top-0 h-6 overflow-hidden text-ellipsis whitespace-nowrap rounded border px-1.5 text-left text-caption ${
               item.resolved ? 'border-edge bg-sheet' : 'border-ochre bg-ochre-pale'
             }`}
-            style={{ left: x, maxWidth: room }}
+            style={{ left, maxWidth: room }}
           >
             <b>{initials(item.by.name)}</b>
             {room > 60 && ` ${item.body}`}

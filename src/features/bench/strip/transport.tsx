@@ -3,7 +3,7 @@ import { useBench, useBenchTools } from '../bench-context.ts';
 import { goTo } from '../store/bench-store.ts';
 
 const BUTTON =
-  'grid min-h-[44px] min-w-[40px] place-items-center rounded border border-edge bg-mud px-2 text-note font-bold hover:border-ink hover:bg-sheet';
+  'grid min-h-[44px] min-w-[40px] place-items-center rounded border border-edge bg-mud whitespace-nowrap px-2 text-note font-bold hover:border-ink hover:bg-sheet';
 
 /** Where the clip stands, a frame back and on, and slow play. */
 export function Transport() {
@@ -24,12 +24,17 @@ export function Transport() {
         <button
           type="button"
           aria-label="One frame back"
-          className={BUTTON}
+          className={`${BUTTON} max-tablet:hidden`}
           onClick={() => step(-1)}
         >
           ←
         </button>
-        <button type="button" aria-label="One frame on" className={BUTTON} onClick={() => step(1)}>
+        <button
+          type="button"
+          aria-label="One frame on"
+          className={`${BUTTON} max-tablet:hidden`}
+          onClick={() => step(1)}
+        >
           →
         </button>
         <button

@@ -61,7 +61,7 @@ function Dial({ drawing, label }: { drawing: ReturnType<typeof liftDial>; label:
       width={drawing.width}
       height={drawing.height}
       label={label}
-      className="h-auto w-full"
+      className="h-auto w-full max-w-[150px]"
     />
   );
 }

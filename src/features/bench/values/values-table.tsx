@@ -21,7 +21,7 @@ export function ValuesTable() {
       <caption className="sr-only">Values of frame {frame}</caption>
       <thead>
         <tr>
-          <th scope="col">Values of frame {frame}, turn zero at quiet stance</th>
+          <th scope="col">Values of frame {frame}</th>
           <th scope="col">
             <span className="sr-only">value</span>
           </th>
