@@ -33,7 +33,8 @@ need_packages() {
 
   local apt=("${root[@]}" env DEBIAN_FRONTEND=noninteractive apt-get -q -o DPkg::Lock::Timeout=180 -o Acquire::Retries=2)
   # A list that could not be refreshed (one foreign mirror is down) need not stop the packages wanted here.
-  step 'Refreshing the list of Debian packages' "${apt[@]}" update || say '  going on with the list as it is'
+  step 'Refreshing the list of Debian packages' "${apt[@]}" -o APT::Update::Error-Mode=any update ||
+    say '  not all lists could be refreshed: going on with those that are here'
   if ! step "Installing ${missing[*]}" "${apt[@]}" install -y --no-install-recommends "${missing[@]}"; then
     mapfile -t missing < <(missing_packages "${missing[@]}")
     fail "Still missing: ${missing[*]}." \
