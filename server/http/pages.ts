@@ -12,9 +12,11 @@ export type LinkIsLive = (token: string) => Promise<boolean>;
 export const servePages = (folder: string, linkIsLive: LinkIsLive): Router => {
   const router = Router();
   const page = join(folder, 'index.html');
-  const sendPage = (res: Response, status: number): void => {
+  /** The athlete's own small page, without the code of the staff's pages. */
+  const replayPage = join(folder, 'replay.html');
+  const sendPage = (res: Response, status: number, file = page): void => {
     res.status(status).setHeader('Cache-Control', 'no-cache');
-    if (existsSync(page)) res.sendFile(page, { cacheControl: false });
+    if (existsSync(file)) res.sendFile(file, { cacheControl: false });
     else res.type('text').send('The pages are not built yet: npm run build:web');
   };
   router.use(
@@ -31,7 +33,7 @@ export const servePages = (folder: string, linkIsLive: LinkIsLive): Router => {
   );
   router.use(express.static(folder, { index: false, cacheControl: false, fallthrough: true }));
   router.get('/r/:token', async (req, res) => {
-    sendPage(res, (await linkIsLive(req.params.token)) ? 200 : 404);
+    sendPage(res, (await linkIsLive(req.params.token)) ? 200 : 404, replayPage);
   });
   router.get('/{*path}', (req, res) => {
     if (/\.[a-z0-9]+$/i.test(req.path)) res.sendStatus(404);

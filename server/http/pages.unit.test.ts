@@ -9,6 +9,7 @@ import { servePages } from './pages.ts';
 const folder = mkdtempSync(join(tmpdir(), 'redshank-pages-'));
 mkdirSync(join(folder, 'assets'));
 writeFileSync(join(folder, 'index.html'), '<!doctype html><title>Redshank</title>');
+writeFileSync(join(folder, 'replay.html'), '<!doctype html><title>Your replay</title>');
 writeFileSync(join(folder, 'assets', 'app-1a2b3c.js'), 'export {};');
 writeFileSync(join(folder, 'icon.svg'), '<svg xmlns="http://www.w3.org/2000/svg"/>');
 afterAll(() => {
@@ -41,9 +42,10 @@ describe('the pages', () => {
     }
   });
 
-  it('say 404 for a dead replay link, with the page that explains it', async () => {
-    await get('/r/live').expect(200);
+  it('give a replay link its own small page, with 404 where the link is dead', async () => {
+    const live = await get('/r/live').expect(200);
+    expect(live.text).toContain('<title>Your replay</title>');
     const dead = await get('/r/dead').expect(404);
-    expect(dead.text).toContain('<title>Redshank</title>');
+    expect(dead.text).toContain('<title>Your replay</title>');
   });
 });

@@ -1,0 +1,60 @@
+import type { PublicReplay } from '#shared/contracts/replays.ts';
+
+/** What asking for a replay can come to. */
+export type Opening =
+  | { readonly is: 'open'; readonly replay: PublicReplay }
+  | { readonly is: 'phrase' }
+  /** Lapsed, ended or never there: the server does not say which. */
+  | { readonly is: 'gone' }
+  | { readonly is: 'too-many-tries' }
+  | { readonly is: 'offline' }
+  | { readonly is: 'broken' };
+
+export type Unlocking = 'unlocked' | 'wrong' | 'gone' | 'too-many-tries' | 'offline' | 'broken';
+
+/** The token of `/r/:token`; null where the address cannot be one. */
+export const tokenOf = (pathname: string): string | null =>
+  /^\/r\/([A-Za-z0-9_-]{43})\/?$/.exec(pathname)?.[1] ?? null;
+
+export const videoAddress = (token: string): string => `/api/r/${token}/video`;
+export const posterAddress = (token: string): string => `/api/r/${token}/poster`;
+
+const ask = async (path: string, init: RequestInit): Promise<Response | 'offline'> => {
+  try {
+    return await fetch(path, { credentials: 'same-origin', cache: 'no-store', ...init });
+  } catch (error) {
+    if (init.signal?.aborted) throw error;
+    return 'offline';
+  }
+};
+
+const refusal = (status: number): 'gone' | 'too-many-tries' | 'broken' => {
+  if (status === 404) return 'gone';
+  return status === 429 ? 'too-many-tries' : 'broken';
+};
+
+/** The server checks its answers against the contract; here only whether it is one at all. */
+const isReplay = (value: unknown): value is PublicReplay =>
+  typeof value === 'object' && value !== null && 'overlay' in value && 'frames' in value;
+
+/** Throws only where `signal` says stop. */
+export const openReplay = async (token: string, signal?: AbortSignal): Promise<Opening> => {
+  const response = await ask(`/api/r/${token}`, { signal });
+  if (response === 'offline') return { is: 'offline' };
+  if (response.status === 401) return { is: 'phrase' };
+  if (!response.ok) return { is: refusal(response.status) };
+  const value: unknown = await response.json().catch(() => null);
+  if (signal?.aborted) throw signal.reason;
+  return isReplay(value) ? { is: 'open', replay: value } : { is: 'broken' };
+};
+
+export const unlockReplay = async (token: string, passPhrase: string): Promise<Unlocking> => {
+  const response = await ask(`/api/r/${token}/unlock`, {
+    method: 'POST',
+    headers: { 'content-type': 'application/json' },
+    body: JSON.stringify({ passPhrase }),
+  });
+  if (response === 'offline') return 'offline';
+  if (response.ok) return 'unlocked';
+  return response.status === 401 ? 'wrong' : refusal(response.status);
+};

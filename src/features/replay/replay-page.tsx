@@ -1,0 +1,82 @@
+import { useMemo, useRef, useState } from 'react';
+import type { PublicReplay } from '#shared/contracts/replays.ts';
+import { longDay, shortDay } from '#src/ui/days.ts';
+import { frameTimes } from '#src/video/frame-times.ts';
+import { Comments } from './comments.tsx';
+import { Player } from './player/player.tsx';
+import { useLoop } from './player/use-loop.ts';
+import { Result } from './result.tsx';
+import { contactLink } from './words/contact.ts';
+
+/** One replay, as the athlete sees it: the film first, then what it says, in plain words. */
+export function ReplayPage({ token, replay }: { token: string; replay: PublicReplay }) {
+  const times = useMemo(() => frameTimes(replay.frames), [replay.frames]);
+  const loop = useLoop(replay, times);
+  const film = useRef<HTMLDivElement>(null);
+  const [comment, setComment] = useState<PublicReplay['comments'][number] | null>(null);
+  const showComment = (each: PublicReplay['comments'][number]) => {
+    setComment(each);
+    loop.show(each.fromFrame);
+    film.current?.scrollIntoView({ block: 'start' });
+  };
+  const { practice, athleteGivenName, visitDay, coachName, message, expiresAt } = replay;
+  return (
+    <>
+      <title>{`Your replay, ${athleteGivenName} · Redshank`}</title>
+      <header className="flex flex-wrap justify-between gap-x-4 bg-dusk px-4 py-3 text-dusk-ink print:bg-transparent print:text-ink">
+        <b>Your replay, {athleteGivenName}</b>
+        <span className="text-dusk-soft print:text-soft">
+          {practice.name}, {shortDay(visitDay)}
+        </span>
+      </header>
+      <main className="tablet:mx-auto tablet:grid tablet:max-w-[1120px] tablet:grid-cols-[minmax(0,460px)_minmax(0,1fr)] tablet:items-start tablet:gap-x-12 tablet:px-8 tablet:pt-8">
+        <div ref={film} className="tablet:sticky tablet:top-4">
+          <Player token={token} replay={replay} times={times} loop={loop} comment={comment} />
+        </div>
+        <div className="px-4 text-sub leading-7 tablet:px-0">
+          <Result replay={replay} />
+          <StopIfItHurts contact={practice.contact} coach={coachName} />
+          {message !== '' && (
+            <section aria-label={`From ${coachName}`} className="border-t border-rule py-6">
+              <h2 className="text-lead font-bold">From {coachName}</h2>
+              <p className="mt-1 whitespace-pre-line">“{message}”</p>
+            </section>
+          )}
+          <Comments comments={replay.comments} shown={comment} onShow={showComment} />
+          <footer className="border-t border-rule py-6 text-note text-soft">
+            <p>
+              Whoever has this link can open it until {longDay(expiresAt.slice(0, 10))}. It shows
+              this replay and nothing else. To have it ended earlier or your film deleted, ask{' '}
+              {practice.name}.
+            </p>
+          </footer>
+        </div>
+      </main>
+    </>
+  );
+}
+
+function StopIfItHurts({ contact, coach }: { contact: string; coach: string }) {
+  const link = contactLink(contact);
+  return (
+    <aside className="my-6 border-l-[3px] border-ochre py-1 pl-4">
+      <b className="text-ochre">Stop if it hurts.</b> Pain, pinching or dizziness: stop, and call{' '}
+      {coach}
+      {contact !== '' && (
+        <>
+          {' '}
+          (
+          {link === null ? (
+            contact
+          ) : (
+            <a href={link} className="inline-block min-h-[44px] leading-[44px]">
+              {contact}
+            </a>
+          )}
+          )
+        </>
+      )}{' '}
+      before you go on.
+    </aside>
+  );
+}
