@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { product } from '../../db/in-practice.ts';
+import { tokenHash } from '../../http/token-hash.ts';
 import { makeClip } from '../clips/clip.factory.ts';
 import { AuditEntry } from '../practice/audit-entry.entity.ts';
 import { Replay } from '../replays/replay.entity.ts';
@@ -41,6 +42,38 @@ const consented = (purpose: 'assessment' | 'sharing-by-link', athlete = adult) =
   api.ground.inPractice(product(api.world.practiceId), ({ em }) =>
     hasConsent(em, athlete.id, purpose),
   );
+
+/** A live replay link of an athlete. */
+const linkOf = (athlete: Athlete, token: string) => {
+  const { coach, practiceId } = api.world;
+  return api.ground.inPractice(product(practiceId), ({ em }) => {
+    const visit = makeVisit(em, { athlete, coach });
+    const clip = makeClip(em, { visit, uploadedBy: coach });
+    const rep = makeRep(em, { clip, createdBy: coach });
+    return Promise.resolve(
+      em.create(Replay, {
+        visit,
+        rep,
+        side: 'right',
+        fromFrame: 0,
+        toFrame: 100,
+        showReading: true,
+        showCall: true,
+        message: '',
+        tokenHash: tokenHash(token),
+        passPhraseHash: null,
+        expiresAt: new Date(Date.now() + 1e9),
+        by: coach,
+      }),
+    );
+  });
+};
+
+/** Whether the look-up behind every opening finds it. */
+const opens = async (token: string): Promise<boolean> => {
+  const em = api.ground.orm.em.fork();
+  return (await em.execute('select * from find_replay(?)', [tokenHash(token)])).length > 0;
+};
 
 describe('a consent', () => {
   it('is recorded with who, what for and until when, and counts at once', async () => {
@@ -111,27 +144,8 @@ describe('a consent', () => {
   it('is withdrawn once, stays visible, and its links die with it', async () => {
     const { coach, practiceId } = api.world;
     const { id } = (await record(adult, BODY)).body as { id: string };
-    const replay = await api.ground.inPractice(product(practiceId), ({ em }) => {
-      const visit = makeVisit(em, { athlete: adult, coach });
-      const clip = makeClip(em, { visit, uploadedBy: coach });
-      const rep = makeRep(em, { clip, createdBy: coach });
-      return Promise.resolve(
-        em.create(Replay, {
-          visit,
-          rep,
-          side: 'right',
-          fromFrame: 0,
-          toFrame: 100,
-          showReading: true,
-          showCall: true,
-          message: '',
-          tokenHash: id,
-          expiresAt: new Date(Date.now() + 1e9),
-          by: coach,
-          passPhraseHash: null,
-        }),
-      );
-    });
+    const replay = await linkOf(adult, id);
+    expect(await opens(id)).toBe(true);
     const agent = await api.as(coach);
     const first = await agent.post(`/api/consents/${id}/withdraw`).expect(200);
     expect(first.body.state).toBe('withdrawn');
@@ -142,6 +156,7 @@ describe('a consent', () => {
       em.findOneOrFail(Replay, { id: replay.id }),
     );
     expect(dead.revokedAt).toBeInstanceOf(Date);
+    expect(await opens(id)).toBe(false);
     const { body } = await agent.get(`/api/athletes/${adult.id}/consents`);
     expect(body.items).toHaveLength(1);
     const trail = await api.ground.inPractice(product(practiceId), ({ em }) =>
@@ -149,6 +164,26 @@ describe('a consent', () => {
     );
     expect(trail.map(({ action }) => action)).toEqual(['consent.record', 'consent.withdraw']);
     expect(trail.every(({ byUser }) => byUser === coach.id)).toBe(true);
+  });
+
+  it('that lapses closes its links too, and a new one opens them again', async () => {
+    const { coach, practiceId } = api.world;
+    const token = 'a link of somebody without consent today';
+    await api.ground.inPractice(product(practiceId), ({ em }) => {
+      makeConsent(em, {
+        athlete: adult,
+        recordedBy: coach,
+        validFrom: daysLater(today(), -10),
+        validUntil: daysLater(today(), -1),
+      });
+      return Promise.resolve();
+    });
+    await linkOf(adult, token);
+    expect(await opens(token)).toBe(false);
+    await record(adult, { ...BODY, purposes: ['assessment'] });
+    expect(await opens(token)).toBe(false);
+    await record(adult, BODY);
+    expect(await opens(token)).toBe(true);
   });
 
   it('is nobody else’s to withdraw', async () => {
