@@ -96,7 +96,8 @@ export function ClipStage({ children, className, shownRef, ...props }: ClipStage
           />
           <Suspense>
             <KonvaLayer
-              {...{ size, viewport, hand, draw, movable, onMove, onSelect, pressedRef }}
+              {...{ size, viewport, hand, draw, movable, onPlace, onMove, onSelect, pressedRef }}
+              placing={mode === 'place'}
             />
           </Suspense>
           {children({ viewport, size })}

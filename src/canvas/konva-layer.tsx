@@ -20,6 +20,9 @@ export interface KonvaLayerProps {
   draw: (moved: Moved) => readonly Primitive[];
   /** False where this person may only look. */
   movable: boolean;
+  /** True while a press is for the landmark asked for: then a tap on a mark places there, and only a drag moves it. */
+  placing: boolean;
+  onPlace: (point: FramePoint) => void;
   onMove: (landmark: LandmarkId, point: FramePoint) => void;
   onSelect: (landmark: LandmarkId) => void;
   /** Set when a press has landed on a mark, so that the stage leaves it alone. */
@@ -36,11 +39,11 @@ const ORIGIN = stagePoint(0, 0);
 
 /** The transparent stage over the picture: lines below, a node of its own for every mark above. */
 export default function KonvaLayer(props: KonvaLayerProps) {
-  const { size, viewport, hand, draw } = props;
+  const { size, viewport, hand, draw, placing } = props;
   const lines = useRef<Konva.Layer>(null);
   const marks = draw(null).filter(ownsLandmark);
   const places = marks.map((mark) => toStage(viewport, mark.at));
-  const radii = hitRadii(places);
+  const radii = hitRadii(places, placing);
 
   useEffect(() => hand.subscribe(() => lines.current?.batchDraw()), [hand]);
 
@@ -72,7 +75,7 @@ export default function KonvaLayer(props: KonvaLayerProps) {
   );
 }
 
-/** A press that wanders less than this selects instead of dragging, CSS px. */
+/** A press that wanders less than this is a tap instead of a drag, CSS px. */
 const DRAG_DISTANCE = 3;
 
 function MarkNode({
@@ -82,6 +85,8 @@ function MarkNode({
   viewport,
   hand,
   movable,
+  placing,
+  onPlace,
   onMove,
   onSelect,
   pressedRef,
@@ -146,7 +151,11 @@ function MarkNode({
       onPointerDown={(event) => {
         if (event.evt.button === 0) pressedRef.current = true;
       }}
-      onPointerClick={() => onSelect(landmark)}
+      onPointerClick={(event) => {
+        const at = event.target.getStage()?.getPointerPosition();
+        if (!placing) onSelect(landmark);
+        else if (at) onPlace(toFrame(viewport, stagePoint(at.x, at.y)));
+      }}
       onDragStart={() => hand.set({ holding: true })}
       onDragMove={(event) => hand.set({ moved: { landmark, point: here(event) } })}
       onDragEnd={(event) => {

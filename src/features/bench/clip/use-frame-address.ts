@@ -1,5 +1,5 @@
-import { useEffect, useRef } from 'react';
-import { useSearchParams } from 'react-router-dom';
+import { useEffect } from 'react';
+import { NavigationType, useNavigationType, useSearchParams } from 'react-router-dom';
 import { frameIndex, type FrameIndex } from '#shared/timing/units.ts';
 import { useBench, useBenchTools } from '../bench-context.ts';
 import { goTo } from '../store/bench-store.ts';
@@ -20,7 +20,7 @@ export function useFrameAddress(repNumber: number | null): void {
   const [search, setSearch] = useSearchParams();
   const frame = useBench((state) => state.frame);
   const playing = useBench((state) => state.playing);
-  const written = useRef(search.toString());
+  const navigation = useNavigationType();
 
   useEffect(() => {
     if (playing) return;
@@ -30,7 +30,6 @@ export function useFrameAddress(repNumber: number | null): void {
           const next = new URLSearchParams(before);
           next.set('frame', String(frame));
           if (repNumber !== null) next.set('rep', String(repNumber));
-          written.current = next.toString();
           return next;
         },
         { replace: true, preventScrollReset: true },
@@ -40,9 +39,9 @@ export function useFrameAddress(repNumber: number | null): void {
   }, [frame, repNumber, playing, setSearch]);
 
   useEffect(() => {
-    if (search.toString() === written.current) return;
-    written.current = search.toString();
+    // the own writing replaces, and may arrive when the frame has gone on since; links and the Back button do not
+    if (navigation === NavigationType.Replace) return;
     const wanted = frameOf(search, times.length);
     if (wanted !== null) goTo(store, wanted);
-  }, [search, store, times.length]);
+  }, [search, navigation, store, times.length]);
 }
