@@ -1,4 +1,10 @@
-import { useSyncExternalStore, type KeyboardEvent } from 'react';
+import {
+  useEffect,
+  useLayoutEffect,
+  useRef,
+  useSyncExternalStore,
+  type KeyboardEvent,
+} from 'react';
 import { type FramePoint, framePoint } from '#shared/geometry/points.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { Hand } from './hand.ts';
@@ -90,7 +96,8 @@ export function MarkHandles({
       {handles.map((handle) => {
         const { x, y } = toStage(viewport, placeOf(handle));
         return (
-          <li key={`${handle.asked ? 'ask ' : ''}${handle.landmark}`}>
+          // the cross stays one thing while leading goes on, or whoever places with it would lose their place
+          <li key={handle.asked ? 'asked' : handle.landmark}>
             <button
               type="button"
               data-landmark={handle.landmark}
@@ -109,7 +116,7 @@ export function MarkHandles({
                 if (handle.asked) hand.set({ cross: placeOf(handle), aim: null });
               }}
             >
-              {handle.asked && <NextRing />}
+              {handle.asked && <NextRing onGone={onLeave} />}
             </button>
           </li>
         );
@@ -119,9 +126,22 @@ export function MarkHandles({
 }
 
 /** The landmark asked for: larger, white, dashed, and the only thing that moves. */
-function NextRing() {
+function NextRing({ onGone }: { onGone: () => void }) {
+  const ring = useRef<SVGSVGElement>(null);
+  const latest = useRef(onGone);
+  useEffect(() => {
+    latest.current = onGone;
+  });
+  // once nothing is asked for, the cross goes while the keyboard is on it: the focus must not go with it
+  useLayoutEffect(() => {
+    const cross = ring.current?.closest('button');
+    return () => {
+      if (cross && cross === document.activeElement) latest.current();
+    };
+  }, []);
   return (
     <svg
+      ref={ring}
       viewBox="-18 -18 36 36"
       width="36"
       height="36"
