@@ -35,6 +35,12 @@ export default defineConfig({
     },
     { name: 'app-stop', testMatch: 'support/app-stop.ts' },
     {
+      name: 'bench',
+      testDir: 'tests/e2e/bench',
+      dependencies: ['app-start'],
+      expect: { timeout: 30_000 },
+    },
+    {
       name: 'journeys',
       testDir: 'tests/e2e/journeys',
       dependencies: ['app-start'],

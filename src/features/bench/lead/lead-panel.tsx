@@ -12,9 +12,9 @@ import { useNarrow } from '../use-media.ts';
 import { Dials } from '../values/dials.tsx';
 import { GlassPanel } from './glass-panel.tsx';
 import { KeyHints } from './key-hints.tsx';
+import { LandmarkList } from './landmark-list.tsx';
 import { LandmarkDrawing } from './landmark-drawing.tsx';
 import { LandmarkSetChoice } from './landmark-set-choice.tsx';
-import { tallyWords } from './lead-words.ts';
 import { NextFrameOffer } from './next-frame-offer.tsx';
 import { NothingAsked } from './nothing-asked.tsx';
 import { ThumbButtons } from './thumb-buttons.tsx';
@@ -50,11 +50,7 @@ export function LeadPanel() {
       </div>
       {!narrow && <GlassPanel target={target} />}
       {narrow && <ThumbButtons asked={target?.landmark ?? null} />}
-      {inRep && !narrow && target && (
-        <p className="text-note text-dusk-soft">
-          On this frame: <span className="text-dusk-ink">{tallyWords(tally)}</span>
-        </p>
-      )}
+      {inRep && <LandmarkList />}
       {!narrow && <Dials />}
       {inRep && may.mark && (
         <div className="bench-lead-more">
