@@ -40,7 +40,7 @@ export function CourseWedge({ at60, scale }: { at60: number; scale: CourseScale 
           >
             expected
           </text>
-          <text x={x(90) + 6} y={y(at60) + 4} className="plot-over">
+          <text x={x(90) + 18} y={y(at60) + 5} className="plot-over">
             holds: not a pass
           </text>
         </>

@@ -1,4 +1,5 @@
 import type { RepResult } from '#shared/reading/types.ts';
+import { turnAt } from '#src/ui/plots/course-shapes.ts';
 import { LIFT_RANGE } from '#src/ui/plots/course-scale.ts';
 import type { CoursePoint } from '#src/ui/plots/course-points.tsx';
 
@@ -17,3 +18,13 @@ export const coursePoints = (reps: readonly RepResult[]): CoursePoint[] =>
           : [],
       ),
     );
+
+/** ± (95 %) of one rep's change from 60° to 90°, degrees: what its band says at 90°. */
+export const repHalfWidth = ({ curve, fit }: RepResult): number => {
+  const upper = turnAt(
+    curve.map((point) => ({ ...point, turn: point.high })),
+    90,
+  );
+  const line = turnAt(curve, 90);
+  return upper === null || line === null ? 1.96 * (fit?.change.u ?? 0) : upper - line;
+};

@@ -5,6 +5,7 @@ import { capital, plusMinus, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import { repSymbol } from '#src/ui/plots/course-points.tsx';
 import { repFaultWords } from '../words/rep-fault-words.ts';
+import { repHalfWidth } from './course-data.ts';
 import { repName } from '../words/rep-names.ts';
 
 /** Each rep with its symbol and its own change; what is left out says why and stays open to be looked at. */
@@ -27,7 +28,7 @@ export function RepKey({ reading }: { reading: Reading }) {
           <span>
             <RepLink reading={reading} rep={rep} />{' '}
             {rep.fit &&
-              `${turn(rep.fit.change.value)} ${plusMinus(1.96 * rep.fit.change.u)}, ${rep.fit.used} frames`}
+              `${turn(rep.fit.change.value)} ${plusMinus(repHalfWidth(rep))}, ${rep.fit.used} frames`}
           </span>
         </li>
       ))}

@@ -38,7 +38,7 @@ function OneCall({ call, first }: { call: Call; first: boolean }) {
   const Heading = first ? 'h2' : 'h3';
   return (
     <div className={first ? undefined : 'mt-3 border-t border-rule pt-3'}>
-      <Heading className={first ? 'text-filled font-bold' : 'text-sub font-bold'}>
+      <Heading className={first ? 'mt-2 text-filled font-bold' : 'text-sub font-bold'}>
         {SEEN_WORDS[call.seen]}
       </Heading>
       <p>{CONFIDENCE_WORDS[call.confidence]}.</p>
@@ -46,7 +46,7 @@ function OneCall({ call, first }: { call: Call; first: boolean }) {
         <p>{call.substitutions.map((each) => SUBSTITUTION_WORDS[each]).join('. ')}.</p>
       )}
       {call.handsFelt !== '' && <p>Hands: “{call.handsFelt}”</p>}
-      <p className="text-note text-soft">
+      <p className="mt-1 text-note text-soft">
         {call.by.name}, {moment(call.at)},{' '}
         {call.beforeFigures ? 'before any figure was shown' : 'after figures had been shown'}.
       </p>

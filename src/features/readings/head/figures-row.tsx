@@ -1,7 +1,8 @@
 import type { ReactNode } from 'react';
 import type { Reading } from '#shared/contracts/readings.ts';
-import type { Change, Onset, ReadingFigures } from '#shared/reading/types.ts';
+import type { Onset, ReadingFigures } from '#shared/reading/types.ts';
 import { degrees, plusMinus, turn } from '#src/ui/figures.ts';
+import { isTold, partHalfWidth } from '../parts/part-half-width.ts';
 import { inHundred } from '../words/probability-words.ts';
 
 /** The figures of the reps together, each with its ± and what it means. */
@@ -18,17 +19,17 @@ export function FiguresRow({ reading }: { reading: Reading }) {
         <Figure
           name="of it, pelvis over the planted thigh"
           value={turn(figures.pelvis.value)}
-          pm={1.96 * figures.pelvis.u}
+          pm={partHalfWidth(figures, figures.pelvis)}
         >
-          {partWords(figures.pelvis, figures.thigh)}
+          {partWords(figures, 'pelvis', 'thigh')}
         </Figure>
         <Figure
           name="of it, thigh itself"
           value={turn(figures.thigh.value)}
-          pm={1.96 * figures.thigh.u}
+          pm={partHalfWidth(figures, figures.thigh)}
         >
           {figures.lambda === null
-            ? partWords(figures.thigh, figures.pelvis)
+            ? partWords(figures, 'thigh', 'pelvis')
             : `assumed to turn little: ${Math.round(100 * figures.lambda)} of 100 parts of it count`}
         </Figure>
         {onset ? (
@@ -44,13 +45,19 @@ export function FiguresRow({ reading }: { reading: Reading }) {
   );
 }
 
-const partWords = (own: Change, other: Change): string => {
-  if (Math.abs(own.value) <= 1.96 * own.u) return 'may be none';
-  return Math.abs(own.value) > Math.abs(other.value) ? 'the larger part' : 'the smaller part';
+const partWords = (
+  figures: ReadingFigures,
+  own: 'pelvis' | 'thigh',
+  other: 'pelvis' | 'thigh',
+): string => {
+  if (!isTold(figures, figures[own])) return 'may be none';
+  return Math.abs(figures[own].value) > Math.abs(figures[other].value)
+    ? 'the larger part'
+    : 'the smaller part';
 };
 
 const CELL =
-  'flex flex-col border-rule px-4 py-4 odd:pl-0 even:border-l desk:border-l desk:pl-4 desk:first:border-l-0 desk:first:pl-0 [&:nth-child(n+3)]:border-t desk:[&:nth-child(n+3)]:border-t-0';
+  'border-rule py-4 pl-4 pr-3 max-desk:odd:pl-0 max-desk:even:border-l max-desk:[&:nth-child(n+3)]:border-t desk:border-l desk:first:border-l-0 desk:first:pl-0';
 
 function Figure({
   name,
@@ -65,8 +72,8 @@ function Figure({
 }) {
   return (
     <div className={CELL}>
-      <dt className="text-note text-soft">{name}</dt>
-      <dd className="mt-auto pt-2">
+      <dt className="min-h-[44px] text-note text-soft">{name}</dt>
+      <dd className="pt-1">
         <span className="text-value font-light">{value}</span>
         {pm !== null && (
           <span className="whitespace-nowrap text-lead text-soft"> {plusMinus(pm)}</span>
@@ -83,8 +90,8 @@ function OnsetFigure({ onset: { low, high } }: { onset: Onset }) {
   const words = `${degrees(low, 0)} to ${degrees(high, 0)}`;
   return (
     <div className={CELL}>
-      <dt className="text-note text-soft">Starts somewhere from a lift of</dt>
-      <dd className="mt-auto pt-2">
+      <dt className="min-h-[44px] text-note text-soft">Starts somewhere from a lift of</dt>
+      <dd className="pt-1">
         <span className="whitespace-nowrap text-filled font-light leading-[44px]">{words}</span>
         <svg width="100%" height="14" aria-hidden="true" className="block max-w-[220px]">
           <line x1="0" x2="100%" y1="7" y2="7" className="stroke-rule" />

@@ -22,7 +22,10 @@ export function ReadingHead({ page, reading }: { page: SidePage; reading: Readin
           <SideMark kind="support" /> {capital(page.side)} support
         </p>
         <p className="mt-1 text-note text-soft">
-          Every usable rep of this side, one visit.
+          {used === 0
+            ? 'No usable rep'
+            : `${capital(inWords(used))} usable ${used === 1 ? 'rep' : 'reps'}`}{' '}
+          of this side, one visit.
           {result.set !== null && ` ${capital(SET_WORDS[result.set])}.`} Marked by {reading.by.name}
           .
         </p>
@@ -33,18 +36,16 @@ export function ReadingHead({ page, reading }: { page: SidePage; reading: Readin
           {reading.label}
         </h1>
         <div className="mt-3 flex flex-wrap items-end justify-between gap-x-8 gap-y-3">
-          <p className="text-lead">
-            {certainty ? (
-              <>
-                <b>{howSure(certainty.p)}</b>{' '}
-                <span className="whitespace-nowrap">{inHundred(certainty.p)} in 100</span>{' '}
-                {certainty.of}
-                {used > 0 && `, by ${inWords(used)} ${used === 1 ? 'rep' : 'reps'}`}
-              </>
-            ) : (
-              <b>{used === 0 ? 'No rep could be used' : 'Too uncertain to read'}</b>
-            )}
-          </p>
+          {certainty ? (
+            <p className="text-lead">
+              <b className="block">{howSure(certainty.p)}</b>
+              {inHundred(certainty.p)} in 100 {certainty.of}
+            </p>
+          ) : (
+            <p className="text-lead font-bold">
+              {used === 0 ? 'No rep could be used' : 'Too uncertain to read'}
+            </p>
+          )}
           {certainty && <ProbabilityScale {...certainty} />}
         </div>
         {reading.provisional && (
@@ -78,7 +79,7 @@ function AgreementLine({ page, reading }: { page: SidePage; reading: Reading }) 
       <b>{head}</b> {tail}{' '}
       {agreement &&
         agreement.of > 0 &&
-        `Over all visits with both, ${agreement.coach.name}’s call and the reading agreed ${agreement.agreed} of ${agreement.of} times.`}
+        `Over all sides with both, ${agreement.coach.name}’s call and the reading agreed in ${agreement.agreed} of ${agreement.of}.`}
     </p>
   );
 }

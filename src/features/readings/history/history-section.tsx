@@ -17,7 +17,7 @@ export function HistorySection({ page }: { page: SidePage }) {
         {page.history.map((reading) => (
           <li
             key={reading.id}
-            className="flex flex-wrap items-baseline gap-x-6 border-b border-rule py-2.5 last:border-0"
+            className="flex flex-wrap items-center gap-x-6 border-b border-rule py-2.5 last:border-0"
           >
             <StateDot kind={reading.id === current ? 'done' : 'none'} wrap>
               <span className="text-ink">{reading.label}</span>

@@ -6,6 +6,7 @@ import { OverlaySvg } from '#src/canvas/overlay-svg.tsx';
 import { degrees, turn } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { SideMark } from '#src/ui/side-mark.tsx';
+import { isTold } from './part-half-width.ts';
 import { partsAtGates, type Parts } from './parts-at-gates.ts';
 
 /** Where the turn comes from: pelvis over a planted thigh, or the thigh itself, drawn from above. */
@@ -29,7 +30,7 @@ export function PartsSection({ reading }: { reading: Reading }) {
         </>
       }
     >
-      <div className="flex flex-wrap gap-4">
+      <div className="grid max-w-[372px] grid-cols-2 gap-2.5">
         <GateDial name="At 60° of lift" parts={parts.at60} side={side} provisional={provisional} />
         <GateDial name="At 90° of lift" parts={parts.at90} side={side} provisional={provisional} />
       </div>
@@ -38,13 +39,13 @@ export function PartsSection({ reading }: { reading: Reading }) {
   );
 }
 
-const partsSentence = ({ pelvis, thigh }: ReadingFigures): string => {
+const partsSentence = (figures: ReadingFigures): string => {
+  const { pelvis, thigh } = figures;
   const swing = pelvis.value > 0 ? 'away from the support side' : 'towards the support side';
-  const told = (part: { value: number; u: number }) => Math.abs(part.value) > 1.96 * part.u;
-  const first = told(pelvis)
+  const first = isTold(figures, pelvis)
     ? `From 60° to 90° the pelvis turns ${swing} by ${degrees(Math.abs(pelvis.value))}.`
     : 'From 60° to 90° the pelvis stays within its error.';
-  const second = told(thigh)
+  const second = isTold(figures, thigh)
     ? `The planted thigh turns ${thigh.value > 0 ? 'outwards' : 'inwards'} by ${degrees(Math.abs(thigh.value))}.`
     : 'The planted thigh stays within its error.';
   return `${first} ${second}`;
@@ -68,8 +69,8 @@ function GateDial({
     provisional,
   });
   return (
-    <figure className="w-[232px] max-w-full">
-      <div className="rounded bg-dusk p-3">
+    <figure>
+      <div className="rounded bg-dusk p-2 pb-3">
         <OverlaySvg
           primitives={primitives}
           width={width}

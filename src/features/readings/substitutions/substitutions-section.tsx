@@ -39,7 +39,14 @@ const COLUMNS: readonly Column<ChangeRow>[] = [
   },
   {
     key: 'bar',
-    label: '−10 … 0 … +10° (mm: 20)',
+    label: 'drawn from −10° to +10°, millimetres from −20 to +20',
+    heading: (
+      <span className="flex w-[200px] justify-between" aria-hidden="true">
+        <span>−10°</span>
+        <span>0</span>
+        <span>+10°</span>
+      </span>
+    ),
     cell: (row) => (
       <div className="w-[200px] max-w-full">
         <ChangeBar row={row} />
@@ -73,7 +80,7 @@ export function SubstitutionsSection({ reading }: { reading: Reading }) {
     <Section
       title="Substitutions"
       wide
-      note="What else moved. Grey: too small to tell from none. Zero is the quiet stance. Mean of the reps; the limit is that of one."
+      note="What else moved. Grey: too small to tell from none. Zero is the quiet stance. Mean of the reps; the limit is that of one. Millimetres are drawn to 20."
     >
       {seen.length === 0 ? (
         <p className="text-soft">Nothing of it can be shown from these marks.</p>

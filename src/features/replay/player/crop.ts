@@ -18,9 +18,14 @@ const within = (low: number, length: number, whole: number): [number, number] =>
   return [Math.min(Math.max(0, low), whole - size), size];
 };
 
-/** The part of the picture that holds every mark of the span; the whole frame where nothing is marked. */
+/**
+ * The part of the picture that holds every mark of the span from the pelvis down, larger and mostly without
+ * the face; the whole frame where nothing is marked.
+ */
 export const cropFor = (overlay: OverlayMarks, width: number, height: number): Crop => {
-  const points = overlay.flatMap(({ marks }) => marks);
+  const points = overlay.flatMap(({ marks }) =>
+    marks.filter(({ landmark }) => !landmark.startsWith('acromion')),
+  );
   if (points.length === 0) return { u: 0, v: 0, width, height };
   const us = points.map(({ u }) => u);
   const vs = points.map(({ v }) => v);

@@ -4,11 +4,22 @@ import type { Milliseconds } from '#shared/timing/units.ts';
 type MarkedFrame = OverlayMarks[number];
 
 /** Longer gaps between marked frames stay empty: nothing is known of what the body did there. */
-const LONGEST_GAP_MS = 250;
+const LONGEST_GAP_MS = { moving: 250, still: 500 } as const;
+/** No mark moves further than this share of the body's marked height: the body stands still. */
+const STILL = 0.04;
 
 const mix = (a: number, b: number, share: number): number => a + share * (b - a);
 const mixKnown = (a: number | null, b: number | null, share: number): number | null =>
   a === null || b === null ? null : mix(a, b, share);
+
+const isStill = (a: MarkedFrame, b: MarkedFrame): boolean => {
+  const heights = a.marks.map(({ v }) => v);
+  const reach = STILL * (Math.max(...heights) - Math.min(...heights));
+  return a.marks.every(({ landmark, u, v }) => {
+    const there = b.marks.find((mark) => mark.landmark === landmark);
+    return !there || Math.hypot(there.u - u, there.v - v) <= reach;
+  });
+};
 
 /**
  * Marks and angles to draw on a frame: its own, or on a straight line between the marked frames around
@@ -27,7 +38,7 @@ export const frameBetween = (
   if (!before || !after) return null;
   const [from, to, now] = [times[before.frame], times[after.frame], times[frame]];
   if (from === undefined || to === undefined || now === undefined) return null;
-  if (to - from > LONGEST_GAP_MS) return null;
+  if (to - from > LONGEST_GAP_MS[isStill(before, after) ? 'still' : 'moving']) return null;
   const share = (now - from) / (to - from);
   return {
     frame,

@@ -4,6 +4,7 @@ import type { Milliseconds } from '#shared/timing/units.ts';
 import { Button } from '#src/ui/button.tsx';
 import { posterAddress, videoAddress } from '../replay-api.ts';
 import { liftReadout, turnReadout } from '../words/readout.ts';
+import { calmTurn } from './calm-turn.ts';
 import { cropFor } from './crop.ts';
 import { drawnOn } from './drawn-on.ts';
 import { MomentButtons, PlayButtons } from './player-buttons.tsx';
@@ -31,9 +32,13 @@ export function Player({
     () => cropFor(replay.overlay, replay.width, replay.height),
     [replay.overlay, replay.width, replay.height],
   );
+  const calm = useMemo(
+    () => ({ ...replay, overlay: calmTurn(replay.overlay, times) }),
+    [replay, times],
+  );
   const { primitives, lift, turn } = useMemo(
-    () => drawnOn(replay, times, loop.frame, comment),
-    [replay, times, loop.frame, comment],
+    () => drawnOn(calm, times, loop.frame, comment),
+    [calm, times, loop.frame, comment],
   );
   const moments = momentsOf(replay);
   const retry = () => {
