@@ -113,6 +113,12 @@ const forUnsettled = (
   return settle;
 };
 
+/** More marks help nothing where the camera stood in the wrong place. */
+const decisive = (faults: readonly RepFault[]): readonly RepFault[] => {
+  const view = faults.filter(({ code }) => code === 'view-cannot-show-turn');
+  return view.length > 0 ? view : faults;
+};
+
 /** What would settle a reading that is not settled; empty where it is. */
 export const settleOf = (
   decision: Decision,
@@ -124,7 +130,9 @@ export const settleOf = (
   } | null,
 ): readonly Settle[] => {
   if (decision.code === 'lift-stops-short' || !reading)
-    return once(reps.flatMap((rep) => rep.faults.flatMap((fault) => forFault(fault, rep) ?? [])));
+    return once(
+      reps.flatMap((rep) => decisive(rep.faults).flatMap((fault) => forFault(fault, rep) ?? [])),
+    );
   if (decision.line !== 2 && decision.line !== 7) return [];
   const used = reps.filter((rep) => rep.used !== null);
   return forUnsettled(used, reading.set, reading.figures, reading.systematic);

@@ -6,6 +6,9 @@ import { inHundred } from './probability-words.ts';
 export const reasonWords = (reason: Reason): string => {
   switch (reason.code) {
     case 'no-usable-rep':
+      if (reason.reps === 0)
+        return 'No rep of this side counts: none was filmed from the front, or each was left out.';
+      if (reason.reps === 0) return 'No rep of this side shows what the reading needs.';
       return reason.reps === 1
         ? 'The one rep of this side cannot be measured.'
         : `None of the ${inWords(reason.reps)} reps of this side can be measured.`;
