@@ -2,6 +2,7 @@ import type { MediaRefusal } from '#server/media/refusals.ts';
 import type { MeasuredRate, PreparedClip } from '#server/media/types.ts';
 import { product } from '../../../db/in-practice.ts';
 import type { Ground } from '../../../main/ground.ts';
+import { readingsAreStale } from '../../readings/stale.ts';
 import { Clip } from '../clip.entity.ts';
 import { clipFiles } from '../clip-files.ts';
 import { lockClip } from './lock-clip.ts';
@@ -67,6 +68,8 @@ export const keepPrepared = (
     });
     clip.facts.set(facts);
     await unit.em.flush();
+    // marks that were there before the copies, as after an import, are read now
+    await readingsAreStale(unit, clip.visit.id);
     await tellClipState(unit, clip);
   });
 
