@@ -6,8 +6,10 @@ export function Arrival() {
   const { pathname, hash } = useLocation();
   const before = useRef(pathname);
   useEffect(() => {
-    if (before.current === pathname || hash !== '') return;
+    if (before.current === pathname) return;
     before.current = pathname;
+    // the page itself goes to the part that the address names
+    if (hash !== '') return;
     // a page may have given the focus to a field of its own
     if (document.activeElement instanceof HTMLInputElement) return;
     const start =

@@ -4,6 +4,7 @@ import { Bird } from '#src/ui/bird.tsx';
 import { Disclosure } from '#src/ui/disclosure.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { PersonMenu } from './person-menu.tsx';
+import { SendingChip } from './sending-chip.tsx';
 
 /** The places a person goes to from anywhere. */
 const PLACES: readonly { to: string; label: string; end?: boolean }[] = [
@@ -36,6 +37,7 @@ export function Header() {
         ))}
       </nav>
       <div className="ml-auto flex items-center gap-2 tablet:gap-4">
+        <SendingChip />
         <span className="hidden text-soft tablet:inline">{practice.name}</span>
         <Disclosure
           className="tablet:hidden"

@@ -68,6 +68,8 @@ export function Section({
   return (
     <section
       id={id}
+      tabIndex={id === undefined ? undefined : -1}
+      data-quiet-focus={id === undefined ? undefined : true}
       aria-label={title}
       className={cx('section scroll-mt-4', wide && 'section-wide', first && 'section-first')}
     >

@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { useCallback, useEffect, useRef } from 'react';
 import { Link, useSearchParams } from 'react-router-dom';
+import type { Role } from '#shared/contracts/accounts.ts';
 import { athleteListOptions } from '#src/api/athletes.queries.ts';
 import { useMe } from '#src/api/me.ts';
 import { Button, ButtonLink } from '#src/ui/button.tsx';
@@ -11,6 +12,13 @@ import { Empty, ErrorState, Loading, SkeletonLines } from '#src/ui/states.tsx';
 import { AthleteTable } from './athlete-table.tsx';
 import { changed, queryOf, type ListField } from './list-address.ts';
 import { ListFilters } from './list-filters.tsx';
+
+/** Whose athletes a role sees. */
+const LEADS: Record<Role, string | undefined> = {
+  coach: undefined,
+  supervisor: 'The athletes of the coaches you look after.',
+  owner: 'Everyone in the practice.',
+};
 
 /** The athletes that this person may see. Search, filter, order and page stand in the address. */
 export function AthleteListPage() {
@@ -35,7 +43,7 @@ export function AthleteListPage() {
   return (
     <Page
       title="Athletes"
-      lead={user.role === 'coach' ? undefined : 'Everyone whose coach you may look after.'}
+      lead={LEADS[user.role]}
       actions={<ButtonLink to={paths.newAthlete()}>Add an athlete</ButtonLink>}
     >
       <ListFilters search={search} onChange={onChange} />

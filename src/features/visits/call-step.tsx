@@ -10,13 +10,11 @@ import { paths } from '#src/ui/paths.ts';
 import { StateDot } from '#src/ui/state-dot.tsx';
 import { ErrorState, Loading, Skeleton } from '#src/ui/states.tsx';
 import { SEEN_WORDS } from '#src/ui/words.ts';
+import { sidesOf } from './sides-of.ts';
 
 /** What the coach saw, before any figure: one call for each side that was filmed. */
 export function CallStep({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
-  const usable = clips.filter(({ state }) => state !== 'refused');
-  const sides = (['right', 'left'] as const).filter((side) =>
-    usable.some(({ supportSide }) => supportSide === null || supportSide === side),
-  );
+  const sides = sidesOf(clips);
   return (
     <Section
       id="call"

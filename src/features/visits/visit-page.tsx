@@ -13,6 +13,7 @@ import { UploadStep } from './clips/upload-step.tsx';
 import { ConsentStep } from './consent-step.tsx';
 import { FilmStep } from './filming/film-step.tsx';
 import { SafetyStep } from './safety/safety-step.tsx';
+import { useHashTarget } from './use-hash-target.ts';
 import { VisitSteps } from './visit-steps.tsx';
 
 /** One day's testing of one athlete, from the consent to the call by eye. */
@@ -37,6 +38,7 @@ export function VisitPage() {
 }
 
 function Opened({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
+  useHashTarget();
   const athlete = useQuery(athleteOptions(visit.athlete.id));
   const consented = athlete.data?.consentedTo.includes('assessment');
   // clips that are here stay to be worked on; nothing new is filmed without both

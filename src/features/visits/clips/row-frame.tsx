@@ -19,6 +19,8 @@ export function RowFrame({
   return (
     <li
       id={id}
+      tabIndex={-1}
+      data-quiet-focus
       className="grid scroll-mt-4 grid-cols-[54px_minmax(0,1fr)] gap-x-5 gap-y-2 border-b border-rule py-4 last:border-0 tablet:grid-cols-[54px_minmax(0,1fr)_190px] desk:grid-cols-[54px_minmax(0,1fr)_240px]"
     >
       <div className="grid h-24 w-[54px] place-items-center overflow-hidden rounded-[2px] bg-dusk text-dusk-soft">
@@ -29,7 +31,7 @@ export function RowFrame({
         <p className="break-words text-note text-soft">{file}</p>
         {children}
       </div>
-      <div className="col-start-2 flex flex-wrap items-start gap-x-5 tablet:col-start-3 tablet:flex-col tablet:items-end">
+      <div className="col-start-2 flex flex-wrap items-center gap-x-5 tablet:col-start-3 tablet:flex-col tablet:items-end">
         {state}
       </div>
     </li>
