@@ -1,19 +1,43 @@
 import { expect, test } from '../support/app.ts';
-import { COACH, signIn, signInByForm } from './steps/people.ts';
+import { routes } from '#shared/contracts/routes.ts';
+import { plusMinus as plusMinusWords, turn } from '#src/ui/figures.ts';
+import { ask, send } from './steps/ask.ts';
+import {
+  frameSlider,
+  markFrameByKeyboard,
+  markFrameByPointer,
+  nameRep,
+  openBench,
+  pressOnClip,
+  setScale,
+} from './steps/bench.ts';
+import { addMarkedRep, markRest } from './steps/marks-by-api.ts';
+import { drawnPixels, expectPlaying } from './steps/replay.ts';
+import { COACH, signIn, signInByForm, SUPERVISOR } from './steps/people.ts';
 import {
   addAthlete,
   checkSafety,
   openVisit,
+  PREPARED_WITHIN,
   recordConsent,
   uploadClip,
   writeFigures,
 } from './steps/visit.ts';
+import { framesOf, LED, placeOn, placesOf, TRUE_CHANGE } from './steps/right-early.ts';
 import { loadedRun } from './steps/run.ts';
 
 // one story in chapters: each goes on where the one before it has stopped
 test.describe.configure({ mode: 'serial' });
 
 const made = loadedRun();
+
+const MOMENT = framesOf(0)[26] ?? NaN;
+const COMMENT = 'Here the belt pointer swings out while the thigh comes to level.';
+const MESSAGE = 'Watch the stick on your belt while your knee goes up.';
+
+/** Frames of the first rep that are marked on the page itself: stance, either side of 60° and of 90°, the top. */
+const BY_POINTER = [0, 15, 18, 23, 26, 30].map((n) => framesOf(0)[n] ?? NaN);
+const BY_KEYBOARD = framesOf(0)[31] ?? NaN;
 
 test('a coach signs in, adds an athlete, records the consent and opens a visit', async ({
   app,
@@ -31,10 +55,147 @@ test('a coach signs in, adds an athlete, records the consent and opens a visit',
 });
 
 test('safety, figures, and the clip: looked at, sent, prepared', async ({ app, page }) => {
+  test.setTimeout(PREPARED_WITHIN + 120_000);
   await signIn(page, app, COACH);
   await page.goto(`/visits/${made.visitId}`);
   await checkSafety(page);
   await writeFigures(page);
   made.clipId = await uploadClip(page);
   expect(made.clipId).not.toBe('');
+});
+
+test('the call by eye comes before any figure', async ({ app, page }) => {
+  await signIn(page, app, COACH);
+  await page.goto(`/visits/${made.visitId}`);
+  await page.getByRole('link', { name: 'Call by eye, then mark' }).click();
+  await expect(page.getByRole('heading', { level: 1, name: 'What did you see?' })).toBeVisible();
+  await page.getByRole('radio', { name: 'Turned out early' }).check();
+  await page.getByRole('radio', { name: 'Fairly sure' }).check();
+  await page.getByLabel('Pelvis hikes').check();
+  await page.getByRole('button', { name: 'Save the call' }).click();
+  await expect(page.getByText('Turned out early').first()).toBeVisible();
+  await expect(page).toHaveURL(`/visits/${made.visitId}/sides/right`);
+});
+
+test('on the Bench: scale, a rep, and marks by pointer and by keyboard', async ({ app, page }) => {
+  await signIn(page, app, COACH);
+  await openBench(page, made.clipId);
+  await setScale(page);
+  await nameRep(page, 0);
+  const places = placesOf(0);
+  for (const frame of BY_POINTER) await markFrameByPointer(page, frame, places);
+  await markFrameByKeyboard(page, BY_KEYBOARD, places);
+  await expect(page.getByText('all saved')).toBeVisible();
+
+  // what is stored is what was pressed on, to a fraction of a pixel
+  const { reps } = await ask(page.request, routes.bench, { params: { id: made.clipId } });
+  const marks = reps[0]?.marks ?? [];
+  expect(marks).toHaveLength(LED.length * (BY_POINTER.length + 1));
+  for (const mark of marks) {
+    const place = places.find(
+      ({ frame, landmark }) => frame === mark.frame && landmark === mark.landmark,
+    );
+    expect(Math.hypot((mark.u ?? NaN) - (place?.u ?? NaN), (mark.v ?? NaN) - (place?.v ?? NaN)))
+      // a pointer stands on whole pixels of the screen, each of which is three of the picture
+      .toBeLessThan(2.5);
+  }
+});
+
+test('the reading equals the truth', async ({ app, page }) => {
+  await signIn(page, app, COACH);
+  const { reps } = await ask(page.request, routes.bench, { params: { id: made.clipId } });
+  const first = reps[0];
+  if (first === undefined) throw new Error('the rep that was named is not there');
+  await markRest(page.request, first.rep.id, 0, [...BY_POINTER, BY_KEYBOARD]);
+  await addMarkedRep(page.request, made.clipId, 1);
+  await addMarkedRep(page.request, made.clipId, 2);
+
+  await page.goto(`/visits/${made.visitId}/sides/right`);
+  await expect(page.getByRole('heading', { level: 1, name: 'Turns out early' })).toBeVisible({
+    timeout: 60_000,
+  });
+  const { reading } = await ask(page.request, routes.sideReading, {
+    params: { id: made.visitId, side: 'right' },
+  });
+  expect(reading?.code).toBe('early-turn-out');
+  const { change, plusMinus } = reading ?? {};
+  expect(Math.abs((change ?? NaN) - TRUE_CHANGE)).toBeLessThan(plusMinus ?? NaN);
+  expect(plusMinus ?? NaN).toBeLessThan(TRUE_CHANGE);
+  const figures = page.getByRole('region', { name: 'Reading' });
+  await expect(figures).toContainText(`${turn(change ?? NaN)} ${plusMinusWords(plusMinus ?? NaN)}`);
+  await expect(figures).toContainText('Eye and measurement agree.');
+  await expect(figures).toContainText(/\d in 100 for turning out early, by three reps/);
+});
+
+test('the supervisor comments at a moment, with a ring', async ({ app, page }) => {
+  await signIn(page, app, SUPERVISOR);
+  await openBench(page, made.clipId, `?frame=${MOMENT}`);
+  await expect(frameSlider(page)).toHaveAttribute('aria-valuenow', String(MOMENT));
+  await page.getByRole('button', { name: 'Comments' }).click();
+  await page.getByLabel(`Comment at frame ${MOMENT}`).fill(COMMENT);
+  await page.getByRole('button', { name: 'Ring' }).click();
+  const { u, v } = placeOn(placesOf(0), MOMENT, 'belt-tip');
+  await pressOnClip(page, { u, v });
+  await pressOnClip(page, { u: u + 90, v });
+  await page.getByLabel('Show it to the athlete on a replay').check();
+  await page.getByRole('button', { name: 'Comment', exact: true }).click();
+  await expect(page.getByText(COMMENT, { exact: true })).toBeVisible();
+  await expect(page.getByText(/with a ring, shown to the athlete$/)).toBeVisible();
+});
+
+test('the coach finds the comment on the strip, answers and resolves it', async ({ app, page }) => {
+  await signIn(page, app, COACH);
+  await openBench(page, made.clipId);
+  await page.getByRole('button', { name: `at frame ${MOMENT}: ${COMMENT}` }).click();
+  await expect(frameSlider(page)).toHaveAttribute('aria-valuenow', String(MOMENT));
+  await page.getByRole('button', { name: 'Answer' }).click();
+  await page.getByLabel('Answer').fill('Seen. The rest of the rep shows the same.');
+  await page.getByRole('button', { name: 'Send' }).click();
+  await expect(page.getByText('Seen. The rest of the rep shows the same.')).toBeVisible();
+  await page.getByRole('button', { name: 'Resolve' }).click();
+  await expect(page.getByRole('button', { name: 'Open again' })).toBeVisible();
+});
+
+test('the coach makes a replay link, which is shown once', async ({ app, page }) => {
+  await signIn(page, app, COACH);
+  await page.goto(`/visits/${made.visitId}/sides/right`);
+  const replay = page.getByRole('region', { name: 'Replay for the athlete' });
+  await replay.getByLabel(/^A sentence of your own/).fill(MESSAGE);
+  await replay.getByRole('button', { name: 'Make a link' }).click();
+  const address = replay.getByLabel(/^The link is ready/);
+  made.link = await address.inputValue();
+  expect(made.link).toMatch(/\/r\/[A-Za-z0-9_-]{43}$/);
+  await page.reload();
+  await expect(replay.getByText('not opened yet')).toBeVisible();
+  await expect(page.getByText(made.link)).toHaveCount(0);
+});
+
+test('the athlete opens the link on a phone, without an account', async ({ browser }) => {
+  const phone = await browser.newContext({
+    viewport: { width: 390, height: 844 },
+    isMobile: true,
+    hasTouch: true,
+  });
+  const page = await phone.newPage();
+  await page.goto(made.link);
+  await expect(
+    page.getByRole('heading', { level: 1, name: 'Your right hip turns out early' }),
+  ).toBeVisible();
+  await expect(page.getByText(/Three times of three, the hip you stand on turned/)).toBeVisible();
+  await expect(page.getByText(/It is a way of moving, not an injury/)).toBeVisible();
+  await expect(page.getByText('seen by your coach, not measured')).toBeVisible();
+  await expect(page.getByText(`“${MESSAGE}”`)).toBeVisible();
+  await expect(page.getByText(`“${COMMENT}”`)).toBeVisible();
+  await expect(page.getByText('Stop if it hurts.')).toBeVisible();
+
+  await expectPlaying(page.getByLabel('Your lift, standing on the right leg'));
+  await page.getByRole('button', { name: '90°' }).click();
+  await expect.poll(() => drawnPixels(page)).toBeGreaterThan(500);
+  await expect(page.getByText(/^standing hip \d+° out$/)).toBeVisible();
+  // nothing is wider than the phone, and nothing was put on it
+  expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBe(390);
+  expect(await phone.cookies()).toEqual([]);
+  for (const route of [routes.clip, routes.clipVideo, routes.bench])
+    expect((await send(page.request, route, { params: { id: made.clipId } })).status()).toBe(401);
+  await phone.close();
 });

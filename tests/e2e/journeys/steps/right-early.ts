@@ -34,7 +34,18 @@ export const placesOf = (rep: number): readonly Place[] =>
     }),
   );
 
+/** Where a landmark is marked on a frame. */
+export const placeOn = (places: readonly Place[], frame: number, id: LandmarkId): Place => {
+  const place = places.find((each) => each.frame === frame && each.landmark === id);
+  if (place === undefined) throw new Error(`nothing is known of ${id} on frame ${frame}`);
+  return place;
+};
+
 /** Frames of a rep that get marks, in order. */
 export const framesOf = (rep: number): readonly number[] => [
   ...new Set(placesOf(rep).map(({ frame }) => frame)),
 ];
+
+/** The true turn from 60° to 90° of lift, mean of the three reps, degrees, external positive. */
+export const TRUE_CHANGE =
+  truth.reps.reduce((sum, rep) => sum + (rep.turnChange60To90 ?? NaN), 0) / truth.reps.length;

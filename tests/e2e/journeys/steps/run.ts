@@ -4,6 +4,8 @@ export interface Run {
   athleteId: string;
   visitId: string;
   clipId: string;
+  /** The replay's address, as it was shown once. */
+  link: string;
 }
 
 export const loadedRun = (): Run => ({
@@ -11,4 +13,5 @@ export const loadedRun = (): Run => ({
   athleteId: '',
   visitId: '',
   clipId: '',
+  link: '',
 });
