@@ -117,6 +117,12 @@ export const pages: RouteObject[] = [
                   import('#src/features/practice/set-ups-page.tsx').then((page) => page.SetUpsPage),
                 ),
               },
+              {
+                path: 'method',
+                lazy: lazily(() =>
+                  import('#src/features/method/method-page.tsx').then((page) => page.MethodPage),
+                ),
+              },
               { path: '*', Component: NotFoundPage },
             ],
           },

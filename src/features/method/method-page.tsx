@@ -1,0 +1,118 @@
+import { landmark, landmarksOf } from '#shared/landmarks/table.ts';
+import { LANDMARK_SETS, type LandmarkSetId } from '#shared/landmarks/types.ts';
+import { type Constant, CONSTANTS } from '#shared/measures/constants.ts';
+import type { Measure } from '#shared/measures/measure.ts';
+import { MEASURES } from '#shared/measures/registry.ts';
+import { Page, Section } from '#src/ui/page.tsx';
+import { type Column, Table } from '#src/ui/table.tsx';
+import { LIMITS } from './limits.ts';
+
+const UNITS: Record<Measure['unit'], string> = { degrees: '°', millimetres: ' mm' };
+
+const MEASURE_COLUMNS: Column<Measure>[] = [
+  {
+    key: 'label',
+    label: 'Measure',
+    cell: ({ label, sign }) => (
+      <>
+        <b>{label}</b>
+        <br />
+        <span className="text-soft">plus: {sign}</span>
+      </>
+    ),
+  },
+  { key: 'zero', label: 'Counted from', cell: ({ zero }) => zero },
+  { key: 'views', label: 'Seen from', cell: ({ views }) => views.join(', ').replaceAll('-', ' ') },
+  {
+    key: 'smallest',
+    label: 'Can be told from none beyond',
+    cell: ({ smallestChange, unit }) =>
+      smallestChange === null ? 'follows from the marks' : `${smallestChange}${UNITS[unit]}`,
+  },
+  {
+    key: 'source',
+    label: 'Source',
+    cell: ({ source }) => <span className="text-soft">{source}</span>,
+  },
+];
+
+const CONSTANT_COLUMNS: Column<Constant>[] = [
+  { key: 'meaning', label: 'Number', cell: ({ meaning }) => meaning },
+  { key: 'value', label: 'Value', cell: ({ value, unit }) => `${value} ${unit}`.trim() },
+  {
+    key: 'source',
+    label: 'Source',
+    cell: ({ source }) => <span className="text-soft">{source}</span>,
+  },
+];
+
+const SET_NAMES: Record<LandmarkSetId, string> = {
+  bare: 'Bare landmarks',
+  belt: 'Belt pointer',
+  'belt+thigh': 'Belt and thigh pointers',
+};
+
+/** How each number is made and what it cannot say, written from the same tables that the engine reads. */
+export function MethodPage() {
+  return (
+    <Page
+      title="Method"
+      lead="How each number is made, its error, where it comes from, and what a phone cannot see."
+    >
+      <Section title="What is measured" wide first>
+        <Table
+          caption="Measures"
+          columns={MEASURE_COLUMNS}
+          rows={MEASURES}
+          rowKey={({ id }) => id}
+        />
+      </Section>
+      <Section
+        title="Landmark sets"
+        note="A reading uses the richest set that has a usable rep."
+        wide
+      >
+        <dl>
+          {LANDMARK_SETS.map((set) => (
+            <div key={set} className="border-b border-rule py-3">
+              <dt className="font-bold">
+                {SET_NAMES[set]}, {landmarksOf(set).length} a frame
+              </dt>
+              <dd className="max-w-lead text-soft">
+                {landmarksOf(set)
+                  .map((id) => landmark(id).label)
+                  .join(' · ')}
+              </dd>
+            </div>
+          ))}
+        </dl>
+      </Section>
+      <Section title="A reading">
+        <p className="max-w-lead">
+          What counts is the change of turn from 60° to 90° of lift, fitted over the rise of every
+          usable rep of one support side in one visit. Marking error, the spread between reps and a
+          systematic part that more marks do not lessen give its uncertainty; 2,000 draws with a
+          seed made from the inputs give the same answer each time. A reading needs 95 in 100, and
+          holding still 80 in 100; otherwise it is “Can’t tell yet”.
+        </p>
+      </Section>
+      <Section title="What it cannot say" wide>
+        <ul>
+          {LIMITS.map(({ says, source }) => (
+            <li key={says} className="max-w-lead border-b border-rule py-3">
+              {says} <span className="text-soft">{source}</span>
+            </li>
+          ))}
+        </ul>
+      </Section>
+      <Section title="Numbers of engine 1" note="All that do not follow from geometry." wide>
+        <Table
+          caption="Constants"
+          columns={CONSTANT_COLUMNS}
+          rows={Object.values(CONSTANTS)}
+          rowKey={({ meaning }) => meaning}
+        />
+      </Section>
+    </Page>
+  );
+}
