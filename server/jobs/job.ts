@@ -7,6 +7,9 @@ import { JobOutbox } from './job-outbox.entity.ts';
 /** The channel that wakes the relay. */
 export const OUTBOX_CHANNEL = 'redshank_outbox';
 
+/** What the queue carries. */
+export type Carried = { practiceId: string; payload: unknown };
+
 /** A kind of job: its queue, and what travels with it. Ids only; the job reads the rest when it runs. */
 export interface JobType<P> {
   readonly queue: string;

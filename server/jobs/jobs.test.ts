@@ -158,6 +158,31 @@ describe('a job', () => {
   });
 });
 
+describe('a job whose worker was killed', () => {
+  it('is taken up by the next worker, not when its time is over', async () => {
+    await start(() => Promise.resolve());
+    await worker?.stop();
+    worker = null;
+    const clipId = randomUUID();
+    // as the queue looks after a kill: fetched, and nobody there
+    await asJobs((client) =>
+      client.query(
+        `insert into pgboss.job (name, data, state, started_on, retry_limit)
+         values ($1, $2, 'active', now(), 2)`,
+        [type.queue, { practiceId: api.world.practiceId, payload: { clipId } }],
+      ),
+    );
+    const ran: string[] = [];
+    await start(({ payload }) => {
+      ran.push(payload.clipId);
+      return Promise.resolve();
+    });
+    await eventually(() => {
+      expect(ran).toEqual([clipId]);
+    });
+  });
+});
+
 describe('a clip whose worker was killed', () => {
   const clipInPreparation = () =>
     api.ground.inPractice(product(api.world.practiceId), ({ em }) =>

@@ -1,14 +1,11 @@
-import { randomUUID } from 'node:crypto';
-import { Client } from 'pg';
 import PgBoss from 'pg-boss';
 import type { Ground } from '../main/ground.ts';
-import type { AnyJobHandler } from './job.ts';
+import type { AnyJobHandler, Carried } from './job.ts';
 import { Locks } from './locks.ts';
+import { queueOrphans } from './orphans.ts';
 import { Relay } from './relay.ts';
 
 const BUSY_RETRY_SECONDS = 10;
-
-type Carried = { practiceId: string; payload: unknown };
 
 export interface Worker {
   /** Aborts what runs, waits for it to end, lets go of the database. */
@@ -55,7 +52,7 @@ export const startWorker = async (
       retryBackoff: true,
       expireInMinutes: handler.expireInMinutes,
     });
-    await queueUnfinished(jobsUrl, boss, locks, handler);
+    await queueOrphans(jobsUrl, boss, locks, handler);
   }
   const relay = await Relay.start(jobsUrl, boss, log, onLost);
   for (const handler of handlers) {
@@ -95,26 +92,4 @@ export const startWorker = async (
       await locks.close();
     },
   };
-};
-
-/** Queues anew what a killed worker left: rows that say they are in work while nobody holds their lock. */
-const queueUnfinished = async (
-  jobsUrl: string,
-  boss: PgBoss,
-  locks: Locks,
-  { queue, unfinished, lockKey }: AnyJobHandler,
-): Promise<void> => {
-  if (!unfinished) return;
-  const client = new Client({ connectionString: jobsUrl });
-  await client.connect();
-  try {
-    const { rows } = await client.query<Record<string, unknown>>(unfinished.sql);
-    for (const row of rows) {
-      const { practiceId, payload } = unfinished.read(row);
-      if (!(await locks.isFree(lockKey(payload)))) continue;
-      await boss.send(queue, { practiceId, payload } satisfies Carried, { id: randomUUID() });
-    }
-  } finally {
-    await client.end();
-  }
 };

@@ -46,7 +46,10 @@ export const startWeb = async (ground: Ground): Promise<Web> => {
   // A long upload is fine as long as it moves.
   const server = createServer({ requestTimeout: 0 }, app);
   server.setTimeout(IDLE_MS);
-  await listen(server, config.port, config.host);
+  await listen(server, config.port, config.host).catch(async (error: unknown) => {
+    await stopListening();
+    throw error;
+  });
 
   return {
     stop: async () => {

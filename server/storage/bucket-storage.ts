@@ -59,7 +59,7 @@ export class BucketStorage implements Storage {
   static async open(options: BucketOptions): Promise<BucketStorage> {
     const storage = new BucketStorage(options);
     await mkdir(storage.incoming, { recursive: true, mode: 0o700 });
-    await storage.#temp.clear(24 * 3_600_000);
+    await storage.#temp.clear();
     return storage;
   }
 

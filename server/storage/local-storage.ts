@@ -34,7 +34,7 @@ export class LocalStorage implements Storage {
     const storage = new LocalStorage(root);
     await mkdir(storage.#files, { recursive: true, mode: 0o700 });
     await mkdir(storage.incoming, { recursive: true, mode: 0o700 });
-    await storage.#temp.clear(24 * 3_600_000);
+    await storage.#temp.clear();
     return storage;
   }
 

@@ -1,6 +1,15 @@
-import { existsSync, mkdtempSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
+import { spawnSync } from 'node:child_process';
+import {
+  existsSync,
+  mkdirSync,
+  mkdtempSync,
+  readdirSync,
+  rmSync,
+  utimesSync,
+  writeFileSync,
+} from 'node:fs';
 import { readFile } from 'node:fs/promises';
-import { tmpdir } from 'node:os';
+import { hostname, tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Readable } from 'node:stream';
 import { buffer } from 'node:stream/consumers';
@@ -135,6 +144,22 @@ describe.each(kinds)('storage in %s', (_kind, open) => {
 
   it('says that it is well', async () => {
     expect(await storage.healthy()).toBe(true);
+  });
+});
+
+describe('what killed processes left behind', () => {
+  it('is cleared at the next start; what lives and what is not known stays', async () => {
+    const parent = join(folder, 'left', 'temp');
+    const machine = hostname().replaceAll(/[^A-Za-z0-9]/g, '') || 'here';
+    const dead = `${machine}-${spawnSync('true').pid}-abc`;
+    const names = [dead, `${machine}-${process.pid}-abc`, 'elsewhere-1-new', 'elsewhere-1-old'];
+    for (const name of names) mkdirSync(join(parent, name), { recursive: true });
+    const twoDaysAgo = Date.now() / 1000 - 2 * 86_400;
+    utimesSync(join(parent, 'elsewhere-1-old'), twoDaysAgo, twoDaysAgo);
+    await LocalStorage.open(join(folder, 'left'));
+    expect(readdirSync(parent).sort()).toEqual(
+      [`${machine}-${process.pid}-abc`, 'elsewhere-1-new'].sort(),
+    );
   });
 });
 

@@ -1,7 +1,23 @@
 import { mkdir, mkdtemp, readdir, rm, stat } from 'node:fs/promises';
+import { hostname } from 'node:os';
 import { join } from 'node:path';
 
-/** Temporary folders under one parent. What a killed process left behind is cleared at the next start. */
+/** Long enough for the longest preparation, on machines whose processes cannot be asked for from here. */
+const STRANGER_MS = 24 * 3_600_000;
+
+/** A machine's name as a part of a folder's name. */
+const HERE = hostname().replaceAll(/[^A-Za-z0-9]/g, '') || 'here';
+
+const isAlive = (pid: number): boolean => {
+  try {
+    process.kill(pid, 0);
+    return true;
+  } catch (error) {
+    return error instanceof Error && 'code' in error && error.code === 'EPERM';
+  }
+};
+
+/** Temporary folders under one parent, named after machine and process so that leftovers are told from work. */
 export class TempDirs {
   readonly #parent: string;
 
@@ -11,7 +27,7 @@ export class TempDirs {
 
   async with<T>(use: (path: string) => Promise<T>): Promise<T> {
     await mkdir(this.#parent, { recursive: true, mode: 0o700 });
-    const path = await mkdtemp(join(this.#parent, 'work-'));
+    const path = await mkdtemp(join(this.#parent, `${HERE}-${process.pid}-`));
     try {
       return await use(path);
     } finally {
@@ -19,13 +35,18 @@ export class TempDirs {
     }
   }
 
-  /** @param olderThanMs so that a second process does not clear what the first is working on */
-  async clear(olderThanMs: number): Promise<void> {
-    const names = await readdir(this.#parent).catch(() => []);
-    for (const name of names) {
+  /** Removes what killed processes of this machine left behind, and what others left a day ago. */
+  async clear(): Promise<void> {
+    for (const name of await readdir(this.#parent).catch(() => [])) {
       const path = join(this.#parent, name);
-      const age = Date.now() - (await stat(path).catch(() => ({ mtimeMs: Infinity }))).mtimeMs;
-      if (age > olderThanMs) await rm(path, { recursive: true, force: true });
+      if (await this.#isLeft(name, path)) await rm(path, { recursive: true, force: true });
     }
+  }
+
+  async #isLeft(name: string, path: string): Promise<boolean> {
+    const [machine, pid] = name.split('-');
+    if (machine === HERE && /^\d+$/.test(pid ?? '')) return !isAlive(Number(pid));
+    const found = await stat(path).catch(() => null);
+    return found !== null && Date.now() - found.mtimeMs > STRANGER_MS;
   }
 }
