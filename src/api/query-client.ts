@@ -20,6 +20,9 @@ export function makeQueryClient(onSignInNeeded: () => void): QueryClient {
         staleTime: 60_000,
         retry: (failures, error) => failures < 2 && worthAgain(error),
         retryDelay: (failures) => Math.min(1000 * 2 ** failures, 8000),
+        // what is not there, or not to be seen, has a page of its own: the nearest error boundary shows it
+        throwOnError: (error, query) =>
+          query.state.data === undefined && isProblem(error, 'not-found'),
         // browsers are often wrong about being online: ask, and let the call say
         networkMode: 'always',
       },

@@ -1,4 +1,5 @@
 import { isRouteErrorResponse, useRouteError } from 'react-router-dom';
+import { isProblem } from '#src/api/problem.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Page } from '#src/ui/page.tsx';
 import { ErrorState } from '#src/ui/states.tsx';
@@ -11,7 +12,8 @@ const isMissingCode = (error: unknown) =>
 /** A page that broke. A piece of code that is gone after an update is fetched by loading again. */
 export function ErrorPage() {
   const error = useRouteError();
-  if (isRouteErrorResponse(error) && error.status === 404) return <NotFoundPage />;
+  const missing = isRouteErrorResponse(error) && error.status === 404;
+  if (missing || isProblem(error, 'not-found')) return <NotFoundPage />;
   const shown = isMissingCode(error)
     ? new Error(
         'A part of this page could not be fetched: the connection broke, or Redshank was updated.',

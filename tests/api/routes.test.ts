@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Route } from '#shared/contracts/route.ts';
-import { type RouteName, routes } from '#shared/contracts/routes.ts';
+import { routes } from '#shared/contracts/routes.ts';
 import { product } from '#server/db/in-practice.ts';
 import type { User } from '#server/features/accounts/user.entity.ts';
 import { Call } from '#server/features/calls/call.entity.ts';
@@ -15,107 +15,14 @@ import { Session } from '#server/features/accounts/session.entity.ts';
 import { makeApp } from '#server/http/app.ts';
 import { features } from '#server/main/features.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
-
-/** What the `:id` of a route names. A route that is missing here fails the type check. */
-const NAMES: Record<RouteNameWithId, keyof Ids> = {
-  endSession: 'session',
-  athlete: 'athlete',
-  editAthlete: 'athlete',
-  listConsents: 'athlete',
-  recordConsent: 'athlete',
-  withdrawConsent: 'consent',
-  listVisits: 'athlete',
-  addVisit: 'athlete',
-  visit: 'visit',
-  editVisit: 'visit',
-  answerSafety: 'visit',
-  deleteSetUp: 'setUp',
-  uploadClip: 'visit',
-  openUpload: 'visit',
-  cancelUpload: 'upload',
-  clip: 'clip',
-  editClip: 'clip',
-  deleteClip: 'clip',
-  usePart: 'clip',
-  clipVideo: 'clip',
-  clipPoster: 'clip',
-  clipStrip: 'clip',
-  clipSheet: 'clip',
-  clipFrame: 'clip',
-  listReps: 'clip',
-  addRep: 'clip',
-  editRep: 'rep',
-  deleteRep: 'rep',
-  listMarks: 'rep',
-  saveMarks: 'rep',
-  bench: 'clip',
-  listCalls: 'visit',
-  recordCall: 'visit',
-  sideReading: 'visit',
-  setAssumption: 'visit',
-  listComments: 'clip',
-  addComment: 'clip',
-  editComment: 'comment',
-  deleteComment: 'comment',
-  revokeReplay: 'replay',
-};
-type RouteNameWithId = {
-  [N in RouteName]: (typeof routes)[N] extends { path: `${string}:id${string}` } ? N : never;
-}[RouteName];
-
-/** Bodies that would do something if the thing could be seen. */
-const BODIES: Partial<Record<RouteName, object>> = {
-  editAthlete: { version: 1, sport: 'x' },
-  recordConsent: { givenBy: 'athlete', purposes: ['assessment'], validUntil: '2999-01-01' },
-  editVisit: { version: 1, note: 'x' },
-  answerSafety: {
-    answers: {
-      'pain-today': false,
-      'hip-replacement-or-limits': false,
-      'weight-bearing-limits': false,
-      'recent-surgery-or-fracture': false,
-      'falls-or-poor-balance': false,
-      'vertigo-or-dizziness': false,
-      'nerve-symptoms': false,
-      'confidential-any': false,
-    },
-    supportWithinReach: true,
-    knowsWhenToStop: true,
-  },
-  openUpload: { name: 'a.mp4', bytes: 10, view: 'front' },
-  editClip: { version: 1, mirrored: true },
-  addRep: { supportSide: 'left', startFrame: 0, endFrame: 10 },
-  editRep: { version: 1, excludedNote: 'x' },
-  saveMarks: {
-    commands: [
-      {
-        id: '6f1d2a0e-5c1b-4c57-9d55-0a3f1e2b7c01',
-        frame: 1,
-        landmark: 'asis-support',
-        baseRevision: 0,
-        set: { to: 'hidden' },
-      },
-    ],
-  },
-  recordCall: { seen: 'early', confidence: 'sure' },
-  setAssumption: { on: true },
-  addComment: { body: 'x', fromFrame: 0, toFrame: 0 },
-  editComment: { body: 'x' },
-};
-
-type Ids = Record<
-  | 'session'
-  | 'athlete'
-  | 'consent'
-  | 'visit'
-  | 'setUp'
-  | 'upload'
-  | 'clip'
-  | 'rep'
-  | 'comment'
-  | 'replay',
-  string
->;
+import {
+  addressOf,
+  BODIES,
+  type Ids,
+  NAMES,
+  type RouteNameWithId,
+  SILENT,
+} from '#tests/support/every-route.ts';
 
 let api: Api;
 let ids: Ids;
@@ -192,17 +99,12 @@ afterAll(() => api.close());
 const withId = Object.keys(NAMES) as RouteNameWithId[];
 
 const knock = async (name: RouteNameWithId, user: User | null) => {
-  const { method, path } = routes[name];
-  const address = path
-    .replace(':id', ids[NAMES[name]])
-    .replace(':side', 'right')
-    .replace(':index', '0');
+  const { method } = routes[name];
   const agent = user ? await api.as(user) : api.nobody;
-  return agent[method](address).send(method === 'get' ? undefined : (BODIES[name] ?? {}));
+  return agent[method](addressOf(name, ids)).send(
+    method === 'get' ? undefined : (BODIES[name] ?? {}),
+  );
 };
-
-/** Ending a session that is not one's own does nothing and says nothing. */
-const SILENT: ReadonlySet<RouteNameWithId> = new Set(['endSession']);
 
 describe('every route', () => {
   it('of the contracts is served, and nothing else', () => {

@@ -1,8 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link, useParams } from 'react-router-dom';
 import { benchOptions } from '#src/api/bench.queries.ts';
-import { isProblem } from '#src/api/problem.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { roughly } from '#src/ui/figures.ts';
 import { Page } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
@@ -39,7 +38,7 @@ export function BenchPage() {
   }
   if (bench.isPending) return <BenchSkeleton />;
   return (
-    <Page title={isProblem(bench.error, 'not-found') ? 'No such clip' : 'The Bench'}>
+    <Page title="The Bench">
       <ErrorState error={bench.error} onRetry={() => void bench.refetch()}>
         <Link to={paths.today()} className="py-2.5">
           Back to Today

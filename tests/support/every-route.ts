@@ -1,0 +1,113 @@
+import { type RouteName, routes } from '#shared/contracts/routes.ts';
+
+/** What the `:id` of a route names. A route that is missing here fails the type check. */
+export const NAMES: Record<RouteNameWithId, keyof Ids> = {
+  endSession: 'session',
+  athlete: 'athlete',
+  editAthlete: 'athlete',
+  listConsents: 'athlete',
+  recordConsent: 'athlete',
+  withdrawConsent: 'consent',
+  listVisits: 'athlete',
+  addVisit: 'athlete',
+  visit: 'visit',
+  editVisit: 'visit',
+  answerSafety: 'visit',
+  deleteSetUp: 'setUp',
+  uploadClip: 'visit',
+  openUpload: 'visit',
+  cancelUpload: 'upload',
+  clip: 'clip',
+  editClip: 'clip',
+  deleteClip: 'clip',
+  usePart: 'clip',
+  clipVideo: 'clip',
+  clipPoster: 'clip',
+  clipStrip: 'clip',
+  clipSheet: 'clip',
+  clipFrame: 'clip',
+  listReps: 'clip',
+  addRep: 'clip',
+  editRep: 'rep',
+  deleteRep: 'rep',
+  listMarks: 'rep',
+  saveMarks: 'rep',
+  bench: 'clip',
+  listCalls: 'visit',
+  recordCall: 'visit',
+  sideReading: 'visit',
+  setAssumption: 'visit',
+  listComments: 'clip',
+  addComment: 'clip',
+  editComment: 'comment',
+  deleteComment: 'comment',
+  revokeReplay: 'replay',
+};
+export type RouteNameWithId = {
+  [N in RouteName]: (typeof routes)[N] extends { path: `${string}:id${string}` } ? N : never;
+}[RouteName];
+
+/** Bodies that would do something if the thing could be seen. */
+export const BODIES: Partial<Record<RouteName, object>> = {
+  editAthlete: { version: 1, sport: 'x' },
+  recordConsent: { givenBy: 'athlete', purposes: ['assessment'], validUntil: '2999-01-01' },
+  editVisit: { version: 1, note: 'x' },
+  answerSafety: {
+    answers: {
+      'pain-today': false,
+      'hip-replacement-or-limits': false,
+      'weight-bearing-limits': false,
+      'recent-surgery-or-fracture': false,
+      'falls-or-poor-balance': false,
+      'vertigo-or-dizziness': false,
+      'nerve-symptoms': false,
+      'confidential-any': false,
+    },
+    supportWithinReach: true,
+    knowsWhenToStop: true,
+  },
+  openUpload: { name: 'a.mp4', bytes: 10, view: 'front' },
+  editClip: { version: 1, mirrored: true },
+  addRep: { supportSide: 'left', startFrame: 0, endFrame: 10 },
+  editRep: { version: 1, excludedNote: 'x' },
+  saveMarks: {
+    commands: [
+      {
+        id: '6f1d2a0e-5c1b-4c57-9d55-0a3f1e2b7c01',
+        frame: 1,
+        landmark: 'asis-support',
+        baseRevision: 0,
+        set: { to: 'hidden' },
+      },
+    ],
+  },
+  recordCall: { seen: 'early', confidence: 'sure' },
+  setAssumption: { on: true },
+  addComment: { body: 'x', fromFrame: 0, toFrame: 0 },
+  editComment: { body: 'x' },
+};
+
+/** A thing of each kind that a route can name. */
+export type Ids = Record<
+  | 'session'
+  | 'athlete'
+  | 'consent'
+  | 'visit'
+  | 'setUp'
+  | 'upload'
+  | 'clip'
+  | 'rep'
+  | 'comment'
+  | 'replay',
+  string
+>;
+
+/** Ending a session that is not one's own does nothing and says nothing. */
+export const SILENT: ReadonlySet<RouteNameWithId> = new Set(['endSession']);
+
+/** The address of a route for the thing it names; of a visit its right side, of a clip its first frame. */
+export const addressOf = (name: RouteNameWithId, ids: Ids): string =>
+  routes[name].path
+    .replace(':id', ids[NAMES[name]])
+    .replace(':side', 'right')
+    .replace(':index', '0');
