@@ -31,6 +31,7 @@ export default defineConfig({
           environment: 'node',
           globalSetup: ['tests/support/cluster.ts'],
           maxWorkers: 2,
+          sequence: { groupOrder: 1 },
           testTimeout: 30_000,
           hookTimeout: 60_000,
         },
