@@ -1,5 +1,5 @@
 import { paths } from '#src/ui/paths.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { Page } from '#src/ui/page.tsx';
 
 export function NotFoundPage() {

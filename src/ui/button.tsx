@@ -1,5 +1,4 @@
 import type { ComponentProps } from 'react';
-import { Link, type LinkProps } from 'react-router-dom';
 import { cx } from './class-names.ts';
 
 /**
@@ -53,9 +52,4 @@ export function Button({
       {busy && busyLabel !== undefined ? busyLabel : children}
     </button>
   );
-}
-
-/** A link that looks like a button: it goes somewhere, it does nothing. */
-export function ButtonLink({ look, className, ...rest }: LinkProps & { look?: ButtonLook }) {
-  return <Link {...rest} className={buttonClass(look, className)} />;
 }

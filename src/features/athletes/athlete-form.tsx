@@ -1,6 +1,7 @@
 import type * as z from 'zod';
 import { athleteBody } from '#shared/contracts/athletes.ts';
-import { Button, ButtonLink } from '#src/ui/button.tsx';
+import { Button } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { today } from '#src/ui/days.ts';
 import { Form } from '#src/ui/form/form.tsx';
 import { LengthField } from '#src/ui/form/length-field.tsx';

@@ -2,7 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
 import type { Athlete } from '#shared/contracts/athletes.ts';
 import { athleteOptions, athleteVisitsOptions } from '#src/api/athletes.queries.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { capital, inWords } from '#src/ui/figures.ts';
 import { Page, Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';

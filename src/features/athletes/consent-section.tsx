@@ -3,7 +3,7 @@ import type { Athlete, Consent } from '#shared/contracts/athletes.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { athletesKey, consentsOptions } from '#src/api/athletes.queries.ts';
 import { call } from '#src/api/client.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { ConfirmButton } from '#src/ui/confirm.tsx';
 import { longDay, moment } from '#src/ui/days.ts';
 import { Fold } from '#src/ui/fold.tsx';

@@ -3,7 +3,7 @@ import { routes } from '#shared/contracts/routes.ts';
 import type { SetUp } from '#shared/contracts/visits.ts';
 import { call } from '#src/api/client.ts';
 import { setUpsQuery } from '#src/api/visits.queries.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { ConfirmButton } from '#src/ui/confirm.tsx';
 import { shortDay } from '#src/ui/days.ts';
 import { metres } from '#src/ui/figures.ts';

@@ -5,7 +5,7 @@ import type { SidePage } from '#shared/contracts/readings.ts';
 import { ApiProblem, isProblem } from '#src/api/problem.ts';
 import { sideReadingOptions } from '#src/api/readings.queries.ts';
 import { Breadcrumbs } from '#src/ui/breadcrumbs.tsx';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { longDay, shortDay } from '#src/ui/days.ts';
 import { Page } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';

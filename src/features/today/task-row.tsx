@@ -1,5 +1,5 @@
 import { Link } from 'react-router-dom';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { Progress } from '#src/ui/progress.tsx';
 import type { Task } from './task-of.ts';
 

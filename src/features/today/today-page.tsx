@@ -2,7 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import type { Today } from '#shared/contracts/today.ts';
 import { useMe } from '#src/api/me.ts';
 import { todayQuery } from '#src/api/today.queries.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { weekday } from '#src/ui/days.ts';
 import { capital, inWords } from '#src/ui/figures.ts';
 import { Page, Section } from '#src/ui/page.tsx';

@@ -3,7 +3,7 @@ import { Link } from 'react-router-dom';
 import type { Athlete } from '#shared/contracts/athletes.ts';
 import type { Visit } from '#shared/contracts/visits.ts';
 import { longDay } from '#src/ui/days.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { StateDot } from '#src/ui/state-dot.tsx';

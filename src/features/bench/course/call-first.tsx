@@ -1,4 +1,4 @@
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { supportWords } from '#src/ui/words.ts';
 import { useBenchDocument, useBenchModel } from '../bench-context.ts';

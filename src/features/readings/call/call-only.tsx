@@ -6,7 +6,7 @@ import { routes } from '#shared/contracts/routes.ts';
 import { otherSide } from '#shared/landmarks/types.ts';
 import { addressOf } from '#src/api/client.ts';
 import { visitOptions } from '#src/api/visits.queries.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { moment } from '#src/ui/days.ts';
 import { capital } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';

@@ -3,7 +3,7 @@ import { useState } from 'react';
 import type { SidePage } from '#shared/contracts/readings.ts';
 import { athleteOptions } from '#src/api/athletes.queries.ts';
 import { replaysOptions } from '#src/api/readings.queries.ts';
-import { ButtonLink } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { Empty, ErrorState, Loading } from '#src/ui/states.tsx';
