@@ -6,7 +6,7 @@ import { Comments } from './comments.tsx';
 import { Player } from './player/player.tsx';
 import { useLoop } from './player/use-loop.ts';
 import { Result } from './result.tsx';
-import { contactLink } from './words/contact.ts';
+import { contactParts } from './words/contact.ts';
 
 /** One replay, as the athlete sees it: the film first, then what it says, in plain words. */
 export function ReplayPage({ token, replay }: { token: string; replay: PublicReplay }) {
@@ -57,26 +57,24 @@ export function ReplayPage({ token, replay }: { token: string; replay: PublicRep
 }
 
 function StopIfItHurts({ contact, coach }: { contact: string; coach: string }) {
-  const link = contactLink(contact);
+  const parts = contactParts(contact);
   return (
-    <aside className="my-6 border-l-[3px] border-ochre py-1 pl-4">
+    <aside className="mb-6 border-l-[3px] border-ochre py-1 pl-4">
       <b className="text-ochre">Stop if it hurts.</b> Pain, pinching or dizziness: stop, and call{' '}
-      {coach}
-      {contact !== '' && (
-        <>
-          {' '}
-          (
-          {link === null ? (
-            contact
-          ) : (
-            <a href={link} className="inline-block min-h-[44px] leading-[44px]">
-              {contact}
-            </a>
+      {coach} before you go on.
+      {parts.length > 0 && (
+        <span className="block">
+          {parts.map(({ text, to }) =>
+            to === null ? (
+              text
+            ) : (
+              <a key={text} href={to} className="inline-block min-h-[44px] leading-[44px]">
+                {text}
+              </a>
+            ),
           )}
-          )
-        </>
-      )}{' '}
-      before you go on.
+        </span>
+      )}
     </aside>
   );
 }

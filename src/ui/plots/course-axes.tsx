@@ -58,7 +58,7 @@ export function CourseAxes({ scale }: { scale: CourseScale }) {
           <text x={left + 8} y={bottom - 10} className="plot-over">
             turns in (internal) ↓
           </text>
-          <text x={right - 2} y={y(0) - 7} textAnchor="end" className="plot-over">
+          <text x={left + 8} y={y(0) - 7} className="plot-over">
             0 = quiet stance
           </text>
         </>

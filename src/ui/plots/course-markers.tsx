@@ -99,6 +99,8 @@ export function CourseNext({
   );
 }
 
+const SHORT_BRACKET = 56;
+
 /** The change from 60° to 90°, as a bracket at 90° with its words. */
 export function CourseBracket({
   at60,
@@ -117,6 +119,9 @@ export function CourseBracket({
   const from = y(at60);
   const to = y(at60 + change);
   const at = x(90) + 10;
+  // beside a short bracket the words would lie over those of the wedge
+  const short = Math.abs(to - from) < SHORT_BRACKET;
+  const wordsY = short ? to + (change < 0 ? 20 : -8) : (from + to) / 2 + 6;
   return (
     <g>
       <path d={`M${x(60)} ${from}H${at}`} strokeDasharray="1 3" className="stroke-ink" />
@@ -126,7 +131,7 @@ export function CourseBracket({
         strokeWidth="1.5"
         className="stroke-ink"
       />
-      <text x={at + 8} y={(from + to) / 2 + 6} className="plot-over fill-ink text-sub font-bold">
+      <text x={at + 8} y={wordsY} className="plot-over fill-ink text-sub font-bold">
         {words}
       </text>
     </g>

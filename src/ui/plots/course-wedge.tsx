@@ -3,6 +3,9 @@ import type { CourseScale } from './course-scale.ts';
 import { WEDGE, wedgePath } from './course-shapes.ts';
 import { Hatch } from './hatch.tsx';
 
+/** Of the words 'holds: not a pass', px. */
+const HOLDS_WIDTH = 104;
+
 /**
  * What would be expected between 60° and 90°, from this course's own value at 60°. Green is turning
  * in only; holding still is a neutral hatch, for it is not a pass. It judges the change, not the height.
@@ -40,9 +43,11 @@ export function CourseWedge({ at60, scale }: { at60: number; scale: CourseScale 
           >
             expected
           </text>
-          <text x={x(90) + 18} y={y(at60) + 5} className="plot-over">
-            holds: not a pass
-          </text>
+          {x(90) + 18 + HOLDS_WIDTH < scale.right && (
+            <text x={x(90) + 18} y={y(at60) + 5} className="plot-over">
+              holds: not a pass
+            </text>
+          )}
         </>
       )}
     </g>

@@ -32,6 +32,7 @@ function OneClip({ clip }: { clip: Clip }) {
   const [speed, setSpeed] = useState<(typeof SPEEDS)[number]['value']>('0.25');
   const [playing, setPlaying] = useState(false);
   const [failed, setFailed] = useState(false);
+  const shape = (clip.width ?? 9) / (clip.height ?? 16);
   const toggle = () => {
     const element = video.current;
     if (!element) return;
@@ -53,8 +54,8 @@ function OneClip({ clip }: { clip: Clip }) {
         onPlay={() => setPlaying(true)}
         onPause={() => setPlaying(false)}
         onError={() => setFailed(true)}
-        className="max-h-[70vh] w-full rounded bg-dusk object-contain"
-        style={{ aspectRatio: `${clip.width ?? 9} / ${clip.height ?? 16}` }}
+        className="w-full rounded bg-dusk"
+        style={{ aspectRatio: shape, maxWidth: `calc(66dvh * ${shape})` }}
       />
       {failed ? (
         <p role="alert" className="mt-2 text-note text-alarm">

@@ -3,21 +3,33 @@ import { turnAt } from '#src/ui/plots/course-shapes.ts';
 import { LIFT_RANGE } from '#src/ui/plots/course-scale.ts';
 import type { CoursePoint } from '#src/ui/plots/course-points.tsx';
 
-/** Points of the rises; used reps first, in the order of their symbols. */
+/**
+ * Reps whose points are drawn, in the order of their symbols: those that are used; where none is, those
+ * that nobody has left out.
+ */
+export const drawnReps = (reps: readonly RepResult[]): readonly RepResult[] => {
+  const used = reps.filter((rep) => rep.used);
+  if (used.length > 0) return used;
+  return reps.filter(
+    ({ why, frames }) =>
+      !why.some(({ code }) => code === 'excluded' || code === 'other-side') &&
+      frames.some(({ phase, turn }) => phase === 'rise' && turn !== null),
+  );
+};
+
+/** Points of the rises. */
 export const coursePoints = (reps: readonly RepResult[]): CoursePoint[] =>
-  reps
-    .filter(({ used }) => used)
-    .flatMap((rep, n) =>
-      rep.frames.flatMap(({ phase, lift, turn, provisional }) =>
-        phase === 'rise' &&
-        lift !== null &&
-        turn !== null &&
-        lift >= LIFT_RANGE[0] &&
-        lift <= LIFT_RANGE[1]
-          ? [{ lift, turn, rep: n, hollow: provisional }]
-          : [],
-      ),
-    );
+  drawnReps(reps).flatMap((rep, n) =>
+    rep.frames.flatMap(({ phase, lift, turn, provisional }) =>
+      phase === 'rise' &&
+      lift !== null &&
+      turn !== null &&
+      lift >= LIFT_RANGE[0] &&
+      lift <= LIFT_RANGE[1]
+        ? [{ lift, turn, rep: n, hollow: provisional }]
+        : [],
+    ),
+  );
 
 /** ± (95 %) of one rep's change from 60° to 90°, degrees: what its band says at 90°. */
 export const repHalfWidth = ({ curve, fit }: RepResult): number => {

@@ -1,8 +1,7 @@
-import { Link } from 'react-router-dom';
 import type { Reading } from '#shared/contracts/readings.ts';
 import { degrees, inWords, turn } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
-import { paths } from '#src/ui/paths.ts';
+import { coursePoints } from './course-data.ts';
 import { ReadingCourse } from './reading-course.tsx';
 import { RepKey } from './rep-key.tsx';
 
@@ -44,15 +43,19 @@ export function CourseSection({ reading }: { reading: Reading }) {
               {turn(returnPast90.change)}. That is described only; nothing is read from it.
             </p>
           )}
-          <p>
-            <Link to={paths.method()} className="inline-block py-2">
-              How each number is computed
-            </Link>
-          </p>
         </>
       }
     >
-      <ReadingCourse result={result} side={side} />
+      {coursePoints(result.reps).length > 0 ? (
+        <ReadingCourse result={result} side={side} />
+      ) : (
+        <p className="max-w-lead text-soft">
+          There is no course: no marked frame of this side gives a turn.
+        </p>
+      )}
+      {result.course.length === 0 && coursePoints(result.reps).length > 0 && (
+        <p className="mt-2 text-note text-soft">Points only: nothing could be fitted to them.</p>
+      )}
     </Section>
   );
 }

@@ -41,7 +41,6 @@ export function ReadingCourse({
       repCurves={used.length > 1 && !small ? used.map(({ curve }) => curve) : []}
       points={coursePoints(reps)}
       reach={reach}
-      empty={course.length > 0 ? undefined : ['No course can be drawn from these marks.']}
     >
       {(scale) => (
         <>

@@ -4,17 +4,18 @@ import type { RepResult } from '#shared/reading/types.ts';
 import { capital, plusMinus, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import { repSymbol } from '#src/ui/plots/course-points.tsx';
-import { repFaultWords } from '../words/rep-fault-words.ts';
-import { repHalfWidth } from './course-data.ts';
+import { faultsToSay, repFaultWords } from '../words/rep-fault-words.ts';
+import { drawnReps, repHalfWidth } from './course-data.ts';
 import { repName } from '../words/rep-names.ts';
 
 /** Each rep with its symbol and its own change; what is left out says why and stays open to be looked at. */
 export function RepKey({ reading }: { reading: Reading }) {
-  const used = reading.result.reps.filter(({ used }) => used);
-  const left = reading.result.reps.filter(({ used }) => !used);
+  const { reps } = reading.result;
+  const drawn = drawnReps(reps);
+  const left = reps.filter((rep) => !drawn.includes(rep));
   return (
     <ul className="space-y-1">
-      {used.map((rep, n) => (
+      {drawn.map((rep, n) => (
         <li key={rep.id} className="flex items-baseline gap-2 text-ink">
           <svg
             width="12"
@@ -27,8 +28,9 @@ export function RepKey({ reading }: { reading: Reading }) {
           </svg>
           <span>
             <RepLink reading={reading} rep={rep} />{' '}
-            {rep.fit &&
-              `${turn(rep.fit.change.value)} ${plusMinus(repHalfWidth(rep))}, ${rep.fit.used} frames`}
+            {rep.fit
+              ? `${turn(rep.fit.change.value)} ${plusMinus(repHalfWidth(rep))}, ${rep.fit.used} frames`
+              : leftOut(rep)}
           </span>
         </li>
       ))}
@@ -38,14 +40,16 @@ export function RepKey({ reading }: { reading: Reading }) {
             –
           </span>
           <span>
-            <RepLink reading={reading} rep={rep} />{' '}
-            {rep.why.length > 0 ? `left out: ${rep.why.map(repFaultWords).join('; ')}` : 'left out'}
+            <RepLink reading={reading} rep={rep} /> {leftOut(rep)}
           </span>
         </li>
       ))}
     </ul>
   );
 }
+
+const leftOut = ({ why }: RepResult): string =>
+  why.length > 0 ? `left out: ${faultsToSay(why).map(repFaultWords).join('; ')}` : 'left out';
 
 function RepLink({ reading, rep }: { reading: Reading; rep: RepResult }) {
   const clipId = reading.reps.find((each) => each.id === rep.id)?.clipId;

@@ -21,7 +21,8 @@ export function PartsSection({ reading }: { reading: Reading }) {
       margin={
         <>
           <p className="flex items-center gap-2">
-            <SideMark kind="midline" /> belt pointer, shows the pelvis
+            <SideMark kind="midline" />{' '}
+            {result.set === 'bare' ? 'pelvis, from its outline' : 'belt pointer, shows the pelvis'}
           </p>
           <p className="flex items-center gap-2">
             <SideMark kind="support" /> support thigh

@@ -1,7 +1,5 @@
-import { Link } from 'react-router-dom';
 import type { Reading } from '#shared/contracts/readings.ts';
 import { Section } from '#src/ui/page.tsx';
-import { paths } from '#src/ui/paths.ts';
 import { Caution } from '#src/ui/states.tsx';
 import { repName } from '../words/rep-names.ts';
 import { warningWords } from '../words/warning-words.ts';
@@ -18,11 +16,6 @@ export function ReasonsSection({ reading }: { reading: Reading }) {
           <p>
             Skin moves over bone. The camera under-reads hip rotation; take direction and timing
             from it, not an absolute angle.
-          </p>
-          <p>
-            <Link to={paths.method()} className="inline-block py-2">
-              How each number is computed
-            </Link>
           </p>
         </>
       }
@@ -48,7 +41,8 @@ export function ReasonsSection({ reading }: { reading: Reading }) {
                   {of.length > 0 && of.length < reps.length && (
                     <span className="text-soft">
                       {' '}
-                      ({of.map((id) => repName(reading, id)).join(', ')})
+                      ({of.map((id) => repName(reading, id)).join(', ')}
+                      {of.length > 1 && ', each'})
                     </span>
                   )}
                 </Caution>

@@ -5,6 +5,7 @@ import { degrees } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { repName } from '../words/rep-names.ts';
+import { settleToSay } from './settle-to-say.ts';
 import { settleWords } from '../words/settle-words.ts';
 
 /** Where the act is done: on the Bench at the frame nearest to it, or at the visit where clips are added. */
@@ -47,7 +48,8 @@ const frameOf = (reading: Reading, repId: string, settle: Settle): { frame?: num
 
 /** What would settle a reading that is not settled, with what each act brings. */
 export function SettleSection({ reading }: { reading: Reading }) {
-  const { settle, figures } = reading.result;
+  const { figures } = reading.result;
+  const settle = settleToSay(reading.result);
   if (settle.length === 0) return null;
   return (
     <Section

@@ -11,7 +11,9 @@ import { type ChangeRow, changeRows } from './changes.ts';
 
 const changeText = ({ change, unit }: ChangeRow): string => {
   if (change === null) return '';
-  return unit === 'degrees' ? turn(change) : `${change > 0 ? '+' : ''}${decimal(change, 0)} mm`;
+  return unit === 'degrees'
+    ? turn(change)
+    : `${Math.round(change) > 0 ? '+' : ''}${decimal(change, 0)} mm`;
 };
 
 const COLUMNS: readonly Column<ChangeRow>[] = [

@@ -1,8 +1,9 @@
 import type { RepFault } from '#shared/reading/reasons.ts';
-import { degrees, inWords } from '#src/ui/figures.ts';
+import { inWords } from '#src/ui/figures.ts';
 import { VIEW_WORDS } from '#src/ui/words.ts';
 import { EXCLUSION_WORDS } from './exclusion-words.ts';
 import { landmarkNames, SET_WORDS } from './landmark-words.ts';
+import { liftRange } from './settle-words.ts';
 
 const frames = (count: number): string => `${inWords(count)} ${count === 1 ? 'frame' : 'frames'}`;
 
@@ -38,7 +39,7 @@ export const repFaultWords = (fault: RepFault): string => {
     case 'few-near-60':
     case 'few-near-90':
     case 'few-across-window':
-      return `${frames(fault.have)} marked with a lift from ${bounds(fault.from, fault.to)}, ${inWords(fault.need)} needed`;
+      return `${frames(fault.have)} marked with a lift ${liftRange(fault.from ?? 0, fault.to ?? 180)}, ${inWords(fault.need)} needed`;
     case 'few-in-rise':
       return `${frames(fault.have)} of the rise marked, ${inWords(fault.need)} needed`;
     case 'marks-coincide':
@@ -48,5 +49,16 @@ export const repFaultWords = (fault: RepFault): string => {
   }
 };
 
-const bounds = (from: number | null, to: number | null): string =>
-  `${degrees(from ?? 0, 0)} to ${degrees(to ?? 180, 0)}`;
+/** Faults beside which no other matters: more marks would not help. */
+const DECISIVE: ReadonlySet<RepFault['code']> = new Set([
+  'excluded',
+  'other-side',
+  'view-cannot-show-turn',
+  'no-frames',
+]);
+
+/** The faults worth saying: one that decides stands alone. */
+export const faultsToSay = (faults: readonly RepFault[]): readonly RepFault[] => {
+  const decisive = faults.find(({ code }) => DECISIVE.has(code));
+  return decisive ? [decisive] : faults;
+};

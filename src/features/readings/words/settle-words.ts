@@ -15,13 +15,23 @@ const becomes = (from: number, to: number): string =>
 const frames = (count: number, kind = ''): string =>
   `${inWords(count)} more ${kind}${count === 1 ? 'frame' : 'frames'}`;
 
+/** A stretch of lift as narrow as this is one end of the window, degrees. */
+const END_WIDTH = 30;
+
+/** `from 54° to 66°`; a bound beyond what a leg can do is none. */
+export const liftRange = (from: number, to: number): string =>
+  to >= 170 ? `of ${degrees(from, 0)} or more` : `from ${degrees(from, 0)} to ${degrees(to, 0)}`;
+
 /** What would settle a reading that is not settled. */
 export const settleWords = (settle: Settle, nameOf: NameOf): SettleWords => {
   switch (settle.code) {
     case 'mark-frames':
       return {
-        act: `Mark ${frames(settle.more)} of ${nameOf(settle.rep)} with a lift from ${degrees(settle.from, 0)} to ${degrees(settle.to, 0)}`,
-        gain: 'Marks at the ends of the window are worth most.',
+        act: `Mark ${frames(settle.more)} of ${nameOf(settle.rep)} with a lift ${liftRange(settle.from, settle.to)}`,
+        gain:
+          settle.to - settle.from <= END_WIDTH
+            ? 'Marks at the ends of the window are worth most.'
+            : null,
       };
     case 'mark-quiet-frames':
       return {

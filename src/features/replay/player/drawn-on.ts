@@ -1,6 +1,13 @@
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { framePoint } from '#shared/geometry/points.ts';
-import { LANDMARK_IDS, type LandmarkId, type Mark, type Marks } from '#shared/landmarks/types.ts';
+import { landmark } from '#shared/landmarks/table.ts';
+import {
+  LANDMARK_IDS,
+  type LandmarkId,
+  type LandmarkSetId,
+  type Mark,
+  type Marks,
+} from '#shared/landmarks/types.ts';
 import { hipCentre } from '#shared/measures/hip-centre.ts';
 import { noteShape } from '#shared/overlay/notes.ts';
 import { overlay } from '#shared/overlay/overlay.ts';
@@ -30,6 +37,29 @@ const marksOf = ({ marks }: MarkedFrame): Marks => {
 const pointOf = (marks: Marks, id: LandmarkId) => {
   const mark = marks[id];
   return mark && !mark.hidden ? mark.point : null;
+};
+
+const EXTRA: ReadonlySet<LandmarkId> = new Set([
+  'acromion-support',
+  'acromion-lifted',
+  'toe-support',
+  'heel-support',
+]);
+
+/** The landmarks of the richest set that is marked, and trunk and foot: what the poorer sets add would lie over it. */
+const withoutPoorer = (marks: Marks): Marks => {
+  const set: LandmarkSetId = marks['thigh-tip']
+    ? 'belt+thigh'
+    : marks['belt-tip']
+      ? 'belt'
+      : 'bare';
+  const out: Partial<Record<LandmarkId, Mark>> = {};
+  for (const id of LANDMARK_IDS) {
+    const { sets, views } = landmark(id);
+    const kept = sets.includes(set) || EXTRA.has(id) || !views.includes('front');
+    if (kept && marks[id]) out[id] = marks[id];
+  }
+  return out;
 };
 
 /** ASIS distance of the quiet stance, px: from it the hip centres are drawn. Null where it is not marked. */
@@ -66,7 +96,7 @@ export const drawnOn = (
   comment: PublicReplay['comments'][number] | null,
 ): Shown => {
   const known = frameBetween(replay.overlay, times, frame);
-  const marks = known ? marksOf(known) : {};
+  const marks = known ? withoutPoorer(marksOf(known)) : {};
   const note = comment?.shape;
   const pointed =
     comment && note && comment.fromFrame <= frame && frame <= comment.toFrame

@@ -1,7 +1,22 @@
-/** A practice's contact line as something to tap: an e-mail address or a telephone number; else null. */
-export const contactLink = (contact: string): string | null => {
-  const text = contact.trim();
-  if (/^[^\s@]+@[^\s@]+\.[^\s@]+$/.test(text)) return `mailto:${text}`;
-  const digits = text.replace(/[\s()./-]/g, '');
-  return /^\+?\d{5,15}$/.test(digits) ? `tel:${digits}` : null;
-};
+export interface ContactPart {
+  readonly text: string;
+  /** Where it leads when tapped; null for plain words. */
+  readonly to: string | null;
+}
+
+/** An e-mail address, or a telephone number of at least six digits. */
+const REACHABLE = /([^\s@,;:<>()]+@[^\s@,;:<>()]+\.[a-z]{2,}|\+?\d[\d ()/.-]{4,}\d)/gi;
+
+/** A practice's contact line in parts, with what can be called or written to as something to tap. */
+export const contactParts = (contact: string): ContactPart[] =>
+  contact
+    .trim()
+    .split(REACHABLE)
+    .filter((text) => text !== '')
+    .map((text) => {
+      if (text.match(REACHABLE)?.[0] !== text) return { text, to: null };
+      return {
+        text,
+        to: text.includes('@') ? `mailto:${text}` : `tel:${text.replace(/[^+\d]/g, '')}`,
+      };
+    });
