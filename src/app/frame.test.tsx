@@ -2,7 +2,7 @@ import { screen, waitFor } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
-import { aSetUp } from '#tests/support/records.ts';
+import { anAthlete, aSetUp } from '#tests/support/records.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
 
 describe('the frame', () => {
@@ -42,5 +42,17 @@ describe('the frame', () => {
     down = false;
     await user.click(screen.getByRole('button', { name: 'Try again' }));
     expect(await screen.findByText('Room 2, floor mark')).toBeVisible();
+  });
+
+  it('keeps the focus at the heading when the page replaces it after loading', async () => {
+    signedInApi()
+      .on(routes.listAthletes, () => ({ items: [anAthlete()], total: 1, page: 1, pageSize: 25 }))
+      .on(routes.athlete, () => anAthlete())
+      .on(routes.listVisits, () => ({ items: [] }))
+      .on(routes.listConsents, () => ({ items: [] }));
+    const { user } = renderAt('/athletes');
+    await user.click(await screen.findByRole('link', { name: 'Ines Marlow' }));
+    const heading = await screen.findByRole('heading', { level: 1, name: 'Ines Marlow' });
+    await waitFor(() => expect(heading).toHaveFocus());
   });
 });

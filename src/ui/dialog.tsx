@@ -39,7 +39,7 @@ export function Dialog({
       onClick={(event) => {
         if (event.target === ref.current) onClose();
       }}
-      className="m-auto w-[min(560px,calc(100vw-32px))] max-w-none rounded border border-ink bg-mud p-0 backdrop:bg-dusk/60"
+      className="m-auto w-[min(560px,calc(100vw-32px))] max-w-none rounded border border-ink bg-mud p-0 text-left text-body font-normal text-ink backdrop:bg-dusk/60"
     >
       <div className="p-5 tablet:p-7">
         <h2 id={titleId} tabIndex={-1} className="mb-3 text-filled font-bold">
