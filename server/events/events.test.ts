@@ -38,6 +38,8 @@ const cookieOf = async (user: User): Promise<string> => {
   return api.ground.sessions.cookieFor(session.id).split(';')[0] ?? '';
 };
 
+const soon = (check: () => void): Promise<void> => vi.waitFor(check, { timeout: 15_000 });
+
 /** Opens a stream and collects what it says. */
 const listen = async (cookie: string, lastEventId?: string) => {
   const abort = new AbortController();
@@ -58,7 +60,7 @@ const listen = async (cookie: string, lastEventId?: string) => {
     state.ended = true;
   };
   read().catch(() => undefined);
-  await vi.waitFor(() => {
+  await soon(() => {
     expect(state.text).toContain('retry:');
   });
   return state;
@@ -74,7 +76,7 @@ const publish = (event: LiveEvent = EVENT): Promise<void> =>
     tell(unit, { coachId: api.world.coach.id }, event),
   );
 const hears = (state: { text: string }, text: string): Promise<void> =>
-  vi.waitFor(() => {
+  soon(() => {
     expect(state.text).toContain(text);
   });
 
@@ -143,7 +145,7 @@ describe('the stream of events', () => {
     });
     expect(out.status).toBe(204);
     await hears(state, '"type":"signed-out"');
-    await vi.waitFor(() => {
+    await soon(() => {
       expect(state.ended).toBe(true);
     });
   });

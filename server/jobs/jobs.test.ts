@@ -61,7 +61,7 @@ const asJobs = async <T>(work: (client: Client) => Promise<T>): Promise<T> => {
 };
 
 const eventually = (check: () => void | Promise<void>): Promise<void> =>
-  vi.waitFor(check, { timeout: 15_000, interval: 50 });
+  vi.waitFor(check, { timeout: 25_000, interval: 50 });
 
 describe('a job', () => {
   it('runs once its state is committed, with what it was given', async () => {

@@ -73,9 +73,9 @@ beforeAll(async () => {
       );
       expect(readings).toBe(6);
     },
-    { timeout: 50_000, interval: 200 },
+    { timeout: 170_000, interval: 200 },
   );
-}, 60_000);
+}, 180_000);
 afterAll(async () => {
   await worker.stop();
   await api.close();

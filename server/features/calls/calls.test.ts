@@ -1,3 +1,4 @@
+import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { product } from '../../db/in-practice.ts';
@@ -17,6 +18,13 @@ const CALL = {
   handsFelt: 'The hip let go late.',
 };
 
+const settingOf = async (em: EntityManager, side: 'left' | 'right'): Promise<SideSetting> => {
+  const visit = api.world.visit.id;
+  return (
+    (await em.findOne(SideSetting, { visit, side })) ?? em.create(SideSetting, { visit, side })
+  );
+};
+
 describe('a call by eye', () => {
   const pathOf = (side: string) => `/api/visits/${api.world.visit.id}/sides/${side}/call`;
 
@@ -31,15 +39,9 @@ describe('a call by eye', () => {
       by: { id: api.world.coach.id },
       beforeFigures: true,
     });
-    await api.ground.inPractice(product(api.world.practiceId), ({ em }) =>
-      Promise.resolve(
-        em.create(SideSetting, {
-          visit: api.world.visit.id,
-          side: 'right',
-          figuresShownAt: new Date(),
-        }),
-      ),
-    );
+    await api.ground.inPractice(product(api.world.practiceId), async ({ em }) => {
+      (await settingOf(em, 'right')).figuresShownAt = new Date();
+    });
     await coach.post(pathOf('right')).send({ seen: 'unsure', confidence: 'guess' }).expect(201);
     const { body } = await coach.get(pathOf('right')).expect(200);
     expect(body.items).toMatchObject([
@@ -76,9 +78,7 @@ describe('a call by eye', () => {
           assumption: false,
           by: coach,
         });
-        const setting =
-          (await em.findOne(SideSetting, { visit: visit.id, side })) ??
-          em.create(SideSetting, { visit, side });
+        const setting = await settingOf(em, side);
         em.assign(setting, { reading });
       }
     });

@@ -69,6 +69,7 @@ beforeAll(async () => {
       toFrame: 12,
       shared: false,
       by: supervisor,
+      at: new Date(Date.now() - 60_000),
     });
     const lapsing = makeAthlete(em, { coach, givenName: 'Sandy' });
     makeConsent(em, { athlete: lapsing, recordedBy: coach, validUntil: daysLater(today(), 5) });

@@ -19,10 +19,13 @@ describe('progress', () => {
     const agent = await api.as(coach);
     const before = (await agent.get(`/api/clips/${id}`)).body as { version: number };
     tellProgress(api.ground, practiceId, id)({ stage: 'copying', percent: 40, secondsLeft: 12 });
-    await vi.waitFor(async () => {
-      const { body } = await agent.get(`/api/clips/${id}`);
-      expect(body).toMatchObject({ progress: 40, secondsLeft: 12, version: before.version });
-    });
+    await vi.waitFor(
+      async () => {
+        const { body } = await agent.get(`/api/clips/${id}`);
+        expect(body).toMatchObject({ progress: 40, secondsLeft: 12, version: before.version });
+      },
+      { timeout: 15_000 },
+    );
     await agent
       .patch(`/api/clips/${id}`)
       .send({ version: before.version, mirrored: true })
