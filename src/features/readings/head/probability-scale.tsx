@@ -7,7 +7,7 @@ const at = (p: number): string => `${100 * p}%`;
 export function ProbabilityScale({ p, limit, of }: Certainty) {
   const needed = Math.round(1000 * limit) / 10;
   return (
-    <div className="w-full max-w-[300px] text-caption text-soft">
+    <div className="w-full max-w-[260px] text-caption text-soft">
       <svg
         width="100%"
         height="56"

@@ -37,9 +37,10 @@ export function ReadingHead({ page, reading }: { page: SidePage; reading: Readin
         </h1>
         <div className="mt-3 flex flex-wrap items-end justify-between gap-x-8 gap-y-3">
           {certainty ? (
-            <p className="text-lead">
-              <b className="block">{howSure(certainty.p)}</b>
-              {inHundred(certainty.p)} in 100 {certainty.of}
+            <p>
+              <b className="block text-lead">{howSure(certainty.p)}</b>
+              {inHundred(certainty.p)} in 100 {certainty.of}, by {inWords(used)}{' '}
+              {used === 1 ? 'rep' : 'reps'}
             </p>
           ) : (
             <p className="text-lead font-bold">

@@ -1,5 +1,7 @@
+import { Link } from 'react-router-dom';
 import type { Reading } from '#shared/contracts/readings.ts';
 import { Section } from '#src/ui/page.tsx';
+import { paths } from '#src/ui/paths.ts';
 import { Caution } from '#src/ui/states.tsx';
 import { repName } from '../words/rep-names.ts';
 import { warningWords } from '../words/warning-words.ts';
@@ -16,6 +18,11 @@ export function ReasonsSection({ reading }: { reading: Reading }) {
           <p>
             Skin moves over bone. The camera under-reads hip rotation; take direction and timing
             from it, not an absolute angle.
+          </p>
+          <p>
+            <Link to={paths.method()} className="inline-block py-2">
+              How each number is computed
+            </Link>
           </p>
         </>
       }
