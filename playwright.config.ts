@@ -38,6 +38,8 @@ export default defineConfig({
       name: 'bench',
       testDir: 'tests/e2e/bench',
       dependencies: ['app-start'],
+      // its clips are prepared behind those of the demo
+      timeout: 300_000,
       expect: { timeout: 30_000 },
     },
     {

@@ -65,11 +65,11 @@ vitest() {
 }
 
 if wanted static; then
-  run types 'type check' check 5 npm run --silent typecheck
-  run lint 'lint' check 5 npm run --silent lint
-  run format 'format' check 3 npm run --silent format:check
-  run rules 'dependency rules' check 3 npm run --silent depcruise
-  run drift 'migration drift' check 3 node --import tsx docker-free-scripts/drift.ts
+  run types 'type check' check 10 npm run --silent typecheck
+  run lint 'lint' check 10 npm run --silent lint
+  run format 'format' check 6 npm run --silent format:check
+  run rules 'dependency rules' check 6 npm run --silent depcruise
+  run drift 'migration drift' check 6 node --import tsx docker-free-scripts/drift.ts
 fi
 if wanted unit; then
   vitest unit 'unit and component tests' 15 unit web
@@ -78,8 +78,8 @@ if wanted api; then
   vitest api 'API tests' 15 api
 fi
 if wanted e2e; then
-  run build 'build' check 5 npm run --silent build
-  PLAYWRIGHT_JSON_OUTPUT_FILE=$report/e2e.json run e2e 'browser tests' playwright 25 \
+  run build 'build' check 10 npm run --silent build
+  PLAYWRIGHT_JSON_OUTPUT_FILE=$report/e2e.json run e2e 'browser tests' playwright 45 \
     node_modules/.bin/playwright test --reporter=line,json
 fi
 
