@@ -41,3 +41,7 @@ export const press = async (page: Page, u: number, v: number): Promise<void> => 
   const { x, y } = await onScreen(page, u, v);
   await page.mouse.click(x, y);
 };
+
+/** What the right side shows. */
+export const desk = (page: Page, name: string | RegExp): Locator =>
+  page.getByRole('navigation', { name: 'Beside the clip' }).getByRole('button', { name });

@@ -12,7 +12,7 @@ import type { App } from '../support/app.ts';
 import { ask } from '../journeys/steps/ask.ts';
 
 export const COACH = 'coach@greywater-row.example';
-export const SUPERVISOR = 'supervisor@greywater-row.example';
+export const OWNER = 'owner@greywater-row.example';
 
 /** Upright source frame of the clip that is made here: more pixels than its prepared copy has. */
 export const PICTURE = { width: 1440, height: 2560 };

@@ -161,14 +161,19 @@ test('Enter places without a pointer at the previous position, or at the cross',
 
 test('what cannot be seen is hidden, and a hidden landmark counts as done', async ({ page }) => {
   await openBench(page, made.clipId, '?frame=5');
-  await expect(page.getByRole('heading', { name: 'Next: tip of the belt pointer' })).toBeVisible();
+  await expect(
+    page.getByRole('heading', { name: 'Next: edge of the pelvis, support side' }),
+  ).toBeVisible();
   await page.getByRole('button', { name: 'Can’t see it' }).click();
   await expect(
-    page.getByRole('heading', { name: 'Next: middle of the lifted knee' }),
+    page.getByRole('heading', { name: 'Next: edge of the pelvis, lifted side' }),
   ).toBeVisible();
   await expect(page.getByText(/1 hidden/)).toBeVisible();
   await expect(saved(page)).toBeVisible();
-  expect(await storedMark(coach, repId, 5, 'belt-tip')).toMatchObject({ hidden: true, u: null });
+  expect(await storedMark(coach, repId, 5, 'outline-support')).toMatchObject({
+    hidden: true,
+    u: null,
+  });
 });
 
 test('enlarged beyond the copy, the frame is shown at the phone’s own resolution', async ({

@@ -3,7 +3,7 @@ import type { APIRequestContext } from '@playwright/test';
 import { routes } from '#shared/contracts/routes.ts';
 import { ask } from '../journeys/steps/ask.ts';
 import { expect, test } from '../support/app.ts';
-import { openBench, press, showsFrame, slider } from './bench-page.ts';
+import { desk, openBench, press, showsFrame, slider } from './bench-page.ts';
 import { addRep, COACH, FRAMES, type MadeClip, makeClip, sessionOf } from './made.ts';
 
 test.describe.configure({ mode: 'serial' });
@@ -37,7 +37,7 @@ test('without a rep the Bench says what to do, and a rep is named by its span', 
     .getByRole('button', { name: `Take frame ${FRAMES - 1}` })
     .last()
     .click();
-  await form.getByText('Left leg').click();
+  await form.getByLabel('Left leg').check();
   await form.getByRole('button', { name: 'Add this rep' }).click();
   await expect(page.getByRole('heading', { level: 1 })).toContainText('rep 1 of 1');
   const { reps } = await bench();
@@ -70,7 +70,7 @@ test('the set-up says what each length makes measurable, and undo brings it back
   page,
 }) => {
   await openBench(page, made.clipId);
-  await page.getByRole('button', { name: 'Set-up' }).click();
+  await desk(page, 'Set-up').click();
   await page.getByRole('button', { name: 'Place both ends on the picture' }).click();
   await press(page, 1200, 600);
   await press(page, 1200, 1600);
@@ -143,7 +143,7 @@ test('a comment with a ring stands on the strip, is answered and resolved', asyn
 
 test('a key can be changed and is kept', async ({ page }) => {
   await openBench(page, made.clipId);
-  await page.getByRole('button', { name: 'All keys' }).click();
+  await page.getByRole('button', { name: 'All keys', exact: true }).click();
   await page.getByRole('button', { name: /^Comment at this frame: C/ }).click();
   await page.keyboard.press('k');
   await expect(page.getByRole('button', { name: /^Comment at this frame: K/ })).toBeVisible();
@@ -158,7 +158,7 @@ test('a key can be changed and is kept', async ({ page }) => {
 test('a rep is left out with a reason, taken in again, and deleted', async ({ page }) => {
   const second = await addRep(coach, made.clipId);
   await openBench(page, made.clipId);
-  await page.getByRole('button', { name: /^Reps/ }).click();
+  await desk(page, /^Reps/).click();
   const rows = page.locator('.bench-desk li');
   await rows.nth(1).getByRole('button', { name: 'Leave out' }).click();
   await page.getByLabel('Hopped').check();
@@ -169,7 +169,7 @@ test('a rep is left out with a reason, taken in again, and deleted', async ({ pa
   const number = (await bench()).reps.findIndex((each) => each.rep.id === second.id);
   await rows.nth(number).getByRole('button', { name: 'Delete' }).click();
   await page.getByRole('button', { name: `Delete rep ${number + 1}` }).click();
-  await expect(page.getByRole('button', { name: 'Reps (1)' })).toBeVisible();
+  await expect(desk(page, 'Reps (1)')).toBeVisible();
 });
 
 for (const [width, height] of [
@@ -182,8 +182,8 @@ for (const [width, height] of [
     await page.setViewportSize({ width, height });
     await page.emulateMedia({ reducedMotion: 'reduce' });
     await openBench(page, made.clipId, '?frame=7');
-    for (const desk of ['Course, rep 1', /^Reps/, 'Set-up', /^Comments/]) {
-      await page.getByRole('button', { name: desk }).first().click();
+    for (const name of ['Course, rep 1', /^Reps/, 'Set-up', /^Comments/]) {
+      await desk(page, name).click();
       const found = await new AxeBuilder({ page })
         .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'])
         .analyze();

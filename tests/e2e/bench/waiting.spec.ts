@@ -9,25 +9,25 @@ import {
   placeMark,
   sessionOf,
   storedMark,
-  SUPERVISOR,
+  OWNER,
 } from './made.ts';
 
 test.describe.configure({ mode: 'serial' });
 
 let coach: APIRequestContext;
-let supervisor: APIRequestContext;
+let owner: APIRequestContext;
 let made: MadeClip;
 let repId: string;
 
 test.beforeAll(async ({ app }) => {
   coach = await sessionOf(app, COACH);
-  supervisor = await sessionOf(app, SUPERVISOR);
+  owner = await sessionOf(app, OWNER);
   made = await makeClip(coach, 'Waiting');
   repId = (await addRep(coach, made.clipId)).id;
 });
 test.afterAll(async () => {
   await coach.dispose();
-  await supervisor.dispose();
+  await owner.dispose();
 });
 test.beforeEach(async ({ page }) => {
   const { cookies } = await coach.storageState();
@@ -80,7 +80,7 @@ test('what somebody else marks appears by itself', async ({ page }) => {
   await openBench(page, made.clipId, '?frame=4');
   await expect(handle(page, 'asis-support')).not.toBeAttached();
   const mark = { frame: 4, landmark: 'asis-support', u: 510, v: 910, baseRevision: 0 };
-  expect(await placeMark(supervisor, repId, mark)).toBe('applied');
+  expect(await placeMark(owner, repId, mark)).toBe('applied');
   await expect(handle(page, 'asis-support')).toBeAttached();
 });
 
@@ -109,7 +109,7 @@ test('two people set one mark: both are shown until one decides', async ({
       v: 900,
       baseRevision: stored?.revision ?? 0,
     };
-    expect(await placeMark(supervisor, repId, theirs)).toBe('applied');
+    expect(await placeMark(owner, repId, theirs)).toBe('applied');
     await page.unroute(SEND);
     await page.evaluate(() => window.dispatchEvent(new Event('online')));
 
