@@ -1,0 +1,274 @@
+import { screen, within } from '@testing-library/react';
+import { describe, expect, it } from 'vitest';
+import type { Athlete } from '#shared/contracts/athletes.ts';
+import type { SidePage } from '#shared/contracts/readings.ts';
+import type { Replay } from '#shared/contracts/replays.ts';
+import type { Rep } from '#shared/contracts/reps.ts';
+import { routes } from '#shared/contracts/routes.ts';
+import { Refuse } from '#tests/support/fake-api.ts';
+import { aClip, anAthlete, aVisit, clipId, visitId } from '#tests/support/records.ts';
+import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
+import { aCall, aReading, aSidePage, repId, resultOf } from '#tests/support/side-page.ts';
+
+const aRep = (n: number): Rep => ({
+  id: repId(n),
+  clipId,
+  number: n,
+  supportSide: 'right',
+  view: 'front',
+  startFrame: 0,
+  endFrame: 300,
+  boundaries: {
+    quietStart: null,
+    quietEnd: null,
+    footOff: null,
+    top: null,
+    topEnd: null,
+    footDown: null,
+  },
+  excluded: null,
+  excludedNote: '',
+  markedFrames: 30,
+  version: 1,
+});
+
+const aLink: Replay = {
+  id: '00000000-0000-4000-8000-000000000950',
+  visitId,
+  side: 'right',
+  repId: repId(1),
+  fromFrame: 0,
+  toFrame: 300,
+  showReading: true,
+  showCall: true,
+  message: '',
+  passPhrase: false,
+  state: 'live',
+  openings: 2,
+  lastOpenedAt: '2026-03-04T10:00:00Z',
+  expiresAt: '2026-04-03T10:00:00Z',
+  by: { id: '00000000-0000-4000-8000-000000000001', name: 'Maren Okafor' },
+  at: '2026-03-03T17:00:00Z',
+};
+
+function readingApi(page: SidePage | Refuse, athlete: Partial<Athlete> = {}) {
+  let shown = page;
+  let links: Replay[] = [];
+  return signedInApi()
+    .on(routes.sideReading, () => shown)
+    .on(routes.setAssumption, ({ body }) => {
+      if (!(shown instanceof Refuse))
+        shown = { ...shown, assumption: (body as { on: boolean }).on };
+      return shown;
+    })
+    .on(routes.athlete, () =>
+      anAthlete({ consentedTo: ['assessment', 'sharing-by-link'], ...athlete }),
+    )
+    .on(routes.visit, () => ({ visit: aVisit(), clips: [aClip()] }))
+    .on(routes.listReps, () => ({ items: [1, 2, 3].map(aRep) }))
+    .on(routes.listReplays, () => ({ items: links }))
+    .on(routes.makeReplay, () => {
+      links = [aLink];
+      return { replay: aLink, url: 'http://localhost/r/abc' };
+    })
+    .on(routes.revokeReplay, () => {
+      const ended: Replay = { ...aLink, state: 'revoked' };
+      links = [ended];
+      return ended;
+    });
+}
+
+const address = `/visits/${visitId}/sides/right`;
+const region = (name: string) => screen.findByRole('region', { name });
+
+describe('a measured reading', () => {
+  it('stands beside the call by eye, with its probability, its ± and what may be missed', async () => {
+    readingApi(aSidePage(aReading(resultOf('g02_early_mid_3rep'))));
+    renderAt(address);
+    expect(await screen.findByRole('heading', { level: 1, name: 'Turns out early' })).toBeVisible();
+    const head = within(await region('Reading'));
+    expect(head.getByRole('img', { name: /a reading needs 95 in 100/ })).toBeVisible();
+    expect(head.getByText('seen, not measured')).toBeVisible();
+    expect(head.getByText('Eye and measurement agree.')).toBeVisible();
+    expect(head.getByText(/agreed in 14 of 17/)).toBeVisible();
+    expect(head.getByText(/turned outwards by \d+\.\d°, give or take \d+\.\d°/)).toBeVisible();
+    const course = within(await region('Course'));
+    expect(course.getByText(/An early turn smaller than \d+\.\d° may be missed/)).toBeVisible();
+    expect(course.getAllByRole('link', { name: /^Rep \d$/ })).toHaveLength(3);
+    expect(screen.queryByRole('region', { name: 'What would settle it' })).toBeNull();
+  });
+
+  it('says why a rep was left out, and keeps it open to be looked at', async () => {
+    const result = resultOf('g02_early_mid_3rep');
+    const reps = result.reps.map((rep, n) =>
+      n === 2
+        ? { ...rep, used: false, fit: null, why: [{ code: 'excluded', reason: 'hopped' } as const] }
+        : rep,
+    );
+    readingApi(aSidePage(aReading({ ...result, reps })));
+    renderAt(address);
+    const course = within(await region('Course'));
+    expect(course.getByText(/left out: hopped/)).toBeVisible();
+    expect(course.getByRole('link', { name: 'Rep 3' })).toHaveAttribute(
+      'href',
+      expect.stringContaining(`/clips/${clipId}?frame=`),
+    );
+  });
+
+  it('that rests on tracked marks is provisional', async () => {
+    const result = { ...resultOf('g02_early_mid_3rep'), provisional: true };
+    readingApi(aSidePage(aReading(result)));
+    renderAt(address);
+    expect(await screen.findByText('Provisional.')).toBeVisible();
+    expect(screen.getByText(/cannot be signed off/)).toBeVisible();
+  });
+
+  it('that is not settled says what would settle it, and how likely each answer is', async () => {
+    readingApi(aSidePage(aReading(resultOf('g07_flat_noisy_bare'))));
+    renderAt(address);
+    expect(await screen.findByRole('heading', { level: 1, name: 'Can’t tell yet' })).toBeVisible();
+    const settle = within(await region('What would settle it'));
+    expect(settle.getByText('Add another rep')).toBeVisible();
+    const marks = settle.getByText('Mark two more frames of rep 1 with a lift from 54° to 66°');
+    expect(marks).toBeVisible();
+    expect(settle.getAllByRole('link', { name: 'Open it on the Bench' })[0]).toHaveAttribute(
+      'href',
+      expect.stringContaining(`/clips/${clipId}?frame=`),
+    );
+    expect(screen.getByText('Turns out by more than 1°')).toBeVisible();
+    expect(screen.getByText('The measurement does not say.')).toBeVisible();
+  });
+
+  it('of a lift that stops short shows no figure of the turn', async () => {
+    readingApi(aSidePage(aReading(resultOf('g09_range_not_reached'))));
+    renderAt(address);
+    expect(
+      await screen.findByRole('heading', { level: 1, name: 'Lift stops short' }),
+    ).toBeVisible();
+    expect(screen.getByText('No rep could be used')).toBeVisible();
+    expect(screen.queryByText('Turn, from 60° to 90° of lift')).toBeNull();
+    expect(screen.getAllByText(/^Lift higher:/)).toHaveLength(1);
+  });
+
+  it('stands beside the other side’s, with a difference only where this test can show one', async () => {
+    const reading = aReading(resultOf('g02_early_mid_3rep'), { side: 'right' });
+    const other = aReading(resultOf('g04_expected_big'), { side: 'left' });
+    readingApi(
+      aSidePage(reading, {
+        otherSide: {
+          side: 'left',
+          reading: other,
+          calls: [aCall({ side: 'left', seen: 'on-time' })],
+        },
+        compared: { difference: -3.2, plusMinus: 5.1, differ: false },
+      }),
+    );
+    renderAt(address);
+    const both = within(await region('Both sides'));
+    expect(both.getByText(/No difference that this test can show/)).toBeVisible();
+    expect(both.getByText('Standing on the left')).toBeVisible();
+    expect(both.getByRole('link', { name: 'Open the left side' })).toHaveAttribute(
+      'href',
+      `/visits/${visitId}/sides/left`,
+    );
+  });
+
+  it('offers the assumption with a belt pointer alone, and stores it', async () => {
+    const result = { ...resultOf('g02_early_mid_3rep'), set: 'belt' as const };
+    const api = readingApi(aSidePage(aReading(result)));
+    const { user } = renderAt(address);
+    const box = await screen.findByRole('checkbox', {
+      name: /Take the planted thigh as turning little/,
+    });
+    expect(box).not.toBeChecked();
+    await user.click(box);
+    expect(await screen.findByRole('checkbox', { name: /planted thigh/ })).toBeChecked();
+    expect(api.calls(routes.setAssumption)[0]?.body).toEqual({ on: true });
+  });
+});
+
+describe('a side without a reading', () => {
+  it('leads to the call by eye first', async () => {
+    readingApi(new Refuse('call-first'));
+    renderAt(address);
+    expect(await screen.findByRole('link', { name: 'Make the call' })).toHaveAttribute(
+      'href',
+      `${address}/call`,
+    );
+    expect(screen.queryByText(/in 100/)).toBeNull();
+  });
+
+  it('shows the call in its place, without angle, probability or comparison', async () => {
+    readingApi(aSidePage(null, { calls: [aCall({ handsFelt: 'firm' })] }));
+    renderAt(address);
+    expect(
+      await screen.findByRole('heading', { level: 1, name: 'Turned out early' }),
+    ).toBeVisible();
+    expect(screen.getByText('seen by the coach, not measured')).toBeVisible();
+    expect(screen.getByText('Not measured')).toBeVisible();
+    expect(screen.getByText(/“firm”/)).toBeVisible();
+    expect(screen.queryByText(/ in 100/)).toBeNull();
+    expect(screen.queryByText(/Eye and measurement/)).toBeNull();
+    expect(await screen.findByRole('link', { name: /^Mark IMG_2291/ })).toBeVisible();
+  });
+
+  it('says what is wrong and tries again', async () => {
+    const api = readingApi(aSidePage(null));
+    api.setOffline(true);
+    const { user } = renderAt(address);
+    api.setOffline(false);
+    api.on(routes.sideReading, () => new Refuse('unexpected'));
+    expect(await screen.findByText('Something went wrong on our side.')).toBeVisible();
+    api.on(routes.sideReading, () => aSidePage(null));
+    await user.click(screen.getByRole('button', { name: 'Try again' }));
+    expect(await screen.findByText('seen by the coach, not measured')).toBeVisible();
+  });
+});
+
+describe('the replay link', () => {
+  it('is made, its address shown once, counted, and ended', async () => {
+    const api = readingApi(aSidePage(aReading(resultOf('g02_early_mid_3rep'))));
+    const { user } = renderAt(address);
+    const replay = within(await region('Replay for the athlete'));
+    await user.click(await replay.findByRole('button', { name: 'Make a link' }));
+    expect(await replay.findByDisplayValue('http://localhost/r/abc')).toBeVisible();
+    expect(api.calls(routes.makeReplay)[0]?.body).toEqual({
+      visitId,
+      side: 'right',
+      repId: repId(1),
+      showReading: true,
+      showCall: true,
+      message: '',
+      days: 30,
+      passPhrase: null,
+    });
+    await user.click(replay.getByRole('button', { name: 'Done' }));
+    expect(replay.queryByDisplayValue('http://localhost/r/abc')).toBeNull();
+    expect(await replay.findByText(/opened twice/)).toBeVisible();
+    await user.click(replay.getByRole('button', { name: 'End it' }));
+    await user.click(screen.getByRole('button', { name: 'End the link' }));
+    expect(await replay.findByText('ended')).toBeVisible();
+    expect(replay.queryByRole('button', { name: 'End it' })).toBeNull();
+  });
+
+  it('says what consent is missing', async () => {
+    readingApi(aSidePage(aReading(resultOf('g02_early_mid_3rep'))), {
+      consentedTo: ['assessment'],
+    });
+    renderAt(address);
+    const replay = within(await region('Replay for the athlete'));
+    expect(await replay.findByText('There is no consent to a replay by link')).toBeVisible();
+    expect(replay.getByRole('link', { name: 'Record the consent' })).toBeVisible();
+    expect(replay.queryByRole('button', { name: 'Make a link' })).toBeNull();
+  });
+
+  it('refuses a pass phrase that is too short before sending', async () => {
+    const api = readingApi(aSidePage(aReading(resultOf('g02_early_mid_3rep'))));
+    const { user } = renderAt(address);
+    const replay = within(await region('Replay for the athlete'));
+    await user.type(await replay.findByLabelText(/^Pass phrase/), 'abc');
+    await user.click(replay.getByRole('button', { name: 'Make a link' }));
+    expect((await replay.findAllByText(/At least 6 characters\./)).length).toBeGreaterThan(0);
+    expect(api.calls(routes.makeReplay)).toHaveLength(0);
+  });
+});

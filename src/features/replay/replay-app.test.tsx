@@ -1,0 +1,179 @@
+import { render, screen, waitFor } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
+import type { PublicReplay } from '#shared/contracts/replays.ts';
+import { aPublicReplay, replayToken } from '#tests/support/public-replay.ts';
+import { tokenOf } from './replay-api.ts';
+import { ReplayApp } from './replay-app.tsx';
+
+/** Answers by `METHOD path`; what is not given is refused like without a network. */
+function server(answers: Record<string, () => Response>) {
+  const asked: string[] = [];
+  vi.stubGlobal('fetch', (path: string, init?: RequestInit) => {
+    const key = `${init?.method ?? 'GET'} ${path}`;
+    asked.push(key);
+    const answer = answers[key];
+    return answer ? Promise.resolve(answer()) : Promise.reject(new TypeError('Failed to fetch'));
+  });
+  return asked;
+}
+const OPEN = `GET /api/r/${replayToken}`;
+const UNLOCK = `POST /api/r/${replayToken}/unlock`;
+const open = (change: Partial<PublicReplay> = {}) =>
+  server({ [OPEN]: () => Response.json(aPublicReplay(change)) });
+
+const play = vi.fn(() => Promise.resolve());
+beforeEach(() => {
+  // jsdom plays nothing
+  vi.spyOn(HTMLMediaElement.prototype, 'play').mockImplementation(play);
+  vi.spyOn(HTMLMediaElement.prototype, 'pause').mockImplementation(() => undefined);
+  vi.spyOn(HTMLMediaElement.prototype, 'load').mockImplementation(() => undefined);
+  vi.spyOn(HTMLCanvasElement.prototype, 'getContext').mockReturnValue(null);
+});
+afterEach(() => {
+  vi.restoreAllMocks();
+  play.mockClear();
+});
+
+const heading = (name: string | RegExp) => screen.findByRole('heading', { level: 1, name });
+
+describe('a replay', () => {
+  it('says what was measured and what was seen, apart, and where to stop', async () => {
+    const asked = open();
+    render(<ReplayApp token={replayToken} />);
+    expect(await heading('Your right hip turns out early')).toBeVisible();
+    expect(screen.getByText(/Three times of three, the hip you stand on turned/)).toBeVisible();
+    expect(screen.getByText('seen by your coach, not measured')).toBeVisible();
+    expect(screen.getByText(/almost certain of the direction/)).toBeVisible();
+    expect(screen.getByText(/It is a way of moving, not an injury/)).toBeVisible();
+    expect(screen.getByText('Stop if it hurts.')).toBeVisible();
+    expect(screen.getByRole('link', { name: '01632 960 114' })).toHaveAttribute(
+      'href',
+      'tel:01632960114',
+    );
+    expect(screen.getByText(/until 2 April 2026/)).toBeVisible();
+    expect(asked.every((path) => path.startsWith(`GET /api/r/${replayToken}`))).toBe(true);
+  });
+
+  it('plays slowly by itself, stops at a moment, and shows its angles', async () => {
+    open();
+    const user = userEvent.setup();
+    render(<ReplayApp token={replayToken} />);
+    await heading(/turns out early/);
+    await waitFor(() => expect(play).toHaveBeenCalled());
+    const video = screen.getByLabelText<HTMLVideoElement>('Your lift, standing on the right leg');
+    expect(video.playbackRate).toBe(0.25);
+    expect(video).toHaveAttribute('src', `/api/r/${replayToken}/video`);
+    await user.click(screen.getByRole('button', { name: /^90°/ }));
+    // the middle of frame 50 at 50 frames a second
+    expect(video.currentTime).toBeCloseTo(1.01, 5);
+    video.dispatchEvent(new Event('seeked'));
+    expect(await screen.findByText('90°', { selector: 'b' })).toBeVisible();
+    expect(screen.getByRole('button', { name: /^90°/ })).toHaveAttribute('aria-pressed', 'true');
+    await user.click(screen.getByRole('button', { name: 'Half the speed' }));
+    expect(video.playbackRate).toBe(0.5);
+  });
+
+  it('stands still where motion is to be reduced', async () => {
+    vi.stubGlobal('matchMedia', () => ({ matches: true }));
+    open();
+    render(<ReplayApp token={replayToken} />);
+    await heading(/turns out early/);
+    const video = screen.getByLabelText<HTMLVideoElement>('Your lift, standing on the right leg');
+    expect(play).not.toHaveBeenCalled();
+    expect(video.currentTime).toBeCloseTo(1.01, 5);
+    vi.unstubAllGlobals();
+  });
+
+  it('goes to the moment a comment speaks of', async () => {
+    open();
+    const user = userEvent.setup();
+    render(<ReplayApp token={replayToken} />);
+    await user.click(await screen.findByRole('button', { name: 'Show me' }));
+    const video = screen.getByLabelText<HTMLVideoElement>('Your lift, standing on the right leg');
+    expect(video.currentTime).toBeCloseTo(0.81, 5);
+    expect(screen.getByRole('button', { name: 'Show me' })).toHaveAttribute('aria-pressed', 'true');
+  });
+
+  it('of a call alone says who saw it, and no angle', async () => {
+    open({ reading: null });
+    render(<ReplayApp token={replayToken} />);
+    expect(await heading('Your right hip turned out early')).toBeVisible();
+    expect(screen.getByText('seen by your coach, not measured')).toBeVisible();
+    expect(screen.getByText(/Maren Okafor looked, and saw/)).toBeVisible();
+    expect(screen.queryByText(/standing hip/)).toBeNull();
+    expect(screen.queryByText(/certain/)).toBeNull();
+  });
+
+  it('says when the film cannot be loaded, and loads it again', async () => {
+    open();
+    const user = userEvent.setup();
+    render(<ReplayApp token={replayToken} />);
+    await heading(/turns out early/);
+    screen.getByLabelText('Your lift, standing on the right leg').dispatchEvent(new Event('error'));
+    expect(await screen.findByText(/The film could not be loaded/)).toBeVisible();
+    await user.click(screen.getByRole('button', { name: 'Try again' }));
+    expect(screen.queryByText(/The film could not be loaded/)).toBeNull();
+  });
+});
+
+describe('a link that does not open', () => {
+  it('says what to do where it is dead', async () => {
+    server({ [OPEN]: () => new Response('{}', { status: 404 }) });
+    render(<ReplayApp token={replayToken} />);
+    expect(await heading('This link no longer opens anything')).toBeVisible();
+    expect(screen.getByText(/Ask the person who sent it for a new one/)).toBeVisible();
+    expect(screen.queryByRole('button')).toBeNull();
+  });
+
+  it('asks nothing of the server where the address cannot be a link', async () => {
+    const asked = server({});
+    render(<ReplayApp token={tokenOf('/r/short')} />);
+    expect(await heading('This link no longer opens anything')).toBeVisible();
+    expect(asked).toEqual([]);
+  });
+
+  it('tries again after a lost connection', async () => {
+    server({});
+    const user = userEvent.setup();
+    render(<ReplayApp token={replayToken} />);
+    expect(await heading('There is no connection')).toBeVisible();
+    open();
+    await user.click(screen.getByRole('button', { name: 'Try again' }));
+    expect(await heading('Your right hip turns out early')).toBeVisible();
+  });
+
+  it('asks for the pass phrase, again where it is wrong, then opens', async () => {
+    let unlocked = false;
+    const asked = server({
+      [OPEN]: () =>
+        unlocked ? Response.json(aPublicReplay()) : new Response('{}', { status: 401 }),
+      [UNLOCK]: () => new Response(null, { status: unlocked ? 204 : 401 }),
+    });
+    const user = userEvent.setup();
+    render(<ReplayApp token={replayToken} />);
+    expect(await heading('Your replay asks for a pass phrase')).toBeVisible();
+    await user.click(screen.getByRole('button', { name: 'Open the replay' }));
+    expect(await screen.findByText('Write the pass phrase here.')).toBeVisible();
+    expect(asked).not.toContain(UNLOCK);
+    await user.type(screen.getByLabelText('Pass phrase'), 'heron');
+    await user.click(screen.getByRole('button', { name: 'Open the replay' }));
+    expect(await screen.findByText(/This is not the pass phrase/)).toBeVisible();
+    expect(screen.getByLabelText('Pass phrase')).toHaveFocus();
+    unlocked = true;
+    await user.click(screen.getByRole('button', { name: 'Open the replay' }));
+    expect(await heading('Your right hip turns out early')).toBeVisible();
+  });
+
+  it('waits after too many tries', async () => {
+    server({
+      [OPEN]: () => new Response('{}', { status: 401 }),
+      [UNLOCK]: () => new Response('{}', { status: 429 }),
+    });
+    const user = userEvent.setup();
+    render(<ReplayApp token={replayToken} />);
+    await user.type(await screen.findByLabelText('Pass phrase'), 'heron-reed');
+    await user.click(screen.getByRole('button', { name: 'Open the replay' }));
+    expect(await heading('Too many tries')).toBeVisible();
+  });
+});
