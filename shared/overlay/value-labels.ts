@@ -39,7 +39,9 @@ export const valueLabels = (
 ): Label[] => {
   const fromSide = view === 'lifted-side' || view === 'support-side';
   const knee = marks[fromSide ? 'knee-lateral' : 'lifted-knee'];
-  const asis = marks['asis-support'];
+  // the edge of the pelvis lies further out: words beside the ASIS would run over it
+  const outline = marks['outline-support'];
+  const asis = outline && !outline.hidden ? outline : marks['asis-support'];
   const out = outward(supportSide, view);
   const labels: Label[] = [];
   if (values.lift !== null && knee && !knee.hidden) {

@@ -95,7 +95,7 @@ export function CommentForm() {
         label="Show it to the athlete on a replay"
         checked={shared}
         onChange={(event) => setShared(event.target.checked)}
-        className="border-0"
+        className="!border-0"
       />
       {error !== null && <ErrorState error={error} />}
       <Button look="primary" busy={busy} disabled={body.trim() === ''} onClick={() => void send()}>

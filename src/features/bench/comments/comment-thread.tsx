@@ -26,7 +26,7 @@ export function CommentThread({ head, answers }: { head: Comment; answers: reado
     void work.catch((error: unknown) => say(error instanceof Error ? error.message : 'Not done.'));
   return (
     <li className={`border-t border-rule py-3 ${here ? 'border-l-2 border-l-ink pl-3' : ''}`}>
-      <div className="flex flex-wrap items-baseline justify-between gap-x-4">
+      <div className="flex flex-wrap items-center justify-between gap-x-4">
         <button
           type="button"
           className="min-h-[24px] text-left font-bold underline underline-offset-[3px]"

@@ -44,7 +44,13 @@ export function CourseDesk() {
           {rep.excludedNote === '' ? '' : `, ${rep.excludedNote}`}.
         </p>
       )}
-      {courseMissing ? (
+      {rep.view !== 'front' ? (
+        <p className="max-w-[34em] py-4">
+          {rep.view === 'back'
+            ? 'From behind neither lift nor turn is seen. Film from the front.'
+            : 'From the side the lift is seen, not the turn. Film from the front for the course.'}
+        </p>
+      ) : courseMissing ? (
         <div className="max-w-[34em] py-4">
           <p>Nothing can be measured yet: {missingWords(courseMissing)}.</p>
           <p className="mt-3">

@@ -1,5 +1,5 @@
 import { landmark } from '#shared/landmarks/table.ts';
-import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { marksOn } from '../model/bench-model.ts';
 import { tallyOf } from '../model/led.ts';
 import { MARK } from '../store/tools.ts';
@@ -8,6 +8,7 @@ import { tallyWords } from './lead-words.ts';
 /** How far this frame has come, and every landmark of it: any can be asked for again. */
 export function LandmarkList() {
   const { store } = useBenchTools();
+  const { may } = useBenchDocument();
   const { current, led } = useBenchModel();
   const frame = useBench((state) => state.frame);
   const marks = marksOn(current, frame);
@@ -31,6 +32,7 @@ export function LandmarkList() {
               <button
                 type="button"
                 className="flex min-h-[44px] w-full items-center justify-between gap-3 text-left"
+                disabled={!may.mark}
                 onClick={() => store.setState({ chosen: id, tool: MARK })}
               >
                 <span className="underline underline-offset-[3px]">{landmark(id).label}</span>

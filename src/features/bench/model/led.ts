@@ -25,8 +25,8 @@ export const ledLandmarks = (
   extras: readonly Extra[],
 ): readonly LandmarkId[] => {
   const inView = landmarksIn(view);
-  if (view === 'lifted-side' || view === 'support-side')
-    return inView.filter((id) => id !== 'ankle-support' && id !== 'ankle-lifted');
+  // both ankles tell when the foot leaves the floor: a side clip needs them too
+  if (view === 'lifted-side' || view === 'support-side') return inView;
   const wanted = new Set<LandmarkId>([
     ...landmarksOf(set),
     ...extras.flatMap((extra): readonly LandmarkId[] => EXTRAS[extra]),

@@ -99,6 +99,8 @@ describe('led marking', () => {
     expect(ledLandmarks('front', 'belt+thigh', [])).toHaveLength(9);
     expect(ledLandmarks('front', 'belt+thigh', ['shoulders', 'foot'])).toHaveLength(13);
     expect(ledLandmarks('lifted-side', 'bare', [])).toEqual([
+      'ankle-support',
+      'ankle-lifted',
       'trochanter',
       'knee-lateral',
       'acromion',

@@ -2,7 +2,7 @@ import { useMemo, useSyncExternalStore } from 'react';
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { useStore } from 'zustand';
-import { type BenchTools, useBench, useBenchModel } from '../bench-context.ts';
+import { type BenchTools, useBench, useBenchDocument, useBenchModel } from '../bench-context.ts';
 import {
   askedFor,
   type BenchModel,
@@ -36,6 +36,7 @@ export function useAsked(): LandmarkId | null {
   const frame = useBench((state) => state.frame);
   const chosen = useBench((state) => state.chosen);
   const lastPlaced = useBench((state) => state.lastPlaced);
+  const { may } = useBenchDocument();
   const marking = useBench((state) => state.tool.kind === 'mark');
-  return marking ? askedFor(model, frame, chosen, lastPlaced) : null;
+  return marking && may.mark ? askedFor(model, frame, chosen, lastPlaced) : null;
 }

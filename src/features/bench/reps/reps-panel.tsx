@@ -44,7 +44,7 @@ function RepRow({ own }: { own: BenchRep }) {
   const seconds = ((times[rep.endFrame] ?? 0) - (times[rep.startFrame] ?? 0)) / 1000;
   return (
     <li className="border-t border-rule py-3" aria-current={isCurrent || undefined}>
-      <div className="flex flex-wrap items-baseline justify-between gap-x-4">
+      <div className="flex flex-wrap items-center justify-between gap-x-4">
         <p>
           <b>Rep {rep.number}</b>, {supportWords(rep.supportSide)}
           <span className="text-soft">

@@ -87,6 +87,7 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
       }}
     >
       {!hill && <StripPreviews layout={layout} />}
+      <StripPins layout={layout} />
       <svg
         className="plot pointer-events-none absolute inset-0"
         width={width}
@@ -104,6 +105,7 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
         )}
         <path d={`M${left} ${base}H${right}`} className="plot-axis" />
         {moments.length === 0 &&
+          !whole &&
           layout.ticks.map((tick) => (
             <g key={tick.text}>
               <path d={`M${tick.x} ${base}v6`} className="plot-axis" />
@@ -158,7 +160,6 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
           </g>
         )}
       </svg>
-      <StripPins layout={layout} />
       {whole && <StripReps layout={layout} />}
       {current && !whole && (
         <StripMoments rep={current.rep} moments={moments} layout={layout} movable={may.mark} />
