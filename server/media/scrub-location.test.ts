@@ -18,6 +18,8 @@ const film = (name: string, ...more: string[]): string => {
     ...['-v', 'error', '-y', '-f', 'lavfi', '-i', 'testsrc=size=128x96:rate=30:duration=1'],
     ...[
       '-metadata',
+      `title=${PLACE}`,
+      '-metadata',
       `location=${PLACE}`,
       '-metadata',
       `com.apple.quicktime.location.ISO6709=${PLACE}`,
