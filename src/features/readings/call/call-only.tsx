@@ -89,7 +89,7 @@ function SeenSection({ page }: { page: SidePage }) {
         agreement && (
           <p>
             <b className="text-ink">How good is this eye?</b> Where {agreement.coach.name}’s calls
-            stood beside a measured reading, they agreed {agreement.agreed} of {agreement.of} times.
+            stood beside a measured reading, they agreed in {agreement.agreed} of {agreement.of}.
           </p>
         )
       }

@@ -1,7 +1,7 @@
 import { Link } from 'react-router-dom';
 import type { Reading } from '#shared/contracts/readings.ts';
 import type { RepResult } from '#shared/reading/types.ts';
-import { capital, plusMinus, turn } from '#src/ui/figures.ts';
+import { capital, degrees, plusMinus, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import { repSymbol } from '#src/ui/plots/course-points.tsx';
 import { faultsToSay, repFaultWords } from '../words/rep-fault-words.ts';
@@ -48,8 +48,12 @@ export function RepKey({ reading }: { reading: Reading }) {
   );
 }
 
-const leftOut = ({ why }: RepResult): string =>
-  why.length > 0 ? `left out: ${faultsToSay(why).map(repFaultWords).join('; ')}` : 'left out';
+/** Why it does not count, and how high it went where that is known. */
+const leftOut = ({ why, fMax }: RepResult): string => {
+  const reasons = faultsToSay(why).map(repFaultWords).join('; ');
+  const top = fMax === null ? '' : `. Highest lift ${degrees(fMax, 0)}.`;
+  return `left out${reasons === '' ? '' : `: ${reasons}`}${top}`;
+};
 
 function RepLink({ reading, rep }: { reading: Reading; rep: RepResult }) {
   const clipId = reading.reps.find((each) => each.id === rep.id)?.clipId;

@@ -41,13 +41,16 @@ const COLUMNS: readonly Column<ChangeRow>[] = [
   },
   {
     key: 'bar',
-    label: 'drawn from −10° to +10°, millimetres from −20 to +20',
+    label: 'drawn',
     heading: (
-      <span className="flex w-[200px] justify-between" aria-hidden="true">
-        <span>−10°</span>
-        <span>0</span>
-        <span>+10°</span>
-      </span>
+      <>
+        <span className="sr-only">drawn from −10° to +10°, millimetres from −20 to +20</span>
+        <span className="flex w-[200px] justify-between" aria-hidden="true">
+          <span>−10°</span>
+          <span>0</span>
+          <span>+10°</span>
+        </span>
+      </>
     ),
     cell: (row) => (
       <div className="w-[200px] max-w-full">
