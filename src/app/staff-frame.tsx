@@ -2,7 +2,7 @@ import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useCallback } from 'react';
 import { Outlet, useLocation, useNavigate, useNavigation } from 'react-router-dom';
 import { meQuery } from '#src/api/accounts.queries.ts';
-import { MeContext } from '#src/api/me.ts';
+import { MeContext, useMe } from '#src/api/me.ts';
 import { isProblem } from '#src/api/problem.ts';
 import { useLiveConnection } from '#src/api/use-live.ts';
 import { Page } from '#src/ui/page.tsx';
@@ -11,6 +11,7 @@ import { ConnectionBar } from './connection-bar.tsx';
 import { Header } from './header.tsx';
 import { signInAddress } from './sign-in-address.ts';
 import { Starting } from './starting.tsx';
+import { useWaitingMarks } from './use-waiting-marks.ts';
 
 /** The frame of every page that wants a sign-in: who it is, where to go, and the tab's stream of events. */
 export function StaffFrame() {
@@ -43,6 +44,7 @@ function SignedIn() {
     client.clear();
   }, [client, navigate]);
   useLiveConnection(onSignedOut);
+  useWaitingMarks(useMe().user.id);
   return (
     <>
       <a

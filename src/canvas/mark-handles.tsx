@@ -10,13 +10,21 @@ import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { Hand } from './hand.ts';
 import { toStage, type Viewport } from './viewport.ts';
 
-export interface MarkHandle {
+export type MarkHandle = PlacedHandle | AskedHandle;
+
+export interface PlacedHandle {
+  readonly asked: false;
   readonly landmark: LandmarkId;
   /** `Middle of the lifted knee, placed`. */
   readonly label: string;
   readonly at: FramePoint;
-  /** The cross for the landmark asked for: nothing is placed there yet. */
-  readonly asked: boolean;
+}
+
+/** The cross for what is asked for: nothing is placed there yet. */
+export interface AskedHandle {
+  readonly asked: true;
+  readonly label: string;
+  readonly at: FramePoint;
 }
 
 /** Source px of one press of an arrow: a tenth with Alt, ten with Shift. */
@@ -100,7 +108,7 @@ export function MarkHandles({
           <li key={handle.asked ? 'asked' : handle.landmark}>
             <button
               type="button"
-              data-landmark={handle.landmark}
+              data-landmark={handle.asked ? undefined : handle.landmark}
               data-asked={handle.asked || undefined}
               className="pointer-events-none absolute size-7 -translate-x-1/2 -translate-y-1/2 rounded-full"
               style={{ left: x, top: y }}

@@ -3,7 +3,7 @@ import { type FramePoint, stagePoint } from '#shared/geometry/points.ts';
 import { landmark as landmarkOf } from '#shared/landmarks/table.ts';
 import { LANDMARK_IDS, type LandmarkId } from '#shared/landmarks/types.ts';
 import { ClipStage, type Shown } from '#src/canvas/clip-stage.tsx';
-import { type MarkHandle, MarkHandles } from '#src/canvas/mark-handles.tsx';
+import { type MarkHandle, MarkHandles, type PlacedHandle } from '#src/canvas/mark-handles.tsx';
 import { type Size, toFrame } from '#src/canvas/viewport.ts';
 import { useMarking } from '../actions/use-marking.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
@@ -72,17 +72,23 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
     handle?.focus({ preventScroll: true });
   };
 
-  const handles = useMemo((): Omit<MarkHandle, 'at'>[] => {
-    return LANDMARK_IDS.filter((id) => marks[id]?.to === 'point').map((id) => {
-      const mark = marks[id];
-      const tracked = mark?.to === 'point' && !mark.looked;
-      return {
-        landmark: id,
-        label: `${landmarkOf(id).label}, ${tracked ? 'tracked, not looked at' : 'placed'}`,
-        asked: false,
-      };
-    });
-  }, [marks]);
+  const handles = useMemo(
+    () =>
+      LANDMARK_IDS.flatMap((id): PlacedHandle[] => {
+        const mark = marks[id];
+        if (mark?.to !== 'point') return [];
+        const state = mark.looked ? 'placed' : 'tracked, not looked at';
+        return [
+          {
+            asked: false,
+            landmark: id,
+            label: `${landmarkOf(id).label}, ${state}`,
+            at: mark.point,
+          },
+        ];
+      }),
+    [marks],
+  );
 
   return (
     <ClipStage
@@ -110,13 +116,9 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
           view.viewport,
           stagePoint(view.size.width / 2, view.size.height / 2),
         );
-        const all: MarkHandle[] = handles.flatMap((handle) => {
-          const mark = marks[handle.landmark];
-          return mark?.to === 'point' ? [{ ...handle, at: mark.point }] : [];
-        });
+        const all: MarkHandle[] = [...handles];
         if (target)
           all.push({
-            landmark: target.landmark ?? 'acromion',
             label: `Place here with Enter: ${target.words}. Arrows move the cross.`,
             at: expected ?? middle,
             asked: true,
