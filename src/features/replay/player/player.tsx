@@ -46,7 +46,7 @@ export function Player({
     loop.video.current?.load();
   };
   return (
-    <section aria-label="The film" className="bg-dusk text-dusk-ink">
+    <section aria-label="The film" className="bg-dusk text-dusk-ink print:bg-transparent">
       <Picture
         video={loop.video}
         src={videoAddress(token)}
