@@ -27,6 +27,7 @@ export function GlassPanel({ target }: { target: Target | null }) {
   };
   const coarser =
     Math.max(frameSize.width, frameSize.height) / Math.max(copySize.width, copySize.height);
+  if (!target && !resting) return null;
   return (
     <div className="bench-glass">
       <div ref={box} className="bench-glass-box">
