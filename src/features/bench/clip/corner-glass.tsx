@@ -1,4 +1,5 @@
 import { useSyncExternalStore } from 'react';
+import { framePoint } from '#shared/geometry/points.ts';
 import { Magnifier } from '#src/canvas/magnifier.tsx';
 import type { Moved } from '#src/canvas/konva-layer.tsx';
 import type { Primitive } from '#shared/overlay/types.ts';
@@ -32,7 +33,7 @@ export function CornerGlass({
         height={SIZE}
         enlarge={magnify}
         hand={hand}
-        resting={target?.expected ?? null}
+        resting={target?.expected ?? framePoint(frameSize.width / 2, frameSize.height / 2)}
         draw={draw}
       />
     </div>

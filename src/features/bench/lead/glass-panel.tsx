@@ -1,4 +1,5 @@
 import { useRef } from 'react';
+import { framePoint } from '#shared/geometry/points.ts';
 import { Magnifier } from '#src/canvas/magnifier.tsx';
 import { useSize } from '#src/canvas/use-size.ts';
 import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
@@ -39,7 +40,8 @@ export function GlassPanel({ target }: { target: Target | null }) {
             height={size.height}
             enlarge={magnify}
             hand={hand}
-            resting={resting}
+            // nowhere yet: the middle of the picture, where the keyboard’s cross stands
+            resting={resting ?? framePoint(frameSize.width / 2, frameSize.height / 2)}
             draw={draw}
             className="block rounded-[2px]"
           />
