@@ -1,5 +1,5 @@
 import type { BenchResult } from '../entry.ts';
-import type { SideBySide } from './measure.ts';
+import type { SideBySide } from './page.ts';
 
 const at = (values: readonly number[], share: number): number | null => {
   const sorted = [...values].sort((a, b) => a - b);

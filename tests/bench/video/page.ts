@@ -32,6 +32,12 @@ interface Shown {
   readonly ready: number;
 }
 
+/** Ours and the browser's own video on the same copy, in the same run. */
+export interface SideBySide {
+  readonly ours: Timings;
+  readonly browser: Timings;
+}
+
 const LATE_MS = 5000;
 const canvas = document.querySelector('canvas') ?? document.createElement('canvas');
 const painter = createCanvasPainter(canvas);
@@ -39,8 +45,8 @@ const video = document.createElement('video');
 video.muted = true;
 video.preload = 'auto';
 document.body.append(video);
-// both shown, at the same size: what is not visible need not be composed
-for (const shown of [canvas, video]) shown.style.width = '640px';
+for (const element of [canvas, video]) element.style.cssText = 'display: none; width: 1920px';
+document.body.style.margin = '0';
 
 const nextBeat = (): Promise<number> => new Promise((resolve) => requestAnimationFrame(resolve));
 
@@ -95,21 +101,46 @@ const oursShows = async (wanted: number, intent: FrameIntent): Promise<Shown | n
 const anyMoment = (k: number): Promise<void> =>
   new Promise((resolve) => setTimeout(resolve, (k * 7) % 17));
 
-const timeEach = async (
+const nothingYet = (): Timings => ({ presented: [], ready: [], wrong: 0 });
+
+const note = (timings: Timings, shown: Shown | null): void => {
+  if (!shown) timings.wrong += 1;
+  else {
+    timings.presented.push(shown.presented);
+    timings.ready.push(shown.ready);
+  }
+};
+
+/** Requests in a row on one side; short turns, so that other work on the machine slows both. */
+const TURN = 10;
+/** The browser's video goes on decoding for a while after a seek, ours after a step. */
+const SETTLE_MS = 300;
+
+/**
+ * One side's turn. Only what is measured is on the screen, at its full size: it has to be
+ * composed, and the other need not.
+ */
+const turn = async (
+  element: HTMLElement,
   frames: readonly number[],
+  timings: Timings,
   show: (wanted: number) => Promise<Shown | null>,
-): Promise<Timings> => {
-  const timings: Timings = { presented: [], ready: [], wrong: 0 };
+): Promise<void> => {
+  for (const other of [canvas, video]) other.style.display = other === element ? 'block' : 'none';
+  await new Promise((resolve) => setTimeout(resolve, SETTLE_MS));
   for (const [k, wanted] of frames.entries()) {
     await anyMoment(k);
-    const shown = await show(wanted);
-    if (!shown) timings.wrong += 1;
-    else {
-      timings.presented.push(shown.presented);
-      timings.ready.push(shown.ready);
-    }
+    note(timings, await show(wanted));
   }
-  return timings;
+};
+
+/** Frames after `from` that are held before steps are measured. */
+const HELD_AHEAD = 40;
+
+const prefetched = async (from: number): Promise<void> => {
+  await oursShows(from, 'step');
+  const last = Math.min(from + HELD_AHEAD, table.length - 1);
+  while (!source?.holds(last as FrameIndex)) await nextBeat();
 };
 
 const bench = {
@@ -129,21 +160,18 @@ const bench = {
     return source.kind;
   },
 
-  /** Shows a frame and waits until those after it are held. */
-  async settle(first: number, count: number): Promise<void> {
-    await oursShows(first, 'step');
-    const held = (): boolean => {
-      for (let k = first; k < first + count; k += 1)
-        if (!source?.holds(k as FrameIndex)) return false;
-      return true;
-    };
-    while (!held()) await nextBeat();
+  /** The same frames by either way, in turns. */
+  async inTurns(frames: readonly number[], intent: FrameIntent): Promise<SideBySide> {
+    const ours = nothingYet();
+    const browser = nothingYet();
+    for (let k = 0; k < frames.length; k += TURN) {
+      const some = frames.slice(k, k + TURN);
+      if (intent === 'step') await prefetched((some[0] ?? 1) - 1);
+      await turn(canvas, some, ours, (wanted) => oursShows(wanted, intent));
+      await turn(video, some, browser, browserShows);
+    }
+    return { ours, browser };
   },
-
-  ours: (frames: readonly number[], intent: FrameIntent): Promise<Timings> =>
-    timeEach(frames, (wanted) => oursShows(wanted, intent)),
-
-  browser: (frames: readonly number[]): Promise<Timings> => timeEach(frames, browserShows),
 };
 
 export type VideoBench = typeof bench;
