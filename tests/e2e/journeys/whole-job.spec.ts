@@ -13,7 +13,13 @@ import {
 } from './steps/bench.ts';
 import { addMarkedRep, markRest } from './steps/marks-by-api.ts';
 import { drawnPixels, expectPlaying } from './steps/replay.ts';
-import { COACH, signIn, signInByForm, SUPERVISOR } from './steps/people.ts';
+import {
+  everythingOf,
+  expectNothingBehindRoutes,
+  expectNothingOnPages,
+  tidyUp,
+} from './steps/other-practice.ts';
+import { COACH, OTHER_COACH, signIn, signInByForm, SUPERVISOR } from './steps/people.ts';
 import {
   addAthlete,
   checkSafety,
@@ -198,4 +204,27 @@ test('the athlete opens the link on a phone, without an account', async ({ brows
   for (const route of [routes.clip, routes.clipVideo, routes.bench])
     expect((await send(page.request, route, { params: { id: made.clipId } })).status()).toBe(401);
   await phone.close();
+});
+
+test('none of it is there for a coach of another practice', async ({
+  app,
+  page,
+  playwright,
+  allowConsole,
+}) => {
+  const coach = await playwright.request.newContext({ baseURL: app.url });
+  await ask(coach, routes.signIn, { body: { email: COACH, password: app.demoPassword } });
+  const ids = await everythingOf(coach, made);
+  const before = await ask(coach, routes.bench, { params: { id: made.clipId } });
+
+  await signIn(page, app, OTHER_COACH);
+  await expectNothingBehindRoutes(page.request, ids, made);
+  // the browser writes a line for each answer that says no
+  allowConsole(/404|There is nothing here, or nothing that you may see/);
+  await expectNothingOnPages(page, made);
+
+  // and nothing of it was touched
+  expect(await ask(coach, routes.bench, { params: { id: made.clipId } })).toEqual(before);
+  await tidyUp(coach, ids);
+  await coach.dispose();
 });
