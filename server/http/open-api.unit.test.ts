@@ -36,6 +36,13 @@ describe('the OpenAPI document', () => {
     expect(text).not.toContain('$defs');
   });
 
+  it('describes a reading down to its angles', () => {
+    const { schemas } = document.components as { schemas: Record<string, { properties?: object }> };
+    expect(Object.keys(schemas.ReadingResult?.properties ?? {})).toContain('figures');
+    expect(schemas.ReadingFigures?.properties).toHaveProperty('d.type', 'number');
+    expect(schemas.RepResult?.properties).toHaveProperty('why.items.$ref');
+  });
+
   it('says of a form where the file goes', () => {
     const text = JSON.stringify(
       (document.paths as Record<string, unknown>)['/api/visits/{id}/clips'],

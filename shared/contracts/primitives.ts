@@ -67,3 +67,11 @@ export const pageOf = <T extends z.ZodType>(item: T) =>
 export type Side = z.infer<typeof side>;
 export type View = z.infer<typeof view>;
 export type CameraStood = z.infer<typeof cameraStood>;
+
+/** A list that nobody writes to, as the engine gives it. */
+export const readonlyList = <T extends z.ZodType>(item: T) =>
+  z.array(item) as z.ZodType<readonly z.infer<T>[]>;
+
+/** A finite number of one unit, under the name that the engine gives it. */
+export const quantity = <Q extends number>(unit: string) =>
+  z.custom<Q>(Number.isFinite).meta({ type: 'number', description: unit });
