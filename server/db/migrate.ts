@@ -3,6 +3,7 @@ import { type Constructor, MikroORM } from '@mikro-orm/postgresql';
 import { Migration20261201122058_tables } from '../../migrations/Migration20261201122058_tables.ts';
 import { Migration20261201122100_walls } from '../../migrations/Migration20261201122100_walls.ts';
 import { Migration20261201133912_stale_readings } from '../../migrations/Migration20261201133912_stale_readings.ts';
+import { Migration20261201155000_job_priority } from '../../migrations/Migration20261201155000_job_priority.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -12,6 +13,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261201133912_stale_readings',
     class: Migration20261201133912_stale_readings,
+  },
+  {
+    name: 'Migration20261201155000_job_priority',
+    class: Migration20261201155000_job_priority,
   },
 ];
 

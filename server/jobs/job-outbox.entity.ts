@@ -9,6 +9,8 @@ export const JobOutbox = defineEntity({
     ...ownedRow(),
     queue: p.text(),
     payload: p.json<Record<string, unknown>>(),
+    /** Larger comes first among the jobs of one queue. */
+    priority: p.integer().default(0),
     createdAt: madeAt(),
     sentAt: moment().nullable(),
   },

@@ -74,6 +74,15 @@ export const handles = <P>(handler: JobHandler<P>): AnyJobHandler => {
   };
 };
 
+/** Where a job stands in its queue. */
+export interface JobOrder {
+  /** Larger is taken first; jobs of one priority in the order in which they were asked for. 0 where left out. */
+  readonly priority?: number;
+}
+
+/** What nobody waits for gives way to what a person has just asked for. */
+export const IN_THE_BACKGROUND: JobOrder = { priority: -10 };
+
 /**
  * Asks for a job in the same transaction as the state it belongs to: both are committed or neither.
  * @returns the id the job has in the outbox and in the queue
@@ -82,9 +91,10 @@ export const enqueue = async <P extends Record<string, unknown>>(
   { em }: { readonly em: EntityManager },
   type: JobType<P>,
   payload: P,
+  { priority = 0 }: JobOrder = {},
 ): Promise<string> => {
   const id = randomUUID();
-  em.create(JobOutbox, { id, queue: type.queue, payload });
+  em.create(JobOutbox, { id, queue: type.queue, payload, priority });
   await em.execute('select pg_notify(?, ?)', [OUTBOX_CHANNEL, '']);
   return id;
 };

@@ -42,17 +42,32 @@ const retryActive = async (
   }
 };
 
+/** What the queue will come to by itself keeps its place there: its priority, and when it is due. */
+const keysInQueue = async (
+  client: Client,
+  { queue, lockKey }: AnyJobHandler,
+): Promise<ReadonlySet<string>> => {
+  const { rows } = await client.query<{ data: Carried }>(
+    `select data from pgboss.job where name = $1 and state < 'active'`,
+    [queue],
+  );
+  return new Set(rows.map(({ data }) => lockKey(data.payload)));
+};
+
 const queueUnfinished = async (
   client: Client,
   boss: PgBoss,
   locks: Locks,
-  { queue, unfinished, lockKey }: AnyJobHandler,
+  handler: AnyJobHandler,
 ): Promise<void> => {
+  const { queue, unfinished, lockKey } = handler;
   if (!unfinished) return;
+  const inQueue = await keysInQueue(client, handler);
   const { rows } = await client.query<Record<string, unknown>>(unfinished.sql);
   for (const row of rows) {
     const { practiceId, payload } = unfinished.read(row);
-    if (!(await locks.isFree(lockKey(payload)))) continue;
+    const key = lockKey(payload);
+    if (inQueue.has(key) || !(await locks.isFree(key))) continue;
     await boss.send(queue, { practiceId, payload } satisfies Carried, { id: randomUUID() });
   }
 };

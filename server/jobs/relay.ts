@@ -6,7 +6,13 @@ import { OUTBOX_CHANNEL } from './job.ts';
 const AT_MOST = 100;
 const LOOK_EVERY_MS = 2000;
 
-type Waiting = { id: string; practice_id: string; queue: string; payload: Record<string, unknown> };
+type Waiting = {
+  id: string;
+  practice_id: string;
+  queue: string;
+  payload: Record<string, unknown>;
+  priority: number;
+};
 
 /**
  * Carries committed jobs from the outbox to the queue, under the same id: killed between sending and ticking off,
@@ -78,8 +84,8 @@ export class Relay {
       const { rows } = await this.#client.query<Waiting>('select * from jobs_to_send($1)', [
         AT_MOST,
       ]);
-      for (const { id, practice_id: practiceId, queue, payload } of rows) {
-        await this.#boss.send(queue, { practiceId, payload }, { id });
+      for (const { id, practice_id: practiceId, queue, payload, priority } of rows) {
+        await this.#boss.send(queue, { practiceId, payload }, { id, priority });
       }
       if (rows.length > 0) {
         await this.#client.query('select jobs_were_sent($1)', [rows.map((row) => row.id)]);

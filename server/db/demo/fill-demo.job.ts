@@ -5,7 +5,7 @@ import { User } from '../../features/accounts/user.entity.ts';
 import { acceptClip } from '../../features/clips/accept-clip.ts';
 import { Clip } from '../../features/clips/clip.entity.ts';
 import { sideReading } from '../../features/readings/readings.service.ts';
-import { handles, type JobContext } from '../../jobs/job.ts';
+import { handles, IN_THE_BACKGROUND, type JobContext } from '../../jobs/job.ts';
 import type { Ground } from '../../main/ground.ts';
 import { product } from '../in-practice.ts';
 import { layFile, truthOf } from './clip-file.ts';
@@ -39,7 +39,7 @@ const coachOf = ({ practiceId, coach }: Hands): UserActor => ({
   coachIds: [],
 });
 
-/** Sends a clip the way every clip is sent, unless it is there. */
+/** Sends a clip the way every clip is sent, unless it is there; a person's own clip is prepared before it. */
 const sendClip = async (ground: Ground, hands: Hands, placed: PlacedClip): Promise<void> => {
   const id = storyId(hands.practiceId, ...placed.clipPlace);
   const known = await ground.inPractice(product(hands.practiceId), ({ em }) =>
@@ -62,6 +62,7 @@ const sendClip = async (ground: Ground, hands: Hands, placed: PlacedClip): Promi
         mirrored: false,
       },
       id,
+      IN_THE_BACKGROUND,
     );
   });
 };

@@ -4,7 +4,7 @@ import type { UserActor } from '#shared/access/actors.ts';
 import type { InPractice } from '#server/db/in-practice.ts';
 import type { Storage } from '#server/storage/storage.ts';
 import { tell } from '../../events/tell.ts';
-import { enqueue } from '../../jobs/job.ts';
+import { enqueue, type JobOrder } from '../../jobs/job.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../practice/audit.ts';
 import { Clip } from './clip.entity.ts';
@@ -35,6 +35,7 @@ export const acceptClip = async (
   visitId: string,
   file: ReceivedFile,
   id: string = randomUUID(),
+  order: JobOrder = {},
 ): Promise<string> => {
   const { inPractice, storage } = ground;
   const { practiceId } = actor;
@@ -70,7 +71,7 @@ export const acceptClip = async (
       });
       await em.nativeDelete(Upload, { id });
       audit(unit, 'clip.upload', id, { visit: visitId, bytes: file.bytes });
-      await enqueue(unit, PREPARE_CLIP, { clipId: id });
+      await enqueue(unit, PREPARE_CLIP, { clipId: id }, order);
       await tell(
         unit,
         { coachId: athlete.coach.id },
