@@ -12,6 +12,8 @@ export interface ClipPlan {
   readonly name: string;
   readonly file: string;
   readonly container: Container;
+  /** H.264's constant rate factor; 23 where left out */
+  readonly crf?: number;
   readonly fps: number;
   readonly body: BodyName;
   readonly view: 'front' | 'lifted-side';
@@ -137,6 +139,21 @@ export const CLIPS: readonly ClipPlan[] = [
     habits: { ...USUAL_HABITS, hikeAt90: 9, leanAt90: 6 },
     posterLift: null,
     script: { ...THREE_RIGHT, seed: 67, reps: ['left', 'left', 'left'], top: 75 },
+  },
+  {
+    name: 'right-still',
+    file: 'right-still.mp4',
+    container: 'h264',
+    crf: 28,
+    fps: 30,
+    body: 'tallWoman',
+    view: 'front',
+    camera: { ...FRONT, focalPx: 1760, pan: -0.4, tilt: -0.2, roll: 0.2 },
+    pointers: { belt: 145, thigh: 130 },
+    shapes: { left: 'still', right: 'still' },
+    habits: { ...USUAL_HABITS, quietPelvisYaw: 0.3, footTurnOut: 10, hikeAt90: 4, leanAt90: 2 },
+    posterLift: null,
+    script: { ...THREE_RIGHT, seed: 71, reps: ['right', 'right'], top: 107 },
   },
 ];
 

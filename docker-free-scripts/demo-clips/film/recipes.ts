@@ -64,7 +64,8 @@ export const encodeArguments = (
     case 'h264':
       return [
         ...start,
-        ...['-vf', TO_YUV, '-c:v', 'libx264', '-preset', 'medium', '-crf', '23'],
+        ...['-vf', TO_YUV, '-c:v', 'libx264', '-preset', 'medium'],
+        ...['-crf', String(clip.crf ?? 23)],
         ...['-g', '120', '-an', ...COLOURS, '-movflags', '+faststart', ...end],
       ];
     case 'vp9':

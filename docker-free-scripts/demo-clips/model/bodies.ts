@@ -75,6 +75,7 @@ export const BODIES = {
     acromionWidth: 336,
     girth: 1.05,
   }),
+  tallWoman: build(1760, { asisWidth: 232, acromionWidth: 358, girth: 0.98 }),
 } as const satisfies Record<string, Body>;
 
 export type BodyName = keyof typeof BODIES;

@@ -43,6 +43,7 @@ describe('what the product reads from the clips', { timeout: PATIENCE_MS }, () =
     ['left-expected', 'left', 'belt+thigh', 'expected-turn-in'],
     ['both-sides', 'right', 'belt+thigh', 'early-turn-out'],
     ['both-sides', 'left', 'belt+thigh', 'expected-turn-in'],
+    ['right-still', 'right', 'belt+thigh', 'holds-still'],
   ] as const)('%s, %s support: %s says %s', (name, side, set, code) => {
     const truth = truthOf(name);
     const marked = readingOf(truth, side, 3);

@@ -1,105 +1,10 @@
 import { DEMO_ACCOUNTS, GREYWATER } from './accounts.ts';
-import type { AthleteStory, PracticeStory } from './story.ts';
-
-const EVERYTHING = ['assessment', 'supervision', 'sharing-by-link'] as const;
+import { MARA_QUILL } from './mara-quill.ts';
+import { type AthleteStory, EVERYTHING, type PracticeStory } from './story.ts';
 
 /** The caseload of Jonas Reed. Every kind of clip and reading is somewhere in it. */
 const ATHLETES: readonly AthleteStory[] = [
-  {
-    givenName: 'Mara',
-    familyName: 'Quill',
-    age: 27,
-    heightMm: 1680,
-    sport: 'Middle distance',
-    consent: { purposes: EVERYTHING, daysLeft: 300 },
-    visits: [
-      {
-        daysAgo: 6,
-        note: 'First test after the winter.',
-        clips: [
-          {
-            name: 'IMG_0412.MOV',
-            source: {
-              rendered: 'right-early',
-              supportSide: 'right',
-              named: [0, 1, 2],
-              marked: [0, 1, 2],
-              seed: 411,
-              spreadPx: 2,
-              threads: [
-                {
-                  rep: 0,
-                  lift: 62,
-                  ringAt: 'belt-tip',
-                  words: [
-                    {
-                      by: 'supervisor',
-                      body: 'Here the belt pointer starts to swing out. Good frame to mark.',
-                    },
-                    {
-                      by: 'coach',
-                      body: 'I saw it only in slow play. Marked two more frames around it.',
-                    },
-                  ],
-                  resolved: true,
-                },
-                {
-                  rep: 1,
-                  lift: 88,
-                  ringAt: 'thigh-tip',
-                  words: [
-                    {
-                      by: 'supervisor',
-                      body: 'The thigh hardly turns: it is the pelvis that opens. Can you add a frame near 75°?',
-                    },
-                  ],
-                },
-                {
-                  rep: 0,
-                  lift: 90,
-                  ringAt: 'lifted-knee',
-                  words: [{ by: 'coach', body: 'From here on, let the standing hip stay quiet.' }],
-                  shared: true,
-                },
-              ],
-            },
-          },
-        ],
-        calls: [
-          {
-            side: 'right',
-            seen: 'early',
-            substitutions: ['pelvis-hikes'],
-            confidence: 'fairly-sure',
-            handsFelt: 'The hip gave way outwards before the thigh was level.',
-          },
-        ],
-        replay: {
-          side: 'right',
-          rep: 0,
-          message: 'Watch the belt: it starts to turn while your thigh is still on its way up.',
-        },
-      },
-      {
-        daysAgo: 1,
-        note: 'Side view only, for the lift.',
-        clips: [
-          {
-            name: 'IMG_0431.MP4',
-            source: {
-              rendered: 'right-side',
-              supportSide: 'right',
-              named: [0, 1],
-              marked: [0],
-              seed: 431,
-              spreadPx: 2,
-            },
-          },
-        ],
-        calls: [{ side: 'right', seen: 'unsure', confidence: 'guess' }],
-      },
-    ],
-  },
+  MARA_QUILL,
   {
     givenName: 'Teo',
     familyName: 'Lindgren',
@@ -197,6 +102,33 @@ const ATHLETES: readonly AthleteStory[] = [
           },
         ],
         calls: [{ side: 'right', seen: 'still', confidence: 'fairly-sure' }],
+      },
+    ],
+  },
+  {
+    givenName: 'Edda',
+    familyName: 'Crane',
+    age: 29,
+    heightMm: 1760,
+    sport: 'Handball',
+    consent: { purposes: EVERYTHING, daysLeft: 320 },
+    visits: [
+      {
+        daysAgo: 7,
+        clips: [
+          {
+            name: 'VID_44_right.mp4',
+            source: {
+              rendered: 'right-still',
+              supportSide: 'right',
+              named: [0, 1],
+              marked: [0, 1],
+              seed: 971,
+              spreadPx: 2,
+            },
+          },
+        ],
+        calls: [{ side: 'right', seen: 'on-time', confidence: 'fairly-sure' }],
       },
     ],
   },

@@ -4,6 +4,9 @@ import type { Side } from '#shared/contracts/primitives.ts';
 import type { Exclusion } from '#shared/contracts/reps.ts';
 import type { DemoAccount } from './accounts.ts';
 
+/** Consent to all that the product does. */
+export const EVERYTHING: readonly Purpose[] = ['assessment', 'supervision', 'sharing-by-link'];
+
 /** A call by eye of the demo. */
 export interface CallStory {
   readonly side: Side;
