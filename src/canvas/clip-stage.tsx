@@ -2,8 +2,8 @@ import { lazy, Suspense, useEffect, useRef, type ReactNode, type RefObject } fro
 import type { FramePoint } from '#shared/geometry/points.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
-import type { GestureMode } from './gesture.ts';
 import type { Hand } from './hand.ts';
+import type { Asked } from './hit-radius.ts';
 import type { Moved } from './konva-layer.tsx';
 import type { PictureBoard } from './picture-board.ts';
 import { PictureLayer } from './picture-layer.tsx';
@@ -32,7 +32,8 @@ export interface ClipStageProps {
   onViewport: (viewport: Viewport) => void;
   hand: Hand;
   draw: (moved: Moved) => readonly Primitive[];
-  mode: GestureMode;
+  /** What a press beside the marks is for; null: it moves the picture. */
+  asked: Asked<FramePoint> | null;
   movable: boolean;
   onPlace: (point: FramePoint) => void;
   onMove: (landmark: LandmarkId, point: FramePoint) => void;
@@ -52,7 +53,7 @@ const WHOLE: Viewport = { scale: 1, x: 0, y: 0 };
 
 /** The clip: picture below, transparent stage above, one viewport for both. */
 export function ClipStage({ children, className, shownRef, ...props }: ClipStageProps) {
-  const { frame, copy, board, hand, draw, movable, mode } = props;
+  const { frame, copy, board, hand, draw, movable, asked } = props;
   const { onViewport, onPlace, onMove, onSelect, onPress } = props;
   const stage = useRef<HTMLDivElement>(null);
   const pressedRef = useRef(false);
@@ -65,7 +66,7 @@ export function ClipStage({ children, className, shownRef, ...props }: ClipStage
     frame,
     viewport,
     hand,
-    mode,
+    mode: asked ? 'place' : 'pan',
     pressedRef,
     onViewport,
     onPlace,
@@ -96,8 +97,7 @@ export function ClipStage({ children, className, shownRef, ...props }: ClipStage
           />
           <Suspense>
             <KonvaLayer
-              {...{ size, viewport, hand, draw, movable, onPlace, onMove, onSelect, pressedRef }}
-              placing={mode === 'place'}
+              {...{ size, viewport, hand, draw, movable, asked, onMove, onSelect, pressedRef }}
             />
           </Suspense>
           {children({ viewport, size })}

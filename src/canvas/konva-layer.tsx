@@ -5,7 +5,7 @@ import { type FramePoint, stagePoint } from '#shared/geometry/points.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { MarkShape, Primitive } from '#shared/overlay/types.ts';
 import type { Hand } from './hand.ts';
-import { hitRadii } from './hit-radius.ts';
+import { type Asked, hitRadii } from './hit-radius.ts';
 import { paintOverlay } from './overlay-painter.ts';
 import { paintMark } from './paint-marks.ts';
 import { type Size, toFrame, toStage, type Viewport } from './viewport.ts';
@@ -20,9 +20,8 @@ export interface KonvaLayerProps {
   draw: (moved: Moved) => readonly Primitive[];
   /** False where this person may only look. */
   movable: boolean;
-  /** True while a press is for the landmark asked for: then a tap on a mark places there, and only a drag moves it. */
-  placing: boolean;
-  onPlace: (point: FramePoint) => void;
+  /** What a press beside the marks is for; null where it is for nothing. */
+  asked: Asked<FramePoint> | null;
   onMove: (landmark: LandmarkId, point: FramePoint) => void;
   onSelect: (landmark: LandmarkId) => void;
   /** Set when a press has landed on a mark, so that the stage leaves it alone. */
@@ -39,11 +38,14 @@ const ORIGIN = stagePoint(0, 0);
 
 /** The transparent stage over the picture: lines below, a node of its own for every mark above. */
 export default function KonvaLayer(props: KonvaLayerProps) {
-  const { size, viewport, hand, draw, placing } = props;
+  const { size, viewport, hand, draw, asked } = props;
   const lines = useRef<Konva.Layer>(null);
   const marks = draw(null).filter(ownsLandmark);
   const places = marks.map((mark) => toStage(viewport, mark.at));
-  const radii = hitRadii(places, placing);
+  const radii = hitRadii(
+    marks.map(({ landmark }, n) => ({ landmark, at: places[n] ?? ORIGIN })),
+    asked && { ...asked, expected: asked.expected && toStage(viewport, asked.expected) },
+  );
 
   useEffect(() => hand.subscribe(() => lines.current?.batchDraw()), [hand]);
 
@@ -85,8 +87,6 @@ function MarkNode({
   viewport,
   hand,
   movable,
-  placing,
-  onPlace,
   onMove,
   onSelect,
   pressedRef,
@@ -143,7 +143,7 @@ function MarkNode({
       sceneFunc={(context) => paintMark(context._context, mark, ORIGIN)}
       hitFunc={(context, shape) => {
         context.beginPath();
-        context.arc(0, 0, radius, 0, 2 * Math.PI, false);
+        if (radius > 0) context.arc(0, 0, radius, 0, 2 * Math.PI, false);
         context.closePath();
         context.fillStrokeShape(shape);
       }}
@@ -151,11 +151,7 @@ function MarkNode({
       onPointerDown={(event) => {
         if (event.evt.button === 0) pressedRef.current = true;
       }}
-      onPointerClick={(event) => {
-        const at = event.target.getStage()?.getPointerPosition();
-        if (!placing) onSelect(landmark);
-        else if (at) onPlace(toFrame(viewport, stagePoint(at.x, at.y)));
-      }}
+      onPointerClick={() => onSelect(landmark)}
       onDragStart={() => hand.set({ holding: true })}
       onDragMove={(event) => hand.set({ moved: { landmark, point: here(event) } })}
       onDragEnd={(event) => {

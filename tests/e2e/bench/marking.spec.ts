@@ -108,6 +108,31 @@ test('a drag is one step, and Escape puts the mark back', async ({ page }) => {
   expect(after?.u).toBeGreaterThan((before?.u ?? 0) + 60);
 });
 
+test('a press on a mark takes hold of it; beside it, what is asked for is placed', async ({
+  page,
+}) => {
+  await openBench(page, made.clipId, '?frame=2');
+  const support = await storedMark(coach, repId, 2, 'asis-support');
+  const next = page.getByRole('heading', { name: /^Next: front corner.*lifted side/ });
+  await expect(next).toBeVisible();
+  await press(page, support?.u ?? 0, support?.v ?? 0);
+  await expect(
+    page.getByRole('heading', { name: /^Again: front corner.*support side/ }),
+  ).toBeVisible();
+  await expect(handle(page, 'asis-support')).toBeFocused();
+  await expect(handle(page, 'asis-lifted')).not.toBeAttached();
+
+  await page.getByRole('button', { name: 'Pass over' }).click();
+  await expect(next).toBeVisible();
+  const { x, y } = await onScreen(page, support?.u ?? 0, support?.v ?? 0);
+  await page.mouse.click(x + 20, y);
+  await expect(handle(page, 'asis-lifted')).toBeAttached();
+  await expect(saved(page)).toBeVisible();
+  expect(await storedMark(coach, repId, 2, 'asis-support')).toEqual(support);
+  await page.getByRole('button', { name: 'Undo' }).click();
+  await expect(saved(page)).toBeVisible();
+});
+
 test('Tab reaches a mark, arrows nudge it by a tenth, one and ten pixels, in one step each', async ({
   page,
 }) => {

@@ -102,7 +102,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
       onViewport={(next) => store.setState({ viewport: next })}
       hand={hand}
       draw={draw}
-      mode={target ? 'place' : 'pan'}
+      asked={target}
       movable={document.may.mark}
       onPlace={placeAt}
       onMove={(id, point) => marking.place(id, point)}
