@@ -26,6 +26,7 @@ import { CommentsPanel } from './comments/comments-panel.tsx';
 import { CourseDesk } from './course/course-desk.tsx';
 import { KeysDialog } from './keys/keys-dialog.tsx';
 import { useKeys } from './keys/use-keys.ts';
+import { KeyHints } from './keys/key-hints.tsx';
 import { LeadPanel } from './lead/lead-panel.tsx';
 import { useModel } from './model/use-model.ts';
 import { markQueueOf } from './queue/open-queue.ts';
@@ -117,6 +118,7 @@ function BenchLayout({ tools }: { tools: BenchTools }) {
       <section className="bench-under" aria-label="Lift strip">
         <Transport />
         <LiftStrip />
+        <KeyHints />
       </section>
       <KeysDialog />
     </div>

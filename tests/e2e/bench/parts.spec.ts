@@ -172,6 +172,22 @@ test('a rep is left out with a reason, taken in again, and deleted', async ({ pa
   await expect(desk(page, 'Reps (1)')).toBeVisible();
 });
 
+test('a laptop’s window shows course, every value and the keys without scrolling', async ({
+  page,
+}) => {
+  await openBench(page, made.clipId, '?frame=7');
+  await expect(page.getByRole('rowheader', { name: 'Lift of the thigh' })).toBeInViewport();
+  await expect(page.getByRole('rowheader', { name: 'Drift of the lifted knee' })).toBeInViewport({
+    ratio: 1,
+  });
+  await expect(page.getByText('places the named landmark')).toBeInViewport({ ratio: 1 });
+  for (const part of ['html', '.bench-desk', '.bench-lead'])
+    expect(
+      await page.locator(part).evaluate((box) => box.scrollHeight - box.clientHeight),
+      part,
+    ).toBe(0);
+});
+
 for (const [width, height] of [
   [1440, 900],
   [1024, 768],

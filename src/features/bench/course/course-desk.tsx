@@ -5,7 +5,7 @@ import { EXCLUSION_WORDS } from '../reps/rep-words.ts';
 import { useMedia } from '../use-media.ts';
 import { useFrameFigures } from '../values/use-frame-figures.ts';
 import { ReadingSoFar } from '../values/reading-so-far.tsx';
-import { ValuesTable } from '../values/values-table.tsx';
+import { ValuesAtOnce, ValuesTable } from '../values/values-table.tsx';
 import { missingWords } from '../values/value-words.ts';
 import { CallFirst } from './call-first.tsx';
 import { CourseView } from './course-view.tsx';
@@ -18,7 +18,7 @@ export function CourseDesk() {
   const wide = useMedia('(min-width: 1200px)');
   const low = useMedia('(max-height: 960px)');
   // the values must be seen below it without scrolling
-  const height = between ? 284 : wide && low ? 300 : undefined;
+  const height = between ? 284 : wide && low ? 258 : undefined;
   if (!current)
     return (
       <div className="max-w-[34em] py-4">
@@ -64,6 +64,8 @@ export function CourseDesk() {
       )}
       {between ? (
         <FoldedValues />
+      ) : wide ? (
+        <ValuesAtOnce beside={<ReadingSoFar />} />
       ) : (
         <div className="bench-vals">
           <ValuesTable />

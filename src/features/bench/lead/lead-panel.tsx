@@ -11,7 +11,6 @@ import { tallyOf } from '../model/led.ts';
 import { useNarrow } from '../use-media.ts';
 import { Dials } from '../values/dials.tsx';
 import { GlassPanel } from './glass-panel.tsx';
-import { KeyHints } from './key-hints.tsx';
 import { LandmarkList } from './landmark-list.tsx';
 import { LandmarkDrawing } from './landmark-drawing.tsx';
 import { LandmarkSetChoice } from './landmark-set-choice.tsx';
@@ -59,7 +58,6 @@ export function LeadPanel() {
           <LandmarkSetChoice />
         </div>
       )}
-      {!narrow && target && <KeyHints />}
     </div>
   );
 }

@@ -37,14 +37,12 @@ export function LiftStrip() {
   const box = useRef<HTMLDivElement>(null);
   const size = useSize(box);
   const whole = naming || !model.current;
+  const [from, to] = spanOf(model, whole, times.length);
+  // the row of pins takes room from the hill only where a pin stands
+  const pins = comments.some(({ fromFrame }) => from <= fromFrame && fromFrame <= to);
   return (
     <div ref={box} className="bench-strip">
-      {size && (
-        <Strip
-          whole={whole}
-          layout={stripLayout(size, spanOf(model, whole, times.length), times, comments.length > 0)}
-        />
-      )}
+      {size && <Strip whole={whole} layout={stripLayout(size, [from, to], times, pins)} />}
     </div>
   );
 }

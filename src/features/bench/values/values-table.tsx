@@ -1,4 +1,6 @@
+import type { ReactNode } from 'react';
 import type { FrameValue } from '#shared/measures/frame-values.ts';
+import type { Measure } from '#shared/measures/measure.ts';
 import { MEASURES } from '#shared/measures/registry.ts';
 import { cx } from '#src/ui/class-names.ts';
 import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
@@ -10,18 +12,59 @@ import { halfWidthText, isSetUp, missingWords, valueText } from './value-words.t
 /** Parts of the turn stand under it. */
 const PARTS: ReadonlySet<string> = new Set(['pelvis-part', 'thigh-part']);
 
+const useMeasures = (): readonly Measure[] => {
+  const { view } = useBenchModel();
+  return MEASURES.filter(({ views }) => views.some((each) => each === view));
+};
+
 /** Every value of the frame on show, each with its ±, or with what it lacks. */
 export function ValuesTable() {
   const frame = useBench((state) => state.frame);
-  const { view } = useBenchModel();
+  return <Values title={`Values of frame ${frame}`} measures={useMeasures()} />;
+}
+
+/** Lift, turn and its parts stand first in the registry. */
+const FIRST = 4;
+
+/** The same in three tables, so that all of it is seen at once under the course: `beside` stands right of the first. */
+export function ValuesAtOnce({ beside }: { beside: ReactNode }) {
+  const frame = useBench((state) => state.frame);
+  const measures = useMeasures();
+  const rest = measures.slice(FIRST);
+  const half = FIRST + Math.ceil(rest.length / 2);
+  return (
+    <div className="bench-vals">
+      <Values title={`Values of frame ${frame}`} measures={measures.slice(0, FIRST)} />
+      {beside}
+      {rest.length > 0 && (
+        <div className="bench-vals-more">
+          <Values title="Substitutions" measures={measures.slice(FIRST, half)} />
+          <Values title="Substitutions, the rest" quiet measures={measures.slice(half)} />
+        </div>
+      )}
+    </div>
+  );
+}
+
+/** @param quiet the title is for a screen reader alone: it stands beside another table of the same kind */
+function Values({
+  title,
+  quiet = false,
+  measures,
+}: {
+  title: string;
+  quiet?: boolean;
+  measures: readonly Measure[];
+}) {
   const figures = useFrameFigures();
-  const shown = MEASURES.filter(({ views }) => views.some((each) => each === view));
   return (
     <table className="bench-values">
-      <caption className="sr-only">Values of frame {frame}</caption>
+      <caption className="sr-only">{title}</caption>
       <thead>
         <tr>
-          <th scope="col">Values of frame {frame}</th>
+          <th scope="col">
+            <span className={cx(quiet && 'sr-only')}>{title}</span>
+          </th>
           <th scope="col">
             <span className="sr-only">value</span>
           </th>
@@ -31,7 +74,7 @@ export function ValuesTable() {
         </tr>
       </thead>
       <tbody>
-        {shown.map((measure) => (
+        {measures.map((measure) => (
           <ValueRow
             key={measure.id}
             label={measure.label}
@@ -76,7 +119,11 @@ function ValueRow({
           <td className="whitespace-nowrap text-soft">{halfWidthText(value, front)}</td>
         </>
       ) : (
-        <td colSpan={2} className="text-soft">
+        <td
+          colSpan={2}
+          className="bench-lacking text-soft"
+          title={value?.value.missing ? missingWords(value.value.missing) : undefined}
+        >
           {value?.value.missing ? <Lacking value={value} /> : '–'}
         </td>
       )}
