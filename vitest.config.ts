@@ -14,6 +14,7 @@ export default defineConfig({
             'server/**/*.unit.test.ts',
             'server/media/**/*.test.ts',
             'tests/architecture/**/*.test.ts',
+            'tests/study/**/*.test.ts',
             'docker-free-scripts/**/*.test.ts',
             'src/video/**/*.test.ts',
             'src/api/**/*.test.ts',

@@ -2,27 +2,29 @@ import { createReadStream } from 'node:fs';
 import { stdin } from 'node:process';
 import { createInterface } from 'node:readline';
 import { linesOf } from './lines.ts';
+import { evaluateOptions, USAGE } from './options.ts';
 
 /**
- * npm run --silent evaluate -- FILE.jsonl
+ * npm run --silent evaluate -- [--engine N] FILE.jsonl
  *
  * Reads one trial per line ('-' reads standard input) and prints one line of JSON per trial and
  * landmark set. A bad line is named on standard output and in words on standard error; the rest is
  * still done, and the exit status is 1.
  */
 const main = async (): Promise<number> => {
-  const [file, ...rest] = process.argv.slice(2);
-  if (file === undefined || rest.length > 0) {
-    console.error('Usage: npm run --silent evaluate -- FILE.jsonl   (one trial per line)');
+  const asked = evaluateOptions(process.argv.slice(2));
+  if (!asked) {
+    console.error(`Usage: ${USAGE}`);
     return 2;
   }
+  const { file, engine } = asked;
   let status = 0;
   let number = 0;
   const input = file === '-' ? stdin : createReadStream(file, 'utf8');
   for await (const line of createInterface({ input, crlfDelay: Infinity })) {
     number += 1;
     if (line.trim() === '') continue;
-    const { lines, error } = linesOf(line);
+    const { lines, error } = linesOf(line, engine);
     for (const result of lines) console.log(JSON.stringify(result));
     if (error === null) continue;
     status = 1;

@@ -39,7 +39,7 @@ describe('a trial', () => {
   });
 
   it('turns a set into an input of the engine', () => {
-    expect(readingInputOf(trial, 'belt+prior')).toMatchObject({
+    expect(readingInputOf(trial, 'belt+prior', 1)).toMatchObject({
       set: 'belt',
       thighTurnsLittle: true,
       markError: { anatomicalPx: 3 },
@@ -174,6 +174,8 @@ describe('the command', () => {
     const none = await run();
     expect(none.status).toBe(2);
     expect(none.err).toMatch(/Usage/);
+    expect((await run('--engine', '9', file)).status).toBe(2);
+    expect((await run('--engine', '1', file)).status).toBe(0);
     const absent = await run(join(folder, 'absent.jsonl'));
     expect(absent.status).toBe(2);
     expect(absent.err).toMatch(/Cannot read the file/);

@@ -54,7 +54,7 @@ it('finds all thirteen files and four landmark sets in each', () => {
 });
 
 describe.each(cases)('$name with $set', ({ trial, set, reference }) => {
-  const result = deriveReading(readingInputOf(trial, set));
+  const result = deriveReading(readingInputOf(trial, set, 1));
 
   it('gives the deterministic values of every rep', () => {
     expect(result.reps).toHaveLength(reference.reps.length);
@@ -109,7 +109,7 @@ it('lands on the line before 60° in g13 without a thigh pointer', () => {
   const file = files.find(({ id }) => id.startsWith('g13'));
   const trial = trialOf(file);
   for (const set of ['bare', 'belt', 'belt+prior'] as const) {
-    const { line, before60 } = deriveReading(readingInputOf(trial, set));
+    const { line, before60 } = deriveReading(readingInputOf(trial, set, 1));
     expect({ line, before60 }).toEqual({ line: 4, before60: true });
   }
 });
@@ -119,7 +119,7 @@ it('finds the truth of g12, which has no noise, within 2°', () => {
   if (!file) throw new Error('g12 is missing');
   const trial = trialOf(file);
   for (const set of ['bare', 'belt', 'belt+thigh'] as const) {
-    const result = deriveReading(readingInputOf(trial, set));
+    const result = deriveReading(readingInputOf(trial, set, 1));
     near(result.reps[0]?.fit?.change.value ?? NaN, file.truth.dR_60_90, 2);
     const frames = file.reps[0]?.frames ?? [];
     for (const [n, frame] of (result.reps[0]?.frames ?? []).entries()) {

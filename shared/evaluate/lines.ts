@@ -1,4 +1,5 @@
 import { deriveReading } from '#shared/reading/derive.ts';
+import { CURRENT_ENGINE, type EngineVersion } from '#shared/reading/engine.ts';
 import type { ReadingCode } from '#shared/reading/types.ts';
 import { TrialError } from './trial-error.ts';
 import { readingInputOf, TRIAL_SETS, trialOf, type TrialSet } from './trial.ts';
@@ -26,11 +27,12 @@ const parse = (line: string): unknown => {
 /** Everything a line of trials gives: its results, or what is wrong with it. */
 export const linesOf = (
   line: string,
+  engine: EngineVersion = CURRENT_ENGINE,
 ): { readonly lines: readonly EvaluatedLine[]; readonly error: string | null } => {
   try {
     const trial = trialOf(parse(line));
     const lines = TRIAL_SETS.map((set): EvaluatedLine => {
-      const { code, figures } = deriveReading(readingInputOf(trial, set));
+      const { code, figures } = deriveReading(readingInputOf(trial, set, engine));
       return {
         id: trial.id,
         set,

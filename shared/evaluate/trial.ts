@@ -2,6 +2,7 @@ import type { FramePhase, RepInput } from '#shared/course/types.ts';
 import { framePoint } from '#shared/geometry/points.ts';
 import type { LandmarkId, Mark, Marks, Side } from '#shared/landmarks/types.ts';
 import { ASSUMED_MARK_ERROR, type CameraInput } from '#shared/measures/inputs.ts';
+import { CURRENT_ENGINE, type EngineVersion } from '#shared/reading/engine.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
 import { frameIndex, milliseconds } from '#shared/timing/units.ts';
 import { TrialError } from './trial-error.ts';
@@ -156,8 +157,12 @@ export const trialOf = (value: unknown): Trial => {
 };
 
 /** The engine's input for one landmark set of a trial. */
-export const readingInputOf = (trial: Trial, set: TrialSet): ReadingInput => ({
-  engine: 1,
+export const readingInputOf = (
+  trial: Trial,
+  set: TrialSet,
+  engine: EngineVersion = CURRENT_ENGINE,
+): ReadingInput => ({
+  engine,
   supportSide: trial.supportSide,
   set: set === 'belt+prior' ? 'belt' : set,
   thighTurnsLittle: set === 'belt+prior',

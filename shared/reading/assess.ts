@@ -70,13 +70,13 @@ const assessed = (
 };
 
 /** Chooses the richest set that has a usable rep, or takes the one asked for, and fits its reps. */
-export const assess = (input: ReadingInput, seed: number): Assessment => {
+export const assess = (input: ReadingInput, seed: number, runs: number): Assessment => {
   const candidates = input.reps.map((rep) => candidateOf(rep, input));
   const sets = input.set === null ? [...LANDMARK_SETS].reverse() : [input.set];
   for (const set of sets) {
     const used = candidates.map((candidate, at) => {
       const course = candidate.courses.get(set);
-      return course && usableWith(candidate, set) ? fitRep(course, seed, at) : null;
+      return course && usableWith(candidate, set) ? fitRep(course, seed, at, runs) : null;
     });
     if (used.every((rep) => rep === null)) continue;
     return { set, reps: candidates.map((each, at) => assessed(each, set, used[at] ?? null)) };

@@ -1,3 +1,4 @@
+import { DRAWS } from '#shared/course/rise-draws.ts';
 import { dot, terms } from '#shared/course/rise-fit.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
@@ -68,13 +69,14 @@ const candidates = (reps: readonly Assessed[]): readonly Assessed[] =>
 /**
  * The reading of one support side of one visit. Deterministic: the draws are seeded by the input
  * itself. Never throws for bad marks, times or missing inputs: they come back as typed faults.
+ * `runs` of the Monte Carlo part: readings that are kept use the default.
  */
-export const deriveReading = (input: ReadingInput): ReadingResult => {
+export const deriveReading = (input: ReadingInput, runs: number = DRAWS): ReadingResult => {
   const hash = sha256Words(canonicalText(input));
   const seed = hash[0] ?? 0;
-  const { set, reps } = assess(input, seed);
+  const { set, reps } = assess(input, seed, runs);
   const used = reps.flatMap((rep) => rep.used ?? []);
-  const head = { engine: 1, inputHash: hexOf(hash), supportSide: input.supportSide } as const;
+  const head = { engine: input.engine, inputHash: hexOf(hash), supportSide: input.supportSide };
   const courses = reps.flatMap(({ shown, faults }) =>
     shown && !faults.some(({ code }) => code === 'excluded') ? [shown] : [],
   );

@@ -14,11 +14,16 @@ export interface UsedRep {
 const repSeed = (seed: number, at: number): number => (seed + Math.imul(at, 0x9e3779b1)) >>> 0;
 
 /** Fit and Monte Carlo of one usable rep; null where its marks coincide. */
-export const fitRep = (course: RepCourse, seed: number, at: number): UsedRep | null => {
+export const fitRep = (
+  course: RepCourse,
+  seed: number,
+  at: number,
+  runs: number,
+): UsedRep | null => {
   const data = riseDataOf(course);
   if (!data) return null;
   const fit = fitRise(data.lifts, data.weights, data.thighPart, data.pelvisPart);
   if (!fit) return null;
-  const fitted = fittedRep(fit, drawRise(data, repSeed(seed, at)));
+  const fitted = fittedRep(fit, drawRise(data, repSeed(seed, at), runs));
   return fitted && { course, data, fitted };
 };

@@ -3,11 +3,12 @@ import type { Degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId, Side } from '#shared/landmarks/types.ts';
 import type { SubstitutionChange } from '#shared/measures/change.ts';
 import type { MarkError } from '#shared/measures/inputs.ts';
+import type { EngineVersion } from './engine.ts';
 import type { PlacedWarning, Reason, RepFault, Settle } from './reasons.ts';
 
 /** Everything a reading depends on: the same input gives the same result to the last digit. */
 export interface ReadingInput {
-  readonly engine: 1;
+  readonly engine: EngineVersion;
   readonly supportSide: Side;
   /** Null: the richest set that has a usable rep. */
   readonly set: LandmarkSetId | null;
@@ -118,7 +119,7 @@ export interface CurvePoint {
 }
 
 export interface ReadingResult {
-  readonly engine: 1;
+  readonly engine: EngineVersion;
   /** SHA-256 of the canonical input, hex. A new reading row is made only when it changes. */
   readonly inputHash: string;
   readonly supportSide: Side;

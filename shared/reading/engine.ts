@@ -1,0 +1,10 @@
+/** Engines a reading can be made with, oldest first. A stored reading names its own and keeps it. */
+export const ENGINES = [1] as const;
+export type EngineVersion = (typeof ENGINES)[number];
+
+/** The engine of new readings. */
+export const CURRENT_ENGINE: EngineVersion = 1;
+
+/** The engine a word names; null where there is none. */
+export const engineOf = (word: string | undefined): EngineVersion | null =>
+  ENGINES.find((engine) => String(engine) === word) ?? null;

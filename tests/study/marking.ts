@@ -1,0 +1,63 @@
+import { landmark } from '#shared/landmarks/table.ts';
+import type { LandmarkId, Mark } from '#shared/landmarks/types.ts';
+import type { Chance } from './chance.ts';
+
+/** How one person marks one clip. */
+export interface Marking {
+  /** Typical error of an anatomical mark, px of the picture it is placed on. */
+  readonly errorPx: number;
+  /** Of a pointer or tape. */
+  readonly pointerPx: number;
+  /** Source pixels per pixel of that picture. */
+  readonly scale: number;
+  /** Carried from frame to frame by a tracker, whose errors hang together. */
+  readonly tracked: boolean;
+}
+
+/** Parts of a mark's error: the same throughout the clip, and its own on every frame. */
+const LASTING = 0.6;
+const FLEETING = 0.8;
+/** Outlines of the pelvis are fainter than other marks. */
+const OUTLINE = 1.4;
+/** How much of a tracked mark's error stays from one marked frame to the next. */
+const CARRIED = 0.85;
+
+const sizeOf = (id: LandmarkId, { errorPx, pointerPx, scale }: Marking): number => {
+  switch (landmark(id).errorClass) {
+    case 'anatomical':
+      return errorPx * scale;
+    case 'outline':
+      return errorPx * OUTLINE * scale;
+    case 'pointer':
+      return pointerPx * scale;
+  }
+};
+
+type Error2 = readonly [u: number, v: number];
+
+/** Marks of a clip's frames in order of time, one landmark after another. */
+export const markerOf = (chance: Chance, marking: Marking) => {
+  const lasting = new Map<LandmarkId, Error2>();
+  const carried = new Map<LandmarkId, Error2>();
+  const drawn = (size: number): Error2 => [chance.normal(0, size), chance.normal(0, size)];
+  const fleeting = (id: LandmarkId, size: number): Error2 => {
+    const before = carried.get(id);
+    if (!marking.tracked || !before) return drawn(FLEETING * size);
+    const fresh = drawn(FLEETING * size * Math.sqrt(1 - CARRIED ** 2));
+    return [CARRIED * before[0] + fresh[0], CARRIED * before[1] + fresh[1]];
+  };
+  return (id: LandmarkId, [u, v]: Error2): Mark => {
+    const size = sizeOf(id, marking);
+    const still = lasting.get(id) ?? drawn(LASTING * size);
+    lasting.set(id, still);
+    const now = fleeting(id, size);
+    carried.set(id, now);
+    return {
+      hidden: false,
+      point: { u: u + still[0] + now[0], v: v + still[1] + now[1] },
+      scale: marking.scale,
+      source: marking.tracked ? 'tracked' : 'hand',
+      looked: true,
+    };
+  };
+};
