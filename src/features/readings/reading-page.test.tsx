@@ -1,4 +1,4 @@
-import { screen, within } from '@testing-library/react';
+import { screen, waitFor, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import type { Athlete } from '#shared/contracts/athletes.ts';
 import type { SidePage } from '#shared/contracts/readings.ts';
@@ -16,8 +16,8 @@ const aRep = (n: number): Rep => ({
   number: n,
   supportSide: 'right',
   view: 'front',
-  startFrame: 0,
-  endFrame: 300,
+  startFrame: (n - 1) * 301,
+  endFrame: n * 301 - 1,
   boundaries: {
     quietStart: null,
     quietEnd: null,
@@ -236,6 +236,8 @@ describe('the replay link', () => {
       visitId,
       side: 'right',
       repId: repId(1),
+      fromFrame: aRep(1).startFrame,
+      toFrame: aRep(1).endFrame,
       showReading: true,
       showCall: true,
       message: '',
@@ -249,6 +251,36 @@ describe('the replay link', () => {
     await user.click(screen.getByRole('button', { name: 'End the link' }));
     expect(await replay.findByText('ended')).toBeVisible();
     expect(replay.queryByRole('button', { name: 'End it' })).toBeNull();
+  });
+
+  it('plays the frames that are named, and all of another rep once it is chosen', async () => {
+    const api = readingApi(aSidePage(aReading(resultOf('g02_early_mid_3rep'))));
+    const { user } = renderAt(address);
+    const replay = within(await region('Replay for the athlete'));
+    const from = await replay.findByLabelText('From frame');
+    const to = replay.getByLabelText('To frame');
+    const second = aRep(2);
+    await user.selectOptions(replay.getByLabelText('Rep that is played'), second.id);
+    await waitFor(() => expect(from).toHaveValue(second.startFrame));
+    expect(to).toHaveValue(second.endFrame);
+
+    await user.clear(to);
+    await user.type(to, String(second.startFrame));
+    await user.click(replay.getByRole('button', { name: 'Make a link' }));
+    expect(
+      (await replay.findAllByText(/The last frame comes after the first\./)).length,
+    ).toBeGreaterThan(0);
+    expect(api.calls(routes.makeReplay)).toHaveLength(0);
+
+    await user.clear(to);
+    await user.type(to, String(second.startFrame + 40));
+    await user.click(replay.getByRole('button', { name: 'Make a link' }));
+    await replay.findByDisplayValue('http://localhost/r/abc');
+    expect(api.calls(routes.makeReplay)[0]?.body).toMatchObject({
+      repId: second.id,
+      fromFrame: second.startFrame,
+      toFrame: second.startFrame + 40,
+    });
   });
 
   it('says what consent is missing', async () => {

@@ -1,5 +1,5 @@
 import { useQueryClient } from '@tanstack/react-query';
-import type * as z from 'zod';
+import * as z from 'zod';
 import type { SidePage } from '#shared/contracts/readings.ts';
 import { replayBody } from '#shared/contracts/replays.ts';
 import { routes } from '#shared/contracts/routes.ts';
@@ -13,8 +13,16 @@ import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import type { NamedRep } from '../side-clips.ts';
 import { DaysField } from './days-field.tsx';
 import { repChoice } from './rep-choice.ts';
+import { SpanFields } from './span-fields.tsx';
 
-const formBody = replayBody.omit({ visitId: true, side: true, fromFrame: true, toFrame: true });
+const frame = z.int('Write the number of a frame.').min(0, 'The first frame is 0.');
+const formBody = replayBody
+  .omit({ visitId: true, side: true })
+  .extend({ fromFrame: frame, toFrame: frame })
+  .refine(({ fromFrame, toFrame }) => toFrame > fromFrame, {
+    path: ['toFrame'],
+    message: 'The last frame comes after the first.',
+  });
 
 /** `onMade` gets the address; it is in no later answer. */
 export function LinkForm({
@@ -28,8 +36,11 @@ export function LinkForm({
 }) {
   const client = useQueryClient();
   const measured = page.reading !== null;
+  const first = preferred(page, reps);
   const form = useZodForm(formBody, {
-    repId: preferred(page, reps),
+    repId: first?.rep.id ?? '',
+    fromFrame: first?.rep.startFrame ?? 0,
+    toFrame: first?.rep.endFrame ?? 0,
     message: '',
     days: 30,
     passPhrase: null,
@@ -56,6 +67,7 @@ export function LinkForm({
         />
         <DaysField />
       </div>
+      <SpanFields reps={reps} />
       <TextArea
         name="message"
         label={`A sentence of your own to ${page.athlete.name}`}
@@ -85,11 +97,11 @@ export function LinkForm({
 }
 
 /** A rep that counts in the reading rather than one that was left out. */
-const preferred = ({ reading }: SidePage, reps: readonly NamedRep[]): string => {
+const preferred = ({ reading }: SidePage, reps: readonly NamedRep[]): NamedRep | undefined => {
   const used = new Set(reading?.result.reps.filter((rep) => rep.used).map(({ id }) => id));
-  const best =
+  return (
     reps.find(({ rep }) => used.has(rep.id)) ??
     reps.find(({ rep }) => rep.excluded === null) ??
-    reps[0];
-  return best?.rep.id ?? '';
+    reps[0]
+  );
 };
