@@ -4,6 +4,7 @@ import { Migration20261201122058_tables } from '../../migrations/Migration202612
 import { Migration20261201122100_walls } from '../../migrations/Migration20261201122100_walls.ts';
 import { Migration20261201133912_stale_readings } from '../../migrations/Migration20261201133912_stale_readings.ts';
 import { Migration20261201155000_job_priority } from '../../migrations/Migration20261201155000_job_priority.ts';
+import { Migration20261201160000_clip_trouble } from '../../migrations/Migration20261201160000_clip_trouble.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -17,6 +18,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261201155000_job_priority',
     class: Migration20261201155000_job_priority,
+  },
+  {
+    name: 'Migration20261201160000_clip_trouble',
+    class: Migration20261201160000_clip_trouble,
   },
 ];
 

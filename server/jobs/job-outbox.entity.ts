@@ -11,6 +11,8 @@ export const JobOutbox = defineEntity({
     payload: p.json<Record<string, unknown>>(),
     /** Larger comes first among the jobs of one queue. */
     priority: p.integer().default(0),
+    /** Not before this moment; null is at once. */
+    startAfter: moment().nullable(),
     createdAt: madeAt(),
     sentAt: moment().nullable(),
   },

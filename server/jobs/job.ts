@@ -78,6 +78,8 @@ export const handles = <P>(handler: JobHandler<P>): AnyJobHandler => {
 export interface JobOrder {
   /** Larger is taken first; jobs of one priority in the order in which they were asked for. 0 where left out. */
   readonly priority?: number;
+  /** Not before this moment; at once where left out. */
+  readonly startAfter?: Date;
 }
 
 /** What nobody waits for gives way to what a person has just asked for. */
@@ -91,10 +93,16 @@ export const enqueue = async <P extends Record<string, unknown>>(
   { em }: { readonly em: EntityManager },
   type: JobType<P>,
   payload: P,
-  { priority = 0 }: JobOrder = {},
+  { priority = 0, startAfter }: JobOrder = {},
 ): Promise<string> => {
   const id = randomUUID();
-  em.create(JobOutbox, { id, queue: type.queue, payload, priority });
+  em.create(JobOutbox, {
+    id,
+    queue: type.queue,
+    payload,
+    priority,
+    startAfter: startAfter ?? null,
+  });
   await em.execute('select pg_notify(?, ?)', [OUTBOX_CHANNEL, '']);
   return id;
 };

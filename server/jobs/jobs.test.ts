@@ -140,6 +140,32 @@ describe('a job', () => {
     });
   });
 
+  it('has its place in the queue and its moment, and keeps them when a worker comes anew', async () => {
+    const startAfter = new Date('2999-01-01T00:00:00.000Z');
+    const clipId = await api.ground.inPractice(product(api.world.practiceId), async (unit) => {
+      const { visit, coach } = api.world;
+      const { id } = makeClip(unit.em, { visit, uploadedBy: coach, state: 'waiting' });
+      await enqueue(unit, type, { clipId: id }, { priority: -3, startAfter });
+      return id;
+    });
+    const waiting = () =>
+      asJobs((client) =>
+        client.query(
+          `select priority, start_after from pgboss.job where name = $1 and data->'payload'->>'clipId' = $2`,
+          [type.queue, clipId],
+        ),
+      );
+    const once = [{ priority: -3, start_after: startAfter }];
+    await start(() => Promise.resolve());
+    await eventually(async () => {
+      expect((await waiting()).rows).toContainEqual(once[0]);
+    });
+    const { length } = (await waiting()).rows;
+    await worker?.stop();
+    await start(() => Promise.resolve());
+    expect((await waiting()).rows).toHaveLength(length);
+  });
+
   it('is told when the worker stops, and the stop waits for its end', async () => {
     let ended = false;
     let begun = false;

@@ -12,6 +12,7 @@ type Waiting = {
   queue: string;
   payload: Record<string, unknown>;
   priority: number;
+  start_after: Date | null;
 };
 
 /**
@@ -84,8 +85,9 @@ export class Relay {
       const { rows } = await this.#client.query<Waiting>('select * from jobs_to_send($1)', [
         AT_MOST,
       ]);
-      for (const { id, practice_id: practiceId, queue, payload, priority } of rows) {
-        await this.#boss.send(queue, { practiceId, payload }, { id, priority });
+      for (const { id, practice_id: practiceId, queue, payload, priority, start_after } of rows) {
+        const due = start_after ? { startAfter: start_after } : {};
+        await this.#boss.send(queue, { practiceId, payload }, { id, priority, ...due });
       }
       if (rows.length > 0) {
         await this.#client.query('select jobs_were_sent($1)', [rows.map((row) => row.id)]);

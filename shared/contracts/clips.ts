@@ -73,6 +73,25 @@ export const refusal = z
   .object({ code: z.string(), sentence: z.string(), usablePartSeconds: z.number().nullable() })
   .meta({ id: 'Refusal', description: 'Why a clip was refused, and what to do.' });
 
+export const troubleCode = z
+  .enum(['no-space', 'tool-missing', 'interrupted', 'machine'])
+  .meta({ id: 'TroubleCode' });
+export type TroubleCode = z.infer<typeof troubleCode>;
+
+export const trouble = z
+  .object({
+    code: troubleCode,
+    /** What happened; the clip itself is kept. */
+    sentence: z.string(),
+    /** When it is tried again by itself; null: not before a person asks for it. */
+    nextTryAt: moment.nullable(),
+  })
+  .meta({
+    id: 'PreparationTrouble',
+    description:
+      'Why a waiting clip could not be prepared, for the machine’s sake and not its own.',
+  });
+
 export const clip = z
   .object({
     id,
@@ -83,6 +102,8 @@ export const clip = z
     progress: z.number().nullable(),
     secondsLeft: z.number().nullable(),
     refusal: refusal.nullable(),
+    /** Only while waiting. */
+    trouble: trouble.nullable(),
     view,
     cameraStood,
     /** The clip's default; every rep has its own. */
@@ -298,6 +319,16 @@ export const clipRoutes = {
         toSeconds: z.number().positive().nullable().default(null),
       })
       .meta({ id: 'UsePart' }),
+    status: 202,
+    answer: json(clip),
+    problems: ['not-found', 'not-allowed'],
+  }),
+  prepareAgain: route({
+    method: 'post',
+    path: '/api/clips/:id/prepare-again',
+    summary: 'Try at once to prepare a clip that could not be prepared for the machine’s sake.',
+    audience: 'staff',
+    params,
     status: 202,
     answer: json(clip),
     problems: ['not-found', 'not-allowed'],

@@ -21,6 +21,7 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   editClip: 'clip',
   deleteClip: 'clip',
   usePart: 'clip',
+  prepareAgain: 'clip',
   clipVideo: 'clip',
   clipPoster: 'clip',
   clipStrip: 'clip',
@@ -42,6 +43,11 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   editComment: 'comment',
   deleteComment: 'comment',
   revokeReplay: 'replay',
+  repFrames: 'rep',
+  visitFrames: 'visit',
+  repAnnotations: 'rep',
+  visitAnnotations: 'visit',
+  clipComments: 'clip',
 };
 export type RouteNameWithId = {
   [N in RouteName]: (typeof routes)[N] extends { path: `${string}:id${string}` } ? N : never;

@@ -124,6 +124,7 @@ export const aClip = (change: Partial<Clip> = {}): Clip => ({
   progress: null,
   secondsLeft: null,
   refusal: null,
+  trouble: null,
   view: 'front',
   cameraStood: 'front',
   supportSide: 'right',

@@ -4,6 +4,7 @@ import type { UserActor } from '#shared/access/actors.ts';
 import { User } from '../../features/accounts/user.entity.ts';
 import { acceptClip } from '../../features/clips/accept-clip.ts';
 import { Clip } from '../../features/clips/clip.entity.ts';
+import { HELD } from '../../features/clips/trouble.ts';
 import { sideReading } from '../../features/readings/readings.service.ts';
 import { handles, IN_THE_BACKGROUND, type JobContext } from '../../jobs/job.ts';
 import type { Ground } from '../../main/ground.ts';
@@ -67,6 +68,7 @@ const sendClip = async (ground: Ground, hands: Hands, placed: PlacedClip): Promi
   });
 };
 
+/** Waits for every clip but those that wait for a person. */
 const waitUntilPrepared = async (
   { inPractice }: Ground,
   practiceId: string,
@@ -74,7 +76,7 @@ const waitUntilPrepared = async (
 ): Promise<void> => {
   for (;;) {
     const open = await inPractice(product(practiceId), ({ em }) =>
-      em.count(Clip, { state: { $in: ['waiting', 'preparing'] } }),
+      em.count(Clip, { state: { $in: ['waiting', 'preparing'] }, $not: HELD }),
     );
     if (open === 0) return;
     await pause(LOOK_AGAIN_MS, undefined, { signal });

@@ -5,9 +5,10 @@ import {
   type clipGeometry,
   clipState,
   type FrameTable,
+  troubleCode,
 } from '#shared/contracts/clips.ts';
 import { cameraStood, side, view } from '#shared/contracts/primitives.ts';
-import { madeAt, ownedRow, real } from '#server/db/columns.ts';
+import { madeAt, moment, ownedRow, real } from '#server/db/columns.ts';
 import type { ClipFacts, Part, Timestamp } from '#server/media/types.ts';
 import { User } from '../accounts/user.entity.ts';
 import { Visit } from '../visits/visit.entity.ts';
@@ -68,6 +69,12 @@ export const Clip = defineEntity({
     /** A person agreed to use what is left of a cut or damaged file. */
     acceptRemains: p.boolean().default(false),
     geometry: p.json<ClipGeometry>(),
+    /** Preparations begun since a person last asked for one. */
+    tries: p.integer().default(0),
+    /** Why the last one did not come to its end, for the machine's sake; null where nothing is wrong. */
+    trouble: p.enum(troubleCode.options).nullable(),
+    /** When it is tried again by itself; null with a trouble: not before a person asks. */
+    nextTryAt: moment().nullable(),
     /** 0–100 while preparing. */
     progress: real().$type<number>().nullable(),
     secondsLeft: real().$type<number>().nullable(),

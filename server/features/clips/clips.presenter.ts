@@ -3,6 +3,7 @@ import { mmPerPxOf } from '#shared/records/scale.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import type { Clip } from './clip.entity.ts';
 import { presentRefusal } from './refusal.ts';
+import { presentTrouble } from './trouble.ts';
 
 /** @param clip with `uploadedBy` loaded */
 export const presentClip = (clip: Clip, repCount: number): ClipShape => ({
@@ -13,6 +14,7 @@ export const presentClip = (clip: Clip, repCount: number): ClipShape => ({
   progress: clip.progress ?? null,
   secondsLeft: clip.secondsLeft ?? null,
   refusal: presentRefusal(clip.refusalCode ?? null, clip.refusalFigures ?? null),
+  trouble: presentTrouble(clip),
   view: clip.view,
   cameraStood: clip.cameraStood,
   supportSide: clip.supportSide ?? null,

@@ -5,7 +5,7 @@ import { clipPrefix } from './clip-files.ts';
 import { listClips } from './clip-list.ts';
 import { fullFrame, sheet } from './clip-pictures.ts';
 import { presentClip, presentClipWithFrames } from './clips.presenter.ts';
-import { countReps, deleteClip, editClip, usePart } from './clips.service.ts';
+import { countReps, deleteClip, editClip, prepareAgain, usePart } from './clips.service.ts';
 import { Problem } from '../../http/problem.ts';
 import { sendStored } from './send-stored.ts';
 
@@ -33,6 +33,12 @@ export const clipsFeature: Feature = ({ serve, ground: { storage } }) => {
 
   serve(routes.usePart, ({ params, body, work }) =>
     work(async (unit) => presentClip(await usePart(unit, params.id, body), 0)),
+  );
+
+  serve(routes.prepareAgain, ({ params, work }) =>
+    work(async (unit) =>
+      presentClip(await prepareAgain(unit, params.id), await countReps(unit, params.id)),
+    ),
   );
 
   serve(routes.deleteClip, async ({ params, work, actor }) => {

@@ -84,6 +84,20 @@ export const usePart = async (
   clip.state = 'waiting';
   clip.refusalCode = null;
   clip.refusalFigures = null;
+  clip.tries = 0;
+  await enqueue(unit, PREPARE_CLIP, { clipId: id });
+  await unit.em.flush();
+  await tellClip(unit, sight);
+  return clip;
+};
+
+/** Tries at once to prepare a clip that could not be prepared, and counts its tries anew. */
+export const prepareAgain = async (unit: Of, id: string): Promise<Clip> => {
+  const sight = await clipInSight(unit, id, 'clip.edit');
+  const { clip } = sight;
+  if (clip.state !== 'waiting' || !clip.trouble)
+    throw new Problem('not-allowed', 'This clip is not waiting for another try.');
+  unit.em.assign(clip, { trouble: null, nextTryAt: null, tries: 0 });
   await enqueue(unit, PREPARE_CLIP, { clipId: id });
   await unit.em.flush();
   await tellClip(unit, sight);

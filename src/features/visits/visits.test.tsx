@@ -1,5 +1,6 @@
 import { screen, waitFor, within } from '@testing-library/react';
 import { beforeEach, describe, expect, it } from 'vitest';
+import type { Role } from '#shared/contracts/accounts.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { SAFETY_QUESTIONS, type Visit } from '#shared/contracts/visits.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
@@ -15,6 +16,7 @@ import {
   visitId,
 } from '#tests/support/records.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
+import { moment } from '#src/ui/days.ts';
 import { uploads } from './uploads/uploads.ts';
 
 beforeEach(() => uploads.clear());
@@ -25,10 +27,11 @@ function visitApi(
     visit?: Partial<Visit>;
     clips?: ReturnType<typeof aClip>[];
     athlete?: Parameters<typeof anAthlete>[0];
+    role?: Role;
   } = {},
 ) {
   const state = { visit: aVisit(start.visit), clips: start.clips ?? [] };
-  const api = signedInApi()
+  const api = signedInApi(start.role)
     .on(routes.visit, () => state)
     .on(routes.athlete, () => anAthlete(start.athlete))
     .on(routes.listSetUps, () => ({ items: [aSetUp()] }))
@@ -204,6 +207,39 @@ describe('clips', () => {
     await waitFor(() =>
       expect(api.calls(routes.usePart)[0]?.body).toEqual({ fromSeconds: 0, toSeconds: null }),
     );
+  });
+
+  it('says why a clip could not be prepared, when it is tried again, and does it at once if asked', async () => {
+    const soon = new Date(Date.now() + 60_000);
+    const trouble = {
+      code: 'no-space',
+      sentence: 'The server’s disk is full.',
+      nextTryAt: soon.toISOString(),
+    } as const;
+    const { api, user, state } = visitApi({
+      visit: open,
+      clips: [aClip({ state: 'waiting', trouble })],
+    });
+    api.on(routes.prepareAgain, () => {
+      const waiting = aClip({ state: 'waiting' });
+      state.clips = [waiting];
+      return waiting;
+    });
+    expect(await screen.findByText('waits for another try')).toBeVisible();
+    const words = `The server’s disk is full. The clip is kept and tried again by itself at ${moment(trouble.nextTryAt)}.`;
+    expect(screen.getByText(words)).toBeVisible();
+    await user.click(screen.getByRole('button', { name: 'Try now' }));
+    expect(await screen.findByText('waits to be prepared')).toBeVisible();
+    expect(api.calls(routes.prepareAgain)).toHaveLength(1);
+    expect(screen.queryByText(/The server’s disk/)).toBeNull();
+  });
+
+  it('leaves the next try to a person where the machine has given up', async () => {
+    const trouble = { code: 'machine', sentence: 'It failed.', nextTryAt: null } as const;
+    visitApi({ visit: open, clips: [aClip({ state: 'waiting', trouble })] });
+    expect(await screen.findByText('not prepared')).toBeVisible();
+    expect(screen.getByText(/kept, but it is not tried again by itself/)).toBeVisible();
+    expect(screen.getByRole('button', { name: 'Try again' })).toBeVisible();
   });
 
   it('looks at a chosen file before anything is sent, and says why it cannot be used', async () => {

@@ -8,7 +8,9 @@ import { handles, type JobContext } from '../../../jobs/job.ts';
 import type { Ground } from '../../../main/ground.ts';
 import { Clip } from '../clip.entity.ts';
 import { clipFiles } from '../clip-files.ts';
+import { isHeld, MOST_TRIES } from '../trouble.ts';
 import { keepPrepared, keepRefusal } from './keep-outcome.ts';
+import { keepStopped, keepTrouble, noteTrouble } from './keep-trouble.ts';
 import { lockClip } from './lock-clip.ts';
 import { PREPARE_CLIP } from './prepare-clip-type.ts';
 import { tellClipState, tellProgress } from './tell-progress.ts';
@@ -18,10 +20,14 @@ const begin = (ground: Ground, practiceId: string, clipId: string) =>
   ground.inPractice(product(practiceId), async (unit) => {
     await lockClip(unit.em, clipId);
     const clip = await unit.em.findOne(Clip, { id: clipId }, { populate: ['visit.athlete'] });
-    if (!clip || clip.state === 'ready' || clip.state === 'refused') return null;
-    clip.state = 'preparing';
-    clip.progress = 0;
-    clip.secondsLeft = null;
+    if (!clip || clip.state === 'ready' || clip.state === 'refused' || isHeld(clip)) return null;
+    // still 'preparing': the try before ended with its worker, and might end the next one as well
+    if (clip.state === 'preparing' && clip.tries >= MOST_TRIES) {
+      await noteTrouble(unit, clip, 'interrupted');
+      return null;
+    }
+    unit.em.assign(clip, { state: 'preparing', progress: 0, secondsLeft: null });
+    unit.em.assign(clip, { tries: clip.tries + 1, trouble: null, nextTryAt: null });
     await unit.em.flush();
     await tellClipState(unit, clip);
     return {
@@ -46,39 +52,48 @@ const store = async (
   await storage.putFile(files.strip, made.strip.path, 'image/jpeg');
 };
 
-/**
- * Prepares one clip. Killed at any instant it leaves the clip waiting or preparing, and runs again from the start;
- * the row says 'ready' only once every copy lies in its place.
- */
-const run = async ({
-  ground,
-  practiceId,
-  payload: { clipId },
-  signal,
-}: JobContext<{ clipId: string }>): Promise<void> => {
-  const asked = await begin(ground, practiceId, clipId);
-  if (!asked) return;
-  const { original, ...options } = asked;
+/** Makes the copies in a folder that is gone afterwards, and keeps them. */
+const prepare = async (
+  { ground, practiceId, payload: { clipId }, signal }: JobContext<{ clipId: string }>,
+  { original, ...options }: NonNullable<Awaited<ReturnType<typeof begin>>>,
+): Promise<void> => {
   const { storage } = ground;
   await storage.withTempDir(async (folder) => {
-    try {
-      const made = await storage.withLocalFile(original, async (path) => {
-        await scrubLocation(path);
-        return prepareClip({
-          ...options,
-          original: path,
-          outDir: join(folder, 'copies'),
-          onProgress: tellProgress(ground, practiceId, clipId),
-          signal,
-        });
+    const made = await storage.withLocalFile(original, async (path) => {
+      await scrubLocation(path);
+      return prepareClip({
+        ...options,
+        original: path,
+        outDir: join(folder, 'copies'),
+        onProgress: tellProgress(ground, practiceId, clipId),
+        signal,
       });
-      await store(ground, practiceId, clipId, made);
-      await keepPrepared(ground, practiceId, clipId, made);
-    } catch (error) {
-      if (!(error instanceof MediaRefusal)) throw error;
-      await keepRefusal(ground, practiceId, clipId, error as MediaRefusal);
-    }
+    });
+    await store(ground, practiceId, clipId, made);
+    await keepPrepared(ground, practiceId, clipId, made);
   });
+};
+
+/**
+ * Prepares one clip. Killed at any instant it leaves the clip waiting or preparing, and runs again from the start;
+ * the row says 'ready' only once every copy lies in its place. Where the machine fails, the clip says so and names
+ * the moment of its next try.
+ */
+const run = async (context: JobContext<{ clipId: string }>): Promise<void> => {
+  const { ground, practiceId, payload, signal } = context;
+  const { clipId } = payload;
+  const asked = await begin(ground, practiceId, clipId);
+  if (!asked) return;
+  try {
+    await prepare(context, asked);
+  } catch (error) {
+    if (error instanceof MediaRefusal)
+      await keepRefusal(ground, practiceId, clipId, error as MediaRefusal);
+    else if (signal.aborted) {
+      await keepStopped(ground, practiceId, clipId);
+      throw error;
+    } else await keepTrouble(ground, practiceId, clipId, error);
+  }
 };
 
 export const prepareClipJob = handles({

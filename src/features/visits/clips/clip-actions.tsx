@@ -6,6 +6,7 @@ import { routes } from '#shared/contracts/routes.ts';
 import { call } from '#src/api/client.ts';
 import { callsOptions } from '#src/api/readings.queries.ts';
 import { todayQuery } from '#src/api/today.queries.ts';
+import type { May } from '#src/api/use-may.ts';
 import { visitOptions } from '#src/api/visits.queries.ts';
 import { ConfirmButton } from '#src/ui/confirm.tsx';
 import { roughly } from '#src/ui/figures.ts';
@@ -16,7 +17,7 @@ import { clipWords } from '#src/ui/words.ts';
 import { CorrectClip } from './correct-clip.tsx';
 
 /** The clip's state, where it leads, and what can be put right. */
-export function ClipActions({ clip }: { clip: Clip }) {
+export function ClipActions({ clip, may }: { clip: Clip; may: May }) {
   const client = useQueryClient();
   const say = useStatus();
   const remove = async () => {
@@ -28,22 +29,24 @@ export function ClipActions({ clip }: { clip: Clip }) {
   return (
     <>
       <State clip={clip} />
-      {clip.state === 'ready' && <Onward clip={clip} />}
+      {clip.state === 'ready' && <Onward clip={clip} may={may} />}
       <div className="flex gap-5">
-        {clip.state !== 'refused' && <CorrectClip clip={clip} />}
-        <ConfirmButton
-          look="plain"
-          className="text-note !text-alarm"
-          label="Delete"
-          title="Delete this clip?"
-          confirm="Delete it"
-          onConfirm={remove}
-        >
-          <p>
-            {clipWords(clip)}, {clip.name}: its reps, marks and comments go with it, and cannot be
-            brought back.
-          </p>
-        </ConfirmButton>
+        {clip.state !== 'refused' && may('clip.edit') && <CorrectClip clip={clip} />}
+        {may('clip.delete') && (
+          <ConfirmButton
+            look="plain"
+            className="text-note !text-alarm"
+            label="Delete"
+            title="Delete this clip?"
+            confirm="Delete it"
+            onConfirm={remove}
+          >
+            <p>
+              {clipWords(clip)}, {clip.name}: its reps, marks and comments go with it, and cannot be
+              brought back.
+            </p>
+          </ConfirmButton>
+        )}
       </div>
     </>
   );
@@ -56,7 +59,12 @@ function State({ clip }: { clip: Clip }) {
     case 'refused':
       return <StateDot kind="bad">refused</StateDot>;
     case 'waiting':
-      return <StateDot kind="wait">waits to be prepared</StateDot>;
+      if (!clip.trouble) return <StateDot kind="wait">waits to be prepared</StateDot>;
+      return clip.trouble.nextTryAt === null ? (
+        <StateDot kind="bad">not prepared</StateDot>
+      ) : (
+        <StateDot kind="wait">waits for another try</StateDot>
+      );
     case 'preparing': {
       const percent = clip.progress === null ? '' : `, ${Math.round(clip.progress)} %`;
       return (
@@ -82,13 +90,14 @@ function CallFirst({ clip, side, alone }: { clip: Clip; side: Side; alone: boole
 }
 
 /** The call by eye comes before the marks; a clip of both sides has one for each. */
-function Onward({ clip }: { clip: Clip }) {
+function Onward({ clip, may }: { clip: Clip; may: May }) {
   const sides = clip.supportSide === null ? (['right', 'left'] as const) : [clip.supportSide];
   return (
     <>
-      {sides.map((side) => (
-        <CallFirst key={side} clip={clip} side={side} alone={sides.length === 1} />
-      ))}
+      {may('call.record') &&
+        sides.map((side) => (
+          <CallFirst key={side} clip={clip} side={side} alone={sides.length === 1} />
+        ))}
       <Link to={paths.bench(clip.id)} className="py-2.5 tablet:py-1">
         Open the Bench
       </Link>

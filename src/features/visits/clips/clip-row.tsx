@@ -2,12 +2,14 @@ import { useState } from 'react';
 import type { Clip } from '#shared/contracts/clips.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { addressOf } from '#src/api/client.ts';
+import type { May } from '#src/api/use-may.ts';
 import { Progress } from '#src/ui/progress.tsx';
 import { StateDot } from '#src/ui/state-dot.tsx';
 import { clipWords } from '#src/ui/words.ts';
 import { ClipActions } from './clip-actions.tsx';
 import { factsOfClip, fileLine } from './clip-facts.ts';
 import { NoPicture, RowFrame } from './row-frame.tsx';
+import { TryAgain } from './try-again.tsx';
 import { UsePart } from './use-part.tsx';
 
 function Poster({ clipId }: { clipId: string }) {
@@ -25,7 +27,7 @@ function Poster({ clipId }: { clipId: string }) {
 }
 
 /** A clip that the server has: being prepared, ready or refused. */
-export function ClipRow({ clip }: { clip: Clip }) {
+export function ClipRow({ clip, may }: { clip: Clip; may: May }) {
   const facts = factsOfClip(clip);
   return (
     <RowFrame
@@ -33,7 +35,7 @@ export function ClipRow({ clip }: { clip: Clip }) {
       picture={clip.state === 'ready' ? <Poster clipId={clip.id} /> : <NoPicture />}
       title={clipWords(clip)}
       file={fileLine(clip)}
-      state={<ClipActions clip={clip} />}
+      state={<ClipActions clip={clip} may={may} />}
     >
       {facts !== null && <p className="text-note text-soft">{facts}</p>}
       {clip.refusal !== null && clip.state === 'refused' && (
@@ -43,9 +45,10 @@ export function ClipRow({ clip }: { clip: Clip }) {
               {clip.refusal.sentence}
             </StateDot>
           </p>
-          <UsePart clip={clip} refusal={clip.refusal} />
+          {may('clip.edit') && <UsePart clip={clip} refusal={clip.refusal} />}
         </>
       )}
+      {clip.trouble !== null && <TryAgain clip={clip} trouble={clip.trouble} />}
       {clip.state === 'preparing' && (
         <Progress percent={clip.progress} label={`${clip.name}, prepared`} />
       )}
