@@ -7,6 +7,7 @@ import { clipsFeature } from '../features/clips/clips.routes.ts';
 import { formUploadFeature } from '../features/clips/form-upload.ts';
 import { resumableUploadFeature } from '../features/clips/resumable-upload.ts';
 import { commentsFeature } from '../features/comments/comments.routes.ts';
+import { exportsFeature } from '../features/exports/exports.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { replaysFeature } from '../features/replays/replays.routes.ts';
 import { repsFeature } from '../features/reps/reps.routes.ts';
@@ -30,6 +31,7 @@ export const features: readonly Feature[] = [
   readingsFeature,
   replaysFeature,
   commentsFeature,
+  exportsFeature,
   benchFeature,
   eventsFeature,
 ];

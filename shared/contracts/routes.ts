@@ -5,6 +5,7 @@ import { callRoutes } from './calls.ts';
 import { clipRoutes } from './clips.ts';
 import { commentRoutes } from './comments.ts';
 import { eventRoutes } from './events.ts';
+import { exportRoutes } from './exports.ts';
 import { readingRoutes } from './readings.ts';
 import { repRoutes } from './reps.ts';
 import { replayRoutes } from './replays.ts';
@@ -25,6 +26,7 @@ export const routes = {
   ...callRoutes,
   ...readingRoutes,
   ...commentRoutes,
+  ...exportRoutes,
   ...replayRoutes,
   ...eventRoutes,
 };

@@ -4,7 +4,7 @@ import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { milliseconds } from '#shared/timing/units.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { type GoldenClip, goldenClip } from '#tests/support/golden.ts';
-import { makeClip } from '../clips/clip.factory.ts';
+import { markedTrial } from '#tests/support/marked-trial.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
 import { deriveReadingJob } from './jobs/derive-reading.ts';
 
@@ -16,39 +16,7 @@ beforeAll(async () => {
 });
 afterAll(() => api.close());
 
-/** The trial as a clip of a visit of its own, marked through the API. */
-const marked = async (golden: GoldenClip) => {
-  const { coach: user, athlete } = api.world;
-  const { width, height, geometry, frames, trial } = golden;
-  const { visit, clip } = await api.ground.inPractice(user, ({ em }) => {
-    const made = makeVisit(em, { athlete, coach: user });
-    return Promise.resolve({
-      visit: made,
-      clip: makeClip(em, {
-        visit: made,
-        uploadedBy: user,
-        width,
-        height,
-        geometry,
-        frames,
-        frameCount: frames.count,
-        frameRate: { perSecond: 60, variable: false, minPerSecond: 60, maxPerSecond: 60 },
-      }),
-    });
-  });
-  for (const { startFrame, endFrame, commands } of golden.reps) {
-    const { body } = await coach
-      .post(`/api/clips/${clip.id}/reps`)
-      .send({ supportSide: trial.supportSide, startFrame, endFrame })
-      .expect(201);
-    const saved = await coach.post(`/api/reps/${body.id}/marks`).send({ commands }).expect(200);
-    expect(
-      saved.body.outcomes.every((each: { outcome: string }) => each.outcome === 'applied'),
-    ).toBe(true);
-  }
-  const side = `/api/visits/${visit.id}/sides/${trial.supportSide}`;
-  return { visit, clip, side };
-};
+const marked = (golden: GoldenClip) => markedTrial(api, coach, golden);
 
 const seen = (what: string) => ({ seen: what, confidence: 'sure' });
 

@@ -1,0 +1,136 @@
+import type { Shape } from '#shared/contracts/comments.ts';
+import { framePoint } from '#shared/geometry/points.ts';
+import { type ClipSpan, regionFragment, timeFragment } from './media-fragment.ts';
+
+export interface AnnotatedPerson {
+  /** IRI. */
+  readonly id: string;
+  readonly name: string;
+}
+
+interface Placed {
+  /** Its own IRI. */
+  readonly id: string;
+  readonly span: ClipSpan;
+  /** Address of the clip's video. */
+  readonly source: string;
+}
+
+/** A comment with where it points; an answer names the comment it answers. */
+export interface AnnotatedComment extends Placed {
+  readonly kind: 'comment';
+  readonly text: string;
+  readonly shape: Shape | null;
+  /** IRI of the comment it answers. */
+  readonly answerTo: string | null;
+  readonly by: AnnotatedPerson;
+  readonly at: string;
+  readonly editedAt: string | null;
+}
+
+/** A rep: a span of the clip and what it is called. */
+export interface AnnotatedRep extends Placed {
+  readonly kind: 'rep';
+  readonly label: string;
+}
+
+/** A landmark placed on one frame. */
+export interface AnnotatedMark extends Placed {
+  readonly kind: 'mark';
+  readonly label: string;
+  readonly u: number;
+  readonly v: number;
+}
+
+export type Annotated = AnnotatedComment | AnnotatedRep | AnnotatedMark;
+
+type Json = { readonly [key: string]: unknown };
+
+const MEDIA_FRAGMENTS = 'http://www.w3.org/TR/media-frags/';
+const SVG = 'http://www.w3.org/TR/SVG11/';
+
+/** The IRI of a row: RFC 9562. */
+export const urn = (id: string): string => `urn:uuid:${id}`;
+
+/** A mark is a point; a region must have a size. */
+const POINT_RADIUS = 1;
+
+const circle = (u: number, v: number, radius: number): Json => ({
+  type: 'SvgSelector',
+  conformsTo: SVG,
+  value: `<svg xmlns="http://www.w3.org/2000/svg"><circle cx="${u}" cy="${v}" r="${radius}"/></svg>`,
+});
+
+/** Whole pixels for every reader, and the circle itself, to a fraction of a pixel, for those who can. */
+const selector = (span: ClipSpan, at: { u: number; v: number; radius: number } | null): Json => {
+  const time = timeFragment(span);
+  const fragment = { type: 'FragmentSelector', conformsTo: MEDIA_FRAGMENTS };
+  if (!at) return { ...fragment, value: time };
+  return {
+    ...fragment,
+    value: `${time}&${regionFragment(framePoint(at.u, at.v), at.radius)}`,
+    refinedBy: circle(at.u, at.v, at.radius),
+  };
+};
+
+const circleOf = (item: Annotated): { u: number; v: number; radius: number } | null => {
+  if (item.kind === 'mark') return { u: item.u, v: item.v, radius: POINT_RADIUS };
+  if (item.kind === 'rep' || !item.shape) return null;
+  const { u, v } = item.shape;
+  return { u, v, radius: item.shape.kind === 'ring' ? item.shape.radius : POINT_RADIUS };
+};
+
+const textBody = (value: string, purpose: string): Json => ({
+  type: 'TextualBody',
+  value,
+  format: 'text/plain',
+  purpose,
+});
+
+const about = (item: Annotated): Json => {
+  if (item.kind === 'rep')
+    return { motivation: 'describing', body: textBody(item.label, 'describing') };
+  if (item.kind === 'mark')
+    return { motivation: 'identifying', body: textBody(item.label, 'identifying') };
+  const motivation = item.answerTo === null ? 'commenting' : 'replying';
+  return {
+    motivation,
+    creator: { id: item.by.id, type: 'Person', name: item.by.name },
+    created: item.at,
+    ...(item.editedAt === null ? {} : { modified: item.editedAt }),
+    body: textBody(item.text, motivation),
+  };
+};
+
+const annotation = (item: Annotated): Json => {
+  const place = { source: item.source, selector: selector(item.span, circleOf(item)) };
+  const answered = item.kind === 'comment' ? item.answerTo : null;
+  return {
+    id: item.id,
+    type: 'Annotation',
+    ...about(item),
+    target: answered === null ? place : [answered, place],
+  };
+};
+
+/**
+ * Reps, marks and comments as a W3C Web Annotation collection (Recommendation of 2017) of one page.
+ * @param id the collection's own address
+ */
+export const annotationCollection = (
+  id: string,
+  label: string,
+  items: readonly Annotated[],
+): Json => ({
+  '@context': 'http://www.w3.org/ns/anno.jsonld',
+  id,
+  type: 'AnnotationCollection',
+  label,
+  total: items.length,
+  first: {
+    id: `${id}#page-1`,
+    type: 'AnnotationPage',
+    startIndex: 0,
+    items: items.map(annotation),
+  },
+});

@@ -1,0 +1,43 @@
+import { expect } from 'vitest';
+import { makeClip } from '#server/features/clips/clip.factory.ts';
+import { makeVisit } from '#server/features/visits/visit.factory.ts';
+import type { Api } from './api.ts';
+import type { GoldenClip } from './golden.ts';
+
+/** A trial as a clip of a visit of its own, marked through the API by the coach of the athlete. */
+export const markedTrial = async (
+  api: Api,
+  coach: Awaited<ReturnType<Api['as']>>,
+  golden: GoldenClip,
+) => {
+  const { coach: user, athlete } = api.world;
+  const { width, height, geometry, frames, trial } = golden;
+  const { visit, clip } = await api.ground.inPractice(user, ({ em }) => {
+    const made = makeVisit(em, { athlete, coach: user });
+    return Promise.resolve({
+      visit: made,
+      clip: makeClip(em, {
+        visit: made,
+        uploadedBy: user,
+        width,
+        height,
+        geometry,
+        frames,
+        frameCount: frames.count,
+        frameRate: { perSecond: 60, variable: false, minPerSecond: 60, maxPerSecond: 60 },
+      }),
+    });
+  });
+  for (const { startFrame, endFrame, commands } of golden.reps) {
+    const { body } = await coach
+      .post(`/api/clips/${clip.id}/reps`)
+      .send({ supportSide: trial.supportSide, startFrame, endFrame })
+      .expect(201);
+    const saved = await coach.post(`/api/reps/${body.id}/marks`).send({ commands }).expect(200);
+    expect(
+      saved.body.outcomes.every((each: { outcome: string }) => each.outcome === 'applied'),
+    ).toBe(true);
+  }
+  const side = `/api/visits/${visit.id}/sides/${trial.supportSide}`;
+  return { visit, clip, side };
+};
