@@ -133,7 +133,12 @@ export const athleteRoutes = {
     audience: 'staff',
     query: athleteListQuery,
     status: 200,
-    answer: json(pageOf(athlete)),
+    answer: json(
+      pageOf(athlete).extend({
+        /** Whose athletes this person may see, for the filter; a coach sees only their own and gets none. */
+        coaches: z.array(personRef),
+      }),
+    ),
   }),
   addAthlete: route({
     method: 'post',

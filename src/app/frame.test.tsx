@@ -46,9 +46,16 @@ describe('the frame', () => {
 
   it('keeps the focus at the heading when the page replaces it after loading', async () => {
     signedInApi()
-      .on(routes.listAthletes, () => ({ items: [anAthlete()], total: 1, page: 1, pageSize: 25 }))
+      .on(routes.listAthletes, () => ({
+        items: [anAthlete()],
+        total: 1,
+        page: 1,
+        pageSize: 25,
+        coaches: [],
+      }))
       .on(routes.athlete, () => anAthlete())
       .on(routes.listVisits, () => ({ items: [] }))
+      .on(routes.listReplays, () => ({ items: [] }))
       .on(routes.listConsents, () => ({ items: [] }));
     const { user } = renderAt('/athletes');
     await user.click(await screen.findByRole('link', { name: 'Ines Marlow' }));

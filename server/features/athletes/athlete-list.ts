@@ -3,7 +3,14 @@ import type { UserActor } from '#shared/access/actors.ts';
 import type { athleteListQuery } from '#shared/contracts/athletes.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { need } from '../../http/need.ts';
-import { type AthleteRow, countAthletes, readAthletes, type Where } from './athlete-rows.ts';
+import {
+  type AthleteRow,
+  type CoachRow,
+  countAthletes,
+  readAthletes,
+  readCoaches,
+  type Where,
+} from './athlete-rows.ts';
 import { inSightSql } from './caseload.ts';
 import { today } from './days.ts';
 
@@ -53,7 +60,7 @@ const whereOf = (actor: UserActor, { q, coach, consent }: AthleteListQuery): Whe
 export const listAthletes = async (
   { em, actor }: Unit<UserActor>,
   query: AthleteListQuery,
-): Promise<Page<AthleteRow>> => {
+): Promise<Page<AthleteRow> & { readonly coaches: readonly CoachRow[] }> => {
   need(actor, 'practice.read', { kind: 'practice', practiceId: actor.practiceId });
   const where = whereOf(actor, query);
   const { page, pageSize } = query;
@@ -62,5 +69,7 @@ export const listAthletes = async (
     limit: pageSize,
     offset: (page - 1) * pageSize,
   });
-  return { items, total, page, pageSize };
+  const coaches =
+    actor.role === 'coach' ? [] : await readCoaches(em, inSightSql(actor, 'a.coach_id'));
+  return { items, total, page, pageSize, coaches };
 };

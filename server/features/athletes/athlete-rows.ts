@@ -56,6 +56,17 @@ export const readAthletes = (
     page.offset,
   ]);
 
+export type CoachRow = { id: string; name: string };
+
+/** The coaches who have an athlete among these, by name. @param where on `a` alone */
+export const readCoaches = (em: EntityManager, where: Where): Promise<CoachRow[]> =>
+  em.execute<CoachRow[]>(
+    `select coach.id, coach.name from account coach
+    where exists (select from athlete a where a.coach_id = coach.id and ${where.sql})
+    order by lower(coach.name), coach.id`,
+    [...where.params],
+  );
+
 /** @param where on `a` alone */
 export const countAthletes = async (em: EntityManager, where: Where): Promise<number> => {
   const [row] = await em.execute<{ total: number }[]>(

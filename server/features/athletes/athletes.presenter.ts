@@ -1,7 +1,7 @@
 import type { Athlete, Consent as ConsentShape } from '#shared/contracts/athletes.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import type { Page } from './athlete-list.ts';
-import type { AthleteRow } from './athlete-rows.ts';
+import type { AthleteRow, CoachRow } from './athlete-rows.ts';
 import type { Consent } from './consent.entity.ts';
 import { isMinor, today } from './days.ts';
 
@@ -24,9 +24,12 @@ export const presentAthlete = (row: AthleteRow): Athlete => ({
   createdAt: new Date(row.created_at).toISOString(),
 });
 
-export const presentAthletes = (page: Page<AthleteRow>) => ({
+export const presentAthletes = (
+  page: Page<AthleteRow> & { readonly coaches: readonly CoachRow[] },
+) => ({
   ...page,
   items: page.items.map(presentAthlete),
+  coaches: page.coaches.map(presentPerson),
 });
 
 const stateOf = (consent: Consent): ConsentShape['state'] => {

@@ -46,6 +46,19 @@ describe('an athlete', () => {
     expect(answer.body.code).toBe('not-allowed');
   });
 
+  it('is listed with the coaches whose athletes a supervisor or an owner sees; a coach gets none', async () => {
+    const names = async (who: Parameters<Api['as']>[0]) =>
+      (await (await api.as(who)).get('/api/athletes').expect(200)).body.coaches.map(
+        ({ id }: { id: string }) => id,
+      );
+    const { coach, otherCoach, supervisor, owner, foreignOwner } = api.world;
+    expect(await names(coach)).toEqual([]);
+    expect(await names(supervisor)).toEqual([coach.id]);
+    expect(await names(owner)).toContain(coach.id);
+    expect(await names(owner)).toContain(otherCoach.id);
+    expect(await names(foreignOwner)).not.toContain(coach.id);
+  });
+
   it('is refused with every fault at once', async () => {
     const coach = await api.as(api.world.coach);
     const answer = await coach

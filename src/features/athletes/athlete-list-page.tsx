@@ -4,8 +4,8 @@ import { Link, useSearchParams } from 'react-router-dom';
 import type { Role } from '#shared/contracts/accounts.ts';
 import { athleteListOptions } from '#src/api/athletes.queries.ts';
 import { useMe } from '#src/api/me.ts';
-import { Button } from '#src/ui/button.tsx';
 import { ButtonLink } from '#src/ui/button-link.tsx';
+import { useMayInPractice } from '#src/api/use-may.ts';
 import { Page } from '#src/ui/page.tsx';
 import { Pager } from '#src/ui/pager.tsx';
 import { paths } from '#src/ui/paths.ts';
@@ -25,6 +25,7 @@ const LEADS: Record<Role, string | undefined> = {
 export function AthleteListPage() {
   const [search, setSearch] = useSearchParams();
   const { user } = useMe();
+  const mayAdd = useMayInPractice()('athlete.add');
   const list = useQuery(athleteListOptions(queryOf(search)));
   // two changes in one moment (a search that is still being typed, then a filter) build on each other
   const latest = useRef(search);
@@ -39,25 +40,16 @@ export function AthleteListPage() {
     [setSearch],
   );
   const filtered = ['q', 'consent', 'coach'].some((field) => search.has(field));
-  const coach = search.get('coach');
-  const coachName = list.data?.items.find((athlete) => athlete.coach.id === coach)?.coach.name;
   return (
     <Page
       title="Athletes"
       lead={LEADS[user.role]}
-      actions={<ButtonLink to={paths.newAthlete()}>Add an athlete</ButtonLink>}
+      actions={mayAdd ? <ButtonLink to={paths.newAthlete()}>Add an athlete</ButtonLink> : undefined}
     >
-      <ListFilters search={search} onChange={onChange} />
-      <div className="mt-4 flex min-h-[44px] flex-wrap items-center gap-x-4">
-        <p role="status" className="text-soft">
-          {list.data && (list.data.total === 1 ? '1 athlete' : `${list.data.total} athletes`)}
-        </p>
-        {coach !== null && (
-          <Button look="plain" onClick={() => onChange('coach', '')}>
-            Only {coachName ?? 'one coach'}: show all
-          </Button>
-        )}
-      </div>
+      <ListFilters search={search} coaches={list.data?.coaches ?? []} onChange={onChange} />
+      <p role="status" className="mt-4 flex min-h-[44px] items-center text-soft">
+        {list.data && (list.data.total === 1 ? '1 athlete' : `${list.data.total} athletes`)}
+      </p>
       <div className="border-t border-rule pt-6" aria-busy={list.isPlaceholderData || undefined}>
         {list.isPending && (
           <Loading label="Loading athletes">
@@ -84,9 +76,11 @@ export function AthleteListPage() {
             <Empty
               title="No athletes yet"
               action={
-                <ButtonLink look="primary" to={paths.newAthlete()}>
-                  Add the first athlete
-                </ButtonLink>
+                mayAdd ? (
+                  <ButtonLink look="primary" to={paths.newAthlete()}>
+                    Add the first athlete
+                  </ButtonLink>
+                ) : undefined
               }
             >
               An athlete is the person filmed. Visits, consent and readings are kept with them.

@@ -19,19 +19,39 @@ const TYPING_MS = 250;
 
 export function ListFilters({
   search,
+  coaches,
   onChange,
 }: {
   search: URLSearchParams;
+  /** Whose athletes are in sight; with fewer than two there is nothing to choose. */
+  coaches: readonly { readonly id: string; readonly name: string }[];
   onChange: (field: ListField, value: string) => void;
 }) {
   const id = useId();
+  const byCoach = coaches.length > 1 || search.has('coach');
+  const chosen = search.get('coach');
+  const COACH = [
+    { value: '', label: 'Any' },
+    ...coaches.map(({ id: value, name: label }) => ({ value, label })),
+    // the address names a coach who has no athlete in sight
+    ...(chosen !== null && !coaches.some((coach) => coach.id === chosen)
+      ? [{ value: chosen, label: 'Another coach' }]
+      : []),
+  ];
   return (
-    <search className="grid gap-4 phone:grid-cols-2 tablet:grid-cols-[minmax(0,1fr)_200px_260px]">
-      <div className="phone:col-span-2 tablet:col-span-1">
+    <search
+      className={`grid gap-4 phone:grid-cols-2 ${
+        byCoach
+          ? 'tablet:grid-cols-2 desk:grid-cols-[minmax(0,1fr)_200px_190px_250px]'
+          : 'tablet:grid-cols-[minmax(0,1fr)_200px_260px]'
+      }`}
+    >
+      <div className={byCoach ? undefined : 'phone:col-span-2 tablet:col-span-1'}>
         <SearchBox value={search.get('q') ?? ''} onChange={(value) => onChange('q', value)} />
       </div>
       {(
         [
+          ...(byCoach ? [['coach', 'Coach', COACH] as const] : []),
           ['consent', 'Consent', CONSENT],
           ['sort', 'Order', SORT],
         ] as const
