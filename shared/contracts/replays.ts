@@ -103,9 +103,13 @@ export const replayRoutes = {
   listReplays: route({
     method: 'get',
     path: '/api/replays',
-    summary: 'The replay links of a visit, newest first.',
+    summary: 'The replay links of a visit or of an athlete, newest first.',
     audience: 'staff',
-    query: z.object({ visitId: id }),
+    query: z
+      .object({ visitId: id.optional(), athleteId: id.optional() })
+      .refine(({ visitId, athleteId }) => (visitId === undefined) !== (athleteId === undefined), {
+        message: 'Name either a visit or an athlete.',
+      }),
     status: 200,
     answer: json(z.object({ items: z.array(replay) })),
     problems: ['not-found'],

@@ -29,6 +29,12 @@ export const consentsOptions = (athleteId: string) =>
     queryFn: ({ signal }) => call(routes.listConsents, { params: { id: athleteId }, signal }),
   });
 
+export const athleteLinksOptions = (athleteId: string) =>
+  queryOptions({
+    queryKey: [...athletesKey, 'one', athleteId, 'links'],
+    queryFn: ({ signal }) => call(routes.listReplays, { query: { athleteId }, signal }),
+  });
+
 export const athleteVisitsOptions = (athleteId: string) =>
   queryOptions({
     queryKey: [...athletesKey, 'one', athleteId, 'visits'],

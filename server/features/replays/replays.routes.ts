@@ -20,7 +20,7 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
 
   serve(routes.listReplays, ({ query, work }) =>
     work(async (unit) => ({
-      items: (await listReplays(unit, query.visitId)).map(presentReplay),
+      items: (await listReplays(unit, query)).map(presentReplay),
     })),
   );
 

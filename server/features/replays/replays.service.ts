@@ -7,6 +7,7 @@ import { Problem } from '../../http/problem.ts';
 import { tokenHash } from '../../http/token-hash.ts';
 import { hashPassword } from '../accounts/password.ts';
 import { User } from '../accounts/user.entity.ts';
+import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 import { needConsent } from '../athletes/consent-check.ts';
 import { Call } from '../calls/call.entity.ts';
 import { needFrames } from '../clips/clip-in-sight.ts';
@@ -19,12 +20,16 @@ import { Replay } from './replay.entity.ts';
 type Of = Unit<UserActor>;
 const DAY_MS = 86_400_000;
 
-/** The links of a visit, newest first. */
-export const listReplays = async (unit: Of, visitId: string): Promise<Replay[]> => {
-  await visitInSight(unit, visitId, 'athlete.read');
+/** The links of a visit or of an athlete, newest first. */
+export const listReplays = async (
+  unit: Of,
+  { visitId, athleteId }: { readonly visitId?: string; readonly athleteId?: string },
+): Promise<Replay[]> => {
+  if (visitId !== undefined) await visitInSight(unit, visitId, 'athlete.read');
+  if (athleteId !== undefined) await athleteInSight(unit, athleteId, 'athlete.read');
   return unit.em.find(
     Replay,
-    { visit: visitId },
+    visitId === undefined ? { visit: { athlete: athleteId } } : { visit: visitId },
     { populate: ['by', 'passPhraseHash'], orderBy: { at: 'desc', id: 'desc' } },
   );
 };

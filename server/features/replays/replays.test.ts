@@ -47,6 +47,25 @@ const make = async (more: object = {}) => {
 };
 const open = (token: string) => api.nobody.get(`/api/r/${token}`);
 
+describe('the links of an athlete', () => {
+  const path = () => `/api/replays?athleteId=${api.world.athlete.id}`;
+
+  it('are listed over all visits for those who see the athlete, and for nobody else', async () => {
+    const { replay } = await make();
+    for (const who of [api.world.coach, api.world.supervisor, api.world.owner]) {
+      const { body } = await (await api.as(who)).get(path()).expect(200);
+      expect(body.items.map(({ id }: { id: string }) => id)).toContain(replay.id);
+    }
+    for (const who of [api.world.otherCoach, api.world.foreignOwner])
+      await (await api.as(who)).get(path()).expect(404);
+  });
+
+  it('are asked for by a visit or by an athlete, never by both or neither', async () => {
+    await coach.get('/api/replays').expect(422);
+    await coach.get(`${path()}&visitId=${made.visitId}`).expect(422);
+  });
+});
+
 describe('a replay link', () => {
   let token: string;
   let replay: { id: string };

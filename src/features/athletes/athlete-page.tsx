@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
 import type { Athlete } from '#shared/contracts/athletes.ts';
 import { athleteOptions, athleteVisitsOptions } from '#src/api/athletes.queries.ts';
+import { useMay } from '#src/api/use-may.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
 import { capital, inWords } from '#src/ui/figures.ts';
 import { Page, Section } from '#src/ui/page.tsx';
@@ -9,6 +10,7 @@ import { paths } from '#src/ui/paths.ts';
 import { Caution, Empty, ErrorState, Loading, Skeleton, SkeletonLines } from '#src/ui/states.tsx';
 import { aboutAthlete, fullName } from './athlete-words.ts';
 import { ConsentSection } from './consent-section.tsx';
+import { LinksSection } from './links-section.tsx';
 import { TrendSection } from './trend-section.tsx';
 import { VisitTable } from './visit-table.tsx';
 
@@ -35,6 +37,7 @@ export function AthletePage() {
 
 function Known({ athlete, crumbs }: { athlete: Athlete; crumbs: { label: string; to: string }[] }) {
   const mayFilm = athlete.consentedTo.includes('assessment');
+  const may = useMay(athlete.coach.id);
   const { visitCount } = athlete;
   const visits =
     visitCount === 0
@@ -50,18 +53,20 @@ function Known({ athlete, crumbs }: { athlete: Athlete; crumbs: { label: string;
         </p>
       }
       actions={
-        <>
-          <ButtonLink to={paths.editAthlete(athlete.id)}>Change details</ButtonLink>
-          {mayFilm ? (
-            <ButtonLink look="primary" to={paths.newVisit(athlete.id)}>
-              New visit
-            </ButtonLink>
-          ) : (
-            <ButtonLink look="primary" to={paths.newConsent(athlete.id)}>
-              Record the consent
-            </ButtonLink>
-          )}
-        </>
+        may('athlete.edit') ? (
+          <>
+            <ButtonLink to={paths.editAthlete(athlete.id)}>Change details</ButtonLink>
+            {mayFilm ? (
+              <ButtonLink look="primary" to={paths.newVisit(athlete.id)}>
+                New visit
+              </ButtonLink>
+            ) : (
+              <ButtonLink look="primary" to={paths.newConsent(athlete.id)}>
+                Record the consent
+              </ButtonLink>
+            )}
+          </>
+        ) : undefined
       }
     >
       {athlete.cautions !== '' && (
@@ -73,11 +78,13 @@ function Known({ athlete, crumbs }: { athlete: Athlete; crumbs: { label: string;
       )}
       <Visits athlete={athlete} />
       <ConsentSection athlete={athlete} />
+      <LinksSection athlete={athlete} />
     </Page>
   );
 }
 
 function Visits({ athlete }: { athlete: Athlete }) {
+  const may = useMay(athlete.coach.id);
   const visits = useQuery(athleteVisitsOptions(athlete.id));
   if (visits.isError && !visits.data)
     return (
@@ -98,9 +105,11 @@ function Visits({ athlete }: { athlete: Athlete }) {
     return (
       <Section title="Visits">
         <Empty title="No visit yet">
-          {athlete.consentedTo.includes('assessment')
-            ? 'A visit is one day’s testing. It asks the safety questions, guides the filming and takes the clips.'
-            : 'Record the consent first; then a visit can be opened.'}
+          {!may('visit.add')
+            ? `${athlete.coach.name} opens the visits of this athlete.`
+            : athlete.consentedTo.includes('assessment')
+              ? 'A visit is one day’s testing. It asks the safety questions, guides the filming and takes the clips.'
+              : 'Record the consent first; then a visit can be opened.'}
         </Empty>
       </Section>
     );

@@ -1,14 +1,32 @@
 import { screen, waitFor, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
+import type { Role } from '#shared/contracts/accounts.ts';
+import type { Replay } from '#shared/contracts/replays.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
-import { aConsent, anAthlete, athleteId, aVisitRow, consentId } from '#tests/support/records.ts';
+import {
+  aConsent,
+  anAthlete,
+  athleteId,
+  aVisitRow,
+  coachId,
+  consentId,
+  otherId,
+  visitId,
+} from '#tests/support/records.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
 
-const page = (total: number, items = [anAthlete()]) => ({ items, total, page: 1, pageSize: 25 });
+const page = (total: number, items = [anAthlete()]) => ({
+  items,
+  total,
+  page: 1,
+  pageSize: 25,
+  coaches: [],
+});
 /** The athlete's page with its parts; consents and visits empty unless given. */
-const athleteApi = (athlete = anAthlete()) =>
-  signedInApi()
+const athleteApi = (athlete = anAthlete(), role: Role = 'coach') =>
+  signedInApi(role)
+    .on(routes.listReplays, () => ({ items: [] }))
     .on(routes.athlete, () => athlete)
     .on(routes.listConsents, () => ({ items: [] }))
     .on(routes.listVisits, () => ({ items: [] }));
@@ -30,6 +48,21 @@ describe('the list of athletes', () => {
       }),
     );
     expect(screen.getByLabelText('Name or sport')).toHaveValue('ines');
+  });
+
+  it('lets an owner choose a coach', async () => {
+    const coaches = [
+      { id: coachId, name: 'Maren Okafor' },
+      { id: otherId, name: 'Jonas Reed' },
+    ];
+    const api = signedInApi('owner').on(routes.listAthletes, () => ({ ...page(3), coaches }));
+    const { user, place } = renderAt('/athletes');
+    await screen.findByRole('option', { name: 'Jonas Reed' });
+    await user.selectOptions(screen.getByLabelText('Coach'), 'Jonas Reed');
+    await waitFor(() => expect(place()).toBe(`/athletes?coach=${otherId}`));
+    await waitFor(() =>
+      expect(api.calls(routes.listAthletes).at(-1)?.query.get('coach')).toBe(otherId),
+    );
   });
 
   it('tells an empty practice from a search without a hit', async () => {
@@ -141,6 +174,58 @@ describe('consent', () => {
     expect(api.calls(routes.withdrawConsent)).toHaveLength(0);
     await user.click(screen.getByRole('button', { name: 'Withdraw it' }));
     await waitFor(() => expect(api.calls(routes.withdrawConsent)[0]?.params.id).toBe(consentId));
+  });
+});
+
+const aLink: Replay = {
+  id: '00000000-0000-4000-8000-000000000950',
+  visitId,
+  side: 'right',
+  repId: '00000000-0000-4000-8000-000000000701',
+  fromFrame: 0,
+  toFrame: 300,
+  showReading: true,
+  showCall: true,
+  message: '',
+  passPhrase: true,
+  state: 'live',
+  openings: 2,
+  lastOpenedAt: '2026-03-04T10:00:00Z',
+  expiresAt: '2026-04-03T10:00:00Z',
+  by: { id: coachId, name: 'Maren Okafor' },
+  at: '2026-03-03T17:00:00Z',
+};
+
+describe('the athlete’s links', () => {
+  it('show state, end and openings, and are ended after a question', async () => {
+    let link = aLink;
+    const api = athleteApi(anAthlete({ consentedTo: ['assessment', 'sharing-by-link'] }))
+      .on(routes.listReplays, () => ({ items: [link] }))
+      .on(routes.revokeReplay, () => (link = { ...aLink, state: 'revoked' }));
+    const { user } = renderAt(`/athletes/${athleteId}`);
+    const links = within(await screen.findByRole('region', { name: 'Links' }));
+    expect(await links.findByText(/opened twice/)).toBeVisible();
+    expect(links.getByText('open')).toBeVisible();
+    expect(links.getByText(/with a pass phrase; ends 3 April/)).toBeVisible();
+    expect(api.calls(routes.listReplays)[0]?.query.get('athleteId')).toBe(athleteId);
+    await user.click(links.getByRole('button', { name: 'End it' }));
+    await user.click(screen.getByRole('button', { name: 'End the link' }));
+    expect(await links.findByText('ended')).toBeVisible();
+    expect(api.calls(routes.revokeReplay)[0]?.params.id).toBe(aLink.id);
+  });
+
+  it('are looked at, not ended, by a supervisor, who is shown no button that would be refused', async () => {
+    athleteApi(anAthlete({ coach: { id: otherId, name: 'Jonas Reed' } }), 'supervisor')
+      .on(routes.listReplays, () => ({ items: [aLink] }))
+      .on(routes.listConsents, () => ({ items: [aConsent()] }));
+    renderAt(`/athletes/${athleteId}`);
+    const links = within(await screen.findByRole('region', { name: 'Links' }));
+    expect(await links.findByText(/opened twice/)).toBeVisible();
+    expect(await screen.findByText(/Recorded by/)).toBeVisible();
+    for (const name of ['End it', 'Withdraw'])
+      expect(screen.queryByRole('button', { name })).toBeNull();
+    for (const name of ['Change details', 'New visit', 'Record another consent'])
+      expect(screen.queryByRole('link', { name })).toBeNull();
   });
 });
 

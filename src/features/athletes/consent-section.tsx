@@ -3,6 +3,7 @@ import type { Athlete, Consent } from '#shared/contracts/athletes.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { athletesKey, consentsOptions } from '#src/api/athletes.queries.ts';
 import { call } from '#src/api/client.ts';
+import { useMay } from '#src/api/use-may.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
 import { ConfirmButton } from '#src/ui/confirm.tsx';
 import { longDay, moment } from '#src/ui/days.ts';
@@ -16,6 +17,7 @@ import { PURPOSES, PURPOSE_WORDS } from '#src/ui/words.ts';
 
 /** What was agreed to, by whom and until when; each purpose stands by itself. */
 export function ConsentSection({ athlete }: { athlete: Athlete }) {
+  const may = useMay(athlete.coach.id);
   const consents = useQuery(consentsOptions(athlete.id));
   const valid = consents.data?.items.filter(({ state }) => state === 'valid') ?? [];
   const past = consents.data?.items.filter(({ state }) => state !== 'valid') ?? [];
@@ -36,7 +38,11 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
       {consents.data && valid.length === 0 && (
         <Empty
           title="No consent that is valid today"
-          action={<ButtonLink to={paths.newConsent(athlete.id)}>Record the consent</ButtonLink>}
+          action={
+            may('consent.record') ? (
+              <ButtonLink to={paths.newConsent(athlete.id)}>Record the consent</ButtonLink>
+            ) : undefined
+          }
         >
           {athlete.minor
             ? `${athlete.givenName} is a minor: a guardian gives it, and ${athlete.givenName} is asked too.`
@@ -72,9 +78,11 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
               <ValidConsent key={consent.id} athlete={athlete} consent={consent} />
             ))}
           </ul>
-          <ButtonLink to={paths.newConsent(athlete.id)} className="mt-2">
-            Record another consent
-          </ButtonLink>
+          {may('consent.record') && (
+            <ButtonLink to={paths.newConsent(athlete.id)} className="mt-2">
+              Record another consent
+            </ButtonLink>
+          )}
         </>
       )}
       {past.length > 0 && <PastConsents consents={past} />}
@@ -91,6 +99,7 @@ const giver = (consent: Consent, athlete: Athlete): string => {
 function ValidConsent({ athlete, consent }: { athlete: Athlete; consent: Consent }) {
   const client = useQueryClient();
   const say = useStatus();
+  const may = useMay(athlete.coach.id);
   const withdraw = async () => {
     await call(routes.withdrawConsent, { params: { id: consent.id } });
     await client.invalidateQueries({ queryKey: athletesKey });
@@ -104,19 +113,21 @@ function ValidConsent({ athlete, consent }: { athlete: Athlete; consent: Consent
         {consent.how !== '' && `${consent.how.replace(/\.$/, '')}. `}
         Recorded by {consent.recordedBy.name}.
       </p>
-      <ConfirmButton
-        look="plain"
-        className="!text-alarm text-note"
-        label="Withdraw"
-        title="Withdraw this consent?"
-        confirm="Withdraw it"
-        onConfirm={withdraw}
-      >
-        <p>
-          From this moment no clip of {athlete.givenName} can be filmed, sent or shown by link under
-          it. Clips that are here stay until they are deleted.
-        </p>
-      </ConfirmButton>
+      {may('consent.withdraw') && (
+        <ConfirmButton
+          look="plain"
+          className="!text-alarm text-note"
+          label="Withdraw"
+          title="Withdraw this consent?"
+          confirm="Withdraw it"
+          onConfirm={withdraw}
+        >
+          <p>
+            From this moment no clip of {athlete.givenName} can be filmed, sent or shown by link
+            under it. Clips that are here stay until they are deleted.
+          </p>
+        </ConfirmButton>
+      )}
     </li>
   );
 }

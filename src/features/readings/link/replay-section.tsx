@@ -1,16 +1,19 @@
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import type { SidePage } from '#shared/contracts/readings.ts';
+import type { Replay } from '#shared/contracts/replays.ts';
 import { athleteOptions } from '#src/api/athletes.queries.ts';
 import { replaysOptions } from '#src/api/readings.queries.ts';
+import { useEndLink } from '#src/api/use-end-link.ts';
+import { useMay } from '#src/api/use-may.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
+import { ReplayLinks } from '#src/ui/replay-links.tsx';
 import { Empty, ErrorState, Loading } from '#src/ui/states.tsx';
 import { useSideReps } from '../side-clips.ts';
 import { LinkAddress } from './link-address.tsx';
 import { LinkForm } from './link-form.tsx';
-import { LinkList } from './link-list.tsx';
 
 /** The athlete's replay: make a link, hand its address over once, see whether it was opened, end it. */
 export function ReplaySection({ page }: { page: SidePage }) {
@@ -21,6 +24,12 @@ export function ReplaySection({ page }: { page: SidePage }) {
   const [address, setAddress] = useState<string | null>(null);
   const own = links.data?.items.filter((link) => link.side === side) ?? [];
   const failed = [person, links].find(({ isError, data }) => isError && !data);
+  const may = useMay(person.data?.coach.id);
+  const endLink = useEndLink();
+  const nameOf = ({ repId }: Replay) => {
+    const rep = reps.find((named) => named.rep.id === repId)?.rep;
+    return rep ? `rep ${rep.number}, ` : '';
+  };
   const consented = person.data?.consentedTo.includes('sharing-by-link') ?? false;
   return (
     <Section
@@ -47,7 +56,9 @@ export function ReplaySection({ page }: { page: SidePage }) {
       ) : (
         <>
           {address !== null && <LinkAddress address={address} onDone={() => setAddress(null)} />}
-          {!consented ? (
+          {!may('replay.make') ? (
+            own.length === 0 && <p className="text-soft">No link was made. The coach makes them.</p>
+          ) : !consented ? (
             <Empty
               title="There is no consent to a replay by link"
               action={<ButtonLink to={paths.newConsent(athlete.id)}>Record the consent</ButtonLink>}
@@ -62,7 +73,16 @@ export function ReplaySection({ page }: { page: SidePage }) {
           ) : (
             address === null && <LinkForm page={page} reps={reps} onMade={setAddress} />
           )}
-          <LinkList links={own} reps={reps} />
+          {own.length > 0 && (
+            <div className="mt-8">
+              <h3 className="font-bold">Links that were made</h3>
+              <ReplayLinks
+                links={own}
+                nameOf={nameOf}
+                onEnd={may('replay.revoke') ? endLink : undefined}
+              />
+            </div>
+          )}
         </>
       )}
     </Section>
