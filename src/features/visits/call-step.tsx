@@ -4,6 +4,7 @@ import type { Clip } from '#shared/contracts/clips.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { Visit } from '#shared/contracts/visits.ts';
 import { callsOptions } from '#src/api/readings.queries.ts';
+import type { May } from '#src/api/use-may.ts';
 import { moment } from '#src/ui/days.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
@@ -13,7 +14,15 @@ import { SEEN_WORDS } from '#src/ui/words.ts';
 import { sidesOf } from './sides-of.ts';
 
 /** What the coach saw, before any figure: one call for each side that was filmed. */
-export function CallStep({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
+export function CallStep({
+  visit,
+  clips,
+  may,
+}: {
+  visit: Visit;
+  clips: readonly Clip[];
+  may: May;
+}) {
   const sides = sidesOf(clips);
   return (
     <Section
@@ -34,7 +43,7 @@ export function CallStep({ visit, clips }: { visit: Visit; clips: readonly Clip[
       ) : (
         <ul className="mt-3">
           {sides.map((side) => (
-            <SideCall key={side} visitId={visit.id} side={side} />
+            <SideCall key={side} visitId={visit.id} side={side} mayCall={may('call.record')} />
           ))}
         </ul>
       )}
@@ -42,7 +51,7 @@ export function CallStep({ visit, clips }: { visit: Visit; clips: readonly Clip[
   );
 }
 
-function SideCall({ visitId, side }: { visitId: string; side: Side }) {
+function SideCall({ visitId, side, mayCall }: { visitId: string; side: Side; mayCall: boolean }) {
   const calls = useQuery(callsOptions(visitId, side));
   const latest = calls.data?.items.at(-1);
   return (
@@ -66,7 +75,8 @@ function SideCall({ visitId, side }: { visitId: string; side: Side }) {
           </Link>
         </>
       )}
-      {calls.data && !latest && (
+      {calls.data && !latest && !mayCall && <span className="text-soft">not made yet</span>}
+      {calls.data && !latest && mayCall && (
         <Link to={paths.call(visitId, side)} className="tap">
           Make the call
         </Link>

@@ -2,6 +2,7 @@ import type { UseQueryResult } from '@tanstack/react-query';
 import { Link } from 'react-router-dom';
 import type { Athlete } from '#shared/contracts/athletes.ts';
 import type { Visit } from '#shared/contracts/visits.ts';
+import type { May } from '#src/api/use-may.ts';
 import { longDay } from '#src/ui/days.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
 import { Section } from '#src/ui/page.tsx';
@@ -14,9 +15,11 @@ import { PURPOSES, PURPOSE_WORDS } from '#src/ui/words.ts';
 export function ConsentStep({
   athlete,
   visit,
+  may,
 }: {
   athlete: UseQueryResult<Athlete>;
   visit: Visit;
+  may: May;
 }) {
   return (
     <Section
@@ -37,7 +40,7 @@ export function ConsentStep({
       {athlete.isError && !athlete.data && (
         <ErrorState error={athlete.error} onRetry={() => void athlete.refetch()} />
       )}
-      {athlete.data && <Purposes athlete={athlete.data} />}
+      {athlete.data && <Purposes athlete={athlete.data} mayRecord={may('consent.record')} />}
       {athlete.data && athlete.data.cautions !== '' && (
         <div className="mt-5">
           <Caution title="Be careful with:">
@@ -49,7 +52,7 @@ export function ConsentStep({
   );
 }
 
-function Purposes({ athlete }: { athlete: Athlete }) {
+function Purposes({ athlete, mayRecord }: { athlete: Athlete; mayRecord: boolean }) {
   const { consentedTo, consentUntil } = athlete;
   if (!consentedTo.includes('assessment'))
     return (
@@ -57,9 +60,11 @@ function Purposes({ athlete }: { athlete: Athlete }) {
         <StateDot kind="bad" wrap>
           There is no consent to filming that is valid today: filming stays closed.
         </StateDot>
-        <ButtonLink to={paths.newConsent(athlete.id)} look="primary" className="mt-3">
-          Record the consent
-        </ButtonLink>
+        {mayRecord && (
+          <ButtonLink to={paths.newConsent(athlete.id)} look="primary" className="mt-3">
+            Record the consent
+          </ButtonLink>
+        )}
       </>
     );
   return (

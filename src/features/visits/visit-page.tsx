@@ -3,6 +3,7 @@ import { useParams } from 'react-router-dom';
 import type { Clip } from '#shared/contracts/clips.ts';
 import type { Visit } from '#shared/contracts/visits.ts';
 import { athleteOptions } from '#src/api/athletes.queries.ts';
+import { useMay } from '#src/api/use-may.ts';
 import { visitOptions } from '#src/api/visits.queries.ts';
 import { longDay, shortDay } from '#src/ui/days.ts';
 import { Page } from '#src/ui/page.tsx';
@@ -41,6 +42,7 @@ function Opened({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
   useHashTarget();
   const athlete = useQuery(athleteOptions(visit.athlete.id));
   const consented = athlete.data?.consentedTo.includes('assessment');
+  const may = useMay(athlete.data?.coach.id);
   // clips that are here stay to be worked on; nothing new is filmed without both
   const open = consented === true && visit.safety?.mayFilm === true;
   return (
@@ -59,11 +61,11 @@ function Opened({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
         </>
       }
     >
-      <ConsentStep athlete={athlete} visit={visit} />
-      <SafetyStep visit={visit} />
-      <FilmStep visit={visit} unfold={clips.length === 0} />
-      <UploadStep visit={visit} clips={clips} open={open} />
-      <CallStep visit={visit} clips={clips} />
+      <ConsentStep athlete={athlete} visit={visit} may={may} />
+      <SafetyStep visit={visit} may={may} />
+      <FilmStep visit={visit} may={may} unfold={clips.length === 0} />
+      <UploadStep visit={visit} clips={clips} may={may} open={open} />
+      <CallStep visit={visit} clips={clips} may={may} />
     </Page>
   );
 }

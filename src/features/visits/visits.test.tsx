@@ -12,6 +12,7 @@ import {
   athleteId,
   aVisit,
   clipId,
+  otherId,
   setUpId,
   visitId,
 } from '#tests/support/records.ts';
@@ -263,5 +264,27 @@ describe('clips', () => {
       supportSide: null,
       mirrored: false,
     });
+  });
+});
+
+describe('a supervisor’s look at a visit', () => {
+  it('shows what was done and no button that would be refused', async () => {
+    visitApi({
+      role: 'supervisor',
+      athlete: { coach: { id: otherId, name: 'Jonas Reed' } },
+      visit: { safety: aSafety() },
+      clips: [aClip()],
+    });
+    expect(await screen.findByRole('link', { name: 'Open the Bench' })).toBeVisible();
+    expect(await screen.findByText('not made yet')).toBeVisible();
+    for (const name of [
+      'Ask again',
+      'Choose files',
+      'Delete',
+      'Write the figures down',
+      'Change these figures',
+    ])
+      expect(screen.queryByRole('button', { name })).toBeNull();
+    expect(screen.queryByRole('link', { name: /^(Call by eye,|Make the call)/ })).toBeNull();
   });
 });

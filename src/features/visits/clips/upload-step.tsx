@@ -1,6 +1,7 @@
 import { useEffect } from 'react';
 import type { Clip } from '#shared/contracts/clips.ts';
 import type { Visit } from '#shared/contracts/visits.ts';
+import type { May } from '#src/api/use-may.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { Empty } from '#src/ui/states.tsx';
@@ -18,10 +19,12 @@ const FIRST_DETAILS: ClipDetails = { view: 'front', supportSide: null, mirrored:
 export function UploadStep({
   visit,
   clips,
+  may,
   open,
 }: {
   visit: Visit;
   clips: readonly Clip[];
+  may: May;
   /** Consent and safety check are there. */
   open: boolean;
 }) {
@@ -44,7 +47,9 @@ export function UploadStep({
   };
   return (
     <Section id="upload" title="4 Upload" wide>
-      {open ? (
+      {!may('clip.upload') ? (
+        clips.length === 0 && <p className="text-soft">No clip yet. The coach sends them.</p>
+      ) : open ? (
         <DropZone primary={here.length === 0 && clips.length === 0} onFiles={take} />
       ) : (
         <Empty title="Closed until consent and safety check are there">
@@ -66,7 +71,7 @@ export function UploadStep({
             <UploadRow key={item.key} item={item} only={ready.length <= 1} onFiles={take} />
           ))}
           {clips.map((clip) => (
-            <ClipRow key={clip.id} clip={clip} />
+            <ClipRow key={clip.id} clip={clip} may={may} />
           ))}
         </ul>
       )}

@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import type { Visit } from '#shared/contracts/visits.ts';
+import { type May, useMayInPractice } from '#src/api/use-may.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Fold } from '#src/ui/fold.tsx';
 import { Section } from '#src/ui/page.tsx';
@@ -12,12 +13,15 @@ import { SetUpChips } from './set-up-chips.tsx';
 /** How this visit is filmed: a saved set-up in one touch, its figures, and the guide. */
 export function FilmStep({
   visit,
+  may,
   unfold,
 }: {
   visit: Visit;
+  may: May;
   /** Before the first clip the guide stands open. */
   unfold: boolean;
 }) {
+  const mayInPractice = useMayInPractice();
   const { filming } = visit;
   const known = FILMING.some(({ key }) => filming[key] !== null);
   const [editing, setEditing] = useState(false);
@@ -28,7 +32,7 @@ export function FilmStep({
       note="Vermilion: the leg stood on. Teal: the leg lifted."
       wide
     >
-      <SetUpChips visit={visit} />
+      {may('visit.edit') && <SetUpChips visit={visit} />}
       {editing ? (
         <FilmingForm key={visit.version} visit={visit} onDone={() => setEditing(false)} />
       ) : (
@@ -52,12 +56,16 @@ export function FilmStep({
               );
             })}
           </dl>
-          <div className="mt-3 flex flex-wrap gap-x-6">
-            <Button look="plain" onClick={() => setEditing(true)}>
-              {known ? 'Change these figures' : 'Write the figures down'}
-            </Button>
-            {filming.distanceMm !== null && <SaveSetUp filming={filming} />}
-          </div>
+          {may('visit.edit') && (
+            <div className="mt-3 flex flex-wrap gap-x-6">
+              <Button look="plain" onClick={() => setEditing(true)}>
+                {known ? 'Change these figures' : 'Write the figures down'}
+              </Button>
+              {filming.distanceMm !== null && mayInPractice('set-up.save') && (
+                <SaveSetUp filming={filming} />
+              )}
+            </div>
+          )}
         </>
       )}
       <div className="mt-6">

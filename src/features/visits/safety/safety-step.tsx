@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import type { Visit } from '#shared/contracts/visits.ts';
+import type { May } from '#src/api/use-may.ts';
 import { Button } from '#src/ui/button.tsx';
 import { moment } from '#src/ui/days.ts';
 import { Section } from '#src/ui/page.tsx';
@@ -9,7 +10,7 @@ import { SafetyForm } from './safety-form.tsx';
 import { yesAnswers } from './safety-schema.ts';
 import { SAFETY_WORDS } from './safety-words.ts';
 
-export function SafetyStep({ visit }: { visit: Visit }) {
+export function SafetyStep({ visit, may }: { visit: Visit; may: May }) {
   const { safety } = visit;
   const [again, setAgain] = useState(false);
   return (
@@ -23,14 +24,16 @@ export function SafetyStep({ visit }: { visit: Visit }) {
         </p>
       }
     >
-      {safety === null || again ? (
+      {safety === null && !may('visit.edit') ? (
+        <p className="text-soft">The questions have not been asked yet. The coach asks them.</p>
+      ) : safety === null || again ? (
         <SafetyForm
           visit={visit}
           onSaved={() => setAgain(false)}
           onLeave={safety === null ? undefined : () => setAgain(false)}
         />
       ) : (
-        <Answered safety={safety} onAgain={() => setAgain(true)} />
+        <Answered safety={safety} onAgain={may('visit.edit') ? () => setAgain(true) : undefined} />
       )}
     </Section>
   );
@@ -41,7 +44,8 @@ function Answered({
   onAgain,
 }: {
   safety: NonNullable<Visit['safety']>;
-  onAgain: () => void;
+  /** Left out where this person may not ask. */
+  onAgain?: () => void;
 }) {
   const yes = yesAnswers(safety.answers);
   const asked = `asked by ${safety.askedBy.name}, ${moment(safety.askedAt)}`;
@@ -79,11 +83,13 @@ function Answered({
       {safety.chaperone === true && (
         <p className="mt-1 text-soft">A guardian or chaperone was in the room.</p>
       )}
-      <p>
-        <Button look="plain" onClick={onAgain}>
-          Ask again
-        </Button>
-      </p>
+      {onAgain && (
+        <p>
+          <Button look="plain" onClick={onAgain}>
+            Ask again
+          </Button>
+        </p>
+      )}
     </>
   );
 }
