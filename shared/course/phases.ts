@@ -83,7 +83,7 @@ export const divide = (
   set: LandmarkSetId,
 ): Divided => {
   if (labels) return labelled(frames, labels, rig, set);
-  const stance = findStance(frames, shared, rig.mmPerPx, moved);
+  const stance = findStance(frames, shared, rig, moved);
   const setting = settingOf(rig, stance.quiet, set);
   const lifts = liftsOf(frames, setting);
   const times = frames.map((frame) => frame.time);

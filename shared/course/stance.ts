@@ -1,5 +1,7 @@
+import type { View } from '#shared/landmarks/types.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import type { LevelFrame } from '#shared/measures/level.ts';
+import type { Rig } from '#shared/measures/rig.ts';
 import { type Milliseconds, milliseconds } from '#shared/timing/units.ts';
 import { median, robustSpread } from './robust.ts';
 import type { RepBoundaries } from './types.ts';
@@ -18,16 +20,22 @@ export interface Stance {
   readonly footOffMm: number | null;
 }
 
+/** A height in the picture that shrinks as the foot rises, px. */
+type Gap = (frame: LevelFrame) => number | null;
+
 /** v of the lifted ankle above the support ankle, px down the picture. */
-const ankleGap = ({ marks }: LevelFrame): number | null => {
+const ankleGap: Gap = ({ marks }) => {
   const { 'ankle-lifted': lifted, 'ankle-support': support } = marks;
   return lifted && support ? lifted.v - support.v : null;
 };
 
-/** Random error of that gap, px, from the first frame that carries it. */
-const gapError = (frames: readonly LevelFrame[]): number => {
-  const first = frames.find((frame) => ankleGap(frame) !== null)?.marks;
-  return Math.hypot(first?.['ankle-lifted']?.error ?? 0, first?.['ankle-support']?.error ?? 0);
+const ankleAlone: Gap = ({ marks }) => marks['ankle-lifted']?.v ?? null;
+
+/** Random error of the ankles' marks, px, from the first frame that carries what `gap` reads. */
+const gapError = (frames: readonly LevelFrame[], gap: Gap): number => {
+  const first = frames.find((frame) => gap(frame) !== null)?.marks;
+  const support = gap === ankleGap ? first?.['ankle-support'] : undefined;
+  return Math.hypot(first?.['ankle-lifted']?.error ?? 0, support?.error ?? 0);
 };
 
 const pelvisU = ({ marks }: LevelFrame): number | null => {
@@ -37,17 +45,26 @@ const pelvisU = ({ marks }: LevelFrame): number | null => {
 
 const present = (value: number | null): value is number => value !== null;
 
-/** Values of the first 300 ms that carry one, or of the first three frames that do. */
-const firstValues = (
-  frames: readonly LevelFrame[],
-  read: (frame: LevelFrame) => number | null,
-): readonly number[] => {
+/** The frames of the first 300 ms that carry a value, or the first three frames that do. */
+const firstFrames = (frames: readonly LevelFrame[], read: Gap): readonly LevelFrame[] => {
   const start = frames[0]?.time;
   if (start === undefined) return [];
   const known = frames.filter((frame) => read(frame) !== null);
   const early = known.filter((frame) => frame.time <= start + BASELINE_MS);
-  const chosen = early.length >= LEAST_BASELINE ? early : known.slice(0, LEAST_BASELINE);
-  return chosen.map(read).filter(present);
+  return early.length >= LEAST_BASELINE ? early : known.slice(0, LEAST_BASELINE);
+};
+
+const firstValues = (frames: readonly LevelFrame[], read: Gap): readonly number[] =>
+  firstFrames(frames, read).map(read).filter(present);
+
+/**
+ * Seen from the side, the lifted foot stands in front of the other one and covers its ankle just while both are
+ * still. The lifted ankle then counts alone, in the picture of a camera that does not move.
+ */
+const gapIn = (view: View, standing: readonly LevelFrame[]): Gap => {
+  if (view === 'front' || view === 'back') return ankleGap;
+  const covered = firstFrames(standing, ankleAlone).some((frame) => ankleGap(frame) === null);
+  return covered ? ankleAlone : ankleGap;
 };
 
 /** Height at which the foot counts as off: first reached, and still so at the next mark. */
@@ -83,17 +100,18 @@ const findFootOff = (
 export const findStance = (
   frames: readonly LevelFrame[],
   shared: readonly LevelFrame[] | null,
-  mmPerPx: number,
+  { mmPerPx, camera: { view } }: Pick<Rig, 'mmPerPx' | 'camera'>,
   moved: Partial<RepBoundaries>,
 ): Stance => {
   const standing = shared ?? frames;
-  const gaps = firstValues(standing, ankleGap);
+  const gapOf = gapIn(view, standing);
+  const gaps = firstValues(standing, gapOf);
   const unrest = mmPerPx * (robustSpread(gaps) ?? 0);
-  const calm = Math.max(CONSTANTS.still.value, 3 * mmPerPx * gapError(standing));
+  const calm = Math.max(CONSTANTS.still.value, 3 * mmPerPx * gapError(standing, gapOf));
   // a clip that begins in the middle of a lift has no stance to measure heights from
   const base = gaps.length >= LEAST_BASELINE && unrest <= calm ? median(gaps) : null;
   const height = (frame: LevelFrame): number | null => {
-    const gap = ankleGap(frame);
+    const gap = gapOf(frame);
     return gap === null || base === null ? null : mmPerPx * (base - gap);
   };
   const spread = Math.max(LEAST_SPREAD_MM, unrest);
