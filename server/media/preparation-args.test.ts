@@ -32,10 +32,10 @@ describe('preparation', () => {
     const { graph, outputs } = preparationJob(plan);
     expect(graph.split(';')).toEqual([
       '[0:1]setpts=PTS-STARTPTS,format=yuv420p,setsar=1,split=2[bench][r]',
-      '[r]scale=540:960,setsar=1,split=3[replay][p][s]',
+      '[r]scale=540:960:flags=bilinear,setsar=1,split=3[replay][p][s]',
       `[p]select='eq(n,0)+eq(n,150)',scale=360:640,setsar=1,settb=1/1,setpts=N[poster]`,
       expect.stringMatching(
-        /^\[s\]select='eq\(n,0\)\+eq\(n,6\)\+.*tile=24x1:overlap=23:init_padding=23\[strip\]$/,
+        /^\[s\]select='eq\(n,0\)\+eq\(n,6\)\+.*tile=24x1:overlap=23:init_padding=23,select='eq\(n,0\)\+eq\(n,24\)'\[strip\]$/,
       ),
     ]);
     expect(outputs.map((output) => output.path)).toEqual([

@@ -1,7 +1,8 @@
 import { Client } from 'pg';
 import { asAdmin } from '#tests/support/admin.ts';
 import type { BenchEntry } from '../entry.ts';
-import { median, serve, timed, type Served } from '../server/served.ts';
+import { median } from '../median.ts';
+import { serve, timed, type Served } from '../server/served.ts';
 
 const CLIPS = 10_000;
 const MARKED_FRAMES = 4;

@@ -4,7 +4,8 @@ import { deriveReading } from '#shared/reading/derive.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { goldenClip } from '#tests/support/golden.ts';
 import type { BenchEntry } from '../entry.ts';
-import { median, serve, timed } from '../server/served.ts';
+import { median } from '../median.ts';
+import { serve, timed } from '../server/served.ts';
 
 const rounds = 15;
 

@@ -54,6 +54,3 @@ export const timed = async (work: () => Promise<unknown>): Promise<number> => {
   await work();
   return performance.now() - before;
 };
-
-export const median = (values: readonly number[]): number =>
-  [...values].sort((a, b) => a - b)[values.length >> 1] ?? NaN;

@@ -1,12 +1,6 @@
 import type { BenchResult } from '../entry.ts';
+import { quantile } from '../median.ts';
 import type { SideBySide } from './page.ts';
-
-const at = (values: readonly number[], share: number): number | null => {
-  const sorted = [...values].sort((a, b) => a - b);
-  return sorted[Math.min(sorted.length - 1, Math.floor(share * sorted.length))] ?? null;
-};
-
-export const median = (values: readonly number[]): number | null => at(values, 0.5);
 
 const round = (value: number | null): number | null =>
   value === null ? null : Math.round(value * 100) / 100;
@@ -16,8 +10,8 @@ const round = (value: number | null): number | null =>
  * a wrong frame is not fast.
  */
 export const compare = ({ ours, browser }: SideBySide, bytes: number): BenchResult => {
-  const a = median(ours.presented);
-  const b = median(browser.presented);
+  const a = quantile(ours.presented, 0.5);
+  const b = quantile(browser.presented, 0.5);
   if (a === null) throw new Error('nothing of ours could be measured');
   return {
     ratio: b === null || ours.wrong > 0 ? null : a / b,
@@ -26,10 +20,10 @@ export const compare = ({ ours, browser }: SideBySide, bytes: number): BenchResu
     info: {
       unit: 'ms',
       requests: ours.presented.length + ours.wrong,
-      'p95 ours': round(at(ours.presented, 0.95)),
-      'p95 browser': round(at(browser.presented, 0.95)),
-      'ready ours': round(median(ours.ready)),
-      'ready browser': round(median(browser.ready)),
+      'p95 ours': round(quantile(ours.presented, 0.95)),
+      'p95 browser': round(quantile(browser.presented, 0.95)),
+      'ready ours': round(quantile(ours.ready, 0.5)),
+      'ready browser': round(quantile(browser.ready, 0.5)),
       'wrong frames ours': ours.wrong,
       'wrong or late frames browser': browser.wrong,
       'copy MB': Math.round(bytes / 1e6),
