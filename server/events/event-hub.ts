@@ -1,6 +1,6 @@
 import type { UserActor } from '#shared/access/actors.ts';
 import { can } from '#shared/access/can.ts';
-import type { ToldEvent } from './tell.ts';
+import type { LiveEvent, ToldEvent } from './tell.ts';
 
 /** How many past events a stream that was cut can still be told of. */
 const REMEMBERED = 500;
@@ -20,6 +20,9 @@ const mayHear = ({ actor, sessionId }: Ear, { practiceId, scope }: ToldEvent): b
   return can(actor, 'athlete.read', { kind: 'caseload', practiceId, coachId: scope.coachId });
 };
 
+/** Said anew while it lasts: no use to a stream that comes back, so neither remembered nor numbered. */
+export const isFleeting = ({ type }: LiveEvent): boolean => type === 'here';
+
 /** The open streams of this process, and the last events for those that come back. */
 export class EventHub {
   readonly #listeners = new Set<Listener>();
@@ -27,7 +30,7 @@ export class EventHub {
 
   /** Takes in an event, from whichever process it came. */
   publish(event: ToldEvent): void {
-    this.#past = [...this.#past.slice(-(REMEMBERED - 1)), event];
+    if (!isFleeting(event.event)) this.#past = [...this.#past.slice(-(REMEMBERED - 1)), event];
     for (const listener of this.#listeners) {
       if (!mayHear(listener, event)) continue;
       listener.send(event);

@@ -83,6 +83,19 @@ describe('the event hub', () => {
     expect(hub.since('1', ear)).toHaveLength(499);
   });
 
+  it('tells who is on a clip, and does not remember it', () => {
+    const { hub, heard } = listening();
+    hub.publish(event('1'));
+    hub.publish({
+      ...event('2'),
+      event: { type: 'here', clipId: 'c', by: { id: 'wren', name: 'Wren' }, here: true },
+    });
+    hub.publish(event('3'));
+    expect(heard.filter((name) => name === 'supervisor')).toHaveLength(3);
+    const ear = { actor: PEOPLE.owner, sessionId: 's' };
+    expect(hub.since('1', ear)?.map(({ id }) => id)).toEqual(['3']);
+  });
+
   it('forgets a stream that was closed', () => {
     const { hub, heard } = listening();
     const remove = hub.add({

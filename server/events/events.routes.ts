@@ -1,7 +1,7 @@
 import type { Response } from 'express';
 import { routes } from '#shared/contracts/routes.ts';
 import type { Feature } from '../main/feature.ts';
-import type { Listener } from './event-hub.ts';
+import { isFleeting, type Listener } from './event-hub.ts';
 import type { LiveEvent, ToldEvent } from './tell.ts';
 
 const HEARTBEAT_MS = 20_000;
@@ -26,7 +26,7 @@ export const eventsFeature: Feature = ({ serve, ground: { events, sessions } }) 
   serve(routes.events, ({ req, res, actor, session }) => {
     openStream(res);
     const send = ({ event, id }: ToldEvent): void => {
-      res.write(frame(event, id));
+      res.write(frame(event, isFleeting(event) ? undefined : id));
     };
     const listener: Listener = {
       actor,

@@ -5,6 +5,8 @@ import { type Api, startApi } from '#tests/support/api.ts';
 import { product } from '../db/in-practice.ts';
 import { Session } from '../features/accounts/session.entity.ts';
 import type { User } from '../features/accounts/user.entity.ts';
+import { makeClip } from '../features/clips/clip.factory.ts';
+import { makeVisit } from '../features/visits/visit.factory.ts';
 import { type LiveEvent, tell } from './tell.ts';
 
 let api: Api;
@@ -101,6 +103,29 @@ describe('the stream of events', () => {
     await hears(supervisor, '"type":"comments"');
     expect(otherCoach.text).not.toContain('comments');
     expect(foreigner.text).not.toContain('comments');
+  });
+
+  it('says who has a clip open to those who may see it, and keeps it from the rest', async () => {
+    const { coach, supervisor, otherCoach, foreignOwner, athlete } = api.world;
+    const clip = await api.ground.inPractice(coach, ({ em }) => {
+      const visit = makeVisit(em, { athlete, coach });
+      return Promise.resolve(makeClip(em, { visit, uploadedBy: coach }));
+    });
+    const [own, other] = await Promise.all(
+      [coach, otherCoach].map(async (user) => listen(await cookieOf(user))),
+    );
+    if (!own || !other) throw new Error('two streams');
+    const path = `/api/clips/${clip.id}/here`;
+    await (await api.as(supervisor)).post(path).send({ here: true }).expect(204);
+    await hears(own, `"type":"here","clipId":"${clip.id}"`);
+    expect(own.text).toContain(`"by":{"id":"${supervisor.id}","name":"${supervisor.name}"}`);
+    expect(own.text).not.toContain(supervisor.email);
+    expect(own.text).not.toContain('id: ');
+    expect(other.text).not.toContain('here');
+    for (const user of [otherCoach, foreignOwner])
+      await (await api.as(user)).post(path).send({ here: true }).expect(404);
+    await (await api.as(supervisor)).post(path).send({ here: false }).expect(204);
+    await hears(own, '"here":false');
   });
 
   it('says nothing of what was rolled back', async () => {

@@ -4,7 +4,7 @@ import { clipWithFrames } from './clips.ts';
 import { comment } from './comments.ts';
 import { frameIndex, id, personRef, side } from './primitives.ts';
 import { mark, rep } from './reps.ts';
-import { json, route } from './route.ts';
+import { json, none, route } from './route.ts';
 
 /** Everything that opening the Bench needs, in one answer; the video comes beside it. */
 export const benchDocument = z
@@ -42,6 +42,17 @@ export const benchRoutes = {
     params: z.object({ id }),
     status: 200,
     answer: json(benchDocument),
+    problems: ['not-found'],
+  }),
+  sayHere: route({
+    method: 'post',
+    path: '/api/clips/:id/here',
+    summary: 'Tell those who may see this clip that one has it open, or has left it. Kept nowhere.',
+    audience: 'staff',
+    params: z.object({ id }),
+    body: z.object({ here: z.boolean() }).meta({ id: 'Here' }),
+    status: 204,
+    answer: none,
     problems: ['not-found'],
   }),
 };

@@ -1,9 +1,12 @@
 import * as z from 'zod';
 import { clipState } from './clips.ts';
-import { id, side } from './primitives.ts';
+import { id, personRef, side } from './primitives.ts';
 import { eventStream, route } from './route.ts';
 
-/** What a tab is told. An event says that something changed, never what it says: the tab asks again. */
+/**
+ * What a tab is told. An event says that something changed, never what it says: the tab asks again. Only who is on
+ * a clip stands in the event itself, because it is kept nowhere.
+ */
 export const liveEvent = z
   .discriminatedUnion('type', [
     z.object({
@@ -17,6 +20,8 @@ export const liveEvent = z
     z.object({ type: z.literal('marks'), clipId: id, repId: id, byUserId: id }),
     z.object({ type: z.literal('comments'), clipId: id, byUserId: id }),
     z.object({ type: z.literal('reading'), visitId: id, side }),
+    /** Somebody has this clip open, or has left it. Said anew while it lasts, and kept nowhere. */
+    z.object({ type: z.literal('here'), clipId: id, by: personRef, here: z.boolean() }),
     z.object({ type: z.literal('signed-out') }),
     /** Told after a gap: events may have been missed, so ask again for all that is shown. */
     z.object({ type: z.literal('missed') }),

@@ -16,7 +16,14 @@ type Relaxed<T> = T extends { query: infer Q }
 /** What a route wants: its parameters, query and body as the contract takes them. */
 export type CallInput<R extends Route> = PartOf<R, 'params'> &
   Relaxed<PartOf<R, 'query'>> &
-  PartOf<R, 'body'> & { signal?: AbortSignal };
+  PartOf<R, 'body'> &
+  Manner;
+
+interface Manner {
+  signal?: AbortSignal;
+  /** Goes out even while the page is being left. */
+  keepalive?: boolean;
+}
 /** What a route answers; nothing for 204. */
 export type CallAnswer<R extends Route> = R['answer'] extends { kind: 'json'; schema: infer S }
   ? z.output<S>
@@ -26,13 +33,12 @@ type Parts = {
   params?: Record<string, unknown>;
   query?: Record<string, unknown>;
   body?: unknown;
-  signal?: AbortSignal;
-};
+} & Manner;
 
 /** The address of a route, for a picture's or a video's `src`. */
 export const addressOf = <R extends Route>(
   route: R,
-  input: Omit<CallInput<R>, 'body' | 'signal'>,
+  input: Omit<CallInput<R>, 'body' | keyof Manner>,
 ): string => {
   const parts: Parts = input;
   return fillPath(route.path, parts.params) + queryString(parts.query);
@@ -44,7 +50,7 @@ export const addressOf = <R extends Route>(
  */
 export async function call<R extends Route>(route: R, input: CallInput<R>): Promise<CallAnswer<R>>;
 export async function call(route: Route, input: Parts): Promise<unknown> {
-  const { params, query, body, signal } = input;
+  const { params, query, body, signal, keepalive } = input;
   const response = await reach(fillPath(route.path, params) + queryString(query), {
     method: route.method.toUpperCase(),
     credentials: 'same-origin',
@@ -54,6 +60,7 @@ export async function call(route: Route, input: Parts): Promise<unknown> {
     },
     body: body === undefined ? undefined : JSON.stringify(body),
     signal,
+    keepalive,
   });
   if (!response.ok) throw await problemOf(response);
   if (route.answer.kind !== 'json') return undefined;

@@ -53,6 +53,9 @@ export function refresh(client: QueryClient, event: Exclude<LiveEvent, { type: '
       if (event.byUserId !== me?.user.id) invalidate(benchOptions(event.clipId).queryKey);
       invalidate(todayQuery.queryKey);
       break;
+    case 'here':
+      // for the Bench alone, which hears it itself
+      break;
     case 'reading':
       invalidate(sidesKey(event.visitId));
       invalidate(todayQuery.queryKey);

@@ -34,6 +34,7 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   listMarks: 'rep',
   saveMarks: 'rep',
   bench: 'clip',
+  sayHere: 'clip',
   listCalls: 'visit',
   recordCall: 'visit',
   sideReading: 'visit',
@@ -91,6 +92,7 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   setAssumption: { on: true },
   addComment: { body: 'x', fromFrame: 0, toFrame: 0 },
   editComment: { body: 'x' },
+  sayHere: { here: true },
 };
 
 /** A thing of each kind that a route can name. */

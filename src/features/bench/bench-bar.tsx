@@ -4,6 +4,7 @@ import { paths } from '#src/ui/paths.ts';
 import { clipWords, supportWords, VIEW_WORDS } from '#src/ui/words.ts';
 import { useUndo } from './actions/use-undo.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from './bench-context.ts';
+import { OthersLine } from './others/others-line.tsx';
 import { SaveState } from './save-state.tsx';
 import type { Desk } from './store/bench-store.ts';
 import { MARK } from './store/tools.ts';
@@ -51,7 +52,8 @@ export function BenchBar() {
           {narrow ? `${athlete.name}, ${short}` : what}
         </h1>
       </nav>
-      <div className="ml-auto flex items-center gap-1">
+      <div className="bench-bar-end">
+        <OthersLine />
         <div className="hidden tablet:block">
           <SaveState />
         </div>
