@@ -1,4 +1,6 @@
 import { type FileHandle, open } from 'node:fs/promises';
+import { isMatroska, scrubMatroska } from './scrub-matroska.ts';
+import { zeroFill } from './zero-fill.ts';
 
 /**
  * Boxes that describe an MP4 or MOV to people: where it was filmed, with which phone, by whom. None of them carries
@@ -10,7 +12,6 @@ const DESCRIBING = new Set(['udta', 'meta', 'uuid']);
 const HOLDING = new Set(['moov', 'trak', 'mdia', 'moof', 'traf']);
 /** Free space: readers pass over it (ISO/IEC 14496-12, 8.1.2). */
 const FREE = Buffer.from('free', 'latin1');
-const ZEROES = Buffer.alloc(64 * 1024);
 
 interface Box {
   readonly type: string;
@@ -33,8 +34,7 @@ const boxAt = async (file: FileHandle, start: number, limit: number): Promise<Bo
 };
 
 const blank = async (file: FileHandle, { start, body, end }: Box): Promise<void> => {
-  for (let at = body; at < end; at += ZEROES.length)
-    await file.write(ZEROES, 0, Math.min(ZEROES.length, end - at), at);
+  await zeroFill(file, body, end);
   await file.write(FREE, 0, 4, start + 4);
 };
 
@@ -53,14 +53,17 @@ const scrubBoxes = async (file: FileHandle, from: number, to: number): Promise<n
 };
 
 /**
- * Takes the descriptions out of an MP4 or MOV in place, location included; frames and their times stay to the
- * byte. Other files are left alone. Running it again changes nothing.
- * @returns how many boxes were blanked
+ * Takes the descriptions out of an MP4, MOV, Matroska or WebM in place, location included; frames and their times
+ * stay to the byte. Other files are left alone. Running it again changes nothing.
+ * @returns how many boxes or elements were blanked
  */
 export const scrubLocation = async (path: string): Promise<number> => {
   const file = await open(path, 'r+');
   try {
     const { size } = await file.stat();
+    const start = Buffer.alloc(4);
+    const { bytesRead } = await file.read(start, 0, 4, 0);
+    if (isMatroska(start.subarray(0, bytesRead))) return await scrubMatroska(file, size);
     const first = await boxAt(file, 0, size);
     const isMp4 = first !== null && ['ftyp', 'moov', 'wide', 'mdat', 'free'].includes(first.type);
     return isMp4 ? await scrubBoxes(file, 0, size) : 0;
