@@ -1,4 +1,4 @@
-import { expect, type Page } from '@playwright/test';
+import { type APIRequestContext, expect, type Page, request as requests } from '@playwright/test';
 import { routes } from '#shared/contracts/routes.ts';
 import type { App } from '../../support/app.ts';
 import { ask } from './ask.ts';
@@ -19,4 +19,16 @@ export async function signInByForm(page: Page, app: App, email: string): Promise
 /** Gives the page's context a session; for journeys that are not about signing in. */
 export async function signIn(page: Page, app: App, email: string): Promise<void> {
   await ask(page.request, routes.signIn, { body: { email, password: app.demoPassword } });
+}
+
+/** A session without a page, for what is looked up or made on the side. */
+export async function sessionOf(app: App, email: string): Promise<APIRequestContext> {
+  const session = await requests.newContext({ baseURL: app.url });
+  await ask(session, routes.signIn, { body: { email, password: app.demoPassword } });
+  return session;
+}
+
+/** Opens the page's context to the person of a session, so that nobody signs in twice. */
+export async function carryOn(page: Page, session: APIRequestContext): Promise<void> {
+  await page.context().addCookies((await session.storageState()).cookies);
 }

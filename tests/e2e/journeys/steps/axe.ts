@@ -1,0 +1,19 @@
+import { AxeBuilder } from '@axe-core/playwright';
+import { expect, type Page } from '@playwright/test';
+
+/** WCAG 2.2 up to AA, with all that it builds on. */
+const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
+
+/** Nothing for axe to find on the page as it stands, and nothing wider than the screen. */
+export async function expectAccessible(page: Page, state: string): Promise<void> {
+  const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
+  const said = violations.flatMap(({ id, nodes }) =>
+    nodes.map(({ target, failureSummary }) => `${id}: ${target.join(' ')}: ${failureSummary}`),
+  );
+  expect.soft(said, state).toEqual([]);
+  const { scrolled, shown } = await page.evaluate(() => ({
+    scrolled: document.documentElement.scrollWidth,
+    shown: document.documentElement.clientWidth,
+  }));
+  expect.soft(scrolled, `${state}: width of the page`).toBe(shown);
+}

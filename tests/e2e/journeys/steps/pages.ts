@@ -1,0 +1,216 @@
+import type { Locator, Page } from '@playwright/test';
+import { paths } from '#src/ui/paths.ts';
+import { COACH, SUPERVISOR } from './people.ts';
+import type { Shown } from './shown.ts';
+
+/** A page in one of its states, and what it says once it stands. */
+export interface PageOfProduct {
+  readonly name: string;
+  /** Who opens it; null: nobody is signed in. */
+  readonly who: string | null;
+  readonly address: (shown: Shown) => string;
+  readonly stands: (page: Page) => Locator;
+  /** Lines of the browser's console that belong to it. */
+  readonly says?: RegExp;
+}
+
+const heading = (name: string | RegExp) => (page: Page) =>
+  page.getByRole('heading', { level: 1, name });
+const text = (words: string | RegExp) => (page: Page) => page.getByText(words).first();
+const clip = (page: Page) => page.locator('canvas[data-frame]');
+const pathOf = (link: string) => new URL(link).pathname;
+
+const FRONT: readonly PageOfProduct[] = [
+  {
+    name: 'the sign-in page',
+    who: null,
+    address: () => paths.signIn(),
+    stands: heading('Sign in'),
+  },
+  {
+    name: 'Today of a coach',
+    who: COACH,
+    address: () => paths.today(),
+    stands: text(/things wait for you/),
+  },
+  {
+    name: 'Today of a supervisor',
+    who: SUPERVISOR,
+    address: () => paths.today(),
+    stands: text(/wait/),
+  },
+  {
+    name: 'a page that does not exist',
+    who: COACH,
+    address: () => '/nowhere',
+    stands: heading('Nothing here'),
+  },
+  {
+    name: 'the method',
+    who: COACH,
+    address: () => paths.method(),
+    stands: heading(/./),
+  },
+  {
+    name: 'the set-ups',
+    who: COACH,
+    address: () => paths.setUps(),
+    stands: text('not used yet'),
+  },
+];
+
+const ATHLETES: readonly PageOfProduct[] = [
+  {
+    name: 'the athletes',
+    who: COACH,
+    address: () => paths.athletes(),
+    stands: text(/^\d+ athletes$/),
+  },
+  {
+    name: 'a search that finds nobody',
+    who: COACH,
+    address: () => `${paths.athletes()}?q=zzz`,
+    stands: text('Nobody fits'),
+  },
+  {
+    name: 'the form for an athlete',
+    who: COACH,
+    address: () => paths.newAthlete(),
+    stands: heading('Add an athlete'),
+  },
+  {
+    name: 'an athlete with visits',
+    who: COACH,
+    address: ({ quill }) => paths.athlete(quill.athleteId),
+    stands: text('Recorded by'),
+  },
+  {
+    name: 'an athlete without consent or visit',
+    who: COACH,
+    address: ({ newcomerId }) => paths.athlete(newcomerId),
+    stands: text('No visit yet'),
+  },
+  {
+    name: 'the form that changes an athlete',
+    who: COACH,
+    address: ({ quill }) => paths.editAthlete(quill.athleteId),
+    stands: (page) => page.getByLabel('Given name'),
+  },
+  {
+    name: 'the form for a consent',
+    who: COACH,
+    address: ({ newcomerId }) => paths.newConsent(newcomerId),
+    stands: heading('Record a consent'),
+  },
+  {
+    name: 'the form for a visit',
+    who: COACH,
+    address: ({ beginner }) => paths.newVisit(beginner.athleteId),
+    stands: heading('New visit'),
+  },
+];
+
+const VISITS: readonly PageOfProduct[] = [
+  {
+    name: 'a visit with everything',
+    who: COACH,
+    address: ({ quill }) => paths.visit(quill.visitId),
+    stands: text('Open the Bench'),
+  },
+  {
+    name: 'a visit with the safety check still to do',
+    who: COACH,
+    address: ({ beginner }) => paths.visit(beginner.visitId),
+    stands: (page) => page.getByRole('button', { name: 'Record the safety check' }),
+  },
+  {
+    name: 'a visit whose clips were refused',
+    who: COACH,
+    address: ({ refused }) => paths.visit(refused.visitId),
+    stands: text('refused'),
+  },
+  {
+    name: 'the call by eye',
+    who: COACH,
+    address: ({ brook }) => paths.call(brook.visitId, 'left'),
+    stands: (page) => page.getByRole('button', { name: 'Save the call' }),
+  },
+  {
+    name: 'the Bench',
+    who: COACH,
+    address: ({ quill }) => paths.bench(quill.clipId),
+    stands: clip,
+  },
+  {
+    name: 'the Bench before the call by eye',
+    who: COACH,
+    address: ({ brook }) => `${paths.bench(brook.clipId)}?rep=4`,
+    stands: clip,
+  },
+  {
+    name: 'the Bench of a refused clip',
+    who: COACH,
+    address: ({ refused }) => paths.bench(refused.clipId),
+    stands: text('This clip was refused'),
+  },
+];
+
+const reading = (
+  name: string,
+  said: string,
+  of: Exclude<keyof Shown, 'newcomerId' | 'beginner' | 'setUpId' | 'links'>,
+  side: 'left' | 'right',
+): PageOfProduct => ({
+  name: `a reading: ${name}`,
+  who: COACH,
+  address: (shown) => paths.reading(shown[of].visitId, side),
+  stands: heading(said),
+});
+
+const READINGS: readonly PageOfProduct[] = [
+  reading('turns out early', 'Turns out early', 'quill', 'right'),
+  reading('provisional', 'Turns out early', 'brook', 'right'),
+  reading('turns in on time', 'Turns in on time', 'lindgren', 'left'),
+  reading('can’t tell yet', 'Can’t tell yet', 'weir', 'right'),
+  reading('lift stops short', 'Lift stops short', 'fell', 'left'),
+  reading('not measurable', /Not measurable/.source, 'quillAside', 'right'),
+  {
+    name: 'a reading before its call',
+    who: COACH,
+    address: ({ brook }) => paths.reading(brook.visitId, 'left'),
+    stands: text('The call by eye comes before the figures'),
+    says: /409/,
+  },
+];
+
+const REPLAYS: readonly PageOfProduct[] = [
+  {
+    name: 'a replay',
+    who: null,
+    address: ({ links }) => pathOf(links.open),
+    stands: heading('Your right hip turns out early'),
+  },
+  {
+    name: 'a replay behind a pass phrase',
+    who: null,
+    address: ({ links }) => pathOf(links.locked),
+    stands: heading('Your replay asks for a pass phrase'),
+    says: /401/,
+  },
+  {
+    name: 'a replay that was ended',
+    who: null,
+    address: ({ links }) => pathOf(links.ended),
+    stands: heading('This link no longer opens anything'),
+    says: /404/,
+  },
+];
+
+/** Every page of the product, in the order of the job. */
+export const PAGES: readonly PageOfProduct[] = [
+  ...FRONT,
+  ...ATHLETES,
+  ...VISITS,
+  ...READINGS,
+  ...REPLAYS,
+];
