@@ -98,6 +98,41 @@ describe('a measured reading', () => {
     expect(screen.queryByRole('region', { name: 'What would settle it' })).toBeNull();
   });
 
+  it('gives pelvis and thigh of each rep their own ±, wider than that of all reps together', async () => {
+    const result = resultOf('g02_early_mid_3rep');
+    readingApi(aSidePage(aReading(result)));
+    renderAt(address);
+    const parts = within(await region('Pelvis and thigh'));
+    const rows = parts.getAllByRole('row').slice(1);
+    expect(rows).toHaveLength(3);
+    const halves = rows.flatMap((row) =>
+      [...(row.textContent ?? '').matchAll(/±\s*(\d+\.\d)/g)].map(([, text]) => Number(text)),
+    );
+    expect(halves).toHaveLength(9);
+    const together = 1.96 * Math.hypot(result.figures?.pelvis.u ?? 0, result.figures?.uS ?? 0);
+    for (const half of halves) expect(half).toBeGreaterThan(together - 0.05);
+    expect(
+      parts.getByText(/From 60° to 90° the pelvis turns .+ by \d+\.\d° ± \d+\.\d/),
+    ).toBeVisible();
+  });
+
+  it('of a clip from the lifted side says that the pelvis is not seen from there', async () => {
+    const result = resultOf('g02_early_mid_3rep');
+    const why = [{ code: 'view-cannot-show-turn', view: 'lifted-side' } as const];
+    const reps = result.reps.map((rep) => ({
+      ...rep,
+      used: false,
+      fit: null,
+      why,
+      substitutions: [],
+    }));
+    readingApi(aSidePage(aReading({ ...result, code: 'not-measurable', figures: null, reps })));
+    renderAt(address);
+    const section = within(await region('Substitutions'));
+    expect(section.getByText(/not seen from the lifted side/)).toBeVisible();
+    expect(section.queryByText(/not seen from the front/)).toBeNull();
+  });
+
   it('says why a rep was left out, and keeps it open to be looked at', async () => {
     const result = resultOf('g02_early_mid_3rep');
     const reps = result.reps.map((rep, n) =>

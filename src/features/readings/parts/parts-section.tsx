@@ -3,11 +3,12 @@ import type { Side } from '#shared/contracts/primitives.ts';
 import type { ReadingFigures } from '#shared/reading/types.ts';
 import { turnDial } from '#shared/overlay/dials.ts';
 import { OverlaySvg } from '#src/canvas/overlay-svg.tsx';
-import { degrees, turn } from '#src/ui/figures.ts';
+import { degrees, plusMinus, turn } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { SideMark } from '#src/ui/side-mark.tsx';
-import { isTold } from './part-half-width.ts';
+import { isTold, partHalfWidth } from './part-half-width.ts';
 import { partsAtGates, type Parts } from './parts-at-gates.ts';
+import { RepParts } from './rep-parts.tsx';
 
 /** Where the turn comes from: pelvis over a planted thigh, or the thigh itself, drawn from above. */
 export function PartsSection({ reading }: { reading: Reading }) {
@@ -36,6 +37,7 @@ export function PartsSection({ reading }: { reading: Reading }) {
         <GateDial name="At 90° of lift" parts={parts.at90} side={side} provisional={provisional} />
       </div>
       <p className="mt-4 max-w-lead">{partsSentence(figures)}</p>
+      <RepParts reading={reading} />
     </Section>
   );
 }
@@ -44,10 +46,10 @@ const partsSentence = (figures: ReadingFigures): string => {
   const { pelvis, thigh } = figures;
   const swing = pelvis.value > 0 ? 'away from the support side' : 'towards the support side';
   const first = isTold(figures, pelvis)
-    ? `From 60° to 90° the pelvis turns ${swing} by ${degrees(Math.abs(pelvis.value))}.`
+    ? `From 60° to 90° the pelvis turns ${swing} by ${degrees(Math.abs(pelvis.value))} ${plusMinus(partHalfWidth(figures, pelvis))}.`
     : 'From 60° to 90° the pelvis stays within its error.';
   const second = isTold(figures, thigh)
-    ? `The planted thigh turns ${thigh.value > 0 ? 'outwards' : 'inwards'} by ${degrees(Math.abs(thigh.value))}.`
+    ? `The planted thigh turns ${thigh.value > 0 ? 'outwards' : 'inwards'} by ${degrees(Math.abs(thigh.value))} ${plusMinus(partHalfWidth(figures, thigh))}.`
     : 'The planted thigh stays within its error.';
   return `${first} ${second}`;
 };

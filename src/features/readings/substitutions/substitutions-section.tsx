@@ -1,5 +1,7 @@
 import { Link } from 'react-router-dom';
+import type { View } from '#shared/contracts/primitives.ts';
 import type { Reading } from '#shared/contracts/readings.ts';
+import type { ReadingResult } from '#shared/reading/types.ts';
 import { decimal, degrees, turn } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
@@ -74,6 +76,25 @@ const COLUMNS: readonly Column<ChangeRow>[] = [
   },
 ];
 
+/** Why the tilt of the pelvis is not known, by where the camera stood. */
+const NO_TILT: Readonly<Record<View, string>> = {
+  front: 'not seen from the front; film the support side to rule it in or out.',
+  back: 'not seen from behind; film the support side to rule it in or out.',
+  'lifted-side': 'not seen from the lifted side; film the support side to rule it in or out.',
+  'support-side':
+    'mark the front and the back corner of the hip bone, in quiet stance and at the top.',
+};
+
+/** Where every rep of the side was filmed from, unless one of them shows the turn. */
+const viewOf = ({ reps }: ReadingResult): View => {
+  const views = reps.map(({ why }) => {
+    const fault = why.find(({ code }) => code === 'view-cannot-show-turn');
+    return fault?.code === 'view-cannot-show-turn' ? fault.view : 'front';
+  });
+  if (views.includes('support-side')) return 'support-side';
+  return views.includes('front') ? 'front' : (views[0] ?? 'front');
+};
+
 /** What else moved, each change against what can be told from none. */
 export function SubstitutionsSection({ reading }: { reading: Reading }) {
   const rows = changeRows(reading.result);
@@ -94,9 +115,11 @@ export function SubstitutionsSection({ reading }: { reading: Reading }) {
       )}
       {(!tilt || tilt.change === null) && (
         <p className="mt-4 max-w-lead">
-          <b>Pelvic tilt:</b> not seen from the front; film the support side to rule it in or out. A
-          pelvis tipped forward would make turning out harder, so the two are read together.{' '}
-          <Link to={paths.visit(reading.visitId)}>Film it</Link>
+          <b>Pelvic tilt:</b> {NO_TILT[viewOf(reading.result)]} A pelvis tipped forward would make
+          turning out harder, so the two are read together.{' '}
+          {viewOf(reading.result) !== 'support-side' && (
+            <Link to={paths.visit(reading.visitId)}>Film it</Link>
+          )}
         </p>
       )}
     </Section>

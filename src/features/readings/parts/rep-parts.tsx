@@ -1,0 +1,61 @@
+import type { Reading } from '#shared/contracts/readings.ts';
+import type { Change, RepFit, RepResult } from '#shared/reading/types.ts';
+import { capital, plusMinus, turn } from '#src/ui/figures.ts';
+import { type Column, Table } from '#src/ui/table.tsx';
+import { drawnReps, repHalfWidth } from '../course/course-data.ts';
+import { repName } from '../words/rep-names.ts';
+import { repPartHalfWidth } from './part-half-width.ts';
+
+interface Row {
+  readonly name: string;
+  readonly rep: RepResult;
+  readonly fit: RepFit;
+}
+
+function Figure({ label, value, half }: { label: string; value: number; half: number }) {
+  return (
+    <span className="whitespace-nowrap">
+      <span className="text-soft tablet:hidden">{label} </span>
+      {turn(value)} <span className="text-soft">{plusMinus(half)}</span>
+    </span>
+  );
+}
+
+const part = (label: string, of: (fit: RepFit) => Change): Column<Row> => ({
+  key: label,
+  label,
+  cell: ({ rep, fit }) => (
+    <Figure label={label} value={of(fit).value} half={repPartHalfWidth(rep, of(fit))} />
+  ),
+});
+
+const COLUMNS: readonly Column<Row>[] = [
+  { key: 'rep', label: 'From 60° to 90°, ± 95 %', cell: ({ name }) => name },
+  {
+    key: 'turn',
+    label: 'turn',
+    cell: ({ rep, fit }) => (
+      <Figure label="turn" value={fit.change.value} half={repHalfWidth(rep)} />
+    ),
+  },
+  part('pelvis', ({ pelvis }) => pelvis),
+  part('thigh', ({ thigh }) => thigh),
+];
+
+/** What pelvis and thigh did in each rep; a single rep is wider than all of them together. */
+export function RepParts({ reading }: { reading: Reading }) {
+  const rows = drawnReps(reading.result.reps).flatMap((rep): Row[] =>
+    rep.fit ? [{ name: capital(repName(reading, rep.id)), rep, fit: rep.fit }] : [],
+  );
+  if (rows.length === 0) return null;
+  return (
+    <div className="mt-5 max-w-lead">
+      <Table
+        caption="Parts of the turn, rep by rep"
+        columns={COLUMNS}
+        rows={rows}
+        rowKey={({ rep }) => rep.id}
+      />
+    </div>
+  );
+}
