@@ -69,6 +69,10 @@ function NotReady({ document }: { document: BenchDocument }) {
         <Empty title="This clip was refused" action={back}>
           {refusal?.sentence ?? 'It holds no pictures that could be shown.'}
         </Empty>
+      ) : clip.trouble ? (
+        <Empty title="This clip could not be prepared" action={back}>
+          {clip.trouble.sentence} The visit says when it is tried again.
+        </Empty>
       ) : (
         <Empty title="This clip is being prepared" action={back}>
           <p role="status">
