@@ -48,7 +48,7 @@ export function KeyHints() {
           onClick={() => store.setState({ keysOpen: true })}
           className="min-h-[24px] text-ink underline underline-offset-[3px]"
         >
-          All keys
+          all keys
         </button>
       </p>
     </div>
