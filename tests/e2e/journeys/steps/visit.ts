@@ -80,9 +80,8 @@ export async function writeFigures(page: Page): Promise<void> {
 export const clipRow = (page: Page): Locator =>
   page.getByRole('list', { name: 'Clips of this visit' }).getByRole('listitem');
 
-/** Chooses the .mov, looks at what the page says of it, sends it on a poor line and waits until it is prepared. */
-export async function uploadClip(page: Page): Promise<string> {
-  const line = await page.context().newCDPSession(page);
+/** Chooses the .mov, looks at what the page says of it, and says which leg it shows. */
+export async function chooseClip(page: Page): Promise<Locator> {
   const [chooser] = await Promise.all([
     page.waitForEvent('filechooser'),
     page.getByRole('button', { name: 'Choose files' }).click(),
@@ -91,6 +90,13 @@ export async function uploadClip(page: Page): Promise<string> {
   const row = clipRow(page);
   await expect(row).toContainText('about 60 frames per second, varying, 1080 × 1920, 15.0 s: good');
   await row.getByRole('radiogroup', { name: 'Stands on' }).getByLabel('Right').check();
+  return row;
+}
+
+/** Sends the .mov on a poor line and waits until it is prepared. */
+export async function uploadClip(page: Page): Promise<string> {
+  const line = await page.context().newCDPSession(page);
+  const row = await chooseClip(page);
 
   await line.send('Network.emulateNetworkConditions', {
     offline: false,
