@@ -36,7 +36,12 @@ export default ts.config(
   },
   { files: ['src/**/*.{ts,tsx}'], ...hooks.configs.flat['recommended-latest'] },
   {
-    files: ['docker-free-scripts/**', 'tests/bench/**', 'tests/study/cli.ts', 'shared/evaluate/cli.ts'],
+    files: [
+      'docker-free-scripts/**',
+      'tests/bench/**',
+      'tests/study/cli.ts',
+      'shared/evaluate/cli.ts',
+    ],
     rules: { 'no-console': 'off' },
   },
   { files: ['migrations/**'], rules: { '@typescript-eslint/require-await': 'off' } },

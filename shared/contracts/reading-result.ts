@@ -1,5 +1,6 @@
 import * as z from 'zod';
 import type { Degrees } from '#shared/geometry/units.ts';
+import { ENGINES } from '#shared/reading/engine.ts';
 import type { ReadingResult } from '#shared/reading/types.ts';
 import { READING_CODES } from '#shared/reading/types.ts';
 import type { FrameIndex, Milliseconds } from '#shared/timing/units.ts';
@@ -124,7 +125,7 @@ const repResult = z
 /** The engine's whole answer, as shared/reading describes it field by field. */
 export const readingResult = z
   .object({
-    engine: z.literal(1),
+    engine: z.literal(ENGINES),
     inputHash: z.string(),
     supportSide: side,
     set: readingSet.nullable(),

@@ -16,7 +16,7 @@ const constant = (value: number, unit: string, meaning: string, source: string):
   source,
 });
 
-/** Every number of engine 1 that does not follow from geometry. Shown on the method page. */
+/** Every number of the engines that does not follow from geometry. Shown on the method page. */
 export const CONSTANTS = {
   hipInward: constant(
     0.14,
@@ -52,6 +52,15 @@ export const CONSTANTS = {
   corner: constant(5, 'degrees', 'half-width of the rounded corners of the fit', MODEL),
   repSpread: constant(1.5, 'degrees', 'spread of true turn between reps of one person', MODEL),
   thighSpread: constant(4, 'degrees', 'SD of the planted thigh’s turn under the assumption', MODEL),
+  turnReach: constant(20, 'degrees', 'lift over which the speed of turning stays alike', MODEL),
+  wholeBody: constant(
+    2,
+    'degrees',
+    'SD by which the whole body turns over the foot per 30°',
+    MODEL,
+  ),
+  trackedFor: constant(500, 'ms', 'time over which a tracked mark keeps its error', MODEL),
+  stanceSpread: constant(1, 'degrees', 'SD between the zero of a quiet stance and its rise', MODEL),
   prior: constant(8, 'degrees', 'SD of the weak prior of the change of turn', MODEL),
   uncertainLimit: constant(6, 'degrees', 'standard uncertainty above which nothing is read', MODEL),
   gateFrom: constant(60, 'degrees', 'lift from which the change of turn counts', PRACTICE),
@@ -65,6 +74,21 @@ export const SYSTEMATIC = {
   'belt+thigh': { u: 1.6, q: 0.05 },
   'belt+assumption': { u: 1.6, q: 0.06 },
 } as const;
+
+/**
+ * Engine 2: standard deviation of the change of a segment's direction from 60° to 90° that is its
+ * skin's or strap's, degrees. Both of a set make about the systematic error of engine 1; a little
+ * more where skin moves most, so that false early calls stay rare. From our model, no source.
+ */
+export const SEGMENT_SLIP = {
+  outline: 2.0,
+  belt: 1.2,
+  kneecap: 2.3,
+  'thigh-pointer': 1.13,
+} as const;
+
+/** Part of a slip's variance that all reps of a person share; the rest differs from rep to rep. */
+export const SLIP_SHARED = 0.7;
 
 /** Forms and the API take a thigh pointer's length from the skin to its tip, mm. */
 export const thighPointerFromSkin = (skinToTipMm: number): number =>

@@ -18,6 +18,8 @@ export interface Turn {
   readonly zeroVariance: number;
   readonly thighVariance: number;
   readonly pelvisVariance: number;
+  /** What of `variance` is the thigh's. */
+  readonly thighFrameVariance: number;
 }
 
 const DEGREES2 = (180 / Math.PI) ** 2;
@@ -47,6 +49,7 @@ export const turnOf = (frame: LevelFrame, setting: Setting): Turn | Missing => {
     zeroVariance: (zero.femurVariance + zero.pelvisVariance) * DEGREES2,
     thighVariance: (femur.variance + zero.femurVariance) * DEGREES2,
     pelvisVariance: (pelvis.variance + zero.pelvisVariance) * DEGREES2,
+    thighFrameVariance: femur.variance * DEGREES2,
   };
 };
 

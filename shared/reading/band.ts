@@ -55,29 +55,17 @@ const randomSpread = (fits: readonly DrawnFit[], lift: Degrees, lambda: number):
   );
 };
 
-/**
- * The drawn course: weighted mean of the fits. Its band (95 %, under our error model) judges the
- * change from 60°: it is closed there, and at 90° exactly d ± 1.96 u around the value at 60°.
- */
-export const courseCurve = (
-  fits: readonly DrawnFit[],
-  { uR, uS, lambda }: BandWidths,
+/** A course from its turn and its standard uncertainty at each whole degree between marked lifts. */
+export const bandOf = (
+  lifts: readonly Degrees[],
+  at: (lift: Degrees) => { readonly turn: number; readonly u: number },
 ): readonly CurvePoint[] => {
-  const lifts = fits.flatMap((fit) => fit.lifts);
   if (lifts.length === 0) return [];
-  const low = Math.ceil(Math.min(...lifts));
   const high = Math.floor(Math.max(...lifts));
-  const scale = uR / randomSpread(fits, TO, lambda);
-  if (!Number.isFinite(scale)) return [];
   const curve: CurvePoint[] = [];
-  for (let at = low; at <= high; at += STEP) {
-    const lift = degrees(at);
-    const x = terms(lift);
-    const turn = fits.reduce(
-      (sum, fit) => sum + fit.share * (lambda * dot(x, fit.thigh) + dot(x, fit.pelvis)),
-      0,
-    );
-    const u = Math.hypot(scale * randomSpread(fits, lift, lambda), uS * grown(lift));
+  for (let whole = Math.ceil(Math.min(...lifts)); whole <= high; whole += STEP) {
+    const lift = degrees(whole);
+    const { turn, u } = at(lift);
     curve.push({
       lift,
       turn: degrees(turn),
@@ -87,4 +75,29 @@ export const courseCurve = (
     });
   }
   return curve;
+};
+
+/**
+ * The drawn course: weighted mean of the fits. Its band (95 %, under our error model) judges the
+ * change from 60°: it is closed there, and at 90° exactly d ± 1.96 u around the value at 60°.
+ */
+export const courseCurve = (
+  fits: readonly DrawnFit[],
+  { uR, uS, lambda }: BandWidths,
+): readonly CurvePoint[] => {
+  const scale = uR / randomSpread(fits, TO, lambda);
+  if (!Number.isFinite(scale)) return [];
+  return bandOf(
+    fits.flatMap((fit) => fit.lifts),
+    (lift) => {
+      const x = terms(lift);
+      return {
+        turn: fits.reduce(
+          (sum, fit) => sum + fit.share * (lambda * dot(x, fit.thigh) + dot(x, fit.pelvis)),
+          0,
+        ),
+        u: Math.hypot(scale * randomSpread(fits, lift, lambda), uS * grown(lift)),
+      };
+    },
+  );
 };

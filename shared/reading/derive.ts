@@ -1,16 +1,17 @@
 import { DRAWS } from '#shared/course/rise-draws.ts';
-import { dot, terms } from '#shared/course/rise-fit.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
 import { SYSTEMATIC } from '#shared/measures/constants.ts';
 import { assess, type Assessed } from './assess.ts';
-import { courseCurve } from './band.ts';
 import { canonicalText } from './canonical.ts';
 import { figuresOf, type Systematic } from './figures.ts';
+import type { EngineVersion } from './engine.ts';
 import type { UsedRep } from './fit-rep.ts';
+import { joinByFit } from './join-by-fit.ts';
+import { joinByProcess } from './join-by-process.ts';
+import type { Joined, Joining } from './joined.ts';
 import { onsetOf } from './onset.ts';
-import { pool } from './pool.ts';
-import { drawnFit, repResult } from './rep-result.ts';
+import { repResult } from './rep-result.ts';
 import { decide, decideWithoutRep } from './rule.ts';
 import { settleOf } from './settle.ts';
 import { hexOf, sha256Words } from './sha256.ts';
@@ -32,28 +33,25 @@ const systematicOf = (
     : assumed;
 };
 
-/** Change of the weighted fit from 90° to the top, over the reps that reach 100°. */
+/** Change from 90° to the top, over the reps that reach 100°. */
 const returnPast90 = (
   used: readonly UsedRep[],
-  shares: readonly number[],
-  lambda: number,
+  { pooled: { shares }, past90 }: Joined,
 ): ReadingResult['returnPast90'] => {
-  const high = used.flatMap(({ course, fitted }, i) =>
-    course.fMax !== null && course.fMax >= RETURN_FROM
-      ? [{ fMax: course.fMax, fit: fitted.fit, share: shares[i] ?? 0 }]
-      : [],
+  const high = used.map(({ course: { fMax } }, i) =>
+    fMax !== null && fMax >= RETURN_FROM ? { fMax, share: shares[i] ?? 0 } : null,
   );
-  const sum = high.reduce((total, { share }) => total + share, 0);
+  const sum = high.reduce((total, rep) => total + (rep?.share ?? 0), 0);
   if (sum === 0) return null;
-  const to = high.reduce((total, { fMax, share }) => total + (fMax * share) / sum, 0);
-  const past = (beta: Parameters<typeof dot>[0]): number =>
-    dot(terms(degrees(to)), beta) - dot(terms(degrees(90)), beta);
-  const change = high.reduce(
-    (total, { fit, share }) =>
-      total + ((past(fit.pelvis) + lambda * past(fit.thigh)) * share) / sum,
-    0,
-  );
-  return { to: degrees(to), change: degrees(change) };
+  const own = high.map((rep) => (rep?.share ?? 0) / sum);
+  const to = degrees(high.reduce((total, rep, i) => total + (rep?.fMax ?? 0) * (own[i] ?? 0), 0));
+  return { to, change: past90(to, own) };
+};
+
+/** Frames that carry no answer together are read as engine 1 does: it needs less of them. */
+const JOIN: Readonly<Record<EngineVersion, (joining: Joining) => Joined>> = {
+  1: joinByFit,
+  2: (joining) => joinByProcess(joining) ?? joinByFit(joining),
 };
 
 /** Reps that could have counted: line 1 looks at their lifts. */
@@ -99,11 +97,9 @@ export const deriveReading = (input: ReadingInput, runs: number = DRAWS): Readin
   }
   const thighTurnsLittle = input.thighTurnsLittle && set === 'belt';
   const systematic = systematicOf(input, set, thighTurnsLittle);
-  const pooled = pool(
-    used.map(({ fitted }) => fitted),
-    thighTurnsLittle,
-  );
-  const figures = figuresOf(pooled, used.length, systematic, thighTurnsLittle);
+  const joined = JOIN[input.engine]({ used, set, thighTurnsLittle, systematic });
+  const { pooled } = joined;
+  const figures = figuresOf(pooled, joined.uncertain, thighTurnsLittle);
   const decision = decide(figures);
   const shareOf = new Map(used.map((rep, i) => [rep, pooled.shares[i] ?? 0]));
   const usedCourses = used.map(({ course }) => course);
@@ -118,11 +114,8 @@ export const deriveReading = (input: ReadingInput, runs: number = DRAWS): Readin
       decision.code === 'early-turn-out'
         ? onsetOf(used.map(({ data, fitted }) => ({ data, sFit: fitted.fit.sFit })))
         : null,
-    returnPast90: returnPast90(used, pooled.shares, pooled.lambda),
-    course: courseCurve(
-      used.map((rep) => drawnFit(rep, shareOf.get(rep) ?? 0)),
-      { uR: figures.uR, uS: figures.uS, lambda: pooled.lambda },
-    ),
+    returnPast90: returnPast90(used, joined),
+    course: joined.course(figures),
     reps: reps.map((rep) =>
       repResult(rep, rep.used && { share: shareOf.get(rep.used) ?? 0, systematic }),
     ),

@@ -1,5 +1,5 @@
 /** Engines a reading can be made with, oldest first. A stored reading names its own and keeps it. */
-export const ENGINES = [1] as const;
+export const ENGINES = [1, 2] as const;
 export type EngineVersion = (typeof ENGINES)[number];
 
 /** The engine of new readings. */

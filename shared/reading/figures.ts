@@ -26,18 +26,22 @@ export const systematicVariance = ({ u }: Systematic, reps: number): number =>
 export const freedom = (uR2: number, nuR: number, uS2: number): number =>
   (uR2 + uS2) ** 2 / (uR2 ** 2 / nuR + uS2 ** 2 / SYSTEMATIC_NU);
 
+/** Systematic part of the change, degrees², for no true turn, and its growth with the change. */
+export interface Uncertain {
+  readonly variance: number;
+  readonly q: number;
+}
+
 /** Uncertainty, belief after the weak prior, probabilities, and the smallest turn found. */
 export const figuresOf = (
   pooled: Pooled,
-  reps: number,
-  systematic: Systematic,
+  { variance: u02, q }: Uncertain,
   thighTurnsLittle: boolean,
 ): ReadingFigures => {
   const { d, uR, nuR } = pooled;
-  const u02 = systematicVariance(systematic, reps);
   const uR2 = uR * uR;
   const uC0 = Math.sqrt(uR2 + u02);
-  const uS2 = u02 + (systematic.q * d) ** 2;
+  const uS2 = u02 + (q * d) ** 2;
   const uC2 = uR2 + uS2;
   const nu = freedom(uR2, nuR, uS2);
   const g = PRIOR2 / (PRIOR2 + uC2);

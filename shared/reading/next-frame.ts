@@ -75,7 +75,7 @@ const randomWith = (
 const cannotChange = (result: ReadingResult, figures: ReadingFigures): boolean => {
   if (result.set === null) return false;
   const key = result.thighTurnsLittle ? 'belt+assumption' : result.set;
-  const reps = result.reps.filter(({ used }) => used).length;
+  const variance = figures.uC0 ** 2 - figures.uR ** 2;
   const with_ = (shift: number): string => {
     const nothing = degrees(0);
     const settled = figuresOf(
@@ -92,8 +92,7 @@ const cannotChange = (result: ReadingResult, figures: ReadingFigures): boolean =
         uPre: nothing,
         lambda: figures.lambda ?? 1,
       },
-      reps,
-      SYSTEMATIC[key],
+      { variance, q: SYSTEMATIC[key].q },
       result.thighTurnsLittle,
     );
     return decide(settled).code;

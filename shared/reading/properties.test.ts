@@ -8,10 +8,15 @@ import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { milliseconds } from '#shared/timing/units.ts';
 import type { RepInput } from '#shared/course/types.ts';
 import { deriveReading } from './derive.ts';
+import { ENGINES, type EngineVersion } from './engine.ts';
 import type { ReadingInput } from './types.ts';
 
-const inputOf = (reps: readonly RepInput[], supportSide: Side = 'left'): ReadingInput => ({
-  engine: 1,
+const inputFor = (
+  engine: EngineVersion,
+  reps: readonly RepInput[],
+  supportSide: Side,
+): ReadingInput => ({
+  engine,
   supportSide,
   set: null,
   thighTurnsLittle: false,
@@ -49,7 +54,9 @@ const runs = { numRuns: 6 };
 /** Whole readings take their time on a busy machine. */
 const PATIENCE_MS = 120_000;
 
-describe('a reading', () => {
+describe.each(ENGINES)('a reading of engine %i', (engine) => {
+  const inputOf = (reps: readonly RepInput[], side: Side = 'left') => inputFor(engine, reps, side);
+
   it(
     'does not change when the body is mirrored and stands on the other leg',
     () => {

@@ -21,7 +21,11 @@ const pooled = (d: number, uR: number, pre = 0, uPre = 3): Pooled => ({
 });
 
 const figures = (d: number, uR: number, pre = 0, uPre = 3): ReadingFigures =>
-  figuresOf(pooled(d, uR, pre, uPre), 1, { u: 1.6, q: 0.05 }, false);
+  figuresOf(
+    pooled(d, uR, pre, uPre),
+    { variance: systematicVariance({ u: 1.6, q: 0.05 }, 1), q: 0.05 },
+    false,
+  );
 
 const angle = degrees;
 

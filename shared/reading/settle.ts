@@ -104,7 +104,9 @@ const forUnsettled = (
   const n = used.length;
   const from = figures.uC0;
   const random = (figures.uR ** 2 * n) / (n + 1);
-  const u = degrees(Math.sqrt(random + systematicVariance(systematic, n + 1)));
+  const gained = systematicVariance(systematic, n) - systematicVariance(systematic, n + 1);
+  const rest = from ** 2 - figures.uR ** 2 - gained;
+  const u = degrees(Math.sqrt(Math.max(0, random + rest)));
   if (u < from) settle.push({ code: 'another-rep', u, from });
   for (const richer of LANDMARK_SETS.slice(LANDMARK_SETS.indexOf(set) + 1)) {
     const typical = degrees(TYPICAL[richer][n >= 3 ? 1 : 0]);

@@ -100,7 +100,7 @@ export const clipsOf = (
       const points = figureOf(body, movement.poseAt(time), skin, sigma);
       const marks: Partial<Record<LandmarkId, Mark>> = {};
       for (const [id, point] of Object.entries(points))
-        marks[id as LandmarkId] = mark(id as LandmarkId, seen(camera, point));
+        marks[id as LandmarkId] = mark(id as LandmarkId, time, seen(camera, point));
       return {
         frame: frameIndex(Math.round((time * framesPerSecond) / 1000)),
         time: milliseconds(time),

@@ -19,8 +19,8 @@ const LASTING = 0.6;
 const FLEETING = 0.8;
 /** Outlines of the pelvis are fainter than other marks. */
 const OUTLINE = 1.4;
-/** How much of a tracked mark's error stays from one marked frame to the next. */
-const CARRIED = 0.85;
+/** Time over which a tracked mark's error stays much the same, ms. From our model, no source. */
+const CARRIED_MS = 600;
 
 const sizeOf = (id: LandmarkId, { errorPx, pointerPx, scale }: Marking): number => {
   switch (landmark(id).errorClass) {
@@ -38,20 +38,22 @@ type Error2 = readonly [u: number, v: number];
 /** Marks of a clip's frames in order of time, one landmark after another. */
 export const markerOf = (chance: Chance, marking: Marking) => {
   const lasting = new Map<LandmarkId, Error2>();
-  const carried = new Map<LandmarkId, Error2>();
+  const carried = new Map<LandmarkId, { readonly error: Error2; readonly time: number }>();
   const drawn = (size: number): Error2 => [chance.normal(0, size), chance.normal(0, size)];
-  const fleeting = (id: LandmarkId, size: number): Error2 => {
+  const fleeting = (id: LandmarkId, size: number, time: number): Error2 => {
     const before = carried.get(id);
-    if (!marking.tracked || !before) return drawn(FLEETING * size);
-    const fresh = drawn(FLEETING * size * Math.sqrt(1 - CARRIED ** 2));
-    return [CARRIED * before[0] + fresh[0], CARRIED * before[1] + fresh[1]];
+    // a clip that begins anew is tracked anew
+    if (!marking.tracked || !before || time < before.time) return drawn(FLEETING * size);
+    const kept = Math.exp((before.time - time) / CARRIED_MS);
+    const fresh = drawn(FLEETING * size * Math.sqrt(1 - kept * kept));
+    return [kept * before.error[0] + fresh[0], kept * before.error[1] + fresh[1]];
   };
-  return (id: LandmarkId, [u, v]: Error2): Mark => {
+  return (id: LandmarkId, time: number, [u, v]: Error2): Mark => {
     const size = sizeOf(id, marking);
     const still = lasting.get(id) ?? drawn(LASTING * size);
     lasting.set(id, still);
-    const now = fleeting(id, size);
-    carried.set(id, now);
+    const now = fleeting(id, size, time);
+    carried.set(id, { error: now, time });
     return {
       hidden: false,
       point: { u: u + still[0] + now[0], v: v + still[1] + now[1] },

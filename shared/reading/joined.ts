@@ -1,0 +1,24 @@
+import type { Degrees } from '#shared/geometry/units.ts';
+import type { LandmarkSetId } from '#shared/landmarks/types.ts';
+import type { Systematic, Uncertain } from './figures.ts';
+import type { UsedRep } from './fit-rep.ts';
+import type { Pooled } from './pool.ts';
+import type { CurvePoint, ReadingFigures } from './types.ts';
+
+/** The usable reps of one reading and what is assumed of them; at least one rep. */
+export interface Joining {
+  readonly used: readonly UsedRep[];
+  readonly set: LandmarkSetId;
+  readonly thighTurnsLittle: boolean;
+  readonly systematic: Systematic;
+}
+
+/** The reps together: what an engine makes of them. Everything after it is the same for all. */
+export interface Joined {
+  readonly pooled: Pooled;
+  readonly uncertain: Uncertain;
+  /** Change of turn from 90° to a higher lift, over the reps with a share. */
+  readonly past90: (to: Degrees, shares: readonly number[]) => Degrees;
+  /** The course drawn, with its 95 % band. */
+  readonly course: (figures: ReadingFigures) => readonly CurvePoint[];
+}
