@@ -31,8 +31,14 @@ export const FRONT_LANDMARKS = [
   'heel-support',
 ] as const;
 
-/** Of the side seen, the lifted one. */
-export const SIDE_LANDMARKS = ['trochanter', 'knee-lateral', 'acromion', 'ankle-lifted'] as const;
+/** Of the side seen, the lifted one; and the far ankle, which the near one covers in quiet stance. */
+export const SIDE_LANDMARKS = [
+  'ankle-support',
+  'ankle-lifted',
+  'trochanter',
+  'knee-lateral',
+  'acromion',
+] as const;
 
 export type LandmarkId = (typeof FRONT_LANDMARKS)[number] | (typeof SIDE_LANDMARKS)[number];
 

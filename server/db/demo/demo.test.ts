@@ -117,6 +117,18 @@ describe('the demo', () => {
     expect(new Set(rows.map(({ code }) => code))).toEqual(new Set(readingCode.options));
   });
 
+  it('shows the lift of the clip from the side, whose turn nobody can see', async () => {
+    const row = await api.ground.inPractice(product(GREYWATER), ({ em }) =>
+      em.findOneOrFail(Reading, { code: 'not-measurable' }, { populate: ['result'] }),
+    );
+    const rep = row.result.unwrap()?.reps[0];
+    expect(rep?.phases?.boundaries.footOff).toBeGreaterThan(0);
+    const lifts = rep?.frames.flatMap(({ phase, lift }) => (phase === 'rise' ? [lift] : [])) ?? [];
+    expect(lifts.length).toBeGreaterThan(10);
+    expect(lifts).not.toContain(null);
+    expect(Math.max(...lifts.map((lift) => lift ?? 0))).toBeGreaterThan(100);
+  });
+
   it('gives each of its people something to do', async () => {
     const kinds = async (account: (typeof DEMO_ACCOUNTS)['coach']) => {
       const { body } = await (await api.as(await userOf(account))).get('/api/today').expect(200);

@@ -17,8 +17,8 @@ export interface Hand {
 }
 
 /**
- * Places and noise of one rep's marks. Something covered is marked hidden, unless a landmark set rests on it: that
- * the coach finds again from its neighbours and from the frames around, half as well.
+ * Places and noise of one rep's marks. Something covered is marked hidden, unless a landmark set rests on it, as in
+ * a front clip: that the coach finds again from its neighbours and from the frames around, half as well.
  */
 export const marksOfRep = (
   truth: DemoTruth,
@@ -32,7 +32,7 @@ export const marksOfRep = (
     shown.map((id) => {
       const { errorClass, sets } = landmark(id);
       const unseen = (hidden[id] ?? []).some(([from, to]) => frame >= from && frame <= to);
-      const covered = unseen && sets.length === 0;
+      const covered = unseen && (sets.length === 0 || truth.view !== 'front');
       const spread = spreadPx * (errorClass === 'pointer' ? 0.5 : 1) * (unseen ? 2 : 1);
       const [du, dv] = [spread * noise(), spread * noise()];
       const tracked = hollow && index % 3 === 1 && !covered;
