@@ -160,6 +160,8 @@ export class DecodedSource implements FrameSource {
     }
     const picture = new PixelPicture(index, frame, () => this.#method);
     this.#cache.put(index, picture);
+    // neighbours come in numbers, and nobody waits to paint them
+    if (index !== this.#playhead) void picture.giveBack();
     return picture;
   }
 
@@ -178,7 +180,7 @@ export class DecodedSource implements FrameSource {
     if (next === null) return false;
     try {
       const picture = await this.#decoder.decode(next, 'group');
-      await picture.givenBack;
+      await picture.giveBack();
     } catch {
       return false;
     }

@@ -19,29 +19,25 @@ const timeOnce = async (picture: Picture): Promise<number> => {
   return performance.now() - start;
 };
 
-const best = async (picture: Picture): Promise<number> => {
-  let fastest = Infinity;
-  for (let round = 0; round < ROUNDS; round += 1)
-    fastest = Math.min(fastest, await timeOnce(picture).catch(() => Infinity));
-  return fastest;
-};
-
 /**
  * The faster way to paint on this machine: converting in memory takes about 1 ms at 720p where
  * drawing takes 13 without a graphics card, and it may be the reverse with one. Measured with a
- * real picture on a canvas nobody sees. `setMethod` switches the picture's method.
+ * real picture on a canvas nobody sees, by turns, so that other work on the machine slows both.
+ * `setMethod` switches the picture's method.
  */
 export const measurePaintMethod = async (
   picture: Picture,
   setMethod: (method: PaintMethod) => void,
 ): Promise<PaintMethod> => {
-  const times = new Map<PaintMethod, number>();
-  for (const method of ['draw', 'convert'] as const) {
-    setMethod(method);
-    times.set(method, await best(picture));
+  const best: Record<PaintMethod, number> = { draw: Infinity, convert: Infinity };
+  for (let round = 0; round < ROUNDS; round += 1) {
+    for (const method of ['draw', 'convert'] as const) {
+      setMethod(method);
+      const time = await timeOnce(picture).catch(() => Infinity);
+      best[method] = Math.min(best[method], time);
+    }
   }
-  const convert = times.get('convert') ?? Infinity;
-  const method = convert < (times.get('draw') ?? Infinity) ? 'convert' : 'draw';
+  const method = best.convert < best.draw ? 'convert' : 'draw';
   setMethod(method);
   return method;
 };

@@ -18,6 +18,12 @@ VideoFrame.prototype.close = function close(this: VideoFrame) {
   closeFrame.call(this);
 };
 
+const cloneFrame = Reflect.get(VideoFrame.prototype, 'clone');
+VideoFrame.prototype.clone = function clone(this: VideoFrame) {
+  frameLedger.opened += 1;
+  return cloneFrame.call(this);
+};
+
 const NativeDecoder = VideoDecoder;
 globalThis.VideoDecoder = class extends NativeDecoder {
   constructor(init: VideoDecoderInit) {
