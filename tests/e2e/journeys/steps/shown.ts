@@ -1,7 +1,8 @@
-import type { APIRequestContext } from '@playwright/test';
+import { type APIRequestContext, expect } from '@playwright/test';
 import { routes } from '#shared/contracts/routes.ts';
 import { ask } from './ask.ts';
 import { demoClip } from './demo-clip.ts';
+import { PREPARED_WITHIN } from './visit.ts';
 
 /** A visit of the demo that has a clip with marks. */
 export interface ShownVisit {
@@ -40,8 +41,11 @@ async function shownVisit(
 }
 
 async function refusedVisit(coach: APIRequestContext): Promise<ShownVisit> {
-  const { items } = await ask(coach, routes.listClips, { query: { state: 'refused' } });
-  const clip = items[0];
+  const look = async () =>
+    (await ask(coach, routes.listClips, { query: { state: 'refused' } })).items[0];
+  // each clip is looked at when its turn comes
+  await expect.poll(look, { timeout: PREPARED_WITHIN, intervals: [500] }).toBeDefined();
+  const clip = await look();
   if (clip === undefined) throw new Error('the demo has no refused clip');
   return { athleteId: clip.athlete.id, visitId: clip.visitId, clipId: clip.id };
 }
