@@ -61,6 +61,9 @@ export const CONSTANTS = {
   ),
   trackedFor: constant(500, 'ms', 'time over which a tracked mark keeps its error', MODEL),
   stanceSpread: constant(1, 'degrees', 'SD between the zero of a quiet stance and its rise', MODEL),
+  beltSlip: constant(1.2, 'degrees', 'SD of the belt’s slip over the pelvis, 60° to 90°', MODEL),
+  kneecapSlip: constant(2.7, 'degrees', 'SD of the knee’s skin over the femur, 60° to 90°', MODEL),
+  slipShared: constant(0.7, '', 'part of a slip’s variance that all reps share', MODEL),
   prior: constant(8, 'degrees', 'SD of the weak prior of the change of turn', MODEL),
   uncertainLimit: constant(6, 'degrees', 'standard uncertainty above which nothing is read', MODEL),
   gateFrom: constant(60, 'degrees', 'lift from which the change of turn counts', PRACTICE),
@@ -74,21 +77,6 @@ export const SYSTEMATIC = {
   'belt+thigh': { u: 1.6, q: 0.05 },
   'belt+assumption': { u: 1.6, q: 0.06 },
 } as const;
-
-/**
- * Engine 2: standard deviation of the change of a segment's direction from 60° to 90° that is its
- * skin's or strap's, degrees. Both of a set make about the systematic error of engine 1; a little
- * more where skin moves most, so that false early calls stay rare. From our model, no source.
- */
-export const SEGMENT_SLIP = {
-  outline: 2.0,
-  belt: 1.2,
-  kneecap: 2.3,
-  'thigh-pointer': 1.13,
-} as const;
-
-/** Part of a slip's variance that all reps of a person share; the rest differs from rep to rep. */
-export const SLIP_SHARED = 0.7;
 
 /** Forms and the API take a thigh pointer's length from the skin to its tip, mm. */
 export const thighPointerFromSkin = (skinToTipMm: number): number =>

@@ -48,10 +48,13 @@ const returnPast90 = (
   return { to, change: past90(to, own) };
 };
 
-/** Frames that carry no answer together are read as engine 1 does: it needs less of them. */
+/**
+ * Engine 2 differs where pelvis and femur are seen unequally well: with a belt pointer alone. Where
+ * they are seen alike the study shows no gain at equal false calls, and the fits stay.
+ */
 const JOIN: Readonly<Record<EngineVersion, (joining: Joining) => Joined>> = {
   1: joinByFit,
-  2: (joining) => joinByProcess(joining) ?? joinByFit(joining),
+  2: (joining) => (joining.set === 'belt' ? joinByProcess(joining) : null) ?? joinByFit(joining),
 };
 
 /** Reps that could have counted: line 1 looks at their lifts. */
@@ -120,6 +123,6 @@ export const deriveReading = (input: ReadingInput, runs: number = DRAWS): Readin
       repResult(rep, rep.used && { share: shareOf.get(rep.used) ?? 0, systematic }),
     ),
     warnings: placedWarnings(usedCourses, thighTurnsLittle),
-    settle: settleOf(decision, reps, { set, figures, systematic }),
+    settle: settleOf(decision, reps, { engine: input.engine, set, figures, systematic }),
   };
 };

@@ -1,6 +1,5 @@
 import { degrees } from '#shared/geometry/units.ts';
-import type { LandmarkSetId } from '#shared/landmarks/types.ts';
-import { CONSTANTS, SEGMENT_SLIP, SLIP_SHARED, SYSTEMATIC } from '#shared/measures/constants.ts';
+import { CONSTANTS, SYSTEMATIC } from '#shared/measures/constants.ts';
 import { bandOf } from './band.ts';
 import type { UsedRep } from './fit-rep.ts';
 import type { Joined, Joining } from './joined.ts';
@@ -18,25 +17,19 @@ const BEFORE = 30;
 const PRIOR_FRAMES = 6;
 const TERMS = 4;
 
-const SLIPS: Readonly<Record<LandmarkSetId, { thigh: number; pelvis: number }>> = {
-  bare: { thigh: SEGMENT_SLIP.kneecap, pelvis: SEGMENT_SLIP.outline },
-  belt: { thigh: SEGMENT_SLIP.kneecap, pelvis: SEGMENT_SLIP.belt },
-  'belt+thigh': { thigh: SEGMENT_SLIP['thigh-pointer'], pelvis: SEGMENT_SLIP.belt },
-};
-
 /** A practice's own systematic error scales the assumed slips. */
-const beliefOf = ({ set, thighTurnsLittle, systematic }: Joining): Belief => {
-  const own = thighTurnsLittle ? 1 : systematic.u / SYSTEMATIC[set].u;
+const beliefOf = ({ thighTurnsLittle, systematic }: Joining): Belief => {
+  const own = thighTurnsLittle ? 1 : systematic.u / SYSTEMATIC.belt.u;
   const segment = (slip: number, variance: number): SegmentBelief => ({
     own: variance,
-    slipShared: SLIP_SHARED * (own * slip) ** 2,
-    slipPerRep: (1 - SLIP_SHARED) * (own * slip) ** 2,
+    slipShared: CONSTANTS.slipShared.value * (own * slip) ** 2,
+    slipPerRep: (1 - CONSTANTS.slipShared.value) * (own * slip) ** 2,
     perRep: REP2 / 2,
   });
   const thigh = thighTurnsLittle ? THIGH2 : PRIOR2 / 2;
   return {
-    thigh: segment(SLIPS[set].thigh, thigh),
-    pelvis: segment(SLIPS[set].pelvis, PRIOR2 - thigh),
+    thigh: segment(CONSTANTS.kneecapSlip.value, thigh),
+    pelvis: segment(CONSTANTS.beltSlip.value, PRIOR2 - thigh),
     // whoever assumes that the thigh turns little assumes that the body does not turn over it
     wholeBody: thighTurnsLittle ? 0 : CONSTANTS.wholeBody.value ** 2,
     stance: CONSTANTS.stanceSpread.value ** 2,
@@ -65,9 +58,15 @@ const measured = ({ mean, variance }: Moments, prior: number) => {
 };
 
 /**
- * Engine 2: one Gaussian regression over the frames of all reps. What it believes of the change is
- * turned back into the measurement that says the same, so that the rule and every figure keep their
- * meaning. Null where the frames carry no answer.
+ * Engine 2 with a belt pointer alone: one Gaussian regression over the frames of all reps, pelvis and
+ * femur each with its own error. The pelvis is then seen five times better than the femur, and
+ * each part counts as far as it is known. What is believed of the change is turned back into the
+ * measurement that says the same, so that the rule and every figure keep their meaning. Null where
+ * the frames carry no answer.
+ *
+ * 2,000 trials of the study against engine 1: early turns of 5–16° found with one rep 40 % (11 %),
+ * with three 58 % (53 %); with the assumption 45 % (31 %) and 62 % (54 %); no turn called early once
+ * in 400 (once), with the assumption once (three times).
  */
 export const joinByProcess = (joining: Joining): Joined | null => {
   const { used, systematic, thighTurnsLittle } = joining;

@@ -2,6 +2,7 @@ import { degrees } from '#shared/geometry/units.ts';
 import { type LandmarkSetId, LANDMARK_SETS } from '#shared/landmarks/types.ts';
 import { LEAST_QUIET } from '#shared/measures/reference.ts';
 import type { Assessed } from './assess.ts';
+import type { EngineVersion } from './engine.ts';
 import { systematicVariance, type Systematic } from './figures.ts';
 import type { RepFault, Settle } from './reasons.ts';
 import type { Decision } from './rule.ts';
@@ -9,11 +10,20 @@ import { LIMITS } from './rule.ts';
 import type { ReadingFigures } from './types.ts';
 import { inBand } from './usable.ts';
 
+type Typical = Readonly<Record<LandmarkSetId, readonly [one: number, three: number]>>;
+
 /** Typical uncertainty of the change with one rep and with three, degrees: from our model. */
-const TYPICAL: Readonly<Record<LandmarkSetId, readonly [one: number, three: number]>> = {
-  bare: [16.0 / 1.96, 10.5 / 1.96],
-  belt: [13.5 / 1.96, 8.8 / 1.96],
-  'belt+thigh': [5.5 / 1.96, 3.9 / 1.96],
+const TYPICAL: Readonly<Record<EngineVersion, Typical>> = {
+  1: {
+    bare: [16.0 / 1.96, 10.5 / 1.96],
+    belt: [13.5 / 1.96, 8.8 / 1.96],
+    'belt+thigh': [5.5 / 1.96, 3.9 / 1.96],
+  },
+  2: {
+    bare: [16.0 / 1.96, 10.5 / 1.96],
+    belt: [9.1 / 1.96, 6.8 / 1.96],
+    'belt+thigh': [5.5 / 1.96, 3.9 / 1.96],
+  },
 };
 
 /** With so many marked frames a foot that never leaves the floor is a clip without quiet stance. */
@@ -79,12 +89,18 @@ const once = (all: readonly Settle[]): readonly Settle[] => {
   });
 };
 
+/** A reading that is not settled, with what its uncertainty is made of. */
+interface Unsettled {
+  readonly engine: EngineVersion;
+  readonly set: LandmarkSetId;
+  readonly figures: ReadingFigures;
+  readonly systematic: Systematic;
+}
+
 /** More marks at the ends of the window, another rep, a richer set: with what each would bring. */
 const forUnsettled = (
   used: readonly Assessed[],
-  set: LandmarkSetId,
-  figures: ReadingFigures,
-  systematic: Systematic,
+  { engine, set, figures, systematic }: Unsettled,
 ): readonly Settle[] => {
   const settle: Settle[] = [];
   for (const { rep, shown } of used)
@@ -109,7 +125,7 @@ const forUnsettled = (
   const u = degrees(Math.sqrt(Math.max(0, random + rest)));
   if (u < from) settle.push({ code: 'another-rep', u, from });
   for (const richer of LANDMARK_SETS.slice(LANDMARK_SETS.indexOf(set) + 1)) {
-    const typical = degrees(TYPICAL[richer][n >= 3 ? 1 : 0]);
+    const typical = degrees(TYPICAL[engine][richer][n >= 3 ? 1 : 0]);
     if (typical < from) settle.push({ code: 'richer-set', set: richer, u: typical, from });
   }
   return settle;
@@ -125,11 +141,7 @@ const decisive = (faults: readonly RepFault[]): readonly RepFault[] => {
 export const settleOf = (
   decision: Decision,
   reps: readonly Assessed[],
-  reading: {
-    readonly set: LandmarkSetId;
-    readonly figures: ReadingFigures;
-    readonly systematic: Systematic;
-  } | null,
+  reading: Unsettled | null,
 ): readonly Settle[] => {
   if (decision.code === 'lift-stops-short' || !reading)
     return once(
@@ -137,5 +149,5 @@ export const settleOf = (
     );
   if (decision.line !== 2 && decision.line !== 7) return [];
   const used = reps.filter((rep) => rep.used !== null);
-  return forUnsettled(used, reading.set, reading.figures, reading.systematic);
+  return forUnsettled(used, reading);
 };

@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { deriveReading } from '#shared/reading/derive.ts';
+import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { milliseconds } from '#shared/timing/units.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
@@ -51,7 +52,7 @@ describe('a reading', () => {
     expect(body.reading.code).toBe(code);
     // the same code on the same marks, without the phases that the trial file names
     const direct = deriveReading({
-      engine: 1,
+      engine: CURRENT_ENGINE,
       supportSide: golden.trial.supportSide,
       set: null,
       thighTurnsLittle: false,

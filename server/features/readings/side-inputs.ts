@@ -2,6 +2,7 @@ import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Side } from '#shared/contracts/primitives.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { canonicalText } from '#shared/reading/canonical.ts';
+import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import { sha256Hex } from '#shared/reading/sha256.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
@@ -51,7 +52,7 @@ export const sideInputs = (
   const markedBy = latestHand(reps);
   if (markedBy === null) return null;
   const input: ReadingInput = {
-    engine: 1,
+    engine: CURRENT_ENGINE,
     supportSide: side,
     set: null,
     thighTurnsLittle,

@@ -89,11 +89,13 @@ export function MethodPage() {
       </Section>
       <Section title="A reading">
         <p className="max-w-lead">
-          What counts is the change of turn from 60° to 90° of lift, fitted over the rise of every
-          usable rep of one support side in one visit. Marking error, the spread between reps and a
-          systematic part that more marks do not lessen give its uncertainty; 2,000 draws with a
-          seed made from the inputs give the same answer each time. A reading needs 95 in 100, and
-          holding still 80 in 100; otherwise it is “Can’t tell yet”.
+          What counts is the change of turn from 60° to 90° of lift, over the rise of every usable
+          rep of one support side in one visit. With a belt pointer alone all frames of all reps are
+          read as one curve, pelvis and thigh each with its own error; otherwise each rise is fitted
+          and the reps are averaged. Marking error, the spread between reps and a systematic part
+          that more marks do not lessen give its uncertainty; the same inputs give the same answer
+          each time. A reading needs 95 in 100, and holding still 80 in 100; otherwise it is “Can’t
+          tell yet”.
         </p>
       </Section>
       <Section title="What it cannot say" wide>
@@ -105,7 +107,7 @@ export function MethodPage() {
           ))}
         </ul>
       </Section>
-      <Section title="Numbers of engine 1" note="All that do not follow from geometry." wide>
+      <Section title="Numbers of the engine" note="All that do not follow from geometry." wide>
         <Table
           caption="Constants"
           columns={CONSTANT_COLUMNS}

@@ -2,6 +2,7 @@ import type { BenchDocument } from '#shared/contracts/bench.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { RepInput } from '#shared/course/types.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import type { UnmarkedFrame } from '#shared/reading/next-frame.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
 import { repInputOf } from '#shared/records/engine-input.ts';
@@ -34,7 +35,7 @@ export const readingInputOf = (
   const ofSide = [...own, ...otherInputs(document)].filter((rep) => rep.supportSide === side);
   if (ofSide.length === 0) return null;
   return {
-    engine: 1,
+    engine: CURRENT_ENGINE,
     supportSide: side,
     set: null,
     thighTurnsLittle: document.assumption.includes(side),
