@@ -64,9 +64,9 @@ const measured = ({ mean, variance }: Moments, prior: number) => {
  * measurement that says the same, so that the rule and every figure keep their meaning. Null where
  * the frames carry no answer.
  *
- * 2,000 trials of the study against engine 1: early turns of 5–16° found with one rep 40 % (11 %),
- * with three 58 % (53 %); with the assumption 45 % (31 %) and 62 % (54 %); no turn called early once
- * in 400 (once), with the assumption once (three times).
+ * The study's seeds 1 to 3 against engine 1: early turns of 5–16° found with one rep 41 % (10 %), with
+ * three 59 % (52 %); with the assumption 45 % (32 %) and 62 % (55 %). No turn called early 1 in 1,200
+ * (7), with the assumption 1 (3); with drifting marks or twice the slip 9 in 600 (10), and 4 (6).
  */
 export const joinByProcess = (joining: Joining): Joined | null => {
   const { used, systematic, thighTurnsLittle } = joining;
