@@ -15,6 +15,7 @@ export default defineConfig({
             'server/media/**/*.test.ts',
             'tests/architecture/**/*.test.ts',
             'tests/study/**/*.test.ts',
+            'tests/reference/**/*.test.ts',
             'docker-free-scripts/**/*.test.ts',
             'src/video/**/*.test.ts',
             'src/api/**/*.test.ts',
