@@ -67,6 +67,31 @@ export async function call(route: Route, input: Parts): Promise<unknown> {
   return readAnswer(route.answer.schema, response, signal);
 }
 
+/** A file as the server made it, with the name that the server gave it. */
+export interface Download {
+  readonly name: string;
+  readonly blob: Blob;
+}
+
+/**
+ * Fetches a file of a route that answers with bytes, so that a no comes as words on the page and not as a file.
+ * @throws ApiProblem as `call` does
+ */
+export async function download<R extends Route>(
+  route: R,
+  input: Omit<CallInput<R>, 'body' | keyof Manner>,
+): Promise<Download> {
+  const response = await reach(addressOf(route, input), { credentials: 'same-origin' });
+  if (!response.ok) throw await problemOf(response);
+  const [, name = 'redshank'] =
+    /filename="?([^";]+)"?/.exec(response.headers.get('content-disposition') ?? '') ?? [];
+  try {
+    return { name, blob: await response.blob() };
+  } catch (cause) {
+    throw new ApiProblem('offline', { status: response.status, cause });
+  }
+}
+
 async function reach(address: string, init: RequestInit): Promise<Response> {
   try {
     return await fetch(address, init);

@@ -35,8 +35,8 @@ export function fakeApi() {
 
   const api = {
     asked,
-    /** Answers a route from now on; a later answer for the same route counts. */
-    on<R extends Route>(route: R, handle: (asked: Asked) => CallAnswer<R> | Refuse) {
+    /** Answers a route from now on, bytes by a whole response; a later answer for the same route counts. */
+    on<R extends Route>(route: R, handle: (asked: Asked) => CallAnswer<R> | Refuse | Response) {
       handlers.unshift({ route, match: pattern(route.path), handle });
       return api;
     },
@@ -60,6 +60,7 @@ export function fakeApi() {
       asked.push({ ...call, route });
       const value = handle(call);
       if (value instanceof Refuse) return refusal(value);
+      if (value instanceof Response) return value;
       return route.status === 204
         ? new Response(null, { status: 204 })
         : Response.json(value, { status: route.status });
