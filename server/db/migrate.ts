@@ -5,6 +5,7 @@ import { Migration20261201122100_walls } from '../../migrations/Migration2026120
 import { Migration20261201133912_stale_readings } from '../../migrations/Migration20261201133912_stale_readings.ts';
 import { Migration20261201155000_job_priority } from '../../migrations/Migration20261201155000_job_priority.ts';
 import { Migration20261201160000_clip_trouble } from '../../migrations/Migration20261201160000_clip_trouble.ts';
+import { Migration20261201163000_quiet_from } from '../../migrations/Migration20261201163000_quiet_from.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -22,6 +23,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261201160000_clip_trouble',
     class: Migration20261201160000_clip_trouble,
+  },
+  {
+    name: 'Migration20261201163000_quiet_from',
+    class: Migration20261201163000_quiet_from,
   },
 ];
 

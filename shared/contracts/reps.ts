@@ -50,6 +50,8 @@ export const rep = z
     excluded: exclusion.nullable(),
     excludedNote: z.string(),
     markedFrames: z.int(),
+    /** The rep of this clip and side whose quiet stance this one takes (marching); null: its own. */
+    quietFrom: id.nullable(),
     version,
   })
   .meta({ id: 'Rep' });
@@ -82,6 +84,7 @@ export const repEdit = z
       .optional(),
     excluded: exclusion.nullable().optional(),
     excludedNote: text(300, 0).optional(),
+    quietFrom: id.nullable().optional(),
     version,
   })
   .meta({ id: 'RepEdit' });

@@ -5,7 +5,7 @@ import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import type { Side } from '#shared/landmarks/types.ts';
 import { Problem } from '../../http/problem.ts';
 import { Call } from '../calls/call.entity.ts';
-import { shownSet } from '../reps/found-boundaries.ts';
+import { shownSet } from '#shared/records/shared-quiet.ts';
 import { repInput, timesOfClip } from '../reps/reps.presenter.ts';
 import type { NumberedRep } from '../reps/stored-reps.ts';
 import { csvText } from './csv.ts';

@@ -10,12 +10,12 @@ import { Call } from '../calls/call.entity.ts';
 import type { Clip } from '../clips/clip.entity.ts';
 import { Comment } from '../comments/comment.entity.ts';
 import { COMMENT_ORDER } from '../comments/comments.presenter.ts';
-import { readMarks } from '../marks/mark-store.ts';
 import { audit } from '../practice/audit.ts';
 import { Practice } from '../practice/practice.entity.ts';
 import { readingLabel } from '../readings/readings.presenter.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
+import { storedReps } from '../reps/stored-reps.ts';
 import { Replay } from './replay.entity.ts';
 import { spanOf } from './span.ts';
 
@@ -125,12 +125,9 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
   const athlete = visit.athlete.unwrap() as Athlete;
   const practice = await em.findOneOrFail(Practice, { id: replay.practiceId });
   const reading = await readingOf(unit, replay);
-  const stored = {
-    rep,
-    clip,
-    marks: await readMarks(em, [rep.id]),
-    bodyHeightMm: athlete.heightMm ?? null,
-  };
+  // the clip's other reps too: it may take the quiet stance of one
+  const reps = await storedReps(em, [clip], athlete);
+  const stored = found(reps.find((each) => each.rep.id === rep.id));
   const span = { from: replay.fromFrame, to: replay.toFrame };
   const shown = spanOf(stored, span, replay.showReading);
   await em.execute(

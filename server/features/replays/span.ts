@@ -3,9 +3,9 @@ import { courseOfRep, isCourse, type RepCourse } from '#shared/course/course-of-
 import type { CourseFrame } from '#shared/course/types.ts';
 import type { Degrees } from '#shared/geometry/units.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { shownSet } from '#shared/records/shared-quiet.ts';
 import { frameAt } from '#shared/timing/timestamps.ts';
 import type { Milliseconds } from '#shared/timing/units.ts';
-import { shownSet } from '../reps/found-boundaries.ts';
 import { repInput, type StoredRep, timesOfClip } from '../reps/reps.presenter.ts';
 
 /** A moment counts as 60° or 90° where a marked frame of the rise comes as near as this, degrees. */

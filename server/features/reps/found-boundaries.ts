@@ -2,9 +2,8 @@ import type { Boundaries } from '#shared/contracts/reps.ts';
 import { courseOfRep, isCourse } from '#shared/course/course-of-rep.ts';
 import type { RepInput, RepPhases } from '#shared/course/types.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
-import { LANDMARK_SETS, type LandmarkSetId } from '#shared/landmarks/types.ts';
-import { landmarksOf } from '#shared/landmarks/table.ts';
 import { MOMENT_ORDER, MOMENTS } from '#shared/records/engine-input.ts';
+import { shownSet } from '#shared/records/shared-quiet.ts';
 import { frameAt } from '#shared/timing/timestamps.ts';
 import type { Milliseconds } from '#shared/timing/units.ts';
 import type { HandBoundaries } from './rep.entity.ts';
@@ -28,14 +27,6 @@ export const byHand = (moved: HandBoundaries): Boundaries => ({
     }),
   ),
 });
-
-/** The richest set with any of its own landmarks marked; the moments do not depend on the others. */
-export const shownSet = (rep: RepInput): LandmarkSetId =>
-  [...LANDMARK_SETS]
-    .reverse()
-    .find((set) =>
-      landmarksOf(set).every((id) => rep.frames.some((frame) => frame.marks[id] !== undefined)),
-    ) ?? 'bare';
 
 const phasesOf = (rep: RepInput): RepPhases | null => {
   if (rep.frames.length === 0) return null;

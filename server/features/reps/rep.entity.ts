@@ -21,6 +21,8 @@ export const Rep = defineEntity({
     handBoundaries: p.json<HandBoundaries>(),
     excluded: p.enum(exclusion.options).nullable(),
     excludedNote: p.text().default(''),
+    /** The rep of the same clip and side whose quiet stance this one takes; a foreign key of the migration. */
+    quietFrom: p.uuid().nullable(),
     createdBy: p.manyToOne(User).ref(),
     createdAt: madeAt(),
     version: p.integer().version(),

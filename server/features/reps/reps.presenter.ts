@@ -1,6 +1,7 @@
 import type { FrameTable } from '#shared/contracts/clips.ts';
 import type { Rep as RepShape } from '#shared/contracts/reps.ts';
 import type { RepInput } from '#shared/course/types.ts';
+import type { FrameInput } from '#shared/measures/inputs.ts';
 import { type MeasuredClip, repInputOf, timesOf } from '#shared/records/engine-input.ts';
 import { mmPerPxOf } from '#shared/records/scale.ts';
 import { marksWith } from '#shared/records/stored-marks.ts';
@@ -28,6 +29,8 @@ export interface StoredRep {
   readonly clip: Clip;
   readonly marks: readonly MarkRow[];
   readonly bodyHeightMm: number | null;
+  /** Quiet stance taken from another rep of the clip; none where left out. */
+  readonly sharedQuiet?: readonly FrameInput[] | null;
 }
 
 /** The clip's exact times; empty until it is prepared. */
@@ -38,8 +41,8 @@ export const timesOfClip = (clip: Clip): Milliseconds[] => {
 
 /** A stored rep as the engine takes it; null until the clip is prepared. */
 export const repInput = (stored: StoredRep, times: readonly Milliseconds[]): RepInput | null => {
-  const { rep, clip, marks, bodyHeightMm } = stored;
-  return repInputOf({
+  const { rep, clip, marks, bodyHeightMm, sharedQuiet = null } = stored;
+  const input = repInputOf({
     rep: {
       id: rep.id,
       supportSide: rep.supportSide,
@@ -52,6 +55,7 @@ export const repInput = (stored: StoredRep, times: readonly Milliseconds[]): Rep
     marks: marksWith(marks.map(presentMark), []),
     bodyHeightMm,
   });
+  return input && { ...input, sharedQuiet };
 };
 
 /** @param number its place in the clip, from 1 */
@@ -69,6 +73,7 @@ export const presentRep = (stored: StoredRep, number: number): RepShape => {
     boundaries: boundariesOf(repInput(stored, times), times, rep.handBoundaries),
     excluded: rep.excluded ?? null,
     excludedNote: rep.excludedNote,
+    quietFrom: rep.quietFrom ?? null,
     markedFrames: new Set(marks.map(({ frame }) => frame)).size,
     version: rep.version,
   };

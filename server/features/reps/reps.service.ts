@@ -79,6 +79,19 @@ const movedAfter = (
     }),
   );
 
+/** @throws Problem 'invalid-input' unless it is another rep of the clip, of the same side, with its own quiet stance */
+const needLender = async ({ em }: Unit<UserActor>, rep: Rep, lenderId: string): Promise<void> => {
+  const lender = await em.findOne(Rep, { id: lenderId, clip: rep.clip.id });
+  if (lender && lender.id !== rep.id && lender.supportSide === rep.supportSide && !lender.quietFrom)
+    return;
+  throw new Problem('invalid-input', undefined, [
+    {
+      path: 'body.quietFrom',
+      message: 'Choose another rep of this clip, of the same side, that has its own quiet stance.',
+    },
+  ]);
+};
+
 /** Changes a rep, if nobody has changed it meanwhile. */
 export const editRep = async (
   unit: Unit<UserActor>,
@@ -94,6 +107,10 @@ export const editRep = async (
   if (endFrame !== undefined) rep.endFrame = endFrame;
   if (excluded !== undefined) rep.excluded = excluded;
   if (excludedNote !== undefined) rep.excludedNote = excludedNote;
+  if (edit.quietFrom !== undefined) {
+    if (edit.quietFrom !== null) await needLender(unit, rep, edit.quietFrom);
+    rep.quietFrom = edit.quietFrom;
+  }
   if (edit.boundaries) rep.handBoundaries = movedAfter(rep.handBoundaries, edit.boundaries);
   needFrames(clip, rep.startFrame, rep.endFrame);
   needOrder(rep, rep.handBoundaries);
@@ -102,7 +119,7 @@ export const editRep = async (
   return presentStored(unit, sight, id);
 };
 
-/** Deletes a rep with its marks; a replay link that plays it dies with it. */
+/** Deletes a rep with its marks; a replay link that plays it dies with it, and who took its quiet stance has none. */
 export const deleteRep = async (unit: Unit<UserActor>, id: string): Promise<void> => {
   const sight = await repInSight(unit, id, 'rep.edit');
   unit.em.remove(sight.rep);

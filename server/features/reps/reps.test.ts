@@ -192,6 +192,36 @@ describe('marks', () => {
   });
 });
 
+describe('a quiet stance that reps share', () => {
+  const quietFrom = (rep: { id: string; version: number }, lender: string | null) =>
+    coach.patch(`/api/reps/${rep.id}`).send({ version: rep.version, quietFrom: lender });
+
+  it('is taken from another rep of the clip and side, given back, and ends with its lender', async () => {
+    const lender = await addRep({ startFrame: 0, endFrame: 100 });
+    const rep = await addRep({ startFrame: 101, endFrame: 200 });
+    const taken = await quietFrom(rep, lender.id).expect(200);
+    expect(taken.body.quietFrom).toBe(lender.id);
+    const back = await quietFrom(taken.body, null).expect(200);
+    expect(back.body.quietFrom).toBeNull();
+    await quietFrom(back.body, lender.id).expect(200);
+    await coach.delete(`/api/reps/${lender.id}`).expect(204);
+    const { body } = await coach.get(`/api/clips/${clip.id}/reps`).expect(200);
+    expect(body.items).toMatchObject([{ id: rep.id, quietFrom: null }]);
+  });
+
+  it('is not taken from the other side, from itself, or from a rep that takes one itself', async () => {
+    const rep = await addRep({ startFrame: 101, endFrame: 200 });
+    const other = await addRep({ startFrame: 0, endFrame: 100, supportSide: 'left' });
+    const first = await addRep({ startFrame: 201, endFrame: 300 });
+    const second = await addRep({ startFrame: 301, endFrame: 400 });
+    await quietFrom(second, first.id).expect(200);
+    for (const lender of [other.id, rep.id, second.id, randomUUID()]) {
+      const { body } = await quietFrom(rep, lender).expect(422);
+      expect(body.faults[0].path).toBe('body.quietFrom');
+    }
+  });
+});
+
 describe('whoever may not', () => {
   it('gets 404 for another caseload and another practice, 403 for a supervisor who only reads', async () => {
     const rep = await addRep();

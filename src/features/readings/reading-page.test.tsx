@@ -28,6 +28,7 @@ const aRep = (n: number): Rep => ({
   },
   excluded: null,
   excludedNote: '',
+  quietFrom: null,
   markedFrames: 30,
   version: 1,
 });

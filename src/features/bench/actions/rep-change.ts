@@ -17,6 +17,7 @@ export const inverseOfChange = (rep: Rep, change: RepChange): RepChange => {
   if (change.endFrame !== undefined) inverse.endFrame = rep.endFrame;
   if (change.excluded !== undefined) inverse.excluded = rep.excluded;
   if (change.excludedNote !== undefined) inverse.excludedNote = rep.excludedNote;
+  if (change.quietFrom !== undefined) inverse.quietFrom = rep.quietFrom;
   if (change.boundaries !== undefined) {
     const moments = Object.keys(change.boundaries) as (keyof Boundaries)[];
     inverse.boundaries = Object.fromEntries(

@@ -9,6 +9,7 @@ import type { Missing } from '#shared/measures/missing.ts';
 import type { FrameIndex, Milliseconds } from '#shared/timing/units.ts';
 import type { QueuedMark } from '../queue/queue-core.ts';
 import { repInputOf } from '#shared/records/engine-input.ts';
+import { withSharedQuiet } from '#shared/records/shared-quiet.ts';
 import { hillOf, type HillPoint } from './hill.ts';
 import { type Extra, ledLandmarks, nextLandmark, proposedSet } from './led.ts';
 import { marksWith } from '#shared/records/stored-marks.ts';
@@ -44,13 +45,16 @@ export const repsOf = (
   waiting: readonly QueuedMark[],
   times: readonly Milliseconds[],
 ): BenchRep[] =>
-  document.reps.map(({ rep, marks: stored }) => {
-    const own = waiting.filter((each) => each.repId === rep.id && each.state.is !== 'refused');
-    const marks = marksWith(stored, own);
-    const { clip } = document;
-    const bodyHeightMm = document.athlete.heightMm;
-    return { rep, marks, input: repInputOf({ rep, clip, times, marks, bodyHeightMm }) };
-  });
+  withSharedQuiet(
+    document.reps.map(({ rep, marks: stored }) => {
+      const own = waiting.filter((each) => each.repId === rep.id && each.state.is !== 'refused');
+      const marks = marksWith(stored, own);
+      const { clip } = document;
+      const bodyHeightMm = document.athlete.heightMm;
+      const input = repInputOf({ rep, clip, times, marks, bodyHeightMm });
+      return { rep, marks, input, clipId: clip.id, quietFrom: rep.quietFrom };
+    }),
+  );
 
 const holds = ({ rep }: BenchRep, frame: FrameIndex): boolean =>
   rep.startFrame <= frame && frame <= rep.endFrame;

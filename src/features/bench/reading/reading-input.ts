@@ -6,24 +6,27 @@ import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import type { UnmarkedFrame } from '#shared/reading/next-frame.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
 import { repInputOf } from '#shared/records/engine-input.ts';
+import { withSharedQuiet } from '#shared/records/shared-quiet.ts';
 import { marksWith } from '#shared/records/stored-marks.ts';
 import { frameIndex, type Milliseconds, milliseconds } from '#shared/timing/units.ts';
 import type { BenchRep } from '../model/bench-model.ts';
 
 /** Reps of the visit's other clips, as the document brings them. */
 export const otherInputs = ({ otherReps, athlete }: BenchDocument): RepInput[] =>
-  otherReps.flatMap(({ clip, rep, marks, times }) => {
-    const byFrame: Milliseconds[] = [];
-    for (const { frame, milliseconds: at } of times) byFrame[frame] = milliseconds(at);
-    const input = repInputOf({
-      rep,
-      clip,
-      times: byFrame,
-      marks: marksWith(marks, []),
-      bodyHeightMm: athlete.heightMm,
-    });
-    return input ? [input] : [];
-  });
+  withSharedQuiet(
+    otherReps.map(({ clip, rep, marks, times }) => {
+      const byFrame: Milliseconds[] = [];
+      for (const { frame, milliseconds: at } of times) byFrame[frame] = milliseconds(at);
+      const input = repInputOf({
+        rep,
+        clip,
+        times: byFrame,
+        marks: marksWith(marks, []),
+        bodyHeightMm: athlete.heightMm,
+      });
+      return { input, clipId: clip.id, quietFrom: rep.quietFrom };
+    }),
+  ).flatMap(({ input }) => (input ? [input] : []));
 
 /** What the reading of one side of this visit rests on; null where that side has no rep. */
 export const readingInputOf = (

@@ -7,6 +7,7 @@ import type { BenchRep } from '../model/bench-model.ts';
 import { useReading } from '../reading/use-reading.ts';
 import { goTo } from '../store/bench-store.ts';
 import { AddRep } from './add-rep.tsx';
+import { QuietStance } from './quiet-stance.tsx';
 import { RepActions } from './rep-actions.tsx';
 import { EXCLUSION_WORDS } from './rep-words.ts';
 
@@ -62,6 +63,7 @@ function RepRow({ own }: { own: BenchRep }) {
       {rep.excluded && rep.excludedNote !== '' && (
         <p className="text-note text-soft">{rep.excludedNote}</p>
       )}
+      <QuietStance own={own} />
       <div className="flex flex-wrap gap-x-5">
         {!isCurrent && (
           <Button

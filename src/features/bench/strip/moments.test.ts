@@ -23,6 +23,7 @@ const REP: Rep = {
   },
   excluded: null,
   excludedNote: '',
+  quietFrom: null,
   markedFrames: 0,
   version: 1,
 };
