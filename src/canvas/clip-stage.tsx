@@ -97,7 +97,18 @@ export function ClipStage({ children, className, shownRef, ...props }: ClipStage
           />
           <Suspense>
             <KonvaLayer
-              {...{ size, viewport, hand, draw, movable, asked, onMove, onSelect, pressedRef }}
+              {...{
+                size,
+                viewport,
+                hand,
+                draw,
+                movable,
+                asked,
+                onPlace,
+                onMove,
+                onSelect,
+                pressedRef,
+              }}
             />
           </Suspense>
           {children({ viewport, size })}

@@ -23,7 +23,7 @@ describe('while a landmark is asked for', () => {
     expected: x === null ? null : stagePoint(x, 0),
   });
 
-  it('takes hold of a mark that is pressed, and leaves the rest of the picture to the asked one', () => {
+  it('lets a drag take hold of a mark, and leaves the rest of the picture to the asked one', () => {
     expect(hitRadii(row(0, 200), asked(100))).toEqual([14, 14]);
   });
 

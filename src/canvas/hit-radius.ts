@@ -31,7 +31,7 @@ const between = (least: number, value: number, most: number): number =>
   Math.max(least, Math.min(most, value));
 
 /**
- * How near to each mark a press takes hold of it, CSS px; everywhere else it places what is asked for. A mark's
+ * How near to each mark a press belongs to it, CSS px: a drag from there moves it. A mark's
  * reach ends half way to its nearest neighbour and to where the asked one is expected. The asked one itself is
  * placed again, not taken hold of: its reach is 0.
  */

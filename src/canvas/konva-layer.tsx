@@ -20,8 +20,9 @@ export interface KonvaLayerProps {
   draw: (moved: Moved) => readonly Primitive[];
   /** False where this person may only look. */
   movable: boolean;
-  /** What a press beside the marks is for; null where it is for nothing. */
+  /** What a press is for; null where it is for nothing. A tap on a mark then places there, and only a drag moves it. */
   asked: Asked<FramePoint> | null;
+  onPlace: (point: FramePoint) => void;
   onMove: (landmark: LandmarkId, point: FramePoint) => void;
   onSelect: (landmark: LandmarkId) => void;
   /** Set when a press has landed on a mark, so that the stage leaves it alone. */
@@ -87,6 +88,8 @@ function MarkNode({
   viewport,
   hand,
   movable,
+  asked,
+  onPlace,
   onMove,
   onSelect,
   pressedRef,
@@ -151,7 +154,11 @@ function MarkNode({
       onPointerDown={(event) => {
         if (event.evt.button === 0) pressedRef.current = true;
       }}
-      onPointerClick={() => onSelect(landmark)}
+      onPointerClick={(event) => {
+        const at = event.target.getStage()?.getPointerPosition();
+        if (!asked) onSelect(landmark);
+        else if (at) onPlace(toFrame(viewport, stagePoint(at.x, at.y)));
+      }}
       onDragStart={() => hand.set({ holding: true })}
       onDragMove={(event) => hand.set({ moved: { landmark, point: here(event) } })}
       onDragEnd={(event) => {

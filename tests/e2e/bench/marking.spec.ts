@@ -108,28 +108,25 @@ test('a drag is one step, and Escape puts the mark back', async ({ page }) => {
   expect(after?.u).toBeGreaterThan((before?.u ?? 0) + 60);
 });
 
-test('a press on a mark takes hold of it; beside it, what is asked for is placed', async ({
+test('a press on a mark places what is asked for, since landmarks can cover each other', async ({
   page,
 }) => {
+  // with a level thigh the lifted knee stands before the hip bone
   await openBench(page, made.clipId, '?frame=2');
   const support = await storedMark(coach, repId, 2, 'asis-support');
-  const next = page.getByRole('heading', { name: /^Next: front corner.*lifted side/ });
-  await expect(next).toBeVisible();
-  await press(page, support?.u ?? 0, support?.v ?? 0);
   await expect(
-    page.getByRole('heading', { name: /^Again: front corner.*support side/ }),
+    page.getByRole('heading', { name: /^Next: front corner.*lifted side/ }),
   ).toBeVisible();
-  await expect(handle(page, 'asis-support')).toBeFocused();
-  await expect(handle(page, 'asis-lifted')).not.toBeAttached();
-
-  await page.getByRole('button', { name: 'Pass over' }).click();
-  await expect(next).toBeVisible();
-  const { x, y } = await onScreen(page, support?.u ?? 0, support?.v ?? 0);
-  await page.mouse.click(x + 20, y);
+  await press(page, support?.u ?? 0, support?.v ?? 0);
   await expect(handle(page, 'asis-lifted')).toBeAttached();
   await expect(saved(page)).toBeVisible();
+  const lifted = await storedMark(coach, repId, 2, 'asis-lifted');
+  expect(
+    Math.hypot((lifted?.u ?? NaN) - (support?.u ?? NaN), (lifted?.v ?? NaN) - (support?.v ?? NaN)),
+  ).toBeLessThan(4);
   expect(await storedMark(coach, repId, 2, 'asis-support')).toEqual(support);
   await page.getByRole('button', { name: 'Undo' }).click();
+  await expect(handle(page, 'asis-lifted')).not.toBeAttached();
   await expect(saved(page)).toBeVisible();
 });
 

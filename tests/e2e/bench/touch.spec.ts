@@ -43,16 +43,6 @@ test('a finger is held, slid and let go to place; the glass shows the exact poin
   await expect(handle(page, 'asis-support')).not.toBeAttached();
   await touch(line, 'touchEnd', []);
   await expect(handle(page, 'asis-support')).toBeAttached();
-
-  // a finger that lands on the mark takes hold of it
-  const mark = await handle(page, 'asis-support').boundingBox();
-  if (!mark) throw new Error('no mark');
-  const at: Finger = [mark.x + mark.width / 2, mark.y + mark.height / 2];
-  await touch(line, 'touchStart', [at]);
-  await touch(line, 'touchEnd', []);
-  await expect(page.getByRole('heading', { name: /^Again: front corner/ })).toBeVisible();
-  await expect(handle(page, 'asis-lifted')).not.toBeAttached();
-
   await page.getByRole('button', { name: 'Undo' }).click();
   await expect(handle(page, 'asis-support')).not.toBeAttached();
 });

@@ -14,6 +14,9 @@ import { withOutcomes } from './bench-cache.ts';
 /** An own mark whose event comes later than this after the last answer was placed elsewhere. */
 const OWN_ECHO_MS = 5_000;
 
+/** The query cache tells its pages in a task of its own, the one after this: then they show what was set. */
+const nextTask = (): Promise<void> => new Promise((resolve) => setTimeout(resolve));
+
 /**
  * Keeps the document true: answers to the own queue go straight into the cache; changes that this
  * person made on another device are asked for; disputes show what is stored now.
@@ -26,7 +29,7 @@ export function useLiveBench(document: BenchDocument, queue: MarkQueue): void {
 
   useEffect(
     () =>
-      queue.onSettled((settled) => {
+      queue.onSettled(async (settled) => {
         if (settled.clipId !== clipId) return;
         answered.current = performance.now();
         const { repId, outcomes, touched, rep } = settled;
@@ -34,6 +37,7 @@ export function useLiveBench(document: BenchDocument, queue: MarkQueue): void {
           benchOptions(clipId).queryKey,
           (known) => known && withOutcomes(known, repId, outcomes, touched, rep),
         );
+        await nextTask();
       }),
     [client, queue, clipId],
   );

@@ -78,17 +78,44 @@ const good = (batch: readonly QueuedMark[]): Answer => ({
   rep: REP,
 });
 
+/** A promise and what keeps it. */
+const later = () => {
+  let resolve: () => void = () => undefined;
+  const promise = new Promise<void>((keep) => (resolve = keep));
+  return { promise, resolve };
+};
+
 describe('mark queue', () => {
   it('shows a mark as waiting at once and lets it go when the server has it', async () => {
     const { queue, sent } = make(good);
     const settled: Settled[] = [];
-    queue.onSettled((each) => settled.push(each));
+    queue.onSettled((each) => {
+      settled.push(each);
+      return Promise.resolve();
+    });
     const done = queue.add([mark('a', 1)]);
     expect(queue.snapshot().marks.map((each) => each.id)).toEqual(['a']);
     await done;
     expect(queue.snapshot()).toEqual({ marks: [], link: 'idle' });
     expect(sent).toEqual([['a']]);
     expect(settled[0]).toMatchObject({ clipId: 'clip', repId: 'rep', rep: REP });
+  });
+
+  it('lets a mark go only after the page shows what is stored, so that it never blinks', async () => {
+    const { queue } = make(good);
+    const shown = later();
+    const answered = later();
+    queue.onSettled(() => {
+      answered.resolve();
+      return shown.promise;
+    });
+    const done = queue.add([mark('a', 1)]);
+    await answered.promise;
+    await new Promise((resolve) => setTimeout(resolve));
+    expect(queue.snapshot().marks.map((each) => each.id)).toEqual(['a']);
+    shown.resolve();
+    await done;
+    expect(queue.snapshot().marks).toEqual([]);
   });
 
   it('keeps marks without a connection and sends them when it is back', async () => {

@@ -48,10 +48,13 @@ export interface QueueDeps {
   readonly later: (work: () => void, ms: number) => () => void;
 }
 
+export type SettledListener = (settled: Settled) => Promise<void>;
+
 export interface MarkQueue {
   readonly snapshot: () => QueueSnapshot;
   readonly subscribe: (listener: () => void) => () => void;
-  readonly onSettled: (listener: (settled: Settled) => void) => () => void;
+  /** What waited is dropped only after every listener is done: by then the page shows what is stored. */
+  readonly onSettled: (listener: SettledListener) => () => void;
   readonly add: (marks: readonly NewMark[]) => Promise<void>;
   readonly keepMine: (id: string) => Promise<void>;
   readonly letGo: (ids: readonly string[]) => Promise<void>;
@@ -77,7 +80,7 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
   let link: QueueLink = 'idle';
   let shown: QueueSnapshot = { marks: [], link };
   const listeners = new Set<() => void>();
-  const settledListeners = new Set<(settled: Settled) => void>();
+  const settledListeners = new Set<SettledListener>();
   let wait = FIRST_WAIT_MS;
   let callOff: (() => void) | null = null;
   let draining: Promise<void> | null = null;
@@ -106,8 +109,8 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
     kept = await storage.read();
     show();
   };
-  const tell = (settled: Settled) => {
-    for (const listener of settledListeners) listener(settled);
+  const tell = async (settled: Settled) => {
+    await Promise.all([...settledListeners].map((listener) => listener(settled)));
   };
 
   const tryLater = (failure: 'offline' | 'trouble') => {
@@ -132,7 +135,7 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
         const touched = new Map(batch.map((each) => [each.id, each]));
         const settled = { clipId: first.clipId, repId: first.repId, touched, ...answer };
         // the page first learns what is stored, then what no longer waits: nothing flickers
-        tell(settled);
+        await tell(settled);
         await change((queue) => {
           const fresh = ids.values();
           return settle(queue, answer.outcomes, () => fresh.next().value ?? newId());
@@ -192,7 +195,7 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
     theirsNow: (key, mark) => change((queue) => refreshDispute(queue, key, mark)),
     drain,
     async heard(settled) {
-      if (settled) tell(settled);
+      if (settled) await tell(settled);
       await reload();
     },
   };
