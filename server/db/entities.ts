@@ -15,6 +15,9 @@ import { Reading } from '../features/readings/reading.entity.ts';
 import { SideSetting } from '../features/readings/side-setting.entity.ts';
 import { Replay } from '../features/replays/replay.entity.ts';
 import { Rep } from '../features/reps/rep.entity.ts';
+import { SecondMarkCommand } from '../features/second-markings/second-mark-command.entity.ts';
+import { SecondMark } from '../features/second-markings/second-mark.entity.ts';
+import { SecondMarking } from '../features/second-markings/second-marking.entity.ts';
 import { SetUp } from '../features/visits/set-up.entity.ts';
 import { Visit } from '../features/visits/visit.entity.ts';
 import { JobOutbox } from '../jobs/job-outbox.entity.ts';
@@ -35,6 +38,9 @@ export const entities = [
   Rep,
   Mark,
   MarkCommand,
+  SecondMarking,
+  SecondMark,
+  SecondMarkCommand,
   Call,
   Reading,
   SideSetting,

@@ -6,6 +6,7 @@ import { Migration20261201133912_stale_readings } from '../../migrations/Migrati
 import { Migration20261201155000_job_priority } from '../../migrations/Migration20261201155000_job_priority.ts';
 import { Migration20261201160000_clip_trouble } from '../../migrations/Migration20261201160000_clip_trouble.ts';
 import { Migration20261201163000_quiet_from } from '../../migrations/Migration20261201163000_quiet_from.ts';
+import { Migration20261201170000_second_markings } from '../../migrations/Migration20261201170000_second_markings.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -27,6 +28,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261201163000_quiet_from',
     class: Migration20261201163000_quiet_from,
+  },
+  {
+    name: 'Migration20261201170000_second_markings',
+    class: Migration20261201170000_second_markings,
   },
 ];
 

@@ -11,6 +11,7 @@ import { exportsFeature } from '../features/exports/exports.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { replaysFeature } from '../features/replays/replays.routes.ts';
 import { repsFeature } from '../features/reps/reps.routes.ts';
+import { secondMarkingsFeature } from '../features/second-markings/second-markings.routes.ts';
 import { systemFeature } from '../features/system/system.routes.ts';
 import { todayFeature } from '../features/today/today.routes.ts';
 import { visitsFeature } from '../features/visits/visits.routes.ts';
@@ -29,6 +30,7 @@ export const features: readonly Feature[] = [
   callsFeature,
   repsFeature,
   readingsFeature,
+  secondMarkingsFeature,
   replaysFeature,
   commentsFeature,
   exportsFeature,

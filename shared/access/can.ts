@@ -11,8 +11,16 @@ const reach = (actor: UserActor, coachId: string): Reach => {
   return null;
 };
 
-/** A supervisor sees and comments; what is measured stays the coach's hand. */
-const ASSIGNED: ReadonlySet<Action> = new Set<Action>(['athlete.read', 'comment.add']);
+/**
+ * A supervisor sees, comments and marks a second time, blind, which changes no reading; what is measured stays the
+ * coach's hand.
+ */
+const ASSIGNED: ReadonlySet<Action> = new Set<Action>([
+  'athlete.read',
+  'comment.add',
+  'marks.second',
+  'reliability.read',
+]);
 
 const onPractice = (actor: UserActor, action: Action): boolean =>
   action === 'practice.read' || actor.role === 'owner' || actor.role === 'coach';

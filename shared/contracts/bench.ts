@@ -3,6 +3,7 @@ import { call } from './calls.ts';
 import { clipWithFrames } from './clips.ts';
 import { comment } from './comments.ts';
 import { frameIndex, id, personRef, side } from './primitives.ts';
+import { markErrorShape } from './readings.ts';
 import { mark, rep } from './reps.ts';
 import { json, none, route } from './route.ts';
 
@@ -18,6 +19,8 @@ export const benchDocument = z
     calls: z.array(call),
     /** Sides for which the 'planted thigh turns little' assumption is on. */
     assumption: z.array(side),
+    /** By side, the error of one anatomical mark that a reading made now takes. */
+    markErrors: z.array(markErrorShape.extend({ side })),
     /** Other reps of the same visit, for the reading over all reps: their clips and marks. */
     otherReps: z.array(
       z.object({
@@ -28,7 +31,7 @@ export const benchDocument = z
         times: z.array(z.object({ frame: frameIndex, milliseconds: z.number() })),
       }),
     ),
-    may: z.object({ mark: z.boolean(), comment: z.boolean() }),
+    may: z.object({ mark: z.boolean(), comment: z.boolean(), markAgain: z.boolean() }),
   })
   .meta({ id: 'BenchDocument' });
 export type BenchDocument = z.infer<typeof benchDocument>;

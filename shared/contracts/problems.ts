@@ -42,6 +42,25 @@ export const PROBLEMS = {
   'boundaries-out-of-order': [422, 'The moments of a rep must follow each other.'],
   'landmark-not-in-view': [422, 'This landmark is not marked in this view.'],
   'call-first': [409, 'Record your call by eye first. Figures are shown after it.'],
+  // second markings
+  'nothing-to-mark-again': [
+    409,
+    'Nothing on these frames was placed by hand yet. Mark the rep first.',
+  ],
+  'second-marking-open': [
+    409,
+    'This person has a second marking of this rep to finish. Finish or give it up first.',
+  ],
+  'second-marking-finished': [409, 'This second marking is finished and stays as it is.'],
+  'second-marks-missing': [
+    409,
+    'Some landmarks are neither placed nor marked hidden. Mark them first.',
+  ],
+  'marker-cannot-see': [
+    422,
+    'This person may not mark this athlete. Ask their coach, or a supervisor assigned to that coach.',
+  ],
+  'not-asked-here': [422, 'This landmark is not asked for on this frame.'],
   // replays
   'pass-phrase-needed': [401, 'This replay asks for a pass phrase.'],
   // the house

@@ -26,6 +26,17 @@ export const READING_LABELS = {
   'not-measurable': 'Not measurable from these landmarks',
 } as const satisfies Record<ReadingCode, string>;
 
+/** The error of one anatomical mark that a reading was made with. */
+export const markErrorShape = z
+  .object({
+    /** Px of the source. */
+    px: z.number(),
+    /** Frames marked twice that it rests on; 0: assumed. */
+    frames: z.int(),
+  })
+  .meta({ id: 'MarkError' });
+export type MarkErrorShape = z.infer<typeof markErrorShape>;
+
 /** A reading as it was made: never changed, followed by another when its inputs change. */
 export const reading = z
   .object({
@@ -52,6 +63,7 @@ export const reading = z
     provisional: z.boolean(),
     /** The 'planted thigh turns little' assumption was on. */
     assumption: z.boolean(),
+    markError: markErrorShape,
     result: readingResult,
     /** What the rep ids of `result` are called on the page. */
     reps: z.array(
@@ -77,6 +89,7 @@ export const readingSummary = reading
     label: true,
     change: true,
     plusMinus: true,
+    markError: true,
     by: true,
     at: true,
   })
@@ -95,6 +108,11 @@ export const sidePage = z
     calls: z.array(call),
     /** Null where no rep of this side has marks. */
     reading: reading.nullable(),
+    /**
+     * The marking error that a reading made now would take, where the stored one was made with another: it stays as
+     * it is until somebody asks for it anew.
+     */
+    newerMarkError: markErrorShape.nullable(),
     history: z.array(readingSummary),
     /** The other side of this visit, once it too has a call; null where there is nothing. */
     otherSide: z.object({ side, reading: reading.nullable(), calls: z.array(call) }).nullable(),
@@ -118,6 +136,16 @@ export const readingRoutes = {
     status: 200,
     answer: json(sidePage),
     problems: ['not-found', 'call-first'],
+  }),
+  renewReading: route({
+    method: 'post',
+    path: '/api/visits/:id/sides/:side/reading',
+    summary: 'Make the reading of a side anew with the marking error known now; both are kept.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: json(sidePage),
+    problems: ['not-found', 'not-allowed', 'call-first'],
   }),
   setAssumption: route({
     method: 'put',

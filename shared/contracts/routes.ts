@@ -7,8 +7,10 @@ import { commentRoutes } from './comments.ts';
 import { eventRoutes } from './events.ts';
 import { exportRoutes } from './exports.ts';
 import { readingRoutes } from './readings.ts';
+import { reliabilityRoutes } from './reliability.ts';
 import { repRoutes } from './reps.ts';
 import { replayRoutes } from './replays.ts';
+import { secondMarkingRoutes } from './second-markings.ts';
 import { systemRoutes } from './system.ts';
 import { todayRoutes } from './today.ts';
 import { visitRoutes } from './visits.ts';
@@ -22,6 +24,8 @@ export const routes = {
   ...visitRoutes,
   ...clipRoutes,
   ...repRoutes,
+  ...secondMarkingRoutes,
+  ...reliabilityRoutes,
   ...benchRoutes,
   ...callRoutes,
   ...readingRoutes,

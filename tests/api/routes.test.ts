@@ -10,6 +10,7 @@ import { Comment } from '#server/features/comments/comment.entity.ts';
 import { Consent } from '#server/features/athletes/consent.entity.ts';
 import { Replay } from '#server/features/replays/replay.entity.ts';
 import { makeRep } from '#server/features/reps/rep.factory.ts';
+import { SecondMarking } from '#server/features/second-markings/second-marking.entity.ts';
 import { SetUp } from '#server/features/visits/set-up.entity.ts';
 import { Session } from '#server/features/accounts/session.entity.ts';
 import { makeApp } from '#server/http/app.ts';
@@ -54,6 +55,14 @@ beforeAll(async () => {
       expiresAt: new Date(Date.now() + 1e8),
       by: coach,
     });
+    const secondMarking = em.create(SecondMarking, {
+      rep,
+      marker: coach,
+      askedBy: coach,
+      frames: [{ frame: 1, landmarks: ['asis-support'] }],
+      first: [],
+      phases: {},
+    });
     const upload = em.create(Upload, {
       visit,
       name: 'a.mp4',
@@ -89,6 +98,7 @@ beforeAll(async () => {
       upload: upload.id,
       clip: clip.id,
       rep: rep.id,
+      secondMarking: secondMarking.id,
       comment: comment.id,
       replay: replay.id,
     };

@@ -33,12 +33,19 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   deleteRep: 'rep',
   listMarks: 'rep',
   saveMarks: 'rep',
+  listSecondMarkings: 'rep',
+  startSecondMarking: 'rep',
+  secondMarking: 'secondMarking',
+  saveSecondMarks: 'secondMarking',
+  finishSecondMarking: 'secondMarking',
+  discardSecondMarking: 'secondMarking',
   bench: 'clip',
   sayHere: 'clip',
   listCalls: 'visit',
   recordCall: 'visit',
   sideReading: 'visit',
   setAssumption: 'visit',
+  renewReading: 'visit',
   listComments: 'clip',
   addComment: 'clip',
   editComment: 'comment',
@@ -88,6 +95,17 @@ export const BODIES: Partial<Record<RouteName, object>> = {
       },
     ],
   },
+  saveSecondMarks: {
+    commands: [
+      {
+        id: '6f1d2a0e-5c1b-4c57-9d55-0a3f1e2b7c02',
+        frame: 1,
+        landmark: 'asis-support',
+        baseRevision: 0,
+        set: { to: 'hidden' },
+      },
+    ],
+  },
   recordCall: { seen: 'early', confidence: 'sure' },
   setAssumption: { on: true },
   addComment: { body: 'x', fromFrame: 0, toFrame: 0 },
@@ -105,6 +123,7 @@ export type Ids = Record<
   | 'upload'
   | 'clip'
   | 'rep'
+  | 'secondMarking'
   | 'comment'
   | 'replay',
   string

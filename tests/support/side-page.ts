@@ -73,6 +73,7 @@ export const aReading = (result: ReadingResult, change: Partial<Reading> = {}): 
   smallestFound: result.figures?.mdt90 ?? null,
   provisional: result.provisional,
   assumption: result.thighTurnsLittle,
+  markError: { px: 3, frames: 0 },
   result,
   reps: result.reps.map(({ id }, n) => ({
     id,
@@ -94,6 +95,7 @@ export const aSidePage = (reading: Reading | null, change: Partial<SidePage> = {
     side,
     calls: [aCall({ side })],
     reading,
+    newerMarkError: null,
     history: reading
       ? [
           {
@@ -103,6 +105,7 @@ export const aSidePage = (reading: Reading | null, change: Partial<SidePage> = {
             label: reading.label,
             change: reading.change,
             plusMinus: reading.plusMinus,
+            markError: reading.markError,
             by: reading.by,
             at: reading.at,
           },

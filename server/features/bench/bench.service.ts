@@ -12,6 +12,8 @@ import { presentClip, presentClipWithFrames } from '../clips/clips.presenter.ts'
 import { Comment } from '../comments/comment.entity.ts';
 import { COMMENT_ORDER, presentComment } from '../comments/comments.presenter.ts';
 import { presentMark } from '../marks/mark-store.ts';
+import { errorOfHands, handsOn } from '../readings/inputs-of-side.ts';
+import { presentMarkError } from '../readings/readings.presenter.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import { timesOfClip } from '../reps/reps.presenter.ts';
 import { type NumberedRep, presentNumbered, storedReps } from '../reps/stored-reps.ts';
@@ -30,8 +32,21 @@ const mayOn = (actor: UserActor, athlete: Athlete): BenchDocument['may'] => {
   return {
     mark: can(actor, 'marks.save', caseload),
     comment: can(actor, 'comment.add', caseload),
+    markAgain: can(actor, 'marks.second', caseload),
   };
 };
+
+/** What a reading made now takes: the error of the hands on that side, or of the one whose hands will be the first. */
+const markErrorsOf = ({ em, actor }: Unit<UserActor>, reps: readonly NumberedRep[]) =>
+  Promise.all(
+    side.options.map(async (each) => {
+      const hands = handsOn(
+        reps.flatMap(({ rep, marks }) => (rep.supportSide === each ? marks : [])),
+      );
+      const error = await errorOfHands(em, hands.length === 0 ? [actor.id] : hands);
+      return { side: each, ...presentMarkError(error) };
+    }),
+  );
 
 /** Everything that opening the Bench needs, in a handful of statements however many marks there are. */
 export const benchOf = async (unit: Unit<UserActor>, clipId: string): Promise<BenchDocument> => {
@@ -68,6 +83,7 @@ export const benchOf = async (unit: Unit<UserActor>, clipId: string): Promise<Be
     comments: comments.map((comment) => presentComment(comment as Comment, actor.id)),
     calls: calls.map((call) => presentCall(call as Call)),
     assumption: side.options.filter((each) => assumed.some((setting) => setting.side === each)),
+    markErrors: await markErrorsOf(unit, all),
     otherReps: all
       .filter((stored) => stored.clip !== clip)
       .map((stored) => {

@@ -1,5 +1,6 @@
 import { type EntityManager, ref } from '@mikro-orm/postgresql';
 import type { Side } from '#shared/contracts/primitives.ts';
+import type { MarkError } from '#shared/measures/inputs.ts';
 import type { ReadingResult } from '#shared/reading/types.ts';
 import { deriveApart } from './derive-apart.ts';
 import { Reading } from './reading.entity.ts';
@@ -21,7 +22,12 @@ export const sideSetting = async (
 };
 
 /** Columns of a new reading, from what the engine said. */
-export const columnsOf = (result: ReadingResult) => ({
+export const columnsOf = (
+  result: ReadingResult,
+  { anatomicalPx, doublyMarkedFrames }: MarkError,
+) => ({
+  markErrorPx: anatomicalPx,
+  doublyMarkedFrames,
   engine: result.engine,
   inputHash: result.inputHash,
   seed: Number.parseInt(result.inputHash.slice(0, 8), 16),
@@ -64,12 +70,13 @@ export const keepReading = async (
   const visitId = setting.visit.id;
   await em.execute(
     `insert into reading (id, practice_id, visit_id, side, engine, input_hash, seed, inputs, result, code, before60,
-        change, u, p_early, smallest_found, provisional, assumption, by_id, at)
+        change, u, p_early, smallest_found, provisional, assumption, mark_error_px, doubly_marked_frames, by_id, at)
       select gen_random_uuid(), current_practice(), ?, ?, r.engine, r."inputHash", r.seed, ?::jsonb, ?::jsonb, r.code,
-        r.before60, r.change, r.u, r."pEarly", r."smallestFound", r.provisional, r.assumption, ?, now()
+        r.before60, r.change, r.u, r."pEarly", r."smallestFound", r.provisional, r.assumption,
+        r."markErrorPx", r."doublyMarkedFrames", ?, now()
       from jsonb_to_record(?::jsonb) as r (engine int, "inputHash" text, seed bigint, code text, before60 boolean,
         change double precision, u double precision, "pEarly" double precision, "smallestFound" double precision,
-        provisional boolean, assumption boolean)
+        provisional boolean, assumption boolean, "markErrorPx" double precision, "doublyMarkedFrames" int)
       on conflict (visit_id, side, input_hash) do nothing`,
     [
       visitId,
@@ -77,7 +84,7 @@ export const keepReading = async (
       JSON.stringify(inputs.input),
       JSON.stringify(result),
       inputs.markedBy,
-      JSON.stringify(columnsOf(result)),
+      JSON.stringify(columnsOf(result, inputs.input.markError)),
     ],
   );
   const made = await knownReading(em, setting, inputs);

@@ -31,6 +31,9 @@ export const Reading = defineEntity({
     smallestFound: real().nullable(),
     provisional: p.boolean(),
     assumption: p.boolean(),
+    /** The marking error it was made with, px of the source; 0 frames marked twice: the assumed one. */
+    markErrorPx: real().default(3),
+    doublyMarkedFrames: p.integer().default(0),
     by: p.manyToOne(User).ref(),
     at: madeAt(),
   },

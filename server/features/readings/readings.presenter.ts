@@ -4,6 +4,7 @@ import {
   type SidePage,
   READING_LABELS,
 } from '#shared/contracts/readings.ts';
+import type { MarkError } from '#shared/measures/inputs.ts';
 import { sidesDifference } from '#shared/reading/compare.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import type { NumberedRep } from '../reps/stored-reps.ts';
@@ -20,6 +21,11 @@ export const readingLabel = (code: ReadingCode, before60: boolean): string =>
 
 const plusMinus = (u: number | null): number | null => (u === null ? null : COVERAGE * u);
 
+export const presentMarkError = ({ anatomicalPx, doublyMarkedFrames }: MarkError) => ({
+  px: anatomicalPx,
+  frames: doublyMarkedFrames,
+});
+
 export const presentSummary = (reading: Reading): SidePage['history'][number] => ({
   id: reading.id,
   engine: reading.engine,
@@ -28,6 +34,10 @@ export const presentSummary = (reading: Reading): SidePage['history'][number] =>
   change: reading.change ?? null,
   plusMinus: plusMinus(reading.u ?? null),
   by: presentPerson(reading.by.unwrap()),
+  markError: presentMarkError({
+    anatomicalPx: reading.markErrorPx,
+    doublyMarkedFrames: reading.doublyMarkedFrames,
+  }),
   at: reading.at.toISOString(),
 });
 

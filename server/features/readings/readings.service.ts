@@ -14,8 +14,14 @@ import { type VisitInSight, visitInSight } from '../visits/visit-in-sight.ts';
 import { agreementOf } from './agreement.ts';
 import { currentReading, sideSetting } from './current-reading.ts';
 import { Reading } from './reading.entity.ts';
-import { compareSides, presentReading, presentSummary } from './readings.presenter.ts';
-import { markedReps, sideInputs } from './side-inputs.ts';
+import {
+  compareSides,
+  presentMarkError,
+  presentReading,
+  presentSummary,
+} from './readings.presenter.ts';
+import { inputsOfSide } from './inputs-of-side.ts';
+import { markedReps } from './side-inputs.ts';
 
 type Of = Unit<UserActor>;
 
@@ -28,29 +34,42 @@ const readingOfSide = async (
   visitId: string,
   side: Side,
   reps: readonly NumberedRep[],
+  options: { readonly anew?: boolean } = {},
 ) => {
   const setting = await sideSetting(em, visitId, side);
-  const inputs = sideInputs(reps, side, setting.assumption);
-  if (!inputs) {
+  const { assumption } = setting;
+  const of = await inputsOfSide(em, setting, reps, side, options);
+  if (!of) {
     setting.reading = null;
-    return { assumption: setting.assumption, reading: null };
+    return { assumption, reading: null, newerMarkError: null };
   }
-  const reading = await currentReading(em, setting, inputs);
+  const reading = await currentReading(em, setting, of.inputs);
   setting.figuresShownAt ??= new Date();
-  return { assumption: setting.assumption, reading: presentReading(reading, inputs.reps) };
+  return {
+    assumption,
+    reading: presentReading(reading, of.inputs.reps),
+    newerMarkError: of.newer && presentMarkError(of.newer),
+  };
 };
 
 const pageOf = async (
   unit: Of,
   { visit, athlete, coach }: VisitInSight,
   side: Side,
+  options: { readonly anew?: boolean } = {},
 ): Promise<SidePage> => {
   const { em } = unit;
   const calls = await callsOf(unit, visit.id);
   const callsOn = (which: Side) => calls.filter((call) => call.side === which).map(presentCall);
   if (callsOn(side).length === 0) throw new Problem('call-first');
   const reps = await markedReps(em, visit.id, athlete);
-  const { reading, assumption } = await readingOfSide(unit, visit.id, side, reps);
+  const { reading, assumption, newerMarkError } = await readingOfSide(
+    unit,
+    visit.id,
+    side,
+    reps,
+    options,
+  );
   const other = otherSide(side);
   const otherCalls = callsOn(other);
   const otherReading =
@@ -68,6 +87,7 @@ const pageOf = async (
     side,
     calls: callsOn(side),
     reading,
+    newerMarkError,
     history: history.map(presentSummary),
     otherSide:
       otherCalls.length === 0 ? null : { side: other, reading: otherReading, calls: otherCalls },
@@ -98,4 +118,14 @@ export const setAssumption = async (
   await unit.em.flush();
   await tell(unit, { coachId: sight.athlete.coach.id }, { type: 'reading', visitId, side });
   return pageOf(unit, sight, side);
+};
+
+/** Makes the reading of a side anew with the marking error known now; the old one stays in the history. */
+export const renewReading = async (unit: Of, visitId: string, side: Side): Promise<SidePage> => {
+  const sight = await visitInSight(unit, visitId, 'reading.renew');
+  const page = await pageOf(unit, sight, side, { anew: true });
+  audit(unit, 'reading.renew', visitId, { side, px: page.reading?.markError.px ?? null });
+  await unit.em.flush();
+  await tell(unit, { coachId: sight.athlete.coach.id }, { type: 'reading', visitId, side });
+  return page;
 };

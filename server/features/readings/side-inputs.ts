@@ -1,6 +1,6 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Side } from '#shared/contracts/primitives.ts';
-import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import type { MarkError } from '#shared/measures/inputs.ts';
 import { canonicalText } from '#shared/reading/canonical.ts';
 import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import { sha256Hex } from '#shared/reading/sha256.ts';
@@ -47,6 +47,7 @@ export const sideInputs = (
   all: readonly NumberedRep[],
   side: Side,
   thighTurnsLittle: boolean,
+  markError: MarkError,
 ): SideInputs | null => {
   const reps = all.filter(({ rep }) => rep.supportSide === side);
   const markedBy = latestHand(reps);
@@ -56,7 +57,7 @@ export const sideInputs = (
     supportSide: side,
     set: null,
     thighTurnsLittle,
-    markError: ASSUMED_MARK_ERROR,
+    markError,
     ownSystematic: null,
     reps: reps.flatMap((stored) => repInput(stored, timesOfClip(stored.clip)) ?? []),
   };

@@ -6,7 +6,8 @@ import type { Ground } from '../../../main/ground.ts';
 import { Visit } from '../../visits/visit.entity.ts';
 import { keepReading, knownReading, sideSetting } from '../current-reading.ts';
 import { deriveApart } from '../derive-apart.ts';
-import { markedReps, sideInputs } from '../side-inputs.ts';
+import { inputsOfSide } from '../inputs-of-side.ts';
+import { markedReps } from '../side-inputs.ts';
 import { DERIVE_READING } from './derive-reading-type.ts';
 
 interface Which {
@@ -23,7 +24,7 @@ const inputsToDerive = (ground: Ground, practiceId: string, { visitId, side }: W
     // marks that come from here on ask for another job
     setting.stale = false;
     const reps = await markedReps(em, visitId, visit.athlete.unwrap());
-    const inputs = sideInputs(reps, side, setting.assumption);
+    const inputs = (await inputsOfSide(em, setting, reps, side))?.inputs;
     if (!inputs) {
       setting.reading = null;
       return null;

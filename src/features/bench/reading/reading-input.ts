@@ -1,7 +1,7 @@
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { RepInput } from '#shared/course/types.ts';
-import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { ASSUMED_MARK_ERROR, type MarkError } from '#shared/measures/inputs.ts';
 import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import type { UnmarkedFrame } from '#shared/reading/next-frame.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
@@ -28,6 +28,12 @@ export const otherInputs = ({ otherReps, athlete }: BenchDocument): RepInput[] =
     }),
   ).flatMap(({ input }) => (input ? [input] : []));
 
+/** The marking error that a reading of this side takes. */
+export const markErrorOn = ({ markErrors }: BenchDocument, side: Side): MarkError => {
+  const known = markErrors.find((each) => each.side === side);
+  return known ? { anatomicalPx: known.px, doublyMarkedFrames: known.frames } : ASSUMED_MARK_ERROR;
+};
+
 /** What the reading of one side of this visit rests on; null where that side has no rep. */
 export const readingInputOf = (
   document: BenchDocument,
@@ -42,7 +48,7 @@ export const readingInputOf = (
     supportSide: side,
     set: null,
     thighTurnsLittle: document.assumption.includes(side),
-    markError: ASSUMED_MARK_ERROR,
+    markError: markErrorOn(document, side),
     ownSystematic: null,
     reps: ofSide,
   };

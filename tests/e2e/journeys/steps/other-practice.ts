@@ -31,6 +31,7 @@ const WITHOUT_ID: Record<RouteNameWithoutId, Kind> = {
   listSetUps: 'lists',
   addSetUp: 'bare',
   listClips: 'lists',
+  reliability: 'lists',
   listReplays: 'asks',
   makeReplay: 'asks',
   openReplay: 'link',
@@ -70,6 +71,11 @@ export async function everythingOf(request: APIRequestContext, run: Run): Promis
     params: { id: visitId },
     body: { name: 'second.mov', bytes: 1000, view: 'front' },
   });
+  const rep = bench.reps[0]?.rep.id ?? '';
+  const second = await ask(request, routes.startSecondMarking, {
+    params: { id: rep },
+    body: { markerId: null, frames: null },
+  });
   const first = <T extends { id: string }>(items: readonly T[]): string => items[0]?.id ?? '';
   return {
     session: session.id,
@@ -79,7 +85,8 @@ export async function everythingOf(request: APIRequestContext, run: Run): Promis
     setUp: setUp.id,
     upload: upload.id,
     clip: clipId,
-    rep: first(bench.reps.map(({ rep }) => rep)),
+    rep,
+    secondMarking: second.id,
     comment: first(bench.comments),
     replay: first(replays.items),
   };
@@ -88,6 +95,7 @@ export async function everythingOf(request: APIRequestContext, run: Run): Promis
 /** Takes back what `everythingOf` made. */
 export async function tidyUp(request: APIRequestContext, ids: Ids): Promise<void> {
   await ask(request, routes.cancelUpload, { params: { id: ids.upload } });
+  await ask(request, routes.discardSecondMarking, { params: { id: ids.secondMarking } });
   await ask(request, routes.deleteSetUp, { params: { id: ids.setUp } });
 }
 
