@@ -40,6 +40,7 @@ export default ts.config(
       'docker-free-scripts/**',
       'tests/bench/**',
       'tests/study/cli.ts',
+      'tests/mutation/cli.ts',
       'shared/evaluate/cli.ts',
     ],
     rules: { 'no-console': 'off' },

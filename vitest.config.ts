@@ -16,6 +16,7 @@ export default defineConfig({
             'tests/architecture/**/*.test.ts',
             'tests/study/**/*.test.ts',
             'tests/reference/**/*.test.ts',
+            'tests/mutation/**/*.test.ts',
             'docker-free-scripts/**/*.test.ts',
             'src/video/**/*.test.ts',
             'src/api/**/*.test.ts',
