@@ -4,10 +4,13 @@ import type { CourseScale } from './course-scale.ts';
 /** The frame that is shown: cross lines, tags on both axes, a ring where its turn is known. */
 export function CourseCurrent({
   lift,
+  liftWords,
   turn,
   scale,
 }: {
   lift: number;
+  /** Its figure as it is shown elsewhere: a front view names none under 20°. */
+  liftWords: string;
   turn: number | null;
   scale: CourseScale;
 }) {
@@ -40,7 +43,7 @@ export function CourseCurrent({
       <g transform={`translate(${x(lift)} ${bottom + 17})`}>
         <rect x="-22" y="-13" width="44" height="26" rx="2" className="fill-ink" />
         <text y="5" textAnchor="middle" className="fill-mud font-bold">
-          {Math.round(lift)}°
+          {liftWords}
         </text>
       </g>
     </g>

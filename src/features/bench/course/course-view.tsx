@@ -1,3 +1,4 @@
+import { liftText } from '#shared/overlay/figures.ts';
 import { CourseCurrent, CourseNext } from '#src/ui/plots/course-markers.tsx';
 import { CoursePlot } from '#src/ui/plots/course-plot.tsx';
 import { turnAt } from '#src/ui/plots/course-shapes.ts';
@@ -72,7 +73,12 @@ export function CourseView({ height }: { height?: number }) {
                 />
               )}
               {lift !== null && lift >= 15 && lift <= 112 && (
-                <CourseCurrent lift={lift} turn={turn} scale={scale} />
+                <CourseCurrent
+                  lift={lift}
+                  liftWords={liftText(lift, current.rep.view === 'front', 0)}
+                  turn={turn}
+                  scale={scale}
+                />
               )}
             </>
           )}
