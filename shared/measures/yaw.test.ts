@@ -1,5 +1,6 @@
 import { expect, it } from 'vitest';
-import { toDegrees } from '#shared/geometry/units.ts';
+import { rotateAbout } from '#shared/geometry/points.ts';
+import { degrees, toDegrees } from '#shared/geometry/units.ts';
 import { bellHipCentre, harringtonHipCentre, hipCentre, hipMiddle } from './hip-centre.ts';
 import { turnFromWidth, yaw } from './yaw.ts';
 
@@ -53,3 +54,25 @@ it('puts hip centres inward and below on both sides, however the pelvis leans', 
   const level = hipCentre(right, left, 100);
   expect(raised.v).toBeLessThan(level.v);
 });
+
+it.each([-60, -15, 15, 60])(
+  'turns hip centres with a pelvis that leans by %d° in the picture',
+  (by) => {
+    const left = { u: 600, v: 500 };
+    const right = { u: 500, v: 500 };
+    const about = { u: 540, v: 960 };
+    const lean = (point: typeof left) => rotateAbout(point, about, degrees(by));
+    for (const [own, other] of [
+      [left, right],
+      [right, left],
+    ] as const) {
+      const expected = lean(hipCentre(own, other, 100));
+      const found = hipCentre(lean(own), lean(other), 100);
+      expect(found.u).toBeCloseTo(expected.u, 9);
+      expect(found.v).toBeCloseTo(expected.v, 9);
+    }
+    const middle = lean(hipMiddle(left, right, 100));
+    expect(hipMiddle(lean(left), lean(right), 100).u).toBeCloseTo(middle.u, 9);
+    expect(hipMiddle(lean(left), lean(right), 100).v).toBeCloseTo(middle.v, 9);
+  },
+);
