@@ -28,6 +28,7 @@ export const missing = z
     coded('toe-direction-missing', {}),
     coded('view-cannot-show-it', { view }),
     coded('only-between-lifts', { from: angle, to: angle }),
+    coded('not-in-side-clip', {}),
     coded('marks-coincide', {}),
   ])
   .meta({ id: 'Missing', description: 'Why a value is not there; it is never filled in.' });

@@ -119,6 +119,7 @@ const repResult = z
     fit: fit.nullable(),
     curve: readonlyList(curvePoint),
     substitutions: readonlyList(substitution),
+    liftFrom: z.string().optional(),
   })
   .meta({ id: 'RepResult' });
 

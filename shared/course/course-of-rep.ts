@@ -89,7 +89,7 @@ export const courseOfRep = (
   const level = rep.frames.map((frame) => levelFrame(frame, rep.camera, error));
   const shared = rep.sharedQuiet?.map((frame) => levelFrame(frame, rep.camera, error)) ?? null;
   const { phases, setting } = divide(
-    { frames: level, shared, moved: rep.moved, labels: rep.labels },
+    { frames: level, shared, moved: rep.moved, labels: rep.labels, liftFrom: rep.liftFrom },
     rig,
     set,
   );

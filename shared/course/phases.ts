@@ -3,6 +3,7 @@ import type { LevelFrame } from '#shared/measures/level.ts';
 import { liftOf } from '#shared/measures/lift.ts';
 import type { Setting } from '#shared/measures/measure.ts';
 import type { Rig } from '#shared/measures/rig.ts';
+import type { TiedLift } from '#shared/measures/tied-lift.ts';
 import { settingOf } from '#shared/measures/setting.ts';
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
 import type { Milliseconds } from '#shared/timing/units.ts';
@@ -23,6 +24,7 @@ export interface Dividing {
   readonly shared: readonly LevelFrame[] | null;
   readonly moved: Partial<RepBoundaries>;
   readonly labels: readonly FramePhase[] | null;
+  readonly liftFrom?: TiedLift | undefined;
 }
 
 const IDS: readonly BoundaryId[] = [
@@ -44,12 +46,13 @@ const liftsOf = (frames: readonly LevelFrame[], setting: Setting): readonly (Deg
 const labelled = (
   frames: readonly LevelFrame[],
   labels: readonly FramePhase[],
+  liftFrom: TiedLift | undefined,
   rig: Rig,
   set: LandmarkSetId,
 ): Divided => {
   const byFrame = frames.map((_, i) => labels[i] ?? 'between');
   const quiet = frames.filter((_, i) => byFrame[i] === 'quiet');
-  const setting = settingOf(rig, quiet, set);
+  const setting = settingOf(rig, quiet, set, liftFrom);
   const lifts = liftsOf(frames, setting);
   const rising = medianOfThree(lifts.map((lift, i) => (byFrame[i] === 'rise' ? lift : null)));
   const top = rising.indexOf(Math.max(...rising.map((lift) => lift ?? -Infinity)));
@@ -78,13 +81,13 @@ const labelled = (
  * is found from the marks.
  */
 export const divide = (
-  { frames, shared, moved, labels }: Dividing,
+  { frames, shared, moved, labels, liftFrom }: Dividing,
   rig: Rig,
   set: LandmarkSetId,
 ): Divided => {
-  if (labels) return labelled(frames, labels, rig, set);
+  if (labels) return labelled(frames, labels, liftFrom, rig, set);
   const stance = findStance(frames, shared, rig, moved);
-  const setting = settingOf(rig, stance.quiet, set);
+  const setting = settingOf(rig, stance.quiet, set, liftFrom);
   const lifts = liftsOf(frames, setting);
   const times = frames.map((frame) => frame.time);
   const rise = findRise(times, lifts, stance, moved);

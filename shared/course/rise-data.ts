@@ -1,6 +1,7 @@
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { femurLandmarks, femurLength } from '#shared/measures/turn-parts.ts';
 import type { LevelFrame } from '#shared/measures/level.ts';
+import { type TiedLift, tiedLiftAt } from '#shared/measures/tied-lift.ts';
 import type { RepCourse } from './course-of-rep.ts';
 
 /** One coordinate over the frames of the fit, and its random error, px. */
@@ -19,9 +20,10 @@ export interface RiseData {
   readonly pelvisPart: Float64Array;
   /**
    * What is perturbed, in the order of `COORDINATES`; then u of the belt pointer's tip, or of both
-   * outlines of the pelvis.
+   * outlines of the pelvis. Where lift is tied to a side clip, it stands in the place of the knee.
    */
   readonly coordinates: readonly Coordinate[];
+  readonly liftIsTied: boolean;
   readonly pelvis: 'belt' | 'outline';
   readonly femurLength: number;
   readonly pelvisLength: number;
@@ -51,10 +53,16 @@ const column = (frames: readonly LevelFrame[], id: LandmarkId, axis: 'u' | 'v'):
   error: Float64Array.from(frames, ({ marks }) => marks[id]?.error ?? NaN),
 });
 
+/** Lift and its standard uncertainty, degrees. */
+const tiedColumn = (frames: readonly LevelFrame[], tied: TiedLift): Coordinate => ({
+  at: Float64Array.from(frames, ({ time }) => tiedLiftAt(tied, time)?.lift ?? NaN),
+  error: Float64Array.from(frames, ({ time }) => tiedLiftAt(tied, time)?.u ?? NaN),
+});
+
 /** Null where the quiet stance does not give the lengths the fit needs. */
 export const riseDataOf = (course: RepCourse): RiseData | null => {
   const { setting, set, level } = course;
-  const { rig, reference } = setting;
+  const { rig, reference, tiedLift } = setting;
   const { width, thigh, horizon } = reference;
   const femur = femurLength(setting);
   const pelvisLength = set === 'bare' ? rig.outlineDepthPx : rig.beltPointerPx;
@@ -81,7 +89,7 @@ export const riseDataOf = (course: RepCourse): RiseData | null => {
       column(marks, 'asis-lifted', 'v'),
       column(marks, 'asis-support', 'u'),
       column(marks, 'asis-support', 'v'),
-      column(marks, 'lifted-knee', 'v'),
+      tiedLift ? tiedColumn(marks, tiedLift) : column(marks, 'lifted-knee', 'v'),
       column(marks, near, 'u'),
       column(marks, a, 'u'),
       column(marks, b, 'u'),
@@ -89,6 +97,7 @@ export const riseDataOf = (course: RepCourse): RiseData | null => {
         ? [column(marks, 'outline-support', 'u'), column(marks, 'outline-lifted', 'u')]
         : [column(marks, 'belt-tip', 'u')]),
     ],
+    liftIsTied: tiedLift !== undefined,
     pelvis: set === 'bare' ? 'outline' : 'belt',
     femurLength: femur,
     pelvisLength,

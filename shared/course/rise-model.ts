@@ -40,7 +40,9 @@ export const riseModel = (data: RiseData): RiseModel => {
     // the hip centre's height: see hipCentre, written out for speed
     const hipV = liftedV + (width * (INWARD * acrossV + BELOW * Math.abs(acrossU))) / length;
     const kneeV = x[AT.kneeV] ?? NaN;
-    lifts[i] = DEGREES * liftFromHeights(kneeV, hipV, data.thigh, data.horizon, focal);
+    lifts[i] = data.liftIsTied
+      ? kneeV
+      : DEGREES * liftFromHeights(kneeV, hipV, data.thigh, data.horizon, focal);
 
     const femurFar = ((x[AT.femurA] ?? NaN) + (x[AT.femurB] ?? NaN)) / 2;
     const femurNear = x[AT.femurNear] ?? NaN;

@@ -1,4 +1,5 @@
 import type { AthleteInput, CameraInput, FrameInput } from '#shared/measures/inputs.ts';
+import type { TiedLift } from '#shared/measures/tied-lift.ts';
 import type { Missing } from '#shared/measures/missing.ts';
 import type { Side } from '#shared/landmarks/types.ts';
 import type { Degrees } from '#shared/geometry/units.ts';
@@ -45,6 +46,8 @@ export interface RepInput {
   /** A phase per frame known from elsewhere (evaluation files): nothing is searched then. */
   readonly labels: readonly FramePhase[] | null;
   readonly excluded: ExclusionReason | null;
+  /** Lift as a side clip of the same moment shows it; absent: from this clip's own marks. */
+  readonly liftFrom?: TiedLift | undefined;
 }
 
 /** Boundaries found or moved; null where there is no evidence for them. */

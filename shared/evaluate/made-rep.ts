@@ -19,14 +19,14 @@ export interface Pose {
   readonly lean?: Degrees;
 }
 
-const WIDTH = 240;
-const PELVIS_Z = 960;
-const THIGH = 430;
-const SHANK = 400;
+export const WIDTH = 240;
+export const PELVIS_Z = 960;
+export const THIGH = 430;
+export const SHANK = 400;
 const KNEE_RADIUS = 50;
-const FOCAL = 1500;
-const DISTANCE = 3000;
-const LENS = 900;
+export const FOCAL = 1500;
+export const DISTANCE = 3000;
+export const LENS = 900;
 
 export const BELT_POINTER_MM = 130;
 export const THIGH_POINTER_MM = 170;

@@ -45,6 +45,12 @@ export const CONSTANTS = {
   leastLift: constant(25, 'degrees', 'lift under which a frame has no weight', MODEL),
   liftModelError: constant(2, 'degrees', '± of lift from its model', MODEL),
   liftModelErrorNoLens: constant(7, 'degrees', '± of lift without the lens height', MODEL),
+  tiedGap: constant(
+    250,
+    'ms',
+    'longest gap between marked frames of a side clip that a front clip’s lift is read across',
+    MODEL,
+  ),
   footOff: constant(25, 'mm', 'height of the lifted ankle that counts as foot off', MODEL),
   still: constant(15, 'mm', 'sway of ankle or pelvis that still counts as quiet', PRACTICE),
   fallBack: constant(8, 'degrees', 'drop under the highest lift that leaves the rise', MODEL),

@@ -9,6 +9,8 @@ import { sideLift, sideLiftHalfWidth, SIDE_LANDMARKS } from './lift-from-side.ts
 import { type Measure, measured, missing, type Setting, type Value } from './measure.ts';
 import type { Missing } from './missing.ts';
 import { lacks } from './need.ts';
+import { propagate } from './propagate.ts';
+import { tiedLiftAt } from './tied-lift.ts';
 
 const FRONT_LANDMARKS: readonly LandmarkId[] = ['asis-support', 'asis-lifted', 'lifted-knee'];
 const DRAWS = 200;
@@ -31,6 +33,8 @@ const frontLift = (frame: LevelFrame, { rig, reference }: Setting): Degrees | Mi
 /** Lift of one frame in the view of its clip, degrees; or why there is none. */
 export const liftOf = (frame: LevelFrame, setting: Setting): Degrees | Missing => {
   const { view } = setting.rig.camera;
+  if (setting.tiedLift)
+    return tiedLiftAt(setting.tiedLift, frame.time)?.lift ?? { code: 'not-in-side-clip' };
   if (view === 'front') return frontLift(frame, setting);
   if (view === 'back') return { code: 'view-cannot-show-it', view };
   return sideLift(frame, setting);
@@ -66,8 +70,22 @@ const liftSpread = (frame: LevelFrame, { rig, reference }: Setting): number => {
   return Math.sqrt(squares / (DRAWS - 1));
 };
 
+/** Standard uncertainty of lift from the random errors of its marks, for small errors, degrees. */
+export const liftUncertainty = (frame: LevelFrame, setting: Setting): number => {
+  if (setting.tiedLift) return tiedLiftAt(setting.tiedLift, frame.time)?.u ?? NaN;
+  const ids = setting.rig.camera.view === 'front' ? FRONT_LANDMARKS : SIDE_LANDMARKS;
+  return propagate(frame, ids, (moved) => {
+    const lift = liftOf(moved, setting);
+    return typeof lift === 'number' ? lift : NaN;
+  });
+};
+
 /** ± of lift beside one frame (95 %): marks, and the model with or without the lens height. */
 export const liftHalfWidth = (frame: LevelFrame, setting: Setting): Degrees => {
+  if (setting.tiedLift) {
+    const u = tiedLiftAt(setting.tiedLift, frame.time)?.u ?? NaN;
+    return degrees(Math.hypot(1.96 * u, CONSTANTS.liftModelError.value));
+  }
   if (setting.rig.camera.view !== 'front') return sideLiftHalfWidth(frame, setting);
   const model =
     setting.rig.lensHeightMm === null

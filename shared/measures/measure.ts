@@ -4,6 +4,7 @@ import type { LevelFrame } from './level.ts';
 import type { Missing } from './missing.ts';
 import type { Reference } from './reference.ts';
 import type { Rig } from './rig.ts';
+import type { TiedLift } from './tied-lift.ts';
 import type { TurnZero } from './turn-zero.ts';
 
 /** What a measure may look at besides the marks of its frame. */
@@ -13,6 +14,8 @@ export interface Setting {
   readonly set: LandmarkSetId;
   /** Null where the quiet stance does not carry the marks of the set. */
   readonly turnZero: TurnZero | null;
+  /** Lift is taken from a side clip of the same moment; absent: from the marks of this clip. */
+  readonly tiedLift?: TiedLift | undefined;
 }
 
 /** A value with its ± (95 %), in the measure's unit; or why there is none. */

@@ -14,5 +14,7 @@ export type Missing =
   | { readonly code: 'toe-direction-missing' }
   | { readonly code: 'view-cannot-show-it'; readonly view: View }
   | { readonly code: 'only-between-lifts'; readonly from: Degrees; readonly to: Degrees }
+  /** Lift comes from a side clip, which has no marked frames around this moment. */
+  | { readonly code: 'not-in-side-clip' }
   /** Marks that lie on each other, or numbers that are not finite. */
   | { readonly code: 'marks-coincide' };

@@ -1,10 +1,9 @@
 import { degrees } from '#shared/geometry/units.ts';
-import type { LandmarkId, LandmarkSetId, Marks } from '#shared/landmarks/types.ts';
+import type { LandmarkSetId, Marks } from '#shared/landmarks/types.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import type { LevelFrame } from '#shared/measures/level.ts';
-import { liftOf } from '#shared/measures/lift.ts';
+import { liftOf, liftUncertainty } from '#shared/measures/lift.ts';
 import type { Setting } from '#shared/measures/measure.ts';
-import { propagate } from '#shared/measures/propagate.ts';
 import { isTurn, turnOf } from '#shared/measures/turn.ts';
 import { turnLandmarks } from '#shared/measures/turn-parts.ts';
 import type { UsedRep } from './fit-rep.ts';
@@ -26,14 +25,6 @@ export interface SeenLift {
 /** Frames of a rep nearer than this are one: the curve cannot bend between them. */
 const BIN = 2;
 
-const LIFT_LANDMARKS: readonly LandmarkId[] = ['asis-support', 'asis-lifted', 'lifted-knee'];
-
-const liftVarianceOf = (frame: LevelFrame, setting: Setting): number =>
-  propagate(frame, LIFT_LANDMARKS, (moved) => {
-    const lift = liftOf(moved, setting);
-    return typeof lift === 'number' ? lift : NaN;
-  }) ** 2;
-
 const frameOf = (
   frame: LevelFrame,
   setting: Setting,
@@ -47,7 +38,7 @@ const frameOf = (
   const seen: SeenLift = {
     rep,
     lift: degrees(lift),
-    liftVariance: liftVarianceOf(frame, setting),
+    liftVariance: liftUncertainty(frame, setting) ** 2,
     thigh: turn.thighPart,
     thighVariance: Math.max(turn.thighFrameVariance, least),
     pelvis: turn.pelvisPart,

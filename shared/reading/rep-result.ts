@@ -83,5 +83,6 @@ export const repResult = (
         })
       : [],
     substitutions: substitutionsOf(shown),
+    ...(rep.liftFrom && { liftFrom: rep.liftFrom.from }),
   };
 };

@@ -106,6 +106,8 @@ export interface RepResult {
   readonly fit: RepFit | null;
   readonly curve: readonly CurvePoint[];
   readonly substitutions: readonly SubstitutionChange[];
+  /** Rep of the side clip that its lift was taken from; absent: from its own clip. */
+  readonly liftFrom?: string | undefined;
 }
 
 /** One point of a drawn course; `low` and `high` bound the 95 % band under our error model. */

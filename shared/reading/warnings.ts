@@ -70,7 +70,8 @@ const warningsOf = (course: RepCourse): readonly Warning[] => {
       limit: limits.framesPerSecond,
     });
   if (camera.mirrored) warnings.push({ code: 'mirrored' });
-  if (course.setting.rig.lensHeightMm === null && camera.view === 'front')
+  const ownLift = camera.view === 'front' && !course.setting.tiedLift;
+  if (course.setting.rig.lensHeightMm === null && ownLift)
     warnings.push({
       code: 'lens-height-missing',
       liftHalfWidth: degrees(CONSTANTS.liftModelErrorNoLens.value),

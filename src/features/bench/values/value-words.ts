@@ -38,6 +38,8 @@ export const missingWords = (missing: Missing): string => {
       return 'not seen in this view';
     case 'only-between-lifts':
       return `from ${missing.from}° to ${missing.to}° of lift`;
+    case 'not-in-side-clip':
+      return 'not marked in the side clip';
     case 'marks-coincide':
       return 'marks lie on each other';
   }

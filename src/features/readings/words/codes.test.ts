@@ -233,6 +233,10 @@ const MISSING = {
     { code: 'only-between-lifts', from: degrees(75), to: degrees(105) },
     'only given for a lift from 75° to 105°',
   ],
+  'not-in-side-clip': [
+    { code: 'not-in-side-clip' },
+    'the side clip has no marks around this moment',
+  ],
   'marks-coincide': [{ code: 'marks-coincide' }, 'marks lie on each other'],
 } satisfies Codes<Missing>;
 

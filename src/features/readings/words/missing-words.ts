@@ -28,6 +28,8 @@ export const missingWords = (missing: Missing): string => {
       return `not seen in this view (${VIEW_WORDS[missing.view]})`;
     case 'only-between-lifts':
       return `only given for a lift from ${degrees(missing.from, 0)} to ${degrees(missing.to, 0)}`;
+    case 'not-in-side-clip':
+      return 'the side clip has no marks around this moment';
     case 'marks-coincide':
       return 'marks lie on each other';
   }
