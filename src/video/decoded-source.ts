@@ -18,6 +18,19 @@ interface Job {
   reject: (error: unknown) => void;
 }
 
+/** A page that nobody sees is not painted: then work goes on after this, ms. */
+const UNSEEN_MS = 50;
+
+/** Until what is on the canvas now has been painted on the screen. */
+const painted = (): Promise<void> =>
+  new Promise((resolve) => {
+    const unseen = setTimeout(resolve, UNSEEN_MS);
+    requestAnimationFrame(() => {
+      clearTimeout(unseen);
+      setTimeout(resolve);
+    });
+  });
+
 /** Exact frames by one decoder: cache, prefetch while stepping, wanted frames before prefetched. */
 export class DecodedSource implements FrameSource {
   readonly kind = 'decoder';
@@ -31,10 +44,14 @@ export class DecodedSource implements FrameSource {
   readonly #cache: FarthestCache<PixelPicture>;
   readonly #jobs: Job[] = [];
   #method: PaintMethod = 'draw';
+  /** The frame after the one shown, its pixels converted already. */
+  #ahead: PixelPicture | null = null;
   #playhead: FrameIndex | null = null;
   #direction: 1 | -1 = 1;
   #stepping = false;
   #running = false;
+  /** True from a request until its picture had the time to be painted. */
+  #awaited = false;
   #closed = false;
 
   private constructor(
@@ -91,6 +108,7 @@ export class DecodedSource implements FrameSource {
     checkIndex(this.frameTable, index);
     if (signal?.aborted) throw abortReason(signal);
     this.#moveTo(index, intent);
+    this.#awaited = true;
     const picture = this.#cache.get(index) ?? this.#enqueue(index, signal);
     void this.#run();
     return picture;
@@ -103,6 +121,7 @@ export class DecodedSource implements FrameSource {
     this.#copy.close();
     this.#bytes.close();
     this.#cache.clear();
+    this.#ahead?.forgetAhead();
     for (const job of this.#jobs.splice(0)) job.reject(new VideoError('closed'));
   }
 
@@ -137,7 +156,11 @@ export class DecodedSource implements FrameSource {
     while (!this.#closed) {
       const job = this.#jobs.shift();
       if (job) await this.#serve(job);
-      else if (!(await this.#prefetchOne())) break;
+      else if (this.#awaited) {
+        // work ahead would hold up the very frame that somebody waits for
+        this.#awaited = false;
+        await painted();
+      } else if (!(await this.#convertNext()) && !(await this.#prefetchOne())) break;
     }
     this.#running = false;
   }
@@ -163,6 +186,17 @@ export class DecodedSource implements FrameSource {
     // neighbours come in numbers, and nobody waits to paint them
     if (index !== this.#playhead) void picture.giveBack();
     return picture;
+  }
+
+  /** Makes the next step quick. False where that is done, or nothing says which step is next. */
+  async #convertNext(): Promise<boolean> {
+    if (!this.#stepping || this.#playhead === null) return false;
+    const next = this.#cache.get(this.#playhead + this.#direction);
+    if (!next || next === this.#ahead) return false;
+    this.#ahead?.forgetAhead();
+    this.#ahead = next;
+    await next.convertAhead();
+    return true;
   }
 
   /** False when there is nothing to prefetch; a failure is left to whoever wants that frame. */

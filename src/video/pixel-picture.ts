@@ -19,20 +19,14 @@ const giveBuffer = (buffer: Uint8ClampedArray<ArrayBuffer>): void => {
   spare.length = Math.min(spare.length, SPARE_KEPT);
 };
 
-const paintConverted = async (
-  frame: VideoFrame,
-  context: CanvasRenderingContext2D,
-  current: () => boolean,
-): Promise<boolean> => {
-  const { displayWidth: width, displayHeight: height } = frame;
-  const buffer = takeBuffer(width * height * 4);
+const converted = async (frame: VideoFrame): Promise<Uint8ClampedArray<ArrayBuffer>> => {
+  const buffer = takeBuffer(frame.displayWidth * frame.displayHeight * 4);
   try {
     await frame.copyTo(buffer, { format: 'RGBA' });
-    if (!current()) return false;
-    context.putImageData(new ImageData(buffer, width, height), 0, 0);
-    return true;
-  } finally {
+    return buffer;
+  } catch (error) {
     giveBuffer(buffer);
+    throw error;
   }
 };
 
@@ -84,6 +78,8 @@ export class PixelPicture implements Picture {
   readonly #loan: ReturnType<typeof setTimeout>;
   #borrowed: VideoFrame | null;
   #own: OwnPixels | null = null;
+  /** Converted ahead of a paint that is likely to come. */
+  #ahead: Uint8ClampedArray<ArrayBuffer> | null = null;
   #givenBack: Promise<void> | null = null;
 
   /** Owns the frame from here on. */
@@ -105,18 +101,62 @@ export class PixelPicture implements Picture {
   }
 
   async paint(context: CanvasRenderingContext2D, current: () => boolean): Promise<boolean> {
+    const ahead = this.#takeAhead();
+    if (ahead) return this.#put(ahead, context, current);
     const frame = this.#toFrame();
-    const { width = 0, height = 0 } = frame.visibleRect ?? {};
-    const squarePixels = width === this.width && height === this.height;
     try {
-      if (this.#method() === 'convert' && squarePixels)
-        return await paintConverted(frame, context, current);
+      if (this.#converts(frame)) return this.#put(await converted(frame), context, current);
       if (!current()) return false;
       context.drawImage(frame, 0, 0, this.width, this.height);
       return true;
     } finally {
       frame.close();
     }
+  }
+
+  /**
+   * Converts now what would be converted at the next paint: one step on then costs only putting the
+   * pixels. Settles, never rejects; takes 4 bytes a pixel until that paint or `forgetAhead`.
+   */
+  async convertAhead(): Promise<void> {
+    if (this.#ahead) return;
+    let frame: VideoFrame | null = null;
+    try {
+      frame = this.#toFrame();
+      if (this.#converts(frame)) this.#ahead = await converted(frame);
+    } catch {
+      // the paint itself will say what is wrong
+      this.#ahead = null;
+    } finally {
+      frame?.close();
+    }
+  }
+
+  forgetAhead(): void {
+    const ahead = this.#takeAhead();
+    if (ahead) giveBuffer(ahead);
+  }
+
+  #takeAhead(): Uint8ClampedArray<ArrayBuffer> | null {
+    const ahead = this.#ahead;
+    this.#ahead = null;
+    return ahead;
+  }
+
+  #converts({ visibleRect }: VideoFrame): boolean {
+    const squarePixels = visibleRect?.width === this.width && visibleRect.height === this.height;
+    return this.#method() === 'convert' && squarePixels;
+  }
+
+  #put(
+    pixels: Uint8ClampedArray<ArrayBuffer>,
+    context: CanvasRenderingContext2D,
+    current: () => boolean,
+  ): boolean {
+    const wanted = current();
+    if (wanted) context.putImageData(new ImageData(pixels, this.width, this.height), 0, 0);
+    giveBuffer(pixels);
+    return wanted;
   }
 
   async #copyAndClose(): Promise<void> {
