@@ -17,6 +17,7 @@ export default defineConfig({
             'tests/study/**/*.test.ts',
             'tests/reference/**/*.test.ts',
             'tests/mutation/**/*.test.ts',
+            'tests/branches/**/*.test.ts',
             'docker-free-scripts/**/*.test.ts',
             'src/video/**/*.test.ts',
             'src/api/**/*.test.ts',
