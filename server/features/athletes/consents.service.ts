@@ -37,6 +37,12 @@ const needUsable = (athlete: Athlete, given: ConsentGiven): void => {
         'The athlete is under 18: a guardian gives the consent, the athlete’s own yes stands beside it.',
     });
   }
+  if (isMinor(athlete.birthDate) && !given.assent) {
+    faults.push({
+      path: 'body.assent',
+      message: 'Without the athlete’s own yes nothing is recorded and nothing is filmed.',
+    });
+  }
   if (given.validUntil < today()) {
     faults.push({ path: 'body.validUntil', message: 'Choose today or a later day.' });
   }

@@ -115,6 +115,23 @@ describe('a consent', () => {
     expect(good.status).toBe(201);
   });
 
+  it('of a minor needs their own yes beside the guardian’s', async () => {
+    const guardian = { ...BODY, givenBy: 'guardian', guardianName: 'Kim Sedge' };
+    for (const assent of [{}, { assent: false }]) {
+      const refused = await record(minor, { ...guardian, ...assent });
+      expect(refused.status).toBe(422);
+      expect(refused.body.faults).toEqual([
+        {
+          path: 'body.assent',
+          message: 'Without the athlete’s own yes nothing is recorded and nothing is filmed.',
+        },
+      ]);
+    }
+    expect(await consented('assessment', minor)).toBe(false);
+    expect((await record(minor, { ...guardian, assent: true })).status).toBe(201);
+    expect(await consented('assessment', minor)).toBe(true);
+  });
+
   it('cannot end before it begins, nor leave assessment out', async () => {
     const past = await record(adult, { ...BODY, validUntil: daysLater(today(), -1) });
     expect(past.body.faults).toEqual([

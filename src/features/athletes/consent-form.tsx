@@ -101,7 +101,7 @@ export function ConsentForm({ athlete, next }: { athlete: Athlete; next: string 
         <CheckboxField<Typed>
           name="assent"
           label={`${athlete.givenName} was asked in words that fit their age, and said yes`}
-          note="Leave it empty where they said no, and do not film."
+          note="Where they said no, nothing is recorded and nothing is filmed."
         />
       )}
       <TextField<Typed>
