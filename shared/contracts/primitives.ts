@@ -6,7 +6,7 @@ export const version = z
   .positive()
   .meta({ id: 'Version', description: 'Counts changes; send it back with an edit.' });
 /** A calendar day, ISO 8601. */
-export const day = z.iso.date().meta({ id: 'Day' });
+export const day = z.iso.date('Choose a day.').meta({ id: 'Day' });
 /** A moment, ISO 8601 with an offset. */
 export const moment = z.iso.datetime({ offset: true }).meta({ id: 'Moment' });
 
@@ -40,7 +40,7 @@ export const email = z
 
 /** A length in millimetres, in the span that a body, a rod or a room can have. */
 export const millimetres = (min: number, max: number) =>
-  z.number().min(min, `At least ${min} mm.`).max(max, `At most ${max} mm.`);
+  z.number('Write a number.').min(min, `At least ${min} mm.`).max(max, `At most ${max} mm.`);
 
 /** A point in pixels of the upright source frame: u to the right, v down, from the top left corner. */
 export const framePoint = z

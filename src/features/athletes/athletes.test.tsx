@@ -149,6 +149,10 @@ describe('consent', () => {
     const { user, place } = renderAt(`/athletes/${athleteId}/consents/new?then=visit`);
     const save = await screen.findByRole('button', { name: 'Record the consent' });
     expect(screen.queryByRole('checkbox', { checked: true })).toBeNull();
+    await user.click(save);
+    // the fault is the group's: no single purpose is named for it
+    const summary = within(await screen.findByRole('alert'));
+    expect(summary.getByRole('button', { name: 'Choose at least one purpose.' })).toBeVisible();
     await user.click(screen.getByRole('checkbox', { name: /^Filming and marking/ }));
     await user.click(save);
     expect(await screen.findByRole('alert')).toHaveTextContent('Write who gave the consent.');

@@ -51,7 +51,8 @@ export function CheckboxField<F extends FieldValues = FieldValues>({
 }) {
   const { register } = useFormContext();
   const error = useFault(name);
-  useLabel(name, label);
+  // a fault of the whole group belongs to none of its boxes
+  useLabel(name, quiet ? null : label);
   return (
     <Checkbox
       {...register(name)}

@@ -8,9 +8,11 @@ export function LabelsProvider({ children }: { children: ReactNode }) {
   return <LabelsContext value={labels}>{children}</LabelsContext>;
 }
 
+/** `null` leaves the field unnamed: its fault then stands in the summary by itself. */
 export function useLabel(name: string, label: ReactNode): void {
   const labels = useContext(LabelsContext);
   useEffect(() => {
+    if (label === null) return;
     labels.set(name, label);
     return () => void labels.delete(name);
   }, [labels, name, label]);
