@@ -255,7 +255,7 @@ describe('clips', () => {
     const list = await screen.findByRole('list', { name: 'Clips of this visit' });
     expect(await within(list).findByText(/not a video that can be read here/)).toBeVisible();
     expect(api.calls(routes.openUpload)).toHaveLength(0);
-    await user.click(within(list).getByRole('button', { name: 'Send notes.mov' }));
+    await user.click(within(list).getByRole('button', { name: 'Send it all the same: notes.mov' }));
     expect(await within(list).findByText(/no room left/)).toBeVisible();
     expect(api.calls(routes.openUpload)[0]?.body).toEqual({
       name: 'notes.mov',

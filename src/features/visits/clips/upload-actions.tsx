@@ -38,7 +38,7 @@ export function UploadActions({
           {verdict?.sendable === true && (
             <Button
               look={primary && verdict.grade !== 'again' ? 'primary' : 'secondary'}
-              aria-label={`Send ${name}`}
+              aria-label={`${verdict.grade === 'again' ? 'Send it all the same:' : 'Send'} ${name}`}
               disabled={!detailsComplete(item)}
               onClick={() => uploads.send(key)}
             >

@@ -6,6 +6,7 @@ import { Button } from '#src/ui/button.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { Empty } from '#src/ui/states.tsx';
 import { useStatus } from '#src/ui/status.tsx';
+import { judge } from '../uploads/judge.ts';
 import { detailsComplete, type ClipDetails } from '../uploads/upload-item.ts';
 import { uploads } from '../uploads/uploads.ts';
 import { useUploads } from '../use-uploads.ts';
@@ -32,8 +33,13 @@ export function UploadStep({
   const say = useStatus();
   useEffect(() => uploads.forgetSent(new Set(clips.map(({ id }) => id))), [clips]);
   const here = items.filter(({ uploadId }) => !clips.some(({ id }) => id === uploadId));
+  // a clip that is better copied or filmed again is sent one by one, never along with the others
   const ready = here.filter(
-    (item) => item.phase === 'chosen' && item.look?.outcome === 'clip' && detailsComplete(item),
+    (item) =>
+      item.phase === 'chosen' &&
+      item.look !== null &&
+      judge(item.look, item.bytes).grade !== 'again' &&
+      detailsComplete(item),
   );
 
   const take = (files: readonly File[]) => {
