@@ -136,8 +136,9 @@ export function ThighDrawing({ length }: { length: string | null }) {
         {length ?? '110–'}
       </Words>
       <Words at={[266, 143]} bold={length === null}>
-        {length === null ? '140 mm' : 'skin to tip'}
+        {length === null ? '140 mm' : 'skin'}
       </Words>
+      {length !== null && <Words at={[266, 160]}>to tip</Words>}
       <Words at={[236, 182]} anchor="middle">
         to the camera ↓
       </Words>
