@@ -31,7 +31,9 @@ export function SpanFields({ reps }: { reps: readonly NamedRep[] }) {
   if (!chosen) return null;
   const { rep, clip } = chosen;
   const rate = clip.frameRate?.perSecond;
-  const seconds = rate && toFrame > fromFrame ? (toFrame - fromFrame) / rate : null;
+  const typed = rate && toFrame > fromFrame ? (toFrame - fromFrame) / rate : null;
+  // longer than the clip: the frames do not exist, and the server will say so
+  const seconds = typed !== null && typed <= (clip.durationSeconds ?? Infinity) ? typed : null;
   return (
     <fieldset>
       <legend className="font-bold">Frames that are played</legend>
