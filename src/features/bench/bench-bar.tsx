@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import { shortDay } from '#src/ui/days.ts';
+import { capital } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import { clipWords, supportWords, VIEW_WORDS } from '#src/ui/words.ts';
 import { useUndo } from './actions/use-undo.ts';
@@ -28,7 +29,7 @@ export function BenchBar() {
   const { canUndo, canRedo, undo, redo } = useUndo();
   const narrow = useNarrow();
   const what = current
-    ? `${supportWords(current.rep.supportSide)}, ${VIEW_WORDS[current.rep.view]}, rep ${current.rep.number} of ${reps.length}`
+    ? `${capital(supportWords(current.rep.supportSide))}, ${VIEW_WORDS[current.rep.view]}, rep ${current.rep.number} of ${reps.length}`
     : `${clipWords(clip)}, no rep yet`;
   const short = current ? `${current.rep.supportSide}, rep ${current.rep.number}` : 'no rep yet';
   return (
