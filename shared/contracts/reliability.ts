@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { personRef } from './primitives.ts';
 import { json, route } from './route.ts';
-import { markRepeat } from './second-markings.ts';
+import { markRepeat, secondMarkingSummary } from './second-markings.ts';
 
 const known = z.number().nullable();
 
@@ -86,6 +86,8 @@ export const reliability = z
     repeats: z.array(markingPair),
     /** Two different people. */
     between: z.array(markingPair),
+    /** Second markings that wait for the one who asks. */
+    waiting: z.array(z.object({ summary: secondMarkingSummary, athlete: personRef })),
     /** All repeats in sight together; null where there is none. */
     practice: markingPair.omit({ first: true, second: true }).nullable(),
     /** First calls by eye of two people on the same side of a visit. */

@@ -112,6 +112,20 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'second-markings/:id',
+                lazy: lazily(() =>
+                  import('#src/features/bench/blind/blind-page.tsx').then((page) => page.BlindPage),
+                ),
+              },
+              {
+                path: 'practice/reliability',
+                lazy: lazily(() =>
+                  import('#src/features/practice/reliability/reliability-page.tsx').then(
+                    (page) => page.ReliabilityPage,
+                  ),
+                ),
+              },
+              {
                 path: 'practice/set-ups',
                 lazy: lazily(() =>
                   import('#src/features/practice/set-ups-page.tsx').then((page) => page.SetUpsPage),

@@ -14,12 +14,20 @@ export const paths = {
   call: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}/call`,
   reading: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}`,
   /** The Bench, at a frame (from 0) and a comment where they are given. */
-  bench: (clipId: string, at: { frame?: number; comment?: string } = {}) => {
+  bench: (clipId: string, at: { frame?: number; comment?: string; again?: number } = {}) => {
     const search = new URLSearchParams();
     if (at.frame !== undefined) search.set('frame', String(at.frame));
     if (at.comment !== undefined) search.set('comment', at.comment);
+    // the number of a rep that is to be marked again
+    if (at.again !== undefined) {
+      search.set('rep', String(at.again));
+      search.set('again', String(at.again));
+    }
     return `/clips/${clipId}${search.size === 0 ? '' : `?${search}`}`;
   },
+  /** Frames marked again without sight of the first marks. */
+  secondMarking: (id: string) => `/second-markings/${id}`,
+  reliability: () => '/practice/reliability',
   setUps: () => '/practice/set-ups',
   method: () => '/method',
 } as const;

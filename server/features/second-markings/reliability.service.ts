@@ -15,8 +15,13 @@ import type { SecondResult } from '#shared/reliability/compare-markings.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { User } from '../accounts/user.entity.ts';
+import type { Athlete } from '../athletes/athlete.entity.ts';
+import type { Clip } from '../clips/clip.entity.ts';
+import type { Rep } from '../reps/rep.entity.ts';
 import { type Finished, finishedMarkings, marksBetween, ownErrorOf } from './finished-markings.ts';
-import { presentMarkRepeat } from './second-markings.presenter.ts';
+import { readSecondMarks } from './second-mark-store.ts';
+import { SecondMarking } from './second-marking.entity.ts';
+import { presentMarkRepeat, presentSecondSummary } from './second-markings.presenter.ts';
 
 type Of = Unit<UserActor>;
 type Person = ReturnType<typeof presentPerson>;
@@ -112,6 +117,36 @@ const callPairs = (
   });
 };
 
+/** Second markings that the actor was asked for and has not finished, oldest first. */
+const waitingFor = async ({ em, actor }: Of): Promise<Reliability['waiting']> => {
+  const markings = (await em.find(
+    SecondMarking,
+    { marker: actor.id, finishedAt: null },
+    {
+      populate: ['marker', 'askedBy', 'rep.clip.visit.athlete'],
+      orderBy: { askedAt: 'asc', id: 'asc' },
+    },
+  )) as SecondMarking[];
+  const marks = await readSecondMarks(
+    em,
+    markings.map(({ id }) => id),
+  );
+  return markings.flatMap((marking) => {
+    const rep = marking.rep.unwrap() as Rep;
+    const athlete = (rep.clip.unwrap() as Clip).visit.unwrap().athlete.unwrap() as Athlete;
+    const { practiceId } = athlete;
+    const coachId = athlete.coach.id;
+    if (!can(actor, 'marks.second', { kind: 'caseload', practiceId, coachId })) return [];
+    const own = marks.filter((mark) => mark.repId === marking.id);
+    return [
+      {
+        summary: presentSecondSummary(marking, own, actor.id),
+        athlete: { id: athlete.id, name: `${athlete.givenName} ${athlete.familyName}` },
+      },
+    ];
+  });
+};
+
 /** How well everything repeats: of a coach's own hand, of the coaches assigned to a supervisor, of all to an owner. */
 export const reliabilityOf = async (unit: Of): Promise<Reliability> => {
   const { em, actor } = unit;
@@ -139,6 +174,7 @@ export const reliabilityOf = async (unit: Of): Promise<Reliability> => {
     least: LEAST_DOUBLY_MARKED,
     repeats,
     between: pairs.filter(({ first, second }) => first.id !== second.id),
+    waiting: await waitingFor(unit),
     practice:
       repeats.length === 0
         ? null

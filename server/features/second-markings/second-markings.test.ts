@@ -160,6 +160,11 @@ describe('a second marking', () => {
     const names = list.body.people.map(({ id }: { id: string }) => id);
     expect(names.sort()).toEqual([world.coach.id, world.owner.id, world.supervisor.id].sort());
     expect(list.body.items).toHaveLength(1);
+    // who is asked by another finds it among what waits
+    const asked = await askAgain(coach, repId, { markerId: world.supervisor.id });
+    const waits = (await supervisor.get('/api/reliability').expect(200)).body.waiting;
+    expect(waits.map(({ summary }: { summary: { id: string } }) => summary.id)).toEqual([asked]);
+    await supervisor.delete(`/api/second-markings/${asked}`).expect(204);
   });
 
   it('says at its end how well the marks repeat, and stays as it is', async () => {

@@ -62,7 +62,7 @@ export function Bench({ document, frames, frameSize, copySize }: ReadyClip) {
       store: createBenchStore({
         frame,
         repId: rep?.rep.id ?? null,
-        desk: comment ? 'comments' : 'course',
+        desk: comment ? 'comments' : search.has('again') ? 'reps' : 'course',
         mayMark: document.may.mark,
       }),
       hand: createHand(),

@@ -5,6 +5,7 @@ import { HistorySection } from './history/history-section.tsx';
 import { ReplaySection } from './link/replay-section.tsx';
 import { PartsSection } from './parts/parts-section.tsx';
 import { AssumptionSection } from './reasons/assumption-section.tsx';
+import { MarkErrorSection } from './reasons/mark-error-section.tsx';
 import { ReasonsSection } from './reasons/reasons-section.tsx';
 import { SettleSection } from './reasons/settle-section.tsx';
 import { BothSides } from './sides/both-sides.tsx';
@@ -22,6 +23,7 @@ export function Measured({ page, reading }: { page: SidePage; reading: Reading }
       <BothSides page={page} reading={reading} />
       <ReasonsSection reading={reading} />
       <AssumptionSection page={page} />
+      <MarkErrorSection page={page} reading={reading} />
       <ReplaySection page={page} />
       <HistorySection page={page} />
     </>

@@ -209,6 +209,23 @@ describe('a measured reading', () => {
     );
   });
 
+  it('names its marking error, and is read again with the own one only when asked', async () => {
+    const reading = aReading(resultOf('g02_early_mid_3rep'));
+    const api = readingApi(aSidePage(reading, { newerMarkError: { px: 1.8, frames: 24 } }));
+    const renewed = { ...reading, markError: { px: 1.8, frames: 24 } };
+    api.on(routes.renewReading, () => aSidePage(renewed));
+    const { user } = renderAt(address);
+    const section = within(await region('Marking error'));
+    expect(section.getByText('Assumed marking error, 3 px.')).toBeVisible();
+    expect(section.getByText(/your own marking error, 1\.8 px from 24 frames/)).toBeVisible();
+    await user.click(await section.findByRole('button', { name: 'Read again with 1.8 px' }));
+    expect(
+      await section.findByText('Your own marking error, 1.8 px from 24 frames marked twice.'),
+    ).toBeVisible();
+    expect(section.queryByRole('button')).toBeNull();
+    expect(api.calls(routes.renewReading)).toHaveLength(1);
+  });
+
   it('offers the assumption with a belt pointer alone, and stores it', async () => {
     const result = { ...resultOf('g02_early_mid_3rep'), set: 'belt' as const };
     const api = readingApi(aSidePage(aReading(result)));

@@ -9,6 +9,26 @@ const place = ({ frame, landmark }: Pick<Mark, 'frame' | 'landmark'>): string =>
   `${frame}/${landmark}`;
 
 /** Marks as the server told them last; `touched` says which command was about which mark. */
+export const marksAfter = (
+  known: readonly Mark[],
+  outcomes: readonly MarkOutcome[],
+  touched: ReadonlyMap<string, Pick<Mark, 'frame' | 'landmark'>>,
+): Mark[] => {
+  const marks = new Map(known.map((mark) => [place(mark), mark]));
+  for (const { id, mark } of outcomes) {
+    if (mark) {
+      const before = marks.get(place(mark));
+      // answers can overtake each other between tabs
+      if (!before || before.revision <= mark.revision) marks.set(place(mark), mark);
+    } else {
+      const gone = touched.get(id);
+      if (gone) marks.delete(place(gone));
+    }
+  }
+  return [...marks.values()];
+};
+
+/** The document with the marks of one rep as they stand now. */
 export const withOutcomes = (
   document: BenchDocument,
   repId: string,
@@ -19,18 +39,7 @@ export const withOutcomes = (
   ...document,
   reps: document.reps.map((each) => {
     if (each.rep.id !== repId) return each;
-    const marks = new Map(each.marks.map((mark) => [place(mark), mark]));
-    for (const { id, mark } of outcomes) {
-      if (mark) {
-        const known = marks.get(place(mark));
-        // answers can overtake each other between tabs
-        if (!known || known.revision <= mark.revision) marks.set(place(mark), mark);
-      } else {
-        const gone = touched.get(id);
-        if (gone) marks.delete(place(gone));
-      }
-    }
-    return { rep: newer(each.rep, rep), marks: [...marks.values()] };
+    return { rep: newer(each.rep, rep), marks: marksAfter(each.marks, outcomes, touched) };
   }),
 });
 

@@ -30,9 +30,9 @@ export function useLiveBench(document: BenchDocument, queue: MarkQueue): void {
   useEffect(
     () =>
       queue.onSettled(async (settled) => {
-        if (settled.clipId !== clipId) return;
-        answered.current = performance.now();
         const { repId, outcomes, touched, rep } = settled;
+        if (settled.clipId !== clipId || !rep) return;
+        answered.current = performance.now();
         client.setQueryData(
           benchOptions(clipId).queryKey,
           (known) => known && withOutcomes(known, repId, outcomes, touched, rep),

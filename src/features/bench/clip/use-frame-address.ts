@@ -29,6 +29,8 @@ export function useFrameAddress(repNumber: number | null): void {
         (before) => {
           const next = new URLSearchParams(before);
           next.set('frame', String(frame));
+          // asked for once, when the page was opened
+          next.delete('again');
           if (repNumber !== null) next.set('rep', String(repNumber));
           return next;
         },

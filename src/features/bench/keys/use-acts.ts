@@ -4,7 +4,7 @@ import type { Size } from '#src/canvas/viewport.ts';
 import { fit, zoomAt } from '#src/canvas/viewport.ts';
 import { useMarking } from '../actions/use-marking.ts';
 import { useUndo } from '../actions/use-undo.ts';
-import { useBenchTools } from '../bench-context.ts';
+import { useBenchDocument, useBenchTools } from '../bench-context.ts';
 import { useNextFrame } from '../lead/use-suggestion.ts';
 import { useAsked } from '../model/use-model.ts';
 import { goTo } from '../store/bench-store.ts';
@@ -22,6 +22,7 @@ const stageSize = (): Size | null => {
 /** What each act does now; null where it cannot be done. */
 export function useActs(): Readonly<Record<Act, (() => void) | null>> {
   const { store, frameSize } = useBenchTools();
+  const { may } = useBenchDocument();
   const marking = useMarking();
   const { canUndo, canRedo, undo, redo } = useUndo();
   const asked = useAsked();
@@ -41,13 +42,15 @@ export function useActs(): Readonly<Record<Act, (() => void) | null>> {
       'next-landmark': asked ? () => store.setState({ chosen: null, lastPlaced: asked }) : null,
       'next-frame-to-mark': next ? () => goTo(store, next.frame) : null,
       play: () => store.setState((state) => ({ playing: !state.playing })),
-      comment: () => {
-        store.setState({ desk: 'comments', playing: false });
-        // the field is there after the next painting
-        requestAnimationFrame(() =>
-          document.querySelector<HTMLElement>('[data-comment-field]')?.focus(),
-        );
-      },
+      comment: may.comment
+        ? () => {
+            store.setState({ desk: 'comments', playing: false });
+            // the field is there after the next painting
+            requestAnimationFrame(() =>
+              document.querySelector<HTMLElement>('[data-comment-field]')?.focus(),
+            );
+          }
+        : null,
       'zoom-in': zoom(ZOOM_STEP),
       'zoom-out': zoom(1 / ZOOM_STEP),
       'zoom-whole': () => store.setState({ viewport: null }),
@@ -60,5 +63,5 @@ export function useActs(): Readonly<Record<Act, (() => void) | null>> {
       'move-picture': () =>
         store.setState(({ tool }) => ({ tool: tool.kind === 'look' ? MARK : LOOK })),
     };
-  }, [store, frameSize, marking, canUndo, canRedo, undo, redo, asked, next]);
+  }, [store, frameSize, may.comment, marking, canUndo, canRedo, undo, redo, asked, next]);
 }

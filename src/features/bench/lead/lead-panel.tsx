@@ -1,4 +1,3 @@
-import { landmark } from '#shared/landmarks/table.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { useMarking } from '../actions/use-marking.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
@@ -10,9 +9,9 @@ import { marksOn } from '../model/bench-model.ts';
 import { tallyOf } from '../model/led.ts';
 import { useNarrow } from '../use-media.ts';
 import { Dials } from '../values/dials.tsx';
+import { Asked } from './asked.tsx';
 import { GlassPanel } from './glass-panel.tsx';
 import { LandmarkList } from './landmark-list.tsx';
-import { LandmarkDrawing } from './landmark-drawing.tsx';
 import { LandmarkSetChoice } from './landmark-set-choice.tsx';
 import { NextFrameOffer } from './next-frame-offer.tsx';
 import { NothingAsked } from './nothing-asked.tsx';
@@ -59,39 +58,6 @@ export function LeadPanel() {
         </div>
       )}
     </div>
-  );
-}
-
-function Asked({ id, n, of, narrow }: { id: LandmarkId; n: number; of: number; narrow: boolean }) {
-  const { view, current } = useBenchModel();
-  const frame = useBench((state) => state.frame);
-  const here = marksOn(current, frame)[id];
-  const { label, where } = landmark(id);
-  const first = label.charAt(0).toLowerCase() + label.slice(1);
-  return (
-    <>
-      <p className="text-note leading-5 text-dusk-soft">
-        {narrow ? '' : `Frame ${frame}, `}
-        {n > 0 ? `${narrow ? 'Mark' : 'mark'} ${n} of ${of}` : narrow ? `Frame ${frame}` : 'extra'}
-      </p>
-      <h2 className="text-sub font-bold tablet:text-lead tablet:leading-[26px]">
-        {here?.to === 'point' && here.looked ? 'Again' : 'Next'}: {first}
-      </h2>
-      <div className="bench-found">
-        <LandmarkDrawing
-          id={id}
-          view={view}
-          standingOn={current?.rep.supportSide ?? 'right'}
-          width={narrow ? 64 : 88}
-        />
-        <p className="text-note leading-[21px]">
-          {where}
-          {here?.to === 'point' && !here.looked && ' Tracked here; nobody has looked yet.'}
-          {here?.to === 'hidden' && ' Marked as hidden here.'}
-          {narrow && ' Hold and slide; let go to place.'}
-        </p>
-      </div>
-    </>
   );
 }
 

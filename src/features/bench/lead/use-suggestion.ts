@@ -1,6 +1,7 @@
-import { useMemo } from 'react';
+import { useContext, useMemo } from 'react';
 import type { Degrees } from '#shared/geometry/units.ts';
 import { frameIndex, type FrameIndex } from '#shared/timing/units.ts';
+import { BlindContext } from '../blind/blind-context.ts';
 import { useBenchModel, useBenchTools } from '../bench-context.ts';
 import { firstFrame, type Suggestion } from '../model/first-frames.ts';
 import { useReading } from '../reading/use-reading.ts';
@@ -23,7 +24,10 @@ export function useNextFrame(): NextFrame | null {
   const { times } = useBenchTools();
   const { current, figures } = useBenchModel();
   const { offers, result } = useReading();
+  const blind = useContext(BlindContext);
   return useMemo(() => {
+    if (blind)
+      return blind.next === null ? null : { frame: blind.next, why: null, lift: null, gain: null };
     if (!current || current.rep.excluded) return null;
     const { startFrame, endFrame } = current.rep;
     const used = result?.reps.some((each) => each.id === current.rep.id && each.used) ?? false;
@@ -46,5 +50,5 @@ export function useNextFrame(): NextFrame | null {
       // the gain is a figure too: it is not shown before the call by eye
       gain: figures && now !== null && then !== null ? { now, then } : null,
     };
-  }, [current, figures, offers, result, times]);
+  }, [blind, current, figures, offers, result, times]);
 }

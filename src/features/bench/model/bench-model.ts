@@ -4,7 +4,7 @@ import { courseOfRep, isCourse, type RepCourse } from '#shared/course/course-of-
 import type { CourseFrame, RepInput } from '#shared/course/types.ts';
 import type { FrameMarks, MarksByFrame } from '#shared/landmarks/commands.ts';
 import type { LandmarkId, LandmarkSetId, View } from '#shared/landmarks/types.ts';
-import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { ASSUMED_MARK_ERROR, type MarkError } from '#shared/measures/inputs.ts';
 import type { Missing } from '#shared/measures/missing.ts';
 import type { FrameIndex, Milliseconds } from '#shared/timing/units.ts';
 import type { QueuedMark } from '../queue/queue-core.ts';
@@ -27,6 +27,8 @@ export interface CurrentRep extends BenchRep {
   readonly courseMissing: Missing | null;
   readonly frames: readonly CourseFrame[];
   readonly hill: readonly HillPoint[];
+  /** What one anatomical mark of this rep's side is taken to be wrong by. */
+  readonly markError: MarkError;
 }
 
 export interface BenchModel {
@@ -80,10 +82,14 @@ export const repAt = (reps: readonly BenchRep[], frame: FrameIndex): BenchRep | 
   );
 };
 
-export const withCourse = (chosen: BenchRep, set: LandmarkSetId): CurrentRep => {
-  const none = { ...chosen, course: null, frames: [], hill: [] };
+export const withCourse = (
+  chosen: BenchRep,
+  set: LandmarkSetId,
+  markError: MarkError = ASSUMED_MARK_ERROR,
+): CurrentRep => {
+  const none = { ...chosen, course: null, frames: [], hill: [], markError };
   if (!chosen.input) return { ...none, courseMissing: null };
-  const course = courseOfRep(chosen.input, set, ASSUMED_MARK_ERROR, { halfWidths: false });
+  const course = courseOfRep(chosen.input, set, markError, { halfWidths: false });
   if (!isCourse(course)) return { ...none, courseMissing: course };
   return {
     ...chosen,
@@ -91,6 +97,7 @@ export const withCourse = (chosen: BenchRep, set: LandmarkSetId): CurrentRep => 
     courseMissing: null,
     frames: course.frames,
     hill: hillOf(course.frames),
+    markError,
   };
 };
 

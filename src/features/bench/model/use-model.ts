@@ -12,6 +12,7 @@ import {
   setOf,
   withCourse,
 } from './bench-model.ts';
+import { markErrorOn } from './mark-error-on.ts';
 
 /** Works the model out anew only where something it rests on has changed. */
 export function useModel(document: BenchDocument, tools: BenchTools): BenchModel {
@@ -23,7 +24,11 @@ export function useModel(document: BenchDocument, tools: BenchTools): BenchModel
   const reps = useMemo(() => repsOf(document, waiting, times), [document, waiting, times]);
   const frame = useStore(store, (state) => state.frame);
   const chosen = currentRep(reps, repId, frame);
-  const current = useMemo(() => chosen && withCourse(chosen, set), [chosen, set]);
+  const current = useMemo(
+    () =>
+      chosen && withCourse(chosen, set, markErrorOn(document.markErrors, chosen.rep.supportSide)),
+    [chosen, set, document.markErrors],
+  );
   return useMemo(
     () => modelOf(document, reps, current, set, extras),
     [document, reps, current, set, extras],

@@ -24,7 +24,8 @@ export interface Settled {
   readonly clipId: string;
   readonly repId: string;
   readonly outcomes: readonly MarkOutcome[];
-  readonly rep: Rep;
+  /** The rep as it stands now; null for second marks, which change none. */
+  readonly rep: Rep | null;
   /** By command, the mark it was about: an answer may say that nothing is stored. */
   readonly touched: ReadonlyMap<string, Pick<Mark, 'frame' | 'landmark'>>;
 }

@@ -5,6 +5,11 @@ import { newId } from './new-id.ts';
 import { countOf } from './queue-core.ts';
 import { browserStorage, memoryStorage } from './queue-storage.ts';
 import { sendMarks } from './send-marks.ts';
+import { sendSecondMarks } from './send-second-marks.ts';
+
+/** What a queue holds: the marks of reps, or second marks. They are kept and sent apart. */
+type Kind = 'marks' | 'second-marks';
+const SENDS = { marks: sendMarks, 'second-marks': sendSecondMarks } as const;
 
 const queues = new Map<string, MarkQueue>();
 /** Only the marks of the person who is signed in now are asked about at sign-out. */
@@ -20,15 +25,22 @@ const alone = (name: string) => async (work: () => Promise<void>) => {
  * The queue of one person in this browser. It belongs to the person, not to the session: it outlives
  * an expired sign-in and a reload, and is sent by one tab at a time.
  */
-export const markQueueOf = (userId: string): MarkQueue => {
+export const markQueueOf = (userId: string): MarkQueue => queueOf('marks', userId);
+
+/** The same for marks of second markings. */
+export const secondMarkQueueOf = (userId: string): MarkQueue => queueOf('second-marks', userId);
+
+const queueOf = (kind: Kind, userId: string): MarkQueue => {
   current = userId;
-  const known = queues.get(userId);
+  const name = `redshank-${kind}-${userId}`;
+  const known = queues.get(name);
   if (known) return known;
-  const name = `redshank-marks-${userId}`;
+  // under which name the browser keeps it
+  const place = kind === 'marks' ? userId : `${kind} ${userId}`;
   const channel = 'BroadcastChannel' in window ? new BroadcastChannel(name) : null;
   const queue = createMarkQueue({
-    storage: 'indexedDB' in window ? browserStorage(userId) : memoryStorage(),
-    send: sendMarks,
+    storage: 'indexedDB' in window ? browserStorage(place) : memoryStorage(),
+    send: SENDS[kind],
     alone: alone(name),
     tellTabs: (settled) => channel?.postMessage(settled),
     newId,
@@ -37,7 +49,7 @@ export const markQueueOf = (userId: string): MarkQueue => {
       return () => clearTimeout(timer);
     },
   });
-  queues.set(userId, queue);
+  queues.set(name, queue);
   channel?.addEventListener('message', (event: MessageEvent<Settled | null>) => {
     void queue.heard(event.data);
   });

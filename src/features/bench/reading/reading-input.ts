@@ -1,7 +1,6 @@
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { RepInput } from '#shared/course/types.ts';
-import { ASSUMED_MARK_ERROR, type MarkError } from '#shared/measures/inputs.ts';
 import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import type { UnmarkedFrame } from '#shared/reading/next-frame.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
@@ -10,6 +9,7 @@ import { withSharedQuiet } from '#shared/records/shared-quiet.ts';
 import { marksWith } from '#shared/records/stored-marks.ts';
 import { frameIndex, type Milliseconds, milliseconds } from '#shared/timing/units.ts';
 import type { BenchRep } from '../model/bench-model.ts';
+import { markErrorOn } from '../model/mark-error-on.ts';
 
 /** Reps of the visit's other clips, as the document brings them. */
 export const otherInputs = ({ otherReps, athlete }: BenchDocument): RepInput[] =>
@@ -28,12 +28,6 @@ export const otherInputs = ({ otherReps, athlete }: BenchDocument): RepInput[] =
     }),
   ).flatMap(({ input }) => (input ? [input] : []));
 
-/** The marking error that a reading of this side takes. */
-export const markErrorOn = ({ markErrors }: BenchDocument, side: Side): MarkError => {
-  const known = markErrors.find((each) => each.side === side);
-  return known ? { anatomicalPx: known.px, doublyMarkedFrames: known.frames } : ASSUMED_MARK_ERROR;
-};
-
 /** What the reading of one side of this visit rests on; null where that side has no rep. */
 export const readingInputOf = (
   document: BenchDocument,
@@ -48,7 +42,7 @@ export const readingInputOf = (
     supportSide: side,
     set: null,
     thighTurnsLittle: document.assumption.includes(side),
-    markError: markErrorOn(document, side),
+    markError: markErrorOn(document.markErrors, side),
     ownSystematic: null,
     reps: ofSide,
   };

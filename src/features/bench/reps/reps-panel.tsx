@@ -9,6 +9,7 @@ import { goTo } from '../store/bench-store.ts';
 import { AddRep } from './add-rep.tsx';
 import { QuietStance } from './quiet-stance.tsx';
 import { RepActions } from './rep-actions.tsx';
+import { MarkAgain } from '../blind/mark-again.tsx';
 import { EXCLUSION_WORDS } from './rep-words.ts';
 
 /** Every rep of the clip, and a new one named by its span. */
@@ -76,6 +77,7 @@ function RepRow({ own }: { own: BenchRep }) {
             Go there
           </Button>
         )}
+        {may.markAgain && marks.size > 0 && <MarkAgain own={own} />}
         {may.mark && <RepActions own={own} />}
       </div>
     </li>

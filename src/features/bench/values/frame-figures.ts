@@ -1,7 +1,6 @@
 import { degrees } from '#shared/geometry/units.ts';
 import { landmarksOf } from '#shared/landmarks/table.ts';
 import type { FrameInput } from '#shared/measures/inputs.ts';
-import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { type FrameValue, frameValues } from '#shared/measures/frame-values.ts';
 import type { FrameValues } from '#shared/overlay/value-labels.ts';
 import type { CurrentRep } from '../model/bench-model.ts';
@@ -20,7 +19,7 @@ const NO_FIGURES: FrameFigures = { values: [], shown: null, pelvisPart: null, th
 export const figuresOf = (current: CurrentRep, frame: FrameInput): FrameFigures => {
   const { course } = current;
   if (!course) return NO_FIGURES;
-  const values = frameValues(frame, course.setting, ASSUMED_MARK_ERROR);
+  const values = frameValues(frame, course.setting, current.markError);
   const of = (id: string) => values.find(({ measure }) => measure.id === id)?.value ?? null;
   const angle = (value: number | null | undefined) =>
     value === null || value === undefined ? null : degrees(value);

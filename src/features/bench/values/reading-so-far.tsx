@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
-import { plusMinus, turn } from '#src/ui/figures.ts';
+import { capital, plusMinus, turn } from '#src/ui/figures.ts';
+import { markErrorWords } from '#src/ui/mark-error-words.ts';
 import { paths } from '#src/ui/paths.ts';
 import { supportWords } from '#src/ui/words.ts';
 import { useBenchDocument, useBenchModel } from '../bench-context.ts';
@@ -41,6 +42,16 @@ export function ReadingSoFar() {
         <p>
           Not yet. It needs 3 quiet frames, then at least 7 in the rise, two of them near 60° and
           two near 90°.
+        </p>
+      )}
+      {result?.figures && (
+        <p className="text-soft">
+          {capital(
+            markErrorWords({
+              px: current.markError.anatomicalPx,
+              frames: current.markError.doublyMarkedFrames,
+            }),
+          )}
         </p>
       )}
       {settle && <p className="text-soft">{settleWords(settle, nameOf)}</p>}

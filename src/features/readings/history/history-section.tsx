@@ -1,6 +1,7 @@
 import type { SidePage } from '#shared/contracts/readings.ts';
 import { moment } from '#src/ui/days.ts';
 import { plusMinus, turn } from '#src/ui/figures.ts';
+import { markErrorWords } from '#src/ui/mark-error-words.ts';
 import { Section } from '#src/ui/page.tsx';
 import { StateDot } from '#src/ui/state-dot.tsx';
 
@@ -28,7 +29,8 @@ export function HistorySection({ page }: { page: SidePage }) {
               </span>
             )}
             <span className="text-note text-soft">
-              {moment(reading.at)}, marked by {reading.by.name}, engine {reading.engine}
+              {moment(reading.at)}, marked by {reading.by.name}, engine {reading.engine},{' '}
+              {markErrorWords(reading.markError)}
               {reading.id === current && ', as the marks stand now'}
             </span>
           </li>

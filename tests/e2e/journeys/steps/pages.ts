@@ -52,6 +52,12 @@ const FRONT: readonly PageOfProduct[] = [
     stands: heading(/./),
   },
   {
+    name: 'the reliability of a practice',
+    who: SUPERVISOR,
+    address: () => paths.reliability(),
+    stands: text('Calls by eye'),
+  },
+  {
     name: 'the set-ups',
     who: COACH,
     address: () => paths.setUps(),

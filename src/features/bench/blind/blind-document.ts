@@ -1,0 +1,54 @@
+import type { BenchDocument } from '#shared/contracts/bench.ts';
+import type { SecondMarkingDocument } from '#shared/contracts/second-markings.ts';
+
+/**
+ * A second marking as the Bench's parts take it: one rep as long as the clip, with nothing but the second marks. No
+ * first mark, moment, comment or call comes with it.
+ */
+export const blindDocument = ({
+  summary,
+  clip,
+  visit,
+  athlete,
+  repNumber,
+  supportSide,
+  view,
+  marks,
+}: SecondMarkingDocument): BenchDocument => ({
+  clip,
+  visit,
+  athlete: { ...athlete, heightMm: null },
+  reps: [
+    {
+      rep: {
+        id: summary.id,
+        clipId: clip.id,
+        number: repNumber,
+        supportSide,
+        view,
+        startFrame: 0,
+        endFrame: Math.max(0, (clip.frames?.count ?? 1) - 1),
+        boundaries: {
+          quietStart: null,
+          quietEnd: null,
+          footOff: null,
+          top: null,
+          topEnd: null,
+          footDown: null,
+        },
+        excluded: null,
+        excludedNote: '',
+        quietFrom: null,
+        markedFrames: summary.framesDone,
+        version: 1,
+      },
+      marks,
+    },
+  ],
+  comments: [],
+  calls: [],
+  assumption: [],
+  markErrors: [],
+  otherReps: [],
+  may: { mark: true, comment: false, markAgain: false },
+});
