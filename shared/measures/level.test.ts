@@ -5,7 +5,7 @@ import { degrees } from '#shared/geometry/units.ts';
 import type { LandmarkId, Mark, PlacedMark } from '#shared/landmarks/types.ts';
 import { frameIndex, milliseconds } from '#shared/timing/units.ts';
 import { ASSUMED_MARK_ERROR } from './inputs.ts';
-import { levelFrame, markErrorPx } from './level.ts';
+import { isPlausible, levelFrame, markErrorPx } from './level.ts';
 
 const placed = (over: Partial<PlacedMark> = {}): PlacedMark => ({
   hidden: false,
@@ -80,5 +80,16 @@ describe('levelling', () => {
     const hollow = placed({ source: 'tracked', looked: false });
     const level = levelFrame(frame({ kneecap: hollow }), madeCamera(), ASSUMED_MARK_ERROR);
     expect(level.marks.kneecap?.hollow).toBe(true);
+  });
+});
+
+describe('a mark that no picture can hold', () => {
+  it('lies further than a million pixels out, or on a picture a thousand times coarser', () => {
+    const far = 1e6;
+    expect(isPlausible(placed({ point: framePoint(far, -far), scale: 1000 }))).toBe(true);
+    expect(isPlausible(placed({ point: framePoint(far + 1, 0) }))).toBe(false);
+    expect(isPlausible(placed({ point: framePoint(0, -far - 1) }))).toBe(false);
+    expect(isPlausible(placed({ scale: 1001 }))).toBe(false);
+    expect(isPlausible(placed({ scale: NaN }))).toBe(false);
   });
 });
