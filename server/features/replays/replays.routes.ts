@@ -63,7 +63,7 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
       const { clip } = await inPractice(await actorOf(req, params.token), replayOfLink);
       const key = clip.files[copy];
       if (!key) throw new Problem('not-found');
-      await sendStored(req, res, storage, key, type);
+      await sendStored(req, res, storage, key, type, 'link');
     });
   }
 };

@@ -1,7 +1,9 @@
+import { Readable } from 'node:stream';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { goldenClip } from '#tests/support/golden.ts';
 import { makeConsent } from '../athletes/athlete.factory.ts';
+import { Clip } from '../clips/clip.entity.ts';
 import { makeClip } from '../clips/clip.factory.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
 
@@ -125,6 +127,24 @@ describe('a replay link', () => {
     for (const path of ['video', 'poster'])
       await api.nobody.get(`/api/r/${token}/${path}`).expect(404);
     expect((await open('short')).status).toBe(404);
+  });
+
+  it('is asked for at every playing, so that no cache outlives it', async () => {
+    const { files } = await api.ground.inPractice(api.world.coach, ({ em }) =>
+      em.findOneOrFail(Clip, { id: made.clipId }),
+    );
+    await api.ground.storage.putStream(
+      String(files.replay),
+      Readable.from([Buffer.from('a clip')]),
+      'video/mp4',
+    );
+    const playing = await api.nobody.get(`/api/r/${token}/video`).expect(200);
+    expect(playing.headers['cache-control']).toBe('private, no-cache');
+    const again = () =>
+      api.nobody.get(`/api/r/${token}/video`).set('If-None-Match', String(playing.headers['etag']));
+    await again().expect(304);
+    await coach.post(`/api/replays/${replay.id}/revoke`).expect(200);
+    await again().expect(404);
   });
 
   it('dies when it lapses', async () => {
