@@ -19,6 +19,14 @@ export const waiting = z
       name: z.string(),
       sentence: z.string(),
     }),
+    /** The machine failed it and does not try again by itself. */
+    z.object({
+      kind: z.literal('clip-held'),
+      clipId: id,
+      visitId: id,
+      name: z.string(),
+      sentence: z.string(),
+    }),
     z.object({ kind: z.literal('call-missing'), visitId: id, side }),
     z.object({
       kind: z.literal('rep-unmarked'),

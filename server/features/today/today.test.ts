@@ -28,6 +28,14 @@ beforeAll(async () => {
     const unmarked = makeRep(em, { clip: marked, createdBy: coach });
     makeRep(em, { clip: marked, createdBy: coach, startFrame: 300, excluded: 'hopped' });
     makeClip(em, { ...by, state: 'preparing', progress: 40, name: 'on-its-way.mov' });
+    makeClip(em, { ...by, state: 'waiting', trouble: 'no-space', name: 'held.mov' });
+    makeClip(em, {
+      ...by,
+      state: 'waiting',
+      trouble: 'no-space',
+      nextTryAt: new Date(Date.now() + 60_000),
+      name: 'tried-again.mov',
+    });
     makeClip(em, {
       ...by,
       state: 'refused',
@@ -103,8 +111,13 @@ describe('today', () => {
     const items = await itemsOf(api.world.coach);
     const kinds = items.map(({ kind }) => kind);
     expect(kinds.slice(0, 3)).toEqual(['comment-open', 'reading-ready', 'rep-unmarked']);
-    expect(kinds.slice(3, 5).sort()).toEqual(['clip-preparing', 'clip-refused']);
-    expect(kinds.slice(5)).toEqual(['consent-lapses', 'link-lapses']);
+    expect(kinds.slice(3, 7).sort()).toEqual([
+      'clip-held',
+      'clip-preparing',
+      'clip-preparing',
+      'clip-refused',
+    ]);
+    expect(kinds.slice(7)).toEqual(['consent-lapses', 'link-lapses']);
     expect(items[0]).toMatchObject({
       commentId,
       clipId,
@@ -122,7 +135,16 @@ describe('today', () => {
       side: 'right',
       label: 'Can’t tell yet',
     });
-    expect(items.find(({ kind }) => kind === 'clip-preparing')).toMatchObject({ progress: 40 });
+    expect(items.filter(({ kind }) => kind === 'clip-preparing')).toEqual(
+      expect.arrayContaining([
+        expect.objectContaining({ progress: 40 }),
+        expect.objectContaining({ name: 'tried-again.mov' }),
+      ]),
+    );
+    expect(items.find(({ kind }) => kind === 'clip-held')).toMatchObject({
+      name: 'held.mov',
+      sentence: expect.stringContaining('disk is full'),
+    });
     expect(items.find(({ kind }) => kind === 'consent-lapses')).toMatchObject({
       until: daysLater(today(), 5),
       athlete: { name: 'Sandy Marsh' },

@@ -7,15 +7,16 @@ const NAMES: Record<TaskGroup, string> = {
   mark: 'To mark',
   answer: 'To answer',
   film: 'To send or film again',
+  retry: 'Could not be prepared',
   prepare: 'Being prepared',
   lapse: 'About to lapse',
 };
 
 /** A coach works from the clip to the reading; a supervisor starts with what others brought. */
 const ORDER: Record<Role, readonly TaskGroup[]> = {
-  coach: ['call', 'mark', 'answer', 'film', 'review', 'prepare', 'lapse'],
-  supervisor: ['review', 'answer', 'call', 'mark', 'film', 'prepare', 'lapse'],
-  owner: ['lapse', 'review', 'answer', 'call', 'mark', 'film', 'prepare'],
+  coach: ['call', 'mark', 'answer', 'film', 'retry', 'review', 'prepare', 'lapse'],
+  supervisor: ['review', 'answer', 'call', 'mark', 'film', 'retry', 'prepare', 'lapse'],
+  owner: ['lapse', 'review', 'answer', 'call', 'mark', 'film', 'retry', 'prepare'],
 };
 
 export type Group = { group: TaskGroup; name: string; tasks: Task[] };

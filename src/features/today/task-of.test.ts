@@ -18,6 +18,14 @@ const items: Waiting[] = [
     name: 'IMG_2.MOV',
     sentence: 'Send it again.',
   },
+  {
+    ...common,
+    kind: 'clip-held',
+    clipId: otherId,
+    visitId,
+    name: 'IMG_3.MOV',
+    sentence: 'The server’s disk is full.',
+  },
   { ...common, kind: 'call-missing', visitId, side: 'right' },
   { ...common, kind: 'rep-unmarked', clipId, repNumber: 2, side: 'left' },
   { ...common, kind: 'reading-ready', visitId, side: 'left', label: 'Turns out early' },
@@ -39,6 +47,7 @@ describe('taskOf', () => {
     expect(items.map((item) => [item.kind, taskOf(item).action.to])).toEqual([
       ['clip-preparing', `/visits/${visitId}`],
       ['clip-refused', `/visits/${visitId}#clip-${clipId}`],
+      ['clip-held', `/visits/${visitId}#clip-${otherId}`],
       ['call-missing', `/visits/${visitId}/sides/right/call`],
       ['rep-unmarked', `/clips/${clipId}`],
       ['reading-ready', `/visits/${visitId}/sides/left`],
@@ -51,7 +60,7 @@ describe('taskOf', () => {
   it('gives every row a key of its own and names athlete and side', () => {
     const tasks = items.map(taskOf);
     expect(new Set(tasks.map(({ key }) => key)).size).toBe(items.length);
-    expect(tasks[3]?.title).toBe('Ines Marlow, left support, rep 2');
+    expect(tasks[4]?.title).toBe('Ines Marlow, left support, rep 2');
     expect(tasks[0]?.detail).toBe('Being prepared, 42 %.');
   });
 

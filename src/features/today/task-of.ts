@@ -3,7 +3,8 @@ import { distance, moment } from '#src/ui/days.ts';
 import { paths } from '#src/ui/paths.ts';
 import { supportWords } from '#src/ui/words.ts';
 
-export type TaskGroup = 'review' | 'call' | 'mark' | 'answer' | 'film' | 'prepare' | 'lapse';
+export type TaskGroup =
+  'review' | 'call' | 'mark' | 'answer' | 'film' | 'retry' | 'prepare' | 'lapse';
 
 /** One row of Today: what waits, when it came or ends, and the exact place that opens. */
 export type Task = {
@@ -67,6 +68,15 @@ export function taskOf(item: Waiting): Task {
         detail: item.sentence,
         when: `sent ${moment(item.at)}`,
         action: { label: 'Open the visit', to: `${paths.visit(item.visitId)}#clip-${item.clipId}` },
+      };
+    case 'clip-held':
+      return {
+        key: `retry ${item.clipId}`,
+        group: 'retry',
+        title: `${who}, ${item.name}`,
+        detail: item.sentence,
+        when: `sent ${moment(item.at)}`,
+        action: { label: 'Try again', to: `${paths.visit(item.visitId)}#clip-${item.clipId}` },
       };
     case 'reading-ready':
       return {
