@@ -7,6 +7,7 @@ import { Migration20261201155000_job_priority } from '../../migrations/Migration
 import { Migration20261201160000_clip_trouble } from '../../migrations/Migration20261201160000_clip_trouble.ts';
 import { Migration20261201163000_quiet_from } from '../../migrations/Migration20261201163000_quiet_from.ts';
 import { Migration20261201170000_second_markings } from '../../migrations/Migration20261201170000_second_markings.ts';
+import { Migration20261201173000_two_clips } from '../../migrations/Migration20261201173000_two_clips.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -32,6 +33,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261201170000_second_markings',
     class: Migration20261201170000_second_markings,
+  },
+  {
+    name: 'Migration20261201173000_two_clips',
+    class: Migration20261201173000_two_clips,
   },
 ];
 

@@ -27,7 +27,7 @@ export const benchDocument = z
         clip: clipWithFrames.omit({ frames: true }),
         rep,
         marks: z.array(mark),
-        /** When each marked frame is shown, milliseconds from the clip's first. */
+        /** When each marked frame, and the one of the clap, is shown, milliseconds from the clip's first. */
         times: z.array(z.object({ frame: frameIndex, milliseconds: z.number() })),
       }),
     ),

@@ -2,6 +2,7 @@ import * as z from 'zod';
 import { call } from './calls.ts';
 import { id, moment, personRef, side } from './primitives.ts';
 import { json, route } from './route.ts';
+import { tieFault } from './reps.ts';
 import { readingResult } from './reading-result.ts';
 
 export const readingCode = z
@@ -73,6 +74,9 @@ export const reading = z
         clipName: z.string(),
         number: z.int(),
         excluded: z.string().nullable(),
+        /** Rep of a side clip said to be filmed at the same time, and why its lift is not taken. */
+        liftFrom: id.nullable(),
+        tieFault: tieFault.nullable(),
       }),
     ),
     by: personRef,

@@ -1,5 +1,18 @@
 import * as z from 'zod';
-import { frameIndex, id, moment, personRef, side, text, version, view } from './primitives.ts';
+import { SHARED_EVENTS } from '#shared/timing/shared-events.ts';
+import type { Milliseconds } from '#shared/timing/units.ts';
+import {
+  frameIndex,
+  id,
+  moment,
+  personRef,
+  quantity,
+  readonlyList,
+  side,
+  text,
+  version,
+  view,
+} from './primitives.ts';
 import { json, none, route } from './route.ts';
 
 export const exclusion = z
@@ -34,6 +47,26 @@ export const boundaries = z
   .meta({ id: 'Boundaries' });
 export type Boundaries = z.infer<typeof boundaries>;
 
+const sharedEvent = z.enum(SHARED_EVENTS);
+const twoEvents = z.tuple([sharedEvent, sharedEvent]).readonly();
+const time = quantity<Milliseconds>('Milliseconds.');
+
+/** Why two clips are not taken as showing the same moment. */
+export const tieFault = z
+  .discriminatedUnion('code', [
+    z.object({ code: z.literal('few-shared-events'), have: readonlyList(sharedEvent) }),
+    z.object({ code: z.literal('events-out-of-order'), events: twoEvents }),
+    z.object({
+      code: z.literal('durations-differ'),
+      events: twoEvents,
+      own: time,
+      other: time,
+      allowed: time,
+    }),
+    z.object({ code: z.literal('not-a-pair') }),
+  ])
+  .meta({ id: 'TieFault' });
+
 export const rep = z
   .object({
     id,
@@ -52,6 +85,12 @@ export const rep = z
     markedFrames: z.int(),
     /** The rep of this clip and side whose quiet stance this one takes (marching); null: its own. */
     quietFrom: id.nullable(),
+    /** The rep of a side clip of this visit, filmed at the same time, whose lift this front rep takes. */
+    liftFrom: id.nullable(),
+    /** A clap that another clip shows too. */
+    clapFrame: frameIndex.nullable(),
+    /** Why the lift of `liftFrom` is not taken. */
+    tieFault: tieFault.nullable(),
     version,
   })
   .meta({ id: 'Rep' });
@@ -85,6 +124,8 @@ export const repEdit = z
     excluded: exclusion.nullable().optional(),
     excludedNote: text(300, 0).optional(),
     quietFrom: id.nullable().optional(),
+    liftFrom: id.nullable().optional(),
+    clapFrame: frameIndex.nullable().optional(),
     version,
   })
   .meta({ id: 'RepEdit' });

@@ -81,6 +81,8 @@ export const aReading = (result: ReadingResult, change: Partial<Reading> = {}): 
     clipName: 'IMG_2291.MOV',
     number: n + 1,
     excluded: null,
+    liftFrom: null,
+    tieFault: null,
   })),
   by: coach,
   at,

@@ -88,7 +88,8 @@ export const benchOf = async (unit: Unit<UserActor>, clipId: string): Promise<Be
       .filter((stored) => stored.clip !== clip)
       .map((stored) => {
         const times = timesOfClip(stored.clip);
-        const frames = [...new Set(stored.marks.map(({ frame }) => frame))];
+        const clap = stored.rep.clapFrame ?? [];
+        const frames = [...new Set(stored.marks.map(({ frame }) => frame).concat(clap))];
         return {
           clip: presentClip(stored.clip, repCount(stored.clip)),
           ...withMarks(stored),

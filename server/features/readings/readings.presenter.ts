@@ -59,12 +59,14 @@ export const presentReading = (reading: Reading, reps: readonly NumberedRep[]): 
   provisional: reading.provisional,
   assumption: reading.assumption,
   result: loaded(reading.result.unwrap()),
-  reps: reps.map(({ rep, clip, number }) => ({
+  reps: reps.map(({ rep, clip, number, tieFault }) => ({
     id: rep.id,
     clipId: clip.id,
     clipName: clip.name,
     number,
     excluded: rep.excluded ?? null,
+    liftFrom: rep.liftFrom ?? null,
+    tieFault: tieFault ?? null,
   })),
 });
 

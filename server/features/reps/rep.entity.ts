@@ -23,6 +23,10 @@ export const Rep = defineEntity({
     excludedNote: p.text().default(''),
     /** The rep of the same clip and side whose quiet stance this one takes; a foreign key of the migration. */
     quietFrom: p.uuid().nullable(),
+    /** The rep of a side clip that shows the same moment; a foreign key too. */
+    liftFrom: p.uuid().nullable(),
+    /** A clap near the rep that another clip shows too. */
+    clapFrame: p.integer().nullable(),
     createdBy: p.manyToOne(User).ref(),
     createdAt: madeAt(),
     version: p.integer().version(),

@@ -2,6 +2,8 @@ import type { FrameTable } from '#shared/contracts/clips.ts';
 import type { Rep as RepShape } from '#shared/contracts/reps.ts';
 import type { RepInput } from '#shared/course/types.ts';
 import type { FrameInput } from '#shared/measures/inputs.ts';
+import type { TiedLift } from '#shared/measures/tied-lift.ts';
+import type { RepTieFault } from '#shared/records/tied-lifts.ts';
 import { type MeasuredClip, repInputOf, timesOf } from '#shared/records/engine-input.ts';
 import { mmPerPxOf } from '#shared/records/scale.ts';
 import { marksWith } from '#shared/records/stored-marks.ts';
@@ -31,6 +33,9 @@ export interface StoredRep {
   readonly bodyHeightMm: number | null;
   /** Quiet stance taken from another rep of the clip; none where left out. */
   readonly sharedQuiet?: readonly FrameInput[] | null;
+  /** Lift taken from the rep of a side clip, or why it is not; none where left out. */
+  readonly liftFrom?: TiedLift | undefined;
+  readonly tieFault?: RepTieFault | null;
 }
 
 /** The clip's exact times; empty until it is prepared. */
@@ -41,7 +46,7 @@ export const timesOfClip = (clip: Clip): Milliseconds[] => {
 
 /** A stored rep as the engine takes it; null until the clip is prepared. */
 export const repInput = (stored: StoredRep, times: readonly Milliseconds[]): RepInput | null => {
-  const { rep, clip, marks, bodyHeightMm, sharedQuiet = null } = stored;
+  const { rep, clip, marks, bodyHeightMm, sharedQuiet = null, liftFrom } = stored;
   const input = repInputOf({
     rep: {
       id: rep.id,
@@ -55,7 +60,7 @@ export const repInput = (stored: StoredRep, times: readonly Milliseconds[]): Rep
     marks: marksWith(marks.map(presentMark), []),
     bodyHeightMm,
   });
-  return input && { ...input, sharedQuiet };
+  return input && { ...input, sharedQuiet, ...(liftFrom && { liftFrom }) };
 };
 
 /** @param number its place in the clip, from 1 */
@@ -74,6 +79,9 @@ export const presentRep = (stored: StoredRep, number: number): RepShape => {
     excluded: rep.excluded ?? null,
     excludedNote: rep.excludedNote,
     quietFrom: rep.quietFrom ?? null,
+    liftFrom: rep.liftFrom ?? null,
+    clapFrame: rep.clapFrame ?? null,
+    tieFault: stored.tieFault ?? null,
     markedFrames: new Set(marks.map(({ frame }) => frame)).size,
     version: rep.version,
   };

@@ -1,12 +1,14 @@
 import type * as z from 'zod';
 import type { UserActor } from '#shared/access/actors.ts';
 import type { Rep as RepShape, repBody, repEdit } from '#shared/contracts/reps.ts';
+import { viewOf } from '#shared/records/views.ts';
 import { MOMENT_ORDER } from '#shared/records/engine-input.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { tell } from '../../events/tell.ts';
 import { found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
+import type { Clip } from '../clips/clip.entity.ts';
 import { type ClipInSight, clipInSight, needFrames } from '../clips/clip-in-sight.ts';
 import { readingsAreStale } from '../readings/stale.ts';
 import { needOrder } from './boundary-order.ts';
@@ -92,6 +94,32 @@ const needLender = async ({ em }: Unit<UserActor>, rep: Rep, lenderId: string): 
   ]);
 };
 
+/** @throws Problem 'invalid-input' unless one is a front rep and the other a lifted-side rep of the same visit and leg */
+const needSideRep = async (
+  { em }: Unit<UserActor>,
+  rep: Rep,
+  clip: Clip,
+  sideId: string,
+): Promise<void> => {
+  const side = await em.findOne(Rep, { id: sideId }, { populate: ['clip'] });
+  const other = side?.clip.unwrap();
+  if (
+    side &&
+    other?.visit.id === clip.visit.id &&
+    side.supportSide === rep.supportSide &&
+    clip.cameraStood === 'front' &&
+    viewOf(other.cameraStood, side.supportSide) === 'lifted-side'
+  )
+    return;
+  throw new Problem('invalid-input', undefined, [
+    {
+      path: 'body.liftFrom',
+      message:
+        'Choose a rep of this visit, standing on the same leg, in a clip from the lifted side; a clip from the front takes its lift.',
+    },
+  ]);
+};
+
 /** Changes a rep, if nobody has changed it meanwhile. */
 export const editRep = async (
   unit: Unit<UserActor>,
@@ -111,6 +139,14 @@ export const editRep = async (
     if (edit.quietFrom !== null) await needLender(unit, rep, edit.quietFrom);
     rep.quietFrom = edit.quietFrom;
   }
+  if (edit.liftFrom !== undefined) {
+    if (edit.liftFrom !== null) await needSideRep(unit, rep, clip, edit.liftFrom);
+    rep.liftFrom = edit.liftFrom;
+  }
+  if (edit.clapFrame !== undefined) {
+    if (edit.clapFrame !== null) needFrames(clip, edit.clapFrame, edit.clapFrame);
+    rep.clapFrame = edit.clapFrame;
+  }
   if (edit.boundaries) rep.handBoundaries = movedAfter(rep.handBoundaries, edit.boundaries);
   needFrames(clip, rep.startFrame, rep.endFrame);
   needOrder(rep, rep.handBoundaries);
@@ -119,7 +155,7 @@ export const editRep = async (
   return presentStored(unit, sight, id);
 };
 
-/** Deletes a rep with its marks; a replay link that plays it dies with it, and who took its quiet stance has none. */
+/** Deletes a rep with its marks; a replay link that plays it dies with it, and who took its quiet stance or its lift has its own again. */
 export const deleteRep = async (unit: Unit<UserActor>, id: string): Promise<void> => {
   const sight = await repInSight(unit, id, 'rep.edit');
   unit.em.remove(sight.rep);

@@ -29,6 +29,9 @@ const aRep = (n: number): Rep => ({
   excluded: null,
   excludedNote: '',
   quietFrom: null,
+  liftFrom: null,
+  clapFrame: null,
+  tieFault: null,
   markedFrames: 30,
   version: 1,
 });
@@ -149,6 +152,23 @@ describe('a measured reading', () => {
       'href',
       expect.stringContaining(`/clips/${clipId}?frame=`),
     );
+  });
+
+  it('names the side clip that a rep’s lift was taken from, or says why it was not', async () => {
+    const result = resultOf('g02_early_mid_3rep');
+    const [first, second, third] = result.reps.map(({ id }) => id);
+    const reps = result.reps.map((rep) => (rep.id === first ? { ...rep, liftFrom: third } : rep));
+    const reading = aReading({ ...result, reps });
+    const named = reading.reps.map((rep) =>
+      rep.id === second && third
+        ? { ...rep, liftFrom: third, tieFault: { code: 'not-a-pair' as const } }
+        : rep,
+    );
+    readingApi(aSidePage({ ...reading, reps: named }));
+    renderAt(address);
+    const course = within(await region('Course'));
+    expect(course.getByText('lift from rep 3, filmed at the same time')).toBeVisible();
+    expect(course.getByText(/lift from its own clip, not from rep 3: a front and/)).toBeVisible();
   });
 
   it('that rests on tracked marks is provisional', async () => {

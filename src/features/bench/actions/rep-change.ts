@@ -18,6 +18,8 @@ export const inverseOfChange = (rep: Rep, change: RepChange): RepChange => {
   if (change.excluded !== undefined) inverse.excluded = rep.excluded;
   if (change.excludedNote !== undefined) inverse.excludedNote = rep.excludedNote;
   if (change.quietFrom !== undefined) inverse.quietFrom = rep.quietFrom;
+  if (change.liftFrom !== undefined) inverse.liftFrom = rep.liftFrom;
+  if (change.clapFrame !== undefined) inverse.clapFrame = rep.clapFrame;
   if (change.boundaries !== undefined) {
     const moments = Object.keys(change.boundaries) as (keyof Boundaries)[];
     inverse.boundaries = Object.fromEntries(

@@ -12,12 +12,16 @@ import { repInputOf } from '#shared/records/engine-input.ts';
 import { withSharedQuiet } from '#shared/records/shared-quiet.ts';
 import { hillOf, type HillPoint } from './hill.ts';
 import { type Extra, ledLandmarks, nextLandmark, proposedSet } from './led.ts';
+import { type RepTieFault, type Tying, withTiedLift } from '#shared/records/tied-lifts.ts';
+import { otherReps } from './other-reps.ts';
 import { marksWith } from '#shared/records/stored-marks.ts';
 
-export interface BenchRep {
+export interface BenchRep extends Tying {
   readonly rep: Rep;
   readonly marks: MarksByFrame;
   readonly input: RepInput | null;
+  /** Why it does not take the lift of the side rep that it names. */
+  readonly tieFault: RepTieFault | null;
 }
 
 /** The rep that is worked on, with all that follows from its marks at once. */
@@ -46,17 +50,22 @@ export const repsOf = (
   document: BenchDocument,
   waiting: readonly QueuedMark[],
   times: readonly Milliseconds[],
-): BenchRep[] =>
-  withSharedQuiet(
+): BenchRep[] => {
+  const own = withSharedQuiet(
     document.reps.map(({ rep, marks: stored }) => {
       const own = waiting.filter((each) => each.repId === rep.id && each.state.is !== 'refused');
       const marks = marksWith(stored, own);
       const { clip } = document;
       const bodyHeightMm = document.athlete.heightMm;
       const input = repInputOf({ rep, clip, times, marks, bodyHeightMm });
-      return { rep, marks, input, clipId: clip.id, quietFrom: rep.quietFrom };
+      const clap = rep.clapFrame === null ? null : (times[rep.clapFrame] ?? null);
+      const { quietFrom, liftFrom } = rep;
+      return { rep, marks, input, clipId: clip.id, quietFrom, liftFrom, clap };
     }),
   );
+  const all = [...own, ...(own.some(({ liftFrom }) => liftFrom) ? otherReps(document) : [])];
+  return own.map((each) => withTiedLift(each, all));
+};
 
 const holds = ({ rep }: BenchRep, frame: FrameIndex): boolean =>
   rep.startFrame <= frame && frame <= rep.endFrame;

@@ -25,6 +25,9 @@ const REP: Rep = {
   excluded: null,
   excludedNote: '',
   quietFrom: null,
+  liftFrom: null,
+  clapFrame: null,
+  tieFault: null,
   markedFrames: 0,
   version: 1,
 };

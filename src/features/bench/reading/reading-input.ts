@@ -1,32 +1,13 @@
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
-import type { RepInput } from '#shared/course/types.ts';
 import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import type { UnmarkedFrame } from '#shared/reading/next-frame.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
-import { repInputOf } from '#shared/records/engine-input.ts';
-import { withSharedQuiet } from '#shared/records/shared-quiet.ts';
-import { marksWith } from '#shared/records/stored-marks.ts';
-import { frameIndex, type Milliseconds, milliseconds } from '#shared/timing/units.ts';
+import { withTiedLift } from '#shared/records/tied-lifts.ts';
+import { frameIndex, type Milliseconds } from '#shared/timing/units.ts';
 import type { BenchRep } from '../model/bench-model.ts';
 import { markErrorOn } from '../model/mark-error-on.ts';
-
-/** Reps of the visit's other clips, as the document brings them. */
-export const otherInputs = ({ otherReps, athlete }: BenchDocument): RepInput[] =>
-  withSharedQuiet(
-    otherReps.map(({ clip, rep, marks, times }) => {
-      const byFrame: Milliseconds[] = [];
-      for (const { frame, milliseconds: at } of times) byFrame[frame] = milliseconds(at);
-      const input = repInputOf({
-        rep,
-        clip,
-        times: byFrame,
-        marks: marksWith(marks, []),
-        bodyHeightMm: athlete.heightMm,
-      });
-      return { input, clipId: clip.id, quietFrom: rep.quietFrom };
-    }),
-  ).flatMap(({ input }) => (input ? [input] : []));
+import { otherReps } from '../model/other-reps.ts';
 
 /** What the reading of one side of this visit rests on; null where that side has no rep. */
 export const readingInputOf = (
@@ -34,8 +15,11 @@ export const readingInputOf = (
   reps: readonly BenchRep[],
   side: Side,
 ): ReadingInput | null => {
-  const own = reps.flatMap(({ input }) => (input ? [input] : []));
-  const ofSide = [...own, ...otherInputs(document)].filter((rep) => rep.supportSide === side);
+  const others = otherReps(document);
+  const all = [...reps, ...others];
+  const ofSide = [...reps, ...others.map((other) => withTiedLift(other, all))]
+    .flatMap(({ input }) => input ?? [])
+    .filter((rep) => rep.supportSide === side);
   if (ofSide.length === 0) return null;
   return {
     engine: CURRENT_ENGINE,

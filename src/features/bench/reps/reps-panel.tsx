@@ -10,6 +10,7 @@ import { AddRep } from './add-rep.tsx';
 import { QuietStance } from './quiet-stance.tsx';
 import { RepActions } from './rep-actions.tsx';
 import { MarkAgain } from '../blind/mark-again.tsx';
+import { TiedLift } from './tied-lift.tsx';
 import { EXCLUSION_WORDS } from './rep-words.ts';
 
 /** Every rep of the clip, and a new one named by its span. */
@@ -65,6 +66,7 @@ function RepRow({ own }: { own: BenchRep }) {
         <p className="text-note text-soft">{rep.excludedNote}</p>
       )}
       <QuietStance own={own} />
+      <TiedLift own={own} />
       <div className="flex flex-wrap gap-x-5">
         {!isCurrent && (
           <Button

@@ -3,6 +3,7 @@ import type { Reading } from '#shared/contracts/readings.ts';
 import type { RepResult } from '#shared/reading/types.ts';
 import { capital, degrees, plusMinus, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
+import { tieFaultWords } from '#src/ui/tie-words.ts';
 import { repSymbol } from '#src/ui/plots/course-points.tsx';
 import { faultsToSay, repFaultWords } from '../words/rep-fault-words.ts';
 import { drawnReps, repHalfWidth } from './course-data.ts';
@@ -31,6 +32,7 @@ export function RepKey({ reading }: { reading: Reading }) {
             {rep.fit
               ? `${turn(rep.fit.change.value)} ${plusMinus(repHalfWidth(rep))}, ${rep.fit.used} frames`
               : leftOut(rep)}
+            <LiftFrom reading={reading} rep={rep} />
           </span>
         </li>
       ))}
@@ -45,6 +47,24 @@ export function RepKey({ reading }: { reading: Reading }) {
         </li>
       ))}
     </ul>
+  );
+}
+
+/** Which clip its lift comes from, where a hand has named a side clip of the same moment. */
+function LiftFrom({ reading, rep }: { reading: Reading; rep: RepResult }) {
+  const named = reading.reps.find((each) => each.id === rep.id);
+  if (rep.liftFrom !== undefined)
+    return (
+      <span className="block text-soft">
+        lift from {repName(reading, rep.liftFrom)}, filmed at the same time
+      </span>
+    );
+  if (!named?.liftFrom || !named.tieFault) return null;
+  return (
+    <span className="block text-soft">
+      lift from its own clip, not from {repName(reading, named.liftFrom)}:{' '}
+      {tieFaultWords(named.tieFault)}
+    </span>
   );
 }
 

@@ -56,6 +56,8 @@ describe('what a rep is called', () => {
     clipId,
     clipName: `${clipId}.MOV`,
     excluded: null,
+    liftFrom: null,
+    tieFault: null,
   });
 
   it('is its number, with the clip where there are several', () => {
