@@ -117,6 +117,20 @@ describe('a view that cannot show a measure', () => {
   });
 });
 
+describe('the views of a measure', () => {
+  // specification: the front shows turn, the lifted side lift, the support side the pelvis
+  it.each([
+    ['lift', ['front', 'lifted-side', 'support-side']],
+    ['turn', ['front']],
+    ['thigh-against-trunk', ['lifted-side', 'support-side']],
+    ['pelvic-tilt', ['support-side']],
+    ['support-hip-extension', ['support-side']],
+    ['heel-rise', ['front', 'back']],
+  ])('of %s are %j', (id, views) => {
+    expect(measureById(id)?.views).toEqual(views);
+  });
+});
+
 describe('the direction of the toes', () => {
   it.each(['lift', 'thigh-against-trunk', 'support-hip-extension'])('is asked for by %s', (id) => {
     const camera = cameraOf('support-side', { toes: null });

@@ -43,3 +43,28 @@ describe('a quiet stance that several reps share', () => {
     expect(taken(of(lender), 'deleted')).toBeNull();
   });
 });
+
+describe('quiet frames', () => {
+  it('are none of a rep without marks or without a scale', () => {
+    expect(quietFramesOf({ ...lender, frames: [] })).toEqual([]);
+    const camera = { ...lender.camera, mmPerPx: null };
+    expect(quietFramesOf({ ...lender, camera })).toEqual([]);
+  });
+
+  it('are found with bare landmarks too', () => {
+    const bare: RepInput = {
+      ...lender,
+      frames: lender.frames.map((frame) => {
+        const { 'belt-tip': _belt, 'thigh-tip': _thigh, kneecap: _knee, ...marks } = frame.marks;
+        return { ...frame, marks };
+      }),
+    };
+    expect(quietFramesOf(bare)).toHaveLength(quietFramesOf(lender).length);
+  });
+
+  it('are not lent to a rep that is not measured', () => {
+    const nobody: Borrowing = { input: null, clipId: 'clip', quietFrom: 'first' };
+    expect(sharedQuietOf(nobody, [of(lender), nobody])).toBeNull();
+    expect(withSharedQuiet([nobody])).toEqual([nobody]);
+  });
+});

@@ -12,10 +12,12 @@ const vitest = await createVitest('test', {
   maxWorkers: 1,
   isolate: false,
   bail: 1,
+  testTimeout: 300_000,
   reporters: [{}],
 });
 // a project keeps its own copy of the pool's settings
-for (const { config } of vitest.projects) Object.assign(config, { isolate: false, maxWorkers: 1 });
+for (const { config } of vitest.projects)
+  Object.assign(config, { isolate: false, maxWorkers: 1, testTimeout: 300_000 });
 
 /** The nearest alone find most faults. */
 const NEAREST = 3;
