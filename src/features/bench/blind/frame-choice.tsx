@@ -23,7 +23,7 @@ export function FrameChoice({
         <input
           type="radio"
           name="frames"
-          className="size-5 accent-ink"
+          className="size-5 flex-none accent-ink"
           checked={chosen === null}
           onChange={() => onChoose(null)}
         />
@@ -33,7 +33,7 @@ export function FrameChoice({
         <input
           type="radio"
           name="frames"
-          className="size-5 accent-ink"
+          className="size-5 flex-none accent-ink"
           checked={chosen !== null}
           onChange={() => onChoose([])}
         />
@@ -49,7 +49,7 @@ export function FrameChoice({
               <label className="flex min-h-[44px] min-w-[76px] items-center gap-2 rounded border border-edge px-2">
                 <input
                   type="checkbox"
-                  className="size-5 accent-ink"
+                  className="size-5 flex-none accent-ink"
                   checked={chosen.includes(frame)}
                   onChange={() => toggle(frame)}
                 />

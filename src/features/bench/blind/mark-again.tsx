@@ -93,7 +93,7 @@ function MarkAgainForm({ repId, onClose }: { repId: string; onClose: () => void 
               <input
                 type="radio"
                 name="marker"
-                className="size-5 accent-ink"
+                className="size-5 flex-none accent-ink"
                 checked={marker === id}
                 onChange={() => setMarker(id)}
               />

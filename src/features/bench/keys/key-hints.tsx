@@ -1,4 +1,5 @@
-import type { ReactNode } from 'react';
+import { type ReactNode, useContext } from 'react';
+import { BlindContext } from '../blind/blind-context.ts';
 import { useBench, useBenchDocument, useBenchTools } from '../bench-context.ts';
 import { keyWords } from './key-map.ts';
 
@@ -14,7 +15,8 @@ function Key({ children }: { children: ReactNode }) {
 export function KeyHints() {
   const { store } = useBenchTools();
   const { may } = useBenchDocument();
-  const hide = useBench((state) => state.taste.keys.hide);
+  const { hide, 'next-frame-to-mark': next } = useBench((state) => state.taste.keys);
+  const blind = useContext(BlindContext) !== null;
   return (
     <div className="bench-keys text-caption text-soft">
       <p>
@@ -24,8 +26,16 @@ export function KeyHints() {
         <Key>Page Up</Key> <Key>Page Down</Key> ten
       </p>
       <p>
-        <Key>Home</Key> <Key>End</Key> the rep’s bounds
+        <Key>Home</Key> <Key>End</Key> {blind ? 'the clip’s ends' : 'the rep’s bounds'}
       </p>
+      {blind && (
+        <p>
+          {keyWords(next).map((part) => (
+            <Key key={part}>{part}</Key>
+          ))}{' '}
+          next frame to mark
+        </p>
+      )}
       {may.mark && (
         <>
           <p>
