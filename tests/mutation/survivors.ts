@@ -10,7 +10,29 @@ export interface Explained {
   readonly why: string;
 }
 
-export const EXPLAINED: readonly Explained[] = [];
+const SYMMETRIC =
+  'an error is as likely to one side as to the other: the draws have the same spread either way';
+
+const draws = (code: string): Explained => ({
+  file: 'shared/measures/lift.ts',
+  code,
+  before: '+',
+  after: '-',
+  why: SYMMETRIC,
+});
+
+export const EXPLAINED: readonly Explained[] = [
+  {
+    file: 'shared/measures/hip-centre.ts',
+    code: 'return eu >= 0 ? { eu, ev, nu: -ev, nv: eu } : { eu, ev, nu: ev, nv: -eu };',
+    before: '>=',
+    after: '>',
+    why: 'differs for a pelvis that stands exactly upright in the picture: neither side is down',
+  },
+  draws('{ u: lifted.u + lifted.error * z(0), v: lifted.v + lifted.error * z(1) },'),
+  draws('{ u: support.u + support.error * z(2), v: support.v + support.error * z(3) },'),
+  draws('const kneeV = knee.v + knee.error * z(4);'),
+];
 
 export const explanationOf = (mutant: Mutant): string | null =>
   EXPLAINED.find(
