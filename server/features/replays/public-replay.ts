@@ -64,6 +64,7 @@ const probabilityOf = ({ code, figures }: ReadingResult): number | null => {
   }
 };
 
+/** Null where it is not shown, or not final yet; the link shows it by itself once it is. */
 const readingOf = async ({ em }: Of, replay: Replay): Promise<PublicReplay['reading']> => {
   if (!replay.showReading) return null;
   const setting = await em.findOne(
@@ -73,7 +74,8 @@ const readingOf = async ({ em }: Of, replay: Replay): Promise<PublicReplay['read
   );
   const reading = setting?.reading?.unwrap();
   const result = reading?.result.unwrap();
-  if (!reading || !result) return null;
+  // what still rests on marks that nobody has looked at is not told to the athlete
+  if (!reading || !result || reading.provisional) return null;
   return {
     code: reading.code,
     label: readingLabel(reading.code, reading.before60),

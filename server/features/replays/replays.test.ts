@@ -5,6 +5,7 @@ import { goldenClip } from '#tests/support/golden.ts';
 import { makeConsent } from '../athletes/athlete.factory.ts';
 import { Clip } from '../clips/clip.entity.ts';
 import { makeClip } from '../clips/clip.factory.ts';
+import { Reading } from '../readings/reading.entity.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
 
 let api: Api;
@@ -98,6 +99,19 @@ describe('a replay link', () => {
     await open(token).expect(200);
     const { body: list } = await coach.get(`/api/replays?visitId=${made.visitId}`);
     expect(list.items.find((row: { id: string }) => row.id === replay.id).openings).toBe(2);
+  });
+
+  it('says nothing measured while the reading rests on marks that nobody has looked at', async () => {
+    const provisional = (value: boolean) =>
+      api.ground.inPractice(api.world.coach, ({ em }) =>
+        em.nativeUpdate(Reading, { visit: made.visitId }, { provisional: value }),
+      );
+    await provisional(true);
+    const { body } = await open(token).expect(200);
+    expect(body.reading).toBeNull();
+    expect(body.call).toMatchObject({ seen: 'early' });
+    await provisional(false);
+    expect((await open(token).expect(200)).body.reading).toMatchObject({ code: 'early-turn-out' });
   });
 
   it('lets out nothing else of the practice', async () => {

@@ -38,6 +38,10 @@ export function ReadingSoFar() {
         </>
       ) : result && result.code === 'lift-stops-short' ? (
         <p>“{readingLabel(result)}”</p>
+      ) : !result && working ? (
+        <p>Working it out.</p>
+      ) : current.rep.view !== 'front' ? (
+        <p>This view shows the lift. The turn is read from a clip filmed from the front.</p>
       ) : (
         <p>
           Not yet. It needs 3 quiet frames, then at least 7 in the rise, two of them near 60° and

@@ -82,7 +82,17 @@ export function LinkForm({
         emptyIsNull
       />
       <div>
-        {measured && <CheckboxField name="showReading" label="Show the measured reading" />}
+        {measured && (
+          <CheckboxField
+            name="showReading"
+            label="Show the measured reading"
+            note={
+              page.reading?.provisional
+                ? 'It is provisional: the link shows it once the tracked marks have been looked at.'
+                : undefined
+            }
+          />
+        )}
         <CheckboxField
           name="showCall"
           label="Show the call by eye"
