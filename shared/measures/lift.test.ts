@@ -6,10 +6,11 @@ import type { LandmarkId, Mark, Marks } from '#shared/landmarks/types.ts';
 import { frameIndex, milliseconds } from '#shared/timing/units.ts';
 import { ASSUMED_MARK_ERROR, type CameraInput } from './inputs.ts';
 import { type LevelFrame, levelFrame } from './level.ts';
-import { lift, liftOf } from './lift.ts';
+import { lift, liftHalfWidth, liftOf } from './lift.ts';
 import { thighAgainstTrunk } from './lift-from-side.ts';
 import type { Setting } from './measure.ts';
 import { pelvicTilt, supportHipExtension } from './pelvic-tilt.ts';
+import { propagate } from './propagate.ts';
 import { isRig, rigOf } from './rig.ts';
 import { settingOf } from './setting.ts';
 
@@ -49,6 +50,26 @@ describe('lift from the front', () => {
     expect(known).toBeLessThan(4);
     expect(unknown).toBeCloseTo(Math.sqrt(known ** 2 - 4 + 49), 9);
   });
+
+  it.each(['lifted-knee', 'asis-lifted', 'asis-support'] as const)(
+    'follows the error of %s as its derivative says',
+    (id) => {
+      const frame = level(madeMarks('left', pose(70)), camera);
+      const alone: LevelFrame = {
+        ...frame,
+        marks: Object.fromEntries(
+          Object.entries(frame.marks).map(([each, mark]) => [
+            each,
+            { ...mark, error: each === id ? 2 : 0 },
+          ]),
+        ),
+      };
+      const expected = propagate(alone, [id], (each) => liftOf(each, from) as number);
+      const spread = Math.sqrt(liftHalfWidth(alone, from) ** 2 - 2 ** 2) / 1.96;
+      // 200 draws know a spread to one part in twenty
+      expect(Math.abs(spread / expected - 1)).toBeLessThan(0.15);
+    },
+  );
 
   it('is not there without a quiet stance', () => {
     const empty = settingOf(from.rig, [], 'bare');
