@@ -69,6 +69,12 @@ const DIALOGS: readonly Asked[] = [
     first: button(/^Reps/),
     opener: button('Leave out'),
   },
+  {
+    title: 'Mark rep 1 again, blind',
+    address: ({ quill }) => paths.bench(quill.clipId),
+    first: button(/^Reps/),
+    opener: button('Mark again, blind'),
+  },
 ];
 
 for (const { title, address, opener, first } of DIALOGS)
