@@ -55,6 +55,9 @@ describe('the height of the lifted foot from the side', () => {
   });
 
   it('is unknown without the way the toes point or the ankle', () => {
+    const blind = without('ankle-support');
+    const unknown = { ...blind, camera: { ...rep.camera, lensHeightMm: null } };
+    expect(sideFootHeights(courseOf(side), courseOf(unknown))).toEqual([]);
     const turned = { ...side, camera: { ...side.camera, toes: null } };
     expect(sideFootHeights(courseOf(turned), courseOf(rep))).toEqual([]);
     const bare = { ...side, frames: without('ankle-lifted').frames };

@@ -132,3 +132,20 @@ it('a middle of three needs three: with a gap beside it the lower of two is take
   expect(medianOfThree([null, 5, 3])).toEqual([null, 3, 3]);
   expect(medianOfThree([null, null])).toEqual([null, null]);
 });
+
+describe('phases known from elsewhere', () => {
+  it('leave frames without one between, and a rep without a rise has no top', () => {
+    const quiet = rep.frames.slice(0, 8).map(() => 'quiet' as const);
+    const { phases } = courseOf({ ...rep, labels: quiet });
+    expect(phases.byFrame.slice(7, 10)).toEqual(['quiet', 'between', 'between']);
+    expect(phases.boundaries).toMatchObject({ quietFrom: 0, top: null, lowerFrom: null });
+  });
+
+  it('have no top where no lift of the rise is known', () => {
+    const labels = rep.frames.map((_, i) => (i < 12 ? ('quiet' as const) : ('rise' as const)));
+    const { phases, frames } = courseOf({ ...without('lifted-knee'), labels });
+    expect(frames.every(({ lift }) => lift === null)).toBe(true);
+    expect(phases.byFrame.filter((phase) => phase === 'rise')).toHaveLength(labels.length - 12);
+    expect(phases.boundaries.quietTo).toBe(rep.frames[11]?.time);
+  });
+});

@@ -192,3 +192,28 @@ describe('a quiet stance of fewer than three frames', () => {
     expect(neither.reference.horizon).toBeNull();
   });
 });
+
+describe('a quiet frame without the marks of a measure', () => {
+  const camera = cameraOf('lifted-side');
+  const raised = level(side, camera);
+  const { rig } = settingFor(camera, side);
+  const hanging = level({ ...side, 'knee-lateral': mark(500, 1083) }, camera);
+  const blank = level(without(side, 'trochanter'), camera);
+
+  it('does not count for the lift from the side, which needs three that do', () => {
+    const three = settingOf(rig, [hanging, hanging, hanging], 'bare');
+    const more = settingOf(rig, [hanging, blank, hanging, hanging], 'bare');
+    // the knee lies 200 px ahead of the hip and 200 px under it
+    expect(liftOf(raised, three)).toBeCloseTo(45, 9);
+    expect(liftOf(raised, more)).toBeCloseTo(45, 9);
+    const two = settingOf(rig, [hanging, blank, hanging], 'bare');
+    expect(liftOf(raised, two)).toEqual({ code: 'no-quiet-stance' });
+  });
+
+  it('has no ± of its own', () => {
+    const three = settingOf(rig, [hanging, hanging, hanging], 'bare');
+    expect(liftHalfWidth(blank, three)).toBeNaN();
+    const frontal = settingFor(cameraOf('front'), null);
+    expect(liftHalfWidth(level(front, cameraOf('front')), frontal)).toBeNaN();
+  });
+});

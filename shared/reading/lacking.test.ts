@@ -74,6 +74,7 @@ describe('what is asked for', () => {
   it.each([
     ['few-near-60', 60, (lift: number) => lift < 47 || lift > 73],
     ['few-near-90', 90, (lift: number) => lift < 77 || lift > 103],
+    ['few-across-window', 75, (lift: number) => lift <= 50 || lift === 60 || lift >= 100],
   ] as const)('are frames near %s, the nearest to %d° first', (code, middle, wanted) => {
     const rep = keep((lift, i) => i < 12 || i > 34 || wanted(lift));
     const result = read(rep);
@@ -85,6 +86,11 @@ describe('what is asked for', () => {
     expect(away).toEqual(away.toSorted((a, b) => a - b));
     expect(away[0]).toBeLessThan(5);
   });
+});
+
+it('no frame is offered where none would help', () => {
+  const unscaled = read(withCamera({ mmPerPx: null }));
+  expect(nextFrames(unscaled, unmarkedIn(keep((_, i) => i < 14)))).toEqual([]);
 });
 
 describe('a frame that would lower the uncertainty', () => {
@@ -120,5 +126,22 @@ describe('a frame that would lower the uncertainty', () => {
     };
     expect(nextFrames(result, unmarked).length).toBeGreaterThan(0);
     expect(nextFrames(weightless, unmarked)).toEqual([]);
+  });
+});
+
+describe('a smeared picture', () => {
+  const smear = (rep: RepInput) =>
+    read(rep).warnings.find(({ warning }) => warning.code === 'smear')?.warning;
+  const exposed: RepInput = { ...whole, camera: { ...whole.camera, exposureMs: 33 } };
+
+  it('is warned of with the mark that moved most while the shutter was open', () => {
+    expect(smear(exposed)).toMatchObject({ code: 'smear' });
+    expect(smear({ ...exposed, camera: { ...exposed.camera, exposureMs: 0.01 } })).toBeUndefined();
+  });
+
+  it('is judged from marks that both neighbours carry', () => {
+    const lifted = without(exposed, 'lifted-knee');
+    const frames = exposed.frames.map((frame, i) => (i % 2 ? frame : (lifted.frames[i] ?? frame)));
+    expect(smear({ ...exposed, frames })).not.toMatchObject({ landmark: 'lifted-knee' });
   });
 });
