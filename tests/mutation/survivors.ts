@@ -32,6 +32,13 @@ export const EXPLAINED: readonly Explained[] = [
   draws('{ u: lifted.u + lifted.error * z(0), v: lifted.v + lifted.error * z(1) },'),
   draws('{ u: support.u + support.error * z(2), v: support.v + support.error * z(3) },'),
   draws('const kneeV = knee.v + knee.error * z(4);'),
+  {
+    file: 'shared/measures/lift.ts',
+    code: 'return Math.sqrt(squares / (DRAWS - 1));',
+    before: '-',
+    after: '+',
+    why: '199 or 201 in place of 200 draws: half a percent, while 200 draws know a spread to five',
+  },
 ];
 
 export const explanationOf = (mutant: Mutant): string | null =>
