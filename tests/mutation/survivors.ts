@@ -39,6 +39,13 @@ export const EXPLAINED: readonly Explained[] = [
     after: '+',
     why: '199 or 201 in place of 200 draws: half a percent, while 200 draws know a spread to five',
   },
+  {
+    file: 'shared/measures/turn.ts',
+    code: "if (!Number.isFinite(thighPart + pelvisPart + variance)) return { code: 'marks-coincide' };",
+    before: '+',
+    after: '-',
+    why: 'asks only whether all three are finite: a difference is so where a sum is',
+  },
 ];
 
 export const explanationOf = (mutant: Mutant): string | null =>
