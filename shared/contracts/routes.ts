@@ -2,7 +2,7 @@ import { accountRoutes } from './accounts.ts';
 import { athleteRoutes } from './athletes.ts';
 import { benchRoutes } from './bench.ts';
 import { callRoutes } from './calls.ts';
-import { clipRoutes } from './clips.ts';
+import { clipRoutes } from './clip-routes.ts';
 import { commentRoutes } from './comments.ts';
 import { eventRoutes } from './events.ts';
 import { exportRoutes } from './exports.ts';

@@ -1,6 +1,7 @@
 import type * as z from 'zod';
 import type { UserActor } from '#shared/access/actors.ts';
-import type { ClipRow, clipRoutes } from '#shared/contracts/clips.ts';
+import type { clipRoutes } from '#shared/contracts/clip-routes.ts';
+import type { ClipRow } from '#shared/contracts/clips.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { need } from '../../http/need.ts';
 import { inSightSql } from '../athletes/caseload.ts';
