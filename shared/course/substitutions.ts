@@ -61,10 +61,12 @@ const changeOf = (course: RepCourse, measure: Measure): SubstitutionChange => {
       missing: firstMissing(top ? quietValues : topValues),
     };
   const variance = top.variance + (measure.againstQuiet && quiet ? quiet.variance : 0);
+  const smallest = Math.max(measure.smallestChange ?? 0, 1.96 * Math.sqrt(variance));
   return {
     ...base,
     change: top.value - (measure.againstQuiet && quiet ? quiet.value : 0),
-    smallestChange: Math.max(measure.smallestChange ?? 0, 1.96 * Math.sqrt(variance)),
+    // marks as coarse as no picture is have no error that can be named
+    smallestChange: Number.isFinite(smallest) ? smallest : null,
     quiet: quiet?.value ?? null,
     missing: null,
   };

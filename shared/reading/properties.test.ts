@@ -50,7 +50,9 @@ const mapPoints = (
 
 const slope = fc.double({ min: -0.5, max: 0.5, noNaN: true });
 const turnOf = (k: number) => (lift: number) => k * Math.max(0, lift - 55);
-const runs = { numRuns: 6 };
+/** The same cases in every run. */
+const seed = 20260718;
+const runs = { numRuns: 6, seed };
 /** Whole readings take their time on a busy machine. */
 const PATIENCE_MS = 120_000;
 
@@ -172,11 +174,36 @@ describe.each(ENGINES)('a reading of engine %i', (engine) => {
           for (const { why: _why, ...shown } of reps)
             expect(numbersIn(shown).every(Number.isFinite)).toBe(true);
         }),
-        { numRuns: 30 },
+        { numRuns: 30, seed },
       );
     },
     PATIENCE_MS,
   );
+
+  it('knows no smallest change of a mark on a picture coarser than any', () => {
+    const rep = madeRep('left', () => 0);
+    const coarse = {
+      hidden: false,
+      point: framePoint(0, 0),
+      source: 'hand',
+      looked: true,
+    } as const;
+    const frames = rep.frames.map((frame, i) =>
+      i === 0
+        ? {
+            ...frame,
+            marks: {
+              ...frame.marks,
+              'heel-support': { ...coarse, scale: 1e300 },
+              'asis-support': { ...coarse, scale: NaN },
+            },
+          }
+        : frame,
+    );
+    const [result] = deriveReading(inputOf([{ ...rep, frames }])).reps;
+    const heel = result?.substitutions.find(({ measure }) => measure === 'heel-rise');
+    expect(heel?.smallestChange).toBeNull();
+  });
 
   it(
     'never lets a number out that is not finite, whatever the camera is said to be',
@@ -200,7 +227,7 @@ describe.each(ENGINES)('a reading of engine %i', (engine) => {
           expect(numbersIn(rest).every(Number.isFinite)).toBe(true);
           expect(numbersIn(reps).every(Number.isFinite)).toBe(true);
         }),
-        { numRuns: 30 },
+        { numRuns: 30, seed },
       );
     },
     PATIENCE_MS,
@@ -220,7 +247,7 @@ describe.each(ENGINES)('a reading of engine %i', (engine) => {
             result.code === 'not-measurable' || result.code === 'lift-stops-short' || only?.used,
           ).toBe(true);
         }),
-        { numRuns: 25 },
+        { numRuns: 25, seed },
       );
     },
     PATIENCE_MS,
