@@ -2,6 +2,9 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { measureRate, typicalRate } from './measure-rate.ts';
 
+// the same cases in every run
+fc.configureGlobal({ seed: 20260718 });
+
 const at = (count: number, interval: number) =>
   Array.from({ length: count }, (_, frame) => Math.round(frame * interval));
 
