@@ -1,67 +1,21 @@
-import { Link } from 'react-router-dom';
 import type { SecondMarkingDocument } from '#shared/contracts/second-markings.ts';
-import { shortDay } from '#src/ui/days.ts';
-import { paths } from '#src/ui/paths.ts';
 import { supportWords } from '#src/ui/words.ts';
-import { useUndo } from '../actions/use-undo.ts';
-import { useBenchTools } from '../bench-context.ts';
-import { SaveState } from '../save-state.tsx';
+import { BarFrame } from '../bar-frame.tsx';
 import { useNarrow } from '../use-media.ts';
 import { useProgress } from './use-progress.ts';
 
-const BUTTON =
-  'grid min-h-[44px] min-w-[44px] place-items-center rounded px-2 text-note disabled:text-edge hover:underline';
-
 /** Whose clip it is, how far one has come, whether all is saved, undo and redo. */
 export function BlindBar({ second }: { second: SecondMarkingDocument }) {
-  const { store } = useBenchTools();
   const { athlete, visit, repNumber, supportSide } = second;
-  const { canUndo, canRedo, undo, redo } = useUndo();
   const narrow = useNarrow();
   const { words } = useProgress();
   const what = `rep ${repNumber}, ${supportWords(supportSide)}`;
   return (
-    <div className="bench-bar">
-      <title>{`Mark again, blind: ${athlete.name}, ${what} · Redshank`}</title>
-      <nav aria-label="Where you are" className="flex min-w-0 items-center gap-2">
-        <Link to={paths.athlete(athlete.id)} className="hidden py-2.5 tablet:inline">
-          {athlete.name}
-        </Link>
-        <span aria-hidden="true" className="hidden text-soft tablet:inline">
-          /
-        </span>
-        <Link to={paths.visit(visit.id)} className="whitespace-nowrap py-2.5 text-soft">
-          {narrow ? '←' : shortDay(visit.day)}
-          {narrow && <span className="sr-only">Back to the visit of {shortDay(visit.day)}</span>}
-        </Link>
-        <span aria-hidden="true" className="hidden text-soft tablet:inline">
-          /
-        </span>
-        <h1 tabIndex={-1} className="truncate font-bold">
-          {narrow ? `Again, blind: ${words}` : `Mark again, blind: ${what}, ${words}`}
-        </h1>
-      </nav>
-      <div className="bench-bar-end">
-        <div className="hidden tablet:block">
-          <SaveState />
-        </div>
-        {!narrow && (
-          <button type="button" className={BUTTON} disabled={!canUndo} onClick={undo}>
-            Undo
-          </button>
-        )}
-        <button type="button" className={BUTTON} disabled={!canRedo} onClick={redo}>
-          Redo
-        </button>
-        <button
-          type="button"
-          className={`${BUTTON} font-bold`}
-          aria-label="All keys"
-          onClick={() => store.setState({ keysOpen: true })}
-        >
-          ?
-        </button>
-      </div>
-    </div>
+    <BarFrame
+      title={`Mark again, blind: ${athlete.name}, ${what}`}
+      heading={narrow ? `Again, blind: ${words}` : `Mark again, blind: ${what}, ${words}`}
+      athlete={athlete}
+      visit={visit}
+    />
   );
 }
