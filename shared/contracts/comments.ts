@@ -1,8 +1,7 @@
 import * as z from 'zod';
-import { frameIndex, id, moment, personRef, text } from './primitives.ts';
+import { coordinate, frameIndex, id, moment, personRef, text } from './primitives.ts';
 import { json, none, route } from './route.ts';
 
-const coordinate = z.number().min(-20_000).max(20_000);
 /** What a comment points at, in pixels of the upright source frame. */
 export const shape = z
   .discriminatedUnion('kind', [

@@ -42,9 +42,12 @@ export const email = z
 export const millimetres = (min: number, max: number) =>
   z.number('Write a number.').min(min, `At least ${min} mm.`).max(max, `At most ${max} mm.`);
 
+/** Pixels of the upright source frame; a mark may lie outside the picture. */
+export const coordinate = z.number().min(-20_000).max(20_000);
+
 /** A point in pixels of the upright source frame: u to the right, v down, from the top left corner. */
 export const framePoint = z
-  .object({ u: z.number().min(-20_000).max(20_000), v: z.number().min(-20_000).max(20_000) })
+  .object({ u: coordinate, v: coordinate })
   .meta({ id: 'FramePoint', description: 'Pixels of the upright source frame, u right, v down.' });
 
 export const frameIndex = z.int().min(0).max(1_000_000).meta({ id: 'FrameIndex' });

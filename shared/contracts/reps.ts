@@ -2,6 +2,7 @@ import * as z from 'zod';
 import { SHARED_EVENTS } from '#shared/timing/shared-events.ts';
 import type { Milliseconds } from '#shared/timing/units.ts';
 import {
+  coordinate,
   frameIndex,
   id,
   moment,
@@ -46,6 +47,15 @@ export const boundaries = z
   })
   .meta({ id: 'Boundaries' });
 export type Boundaries = z.infer<typeof boundaries>;
+/** Of a rep of which nothing is known yet. */
+export const NO_BOUNDARIES: Boundaries = {
+  quietStart: null,
+  quietEnd: null,
+  footOff: null,
+  top: null,
+  topEnd: null,
+  footDown: null,
+};
 
 const sharedEvent = z.enum(SHARED_EVENTS);
 const twoEvents = z.tuple([sharedEvent, sharedEvent]).readonly();
@@ -159,7 +169,6 @@ export const mark = z
   .meta({ id: 'Mark' });
 export type Mark = z.infer<typeof mark>;
 
-const coordinate = z.number().min(-20_000).max(20_000);
 /**
  * One change of one mark. `id` is made by the client: sending the same command again does nothing.
  * `baseRevision` is the revision that the hand saw (0: none). Where the stored one is newer, the command is

@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { clipWithFrames } from './clips.ts';
-import { frameIndex, id, moment, personRef, side, view } from './primitives.ts';
+import { coordinate, frameIndex, id, moment, personRef, side, view } from './primitives.ts';
 import { READING_CODES } from '#shared/reading/types.ts';
 import { landmarkId, mark, markOutcome } from './reps.ts';
 import { json, none, route } from './route.ts';
@@ -79,7 +79,6 @@ export const secondMarking = z
   .meta({ id: 'SecondMarking' });
 export type SecondMarkingDocument = z.infer<typeof secondMarking>;
 
-const coordinate = z.number().min(-20_000).max(20_000);
 /** One change of one second mark; works as a marking command does. Only a hand places them. */
 export const secondMarkCommand = z
   .object({

@@ -1,4 +1,4 @@
-import type { Boundaries } from '#shared/contracts/reps.ts';
+import { type Boundaries, NO_BOUNDARIES } from '#shared/contracts/reps.ts';
 import { courseOfRep, isCourse } from '#shared/course/course-of-rep.ts';
 import type { RepInput, RepPhases } from '#shared/course/types.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
@@ -7,15 +7,6 @@ import { shownSet } from '#shared/records/shared-quiet.ts';
 import { frameAt } from '#shared/timing/timestamps.ts';
 import type { Milliseconds } from '#shared/timing/units.ts';
 import type { HandBoundaries } from './rep.entity.ts';
-
-export const NO_BOUNDARIES: Boundaries = {
-  quietStart: null,
-  quietEnd: null,
-  footOff: null,
-  top: null,
-  topEnd: null,
-  footDown: null,
-};
 
 /** What hands have moved, as boundaries. */
 export const byHand = (moved: HandBoundaries): Boundaries => ({

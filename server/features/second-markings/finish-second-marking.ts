@@ -13,12 +13,12 @@ import {
   type SecondResult,
 } from '#shared/reliability/compare-markings.ts';
 import { markedTwice } from '#shared/reliability/marked-twice.ts';
+import { NO_BOUNDARIES } from '#shared/contracts/reps.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { Problem } from '../../http/problem.ts';
 import type { MarkRow } from '../marks/mark-store.ts';
 import { audit } from '../practice/audit.ts';
 import { deriveApart } from '../readings/derive-apart.ts';
-import { NO_BOUNDARIES } from '../reps/found-boundaries.ts';
 import { measuredClip, timesOfClip } from '../reps/reps.presenter.ts';
 import { readSecondMarks } from './second-mark-store.ts';
 import { ownSecondMarking, type SecondInSight } from './second-marking-in-sight.ts';

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import type { Athlete } from '#shared/contracts/athletes.ts';
 import type { SidePage } from '#shared/contracts/readings.ts';
 import type { Replay } from '#shared/contracts/replays.ts';
-import type { Rep } from '#shared/contracts/reps.ts';
+import { NO_BOUNDARIES, type Rep } from '#shared/contracts/reps.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
 import { aClip, anAthlete, aVisit, clipId, visitId } from '#tests/support/records.ts';
@@ -18,14 +18,7 @@ const aRep = (n: number): Rep => ({
   view: 'front',
   startFrame: (n - 1) * 301,
   endFrame: n * 301 - 1,
-  boundaries: {
-    quietStart: null,
-    quietEnd: null,
-    footOff: null,
-    top: null,
-    topEnd: null,
-    footDown: null,
-  },
+  boundaries: NO_BOUNDARIES,
   excluded: null,
   excludedNote: '',
   quietFrom: null,

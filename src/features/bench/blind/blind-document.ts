@@ -1,4 +1,5 @@
 import type { BenchDocument } from '#shared/contracts/bench.ts';
+import { NO_BOUNDARIES } from '#shared/contracts/reps.ts';
 import type { SecondMarkingDocument } from '#shared/contracts/second-markings.ts';
 
 /**
@@ -28,14 +29,7 @@ export const blindDocument = ({
         view,
         startFrame: 0,
         endFrame: Math.max(0, (clip.frames?.count ?? 1) - 1),
-        boundaries: {
-          quietStart: null,
-          quietEnd: null,
-          footOff: null,
-          top: null,
-          topEnd: null,
-          footDown: null,
-        },
+        boundaries: NO_BOUNDARIES,
         excluded: null,
         excludedNote: '',
         quietFrom: null,

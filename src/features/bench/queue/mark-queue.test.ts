@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { MarkOutcome, Rep } from '#shared/contracts/reps.ts';
+import { type MarkOutcome, NO_BOUNDARIES, type Rep } from '#shared/contracts/reps.ts';
 import { framePoint } from '#shared/geometry/points.ts';
 import { frameIndex } from '#shared/timing/units.ts';
 import { createMarkQueue, type QueueDeps, type SendFailure, type Settled } from './mark-queue.ts';
@@ -14,14 +14,7 @@ const REP: Rep = {
   view: 'front',
   startFrame: 0,
   endFrame: 99,
-  boundaries: {
-    quietStart: null,
-    quietEnd: null,
-    footOff: null,
-    top: null,
-    topEnd: null,
-    footDown: null,
-  },
+  boundaries: NO_BOUNDARIES,
   excluded: null,
   excludedNote: '',
   quietFrom: null,
