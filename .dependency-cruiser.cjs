@@ -65,7 +65,7 @@ module.exports = {
     ),
     room(
       'features-do-not-import-app',
-      { path: '^src/(features|ui|canvas|video|api)/' },
+      { path: '^src/(features|ui|canvas|video|tracking|api)/' },
       { path: '^src/app/' },
       'app stands on top.',
     ),
@@ -80,6 +80,24 @@ module.exports = {
       { path: '^src/video/' },
       { path: 'node_modules/(react|react-dom)/|^src/(api|features|ui|canvas)/' },
       'The decoder is plain TypeScript.',
+    ),
+    room(
+      'tracking-without-react',
+      { path: '^src/tracking/' },
+      { path: 'node_modules/(react|react-dom)/|^src/(api|features|ui|canvas)/' },
+      'Following marks is plain TypeScript.',
+    ),
+    room(
+      'tracking-core-is-pure',
+      { path: '^src/tracking/core/', pathNot: '\\.test\\.ts$' },
+      { pathNot: '^src/tracking/(core/|types\\.ts$)|^shared/(geometry|timing)/' },
+      'What follows a mark knows pixels and frames, neither page nor decoder.',
+    ),
+    room(
+      'video-below-tracking',
+      { path: '^src/video/' },
+      { path: '^src/tracking/' },
+      'Marks follow on pictures, never the reverse.',
     ),
     room(
       'child-processes-in-media',

@@ -22,6 +22,7 @@ export default defineConfig({
             'src/video/**/*.test.ts',
             'src/api/**/*.test.ts',
             'src/canvas/**/*.test.ts',
+            'src/tracking/**/*.test.ts',
           ],
           exclude: ['**/node_modules/**'],
           environment: 'node',
