@@ -29,11 +29,12 @@ export interface CameraInput {
   readonly plumbTilt: Degrees | null;
   /** For warnings only. */
   readonly framesPerSecond: number | null;
+  /** A selfie camera's picture, left and right swapped: its marks are turned back first. */
   readonly mirrored: boolean | null;
   /** Angle between the lens axis and dead front, where a floor line shows it. */
   readonly offFront: Degrees | null;
   readonly exposureMs: number | null;
-  /** Side views only: which way the toes point in the picture. */
+  /** Side views only: which way the toes point in the picture, a mirrored one turned back. */
   readonly toes: 'image-left' | 'image-right' | null;
 }
 

@@ -66,6 +66,23 @@ describe('levelling', () => {
     expect(level.marks.kneecap?.u).toBe(440);
   });
 
+  it.each([
+    ['front', 440],
+    ['lifted-side', 440],
+    ['back', 640],
+  ] as const)('turns a mirrored picture from the %s back', (view, u) => {
+    const camera = { ...madeCamera(view), mirrored: true };
+    const level = levelFrame(frame({ kneecap: placed() }), camera, ASSUMED_MARK_ERROR);
+    expect(level.marks.kneecap).toMatchObject({ u, v: 400 });
+  });
+
+  it('rotates a mirrored picture as it was recorded, then turns it back', () => {
+    const camera = { ...madeCamera(), plumbTilt: degrees(90), mirrored: true };
+    const level = levelFrame(frame({ kneecap: placed() }), camera, ASSUMED_MARK_ERROR);
+    expect(level.marks.kneecap?.u).toBeCloseTo(1080 - (540 + 560), 9);
+    expect(level.marks.kneecap?.v).toBeCloseTo(960 + 100, 9);
+  });
+
   it('keeps hidden marks apart and drops what is not a number', () => {
     const level = levelFrame(
       frame({ kneecap: { hidden: true }, 'belt-tip': placed({ point: framePoint(NaN, 3) }) }),

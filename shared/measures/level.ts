@@ -57,8 +57,9 @@ export const isPlausible = ({ point, scale }: PlacedMark): boolean =>
   Math.abs(scale) <= COARSEST;
 
 /**
- * Rotates the marks of a frame so that the plumb line is vertical, and mirrors a picture taken from
- * behind, which negates every u difference. Marks that no picture can hold are left out.
+ * Rotates the marks of a frame so that the plumb line is vertical, turns a mirrored picture back, and
+ * mirrors one taken from behind: each negates every u difference, both together leave it. Marks that
+ * no picture can hold are left out.
  */
 export const levelFrame = (
   input: FrameInput,
@@ -67,6 +68,7 @@ export const levelFrame = (
 ): LevelFrame => {
   const centre = framePoint(camera.width / 2, camera.height / 2);
   const tilt = camera.plumbTilt ?? degrees(0);
+  const flip = (camera.view === 'back') !== (camera.mirrored === true);
   const marks: Partial<Record<LandmarkId, LevelMark>> = {};
   const hidden: LandmarkId[] = [];
   for (const id of LANDMARK_IDS) {
@@ -81,7 +83,7 @@ export const levelFrame = (
     if (!Number.isFinite(point.u) || !Number.isFinite(point.v) || !Number.isFinite(scaled))
       continue;
     marks[id] = {
-      u: camera.view === 'back' ? camera.width - point.u : point.u,
+      u: flip ? camera.width - point.u : point.u,
       v: point.v,
       error: markErrorPx(id, mark, error),
       hollow: mark.source === 'tracked' && !mark.looked,

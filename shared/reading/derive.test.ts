@@ -265,6 +265,35 @@ describe('tracked marks', () => {
   });
 });
 
+describe('a mirrored clip', () => {
+  /** Left and right of the picture swapped, as a selfie camera records it. */
+  const selfie = (rep: RepInput): RepInput =>
+    withCamera(
+      mapMarks(rep, (mark) => ({
+        ...mark,
+        point: { u: rep.camera.width - mark.point.u, v: mark.point.v },
+      })),
+      { mirrored: true },
+    );
+
+  it.each([
+    ['left', 0.4, 'early-turn-out'],
+    ['right', 0.4, 'early-turn-out'],
+    ['left', -0.4, 'expected-turn-in'],
+    ['right', -0.4, 'expected-turn-in'],
+  ] as const)(
+    'of someone standing on the %s leg, %d° a degree, is read as %s',
+    (side, slope, code) => {
+      const rep = madeRep(side, from60(slope));
+      const read = (reps: RepInput[]) => deriveReading(inputOf(reps, { supportSide: side }));
+      const [straight, mirrored] = [read([rep]), read([selfie(rep)])];
+      expect(mirrored.code).toBe(code);
+      expect(mirrored.figures?.d).toBeCloseTo(straight.figures?.d ?? NaN, 6);
+      expect(mirrored.warnings.map(({ warning }) => warning.code)).toEqual(['mirrored']);
+    },
+  );
+});
+
 describe('warnings', () => {
   it('come with their figure and the reps they concern', () => {
     const rep = withCamera(early, {

@@ -100,13 +100,16 @@ describe('the camera', () => {
   it.each([
     ['athlete-left', false, 'image-left'],
     ['athlete-right', false, 'image-right'],
-    ['athlete-left', true, 'image-right'],
-    ['athlete-right', true, 'image-left'],
+    ['athlete-left', true, 'image-left'],
+    ['athlete-right', true, 'image-right'],
     ['front', false, null],
     ['back', true, null],
-  ] as const)('stood at %s, mirrored %s: the toes point to %s', (cameraStood, mirrored, toes) => {
-    expect(cameraOf({ ...clip, cameraStood, mirrored }, 'lifted-side')?.toes).toBe(toes);
-  });
+  ] as const)(
+    'stood at %s, mirrored %s: with its mirroring taken out, the toes point to %s',
+    (cameraStood, mirrored, toes) => {
+      expect(cameraOf({ ...clip, cameraStood, mirrored }, 'lifted-side')?.toes).toBe(toes);
+    },
+  );
 });
 
 describe('the marks of a frame', () => {

@@ -20,9 +20,9 @@ export const timesOf = (table: FrameTable): Milliseconds[] =>
   table.ticks.map((tick) => milliseconds((tick * table.timeBase.num * 1000) / table.timeBase.den));
 
 /** Seen from the athlete's left, forward is the picture's left. */
-const toesOf = ({ cameraStood, mirrored }: MeasuredClip): CameraInput['toes'] => {
+const toesOf = ({ cameraStood }: MeasuredClip): CameraInput['toes'] => {
   if (cameraStood !== 'athlete-left' && cameraStood !== 'athlete-right') return null;
-  return (cameraStood === 'athlete-left') !== mirrored ? 'image-left' : 'image-right';
+  return cameraStood === 'athlete-left' ? 'image-left' : 'image-right';
 };
 
 export const cameraOf = (clip: MeasuredClip, view: Rep['view']): CameraInput | null => {
