@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { LANDMARK_IDS, type Marks } from '#shared/landmarks/types.ts';
+import { LANDMARK_IDS } from '#shared/landmarks/types.ts';
 import { framePoint } from '#shared/geometry/points.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { frameIndex, milliseconds } from '#shared/timing/units.ts';
