@@ -50,6 +50,18 @@ export const scale = z
   .meta({ id: 'Scale' });
 export type Scale = z.infer<typeof scale>;
 
+/**
+ * How long the shutter stood open: as the camera tells it, one part of a second, or by the two ends of what
+ * it drew out of one dot on the fastest frame.
+ */
+export const shutter = z
+  .discriminatedUnion('from', [
+    z.object({ from: z.literal('typed'), perSecond: z.number().min(8).max(20_000) }),
+    z.object({ from: z.literal('smear'), a: framePoint, b: framePoint }),
+  ])
+  .meta({ id: 'Shutter' });
+export type Shutter = z.infer<typeof shutter>;
+
 /** What the measurement needs to know of the camera. Null is unknown, and what needs it is not measured. */
 export const clipGeometry = z
   .object({
@@ -62,6 +74,9 @@ export const clipGeometry = z
     thighPointerMm: millimetres(30, 600).nullable(),
     /** Two points of a plumb line, top and bottom; null takes the picture as upright. */
     plumb: z.object({ top: framePoint, bottom: framePoint }).nullable(),
+    /** Both heels, or the two ends of the floor line they stand on; null where nobody drew it. */
+    floorLine: z.object({ a: framePoint, b: framePoint }).nullable(),
+    shutter: shutter.nullable(),
   })
   .meta({ id: 'ClipGeometry' });
 export type ClipGeometry = z.infer<typeof clipGeometry>;

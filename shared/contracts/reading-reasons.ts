@@ -93,7 +93,11 @@ const warning = z
     coded('slow-frame-rate', { framesPerSecond: z.number(), limit: z.number() }),
     coded('mirrored', {}),
     coded('lens-height-missing', { liftHalfWidth: angle }),
-    coded('smear', { px: z.number(), landmark: z.enum(LANDMARK_IDS) }),
+    coded('smear', {
+      px: z.number(),
+      landmark: z.enum(LANDMARK_IDS).nullable(),
+      limit: z.number(),
+    }),
     coded('few-quiet-frames', { have: z.int(), recommended: z.int() }),
     coded('assumed-thigh', { sd: angle }),
     coded('tracked-not-looked-at', { frames: z.int() }),

@@ -31,9 +31,11 @@ export interface CameraInput {
   readonly framesPerSecond: number | null;
   /** A selfie camera's picture, left and right swapped: its marks are turned back first. */
   readonly mirrored: boolean | null;
-  /** Angle between the lens axis and dead front, where a floor line shows it. */
+  /** Angle between straight ahead of the athlete and the way to the lens, where a floor line shows it. */
   readonly offFront: Degrees | null;
   readonly exposureMs: number | null;
+  /** How far one exposure drew out a dot, px, where somebody measured it on the picture. */
+  readonly smearPx?: number;
   /** Side views only: which way the toes point in the picture, a mirrored one turned back. */
   readonly toes: 'image-left' | 'image-right' | null;
 }

@@ -68,7 +68,13 @@ export type Warning =
   | { readonly code: 'slow-frame-rate'; readonly framesPerSecond: number; readonly limit: number }
   | { readonly code: 'mirrored' }
   | { readonly code: 'lens-height-missing'; readonly liftHalfWidth: Degrees }
-  | { readonly code: 'smear'; readonly px: number; readonly landmark: LandmarkId }
+  /** `landmark` is null where a smeared dot was measured on the picture itself. */
+  | {
+      readonly code: 'smear';
+      readonly px: number;
+      readonly landmark: LandmarkId | null;
+      readonly limit: number;
+    }
   | { readonly code: 'few-quiet-frames'; readonly have: number; readonly recommended: number }
   | { readonly code: 'assumed-thigh'; readonly sd: Degrees }
   | { readonly code: 'tracked-not-looked-at'; readonly frames: number };

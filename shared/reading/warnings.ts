@@ -2,23 +2,18 @@ import type { RepCourse } from '#shared/course/course-of-rep.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import { landmarksOf } from '#shared/landmarks/table.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
+import { FILMING_LIMITS as LIMITS, isSlow } from '#shared/measures/filming-limits.ts';
 import { restsOnHollow } from '#shared/measures/need.ts';
 import { canonicalText } from './canonical.ts';
 import type { PlacedWarning, Warning } from './reasons.ts';
 
-/** From our model, no source. */
-export const WARNING_LIMITS = {
-  offFront: 20,
-  plumb: 3,
-  nearMm: 2000,
-  coarse: 2.5,
-  framesPerSecond: 30,
-  quietFrames: 5,
-  smearPx: 3,
-} as const;
-
 /** Furthest a mark moves while the shutter is open, px, over the frames of the fit. */
-const smearOf = (course: RepCourse, exposureMs: number): Warning | null => {
+const smearOf = (course: RepCourse): Warning | null => {
+  const { exposureMs, smearPx } = course.rep.camera;
+  const limit = LIMITS.smearPx.value;
+  if (smearPx !== undefined && smearPx > limit)
+    return { code: 'smear', px: smearPx, landmark: null, limit };
+  if (exposureMs === null) return null;
   let worst: { px: number; landmark: (typeof ids)[number] } | null = null;
   const ids = landmarksOf(course.set);
   for (const [i, now] of course.level.entries()) {
@@ -33,7 +28,7 @@ const smearOf = (course: RepCourse, exposureMs: number): Warning | null => {
       if (!worst || px > worst.px) worst = { px, landmark };
     }
   }
-  return worst && worst.px > WARNING_LIMITS.smearPx ? { code: 'smear', ...worst } : null;
+  return worst && worst.px > limit ? { code: 'smear', ...worst, limit } : null;
 };
 
 /** Frames of the fit or of quiet stance that rest on tracked marks nobody has looked at. */
@@ -47,27 +42,25 @@ export const hollowFrames = (course: RepCourse): number => {
 
 const warningsOf = (course: RepCourse): readonly Warning[] => {
   const { camera } = course.rep;
-  const limits = WARNING_LIMITS;
   const warnings: Warning[] = [];
-  if (camera.offFront !== null && Math.abs(camera.offFront) > limits.offFront)
+  const { offFront, plumbTilt, distanceMm, mmPerPx, framesPerSecond } = camera;
+  if (offFront !== null && Math.abs(offFront) > LIMITS.offFront.value)
     warnings.push({
       code: 'camera-off-front',
-      by: camera.offFront,
-      limit: degrees(limits.offFront),
+      by: offFront,
+      limit: degrees(LIMITS.offFront.value),
     });
-  if (camera.plumbTilt !== null && Math.abs(camera.plumbTilt) > limits.plumb)
-    warnings.push({ code: 'plumb-off', by: camera.plumbTilt, limit: degrees(limits.plumb) });
-  if (camera.distanceMm !== null && camera.distanceMm < limits.nearMm)
-    warnings.push({ code: 'too-near', distanceMm: camera.distanceMm, limitMm: limits.nearMm });
-  if (camera.mmPerPx !== null && camera.mmPerPx > limits.coarse)
-    warnings.push({ code: 'too-coarse', mmPerPx: camera.mmPerPx, limit: limits.coarse });
-  const rate = camera.framesPerSecond;
-  // 29.97 frames per second is what phones call 30
-  if (rate !== null && rate < limits.framesPerSecond - 0.1)
+  if (plumbTilt !== null && Math.abs(plumbTilt) > LIMITS.plumb.value)
+    warnings.push({ code: 'plumb-off', by: plumbTilt, limit: degrees(LIMITS.plumb.value) });
+  if (distanceMm !== null && distanceMm < LIMITS.nearMm.value)
+    warnings.push({ code: 'too-near', distanceMm, limitMm: LIMITS.nearMm.value });
+  if (mmPerPx !== null && mmPerPx > LIMITS.coarse.value)
+    warnings.push({ code: 'too-coarse', mmPerPx, limit: LIMITS.coarse.value });
+  if (framesPerSecond !== null && isSlow(framesPerSecond))
     warnings.push({
       code: 'slow-frame-rate',
-      framesPerSecond: rate,
-      limit: limits.framesPerSecond,
+      framesPerSecond,
+      limit: LIMITS.framesPerSecond.value,
     });
   if (camera.mirrored) warnings.push({ code: 'mirrored' });
   const ownLift = camera.view === 'front' && !course.setting.tiedLift;
@@ -77,12 +70,14 @@ const warningsOf = (course: RepCourse): readonly Warning[] => {
       liftHalfWidth: degrees(CONSTANTS.liftModelErrorNoLens.value),
     });
   const quiet = course.setting.turnZero?.frames;
-  if (quiet !== undefined && quiet < limits.quietFrames)
-    warnings.push({ code: 'few-quiet-frames', have: quiet, recommended: limits.quietFrames });
-  if (camera.exposureMs !== null) {
-    const smear = smearOf(course, camera.exposureMs);
-    if (smear) warnings.push(smear);
-  }
+  if (quiet !== undefined && quiet < LIMITS.quietFrames.value)
+    warnings.push({
+      code: 'few-quiet-frames',
+      have: quiet,
+      recommended: LIMITS.quietFrames.value,
+    });
+  const smear = smearOf(course);
+  if (smear) warnings.push(smear);
   const hollow = hollowFrames(course);
   if (hollow > 0) warnings.push({ code: 'tracked-not-looked-at', frames: hollow });
   return warnings;

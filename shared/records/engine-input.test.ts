@@ -23,6 +23,8 @@ const clip: MeasuredClip = {
     beltPointerMm: 130,
     thighPointerMm: 115,
     plumb: null,
+    floorLine: null,
+    shutter: null,
   },
   mmPerPx: 2,
   frameRate: { perSecond: 60, variable: false, minPerSecond: 60, maxPerSecond: 60 },

@@ -1,11 +1,12 @@
 import type { Clip, FrameTable } from '#shared/contracts/clips.ts';
 import type { Boundaries, Rep } from '#shared/contracts/reps.ts';
 import type { BoundaryId, RepBoundaries, RepInput } from '#shared/course/types.ts';
-import { plumbTilt } from '#shared/geometry/points.ts';
+import { distance, plumbTilt } from '#shared/geometry/points.ts';
 import type { FrameMarks, MarksByFrame } from '#shared/landmarks/commands.ts';
 import { LANDMARK_IDS, type LandmarkId, type Mark, type Marks } from '#shared/landmarks/types.ts';
 import { thighPointerFromSkin } from '#shared/measures/constants.ts';
 import type { CameraInput, FrameInput } from '#shared/measures/inputs.ts';
+import { type OffFront, offFrontOf } from '#shared/measures/off-front.ts';
 import { type Milliseconds, milliseconds } from '#shared/timing/units.ts';
 import { markedFrames } from './stored-marks.ts';
 
@@ -28,8 +29,8 @@ const toesOf = ({ cameraStood }: MeasuredClip): CameraInput['toes'] => {
 export const cameraOf = (clip: MeasuredClip, view: Rep['view']): CameraInput | null => {
   const { width, height, geometry } = clip;
   if (width === null || height === null) return null;
-  const { plumb, thighPointerMm } = geometry;
-  return {
+  const { plumb, floorLine, shutter, thighPointerMm } = geometry;
+  const camera: CameraInput = {
     view,
     width,
     height,
@@ -42,9 +43,20 @@ export const cameraOf = (clip: MeasuredClip, view: Rep['view']): CameraInput | n
     framesPerSecond: clip.frameRate?.perSecond ?? null,
     mirrored: clip.mirrored,
     offFront: null,
-    exposureMs: null,
+    exposureMs: shutter?.from === 'typed' ? 1000 / shutter.perSecond : null,
+    ...(shutter?.from === 'smear' && { smearPx: distance(shutter.a, shutter.b) }),
     toes: toesOf(clip),
   };
+  return view === 'front' && floorLine
+    ? { ...camera, offFront: offFrontOf(floorLine, camera)?.by ?? null }
+    : camera;
+};
+
+/** How far the camera of a front clip stood off the front, with its uncertainty; null where nothing tells it. */
+export const offFrontOfClip = (clip: MeasuredClip): OffFront | null => {
+  const camera = cameraOf(clip, 'front');
+  const { floorLine } = clip.geometry;
+  return camera && floorLine && offFrontOf(floorLine, camera);
 };
 
 /** Marks of one frame as the engine takes them; a coarser picture costs certainty. */

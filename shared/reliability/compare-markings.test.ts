@@ -114,6 +114,8 @@ const clip: MeasuredClip = {
     beltPointerMm: made.camera.beltPointerMm,
     thighPointerMm: 115,
     plumb: null,
+    floorLine: null,
+    shutter: null,
   },
   mmPerPx: made.camera.mmPerPx,
   frameRate: null,

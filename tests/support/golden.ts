@@ -44,6 +44,8 @@ export const goldenClip = (name: string): GoldenClip => {
       beltPointerMm: camera.beltPointerMm,
       thighPointerMm: thighPointerMm === null ? null : thighPointerMm - AXIS_TO_SKIN_MM,
       plumb: null,
+      floorLine: null,
+      shutter: null,
     },
     frames: {
       count: last + 1,

@@ -142,6 +142,8 @@ export const aClip = (change: Partial<Clip> = {}): Clip => ({
     beltPointerMm: 135,
     thighPointerMm: 125,
     plumb: null,
+    floorLine: null,
+    shutter: null,
   },
   mmPerPx: null,
   repCount: 0,

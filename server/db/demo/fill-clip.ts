@@ -29,6 +29,8 @@ const geometryOf = ({ setUp, rod }: DemoTruth): ClipGeometry => ({
   beltPointerMm: setUp.beltPointerMm,
   thighPointerMm: setUp.thighPointerMm,
   plumb: null,
+  floorLine: null,
+  shutter: null,
 });
 
 export const demoRepId = (

@@ -66,6 +66,8 @@ export const acceptClip = async (
           beltPointerMm,
           thighPointerMm,
           plumb: null,
+          floorLine: null,
+          shutter: null,
         },
         uploadedBy: em.getReference(User, actor.id),
       });

@@ -11,6 +11,8 @@ export const GEOMETRY_FROM_ROD: ClipGeometry = {
   beltPointerMm: 150,
   thighPointerMm: 120,
   plumb: null,
+  floorLine: null,
+  shutter: null,
 };
 
 /** A prepared front clip of ten seconds at 60 frames per second, upright 1080 × 1920; its files do not exist. */

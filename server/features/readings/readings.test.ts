@@ -104,6 +104,34 @@ describe('a reading', () => {
     expect(back.body.reading.id).toBe(first.body.reading.id);
   });
 
+  it('warns of what the coach draws on the picture: floor line, plumb line and a smeared dot', async () => {
+    const { side, clip } = await marked(goldenClip('g01_early_big_thigh'));
+    await coach.post(`${side}/call`).send(seen('early')).expect(201);
+    const codesNow = async () => {
+      const { body } = await coach.get(`${side}/reading`).expect(200);
+      return body.reading.result.warnings.map(
+        ({ warning }: { warning: { code: string } }) => warning.code,
+      );
+    };
+    const before = await codesNow();
+    const stored = await coach.get(`/api/clips/${clip.id}`).expect(200);
+    const geometry = {
+      ...stored.body.geometry,
+      plumb: { top: { u: 500, v: 100 }, bottom: { u: 560, v: 1100 } },
+      floorLine: { a: { u: 400, v: 1500 }, b: { u: 640, v: 1440 } },
+      shutter: { from: 'smear', a: { u: 10, v: 20 }, b: { u: 20, v: 20 } },
+    };
+    await coach
+      .patch(`/api/clips/${clip.id}`)
+      .send({ version: stored.body.version, geometry })
+      .expect(200);
+    const after = await codesNow();
+    for (const code of ['camera-off-front', 'plumb-off', 'smear']) {
+      expect(before).not.toContain(code);
+      expect(after).toContain(code);
+    }
+  });
+
   it('says nothing where nothing is marked', async () => {
     const { coach: user, athlete } = api.world;
     const visit = await api.ground.inPractice(user, ({ em }) =>

@@ -55,6 +55,8 @@ const aClip = (change: Partial<Parameters<typeof makeClip>[1]>): Promise<Clip> =
           beltPointerMm: BELT_POINTER_MM,
           thighPointerMm: THIGH_POINTER_MM - 55,
           plumb: null,
+          floorLine: null,
+          shutter: null,
         },
         ...change,
       }),

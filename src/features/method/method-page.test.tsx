@@ -1,6 +1,7 @@
 import { render, screen, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { CONSTANTS } from '#shared/measures/constants.ts';
+import { FILMING_LIMITS } from '#shared/measures/filming-limits.ts';
 import { MEASURES } from '#shared/measures/registry.ts';
 import { MethodPage } from './method-page.tsx';
 
@@ -15,5 +16,8 @@ describe('the method page', () => {
     const numbers = screen.getByRole('table', { name: 'Constants' });
     for (const { meaning } of Object.values(CONSTANTS))
       expect(within(numbers).getByText(meaning)).toBeInTheDocument();
+    const limits = screen.getByRole('table', { name: 'Limits of filming' });
+    for (const { meaning } of Object.values(FILMING_LIMITS))
+      expect(within(limits).getByText(meaning)).toBeInTheDocument();
   });
 });

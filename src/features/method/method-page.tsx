@@ -1,6 +1,7 @@
 import { landmark, landmarksOf } from '#shared/landmarks/table.ts';
 import { LANDMARK_SETS, type LandmarkSetId } from '#shared/landmarks/types.ts';
 import { type Constant, CONSTANTS } from '#shared/measures/constants.ts';
+import { FILMING_LIMITS } from '#shared/measures/filming-limits.ts';
 import type { Measure } from '#shared/measures/measure.ts';
 import { MEASURES } from '#shared/measures/registry.ts';
 import { Page, Section } from '#src/ui/page.tsx';
@@ -123,6 +124,18 @@ export function MethodPage() {
           caption="Constants"
           columns={CONSTANT_COLUMNS}
           rows={Object.values(CONSTANTS)}
+          rowKey={({ meaning }) => meaning}
+        />
+      </Section>
+      <Section
+        title="Limits of filming"
+        note="Beyond them a clip is warned of before it is sent, and its reading afterwards."
+        wide
+      >
+        <Table
+          caption="Limits of filming"
+          columns={CONSTANT_COLUMNS}
+          rows={Object.values(FILMING_LIMITS)}
           rowKey={({ meaning }) => meaning}
         />
       </Section>

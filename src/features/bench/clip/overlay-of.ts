@@ -35,7 +35,7 @@ export interface Drawn {
   readonly shapes: readonly Shape[];
   readonly tool: Tool;
   readonly geometry: ClipGeometry;
-  /** Rod and plumb line are drawn while the set-up is open. */
+  /** Rod, plumb line and floor line are drawn while the set-up is open. */
   readonly setUp: boolean;
 }
 
@@ -61,13 +61,16 @@ export const drawnOn = (drawn: Drawn): Primitive[] => {
   ];
 };
 
-const setUpLines = ({ scale, plumb }: ClipGeometry, tool: Tool): Primitive[] => {
+/** Stored lines, without the one that is being drawn anew; a smear shows on its own frame only, so never. */
+const setUpLines = ({ scale, plumb, floorLine }: ClipGeometry, tool: Tool): Primitive[] => {
   const drawing = tool.kind === 'line' ? tool : null;
   const [a, b] = drawing?.points ?? [];
   const stored = scale && scale.from !== 'typed' ? scale : null;
+  const scaling = drawing?.of === 'rod' || drawing?.of === 'body-height';
   return [
-    ...(stored && !(drawing && drawing.of !== 'plumb') ? noteLine(stored.a, stored.b) : []),
+    ...(stored && !scaling ? noteLine(stored.a, stored.b) : []),
     ...(plumb && drawing?.of !== 'plumb' ? noteLine(plumb.top, plumb.bottom) : []),
+    ...(floorLine && drawing?.of !== 'floor' ? noteLine(floorLine.a, floorLine.b) : []),
     ...(a && b ? noteLine(a, b) : a ? [noteShape({ kind: 'point', ...a })] : []),
   ];
 };

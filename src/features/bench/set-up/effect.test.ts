@@ -1,6 +1,15 @@
 import { describe, expect, it } from 'vitest';
 import { framePoint } from '#shared/geometry/points.ts';
-import { distanceEffect, lensEffect, plumbEffect, pointersEffect, scaleEffect } from './effect.ts';
+import { degrees } from '#shared/geometry/units.ts';
+import {
+  distanceEffect,
+  floorEffect,
+  lensEffect,
+  plumbEffect,
+  pointersEffect,
+  scaleEffect,
+  shutterEffect,
+} from './effect.ts';
 
 describe('what the set-up makes measurable', () => {
   it('scale from a rod', () => {
@@ -36,8 +45,42 @@ describe('what the set-up makes measurable', () => {
     expect(plumbEffect(null).kind).toBe('done');
     const leaning = { top: framePoint(100, 100), bottom: framePoint(200, 1100) };
     expect(plumbEffect(leaning)).toEqual({
-      text: 'The picture leans by 5.7°; every mark is turned back by that.',
+      text: 'The picture leans by 5.7°, more than 3°; every mark is turned back by that.',
       kind: 'wait',
     });
+  });
+
+  it('floor line', () => {
+    const line = { a: framePoint(100, 900), b: framePoint(400, 880) };
+    const found = (by: number) => ({ by: degrees(by), u: degrees(2) });
+    expect(floorEffect(null, null).kind).toBe('done');
+    expect(floorEffect(line, null).kind).toBe('wait');
+    expect(floorEffect(line, found(-8))).toEqual({
+      text: 'The camera stood 8° (±\u00a04°) off the front.',
+      kind: 'done',
+    });
+    expect(floorEffect(line, found(24))).toEqual({
+      text: 'The camera stood 24° (±\u00a04°) off the front: more than 20° bends the turn. Film again from straight ahead.',
+      kind: 'wait',
+    });
+  });
+
+  it('shutter', () => {
+    const smear = (px: number) => ({
+      from: 'smear' as const,
+      a: framePoint(0, 0),
+      b: framePoint(px, 0),
+    });
+    expect(shutterEffect(null, 60).kind).toBe('done');
+    expect(shutterEffect({ from: 'typed', perSecond: 120 }, 60).kind).toBe('done');
+    expect(shutterEffect({ from: 'typed', perSecond: 30 }, 60)).toEqual({
+      text: 'The shutter is open for 1/30 s: with 60 frames a second it cannot be open longer than 1/60 s. Look again.',
+      kind: 'bad',
+    });
+    expect(shutterEffect({ from: 'typed', perSecond: 30 }, null).kind).toBe('done');
+    expect(shutterEffect(smear(2), 60).text).toBe(
+      'A dot is drawn out by 2.0 pixels: sharp enough.',
+    );
+    expect(shutterEffect(smear(8), 60).text).toMatch(/8\.0 pixels; more than 3 /);
   });
 });

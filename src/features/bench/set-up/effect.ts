@@ -1,7 +1,9 @@
-import type { ClipGeometry, Scale } from '#shared/contracts/clips.ts';
-import { plumbTilt } from '#shared/geometry/points.ts';
+import type { ClipGeometry, Scale, Shutter } from '#shared/contracts/clips.ts';
+import { distance, plumbTilt } from '#shared/geometry/points.ts';
+import { FILMING_LIMITS as LIMITS, SMALLEST_IN_ONE_REP } from '#shared/measures/filming-limits.ts';
+import type { OffFront } from '#shared/measures/off-front.ts';
 import { mmPerPxOf } from '#shared/records/scale.ts';
-import { decimal, degrees, metres } from '#src/ui/figures.ts';
+import { decimal, degrees, metres, plusMinus } from '#src/ui/figures.ts';
 
 /** What is known of the set-up and what it makes measurable, in words. */
 export interface Effect {
@@ -9,21 +11,24 @@ export interface Effect {
   readonly kind: 'done' | 'wait' | 'bad';
 }
 
-/** Coarser than this, a mark's error costs several degrees of turn. */
-const COARSE_MM_PER_PX = 2.5;
-const NEAR_MM = 2000;
-const PLUMB_LIMIT = 3;
+const { bestFromMm, bestToMm } = LIMITS;
+const distances = `${decimal(bestFromMm.value / 1000)} to ${decimal(bestToMm.value / 1000)} m`;
+
+const percent = (share: number): string => `${decimal(100 * share, 0)} %`;
 
 export const scaleEffect = (scale: Scale | null): Effect => {
   const mm = mmPerPxOf(scale);
   if (mm === null)
     return scale === null
-      ? { text: 'Without a scale nothing but the marks themselves is known.', kind: 'bad' }
+      ? {
+          text: `Without a scale there is no lift and no turn; one that is ${percent(LIMITS.scaleError.value)} off makes the turn ${percent(LIMITS.turnErrorByScale.value)} wrong.`,
+          kind: 'bad',
+        }
       : { text: 'The two points lie too near to each other.', kind: 'bad' };
   const known = `${decimal(mm, 2)} mm per pixel`;
-  return mm > COARSE_MM_PER_PX
+  return mm > LIMITS.coarse.value
     ? {
-        text: `${known}: coarse. Film from 2.5 to 3.5 m, or with more pixels.`,
+        text: `${known}: coarse, above ${decimal(LIMITS.coarse.value)}. Film from ${distances}, or with more pixels.`,
         kind: 'wait',
       }
     : { text: known, kind: 'done' };
@@ -32,8 +37,11 @@ export const scaleEffect = (scale: Scale | null): Effect => {
 export const distanceEffect = (distanceMm: number | null): Effect => {
   if (distanceMm === null)
     return { text: 'Without the distance there is no lift and no turn.', kind: 'bad' };
-  return distanceMm < NEAR_MM
-    ? { text: `${metres(distanceMm)}: near. The perspective bends the angles.`, kind: 'wait' }
+  return distanceMm < LIMITS.nearMm.value
+    ? {
+        text: `${metres(distanceMm)}: nearer than ${metres(LIMITS.nearMm.value)} the perspective bends the angles. Film from ${distances}.`,
+        kind: 'wait',
+      }
     : { text: metres(distanceMm), kind: 'done' };
 };
 
@@ -48,18 +56,62 @@ export const pointersEffect = ({
 }: Pick<ClipGeometry, 'beltPointerMm' | 'thighPointerMm'>): Effect => {
   if (belt === null)
     return {
-      text: 'Bare landmarks: only a change of turn of 16° or more can be told from none.',
+      text: `Bare landmarks: only a change of turn of ${SMALLEST_IN_ONE_REP.bare}° or more can be told from none.`,
       kind: 'wait',
     };
   return thigh === null
-    ? { text: 'Belt pointer: a change of turn of 13.5° can be told from none.', kind: 'wait' }
-    : { text: 'Both pointers: a change of turn of 5.5° can be told from none.', kind: 'done' };
+    ? {
+        text: `Belt pointer: a change of turn of ${SMALLEST_IN_ONE_REP.belt}° can be told from none.`,
+        kind: 'wait',
+      }
+    : {
+        text: `Both pointers: a change of turn of ${SMALLEST_IN_ONE_REP['belt+thigh']}° can be told from none.`,
+        kind: 'done',
+      };
 };
 
 export const plumbEffect = (plumb: ClipGeometry['plumb']): Effect => {
   if (!plumb) return { text: 'The picture is taken as upright.', kind: 'done' };
   const tilt = plumbTilt(plumb.top, plumb.bottom);
   if (tilt === null) return { text: 'The two points lie on each other.', kind: 'bad' };
-  const text = `The picture leans by ${degrees(Math.abs(tilt))}; every mark is turned back by that.`;
-  return { text, kind: Math.abs(tilt) > PLUMB_LIMIT ? 'wait' : 'done' };
+  const over = Math.abs(tilt) > LIMITS.plumb.value;
+  const text = `The picture leans by ${degrees(Math.abs(tilt))}${over ? `, more than ${LIMITS.plumb.value}°` : ''}; every mark is turned back by that.`;
+  return { text, kind: over ? 'wait' : 'done' };
+};
+
+export const floorEffect = (line: ClipGeometry['floorLine'], found: OffFront | null): Effect => {
+  if (!line) return { text: 'The camera is taken to stand straight in front.', kind: 'done' };
+  if (!found)
+    return {
+      text: 'It tells how far off the front the camera stood once the scale, the distance and the lens height are known, and the two touches lie apart across the floor.',
+      kind: 'wait',
+    };
+  const stood = `The camera stood ${degrees(Math.abs(found.by), 0)} (${plusMinus(1.96 * found.u, 0)}°) off the front`;
+  return Math.abs(found.by) > LIMITS.offFront.value
+    ? {
+        text: `${stood}: more than ${LIMITS.offFront.value}° bends the turn. Film again from straight ahead.`,
+        kind: 'wait',
+      }
+    : { text: `${stood}.`, kind: 'done' };
+};
+
+export const shutterEffect = (shutter: Shutter | null, framesPerSecond: number | null): Effect => {
+  if (!shutter) return { text: 'Not known: nothing is said about smeared marks.', kind: 'done' };
+  if (shutter.from === 'typed') {
+    const open = `The shutter is open for 1/${decimal(shutter.perSecond, 0)} s`;
+    return framesPerSecond !== null && shutter.perSecond < framesPerSecond - 0.1
+      ? {
+          text: `${open}: with ${decimal(framesPerSecond, 0)} frames a second it cannot be open longer than 1/${decimal(framesPerSecond, 0)} s. Look again.`,
+          kind: 'bad',
+        }
+      : { text: `${open}; the reading says which mark that smears.`, kind: 'done' };
+  }
+  const px = distance(shutter.a, shutter.b);
+  const drawn = `A dot is drawn out by ${decimal(px)} pixels`;
+  return px > LIMITS.smearPx.value
+    ? {
+        text: `${drawn}; more than ${LIMITS.smearPx.value} hides where its middle is. More light, or a shorter shutter, makes it sharper.`,
+        kind: 'wait',
+      }
+    : { text: `${drawn}: sharp enough.`, kind: 'done' };
 };

@@ -1,13 +1,14 @@
 import type { ClipGeometry } from '#shared/contracts/clips.ts';
-import { Button } from '#src/ui/button.tsx';
+import { offFrontOfClip } from '#shared/records/engine-input.ts';
 import { useStatus } from '#src/ui/status.tsx';
 import { useEdits } from '../actions/use-edits.ts';
-import { useBench, useBenchDocument, useBenchTools } from '../bench-context.ts';
-import { MARK, toolAsks } from '../store/tools.ts';
+import { useBenchDocument } from '../bench-context.ts';
 import { EffectLine } from './effect-line.tsx';
-import { distanceEffect, lensEffect, plumbEffect, pointersEffect } from './effect.ts';
+import { distanceEffect, floorEffect, lensEffect, plumbEffect, pointersEffect } from './effect.ts';
 import { LengthInput } from './length-input.tsx';
+import { LineSection } from './line-section.tsx';
 import { ScaleSection } from './scale-section.tsx';
+import { ShutterSection } from './shutter-section.tsx';
 
 /** How the clip was filmed, and what each part of it makes measurable. */
 export function SetUpPanel() {
@@ -75,66 +76,34 @@ export function SetUpPanel() {
         </div>
         <EffectLine effect={pointersEffect(geometry)} />
       </section>
-      <PlumbSection geometry={geometry} disabled={disabled} save={save} />
-    </div>
-  );
-}
-
-function PlumbSection({
-  geometry,
-  disabled,
-  save,
-}: {
-  geometry: ClipGeometry;
-  disabled: boolean;
-  save: (change: Partial<ClipGeometry>) => void;
-}) {
-  const { store } = useBenchTools();
-  const tool = useBench((state) => state.tool);
-  const drawing = tool.kind === 'line' && tool.of === 'plumb' ? tool : null;
-  const [top, bottom] = drawing?.points ?? [];
-  return (
-    <section aria-label="Plumb line" className="border-t border-rule py-4">
-      <h4 className="font-bold">Plumb line</h4>
-      <p className="mb-2 text-note text-soft">
-        Two touches on something that hangs or stands straight, such as a door frame.
-      </p>
-      <div className="flex flex-wrap gap-3">
-        {top && bottom ? (
-          <Button
-            look="primary"
-            onClick={() => {
-              save({ plumb: { top, bottom } });
-              store.setState({ tool: MARK });
-            }}
-          >
-            Keep this line
-          </Button>
-        ) : (
-          <Button
-            disabled={disabled}
-            aria-pressed={drawing !== null}
-            onClick={() =>
-              store.setState({ tool: drawing ? MARK : { kind: 'line', of: 'plumb', points: [] } })
-            }
-          >
-            {drawing ? 'Stop' : geometry.plumb ? 'Draw it again' : 'Draw it on the picture'}
-          </Button>
-        )}
-        {geometry.plumb && !drawing && (
-          <Button look="plain" disabled={disabled} onClick={() => save({ plumb: null })}>
-            Take it away
-          </Button>
-        )}
-      </div>
-      {drawing && (
-        <p role="status" className="mt-2 text-note">
-          {toolAsks(drawing) === null
-            ? 'Both ends are placed.'
-            : `Press on the picture: ${toolAsks(drawing)?.toLowerCase()}.`}
-        </p>
+      <LineSection
+        of="plumb"
+        title="Plumb line"
+        hint="Two touches on something that hangs or stands straight, such as a door frame."
+        there={geometry.plumb !== null}
+        effect={plumbEffect(geometry.plumb)}
+        disabled={disabled}
+        onKeep={(top, bottom) => save({ plumb: { top, bottom } })}
+        onTakeAway={() => save({ plumb: null })}
+      />
+      {clip.view === 'front' && (
+        <LineSection
+          of="floor"
+          title="Floor line"
+          hint="Two touches: both heels in quiet stance, or better the two ends of a line on the floor on which both heels stand. It tells whether the camera stood in front."
+          there={geometry.floorLine !== null}
+          effect={floorEffect(geometry.floorLine, offFrontOfClip(clip))}
+          disabled={disabled}
+          onKeep={(a, b) => save({ floorLine: { a, b } })}
+          onTakeAway={() => save({ floorLine: null })}
+        />
       )}
-      <EffectLine effect={plumbEffect(geometry.plumb)} />
-    </section>
+      <ShutterSection
+        shutter={geometry.shutter}
+        framesPerSecond={clip.frameRate?.perSecond ?? null}
+        disabled={disabled}
+        onSave={(shutter) => save({ shutter })}
+      />
+    </div>
   );
 }

@@ -9,7 +9,7 @@ export type Tool =
   | { readonly kind: 'mark' }
   /** Moves the picture; nothing is placed. */
   | { readonly kind: 'look' }
-  /** Two points on a thing of known length, or on a plumb line. */
+  /** Two points: on a thing of known length, a plumb line, the floor line, or a smeared dot. */
   | { readonly kind: 'line'; readonly of: LineOf; readonly points: readonly FramePoint[] }
   /** What a comment points at: a point, or a ring by its middle and its edge. */
   | {
@@ -17,21 +17,23 @@ export type Tool =
       readonly of: 'point' | 'ring';
       readonly points: readonly FramePoint[];
     };
-export type LineOf = Extract<Scale['from'], 'rod' | 'body-height'> | 'plumb';
+export type LineOf = Extract<Scale['from'], 'rod' | 'body-height'> | 'plumb' | 'floor' | 'smear';
 
 export const MARK: Tool = { kind: 'mark' };
 export const LOOK: Tool = { kind: 'look' };
 
+/** The first and the second end of each line. */
+const LINE_ASKS: Record<LineOf, readonly [string, string]> = {
+  rod: ['One end of the rod', 'The other end of the rod'],
+  'body-height': ['The crown of the head', 'The floor at the heels'],
+  plumb: ['The upper end of the plumb line', 'The lower end of the plumb line'],
+  floor: ['One heel, or one end of the floor line', 'The other heel, or its other end'],
+  smear: ['Where the smear of the dot begins', 'Where the smear of the dot ends'],
+};
+
 /** What the tool still wants, in words; null where it wants nothing. */
 export const toolAsks = (tool: Tool): string | null => {
-  if (tool.kind === 'line') {
-    if (tool.points.length >= 2) return null;
-    const first = tool.points.length === 0;
-    if (tool.of === 'rod') return first ? 'One end of the rod' : 'The other end of the rod';
-    if (tool.of === 'body-height')
-      return first ? 'The crown of the head' : 'The floor at the heels';
-    return first ? 'The upper end of the plumb line' : 'The lower end of the plumb line';
-  }
+  if (tool.kind === 'line') return LINE_ASKS[tool.of][tool.points.length] ?? null;
   if (tool.kind === 'shape') {
     if (tool.of === 'point') return tool.points.length === 0 ? 'What you mean' : null;
     if (tool.points.length >= 2) return null;

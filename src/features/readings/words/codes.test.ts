@@ -120,12 +120,12 @@ const REASONS = {
 
 const WARNINGS = {
   'camera-off-front': [
-    { code: 'camera-off-front', by: degrees(27), limit: degrees(20) },
+    { code: 'camera-off-front', by: degrees(-27), limit: degrees(20) },
     'The camera stood 27° off the front; more than 20° bends the turn. Put both heels on a line square to the camera.',
   ],
   'plumb-off': [
     { code: 'plumb-off', by: degrees(4.2), limit: degrees(3) },
-    'The picture hangs 4.2° off the plumb line; 3° is allowed. The marks were turned back by that.',
+    'The picture hangs 4.2° off the plumb line; 3° is allowed. The marks were turned back by that; set the phone up straight next time.',
   ],
   'too-near': [
     { code: 'too-near', distanceMm: 1650, limitMm: 2000 },
@@ -145,11 +145,11 @@ const WARNINGS = {
   ],
   'lens-height-missing': [
     { code: 'lens-height-missing', liftHalfWidth: degrees(7) },
-    'The height of the lens is not known: lift is uncertain by 7° instead of 2°.',
+    'The height of the lens is not known: lift is uncertain by 7° instead of 2°. Measure it from the floor and write it into the set-up.',
   ],
   smear: [
-    { code: 'smear', px: 5.25, landmark: 'belt-tip' },
-    'Tip of the belt pointer is smeared over 5.3 pixels in one exposure. More light makes it sharper.',
+    { code: 'smear', px: 5.25, landmark: 'belt-tip', limit: 3 },
+    'Tip of the belt pointer is smeared over 5.3 pixels in one exposure; more than 3 hides where its middle is. More light, or a shorter shutter, makes it sharper.',
   ],
   'few-quiet-frames': [
     { code: 'few-quiet-frames', have: 3, recommended: 5 },
@@ -269,6 +269,18 @@ describe('what else is said', () => {
     const [view] = FAULTS['view-cannot-show-turn'];
     expect(faultsToSay([few60, view])).toEqual([view]);
     expect(faultsToSay([few60])).toEqual([few60]);
+  });
+
+  it('says a smear that was measured on the picture without a landmark', () => {
+    expect(warningWords({ code: 'smear', px: 8, landmark: null, limit: 3 })).toMatch(
+      /^A dot is smeared over 8\.0 pixels/,
+    );
+  });
+
+  it('says what a wrong scale costs', () => {
+    expect(settleWords({ code: 'give-scale' }, () => '').gain).toBe(
+      'Without it no turn can be computed; a scale that is 15 % off makes it 20 % wrong.',
+    );
   });
 
   it('has a sentence for a side without any rep that could count', () => {

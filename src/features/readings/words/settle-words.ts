@@ -1,5 +1,6 @@
+import { FILMING_LIMITS as LIMITS } from '#shared/measures/filming-limits.ts';
 import type { Settle } from '#shared/reading/reasons.ts';
-import { capital, degrees, inWords, plusMinus } from '#src/ui/figures.ts';
+import { capital, decimal, degrees, inWords, plusMinus } from '#src/ui/figures.ts';
 import { landmarkNames } from './landmark-words.ts';
 import type { NameOf } from './rep-names.ts';
 
@@ -12,6 +13,8 @@ export interface SettleWords {
 
 const becomes = (from: number, to: number): string =>
   `${plusMinus(1.96 * from)}° would become about ${plusMinus(1.96 * to)}°`;
+const percent = (share: number): string => `${decimal(100 * share, 0)} %`;
+const scaleErrorWords = `a scale that is ${percent(LIMITS.scaleError.value)} off`;
 const frames = (count: number, kind = ''): string =>
   `${inWords(count)} more ${kind}${count === 1 ? 'frame' : 'frames'}`;
 
@@ -41,7 +44,7 @@ export const settleWords = (settle: Settle, nameOf: NameOf): SettleWords => {
     case 'give-scale':
       return {
         act: 'Give the scale: two ends of the rod, or the body height',
-        gain: 'Without it no turn can be computed.',
+        gain: `Without it no turn can be computed; ${scaleErrorWords} makes it ${percent(LIMITS.turnErrorByScale.value)} wrong.`,
       };
     case 'give-distance':
       return {

@@ -1,28 +1,32 @@
 import type { Warning } from '#shared/reading/reasons.ts';
-import { decimal, degrees, inWords, metres } from '#src/ui/figures.ts';
+import { CONSTANTS } from '#shared/measures/constants.ts';
+import { FILMING_LIMITS as LIMITS } from '#shared/measures/filming-limits.ts';
+import { capital, decimal, degrees, inWords, metres } from '#src/ui/figures.ts';
 import { landmarkNames } from './landmark-words.ts';
+
+const distances = `${decimal(LIMITS.bestFromMm.value / 1000)} to ${decimal(LIMITS.bestToMm.value / 1000)} m`;
 
 /** What weakens a reading, with its figure, and what to do about it. */
 export const warningWords = (warning: Warning): string => {
   switch (warning.code) {
     case 'camera-off-front':
-      return `The camera stood ${degrees(warning.by, 0)} off the front; more than ${degrees(warning.limit, 0)} bends the turn. Put both heels on a line square to the camera.`;
+      return `The camera stood ${degrees(Math.abs(warning.by), 0)} off the front; more than ${degrees(warning.limit, 0)} bends the turn. Put both heels on a line square to the camera.`;
     case 'plumb-off':
-      return `The picture hangs ${degrees(warning.by)} off the plumb line; ${degrees(warning.limit, 0)} is allowed. The marks were turned back by that.`;
+      return `The picture hangs ${degrees(Math.abs(warning.by))} off the plumb line; ${degrees(warning.limit, 0)} is allowed. The marks were turned back by that; set the phone up straight next time.`;
     case 'too-near':
-      return `The camera stood ${metres(warning.distanceMm)} away; nearer than ${metres(warning.limitMm)} the picture is too steep. Stand 2.5 to 3.5 m away.`;
+      return `The camera stood ${metres(warning.distanceMm)} away; nearer than ${metres(warning.limitMm)} the picture is too steep. Stand ${distances} away.`;
     case 'too-coarse':
       return `One pixel is ${decimal(warning.mmPerPx)} mm on the body; above ${decimal(warning.limit)} mm the marks are too coarse. Film nearer or in a higher resolution.`;
     case 'slow-frame-rate':
-      return `${decimal(warning.framesPerSecond, 0)} frames a second; below ${decimal(warning.limit, 0)} the way from 60° to 90° has few frames. Film at 60.`;
+      return `${decimal(warning.framesPerSecond, 0)} frames a second; below ${decimal(warning.limit, 0)} the way from 60° to 90° has few frames. Film at ${LIMITS.goodFramesPerSecond.value}.`;
     case 'mirrored':
       return 'The clip is mirrored, as selfie cameras make it. It was turned back; check that the support side is right.';
     case 'lens-height-missing':
-      return `The height of the lens is not known: lift is uncertain by ${degrees(warning.liftHalfWidth, 0)} instead of 2°.`;
+      return `The height of the lens is not known: lift is uncertain by ${degrees(warning.liftHalfWidth, 0)} instead of ${degrees(CONSTANTS.liftModelError.value, 0)}. Measure it from the floor and write it into the set-up.`;
     case 'smear':
-      return `${landmarkNames([warning.landmark]).replace(/^./, (first) => first.toUpperCase())} is smeared over ${decimal(warning.px)} pixels in one exposure. More light makes it sharper.`;
+      return `${warning.landmark === null ? 'A dot' : capital(landmarkNames([warning.landmark]))} is smeared over ${decimal(warning.px)} pixels in one exposure; more than ${decimal(warning.limit, 0)} hides where its middle is. More light, or a shorter shutter, makes it sharper.`;
     case 'few-quiet-frames':
-      return `${inWords(warning.have).replace(/^./, (first) => first.toUpperCase())} quiet frames are marked; ${inWords(warning.recommended)} make zero firmer.`;
+      return `${capital(inWords(warning.have))} quiet frames are marked; ${inWords(warning.recommended)} make zero firmer.`;
     case 'assumed-thigh':
       return `The planted thigh is taken as turning little (± ${degrees(1.96 * warning.sd, 0)}), not measured.`;
     case 'tracked-not-looked-at':

@@ -1,9 +1,10 @@
+import type { Visit } from '#shared/contracts/visits.ts';
 import { fileSize } from '#src/ui/figures.ts';
 import { Progress } from '#src/ui/progress.tsx';
 import { StateDot, type StateKind } from '#src/ui/state-dot.tsx';
 import { Skeleton } from '#src/ui/states.tsx';
 import { clipWords } from '#src/ui/words.ts';
-import { judge, type Verdict } from '../uploads/judge.ts';
+import { filmedAs, judge, type Verdict } from '../uploads/judge.ts';
 import { detailsComplete, percentOf, type UploadItem } from '../uploads/upload-item.ts';
 import { uploads } from '../uploads/uploads.ts';
 import { DetailsChoice } from './details-choice.tsx';
@@ -13,16 +14,18 @@ import { UploadActions } from './upload-actions.tsx';
 
 /** A clip that is not on the server yet. */
 export function UploadRow({
+  visit,
   item,
   only,
   onFiles,
 }: {
+  visit: Visit;
   item: UploadItem;
   /** The one clip that waits for its word: its button is the page's filled one. */
   only: boolean;
   onFiles: (files: readonly File[]) => void;
 }) {
-  const verdict = item.look === null ? null : judge(item.look, item.bytes);
+  const verdict = item.look === null ? null : judge(item.look, item.bytes, filmedAs(visit, item));
   const moving = item.phase === 'sending' || item.phase === 'paused' || item.phase === 'waiting';
   return (
     <RowFrame

@@ -6,7 +6,7 @@ import { Button } from '#src/ui/button.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { Empty } from '#src/ui/states.tsx';
 import { useStatus } from '#src/ui/status.tsx';
-import { judge } from '../uploads/judge.ts';
+import { filmedAs, judge } from '../uploads/judge.ts';
 import { detailsComplete, type ClipDetails } from '../uploads/upload-item.ts';
 import { uploads } from '../uploads/uploads.ts';
 import { useUploads } from '../use-uploads.ts';
@@ -38,7 +38,7 @@ export function UploadStep({
     (item) =>
       item.phase === 'chosen' &&
       item.look !== null &&
-      judge(item.look, item.bytes).grade !== 'again' &&
+      judge(item.look, item.bytes, filmedAs(visit, item)).grade !== 'again' &&
       detailsComplete(item),
   );
 
@@ -74,7 +74,13 @@ export function UploadStep({
       {(here.length > 0 || clips.length > 0) && (
         <ul className="mt-2" aria-label="Clips of this visit">
           {here.map((item) => (
-            <UploadRow key={item.key} item={item} only={ready.length <= 1} onFiles={take} />
+            <UploadRow
+              key={item.key}
+              visit={visit}
+              item={item}
+              only={ready.length <= 1}
+              onFiles={take}
+            />
           ))}
           {clips.map((clip) => (
             <ClipRow key={clip.id} clip={clip} may={may} />

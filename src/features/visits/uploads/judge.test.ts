@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { seconds } from '#shared/timing/units.ts';
 import type { LookedAtClip } from '#src/video/look-at-file.ts';
-import { judge, LARGEST_BYTES } from './judge.ts';
+import { type Filmed, judge as judgeFilmed, LARGEST_BYTES } from './judge.ts';
 
 const look = (change: Partial<LookedAtClip> = {}): LookedAtClip => ({
   outcome: 'clip',
@@ -18,6 +18,19 @@ const look = (change: Partial<LookedAtClip> = {}): LookedAtClip => ({
   cutShort: false,
   ...change,
 });
+const filmed: Filmed = {
+  details: { view: 'front', supportSide: 'left', mirrored: false },
+  filming: {
+    distanceMm: 3000,
+    lensHeightMm: 950,
+    rodMm: 1200,
+    beltPointerMm: 135,
+    thighPointerMm: 125,
+  },
+  bodyHeightMm: 1740,
+};
+const judge = (of: Parameters<typeof judgeFilmed>[0], bytes: number) =>
+  judgeFilmed(of, bytes, filmed);
 const constant = (fps: number) => ({ kind: 'constant' as const, fps, gaps: 0 });
 
 describe('judge', () => {
@@ -40,7 +53,8 @@ describe('judge', () => {
 
   it.each([
     ['30 frames per second', { frameRate: constant(30) }, 'weak', /at 60 frames per second/],
-    ['15 frames per second', { frameRate: constant(15) }, 'again', /15 show too little/],
+    ['24 frames per second', { frameRate: constant(24) }, 'weak', /below 30 .* in 3 frames/],
+    ['15 frames per second', { frameRate: constant(15) }, 'again', /below 30 .* in 2 frames/],
     ['720p', { width: 720, height: 1280 }, 'weak', /at 1080p/],
     ['a thumbnail', { width: 180, height: 320 }, 'again', /too small/],
     ['a lying phone', { width: 1920, height: 1080 }, 'weak', /Filmed lying/],
@@ -52,6 +66,17 @@ describe('judge', () => {
     expect(verdict.grade).toBe(grade);
     expect(verdict.advice.join(' ')).toMatch(words);
     expect(verdict.sendable).toBe(true);
+  });
+
+  it('names what is weak about the way of filming after what is wrong with the file', () => {
+    const near = { ...filmed, filming: { ...filmed.filming, distanceMm: 1900 } };
+    const verdict = judgeFilmed(look({ cutShort: true }), 48e6, near);
+    expect(verdict.grade).toBe('again');
+    expect(verdict.advice.map((words) => words.slice(0, 11))).toEqual([
+      'The end of ',
+      'Filmed from',
+    ]);
+    expect(judgeFilmed(look(), 48e6, near)).toMatchObject({ grade: 'weak', sendable: true });
   });
 
   it('does not send what is too large to be taken, or holds nothing', () => {

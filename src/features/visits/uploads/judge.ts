@@ -1,4 +1,8 @@
+import type { Visit } from '#shared/contracts/visits.ts';
+import { FILMING_LIMITS as LIMITS, isSlow } from '#shared/measures/filming-limits.ts';
 import type { LocalLook, LookedAtClip } from '#src/video/look-at-file.ts';
+import { BEFORE_SENDING, type Chosen, filmingAdvice, perSecond } from './filming-rules.ts';
+import type { ClipDetails } from './upload-item.ts';
 
 /**
  * What a look at the local file says before a byte of it is sent: `good`; `weak`, usable with the named
@@ -14,27 +18,28 @@ export type Verdict = {
   sendable: boolean;
 };
 
+/** How it was filmed, and the person. */
+export type Filmed = Omit<Chosen, 'look'>;
+
+export const filmedAs = ({ filming, athlete }: Visit, details: ClipDetails): Filmed => ({
+  details,
+  filming,
+  bodyHeightMm: athlete.heightMm,
+});
+
 type Fault = { grade: 'weak' | 'again'; words: string };
 
 /** The largest upload that is taken, bytes. */
 export const LARGEST_BYTES = 2 * 1024 ** 3;
-/** Below so many frames per second the moments of 60° and 90° blur into each other. */
-const FEWEST_FPS = 24;
+/** Under so many frames per second a quick lift has less than the three frames that show it moving. */
+const FEWEST_FPS = 3 / LIMITS.quickestPassSeconds.value;
+/** 50 is what phones in some countries call 60. */
 const GOOD_FPS = 50;
 /** Short edge, px: 1080p is asked for; below 480 a landmark is smaller than the hand's error. */
 const GOOD_SHORT_EDGE = 1080;
 const LEAST_SHORT_EDGE = 480;
-/** Three still seconds and one slow lift take about six; under four there is no quiet stance. Common practice, no source. */
-const SHORT_SECONDS = 4;
 /** Longer clips are mostly waiting; only a part of them is prepared. */
 const LONG_SECONDS = 90;
-
-const perSecond = (look: LookedAtClip): number | null =>
-  look.frameRate === null
-    ? null
-    : look.frameRate.kind === 'constant'
-      ? look.frameRate.fps
-      : look.frameRate.averageFps;
 
 function rateWords(look: LookedAtClip): string | null {
   const rate = look.frameRate;
@@ -52,7 +57,7 @@ export function factsOf(look: LookedAtClip): string {
   return parts.filter((part) => part !== null).join(', ');
 }
 
-function faultsOf(look: LookedAtClip, bytes: number): Fault[] {
+function faultsOf(look: LookedAtClip, bytes: number, filmed: Filmed): Fault[] {
   const faults: Fault[] = [];
   const again = (words: string) => faults.push({ grade: 'again', words });
   const weak = (words: string) => faults.push({ grade: 'weak', words });
@@ -63,22 +68,24 @@ function faultsOf(look: LookedAtClip, bytes: number): Fault[] {
   if (bytes > LARGEST_BYTES)
     again('The file is larger than 2 GB: cut it on the phone to the part that matters.');
   if (look.cutShort) again('The end of the file is missing: copy it from the phone again.');
-  if (fps !== null && fps < FEWEST_FPS)
-    again(`Film again at 60 frames per second; ${Math.round(fps)} show too little.`);
   if (shortEdge < LEAST_SHORT_EDGE)
     again('Film again at 1080p: the picture is too small to see a landmark in.');
   if (look.width > look.height)
     weak('Filmed lying: hold the phone upright, so that the person fills the picture.');
-  if (fps !== null && fps >= FEWEST_FPS && fps < GOOD_FPS)
-    weak('Usable; at 60 frames per second 60° and 90° are found more exactly.');
+  const slow = BEFORE_SENDING['slow-frame-rate']({ look, ...filmed });
+  if (slow !== null) (fps !== null && fps < FEWEST_FPS ? again : weak)(slow);
+  for (const words of filmingAdvice({ look, ...filmed })) weak(words);
+  if (fps !== null && !isSlow(fps) && fps < GOOD_FPS)
+    weak(
+      `Usable; at ${LIMITS.goodFramesPerSecond.value} frames per second 60° and 90° are found more exactly.`,
+    );
   if (shortEdge >= LEAST_SHORT_EDGE && shortEdge < GOOD_SHORT_EDGE)
     weak('Usable; at 1080p marks sit more exactly.');
-  if (length < SHORT_SECONDS) weak('Short: three still seconds and one slow lift take about six.');
   if (length > LONG_SECONDS) weak('Long: the part that matters is enough, and sends faster.');
   return faults;
 }
 
-export function judge(look: LocalLook, bytes: number): Verdict {
+export function judge(look: LocalLook, bytes: number, filmed: Filmed): Verdict {
   if (look.outcome !== 'clip')
     return {
       grade: 'again',
@@ -86,7 +93,7 @@ export function judge(look: LocalLook, bytes: number): Verdict {
       advice: [look.advice],
       sendable: look.outcome !== 'empty',
     };
-  const faults = faultsOf(look, bytes);
+  const faults = faultsOf(look, bytes, filmed);
   const grade = faults.some((fault) => fault.grade === 'again')
     ? 'again'
     : faults.length > 0
