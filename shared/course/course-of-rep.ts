@@ -1,3 +1,4 @@
+import { withMarkError } from '#shared/measures/tied-lift.ts';
 import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
 import { landmarksOf } from '#shared/landmarks/table.ts';
@@ -89,7 +90,13 @@ export const courseOfRep = (
   const level = rep.frames.map((frame) => levelFrame(frame, rep.camera, error));
   const shared = rep.sharedQuiet?.map((frame) => levelFrame(frame, rep.camera, error)) ?? null;
   const { phases, setting } = divide(
-    { frames: level, shared, moved: rep.moved, labels: rep.labels, liftFrom: rep.liftFrom },
+    {
+      frames: level,
+      shared,
+      moved: rep.moved,
+      labels: rep.labels,
+      liftFrom: rep.liftFrom && withMarkError(rep.liftFrom, error),
+    },
     rig,
     set,
   );

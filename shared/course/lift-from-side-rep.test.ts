@@ -83,6 +83,30 @@ describe.each(['left', 'right'] as const)(
       expect(inside.length / rise.length).toBeGreaterThanOrEqual(0.95);
       expect(Math.max(...rise.map(({ liftHalfWidth }) => liftHalfWidth ?? NaN))).toBeLessThan(8);
     });
+
+    it('keep apart what the clocks are off by, most where the lift is quickest', () => {
+      const [first, ...more] = liftFrom.samples;
+      expect(first?.byTie).toHaveLength(3);
+      const off = [first, ...more].map((sample) => Math.hypot(...(sample?.byTie ?? [NaN])));
+      const at = off.indexOf(Math.max(...off));
+      const { lift = NaN } = liftFrom.samples[at] ?? {};
+      expect(lift).toBeGreaterThan(20);
+      expect(lift).toBeLessThan(100);
+      expect(Math.min(...off)).toBeLessThan(0.3);
+    });
+
+    it('are surer of the lift for someone whose marks repeat well, not of the clocks', () => {
+      const half = (anatomicalPx: number) => {
+        const error = { anatomicalPx, doublyMarkedFrames: 20 };
+        const course = courseOfRep({ ...front, liftFrom }, 'belt+thigh', error);
+        if (!isCourse(course)) throw new Error(course.code);
+        return course.setting.tiedLift?.samples[40];
+      };
+      const [usual, own] = [half(3), half(1)];
+      expect(usual).toEqual(liftFrom.samples[40]);
+      expect(own?.u).toBeCloseTo((usual?.u ?? NaN) / 3, 12);
+      expect(own?.byTie).toEqual(usual?.byTie);
+    });
   },
 );
 

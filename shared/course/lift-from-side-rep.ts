@@ -21,19 +21,19 @@ interface Known {
 /** Marks this near in time tell how fast the lift changes, ms. */
 const NEAR = 120;
 
-/** Speed of lift around a time, degrees per ms, from the furthest marks that are near. */
+/** Speed of lift around a time, degrees per ms, falling where negative, from the furthest marks that are near. */
 const speedAt = (known: readonly Known[], time: number): number => {
   const near = known.filter((each) => Math.abs(each.time - time) <= NEAR);
   const [first, last] = [near[0], near.at(-1)];
   return first && last && last.time > first.time
-    ? Math.abs((last.lift - first.lift) / (last.time - first.time))
+    ? (last.lift - first.lift) / (last.time - first.time)
     : 0;
 };
 
 /**
  * Lift of a front rep from a side rep of the same moment, on the front clip's clock; or why the two cannot be tied.
- * Each value carries the error of the side clip's marks and of the tie: how far the lift moves in the
- * time by which the clocks may be apart. Both courses are of one support side; who calls sees to it.
+ * Each value carries the error of the side clip's marks and, apart from it, of the tie: how far the lift
+ * moves in the time by which the clocks may be apart. Both courses are of one support side; who calls sees to it.
  */
 export const liftFromSideRep = (front: TimedCourse, side: TimedCourse): TiedLift | TieFault => {
   const tie = tieClocks(
@@ -47,9 +47,13 @@ export const liftFromSideRep = (front: TimedCourse, side: TimedCourse): TiedLift
   });
   const samples = known.map(({ time, lift, level }): LiftSample => {
     const there = tie.onOther(time);
-    const late = there.u * speedAt(known, time);
-    const marks = liftUncertainty(level, side.course.setting);
-    return { time: there.time, lift, u: degrees(Math.hypot(marks, late)) };
+    const speed = speedAt(known, time);
+    return {
+      time: there.time,
+      lift,
+      u: degrees(liftUncertainty(level, side.course.setting)),
+      byTie: there.byEvent.map((late) => degrees(late * speed)),
+    };
   });
   return { from: side.course.rep.id, samples };
 };

@@ -24,6 +24,8 @@ export interface RiseData {
    */
   readonly coordinates: readonly Coordinate[];
   readonly liftIsTied: boolean;
+  /** Shift of every lift by one standard error of each moment of the tie, degrees; none where not tied. */
+  readonly tie: readonly Float64Array[];
   readonly pelvis: 'belt' | 'outline';
   readonly femurLength: number;
   readonly pelvisLength: number;
@@ -53,11 +55,18 @@ const column = (frames: readonly LevelFrame[], id: LandmarkId, axis: 'u' | 'v'):
   error: Float64Array.from(frames, ({ marks }) => marks[id]?.error ?? NaN),
 });
 
-/** Lift and its standard uncertainty, degrees. */
+/** Lift and its standard uncertainty by its own marks, degrees. */
 const tiedColumn = (frames: readonly LevelFrame[], tied: TiedLift): Coordinate => ({
   at: Float64Array.from(frames, ({ time }) => tiedLiftAt(tied, time)?.lift ?? NaN),
   error: Float64Array.from(frames, ({ time }) => tiedLiftAt(tied, time)?.u ?? NaN),
 });
+
+const tieColumns = (frames: readonly LevelFrame[], tied: TiedLift): Float64Array[] => {
+  const moments = tied.samples[0]?.byTie ?? [];
+  return moments.map((_, k) =>
+    Float64Array.from(frames, ({ time }) => tiedLiftAt(tied, time)?.byTie[k] ?? NaN),
+  );
+};
 
 /** Null where the quiet stance does not give the lengths the fit needs. */
 export const riseDataOf = (course: RepCourse): RiseData | null => {
@@ -98,6 +107,7 @@ export const riseDataOf = (course: RepCourse): RiseData | null => {
         : [column(marks, 'belt-tip', 'u')]),
     ],
     liftIsTied: tiedLift !== undefined,
+    tie: tiedLift ? tieColumns(marks, tiedLift) : [],
     pelvis: set === 'bare' ? 'outline' : 'belt',
     femurLength: femur,
     pelvisLength,

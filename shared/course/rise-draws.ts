@@ -1,5 +1,5 @@
 import { normalDraws } from '#shared/measures/draws.ts';
-import type { RiseData } from './rise-data.ts';
+import { COORDINATES, type RiseData } from './rise-data.ts';
 import { COEFFICIENTS, riseModel, type RiseModel } from './rise-model.ts';
 
 /** Monte Carlo runs of engine 1. */
@@ -13,24 +13,44 @@ export interface RiseDraws {
   readonly covariance: Float64Array;
 }
 
-/** Puts all frames of the model back to the marks as they were placed. */
-const place = (data: RiseData, model: RiseModel, x: Float64Array): void => {
+/** Puts all frames of the model back to the marks as they were placed, their lifts moved by a part of a shift. */
+const place = (
+  data: RiseData,
+  model: RiseModel,
+  x: Float64Array,
+  shift?: { readonly of: Float64Array; readonly by: number },
+): void => {
   for (let i = 0; i < data.count; i += 1) {
     data.coordinates.forEach(({ at }, k) => (x[k] = at[i] ?? NaN));
+    if (shift)
+      x[COORDINATES.kneeV] = (x[COORDINATES.kneeV] ?? NaN) + shift.by * (shift.of[i] ?? NaN);
     model.setFrame(i, x);
   }
 };
 
 /**
  * Change of each coefficient per standard error of each coordinate, by central differences: eight
- * numbers per coordinate, frame by frame. Zeros where a fit fails.
+ * numbers per moment of a tie, then per coordinate, frame by frame. Zeros where a fit fails.
  */
 const slopesOf = (data: RiseData, model: RiseModel): Float64Array => {
   const { count, coordinates } = data;
   const x = new Float64Array(coordinates.length);
   const up = new Float64Array(COEFFICIENTS);
   const down = new Float64Array(COEFFICIENTS);
-  const slopes = new Float64Array(count * coordinates.length * COEFFICIENTS);
+  const slopes = new Float64Array((data.tie.length + count * coordinates.length) * COEFFICIENTS);
+  let from = 0;
+  const put = (): void => {
+    for (let j = 0; j < COEFFICIENTS; j += 1)
+      slopes[from + j] = ((up[j] ?? NaN) - (down[j] ?? NaN)) / 2;
+    from += COEFFICIENTS;
+  };
+  for (const of of data.tie) {
+    place(data, model, x, { of, by: 1 });
+    const upper = model.fitInto(up);
+    place(data, model, x, { of, by: -1 });
+    if (!upper || !model.fitInto(down)) return slopes.fill(0);
+    put();
+  }
   place(data, model, x);
   for (let i = 0; i < count; i += 1) {
     coordinates.forEach(({ at }, k) => (x[k] = at[i] ?? NaN));
@@ -45,9 +65,7 @@ const slopesOf = (data: RiseData, model: RiseModel): Float64Array => {
       const lower = model.fitInto(down);
       x[k] = home;
       if (!upper || !lower) return slopes.fill(0);
-      const from = (i * coordinates.length + k) * COEFFICIENTS;
-      for (let j = 0; j < COEFFICIENTS; j += 1)
-        slopes[from + j] = ((up[j] ?? NaN) - (down[j] ?? NaN)) / 2;
+      put();
     }
     model.setFrame(i, x);
   }
@@ -81,7 +99,8 @@ const addExact = (slopes: Float64Array, into: Float64Array): void => {
 };
 
 /**
- * Perturbs every mark of the rise with its random error and fits again.
+ * Perturbs every mark of the rise with its random error, and all tied lifts together with that of the tie, and
+ * fits again.
  *
  * The same draws are also put through the straight-line answer, whose covariance is known exactly:
  * only the difference of the two is estimated by the draws. With 2,000 runs this leaves about the
@@ -101,15 +120,21 @@ export const drawRise = (data: RiseData, seed: number, runs: number = DRAWS): Ri
   for (let run = 0; run < runs; run += 1) {
     line.fill(0);
     let from = 0;
+    const draw = (): number => {
+      const z = next();
+      for (let j = 0; j < COEFFICIENTS; j += 1)
+        line[j] = (line[j] ?? NaN) + (slopes[from + j] ?? NaN) * z;
+      from += COEFFICIENTS;
+      return z;
+    };
+    const shared = data.tie.map((of) => ({ of, z: draw() }));
     for (let i = 0; i < count; i += 1) {
       for (let k = 0; k < coordinates.length; k += 1) {
         const coordinate = coordinates[k];
-        const z = next();
-        x[k] = (coordinate?.at[i] ?? NaN) + (coordinate?.error[i] ?? NaN) * z;
-        for (let j = 0; j < COEFFICIENTS; j += 1)
-          line[j] = (line[j] ?? NaN) + (slopes[from + j] ?? NaN) * z;
-        from += COEFFICIENTS;
+        x[k] = (coordinate?.at[i] ?? NaN) + (coordinate?.error[i] ?? NaN) * draw();
       }
+      for (const { of, z } of shared)
+        x[COORDINATES.kneeV] = (x[COORDINATES.kneeV] ?? NaN) + z * (of[i] ?? NaN);
       model.setFrame(i, x);
     }
     if (!model.fitInto(out)) continue;

@@ -4,7 +4,7 @@ import { degrees } from '#shared/geometry/units.ts';
 import { LANDMARK_SETS } from '#shared/landmarks/types.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { courseOfRep, isCourse, type RepCourse } from './course-of-rep.ts';
-import { riseDataOf } from './rise-data.ts';
+import { COORDINATES, type RiseData, riseDataOf } from './rise-data.ts';
 import { drawnSpread, drawRise } from './rise-draws.ts';
 import { CHANGE, dot, fitRise, PRE, terms } from './rise-fit.ts';
 import { substitutionsOf } from './substitutions.ts';
@@ -38,6 +38,55 @@ describe.each(LANDMARK_SETS)('the fit with %s', (set) => {
       dot(CHANGE, fit.turn),
       9,
     );
+  });
+});
+
+describe('lifts tied to another clip', () => {
+  const made = dataOf(madeRep('left', early));
+  const none = (count: number) => new Float64Array(count);
+  /** Every frame so often, the lifts known but for an error that each has for itself and one that all share. */
+  const tied = (times: number, alone: number, shared: number | null): RiseData => {
+    const count = times * made.count;
+    const repeat = (column: Float64Array) =>
+      Float64Array.from({ length: count }, (_, i) => column[i % made.count] ?? NaN);
+    return {
+      ...made,
+      count,
+      lifts: repeat(made.lifts),
+      weights: repeat(made.weights),
+      thighPart: repeat(made.thighPart),
+      pelvisPart: repeat(made.pelvisPart),
+      coordinates: made.coordinates.map(({ at }, k) =>
+        k === COORDINATES.kneeV
+          ? { at: repeat(made.lifts), error: none(count).fill(alone) }
+          : { at: repeat(at), error: none(count) },
+      ),
+      liftIsTied: true,
+      tie: shared === null ? [] : [none(count).fill(shared)],
+    };
+  };
+  const spread = (data: RiseData) => drawnSpread(drawRise(data, 7), [...CHANGE, ...CHANGE]);
+
+  it('are off together: the fit of the lifts moved as one is the truth, however many frames there are', () => {
+    const moved = (by: number) => {
+      const lifts = made.lifts.map((lift) => lift + by);
+      const fit = fitRise(lifts, made.weights, made.thighPart, made.pelvisPart);
+      return dot(CHANGE, fit?.turn ?? [NaN, NaN, NaN, NaN]);
+    };
+    const truth = Math.abs(moved(2) - moved(-2)) / 2;
+    expect(truth).toBeGreaterThan(0.2);
+    for (const times of [1, 4])
+      expect(Math.abs(spread(tied(times, 0, 2)) / truth - 1)).toBeLessThan(0.1);
+  });
+
+  it('are averaged where each is off for itself', () => {
+    expect(spread(tied(4, 2, null)) / spread(tied(1, 2, null))).toBeCloseTo(0.5, 1);
+  });
+
+  it('take no draw of their own where nothing is tied', () => {
+    const untied = { ...made, tie: [] };
+    expect([...drawRise(untied, 5, 50).covariance]).toEqual([...drawRise(made, 5, 50).covariance]);
+    expect(made.tie).toEqual([]);
   });
 });
 

@@ -10,7 +10,7 @@ import { type Measure, measured, missing, type Setting, type Value } from './mea
 import type { Missing } from './missing.ts';
 import { lacks } from './need.ts';
 import { propagate } from './propagate.ts';
-import { tiedLiftAt } from './tied-lift.ts';
+import { tiedLiftAt, tiedUncertainty } from './tied-lift.ts';
 
 const FRONT_LANDMARKS: readonly LandmarkId[] = ['asis-support', 'asis-lifted', 'lifted-knee'];
 const DRAWS = 200;
@@ -70,7 +70,10 @@ const liftSpread = (frame: LevelFrame, { rig, reference }: Setting): number => {
   return Math.sqrt(squares / (DRAWS - 1));
 };
 
-/** Standard uncertainty of lift from the random errors of its marks, for small errors, degrees. */
+/**
+ * Standard uncertainty of lift from the random errors of its marks, for small errors, degrees. Of a tied lift
+ * without the error of the tie, which all frames of the rep share.
+ */
 export const liftUncertainty = (frame: LevelFrame, setting: Setting): number => {
   if (setting.tiedLift) return tiedLiftAt(setting.tiedLift, frame.time)?.u ?? NaN;
   const ids = setting.rig.camera.view === 'front' ? FRONT_LANDMARKS : SIDE_LANDMARKS;
@@ -83,7 +86,8 @@ export const liftUncertainty = (frame: LevelFrame, setting: Setting): number => 
 /** ± of lift beside one frame (95 %): marks, and the model with or without the lens height. */
 export const liftHalfWidth = (frame: LevelFrame, setting: Setting): Degrees => {
   if (setting.tiedLift) {
-    const u = tiedLiftAt(setting.tiedLift, frame.time)?.u ?? NaN;
+    const tied = tiedLiftAt(setting.tiedLift, frame.time);
+    const u = tied ? tiedUncertainty(tied) : NaN;
     return degrees(Math.hypot(1.96 * u, CONSTANTS.liftModelError.value));
   }
   if (setting.rig.camera.view !== 'front') return sideLiftHalfWidth(frame, setting);

@@ -4,6 +4,7 @@ import { CONSTANTS } from '#shared/measures/constants.ts';
 import type { LevelFrame } from '#shared/measures/level.ts';
 import { liftOf, liftUncertainty } from '#shared/measures/lift.ts';
 import type { Setting } from '#shared/measures/measure.ts';
+import { tiedLiftAt } from '#shared/measures/tied-lift.ts';
 import { isTurn, turnOf } from '#shared/measures/turn.ts';
 import { turnLandmarks } from '#shared/measures/turn-parts.ts';
 import type { UsedRep } from './fit-rep.ts';
@@ -13,6 +14,8 @@ export interface SeenLift {
   readonly rep: number;
   readonly lift: number;
   readonly liftVariance: number;
+  /** Shift of a tied lift by one standard error of each moment of the tie: all frames of the rep move together. */
+  readonly byTie: readonly number[];
   readonly thigh: number;
   readonly thighVariance: number;
   readonly pelvis: number;
@@ -39,6 +42,7 @@ const frameOf = (
     rep,
     lift: degrees(lift),
     liftVariance: liftUncertainty(frame, setting) ** 2,
+    byTie: setting.tiedLift ? (tiedLiftAt(setting.tiedLift, frame.time)?.byTie ?? []) : [],
     thigh: turn.thighPart,
     thighVariance: Math.max(turn.thighFrameVariance, least),
     pelvis: turn.pelvisPart,
@@ -73,6 +77,9 @@ const together = (frames: readonly [SeenLift, ...SeenLift[]]): SeenLift => {
     rep: first.rep,
     lift: frames.reduce((sum, { lift }) => sum + lift / count, 0),
     liftVariance: frames.reduce((sum, frame) => sum + frame.liftVariance, 0) / count ** 2,
+    byTie: first.byTie.map((_, k) =>
+      frames.reduce((sum, { byTie }) => sum + (byTie[k] ?? NaN) / count, 0),
+    ),
     thigh: thigh.value,
     thighVariance: thigh.variance,
     pelvis: pelvis.value,

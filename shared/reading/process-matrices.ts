@@ -82,8 +82,8 @@ export const believedCovariance = (
 
 /**
  * Covariance of the errors of single frames, degrees². Marks by hand err each for itself; tracked
- * ones keep their error for a while. An error of the lift shows as one of the turn where the turn is
- * steep.
+ * ones keep their error for a while; the clocks of two tied clips are off for all frames of a rep alike. An
+ * error of the lift shows as one of the turn where the turn is steep.
  */
 export const frameCovariance = (
   seen: readonly SeenLift[],
@@ -96,13 +96,15 @@ export const frameCovariance = (
       a.tracked && b.tracked && a.rep === b.rep
         ? Math.exp(-Math.abs(a.time - b.time) / CONSTANTS.trackedFor.value)
         : alone;
-    const lift = alone * a.liftVariance;
+    const tie =
+      a.rep === b.rep ? a.byTie.reduce((sum, shift, k) => sum + shift * (b.byTie[k] ?? NaN), 0) : 0;
+    const lift = alone * a.liftVariance + tie;
     return {
       thigh:
         factor * hanging * Math.sqrt(a.thighVariance * b.thighVariance) + lift * slopes.thigh ** 2,
       pelvis:
         factor * hanging * Math.sqrt(a.pelvisVariance * b.pelvisVariance) +
         lift * slopes.pelvis ** 2,
-      across: 0,
+      across: tie * slopes.thigh * slopes.pelvis,
     };
   });

@@ -11,17 +11,30 @@ interface Making {
   readonly rep?: number;
   readonly variance?: number;
   readonly tracked?: boolean;
+  /** So many frames at each lift. */
+  readonly each?: number;
+  readonly liftVariance?: number;
+  readonly byTie?: readonly number[];
 }
 
 /** A rise whose parts bend at 60°: 0.1° and 0.2° per degree of lift from there on. */
-const rise = ({ rep = 0, variance = 1, tracked = false }: Making = {}): readonly SeenLift[] =>
-  Array.from({ length: 16 }, (_, i): SeenLift => {
+const rise = ({
+  rep = 0,
+  variance = 1,
+  tracked = false,
+  each = 1,
+  liftVariance = 0.25,
+  byTie = [],
+}: Making = {}): readonly SeenLift[] =>
+  Array.from({ length: 16 * each }, (_, n): SeenLift => {
+    const i = Math.floor(n / each);
     const lift = 25 + 5 * i;
     const past = Math.max(0, lift - 60);
     return {
       rep,
       lift,
-      liftVariance: 0.25,
+      liftVariance,
+      byTie,
       thigh: 0.1 * past,
       thighVariance: variance,
       pelvis: 0.2 * past,
@@ -50,6 +63,19 @@ describe('the regression over all reps', () => {
     expect(pelvis.mean).toBeCloseTo(6, 0);
     expect(mean).toBeCloseTo(thigh.mean + pelvis.mean, 12);
     expect(Math.abs(mean - 9)).toBeLessThan(0.5);
+  });
+
+  it('is no surer of the tie of two clips from more frames, and takes both parts as off together', () => {
+    const tied = (each: number, byTie: readonly number[]) =>
+      windowOf(rise({ each, liftVariance: 0, variance: 0.01, byTie })).random;
+    const byTieAlone = (each: number) => tied(each, [2]) - tied(each, []);
+    expect(byTieAlone(1)).toBeGreaterThan(0);
+    expect(byTieAlone(4) / byTieAlone(1)).toBeGreaterThan(0.9);
+    // the same error in each frame for itself is averaged away
+    const alone = (each: number) =>
+      windowOf(rise({ each, liftVariance: 4, variance: 0.01 })).random -
+      windowOf(rise({ each, liftVariance: 0, variance: 0.01 })).random;
+    expect(alone(4) / alone(1)).toBeLessThan(0.5);
   });
 
   it('believes the prior where the marks say nothing', () => {

@@ -22,6 +22,9 @@ const front = madeFront(MOTION, { startMs: 310, stepMs: 1000 / 30, scatterPx: 1,
 /** Nobody measured the lens height. */
 const guessed: RepInput = { ...front, camera: { ...front.camera, lensHeightMm: null } };
 
+/** Enough to tell one input from another. */
+const RUNS = 400;
+
 const timed = (rep: RepInput) => {
   const course = courseOfRep(rep, 'belt+thigh', ASSUMED_MARK_ERROR, { halfWidths: false });
   if (!isCourse(course)) throw new Error(course.code);
@@ -47,8 +50,8 @@ describe.each([
   [CURRENT_ENGINE, 'belt'],
 ] as const)('engine %i with %s', (engine, set) => {
   it('reads the turn of the front clip against the lift of the side clip, and names it', () => {
-    const own = deriveReading(inputOf(guessed, engine, set));
-    const tied = deriveReading(inputOf(withSide(guessed), engine, set));
+    const own = deriveReading(inputOf(guessed, engine, set), RUNS);
+    const tied = deriveReading(inputOf(withSide(guessed), engine, set), RUNS);
     expect(tied.reps[0]).toMatchObject({ used: true, why: [], liftFrom: 'side' });
     expect(own.reps[0]).not.toHaveProperty('liftFrom');
     // true: 10° more from 60° to 90°
@@ -59,7 +62,7 @@ describe.each([
 
   it('does not ask for the lens height that it no longer needs', () => {
     const codes = (rep: RepInput) =>
-      deriveReading(inputOf(rep, engine, set)).warnings.map(({ warning }) => warning.code);
+      deriveReading(inputOf(rep, engine, set), RUNS).warnings.map(({ warning }) => warning.code);
     expect(codes(guessed)).toContain('lens-height-missing');
     expect(codes(withSide(guessed))).not.toContain('lens-height-missing');
   });

@@ -33,10 +33,13 @@ describe('two clips of one lift', () => {
 
   it('carry the uncertainty of each moment, less between two than at them', () => {
     const surer = tied({ ...own, top: at(3000, 8) }, { ...other, 'foot-off': at(400, 8) });
-    expect(surer(1000).u).toBeCloseTo(10, 12);
-    expect(surer(3000).u).toBeCloseTo(10, 12);
-    expect(surer(2000).u).toBeCloseTo(Math.hypot(5, 5), 12);
-    expect(surer(9000).u).toBeCloseTo(Math.hypot(6, 6), 12);
+    const [off, top, down] = [10, 10, Math.hypot(6, 6)];
+    expect(surer(1000).byEvent).toEqual([off, 0, 0]);
+    expect(surer(3000).byEvent).toEqual([0, top, 0]);
+    expect(surer(2000).byEvent).toEqual([off / 2, top / 2, 0]);
+    expect(surer(3500).byEvent).toEqual([0, 0.75 * top, 0.25 * down]);
+    expect(surer(9000).byEvent).toEqual([0, 0, down]);
+    expect(surer(-9).byEvent).toEqual([off, 0, 0]);
   });
 
   it('may be tied by a clap and one moment, in whichever order they come', () => {

@@ -13,8 +13,14 @@ export interface EventTime {
   readonly u: Milliseconds;
 }
 
-/** A time of the other clip, and its standard uncertainty from the moments that the clocks are tied by. */
-export type MappedTime = Pick<EventTime, 'time' | 'u'>;
+/**
+ * A time of the other clip, and how far it moves with one standard error of each moment that the clocks are tied
+ * by, in the order of `events`. Times that hang on the same moment are off together.
+ */
+export interface MappedTime {
+  readonly time: Milliseconds;
+  readonly byEvent: readonly Milliseconds[];
+}
 export type EventTimes = { readonly [E in SharedEvent]?: EventTime | undefined };
 
 /** Why two clips cannot show the same lift, or why nothing can tell. */
@@ -76,18 +82,19 @@ const onOther =
     const next = knots.findIndex(({ own }) => own.time >= time);
     const b = next < 0 ? knots.at(-1) : knots[next];
     const a = next <= 0 ? b : knots[next - 1];
-    if (!a || !b) return { time: milliseconds(NaN), u: milliseconds(NaN) };
-    const u = ({ own, other }: Knot): number => Math.hypot(own.u, other.u);
+    if (!a || !b) return { time: milliseconds(NaN), byEvent: [] };
     // before the first and after the last moment both clocks run alike
-    if (a === b)
-      return {
-        time: milliseconds(b.other.time + time - b.own.time),
-        u: milliseconds(u(b)),
-      };
-    const part = (time - a.own.time) / (b.own.time - a.own.time);
+    const part = a === b ? 1 : (time - a.own.time) / (b.own.time - a.own.time);
+    const share = (knot: Knot): number => (knot === b ? part : knot === a ? 1 - part : 0);
     return {
-      time: milliseconds(a.other.time + part * (b.other.time - a.other.time)),
-      u: milliseconds(Math.hypot((1 - part) * u(a), part * u(b))),
+      time: milliseconds(
+        a === b
+          ? b.other.time + time - b.own.time
+          : a.other.time + part * (b.other.time - a.other.time),
+      ),
+      byEvent: knots.map((knot) =>
+        milliseconds(share(knot) * Math.hypot(knot.own.u, knot.other.u)),
+      ),
     };
   };
 

@@ -105,9 +105,10 @@ export function MethodPage() {
           side, turn from the front. Their clocks are tied by what both show: foot off, reaching the
           top, foot down, or a clap; straight between these. The side clip’s foot is first moved to
           where the front camera saw it, since a foot that comes forward looks lower from above. How
-          far the lift moves while the clocks may be apart is part of its ±. Where the time between
-          two of these moments differs by more than frame steps and marks explain, the clips show
-          different reps and are not tied; the page says so.
+          far the lift moves while the clocks may be apart is part of its ±; it moves all frames of
+          the rep together, so that more frames do not lessen it. Where the time between two of
+          these moments differs by more than frame steps and marks explain, the clips show different
+          reps and are not tied; the page says so.
         </p>
       </Section>
       <Section title="What it cannot say" wide>
