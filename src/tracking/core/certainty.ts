@@ -1,0 +1,63 @@
+import type { TrackState } from '../types.ts';
+import { eigenvalues } from './solve.ts';
+import type { Template } from './template.ts';
+
+/** What was seen of one point on one picture. */
+export interface Evidence {
+  /** Likeness to the template, −1 to 1. */
+  readonly correlation: number;
+  /** How far likeness fell since the picture before; negative where it rose. */
+  readonly fall: number;
+  /** Likeness of the patch's middle alone to the keyframe's, −1 to 1. */
+  readonly core: number;
+  /** The share of the patch that shows something else, 0 to 1. */
+  readonly covered: number;
+  /** Forth and back again, how far from where it began, pixels. Null where that was not tried. */
+  readonly roundTrip: number | null;
+  /** What the template's error says of the place, one standard deviation, pixels. */
+  readonly spread: number;
+}
+
+/** 1 up to `good`, 0 from `bad` on, straight between; for values that are better when smaller. */
+const falling = (value: number, good: number, bad: number): number =>
+  Number.isFinite(value) ? Math.min(1, Math.max(0, (bad - value) / (bad - good))) : 0;
+
+/**
+ * 0 to 1; each piece of evidence can only lower it. A fall of likeness counts only where likeness
+ * is no longer good: blur makes it fall as well, but not as deep as something that covers the point.
+ * The bounds were set on rendered clips of known truth; no other source.
+ */
+export const confidenceOf = (seen: Evidence): number => {
+  const { correlation, fall, core, covered, roundTrip, spread } = seen;
+  const alike = falling(1 - correlation, 0.12, 0.5);
+  const returned = roundTrip === null ? 0.8 : falling(roundTrip, 0.6, 3.5);
+  const sharp = falling(spread, 0.5, 2.5);
+  const steady = correlation > 0.88 ? 1 : falling(fall, 0.06, 0.3);
+  const bare = falling(covered, 0.08, 0.35);
+  const same = falling(1 - core, 0.5, 0.85);
+  return alike * returned * sharp * steady * bare * same;
+};
+
+const SURE = 0.5;
+const UNSURE = 0.15;
+
+export const stateOf = (confidence: number): TrackState =>
+  confidence >= SURE ? 'sure' : confidence >= UNSURE ? 'unsure' : 'lost';
+
+/** Neighbouring pixels err alike: that many are worth one. */
+const ALIKE_PIXELS = 4;
+
+/**
+ * Standard deviation of a place found with this likeness, pixels: what is not alike is taken as
+ * noise, against the template's weakest slope. Infinity where nothing determines the place.
+ */
+export const spreadOf = (template: Template, correlation: number): number => {
+  const { normal, slopes, contrast, window } = template;
+  const count = slopes.length;
+  const [weakest] = eigenvalues(normal[0] ?? 0, normal[1] ?? 0, normal[count + 1] ?? 0);
+  if (!(weakest > 0) || !(correlation > 0)) return Infinity;
+  let squares = 0;
+  for (const weight of window) squares += weight * weight;
+  const unlike = contrast * contrast * Math.max(0, 1 / (correlation * correlation) - 1);
+  return Math.sqrt((ALIKE_PIXELS * squares * unlike) / weakest);
+};

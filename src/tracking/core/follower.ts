@@ -1,0 +1,213 @@
+import type { TrackState } from '../types.ts';
+import { align, type Aligned, compare } from './align.ts';
+import { confidenceOf, spreadOf, stateOf } from './certainty.ts';
+import { coveredShare } from './covered.ts';
+import { flow, type Place } from './flow.ts';
+import type { Plane } from './plane.ts';
+import { pyramidAround, type Pyramid, toLevelX, toLevelY } from './pyramid.ts';
+import { search } from './search.ts';
+import { makeTemplate, type Template } from './template.ts';
+import { atPlace, movedTo, type Warp } from './warp.ts';
+
+/** Radii of the patches, pixels of the picture looked at. */
+export interface FollowSettings {
+  /** Of the step from picture to picture, on each level. */
+  readonly stepRadius: number;
+  /** Of the template that keeps a point from drifting. */
+  readonly templateRadius: number;
+}
+
+export const SETTINGS: FollowSettings = { stepRadius: 10, templateRadius: 17 };
+
+/** Where the point is on one picture; null where it is lost. */
+export interface Seen {
+  readonly place: Place | null;
+  readonly confidence: number;
+  readonly state: TrackState;
+}
+
+const LEVELS = 4;
+/** The level on which a lost point is looked for. */
+const SEARCH_LEVEL = 2;
+const SEARCH_RADIUS = 8;
+/** Half the side of what is looked at about a point, pixels. */
+const REACH = 128;
+/** How far refining may move what stepping found, pixels. */
+const REFINE_REACH = 7;
+/** Below this likeness other ways of finding the point are tried. */
+const DOUBTFUL = 0.8;
+/** A lost point is believed to be back from this likeness on … */
+const BACK = 0.86;
+/** … if nothing else nearby is nearly as much like it. */
+const DISTINCT = 0.06;
+
+/** What is found again within this of where it is expected is most likely the same, pixels. */
+const NEAR = 6;
+/** What is found elsewhere may be another dot that looks the same: a person has to look at it. */
+const FOUND_AGAIN = 0.4;
+
+interface Candidate extends Aligned {
+  readonly template: Template;
+  readonly roundTrip: number | null;
+}
+
+/** Follows one point away from its keyframe, picture by picture, in either direction of time. */
+export class Follower {
+  readonly #settings: FollowSettings;
+  /** Of the keyframe: never replaced. */
+  readonly #first: Template;
+  readonly #searched: Template;
+  /** Its middle alone: what slides over the point's surroundings covers this at last. */
+  readonly #core: Template;
+  /** The newest: as the point looks now, where that has slowly changed. */
+  #newest: Template;
+  #warp: Warp;
+  #newestWarp: Warp;
+  #velocity: Place = { x: 0, y: 0 };
+  #before: Pyramid;
+  #correlation = 1;
+  /** Pictures since the point was last seen; 0 while it is. */
+  #lostFor = 0;
+  /** How sure it may be called: less where it was found again, until it has proved itself. */
+  #trust = 1;
+
+  constructor(picture: Plane, at: Place, settings: FollowSettings = SETTINGS) {
+    this.#settings = settings;
+    this.#warp = atPlace(at.x, at.y);
+    this.#newestWarp = this.#warp;
+    this.#before = pyramidAround(picture, at.x, at.y, REACH, LEVELS);
+    this.#first = makeTemplate(picture, this.#warp, settings.templateRadius, 'similar');
+    this.#newest = this.#first;
+    this.#core = makeTemplate(picture, this.#warp, Math.ceil(settings.templateRadius / 2), 'move');
+    this.#searched = this.#searchTemplate(at);
+  }
+
+  /** The next picture in the direction that is being followed. */
+  step(picture: Plane): Seen {
+    const seen = this.#lostFor > 0 ? this.#lookFor(picture) : this.#followOn(picture);
+    return seen;
+  }
+
+  #searchTemplate(at: Place): Template {
+    const level = this.#before[SEARCH_LEVEL];
+    if (!level) throw new RangeError('The pyramid is too low to search on.');
+    const warp = atPlace(toLevelX(level, at.x), toLevelY(level, at.y));
+    return makeTemplate(level.plane, warp, SEARCH_RADIUS, 'move');
+  }
+
+  #followOn(picture: Plane): Seen {
+    const from = { x: this.#warp.tx, y: this.#warp.ty };
+    const guess = { x: from.x + this.#velocity.x, y: from.y + this.#velocity.y };
+    const after = pyramidAround(picture, guess.x, guess.y, REACH, LEVELS);
+    let best = this.#stepFrom(after, from, guess);
+    if (!best || best.correlation < DOUBTFUL) {
+      const still = this.#stepFrom(after, from, from);
+      if (still && still.correlation > (best?.correlation ?? 0)) best = still;
+    }
+    if (!best || best.correlation < DOUBTFUL) {
+      const fetched = this.#fetch(after, guess, 6);
+      if (fetched && fetched.correlation > (best?.correlation ?? 0) + 0.05) best = fetched;
+    }
+    if (!best) return this.#lose(after);
+    const fall = this.#correlation - best.correlation;
+    const covered = coveredShare(picture, best.template, best);
+    const leap = Math.hypot(best.warp.tx - guess.x, best.warp.ty - guess.y);
+    if (best.roundTrip === null && leap > NEAR) this.#trust = FOUND_AGAIN;
+    const evidence = {
+      correlation: best.correlation,
+      fall,
+      covered,
+      core: compare(picture, this.#core, best.warp).correlation,
+      roundTrip: best.roundTrip,
+      spread: spreadOf(best.template, best.correlation),
+    };
+    const confidence = Math.min(this.#trust, confidenceOf(evidence) * best.within);
+    const state = stateOf(confidence);
+    if (state === 'lost') return this.#lose(after);
+    this.#take(best, after, from);
+    if (this.#trust > FOUND_AGAIN) this.#trust = Math.min(1, this.#trust + 0.05);
+    if (state === 'sure' && fall < 0.03 && covered === 0) this.#refresh(picture, best);
+    return { place: { x: best.warp.tx, y: best.warp.ty }, confidence, state };
+  }
+
+  /** Steps there, goes back to see whether that leads home, and refines against the templates. */
+  #stepFrom(after: Pyramid, from: Place, guess: Place): Candidate | null {
+    const { stepRadius } = this.#settings;
+    const there = flow(this.#before, after, from, guess, stepRadius);
+    if (!there) return null;
+    const back = { x: there.x - (guess.x - from.x), y: there.y - (guess.y - from.y) };
+    const home = flow(after, this.#before, there, back, stepRadius, 2);
+    const roundTrip = home ? Math.hypot(home.x - from.x, home.y - from.y) : Infinity;
+    return this.#refine(after, there, roundTrip);
+  }
+
+  #refine(after: Pyramid, at: Place, roundTrip: number | null): Candidate | null {
+    const plane = after[0]?.plane;
+    if (!plane) return null;
+    const first = align(plane, this.#first, movedTo(this.#warp, at.x, at.y), REFINE_REACH);
+    const byFirst = first && { ...first, template: this.#first, roundTrip };
+    if (this.#newest === this.#first) return byFirst;
+    const newest = align(plane, this.#newest, movedTo(this.#newestWarp, at.x, at.y), REFINE_REACH);
+    if (!newest) return byFirst;
+    // what was never refreshed does not drift: it wins unless it fits clearly worse
+    if (byFirst && byFirst.correlation > newest.correlation - 0.06) return byFirst;
+    return { ...newest, template: this.#newest, roundTrip };
+  }
+
+  /** A wide look on a coarse level for what the keyframe showed, then refined. */
+  #fetch(after: Pyramid, about: Place, reach: number): Candidate | null {
+    const level = after[SEARCH_LEVEL];
+    if (!level) return null;
+    const start = movedTo(this.#warp, toLevelX(level, about.x), toLevelY(level, about.y));
+    const found = search(level.plane, this.#searched, start, reach);
+    if (!found || found.second > found.correlation - DISTINCT) return null;
+    const at = {
+      x: level.x0 + found.warp.tx * level.scale,
+      y: level.y0 + found.warp.ty * level.scale,
+    };
+    return this.#refine(after, at, null);
+  }
+
+  #lookFor(picture: Plane): Seen {
+    const about = { x: this.#warp.tx, y: this.#warp.ty };
+    const after = pyramidAround(picture, about.x, about.y, REACH, LEVELS);
+    const found = this.#fetch(after, about, Math.min(18, 8 + this.#lostFor));
+    if (!found || found.correlation < BACK) return this.#lose(after);
+    this.#take(found, after, about);
+    this.#velocity = { x: 0, y: 0 };
+    const leap = Math.hypot(found.warp.tx - about.x, found.warp.ty - about.y);
+    this.#trust = leap > NEAR ? FOUND_AGAIN : Math.min(this.#trust, 0.45);
+    const confidence = this.#trust;
+    return {
+      place: { x: found.warp.tx, y: found.warp.ty },
+      confidence,
+      state: stateOf(confidence),
+    };
+  }
+
+  #take(best: Candidate, after: Pyramid, from: Place): void {
+    if (best.template === this.#first) this.#warp = best.warp;
+    else this.#warp = movedTo(this.#warp, best.warp.tx, best.warp.ty);
+    this.#newestWarp =
+      best.template === this.#newest
+        ? best.warp
+        : movedTo(this.#newestWarp, best.warp.tx, best.warp.ty);
+    this.#velocity = { x: best.warp.tx - from.x, y: best.warp.ty - from.y };
+    this.#before = after;
+    this.#correlation = best.correlation;
+    this.#lostFor = 0;
+  }
+
+  #lose(after: Pyramid): Seen {
+    this.#lostFor += 1;
+    this.#before = after;
+    return { place: null, confidence: 0, state: 'lost' };
+  }
+
+  #refresh(picture: Plane, best: Candidate): void {
+    if (best.correlation > 0.82 || best.correlation < 0.7) return;
+    const plain = atPlace(best.warp.tx, best.warp.ty);
+    this.#newest = makeTemplate(picture, plain, this.#settings.templateRadius, 'similar');
+    this.#newestWarp = plain;
+  }
+}
