@@ -26,6 +26,7 @@ export default defineConfig({
           ],
           exclude: ['**/node_modules/**'],
           environment: 'node',
+          testTimeout: 60_000,
         },
       },
       {

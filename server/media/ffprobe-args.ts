@@ -14,31 +14,33 @@ export const guard = (demuxer: Demuxer): string[] => [
   demuxer,
 ];
 
-/** Streams and container as JSON; of the tags only the stream's length, never a place or a name. */
-export const headerArgs = (path: string, demuxer: Demuxer): string[] => [
+/** Of the tags only the stream's length, never a place or a name. */
+const headerEntries =
+  'stream=index,codec_type,codec_name,pix_fmt,width,height,sample_aspect_ratio,color_transfer,color_range,time_base,duration,nb_frames:stream_disposition=attached_pic:stream_side_data=rotation:format=duration';
+
+/** A stranger's file as JSON, one section on a line. */
+const entries = (path: string, demuxer: Demuxer, wanted: string): string[] => [
   '-v',
   'error',
   ...guard(demuxer),
   '-show_entries',
-  'stream=index,codec_type,codec_name,pix_fmt,width,height,sample_aspect_ratio,color_transfer,color_range,time_base,duration,nb_frames:stream_disposition=attached_pic:stream_side_data=rotation:format=duration',
+  wanted,
   '-of',
-  'json',
+  'json=compact=1',
   '-i',
   path,
 ];
 
-/** One line per packet: stream, pts, duration, flags. All streams, because a length may be the sound's. */
-export const packetArgs = (path: string, demuxer: Demuxer): string[] => [
-  '-v',
-  'error',
-  ...guard(demuxer),
-  '-show_entries',
-  'packet=stream_index,pts,duration,flags',
-  '-of',
-  'csv=p=0',
-  '-i',
-  path,
-];
+/** Streams and container. */
+export const headerArgs = (path: string, demuxer: Demuxer): string[] =>
+  entries(path, demuxer, headerEntries);
+
+/**
+ * First every packet of every stream, because a length may be the sound's; then the header. One run
+ * for both: starting the tool costs as much as reading a short clip.
+ */
+export const fileArgs = (path: string, demuxer: Demuxer): string[] =>
+  entries(path, demuxer, `packet=codec_type,stream_index,pts,duration,flags:${headerEntries}`);
 
 /** Of a copy that was made here: its packets, size and clock in one run. */
 export const copyArgs = (path: string): string[] => [

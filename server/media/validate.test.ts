@@ -149,14 +149,31 @@ describe('decoded frames are compared with those promised', () => {
 });
 
 describe('a line of packets', () => {
+  const line = (fields: string) => `        { "codec_type": ${fields} },`;
   it.each([
-    ['0,1536,512,K_', { stream: 0, pts: 1536, duration: 512, discarded: false }],
-    ['0,-512,512,_D', { stream: 0, pts: -512, duration: 512, discarded: true }],
-    ['1,N/A,N/A,__', { stream: 1, pts: null, duration: null, discarded: false }],
-    ['0,5,0,K__', { stream: 0, pts: 5, duration: null, discarded: false }],
+    [
+      line('"video", "stream_index": 0, "pts": 1536, "duration": 512, "flags": "K_"'),
+      { stream: 0, picture: true, pts: 1536, duration: 512, discarded: false },
+    ],
+    [
+      line('"video", "stream_index": 0, "pts": -512, "duration": 512, "flags": "_D"'),
+      { stream: 0, picture: true, pts: -512, duration: 512, discarded: true },
+    ],
+    [
+      line('"audio", "stream_index": 1, "flags": "__"'),
+      { stream: 1, picture: false, pts: null, duration: null, discarded: false },
+    ],
+    [
+      line('"video", "stream_index": 0, "pts": 5, "duration": 0, "flags": "K__"').slice(0, -1),
+      { stream: 0, picture: true, pts: 5, duration: null, discarded: false },
+    ],
+    [
+      `${line('"audio", "stream_index": 1, "pts": -1024, "duration": 1024, "flags": "KD"').slice(0, -3)},`,
+      { stream: 1, picture: false, pts: -1024, duration: 1024, discarded: true },
+    ],
     ['', null],
-    ['0,1', null],
-  ])('%j', (line, packet) => {
-    expect(parsePacket(line)).toEqual(packet);
+    ['        { "index": 0, "codec_type": "video", "time_base": "1/15360",', null],
+  ])('%j', (text, packet) => {
+    expect(parsePacket(text)).toEqual(packet);
   });
 });
