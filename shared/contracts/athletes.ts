@@ -72,7 +72,11 @@ export const consentBody = z
   })
   .meta({ id: 'ConsentBody' });
 
-export const consentState = z.enum(['valid', 'lapsed', 'withdrawn']).meta({ id: 'ConsentState' });
+export const consentState = z.enum(['valid', 'lapsed', 'withdrawn', 'assent-missing']).meta({
+  id: 'ConsentState',
+  description:
+    'assent-missing: a guardian’s for a minor whose own yes was not recorded; it does not count.',
+});
 export const consent = z
   .object({
     id,
@@ -107,6 +111,8 @@ export const athlete = z
     /** What the valid consents together allow today; empty where there is none. */
     consentedTo: z.array(purpose),
     consentUntil: day.nullable(),
+    /** A minor's own yes is all that their consent to filming lacks. */
+    assentMissing: z.boolean(),
     lastVisit: day.nullable(),
     visitCount: z.int(),
     version,

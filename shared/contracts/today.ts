@@ -43,6 +43,17 @@ export const waiting = z
       body: z.string(),
       by: personRef,
     }),
+    z.object({
+      kind: z.literal('second-marking-asked'),
+      secondMarkingId: id,
+      repNumber: z.int(),
+      side,
+      /** How many are to be marked again. */
+      frames: z.int(),
+      askedBy: personRef,
+      /** Asked for by the one who marks. */
+      mine: z.boolean(),
+    }),
     z.object({ kind: z.literal('consent-lapses'), until: z.iso.date() }),
     z.object({ kind: z.literal('link-lapses'), visitId: id, replayId: id, expiresAt: moment }),
   ])

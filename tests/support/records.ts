@@ -40,6 +40,7 @@ export const anAthlete = (change: Partial<Athlete> = {}): Athlete => ({
   coach,
   consentedTo: ['assessment'],
   consentUntil: '2099-01-11',
+  assentMissing: false,
   lastVisit: null,
   visitCount: 0,
   version: 1,

@@ -12,6 +12,7 @@ import {
   type Where,
 } from './athlete-rows.ts';
 import { inSightSql } from './caseload.ts';
+import { counting } from './consent-check.ts';
 import { today } from './days.ts';
 
 export type AthleteListQuery = z.infer<typeof athleteListQuery>;
@@ -31,11 +32,16 @@ const ORDERS: Record<AthleteListQuery['sort'], string> = {
   '-lastVisit': 'v.last_visit desc nulls last, a.id',
 };
 
-/** A consent to filming and assessment that is valid on the day given. */
-const CONSENTED = `exists (
-  select from consent x where x.athlete_id = a.id and x.withdrawn_at is null
-  and ?::date between x.valid_from and x.valid_until and 'assessment' = any (x.purposes)
-)`;
+/** A consent to filming and assessment that counts on this day. */
+const consentedOn = (on: string): Where => {
+  const { sql, params } = counting(on);
+  return {
+    sql: `exists (
+      select from consent x where x.athlete_id = a.id and ${sql} and 'assessment' = any (x.purposes)
+    )`,
+    params,
+  };
+};
 
 const asPattern = (word: string): string => `%${word.replaceAll(/[\\%_]/g, '\\$&')}%`;
 
@@ -47,8 +53,8 @@ const whereOf = (actor: UserActor, { q, coach, consent }: AthleteListQuery): Whe
   }
   if (coach !== undefined) parts.push({ sql: 'a.coach_id = ?', params: [coach] });
   if (consent !== undefined) {
-    const sql = consent === 'valid' ? CONSENTED : `not ${CONSENTED}`;
-    parts.push({ sql, params: [today()] });
+    const { sql, params } = consentedOn(today());
+    parts.push({ sql: consent === 'valid' ? sql : `not ${sql}`, params });
   }
   return {
     sql: parts.map(({ sql }) => `(${sql})`).join(' and '),

@@ -1,5 +1,6 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Purpose } from '#shared/contracts/athletes.ts';
+import { counting } from './consent-check.ts';
 
 /** An athlete with what is known about them at a glance. */
 export type AthleteRow = {
@@ -17,6 +18,8 @@ export type AthleteRow = {
   created_at: Date | string;
   consented_to: Purpose[] | null;
   consent_until: string | null;
+  /** A consent to filming would be valid, had the child's own yes been recorded. */
+  assent_missing: boolean;
   last_visit: string | null;
   visit_count: number;
 };
@@ -26,18 +29,24 @@ export interface Where {
   readonly params: readonly unknown[];
 }
 
-/** Valid: begun, not over, not withdrawn. One athlete can have several at once. */
-const SELECT = `
+/** One athlete can have several consents at once. @param counts that a consent counts today */
+const select = (counts: string): string => `
   select a.id, a.given_name, a.family_name, a.birth_date::text, a.height_mm, a.sport, a.cautions, a.contact_email,
     a.coach_id, coach.name as coach_name, a.version, a.created_at,
-    c.consented_to, c.consent_until::text, v.last_visit::text, v.visit_count
+    c.consented_to, c.consent_until::text, m.assent_missing, v.last_visit::text, v.visit_count
   from athlete a
   join account coach on coach.id = a.coach_id
   left join lateral (
     select array_agg(distinct purpose) as consented_to, max(valid_until) as consent_until
     from consent x cross join unnest(x.purposes) as purpose
-    where x.athlete_id = a.id and x.withdrawn_at is null and ?::date between x.valid_from and x.valid_until
+    where x.athlete_id = a.id and ${counts}
   ) c on true
+  left join lateral (
+    select exists (
+      select from consent x where x.athlete_id = a.id and x.withdrawn_at is null and not x.assent
+        and ?::date between x.valid_from and x.valid_until and 'assessment' = any (x.purposes)
+    ) as assent_missing
+  ) m on true
   left join lateral (
     select max(day) as last_visit, count(*)::int as visit_count from visit where visit.athlete_id = a.id
   ) v on true`;
@@ -48,13 +57,13 @@ export const readAthletes = (
   where: Where,
   order = 'a.id',
   page: { readonly limit: number; readonly offset: number } = { limit: 1, offset: 0 },
-): Promise<AthleteRow[]> =>
-  em.execute<AthleteRow[]>(`${SELECT} where ${where.sql} order by ${order} limit ? offset ?`, [
-    today,
-    ...where.params,
-    page.limit,
-    page.offset,
-  ]);
+): Promise<AthleteRow[]> => {
+  const counts = counting(today);
+  return em.execute<AthleteRow[]>(
+    `${select(counts.sql)} where ${where.sql} order by ${order} limit ? offset ?`,
+    [...counts.params, today, ...where.params, page.limit, page.offset],
+  );
+};
 
 export type CoachRow = { id: string; name: string };
 

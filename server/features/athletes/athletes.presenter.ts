@@ -18,6 +18,10 @@ export const presentAthlete = (row: AthleteRow): Athlete => ({
   coach: { id: row.coach_id, name: row.coach_name },
   consentedTo: row.consented_to ?? [],
   consentUntil: row.consent_until,
+  assentMissing:
+    row.assent_missing &&
+    isMinor(row.birth_date) &&
+    !(row.consented_to ?? []).includes('assessment'),
   lastVisit: row.last_visit,
   visitCount: row.visit_count,
   version: row.version,
@@ -34,10 +38,13 @@ export const presentAthletes = (
 
 const stateOf = (consent: Consent): ConsentShape['state'] => {
   if (consent.withdrawnAt) return 'withdrawn';
-  return consent.validUntil < today() ? 'lapsed' : 'valid';
+  if (consent.validUntil < today()) return 'lapsed';
+  return isMinor(consent.athlete.unwrap().birthDate) && !consent.assent
+    ? 'assent-missing'
+    : 'valid';
 };
 
-/** @param consent with `recordedBy` loaded */
+/** @param consent with `recordedBy` and `athlete` loaded */
 export const presentConsent = (consent: Consent): ConsentShape => ({
   id: consent.id,
   givenBy: consent.givenBy,

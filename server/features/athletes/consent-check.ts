@@ -1,7 +1,18 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Purpose } from '#shared/contracts/athletes.ts';
 import { Problem } from '../../http/problem.ts';
-import { today } from './days.ts';
+import { adultIfBornBy, today } from './days.ts';
+
+/**
+ * A consent `x` of an athlete `a` that counts on a day: begun, not over, not withdrawn, and of a minor only with
+ * their own yes. Rows from before that was asked for lack it.
+ */
+export const counting = (on: string) =>
+  ({
+    sql: `x.withdrawn_at is null and ?::date between x.valid_from and x.valid_until
+      and (x.assent or a.birth_date::text <= ?)`,
+    params: [on, adultIfBornBy(on)],
+  }) as const;
 
 /** Whether a consent of this athlete allows this today. */
 export const hasConsent = async (
@@ -9,10 +20,11 @@ export const hasConsent = async (
   athleteId: string,
   purpose: Purpose,
 ): Promise<boolean> => {
+  const counts = counting(today());
   const rows = await em.execute<unknown[]>(
-    `select 1 from consent where athlete_id = ? and withdrawn_at is null
-     and ?::date between valid_from and valid_until and ? = any (purposes) limit 1`,
-    [athleteId, today(), purpose],
+    `select 1 from consent x join athlete a on a.id = x.athlete_id
+     where a.id = ? and ${counts.sql} and ? = any (x.purposes) limit 1`,
+    [athleteId, ...counts.params, purpose],
   );
   return rows.length > 0;
 };

@@ -21,7 +21,7 @@ export const listConsents = async (
   return unit.em.find(
     Consent,
     { athlete: athleteId },
-    { orderBy: { recordedAt: 'desc', id: 'desc' }, populate: ['recordedBy'] },
+    { orderBy: { recordedAt: 'desc', id: 'desc' }, populate: ['recordedBy', 'athlete'] },
   );
 };
 

@@ -7,7 +7,7 @@ import { AuditEntry } from '../practice/audit-entry.entity.ts';
 import { Replay } from '../replays/replay.entity.ts';
 import { makeRep } from '../reps/rep.factory.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
-import type { Athlete } from './athlete.entity.ts';
+import { Athlete } from './athlete.entity.ts';
 import { makeAthlete, makeConsent } from './athlete.factory.ts';
 import { hasConsent } from './consent-check.ts';
 import { daysLater, today } from './days.ts';
@@ -74,6 +74,67 @@ const opens = async (token: string): Promise<boolean> => {
   const em = api.ground.orm.em.fork();
   return (await em.execute('select * from find_replay(?)', [tokenHash(token)])).length > 0;
 };
+
+describe('a guardian’s consent from before the child was asked', () => {
+  const old = () => {
+    const { coach, practiceId } = api.world;
+    return api.ground.inPractice(product(practiceId), ({ em }) => {
+      const mine = em.getReference(Athlete, minor.id);
+      const guardian = { givenBy: 'guardian', guardianName: 'Ada Marsh' } as const;
+      makeConsent(em, { athlete: mine, recordedBy: coach, ...guardian });
+      return Promise.resolve(makeVisit(em, { athlete: mine, coach }).id);
+    });
+  };
+  const seen = async () => {
+    const coach = await api.as(api.world.coach);
+    const { body } = await coach.get(`/api/athletes/${minor.id}`).expect(200);
+    const { body: list } = await coach.get(`/api/athletes/${minor.id}/consents`).expect(200);
+    return { ...body, states: list.items.map(({ state }: { state: string }) => state) };
+  };
+  const send = async (visitId: string) =>
+    (await api.as(api.world.coach))
+      .post(`/api/visits/${visitId}/uploads`)
+      .send({ name: 'a.mov', bytes: 1000, view: 'front' });
+
+  it('does not count for new clips nor links, and says what is missing', async () => {
+    const visitId = await old();
+    expect(await consented('assessment', minor)).toBe(false);
+    expect(await consented('sharing-by-link', minor)).toBe(false);
+    expect(await seen()).toMatchObject({
+      consentedTo: [],
+      consentUntil: null,
+      assentMissing: true,
+      states: ['assent-missing'],
+    });
+    const refused = await send(visitId);
+    expect(refused.body.code).toBe('consent-missing');
+    const coach = await api.as(api.world.coach);
+    const { body } = await coach.get('/api/athletes?consent=valid&pageSize=100').expect(200);
+    expect(body.items.map(({ id }: { id: string }) => id)).not.toContain(minor.id);
+  });
+
+  it('is made good by a consent with the child’s own yes', async () => {
+    const visitId = await old();
+    const guardian = { ...BODY, givenBy: 'guardian', guardianName: 'Ada Marsh', assent: true };
+    expect((await record(minor, guardian)).status).toBe(201);
+    expect(await consented('assessment', minor)).toBe(true);
+    expect(await seen()).toMatchObject({
+      assentMissing: false,
+      states: ['valid', 'assent-missing'],
+    });
+    // a chaperone in the room is what is left
+    expect((await send(visitId)).body.code).toBe('safety-check-stops');
+  });
+
+  it('counts for whoever is of age, and an adult’s own needs no other', async () => {
+    const { coach, practiceId } = api.world;
+    await api.ground.inPractice(product(practiceId), ({ em }) => {
+      const grown = em.getReference(Athlete, adult.id);
+      return Promise.resolve(makeConsent(em, { athlete: grown, recordedBy: coach }));
+    });
+    expect(await consented('assessment')).toBe(true);
+  });
+});
 
 describe('a consent', () => {
   it('is recorded with who, what for and until when, and counts at once', async () => {

@@ -4,11 +4,13 @@ export const today = (): string => dayOf(new Date());
 
 const ADULT_AT = 18;
 
+/** Whoever was born on this day or before, compared as text, is of age. */
+export const adultIfBornBy = (on: string): string =>
+  `${String(Number(on.slice(0, 4)) - ADULT_AT).padStart(4, '0')}${on.slice(4)}`;
+
 /** Under 18 on this day. Born on 29 February, a person comes of age on 1 March of a common year. */
-export const isMinor = (birthDate: string, on: string = today()): boolean => {
-  const year = String(Number(birthDate.slice(0, 4)) + ADULT_AT).padStart(4, '0');
-  return on < `${year}${birthDate.slice(4)}`;
-};
+export const isMinor = (birthDate: string, on: string = today()): boolean =>
+  birthDate > adultIfBornBy(on);
 
 /** Whole days later. */
 export const daysLater = (day: string, count: number): string =>

@@ -9,11 +9,13 @@ import { consentTasks, linkTasks } from './lapse-tasks.ts';
 import { callTasks, repTasks } from './marking-tasks.ts';
 import { commentTasks, readingTasks } from './review-tasks.ts';
 import type { WaitingItem } from './scope.ts';
+import { secondMarkingTasks } from './second-marking-tasks.ts';
 
 /** Somebody who waits comes before something that waits, and what ends by itself comes last. */
 const KINDS: readonly ((unit: Unit<UserActor>) => Promise<WaitingItem[]>)[] = [
   commentTasks,
   readingTasks,
+  secondMarkingTasks,
   callTasks,
   repTasks,
   clipTasks,

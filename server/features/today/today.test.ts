@@ -11,7 +11,9 @@ import { Comment } from '../comments/comment.entity.ts';
 import { Reading } from '../readings/reading.entity.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import { Replay } from '../replays/replay.entity.ts';
+import { SecondMarking } from '../second-markings/second-marking.entity.ts';
 import { makeRep } from '../reps/rep.factory.ts';
+import { Visit } from '../visits/visit.entity.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
 import { mondayOf } from './today.service.ts';
 
@@ -178,6 +180,47 @@ describe('today', () => {
     ]);
     expect(await itemsOf(coach)).toContainEqual(
       expect.objectContaining({ kind: 'comment-open', body: 'Good marks.' }),
+    );
+  });
+
+  it('tells whoever is asked for a second marking, until it is finished, and shows no mark', async () => {
+    const { coach, supervisor, athlete, practiceId } = api.world;
+    const [visitId, open] = await api.ground.inPractice(product(practiceId), async ({ em }) => {
+      const visit = makeVisit(em, { athlete, coach });
+      const made = makeClip(em, { visit, uploadedBy: coach, supportSide: 'right' });
+      makeRep(em, { clip: made, createdBy: coach });
+      const rep = makeRep(em, { clip: made, createdBy: coach, startFrame: 200 });
+      const asked = {
+        rep,
+        marker: supervisor,
+        askedBy: coach,
+        frames: [{ frame: 210, landmarks: ['kneecap'] as const }],
+        first: [],
+        phases: {},
+      };
+      const again = em.create(SecondMarking, asked);
+      em.create(SecondMarking, { ...asked, finishedAt: new Date() });
+      await em.flush();
+      return [visit.id, again.id];
+    });
+    const ofKind = async (user: User) =>
+      (await itemsOf(user)).filter(({ kind }) => kind === 'second-marking-asked');
+    const [item, ...more] = await ofKind(supervisor);
+    expect(more).toEqual([]);
+    expect(item).toMatchObject({
+      secondMarkingId: open,
+      repNumber: 2,
+      side: 'right',
+      frames: 1,
+      askedBy: { id: coach.id },
+      mine: false,
+      athlete: { id: athlete.id },
+    });
+    expect(JSON.stringify(item)).not.toMatch(/kneecap|landmark/);
+    for (const other of [coach, api.world.otherCoach, api.world.owner, api.world.foreignOwner])
+      expect(await ofKind(other)).toEqual([]);
+    await api.ground.inPractice(product(practiceId), ({ em }) =>
+      em.nativeDelete(Visit, { id: visitId }),
     );
   });
 

@@ -20,7 +20,9 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
   const may = useMay(athlete.coach.id);
   const consents = useQuery(consentsOptions(athlete.id));
   const valid = consents.data?.items.filter(({ state }) => state === 'valid') ?? [];
-  const past = consents.data?.items.filter(({ state }) => state !== 'valid') ?? [];
+  const unasked = consents.data?.items.filter(({ state }) => state === 'assent-missing') ?? [];
+  const past =
+    consents.data?.items.filter(({ state }) => state === 'lapsed' || state === 'withdrawn') ?? [];
   return (
     <Section
       title="Consent"
@@ -37,16 +39,20 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
       )}
       {consents.data && valid.length === 0 && (
         <Empty
-          title="No consent that is valid today"
+          title={
+            unasked.length > 0 ? 'The child’s assent is missing' : 'No consent that is valid today'
+          }
           action={
             may('consent.record') ? (
               <ButtonLink to={paths.newConsent(athlete.id)}>Record the consent</ButtonLink>
             ) : undefined
           }
         >
-          {athlete.minor
-            ? `${athlete.givenName} is a minor: a guardian gives it, and ${athlete.givenName} is asked too.`
-            : 'Ask for each purpose by itself.'}
+          {unasked.length > 0
+            ? `Ask ${athlete.givenName} and record it: a guardian’s consent of ${longDay(unasked[0]?.validFrom ?? '')} is here, and counts only with ${athlete.givenName}’s own yes.`
+            : athlete.minor
+              ? `${athlete.givenName} is a minor: a guardian gives it, and ${athlete.givenName} is asked too.`
+              : 'Ask for each purpose by itself.'}
         </Empty>
       )}
       {valid.length > 0 && (
@@ -75,7 +81,7 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
           </ul>
           <ul className="mt-4">
             {valid.map((consent) => (
-              <ValidConsent key={consent.id} athlete={athlete} consent={consent} />
+              <GivenConsent key={consent.id} athlete={athlete} consent={consent} />
             ))}
           </ul>
           {may('consent.record') && (
@@ -84,6 +90,13 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
             </ButtonLink>
           )}
         </>
+      )}
+      {unasked.length > 0 && (
+        <ul className="mt-4">
+          {unasked.map((consent) => (
+            <GivenConsent key={consent.id} athlete={athlete} consent={consent} />
+          ))}
+        </ul>
       )}
       {past.length > 0 && <PastConsents consents={past} />}
     </Section>
@@ -96,7 +109,7 @@ const giver = (consent: Consent, athlete: Athlete): string => {
   return `${consent.guardianName ?? 'a guardian'}${relation}`;
 };
 
-function ValidConsent({ athlete, consent }: { athlete: Athlete; consent: Consent }) {
+function GivenConsent({ athlete, consent }: { athlete: Athlete; consent: Consent }) {
   const client = useQueryClient();
   const say = useStatus();
   const may = useMay(athlete.coach.id);
@@ -112,6 +125,8 @@ function ValidConsent({ athlete, consent }: { athlete: Athlete; consent: Consent
         {consent.assent && `; ${athlete.givenName} agreed too`}.{' '}
         {consent.how !== '' && `${consent.how.replace(/\.$/, '')}. `}
         Recorded by {consent.recordedBy.name}.
+        {consent.state === 'assent-missing' &&
+          ` It does not count: ${athlete.givenName}’s own yes was not recorded.`}
       </p>
       {may('consent.withdraw') && (
         <ConfirmButton

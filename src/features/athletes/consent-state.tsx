@@ -9,9 +9,10 @@ const SOON_DAYS = 30;
 export function ConsentState({
   athlete,
 }: {
-  athlete: Pick<Athlete, 'consentedTo' | 'consentUntil'>;
+  athlete: Pick<Athlete, 'consentedTo' | 'consentUntil' | 'assentMissing'>;
 }) {
-  const { consentedTo, consentUntil } = athlete;
+  const { consentedTo, consentUntil, assentMissing } = athlete;
+  if (assentMissing) return <StateDot kind="bad">the child’s yes is missing</StateDot>;
   if (!consentedTo.includes('assessment') || consentUntil === null)
     return <StateDot kind="bad">none</StateDot>;
   return daysUntil(consentUntil) <= SOON_DAYS ? (

@@ -5,6 +5,7 @@ const NAMES: Record<TaskGroup, string> = {
   review: 'Readings',
   call: 'To call by eye',
   mark: 'To mark',
+  again: 'To mark again, blind',
   answer: 'To answer',
   film: 'To send or film again',
   retry: 'Could not be prepared',
@@ -14,9 +15,9 @@ const NAMES: Record<TaskGroup, string> = {
 
 /** A coach works from the clip to the reading; a supervisor starts with what others brought. */
 const ORDER: Record<Role, readonly TaskGroup[]> = {
-  coach: ['call', 'mark', 'answer', 'film', 'retry', 'review', 'prepare', 'lapse'],
-  supervisor: ['review', 'answer', 'call', 'mark', 'film', 'retry', 'prepare', 'lapse'],
-  owner: ['lapse', 'review', 'answer', 'call', 'mark', 'film', 'retry', 'prepare'],
+  coach: ['call', 'mark', 'again', 'answer', 'film', 'retry', 'review', 'prepare', 'lapse'],
+  supervisor: ['review', 'answer', 'again', 'call', 'mark', 'film', 'retry', 'prepare', 'lapse'],
+  owner: ['lapse', 'review', 'answer', 'again', 'call', 'mark', 'film', 'retry', 'prepare'],
 };
 
 export type Group = { group: TaskGroup; name: string; tasks: Task[] };

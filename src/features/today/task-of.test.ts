@@ -38,6 +38,16 @@ const items: Waiting[] = [
     body: 'is the heel down?',
     by: { id: otherId, name: 'Tobias Lindqvist' },
   },
+  {
+    ...common,
+    kind: 'second-marking-asked',
+    secondMarkingId: otherId,
+    repNumber: 2,
+    side: 'right',
+    frames: 10,
+    askedBy: { id: otherId, name: 'Tobias Lindqvist' },
+    mine: false,
+  },
   { ...common, kind: 'consent-lapses', until: '2026-03-09' },
   { ...common, kind: 'link-lapses', visitId, replayId: otherId, expiresAt: '2026-03-12T00:00:00Z' },
 ];
@@ -52,6 +62,7 @@ describe('taskOf', () => {
       ['rep-unmarked', `/clips/${clipId}`],
       ['reading-ready', `/visits/${visitId}/sides/left`],
       ['comment-open', `/clips/${clipId}?frame=4&comment=${otherId}`],
+      ['second-marking-asked', `/second-markings/${otherId}`],
       ['consent-lapses', `/athletes/${athleteId}/consents/new`],
       ['link-lapses', `/visits/${visitId}`],
     ]);
@@ -62,6 +73,19 @@ describe('taskOf', () => {
     expect(new Set(tasks.map(({ key }) => key)).size).toBe(items.length);
     expect(tasks[4]?.title).toBe('Ines Marlow, left support, rep 2');
     expect(tasks[0]?.detail).toBe('Being prepared, 42 %.');
+  });
+
+  it('says who asks for a second marking, of how much, and that the first marks stay hidden', () => {
+    const [asked] = items.filter((item) => item.kind === 'second-marking-asked');
+    if (asked === undefined) throw new Error('no second marking among the items');
+    expect(taskOf(asked)).toMatchObject({
+      title: 'Ines Marlow, right support, rep 2',
+      detail:
+        'Tobias Lindqvist asks you to mark ten frames again, without sight of the first marks.',
+    });
+    expect(taskOf({ ...asked, mine: true, frames: 1 }).detail).toBe(
+      'Begun by you: one frame to mark again, without sight of the first marks.',
+    );
   });
 
   it('does not let a long comment fill the page', () => {

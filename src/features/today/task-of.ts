@@ -1,10 +1,11 @@
 import type { Waiting } from '#shared/contracts/today.ts';
 import { distance, moment } from '#src/ui/days.ts';
+import { inWords } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import { supportWords } from '#src/ui/words.ts';
 
 export type TaskGroup =
-  'review' | 'call' | 'mark' | 'answer' | 'film' | 'retry' | 'prepare' | 'lapse';
+  'review' | 'call' | 'mark' | 'again' | 'answer' | 'film' | 'retry' | 'prepare' | 'lapse';
 
 /** One row of Today: what waits, when it came or ends, and the exact place that opens. */
 export type Task = {
@@ -99,6 +100,19 @@ export function taskOf(item: Waiting): Task {
           to: paths.bench(item.clipId, { frame: item.frame, comment: item.commentId }),
         },
       };
+    case 'second-marking-asked': {
+      const frames = `${inWords(item.frames)} ${item.frames === 1 ? 'frame' : 'frames'}`;
+      return {
+        key: `again ${item.secondMarkingId}`,
+        group: 'again',
+        title: `${who}, ${sideOf(item.side)}${repOf(item.repNumber)}`,
+        detail: item.mine
+          ? `Begun by you: ${frames} to mark again, without sight of the first marks.`
+          : `${item.askedBy.name} asks you to mark ${frames} again, without sight of the first marks.`,
+        when: `asked ${moment(item.at)}`,
+        action: { label: 'Mark again', to: paths.secondMarking(item.secondMarkingId) },
+      };
+    }
     case 'consent-lapses':
       return {
         key: `lapse ${item.athlete.id}`,

@@ -53,12 +53,14 @@ export function ConsentStep({
 }
 
 function Purposes({ athlete, mayRecord }: { athlete: Athlete; mayRecord: boolean }) {
-  const { consentedTo, consentUntil } = athlete;
+  const { consentedTo, consentUntil, assentMissing } = athlete;
   if (!consentedTo.includes('assessment'))
     return (
       <>
         <StateDot kind="bad" wrap>
-          There is no consent to filming that is valid today: filming stays closed.
+          {assentMissing
+            ? `The child’s assent is missing: ask ${athlete.givenName} and record it. Until then filming stays closed.`
+            : 'There is no consent to filming that is valid today: filming stays closed.'}
         </StateDot>
         {mayRecord && (
           <ButtonLink to={paths.newConsent(athlete.id)} look="primary" className="mt-3">

@@ -163,6 +163,16 @@ describe('filming', () => {
 });
 
 describe('without consent', () => {
+  it('asks for the child’s own yes where only that is missing', async () => {
+    const missing = { minor: true, consentedTo: [], consentUntil: null, assentMissing: true };
+    visitApi({ visit: { safety: aSafety() }, athlete: missing });
+    const consent = await section('1 Consent');
+    expect(
+      await within(consent).findByText(/The child’s assent is missing: ask Ines and record it/),
+    ).toBeVisible();
+    expect(within(consent).getByRole('link', { name: 'Record the consent' })).toBeVisible();
+  });
+
   it('keeps filming closed and leads to the consent', async () => {
     visitApi({ visit: { safety: aSafety() }, athlete: { consentedTo: [], consentUntil: null } });
     const consent = await section('1 Consent');
