@@ -10,9 +10,11 @@ export const overlayMarks = z
       marks: z.array(
         z.object({ landmark: landmarkId, u: z.number(), v: z.number(), looked: z.boolean() }),
       ),
-      /** Degrees; null where it cannot be told. */
+      /** Degrees; null where it cannot be told. Each has its ± (95 %) beside it. */
       lift: z.number().nullable(),
+      liftPlusMinus: z.number().nullable(),
       turn: z.number().nullable(),
+      turnPlusMinus: z.number().nullable(),
     }),
   )
   .meta({ id: 'OverlayMarks' });

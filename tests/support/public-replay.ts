@@ -39,11 +39,11 @@ export const aPublicReplay = (change: Partial<PublicReplay> = {}): PublicReplay 
   toFrame: 95,
   moments: { quiet: 10, sixty: 40, ninety: 50, top: 60 },
   overlay: [
-    { frame: 10, marks: marks(0), lift: 3, turn: 0 },
-    { frame: 40, marks: marks(200), lift: 60, turn: 2 },
-    { frame: 50, marks: marks(320), lift: 90, turn: 9 },
-    { frame: 60, marks: marks(360), lift: 104, turn: 11 },
-    { frame: 80, marks: marks(350), lift: 100, turn: 10 },
+    { frame: 10, marks: marks(0), lift: 3, liftPlusMinus: 3, turn: 0, turnPlusMinus: 5 },
+    { frame: 40, marks: marks(200), lift: 60, liftPlusMinus: 3, turn: 2, turnPlusMinus: 5 },
+    { frame: 50, marks: marks(320), lift: 90, liftPlusMinus: 3, turn: 9, turnPlusMinus: 5 },
+    { frame: 60, marks: marks(360), lift: 104, liftPlusMinus: 3, turn: 11, turnPlusMinus: 5 },
+    { frame: 80, marks: marks(350), lift: 100, liftPlusMinus: 3, turn: 10, turnPlusMinus: 5 },
   ],
   course: null,
   reading: {

@@ -96,6 +96,12 @@ describe('a replay link', () => {
     });
     expect(body.moments.sixty).toBeLessThan(body.moments.ninety);
     expect(body.overlay.length).toBeGreaterThan(10);
+    // no angle without its ±
+    for (const frame of body.overlay) {
+      expect(frame.liftPlusMinus === null).toBe(frame.lift === null);
+      expect(frame.turnPlusMinus === null).toBe(frame.turn === null);
+      if (frame.lift !== null) expect(frame.liftPlusMinus).toBeGreaterThanOrEqual(2);
+    }
     await open(token).expect(200);
     const { body: list } = await coach.get(`/api/replays?visitId=${made.visitId}`);
     expect(list.items.find((row: { id: string }) => row.id === replay.id).openings).toBe(2);
@@ -174,7 +180,13 @@ describe('a replay link', () => {
     const seen = await make({ showReading: false });
     const { body } = await open(seen.token).expect(200);
     expect(body).toMatchObject({ reading: null, course: null, call: { seen: 'early' } });
-    for (const frame of body.overlay) expect(frame).toMatchObject({ lift: null, turn: null });
+    for (const frame of body.overlay)
+      expect(frame).toMatchObject({
+        lift: null,
+        liftPlusMinus: null,
+        turn: null,
+        turnPlusMinus: null,
+      });
   });
 });
 

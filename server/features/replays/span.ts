@@ -56,7 +56,7 @@ export const spanOf = (
   const input = repInput(stored, times);
   const course =
     input && input.frames.length > 0
-      ? courseOfRep(input, shownSet(input), ASSUMED_MARK_ERROR, { halfWidths: false })
+      ? courseOfRep(input, shownSet(input), ASSUMED_MARK_ERROR, { halfWidths: figures })
       : null;
   const known = course && isCourse(course) ? course : null;
   const inside = (frame: number) => frame >= from && frame <= to;
@@ -69,7 +69,9 @@ export const spanOf = (
       of === frame && !hidden && u !== null && v !== null ? [{ landmark, u, v, looked }] : [],
     ),
     lift: angle(values.get(frame)?.lift),
+    liftPlusMinus: angle(values.get(frame)?.liftHalfWidth),
     turn: angle(values.get(frame)?.turn),
+    turnPlusMinus: angle(values.get(frame)?.turnHalfWidth),
   }));
   return {
     moments: known ? momentsOf(known, times) : NO_MOMENTS,

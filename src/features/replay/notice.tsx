@@ -10,6 +10,11 @@ const NOTICES: Record<Failed, { title: string; text: string; again: boolean }> =
     text: 'It has ended, or its address was not copied completely. Ask the person who sent it for a new one, or open the message again and tap the link itself.',
     again: false,
   },
+  ended: {
+    title: 'This link has ended',
+    text: 'It was ended, or its time is over, while this page was open. Ask the person who sent it for a new one.',
+    again: false,
+  },
   'too-many-tries': {
     title: 'Too many tries',
     text: 'Wait a quarter of an hour, then open the link again. If you do not have the pass phrase, ask the person who sent the link.',

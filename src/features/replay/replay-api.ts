@@ -6,6 +6,8 @@ export type Opening =
   | { readonly is: 'phrase' }
   /** Lapsed, ended or never there: the server does not say which. */
   | { readonly is: 'gone' }
+  /** It ended while its page was open. */
+  | { readonly is: 'ended' }
   | { readonly is: 'too-many-tries' }
   | { readonly is: 'offline' }
   | { readonly is: 'broken' };
@@ -46,6 +48,17 @@ export const openReplay = async (token: string, signal?: AbortSignal): Promise<O
   const value: unknown = await response.json().catch(() => null);
   if (signal?.aborted) throw signal.reason;
   return isReplay(value) ? { is: 'open', replay: value } : { is: 'broken' };
+};
+
+/**
+ * False once the link opens nothing any more. Asks for one byte of the film, past every cache: the same that the
+ * player would ask for next. Throws only where `signal` says stop.
+ */
+export const asksStillLive = async (token: string, signal: AbortSignal): Promise<boolean> => {
+  const response = await ask(videoAddress(token), { signal, headers: { range: 'bytes=0-0' } });
+  if (response === 'offline') return true;
+  await response.body?.cancel();
+  return response.status !== 404;
 };
 
 export const unlockReplay = async (token: string, passPhrase: string): Promise<Unlocking> => {

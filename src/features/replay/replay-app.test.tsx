@@ -5,6 +5,7 @@ import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { aPublicReplay, replayToken } from '#tests/support/public-replay.ts';
 import { tokenOf } from './replay-api.ts';
 import { ReplayApp } from './replay-app.tsx';
+import { ASK_EVERY } from './use-still-live.ts';
 
 /** Answers by `METHOD path`; what is not given is refused like without a network. */
 function server(answers: Record<string, () => Response>) {
@@ -13,7 +14,9 @@ function server(answers: Record<string, () => Response>) {
     const key = `${init?.method ?? 'GET'} ${path}`;
     asked.push(key);
     const answer = answers[key];
-    return answer ? Promise.resolve(answer()) : Promise.reject(new TypeError('Failed to fetch'));
+    return answer
+      ? Promise.resolve().then(answer)
+      : Promise.reject(new TypeError('Failed to fetch'));
   });
   return asked;
 }
@@ -68,7 +71,8 @@ describe('a replay', () => {
     // the middle of frame 50 at 50 frames a second
     expect(video.currentTime).toBeCloseTo(1.01, 5);
     video.dispatchEvent(new Event('seeked'));
-    expect(await screen.findByText('90°', { selector: 'b' })).toBeVisible();
+    expect(await screen.findByText('90° ±\u00a03°', { selector: 'b' })).toBeVisible();
+    expect(screen.getByText('9° out ±\u00a05°', { selector: 'b' })).toBeVisible();
     expect(screen.getByRole('button', { name: /^90°/ })).toHaveAttribute('aria-pressed', 'true');
     await user.click(screen.getByRole('button', { name: 'Half the speed' }));
     expect(video.playbackRate).toBe(0.5);
@@ -114,6 +118,59 @@ describe('a replay', () => {
     expect(await screen.findByText(/The film could not be loaded/)).toBeVisible();
     await user.click(screen.getByRole('button', { name: 'Try again' }));
     expect(screen.queryByText(/The film could not be loaded/)).toBeNull();
+  });
+});
+
+describe('a link that ends while its page is open', () => {
+  const VIDEO = `GET /api/r/${replayToken}/video`;
+  /** Opens; the film answers as the link stands. */
+  const living = (video: () => Response) =>
+    server({ [OPEN]: () => Response.json(aPublicReplay()), [VIDEO]: video });
+  const over = () => new Response('{}', { status: 404 });
+
+  it('stops and says so as soon as the film is asked for again', async () => {
+    living(over);
+    render(<ReplayApp token={replayToken} />);
+    await heading(/turns out early/);
+    screen.getByLabelText('Your lift, standing on the right leg').dispatchEvent(new Event('error'));
+    expect(await heading('This link has ended')).toBeVisible();
+    expect(screen.queryByLabelText('Your lift, standing on the right leg')).toBeNull();
+    expect(screen.getByText(/Ask the person who sent it for a new one/)).toBeVisible();
+  });
+
+  it('is asked now and then, and plays on while it lives or nobody can be asked', async () => {
+    vi.useFakeTimers({ shouldAdvanceTime: true });
+    try {
+      let answer: () => Response = () => new Response('x', { status: 206 });
+      const asked = living(() => answer());
+      render(<ReplayApp token={replayToken} />);
+      await heading(/turns out early/);
+      const times = () => asked.filter((path) => path === VIDEO).length;
+      expect(times()).toBe(0);
+      await vi.advanceTimersByTimeAsync(ASK_EVERY);
+      expect(times()).toBe(1);
+      answer = () => {
+        throw new TypeError('Failed to fetch');
+      };
+      await vi.advanceTimersByTimeAsync(ASK_EVERY);
+      expect(times()).toBe(2);
+      expect(screen.getByLabelText('Your lift, standing on the right leg')).toBeVisible();
+      answer = over;
+      await vi.advanceTimersByTimeAsync(ASK_EVERY);
+      expect(await heading('This link has ended')).toBeVisible();
+      await vi.advanceTimersByTimeAsync(3 * ASK_EVERY);
+      expect(times()).toBe(3);
+    } finally {
+      vi.useRealTimers();
+    }
+  });
+
+  it('is asked at once when its page is seen again', async () => {
+    living(over);
+    render(<ReplayApp token={replayToken} />);
+    await heading(/turns out early/);
+    document.dispatchEvent(new Event('visibilitychange'));
+    expect(await heading('This link has ended')).toBeVisible();
   });
 });
 

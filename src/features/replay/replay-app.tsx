@@ -24,7 +24,14 @@ export function ReplayApp({ token }: { token: string | null }) {
   };
   if (opening === null || token === null)
     return opening === null ? <OpeningNow /> : <Notice opening={{ is: 'gone' }} onAgain={again} />;
-  if (opening.is === 'open') return <ReplayPage token={token} replay={opening.replay} />;
+  if (opening.is === 'open')
+    return (
+      <ReplayPage
+        token={token}
+        replay={opening.replay}
+        onEnded={() => setOpening({ is: 'ended' })}
+      />
+    );
   if (opening.is === 'phrase')
     return <PassPhrase token={token} onUnlocked={again} onFailed={(is) => setOpening({ is })} />;
   return <Notice opening={opening} onAgain={again} />;

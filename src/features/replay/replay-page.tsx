@@ -1,4 +1,4 @@
-import { useMemo, useRef, useState } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { longDay, shortDay } from '#src/ui/days.ts';
 import { frameTimes } from '#src/video/frame-times.ts';
@@ -6,12 +6,26 @@ import { Comments } from './comments.tsx';
 import { Player } from './player/player.tsx';
 import { useLoop } from './player/use-loop.ts';
 import { Result } from './result.tsx';
+import { useStillLive } from './use-still-live.ts';
 import { contactParts } from './words/contact.ts';
 
 /** One replay, as the athlete sees it: the film first, then what it says, in plain words. */
-export function ReplayPage({ token, replay }: { token: string; replay: PublicReplay }) {
+export function ReplayPage({
+  token,
+  replay,
+  onEnded,
+}: {
+  token: string;
+  replay: PublicReplay;
+  /** The link opens nothing any more. */
+  onEnded: () => void;
+}) {
   const times = useMemo(() => frameTimes(replay.frames), [replay.frames]);
   const loop = useLoop(replay, times);
+  const { ended, check } = useStillLive(token, replay.expiresAt);
+  useEffect(() => {
+    if (ended) onEnded();
+  }, [ended, onEnded]);
   const film = useRef<HTMLDivElement>(null);
   const [comment, setComment] = useState<PublicReplay['comments'][number] | null>(null);
   const showComment = (each: PublicReplay['comments'][number]) => {
@@ -31,7 +45,14 @@ export function ReplayPage({ token, replay }: { token: string; replay: PublicRep
       </header>
       <main className="tablet:mx-auto tablet:grid tablet:max-w-[1120px] tablet:grid-cols-[minmax(0,460px)_minmax(0,1fr)] tablet:items-start tablet:gap-x-12 tablet:px-8 tablet:pt-8">
         <div ref={film} className="tablet:sticky tablet:top-4">
-          <Player token={token} replay={replay} times={times} loop={loop} comment={comment} />
+          <Player
+            token={token}
+            replay={replay}
+            times={times}
+            loop={loop}
+            comment={comment}
+            onFailed={check}
+          />
         </div>
         <div className="px-4 text-sub leading-7 tablet:px-0">
           <Result replay={replay} />

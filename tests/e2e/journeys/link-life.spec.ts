@@ -128,6 +128,27 @@ test('a pass phrase is asked for before anything is shown', async ({
   await phone.close();
 });
 
+test('an open page stops playing when its link is ended', async ({
+  app,
+  page,
+  browser,
+  allowConsole,
+}) => {
+  allowConsole(/404/);
+  await signIn(page, app, COACH);
+  const { url, replay } = await aLink(page.request);
+  const phone = await browser.newContext();
+  const athlete = await phone.newPage();
+  await athlete.goto(url);
+  await expect(athlete.getByLabel(FILM)).toBeVisible();
+  await ask(page.request, routes.revokeReplay, { params: { id: replay.id } });
+  await expect(
+    athlete.getByRole('heading', { level: 1, name: 'This link has ended' }),
+  ).toBeVisible();
+  await expect(athlete.getByLabel(FILM)).toHaveCount(0);
+  await phone.close();
+});
+
 test('a link that was ended is a page that says what to do, with 404', async ({
   app,
   page,

@@ -7,7 +7,8 @@ const BREAK_MS = 500;
 
 /**
  * The same marked frames with the turn smoothed over its neighbours, as courses are drawn: one frame alone
- * is uncertain by several degrees, and numbers that jump would say otherwise.
+ * is uncertain by several degrees, and numbers that jump would say otherwise. Its ± stays that of one frame,
+ * which is more than the smoothed one's.
  * @param overlay by rising frame
  */
 export const calmTurn = (overlay: OverlayMarks, times: readonly Milliseconds[]): OverlayMarks => {

@@ -85,7 +85,9 @@ const hipsOf = (marks: Marks, width: number | null): HipCentres => {
 export interface Shown {
   readonly primitives: readonly Primitive[];
   readonly lift: number | null;
+  readonly liftPlusMinus: number | null;
   readonly turn: number | null;
+  readonly turnPlusMinus: number | null;
 }
 
 /** What is drawn on a frame, and its angles: the marks, and what the comment on show points at. */
@@ -114,6 +116,8 @@ export const drawnOn = (
       ...pointed,
     ],
     lift: known?.lift ?? null,
+    liftPlusMinus: known?.liftPlusMinus ?? null,
     turn: known?.turn ?? null,
+    turnPlusMinus: known?.turnPlusMinus ?? null,
   };
 };

@@ -56,6 +56,8 @@ export const frameBetween = (
         : [];
     }),
     lift: mixKnown(before.lift, after.lift, share),
+    liftPlusMinus: mixKnown(before.liftPlusMinus, after.liftPlusMinus, share),
     turn: mixKnown(before.turn, after.turn, share),
+    turnPlusMinus: mixKnown(before.turnPlusMinus, after.turnPlusMinus, share),
   };
 };

@@ -42,6 +42,7 @@ describe('what is drawn between marked frames', () => {
       each.frame === 50 ? { ...each, turn: null } : each,
     );
     expect(frameBetween(overlay, times, 45)?.turn).toBeNull();
+    expect(frameBetween(overlay, times, 45)?.liftPlusMinus).toBe(3);
   });
 });
 
@@ -51,7 +52,9 @@ describe('the turn under the film', () => {
       frame: 10 + 5 * n,
       marks: [],
       lift: 60,
+      liftPlusMinus: 3,
       turn: n === 5 ? null : turn,
+      turnPlusMinus: 5,
     }));
     const calm = calmTurn(overlay, times).map(({ turn }) => turn);
     expect(calm[5]).toBeNull();

@@ -19,6 +19,7 @@ export function Player({
   times,
   loop,
   comment,
+  onFailed,
 }: {
   token: string;
   replay: PublicReplay;
@@ -26,6 +27,8 @@ export function Player({
   loop: ReturnType<typeof useLoop>;
   /** Whose shape is on show. */
   comment: PublicReplay['comments'][number] | null;
+  /** The film could not be loaded. */
+  onFailed: () => void;
 }) {
   const [failed, setFailed] = useState(false);
   const crop = useMemo(
@@ -36,7 +39,7 @@ export function Player({
     () => ({ ...replay, overlay: calmTurn(replay.overlay, times) }),
     [replay, times],
   );
-  const { primitives, lift, turn } = useMemo(
+  const { primitives, ...angles } = useMemo(
     () => drawnOn(calm, times, loop.frame, comment),
     [calm, times, loop.frame, comment],
   );
@@ -55,7 +58,10 @@ export function Player({
         size={replay}
         crop={crop}
         primitives={primitives}
-        onFailed={() => setFailed(true)}
+        onFailed={() => {
+          setFailed(true);
+          onFailed();
+        }}
       />
       <img src={posterAddress(token)} alt="" className="hidden max-h-[60vh] w-auto print:block" />
       {failed ? (
@@ -68,8 +74,8 @@ export function Player({
       ) : (
         <div className="print:hidden">
           <Readout
-            lift={liftReadout(lift, replay.view === 'front')}
-            turn={turnReadout(turn)}
+            lift={liftReadout(angles, replay.view === 'front')}
+            turn={turnReadout(angles)}
             figures={replay.reading !== null}
           />
           {moments.length > 0 && (

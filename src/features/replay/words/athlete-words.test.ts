@@ -81,12 +81,20 @@ describe('the line under the film', () => {
     [10.6, '11° out'],
     [-3.2, '3° in'],
   ])('turn %s: %s', (turn, words) => {
-    expect(turnReadout(turn)).toBe(words);
+    expect(turnReadout({ turn, turnPlusMinus: null })).toBe(words);
   });
   it('does not give a lift that a front view cannot see', () => {
-    expect(liftReadout(12, true)).toBe('under 20°');
-    expect(liftReadout(12, false)).toBe('12°');
-    expect(liftReadout(null, true)).toBe('');
+    const of = (lift: number | null, liftPlusMinus: number | null = null) => ({
+      lift,
+      liftPlusMinus,
+    });
+    expect(liftReadout(of(12, 3), true)).toBe('under 20°');
+    expect(liftReadout(of(12), false)).toBe('12°');
+    expect(liftReadout(of(null), true)).toBe('');
+    // never surer than it is: rounded up
+    expect(liftReadout(of(90.2, 2.1), true)).toBe('90° ±\u00a03°');
+    expect(turnReadout({ turn: -4.4, turnPlusMinus: 5 })).toBe('4° in ±\u00a05°');
+    expect(turnReadout({ turn: 0.2, turnPlusMinus: 4.6 })).toBe('0° ±\u00a05°');
   });
 });
 
