@@ -30,7 +30,10 @@ const falling = (value: number, good: number, bad: number): number =>
 export const confidenceOf = (seen: Evidence): number => {
   const { correlation, fall, core, covered, roundTrip, spread } = seen;
   const alike = falling(1 - correlation, 0.12, 0.5);
-  const returned = roundTrip === null ? 0.8 : falling(roundTrip, 0.6, 3.5);
+  // on coarse levels the way back may go astray in what is behind a limb: likeness outweighs it
+  const unmistakable = correlation > 0.9 && core > 0.8;
+  const back = roundTrip === null ? 0.8 : falling(roundTrip, 0.6, 3.5);
+  const returned = unmistakable ? Math.max(0.8, back) : back;
   const sharp = falling(spread, 0.5, 2.5);
   const steady = correlation > 0.88 ? 1 : falling(fall, 0.06, 0.3);
   const bare = falling(covered, 0.08, 0.35);

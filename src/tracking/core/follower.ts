@@ -43,6 +43,8 @@ const DISTINCT = 0.06;
 
 /** What is found again within this of where it is expected is most likely the same, pixels. */
 const NEAR = 6;
+/** Forth and back again within this, the step itself can be believed, pixels. */
+const RETURNED = 2;
 /** What is found elsewhere may be another dot that looks the same: a person has to look at it. */
 const FOUND_AGAIN = 0.4;
 
@@ -64,6 +66,8 @@ export class Follower {
   #warp: Warp;
   #newestWarp: Warp;
   #velocity: Place = { x: 0, y: 0 };
+  /** False until two pictures have told the velocity: a keyframe may lie in the middle of a lift. */
+  #velocityKnown = false;
   #before: Pyramid;
   #correlation = 1;
   /** Pictures since the point was last seen; 0 while it is. */
@@ -84,8 +88,7 @@ export class Follower {
 
   /** The next picture in the direction that is being followed. */
   step(picture: Plane): Seen {
-    const seen = this.#lostFor > 0 ? this.#lookFor(picture) : this.#followOn(picture);
-    return seen;
+    return this.#lostFor > 0 ? this.#lookFor(picture) : this.#followOn(picture);
   }
 
   #searchTemplate(at: Place): Template {
@@ -105,14 +108,19 @@ export class Follower {
       if (still && still.correlation > (best?.correlation ?? 0)) best = still;
     }
     if (!best || best.correlation < DOUBTFUL) {
-      const fetched = this.#fetch(after, guess, 6);
+      const fetched = this.#fetch(after, guess, this.#velocityKnown ? 6 : 12);
       if (fetched && fetched.correlation > (best?.correlation ?? 0) + 0.05) best = fetched;
     }
     if (!best) return this.#lose(after);
     const fall = this.#correlation - best.correlation;
     const covered = coveredShare(picture, best.template, best);
     const leap = Math.hypot(best.warp.tx - guess.x, best.warp.ty - guess.y);
-    if (best.roundTrip === null && leap > NEAR) this.#trust = FOUND_AGAIN;
+    if (
+      !(best.roundTrip !== null && best.roundTrip < RETURNED) &&
+      this.#velocityKnown &&
+      leap > this.#near()
+    )
+      this.#trust = FOUND_AGAIN;
     const evidence = {
       correlation: best.correlation,
       fall,
@@ -173,16 +181,22 @@ export class Follower {
     const after = pyramidAround(picture, about.x, about.y, REACH, LEVELS);
     const found = this.#fetch(after, about, Math.min(18, 8 + this.#lostFor));
     if (!found || found.correlation < BACK) return this.#lose(after);
+    const leap = Math.hypot(found.warp.tx - about.x, found.warp.ty - about.y);
+    this.#trust = leap > this.#near() ? FOUND_AGAIN : Math.min(this.#trust, 0.45);
     this.#take(found, after, about);
     this.#velocity = { x: 0, y: 0 };
-    const leap = Math.hypot(found.warp.tx - about.x, found.warp.ty - about.y);
-    this.#trust = leap > NEAR ? FOUND_AGAIN : Math.min(this.#trust, 0.45);
+    this.#velocityKnown = false;
     const confidence = this.#trust;
     return {
       place: { x: found.warp.tx, y: found.warp.ty },
       confidence,
       state: stateOf(confidence),
     };
+  }
+
+  /** The faster it went, the less is known of where it is now. */
+  #near(): number {
+    return NEAR + Math.hypot(this.#velocity.x, this.#velocity.y) / 2;
   }
 
   #take(best: Candidate, after: Pyramid, from: Place): void {
@@ -193,6 +207,7 @@ export class Follower {
         ? best.warp
         : movedTo(this.#newestWarp, best.warp.tx, best.warp.ty);
     this.#velocity = { x: best.warp.tx - from.x, y: best.warp.ty - from.y };
+    this.#velocityKnown = true;
     this.#before = after;
     this.#correlation = best.correlation;
     this.#lostFor = 0;
