@@ -1,6 +1,7 @@
 import type { Reading, SidePage } from '#shared/contracts/readings.ts';
 import { CourseSection } from './course/course-section.tsx';
 import { ReadingHead } from './head/reading-head.tsx';
+import { LiftSection } from './lift/lift-section.tsx';
 import { HistorySection } from './history/history-section.tsx';
 import { ReplaySection } from './link/replay-section.tsx';
 import { PartsSection } from './parts/parts-section.tsx';
@@ -18,6 +19,7 @@ export function Measured({ page, reading }: { page: SidePage; reading: Reading }
       <ReadingHead page={page} reading={reading} />
       <SettleSection reading={reading} />
       <CourseSection reading={reading} />
+      <LiftSection reading={reading} />
       <PartsSection reading={reading} />
       <SubstitutionsSection reading={reading} />
       <BothSides page={page} reading={reading} />

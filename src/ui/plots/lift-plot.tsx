@@ -1,0 +1,161 @@
+import { useRef } from 'react';
+import { cx } from '../class-names.ts';
+import { repSymbol } from './course-points.tsx';
+import { type LiftScale, liftScale } from './lift-scale.ts';
+import { useWidth } from './use-width.ts';
+
+export interface LiftPoint {
+  /** Seconds from the curve's zero. */
+  readonly time: number;
+  /** As the marks say it, and smoothed as the line is drawn, degrees. */
+  readonly lift: number;
+  readonly line: number;
+  /** ± (95 %); null where it is not known. */
+  readonly halfWidth: number | null;
+  /** The line does not continue from the point before. */
+  readonly startsRun: boolean;
+  /** Rests on marks that nobody has looked at: provisional. */
+  readonly hollow: boolean;
+}
+
+export interface LiftCurve {
+  /** Its zero is foot off; otherwise the first marked frame. */
+  readonly fromFootOff: boolean;
+  readonly points: readonly LiftPoint[];
+}
+
+/** Lift against time, with 60° and 90° drawn through it, redrawn for the width it gets. */
+export function LiftPlot({
+  label,
+  curves,
+  height = 300,
+}: {
+  /** What the plot shows, for those who cannot see it; say the figures too. */
+  label: string;
+  curves: readonly LiftCurve[];
+  height?: number;
+}) {
+  const box = useRef<HTMLDivElement>(null);
+  const width = useWidth(box);
+  return (
+    <div ref={box} style={{ minHeight: height }}>
+      {width !== null && width > 0 && (
+        <Drawing label={label} curves={curves} scale={liftScale(width, height, curves)} />
+      )}
+    </div>
+  );
+}
+
+const GATES = [60, 90];
+
+function Drawing({
+  label,
+  curves,
+  scale,
+}: {
+  label: string;
+  curves: readonly LiftCurve[];
+  scale: LiftScale;
+}) {
+  const { width, height, left, right, top, bottom, x, y, xTicks, yTicks, compact } = scale;
+  const fromFootOff = curves.every((curve) => curve.fromFootOff);
+  return (
+    <svg
+      className="plot"
+      width={width}
+      height={height}
+      viewBox={`0 0 ${width} ${height}`}
+      role="img"
+      aria-label={label}
+    >
+      {yTicks.map((tick) => (
+        <g key={tick}>
+          <path
+            d={`M${left} ${y(tick)}H${right}`}
+            className={GATES.includes(tick) ? 'plot-gate' : 'plot-grid'}
+          />
+          <text
+            x={left - 8}
+            y={y(tick) + 5}
+            textAnchor="end"
+            className={GATES.includes(tick) ? 'plot-strong' : undefined}
+          >
+            {tick}°
+          </text>
+        </g>
+      ))}
+      <path d={`M${left} ${bottom}H${right}`} className="plot-axis" />
+      {xTicks.map((tick) => (
+        <g key={tick}>
+          <path d={`M${x(tick)} ${bottom}v5`} className="plot-axis" />
+          <text x={x(tick)} y={bottom + 22} textAnchor="middle">
+            {tick} s
+          </text>
+        </g>
+      ))}
+      {fromFootOff && <path d={`M${x(0)} ${top}V${bottom}`} className="plot-zero" />}
+      {curves.map((curve, n) => (
+        <Curve key={n} curve={curve} place={n} scale={scale} />
+      ))}
+      <text x={0} y={12}>
+        {compact ? 'lift, degrees' : 'lift: lifted thigh from the vertical, degrees'}
+      </text>
+      <text x={right} y={bottom + 42} textAnchor="end">
+        {fromFootOff ? 'seconds from foot off' : 'seconds from the first marked frame'}
+      </text>
+    </svg>
+  );
+}
+
+/** Points that one line joins. */
+const runsOf = (points: readonly LiftPoint[]): LiftPoint[][] => {
+  const runs: LiftPoint[][] = [];
+  for (const point of points) {
+    const last = runs.at(-1);
+    if (last && !point.startsRun) last.push(point);
+    else runs.push([point]);
+  }
+  return runs;
+};
+
+function Curve({ curve, place, scale }: { curve: LiftCurve; place: number; scale: LiftScale }) {
+  const { x, y } = scale;
+  const path = (at: readonly (readonly [number, number])[]) =>
+    at.map(([time, lift], n) => `${n === 0 ? 'M' : 'L'}${x(time)} ${y(lift)}`).join('');
+  return (
+    <g>
+      {runsOf(curve.points).map((run, n) => {
+        const known = run.filter(({ halfWidth }) => halfWidth !== null);
+        const edge = (sign: 1 | -1) =>
+          known.map(({ time, line, halfWidth }) => [time, line + sign * (halfWidth ?? 0)] as const);
+        return (
+          <g key={n}>
+            {known.length > 1 && (
+              <path
+                d={`${path([...edge(1), ...edge(-1).reverse()])}Z`}
+                className="fill-tide/[.13]"
+              />
+            )}
+            <path
+              d={path(run.map(({ time, line }) => [time, line]))}
+              fill="none"
+              strokeWidth="2.5"
+              strokeLinecap="round"
+              strokeLinejoin="round"
+              className="stroke-tide"
+            />
+          </g>
+        );
+      })}
+      {curve.points.map(({ time, lift, hollow }, n) => (
+        <path
+          key={n}
+          d={repSymbol(place)}
+          transform={`translate(${x(time)} ${y(lift)}) scale(0.7)`}
+          strokeWidth={hollow ? 2 : 1.4}
+          className={cx(hollow ? 'fill-mud stroke-tide' : 'fill-tide stroke-sheet')}
+        />
+      ))}
+    </g>
+  );
+}
