@@ -8,7 +8,7 @@ import type {
 } from '#src/tracking/types.ts';
 import { openTracker } from '#src/tracking/worker/open-tracker.ts';
 import { framePoint } from '#shared/geometry/points.ts';
-import { frameIndex } from '#shared/timing/units.ts';
+import type { frameIndex } from '#shared/timing/units.ts';
 import { frameTimes } from '#src/video/frame-times.ts';
 import type { OpenRequest } from './page.ts';
 
