@@ -11,6 +11,7 @@ import { MarkCommand } from '../features/marks/mark-command.entity.ts';
 import { Mark } from '../features/marks/mark.entity.ts';
 import { AuditEntry } from '../features/practice/audit-entry.entity.ts';
 import { Practice } from '../features/practice/practice.entity.ts';
+import { ProtocolVersion } from '../features/protocol/protocol-version.entity.ts';
 import { Reading } from '../features/readings/reading.entity.ts';
 import { SideSetting } from '../features/readings/side-setting.entity.ts';
 import { Replay } from '../features/replays/replay.entity.ts';
@@ -42,6 +43,7 @@ export const entities = [
   SecondMark,
   SecondMarkCommand,
   Call,
+  ProtocolVersion,
   Reading,
   SideSetting,
   Comment,

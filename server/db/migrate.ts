@@ -9,6 +9,7 @@ import { Migration20261201163000_quiet_from } from '../../migrations/Migration20
 import { Migration20261201170000_second_markings } from '../../migrations/Migration20261201170000_second_markings.ts';
 import { Migration20261201173000_two_clips } from '../../migrations/Migration20261201173000_two_clips.ts';
 import { Migration20261201181500_filming_lines } from '../../migrations/Migration20261201181500_filming_lines.ts';
+import { Migration20261201194000_protocol } from '../../migrations/Migration20261201194000_protocol.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -42,6 +43,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261201181500_filming_lines',
     class: Migration20261201181500_filming_lines,
+  },
+  {
+    name: 'Migration20261201194000_protocol',
+    class: Migration20261201194000_protocol,
   },
 ];
 

@@ -19,6 +19,7 @@ export const ACTIONS = {
   'athlete.add': 'practice',
   'set-up.save': 'practice',
   'set-up.delete': 'practice',
+  'protocol.change': 'practice',
   'athlete.read': 'caseload',
   'athlete.edit': 'caseload',
   'consent.record': 'caseload',

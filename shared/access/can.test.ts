@@ -51,6 +51,7 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'athlete.add': COACHES_AND_OWNER,
   'set-up.save': COACHES_AND_OWNER,
   'set-up.delete': COACHES_AND_OWNER,
+  'protocol.change': ['owner'],
   'athlete.read': SEES,
   'athlete.edit': WORKS,
   'consent.record': WORKS,

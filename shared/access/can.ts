@@ -22,8 +22,13 @@ const ASSIGNED: ReadonlySet<Action> = new Set<Action>([
   'reliability.read',
 ]);
 
+/** What changes how the whole practice reads. */
+const OWNERS: ReadonlySet<Action> = new Set<Action>(['protocol.change']);
+
 const onPractice = (actor: UserActor, action: Action): boolean =>
-  action === 'practice.read' || actor.role === 'owner' || actor.role === 'coach';
+  action === 'practice.read' ||
+  actor.role === 'owner' ||
+  (actor.role === 'coach' && !OWNERS.has(action));
 
 const onCaseload = (actor: UserActor, action: Action, coachId: string): boolean => {
   const held = reach(actor, coachId);

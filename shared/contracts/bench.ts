@@ -3,6 +3,7 @@ import { call } from './calls.ts';
 import { clipWithFrames } from './clips.ts';
 import { comment } from './comments.ts';
 import { frameIndex, id, personRef, side } from './primitives.ts';
+import { protocolRef, readingRules } from './protocol.ts';
 import { markErrorShape } from './readings.ts';
 import { mark, rep } from './reps.ts';
 import { json, none, route } from './route.ts';
@@ -21,6 +22,8 @@ export const benchDocument = z
     assumption: z.array(side),
     /** By side, the error of one anatomical mark that a reading made now takes. */
     markErrors: z.array(markErrorShape.extend({ side })),
+    /** What a reading made now is made with. */
+    protocol: protocolRef.extend({ rules: readingRules }),
     /** Other reps of the same visit, for the reading over all reps: their clips and marks. */
     otherReps: z.array(
       z.object({

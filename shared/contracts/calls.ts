@@ -1,5 +1,6 @@
 import * as z from 'zod';
 import { id, moment, personRef, side, text } from './primitives.ts';
+import { gates } from './protocol.ts';
 import { json, route } from './route.ts';
 
 export const seen = z.enum(['early', 'on-time', 'still', 'unsure']).meta({ id: 'Seen' });
@@ -44,6 +45,8 @@ export const call = z
     at: moment,
     /** True where no figure of this side had been shown to anyone before. */
     beforeFigures: z.boolean(),
+    /** Lifts between which the eye judged. */
+    gates,
   })
   .meta({ id: 'Call' });
 export type Call = z.infer<typeof call>;

@@ -100,6 +100,8 @@ const warning = z
     }),
     coded('few-quiet-frames', { have: z.int(), recommended: z.int() }),
     coded('assumed-thigh', { sd: angle }),
+    coded('gates-not-studied', { from: angle, to: angle }),
+    coded('limit-lowered', { limit: share, studied: share }),
     coded('tracked-not-looked-at', { frames: z.int() }),
   ])
   .meta({ id: 'Warning', description: 'Shown beside the reading; none changes it.' });

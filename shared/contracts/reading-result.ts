@@ -5,6 +5,7 @@ import type { ReadingResult } from '#shared/reading/types.ts';
 import { READING_CODES } from '#shared/reading/types.ts';
 import type { FrameIndex, Milliseconds } from '#shared/timing/units.ts';
 import { quantity, readonlyList, side } from './primitives.ts';
+import { readingRules } from './protocol.ts';
 import { missing, placedWarning, readingSet, reason, repFault, settle } from './reading-reasons.ts';
 
 const angle = quantity<Degrees>('Degrees.');
@@ -38,8 +39,7 @@ const figures = z
   })
   .meta({
     id: 'ReadingFigures',
-    description:
-      'Of all used reps together, from 60° to 90° of lift; `u…` are standard uncertainties.',
+    description: 'Of all used reps together, from gate to gate; `u…` are standard uncertainties.',
   });
 
 const curvePoint = z
@@ -127,6 +127,7 @@ const repResult = z
 export const readingResult = z
   .object({
     engine: z.literal(ENGINES),
+    rules: readingRules,
     inputHash: z.string(),
     supportSide: side,
     set: readingSet.nullable(),

@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import { call } from './calls.ts';
 import { id, moment, personRef, side } from './primitives.ts';
+import { protocolRef } from './protocol.ts';
 import { json, route } from './route.ts';
 import { tieFault } from './reps.ts';
 import { readingResult } from './reading-result.ts';
@@ -17,7 +18,7 @@ export const readingCode = z
   .meta({ id: 'ReadingCode' });
 export type ReadingCode = z.infer<typeof readingCode>;
 
-/** The words for each reading; `early-turn-out` before 60° carries its own. */
+/** The words for each reading; `early-turn-out` before the lower gate carries its own. */
 export const READING_LABELS = {
   'early-turn-out': 'Turns out early',
   'expected-turn-in': 'Turns in on time',
@@ -26,6 +27,12 @@ export const READING_LABELS = {
   'lift-stops-short': 'Lift stops short',
   'not-measurable': 'Not measurable from these landmarks',
 } as const satisfies Record<ReadingCode, string>;
+
+/** `Turns out early, before 60°`: what turns out already before the lower gate says so. */
+export const readingLabel = (code: ReadingCode, before60: boolean, gateFrom: number): string =>
+  code === 'early-turn-out' && before60
+    ? `${READING_LABELS[code]}, before ${gateFrom}°`
+    : READING_LABELS[code];
 
 /** The error of one anatomical mark that a reading was made with. */
 export const markErrorShape = z
@@ -50,7 +57,7 @@ export const reading = z
     seed: z.int(),
     code: readingCode,
     label: z.string(),
-    /** Turn from 60° to 90° of lift, degrees, external positive; null where nothing could be fitted. */
+    /** Turn from gate to gate, degrees, external positive; null where nothing could be fitted. */
     change: z.number().nullable(),
     /** 1.96 u_c, degrees. */
     plusMinus: z.number().nullable(),
@@ -65,6 +72,8 @@ export const reading = z
     /** The 'planted thigh turns little' assumption was on. */
     assumption: z.boolean(),
     markError: markErrorShape,
+    /** The version of the practice’s protocol that it was made with. */
+    protocol: protocolRef,
     result: readingResult,
     /** What the rep ids of `result` are called on the page. */
     reps: z.array(
@@ -94,6 +103,7 @@ export const readingSummary = reading
     change: true,
     plusMinus: true,
     markError: true,
+    protocol: true,
     by: true,
     at: true,
   })
@@ -117,6 +127,8 @@ export const sidePage = z
      * it is until somebody asks for it anew.
      */
     newerMarkError: markErrorShape.nullable(),
+    /** The same of the protocol: the version that would now be taken, where it reads otherwise. */
+    newerProtocol: protocolRef.nullable(),
     history: z.array(readingSummary),
     /** The other side of this visit, once it too has a call; null where there is nothing. */
     otherSide: z.object({ side, reading: reading.nullable(), calls: z.array(call) }).nullable(),
@@ -144,7 +156,8 @@ export const readingRoutes = {
   renewReading: route({
     method: 'post',
     path: '/api/visits/:id/sides/:side/reading',
-    summary: 'Make the reading of a side anew with the marking error known now; both are kept.',
+    summary:
+      'Make the reading of a side anew with the marking error and the protocol known now; both are kept.',
     audience: 'staff',
     params,
     status: 200,

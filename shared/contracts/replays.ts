@@ -3,6 +3,7 @@ import { call } from './calls.ts';
 import { comment } from './comments.ts';
 import { frameTable } from './clips.ts';
 import { frameIndex, id, moment, personRef, side, text, view } from './primitives.ts';
+import { gates } from './protocol.ts';
 import { bytes, json, none, route } from './route.ts';
 import { readingCode } from './readings.ts';
 import { overlayMarks, replayCourse } from './replay-parts.ts';
@@ -62,11 +63,14 @@ export const publicReplay = z
     frames: frameTable,
     fromFrame: frameIndex,
     toFrame: frameIndex,
+    /** Lifts between which the hip was looked at. */
+    gates,
     /** Frames to stop at; null where the rep has no such moment. */
     moments: z.object({
       quiet: frameIndex.nullable(),
-      sixty: frameIndex.nullable(),
-      ninety: frameIndex.nullable(),
+      /** Where the thigh passes either gate. */
+      from: frameIndex.nullable(),
+      to: frameIndex.nullable(),
       top: frameIndex.nullable(),
     }),
     overlay: overlayMarks,

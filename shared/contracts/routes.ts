@@ -6,6 +6,7 @@ import { clipRoutes } from './clip-routes.ts';
 import { commentRoutes } from './comments.ts';
 import { eventRoutes } from './events.ts';
 import { exportRoutes } from './exports.ts';
+import { protocolRoutes } from './protocol.ts';
 import { readingRoutes } from './readings.ts';
 import { reliabilityRoutes } from './reliability.ts';
 import { repRoutes } from './reps.ts';
@@ -28,6 +29,7 @@ export const routes = {
   ...reliabilityRoutes,
   ...benchRoutes,
   ...callRoutes,
+  ...protocolRoutes,
   ...readingRoutes,
   ...commentRoutes,
   ...exportRoutes,

@@ -3,6 +3,7 @@ import { clipWithFrames } from './clips.ts';
 import { coordinate, frameIndex, id, moment, personRef, side, view } from './primitives.ts';
 import { READING_CODES } from '#shared/reading/types.ts';
 import { landmarkId, mark, markOutcome } from './reps.ts';
+import { protocolRef, readingRules } from './protocol.ts';
 import { json, none, route } from './route.ts';
 
 /** A second marking as lists show it; nothing of any mark. */
@@ -71,6 +72,8 @@ export const secondMarking = z
     view,
     /** In the order in which they are to be marked. */
     frames: z.array(z.object({ frame: frameIndex, landmarks: z.array(landmarkId) })),
+    /** The protocol as it stands, for the lines that are drawn. */
+    protocol: protocolRef.extend({ rules: readingRules }),
     /** The second marks so far. */
     marks: z.array(mark),
     /** Null while it is open. */

@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import { clip } from './clips.ts';
 import { day, id, millimetres, moment, personRef, text, version } from './primitives.ts';
+import { gates } from './protocol.ts';
 import { json, route } from './route.ts';
 
 /**
@@ -119,6 +120,7 @@ export const visitRow = z
           .object({
             code: z.string(),
             label: z.string(),
+            gates,
             change: z.number().nullable(),
             plusMinus: z.number().nullable(),
             /** u_c of `change`, degrees. */

@@ -1,12 +1,13 @@
 import { describe, expect, it } from 'vitest';
 import { degrees } from '#shared/geometry/units.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { brokenLine } from './broken-line.ts';
 import { corner, cornerExactly } from './corner.ts';
 import { crossings, parabolaTop } from './crossings.ts';
 import { probabilityBelow } from './limits.ts';
 import { solveInPlace } from './linear.ts';
 import { normalBelow } from './normal.ts';
-import { CHANGE, PRE, terms } from './rise-fit.ts';
+import { changeTerms, preTerms, terms } from './rise-fit.ts';
 import { median, medianOfThree, robustSpread } from './robust.ts';
 
 describe('the normal distribution', () => {
@@ -51,10 +52,12 @@ describe('the rounded corner', () => {
   });
 
   it('makes the change between the gates from four terms', () => {
-    expect(terms(degrees(60))[1]).toBe(0);
-    expect(CHANGE[0]).toBe(0);
-    expect(CHANGE[1]).toBe(30);
-    expect(PRE[1]).toBe(30);
+    expect(terms(degrees(60), STANDARD_GATES)[1]).toBe(0);
+    expect(changeTerms(STANDARD_GATES).slice(0, 2)).toEqual([0, 30]);
+    expect(preTerms(STANDARD_GATES)[1]).toBe(30);
+    const gates = { from: degrees(50), to: degrees(75) };
+    expect(changeTerms(gates).slice(0, 2)).toEqual([0, 25]);
+    expect(preTerms(gates)[1]).toBe(20);
   });
 });
 

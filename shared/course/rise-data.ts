@@ -1,6 +1,7 @@
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { femurLandmarks, femurLength } from '#shared/measures/turn-parts.ts';
 import type { LevelFrame } from '#shared/measures/level.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import { type TiedLift, tiedLiftAt } from '#shared/measures/tied-lift.ts';
 import type { RepCourse } from './course-of-rep.ts';
 
@@ -12,6 +13,7 @@ export interface Coordinate {
 
 /** The frames of one rise that carry weight, as plain columns of numbers. */
 export interface RiseData {
+  readonly gates: Gates;
   readonly count: number;
   readonly sigma: number;
   readonly lifts: Float64Array;
@@ -69,7 +71,7 @@ const tieColumns = (frames: readonly LevelFrame[], tied: TiedLift): Float64Array
 };
 
 /** Null where the quiet stance does not give the lengths the fit needs. */
-export const riseDataOf = (course: RepCourse): RiseData | null => {
+export const riseDataOf = (course: RepCourse, gates: Gates): RiseData | null => {
   const { setting, set, level } = course;
   const { rig, reference, tiedLift } = setting;
   const { width, thigh, horizon } = reference;
@@ -87,6 +89,7 @@ export const riseDataOf = (course: RepCourse): RiseData | null => {
   const [near, a, b] = femurLandmarks(set);
   if (!near || !a || !b) return null;
   return {
+    gates,
     count: chosen.length,
     sigma: rig.sigma,
     lifts: values((frame) => frame.lift),

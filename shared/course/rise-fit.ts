@@ -1,40 +1,45 @@
 import { type Degrees, degrees } from '#shared/geometry/units.ts';
-import { CONSTANTS } from '#shared/measures/constants.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import { corner } from './corner.ts';
 import { solveInPlace } from './linear.ts';
 
 export const TERMS = 4;
-const FROM = degrees(CONSTANTS.gateFrom.value);
-const TO = degrees(CONSTANTS.gateTo.value);
-const BEFORE = degrees(30);
+/** Lift from which a turn before the lower gate is counted. */
+export const BEFORE = degrees(30);
 const RIDGE = [1e-9, 1e-7, 1e-7, 1e-5] as const;
 /** Strength of the belief that marks err as assumed: counts like six further frames. */
 const PRIOR_FRAMES = 6;
 
-/** [1, F−60, H(F−60), H(F−90)] of one lift. */
-export const terms = (lift: Degrees): readonly [number, number, number, number] => [
+export type Beta = readonly [number, number, number, number];
+
+/** With the gates 60° and 90°: [1, F−60, H(F−60), H(F−90)] of one lift. */
+export const terms = (lift: Degrees, { from, to }: Gates): Beta => [
   1,
-  lift - FROM,
-  corner(lift - FROM),
-  corner(lift - TO),
+  lift - from,
+  corner(lift - from),
+  corner(lift - to),
 ];
 
-const difference = (to: Degrees, from: Degrees): readonly [number, number, number, number] => {
-  const a = terms(to);
-  const b = terms(from);
+const difference = (high: Degrees, low: Degrees, gates: Gates): Beta => {
+  const a = terms(high, gates);
+  const b = terms(low, gates);
   return [a[0] - b[0], a[1] - b[1], a[2] - b[2], a[3] - b[3]];
 };
 
-/** What the coefficients are multiplied by to get the change 60° → 90°, and 30° → 60°. */
-export const CHANGE = difference(TO, FROM);
-export const PRE = difference(FROM, BEFORE);
+/** What the coefficients are multiplied by to get the change from gate to gate. */
+export const changeTerms = (gates: Gates): Beta => difference(gates.to, gates.from, gates);
 
-export type Beta = readonly [number, number, number, number];
+/** The same for the change from 30° to the lower gate. */
+export const preTerms = (gates: Gates): Beta => difference(gates.from, BEFORE, gates);
+
 export const dot = (a: Beta, b: Beta): number =>
   a[0] * b[0] + a[1] * b[1] + a[2] * b[2] + a[3] * b[3];
 
 /** A workspace for fits of two curves at once over the same lifts and weights. */
-export const fitter = (): ((
+export const fitter = ({
+  from,
+  to,
+}: Gates): ((
   lifts: Float64Array,
   weights: Float64Array,
   first: Float64Array,
@@ -57,9 +62,9 @@ export const fitter = (): ((
     let m33 = 0;
     for (let i = 0; i < lifts.length; i += 1) {
       const w = weights[i] ?? 0;
-      const x1 = (lifts[i] ?? NaN) - FROM;
+      const x1 = (lifts[i] ?? NaN) - from;
       const x2 = corner(x1);
-      const x3 = corner(x1 + FROM - TO);
+      const x3 = corner(x1 + from - to);
       const w1 = w * x1;
       const w2 = w * x2;
       const w3 = w * x3;
@@ -123,9 +128,10 @@ export const fitRise = (
   weights: Float64Array,
   thighPart: Float64Array,
   pelvisPart: Float64Array,
+  gates: Gates,
 ): RiseFit | null => {
   const out = new Float64Array(2 * TERMS);
-  if (!fitter()(lifts, weights, thighPart, pelvisPart, out)) return null;
+  if (!fitter(gates)(lifts, weights, thighPart, pelvisPart, out)) return null;
   const thigh = four(out, 0);
   const pelvis = four(out, TERMS);
   const turn: Beta = [
@@ -139,7 +145,9 @@ export const fitRise = (
   let squares = PRIOR_FRAMES;
   for (let i = 0; i < used; i += 1) {
     const rest =
-      (thighPart[i] ?? NaN) + (pelvisPart[i] ?? NaN) - dot(terms(degrees(lifts[i] ?? NaN)), turn);
+      (thighPart[i] ?? NaN) +
+      (pelvisPart[i] ?? NaN) -
+      dot(terms(degrees(lifts[i] ?? NaN), gates), turn);
     squares += (weights[i] ?? NaN) * rest * rest;
   }
   const sFit = Math.sqrt(squares / nu);

@@ -28,7 +28,7 @@ export const riseModel = (data: RiseData): RiseModel => {
   const lifts = new Float64Array(count);
   const thighPart = new Float64Array(count);
   const pelvisPart = new Float64Array(count);
-  const fit = fitter();
+  const fit = fitter(data.gates);
   const belt = data.pelvis === 'belt';
   const setFrame = (i: number, x: Float64Array): void => {
     const liftedU = x[AT.liftedU] ?? NaN;

@@ -3,12 +3,16 @@ import { madeRep } from '#shared/evaluate/made-rep.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import { LANDMARK_SETS } from '#shared/landmarks/types.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { courseOfRep, isCourse, type RepCourse } from './course-of-rep.ts';
 import { COORDINATES, type RiseData, riseDataOf } from './rise-data.ts';
 import { drawnSpread, drawRise } from './rise-draws.ts';
-import { CHANGE, dot, fitRise, PRE, terms } from './rise-fit.ts';
+import { changeTerms, dot, fitRise, preTerms, terms } from './rise-fit.ts';
 import { substitutionsOf } from './substitutions.ts';
 import type { RepInput } from './types.ts';
+
+const CHANGE = changeTerms(STANDARD_GATES);
+const PRE = preTerms(STANDARD_GATES);
 
 const courseOf = (rep: RepInput, set: RepCourse['set'] = 'belt+thigh'): RepCourse => {
   const course = courseOfRep(rep, set, ASSUMED_MARK_ERROR, { halfWidths: false });
@@ -20,7 +24,7 @@ const courseOf = (rep: RepInput, set: RepCourse['set'] = 'belt+thigh'): RepCours
 const early = (lift: number): number => 0.4 * Math.max(0, lift - 60);
 
 const dataOf = (rep: RepInput, set?: RepCourse['set']) => {
-  const data = riseDataOf(courseOf(rep, set));
+  const data = riseDataOf(courseOf(rep, set), STANDARD_GATES);
   if (!data) throw new Error('no data');
   return data;
 };
@@ -28,16 +32,16 @@ const dataOf = (rep: RepInput, set?: RepCourse['set']) => {
 describe.each(LANDMARK_SETS)('the fit with %s', (set) => {
   it.each(['left', 'right'] as const)('finds a turn of 12° standing on the %s', (side) => {
     const data = dataOf(madeRep(side, early, { thighShare: 0.3 }), set);
-    const fit = fitRise(data.lifts, data.weights, data.thighPart, data.pelvisPart);
+    const fit = fitRise(data.lifts, data.weights, data.thighPart, data.pelvisPart, STANDARD_GATES);
     if (!fit) throw new Error('no fit');
     expect(Math.abs(dot(CHANGE, fit.turn) - 12)).toBeLessThan(1.5);
     expect(Math.abs(dot(CHANGE, fit.thigh) - 3.6)).toBeLessThan(0.8);
     expect(Math.abs(dot(PRE, fit.turn))).toBeLessThan(1);
     expect(dot(CHANGE, fit.thigh) + dot(CHANGE, fit.pelvis)).toBeCloseTo(dot(CHANGE, fit.turn), 9);
-    expect(dot(terms(degrees(90)), fit.turn) - dot(terms(degrees(60)), fit.turn)).toBeCloseTo(
-      dot(CHANGE, fit.turn),
-      9,
-    );
+    expect(
+      dot(terms(degrees(90), STANDARD_GATES), fit.turn) -
+        dot(terms(degrees(60), STANDARD_GATES), fit.turn),
+    ).toBeCloseTo(dot(CHANGE, fit.turn), 9);
   });
 });
 
@@ -70,7 +74,7 @@ describe('lifts tied to another clip', () => {
   it('are off together: the fit of the lifts moved as one is the truth, however many frames there are', () => {
     const moved = (by: number) => {
       const lifts = made.lifts.map((lift) => lift + by);
-      const fit = fitRise(lifts, made.weights, made.thighPart, made.pelvisPart);
+      const fit = fitRise(lifts, made.weights, made.thighPart, made.pelvisPart, STANDARD_GATES);
       return dot(CHANGE, fit?.turn ?? [NaN, NaN, NaN, NaN]);
     };
     const truth = Math.abs(moved(2) - moved(-2)) / 2;
@@ -119,7 +123,7 @@ describe('the draws', () => {
       { anatomicalPx: 6, doublyMarkedFrames: 20 },
       { halfWidths: false },
     );
-    const wide = isCourse(doubled) ? riseDataOf(doubled) : null;
+    const wide = isCourse(doubled) ? riseDataOf(doubled, STANDARD_GATES) : null;
     if (!wide) throw new Error('no data');
     const pelvis = [0, 0, 0, 0, ...CHANGE];
     const thigh = [...CHANGE, 0, 0, 0, 0];

@@ -4,6 +4,7 @@ import { degrees } from '#shared/geometry/units.ts';
 import { ASSUMED_MARK_ERROR, type CameraInput } from '#shared/measures/inputs.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { milliseconds } from '#shared/timing/units.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { brokenLine } from './broken-line.ts';
 import { courseOfRep, isCourse, type RepCourse } from './course-of-rep.ts';
 import { bandwidthOf, localLinear } from './local-linear.ts';
@@ -53,27 +54,31 @@ describe('local straight lines', () => {
   });
 });
 
+const numbersOf = (course: RepCourse) => riseDataOf(course, STANDARD_GATES);
+
 describe('the numbers of a rise', () => {
   it('are there for every set that has its lengths', () => {
     for (const set of ['bare', 'belt', 'belt+thigh'] as const)
-      expect(riseDataOf(courseOf(rep, set))?.count).toBeGreaterThan(15);
+      expect(numbersOf(courseOf(rep, set))?.count).toBeGreaterThan(15);
   });
 
   it('are not there without a length, a pointer or a quiet stance', () => {
-    expect(riseDataOf(courseOf(withCamera({ beltPointerMm: null }), 'belt'))).toBeNull();
-    expect(riseDataOf(courseOf(withCamera({ thighPointerMm: null })))).toBeNull();
-    expect(riseDataOf(courseOf(without('lifted-knee')))).toBeNull();
-    expect(riseDataOf(courseOf(without('asis-support')))).toBeNull();
-    expect(riseDataOf(courseOf(without('knee-inner'), 'belt'))).toBeNull();
+    expect(numbersOf(courseOf(withCamera({ beltPointerMm: null }), 'belt'))).toBeNull();
+    expect(numbersOf(courseOf(withCamera({ thighPointerMm: null })))).toBeNull();
+    expect(numbersOf(courseOf(without('lifted-knee')))).toBeNull();
+    expect(numbersOf(courseOf(without('asis-support')))).toBeNull();
+    expect(numbersOf(courseOf(without('knee-inner'), 'belt'))).toBeNull();
   });
 
   it('carry no fit where one of them is none', () => {
-    const data = riseDataOf(courseOf(rep));
+    const data = numbersOf(courseOf(rep));
     if (!data) throw new Error('no data');
     const broken = Float64Array.from(data.thighPart, (value, i) => (i === 3 ? NaN : value));
-    expect(fitRise(data.lifts, data.weights, broken, data.pelvisPart)).toBeNull();
+    expect(fitRise(data.lifts, data.weights, broken, data.pelvisPart, STANDARD_GATES)).toBeNull();
     const nowhere = data.lifts.map(() => NaN);
-    expect(fitRise(nowhere, data.weights, data.thighPart, data.pelvisPart)).toBeNull();
+    expect(
+      fitRise(nowhere, data.weights, data.thighPart, data.pelvisPart, STANDARD_GATES),
+    ).toBeNull();
   });
 });
 

@@ -19,8 +19,9 @@ const AT_ZERO = doubleIntegral(0);
 const raw = (a: number, b: number): number =>
   doubleIntegral(a) + doubleIntegral(b) - doubleIntegral(a - b) - AT_ZERO;
 
-const FROM = CONSTANTS.gateFrom.value;
-const TO = CONSTANTS.gateTo.value;
+/** Widths and variances are counted in stretches of 30° of lift. */
+const SPAN = 30;
+const [FROM, TO] = [60, 60 + SPAN];
 const UNIT = raw(FROM, FROM) + raw(TO, TO) - 2 * raw(FROM, TO);
 
 /**
@@ -28,3 +29,7 @@ const UNIT = raw(FROM, FROM) + raw(TO, TO) - 2 * raw(FROM, TO);
  * change over any 30° has the standard deviation 1: none is expected to be larger than another.
  */
 export const turnCovariance = (a: number, b: number): number => raw(a, b) / UNIT;
+
+/** Variance of that curve's change over a stretch of lift, wherever it lies: 1 over 30°. */
+export const changeVariance = (width: number): number =>
+  (doubleIntegral(width) - AT_ZERO) / (doubleIntegral(SPAN) - AT_ZERO);

@@ -5,6 +5,7 @@ import { ASSUMED_MARK_ERROR, type CameraInput } from '#shared/measures/inputs.ts
 import { CURRENT_ENGINE, type EngineVersion } from '#shared/reading/engine.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
 import { frameIndex, milliseconds } from '#shared/timing/units.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { TrialError } from './trial-error.ts';
 import {
   field,
@@ -168,5 +169,6 @@ export const readingInputOf = (
   thighTurnsLittle: set === 'belt+prior',
   markError: ASSUMED_MARK_ERROR,
   ownSystematic: null,
+  rules: STANDARD_RULES,
   reps: trial.reps,
 });

@@ -72,8 +72,6 @@ export const CONSTANTS = {
   slipShared: constant(0.7, '', 'part of a slip’s variance that all reps share', MODEL),
   prior: constant(8, 'degrees', 'SD of the weak prior of the change of turn', MODEL),
   uncertainLimit: constant(6, 'degrees', 'standard uncertainty above which nothing is read', MODEL),
-  gateFrom: constant(60, 'degrees', 'lift from which the change of turn counts', PRACTICE),
-  gateTo: constant(90, 'degrees', 'lift to which the change of turn counts', PRACTICE),
 } as const satisfies Record<string, Constant>;
 
 /** Systematic error of the change of turn: u = √(u² + (q d)²), degrees. From our model, no source. */

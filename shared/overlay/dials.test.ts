@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { FramePoint } from '#shared/geometry/points.ts';
 import { degrees } from '#shared/geometry/units.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { type Dial, liftDial, turnDial } from './dials.ts';
 
 const lines = (dial: Dial, role: string) =>
@@ -61,14 +62,14 @@ describe('turnDial', () => {
 
 describe('liftDial', () => {
   it('draws the thigh at its lift from the plumb, towards the camera', () => {
-    const dial = liftDial(degrees(74), false);
+    const dial = liftDial(degrees(74), false, STANDARD_GATES);
     const [thigh] = lines(dial, 'lifted');
     if (thigh?.kind !== 'line') throw new Error('no thigh');
     expect(heading(thigh.from, thigh.to)).toBeCloseTo(74, 6);
   });
 
   it('names the gates', () => {
-    const words = liftDial(degrees(30), false).primitives.flatMap((each) =>
+    const words = liftDial(degrees(30), false, STANDARD_GATES).primitives.flatMap((each) =>
       each.kind === 'label' ? [each.text] : [],
     );
     expect(words).toEqual(['60°', '90°', 'from the side', 'camera →']);

@@ -1,6 +1,7 @@
 import { framePoint, type FramePoint } from '#shared/geometry/points.ts';
 import { type Degrees, degrees, toRadians } from '#shared/geometry/units.ts';
 import type { Side } from '#shared/landmarks/types.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import type { Label, OverlayRole, OverlayState, Primitive } from './types.ts';
 
 /** A small drawing of its own, with its own box; u to the right, v down, true to scale. */
@@ -19,14 +20,11 @@ const say = (
   role: OverlayRole = 'note',
 ): Label => ({ kind: 'label', at: point, text, towards, role, state: 'placed' });
 
-/** The gates of the lift: where the turn is read. */
-export const LIFT_GATES = [degrees(60), degrees(90)] as const;
-
 /**
- * Lift as seen from the side: hip, plumb, thigh, ticks at 60° and 90°. The camera of a front clip
+ * Lift as seen from the side: hip, plumb, thigh, ticks at both gates. The camera of a front clip
  * stands on the right. Dashed while provisional.
  */
-export const liftDial = (lift: Degrees, provisional: boolean): Dial => {
+export const liftDial = (lift: Degrees, provisional: boolean, gates: Gates): Dial => {
   const hip = framePoint(34, 30);
   const thigh = 62;
   const away = (angle: Degrees, length: number) =>
@@ -44,7 +42,7 @@ export const liftDial = (lift: Degrees, provisional: boolean): Dial => {
         role: 'note',
         state: 'tracked',
       },
-      ...LIFT_GATES.flatMap((gate): Primitive[] => [
+      ...[gates.from, gates.to].flatMap((gate): Primitive[] => [
         {
           kind: 'line',
           from: away(gate, thigh + 6),

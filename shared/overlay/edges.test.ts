@@ -2,6 +2,7 @@ import { expect, it } from 'vitest';
 import { framePoint } from '#shared/geometry/points.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import type { Mark, Marks } from '#shared/landmarks/types.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { liftDial } from './dials.ts';
 import { plainDegrees, signedDegrees } from './figures.ts';
 import { overlay } from './overlay.ts';
@@ -15,7 +16,7 @@ it('a figure that rounds to nought carries no sign', () => {
 
 it('a dial that rests on marks nobody has looked at is drawn as such', () => {
   const states = (provisional: boolean): string =>
-    JSON.stringify(liftDial(degrees(50), provisional));
+    JSON.stringify(liftDial(degrees(50), provisional, STANDARD_GATES));
   expect(states(true)).toContain('tracked');
   expect(states(false)).not.toEqual(states(true));
 });

@@ -2,6 +2,7 @@ import { courseOfRep, isCourse, type RepCourse } from '#shared/course/course-of-
 import type { RepInput } from '#shared/course/types.ts';
 import { LANDMARK_SETS, type LandmarkSetId } from '#shared/landmarks/types.ts';
 import { fitRep, type UsedRep } from './fit-rep.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
 import type { RepFault } from './reasons.ts';
 import type { ReadingInput } from './types.ts';
 import { bestShown, faultsOfCourse, faultsOfInput } from './usable.ts';
@@ -39,7 +40,7 @@ const candidateOf = (rep: RepInput, input: ReadingInput): Candidate => {
     const course = courseOfRep(rep, set, input.markError, { halfWidths: false });
     if (isCourse(course)) {
       courses.set(set, course);
-      courseFaults.set(set, faultsOfCourse(course));
+      courseFaults.set(set, faultsOfCourse(course, input.rules));
     } else if (course.code === 'scale-missing' || course.code === 'distance-missing') {
       inputFaults.push({ code: course.code });
       break;
@@ -71,12 +72,13 @@ const assessed = (
 
 /** Chooses the richest set that has a usable rep, or takes the one asked for, and fits its reps. */
 export const assess = (input: ReadingInput, seed: number, runs: number): Assessment => {
+  const gates = gatesOf(input.rules);
   const candidates = input.reps.map((rep) => candidateOf(rep, input));
   const sets = input.set === null ? [...LANDMARK_SETS].reverse() : [input.set];
   for (const set of sets) {
     const used = candidates.map((candidate, at) => {
       const course = candidate.courses.get(set);
-      return course && usableWith(candidate, set) ? fitRep(course, seed, at, runs) : null;
+      return course && usableWith(candidate, set) ? fitRep(course, gates, seed, at, runs) : null;
     });
     if (used.every((rep) => rep === null)) continue;
     return { set, reps: candidates.map((each, at) => assessed(each, set, used[at] ?? null)) };

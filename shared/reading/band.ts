@@ -1,12 +1,9 @@
 import { drawnSpread, type RiseDraws } from '#shared/course/rise-draws.ts';
-import { type Beta, dot, terms } from '#shared/course/rise-fit.ts';
+import { BEFORE, type Beta, dot, terms } from '#shared/course/rise-fit.ts';
 import { type Degrees, degrees } from '#shared/geometry/units.ts';
-import { CONSTANTS } from '#shared/measures/constants.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import type { CurvePoint } from './types.ts';
 
-const FROM = degrees(CONSTANTS.gateFrom.value);
-const TO = degrees(CONSTANTS.gateTo.value);
-const BEFORE = 30;
 /** A marked frame carries the curve this far, degrees: from our model, no source. */
 const REACH = 8;
 const STEP = 1;
@@ -23,7 +20,7 @@ export interface DrawnFit {
   readonly lifts: readonly Degrees[];
 }
 
-/** How uncertain the change at 90° is: random and systematic part. */
+/** How uncertain the change at the upper gate is: random and systematic part. */
 export interface BandWidths {
   readonly uR: Degrees;
   readonly uS: Degrees;
@@ -40,13 +37,18 @@ const scaled = (beta: Beta, by: number): Beta => [
 
 const minus = (a: Beta, b: Beta): Beta => [a[0] - b[0], a[1] - b[1], a[2] - b[2], a[3] - b[3]];
 
-/** Grows from nothing at 60° to all of it at 90° and at 30°, and stays so beyond. */
-const grown = (lift: number): number =>
-  Math.min(1, lift >= FROM ? (lift - FROM) / (TO - FROM) : (FROM - lift) / (FROM - BEFORE));
+/** Grows from nothing at the lower gate to all of it at the upper one and at 30°, and stays so beyond. */
+const grown = (lift: number, { from, to }: Gates): number =>
+  Math.min(1, lift >= from ? (lift - from) / (to - from) : (from - lift) / (from - BEFORE));
 
-/** Random spread of the curve's change from 60° to a lift: each rep's draws, added in quadrature. */
-const randomSpread = (fits: readonly DrawnFit[], lift: Degrees, lambda: number): number => {
-  const change = minus(terms(lift), terms(FROM));
+/** Random spread of the curve's change from the lower gate: each rep's draws, added in quadrature. */
+const randomSpread = (
+  fits: readonly DrawnFit[],
+  lift: Degrees,
+  lambda: number,
+  gates: Gates,
+): number => {
+  const change = minus(terms(lift, gates), terms(gates.from, gates));
   return Math.hypot(
     ...fits.map(
       ({ draws, sFit, share }) =>
@@ -79,24 +81,26 @@ export const bandOf = (
 
 /**
  * The drawn course: weighted mean of the fits. Its band (95 %, under our error model) judges the
- * change from 60°: it is closed there, and at 90° exactly d ± 1.96 u around the value at 60°.
+ * change from the lower gate: it is closed there, and at the upper one exactly d ± 1.96 u around
+ * the value at the lower.
  */
 export const courseCurve = (
   fits: readonly DrawnFit[],
   { uR, uS, lambda }: BandWidths,
+  gates: Gates,
 ): readonly CurvePoint[] => {
-  const scale = uR / randomSpread(fits, TO, lambda);
+  const scale = uR / randomSpread(fits, gates.to, lambda, gates);
   if (!Number.isFinite(scale)) return [];
   return bandOf(
     fits.flatMap((fit) => fit.lifts),
     (lift) => {
-      const x = terms(lift);
+      const x = terms(lift, gates);
       return {
         turn: fits.reduce(
           (sum, fit) => sum + fit.share * (lambda * dot(x, fit.thigh) + dot(x, fit.pelvis)),
           0,
         ),
-        u: Math.hypot(scale * randomSpread(fits, lift, lambda), uS * grown(lift)),
+        u: Math.hypot(scale * randomSpread(fits, lift, lambda, gates), uS * grown(lift, gates)),
       };
     },
   );

@@ -4,6 +4,7 @@ import { degrees } from '#shared/geometry/units.ts';
 import { ASSUMED_MARK_ERROR, type CameraInput } from '#shared/measures/inputs.ts';
 import type { LandmarkId, Mark, PlacedMark } from '#shared/landmarks/types.ts';
 import type { RepInput } from '#shared/course/types.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { deriveReading } from './derive.ts';
 import type { ReadingInput, ReadingResult } from './types.ts';
 
@@ -17,6 +18,7 @@ const inputOf = (reps: readonly RepInput[], over: Partial<ReadingInput> = {}): R
   thighTurnsLittle: false,
   markError: ASSUMED_MARK_ERROR,
   ownSystematic: null,
+  rules: STANDARD_RULES,
   reps,
   ...over,
 });

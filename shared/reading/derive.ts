@@ -1,9 +1,10 @@
 import { DRAWS } from '#shared/course/rise-draws.ts';
-import { degrees } from '#shared/geometry/units.ts';
+import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
 import { SYSTEMATIC } from '#shared/measures/constants.ts';
+import { gatesOf, rulesOf } from '#shared/protocol/protocol.ts';
 import { assess, type Assessed } from './assess.ts';
-import { canonicalText } from './canonical.ts';
+import { canonicalInputs } from './canonical-inputs.ts';
 import { figuresOf, type Systematic } from './figures.ts';
 import type { EngineVersion } from './engine.ts';
 import type { UsedRep } from './fit-rep.ts';
@@ -18,8 +19,8 @@ import { hexOf, sha256Words } from './sha256.ts';
 import type { ReadingInput, ReadingResult } from './types.ts';
 import { hollowFrames, placedWarnings } from './warnings.ts';
 
-/** Lift from which a return of the turn past 90° is described. */
-const RETURN_FROM = 100;
+/** So far over the upper gate a return of the turn is described. */
+const RETURN_ABOVE = 10;
 
 /** Systematic error of a set: the assumed one, or the practice's own u with the assumed growth. */
 const systematicOf = (
@@ -33,13 +34,14 @@ const systematicOf = (
     : assumed;
 };
 
-/** Change from 90° to the top, over the reps that reach 100°. */
+/** Change from the upper gate to the top, over the reps that go far enough past it. */
 const returnPast90 = (
   used: readonly UsedRep[],
   { pooled: { shares }, past90 }: Joined,
+  gate: Degrees,
 ): ReadingResult['returnPast90'] => {
   const high = used.map(({ course: { fMax } }, i) =>
-    fMax !== null && fMax >= RETURN_FROM ? { fMax, share: shares[i] ?? 0 } : null,
+    fMax !== null && fMax >= gate + RETURN_ABOVE ? { fMax, share: shares[i] ?? 0 } : null,
   );
   const sum = high.reduce((total, rep) => total + (rep?.share ?? 0), 0);
   if (sum === 0) return null;
@@ -73,16 +75,24 @@ const candidates = (reps: readonly Assessed[]): readonly Assessed[] =>
  * `runs` of the Monte Carlo part: readings that are kept use the default.
  */
 export const deriveReading = (input: ReadingInput, runs: number = DRAWS): ReadingResult => {
-  const hash = sha256Words(canonicalText(input));
+  const hash = sha256Words(canonicalInputs(input));
   const seed = hash[0] ?? 0;
   const { set, reps } = assess(input, seed, runs);
   const used = reps.flatMap((rep) => rep.used ?? []);
-  const head = { engine: input.engine, inputHash: hexOf(hash), supportSide: input.supportSide };
+  const rules = rulesOf(input.rules);
+  const gates = gatesOf(rules);
+  const head = {
+    engine: input.engine,
+    rules,
+    inputHash: hexOf(hash),
+    supportSide: input.supportSide,
+  };
   const courses = reps.flatMap(({ shown, faults }) =>
     shown && !faults.some(({ code }) => code === 'excluded') ? [shown] : [],
   );
   if (set === null) {
-    const decision = decideWithoutRep(candidates(reps).map(({ shown }) => shown?.fMax ?? null));
+    const highest = candidates(reps).map(({ shown }) => shown?.fMax ?? null);
+    const decision = decideWithoutRep(highest, rules);
     return {
       ...head,
       ...decision,
@@ -94,16 +104,16 @@ export const deriveReading = (input: ReadingInput, runs: number = DRAWS): Readin
       returnPast90: null,
       course: [],
       reps: reps.map((rep) => repResult(rep, null)),
-      warnings: placedWarnings(courses, false),
-      settle: settleOf(decision, reps, null),
+      warnings: placedWarnings(courses, { thighTurnsLittle: false, rules }),
+      settle: settleOf(decision, reps, null, rules),
     };
   }
   const thighTurnsLittle = input.thighTurnsLittle && set === 'belt';
   const systematic = systematicOf(input, set, thighTurnsLittle);
-  const joined = JOIN[input.engine]({ used, set, thighTurnsLittle, systematic });
+  const joined = JOIN[input.engine]({ used, set, thighTurnsLittle, systematic, gates });
   const { pooled } = joined;
-  const figures = figuresOf(pooled, joined.uncertain, thighTurnsLittle);
-  const decision = decide(figures);
+  const figures = figuresOf(pooled, joined.uncertain, { thighTurnsLittle, gates });
+  const decision = decide(figures, rules);
   const shareOf = new Map(used.map((rep, i) => [rep, pooled.shares[i] ?? 0]));
   const usedCourses = used.map(({ course }) => course);
   return {
@@ -117,12 +127,12 @@ export const deriveReading = (input: ReadingInput, runs: number = DRAWS): Readin
       decision.code === 'early-turn-out'
         ? onsetOf(used.map(({ data, fitted }) => ({ data, sFit: fitted.fit.sFit })))
         : null,
-    returnPast90: returnPast90(used, joined),
+    returnPast90: returnPast90(used, joined, gates.to),
     course: joined.course(figures),
     reps: reps.map((rep) =>
-      repResult(rep, rep.used && { share: shareOf.get(rep.used) ?? 0, systematic }),
+      repResult(rep, rep.used && { share: shareOf.get(rep.used) ?? 0, systematic, gates }),
     ),
-    warnings: placedWarnings(usedCourses, thighTurnsLittle),
-    settle: settleOf(decision, reps, { engine: input.engine, set, figures, systematic }),
+    warnings: placedWarnings(usedCourses, { thighTurnsLittle, rules }),
+    settle: settleOf(decision, reps, { engine: input.engine, set, figures, systematic }, rules),
   };
 };

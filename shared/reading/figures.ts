@@ -1,5 +1,7 @@
+import { changeVariance } from '#shared/course/turn-process.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import type { Pooled } from './pool.ts';
 import { studentAbove, studentQuantile } from './student.ts';
 import type { ReadingFigures } from './types.ts';
@@ -15,12 +17,21 @@ const PRIOR2 = CONSTANTS.prior.value ** 2;
 const SYSTEMATIC_NU = 20;
 const CLEAR = 1;
 const FLAT = 5;
-const BEFORE_60 = 8;
+const BEFORE = 8;
 const NINE_IN_TEN = 1.2816;
 
+/** Variance of the weak prior of the change of turn between the gates: (8°)² over 30°. */
+export const priorVariance = ({ from, to }: Gates): number => PRIOR2 * changeVariance(to - from);
+
+/**
+ * The assumed errors are those of 60° to 90°. Over a wider window skin slips further, as far as our
+ * model says; over a narrower one nothing is taken off.
+ */
+export const widening = ({ from, to }: Gates): number => Math.max(1, changeVariance(to - from));
+
 /** u₀²: a part that all reps share, a part that differs, and true spread between reps. */
-export const systematicVariance = ({ u }: Systematic, reps: number): number =>
-  u * u * (0.7 + 0.3 / reps) + REP2 / reps;
+export const systematicVariance = ({ u }: Systematic, reps: number, gates: Gates): number =>
+  (u * u * (0.7 + 0.3 / reps) + REP2 / reps) * widening(gates);
 
 /** Welch–Satterthwaite, with 20 degrees of freedom for the systematic part. */
 export const freedom = (uR2: number, nuR: number, uS2: number): number =>
@@ -36,7 +47,7 @@ export interface Uncertain {
 export const figuresOf = (
   pooled: Pooled,
   { variance: u02, q }: Uncertain,
-  thighTurnsLittle: boolean,
+  { thighTurnsLittle, gates }: { readonly thighTurnsLittle: boolean; readonly gates: Gates },
 ): ReadingFigures => {
   const { d, uR, nuR } = pooled;
   const uR2 = uR * uR;
@@ -44,7 +55,8 @@ export const figuresOf = (
   const uS2 = u02 + (q * d) ** 2;
   const uC2 = uR2 + uS2;
   const nu = freedom(uR2, nuR, uS2);
-  const g = PRIOR2 / (PRIOR2 + uC2);
+  const prior = priorVariance(gates);
+  const g = prior / (prior + uC2);
   const m = g * d;
   const sM = Math.sqrt(g * uC2);
   const above = (x: number): number => studentAbove((x - m) / sM, nu);
@@ -61,7 +73,7 @@ export const figuresOf = (
     pEarly: above(CLEAR),
     pIn: 1 - above(-CLEAR),
     pFlat: above(-FLAT) - above(FLAT),
-    pBefore60: studentAbove((BEFORE_60 - pooled.pre) / uPre, nu),
+    pBefore60: studentAbove((BEFORE - pooled.pre) / uPre, nu),
     pNotBack: above(0),
     mdt90: degrees(CLEAR + (studentQuantile(0.95, nu) + NINE_IN_TEN) * uC0),
     pelvis: { value: pooled.dPelvis, u: pooled.uPelvis },

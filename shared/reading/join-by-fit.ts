@@ -7,16 +7,18 @@ import { pool } from './pool.ts';
 import { drawnFit } from './rep-result.ts';
 
 /** Engine 1: a fit to each rise by least squares, and the weighted mean of their changes. */
-export const joinByFit = ({ used, thighTurnsLittle, systematic }: Joining): Joined => {
+export const joinByFit = ({ used, thighTurnsLittle, systematic, gates }: Joining): Joined => {
   const pooled = pool(
     used.map(({ fitted }) => fitted),
     thighTurnsLittle,
+    gates,
   );
   return {
     pooled,
-    uncertain: { variance: systematicVariance(systematic, used.length), q: systematic.q },
+    uncertain: { variance: systematicVariance(systematic, used.length, gates), q: systematic.q },
     past90: (to, shares) => {
-      const past = (beta: Beta): number => dot(terms(to), beta) - dot(terms(degrees(90)), beta);
+      const past = (beta: Beta): number =>
+        dot(terms(to, gates), beta) - dot(terms(gates.to, gates), beta);
       return degrees(
         used.reduce(
           (total, { fitted: { fit } }, i) =>
@@ -29,6 +31,7 @@ export const joinByFit = ({ used, thighTurnsLittle, systematic }: Joining): Join
       courseCurve(
         used.map((rep, i) => drawnFit(rep, pooled.shares[i] ?? 0)),
         { uR, uS, lambda: pooled.lambda },
+        gates,
       ),
   };
 };

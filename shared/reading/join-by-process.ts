@@ -1,6 +1,9 @@
+import { BEFORE } from '#shared/course/rise-fit.ts';
+import { changeVariance } from '#shared/course/turn-process.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import { CONSTANTS, SYSTEMATIC } from '#shared/measures/constants.ts';
 import { bandOf } from './band.ts';
+import { priorVariance } from './figures.ts';
 import type { UsedRep } from './fit-rep.ts';
 import type { Joined, Joining } from './joined.ts';
 import { sharesOf } from './pool.ts';
@@ -11,9 +14,6 @@ import type { Belief, SegmentBelief } from './process-matrices.ts';
 const PRIOR2 = CONSTANTS.prior.value ** 2;
 const THIGH2 = CONSTANTS.thighSpread.value ** 2;
 const REP2 = CONSTANTS.repSpread.value ** 2;
-const FROM = CONSTANTS.gateFrom.value;
-const TO = CONSTANTS.gateTo.value;
-const BEFORE = 30;
 const PRIOR_FRAMES = 6;
 const TERMS = 4;
 
@@ -69,21 +69,23 @@ const measured = ({ mean, variance }: Moments, prior: number) => {
  * (7), with the assumption 1 (3); with drifting marks or twice the slip 9 in 600 (10), and 4 (6).
  */
 export const joinByProcess = (joining: Joining): Joined | null => {
-  const { used, systematic, thighTurnsLittle } = joining;
+  const { used, systematic, thighTurnsLittle, gates } = joining;
+  const { from, to } = gates;
   const belief = beliefOf(joining);
   const { factor, nu } = scatterFactor(used);
   const zero = (read: (rep: UsedRep) => number | undefined): readonly number[] =>
     used.map((rep) => (read(rep) ?? 0) * (180 / Math.PI) ** 2 * factor);
   const seen = used.flatMap(seenLifts);
-  const process = turnProcess(seen, belief, {
+  const scatter = {
     factor,
     zeroThigh: zero(({ course }) => course.setting.turnZero?.femurVariance),
     zeroPelvis: zero(({ course }) => course.setting.turnZero?.pelvisVariance),
-  });
+  };
+  const process = turnProcess(seen, belief, scatter, gates);
   if (!process) return null;
-  const window = process.change(FROM, TO);
-  const d = measured(window, PRIOR2);
-  const pre = measured(process.change(BEFORE, FROM), PRIOR2);
+  const window = process.change(from, to);
+  const d = measured(window, priorVariance(gates));
+  const pre = measured(process.change(BEFORE, from), priorVariance({ from: BEFORE, to: from }));
   const random = window.random / d.gain ** 2;
   if (!(d.gain > 0) || !(pre.gain > 0) || !(d.variance >= random)) return null;
   const variance = d.variance - random;
@@ -104,16 +106,18 @@ export const joinByProcess = (joining: Joining): Joined | null => {
       uThigh: thigh.u,
       pre: degrees(pre.value),
       uPre: degrees(Math.sqrt(Math.max(0, pre.variance - variance))),
-      lambda: thighTurnsLittle ? 1 - window.thigh.variance / THIGH2 : 1,
+      lambda: thighTurnsLittle
+        ? 1 - window.thigh.variance / (THIGH2 * changeVariance(to - from))
+        : 1,
     },
     uncertain: { variance, q: systematic.q },
-    past90: (to) => degrees(process.change(TO, to).mean / d.gain),
+    past90: (top) => degrees(process.change(to, top).mean / d.gain),
     course: ({ uC }) => {
-      const level = process.change(0, FROM).mean;
+      const level = process.change(0, from).mean;
       return bandOf(
         seen.map(({ lift }) => degrees(lift)),
         (lift) => {
-          const { mean, variance: left } = process.change(FROM, lift);
+          const { mean, variance: left } = process.change(from, lift);
           return {
             turn: level + mean / d.gain,
             u: uC * Math.sqrt(Math.max(0, left) / window.variance),

@@ -1,5 +1,6 @@
 import type { Degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import type { Systematic, Uncertain } from './figures.ts';
 import type { UsedRep } from './fit-rep.ts';
 import type { Pooled } from './pool.ts';
@@ -11,13 +12,14 @@ export interface Joining {
   readonly set: LandmarkSetId;
   readonly thighTurnsLittle: boolean;
   readonly systematic: Systematic;
+  readonly gates: Gates;
 }
 
 /** The reps together: what an engine makes of them. Everything after it is the same for all. */
 export interface Joined {
   readonly pooled: Pooled;
   readonly uncertain: Uncertain;
-  /** Change of turn from 90° to a higher lift, over the reps with a share. */
+  /** Change of turn from the upper gate to a higher lift, over the reps with a share. */
   readonly past90: (to: Degrees, shares: readonly number[]) => Degrees;
   /** The course drawn, with its 95 % band. */
   readonly course: (figures: ReadingFigures) => readonly CurvePoint[];

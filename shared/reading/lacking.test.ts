@@ -3,6 +3,7 @@ import { MADE_LIFTS, madeRep } from '#shared/evaluate/made-rep.ts';
 import { ASSUMED_MARK_ERROR, type CameraInput } from '#shared/measures/inputs.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { RepInput } from '#shared/course/types.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { deriveReading } from './derive.ts';
 import { nextFrames, type UnmarkedFrame } from './next-frame.ts';
 import type { ReadingInput, ReadingResult } from './types.ts';
@@ -19,6 +20,7 @@ const read = (rep: RepInput, over: Partial<ReadingInput> = {}): ReadingResult =>
     thighTurnsLittle: false,
     markError: ASSUMED_MARK_ERROR,
     ownSystematic: null,
+    rules: STANDARD_RULES,
     reps: [rep],
     ...over,
   });

@@ -4,9 +4,10 @@ import { degrees } from '#shared/geometry/units.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { milliseconds } from '#shared/timing/units.ts';
 import type { RepInput } from '#shared/course/types.ts';
+import { STANDARD_GATES, STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { deriveReading } from './derive.ts';
 import { liftAt, nextFrames, type UnmarkedFrame } from './next-frame.ts';
-import { plannedVariance } from './planned.ts';
+import { type PlannedFrame, plannedVariance } from './planned.ts';
 import type { ReadingResult } from './types.ts';
 
 const whole = madeRep('left', (lift) => 0.15 * Math.max(0, lift - 60), { id: 'a' });
@@ -19,6 +20,7 @@ const read = (rep: RepInput, set: 'bare' | 'belt+thigh' = 'bare'): ReadingResult
     thighTurnsLittle: false,
     markError: ASSUMED_MARK_ERROR,
     ownSystematic: null,
+    rules: STANDARD_RULES,
     reps: [rep],
   });
 
@@ -32,24 +34,25 @@ const split = (keep: (index: number) => boolean) => {
 };
 
 describe('planning', () => {
+  const planned = (frames: readonly PlannedFrame[]) => plannedVariance(frames, STANDARD_GATES);
   const at = (lift: number, weight = 0.01) => ({ lift: degrees(lift), weight });
   const spread = [30, 40, 50, 60, 75, 90, 100].map((lift) => at(lift));
 
   it('values marks at the ends of the window more than in its middle', () => {
-    const with_ = (lift: number) => plannedVariance([...spread, at(lift)]) ?? NaN;
+    const with_ = (lift: number) => planned([...spread, at(lift)]) ?? NaN;
     expect(with_(60)).toBeLessThan(with_(75));
     expect(with_(90)).toBeLessThan(with_(75));
-    expect(with_(75)).toBeLessThanOrEqual(plannedVariance(spread) ?? NaN);
+    expect(with_(75)).toBeLessThanOrEqual(planned(spread) ?? NaN);
   });
 
   it('halves the variance with twice the weight', () => {
-    const once = plannedVariance(spread) ?? NaN;
-    const twice = plannedVariance(spread.map(({ lift }) => ({ lift, weight: 0.02 }))) ?? NaN;
+    const once = planned(spread) ?? NaN;
+    const twice = planned(spread.map(({ lift }) => ({ lift, weight: 0.02 }))) ?? NaN;
     expect(Math.abs(twice / once - 0.5)).toBeLessThan(0.01);
   });
 
   it('knows nothing of no frames', () => {
-    expect(plannedVariance([])).toBeNull();
+    expect(planned([])).toBeNull();
   });
 });
 

@@ -3,11 +3,12 @@ import { median } from '#shared/course/robust.ts';
 import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import type { FrameIndex, Milliseconds } from '#shared/timing/units.ts';
 import { CONSTANTS, SYSTEMATIC } from '#shared/measures/constants.ts';
+import { gatesOf, type ReadingRules } from '#shared/protocol/protocol.ts';
 import { figuresOf } from './figures.ts';
 import { type PlannedFrame, plannedVariance } from './planned.ts';
 import { decide } from './rule.ts';
 import type { ReadingFigures, ReadingResult, RepResult } from './types.ts';
-import { inBand, LEAST_FRAMES } from './usable.ts';
+import { inBand, leastFrames } from './usable.ts';
 
 /** A frame of a clip that carries no marks yet. */
 export interface UnmarkedFrame {
@@ -93,24 +94,25 @@ const cannotChange = (result: ReadingResult, figures: ReadingFigures): boolean =
         lambda: figures.lambda ?? 1,
       },
       { variance, q: SYSTEMATIC[key].q },
-      result.thighTurnsLittle,
+      { thighTurnsLittle: result.thighTurnsLittle, gates: gatesOf(result.rules) },
     );
-    return decide(settled).code;
+    return decide(settled, result.rules).code;
   };
   const reach = 1.96 * figures.uR;
   return [-reach, -reach / 2, 0, reach / 2, reach].every((shift) => with_(shift) === result.code);
 };
 
 /** Frames a rep needs before it can be used at all, nearest to the middle of what it lacks. */
-const needed = (rep: RepResult, unmarked: readonly UnmarkedFrame[]): readonly FrameOffer[] => {
-  const least = LEAST_FRAMES.find(({ code }) => rep.why.some((fault) => fault.code === code));
+const needed = (
+  rep: RepResult,
+  unmarked: readonly UnmarkedFrame[],
+  rules: ReadingRules,
+): readonly FrameOffer[] => {
+  const { from, to } = gatesOf(rules);
+  const least = leastFrames(rules).find(({ code }) => rep.why.some((fault) => fault.code === code));
   if (!least) return [];
   const middle =
-    least.code === 'few-near-60'
-      ? CONSTANTS.gateFrom.value
-      : least.code === 'few-near-90'
-        ? CONSTANTS.gateTo.value
-        : (CONSTANTS.gateFrom.value + CONSTANTS.gateTo.value) / 2;
+    least.code === 'few-near-60' ? from : least.code === 'few-near-90' ? to : (from + to) / 2;
   return unmarked
     .flatMap((frame): readonly FrameOffer[] => {
       const lift = frame.rep === rep.id ? liftAt(rep.frames, frame.time) : null;
@@ -131,8 +133,9 @@ export const nextFrames = (
   result: ReadingResult,
   unmarked: readonly UnmarkedFrame[],
 ): readonly FrameOffer[] => {
-  const { figures, reps } = result;
-  const lacking = reps.filter(({ used }) => !used).flatMap((rep) => needed(rep, unmarked));
+  const { figures, reps, rules } = result;
+  const gates = gatesOf(rules);
+  const lacking = reps.filter(({ used }) => !used).flatMap((rep) => needed(rep, unmarked, rules));
   if (!figures) return lacking;
   const u02 = figures.uC0 ** 2 - figures.uR ** 2;
   if (figures.uR < DOMINATED * Math.sqrt(u02) || cannotChange(result, figures)) return [];
@@ -145,8 +148,8 @@ export const nextFrames = (
     if (!rep || lift === null || lift < CONSTANTS.leastLift.value) return [];
     const marked = plannedOf(rep);
     const weight = weightAt(rep, lift);
-    const now = plannedVariance(marked);
-    const then = weight === null ? null : plannedVariance([...marked, { lift, weight }]);
+    const now = plannedVariance(marked, gates);
+    const then = weight === null ? null : plannedVariance([...marked, { lift, weight }], gates);
     if (now === null || then === null || then >= now) return [];
     return [
       {

@@ -5,9 +5,9 @@ import { degrees } from '#shared/geometry/units.ts';
 import type { Onset } from './types.ts';
 
 const FIRST = 30;
-const LAST = 90;
 const STEP = 2.5;
-const HIGHEST = 97;
+/** Frames this far over the upper gate still tell where the turn bends. */
+const ABOVE = 7;
 const LEAST_FRAMES = 5;
 const RIDGE = [1e-9, 1 / 25, 1e-9] as const;
 const SLOPE_SD = 5;
@@ -23,12 +23,13 @@ export interface OnsetRep {
 
 /** Log plausibility that the turn of one rep bends at κ; null with fewer than five frames. */
 const bend = ({ data, sFit }: OnsetRep, kappa: number): number | null => {
+  const { from, to } = data.gates;
   const rows: { x: readonly [number, number, number]; r: number; w: number }[] = [];
   for (let i = 0; i < data.count; i += 1) {
     const lift = data.lifts[i] ?? NaN;
-    if (!(lift <= HIGHEST)) continue;
+    if (!(lift <= to + ABOVE)) continue;
     rows.push({
-      x: [1, (lift - 60) / 30, corner(lift - kappa)],
+      x: [1, (lift - from) / 30, corner(lift - kappa)],
       r: (data.thighPart[i] ?? NaN) + (data.pelvisPart[i] ?? NaN),
       w: (data.weights[i] ?? NaN) / (sFit * sFit),
     });
@@ -52,12 +53,14 @@ const bend = ({ data, sFit }: OnsetRep, kappa: number): number | null => {
 
 /**
  * Lift at which the turn outward starts, as a range: its own error is 7–10°. Null where a rep has
- * fewer than five frames between 25° and 97°.
+ * fewer than five frames between 25° and 7° over the upper gate.
  */
 export const onsetOf = (reps: readonly OnsetRep[]): Onset | null => {
-  if (reps.length === 0) return null;
+  const [first] = reps;
+  if (!first) return null;
+  const last = first.data.gates.to;
   const grid: { kappa: number; log: number }[] = [];
-  for (let kappa = FIRST; kappa <= LAST; kappa += STEP) {
+  for (let kappa = FIRST; kappa <= last; kappa += STEP) {
     let log = 0;
     for (const rep of reps) {
       const one = bend(rep, kappa);
@@ -76,7 +79,7 @@ export const onsetOf = (reps: readonly OnsetRep[]): Onset | null => {
       below += (weights[i] ?? 0) / sum;
       if (below >= p) return kappa;
     }
-    return LAST;
+    return last;
   };
   return { mean: degrees(mean), low: degrees(quantile(0.05)), high: degrees(quantile(0.95)) };
 };

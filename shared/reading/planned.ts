@@ -1,6 +1,7 @@
 import { solveInPlace } from '#shared/course/linear.ts';
-import { CHANGE, terms } from '#shared/course/rise-fit.ts';
+import { changeTerms, terms } from '#shared/course/rise-fit.ts';
 import type { Degrees } from '#shared/geometry/units.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 
 /** A frame as the fit would weigh it. */
 export interface PlannedFrame {
@@ -14,13 +15,13 @@ const SIZE = 4;
 const RIDGE = [1e-9, 1e-7, 1e-7, 1e-5] as const;
 
 /**
- * Variance of the change 60° → 90° that frames with these lifts and weights would have, degrees²:
+ * Variance of the change from gate to gate that frames with these lifts and weights would have, degrees²:
  * known before a single mark is placed. Null where they carry no fit.
  */
-export const plannedVariance = (frames: readonly PlannedFrame[]): number | null => {
+export const plannedVariance = (frames: readonly PlannedFrame[], gates: Gates): number | null => {
   const plain = new Float64Array(SIZE * SIZE);
   for (const { lift, weight } of frames) {
-    const x = terms(lift);
+    const x = terms(lift, gates);
     for (let i = 0; i < SIZE; i += 1)
       for (let j = 0; j < SIZE; j += 1)
         plain[i * SIZE + j] = (plain[i * SIZE + j] ?? 0) + weight * (x[i] ?? 0) * (x[j] ?? 0);
@@ -28,7 +29,7 @@ export const plannedVariance = (frames: readonly PlannedFrame[]): number | null 
   const ridged = Float64Array.from(plain);
   for (let i = 0; i < SIZE; i += 1)
     ridged[i * (SIZE + 1)] = (ridged[i * (SIZE + 1)] ?? 0) + (RIDGE[i] ?? 0);
-  const answer = Float64Array.from(CHANGE);
+  const answer = Float64Array.from(changeTerms(gates));
   if (!solveInPlace(ridged, answer, SIZE, 1)) return null;
   let variance = 0;
   for (let i = 0; i < SIZE; i += 1)

@@ -1,7 +1,9 @@
 import { drawnSpread, type RiseDraws } from '#shared/course/rise-draws.ts';
-import { type Beta, CHANGE, dot, PRE, type RiseFit } from '#shared/course/rise-fit.ts';
+import { type Beta, changeTerms, dot, preTerms, type RiseFit } from '#shared/course/rise-fit.ts';
+import { changeVariance } from '#shared/course/turn-process.ts';
 import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 
 const REP = CONSTANTS.repSpread.value;
 const THIGH = CONSTANTS.thighSpread.value;
@@ -10,7 +12,7 @@ const THIGH = CONSTANTS.thighSpread.value;
 export interface FittedRep {
   readonly fit: RiseFit;
   readonly draws: RiseDraws;
-  /** Changes 60° → 90° of the turn and its parts, and 30° → 60°, with random uncertainty. */
+  /** Changes of the turn and its parts from gate to gate, and of 30° to the lower gate, with random uncertainty. */
   readonly d: Degrees;
   readonly u: Degrees;
   readonly dPelvis: Degrees;
@@ -24,23 +26,25 @@ export interface FittedRep {
 const NOTHING: Beta = [0, 0, 0, 0];
 
 /** Null where the draws carry no spread: marks that coincide. */
-export const fittedRep = (fit: RiseFit, draws: RiseDraws): FittedRep | null => {
+export const fittedRep = (fit: RiseFit, draws: RiseDraws, gates: Gates): FittedRep | null => {
   const spread = (thigh: Beta, pelvis: Beta): Degrees =>
     degrees(fit.sFit * drawnSpread(draws, [...thigh, ...pelvis]));
+  const change = changeTerms(gates);
+  const pre = preTerms(gates);
   const rep: FittedRep = {
     fit,
     draws,
-    d: degrees(dot(CHANGE, fit.turn)),
-    u: spread(CHANGE, CHANGE),
-    dPelvis: degrees(dot(CHANGE, fit.pelvis)),
-    uPelvis: spread(NOTHING, CHANGE),
-    dThigh: degrees(dot(CHANGE, fit.thigh)),
-    uThigh: spread(CHANGE, NOTHING),
-    pre: degrees(dot(PRE, fit.turn)),
-    uPre: spread(PRE, PRE),
+    d: degrees(dot(change, fit.turn)),
+    u: spread(change, change),
+    dPelvis: degrees(dot(change, fit.pelvis)),
+    uPelvis: spread(NOTHING, change),
+    dThigh: degrees(dot(change, fit.thigh)),
+    uThigh: spread(change, NOTHING),
+    pre: degrees(dot(pre, fit.turn)),
+    uPre: spread(pre, pre),
   };
-  const { d, u, uPelvis, uThigh, pre, uPre } = rep;
-  return Number.isFinite(d + u + uPelvis + uThigh + pre + uPre) ? rep : null;
+  const { d, u, uPelvis, uThigh, uPre } = rep;
+  return Number.isFinite(d + u + uPelvis + uThigh + rep.pre + uPre) ? rep : null;
 };
 
 /** The reps together: random parts only. */
@@ -83,7 +87,11 @@ export const disagreement = (
 };
 
 /** At least one rep. */
-export const pool = (reps: readonly FittedRep[], thighTurnsLittle: boolean): Pooled => {
+export const pool = (
+  reps: readonly FittedRep[],
+  thighTurnsLittle: boolean,
+  gates: Gates,
+): Pooled => {
   const uncertainties = reps.map((rep) => rep.u);
   const shares = sharesOf(uncertainties);
   const mean = (read: (rep: FittedRep) => number): number =>
@@ -98,7 +106,8 @@ export const pool = (reps: readonly FittedRep[], thighTurnsLittle: boolean): Poo
   const dPelvis = mean((rep) => rep.dPelvis);
   const dThigh = mean((rep) => rep.dThigh);
   const thighVariance = squares((rep) => rep.uThigh) + (thighTurnsLittle ? REP * REP : 0);
-  const lambda = thighTurnsLittle ? (THIGH * THIGH) / (THIGH * THIGH + thighVariance) : 1;
+  const believed = THIGH * THIGH * changeVariance(gates.to - gates.from);
+  const lambda = thighTurnsLittle ? believed / (believed + thighVariance) : 1;
   const random = thighTurnsLittle
     ? squares((rep) => rep.uPelvis) + lambda * thighVariance
     : squares((rep) => rep.u);

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { turnProcess } from './process.ts';
 import type { SeenLift } from './process-frames.ts';
 import type { Belief, Scatter } from './process-matrices.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 
 const segment = { own: 32, slipShared: 0.9, slipPerRep: 0.4, perRep: 1.1 };
 const belief: Belief = { thigh: segment, pelvis: segment, wholeBody: 4, stance: 1 };
@@ -45,7 +46,7 @@ const rise = ({
   });
 
 const windowOf = (seen: readonly SeenLift[], believing: Belief = belief) => {
-  const process = turnProcess(seen, believing, scatter);
+  const process = turnProcess(seen, believing, scatter, STANDARD_GATES);
   if (!process) throw new Error('no answer');
   return process.change(60, 90);
 };
@@ -125,6 +126,8 @@ describe('the regression over all reps', () => {
   it('has no answer where a frame has no number', () => {
     const [first, ...rest] = rise();
     if (!first) throw new Error('no frame');
-    expect(turnProcess([{ ...first, thighVariance: NaN }, ...rest], belief, scatter)).toBeNull();
+    expect(
+      turnProcess([{ ...first, thighVariance: NaN }, ...rest], belief, scatter, STANDARD_GATES),
+    ).toBeNull();
   });
 });

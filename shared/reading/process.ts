@@ -1,6 +1,6 @@
 import { solveFactored, solveInPlace } from '#shared/course/linear.ts';
 import { turnCovariance } from '#shared/course/turn-process.ts';
-import { CONSTANTS } from '#shared/measures/constants.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import type { SeenLift } from './process-frames.ts';
 import {
   type Belief,
@@ -9,9 +9,6 @@ import {
   type Scatter,
   type Slopes,
 } from './process-matrices.ts';
-
-const FROM = CONSTANTS.gateFrom.value;
-const TO = CONSTANTS.gateTo.value;
 
 /** Mean and variance of a change of direction, degrees. */
 export interface Moments {
@@ -63,6 +60,7 @@ export const turnProcess = (
   seen: readonly SeenLift[],
   belief: Belief,
   scatter: Scatter,
+  { from, to }: Gates,
 ): TurnProcess | null => {
   const n = seen.length;
   const believed = believedCovariance(seen, belief, scatter);
@@ -110,10 +108,10 @@ export const turnProcess = (
   // how steep the turn is has to be known for the errors of the lift: a first answer tells
   const flat = solve({ thigh: 0, pelvis: 0 });
   if (!flat) return null;
-  const rough = changeIn(flat, FROM, TO);
+  const rough = changeIn(flat, from, to);
   const solved = solve({
-    thigh: rough.thigh.mean / (TO - FROM),
-    pelvis: rough.pelvis.mean / (TO - FROM),
+    thigh: rough.thigh.mean / (to - from),
+    pelvis: rough.pelvis.mean / (to - from),
   });
-  return solved && { change: (from, to) => changeIn(solved, from, to) };
+  return solved && { change: (low, high) => changeIn(solved, low, high) };
 };

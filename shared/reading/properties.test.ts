@@ -7,6 +7,7 @@ import { LANDMARK_IDS } from '#shared/landmarks/types.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { milliseconds } from '#shared/timing/units.ts';
 import type { RepInput } from '#shared/course/types.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { deriveReading } from './derive.ts';
 import { ENGINES, type EngineVersion } from './engine.ts';
 import type { ReadingInput } from './types.ts';
@@ -22,6 +23,7 @@ const inputFor = (
   thighTurnsLittle: false,
   markError: ASSUMED_MARK_ERROR,
   ownSystematic: null,
+  rules: STANDARD_RULES,
   reps,
 });
 

@@ -23,7 +23,10 @@ export type RepFault =
   /** Usable only with a poorer landmark set than the reading's. */
   | { readonly code: 'poorer-set'; readonly set: LandmarkSetId };
 
-/** Fewer marked frames than the least; `from` and `to` are lifts, null for quiet stance. */
+/**
+ * Fewer marked frames than the least; `from` and `to` are lifts, null for quiet stance. `60` and `90`
+ * in the codes mean the lower and the upper gate.
+ */
 export interface FewFrames {
   readonly code: 'few-quiet' | 'few-near-60' | 'few-near-90' | 'few-across-window' | 'few-in-rise';
   readonly have: number;
@@ -77,6 +80,10 @@ export type Warning =
     }
   | { readonly code: 'few-quiet-frames'; readonly have: number; readonly recommended: number }
   | { readonly code: 'assumed-thigh'; readonly sd: Degrees }
+  /** The assumed errors and every published figure are those of other gates. */
+  | { readonly code: 'gates-not-studied'; readonly from: Degrees; readonly to: Degrees }
+  /** A reading needs less than in the study: more of them will be wrong. */
+  | { readonly code: 'limit-lowered'; readonly limit: number; readonly studied: number }
   | { readonly code: 'tracked-not-looked-at'; readonly frames: number };
 
 /** A warning and the reps it concerns. */

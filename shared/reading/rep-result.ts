@@ -3,6 +3,7 @@ import { substitutionsOf } from '#shared/course/substitutions.ts';
 import type { CourseFrame } from '#shared/course/types.ts';
 import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { liftHalfWidth } from '#shared/measures/lift.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import type { Assessed } from './assess.ts';
 import { courseCurve, type DrawnFit } from './band.ts';
 import { type Systematic, systematicVariance } from './figures.ts';
@@ -13,6 +14,7 @@ import type { Change, RepFit, RepResult } from './types.ts';
 interface Standing {
   readonly share: number;
   readonly systematic: Systematic;
+  readonly gates: Gates;
 }
 
 export const drawnFit = ({ data, fitted }: UsedRep, share: number): DrawnFit => ({
@@ -71,16 +73,20 @@ export const repResult = (
     fMax: shown.fMax,
     fit: alone ? repFit(used, standing.share) : null,
     curve: alone
-      ? courseCurve([drawnFit(used, 1)], {
-          uR: used.fitted.u,
-          uS: degrees(
-            Math.sqrt(
-              systematicVariance(standing.systematic, 1) +
-                (standing.systematic.q * used.fitted.d) ** 2,
+      ? courseCurve(
+          [drawnFit(used, 1)],
+          {
+            uR: used.fitted.u,
+            uS: degrees(
+              Math.sqrt(
+                systematicVariance(standing.systematic, 1, standing.gates) +
+                  (standing.systematic.q * used.fitted.d) ** 2,
+              ),
             ),
-          ),
-          lambda: 1,
-        })
+            lambda: 1,
+          },
+          standing.gates,
+        )
       : [],
     substitutions: substitutionsOf(shown),
     ...(rep.liftFrom && { liftFrom: rep.liftFrom.from }),

@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { degrees } from '#shared/geometry/units.ts';
+import { STANDARD_GATES, STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { sidesDifference, retestChange } from './compare.ts';
 import { figuresOf, freedom, systematicVariance } from './figures.ts';
 import { disagreement, type Pooled, sharesOf } from './pool.ts';
-import { decide, decideWithoutRep } from './rule.ts';
+import { decide as decideBy, decideWithoutRep as withoutRepBy } from './rule.ts';
 import type { ReadingFigures } from './types.ts';
 
 const pooled = (d: number, uR: number, pre = 0, uPre = 3): Pooled => ({
@@ -23,11 +24,14 @@ const pooled = (d: number, uR: number, pre = 0, uPre = 3): Pooled => ({
 const figures = (d: number, uR: number, pre = 0, uPre = 3): ReadingFigures =>
   figuresOf(
     pooled(d, uR, pre, uPre),
-    { variance: systematicVariance({ u: 1.6, q: 0.05 }, 1), q: 0.05 },
-    false,
+    { variance: systematicVariance({ u: 1.6, q: 0.05 }, 1, STANDARD_GATES), q: 0.05 },
+    { thighTurnsLittle: false, gates: STANDARD_GATES },
   );
 
 const angle = degrees;
+const decide = (of: ReadingFigures) => decideBy(of, STANDARD_RULES);
+const decideWithoutRep = (highest: Parameters<typeof withoutRepBy>[0]) =>
+  withoutRepBy(highest, STANDARD_RULES);
 
 describe('the rule', () => {
   it.each([
@@ -93,8 +97,14 @@ describe('the figures', () => {
 
   it('combine random and systematic parts as the specification says', () => {
     const { uC, uC0, uR, uS } = figures(10, 2);
-    expect(systematicVariance({ u: 1.6, q: 0.05 }, 1)).toBeCloseTo(1.6 ** 2 + 1.5 ** 2, 12);
-    expect(systematicVariance({ u: 1.6, q: 0.05 }, 3)).toBeCloseTo(1.6 ** 2 * 0.8 + 0.75, 12);
+    expect(systematicVariance({ u: 1.6, q: 0.05 }, 1, STANDARD_GATES)).toBeCloseTo(
+      1.6 ** 2 + 1.5 ** 2,
+      12,
+    );
+    expect(systematicVariance({ u: 1.6, q: 0.05 }, 3, STANDARD_GATES)).toBeCloseTo(
+      1.6 ** 2 * 0.8 + 0.75,
+      12,
+    );
     expect(uC0 ** 2).toBeCloseTo(uR ** 2 + 1.6 ** 2 + 1.5 ** 2, 9);
     expect(uS ** 2).toBeCloseTo(1.6 ** 2 + 1.5 ** 2 + 0.25, 9);
     expect(uC ** 2).toBeCloseTo(uR ** 2 + uS ** 2, 9);

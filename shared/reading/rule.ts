@@ -1,17 +1,11 @@
 import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
+import type { ReadingRules } from '#shared/protocol/protocol.ts';
 import type { Reason } from './reasons.ts';
 import type { ReadingCode, ReadingFigures, ReadingResult } from './types.ts';
 
-export const LIMITS = {
-  early: 0.95,
-  before60: 0.975,
-  notBack: 0.8,
-  turnIn: 0.95,
-  flat: 0.8,
-  /** Lift under which a rep stopped short. */
-  liftShort: 85,
-} as const;
+/** A turn before the lower gate must not come back before the upper one: from our model, no source. */
+const NOT_BACK = 0.8;
 
 export type Decision = Pick<ReadingResult, 'code' | 'line' | 'before60' | 'reason'>;
 
@@ -23,9 +17,12 @@ const decision = (
 ): Decision => ({ line, code, before60, reason });
 
 /** Line 1: no rep can be used. `highest` holds the highest lift of each rep, null where unknown. */
-export const decideWithoutRep = (highest: readonly (Degrees | null)[]): Decision => {
+export const decideWithoutRep = (
+  highest: readonly (Degrees | null)[],
+  { liftShort }: ReadingRules,
+): Decision => {
   const known = highest.flatMap((lift) => lift ?? []);
-  const short = known.filter((lift) => lift < LIMITS.liftShort);
+  const short = known.filter((lift) => lift < liftShort);
   if (short.length > 0 && 2 * short.length >= highest.length)
     return decision(1, 'lift-stops-short', {
       code: 'lift-under-85',
@@ -37,37 +34,37 @@ export const decideWithoutRep = (highest: readonly (Degrees | null)[]): Decision
 };
 
 /** Lines 2 to 7: the first that holds. */
-export const decide = (figures: ReadingFigures): Decision => {
+export const decide = (figures: ReadingFigures, rules: ReadingRules): Decision => {
   const { uC0, pEarly, pBefore60, pNotBack, pIn, pFlat } = figures;
   const limit = CONSTANTS.uncertainLimit.value;
   if (uC0 > limit)
     return decision(2, 'not-measurable', { code: 'too-uncertain', u: uC0, limit: degrees(limit) });
-  if (pEarly >= LIMITS.early)
+  if (pEarly >= rules.early)
     return decision(3, 'early-turn-out', {
       code: 'early-probable',
       p: pEarly,
-      limit: LIMITS.early,
+      limit: rules.early,
     });
-  if (pBefore60 >= LIMITS.before60 && pNotBack >= LIMITS.notBack)
+  if (pBefore60 >= rules.before && pNotBack >= NOT_BACK)
     return decision(
       4,
       'early-turn-out',
       {
         code: 'before-60-probable',
         p: pBefore60,
-        limit: LIMITS.before60,
+        limit: rules.before,
         pNotBack,
-        limitNotBack: LIMITS.notBack,
+        limitNotBack: NOT_BACK,
       },
       true,
     );
-  if (pIn >= LIMITS.turnIn)
+  if (pIn >= rules.turnIn)
     return decision(5, 'expected-turn-in', {
       code: 'turn-in-probable',
       p: pIn,
-      limit: LIMITS.turnIn,
+      limit: rules.turnIn,
     });
-  if (pFlat >= LIMITS.flat)
-    return decision(6, 'holds-still', { code: 'flat-probable', p: pFlat, limit: LIMITS.flat });
+  if (pFlat >= rules.flat)
+    return decision(6, 'holds-still', { code: 'flat-probable', p: pFlat, limit: rules.flat });
   return decision(7, 'cannot-tell', { code: 'nothing-probable-enough', pEarly, pIn, pFlat });
 };

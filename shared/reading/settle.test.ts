@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { madeRep } from '#shared/evaluate/made-rep.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { deriveReading } from './derive.ts';
 
 describe('what would settle it', () => {
@@ -13,6 +14,7 @@ describe('what would settle it', () => {
       thighTurnsLittle: false,
       markError: ASSUMED_MARK_ERROR,
       ownSystematic: null,
+      rules: STANDARD_RULES,
       reps: [{ ...rep, camera: { ...rep.camera, view: 'lifted-side' } }],
     });
     expect(result.code).toBe('not-measurable');

@@ -1,18 +1,18 @@
 import { degrees } from '#shared/geometry/units.ts';
 import { type LandmarkSetId, LANDMARK_SETS } from '#shared/landmarks/types.ts';
 import { LEAST_QUIET } from '#shared/measures/reference.ts';
+import { type Gates, gatesOf, type ReadingRules } from '#shared/protocol/protocol.ts';
 import type { Assessed } from './assess.ts';
 import type { EngineVersion } from './engine.ts';
-import { systematicVariance, type Systematic } from './figures.ts';
+import { systematicVariance, type Systematic, widening } from './figures.ts';
 import type { RepFault, Settle } from './reasons.ts';
 import type { Decision } from './rule.ts';
-import { LIMITS } from './rule.ts';
 import type { ReadingFigures } from './types.ts';
 import { inBand } from './usable.ts';
 
 type Typical = Readonly<Record<LandmarkSetId, readonly [one: number, three: number]>>;
 
-/** Typical uncertainty of the change with one rep and with three, degrees: from our model. */
+/** Typical uncertainty of the change from 60° to 90° with one rep and with three, degrees: from our model. */
 const TYPICAL: Readonly<Record<EngineVersion, Typical>> = {
   1: {
     bare: [16.0 / 1.96, 10.5 / 1.96],
@@ -31,12 +31,15 @@ const MANY = 7;
 
 /** Marked frames recommended at each end of the window. */
 const AT_EACH_END = 4;
-const ENDS = [
-  { from: 54, to: 66 },
-  { from: 84, to: 96 },
-] as const;
+const END = 6;
+const endsOf = ({ from, to }: Gates) =>
+  [from, to].map((gate) => ({ from: degrees(gate - END), to: degrees(gate + END) }));
 
-const forFault = (fault: RepFault, { rep, shown }: Assessed): Settle | null => {
+const forFault = (
+  fault: RepFault,
+  { rep, shown }: Assessed,
+  { liftShort }: ReadingRules,
+): Settle | null => {
   switch (fault.code) {
     case 'scale-missing':
       return { code: 'give-scale' };
@@ -64,8 +67,8 @@ const forFault = (fault: RepFault, { rep, shown }: Assessed): Settle | null => {
     case 'few-across-window':
     case 'few-in-rise': {
       const reached = shown?.fMax ?? null;
-      if (reached !== null && reached < LIMITS.liftShort && fault.code !== 'few-near-60')
-        return { code: 'lift-higher', reached, needed: degrees(LIMITS.liftShort) };
+      if (reached !== null && reached < liftShort && fault.code !== 'few-near-60')
+        return { code: 'lift-higher', reached, needed: liftShort };
       return {
         code: 'mark-frames',
         rep: rep.id,
@@ -95,16 +98,17 @@ interface Unsettled {
   readonly set: LandmarkSetId;
   readonly figures: ReadingFigures;
   readonly systematic: Systematic;
+  readonly gates: Gates;
 }
 
 /** More marks at the ends of the window, another rep, a richer set: with what each would bring. */
 const forUnsettled = (
   used: readonly Assessed[],
-  { engine, set, figures, systematic }: Unsettled,
+  { engine, set, figures, systematic, gates }: Unsettled,
 ): readonly Settle[] => {
   const settle: Settle[] = [];
   for (const { rep, shown } of used)
-    for (const end of ENDS) {
+    for (const end of endsOf(gates)) {
       const have = (shown?.frames ?? []).filter(
         ({ inFit, lift }) => inFit && lift !== null && inBand(lift, end),
       ).length;
@@ -112,20 +116,20 @@ const forUnsettled = (
         settle.push({
           code: 'mark-frames',
           rep: rep.id,
-          from: degrees(end.from),
-          to: degrees(end.to),
+          ...end,
           more: AT_EACH_END - have,
         });
     }
   const n = used.length;
   const from = figures.uC0;
   const random = (figures.uR ** 2 * n) / (n + 1);
-  const gained = systematicVariance(systematic, n) - systematicVariance(systematic, n + 1);
+  const gained =
+    systematicVariance(systematic, n, gates) - systematicVariance(systematic, n + 1, gates);
   const rest = from ** 2 - figures.uR ** 2 - gained;
   const u = degrees(Math.sqrt(Math.max(0, random + rest)));
   if (u < from) settle.push({ code: 'another-rep', u, from });
   for (const richer of LANDMARK_SETS.slice(LANDMARK_SETS.indexOf(set) + 1)) {
-    const typical = degrees(TYPICAL[engine][richer][n >= 3 ? 1 : 0]);
+    const typical = degrees(TYPICAL[engine][richer][n >= 3 ? 1 : 0] * Math.sqrt(widening(gates)));
     if (typical < from) settle.push({ code: 'richer-set', set: richer, u: typical, from });
   }
   return settle;
@@ -141,13 +145,16 @@ const decisive = (faults: readonly RepFault[]): readonly RepFault[] => {
 export const settleOf = (
   decision: Decision,
   reps: readonly Assessed[],
-  reading: Unsettled | null,
+  reading: Omit<Unsettled, 'gates'> | null,
+  rules: ReadingRules,
 ): readonly Settle[] => {
   if (decision.code === 'lift-stops-short' || !reading)
     return once(
-      reps.flatMap((rep) => decisive(rep.faults).flatMap((fault) => forFault(fault, rep) ?? [])),
+      reps.flatMap((rep) =>
+        decisive(rep.faults).flatMap((fault) => forFault(fault, rep, rules) ?? []),
+      ),
     );
   if (decision.line !== 2 && decision.line !== 7) return [];
   const used = reps.filter((rep) => rep.used !== null);
-  return forUnsettled(used, reading);
+  return forUnsettled(used, { ...reading, gates: gatesOf(rules) });
 };

@@ -4,6 +4,7 @@ import { isTiedLift, liftFromSideRep } from '#shared/course/lift-from-side-rep.t
 import type { RepInput } from '#shared/course/types.ts';
 import { madeFront, type MadeMotion, madeSide } from '#shared/evaluate/made-pair.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { canonicalText } from './canonical.ts';
 import { deriveReading } from './derive.ts';
 import { CURRENT_ENGINE, type EngineVersion } from './engine.ts';
@@ -42,6 +43,7 @@ const inputOf = (rep: RepInput, engine: EngineVersion, set: ReadingInput['set'])
   thighTurnsLittle: false,
   markError: ASSUMED_MARK_ERROR,
   ownSystematic: null,
+  rules: STANDARD_RULES,
   reps: [rep],
 });
 

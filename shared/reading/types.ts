@@ -3,12 +3,15 @@ import type { Degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId, Side } from '#shared/landmarks/types.ts';
 import type { SubstitutionChange } from '#shared/measures/change.ts';
 import type { MarkError } from '#shared/measures/inputs.ts';
+import type { ReadingRules } from '#shared/protocol/protocol.ts';
 import type { EngineVersion } from './engine.ts';
 import type { PlacedWarning, Reason, RepFault, Settle } from './reasons.ts';
 
 /** Everything a reading depends on: the same input gives the same result to the last digit. */
 export interface ReadingInput {
   readonly engine: EngineVersion;
+  /** Gates and limits of the practice's protocol. */
+  readonly rules: ReadingRules;
   readonly supportSide: Side;
   /** Null: the richest set that has a usable rep. */
   readonly set: LandmarkSetId | null;
@@ -40,7 +43,7 @@ export interface Change {
   readonly u: Degrees;
 }
 
-/** Figures of the reps together. Changes are from 60° to 90° of lift unless said otherwise. */
+/** Figures of the reps together. Changes are from gate to gate unless said otherwise. */
 export interface ReadingFigures {
   readonly d: Degrees;
   /** Total standard uncertainty: d ± 1.96 uC is shown. */
@@ -65,7 +68,7 @@ export interface ReadingFigures {
   /** Parts; with the assumption the thigh's is already shrunk by `lambda`. */
   readonly pelvis: Change;
   readonly thigh: Change;
-  /** Change from 30° to 60°. */
+  /** Change from 30° to the lower gate. */
   readonly pre: Change;
   /** How much of the thigh part counts under the assumption; null without it. */
   readonly lambda: number | null;
@@ -80,7 +83,7 @@ export interface Onset {
 
 /** The fit over one rise. */
 export interface RepFit {
-  /** At 60°, slope before, change of slope at 60° and at 90° (rounded corners of 5°). */
+  /** At the lower gate, slope before, change of slope at either gate (rounded corners of 5°). */
   readonly beta: readonly [number, number, number, number];
   readonly change: Change;
   readonly pelvis: Change;
@@ -122,6 +125,11 @@ export interface CurvePoint {
 
 export interface ReadingResult {
   readonly engine: EngineVersion;
+  /**
+   * What it was read with. `60` and `90` in the names of codes and figures mean the lower and the
+   * upper gate, whatever lift they stand at.
+   */
+  readonly rules: ReadingRules;
   /** SHA-256 of the canonical input, hex. A new reading row is made only when it changes. */
   readonly inputHash: string;
   readonly supportSide: Side;
@@ -131,13 +139,13 @@ export interface ReadingResult {
   readonly code: ReadingCode;
   /** Line of the decision rule that held, 1 to 7. */
   readonly line: 1 | 2 | 3 | 4 | 5 | 6 | 7;
-  /** 'Turns out early, before 60°'. */
+  /** Turns out early, already before the lower gate. */
   readonly before60: boolean;
   /** Rests on tracked marks nobody has looked at: cannot be signed off. */
   readonly provisional: boolean;
   readonly figures: ReadingFigures | null;
   readonly onset: Onset | null;
-  /** Turn of the reps' weighted fit from 90° to their top, only where a rep reaches 100°. */
+  /** Turn of the reps' weighted fit from the upper gate to their top, only where a rep goes 10° past it. */
   readonly returnPast90: { readonly to: Degrees; readonly change: Degrees } | null;
   readonly course: readonly CurvePoint[];
   readonly reps: readonly RepResult[];

@@ -7,23 +7,31 @@ import { CONSTANTS } from '#shared/measures/constants.ts';
 import { isPlausible } from '#shared/measures/level.ts';
 import { missingLengths } from '#shared/measures/rig.ts';
 import { LEAST_QUIET } from '#shared/measures/reference.ts';
+import { bandsOf } from '#shared/protocol/bands.ts';
+import type { ReadingRules } from '#shared/protocol/protocol.ts';
 import { timestampFault } from '#shared/timing/timestamps.ts';
 import type { FewFrames, RepFault } from './reasons.ts';
 
 interface Least {
   readonly code: Exclude<FewFrames['code'], 'few-quiet'>;
   readonly need: number;
-  readonly from: number;
-  readonly to: number | null;
+  readonly from: Degrees;
+  readonly to: Degrees | null;
 }
 
-/** Fewest marked frames of the rise, by lift in degrees, both bounds included. */
-export const LEAST_FRAMES: readonly Least[] = [
-  { code: 'few-near-60', need: 2, from: 48, to: 70 },
-  { code: 'few-near-90', need: 2, from: 78, to: 106 },
-  { code: 'few-across-window', need: 4, from: 55, to: 95 },
-  { code: 'few-in-rise', need: 7, from: CONSTANTS.leastLift.value, to: null },
-];
+/**
+ * Fewest marked frames of the rise, by lift, both bounds included. How many is no matter of taste:
+ * the fit has four unknowns.
+ */
+export const leastFrames = (rules: ReadingRules): readonly Least[] => {
+  const { from, to, across } = bandsOf(rules);
+  return [
+    { code: 'few-near-60', need: 2, ...from },
+    { code: 'few-near-90', need: 2, ...to },
+    { code: 'few-across-window', need: 4, ...across },
+    { code: 'few-in-rise', need: 7, from: degrees(CONSTANTS.leastLift.value), to: null },
+  ];
+};
 
 export const inBand = (lift: Degrees, { from, to }: Pick<Least, 'from' | 'to'>): boolean =>
   lift >= from && (to === null || lift <= to);
@@ -62,7 +70,7 @@ const turnedLifts = (frames: readonly CourseFrame[]): readonly Degrees[] =>
   );
 
 /** What a rep lacks for a fit with the landmark set of its course; empty: usable. */
-export const faultsOfCourse = (course: RepCourse): readonly RepFault[] => {
+export const faultsOfCourse = (course: RepCourse, rules: ReadingRules): readonly RepFault[] => {
   const { setting, set, frames, rep, phases } = course;
   const faults: RepFault[] = [];
   for (const missing of missingLengths(setting.rig, set))
@@ -87,15 +95,15 @@ export const faultsOfCourse = (course: RepCourse): readonly RepFault[] => {
   if (still < LEAST_QUIET)
     faults.push({ code: 'few-quiet', have: still, need: LEAST_QUIET, from: null, to: null });
   const lifts = turnedLifts(frames);
-  for (const least of LEAST_FRAMES) {
+  for (const least of leastFrames(rules)) {
     const have = lifts.filter((lift) => inBand(lift, least)).length;
     if (have < least.need)
       faults.push({
         code: least.code,
         have,
         need: least.need,
-        from: degrees(least.from),
-        to: least.to === null ? null : degrees(least.to),
+        from: least.from,
+        to: least.to,
       });
   }
   return faults;

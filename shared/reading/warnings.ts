@@ -4,6 +4,13 @@ import { landmarksOf } from '#shared/landmarks/table.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import { FILMING_LIMITS as LIMITS, isSlow } from '#shared/measures/filming-limits.ts';
 import { restsOnHollow } from '#shared/measures/need.ts';
+import {
+  gatesOf,
+  type ReadingRules,
+  sameGates,
+  STANDARD_GATES,
+  STANDARD_RULES,
+} from '#shared/protocol/protocol.ts';
 import { canonicalText } from './canonical.ts';
 import type { PlacedWarning, Warning } from './reasons.ts';
 
@@ -83,10 +90,36 @@ const warningsOf = (course: RepCourse): readonly Warning[] => {
   return warnings;
 };
 
+/** What the study cannot speak for. */
+const warningsOfRules = (rules: ReadingRules): readonly Warning[] => {
+  const gates = gatesOf(rules);
+  const lowered = (['early', 'before', 'turnIn', 'flat'] as const).find(
+    (limit) => rules[limit] < STANDARD_RULES[limit],
+  );
+  return [
+    ...(sameGates(gates, STANDARD_GATES) ? [] : [{ code: 'gates-not-studied' as const, ...gates }]),
+    ...(lowered
+      ? [
+          {
+            code: 'limit-lowered' as const,
+            limit: rules[lowered],
+            studied: STANDARD_RULES[lowered],
+          },
+        ]
+      : []),
+  ];
+};
+
+/** What the reading rests on beside its courses. */
+interface Grounds {
+  readonly thighTurnsLittle: boolean;
+  readonly rules: ReadingRules;
+}
+
 /** Warnings of all reps; the same warning of several reps stands once. */
 export const placedWarnings = (
   courses: readonly RepCourse[],
-  thighTurnsLittle: boolean,
+  { thighTurnsLittle, rules }: Grounds,
 ): readonly PlacedWarning[] => {
   const placed = new Map<string, { warning: Warning; reps: string[] }>();
   const place = (warning: Warning, rep: string): void => {
@@ -97,8 +130,12 @@ export const placedWarnings = (
   };
   for (const course of courses)
     for (const warning of warningsOf(course)) place(warning, course.rep.id);
-  if (thighTurnsLittle)
-    for (const { rep } of courses)
-      place({ code: 'assumed-thigh', sd: degrees(CONSTANTS.thighSpread.value) }, rep.id);
+  const ofAll: readonly Warning[] = [
+    ...(thighTurnsLittle
+      ? [{ code: 'assumed-thigh' as const, sd: degrees(CONSTANTS.thighSpread.value) }]
+      : []),
+    ...warningsOfRules(rules),
+  ];
+  for (const warning of ofAll) for (const { rep } of courses) place(warning, rep.id);
   return [...placed.values()];
 };

@@ -8,6 +8,8 @@ import { deriveReading } from '#shared/reading/derive.ts';
 import type { Warning } from '#shared/reading/reasons.ts';
 import type { FrameIndex } from '#shared/timing/units.ts';
 import { milliseconds } from '#shared/timing/units.ts';
+import { degrees } from '#shared/geometry/units.ts';
+import { type ReadingRules, STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { type MeasuredClip, repInputOf } from './engine-input.ts';
 
 const made = madeRep('left', (lift) => 0.2 * Math.max(0, lift - 60));
@@ -21,6 +23,7 @@ interface Rows {
   readonly tracked?: boolean;
   /** Moved by hand to there. */
   readonly quietEnd?: number;
+  readonly rules?: Partial<ReadingRules>;
   readonly assumption?: boolean;
 }
 
@@ -104,6 +107,7 @@ const warningsOf = (rows: Rows): readonly Warning[] => {
       thighTurnsLittle: rows.assumption ?? false,
       markError: ASSUMED_MARK_ERROR,
       ownSystematic: null,
+      rules: { ...STANDARD_RULES, ...rows.rules },
       reps: [rep],
     },
     50,
@@ -137,6 +141,11 @@ const ROWS = {
   ],
   'few-quiet-frames': [{ quietEnd: 9 }, { have: 4, recommended: 5 }],
   'assumed-thigh': [{ assumption: true }, { sd: 4 }],
+  'gates-not-studied': [
+    { rules: { gateFrom: degrees(50), gateTo: degrees(80), liftShort: degrees(75) } },
+    { from: 50, to: 80 },
+  ],
+  'limit-lowered': [{ rules: { early: 0.9 } }, { limit: 0.9, studied: 0.95 }],
   'tracked-not-looked-at': [{ tracked: true }, {}],
 } satisfies Record<Warning['code'], [Rows, object]>;
 

@@ -1,6 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import type { FramePhase } from '#shared/course/types.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { ASKED_FRAMES, chooseFrames, type MarkableFrame, shuffled } from './asked-frames.ts';
+
+const choose = (frames: readonly MarkableFrame[]) => chooseFrames(frames, STANDARD_GATES);
 
 /** A rep of `quiet` quiet frames, then a rise of 5° a frame to 105°, then a lowering. */
 const repOf = (quiet: number): MarkableFrame[] => {
@@ -16,7 +19,7 @@ const repOf = (quiet: number): MarkableFrame[] => {
 describe('the frames to mark again', () => {
   it('are three of the quiet stance, four near 60° and three near 90°, in the order of the clip', () => {
     const frames = repOf(9);
-    const chosen = chooseFrames(frames);
+    const chosen = choose(frames);
     expect(chosen).toHaveLength(ASKED_FRAMES);
     expect(chosen).toEqual(chosen.toSorted((a, b) => a - b));
     const at = chosen.map((frame) => frames[frame]);
@@ -28,7 +31,7 @@ describe('the frames to mark again', () => {
 
   it('are filled up from the rest, evenly, where the rep has too few of these', () => {
     const lowering = repOf(0).filter(({ phase }) => phase === 'lower');
-    const chosen = chooseFrames(lowering);
+    const chosen = choose(lowering);
     expect(chosen).toHaveLength(ASKED_FRAMES);
     expect(chosen[0]).toBe(lowering[0]?.frame);
     expect(chosen.at(-1)).toBe(lowering.at(-1)?.frame);
@@ -39,14 +42,14 @@ describe('the frames to mark again', () => {
       ...frame,
       lift: frame.frame % 2 ? null : frame.lift,
     }));
-    const chosen = chooseFrames(frames);
+    const chosen = choose(frames);
     const near = chosen.map((n) => frames[n]).filter((frame) => frame?.phase === 'rise');
     expect(near.map((frame) => frame?.lift)).not.toContain(null);
   });
 
   it('are all there are of a short rep, none of none', () => {
-    expect(chooseFrames(repOf(3).slice(0, 5))).toEqual([0, 1, 2, 3, 4]);
-    expect(chooseFrames([])).toEqual([]);
+    expect(choose(repOf(3).slice(0, 5))).toEqual([0, 1, 2, 3, 4]);
+    expect(choose([])).toEqual([]);
   });
 });
 

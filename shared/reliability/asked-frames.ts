@@ -1,4 +1,5 @@
 import type { FramePhase } from '#shared/course/types.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 
 /** A frame to be marked again and the landmarks that are asked for on it. */
 export interface AskedFrame {
@@ -19,9 +20,9 @@ export interface MarkableFrame {
  * from which a reading can be made, so that two markings of them can be read and compared.
  */
 export const ASKED_QUIET = 3;
-export const ASKED_NEAR_60 = 4;
-export const ASKED_NEAR_90 = 3;
-export const ASKED_FRAMES = ASKED_QUIET + ASKED_NEAR_60 + ASKED_NEAR_90;
+export const ASKED_NEAR_FROM = 4;
+export const ASKED_NEAR_TO = 3;
+export const ASKED_FRAMES = ASKED_QUIET + ASKED_NEAR_FROM + ASKED_NEAR_TO;
 
 /** Spread over a list, first and last included. */
 const spread = <T>(list: readonly T[], count: number): T[] => {
@@ -42,23 +43,23 @@ const nearest = (
     .slice(0, count);
 
 /**
- * Which frames of a rep to mark again: of the quiet stance, near 60° and near 90° of the rise; what is missing there
- * is filled up from the rest, evenly.
+ * Which frames of a rep to mark again: of the quiet stance and near either gate of the rise; what is missing there is
+ * filled up from the rest, evenly.
  * @returns frame numbers in the order of the clip, at most `ASKED_FRAMES`
  */
-export const chooseFrames = (frames: readonly MarkableFrame[]): number[] => {
+export const chooseFrames = (frames: readonly MarkableFrame[], gates: Gates): number[] => {
   const quiet = spread(
     frames.filter(({ phase }) => phase === 'quiet'),
     ASKED_QUIET,
   );
   const rise = frames.filter(({ phase, lift }) => phase === 'rise' && lift !== null);
-  const near60 = nearest(rise, 60, ASKED_NEAR_60);
-  const near90 = nearest(
-    rise.filter((frame) => !near60.includes(frame)),
-    90,
-    ASKED_NEAR_90,
+  const nearFrom = nearest(rise, gates.from, ASKED_NEAR_FROM);
+  const nearTo = nearest(
+    rise.filter((frame) => !nearFrom.includes(frame)),
+    gates.to,
+    ASKED_NEAR_TO,
   );
-  const chosen = new Set([...quiet, ...near60, ...near90]);
+  const chosen = new Set([...quiet, ...nearFrom, ...nearTo]);
   const rest = frames.filter((frame) => !chosen.has(frame));
   for (const frame of spread(rest, ASKED_FRAMES - chosen.size)) chosen.add(frame);
   return [...chosen].map(({ frame }) => frame).sort((a, b) => a - b);

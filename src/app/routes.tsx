@@ -126,6 +126,14 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'practice/protocol',
+                lazy: lazily(() =>
+                  import('#src/features/practice/protocol/protocol-page.tsx').then(
+                    (page) => page.ProtocolPage,
+                  ),
+                ),
+              },
+              {
                 path: 'practice/set-ups',
                 lazy: lazily(() =>
                   import('#src/features/practice/set-ups-page.tsx').then((page) => page.SetUpsPage),

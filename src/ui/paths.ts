@@ -28,6 +28,7 @@ export const paths = {
   /** Frames marked again without sight of the first marks. */
   secondMarking: (id: string) => `/second-markings/${id}`,
   reliability: () => '/practice/reliability',
+  protocol: () => '/practice/protocol',
   setUps: () => '/practice/set-ups',
   method: () => '/method',
 } as const;

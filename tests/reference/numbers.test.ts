@@ -20,6 +20,7 @@ import {
 } from '#shared/reading/student.ts';
 import { limitsOfAgreement, type Pair } from '#shared/reliability/agreement.ts';
 import { fisherBelow, fisherQuantile } from '#shared/reliability/fisher.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { farthest, reference } from './reference.ts';
 
 /** As printed, 13 digits, less what a sum in another order costs. */
@@ -93,7 +94,13 @@ describe('scipy and numpy agree on', () => {
 
   it.each(reference.rise)('the fit over a rise of $lift.length frames', (its) => {
     const of = (list: readonly number[]): Float64Array => Float64Array.from(list);
-    const fit = fitRise(of(its.lift), of(its.weight), of(its.thigh), of(its.pelvis));
+    const fit = fitRise(
+      of(its.lift),
+      of(its.weight),
+      of(its.thigh),
+      of(its.pelvis),
+      STANDARD_GATES,
+    );
     // the corner comes from a table that is right to 1e−8
     expect(farthest(fit?.thigh ?? [], its.thighBeta)).toBeLessThan(1e-6);
     expect(farthest(fit?.pelvis ?? [], its.pelvisBeta)).toBeLessThan(1e-6);

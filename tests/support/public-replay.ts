@@ -1,4 +1,5 @@
 import type { PublicReplay } from '#shared/contracts/replays.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 
 export const replayToken = 'A'.repeat(43);
 
@@ -37,7 +38,8 @@ export const aPublicReplay = (change: Partial<PublicReplay> = {}): PublicReplay 
   },
   fromFrame: 5,
   toFrame: 95,
-  moments: { quiet: 10, sixty: 40, ninety: 50, top: 60 },
+  gates: STANDARD_GATES,
+  moments: { quiet: 10, from: 40, to: 50, top: 60 },
   overlay: [
     { frame: 10, marks: marks(0), lift: 3, liftPlusMinus: 3, turn: 0, turnPlusMinus: 5 },
     { frame: 40, marks: marks(200), lift: 60, liftPlusMinus: 3, turn: 2, turnPlusMinus: 5 },

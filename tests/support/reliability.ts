@@ -5,6 +5,7 @@ import type {
 } from '#shared/contracts/second-markings.ts';
 import { READING_CODES } from '#shared/reading/types.ts';
 import { answerAgreementOf, valueAgreementOf } from '#shared/reliability/summary.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { aClip, athleteId, coachId, otherId, visitId } from './records.ts';
 
 /** Answers about frames marked twice, for component tests. */
@@ -52,6 +53,7 @@ export const aSecondMarking = (
   view: 'front',
   frames: [{ frame: 1, landmarks: ['asis-support'] }],
   marks: [],
+  protocol: { version: 1, at, rules: STANDARD_RULES },
   agreement: {
     repeat: aRepeat,
     firstBy: [maren],

@@ -10,6 +10,7 @@ import { pages } from '#src/app/routes.tsx';
 import { signInAddress } from '#src/app/sign-in-address.ts';
 import { StatusProvider } from '#src/ui/status.tsx';
 import { fakeApi } from './fake-api.ts';
+import { aProtocolPage } from './protocol.ts';
 import { aMe } from './records.ts';
 
 /** A stream that stays silent: live events have tests of their own. */
@@ -22,7 +23,9 @@ class SilentEvents extends EventTarget {
 /** The fake server with somebody signed in. */
 export function signedInApi(role: Role = 'coach') {
   vi.stubGlobal('EventSource', SilentEvents);
-  return fakeApi().on(routes.me, () => aMe(role));
+  return fakeApi()
+    .on(routes.me, () => aMe(role))
+    .on(routes.protocol, () => aProtocolPage());
 }
 
 /** The whole product at an address, as main.tsx puts it together. */

@@ -1,11 +1,12 @@
 import { readFileSync } from 'node:fs';
 import { trialOf } from '#shared/evaluate/trial.ts';
 import type { Call } from '#shared/contracts/calls.ts';
-import { type Reading, READING_LABELS, type SidePage } from '#shared/contracts/readings.ts';
+import { type Reading, readingLabel, type SidePage } from '#shared/contracts/readings.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { deriveReading } from '#shared/reading/derive.ts';
 import type { ReadingResult } from '#shared/reading/types.ts';
 import { milliseconds } from '#shared/timing/units.ts';
+import { STANDARD_GATES, STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { athleteId, clipId, coachId, visitId } from './records.ts';
 
 /** A side's page as the server answers it, from a trial of known truth and the engine itself. */
@@ -29,6 +30,7 @@ export const resultOf = (name: string): ReadingResult => {
     thighTurnsLittle: false,
     markError: ASSUMED_MARK_ERROR,
     ownSystematic: null,
+    rules: STANDARD_RULES,
     reps: trial.reps.map((rep, n) => ({
       ...rep,
       id: repId(n + 1),
@@ -54,6 +56,7 @@ export const aCall = (change: Partial<Call> = {}): Call => ({
   by: coach,
   at,
   beforeFigures: true,
+  gates: STANDARD_GATES,
   ...change,
 });
 
@@ -65,7 +68,7 @@ export const aReading = (result: ReadingResult, change: Partial<Reading> = {}): 
   inputHash: result.inputHash,
   seed: Number.parseInt(result.inputHash.slice(0, 8), 16),
   code: result.code,
-  label: READING_LABELS[result.code] + (result.before60 ? ', before 60°' : ''),
+  label: readingLabel(result.code, result.before60, result.rules.gateFrom),
   change: result.figures?.d ?? null,
   plusMinus: result.figures ? 1.96 * result.figures.uC : null,
   u: result.figures?.uC ?? null,
@@ -74,6 +77,7 @@ export const aReading = (result: ReadingResult, change: Partial<Reading> = {}): 
   provisional: result.provisional,
   assumption: result.thighTurnsLittle,
   markError: { px: 3, frames: 0 },
+  protocol: { version: 1, at },
   result,
   reps: result.reps.map(({ id }, n) => ({
     id,
@@ -98,6 +102,7 @@ export const aSidePage = (reading: Reading | null, change: Partial<SidePage> = {
     calls: [aCall({ side })],
     reading,
     newerMarkError: null,
+    newerProtocol: null,
     history: reading
       ? [
           {
@@ -108,6 +113,7 @@ export const aSidePage = (reading: Reading | null, change: Partial<SidePage> = {
             change: reading.change,
             plusMinus: reading.plusMinus,
             markError: reading.markError,
+            protocol: reading.protocol,
             by: reading.by,
             at: reading.at,
           },

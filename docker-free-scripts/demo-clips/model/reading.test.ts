@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { deriveReading } from '#shared/reading/derive.ts';
 import type { ReadingResult } from '#shared/reading/types.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { markedRep } from '#tests/fixtures/clips/marked.ts';
 import { type ClipTruth, parseTruth } from '#tests/fixtures/clips/truth.ts';
 import { CLIPS } from '../clips.ts';
@@ -22,6 +23,7 @@ const readingOf = (truth: ClipTruth, supportSide: 'left' | 'right', sd: number):
     thighTurnsLittle: false,
     markError: ASSUMED_MARK_ERROR,
     ownSystematic: null,
+    rules: STANDARD_RULES,
     reps: truth.reps.flatMap((rep, index) =>
       rep.supportSide === supportSide ? [markedRep(truth, index, sd, 5)] : [],
     ),

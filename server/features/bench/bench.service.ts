@@ -12,6 +12,8 @@ import { presentClip, presentClipWithFrames } from '../clips/clips.presenter.ts'
 import { Comment } from '../comments/comment.entity.ts';
 import { COMMENT_ORDER, presentComment } from '../comments/comments.presenter.ts';
 import { presentMark } from '../marks/mark-store.ts';
+import { currentProtocol } from '../protocol/current-protocol.ts';
+import { presentRules } from '../protocol/protocol.presenter.ts';
 import { errorOfHands, handsOn } from '../readings/inputs-of-side.ts';
 import { presentMarkError } from '../readings/readings.presenter.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
@@ -84,6 +86,7 @@ export const benchOf = async (unit: Unit<UserActor>, clipId: string): Promise<Be
     calls: calls.map((call) => presentCall(call as Call)),
     assumption: side.options.filter((each) => assumed.some((setting) => setting.side === each)),
     markErrors: await markErrorsOf(unit, all),
+    protocol: presentRules(await currentProtocol(em)),
     otherReps: all
       .filter((stored) => stored.clip !== clip)
       .map((stored) => {

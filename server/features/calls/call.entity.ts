@@ -1,7 +1,7 @@
 import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
 import { seen, type SeenSubstitution } from '#shared/contracts/calls.ts';
 import { side } from '#shared/contracts/primitives.ts';
-import { madeAt, ownedRow } from '#server/db/columns.ts';
+import { madeAt, ownedRow, real } from '#server/db/columns.ts';
 import { User } from '../accounts/user.entity.ts';
 import { Visit } from '../visits/visit.entity.ts';
 
@@ -19,6 +19,9 @@ export const Call = defineEntity({
     by: p.manyToOne(User).ref(),
     at: madeAt(),
     beforeFigures: p.boolean(),
+    /** Lifts between which the eye was asked to judge. */
+    gateFrom: real().default(60),
+    gateTo: real().default(90),
   },
 });
 export type Call = InferEntity<typeof Call>;

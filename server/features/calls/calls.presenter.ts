@@ -1,4 +1,5 @@
 import type { Call as CallShape } from '#shared/contracts/calls.ts';
+import { degrees } from '#shared/geometry/units.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import type { Call } from './call.entity.ts';
 
@@ -14,4 +15,5 @@ export const presentCall = (call: Call): CallShape => ({
   by: presentPerson(call.by.unwrap()),
   at: call.at.toISOString(),
   beforeFigures: call.beforeFigures,
+  gates: { from: degrees(call.gateFrom), to: degrees(call.gateTo) },
 });

@@ -5,6 +5,7 @@ import type { Side } from '#shared/contracts/primitives.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../practice/audit.ts';
+import { currentProtocol } from '../protocol/current-protocol.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import { readingIsStale } from '../readings/stale.ts';
 import { visitInSight } from '../visits/visit-in-sight.ts';
@@ -34,8 +35,11 @@ export const recordCall = async (
   const { em, actor } = unit;
   const { visit } = await visitInSight(unit, visitId, 'call.record');
   const setting = await em.findOne(SideSetting, { visit: visitId, side });
+  const { gateFrom, gateTo } = (await currentProtocol(em)).values;
   const call = em.create(Call, {
     ...given,
+    gateFrom,
+    gateTo,
     substitutions: [...new Set(given.substitutions)],
     visit,
     side,

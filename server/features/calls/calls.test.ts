@@ -1,6 +1,7 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
+import { currentProtocol } from '#server/features/protocol/current-protocol.ts';
 import { product } from '../../db/in-practice.ts';
 import { Reading } from '../readings/reading.entity.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
@@ -76,6 +77,7 @@ describe('a call by eye', () => {
           u: 1.5,
           provisional: false,
           assumption: false,
+          protocol: await currentProtocol(em),
           by: coach,
         });
         const setting = await settingOf(em, side);
@@ -91,6 +93,7 @@ describe('a call by eye', () => {
         reading: {
           code: 'early-turn-out',
           label: 'Turns out early, before 60°',
+          gates: { from: 60, to: 90 },
           change: 8,
           plusMinus: 2.94,
           u: 1.5,

@@ -13,6 +13,7 @@ export type AuditedAction =
   | 'visit.export'
   | 'set-up.save'
   | 'set-up.delete'
+  | 'protocol.change'
   | 'call.record'
   | 'clip.upload'
   | 'clip.delete'

@@ -5,6 +5,7 @@ import type { ReadingResult } from '#shared/reading/types.ts';
 import { deriveApart } from './derive-apart.ts';
 import { Reading } from './reading.entity.ts';
 import type { SideInputs } from './side-inputs.ts';
+import { DEFAULT_ASSUMPTION } from './default-assumption.ts';
 import { SideSetting } from './side-setting.entity.ts';
 
 /** What is kept of a side; made when first asked for. */
@@ -15,10 +16,14 @@ export const sideSetting = async (
 ): Promise<SideSetting> => {
   await em.execute(
     `insert into side_setting (id, practice_id, visit_id, side, assumption)
-      values (gen_random_uuid(), current_practice(), ?, ?, false) on conflict (visit_id, side) do nothing`,
+      values (gen_random_uuid(), current_practice(), ?, ?, ${DEFAULT_ASSUMPTION}) on conflict (visit_id, side) do nothing`,
     [visitId, side],
   );
-  return em.findOneOrFail(SideSetting, { visit: visitId, side }, { populate: ['reading.result'] });
+  return em.findOneOrFail(
+    SideSetting,
+    { visit: visitId, side },
+    { populate: ['reading.result', 'reading.protocol'] },
+  );
 };
 
 /** Columns of a new reading, from what the engine said. */
@@ -39,6 +44,8 @@ export const columnsOf = (
   smallestFound: result.figures?.mdt90 ?? null,
   provisional: result.provisional,
   assumption: result.thighTurnsLittle,
+  gateFrom: result.rules.gateFrom,
+  gateTo: result.rules.gateTo,
 });
 
 const stored = (
@@ -47,7 +54,11 @@ const stored = (
   side: Side,
   inputHash: string,
 ): Promise<Reading | null> =>
-  em.findOne(Reading, { visit: visitId, side, inputHash }, { populate: ['result', 'by'] });
+  em.findOne(
+    Reading,
+    { visit: visitId, side, inputHash },
+    { populate: ['result', 'by', 'protocol'] },
+  );
 
 /** The reading that these inputs gave before, if they did. */
 export const knownReading = async (
@@ -70,19 +81,22 @@ export const keepReading = async (
   const visitId = setting.visit.id;
   await em.execute(
     `insert into reading (id, practice_id, visit_id, side, engine, input_hash, seed, inputs, result, code, before60,
-        change, u, p_early, smallest_found, provisional, assumption, mark_error_px, doubly_marked_frames, by_id, at)
+        change, u, p_early, smallest_found, provisional, assumption, mark_error_px, doubly_marked_frames,
+        gate_from, gate_to, protocol_id, by_id, at)
       select gen_random_uuid(), current_practice(), ?, ?, r.engine, r."inputHash", r.seed, ?::jsonb, ?::jsonb, r.code,
         r.before60, r.change, r.u, r."pEarly", r."smallestFound", r.provisional, r.assumption,
-        r."markErrorPx", r."doublyMarkedFrames", ?, now()
+        r."markErrorPx", r."doublyMarkedFrames", r."gateFrom", r."gateTo", ?, ?, now()
       from jsonb_to_record(?::jsonb) as r (engine int, "inputHash" text, seed bigint, code text, before60 boolean,
         change double precision, u double precision, "pEarly" double precision, "smallestFound" double precision,
-        provisional boolean, assumption boolean, "markErrorPx" double precision, "doublyMarkedFrames" int)
+        provisional boolean, assumption boolean, "markErrorPx" double precision, "doublyMarkedFrames" int,
+        "gateFrom" double precision, "gateTo" double precision)
       on conflict (visit_id, side, input_hash) do nothing`,
     [
       visitId,
       setting.side,
       JSON.stringify(inputs.input),
       JSON.stringify(result),
+      inputs.protocol.id,
       inputs.markedBy,
       JSON.stringify(columnsOf(result, inputs.input.markError)),
     ],

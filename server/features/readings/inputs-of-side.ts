@@ -1,17 +1,21 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Side } from '#shared/contracts/primitives.ts';
 import { ASSUMED_MARK_ERROR, type MarkError } from '#shared/measures/inputs.ts';
+import { sameRules } from '#shared/protocol/protocol.ts';
 import type { MarkRow } from '../marks/mark-store.ts';
 import { finishedMarkings, ownErrorOf } from '../second-markings/finished-markings.ts';
+import { currentProtocol } from '../protocol/current-protocol.ts';
 import type { NumberedRep } from '../reps/stored-reps.ts';
-import { type SideInputs, sideInputs } from './side-inputs.ts';
+import { type Grounds, type SideInputs, sideInputs } from './side-inputs.ts';
 import type { SideSetting } from './side-setting.entity.ts';
 
-/** The inputs that a side's reading is made from, and the error that would now be taken in its place, if another. */
+/** The inputs that a side's reading is made from, and what would now be taken in the place of its grounds, if another. */
 export interface InputsOfSide {
   readonly inputs: SideInputs;
-  readonly newer: MarkError | null;
+  readonly newer: { readonly [K in keyof Grounds]: Grounds[K] | null };
 }
+
+const NOTHING_NEWER: InputsOfSide['newer'] = { markError: null, protocol: null };
 
 /** Who has placed marks by hand. */
 export const handsOn = (marks: readonly MarkRow[]): string[] => [
@@ -41,10 +45,10 @@ const same = (a: MarkError, b: MarkError): boolean =>
   a.anatomicalPx === b.anatomicalPx && a.doublyMarkedFrames === b.doublyMarkedFrames;
 
 /**
- * A stored reading keeps the marking error that it was made with for as long as nothing else that it rests on has
- * changed; a new one takes the error of the hands that placed the marks.
- * @param setting with `reading` loaded, if it has one
- * @param anew take the newer error all the same
+ * A stored reading keeps the marking error and the protocol that it was made with for as long as nothing else that it
+ * rests on has changed; a new one takes the error of the hands that placed the marks and the protocol as it stands.
+ * @param setting with `reading` and its protocol loaded, if it has one
+ * @param anew take the newer ones all the same
  * @returns null where no rep of the side carries a mark
  */
 export const inputsOfSide = async (
@@ -56,18 +60,26 @@ export const inputsOfSide = async (
 ): Promise<InputsOfSide | null> => {
   const ofSide = reps.filter(({ rep }) => rep.supportSide === side);
   const hands = handsOn(ofSide.flatMap(({ marks }) => marks));
-  const now = await errorOfHands(em, hands);
+  const now: Grounds = {
+    markError: await errorOfHands(em, hands),
+    protocol: await currentProtocol(em),
+  };
   const fresh = sideInputs(reps, side, setting.assumption, now);
   if (!fresh) return null;
   const reading = setting.reading?.unwrap();
-  if (!reading || anew) return { inputs: fresh, newer: null };
-  const then: MarkError = {
-    anatomicalPx: reading.markErrorPx,
-    doublyMarkedFrames: reading.doublyMarkedFrames,
+  if (!reading || anew) return { inputs: fresh, newer: NOTHING_NEWER };
+  const then: Grounds = {
+    markError: {
+      anatomicalPx: reading.markErrorPx,
+      doublyMarkedFrames: reading.doublyMarkedFrames,
+    },
+    protocol: reading.protocol.unwrap(),
   };
-  if (same(then, now)) return { inputs: fresh, newer: null };
   const kept = sideInputs(reps, side, setting.assumption, then);
-  return kept?.hash === reading.inputHash
-    ? { inputs: kept, newer: now }
-    : { inputs: fresh, newer: null };
+  if (kept?.hash !== reading.inputHash) return { inputs: fresh, newer: NOTHING_NEWER };
+  const newer = {
+    markError: same(then.markError, now.markError) ? null : now.markError,
+    protocol: sameRules(then.protocol.values, now.protocol.values) ? null : now.protocol,
+  };
+  return { inputs: kept, newer };
 };

@@ -1,23 +1,19 @@
 import {
   type Reading as ReadingShape,
-  type ReadingCode,
+  readingLabel,
   type SidePage,
-  READING_LABELS,
 } from '#shared/contracts/readings.ts';
 import type { MarkError } from '#shared/measures/inputs.ts';
+import { gatesOf, sameGates } from '#shared/protocol/protocol.ts';
 import { sidesDifference } from '#shared/reading/compare.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
+import { presentProtocolRef } from '../protocol/protocol.presenter.ts';
 import type { NumberedRep } from '../reps/stored-reps.ts';
 import type { Reading } from './reading.entity.ts';
+import { resultOf } from './result-of.ts';
 
 /** 95 % of true values lie within this many standard uncertainties. */
 const COVERAGE = 1.96;
-
-/** The words of a reading; what turns out already before 60° says so. */
-export const readingLabel = (code: ReadingCode, before60: boolean): string =>
-  code === 'early-turn-out' && before60
-    ? `${READING_LABELS[code]}, before 60°`
-    : READING_LABELS[code];
 
 const plusMinus = (u: number | null): number | null => (u === null ? null : COVERAGE * u);
 
@@ -30,7 +26,7 @@ export const presentSummary = (reading: Reading): SidePage['history'][number] =>
   id: reading.id,
   engine: reading.engine,
   code: reading.code,
-  label: readingLabel(reading.code, reading.before60),
+  label: readingLabel(reading.code, reading.before60, reading.gateFrom),
   change: reading.change ?? null,
   plusMinus: plusMinus(reading.u ?? null),
   by: presentPerson(reading.by.unwrap()),
@@ -38,6 +34,7 @@ export const presentSummary = (reading: Reading): SidePage['history'][number] =>
     anatomicalPx: reading.markErrorPx,
     doublyMarkedFrames: reading.doublyMarkedFrames,
   }),
+  protocol: presentProtocolRef(reading.protocol.unwrap()),
   at: reading.at.toISOString(),
 });
 
@@ -46,7 +43,7 @@ const loaded = <T>(value: T | undefined): T => {
   return value;
 };
 
-/** @param reading with `result` and `by` loaded */
+/** @param reading with `result`, `by` and `protocol` loaded */
 export const presentReading = (reading: Reading, reps: readonly NumberedRep[]): ReadingShape => ({
   ...presentSummary(reading),
   visitId: reading.visit.id,
@@ -58,7 +55,7 @@ export const presentReading = (reading: Reading, reps: readonly NumberedRep[]): 
   smallestFound: reading.smallestFound ?? null,
   provisional: reading.provisional,
   assumption: reading.assumption,
-  result: loaded(reading.result.unwrap()),
+  result: resultOf(loaded(reading.result.unwrap())),
   reps: reps.map(({ rep, clip, number, tieFault }) => ({
     id: rep.id,
     clipId: clip.id,
@@ -70,7 +67,7 @@ export const presentReading = (reading: Reading, reps: readonly NumberedRep[]): 
   })),
 });
 
-/** Left less right. Sides are never averaged. */
+/** Left less right; null where they were read between other gates. Sides are never averaged. */
 export const compareSides = (
   one: ReadingShape | null,
   other: ReadingShape | null,
@@ -78,7 +75,8 @@ export const compareSides = (
   const [left, right] = one?.side === 'left' ? [one, other] : [other, one];
   const from = left?.result.figures;
   const to = right?.result.figures;
-  const difference = from && to ? sidesDifference(from, to) : null;
+  const alike = left && right && sameGates(gatesOf(left.result.rules), gatesOf(right.result.rules));
+  const difference = from && to && alike ? sidesDifference(from, to) : null;
   return (
     difference && {
       difference: difference.value,

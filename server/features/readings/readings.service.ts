@@ -9,6 +9,7 @@ import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { Call } from '../calls/call.entity.ts';
 import { presentCall } from '../calls/calls.presenter.ts';
 import { audit } from '../practice/audit.ts';
+import { presentProtocolRef } from '../protocol/protocol.presenter.ts';
 import type { NumberedRep } from '../reps/stored-reps.ts';
 import { type VisitInSight, visitInSight } from '../visits/visit-in-sight.ts';
 import { agreementOf } from './agreement.ts';
@@ -41,14 +42,15 @@ const readingOfSide = async (
   const of = await inputsOfSide(em, setting, reps, side, options);
   if (!of) {
     setting.reading = null;
-    return { assumption, reading: null, newerMarkError: null };
+    return { assumption, reading: null, newerMarkError: null, newerProtocol: null };
   }
   const reading = await currentReading(em, setting, of.inputs);
   setting.figuresShownAt ??= new Date();
   return {
     assumption,
     reading: presentReading(reading, of.inputs.reps),
-    newerMarkError: of.newer && presentMarkError(of.newer),
+    newerMarkError: of.newer.markError && presentMarkError(of.newer.markError),
+    newerProtocol: of.newer.protocol && presentProtocolRef(of.newer.protocol),
   };
 };
 
@@ -63,7 +65,7 @@ const pageOf = async (
   const callsOn = (which: Side) => calls.filter((call) => call.side === which).map(presentCall);
   if (callsOn(side).length === 0) throw new Problem('call-first');
   const reps = await markedReps(em, visit.id, athlete);
-  const { reading, assumption, newerMarkError } = await readingOfSide(
+  const { reading, assumption, newerMarkError, newerProtocol } = await readingOfSide(
     unit,
     visit.id,
     side,
@@ -77,7 +79,7 @@ const pageOf = async (
   const history = await em.find(
     Reading,
     { visit: visit.id, side },
-    { populate: ['by'], orderBy: { at: 'desc', id: 'desc' } },
+    { populate: ['by', 'protocol'], orderBy: { at: 'desc', id: 'desc' } },
   );
   await em.flush();
   const agreement = await agreementOf(em, coach.id);
@@ -88,6 +90,7 @@ const pageOf = async (
     calls: callsOn(side),
     reading,
     newerMarkError,
+    newerProtocol,
     history: history.map(presentSummary),
     otherSide:
       otherCalls.length === 0 ? null : { side: other, reading: otherReading, calls: otherCalls },
@@ -120,11 +123,15 @@ export const setAssumption = async (
   return pageOf(unit, sight, side);
 };
 
-/** Makes the reading of a side anew with the marking error known now; the old one stays in the history. */
+/** Makes the reading of a side anew with the marking error and the protocol known now; the old one stays in the history. */
 export const renewReading = async (unit: Of, visitId: string, side: Side): Promise<SidePage> => {
   const sight = await visitInSight(unit, visitId, 'reading.renew');
   const page = await pageOf(unit, sight, side, { anew: true });
-  audit(unit, 'reading.renew', visitId, { side, px: page.reading?.markError.px ?? null });
+  audit(unit, 'reading.renew', visitId, {
+    side,
+    px: page.reading?.markError.px ?? null,
+    protocol: page.reading?.protocol.version ?? null,
+  });
   await unit.em.flush();
   await tell(unit, { coachId: sight.athlete.coach.id }, { type: 'reading', visitId, side });
   return page;

@@ -3,6 +3,7 @@ import { deriveReading } from '#shared/reading/derive.ts';
 import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { milliseconds } from '#shared/timing/units.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { type GoldenClip, goldenClip } from '#tests/support/golden.ts';
 import { markedTrial } from '#tests/support/marked-trial.ts';
@@ -58,6 +59,7 @@ describe('a reading', () => {
       thighTurnsLittle: false,
       markError: ASSUMED_MARK_ERROR,
       ownSystematic: null,
+      rules: STANDARD_RULES,
       reps: golden.trial.reps.map((rep) => ({
         ...rep,
         labels: null,

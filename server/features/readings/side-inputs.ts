@@ -1,14 +1,22 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { MarkError } from '#shared/measures/inputs.ts';
-import { canonicalText } from '#shared/reading/canonical.ts';
+import { canonicalInputs } from '#shared/reading/canonical-inputs.ts';
 import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import { sha256Hex } from '#shared/reading/sha256.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
+import { rulesOf } from '#shared/protocol/protocol.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
 import { Clip } from '../clips/clip.entity.ts';
+import type { ProtocolVersion } from '../protocol/protocol-version.entity.ts';
 import { repInput, timesOfClip } from '../reps/reps.presenter.ts';
 import { type NumberedRep, storedReps } from '../reps/stored-reps.ts';
+
+/** What a reading is made with beside its marks. */
+export interface Grounds {
+  readonly markError: MarkError;
+  readonly protocol: ProtocolVersion;
+}
 
 /** What a side's reading is derived from, with the rows that it came from. */
 export interface SideInputs {
@@ -16,6 +24,7 @@ export interface SideInputs {
   /** SHA-256 of the canonical inputs, hex. */
   readonly hash: string;
   readonly reps: readonly NumberedRep[];
+  readonly protocol: ProtocolVersion;
   /** Who placed the latest of its marks. */
   readonly markedBy: string;
 }
@@ -47,7 +56,7 @@ export const sideInputs = (
   all: readonly NumberedRep[],
   side: Side,
   thighTurnsLittle: boolean,
-  markError: MarkError,
+  { markError, protocol }: Grounds,
 ): SideInputs | null => {
   const reps = all.filter(({ rep }) => rep.supportSide === side);
   const markedBy = latestHand(reps);
@@ -59,7 +68,8 @@ export const sideInputs = (
     thighTurnsLittle,
     markError,
     ownSystematic: null,
+    rules: rulesOf(protocol.values),
     reps: reps.flatMap((stored) => repInput(stored, timesOfClip(stored.clip)) ?? []),
   };
-  return { input, hash: sha256Hex(canonicalText(input)), reps, markedBy };
+  return { input, hash: sha256Hex(canonicalInputs(input)), reps, protocol, markedBy };
 };

@@ -1,6 +1,7 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Side } from '#shared/contracts/primitives.ts';
 import { enqueue } from '../../jobs/job.ts';
+import { DEFAULT_ASSUMPTION } from './default-assumption.ts';
 import { DERIVE_READING } from './jobs/derive-reading-type.ts';
 
 /**
@@ -14,7 +15,7 @@ export const readingIsStale = async (
 ): Promise<void> => {
   const marked = await unit.em.execute<unknown[]>(
     `insert into side_setting (id, practice_id, visit_id, side, assumption, stale)
-      select gen_random_uuid(), current_practice(), ?, ?, false, true
+      select gen_random_uuid(), current_practice(), ?, ?, ${DEFAULT_ASSUMPTION}, true
       where exists (select from call where visit_id = ? and side = ?)
       on conflict (visit_id, side) do update set stale = true where not side_setting.stale
       returning 1`,

@@ -1,5 +1,7 @@
 import type { LinkActor } from '#shared/access/actors.ts';
+import { readingLabel } from '#shared/contracts/readings.ts';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
+import { degrees } from '#shared/geometry/units.ts';
 import type { ReadingResult } from '#shared/reading/types.ts';
 import { viewOf } from '#shared/records/views.ts';
 import type { Unit } from '#server/db/in-practice.ts';
@@ -12,7 +14,9 @@ import { Comment } from '../comments/comment.entity.ts';
 import { COMMENT_ORDER } from '../comments/comments.presenter.ts';
 import { audit } from '../practice/audit.ts';
 import { Practice } from '../practice/practice.entity.ts';
-import { readingLabel } from '../readings/readings.presenter.ts';
+import { currentProtocol } from '../protocol/current-protocol.ts';
+import { resultOf } from '../readings/result-of.ts';
+import type { Reading } from '../readings/reading.entity.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { storedReps } from '../reps/stored-reps.ts';
@@ -65,20 +69,15 @@ const probabilityOf = ({ code, figures }: ReadingResult): number | null => {
 };
 
 /** Null where it is not shown, or not final yet; the link shows it by itself once it is. */
-const readingOf = async ({ em }: Of, replay: Replay): Promise<PublicReplay['reading']> => {
+const readingOf = (reading: Reading | null, replay: Replay): PublicReplay['reading'] => {
   if (!replay.showReading) return null;
-  const setting = await em.findOne(
-    SideSetting,
-    { visit: replay.visit.id, side: replay.side },
-    { populate: ['reading.result'] },
-  );
-  const reading = setting?.reading?.unwrap();
-  const result = reading?.result.unwrap();
+  const stored = reading?.result.unwrap();
+  const result = stored && resultOf(stored);
   // what still rests on marks that nobody has looked at is not told to the athlete
   if (!reading || !result || reading.provisional) return null;
   return {
     code: reading.code,
-    label: readingLabel(reading.code, reading.before60),
+    label: readingLabel(reading.code, reading.before60, reading.gateFrom),
     change: reading.change ?? null,
     plusMinus: reading.u === null || reading.u === undefined ? null : 1.96 * reading.u,
     probability: probabilityOf(result),
@@ -87,14 +86,14 @@ const readingOf = async ({ em }: Of, replay: Replay): Promise<PublicReplay['read
   };
 };
 
-const callOf = async ({ em }: Of, replay: Replay): Promise<PublicReplay['call']> => {
-  if (!replay.showCall) return null;
-  const call = await em.findOne(
-    Call,
-    { visit: replay.visit.id, side: replay.side },
-    { orderBy: { at: 'asc', id: 'asc' } },
-  );
-  return call && { seen: call.seen, confidence: call.confidence };
+/** The reading of the side that is played and what its coach first saw, each with its gates. */
+const saidOf = async ({ em }: Of, replay: Replay) => {
+  const which = { visit: replay.visit.id, side: replay.side };
+  const setting = await em.findOne(SideSetting, which, { populate: ['reading.result'] });
+  const reading = setting?.reading?.unwrap() ?? null;
+  const call = await em.findOne(Call, which, { orderBy: { at: 'asc', id: 'asc' } });
+  const { gateFrom, gateTo } = reading ?? call ?? (await currentProtocol(em)).values;
+  return { reading, call, gates: { from: degrees(gateFrom), to: degrees(gateTo) } };
 };
 
 const sharedComments = async (
@@ -126,12 +125,12 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
   const visit = replay.visit.unwrap();
   const athlete = visit.athlete.unwrap() as Athlete;
   const practice = await em.findOneOrFail(Practice, { id: replay.practiceId });
-  const reading = await readingOf(unit, replay);
+  const { reading, call, gates } = await saidOf(unit, replay);
   // the clip's other reps too: it may take the quiet stance of one
   const reps = await storedReps(em, [clip], athlete);
   const stored = found(reps.find((each) => each.rep.id === rep.id));
   const span = { from: replay.fromFrame, to: replay.toFrame };
-  const shown = spanOf(stored, span, replay.showReading);
+  const shown = spanOf(stored, span, { figures: replay.showReading, gates });
   await em.execute(
     'update replay set openings = openings + 1, last_opened_at = now() where id = ?',
     [replay.id],
@@ -149,9 +148,10 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
     frames,
     fromFrame: replay.fromFrame,
     toFrame: replay.toFrame,
+    gates,
     ...shown,
-    reading,
-    call: await callOf(unit, replay),
+    reading: readingOf(reading, replay),
+    call: replay.showCall && call ? { seen: call.seen, confidence: call.confidence } : null,
     message: replay.message,
     comments: await sharedComments(unit, clip, replay),
     expiresAt: replay.expiresAt.toISOString(),

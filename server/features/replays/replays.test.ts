@@ -94,7 +94,8 @@ describe('a replay link', () => {
       reading: { code: 'early-turn-out', repsUsed: 3, repsAgreeing: 3 },
       call: { seen: 'early', confidence: 'sure' },
     });
-    expect(body.moments.sixty).toBeLessThan(body.moments.ninety);
+    expect(body.gates).toEqual({ from: 60, to: 90 });
+    expect(body.moments.from).toBeLessThan(body.moments.to);
     expect(body.overlay.length).toBeGreaterThan(10);
     // no angle without its ±
     for (const frame of body.overlay) {

@@ -6,12 +6,13 @@ import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { shownSet } from '#shared/records/shared-quiet.ts';
 import { frameAt } from '#shared/timing/timestamps.ts';
 import type { Milliseconds } from '#shared/timing/units.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import { repInput, type StoredRep, timesOfClip } from '../reps/reps.presenter.ts';
 
-/** A moment counts as 60° or 90° where a marked frame of the rise comes as near as this, degrees. */
+/** A moment counts as a gate where a marked frame of the rise comes as near to it as this, degrees. */
 const NEAR = 6;
 
-const NO_MOMENTS: PublicReplay['moments'] = { quiet: null, sixty: null, ninety: null, top: null };
+const NO_MOMENTS: PublicReplay['moments'] = { quiet: null, from: null, to: null, top: null };
 
 const nearest = (rise: readonly CourseFrame[], lift: number): number | null => {
   const away = (frame: CourseFrame) => Math.abs((frame.lift ?? Infinity) - lift);
@@ -24,14 +25,15 @@ const nearest = (rise: readonly CourseFrame[], lift: number): number | null => {
 const momentsOf = (
   { frames, phases }: RepCourse,
   times: readonly Milliseconds[],
+  gates: Gates,
 ): PublicReplay['moments'] => {
   const quiet = frames.filter(({ phase }) => phase === 'quiet');
   const rise = frames.filter(({ phase }) => phase === 'rise');
   const { top } = phases.boundaries;
   return {
     quiet: quiet[quiet.length >> 1]?.frame ?? null,
-    sixty: nearest(rise, 60),
-    ninety: nearest(rise, 90),
+    from: nearest(rise, gates.from),
+    to: nearest(rise, gates.to),
     top: top === null ? null : frameAt(times, top),
   };
 };
@@ -50,7 +52,7 @@ export interface Span {
 export const spanOf = (
   stored: StoredRep,
   { from, to }: { readonly from: number; readonly to: number },
-  figures: boolean,
+  { figures, gates }: { readonly figures: boolean; readonly gates: Gates },
 ): Span => {
   const times = timesOfClip(stored.clip);
   const input = repInput(stored, times);
@@ -74,7 +76,7 @@ export const spanOf = (
     turnPlusMinus: angle(values.get(frame)?.turnHalfWidth),
   }));
   return {
-    moments: known ? momentsOf(known, times) : NO_MOMENTS,
+    moments: known ? momentsOf(known, times, gates) : NO_MOMENTS,
     overlay,
     course:
       known && figures

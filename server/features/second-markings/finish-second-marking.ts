@@ -14,17 +14,23 @@ import {
 } from '#shared/reliability/compare-markings.ts';
 import { markedTwice } from '#shared/reliability/marked-twice.ts';
 import { NO_BOUNDARIES } from '#shared/contracts/reps.ts';
+import { type ReadingRules, rulesOf } from '#shared/protocol/protocol.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { Problem } from '../../http/problem.ts';
 import type { MarkRow } from '../marks/mark-store.ts';
 import { audit } from '../practice/audit.ts';
+import { currentProtocol } from '../protocol/current-protocol.ts';
 import { deriveApart } from '../readings/derive-apart.ts';
 import { measuredClip, timesOfClip } from '../reps/reps.presenter.ts';
 import { readSecondMarks } from './second-mark-store.ts';
 import { ownSecondMarking, type SecondInSight } from './second-marking-in-sight.ts';
 import { framesDone } from './second-markings.presenter.ts';
 
-const readingOf = async (rep: RepInput | null, set: LandmarkSetId): Promise<ReadingCode | null> => {
+const readingOf = async (
+  rep: RepInput | null,
+  set: LandmarkSetId,
+  rules: ReadingRules,
+): Promise<ReadingCode | null> => {
   if (!rep) return null;
   const { code } = await deriveApart({
     engine: CURRENT_ENGINE,
@@ -33,6 +39,7 @@ const readingOf = async (rep: RepInput | null, set: LandmarkSetId): Promise<Read
     thighTurnsLittle: false,
     markError: ASSUMED_MARK_ERROR,
     ownSystematic: null,
+    rules,
     reps: [rep],
   });
   return code === 'not-measurable' ? null : code;
@@ -42,6 +49,7 @@ const readingOf = async (rep: RepInput | null, set: LandmarkSetId): Promise<Read
 const resultOf = async (
   { marking, rep, clip, athlete }: SecondInSight,
   second: readonly MarkRow[],
+  rules: ReadingRules,
 ): Promise<SecondResult> => {
   const first = marking.first.unwrap();
   const phases = marking.phases.unwrap();
@@ -63,7 +71,10 @@ const resultOf = async (
   const before = inputOfMarking(facts, first, phases);
   const after = inputOfMarking(facts, second, phases);
   const set = before ? shownSet(before) : 'bare';
-  const readings = [await readingOf(before, set), await readingOf(after, set)] as const;
+  const readings = [
+    await readingOf(before, set, rules),
+    await readingOf(after, set, rules),
+  ] as const;
   return {
     marks: markedTwice(first, second, Math.max(clip.width ?? 0, clip.height ?? 0)),
     hiddenOnce: countHiddenOnce(first, second),
@@ -95,7 +106,7 @@ export const finishSecondMarking = async (
         : `${missing} frames still lack landmarks: place them or mark them hidden.`,
     );
   await unit.em.populate(marking, ['first', 'phases']);
-  marking.result = await resultOf(sight, marks);
+  marking.result = await resultOf(sight, marks, rulesOf((await currentProtocol(unit.em)).values));
   marking.finishedAt = new Date();
   audit(unit, 'second-marking.finish', id, { frames: marking.frames.length });
   await unit.em.flush();

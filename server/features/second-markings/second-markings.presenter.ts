@@ -71,6 +71,7 @@ export const presentSecondMarking = (
     readonly repNumber: number;
     readonly repCount: number;
     readonly agreement: SecondAgreement | null;
+    readonly protocol: SecondMarkingDocument['protocol'];
     readonly actorId: string;
   },
 ): SecondMarkingDocument => {
@@ -85,6 +86,7 @@ export const presentSecondMarking = (
     view: viewOf(clip.cameraStood, rep.supportSide),
     frames: marking.frames.map(({ frame, landmarks }) => ({ frame, landmarks: [...landmarks] })),
     marks: given.marks.map(presentMark),
+    protocol: given.protocol,
     agreement: given.agreement,
   };
 };

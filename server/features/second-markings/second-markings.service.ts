@@ -12,6 +12,8 @@ import { User } from '../accounts/user.entity.ts';
 import { applyCommands, changedRows, type Outcome, placeOf } from '../marks/apply-commands.ts';
 import { readMarks } from '../marks/mark-store.ts';
 import { audit } from '../practice/audit.ts';
+import { currentProtocol } from '../protocol/current-protocol.ts';
+import { presentRules } from '../protocol/protocol.presenter.ts';
 import { Rep } from '../reps/rep.entity.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
 import { REP_ORDER } from '../reps/stored-reps.ts';
@@ -78,6 +80,7 @@ export const documentOf = async (
     repNumber: reps.findIndex(({ id }) => id === rep.id) + 1,
     repCount: reps.length,
     agreement: await agreementOf(unit, sight),
+    protocol: presentRules(await currentProtocol(em)),
     actorId: actor.id,
   });
 };

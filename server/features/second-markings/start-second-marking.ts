@@ -5,11 +5,13 @@ import type { SecondMarkingSummary, secondMarkingBody } from '#shared/contracts/
 import { LANDMARK_IDS } from '#shared/landmarks/types.ts';
 import { chooseFrames, shuffled } from '#shared/reliability/asked-frames.ts';
 import type { FirstMark } from '#shared/reliability/marked-twice.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../practice/audit.ts';
+import { currentProtocol } from '../protocol/current-protocol.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
 import { storedReps } from '../reps/stored-reps.ts';
 import { firstMarksOn, handFrames, markableFrames, phasesOf } from './first-marks.ts';
@@ -46,7 +48,10 @@ export const startSecondMarking = async (
   const { marks } = stored;
   const marked = new Set(handFrames(marks));
   const markable = markableFrames(stored);
-  const chosen = frames ? frames.filter((frame) => marked.has(frame)) : chooseFrames(markable);
+  const gates = gatesOf((await currentProtocol(em)).values);
+  const chosen = frames
+    ? frames.filter((frame) => marked.has(frame))
+    : chooseFrames(markable, gates);
   const places = new Set(chosen);
   const first = firstMarksOn(marks, places);
   if (first.length === 0) throw new Problem('nothing-to-mark-again');

@@ -1,6 +1,6 @@
 import type { UserActor } from '#shared/access/actors.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
-import { READING_LABELS, type ReadingCode } from '#shared/contracts/readings.ts';
+import { readingLabel, type ReadingCode } from '#shared/contracts/readings.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { inSightSql } from '../athletes/caseload.ts';
 import { AT_MOST, ATHLETE, type Named, type WaitingItem, whoAndWhen } from './scope.ts';
@@ -8,7 +8,13 @@ import { AT_MOST, ATHLETE, type Named, type WaitingItem, whoAndWhen } from './sc
 /** Older readings are history, not work. */
 const READING_DAYS = 14;
 
-type ReadingRow = Named & { visit_id: string; side: Side; code: ReadingCode; before60: boolean };
+type ReadingRow = Named & {
+  visit_id: string;
+  side: Side;
+  code: ReadingCode;
+  before60: boolean;
+  gate_from: number;
+};
 type CommentRow = Named & {
   clip_id: string;
   comment_id: string;
@@ -25,7 +31,7 @@ type CommentRow = Named & {
 export const readingTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
   const inSight = inSightSql(actor, 'a.coach_id');
   const rows = await em.execute<ReadingRow[]>(
-    `select ${ATHLETE}, r.at, r.visit_id, r.side, r.code, r.before60
+    `select ${ATHLETE}, r.at, r.visit_id, r.side, r.code, r.before60, r.gate_from
      from side_setting s
      join reading r on r.id = s.reading_id
      join visit v on v.id = s.visit_id
@@ -45,7 +51,7 @@ export const readingTasks = async ({ em, actor }: Unit<UserActor>): Promise<Wait
     kind: 'reading-ready',
     visitId: row.visit_id,
     side: row.side,
-    label: READING_LABELS[row.code].concat(row.before60 ? ', before 60°' : ''),
+    label: readingLabel(row.code, row.before60, row.gate_from),
     ...whoAndWhen(row),
   }));
 };

@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Waiting } from '#shared/contracts/today.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
+import { currentProtocol } from '#server/features/protocol/current-protocol.ts';
 import { product } from '../../db/in-practice.ts';
 import type { User } from '../accounts/user.entity.ts';
 import { makeAthlete, makeConsent } from '../athletes/athlete.factory.ts';
@@ -68,6 +69,7 @@ beforeAll(async () => {
         before60: false,
         provisional: false,
         assumption: false,
+        protocol: await currentProtocol(em),
         by: coach,
       });
       em.create(SideSetting, { visit, side, reading });

@@ -6,14 +6,18 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 
 /** One side of one visit: the first call by eye and, once there is one, the reading of the marks as they stand. */
-export type HistorySide = {
-  side: Side;
-  call: Seen | null;
-  code: ReadingCode | null;
-  before60: boolean | null;
+export type HistorySide = { side: Side; call: Seen | null } & (
+  Measured | { [K in keyof Measured]: null }
+);
+
+type Measured = {
+  code: ReadingCode;
+  before60: boolean;
+  gateFrom: number;
+  gateTo: number;
   change: number | null;
   u: number | null;
-  provisional: boolean | null;
+  provisional: boolean;
 };
 
 export type HistoryRow = {
@@ -32,7 +36,7 @@ const HISTORY = `
     coalesce((
       select json_agg(json_build_object(
         'side', c.side, 'call', c.seen, 'code', r.code, 'before60', r.before60,
-        'change', r.change, 'u', r.u, 'provisional', r.provisional
+        'gateFrom', r.gate_from, 'gateTo', r.gate_to, 'change', r.change, 'u', r.u, 'provisional', r.provisional
       ) order by c.side)
       from (
         select distinct on (side) side, seen from call where call.visit_id = v.id order by side, at

@@ -1,9 +1,10 @@
-import { READING_LABELS } from '#shared/contracts/readings.ts';
+import { readingLabel } from '#shared/contracts/readings.ts';
 import type {
   SetUp as SetUpShape,
   Visit as VisitShape,
   VisitRow,
 } from '#shared/contracts/visits.ts';
+import { degrees } from '#shared/geometry/units.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { isMinor } from '../athletes/days.ts';
 import { mayFilm } from './safety.ts';
@@ -43,13 +44,12 @@ const presentSide = (row: HistorySide): VisitRow['sides'][number] => ({
       ? null
       : {
           code: row.code,
-          label: row.before60
-            ? `${READING_LABELS[row.code]}, before 60°`
-            : READING_LABELS[row.code],
+          label: readingLabel(row.code, row.before60, row.gateFrom),
+          gates: { from: degrees(row.gateFrom), to: degrees(row.gateTo) },
           change: row.change,
           plusMinus: row.u === null ? null : COVERAGE * row.u,
           u: row.u,
-          provisional: row.provisional ?? false,
+          provisional: row.provisional,
         },
 });
 

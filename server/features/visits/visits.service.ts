@@ -11,6 +11,7 @@ import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 import { isMinor, today } from '../athletes/days.ts';
 import { audit } from '../practice/audit.ts';
 import { filmingOf } from './set-ups.service.ts';
+import { currentProtocol } from '../protocol/current-protocol.ts';
 import { SetUp } from './set-up.entity.ts';
 import { type Filming, Visit } from './visit.entity.ts';
 import { visitInSight, type VisitInSight } from './visit-in-sight.ts';
@@ -34,12 +35,16 @@ export const addVisit = async (
   const { em, actor } = unit;
   const athlete = await athleteInSight(unit, athleteId, 'visit.add');
   const coach = await em.findOneOrFail(User, { id: actor.id });
+  const { setUpId } = (await currentProtocol(em)).values;
+  // one that was deleted since is no set-up any more
+  const setUp = setUpId === null ? null : await em.findOne(SetUp, { id: setUpId });
   const visit = em.create(Visit, {
     athlete,
     coach,
     day: day ?? today(),
     note,
-    filming: NOT_KNOWN_YET,
+    filming: setUp ? filmingOf(setUp) : NOT_KNOWN_YET,
+    setUpName: setUp?.name ?? null,
   });
   audit(unit, 'visit.add', visit.id, { athlete: athleteId });
   await em.flush();

@@ -15,6 +15,7 @@ import {
   visitId,
 } from '#tests/support/records.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 
 const page = (total: number, items = [anAthlete()]) => ({
   items,
@@ -245,6 +246,7 @@ describe('the athlete’s page', () => {
               reading: {
                 code: 'early-turn-out',
                 label: 'Turns out early',
+                gates: STANDARD_GATES,
                 change: 6.8,
                 plusMinus: 3.6,
                 u: 1.84,

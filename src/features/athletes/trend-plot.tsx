@@ -4,6 +4,8 @@ import { shortDay } from '#src/ui/days.ts';
 import { decimal } from '#src/ui/figures.ts';
 import { Hatch } from '#src/ui/plots/hatch.tsx';
 import { useWidth } from '#src/ui/plots/use-width.ts';
+import { gateRange } from '#src/ui/gate-words.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import { EndWords, NarrowWords, SideLine } from './trend-marks.tsx';
 import { dayNumber, turnBounds, type Trend } from './trend.ts';
 
@@ -17,18 +19,18 @@ const NARROW = 520;
 /** Beyond so many degrees a turn counts as one: the reading's own threshold. */
 const MARGIN_DEG = 1;
 
-/** Turn from 60° to 90° over the visits, both sides, with 95 % errors. Redrawn for its width. */
-export function TrendPlot({ trend }: { trend: Trend }) {
+/** Turn from gate to gate over the visits, both sides, with 95 % errors. Redrawn for its width. */
+export function TrendPlot({ trend, gates }: { trend: Trend; gates: Gates }) {
   const box = useRef<HTMLDivElement>(null);
   const width = useWidth(box);
   return (
     <div ref={box} style={{ minHeight: HEIGHT }}>
-      {width !== null && width > WORDS && <Drawing trend={trend} width={width} />}
+      {width !== null && width > WORDS && <Drawing trend={trend} gates={gates} width={width} />}
     </div>
   );
 }
 
-function Drawing({ trend, width }: { trend: Trend; width: number }) {
+function Drawing({ trend, gates, width }: { trend: Trend; gates: Gates; width: number }) {
   const id = useId();
   const narrow = width < NARROW;
   const right = width - (narrow ? 8 : WORDS);
@@ -50,7 +52,8 @@ function Drawing({ trend, width }: { trend: Trend; width: number }) {
         <Hatch id={`${id}still`} className="stroke-edge" gap={5} />
       </defs>
       <text x={0} y={12}>
-        turn from 60° to 90° of lift, degrees{narrow ? '' : ', with 95 % error'}
+        turn from {gateRange(gates)} of lift, degrees
+        {narrow ? '' : ', with 95 % error'}
       </text>
       <Area
         x0={LEFT}

@@ -3,15 +3,18 @@ import type { VisitRow } from '#shared/contracts/visits.ts';
 import { shortDay } from '#src/ui/days.ts';
 import { plusMinus, turn } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
-import { since, trendOf, type Trend, type TrendPoint } from './trend.ts';
+import { gateRange } from '#src/ui/gate-words.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
+import { comparable, since, trendOf, type Trend, type TrendPoint } from './trend.ts';
 import { TrendPlot } from './trend-plot.tsx';
 
 /** How the readings of both sides went over the visits. Nothing is shown before something was measured. */
 export function TrendSection({ visits }: { visits: readonly VisitRow[] }) {
-  const trend = trendOf(visits);
-  if (trend.left.length + trend.right.length === 0) return null;
+  const whole = trendOf(visits);
+  const { trend, gates, leftOut } = comparable(whole);
+  if (!gates) return null;
   const unmeasured = visits.filter(({ id }) =>
-    [...trend.left, ...trend.right].every((point) => point.visitId !== id),
+    [...whole.left, ...whole.right].every((point) => point.visitId !== id),
   ).length;
   return (
     <Section
@@ -32,8 +35,14 @@ export function TrendSection({ visits }: { visits: readonly VisitRow[] }) {
         </>
       }
     >
-      <TrendPlot trend={trend} />
-      <AsTable trend={trend} />
+      <TrendPlot trend={trend} gates={gates} />
+      <AsTable trend={trend} gates={gates} />
+      {leftOut > 0 && (
+        <p className="mt-3 text-note text-soft">
+          {leftOut === 1 ? 'One reading is' : `${leftOut} readings are`} left out: made between
+          other gates than {gateRange(gates)}, so the turns cannot be compared.
+        </p>
+      )}
     </Section>
   );
 }
@@ -64,11 +73,11 @@ function Changes({ side, points }: { side: Side; points: readonly TrendPoint[] }
 }
 
 /** The plot's figures for those who do not see it. */
-function AsTable({ trend }: { trend: Trend }) {
+function AsTable({ trend, gates }: { trend: Trend; gates: Gates }) {
   return (
     <div className="sr-only">
       <table>
-        <caption>Turn from 60° to 90° of lift at each measured visit</caption>
+        <caption>Turn from {gateRange(gates)} of lift at each measured visit</caption>
         <thead>
           <tr>
             <th scope="col">Visit</th>

@@ -1,11 +1,14 @@
 import { describe, expect, it } from 'vitest';
 import type { VisitRow } from '#shared/contracts/visits.ts';
 import { aVisitRow } from '#tests/support/records.ts';
-import { since, trendOf, turnBounds, type TrendPoint } from './trend.ts';
+import { degrees } from '#shared/geometry/units.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
+import { comparable, since, trendOf, turnBounds, type TrendPoint } from './trend.ts';
 
 const measured = (change: number | null, u: number | null) => ({
   code: 'early-turn-out',
   label: 'Turns out early',
+  gates: STANDARD_GATES,
   change,
   plusMinus: u === null ? null : 1.96 * u,
   u,
@@ -16,6 +19,7 @@ const point = (change: number, u: number): TrendPoint => ({
   visitId: 'v',
   day: '2026-02-09',
   label: '',
+  gates: STANDARD_GATES,
   change,
   plusMinus: 1.96 * u,
   u,
@@ -34,6 +38,21 @@ describe('trendOf', () => {
     ]);
     expect(trend.right.map(({ day }) => day)).toEqual(['2026-02-09', '2026-03-03']);
     expect(trend.left).toEqual([]);
+  });
+});
+
+describe('what can be compared', () => {
+  it('is what was read between the gates of the latest visit', () => {
+    const gates = { from: degrees(50), to: degrees(80) };
+    const older = { ...point(9, 1), day: '2026-01-05' };
+    const latest = { ...point(4, 1), day: '2026-03-03', gates };
+    const trend = { right: [older, latest], left: [{ ...point(1, 1), gates }] };
+    expect(comparable(trend)).toEqual({
+      trend: { right: [latest], left: trend.left },
+      gates,
+      leftOut: 1,
+    });
+    expect(comparable({ right: [], left: [] })).toMatchObject({ gates: null, leftOut: 0 });
   });
 });
 

@@ -1,11 +1,13 @@
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { VisitRow } from '#shared/contracts/visits.ts';
+import { type Gates, sameGates } from '#shared/protocol/protocol.ts';
 
 /** One measured visit of one side; angles in degrees, external positive. */
 export type TrendPoint = {
   visitId: string;
   day: string;
   label: string;
+  gates: Gates;
   change: number;
   /** 1.96 u_c */
   plusMinus: number;
@@ -22,11 +24,26 @@ export function trendOf(visits: readonly VisitRow[]): Trend {
     oldestFirst.flatMap(({ id, day, sides }): TrendPoint[] => {
       const reading = sides.find((own) => own.side === side)?.reading;
       if (!reading) return [];
-      const { label, change, plusMinus, u, provisional } = reading;
+      const { label, gates, change, plusMinus, u, provisional } = reading;
       if (change === null || plusMinus === null || u === null) return [];
-      return [{ visitId: id, day, label, change, plusMinus, u, provisional }];
+      return [{ visitId: id, day, label, gates, change, plusMinus, u, provisional }];
     });
   return { right: points('right'), left: points('left') };
+}
+
+/** The points that can be compared: those read between the gates of the latest, and how many are left out. */
+export function comparable(trend: Trend): { trend: Trend; gates: Gates | null; leftOut: number } {
+  const all = [...trend.right, ...trend.left];
+  const latest = all.reduce<TrendPoint | null>(
+    (last, point) => (last && last.day >= point.day ? last : point),
+    null,
+  );
+  if (!latest) return { trend, gates: null, leftOut: 0 };
+  const { gates } = latest;
+  const alike = (points: readonly TrendPoint[]) =>
+    points.filter((point) => sameGates(point.gates, gates));
+  const kept = { right: alike(trend.right), left: alike(trend.left) };
+  return { trend: kept, gates, leftOut: all.length - kept.right.length - kept.left.length };
 }
 
 export type Since = {

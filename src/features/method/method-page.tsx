@@ -1,3 +1,4 @@
+import { Link } from 'react-router-dom';
 import { landmark, landmarksOf } from '#shared/landmarks/table.ts';
 import { LANDMARK_SETS, type LandmarkSetId } from '#shared/landmarks/types.ts';
 import { type Constant, CONSTANTS } from '#shared/measures/constants.ts';
@@ -6,6 +7,10 @@ import type { Measure } from '#shared/measures/measure.ts';
 import { MEASURES } from '#shared/measures/registry.ts';
 import { Page, Section } from '#src/ui/page.tsx';
 import { type Column, Table } from '#src/ui/table.tsx';
+import { gateRange, outOfHundred } from '#src/ui/gate-words.ts';
+import { paths } from '#src/ui/paths.ts';
+import { gatesOf, type ReadingRules } from '#shared/protocol/protocol.ts';
+import { useProtocol } from '#src/api/use-protocol.ts';
 import { LIMITS } from './limits.ts';
 
 const UNITS: Record<Measure['unit'], string> = { degrees: '°', millimetres: ' mm' };
@@ -53,8 +58,12 @@ const SET_NAMES: Record<LandmarkSetId, string> = {
   'belt+thigh': 'Belt and thigh pointers',
 };
 
+const neededWords = ({ early, turnIn, flat }: ReadingRules): string =>
+  `A reading needs ${outOfHundred(early)} in 100 for turning out early, ${outOfHundred(turnIn)} for turning in and ${outOfHundred(flat)} for holding still; otherwise it is “Can’t tell yet”.`;
+
 /** How each number is made and what it cannot say, written from the same tables that the engine reads. */
 export function MethodPage() {
+  const protocol = useProtocol();
   return (
     <Page
       title="Method"
@@ -90,13 +99,14 @@ export function MethodPage() {
       </Section>
       <Section title="A reading">
         <p className="max-w-lead">
-          What counts is the change of turn from 60° to 90° of lift, over the rise of every usable
-          rep of one support side in one visit. With a belt pointer alone all frames of all reps are
-          read as one curve, pelvis and thigh each with its own error; otherwise each rise is fitted
-          and the reps are averaged. Marking error, the spread between reps and a systematic part
-          that more marks do not lessen give its uncertainty; the same inputs give the same answer
-          each time. A reading needs 95 in 100, and holding still 80 in 100; otherwise it is “Can’t
-          tell yet”.
+          What counts is the change of turn{' '}
+          {protocol ? `from ${gateRange(gatesOf(protocol))}` : 'between the gates'} of lift, over
+          the rise of every usable rep of one support side in one visit. With a belt pointer alone
+          all frames of all reps are read as one curve, pelvis and thigh each with its own error;
+          otherwise each rise is fitted and the reps are averaged. Marking error, the spread between
+          reps and a systematic part that more marks do not lessen give its uncertainty; the same
+          inputs give the same answer each time. {protocol && neededWords(protocol)}{' '}
+          <Link to={paths.protocol()}>The practice’s protocol</Link>
         </p>
       </Section>
       <Section title="Two clips of one rep">

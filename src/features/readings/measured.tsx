@@ -7,6 +7,7 @@ import { ReplaySection } from './link/replay-section.tsx';
 import { PartsSection } from './parts/parts-section.tsx';
 import { AssumptionSection } from './reasons/assumption-section.tsx';
 import { MarkErrorSection } from './reasons/mark-error-section.tsx';
+import { ProtocolSection } from './reasons/protocol-section.tsx';
 import { ReasonsSection } from './reasons/reasons-section.tsx';
 import { SettleSection } from './reasons/settle-section.tsx';
 import { BothSides } from './sides/both-sides.tsx';
@@ -26,6 +27,7 @@ export function Measured({ page, reading }: { page: SidePage; reading: Reading }
       <ReasonsSection reading={reading} />
       <AssumptionSection page={page} />
       <MarkErrorSection page={page} reading={reading} />
+      <ProtocolSection page={page} reading={reading} />
       <ReplaySection page={page} />
       <HistorySection page={page} />
     </>

@@ -3,9 +3,9 @@ import { callWords, NOT_AN_INJURY, readingWords } from './words/athlete-words.ts
 
 /** What was measured, and what was seen by eye; never the one as if it were the other. */
 export function Result({ replay }: { replay: PublicReplay }) {
-  const { reading, call, side, coachName } = replay;
-  const seen = call && callWords(call.seen, side, coachName);
-  const main = reading ? readingWords(reading, side) : seen;
+  const { reading, call, side, coachName, gates } = replay;
+  const seen = call && callWords(call.seen, side, coachName, gates);
+  const main = reading ? readingWords(reading, side, gates) : seen;
   if (!main)
     return (
       <section aria-label="Your lift" className="py-6">

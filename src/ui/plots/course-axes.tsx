@@ -2,11 +2,11 @@ import { decimal } from '../figures.ts';
 import type { CourseScale } from './course-scale.ts';
 
 const signed = (value: number) => `${value > 0 ? '+' : ''}${decimal(value, 0)}`;
-const GATES = [60, 90];
 
-/** Axes, the named zero, and 60° and 90° as dotted ink gates with bold ticks. */
+/** Axes, the named zero, and both gates as dotted ink lines with bold ticks. */
 export function CourseAxes({ scale }: { scale: CourseScale }) {
   const { x, y, left, right, top, bottom, compact, xTicks, yTicks } = scale;
+  const gates: readonly number[] = [scale.gates.from, scale.gates.to];
   return (
     <g>
       {yTicks.map((tick) => (
@@ -21,11 +21,11 @@ export function CourseAxes({ scale }: { scale: CourseScale }) {
         </g>
       ))}
       <path d={`M${left} ${bottom}H${right}`} className="plot-axis" />
-      {GATES.map((gate) => (
+      {gates.map((gate) => (
         <path key={gate} d={`M${x(gate)} ${top - 6}V${bottom}`} className="plot-gate" />
       ))}
       {xTicks.map((tick) => {
-        const gate = GATES.includes(tick);
+        const gate = gates.includes(tick);
         return (
           <g key={tick}>
             <path

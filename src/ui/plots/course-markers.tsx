@@ -50,7 +50,7 @@ export function CourseCurrent({
   );
 }
 
-/** The frame that is worth marking next; its words stand left of 60°. */
+/** The frame that is worth marking next; its words stand left of the lower gate. */
 export function CourseNext({
   lift,
   turn,
@@ -64,7 +64,7 @@ export function CourseNext({
   words: readonly [string, string];
   scale: CourseScale;
 }) {
-  const { x, y, bottom, compact } = scale;
+  const { x, y, bottom, compact, gates } = scale;
   const wordsY = bottom - 62;
   return (
     <g>
@@ -74,18 +74,28 @@ export function CourseNext({
         strokeWidth="1.25"
         className="stroke-ink"
       />
-      {!compact && lift > 62 && (
+      {!compact && lift > gates.from + 2 && (
         <>
           <path
-            d={`M${x(60) - 4} ${wordsY + 4}H${x(lift)}`}
+            d={`M${x(gates.from) - 4} ${wordsY + 4}H${x(lift)}`}
             strokeDasharray="3 3"
             strokeWidth="1.25"
             className="stroke-ink"
           />
-          <text x={x(60) - 10} y={wordsY} textAnchor="end" className="plot-over plot-strong">
+          <text
+            x={x(gates.from) - 10}
+            y={wordsY}
+            textAnchor="end"
+            className="plot-over plot-strong"
+          >
             {words[0]}
           </text>
-          <text x={x(60) - 10} y={wordsY + 18} textAnchor="end" className="plot-over fill-ink">
+          <text
+            x={x(gates.from) - 10}
+            y={wordsY + 18}
+            textAnchor="end"
+            className="plot-over fill-ink"
+          >
             {words[1]}
           </text>
         </>
@@ -104,30 +114,30 @@ export function CourseNext({
 
 const SHORT_BRACKET = 56;
 
-/** The change from 60° to 90°, as a bracket at 90° with its words. */
+/** The change from gate to gate, as a bracket at the upper one with its words. */
 export function CourseBracket({
-  at60,
+  atFrom,
   change,
   words,
   scale,
 }: {
-  at60: number;
+  atFrom: number;
   /** Exactly d. */
   change: number;
   /** `+6.8° ± 3.6` */
   words: string;
   scale: CourseScale;
 }) {
-  const { x, y } = scale;
-  const from = y(at60);
-  const to = y(at60 + change);
-  const at = x(90) + 10;
+  const { x, y, gates } = scale;
+  const from = y(atFrom);
+  const to = y(atFrom + change);
+  const at = x(gates.to) + 10;
   // beside a short bracket the words would lie over those of the wedge
   const short = Math.abs(to - from) < SHORT_BRACKET;
   const wordsY = short ? to + (change < 0 ? 20 : -8) : (from + to) / 2 + 6;
   return (
     <g>
-      <path d={`M${x(60)} ${from}H${at}`} strokeDasharray="1 3" className="stroke-ink" />
+      <path d={`M${x(gates.from)} ${from}H${at}`} strokeDasharray="1 3" className="stroke-ink" />
       <path
         d={`M${at - 4} ${from}h4V${to}h-4`}
         fill="none"

@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { courseScale, turnRange } from './course-scale.ts';
 import { runsOf, turnAt, wedgePath } from './course-shapes.ts';
+import { degrees } from '#shared/geometry/units.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 
 const point = (lift: number, turn: number, carried = true) => ({
   lift,
@@ -22,14 +24,18 @@ describe('turnRange', () => {
 
 describe('courseScale', () => {
   it('puts out on top and more lift to the right', () => {
-    const scale = courseScale(700, 372, []);
+    const scale = courseScale(700, 372, [], STANDARD_GATES);
     expect(scale.y(20)).toBe(scale.top);
     expect(scale.y(-10)).toBe(scale.bottom);
     expect(scale.x(90)).toBeGreaterThan(scale.x(60));
     expect(scale.xTicks).toEqual([15, 30, 45, 60, 75, 90, 105]);
   });
+  it('has a tick for each gate and none that runs into it', () => {
+    const scale = courseScale(700, 372, [], { from: degrees(50), to: degrees(80) });
+    expect(scale.xTicks).toEqual([15, 30, 50, 60, 80, 90, 105]);
+  });
   it('says less where there is little room, but always 60 and 90', () => {
-    const scale = courseScale(328, 296, []);
+    const scale = courseScale(328, 296, [], STANDARD_GATES);
     expect(scale.compact).toBe(true);
     expect(scale.xTicks).toEqual([30, 60, 90]);
     expect(scale.yTicks).toEqual([-10, 0, 10, 20]);
@@ -61,7 +67,7 @@ describe('turnAt', () => {
 
 describe('wedgePath', () => {
   it('starts at the course’s own value at 60°', () => {
-    const scale = courseScale(700, 372, []);
+    const scale = courseScale(700, 372, [], STANDARD_GATES);
     const path = wedgePath(3, [-1, -12], scale);
     expect(path.startsWith(`M${scale.x(60)},${scale.y(3)}L`)).toBe(true);
     expect(path.endsWith(`${scale.x(90)},${scale.y(-9)}Z`)).toBe(true);

@@ -1,4 +1,5 @@
 import { useRef, type ReactNode } from 'react';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import { CourseAxes } from './course-axes.tsx';
 import { CourseLine, CourseRepLine } from './course-line.tsx';
 import { CoursePoints, type CoursePoint } from './course-points.tsx';
@@ -11,6 +12,7 @@ export interface CoursePlotProps {
   /** What the plot shows, for those who cannot see it; say the figures too. */
   label: string;
   height?: number;
+  gates: Gates;
   /** The line of all reps, or of one; empty where nothing can be fitted yet. */
   curve: CourseCurve;
   /** The reps behind it, where there are several. */
@@ -26,11 +28,12 @@ export interface CoursePlotProps {
 
 /**
  * Turn against lift, the product's central picture, redrawn for the width it gets. The band is the
- * 95 % band under our error model; the wedge is what is expected from this course's value at 60°.
+ * 95 % band under our error model; the wedge is what is expected from this course's value at the lower gate.
  */
 export function CoursePlot({
   label,
   height,
+  gates,
   curve,
   repCurves = [],
   points,
@@ -46,22 +49,22 @@ export function CoursePlot({
       {width !== null && width > 0 && (
         <CourseDrawing
           {...{ label, curve, repCurves, points, empty, children }}
-          scale={courseScale(width, drawn, [...turnsOf(curve, points), ...reach])}
+          scale={courseScale(width, drawn, [...turnsOf(curve, points, gates), ...reach], gates)}
         />
       )}
     </div>
   );
 }
 
-function* turnsOf(curve: CourseCurve, points: readonly CoursePoint[]) {
+function* turnsOf(curve: CourseCurve, points: readonly CoursePoint[], { from }: Gates) {
   for (const { turn } of points) yield turn;
   for (const { low, high } of curve) {
     yield low;
     yield high;
   }
   // the lower end of the wedge
-  const at60 = turnAt(curve, 60);
-  if (at60 !== null) yield at60 - 12;
+  const atFrom = turnAt(curve, from);
+  if (atFrom !== null) yield atFrom - 12;
 }
 
 function CourseDrawing({
@@ -72,8 +75,8 @@ function CourseDrawing({
   empty,
   children,
   scale,
-}: Omit<CoursePlotProps, 'height' | 'reach'> & { scale: CourseScale }) {
-  const at60 = turnAt(curve, 60);
+}: Omit<CoursePlotProps, 'height' | 'gates' | 'reach'> & { scale: CourseScale }) {
+  const atFrom = turnAt(curve, scale.gates.from);
   const { width, height, top, bottom, left, right } = scale;
   return (
     <svg
@@ -84,7 +87,7 @@ function CourseDrawing({
       role="img"
       aria-label={label}
     >
-      {at60 !== null && <CourseWedge at60={at60} scale={scale} />}
+      {atFrom !== null && <CourseWedge atFrom={atFrom} scale={scale} />}
       <CourseAxes scale={scale} />
       {repCurves.map((each, n) => (
         <CourseRepLine key={n} curve={each} scale={scale} />

@@ -1,4 +1,5 @@
 import { scaleLinear, type ScaleLinear } from 'd3-scale';
+import type { Gates } from '#shared/protocol/protocol.ts';
 
 /** Where a course is drawn. Lift runs to the right, turn upwards: out is up. */
 export interface CourseScale {
@@ -12,6 +13,7 @@ export interface CourseScale {
   readonly x: ScaleLinear<number, number>;
   /** Degrees of turn to px. */
   readonly y: ScaleLinear<number, number>;
+  readonly gates: Gates;
   readonly xTicks: readonly number[];
   readonly yTicks: readonly number[];
   /** Too small for words beside the lines. */
@@ -42,10 +44,23 @@ const every = (from: number, to: number, step: number): number[] => {
   return ticks;
 };
 
+/** Apart from the gates, so that the figures do not run into each other. */
+const TICK_ROOM = 8;
+
+/** The gates always, and round figures beside them. */
+const liftTicks = ({ from, to }: Gates, compact: boolean): number[] => {
+  const round = compact ? [30] : [15, 30, 45, 60, 75, 90, 105];
+  const apart = round.filter((lift) =>
+    [from, to].every((gate) => Math.abs(lift - gate) >= TICK_ROOM),
+  );
+  return [...apart, from, to].sort((a, b) => a - b);
+};
+
 export const courseScale = (
   width: number,
   height: number,
   turns: Iterable<number>,
+  gates: Gates,
 ): CourseScale => {
   const compact = width < COMPACT_BELOW;
   const left = 44;
@@ -64,7 +79,8 @@ export const courseScale = (
     compact,
     x: scaleLinear(LIFT_RANGE, [left, right]),
     y: scaleLinear([low, high], [bottom, top]),
-    xTicks: compact ? [30, 60, 90] : [15, 30, 45, 60, 75, 90, 105],
+    gates,
+    xTicks: liftTicks(gates, compact),
     yTicks: every(low, high, compact || many ? 10 : STEP),
   };
 };

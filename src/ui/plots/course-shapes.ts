@@ -60,18 +60,18 @@ export const turnAt = (curve: CourseCurve, lift: number): number | null => {
 };
 
 /**
- * Where the change from 60° to 90° ends for each judgement, degrees: the expected turn-in from −1°
+ * Where the change from gate to gate ends for each judgement, degrees: the expected turn-in from −1°
  * to −12°, holding still from −1° to +1°. From our model, no source; drawing only.
  */
 export const WEDGE = { in: [-1, -12], still: [-1, 1] } as const;
 
-/** A triangle from the course's own value at 60° to a range at 90°. */
+/** A triangle from the course's own value at the lower gate to a range at the upper one. */
 export const wedgePath = (
-  at60: number,
+  atFrom: number,
   [from, to]: readonly [number, number],
   scale: CourseScale,
 ): string => {
-  const apex = `${scale.x(60)},${scale.y(at60)}`;
-  const x90 = scale.x(90);
-  return `M${apex}L${x90},${scale.y(at60 + from)}L${x90},${scale.y(at60 + to)}Z`;
+  const { x, y, gates } = scale;
+  const end = x(gates.to);
+  return `M${x(gates.from)},${y(atFrom)}L${end},${y(atFrom + from)}L${end},${y(atFrom + to)}Z`;
 };

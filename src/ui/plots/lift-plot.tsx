@@ -3,6 +3,7 @@ import { cx } from '../class-names.ts';
 import { repSymbol } from './course-points.tsx';
 import { type LiftScale, liftScale } from './lift-scale.ts';
 import { useWidth } from './use-width.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 
 export interface LiftPoint {
   /** Seconds from the curve's zero. */
@@ -24,15 +25,17 @@ export interface LiftCurve {
   readonly points: readonly LiftPoint[];
 }
 
-/** Lift against time, with 60° and 90° drawn through it, redrawn for the width it gets. */
+/** Lift against time, with both gates drawn through it, redrawn for the width it gets. */
 export function LiftPlot({
   label,
   curves,
+  gates,
   height = 300,
 }: {
   /** What the plot shows, for those who cannot see it; say the figures too. */
   label: string;
   curves: readonly LiftCurve[];
+  gates: Gates;
   height?: number;
 }) {
   const box = useRef<HTMLDivElement>(null);
@@ -40,24 +43,34 @@ export function LiftPlot({
   return (
     <div ref={box} style={{ minHeight: height }}>
       {width !== null && width > 0 && (
-        <Drawing label={label} curves={curves} scale={liftScale(width, height, curves)} />
+        <Drawing
+          label={label}
+          curves={curves}
+          gates={gates}
+          scale={liftScale(width, height, curves)}
+        />
       )}
     </div>
   );
 }
 
-const GATES = [60, 90];
+/** Apart from the gates, so that the figures do not run into each other. */
+const TICK_ROOM = 8;
 
 function Drawing({
   label,
   curves,
+  gates,
   scale,
 }: {
   label: string;
   curves: readonly LiftCurve[];
+  gates: Gates;
   scale: LiftScale;
 }) {
   const { width, height, left, right, top, bottom, x, y, xTicks, yTicks, compact } = scale;
+  const named: readonly number[] = [gates.from, gates.to];
+  const apart = yTicks.filter((tick) => named.every((gate) => Math.abs(tick - gate) >= TICK_ROOM));
   const fromFootOff = curves.every((curve) => curve.fromFootOff);
   return (
     <svg
@@ -68,17 +81,17 @@ function Drawing({
       role="img"
       aria-label={label}
     >
-      {yTicks.map((tick) => (
+      {[...apart, ...named].map((tick) => (
         <g key={tick}>
           <path
             d={`M${left} ${y(tick)}H${right}`}
-            className={GATES.includes(tick) ? 'plot-gate' : 'plot-grid'}
+            className={named.includes(tick) ? 'plot-gate' : 'plot-grid'}
           />
           <text
             x={left - 8}
             y={y(tick) + 5}
             textAnchor="end"
-            className={GATES.includes(tick) ? 'plot-strong' : undefined}
+            className={named.includes(tick) ? 'plot-strong' : undefined}
           >
             {tick}°
           </text>

@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { makeClip } from '#server/features/clips/clip.factory.ts';
 import { deriveReading } from '#shared/reading/derive.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { goldenClip } from '#tests/support/golden.ts';
 import type { BenchEntry } from '../entry.ts';
 import { median } from '../median.ts';
@@ -56,6 +57,7 @@ const entry: BenchEntry = {
                 thighTurnsLittle: false,
                 markError: ASSUMED_MARK_ERROR,
                 ownSystematic: null,
+                rules: STANDARD_RULES,
                 reps: trial.reps,
               }),
             ),

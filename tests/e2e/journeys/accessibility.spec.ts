@@ -3,7 +3,7 @@ import { expect, test } from '../support/app.ts';
 import { expectAccessible } from './steps/axe.ts';
 import { expectKeyboardWay } from './steps/keyboard.ts';
 import { PAGES } from './steps/pages.ts';
-import { carryOn, COACH, sessionOf, SUPERVISOR } from './steps/people.ts';
+import { carryOn, COACH, OWNER, sessionOf, SUPERVISOR } from './steps/people.ts';
 import { prepareShown, type Shown, tidyShown } from './steps/shown.ts';
 import { PREPARED_WITHIN } from './steps/visit.ts';
 
@@ -21,7 +21,7 @@ const sessionFor = (email: string): APIRequestContext => {
 let shown: Shown;
 test.beforeAll(async ({ app }) => {
   test.setTimeout(PREPARED_WITHIN + 60_000);
-  for (const email of [COACH, SUPERVISOR]) people.set(email, await sessionOf(app, email));
+  for (const email of [COACH, SUPERVISOR, OWNER]) people.set(email, await sessionOf(app, email));
   shown = await prepareShown(sessionFor(COACH));
 });
 test.afterAll(async () => {

@@ -15,6 +15,7 @@ export const blindDocument = ({
   supportSide,
   view,
   marks,
+  protocol,
 }: SecondMarkingDocument): BenchDocument => ({
   clip,
   visit,
@@ -46,6 +47,7 @@ export const blindDocument = ({
   calls: [],
   assumption: [],
   markErrors: [],
+  protocol,
   otherReps: [],
   may: { mark: true, comment: false, markAgain: false },
 });

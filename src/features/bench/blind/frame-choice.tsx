@@ -1,12 +1,16 @@
+import type { Gates } from '#shared/protocol/protocol.ts';
+
 /** Frames that the product chooses, or frames chosen by hand among the marked ones. */
 export function FrameChoice({
   marked,
   chosen,
+  gates,
   onChoose,
 }: {
   marked: readonly number[];
   /** Null: the product chooses. */
   chosen: readonly number[] | null;
+  gates: Gates;
   onChoose: (frames: readonly number[] | null) => void;
 }) {
   const toggle = (frame: number) =>
@@ -27,7 +31,7 @@ export function FrameChoice({
           checked={chosen === null}
           onChange={() => onChoose(null)}
         />
-        Ten, spread over the quiet stance, near 60° and near 90°
+        Ten, spread over the quiet stance, near {gates.from}° and near {gates.to}°
       </label>
       <label className={radio}>
         <input

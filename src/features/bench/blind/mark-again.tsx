@@ -11,6 +11,8 @@ import { Dialog } from '#src/ui/dialog.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { ErrorState, Loading } from '#src/ui/states.tsx';
 import { useStatus } from '#src/ui/status.tsx';
+import { gatesOf } from '#shared/protocol/protocol.ts';
+import { useBenchDocument } from '../bench-context.ts';
 import type { BenchRep } from '../model/bench-model.ts';
 import { FrameChoice } from './frame-choice.tsx';
 import { PastMarkings } from './past-markings.tsx';
@@ -37,6 +39,7 @@ export function MarkAgain({ own }: { own: BenchRep }) {
 
 function MarkAgainForm({ repId, onClose }: { repId: string; onClose: () => void }) {
   const { user } = useMe();
+  const { protocol } = useBenchDocument();
   const client = useQueryClient();
   const navigate = useNavigate();
   const say = useStatus();
@@ -102,7 +105,12 @@ function MarkAgainForm({ repId, onClose }: { repId: string; onClose: () => void 
           ))}
         </fieldset>
       )}
-      <FrameChoice marked={markedFrames} chosen={frames} onChoose={setFrames} />
+      <FrameChoice
+        marked={markedFrames}
+        chosen={frames}
+        gates={gatesOf(protocol.rules)}
+        onChoose={setFrames}
+      />
       {start.isError && (
         <div className="mt-4">
           <ErrorState error={start.error} />

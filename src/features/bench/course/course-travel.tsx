@@ -3,7 +3,8 @@ import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { liftText } from '#shared/overlay/figures.ts';
 import { courseScale } from '#src/ui/plots/course-scale.ts';
 import { LIFT_RANGE } from '#src/ui/plots/course-scale.ts';
-import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
+import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { frameAtLift, liftAt } from '../model/hill.ts';
 import { goTo } from '../store/bench-store.ts';
 
@@ -13,6 +14,7 @@ import { goTo } from '../store/bench-store.ts';
  */
 export function CourseTravel({ children }: { children: ReactNode }) {
   const { store, times } = useBenchTools();
+  const { protocol } = useBenchDocument();
   const { current } = useBenchModel();
   const frame = useBench((state) => state.frame);
   const box = useRef<HTMLDivElement>(null);
@@ -28,7 +30,7 @@ export function CourseTravel({ children }: { children: ReactNode }) {
   const follow = (event: PointerEvent) => {
     const bounds = box.current?.getBoundingClientRect();
     if (!bounds || bounds.width === 0) return;
-    const { x } = courseScale(Math.floor(bounds.width), bounds.height, []);
+    const { x } = courseScale(Math.floor(bounds.width), bounds.height, [], gatesOf(protocol.rules));
     to(degrees(x.invert(event.clientX - bounds.left)));
   };
   const rising = current.frames.filter((each) => each.phase === 'rise' && each.lift !== null);

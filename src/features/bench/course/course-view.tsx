@@ -2,7 +2,8 @@ import { liftText } from '#shared/overlay/figures.ts';
 import { CourseCurrent, CourseNext } from '#src/ui/plots/course-markers.tsx';
 import { CoursePlot } from '#src/ui/plots/course-plot.tsx';
 import { turnAt } from '#src/ui/plots/course-shapes.ts';
-import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
+import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { gainWords } from '../lead/next-frame-offer.tsx';
 import { useNextFrame } from '../lead/use-suggestion.ts';
 import { liftAt } from '../model/hill.ts';
@@ -22,6 +23,7 @@ export function CourseView({ height }: { height?: number }) {
   const frame = useBench((state) => state.frame);
   const figures = useFrameFigures();
   const next = useNextFrame();
+  const gates = gatesOf(useBenchDocument().protocol.rules);
   const narrow = useNarrow();
   if (!current) return null;
   const own = result?.reps.find((each) => each.id === current.rep.id);
@@ -56,8 +58,9 @@ export function CourseView({ height }: { height?: number }) {
     <div className="bench-course">
       <CourseTravel>
         <CoursePlot
-          label={courseLabel(current.frames, current.rep.number)}
+          label={courseLabel(current.frames, current.rep.number, gates)}
           height={height}
+          gates={gates}
           curve={curve}
           points={points}
           empty={empty}
@@ -68,7 +71,7 @@ export function CourseView({ height }: { height?: number }) {
                 <CourseNext
                   lift={nextLift}
                   turn={turnAt(curve, nextLift) ?? 0}
-                  words={[`mark here next: frame ${next.frame}`, gainWords(next)]}
+                  words={[`mark here next: frame ${next.frame}`, gainWords(next, gates)]}
                   scale={scale}
                 />
               )}
@@ -86,7 +89,7 @@ export function CourseView({ height }: { height?: number }) {
       </CourseTravel>
       {curve.length > 0 && (
         <p className="text-caption text-soft">
-          Band: 95 % of the change from 60°, under our error model.
+          Band: 95 % of the change from {gates.from}°, under our error model.
           {points.some((point) => point.hollow) &&
             ' Hollow points rest on marks nobody has looked at.'}
         </p>
@@ -94,7 +97,7 @@ export function CourseView({ height }: { height?: number }) {
       {narrow && next && nextLift !== null && (
         <p className="mt-2">
           <b>Mark here next: frame {next.frame}</b>, the open ring at {Math.round(nextLift)}°.{' '}
-          {next.gain && `${gainWords(next).replace('reading', 'Reading')}.`}
+          {next.gain && `${gainWords(next, gates).replace('reading', 'Reading')}.`}
         </p>
       )}
     </div>

@@ -2,6 +2,7 @@ import { landmark } from '#shared/landmarks/table.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import { capital, inWords } from '#src/ui/figures.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import type { Suggestion } from '../model/first-frames.ts';
 import type { Tally } from '../model/led.ts';
 
@@ -27,16 +28,20 @@ export const typicalErrorPx = (id: LandmarkId, sourceOverPicture: number): numbe
   return Math.max(1, Math.round(px * randomPart.value * Math.max(1, sourceOverPicture)));
 };
 
-export const WHY_WORDS: Readonly<Record<Suggestion['why'], string>> = {
-  quiet: 'both feet down: five quiet frames make the zero',
-  'look-for-rise': 'to find where the thigh rises',
-  'near-60': 'near 60°, where the change begins to count',
-  'near-90': 'near 90°, where the change ends',
-  between: 'between the gates',
+export const whyWords = (why: Suggestion['why'], { from, to }: Gates): string => {
+  switch (why) {
+    case 'quiet':
+      return 'both feet down: five quiet frames make the zero';
+    case 'look-for-rise':
+      return 'to find where the thigh rises';
+    case 'near-from':
+      return `near ${from}°, where the change begins to count`;
+    case 'near-to':
+      return `near ${to}°, where the change ends`;
+    case 'between':
+      return 'between the gates';
+  }
 };
-
-export const suggestionWords = ({ frame, why }: Suggestion): string =>
-  `frame ${frame}, ${WHY_WORDS[why]}`;
 
 /** `Three quiet frames`; for counts in running text. */
 export const countWords = (count: number, what: string): string =>

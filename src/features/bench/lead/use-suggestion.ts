@@ -2,7 +2,7 @@ import { useContext, useMemo } from 'react';
 import type { Degrees } from '#shared/geometry/units.ts';
 import { frameIndex, type FrameIndex } from '#shared/timing/units.ts';
 import { BlindContext } from '../blind/blind-context.ts';
-import { useBenchModel, useBenchTools } from '../bench-context.ts';
+import { useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { firstFrame, type Suggestion } from '../model/first-frames.ts';
 import { useReading } from '../reading/use-reading.ts';
 
@@ -23,6 +23,7 @@ export interface NextFrame {
 export function useNextFrame(): NextFrame | null {
   const { times } = useBenchTools();
   const { current, figures } = useBenchModel();
+  const { rules } = useBenchDocument().protocol;
   const { offers, result } = useReading();
   const blind = useContext(BlindContext);
   return useMemo(() => {
@@ -38,6 +39,7 @@ export function useNextFrame(): NextFrame | null {
           times,
           current.frames,
           current.hill,
+          rules,
         );
     if (first) return { frame: first.frame, why: first.why, lift: null, gain: null };
     const offer = offers.find((each) => each.rep === current.rep.id);
@@ -50,5 +52,5 @@ export function useNextFrame(): NextFrame | null {
       // the gain is a figure too: it is not shown before the call by eye
       gain: figures && now !== null && then !== null ? { now, then } : null,
     };
-  }, [blind, current, figures, offers, result, times]);
+  }, [blind, current, figures, offers, result, rules, times]);
 }

@@ -1,5 +1,6 @@
 import type { CourseFrame } from '#shared/course/types.ts';
-import { LEAST_FRAMES } from '#shared/reading/usable.ts';
+import type { ReadingRules } from '#shared/protocol/protocol.ts';
+import { leastFrames } from '#shared/reading/usable.ts';
 import type { FrameIndex, Milliseconds } from '#shared/timing/units.ts';
 import { frameAtLift, type HillPoint } from './hill.ts';
 import { degrees } from '#shared/geometry/units.ts';
@@ -7,7 +8,7 @@ import { degrees } from '#shared/geometry/units.ts';
 /** A frame worth marking before there is a reading, and why. */
 export interface Suggestion {
   readonly frame: FrameIndex;
-  readonly why: 'quiet' | 'look-for-rise' | 'near-60' | 'near-90' | 'between';
+  readonly why: 'quiet' | 'look-for-rise' | 'near-from' | 'near-to' | 'between';
 }
 
 /** Quiet frames recommended; three are the least. */
@@ -26,16 +27,19 @@ const frameFrom = (
   return best;
 };
 
-type Near = 'near-60' | 'near-90' | 'between';
-const LIFTS: Readonly<Record<Near, readonly number[]>> = {
-  'near-60': [57, 61, 64, 55],
-  'near-90': [89, 86, 92, 95],
-  between: [72, 40, 80],
-};
+type Near = 'near-from' | 'near-to' | 'between';
+const liftsOf = ({
+  gateFrom,
+  gateTo,
+}: ReadingRules): Readonly<Record<Near, readonly number[]>> => ({
+  'near-from': [-3, 1, 4, -5].map((by) => gateFrom + by),
+  'near-to': [-1, -4, 2, 5].map((by) => gateTo + by),
+  between: [(gateFrom + gateTo) / 2 - 3, gateFrom - 20, gateTo - 10],
+});
 
 /**
  * What to mark before the reading can say it itself: five quiet frames, then the rise looked
- * through in halves until its lift is known, then near 60°, near 90°, the top and between. `span`
+ * through in halves until its lift is known, then near either gate, the top and between. `span`
  * is the rep, both ends inclusive. Null once the least is there.
  */
 export const firstFrame = (
@@ -43,6 +47,7 @@ export const firstFrame = (
   times: readonly Milliseconds[],
   frames: readonly CourseFrame[],
   hill: readonly HillPoint[],
+  rules: ReadingRules,
 ): Suggestion | null => {
   const [from, to] = span;
   const start = times[from] ?? 0;
@@ -64,7 +69,7 @@ export const firstFrame = (
     const probe = widestGap(frames, span, times, start + QUIET_SPAN_MS);
     return probe === null ? null : { frame: probe, why: 'look-for-rise' };
   }
-  const wanting = LEAST_FRAMES.find(
+  const wanting = leastFrames(rules).find(
     (least) =>
       frames.filter(
         ({ phase, lift }) =>
@@ -77,12 +82,13 @@ export const firstFrame = (
   if (!wanting) return null;
   const kinds: readonly Near[] =
     wanting.code === 'few-near-60'
-      ? ['near-60']
+      ? ['near-from']
       : wanting.code === 'few-near-90'
-        ? ['near-90']
-        : ['between', 'near-60', 'near-90'];
+        ? ['near-to']
+        : ['between', 'near-from', 'near-to'];
+  const lifts = liftsOf(rules);
   for (const kind of kinds) {
-    for (const lift of LIFTS[kind]) {
+    for (const lift of lifts[kind]) {
       const frame = frameAtLift(hill, degrees(lift), times);
       if (frame !== null && !marked.has(frame)) return { frame, why: kind };
     }

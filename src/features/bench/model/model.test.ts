@@ -11,6 +11,7 @@ import { firstFrame } from './first-frames.ts';
 import { frameAtLift, hillOf, liftAt } from './hill.ts';
 import { isDone, ledLandmarks, nextLandmark, proposedSet, tallyOf } from './led.ts';
 import { markedFrames, marksWith } from '#shared/records/stored-marks.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 
 const at = (u: number, v: number, over: Partial<MarkValue> = {}): MarkValue => ({
   to: 'point',
@@ -173,7 +174,8 @@ describe('the hill', () => {
 
 describe('what to mark first', () => {
   const span: readonly [FrameIndex, FrameIndex] = [F(0), F(200)];
-  const suggest = (frames: CourseFrame[]) => firstFrame(span, TIMES, frames, hillOf(frames));
+  const suggest = (frames: CourseFrame[]) =>
+    firstFrame(span, TIMES, frames, hillOf(frames), STANDARD_RULES);
 
   it('five quiet frames over the first second', () => {
     expect(suggest([])).toEqual({ frame: 0, why: 'quiet' });
@@ -197,7 +199,7 @@ describe('what to mark first', () => {
       courseFrame(130, 95, 'rise'),
     ];
     const next = suggest([...quiet, ...rise]);
-    expect(next?.why).toBe('near-60');
+    expect(next?.why).toBe('near-from');
     expect(next?.frame).toBeGreaterThan(94);
     expect(next?.frame).toBeLessThan(104);
   });

@@ -28,6 +28,7 @@ export const readingInputOf = (
     thighTurnsLittle: document.assumption.includes(side),
     markError: markErrorOn(document.markErrors, side),
     ownSystematic: null,
+    rules: document.protocol.rules,
     reps: ofSide,
   };
 };

@@ -1,6 +1,7 @@
 import { useRef, type PointerEvent } from 'react';
 import { frameIndex, type FrameIndex } from '#shared/timing/units.ts';
 import { useSize } from '#src/canvas/use-size.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { useNextFrame } from '../lead/use-suggestion.ts';
 import type { BenchModel } from '../model/bench-model.ts';
@@ -50,6 +51,7 @@ export function LiftStrip() {
 function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
   const { store, times } = useBenchTools();
   const { may } = useBenchDocument();
+  const { protocol } = useBenchDocument();
   const model = useBenchModel();
   const { current, figures, reps } = model;
   const shownReps = whole ? reps : current ? [current] : [];
@@ -97,6 +99,7 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
           <StripHill
             hill={hill}
             layout={layout}
+            gates={gatesOf(protocol.rules)}
             fromFront={model.view === 'front'}
             sayBlind={!nextInside || nextLift !== null}
           />

@@ -1,21 +1,23 @@
 import { area, curveMonotoneX, line } from 'd3-shape';
 import { useId } from 'react';
 import { Hatch } from '#src/ui/plots/hatch.tsx';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import type { HillPoint } from '../model/hill.ts';
 import type { StripLayout } from './strip-layout.ts';
 
-const GATES = [60, 90];
 const BLIND_BELOW = 20;
 
-/** The rep as a hill whose height is the lift, with 60° and 90° drawn through it. */
+/** The rep as a hill whose height is the lift, with both gates drawn through it. */
 export function StripHill({
   hill,
   layout,
+  gates,
   fromFront,
   sayBlind,
 }: {
   hill: readonly HillPoint[];
   layout: StripLayout;
+  gates: Gates;
   fromFront: boolean;
   /** False where other words stand in the way. */
   sayBlind: boolean;
@@ -56,7 +58,7 @@ export function StripHill({
         strokeLinejoin="round"
         className="stroke-ink"
       />
-      {GATES.map((gate) => (
+      {[gates.from, gates.to].map((gate) => (
         <g key={gate}>
           <path d={`M${left} ${y(gate)}H${right}`} className="plot-gate" />
           <text x={left - 6} y={y(gate) + 5} textAnchor="end" className="plot-strong">

@@ -2,11 +2,13 @@ import { degrees } from '#shared/geometry/units.ts';
 import { liftDial, turnDial } from '#shared/overlay/dials.ts';
 import { liftText, plusMinus, signedDegrees } from '#shared/overlay/figures.ts';
 import { OverlaySvg } from '#src/canvas/overlay-svg.tsx';
-import { useBenchModel } from '../bench-context.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
+import { useBenchDocument, useBenchModel } from '../bench-context.ts';
 import { useFrameFigures } from './use-frame-figures.ts';
 
 /** Lift from the side and turn from above, true to scale; dashed while provisional. */
 export function Dials() {
+  const { protocol } = useBenchDocument();
   const { current, view } = useBenchModel();
   const figures = useFrameFigures();
   const shown = figures?.shown ?? null;
@@ -43,7 +45,7 @@ export function Dials() {
           </figcaption>
           {!blind && (
             <Dial
-              drawing={liftDial(lift, provisional)}
+              drawing={liftDial(lift, provisional, gatesOf(protocol.rules))}
               label={`Lift from the side: ${liftText(lift, false)} from the vertical`}
             />
           )}

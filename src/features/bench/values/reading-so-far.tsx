@@ -9,7 +9,7 @@ import { readingLabel, settleWords } from './reading-words.ts';
 
 /** What the reps of this side say together so far, and what would settle it. */
 export function ReadingSoFar() {
-  const { visit } = useBenchDocument();
+  const { visit, protocol } = useBenchDocument();
   const { current, reps } = useBenchModel();
   const { result, working } = useReading();
   if (!current) return null;
@@ -44,8 +44,8 @@ export function ReadingSoFar() {
         <p>This view shows the lift. The turn is read from a clip filmed from the front.</p>
       ) : (
         <p>
-          Not yet. It needs 3 quiet frames, then at least 7 in the rise, two of them near 60° and
-          two near 90°.
+          Not yet. It needs 3 quiet frames, then at least 7 in the rise, two of them near{' '}
+          {protocol.rules.gateFrom}° and two near {protocol.rules.gateTo}°.
         </p>
       )}
       {result?.figures && (

@@ -1,13 +1,13 @@
-import { READING_LABELS } from '#shared/contracts/readings.ts';
+import { readingLabel as labelOf } from '#shared/contracts/readings.ts';
 import { landmark } from '#shared/landmarks/table.ts';
 import type { Settle } from '#shared/reading/reasons.ts';
 import type { ReadingResult } from '#shared/reading/types.ts';
 import { degrees } from '#src/ui/figures.ts';
 import { countWords } from '../lead/lead-words.ts';
 
-/** `“Can’t tell yet”`, and before 60° where it is so. */
-export const readingLabel = ({ code, before60 }: ReadingResult): string =>
-  before60 ? `${READING_LABELS[code]}, before 60°` : READING_LABELS[code];
+/** `“Can’t tell yet”`, and before the lower gate where it is so. */
+export const readingLabel = ({ code, before60, rules }: ReadingResult): string =>
+  labelOf(code, before60, rules.gateFrom);
 
 /** The first thing that would settle the reading, in one sentence; `nameOf` gives a rep its number. */
 export const settleWords = (settle: Settle, nameOf: (rep: string) => string | null): string => {

@@ -9,6 +9,7 @@ import { athletesKey } from '#src/api/athletes.queries.ts';
 import { call } from '#src/api/client.ts';
 import { sidesKey } from '#src/api/readings.queries.ts';
 import { todayQuery } from '#src/api/today.queries.ts';
+import { useProtocol } from '#src/api/use-protocol.ts';
 import { Button } from '#src/ui/button.tsx';
 import { ButtonLink } from '#src/ui/button-link.tsx';
 import { CheckboxField, SegmentedField } from '#src/ui/form/choice-fields.tsx';
@@ -18,10 +19,12 @@ import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import { paths } from '#src/ui/paths.ts';
 import { useStatus } from '#src/ui/status.tsx';
 import { SEEN_WORDS } from '#src/ui/words.ts';
+import { roseWords } from '#src/ui/gate-words.ts';
+import { type Gates, gatesOf } from '#shared/protocol/protocol.ts';
 import {
   CONFIDENCE_WORDS,
-  SEEN_NOTES,
   SEEN_SUBSTITUTIONS,
+  seenNotes,
   SUBSTITUTION_WORDS,
 } from '../words/seen-words.ts';
 
@@ -31,11 +34,14 @@ const callForm = callBody.extend({
   confidence: z.enum(callBody.shape.confidence.options, { error: 'Say how sure you are.' }),
 });
 
-const CHOICES = seen.options.map((value: Seen) => ({
-  value,
-  label: SEEN_WORDS[value],
-  note: SEEN_NOTES[value],
-}));
+const choicesOf = (gates: Gates | null) => {
+  const notes = seenNotes(gates);
+  return seen.options.map((value: Seen) => ({
+    value,
+    label: SEEN_WORDS[value],
+    note: notes[value],
+  }));
+};
 const CONFIDENCES = callBody.shape.confidence.options.map((value) => ({
   value,
   label: CONFIDENCE_WORDS[value],
@@ -45,6 +51,8 @@ export function CallForm({ visitId, side }: { visitId: string; side: Side }) {
   const client = useQueryClient();
   const navigate = useNavigate();
   const say = useStatus();
+  const protocol = useProtocol();
+  const gates = protocol && gatesOf(protocol);
   const form = useZodForm(callForm, { substitutions: [], handsFelt: '' });
   const send = async (body: z.output<typeof callForm>) => {
     await call(routes.recordCall, { params: { id: visitId, side }, body });
@@ -58,8 +66,8 @@ export function CallForm({ visitId, side }: { visitId: string; side: Side }) {
     <Form form={form} send={send} className="space-y-7">
       <SegmentedField
         name="seen"
-        legend={`The ${side} hip, the one stood on, while the ${otherSide(side)} thigh rose from 60° to level`}
-        choices={CHOICES}
+        legend={`The ${side} hip, the one stood on, while the ${otherSide(side)} thigh ${gates ? roseWords(gates) : 'rose'}`}
+        choices={choicesOf(gates)}
         cards
       />
       <SegmentedField name="confidence" legend="How sure" choices={CONFIDENCES} />

@@ -42,9 +42,7 @@ export function CallOnly({ page, call }: { page: SidePage; call: Call }) {
           <p className="mt-2 text-lead">
             <b>{CONFIDENCE_WORDS[call.confidence]}.</b> {call.by.name}, {moment(call.at)}
           </p>
-          <p className="mt-4 max-w-lead text-lead">
-            {callSentence(call.seen, side, otherSide(side))}
-          </p>
+          <p className="mt-4 max-w-lead text-lead">{callSentence(call, side, otherSide(side))}</p>
         </div>
         <div className="section-margin">
           <div className="text-body text-ink desk:border-l desk:border-rule desk:pl-8">

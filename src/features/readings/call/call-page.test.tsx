@@ -29,7 +29,7 @@ describe('the call by eye', () => {
     expect(await screen.findByText(/figures stay hidden until you save it/)).toBeVisible();
     const seen = await screen.findByRole('radiogroup', { name: /The right hip, the one stood on/ });
     expect(within(seen).queryByRole('radio', { checked: true })).toBeNull();
-    expect(screen.getByText('swings outwards between 60° and level')).toBeVisible();
+    expect(await screen.findByText('swings outwards between 60° and level')).toBeVisible();
     expect(screen.getByLabelText('IMG_2291.MOV, nothing drawn on it')).toBeInTheDocument();
     expect(api.calls(routes.sideReading)).toHaveLength(0);
   });

@@ -8,7 +8,7 @@ import { RepKey } from './rep-key.tsx';
 /** The central picture with how to read it and what may be missed. */
 export function CourseSection({ reading }: { reading: Reading }) {
   const { result, side } = reading;
-  const { figures, returnPast90 } = result;
+  const { figures, returnPast90, rules } = result;
   const used = result.reps.filter((rep) => rep.used);
   const frames = used.reduce((sum, rep) => sum + (rep.fit?.used ?? 0), 0);
   const note =
@@ -24,9 +24,9 @@ export function CourseSection({ reading }: { reading: Reading }) {
           {result.course.length > 0 && (
             <p>
               <b className="text-ink">How to read it.</b> Right is a higher thigh, up is a hip that
-              turns out. What counts is the change between the dotted lines. The band, pinched at
-              60°, holds 95 of 100 true changes, under our error model. Green hatch: turning in, as
-              expected. Grey hatch: holding still, not a pass.
+              turns out. What counts is the change between the dotted lines. The band, pinched at{' '}
+              {rules.gateFrom}°, holds 95 of 100 true changes, under our error model. Green hatch:
+              turning in, as expected. Grey hatch: holding still, not a pass.
             </p>
           )}
           {figures && (
@@ -39,7 +39,7 @@ export function CourseSection({ reading }: { reading: Reading }) {
           {reading.provisional && <p>Hollow points rest on marks nobody has looked at.</p>}
           {returnPast90 && (
             <p>
-              From 90° to {degrees(returnPast90.to, 0)} the turn changes by{' '}
+              From {rules.gateTo}° to {degrees(returnPast90.to, 0)} the turn changes by{' '}
               {turn(returnPast90.change)}. That is described only; nothing is read from it.
             </p>
           )}

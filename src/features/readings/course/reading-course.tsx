@@ -4,14 +4,16 @@ import { degrees, inWords, plusMinus, turn } from '#src/ui/figures.ts';
 import { CourseBracket, CourseOnset } from '#src/ui/plots/course-markers.tsx';
 import { CoursePlot } from '#src/ui/plots/course-plot.tsx';
 import { turnAt } from '#src/ui/plots/course-shapes.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
 import { coursePoints } from './course-data.ts';
 
-const label = ({ course, figures, reps }: ReadingResult, side: Side): string => {
+const label = ({ course, figures, reps, rules }: ReadingResult, side: Side): string => {
   const used = reps.filter(({ used }) => used).length;
-  const [at60, at90] = [turnAt(course, 60), turnAt(course, 90)];
-  if (!figures || at60 === null || at90 === null)
+  const { from, to } = gatesOf(rules);
+  const [atFrom, atTo] = [turnAt(course, from), turnAt(course, to)];
+  if (!figures || atFrom === null || atTo === null)
     return `Course of the ${side} support side: nothing could be fitted.`;
-  return `Course of the ${side} support side over ${inWords(used)} ${used === 1 ? 'rep' : 'reps'}: turn ${turn(at60)} at 60° of lift, ${turn(at90)} at 90°; change ${turn(figures.d)} ${plusMinus(1.96 * figures.uC)}.`;
+  return `Course of the ${side} support side over ${inWords(used)} ${used === 1 ? 'rep' : 'reps'}: turn ${turn(atFrom)} at ${from}° of lift, ${turn(atTo)} at ${to}°; change ${turn(figures.d)} ${plusMinus(1.96 * figures.uC)}.`;
 };
 
 /** The courses of one side: points of each rep, line and band of all, the change as a bracket. */
@@ -32,11 +34,13 @@ export function ReadingCourse({
 }) {
   const { course, figures, onset, reps } = result;
   const used = reps.filter((rep) => rep.used);
-  const at60 = turnAt(course, 60);
+  const gates = gatesOf(result.rules);
+  const atFrom = turnAt(course, gates.from);
   return (
     <CoursePlot
       label={label(result, side)}
       height={height}
+      gates={gates}
       curve={course}
       repCurves={used.length > 1 && !small ? used.map(({ curve }) => curve) : []}
       points={coursePoints(reps)}
@@ -44,8 +48,13 @@ export function ReadingCourse({
     >
       {(scale) => (
         <>
-          {at60 !== null && figures && (
-            <CourseBracket at60={at60} change={figures.d} words={turn(figures.d)} scale={scale} />
+          {atFrom !== null && figures && (
+            <CourseBracket
+              atFrom={atFrom}
+              change={figures.d}
+              words={turn(figures.d)}
+              scale={scale}
+            />
           )}
           {onset && !small && (
             <CourseOnset

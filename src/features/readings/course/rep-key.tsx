@@ -30,7 +30,7 @@ export function RepKey({ reading }: { reading: Reading }) {
           <span>
             <RepLink reading={reading} rep={rep} />{' '}
             {rep.fit
-              ? `${turn(rep.fit.change.value)} ${plusMinus(repHalfWidth(rep))}, ${rep.fit.used} frames`
+              ? `${turn(rep.fit.change.value)} ${plusMinus(repHalfWidth(rep, reading.result.rules.gateTo))}, ${rep.fit.used} frames`
               : leftOut(rep)}
             <LiftFrom reading={reading} rep={rep} />
           </span>

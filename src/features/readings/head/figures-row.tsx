@@ -2,17 +2,24 @@ import type { ReactNode } from 'react';
 import type { Reading } from '#shared/contracts/readings.ts';
 import type { Onset, ReadingFigures } from '#shared/reading/types.ts';
 import { degrees, plusMinus, turn } from '#src/ui/figures.ts';
+import { gateRange } from '#src/ui/gate-words.ts';
+import { type Gates, gatesOf } from '#shared/protocol/protocol.ts';
 import { isTold, partHalfWidth } from '../parts/part-half-width.ts';
 import { inHundred } from '../words/probability-words.ts';
 
 /** The figures of the reps together, each with its ± and what it means. */
 export function FiguresRow({ reading }: { reading: Reading }) {
-  const { figures, onset, code } = reading.result;
+  const { figures, onset, code, rules } = reading.result;
+  const gates = gatesOf(rules);
   if (!figures) return null;
   return (
     <>
       <dl className="grid grid-cols-2 border-b border-rule border-t-ink [border-top-width:1px] desk:grid-cols-4">
-        <Figure name="Turn, from 60° to 90° of lift" value={turn(figures.d)} pm={1.96 * figures.uC}>
+        <Figure
+          name={`Turn, from ${gateRange(gates)} of lift`}
+          value={turn(figures.d)}
+          pm={1.96 * figures.uC}
+        >
           {figures.d < 0 ? 'inwards' : 'outwards'}; 95 of 100 true values lie inside, under our
           error model
         </Figure>
@@ -33,7 +40,7 @@ export function FiguresRow({ reading }: { reading: Reading }) {
             : `assumed to turn little: ${Math.round(100 * figures.lambda)} of 100 parts of it count`}
         </Figure>
         {onset ? (
-          <OnsetFigure onset={onset} />
+          <OnsetFigure onset={onset} gates={gates} />
         ) : (
           <Figure name="Smallest early turn found" value={degrees(figures.mdt90)} pm={null}>
             9 times in 10; a smaller one may be missed
@@ -85,7 +92,7 @@ function Figure({
 }
 
 /** A bar over the lifts where the turn may start; its middle says nothing by itself. */
-function OnsetFigure({ onset: { low, high } }: { onset: Onset }) {
+function OnsetFigure({ onset: { low, high }, gates }: { onset: Onset; gates: Gates }) {
   const x = (lift: number) => `${Math.min(100, Math.max(0, ((lift - 25) / 75) * 100))}%`;
   const words = `${degrees(low, 0)} to ${degrees(high, 0)}`;
   return (
@@ -96,7 +103,7 @@ function OnsetFigure({ onset: { low, high } }: { onset: Onset }) {
         <svg width="100%" height="14" aria-hidden="true" className="block max-w-[220px]">
           <line x1="0" x2="100%" y1="7" y2="7" className="stroke-rule" />
           <line x1={x(low)} x2={x(high)} y1="7" y2="7" strokeWidth="3" className="stroke-ink" />
-          {[60, 90].map((gate) => (
+          {[gates.from, gates.to].map((gate) => (
             <line
               key={gate}
               x1={x(gate)}
@@ -108,7 +115,9 @@ function OnsetFigure({ onset: { low, high } }: { onset: Onset }) {
             />
           ))}
         </svg>
-        <span className="block text-note text-soft">a range, never a point; dots: 60° and 90°</span>
+        <span className="block text-note text-soft">
+          a range, never a point; dots: {gates.from}° and {gates.to}°
+        </span>
       </dd>
     </div>
   );

@@ -29,8 +29,8 @@ export function HistorySection({ page }: { page: SidePage }) {
               </span>
             )}
             <span className="text-note text-soft">
-              {moment(reading.at)}, marked by {reading.by.name}, engine {reading.engine},{' '}
-              {markErrorWords(reading.markError)}
+              {moment(reading.at)}, marked by {reading.by.name}, engine {reading.engine}, protocol{' '}
+              {reading.protocol.version}, {markErrorWords(reading.markError)}
               {reading.id === current && ', as the marks stand now'}
             </span>
           </li>

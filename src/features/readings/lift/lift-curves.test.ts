@@ -3,6 +3,7 @@ import { madeFront, madeLiftAt, type MadeMotion, madeSide } from '#shared/evalua
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { deriveReading } from '#shared/reading/derive.ts';
 import { liftScale } from '#src/ui/plots/lift-scale.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { liftCurve, sideReps, topHalfWidth } from './lift-curves.ts';
 
 const MOTION: MadeMotion = {
@@ -24,6 +25,7 @@ const { reps } = deriveReading(
     thighTurnsLittle: false,
     markError: ASSUMED_MARK_ERROR,
     ownSystematic: null,
+    rules: STANDARD_RULES,
     reps: [front, side, { ...side, id: 'left out', excluded: 'hopped' }],
   },
   20,

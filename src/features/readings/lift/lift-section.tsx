@@ -3,6 +3,7 @@ import { capital, degrees, plusMinus } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { repSymbol } from '#src/ui/plots/course-points.tsx';
 import { LiftPlot } from '#src/ui/plots/lift-plot.tsx';
+import { gatesOf } from '#shared/protocol/protocol.ts';
 import { repName } from '../words/rep-names.ts';
 import { liftCurve, sideReps, topHalfWidth } from './lift-curves.ts';
 
@@ -55,6 +56,7 @@ export function LiftSection({ reading }: { reading: Reading }) {
       <LiftPlot
         label={`Lift over time, filmed from the side. ${named.map(({ words }) => words).join('. ')}.`}
         curves={curves}
+        gates={gatesOf(reading.result.rules)}
       />
     </Section>
   );

@@ -1,4 +1,5 @@
 import type { Change, ReadingFigures, RepResult } from '#shared/reading/types.ts';
+import type { Degrees } from '#shared/geometry/units.ts';
 import { repHalfWidth } from '../course/course-data.ts';
 
 /**
@@ -16,8 +17,8 @@ export const isTold = (figures: ReadingFigures, part: Change): boolean =>
  * ± (95 %) of one rep's pelvis or thigh part, degrees: its own random error and, in full for each part, what the
  * rep's whole change has beyond its random error.
  */
-export const repPartHalfWidth = (rep: RepResult, part: Change): number => {
-  const whole = repHalfWidth(rep) / 1.96;
+export const repPartHalfWidth = (rep: RepResult, part: Change, gateTo: Degrees): number => {
+  const whole = repHalfWidth(rep, gateTo) / 1.96;
   const systematic = Math.max(0, whole ** 2 - (rep.fit?.change.u ?? 0) ** 2);
   return 1.96 * Math.sqrt(part.u ** 2 + systematic);
 };

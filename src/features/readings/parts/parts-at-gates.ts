@@ -6,18 +6,18 @@ export interface Parts {
   readonly thigh: Degrees;
 }
 
-/** Marked frames that speak for 60°, degrees of lift. */
-const NEAR_60 = [54, 66] as const;
+/** Marked frames so near the lower gate speak for it, degrees of lift. */
+const NEAR = 6;
 
 /**
- * Pelvis and thigh parts of the turn at 60° and at 90°. At 60°: the weighted mean of the marked frames
- * near it, over the used reps; at 90°: that and the reading's own change, so that the drawings differ by
- * exactly what was measured. Null where nothing is measured.
+ * Pelvis and thigh parts of the turn at both gates. At the lower: the weighted mean of the marked frames
+ * near it, over the used reps; at the upper: that and the reading's own change, so that the drawings differ
+ * by exactly what was measured. Null where nothing is measured.
  */
 export const partsAtGates = (
   result: ReadingResult,
-): { readonly at60: Parts; readonly at90: Parts } | null => {
-  const { figures, reps } = result;
+): { readonly atFrom: Parts; readonly atTo: Parts } | null => {
+  const { figures, reps, rules } = result;
   if (!figures) return null;
   let weights = 0;
   let pelvis = 0;
@@ -26,18 +26,18 @@ export const partsAtGates = (
     for (const { lift, weight, pelvisPart, thighPart, inFit } of used ? frames : []) {
       if (!inFit || lift === null || weight === null || pelvisPart === null || thighPart === null)
         continue;
-      if (lift < NEAR_60[0] || lift > NEAR_60[1]) continue;
+      if (Math.abs(lift - rules.gateFrom) > NEAR) continue;
       weights += weight;
       pelvis += weight * pelvisPart;
       thigh += weight * thighPart;
     }
   if (weights === 0) return null;
-  const at60 = { pelvis: degrees(pelvis / weights), thigh: degrees(thigh / weights) };
+  const atFrom = { pelvis: degrees(pelvis / weights), thigh: degrees(thigh / weights) };
   return {
-    at60,
-    at90: {
-      pelvis: degrees(at60.pelvis + figures.pelvis.value),
-      thigh: degrees(at60.thigh + figures.thigh.value),
+    atFrom,
+    atTo: {
+      pelvis: degrees(atFrom.pelvis + figures.pelvis.value),
+      thigh: degrees(atFrom.thigh + figures.thigh.value),
     },
   };
 };

@@ -6,6 +6,8 @@ import { OverlaySvg } from '#src/canvas/overlay-svg.tsx';
 import { degrees, plusMinus, turn } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { SideMark } from '#src/ui/side-mark.tsx';
+import { gateRange } from '#src/ui/gate-words.ts';
+import { type Gates, gatesOf } from '#shared/protocol/protocol.ts';
 import { isTold, partHalfWidth } from './part-half-width.ts';
 import { partsAtGates, type Parts } from './parts-at-gates.ts';
 import { RepParts } from './rep-parts.tsx';
@@ -14,7 +16,7 @@ import { RepParts } from './rep-parts.tsx';
 export function PartsSection({ reading }: { reading: Reading }) {
   const { result, side, provisional } = reading;
   const parts = partsAtGates(result);
-  const { figures } = result;
+  const { figures, rules } = result;
   if (!parts || !figures) return null;
   return (
     <Section
@@ -33,21 +35,31 @@ export function PartsSection({ reading }: { reading: Reading }) {
       }
     >
       <div className="grid max-w-[372px] grid-cols-2 gap-2.5">
-        <GateDial name="At 60° of lift" parts={parts.at60} side={side} provisional={provisional} />
-        <GateDial name="At 90° of lift" parts={parts.at90} side={side} provisional={provisional} />
+        <GateDial
+          name={`At ${rules.gateFrom}° of lift`}
+          parts={parts.atFrom}
+          side={side}
+          provisional={provisional}
+        />
+        <GateDial
+          name={`At ${rules.gateTo}° of lift`}
+          parts={parts.atTo}
+          side={side}
+          provisional={provisional}
+        />
       </div>
-      <p className="mt-4 max-w-lead">{partsSentence(figures)}</p>
+      <p className="mt-4 max-w-lead">{partsSentence(figures, gatesOf(rules))}</p>
       <RepParts reading={reading} />
     </Section>
   );
 }
 
-const partsSentence = (figures: ReadingFigures): string => {
+const partsSentence = (figures: ReadingFigures, gates: Gates): string => {
   const { pelvis, thigh } = figures;
   const swing = pelvis.value > 0 ? 'away from the support side' : 'towards the support side';
   const first = isTold(figures, pelvis)
-    ? `From 60° to 90° the pelvis turns ${swing} by ${degrees(Math.abs(pelvis.value))} ${plusMinus(partHalfWidth(figures, pelvis))}.`
-    : 'From 60° to 90° the pelvis stays within its error.';
+    ? `From ${gateRange(gates)} the pelvis turns ${swing} by ${degrees(Math.abs(pelvis.value))} ${plusMinus(partHalfWidth(figures, pelvis))}.`
+    : `From ${gateRange(gates)} the pelvis stays within its error.`;
   const second = isTold(figures, thigh)
     ? `The planted thigh turns ${thigh.value > 0 ? 'outwards' : 'inwards'} by ${degrees(Math.abs(thigh.value))} ${plusMinus(partHalfWidth(figures, thigh))}.`
     : 'The planted thigh stays within its error.';

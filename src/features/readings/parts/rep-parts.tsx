@@ -2,6 +2,9 @@ import type { Reading } from '#shared/contracts/readings.ts';
 import type { Change, RepFit, RepResult } from '#shared/reading/types.ts';
 import { capital, plusMinus, turn } from '#src/ui/figures.ts';
 import { type Column, Table } from '#src/ui/table.tsx';
+import { gateRange } from '#src/ui/gate-words.ts';
+import { type Gates, gatesOf } from '#shared/protocol/protocol.ts';
+import type { Degrees } from '#shared/geometry/units.ts';
 import { drawnReps, repHalfWidth } from '../course/course-data.ts';
 import { repName } from '../words/rep-names.ts';
 import { repPartHalfWidth } from './part-half-width.ts';
@@ -21,25 +24,25 @@ function Figure({ label, value, half }: { label: string; value: number; half: nu
   );
 }
 
-const part = (label: string, of: (fit: RepFit) => Change): Column<Row> => ({
+const part = (label: string, gateTo: Degrees, of: (fit: RepFit) => Change): Column<Row> => ({
   key: label,
   label,
   cell: ({ rep, fit }) => (
-    <Figure label={label} value={of(fit).value} half={repPartHalfWidth(rep, of(fit))} />
+    <Figure label={label} value={of(fit).value} half={repPartHalfWidth(rep, of(fit), gateTo)} />
   ),
 });
 
-const COLUMNS: readonly Column<Row>[] = [
-  { key: 'rep', label: 'From 60° to 90°, ± 95 %', cell: ({ name }) => name },
+const columnsOf = (gates: Gates): readonly Column<Row>[] => [
+  { key: 'rep', label: `From ${gateRange(gates)}, ± 95 %`, cell: ({ name }) => name },
   {
     key: 'turn',
     label: 'turn',
     cell: ({ rep, fit }) => (
-      <Figure label="turn" value={fit.change.value} half={repHalfWidth(rep)} />
+      <Figure label="turn" value={fit.change.value} half={repHalfWidth(rep, gates.to)} />
     ),
   },
-  part('pelvis', ({ pelvis }) => pelvis),
-  part('thigh', ({ thigh }) => thigh),
+  part('pelvis', gates.to, ({ pelvis }) => pelvis),
+  part('thigh', gates.to, ({ thigh }) => thigh),
 ];
 
 /** What pelvis and thigh did in each rep; a single rep is wider than all of them together. */
@@ -52,7 +55,7 @@ export function RepParts({ reading }: { reading: Reading }) {
     <div className="mt-5 max-w-lead">
       <Table
         caption="Parts of the turn, rep by rep"
-        columns={COLUMNS}
+        columns={columnsOf(gatesOf(reading.result.rules))}
         rows={rows}
         rowKey={({ rep }) => rep.id}
       />

@@ -8,13 +8,16 @@ import { warningWords } from '../words/warning-words.ts';
 import { reasonsOf } from './reasons.ts';
 
 export function ReasonsSection({ reading }: { reading: Reading }) {
-  const { warnings, reps } = reading.result;
+  const { warnings, reps, rules } = reading.result;
   return (
     <Section
       title="Reasons"
       margin={
         <>
-          <p>60° and 90° are a working model of practitioners. They are not validated norms.</p>
+          <p>
+            {rules.gateFrom}° and {rules.gateTo}° are a working model of practitioners. They are not
+            validated norms.
+          </p>
           <p>
             Skin moves over bone. The camera under-reads hip rotation; take direction and timing
             from it, not an absolute angle.

@@ -1,5 +1,7 @@
 import type { Reading } from '#shared/contracts/readings.ts';
 import { capital, decimal, degrees, inWords, turn } from '#src/ui/figures.ts';
+import { gateRange } from '#src/ui/gate-words.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
 import { changeRows } from '../substitutions/changes.ts';
 import { reasonWords } from '../words/reason-words.ts';
 import { directionWords, meaningOf } from '../words/substitution-words.ts';
@@ -7,7 +9,7 @@ import { directionWords, meaningOf } from '../words/substitution-words.ts';
 /** What speaks for the reading and what stands beside it, the deciding one first. */
 export const reasonsOf = ({ result }: Reading): string[] => {
   const used = result.reps.filter(({ used }) => used);
-  const reasons = [reasonWords(result.reason)];
+  const reasons = [reasonWords(result.reason, result.rules)];
   const changes = used.flatMap(({ fit }) => (fit ? [fit.change.value] : []));
   if (changes.length > 1) {
     const same = changes.every((d) => d > 0) || changes.every((d) => d < 0);
@@ -19,8 +21,8 @@ export const reasonsOf = ({ result }: Reading): string[] => {
   const least = tops.length > 0 ? Math.min(...tops) : null;
   if (least !== null)
     reasons.push(
-      least >= 90
-        ? `Every rep used reached ${degrees(least, 0)} or more, so the whole window from 60° to 90° was seen.`
+      least >= result.rules.gateTo
+        ? `Every rep used reached ${degrees(least, 0)} or more, so the whole window from ${gateRange(gatesOf(result.rules))} was seen.`
         : `The lowest rep used reached ${degrees(least, 0)}: the end of the window is carried by the fit.`,
     );
   for (const row of changeRows(result)) {

@@ -6,6 +6,7 @@ import { degrees, inWords, plusMinus, turn } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { SEEN_WORDS } from '#src/ui/words.ts';
+import { gatesOf, sameGates } from '#shared/protocol/protocol.ts';
 import { ReadingCourse } from '../course/reading-course.tsx';
 
 const reachOf = ({ course, figures }: Reading['result']): number[] => [
@@ -26,7 +27,13 @@ export function BothSides({ page, reading }: { page: SidePage; reading: Reading 
             <OneSide reading={there.reading} calls={there.calls} reach={reachOf(reading.result)} />
           </div>
           <p className="mt-4 max-w-lead">
-            {compared ? <b>{differenceWords(compared)}</b> : 'The sides cannot be compared.'}{' '}
+            {compared ? (
+              <b>{differenceWords(compared)}</b>
+            ) : sameGates(gatesOf(reading.result.rules), gatesOf(there.reading.result.rules)) ? (
+              'The sides cannot be compared.'
+            ) : (
+              'The sides were read between different gates and cannot be compared: read the older one again.'
+            )}{' '}
             <Link to={paths.reading(page.visit.id, other)}>Open the {other} side</Link>
           </p>
         </>

@@ -1,10 +1,15 @@
-import type { Seen } from '#shared/contracts/calls.ts';
+import type { Call } from '#shared/contracts/calls.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
+import { roseWords } from '#src/ui/gate-words.ts';
 
-/** A call by eye in one sentence; the eye judges the way of the thigh from 60° to level. */
-export const callSentence = (seen: Seen, side: Side, lifted: Side): string => {
+/** A call by eye in one sentence; the eye judges the way of the thigh from gate to gate. */
+export const callSentence = (
+  { seen, gates }: Pick<Call, 'seen' | 'gates'>,
+  side: Side,
+  lifted: Side,
+): string => {
   const hip = `To the eye the ${side} hip, the one stood on,`;
-  const while_ = `while the ${lifted} thigh rose from 60° to level`;
+  const while_ = `while the ${lifted} thigh ${roseWords(gates)}`;
   switch (seen) {
     case 'early':
       return `${hip} swung outwards ${while_}.`;

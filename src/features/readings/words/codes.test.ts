@@ -3,6 +3,7 @@ import { degrees } from '#shared/geometry/units.ts';
 import type { Missing } from '#shared/measures/missing.ts';
 import type { Reason, RepFault, Settle, Warning } from '#shared/reading/reasons.ts';
 import { milliseconds } from '#shared/timing/units.ts';
+import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { missingWords } from './missing-words.ts';
 import { reasonWords } from './reason-words.ts';
 import { faultsToSay, repFaultWords } from './rep-fault-words.ts';
@@ -137,7 +138,7 @@ const WARNINGS = {
   ],
   'slow-frame-rate': [
     { code: 'slow-frame-rate', framesPerSecond: 24, limit: 30 },
-    '24 frames a second; below 30 the way from 60° to 90° has few frames. Film at 60.',
+    '24 frames a second; below 30 the way from gate to gate has few frames. Film at 60.',
   ],
   mirrored: [
     { code: 'mirrored' },
@@ -158,6 +159,14 @@ const WARNINGS = {
   'assumed-thigh': [
     { code: 'assumed-thigh', sd: degrees(4) },
     'The planted thigh is taken as turning little (± 8°), not measured.',
+  ],
+  'gates-not-studied': [
+    { code: 'gates-not-studied', from: degrees(50), to: degrees(80) },
+    'The turn is read from 50° to 80° of lift. The errors that Redshank assumes, and how well it finds an early turn, were worked out for 60° to 90° only: take the ± and the probability here as a guide.',
+  ],
+  'limit-lowered': [
+    { code: 'limit-lowered', limit: 0.925, studied: 0.95 },
+    'This protocol is content with 92.5 in 100 where the study asked for 95: more readings are wrong.',
   ],
   'tracked-not-looked-at': [
     { code: 'tracked-not-looked-at', frames: 1 },
@@ -245,7 +254,7 @@ describe('every code has its sentence', () => {
     expect(repFaultWords(fault)).toBe(words);
   });
   it.each(Object.values(REASONS))('reason: %o', (reason, words) => {
-    expect(reasonWords(reason)).toBe(words);
+    expect(reasonWords(reason, STANDARD_RULES)).toBe(words);
   });
   it.each(Object.values(WARNINGS))('warning: %o', (warning, words) => {
     expect(warningWords(warning).replaceAll('\u00a0', ' ')).toBe(words);
@@ -284,10 +293,10 @@ describe('what else is said', () => {
   });
 
   it('has a sentence for a side without any rep that could count', () => {
-    expect(reasonWords({ code: 'no-usable-rep', reps: 0 })).toBe(
+    expect(reasonWords({ code: 'no-usable-rep', reps: 0 }, STANDARD_RULES)).toBe(
       'No rep of this side counts: none was filmed from the front, or each was left out.',
     );
-    expect(reasonWords({ code: 'no-usable-rep', reps: 1 })).toBe(
+    expect(reasonWords({ code: 'no-usable-rep', reps: 1 }, STANDARD_RULES)).toBe(
       'The one rep of this side cannot be measured.',
     );
   });

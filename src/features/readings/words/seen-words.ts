@@ -1,12 +1,16 @@
 import type { Call, Seen, SeenSubstitution } from '#shared/contracts/calls.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
+import { levelWords } from '#src/ui/gate-words.ts';
 
 /** What the eye may say of the hip that is stood on. It judges the same event as the reading. */
-export const SEEN_NOTES = {
-  early: 'swings outwards between 60° and level',
-  'on-time': 'turns in while the thigh comes to level',
+export const seenNotes = (gates: Gates | null): Record<Seen, string> => ({
+  early: gates
+    ? `swings outwards between ${gates.from}° and ${levelWords(gates.to)}`
+    : 'swings outwards on the way up',
+  'on-time': `turns in while the thigh comes ${gates ? `to ${levelWords(gates.to)}` : 'up'}`,
   still: 'no turn seen either way',
   unsure: 'could not tell',
-} as const satisfies Record<Seen, string>;
+});
 
 export const CONFIDENCE_WORDS = {
   guess: 'A guess',

@@ -1,7 +1,9 @@
 import type { Warning } from '#shared/reading/reasons.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import { FILMING_LIMITS as LIMITS } from '#shared/measures/filming-limits.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { capital, decimal, degrees, inWords, metres } from '#src/ui/figures.ts';
+import { gateRange, outOfHundred } from '#src/ui/gate-words.ts';
 import { landmarkNames } from './landmark-words.ts';
 
 const distances = `${decimal(LIMITS.bestFromMm.value / 1000)} to ${decimal(LIMITS.bestToMm.value / 1000)} m`;
@@ -18,7 +20,7 @@ export const warningWords = (warning: Warning): string => {
     case 'too-coarse':
       return `One pixel is ${decimal(warning.mmPerPx)} mm on the body; above ${decimal(warning.limit)} mm the marks are too coarse. Film nearer or in a higher resolution.`;
     case 'slow-frame-rate':
-      return `${decimal(warning.framesPerSecond, 0)} frames a second; below ${decimal(warning.limit, 0)} the way from 60° to 90° has few frames. Film at ${LIMITS.goodFramesPerSecond.value}.`;
+      return `${decimal(warning.framesPerSecond, 0)} frames a second; below ${decimal(warning.limit, 0)} the way from gate to gate has few frames. Film at ${LIMITS.goodFramesPerSecond.value}.`;
     case 'mirrored':
       return 'The clip is mirrored, as selfie cameras make it. It was turned back; check that the support side is right.';
     case 'lens-height-missing':
@@ -29,6 +31,10 @@ export const warningWords = (warning: Warning): string => {
       return `${capital(inWords(warning.have))} quiet frames are marked; ${inWords(warning.recommended)} make zero firmer.`;
     case 'assumed-thigh':
       return `The planted thigh is taken as turning little (± ${degrees(1.96 * warning.sd, 0)}), not measured.`;
+    case 'gates-not-studied':
+      return `The turn is read from ${gateRange(warning)} of lift. The errors that Redshank assumes, and how well it finds an early turn, were worked out for ${gateRange(STANDARD_GATES)} only: take the ± and the probability here as a guide.`;
+    case 'limit-lowered':
+      return `This protocol is content with ${outOfHundred(warning.limit)} in 100 where the study asked for ${outOfHundred(warning.studied)}: more readings are wrong.`;
     case 'tracked-not-looked-at':
       return `${warning.frames} ${warning.frames === 1 ? 'frame rests' : 'frames rest'} on tracked marks that nobody has looked at: the reading is provisional.`;
   }

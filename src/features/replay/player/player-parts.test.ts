@@ -125,7 +125,7 @@ describe('the drawing', () => {
 describe('the moments', () => {
   it('are those that the rep has and the span shows', () => {
     expect(momentsOf(replay).map(({ name }) => name)).toEqual(['Quiet', '60°', '90°', 'Top']);
-    const cut = { ...replay, fromFrame: 20, moments: { ...replay.moments, sixty: null } };
+    const cut = { ...replay, fromFrame: 20, moments: { ...replay.moments, from: null } };
     expect(momentsOf(cut).map(({ name }) => name)).toEqual(['90°', 'Top']);
   });
 });

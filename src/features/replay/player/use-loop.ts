@@ -6,12 +6,12 @@ import { LoopPlayer } from './loop-player.ts';
 const quiet = (): boolean =>
   typeof matchMedia === 'function' && matchMedia('(prefers-reduced-motion: reduce)').matches;
 
-/** Plays the span at a quarter of its speed from the start; with reduced motion it stands at 90° until asked. */
+/** Plays the span at a quarter of its speed from the start; with reduced motion it stands at the upper gate until asked. */
 export function useLoop(replay: PublicReplay, times: readonly Milliseconds[]) {
   const video = useRef<HTMLVideoElement>(null);
   const player = useRef<LoopPlayer | null>(null);
   const { fromFrame, toFrame, moments } = replay;
-  const start = moments.ninety ?? moments.top ?? fromFrame;
+  const start = moments.to ?? moments.top ?? fromFrame;
   const [frame, setFrame] = useState<number>(quiet() ? start : fromFrame);
   const [playing, setPlaying] = useState(false);
   const [rate, setRate] = useState(0.25);

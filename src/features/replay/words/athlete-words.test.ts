@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { READING_LABELS, type ReadingCode } from '#shared/contracts/readings.ts';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { callWords, howSureWords, readingWords } from './athlete-words.ts';
 import { contactParts } from './contact.ts';
 import { liftReadout, turnReadout } from './readout.ts';
@@ -30,7 +31,7 @@ const TITLES = {
 
 describe('a reading in the athlete’s words', () => {
   it.each(Object.entries(TITLES))('%s: %s', (code, title) => {
-    const words = readingWords(reading(code as ReadingCode), 'left');
+    const words = readingWords(reading(code as ReadingCode), 'left', STANDARD_GATES);
     expect(words.title).toBe(title);
     expect(words.text[0]).toBe('You stood on the left leg and lifted the right knee.');
     // no figure and no term of the trade
@@ -38,37 +39,38 @@ describe('a reading in the athlete’s words', () => {
   });
 
   it('counts the reps that went the same way', () => {
-    expect(readingWords(reading('early-turn-out'), 'left').text[1]).toBe(
+    expect(readingWords(reading('early-turn-out'), 'left', STANDARD_GATES).text[1]).toBe(
       'Two times of three, the hip you stand on turned outwards before the lifted thigh was level.',
     );
-    expect(readingWords(reading('early-turn-out', { repsUsed: 1 }), 'left').text[1]).toBe(
-      'The hip you stand on turned outwards before the lifted thigh was level.',
-    );
+    expect(
+      readingWords(reading('early-turn-out', { repsUsed: 1 }), 'left', STANDARD_GATES).text[1],
+    ).toBe('The hip you stand on turned outwards before the lifted thigh was level.');
   });
 
   it('says where it began before 60°', () => {
     const words = readingWords(
       reading('early-turn-out', { label: 'Turns out early, before 60°' }),
       'left',
+      STANDARD_GATES,
     );
     expect(words.text[1]).toMatch(/two thirds of the way up/);
   });
 
   it('never calls holding still a pass, and never sounds surer than it is', () => {
-    expect(readingWords(reading('holds-still'), 'left').text[1]).toMatch(
+    expect(readingWords(reading('holds-still'), 'left', STANDARD_GATES).text[1]).toMatch(
       /A turn inwards is expected there and was not seen/,
     );
     expect(howSureWords(0.998)).toMatch(/almost certain/);
     expect(howSureWords(0.96)).toMatch(/very sure/);
     expect(howSureWords(0.85)).toBe('This is likely, not certain.');
     expect(howSureWords(null)).toBe('');
-    expect(readingWords(reading('cannot-tell'), 'left').sure).toBe('');
+    expect(readingWords(reading('cannot-tell'), 'left', STANDARD_GATES).sure).toBe('');
   });
 });
 
 describe('a call in the athlete’s words', () => {
   it.each(['early', 'on-time', 'still', 'unsure'] as const)('%s names who saw it', (seen) => {
-    expect(callWords(seen, 'right', 'Maren Okafor').text.join(' ')).toContain(
+    expect(callWords(seen, 'right', 'Maren Okafor', STANDARD_GATES).text.join(' ')).toContain(
       'Maren Okafor looked',
     );
   });

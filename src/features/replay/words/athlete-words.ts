@@ -1,8 +1,11 @@
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { Seen } from '#shared/contracts/calls.ts';
+import { READING_LABELS } from '#shared/contracts/readings.ts';
 import { otherSide } from '#shared/landmarks/types.ts';
 import { capital, inWords } from '#src/ui/figures.ts';
+import { levelWords } from '#src/ui/gate-words.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 
 /** What the athlete reads: a heading and a few sentences without a term of the trade. */
 export interface AthleteWords {
@@ -33,10 +36,18 @@ export const howSureWords = (p: number | null): string => {
   return 'This is likely, not certain.';
 };
 
-const before60 = ({ label }: Reading): boolean => label.endsWith('before 60°');
+/** Turned out already before the lower gate: the label says so beside the plain words. */
+const beforeGate = ({ label, code }: Reading): boolean => label !== READING_LABELS[code];
+
+const cameTo = (lift: number): string => `came to ${levelWords(lift)}`;
+
+const wasAt = (lift: number): string => (lift === 90 ? 'was level' : cameTo(lift));
+
+const partOfTheWay = ({ from, to }: Gates): string =>
+  from === 60 && to === 90 ? 'was two thirds of the way up' : cameTo(from);
 
 /** A measured reading in the athlete's words. */
-export const readingWords = (reading: Reading, side: Side): AthleteWords => {
+export const readingWords = (reading: Reading, side: Side, gates: Gates): AthleteWords => {
   const sure = howSureWords(reading.probability);
   switch (reading.code) {
     case 'early-turn-out':
@@ -46,9 +57,9 @@ export const readingWords = (reading: Reading, side: Side): AthleteWords => {
           stood(side),
           after(
             times(reading),
-            before60(reading)
-              ? 'the hip you stand on had turned outwards before the lifted thigh was two thirds of the way up.'
-              : 'the hip you stand on turned outwards before the lifted thigh was level.',
+            beforeGate(reading)
+              ? `the hip you stand on had turned outwards before the lifted thigh ${partOfTheWay(gates)}.`
+              : `the hip you stand on turned outwards before the lifted thigh ${wasAt(gates.to)}.`,
           ),
         ],
         sure,
@@ -60,7 +71,7 @@ export const readingWords = (reading: Reading, side: Side): AthleteWords => {
           stood(side),
           after(
             times(reading),
-            'the hip you stand on turned inwards while the lifted thigh came to level. That is what is expected.',
+            `the hip you stand on turned inwards while the lifted thigh ${cameTo(gates.to)}. That is what is expected.`,
           ),
         ],
         sure,
@@ -70,7 +81,7 @@ export const readingWords = (reading: Reading, side: Side): AthleteWords => {
         title: `Your ${side} hip holds still`,
         text: [
           stood(side),
-          'The hip you stand on hardly turned while the lifted thigh came to level. A turn inwards is expected there and was not seen; your coach will look at it again.',
+          `The hip you stand on hardly turned while the lifted thigh ${cameTo(gates.to)}. A turn inwards is expected there and was not seen; your coach will look at it again.`,
         ],
         sure,
       };
@@ -85,10 +96,10 @@ export const readingWords = (reading: Reading, side: Side): AthleteWords => {
       };
     case 'lift-stops-short':
       return {
-        title: 'The lift stopped before level',
+        title: `The lift stopped before ${levelWords(gates.to)}`,
         text: [
           stood(side),
-          'The thigh did not come near level, so what the hip you stand on does there was not seen. Lift only as far as it goes without pain.',
+          `The thigh did not come near ${levelWords(gates.to)}, so what the hip you stand on does there was not seen. Lift only as far as it goes without pain.`,
         ],
         sure: '',
       };
@@ -105,7 +116,7 @@ export const readingWords = (reading: Reading, side: Side): AthleteWords => {
 };
 
 /** A call by eye in the athlete's words; it is never said without who saw it. */
-export const callWords = (seen: Seen, side: Side, coach: string): AthleteWords => {
+export const callWords = (seen: Seen, side: Side, coach: string, gates: Gates): AthleteWords => {
   const eye = `${coach} looked, and saw`;
   switch (seen) {
     case 'early':
@@ -113,7 +124,7 @@ export const callWords = (seen: Seen, side: Side, coach: string): AthleteWords =
         title: `Your ${side} hip turned out early`,
         text: [
           stood(side),
-          `${eye} the hip you stand on swing outwards before the thigh was level.`,
+          `${eye} the hip you stand on swing outwards before the thigh ${wasAt(gates.to)}.`,
         ],
         sure: '',
       };
@@ -122,7 +133,7 @@ export const callWords = (seen: Seen, side: Side, coach: string): AthleteWords =
         title: `Your ${side} hip turned in on time`,
         text: [
           stood(side),
-          `${eye} the hip you stand on turn inwards while the thigh came to level.`,
+          `${eye} the hip you stand on turn inwards while the thigh ${cameTo(gates.to)}.`,
         ],
         sure: '',
       };

@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import type { Visit } from '#shared/contracts/visits.ts';
 import { type May, useMayInPractice } from '#src/api/use-may.ts';
+import { useProtocol } from '#src/api/use-protocol.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Fold } from '#src/ui/fold.tsx';
 import { Section } from '#src/ui/page.tsx';
@@ -22,6 +23,7 @@ export function FilmStep({
   unfold: boolean;
 }) {
   const mayInPractice = useMayInPractice();
+  const protocol = useProtocol();
   const { filming } = visit;
   const known = FILMING.some(({ key }) => filming[key] !== null);
   const [editing, setEditing] = useState(false);
@@ -70,7 +72,7 @@ export function FilmStep({
       )}
       <div className="mt-6">
         <Fold title="How to film it" open={unfold}>
-          <FilmingGuide filming={filming} />
+          {protocol && <FilmingGuide filming={filming} protocol={protocol} />}
         </Fold>
       </div>
     </Section>

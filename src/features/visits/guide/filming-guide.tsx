@@ -1,12 +1,20 @@
 import type { ReactNode } from 'react';
 import type { Visit } from '#shared/contracts/visits.ts';
+import type { Protocol } from '#shared/protocol/protocol.ts';
+import { capital, inWords } from '#src/ui/figures.ts';
 import { lengthWords } from '../filming/filming-words.ts';
 import { BeltDrawing, DotsDrawing, ThighDrawing } from './body-drawings.tsx';
 import { AboveDrawing, FrameDrawing, LevelDrawing, LightDrawing } from './place-drawings.tsx';
 import { BothSidesDrawing, LiftDrawing } from './time-drawings.tsx';
 
 /** How to film it, in the order it is done. Where the set-up knows a length, the drawing shows it. */
-export function FilmingGuide({ filming }: { filming: Visit['filming'] }) {
+export function FilmingGuide({
+  filming,
+  protocol: { gateFrom, gateTo, reps, framesPerSecond },
+}: {
+  filming: Visit['filming'];
+  protocol: Protocol;
+}) {
   const mm = (value: number | null) => (value === null ? null : lengthWords(value, 'mm'));
   const { lensHeightMm, beltPointerMm, thighPointerMm } = filming;
   return (
@@ -26,7 +34,10 @@ export function FilmingGuide({ filming }: { filming: Visit['filming'] }) {
         Chair or wall within reach on the side of the standing leg. A rod of known length beside the
         athlete, at their own distance; without a rod, body height gives the scale.
       </Step>
-      <Step drawing={<FrameDrawing />} title="Whole body, upright, 60 frames per second">
+      <Step
+        drawing={<FrameDrawing framesPerSecond={framesPerSecond} />}
+        title={`Whole body, upright, ${framesPerSecond} frames per second`}
+      >
         Head, feet and floor in the picture, from the first second to the last. Put the phone on a
         stand; nobody holds it.
       </Step>
@@ -45,9 +56,12 @@ export function FilmingGuide({ filming }: { filming: Visit['filming'] }) {
         On a strap all around the standing thigh, just above the kneecap. With both pointers three
         reps show a turn of 3.9°; with the belt alone 8.8°.
       </Step>
-      <Step drawing={<LiftDrawing />} title="Three still seconds, then slowly">
-        Both feet down and still; then up with a short stop at 60° and at 90°, past it, and down.
-        Three reps.
+      <Step
+        drawing={<LiftDrawing gates={{ from: gateFrom, to: gateTo }} />}
+        title="Three still seconds, then slowly"
+      >
+        Both feet down and still; then up with a short stop at {gateFrom}° and at {gateTo}°, past
+        it, and down. {capital(inWords(reps))} {reps === 1 ? 'rep' : 'reps'}.
       </Step>
       <Step drawing={<BothSidesDrawing />} title="Both sides in one take, if you like">
         Then both thighs wear a strap, and the belt stays as it is. Say aloud which leg is stood on.

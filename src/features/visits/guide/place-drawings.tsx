@@ -70,7 +70,7 @@ export function AboveDrawing() {
 }
 
 /** What the picture shows: the whole body, the floor, the rod; the phone upright. */
-export function FrameDrawing() {
+export function FrameDrawing({ framesPerSecond }: { framesPerSecond: number }) {
   return (
     <Drawing label="The phone held upright. Its picture shows the whole person from head to foot, the floor below, and the rod beside them.">
       <rect x="104" y="6" width="112" height="188" rx="12" className="fill-sheet" />
@@ -86,7 +86,7 @@ export function FrameDrawing() {
       <Words at={[82, 114]} anchor="end">
         and floor
       </Words>
-      <Words at={[228, 96]}>60 frames a</Words>
+      <Words at={[228, 96]}>{framesPerSecond} frames a</Words>
       <Words at={[228, 114]}>second or more</Words>
     </Drawing>
   );

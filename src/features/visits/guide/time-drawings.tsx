@@ -1,16 +1,19 @@
+import type { Gates } from '#shared/protocol/protocol.ts';
 import { Drawing, Floor, Sight, Words } from './drawing.tsx';
 
-/** Three still seconds, then a slow lift with stops at 60° and 90°. */
-export function LiftDrawing() {
+/** Three still seconds, then a slow lift with stops at both gates. */
+export function LiftDrawing({ gates: { from, to } }: { gates: Gates }) {
   return (
-    <Drawing label="Lift over time: three still seconds on both feet, a slow rise with short stops at 60 and at 90 degrees, then down.">
+    <Drawing
+      label={`Lift over time: three still seconds on both feet, a slow rise with short stops at ${from} and at ${to} degrees, then down.`}
+    >
       <Sight d="M14 88H306" />
       <Sight d="M14 52H306" />
       <Words at={[306, 82]} anchor="end" bold>
-        60°
+        {from}°
       </Words>
       <Words at={[306, 46]} anchor="end" bold>
-        90°
+        {to}°
       </Words>
       <Floor y={160} />
       <path

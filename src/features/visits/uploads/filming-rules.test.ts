@@ -80,6 +80,8 @@ const CASES = {
     says: '3.4 s: three still seconds and a slow lift of two take 5. Film again, and start before the athlete stands still.',
   },
   'assumed-thigh': null,
+  'gates-not-studied': null,
+  'limit-lowered': null,
   'tracked-not-looked-at': null,
 } satisfies Record<Warning['code'], Case>;
 

@@ -74,6 +74,8 @@ export const BEFORE_SENDING = {
   smear: null,
   'few-quiet-frames': (chosen) => tooShort(chosen),
   'assumed-thigh': null,
+  'gates-not-studied': null,
+  'limit-lowered': null,
   'tracked-not-looked-at': null,
 } satisfies Record<Warning['code'], Rule | null>;
 

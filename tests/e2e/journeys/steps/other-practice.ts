@@ -32,6 +32,8 @@ const WITHOUT_ID: Record<RouteNameWithoutId, Kind> = {
   addSetUp: 'bare',
   listClips: 'lists',
   reliability: 'lists',
+  protocol: 'lists',
+  changeProtocol: 'bare',
   listReplays: 'asks',
   makeReplay: 'asks',
   openReplay: 'link',

@@ -1,6 +1,6 @@
 import type { Locator, Page } from '@playwright/test';
 import { paths } from '#src/ui/paths.ts';
-import { COACH, SUPERVISOR } from './people.ts';
+import { COACH, OWNER, SUPERVISOR } from './people.ts';
 import type { Shown } from './shown.ts';
 
 /** A page in one of its states, and what it says once it stands. */
@@ -56,6 +56,18 @@ const FRONT: readonly PageOfProduct[] = [
     who: SUPERVISOR,
     address: () => paths.reliability(),
     stands: text('Calls by eye'),
+  },
+  {
+    name: 'the protocol, to read',
+    who: COACH,
+    address: () => paths.protocol(),
+    stands: text('holds now'),
+  },
+  {
+    name: 'the protocol, to change',
+    who: OWNER,
+    address: () => paths.protocol(),
+    stands: (page) => page.getByLabel('Lower gate', { exact: true }),
   },
   {
     name: 'the set-ups',

@@ -4,6 +4,7 @@ import type { App } from '../../support/app.ts';
 import { ask } from './ask.ts';
 
 export const COACH = 'coach@greywater-row.example';
+export const OWNER = 'owner@greywater-row.example';
 export const SUPERVISOR = 'supervisor@greywater-row.example';
 export const OTHER_COACH = 'coach@pennywort-mill.example';
 
