@@ -6,6 +6,7 @@ import { setTimeout as pause } from 'node:timers/promises';
 import { promisify } from 'node:util';
 import { type APIRequestContext, request as requests } from '@playwright/test';
 import { routes } from '#shared/contracts/routes.ts';
+import type { View } from '#shared/contracts/primitives.ts';
 import type { MarkCommand, Rep } from '#shared/contracts/reps.ts';
 import { SAFETY_QUESTIONS } from '#shared/contracts/visits.ts';
 import type { App } from '../support/app.ts';
@@ -66,18 +67,28 @@ export const makeClip = async (coach: APIRequestContext, name: string): Promise<
       knowsWhenToStop: true,
     },
   });
-  const sent = await coach.post(`/api/visits/${visit.id}/clips`, {
+  return { visitId: visit.id, clipId: await sendClip(coach, visit.id, 'clip.mp4', 'front') };
+};
+
+/** A further clip of a visit, standing on the right leg; answers its id once it is ready. */
+export const sendClip = async (
+  coach: APIRequestContext,
+  visitId: string,
+  name: string,
+  view: View,
+): Promise<string> => {
+  const sent = await coach.post(`/api/visits/${visitId}/clips`, {
     multipart: {
-      view: 'front',
+      view,
       supportSide: 'right',
-      clip: { name: 'clip.mp4', mimeType: 'video/mp4', buffer: await picture() },
+      clip: { name, mimeType: 'video/mp4', buffer: await picture() },
     },
   });
   if (!sent.ok()) throw new Error(`the clip was not taken: ${await sent.text()}`);
-  const clipId = routes.uploadClip.answer.schema.parse(await sent.json()).id;
+  const { id } = routes.uploadClip.answer.schema.parse(await sent.json());
   for (;;) {
-    const clip = await ask(coach, routes.clip, { params: { id: clipId } });
-    if (clip.state === 'ready') return { clipId, visitId: visit.id };
+    const clip = await ask(coach, routes.clip, { params: { id } });
+    if (clip.state === 'ready') return id;
     if (clip.state === 'refused') throw new Error(clip.refusal?.sentence);
     await pause(500);
   }
