@@ -93,7 +93,7 @@ const lensLack: Rule = ({ details, filming }) =>
     ? `the lens height (lift is known to ±\u00a0${CONSTANTS.liftModelErrorNoLens.value}° instead of ±\u00a0${CONSTANTS.liftModelError.value}°)`
     : null;
 
-const percent = (share: number): string => `${decimal(100 * share, 0)} %`;
+const percent = (share: number): string => `${decimal(100 * share, 0)}\u00a0%`;
 
 /** What the set-up does not say, each with its price. */
 const lacksOf = (chosen: Chosen): string[] => {
