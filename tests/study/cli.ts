@@ -1,4 +1,5 @@
 import { TRIAL_SETS } from '#shared/evaluate/trial.ts';
+import { helpOf, helpWords } from './followed.ts';
 import { studyOptions, USAGE } from './options.ts';
 import { outcomesOf } from './outcome.ts';
 import { tablesOf } from './tables.ts';
@@ -16,6 +17,7 @@ if (options) {
   );
   const outcomes = [...outcomesOf(options)];
   for (const set of TRIAL_SETS) console.log(`${wordsOf(tablesOf(outcomes, set))}\n`);
+  console.log(helpWords(helpOf(options)));
 } else {
   console.error(`Usage: ${USAGE}`);
   process.exitCode = 2;

@@ -12,6 +12,8 @@ export interface Marking {
   readonly scale: number;
   /** Carried from frame to frame by a tracker, whose errors hang together. */
   readonly tracked: boolean;
+  /** Chance that a landmark slips off its place during a rep and stays there; none where left out. */
+  readonly slips?: number;
 }
 
 /** Parts of a mark's error: the same throughout the clip, and its own on every frame. */
@@ -21,6 +23,9 @@ const FLEETING = 0.8;
 const OUTLINE = 1.4;
 /** Time over which a tracked mark's error stays much the same, ms. From our model, no source. */
 const CARRIED_MS = 600;
+/** How far a mark slips, in its typical errors, and how long the rep goes on before it may. From our model, no source. */
+const SLIP = 4;
+const SLIP_WITHIN_MS = 5000;
 
 const sizeOf = (id: LandmarkId, { errorPx, pointerPx, scale }: Marking): number => {
   switch (landmark(id).errorClass) {
@@ -48,15 +53,32 @@ export const markerOf = (chance: Chance, marking: Marking) => {
     const fresh = drawn(FLEETING * size * Math.sqrt(1 - kept * kept));
     return [kept * before.error[0] + fresh[0], kept * before.error[1] + fresh[1]];
   };
+  const slipped = new Map<LandmarkId, { readonly from: number; readonly by: Error2 }>();
+  /** A slip of this rep, drawn when the rep begins: null where the mark holds. */
+  const slipOf = (id: LandmarkId, size: number, time: number): Error2 | null => {
+    if (!marking.slips) return null;
+    const begins = time < (carried.get(id)?.time ?? Infinity);
+    if (begins) {
+      slipped.delete(id);
+      if (chance.between(0, 1) < marking.slips)
+        slipped.set(id, { from: chance.between(0, SLIP_WITHIN_MS), by: drawn(SLIP * size) });
+    }
+    const slip = slipped.get(id);
+    return slip && time >= slip.from ? slip.by : null;
+  };
   return (id: LandmarkId, time: number, [u, v]: Error2): Mark => {
     const size = sizeOf(id, marking);
     const still = lasting.get(id) ?? drawn(LASTING * size);
     lasting.set(id, still);
+    const slip = slipOf(id, size, time);
     const now = fleeting(id, size, time);
     carried.set(id, { error: now, time });
     return {
       hidden: false,
-      point: { u: u + still[0] + now[0], v: v + still[1] + now[1] },
+      point: {
+        u: u + still[0] + now[0] + (slip?.[0] ?? 0),
+        v: v + still[1] + now[1] + (slip?.[1] ?? 0),
+      },
       scale: marking.scale,
       source: marking.tracked ? 'tracked' : 'hand',
       looked: true,
