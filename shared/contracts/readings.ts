@@ -74,6 +74,8 @@ export const reading = z
     markError: markErrorShape,
     /** The version of the practice’s protocol that it was made with. */
     protocol: protocolRef,
+    /** Marks of its reps, how many of them were followed by the computer, and how many of those a person looked at. */
+    marking: z.object({ marks: z.int(), followed: z.int(), looked: z.int() }),
     result: readingResult,
     /** What the rep ids of `result` are called on the page. */
     reps: z.array(

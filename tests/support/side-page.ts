@@ -76,6 +76,7 @@ export const aReading = (result: ReadingResult, change: Partial<Reading> = {}): 
   smallestFound: result.figures?.mdt90 ?? null,
   provisional: result.provisional,
   assumption: result.thighTurnsLittle,
+  marking: { marks: 270, followed: 0, looked: 0 },
   markError: { px: 3, frames: 0 },
   protocol: { version: 1, at },
   result,

@@ -43,6 +43,16 @@ const loaded = <T>(value: T | undefined): T => {
   return value;
 };
 
+const markingOf = (reps: readonly NumberedRep[]): ReadingShape['marking'] => {
+  const marks = reps.flatMap((rep) => rep.marks.filter(({ hidden }) => !hidden));
+  const followed = marks.filter(({ source }) => source === 'tracked');
+  return {
+    marks: marks.length,
+    followed: followed.length,
+    looked: followed.filter(({ looked }) => looked).length,
+  };
+};
+
 /** @param reading with `result`, `by` and `protocol` loaded */
 export const presentReading = (reading: Reading, reps: readonly NumberedRep[]): ReadingShape => ({
   ...presentSummary(reading),
@@ -55,6 +65,7 @@ export const presentReading = (reading: Reading, reps: readonly NumberedRep[]): 
   smallestFound: reading.smallestFound ?? null,
   provisional: reading.provisional,
   assumption: reading.assumption,
+  marking: markingOf(reps),
   result: resultOf(loaded(reading.result.unwrap())),
   reps: reps.map(({ rep, clip, number, tieFault }) => ({
     id: rep.id,

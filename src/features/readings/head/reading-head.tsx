@@ -1,5 +1,6 @@
 import type { Reading, SidePage } from '#shared/contracts/readings.ts';
 import { capital, inWords } from '#src/ui/figures.ts';
+import { followedWords } from '#src/ui/followed-words.ts';
 import { SideMark } from '#src/ui/side-mark.tsx';
 import { Caution } from '#src/ui/states.tsx';
 import { agreementWords } from '../words/agreement-words.ts';
@@ -27,7 +28,7 @@ export function ReadingHead({ page, reading }: { page: SidePage; reading: Readin
             : `${capital(inWords(used))} usable ${used === 1 ? 'rep' : 'reps'}`}{' '}
           of this side, one visit.
           {result.set !== null && ` ${capital(SET_WORDS[result.set])}.`} Marked by {reading.by.name}
-          .
+          . {followedWords(reading.marking)}
         </p>
       </div>
       <div className="section-matter">
