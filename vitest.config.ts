@@ -23,6 +23,8 @@ export default defineConfig({
             'src/api/**/*.test.ts',
             'src/canvas/**/*.test.ts',
             'src/tracking/**/*.test.ts',
+            // reads the demo clips, as the browser does not
+            'src/features/bench/follow/**/*.test.ts',
           ],
           exclude: ['**/node_modules/**'],
           environment: 'node',
@@ -51,6 +53,7 @@ export default defineConfig({
             'src/app/**/*.test.ts',
             'src/ui/**/*.test.ts',
           ],
+          exclude: ['src/features/bench/follow/**'],
           environment: 'jsdom',
           setupFiles: ['tests/support/web-setup.ts'],
           testTimeout: 60_000,

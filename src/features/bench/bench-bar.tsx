@@ -1,15 +1,18 @@
 import { capital } from '#src/ui/figures.ts';
 import { clipWords, supportWords, VIEW_WORDS } from '#src/ui/words.ts';
 import { BarFrame } from './bar-frame.tsx';
+import { anyFollowed, hollowFrames } from './look/followed.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from './bench-context.ts';
 import { OthersLine } from './others/others-line.tsx';
 import type { Desk } from './store/bench-store.ts';
+import { isDraft } from './model/draft.ts';
 import { MARK } from './store/tools.ts';
 import { useNarrow } from './use-media.ts';
 
 const DESKS: readonly { desk: Desk; label: string }[] = [
   { desk: 'course', label: 'Course' },
   { desk: 'reps', label: 'Reps' },
+  { desk: 'look', label: 'Look' },
   { desk: 'set-up', label: 'Set-up' },
   { desk: 'comments', label: 'Comments' },
 ];
@@ -19,10 +22,11 @@ export function BenchBar() {
   const { athlete, visit, clip } = useBenchDocument();
   const { current, reps } = useBenchModel();
   const narrow = useNarrow();
-  const what = current
-    ? `${capital(supportWords(current.rep.supportSide))}, ${VIEW_WORDS[current.rep.view]}, rep ${current.rep.number} of ${reps.length}`
+  const rep = current && !isDraft(current) ? current.rep : null;
+  const what = rep
+    ? `${capital(supportWords(rep.supportSide))}, ${VIEW_WORDS[rep.view]}, rep ${rep.number} of ${reps.length}`
     : `${clipWords(clip)}, no rep yet`;
-  const short = current ? `${current.rep.supportSide}, rep ${current.rep.number}` : 'no rep yet';
+  const short = rep ? `${rep.supportSide}, rep ${rep.number}` : 'no rep yet';
   return (
     <BarFrame
       title={`${athlete.name}, ${what}`}
@@ -42,10 +46,17 @@ export function DeskTabs() {
   const { reps, current } = useBenchModel();
   const desk = useBench((state) => state.desk);
   const open = comments.filter((each) => each.answerTo === null && !each.resolved).length;
-  const counts: Partial<Record<Desk, number>> = { reps: reps.length, comments: open };
+  const hollow = hollowFrames(reps);
+  const counts: Partial<Record<Desk, number>> = {
+    reps: reps.length,
+    look: hollow,
+    comments: open,
+  };
   return (
     <nav aria-label="Beside the clip" className="flex flex-wrap gap-x-5 border-b border-rule">
-      {DESKS.map(({ desk: each, label }) => (
+      {DESKS.filter(
+        ({ desk: each }) => each !== 'look' || anyFollowed(reps) || desk === 'look',
+      ).map(({ desk: each, label }) => (
         <button
           key={each}
           type="button"
@@ -61,7 +72,9 @@ export function DeskTabs() {
             desk === each ? 'border-ink font-bold' : 'border-transparent text-soft hover:text-ink'
           }`}
         >
-          {each === 'course' && current ? `Course, rep ${current.rep.number}` : label}
+          {each === 'course' && current && !isDraft(current)
+            ? `Course, rep ${current.rep.number}`
+            : label}
           {counts[each] ? ` (${counts[each]})` : ''}
         </button>
       ))}

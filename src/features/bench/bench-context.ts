@@ -5,6 +5,7 @@ import type { Milliseconds } from '#shared/timing/units.ts';
 import type { Hand } from '#src/canvas/hand.ts';
 import type { PictureBoard } from '#src/canvas/picture-board.ts';
 import type { Size } from '#src/canvas/viewport.ts';
+import type { Following } from './follow/following.ts';
 import type { BenchModel } from './model/bench-model.ts';
 import type { MarkQueue } from './queue/mark-queue.ts';
 import type { BenchState, BenchStore } from './store/bench-store.ts';
@@ -20,6 +21,8 @@ export interface BenchTools {
   /** Upright source frame, and the prepared copy, px. */
   readonly frameSize: Size;
   readonly copySize: Size;
+  /** Marks that follow; null where nothing is followed, as in a second marking. */
+  readonly follow: Following | null;
 }
 
 export const BenchToolsContext = createContext<BenchTools | null>(null);

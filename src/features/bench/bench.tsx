@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react';
+import { type ReactNode, useEffect, useMemo, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import { timesOf } from '#shared/records/engine-input.ts';
@@ -20,10 +20,15 @@ import {
 } from './bench-context.ts';
 import { ClipView } from './clip/clip-view.tsx';
 import { frameOf, useFrameAddress } from './clip/use-frame-address.ts';
-import { usePictures } from './clip/use-pictures.ts';
+import { type Pictures, usePictures } from './clip/use-pictures.ts';
 import { usePlaying } from './clip/use-playing.ts';
 import { CommentsPanel } from './comments/comments-panel.tsx';
 import { CourseDesk } from './course/course-desk.tsx';
+import { createFollowing } from './follow/following.ts';
+import { openTrackerOf } from './follow/open-tracker.ts';
+import { FollowContext, useFollowing } from './follow/use-follow.ts';
+import { LookDesk } from './look/look-desk.tsx';
+import { isDraft } from './model/draft.ts';
 import { KeysDialog } from './keys/keys-dialog.tsx';
 import { useKeys } from './keys/use-keys.ts';
 import { KeyHints } from './keys/key-hints.tsx';
@@ -64,6 +69,7 @@ export function Bench({ document, frames, frameSize, copySize }: ReadyClip) {
         repId: rep?.rep.id ?? null,
         desk: comment ? 'comments' : search.has('again') ? 'reps' : 'course',
         mayMark: document.may.mark,
+        standsOn: document.clip.supportSide ?? 'both',
       }),
       hand: createHand(),
       board: createPictureBoard(),
@@ -71,17 +77,26 @@ export function Bench({ document, frames, frameSize, copySize }: ReadyClip) {
       times: timesOf(frames),
       frameSize,
       copySize,
+      follow: document.may.mark
+        ? createFollowing(
+            openTrackerOf(document.clip, frameSize, copySize, timesOf(frames)),
+            frames.count,
+          )
+        : null,
     };
   });
   const model = useModel(document, tools);
   const reading = useReadingWorker(document, model, tools.times);
   useLiveBench(document, tools.queue);
+  useEffect(() => () => tools.follow?.close(), [tools]);
   return (
     <BenchToolsContext value={tools}>
       <BenchDocumentContext value={document}>
         <BenchModelContext value={model}>
           <ReadingContext value={reading}>
-            <BenchLayout tools={tools} />
+            <FollowBench>
+              <BenchLayout tools={tools} />
+            </FollowBench>
           </ReadingContext>
         </BenchModelContext>
       </BenchDocumentContext>
@@ -94,7 +109,7 @@ function BenchLayout({ tools }: { tools: BenchTools }) {
   const { current } = useBenchModel();
   const pictures = usePictures(document.clip, tools);
   usePlaying(pictures);
-  useFrameAddress(current?.rep.number ?? null);
+  useFrameAddress(current && !isDraft(current) ? current.rep.number : null);
   useKeys();
   const { width, height } = tools.frameSize;
   const style = useMemo(
@@ -113,7 +128,7 @@ function BenchLayout({ tools }: { tools: BenchTools }) {
       </section>
       <section className="bench-desk" aria-label="Course and more">
         <DeskTabs />
-        <DeskView />
+        <DeskView pictures={pictures} />
       </section>
       <section className="bench-under" aria-label="Lift strip">
         <Transport />
@@ -125,9 +140,15 @@ function BenchLayout({ tools }: { tools: BenchTools }) {
   );
 }
 
-function DeskView() {
+/** What follows by itself, for all parts of the Bench. */
+function FollowBench({ children }: { children: ReactNode }) {
+  return <FollowContext value={useFollowing()}>{children}</FollowContext>;
+}
+
+function DeskView({ pictures }: { pictures: Pictures }) {
   const desk = useBench((state) => state.desk);
   if (desk === 'reps') return <RepsPanel />;
+  if (desk === 'look') return <LookDesk source={pictures.source} />;
   if (desk === 'set-up') return <SetUpPanel />;
   if (desk === 'comments') return <CommentsPanel />;
   return <CourseDesk />;

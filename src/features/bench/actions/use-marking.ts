@@ -16,6 +16,9 @@ import { NO_MARKS } from '#shared/landmarks/commands.ts';
 import { newId } from '../queue/new-id.ts';
 import type { NewMark } from '../queue/queue-core.ts';
 import type { BenchDocument } from '#shared/contracts/bench.ts';
+import type { Rep } from '#shared/contracts/reps.ts';
+import { isDraft, touchesAfter } from '../model/draft.ts';
+import type { RepMarks } from '../store/bench-store.ts';
 
 export interface Marking {
   /** Puts the landmark at a point of the frame on show; leading goes on. */
@@ -60,6 +63,33 @@ export const commit = (
   }));
 };
 
+/** Marks of several reps as one step of undo. */
+export const commitMany = (
+  tools: BenchTools,
+  document: BenchDocument,
+  parts: readonly RepMarks[],
+): void => {
+  const real = parts.filter(({ commands }) => commands.length > 0);
+  if (real.length === 0) return;
+  void tools.queue.add(real.flatMap(({ repId, commands }) => newMarks(document, repId, commands)));
+  tools.store.setState((state) => ({
+    history: record(state.history, { kind: 'many-marks', parts: real }),
+  }));
+};
+
+/** Marks before there is a rep are kept in the page, and are a step of undo all the same. */
+const touch = (tools: BenchTools, rep: Rep, commands: readonly MarkingCommand[]): void => {
+  if (commands.length === 0) return;
+  tools.store.setState((state) => {
+    const step = {
+      kind: 'touches' as const,
+      before: state.touches,
+      after: touchesAfter(state.touches, commands, rep),
+    };
+    return { touches: step.after, history: record(state.history, step) };
+  });
+};
+
 /** The marking gestures on the rep and frame on show. */
 export function useMarking(): Marking {
   const tools = useBenchTools();
@@ -71,7 +101,9 @@ export function useMarking(): Marking {
       if (!current || !document.may.mark) return;
       const { frame } = store.getState();
       if (frame < current.rep.startFrame || frame > current.rep.endFrame) return;
-      commit(tools, document, current.rep.id, make(current.marks ?? NO_MARKS, frame));
+      const commands = make(current.marks ?? NO_MARKS, frame);
+      if (isDraft(current)) touch(tools, current.rep, commands);
+      else commit(tools, document, current.rep.id, commands);
     };
     const goOn = (landmark: LandmarkId) => store.setState({ chosen: null, lastPlaced: landmark });
     return {

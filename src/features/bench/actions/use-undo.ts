@@ -18,7 +18,12 @@ export interface Undo {
 /** Turned round, a step takes itself back. */
 const turned = (step: BenchStep): BenchStep => {
   if (step.kind === 'marks') return { ...step, commands: inverseOf(step.commands) };
+  if (step.kind === 'many-marks') {
+    const parts = step.parts.map((part) => ({ ...part, commands: inverseOf(part.commands) }));
+    return { ...step, parts: parts.reverse() };
+  }
   if (step.kind === 'rep') return { ...step, before: step.after, after: step.before };
+  if (step.kind === 'touches') return { ...step, before: step.after, after: step.before };
   return { ...step, before: step.after, after: step.before };
 };
 
@@ -35,12 +40,20 @@ export function useUndo(): Undo {
     const { store, queue } = tools;
     /** Does the step; false where the marks are no longer as they were left. */
     const perform = (step: BenchStep): boolean => {
-      if (step.kind === 'marks') {
-        const rep = reps.find((each) => each.rep.id === step.repId);
-        if (!rep || !stillAsLeft(rep.marks ?? NO_MARKS, inverseOf(step.commands))) return false;
-        void queue.add(newMarks(document, step.repId, step.commands));
+      if (step.kind === 'touches') {
+        store.setState({ touches: step.after });
+        return true;
+      }
+      if (step.kind === 'marks' || step.kind === 'many-marks') {
+        const parts = step.kind === 'marks' ? [step] : step.parts;
+        const asLeft = parts.every(({ repId, commands }) => {
+          const rep = reps.find((each) => each.rep.id === repId);
+          return rep && stillAsLeft(rep.marks ?? NO_MARKS, inverseOf(commands));
+        });
+        if (!asLeft) return false;
+        void queue.add(parts.flatMap(({ repId, commands }) => newMarks(document, repId, commands)));
         // what changes must be seen to change
-        const first = step.commands[0];
+        const first = parts[0]?.commands[0];
         if (first) goTo(store, first.frame);
         return true;
       }

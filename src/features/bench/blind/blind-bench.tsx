@@ -65,6 +65,7 @@ export function BlindBench({ second, frames, frameSize, copySize }: ReadySecond)
     times: timesOf(frames),
     frameSize,
     copySize,
+    follow: null,
   }));
   const { model, blind } = useBlindModel(second, document, tools);
   useBlindLive(second.summary.id, tools.queue);

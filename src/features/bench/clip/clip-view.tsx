@@ -7,6 +7,7 @@ import { type MarkHandle, MarkHandles, type PlacedHandle } from '#src/canvas/mar
 import { type Size, toFrame } from '#src/canvas/viewport.ts';
 import { useMarking } from '../actions/use-marking.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { useFollow } from '../follow/use-follow.ts';
 import { marksOn } from '../model/bench-model.ts';
 import { MARK, withPoint } from '../store/tools.ts';
 import { useNarrow } from '../use-media.ts';
@@ -29,6 +30,11 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   const viewport = useBench((state) => state.viewport);
   const tool = useBench((state) => state.tool);
   const marking = useMarking();
+  const follow = useFollow();
+  const moveTo = (id: LandmarkId, point: FramePoint) => {
+    marking.place(id, point);
+    follow.placed(id, point, true);
+  };
   const draw = useDraw();
   const target = useTarget();
   const narrow = useNarrow();
@@ -53,7 +59,10 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   const placeAt = (point: FramePoint) => {
     if (tool.kind === 'line' || tool.kind === 'shape')
       store.setState({ tool: withPoint(tool, point) });
-    else if (target?.landmark) marking.place(target.landmark, point);
+    else if (target?.landmark) {
+      marking.place(target.landmark, point);
+      follow.placed(target.landmark, point, false);
+    }
   };
   /** Without a pointer: the keyboard's cross, else the expected place, else the middle of what is shown. */
   const enter = () => {
@@ -105,7 +114,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
       asked={target}
       movable={document.may.mark}
       onPlace={placeAt}
-      onMove={(id, point) => marking.place(id, point)}
+      onMove={moveTo}
       onSelect={select}
       shownRef={shown}
       onMeasured={setWidth}
@@ -130,7 +139,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
               handles={all}
               viewport={view.viewport}
               hand={hand}
-              onMove={(id, point) => marking.place(id, point)}
+              onMove={moveTo}
               onPlace={placeAt}
               onRemove={marking.remove}
               onLeave={() => slider.current?.focus({ preventScroll: true })}

@@ -1,6 +1,7 @@
 import { useBenchModel, useBenchTools } from '../bench-context.ts';
 import { Button } from '#src/ui/button.tsx';
 import { degrees, turn } from '#src/ui/figures.ts';
+import { isDraft } from '../model/draft.ts';
 import { EXCLUSION_WORDS } from '../reps/rep-words.ts';
 import { useMedia } from '../use-media.ts';
 import { useFrameFigures } from '../values/use-frame-figures.ts';
@@ -19,17 +20,21 @@ export function CourseDesk() {
   const low = useMedia('(max-height: 960px)');
   // the values must be seen below it without scrolling
   const height = between ? 284 : wide && low ? 258 : undefined;
-  if (!current)
+  if (!current || isDraft(current))
     return (
       <div className="max-w-[34em] py-4">
         <h3 className="text-sub font-bold">No rep yet</h3>
         <p className="mt-1">
-          Name each lift of this clip as a rep, with the leg stood on. Then marking begins, and the
-          course is drawn here.
+          {current
+            ? 'Go to a frame on which the athlete stands still on both feet, and touch each landmark once. The computer follows the marks, finds the reps, and you look at what it did. Then the course is drawn here.'
+            : 'Name each lift of this clip as a rep, with the leg stood on. Then marking begins, and the course is drawn here.'}
         </p>
         <p className="mt-4">
-          <Button look="primary" onClick={() => store.setState({ desk: 'reps' })}>
-            Name a rep
+          <Button
+            look={current ? 'secondary' : 'primary'}
+            onClick={() => store.setState({ desk: 'reps' })}
+          >
+            {current ? 'Name the reps by hand' : 'Name a rep'}
           </Button>
         </p>
       </div>

@@ -4,7 +4,8 @@ import type { Size } from '#src/canvas/viewport.ts';
 import { fit, zoomAt } from '#src/canvas/viewport.ts';
 import { useMarking } from '../actions/use-marking.ts';
 import { useUndo } from '../actions/use-undo.ts';
-import { useBenchDocument, useBenchTools } from '../bench-context.ts';
+import { useBench, useBenchDocument, useBenchTools } from '../bench-context.ts';
+import { useLook } from '../look/use-look.ts';
 import { useNextFrame } from '../lead/use-suggestion.ts';
 import { useAsked } from '../model/use-model.ts';
 import { goTo } from '../store/bench-store.ts';
@@ -27,6 +28,12 @@ export function useActs(): Readonly<Record<Act, (() => void) | null>> {
   const { canUndo, canRedo, undo, redo } = useUndo();
   const asked = useAsked();
   const next = useNextFrame();
+  const look = useLook();
+  const frame = useBench((state) => state.frame);
+  const here = useMemo(
+    () => look.waiting.filter((each) => each.frame === frame),
+    [look.waiting, frame],
+  );
   return useMemo(() => {
     const zoom = (factor: number) => () => {
       const size = stageSize();
@@ -41,6 +48,8 @@ export function useActs(): Readonly<Record<Act, (() => void) | null>> {
       hide: asked ? () => marking.hide(asked) : null,
       'next-landmark': asked ? () => store.setState({ chosen: null, lastPlaced: asked }) : null,
       'next-frame-to-mark': next ? () => goTo(store, next.frame) : null,
+      'next-unsure': look.next,
+      'frame-right': here.length > 0 && may.mark ? () => look.confirm(here) : null,
       play: () => store.setState((state) => ({ playing: !state.playing })),
       comment: may.comment
         ? () => {
@@ -63,5 +72,5 @@ export function useActs(): Readonly<Record<Act, (() => void) | null>> {
       'move-picture': () =>
         store.setState(({ tool }) => ({ tool: tool.kind === 'look' ? MARK : LOOK })),
     };
-  }, [store, frameSize, may.comment, marking, canUndo, canRedo, undo, redo, asked, next]);
+  }, [store, frameSize, may, marking, canUndo, canRedo, undo, redo, asked, next, look, here]);
 }

@@ -5,6 +5,7 @@ import { useConflicts } from '../clip/use-draw.ts';
 import { useTarget } from '../clip/use-target.ts';
 import { ConflictInset } from '../conflict/conflict-inset.tsx';
 import { DuskButton } from '../dusk-button.tsx';
+import { FollowPanel } from '../follow/follow-panel.tsx';
 import { marksOn } from '../model/bench-model.ts';
 import { tallyOf } from '../model/led.ts';
 import { useNarrow } from '../use-media.ts';
@@ -47,6 +48,7 @@ export function LeadPanel() {
         )}
       </div>
       {!narrow && <GlassPanel target={target} />}
+      <FollowPanel />
       {narrow && <ThumbButtons asked={target?.landmark ?? null} />}
       {inRep && <LandmarkList />}
       {!narrow && <Dials />}

@@ -1,5 +1,6 @@
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { DuskButton } from '../dusk-button.tsx';
+import { isDraft } from '../model/draft.ts';
 import { MARK } from '../store/tools.ts';
 
 /** Why nothing is asked for on this frame, and what to do. */
@@ -43,11 +44,17 @@ export function NothingAsked() {
             ]
           : led.length === 0
             ? ['Nothing is marked in this view', 'Film from the front to see the turn.', null]
-            : [
-                'This frame is done',
-                `All ${led.length} landmarks are placed or marked as hidden. Press a mark to place it again.`,
-                null,
-              ];
+            : isDraft(current)
+              ? [
+                  'Every landmark is touched',
+                  'Their marks are followed through the clip, and the reps are looked for.',
+                  null,
+                ]
+              : [
+                  'This frame is done',
+                  `All ${led.length} landmarks are placed or marked as hidden. Press a mark to place it again.`,
+                  null,
+                ];
   return (
     <>
       <p className="text-note leading-5 text-dusk-soft">Frame {frame}</p>

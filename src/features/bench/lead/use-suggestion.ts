@@ -3,6 +3,7 @@ import type { Degrees } from '#shared/geometry/units.ts';
 import { frameIndex, type FrameIndex } from '#shared/timing/units.ts';
 import { BlindContext } from '../blind/blind-context.ts';
 import { useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { isDraft } from '../model/draft.ts';
 import { firstFrame, type Suggestion } from '../model/first-frames.ts';
 import { useReading } from '../reading/use-reading.ts';
 
@@ -29,7 +30,7 @@ export function useNextFrame(): NextFrame | null {
   return useMemo(() => {
     if (blind)
       return blind.next === null ? null : { frame: blind.next, why: null, lift: null, gain: null };
-    if (!current || current.rep.excluded) return null;
+    if (!current || current.rep.excluded || isDraft(current)) return null;
     const { startFrame, endFrame } = current.rep;
     const used = result?.reps.some((each) => each.id === current.rep.id && each.used) ?? false;
     const first = used

@@ -10,6 +10,7 @@ import type { FrameIndex, Milliseconds } from '#shared/timing/units.ts';
 import type { QueuedMark } from '../queue/queue-core.ts';
 import { repInputOf } from '#shared/records/engine-input.ts';
 import { withSharedQuiet } from '#shared/records/shared-quiet.ts';
+import { isDraft, touchedOnce } from './draft.ts';
 import { hillOf, type HillPoint } from './hill.ts';
 import { type Extra, ledLandmarks, nextLandmark, proposedSet } from './led.ts';
 import { type RepTieFault, type Tying, withTiedLift } from '#shared/records/tied-lifts.ts';
@@ -37,6 +38,7 @@ export interface CurrentRep extends BenchRep {
 
 export interface BenchModel {
   readonly reps: readonly BenchRep[];
+  /** A clip without reps is worked on as a draft of one; see draft.ts. */
   readonly current: CurrentRep | null;
   readonly view: View;
   readonly set: LandmarkSetId;
@@ -125,7 +127,9 @@ export const modelOf = (
     set,
     led: ledLandmarks(view, set, extras),
     figures:
-      current !== null && document.calls.some((call) => call.side === current.rep.supportSide),
+      current !== null &&
+      !isDraft(current) &&
+      document.calls.some((call) => call.side === current.rep.supportSide),
   };
 };
 
@@ -146,5 +150,6 @@ export const askedFor = (
 ): LandmarkId | null => {
   const { current } = model;
   if (!current || frame < current.rep.startFrame || frame > current.rep.endFrame) return null;
-  return chosen ?? nextLandmark(model.led, marksOn(current, frame), lastPlaced);
+  const marks = isDraft(current) ? touchedOnce(current.marks) : marksOn(current, frame);
+  return chosen ?? nextLandmark(model.led, marks, lastPlaced);
 };

@@ -1,6 +1,6 @@
 import type { Mark, MarkOutcome, Rep } from '#shared/contracts/reps.ts';
 import {
-  enqueue,
+  enqueueAll,
   keepMine,
   letGo,
   type NewMark,
@@ -187,7 +187,7 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
       settledListeners.add(listener);
       return () => void settledListeners.delete(listener);
     },
-    add: (marks) => act((queue) => marks.reduce(enqueue, queue)),
+    add: (marks) => act((queue) => enqueueAll(queue, marks)),
     keepMine(id) {
       const fresh = newId();
       return act((queue) => keepMine(queue, id, () => fresh));

@@ -53,16 +53,9 @@ export interface NewMark extends MarkKey {
   readonly known: number;
 }
 
-/** Adds a change behind what already waits for the same mark. */
-export const enqueue = (queue: readonly QueuedMark[], mark: NewMark): readonly QueuedMark[] => {
-  const key = keyOf(mark);
-  const earlier = queue.filter((each) => keyOf(each) === key);
-  const last = earlier.at(-1);
+const added = (mark: NewMark, last: QueuedMark | undefined): QueuedMark => {
   const { id, clipId, repId, frame, landmark, after } = mark;
-  // in a dispute the newest is what this person stands for
-  if (last?.state.is === 'disputed')
-    return queue.map((each) => (each === last ? { ...each, id, after } : each));
-  const added: QueuedMark = {
+  return {
     id,
     clipId,
     repId,
@@ -73,8 +66,33 @@ export const enqueue = (queue: readonly QueuedMark[], mark: NewMark): readonly Q
     sawNothing: mark.before === null,
     state: WAITING,
   };
-  return [...queue, added];
 };
+
+/** Adds changes, each behind what already waits for the same mark. */
+export const enqueueAll = (
+  queue: readonly QueuedMark[],
+  marks: readonly NewMark[],
+): readonly QueuedMark[] => {
+  const next = [...queue];
+  // followed marks come by the thousand: looking through the queue for each would take seconds
+  const lastOf = new Map(queue.map((each, at) => [keyOf(each), at]));
+  for (const mark of marks) {
+    const at = lastOf.get(keyOf(mark));
+    const last = at === undefined ? undefined : next[at];
+    if (at !== undefined && last?.state.is === 'disputed') {
+      // in a dispute the newest is what this person stands for
+      next[at] = { ...last, id: mark.id, after: mark.after };
+      continue;
+    }
+    lastOf.set(keyOf(mark), next.length);
+    next.push(added(mark, last));
+  }
+  return next;
+};
+
+/** Adds a change behind what already waits for the same mark. */
+export const enqueue = (queue: readonly QueuedMark[], mark: NewMark): readonly QueuedMark[] =>
+  enqueueAll(queue, [mark]);
 
 /** The oldest rep's waiting commands, in order; empty where nothing can be sent. */
 export const nextBatch = (queue: readonly QueuedMark[], limit: number): readonly QueuedMark[] => {

@@ -13,9 +13,16 @@ export interface ReadingSoFar {
   readonly offers: readonly FrameOffer[];
   /** True while newer marks are being worked in. */
   readonly working: boolean;
+  /** How long the newest answer took, ms; null before the first. */
+  readonly tookMs: number | null;
 }
 
-export const NO_READING: ReadingSoFar = { result: null, offers: [], working: false };
+export const NO_READING: ReadingSoFar = {
+  result: null,
+  offers: [],
+  working: false,
+  tookMs: null,
+};
 export const ReadingContext = createContext<ReadingSoFar>(NO_READING);
 export const useReading = (): ReadingSoFar => useContext(ReadingContext);
 
@@ -28,7 +35,9 @@ export function useReadingWorker(
   model: BenchModel,
   times: readonly Milliseconds[],
 ): ReadingSoFar {
-  const [answer, setAnswer] = useState<(ReadingAnswer & { side: string }) | null>(null);
+  const [answer, setAnswer] = useState<(ReadingAnswer & { side: string; tookMs: number }) | null>(
+    null,
+  );
   const [asked, setAsked] = useState(0);
   const worker = useRef<Worker | null>(null);
   const count = useRef(0);
@@ -54,13 +63,15 @@ export function useReadingWorker(
     if (!made || !question) return;
     const timer = setTimeout(() => {
       const n = (count.current += 1);
+      const began = performance.now();
       setAsked(n);
       const { supportSide } = question.input;
       const hear = (event: MessageEvent<ReadingAnswer>) => {
         if (event.data.n !== n) return;
         made.removeEventListener('message', hear);
         // an older answer that comes late is passed over
-        if (n === count.current) setAnswer({ ...event.data, side: supportSide });
+        if (n === count.current)
+          setAnswer({ ...event.data, side: supportSide, tookMs: performance.now() - began });
       };
       made.addEventListener('message', hear);
       made.postMessage({ n, ...question } satisfies ReadingQuestion);
@@ -72,7 +83,12 @@ export function useReadingWorker(
   return useMemo(
     () =>
       shown
-        ? { result: shown.result, offers: shown.offers, working: shown.n < asked }
+        ? {
+            result: shown.result,
+            offers: shown.offers,
+            working: shown.n < asked,
+            tookMs: shown.tookMs,
+          }
         : { ...NO_READING, working: asked > 0 },
     [shown, asked],
   );

@@ -5,17 +5,23 @@ import { emptyHistory, type History } from '#shared/landmarks/commands-history.t
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { FrameIndex } from '#shared/timing/units.ts';
 import type { Viewport } from '#src/canvas/viewport.ts';
+import { NO_TOUCHES, type StandsOn, type Touches } from '../model/draft.ts';
 import type { RepChange } from '../actions/rep-change.ts';
 import { loadTaste, saveTaste, type Taste } from './taste.ts';
 import { LOOK, MARK, type Tool } from './tools.ts';
 
+export interface RepMarks {
+  readonly repId: string;
+  readonly commands: readonly MarkingCommand[];
+}
+
 /** One step of undo: what was done, and what takes it back. */
 export type BenchStep =
-  | {
-      readonly kind: 'marks';
-      readonly repId: string;
-      readonly commands: readonly MarkingCommand[];
-    }
+  | ({ readonly kind: 'marks' } & RepMarks)
+  /** Marks of several reps that came at once: carried by the computer, or confirmed together. */
+  | { readonly kind: 'many-marks'; readonly parts: readonly RepMarks[] }
+  /** Marks placed before there is a rep. */
+  | { readonly kind: 'touches'; readonly before: Touches; readonly after: Touches }
   | {
       readonly kind: 'rep';
       readonly repId: string;
@@ -25,7 +31,7 @@ export type BenchStep =
   | { readonly kind: 'clip'; readonly before: ClipGeometry; readonly after: ClipGeometry };
 
 /** What the right side of the Bench shows. */
-export type Desk = 'course' | 'reps' | 'set-up' | 'comments';
+export type Desk = 'course' | 'reps' | 'look' | 'set-up' | 'comments';
 
 export interface BenchState {
   readonly frame: FrameIndex;
@@ -39,6 +45,9 @@ export interface BenchState {
   readonly lastPlaced: LandmarkId | null;
   readonly desk: Desk;
   readonly playing: boolean;
+  /** Only while the clip has no rep. */
+  readonly touches: Touches;
+  readonly standsOn: StandsOn;
   /** The list of keys is open. */
   readonly keysOpen: boolean;
   readonly history: History<BenchStep>;
@@ -49,12 +58,18 @@ export type BenchStore = StoreApi<BenchState>;
 
 /** Tool, selection, zoom and undo of one open clip. Nothing in it outlives the page but the taste. */
 export const createBenchStore = (
-  start: Pick<BenchState, 'frame' | 'repId' | 'desk'> & { readonly mayMark: boolean },
+  start: Pick<BenchState, 'frame' | 'repId' | 'desk'> & {
+    readonly mayMark: boolean;
+    /** What the clip is said to hold. */
+    readonly standsOn?: StandsOn;
+  },
 ): BenchStore => {
   const store = createStore<BenchState>(() => ({
     frame: start.frame,
     repId: start.repId,
     desk: start.desk,
+    standsOn: start.standsOn ?? 'both',
+    touches: NO_TOUCHES,
     viewport: null,
     tool: start.mayMark ? MARK : LOOK,
     chosen: null,

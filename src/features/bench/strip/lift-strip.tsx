@@ -7,6 +7,8 @@ import { useNextFrame } from '../lead/use-suggestion.ts';
 import type { BenchModel } from '../model/bench-model.ts';
 import { drawnHill, liftAt } from '../model/hill.ts';
 import { goTo } from '../store/bench-store.ts';
+import { isDraft } from '../model/draft.ts';
+import { StripFound } from './strip-found.tsx';
 import { momentsOf } from './moments.ts';
 import { StripHill } from './strip-hill.tsx';
 import { type StripLayout, stripLayout } from './strip-layout.ts';
@@ -37,7 +39,8 @@ export function LiftStrip() {
   const naming = useBench((state) => state.desk === 'reps');
   const box = useRef<HTMLDivElement>(null);
   const size = useSize(box);
-  const whole = naming || !model.current;
+  const draft = isDraft(model.current);
+  const whole = naming || draft || !model.current;
   const [from, to] = spanOf(model, whole, times.length);
   // the row of pins takes room from the hill only where a pin stands
   const pins = comments.some(({ fromFrame }) => from <= fromFrame && fromFrame <= to);
@@ -54,7 +57,8 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
   const { protocol } = useBenchDocument();
   const model = useBenchModel();
   const { current, figures, reps } = model;
-  const shownReps = whole ? reps : current ? [current] : [];
+  const shownReps =
+    isDraft(current) && current ? [current] : whole ? reps : current ? [current] : [];
   const frame = useBench((state) => state.frame);
   const next = useNextFrame();
   const { x, y, base, left, right, width, height, compact, from, to } = layout;
@@ -162,6 +166,7 @@ function Strip({ whole, layout }: { whole: boolean; layout: StripLayout }) {
         )}
       </svg>
       {whole && <StripReps layout={layout} />}
+      {whole && <StripFound layout={layout} />}
       {current && !whole && (
         <StripMoments rep={current.rep} moments={moments} layout={layout} movable={may.mark} />
       )}

@@ -1,9 +1,11 @@
 import { Link } from 'react-router-dom';
 import { capital, plusMinus, turn } from '#src/ui/figures.ts';
+import { followedWords } from '#src/ui/followed-words.ts';
 import { markErrorWords } from '#src/ui/mark-error-words.ts';
 import { paths } from '#src/ui/paths.ts';
 import { supportWords } from '#src/ui/words.ts';
 import { useBenchDocument, useBenchModel } from '../bench-context.ts';
+import { countFollowed } from '../look/followed.ts';
 import { useReading } from '../reading/use-reading.ts';
 import { readingLabel, settleWords } from './reading-words.ts';
 
@@ -20,6 +22,7 @@ export function ReadingSoFar() {
   };
   const used = result?.reps.filter((rep) => rep.used).length ?? 0;
   const settle = result?.settle[0];
+  const followed = followedWords(countFollowed(reps.filter(({ rep }) => rep.supportSide === side)));
   return (
     <section aria-label="Reading so far" className="bench-sofar" aria-busy={working}>
       <p className="text-soft">
@@ -58,6 +61,7 @@ export function ReadingSoFar() {
           )}
         </p>
       )}
+      {followed !== null && <p className="text-soft">{followed}</p>}
       {settle && <p className="text-soft">{settleWords(settle, nameOf)}</p>}
       <p className="mt-1">
         <Link to={paths.reading(visit.id, side)} className="inline-block min-h-[24px]">
