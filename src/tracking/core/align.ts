@@ -35,11 +35,34 @@ interface Look {
   readonly correlation: number;
   readonly gain: number;
   readonly within: number;
-  readonly pulls: number[];
+  /** What lies there; overwritten by the next look. */
+  readonly patch: Float32Array;
 }
 
+/** Weighted products of the patch with the template's slopes: where it would rather be. */
+const pullsOf = ({ slopes }: Template, patch: Float32Array): number[] => {
+  const [right, down, larger, turned] = slopes;
+  if (!right || !down) return [];
+  let [a, b, c, d] = [0, 0, 0, 0];
+  if (larger && turned)
+    for (let k = 0; k < patch.length; k += 1) {
+      const value = patch[k] as number;
+      a += (right[k] as number) * value;
+      b += (down[k] as number) * value;
+      c += (larger[k] as number) * value;
+      d += (turned[k] as number) * value;
+    }
+  else
+    for (let k = 0; k < patch.length; k += 1) {
+      const value = patch[k] as number;
+      a += (right[k] as number) * value;
+      b += (down[k] as number) * value;
+    }
+  return larger ? [a, b, c, d] : [a, b];
+};
+
 const lookAt = (plane: Plane, template: Template, warp: Warp): Look => {
-  const { window, weighted, slopes, contrast, radius } = template;
+  const { window, weighted, contrast, radius } = template;
   const patch = bufferFor(window.length);
   const within = samplePatch(plane, warp, radius, patch);
   let sum = 0;
@@ -54,24 +77,24 @@ const lookAt = (plane: Plane, template: Template, warp: Warp): Look => {
   }
   const spread = Math.sqrt(Math.max(0, squares - sum * sum));
   const seen = contrast > LEAST_CONTRAST && spread > LEAST_CONTRAST;
-  const pulls = slopes.map((slope) => {
-    let pull = 0;
-    for (let k = 0; k < patch.length; k += 1) pull += (slope[k] as number) * (patch[k] as number);
-    return pull;
-  });
   return {
     correlation: seen ? Math.min(1, Math.max(-1, product / (contrast * spread))) : 0,
     gain: seen ? product / (contrast * contrast) : 0,
     within,
-    pulls,
+    patch,
   };
 };
 
 /** Likeness of the template to the picture where the warp puts it. */
 export const compare = (plane: Plane, template: Template, warp: Warp): Aligned => {
-  const { correlation, gain, within } = lookAt(plane, template, warp);
-  return { warp, correlation, gain, within };
+  return { ...pick(lookAt(plane, template, warp)), warp };
 };
+
+const pick = ({ correlation, gain, within }: Look): Omit<Aligned, 'warp'> => ({
+  correlation,
+  gain,
+  within,
+});
 
 /**
  * Finds the template near `start` by going downhill (inverse-compositional: what depends on the
@@ -86,20 +109,18 @@ export const align = (
   reach: number,
   steps = 12,
 ): Aligned | null => {
-  const { normal, slopes, window, radius } = template;
+  const { normal, slopes, radius } = template;
   const count = slopes.length;
-  let squares = 0;
-  for (const weight of window) squares += weight * weight;
-  const hold = (squares * DOUBT * DOUBT) / (RIM_CHANGE * RIM_CHANGE);
+  const hold = (template.crowding * DOUBT * DOUBT) / (RIM_CHANGE * RIM_CHANGE);
   const held = normal.map((value, k) =>
     k % (count + 1) === 0 && k >= 2 * count ? value + hold : value,
   );
   let warp = start;
   let now = lookAt(plane, template, warp);
-  let best: Aligned = { ...now, warp };
+  let best: Aligned = { ...pick(now), warp };
   for (let n = 0; n < steps; n += 1) {
     if (!(now.gain > 0.05)) break;
-    const right = now.pulls.map((pull) => pull / now.gain);
+    const right = pullsOf(template, now.patch).map((pull) => pull / now.gain);
     if (count === 4) {
       const c = warp.c * start.c + warp.s * start.s;
       const s = warp.s * start.c - warp.c * start.s;
@@ -113,9 +134,8 @@ export const align = (
     warp = undo(warp, dx, dy, larger / radius, turned / radius);
     if (!(Math.hypot(warp.tx - start.tx, warp.ty - start.ty) <= reach)) return null;
     now = lookAt(plane, template, warp);
-    if (now.correlation >= best.correlation) best = { ...now, warp };
+    if (now.correlation >= best.correlation) best = { ...pick(now), warp };
     if (Math.hypot(dx, dy) < SETTLED && Math.hypot(larger, turned) < 4 * SETTLED) break;
   }
-  const { correlation, gain, within } = best;
-  return Number.isFinite(correlation) ? { warp: best.warp, correlation, gain, within } : null;
+  return Number.isFinite(best.correlation) ? best : null;
 };

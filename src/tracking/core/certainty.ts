@@ -10,6 +10,8 @@ export interface Evidence {
   readonly fall: number;
   /** Likeness of the patch's middle alone to the keyframe's, −1 to 1. */
   readonly core: number;
+  /** How far the middle alone would rather be from where the whole patch is, pixels. */
+  readonly apart: number;
   /** The share of the patch that shows something else, 0 to 1. */
   readonly covered: number;
   /** Forth and back again, how far from where it began, pixels. Null where that was not tried. */
@@ -22,23 +24,30 @@ export interface Evidence {
 const falling = (value: number, good: number, bad: number): number =>
   Number.isFinite(value) ? Math.min(1, Math.max(0, (bad - value) / (bad - good))) : 0;
 
+/** So alike, whole and middle, that it can be nothing else. */
+export const isUnmistakable = (correlation: number, core: number): boolean =>
+  correlation > 0.9 && core > 0.8;
+
+/** Without any doubt. */
+export const isItself = (correlation: number, core: number): boolean =>
+  correlation > 0.95 && core > 0.92;
+
 /**
  * 0 to 1; each piece of evidence can only lower it. A fall of likeness counts only where likeness
  * is no longer good: blur makes it fall as well, but not as deep as something that covers the point.
  * The bounds were set on rendered clips of known truth; no other source.
  */
 export const confidenceOf = (seen: Evidence): number => {
-  const { correlation, fall, core, covered, roundTrip, spread } = seen;
+  const { correlation, fall, core, apart, covered, roundTrip, spread } = seen;
   const alike = falling(1 - correlation, 0.12, 0.5);
   // on coarse levels the way back may go astray in what is behind a limb: likeness outweighs it
-  const unmistakable = correlation > 0.9 && core > 0.8;
   const back = roundTrip === null ? 0.8 : falling(roundTrip, 0.6, 3.5);
-  const returned = unmistakable ? Math.max(0.8, back) : back;
+  const returned = isUnmistakable(correlation, core) ? Math.max(0.9, back) : back;
   const sharp = falling(spread, 0.5, 2.5);
   const steady = correlation > 0.88 ? 1 : falling(fall, 0.06, 0.3);
   const bare = falling(covered, 0.08, 0.35);
   const same = falling(1 - core, 0.5, 0.85);
-  return alike * returned * sharp * steady * bare * same;
+  return alike * returned * sharp * steady * bare * same * falling(apart, 1.5, 4);
 };
 
 const SURE = 0.5;
@@ -55,12 +64,10 @@ const ALIKE_PIXELS = 4;
  * noise, against the template's weakest slope. Infinity where nothing determines the place.
  */
 export const spreadOf = (template: Template, correlation: number): number => {
-  const { normal, slopes, contrast, window } = template;
+  const { normal, slopes, contrast, crowding } = template;
   const count = slopes.length;
   const [weakest] = eigenvalues(normal[0] ?? 0, normal[1] ?? 0, normal[count + 1] ?? 0);
   if (!(weakest > 0) || !(correlation > 0)) return Infinity;
-  let squares = 0;
-  for (const weight of window) squares += weight * weight;
   const unlike = contrast * contrast * Math.max(0, 1 / (correlation * correlation) - 1);
-  return Math.sqrt((ALIKE_PIXELS * squares * unlike) / weakest);
+  return Math.sqrt((ALIKE_PIXELS * crowding * unlike) / weakest);
 };

@@ -1,6 +1,6 @@
 import type { TrackState } from '../types.ts';
 import { align, type Aligned, compare } from './align.ts';
-import { confidenceOf, spreadOf, stateOf } from './certainty.ts';
+import { confidenceOf, isItself, isUnmistakable, spreadOf, stateOf } from './certainty.ts';
 import { coveredShare } from './covered.ts';
 import { flow, type Place } from './flow.ts';
 import type { Plane } from './plane.ts';
@@ -34,6 +34,8 @@ const SEARCH_RADIUS = 8;
 const REACH = 128;
 /** How far refining may move what stepping found, pixels. */
 const REFINE_REACH = 7;
+/** How far it may lie from where its velocity brings it, to be just as expected, pixels. */
+const EXPECTED = 5;
 /** Below this likeness other ways of finding the point are tried. */
 const DOUBTFUL = 0.8;
 /** A lost point is believed to be back from this likeness on … */
@@ -45,6 +47,8 @@ const DISTINCT = 0.06;
 const NEAR = 6;
 /** Forth and back again within this, the step itself can be believed, pixels. */
 const RETURNED = 2;
+/** Half of that already is a jerk, unless the point looks exactly as it did. */
+const JERK = 0.5;
 /** What is found elsewhere may be another dot that looks the same: a person has to look at it. */
 const FOUND_AGAIN = 0.4;
 
@@ -68,7 +72,9 @@ export class Follower {
   #velocity: Place = { x: 0, y: 0 };
   /** False until two pictures have told the velocity: a keyframe may lie in the middle of a lift. */
   #velocityKnown = false;
-  #before: Pyramid;
+  /** The picture before, and its pyramid about the point once that was needed. */
+  #picture: Plane;
+  #before: Pyramid | null = null;
   #correlation = 1;
   /** Pictures since the point was last seen; 0 while it is. */
   #lostFor = 0;
@@ -79,7 +85,7 @@ export class Follower {
     this.#settings = settings;
     this.#warp = atPlace(at.x, at.y);
     this.#newestWarp = this.#warp;
-    this.#before = pyramidAround(picture, at.x, at.y, REACH, LEVELS);
+    this.#picture = picture;
     this.#first = makeTemplate(picture, this.#warp, settings.templateRadius, 'similar');
     this.#newest = this.#first;
     this.#core = makeTemplate(picture, this.#warp, Math.ceil(settings.templateRadius / 2), 'move');
@@ -91,8 +97,13 @@ export class Follower {
     return this.#lostFor > 0 ? this.#lookFor(picture) : this.#followOn(picture);
   }
 
+  #pyramidBefore(at: Place): Pyramid {
+    this.#before ??= pyramidAround(this.#picture, at.x, at.y, REACH, LEVELS);
+    return this.#before;
+  }
+
   #searchTemplate(at: Place): Template {
-    const level = this.#before[SEARCH_LEVEL];
+    const level = this.#pyramidBefore(at)[SEARCH_LEVEL];
     if (!level) throw new RangeError('The pyramid is too low to search on.');
     const warp = atPlace(toLevelX(level, at.x), toLevelY(level, at.y));
     return makeTemplate(level.plane, warp, SEARCH_RADIUS, 'move');
@@ -101,6 +112,46 @@ export class Follower {
   #followOn(picture: Plane): Seen {
     const from = { x: this.#warp.tx, y: this.#warp.ty };
     const guess = { x: from.x + this.#velocity.x, y: from.y + this.#velocity.y };
+    const best = this.#asExpected(picture, guess) ?? this.#findFrom(picture, from, guess);
+    if (!best) return this.#lose();
+    const fall = this.#correlation - best.correlation;
+    const covered = coveredShare(picture, best.template, best);
+    const leap = Math.hypot(best.warp.tx - guess.x, best.warp.ty - guess.y);
+    const middle = this.#middleOf(picture, best);
+    // what slides over a point takes it along with a jerk that no limb makes
+    const jerk = leap > JERK * this.#near() && !isItself(best.correlation, middle.core);
+    const astray = best.roundTrip === null || best.roundTrip > RETURNED;
+    if (this.#velocityKnown && (jerk || (astray && leap > this.#near()))) this.#trust = FOUND_AGAIN;
+    const evidence = {
+      correlation: best.correlation,
+      fall,
+      covered,
+      ...middle,
+      roundTrip: best.roundTrip,
+      spread: spreadOf(best.template, best.correlation),
+    };
+    const confidence = Math.min(this.#trust, confidenceOf(evidence) * best.within);
+    const state = stateOf(confidence);
+    if (state === 'lost') return this.#lose();
+    this.#take(best, picture, from);
+    if (this.#trust > FOUND_AGAIN) this.#trust = Math.min(1, this.#trust + 0.05);
+    if (state === 'sure' && fall < 0.03 && covered === 0) this.#refresh(picture, best);
+    return { place: { x: best.warp.tx, y: best.warp.ty }, confidence, state };
+  }
+
+  /** Most often it is just where its velocity brings it: then nothing else need be tried. */
+  #asExpected(picture: Plane, guess: Place): Candidate | null {
+    if (!this.#velocityKnown) return null;
+    const found = align(picture, this.#first, movedTo(this.#warp, guess.x, guess.y), EXPECTED);
+    if (!found) return null;
+    const { core } = this.#middleOf(picture, found);
+    return isUnmistakable(found.correlation, core)
+      ? { ...found, template: this.#first, roundTrip: null }
+      : null;
+  }
+
+  /** Steps on from the picture before; where that is doubtful, looks around. */
+  #findFrom(picture: Plane, from: Place, guess: Place): Candidate | null {
     const after = pyramidAround(picture, guess.x, guess.y, REACH, LEVELS);
     let best = this.#stepFrom(after, from, guess);
     if (!best || best.correlation < DOUBTFUL) {
@@ -111,40 +162,28 @@ export class Follower {
       const fetched = this.#fetch(after, guess, this.#velocityKnown ? 6 : 12);
       if (fetched && fetched.correlation > (best?.correlation ?? 0) + 0.05) best = fetched;
     }
-    if (!best) return this.#lose(after);
-    const fall = this.#correlation - best.correlation;
-    const covered = coveredShare(picture, best.template, best);
-    const leap = Math.hypot(best.warp.tx - guess.x, best.warp.ty - guess.y);
-    if (
-      !(best.roundTrip !== null && best.roundTrip < RETURNED) &&
-      this.#velocityKnown &&
-      leap > this.#near()
-    )
-      this.#trust = FOUND_AGAIN;
-    const evidence = {
-      correlation: best.correlation,
-      fall,
-      covered,
-      core: compare(picture, this.#core, best.warp).correlation,
-      roundTrip: best.roundTrip,
-      spread: spreadOf(best.template, best.correlation),
+    return best;
+  }
+
+  /** What the middle alone says: is it there, and would it rather be elsewhere? */
+  #middleOf(picture: Plane, { warp: { tx, ty } }: Aligned): { core: number; apart: number } {
+    const here = compare(picture, this.#core, movedTo(this.#warp, tx, ty));
+    const own = align(picture, this.#core, here.warp, REFINE_REACH, 6);
+    const better = own && own.correlation > here.correlation + 0.03;
+    return {
+      core: here.correlation,
+      apart: better ? Math.hypot(own.warp.tx - tx, own.warp.ty - ty) : 0,
     };
-    const confidence = Math.min(this.#trust, confidenceOf(evidence) * best.within);
-    const state = stateOf(confidence);
-    if (state === 'lost') return this.#lose(after);
-    this.#take(best, after, from);
-    if (this.#trust > FOUND_AGAIN) this.#trust = Math.min(1, this.#trust + 0.05);
-    if (state === 'sure' && fall < 0.03 && covered === 0) this.#refresh(picture, best);
-    return { place: { x: best.warp.tx, y: best.warp.ty }, confidence, state };
   }
 
   /** Steps there, goes back to see whether that leads home, and refines against the templates. */
   #stepFrom(after: Pyramid, from: Place, guess: Place): Candidate | null {
     const { stepRadius } = this.#settings;
-    const there = flow(this.#before, after, from, guess, stepRadius);
+    const before = this.#pyramidBefore(from);
+    const there = flow(before, after, from, guess, stepRadius);
     if (!there) return null;
     const back = { x: there.x - (guess.x - from.x), y: there.y - (guess.y - from.y) };
-    const home = flow(after, this.#before, there, back, stepRadius, 2);
+    const home = flow(after, before, there, back, stepRadius, 2);
     const roundTrip = home ? Math.hypot(home.x - from.x, home.y - from.y) : Infinity;
     return this.#refine(after, there, roundTrip);
   }
@@ -180,10 +219,10 @@ export class Follower {
     const about = { x: this.#warp.tx, y: this.#warp.ty };
     const after = pyramidAround(picture, about.x, about.y, REACH, LEVELS);
     const found = this.#fetch(after, about, Math.min(18, 8 + this.#lostFor));
-    if (!found || found.correlation < BACK) return this.#lose(after);
+    if (!found || found.correlation < BACK) return this.#lose();
     const leap = Math.hypot(found.warp.tx - about.x, found.warp.ty - about.y);
     this.#trust = leap > this.#near() ? FOUND_AGAIN : Math.min(this.#trust, 0.45);
-    this.#take(found, after, about);
+    this.#take(found, picture, about);
     this.#velocity = { x: 0, y: 0 };
     this.#velocityKnown = false;
     const confidence = this.#trust;
@@ -199,7 +238,7 @@ export class Follower {
     return NEAR + Math.hypot(this.#velocity.x, this.#velocity.y) / 2;
   }
 
-  #take(best: Candidate, after: Pyramid, from: Place): void {
+  #take(best: Candidate, picture: Plane, from: Place): void {
     if (best.template === this.#first) this.#warp = best.warp;
     else this.#warp = movedTo(this.#warp, best.warp.tx, best.warp.ty);
     this.#newestWarp =
@@ -208,14 +247,14 @@ export class Follower {
         : movedTo(this.#newestWarp, best.warp.tx, best.warp.ty);
     this.#velocity = { x: best.warp.tx - from.x, y: best.warp.ty - from.y };
     this.#velocityKnown = true;
-    this.#before = after;
+    this.#picture = picture;
+    this.#before = null;
     this.#correlation = best.correlation;
     this.#lostFor = 0;
   }
 
-  #lose(after: Pyramid): Seen {
+  #lose(): Seen {
     this.#lostFor += 1;
-    this.#before = after;
     return { place: null, confidence: 0, state: 'lost' };
   }
 

@@ -16,11 +16,9 @@ export type Pyramid = readonly Level[];
 export const toLevelX = (level: Level, x: number): number => (x - level.x0) / level.scale;
 export const toLevelY = (level: Level, y: number): number => (y - level.y0) / level.scale;
 
-const EDGE = 1;
-
 /**
- * Every second pixel after smoothing by 1-2-1 both ways, of the columns and rows from `left`, `top`
- * (even) on; beyond the picture its edge goes on.
+ * Each value is the mean of two by two, of the columns and rows from `left`, `top` on; all of them
+ * lie within the source.
  */
 export const halve = (
   source: Plane,
@@ -30,43 +28,24 @@ export const halve = (
   height: number,
 ): Plane => {
   const { data, stride } = source;
-  const lastX = source.width - 1;
-  const lastY = source.height - 1;
   const out = new Float32Array(width * height);
-  const across = new Float32Array(width * 3);
-  const smoothRow = (y: number, into: number): void => {
-    const at = Math.min(Math.max(y, 0), lastY) * stride;
-    for (let k = 0; k < width; k += 1) {
-      const x = left + 2 * k;
-      const here = at + (x > lastX ? lastX : x);
-      const before = x - EDGE < 0 ? at : at + Math.min(x - EDGE, lastX);
-      const after = x + EDGE > lastX ? at + lastX : at + x + EDGE;
-      across[into * width + k] =
-        (data[before] as number) + 2 * (data[here] as number) + (data[after] as number);
-    }
-  };
-  smoothRow(top - EDGE, 0);
-  for (let row = 0; row < height; row += 1) {
-    const y = top + 2 * row;
-    const first = (2 * row) % 3;
-    const second = (first + 1) % 3;
-    const third = (first + 2) % 3;
-    smoothRow(y, second);
-    smoothRow(y + EDGE, third);
-    for (let k = 0; k < width; k += 1) {
-      out[row * width + k] =
-        ((across[first * width + k] as number) +
-          2 * (across[second * width + k] as number) +
-          (across[third * width + k] as number)) /
-        16;
-    }
+  for (let row = 0, k = 0; row < height; row += 1) {
+    let at = (top + 2 * row) * stride + left;
+    for (let column = 0; column < width; column += 1, k += 1, at += 2)
+      out[k] =
+        ((data[at] as number) +
+          (data[at + 1] as number) +
+          (data[at + stride] as number) +
+          (data[at + stride + 1] as number)) /
+        4;
   }
   return planeOf(out, width, height);
 };
 
 /**
  * The pyramid of the square of `reach` about a place, as far as it lies in the picture: what one
- * point needs, whatever the others do. Level 0 is the whole picture, without a copy.
+ * point needs, whatever the others do. Level 0 is the whole picture, without a copy; a picture too
+ * small for the coarsest level has no others.
  */
 export const pyramidAround = (
   picture: Plane,
@@ -76,24 +55,27 @@ export const pyramidAround = (
   levels: number,
 ): Pyramid => {
   const unit = 2 ** (levels - 1);
-  const from = (middle: number, size: number): number =>
-    unit * Math.floor(Math.min(Math.max(middle - reach, 0), size - 1) / unit);
-  const left = from(x, picture.width);
-  const top = from(y, picture.height);
-  const right = Math.min(picture.width - 1, Math.max(x + reach, left));
-  const bottom = Math.min(picture.height - 1, Math.max(y + reach, top));
+  const span = (middle: number, size: number): readonly [from: number, length: number] => {
+    const whole = Math.floor(size / unit);
+    const first = Math.min(
+      Math.max(Math.floor((middle - reach) / unit), 0),
+      Math.max(0, whole - 1),
+    );
+    const last = Math.min(Math.max(Math.ceil((middle + reach) / unit), first + 1), whole);
+    return [first * unit, Math.max(0, last - first) * unit];
+  };
+  const [left, width] = span(x, picture.width);
+  const [top, height] = span(y, picture.height);
   const pyramid: Level[] = [{ plane: picture, scale: 1, x0: 0, y0: 0 }];
+  if (width === 0 || height === 0) return pyramid;
   let source = picture;
-  let sourceLeft = left;
-  let sourceTop = top;
   for (let n = 1; n < levels; n += 1) {
     const scale = 2 ** n;
-    const width = Math.floor((right - left) / scale) + 1;
-    const height = Math.floor((bottom - top) / scale) + 1;
-    source = halve(source, sourceLeft, sourceTop, width, height);
-    sourceLeft = 0;
-    sourceTop = 0;
-    pyramid.push({ plane: source, scale, x0: left, y0: top });
+    const from = n === 1 ? { left, top } : { left: 0, top: 0 };
+    source = halve(source, from.left, from.top, width / scale, height / scale);
+    // the mean of a pixel's parts lies in the middle of them
+    const middle = (scale - 1) / 2;
+    pyramid.push({ plane: source, scale, x0: left + middle, y0: top + middle });
   }
   return pyramid;
 };

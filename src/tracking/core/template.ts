@@ -23,6 +23,8 @@ export interface Template {
   readonly slopes: readonly Float32Array[];
   /** Products of the slopes with one another, row by row. */
   readonly normal: readonly number[];
+  /** Sum of the window's squares: one over the number of pixels that count. */
+  readonly crowding: number;
   /** The share of the patch that lay within the picture, 0 to 1. */
   readonly within: number;
 }
@@ -92,7 +94,10 @@ export const templateOf = (
   });
   // a weighted slope times a bare column is the product of both slopes
   const normal = slopes.flatMap((slope) => columns.map((column) => weightedSum(column, slope)));
+  let crowding = 0;
+  for (const weight of window) crowding += weight * weight;
   return {
+    crowding,
     radius,
     values,
     weighted,
