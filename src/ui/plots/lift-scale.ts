@@ -1,5 +1,5 @@
 import { scaleLinear, type ScaleLinear } from 'd3-scale';
-import type { LiftCurve } from './lift-plot.tsx';
+import type { LiftCurve } from './lift-curve.ts';
 
 /** Where lift over time is drawn. Time runs to the right, lift upwards. */
 export interface LiftScale {

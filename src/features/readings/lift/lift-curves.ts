@@ -1,6 +1,6 @@
 import type { RepResult } from '#shared/reading/types.ts';
 import { shownSeries } from '#shared/course/shown-series.ts';
-import type { LiftCurve } from '#src/ui/plots/lift-plot.tsx';
+import type { LiftCurve } from '#src/ui/plots/lift-curve.ts';
 
 const fromTheSide = ({ why }: RepResult): boolean =>
   why.some((fault) => fault.code === 'view-cannot-show-turn' && fault.view.endsWith('-side')) &&
