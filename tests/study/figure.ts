@@ -34,7 +34,8 @@ export const figureOf = (body: Body, pose: Pose, skin: Skin, sigma: 1 | -1): Fig
     yawed(slipped(pose.femurYaw, skin.strap(lift, femurPart)) + body.thighYaw),
   );
 
-  const raised = after(rolled(-sigma * pose.hike), pitched(-pose.backTilt));
+  // hike first: the pelvis's direction is that of its forward axis, which a hike does not move
+  const raised = after(pitched(-pose.backTilt), rolled(-sigma * pose.hike));
   const pelvis = after(yawed(pose.pelvisYaw), raised);
   const centre = plus(hip, times(apply(pelvis, support(0, body.hipHalf, 0)), -1));
   const onPelvis = (at: Vector): Vector => plus(centre, apply(pelvis, at));
