@@ -32,6 +32,8 @@ export interface FootUp {
 
 /** Gaps in a track up to this length are read across, ms. From our model, no source. */
 const SHORT_GAP_MS = 250;
+/** A foot that leaves or lands within a gap this long still makes a whole lift: a fast foot blurs, ms. From our model, no source. */
+const UNSEEN_MS = 1000;
 /** A foot that is up before and after a gap this long was up all the while, ms. */
 const LONG_GAP_MS = 1500;
 /** A touch of the floor shorter than this does not end a lift, ms. From our model, no source. */
@@ -122,11 +124,11 @@ export const feetUp = (
     const next = known[n + 1];
     const gap = before ? time(i) - time(before.i) : 0;
     const now = sideOf(value);
-    if (open && gap > (now === open.lifted ? LONG_GAP_MS : SHORT_GAP_MS)) close(open.last, true);
+    if (open && gap > (now === open.lifted ? LONG_GAP_MS : UNSEEN_MS)) close(open.last, true);
     if (open && now === open.lifted) open.last = i;
     else if (open && (now !== null || !next || sideOf(next.value) !== open.lifted)) close(i, false);
     if (!open && now !== null && (!next || sideOf(next.value) === now))
-      open = { lifted: now, from: i, last: i, cut: !before || gap > SHORT_GAP_MS };
+      open = { lifted: now, from: i, last: i, cut: !before || gap > UNSEEN_MS };
   }
   close(known.at(-1)?.i ?? 0, true);
   return found.reduce<FootUp[]>((joined, each) => {

@@ -129,6 +129,17 @@ describe('a take of one lift', () => {
     near(rep?.footDown ?? 0, downOf(LIFT), 3);
   });
 
+  it('is found although the ankle is lost while it moves fast', () => {
+    const gaps = [
+      { side: 'left', from: 3.1, to: 3.8 },
+      { side: 'left', from: 6.2, to: 6.95 },
+    ] as const;
+    const [rep, ...more] = found(made({ seconds: 9, ups: [LIFT], gaps, noisePx: 1 }));
+    expect(more).toEqual([]);
+    near(rep?.footOff ?? 0, offOf(LIFT), 0.6 * FPS);
+    near(rep?.footDown ?? 0, downOf(LIFT), 0.6 * FPS);
+  });
+
   it('has no quiet stance longer than three seconds', () => {
     const late = { ...LIFT, from: 8, to: 12 };
     const [rep] = found(made({ seconds: 14, ups: [late] }));
