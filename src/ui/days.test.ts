@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import {
   age,
+  dayOf,
   daysUntil,
   distance,
   longDay,
@@ -37,6 +38,7 @@ describe('days', () => {
     expect(moment(new Date(2026, 2, 3, 16, 20).toISOString(), now)).toBe('16:20');
     expect(moment(new Date(2026, 2, 2, 18, 10).toISOString(), now)).toBe('yesterday, 18:10');
     expect(moment(new Date(2026, 1, 9, 8, 5).toISOString(), now)).toBe('9 February, 08:05');
+    expect(dayOf(new Date(2026, 2, 3, 16, 20).toISOString(), now)).toBe('3 March');
   });
   it('ends a year on the day before', () => {
     expect(yearsOn('2026-01-12', 1)).toBe('2027-01-11');

@@ -41,6 +41,9 @@ export function moment(at: string, now = new Date()): string {
   return `${shortDay(today(date), now)}, ${time}`;
 }
 
+/** The day of a moment here: `3 March`, with the year where it is not this one. */
+export const dayOf = (at: string, now = new Date()): string => shortDay(today(new Date(at)), now);
+
 /** `in 6 days, 9 March`, `tomorrow`, `today`, `2 days ago, 1 March`. */
 export function distance(day: string, now = new Date()): string {
   const days = daysUntil(day, now);

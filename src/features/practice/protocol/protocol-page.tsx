@@ -3,7 +3,7 @@ import type { ProtocolPage as Protocols } from '#shared/contracts/protocol.ts';
 import { useMe } from '#src/api/me.ts';
 import { protocolQuery } from '#src/api/protocol.queries.ts';
 import { useMayInPractice } from '#src/api/use-may.ts';
-import { moment } from '#src/ui/days.ts';
+import { dayOf } from '#src/ui/days.ts';
 import { Page } from '#src/ui/page.tsx';
 import { ErrorState, Loading, SkeletonLines } from '#src/ui/states.tsx';
 import { ProtocolForm } from './protocol-form.tsx';
@@ -19,7 +19,7 @@ export function ProtocolPage() {
       title="Protocol"
       lead={
         protocols.data
-          ? `Protocol ${protocols.data.current.version} of ${practice.name}, ${moment(protocols.data.current.at)}. Each reading names the version it was made with.`
+          ? `Protocol ${protocols.data.current.version} of ${practice.name}, ${dayOf(protocols.data.current.at)}. Each reading names the version it was made with.`
           : 'How this practice reads, in versions. Each reading names the version it was made with.'
       }
     >

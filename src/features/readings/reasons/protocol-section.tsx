@@ -2,7 +2,7 @@ import { Link } from 'react-router-dom';
 import type { Reading, SidePage } from '#shared/contracts/readings.ts';
 import { gatesOf } from '#shared/protocol/protocol.ts';
 import { useMe } from '#src/api/me.ts';
-import { moment } from '#src/ui/days.ts';
+import { dayOf } from '#src/ui/days.ts';
 import { gateRange, outOfHundred } from '#src/ui/gate-words.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
@@ -21,7 +21,7 @@ export function ProtocolSection({ page, reading }: { page: SidePage; reading: Re
     >
       <p>
         <Link to={paths.protocol()} className="inline-block py-2">
-          Protocol {protocol.version} of {practice.name}, {moment(protocol.at)}
+          Protocol {protocol.version} of {practice.name}, {dayOf(protocol.at)}
         </Link>
       </p>
       <p>
@@ -31,8 +31,8 @@ export function ProtocolSection({ page, reading }: { page: SidePage; reading: Re
       {newer && (
         <>
           <p className="mt-2">
-            Protocol {newer.version} holds since {moment(newer.at)} and reads otherwise. This
-            reading stays as it was made until you ask.
+            Protocol {newer.version} holds since {dayOf(newer.at)} and reads otherwise. This reading
+            stays as it was made until you ask.
           </p>
           {!page.newerMarkError && <ReadAgain page={page} />}
         </>
