@@ -18,6 +18,8 @@ export interface Evidence {
   readonly roundTrip: number | null;
   /** What the template's error says of the place, one standard deviation, pixels. */
   readonly spread: number;
+  /** How much larger the point's surroundings look than on the keyframe, a factor. */
+  readonly scale: number;
 }
 
 /** 1 up to `good`, 0 from `bad` on, straight between; for values that are better when smaller. */
@@ -38,7 +40,7 @@ export const isItself = (correlation: number, core: number): boolean =>
  * The bounds were set on rendered clips of known truth; no other source.
  */
 export const confidenceOf = (seen: Evidence): number => {
-  const { correlation, fall, core, apart, covered, roundTrip, spread } = seen;
+  const { correlation, fall, core, apart, covered, roundTrip, spread, scale } = seen;
   const alike = falling(1 - correlation, 0.12, 0.5);
   // on coarse levels the way back may go astray in what is behind a limb: likeness outweighs it
   const back = roundTrip === null ? 0.8 : falling(roundTrip, 0.6, 3.5);
@@ -46,8 +48,10 @@ export const confidenceOf = (seen: Evidence): number => {
   const sharp = falling(spread, 0.5, 2.5);
   const steady = correlation > 0.88 ? 1 : falling(fall, 0.06, 0.3);
   const bare = falling(covered, 0.08, 0.35);
+  // a patch that shrinks or swells has fitted itself to what covers the point
+  const sized = falling(Math.abs(Math.log(scale)), 0.16, 0.3);
   const same = falling(1 - core, 0.5, 0.85);
-  return alike * returned * sharp * steady * bare * same * falling(apart, 1.5, 4);
+  return alike * returned * sharp * steady * bare * same * sized * falling(apart, 1.5, 4);
 };
 
 const SURE = 0.5;

@@ -7,7 +7,7 @@ import type { Plane } from './plane.ts';
 import { pyramidAround, type Pyramid, toLevelX, toLevelY } from './pyramid.ts';
 import { search } from './search.ts';
 import { makeTemplate, type Template } from './template.ts';
-import { atPlace, movedTo, type Warp } from './warp.ts';
+import { atPlace, movedTo, scaleOf, type Warp } from './warp.ts';
 
 /** Radii of the patches, pixels of the picture looked at. */
 export interface FollowSettings {
@@ -129,6 +129,7 @@ export class Follower {
       ...middle,
       roundTrip: best.roundTrip,
       spread: spreadOf(best.template, best.correlation),
+      scale: scaleOf(best.warp),
     };
     const confidence = Math.min(this.#trust, confidenceOf(evidence) * best.within);
     const state = stateOf(confidence);
