@@ -148,7 +148,9 @@ function useThumbPainter(source: FrameSource | null): ThumbPainter | null {
     [source, frameSize],
   );
   const frame = useBench((state) => state.frame);
-  useEffect(() => painter?.hold(), [painter, frame]);
+  useEffect(() => {
+    painter?.hold();
+  }, [painter, frame]);
   useEffect(() => () => painter?.close(), [painter]);
   return painter;
 }

@@ -77,7 +77,9 @@ export const createThumbPainter = (source: FrameSource, frameSize: Size): ThumbP
       void run();
       return () => void orders.delete(order);
     },
-    hold: () => (held = performance.now() + CALM_MS),
+    hold() {
+      held = performance.now() + CALM_MS;
+    },
     close() {
       closed = true;
       clearTimeout(timer);
