@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { turnCovariance } from './turn-process.ts';
+import { changeVariance, gatedCovariance, turnCovariance } from './turn-process.ts';
 
 /** Variance of the change between two lifts. */
 const change = (from: number, to: number): number =>
@@ -37,5 +37,31 @@ describe('the curve before anything is seen', () => {
 
   it('is the same from both ends', () => {
     expect(turnCovariance(25, 95)).toBe(turnCovariance(95, 25));
+  });
+});
+
+describe('a turn between the gates', () => {
+  const changed = (gates: readonly [number, number], from: number, to: number): number => {
+    const covariance = gatedCovariance(...gates);
+    return covariance(to, to) + covariance(from, from) - 2 * covariance(from, to);
+  };
+  const turned = (from: number, to: number): number => changed([60, 90], from, to);
+
+  it('changes by 1 over the window and hardly outside it', () => {
+    expect(turned(60, 90)).toBeCloseTo(1, 12);
+    expect(turned(60, 75)).toBeCloseTo(0.25, 2);
+    for (const [from, to] of [
+      [20, 50],
+      [100, 120],
+    ] as const)
+      expect(turned(from, to)).toBeLessThan(0.001);
+  });
+
+  it('changes from gate to gate as much as the smooth curve, wherever the gates are', () => {
+    for (const [from, to] of [
+      [50, 95],
+      [65, 85],
+    ] as const)
+      expect(changed([from, to], from, to)).toBeCloseTo(changeVariance(to - from), 12);
   });
 });

@@ -1,4 +1,5 @@
 import { CONSTANTS } from '#shared/measures/constants.ts';
+import { corner } from './corner.ts';
 import { normalBelow, normalDensity } from './normal.ts';
 
 /** How far apart two lifts are before their speeds of turning tell little of each other, degrees. */
@@ -33,3 +34,13 @@ export const turnCovariance = (a: number, b: number): number => raw(a, b) / UNIT
 /** Variance of that curve's change over a stretch of lift, wherever it lies: 1 over 30°. */
 export const changeVariance = (width: number): number =>
   (doubleIntegral(width) - AT_ZERO) / (doubleIntegral(SPAN) - AT_ZERO);
+
+/**
+ * The same for a turn that begins and ends at the gates and is even between them; its change from
+ * gate to gate has the variance of the smooth curve's.
+ */
+export const gatedCovariance = (from: number, to: number): ((a: number, b: number) => number) => {
+  const bent = (lift: number): number => corner(lift - from) - corner(lift - to);
+  const unit = changeVariance(to - from) / (bent(to) - bent(from)) ** 2;
+  return (a, b) => bent(a) * bent(b) * unit;
+};

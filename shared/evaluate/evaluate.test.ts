@@ -114,7 +114,8 @@ describe('the lines', () => {
 
   it('give figures where there is one', () => {
     const g05 = goldenFiles().find(({ id }) => id.startsWith('g05'));
-    const { lines } = linesOf(JSON.stringify(g05));
+    // the golden results are engine 1's
+    const { lines } = linesOf(JSON.stringify(g05), 1);
     const line = lines.find(({ set }) => set === 'belt+thigh');
     expect(line?.reading).toBe('expected-turn-in');
     expect(Math.abs((line?.d ?? NaN) + 10.896)).toBeLessThan(0.3);

@@ -36,9 +36,6 @@ export const FILMING_LIMITS = {
   ),
 } as const satisfies Record<string, Constant>;
 
-/** Smallest change of turn in one rep that can be told from none, degrees. From our model, no source. */
-export const SMALLEST_IN_ONE_REP = { bare: 16, belt: 13.5, 'belt+thigh': 5.5 } as const;
-
 /** 29.97 frames per second is what phones call 30. */
 export const isSlow = (framesPerSecond: number): boolean =>
   framesPerSecond < FILMING_LIMITS.framesPerSecond.value - 0.1;

@@ -18,6 +18,8 @@ const SYSTEMATIC_NU = 20;
 const CLEAR = 1;
 const FLAT = 5;
 const BEFORE = 8;
+/** Probability at which an early turn is called; a practice's own limit moves the rule, not this figure. */
+const EARLY = 0.95;
 const NINE_IN_TEN = 1.2816;
 
 /** Variance of the weak prior of the change of turn between the gates: (8°)² over 30°. */
@@ -43,15 +45,16 @@ export interface Uncertain {
   readonly q: number;
 }
 
-/** Uncertainty, belief after the weak prior, probabilities, and the smallest turn found. */
-export const figuresOf = (
-  pooled: Pooled,
-  { variance: u02, q }: Uncertain,
-  { thighTurnsLittle, gates }: { readonly thighTurnsLittle: boolean; readonly gates: Gates },
-): ReadingFigures => {
-  const { d, uR, nuR } = pooled;
+/** What would be believed if something else were true, and how likely that is. */
+export interface Alternative {
+  readonly pooled: Pooled;
+  readonly uncertain: Uncertain;
+  readonly chance: number;
+}
+
+/** Belief in the change after the weak prior. */
+const believe = ({ d, uR, nuR }: Pooled, { variance: u02, q }: Uncertain, gates: Gates) => {
   const uR2 = uR * uR;
-  const uC0 = Math.sqrt(uR2 + u02);
   const uS2 = u02 + (q * d) ** 2;
   const uC2 = uR2 + uS2;
   const nu = freedom(uR2, nuR, uS2);
@@ -59,8 +62,55 @@ export const figuresOf = (
   const g = prior / (prior + uC2);
   const m = g * d;
   const sM = Math.sqrt(g * uC2);
-  const above = (x: number): number => studentAbove((x - m) / sM, nu);
+  const uC0 = Math.sqrt(uR2 + u02);
+  return { uC0, uS2, uC2, nu, m, sM, above: (x: number) => studentAbove((x - m) / sM, nu) };
+};
+
+/** Change from which on an early turn is called, with these errors, where `needed` is probable enough. */
+const calledFrom = (pEarlyOf: (d: number) => number, needed: number): number => {
+  let low = CLEAR;
+  let high = 2 * CONSTANTS.prior.value;
+  for (let i = 0; i < 40; i += 1) {
+    const middle = (low + high) / 2;
+    if (pEarlyOf(middle) < needed) low = middle;
+    else high = middle;
+  }
+  return high;
+};
+
+interface Assumed {
+  readonly thighTurnsLittle: boolean;
+  readonly gates: Gates;
+  readonly alternative?: Alternative | undefined;
+}
+
+/**
+ * Uncertainty, belief after the weak prior, probabilities, and the smallest turn found.
+ * Probabilities count an `alternative` as far as it is likely; all else stands for what is assumed.
+ */
+export const figuresOf = (
+  pooled: Pooled,
+  uncertain: Uncertain,
+  { thighTurnsLittle, gates, alternative }: Assumed,
+): ReadingFigures => {
+  const { d, uR } = pooled;
+  const u02 = uncertain.variance;
+  const { uC0, uS2, uC2, nu, m, sM, above: aboveAssumed } = believe(pooled, uncertain, gates);
   const uPre = Math.sqrt(pooled.uPre ** 2 + u02);
+  const chance = alternative?.chance ?? 0;
+  const mixed = (assumed: number, other: (alternative: Alternative) => number): number =>
+    alternative ? (1 - chance) * assumed + chance * other(alternative) : assumed;
+  const aboveOther = alternative && believe(alternative.pooled, alternative.uncertain, gates).above;
+  const above = (x: number): number => mixed(aboveAssumed(x), () => aboveOther?.(x) ?? NaN);
+  const earlyAt = (change: number): number => {
+    const at = (of: Pooled, errors: Uncertain): number =>
+      believe({ ...of, d: degrees(change) }, errors, gates).above(CLEAR);
+    return mixed(at(pooled, uncertain), (other) => at(other.pooled, other.uncertain));
+  };
+  const smallestFound = (): number =>
+    alternative
+      ? calledFrom(earlyAt, EARLY) + NINE_IN_TEN * uC0
+      : CLEAR + (studentQuantile(EARLY, nu) + NINE_IN_TEN) * uC0;
   return {
     d,
     uC: degrees(Math.sqrt(uC2)),
@@ -73,9 +123,14 @@ export const figuresOf = (
     pEarly: above(CLEAR),
     pIn: 1 - above(-CLEAR),
     pFlat: above(-FLAT) - above(FLAT),
-    pBefore60: studentAbove((BEFORE - pooled.pre) / uPre, nu),
+    pBefore60: mixed(studentAbove((BEFORE - pooled.pre) / uPre, nu), (other) =>
+      studentAbove(
+        (BEFORE - other.pooled.pre) / Math.sqrt(other.pooled.uPre ** 2 + other.uncertain.variance),
+        nu,
+      ),
+    ),
     pNotBack: above(0),
-    mdt90: degrees(CLEAR + (studentQuantile(0.95, nu) + NINE_IN_TEN) * uC0),
+    mdt90: degrees(smallestFound()),
     pelvis: { value: pooled.dPelvis, u: pooled.uPelvis },
     thigh: { value: pooled.dThigh, u: pooled.uThigh },
     pre: { value: pooled.pre, u: degrees(uPre) },

@@ -1,7 +1,7 @@
 import type { Degrees } from '#shared/geometry/units.ts';
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
 import type { Gates } from '#shared/protocol/protocol.ts';
-import type { Systematic, Uncertain } from './figures.ts';
+import type { Alternative, Systematic, Uncertain } from './figures.ts';
 import type { UsedRep } from './fit-rep.ts';
 import type { Pooled } from './pool.ts';
 import type { CurvePoint, ReadingFigures } from './types.ts';
@@ -19,6 +19,8 @@ export interface Joining {
 export interface Joined {
   readonly pooled: Pooled;
   readonly uncertain: Uncertain;
+  /** The same if skin slips twice as much, and how likely that is; absent: not believed possible. */
+  readonly twice?: Alternative | undefined;
   /** Change of turn from the upper gate to a higher lift, over the reps with a share. */
   readonly past90: (to: Degrees, shares: readonly number[]) => Degrees;
   /** The course drawn, with its 95 % band. */

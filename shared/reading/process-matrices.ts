@@ -1,4 +1,5 @@
-import { turnCovariance } from '#shared/course/turn-process.ts';
+import { gatedCovariance, turnCovariance } from '#shared/course/turn-process.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import type { SeenLift } from './process-frames.ts';
 
@@ -16,6 +17,10 @@ export interface SegmentBelief {
 export interface Belief {
   readonly thigh: SegmentBelief;
   readonly pelvis: SegmentBelief;
+  /** Covariance of both parts: of the person's turn, and of what differs between reps. */
+  readonly across: { readonly own: number; readonly perRep: number };
+  /** How much of the turn's variance belongs to a turn between the gates alone. */
+  readonly gated: number;
   /** Variance of the whole body's turn over the foot: outward for one part, inward for the other. */
   readonly wholeBody: number;
   /** Variance of where a rep's quiet stance lies against its rise, degrees². */
@@ -64,18 +69,28 @@ const filled = (
 /** Covariance of everything but the errors of single frames, degrees². */
 export const believedCovariance = (
   seen: readonly SeenLift[],
-  { thigh, pelvis, wholeBody, stance }: Belief,
+  { thigh, pelvis, across, gated, wholeBody, stance }: Belief,
   { zeroThigh, zeroPelvis }: Scatter,
+  { from, to }: Gates,
 ): Float64Array => {
+  const betweenGates = gatedCovariance(from, to);
   const curve = ({ own, slipShared, slipPerRep, perRep }: SegmentBelief, same: number): number =>
     own + slipShared + same * (slipPerRep + perRep + wholeBody);
   return filled(seen, (a, b) => {
     const k = turnCovariance(a.lift, b.lift);
     const same = a.rep === b.rep ? 1 : 0;
+    // skin and body move smoothly; the turn itself may begin and end at the gates
+    const gates = gated * (betweenGates(a.lift, b.lift) - k);
+    const turning = ({ own, perRep }: Pick<SegmentBelief, 'own' | 'perRep'>): number =>
+      own + same * perRep;
     return {
-      thigh: k * curve(thigh, same) + same * (stance + (zeroThigh[a.rep] ?? 0)),
-      pelvis: k * curve(pelvis, same) + same * (stance + (zeroPelvis[a.rep] ?? 0)),
-      across: -k * same * wholeBody,
+      thigh:
+        k * curve(thigh, same) + gates * turning(thigh) + same * (stance + (zeroThigh[a.rep] ?? 0)),
+      pelvis:
+        k * curve(pelvis, same) +
+        gates * turning(pelvis) +
+        same * (stance + (zeroPelvis[a.rep] ?? 0)),
+      across: -k * same * wholeBody + (k + gates) * turning(across),
     };
   });
 };

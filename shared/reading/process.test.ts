@@ -5,7 +5,14 @@ import type { Belief, Scatter } from './process-matrices.ts';
 import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 
 const segment = { own: 32, slipShared: 0.9, slipPerRep: 0.4, perRep: 1.1 };
-const belief: Belief = { thigh: segment, pelvis: segment, wholeBody: 4, stance: 1 };
+const belief: Belief = {
+  thigh: segment,
+  pelvis: segment,
+  across: { own: 0, perRep: 0 },
+  gated: 0,
+  wholeBody: 4,
+  stance: 1,
+};
 const scatter: Scatter = { factor: 1, zeroThigh: [0.2, 0.2, 0.2], zeroPelvis: [0.2, 0.2, 0.2] };
 
 interface Making {
@@ -121,6 +128,39 @@ describe('the regression over all reps', () => {
     const { random, variance } = windowOf(rise());
     expect(random).toBeGreaterThan(0);
     expect(random).toBeLessThan(variance);
+  });
+
+  it('believes that thigh and pelvis share a turn as far as it is told so', () => {
+    // the thigh is hardly seen: what the pelvis does tells of it
+    const seen = rise().map((s) => ({ ...s, thigh: 0, thighVariance: 1e4 }));
+    const shared = { ...belief, across: { own: 16, perRep: 0.5 } };
+    expect(Math.abs(windowOf(seen).thigh.mean)).toBeLessThan(0.3);
+    const { mean, thigh, pelvis, variance } = windowOf(seen, shared);
+    expect(thigh.mean).toBeGreaterThan(1);
+    expect(thigh.mean + pelvis.mean).toBeCloseTo(mean, 12);
+    expect(variance).toBeGreaterThan(0);
+    const blind = windowOf(rise({ variance: 1e8 }), shared);
+    expect(blind.variance).toBeCloseTo(2 * 32 + 2 * 16, 1);
+  });
+
+  it('finds a turn between the gates more easily where it believes in such turns', () => {
+    const gated = { ...belief, gated: 1 };
+    const steep = rise({ variance: 4 });
+    expect(windowOf(steep, gated).mean).toBeGreaterThan(windowOf(steep).mean);
+  });
+
+  it('finds a large turn likelier where it believes in one', () => {
+    const large = rise().map((s) => ({ ...s, thigh: 6 * s.thigh, pelvis: 6 * s.pelvis }));
+    const of = (seen: readonly SeenLift[], own: number): number =>
+      turnProcess(
+        seen,
+        { ...belief, thigh: { ...segment, own }, pelvis: { ...segment, own } },
+        scatter,
+        STANDARD_GATES,
+      )?.logLikelihood ?? NaN;
+    expect(of(large, 100)).toBeGreaterThan(of(large, 1));
+    const still = large.map((s) => ({ ...s, thigh: 0, pelvis: 0 }));
+    expect(of(still, 100)).toBeLessThan(of(still, 1));
   });
 
   it('has no answer where a frame has no number', () => {

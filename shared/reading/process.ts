@@ -1,5 +1,5 @@
 import { solveFactored, solveInPlace } from '#shared/course/linear.ts';
-import { turnCovariance } from '#shared/course/turn-process.ts';
+import { gatedCovariance, turnCovariance } from '#shared/course/turn-process.ts';
 import type { Gates } from '#shared/protocol/protocol.ts';
 import type { SeenLift } from './process-frames.ts';
 import {
@@ -27,6 +27,10 @@ export interface Believed extends Moments {
 /** The person's true turn as seen through all frames of all reps. */
 export interface TurnProcess {
   readonly change: (from: number, to: number) => Believed;
+  /** Variance of a change before anything is seen. */
+  readonly prior: (from: number, to: number) => number;
+  /** How well the belief explains what is seen: logarithm, up to a constant. */
+  readonly logLikelihood: number;
 }
 
 interface Solved {
@@ -51,6 +55,13 @@ const squareForm = (matrix: Float64Array, x: Float64Array): number => {
   return sum;
 };
 
+const logLikelihoodOf = (values: Float64Array, { triangle, answer }: Solved): number => {
+  const size = values.length;
+  let sum = -inner(values, answer) / 2;
+  for (let i = 0; i < size; i += 1) sum -= Math.log(triangle[i * size + i] ?? NaN);
+  return sum;
+};
+
 /**
  * Gaussian regression over all reps at once. Each part of the turn is the person's own smooth curve
  * of the lift, the slip of its skin, what differs from rep to rep, and the error of each frame; the
@@ -63,28 +74,40 @@ export const turnProcess = (
   { from, to }: Gates,
 ): TurnProcess | null => {
   const n = seen.length;
-  const believed = believedCovariance(seen, belief, scatter);
+  const believed = believedCovariance(seen, belief, scatter, { from, to });
+  const { across, gated } = belief;
+  const betweenGates = gatedCovariance(from, to);
+  const covariance = (a: number, b: number): number => {
+    const k = turnCovariance(a, b);
+    return k + gated * (betweenGates(a, b) - k);
+  };
+  const values = new Float64Array(2 * n);
+  for (const [i, { thigh, pelvis }] of seen.entries()) {
+    values[i] = thigh;
+    values[n + i] = pelvis;
+  }
 
   const solve = (slopes: Slopes): Solved | null => {
     const frames = frameCovariance(seen, scatter.factor, slopes);
     const triangle = believed.map((value, i) => value + (frames[i] ?? NaN));
-    const answer = new Float64Array(2 * n);
-    for (const [i, { thigh, pelvis }] of seen.entries()) {
-      answer[i] = thigh;
-      answer[n + i] = pelvis;
-    }
+    const answer = Float64Array.from(values);
     return solveInPlace(triangle, answer, 2 * n, 1) ? { frames, triangle, answer } : null;
   };
+
+  const unitOf = (low: number, high: number): number =>
+    covariance(high, high) + covariance(low, low) - 2 * covariance(low, high);
 
   const changeIn = ({ frames, triangle, answer }: Solved, from: number, to: number): Believed => {
     const thigh = new Float64Array(2 * n);
     const pelvis = new Float64Array(2 * n);
     for (const [i, { lift }] of seen.entries()) {
-      const k = turnCovariance(lift, to) - turnCovariance(lift, from);
+      const k = covariance(lift, to) - covariance(lift, from);
       thigh[i] = belief.thigh.own * k;
+      thigh[n + i] = across.own * k;
+      pelvis[i] = across.own * k;
       pelvis[n + i] = belief.pelvis.own * k;
     }
-    const unit = turnCovariance(to, to) + turnCovariance(from, from) - 2 * turnCovariance(from, to);
+    const unit = unitOf(from, to);
     const sides = new Float64Array(4 * n);
     sides.set(thigh, 0);
     sides.set(pelvis, 2 * n);
@@ -95,7 +118,7 @@ export const turnProcess = (
     const means = { thigh: inner(thigh, answer), pelvis: inner(pelvis, answer) };
     return {
       mean: means.thigh + means.pelvis,
-      variance: ofThigh + ofPelvis - 2 * inner(thigh, byPelvis),
+      variance: ofThigh + ofPelvis + 2 * (across.own * unit - inner(thigh, byPelvis)),
       thigh: { mean: means.thigh, variance: ofThigh },
       pelvis: { mean: means.pelvis, variance: ofPelvis },
       random: squareForm(
@@ -113,5 +136,12 @@ export const turnProcess = (
     thigh: rough.thigh.mean / (to - from),
     pelvis: rough.pelvis.mean / (to - from),
   });
-  return solved && { change: (low, high) => changeIn(solved, low, high) };
+  return (
+    solved && {
+      change: (low, high) => changeIn(solved, low, high),
+      prior: (low, high) =>
+        (belief.thigh.own + belief.pelvis.own + 2 * across.own) * unitOf(low, high),
+      logLikelihood: logLikelihoodOf(values, solved),
+    }
+  );
 };

@@ -54,6 +54,30 @@ describe('the rule', () => {
     expect(decide(figures(-3, 2, 20, 2)).line).not.toBe(4);
   });
 
+  it('counts what would be believed if something else were true as far as that is likely', () => {
+    const uncertain = { variance: 2.5, q: 0.05 };
+    const assumed = { thighTurnsLittle: false, gates: STANDARD_GATES };
+    const of = (d: number, chance: number | null) =>
+      figuresOf(pooled(d, 1), uncertain, {
+        ...assumed,
+        alternative:
+          chance === null
+            ? undefined
+            : { pooled: pooled(d, 1), uncertain: { variance: 10, q: 0.05 }, chance },
+      });
+    const wider = figuresOf(pooled(5, 1), { variance: 10, q: 0.05 }, assumed);
+    expect(of(5, 0).pEarly).toBeCloseTo(of(5, null).pEarly, 12);
+    expect(of(5, 1).pEarly).toBeCloseTo(wider.pEarly, 12);
+    expect(of(5, 0.25).pEarly).toBeCloseTo(0.75 * of(5, null).pEarly + 0.25 * wider.pEarly, 12);
+    expect(of(5, 0.25).pFlat).toBeCloseTo(0.75 * of(5, null).pFlat + 0.25 * wider.pFlat, 12);
+    // what is shown beside the change stands for what is assumed
+    expect(of(5, 0.25).uC).toBe(of(5, null).uC);
+    expect(of(5, 0.5).mdt90).toBeGreaterThan(of(5, 0.1).mdt90);
+    // a turn of that size stands 1.28 uncertainties above the line where a call begins
+    const called = of(0, 0.25).mdt90 - 1.2816 * of(0, 0.25).uC0;
+    expect(of(called, 0.25).pEarly).toBeCloseTo(0.95, 3);
+  });
+
   it('asks for 95 in 100 exactly', () => {
     const base = figures(0, 2);
     expect(decide({ ...base, pEarly: 0.95 }).line).toBe(3);

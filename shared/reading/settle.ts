@@ -1,6 +1,7 @@
 import { degrees } from '#shared/geometry/units.ts';
 import { type LandmarkSetId, LANDMARK_SETS } from '#shared/landmarks/types.ts';
 import { LEAST_QUIET } from '#shared/measures/reference.ts';
+import { ACHIEVED } from '#shared/measures/achieved.ts';
 import { type Gates, gatesOf, type ReadingRules } from '#shared/protocol/protocol.ts';
 import type { Assessed } from './assess.ts';
 import type { EngineVersion } from './engine.ts';
@@ -11,6 +12,11 @@ import type { ReadingFigures } from './types.ts';
 import { inBand } from './usable.ts';
 
 type Typical = Readonly<Record<LandmarkSetId, readonly [one: number, three: number]>>;
+
+const now = (set: LandmarkSetId): readonly [number, number] => [
+  ACHIEVED[set].toldFromNone.one / 1.96,
+  ACHIEVED[set].toldFromNone.three / 1.96,
+];
 
 /** Typical uncertainty of the change from 60° to 90° with one rep and with three, degrees: from our model. */
 const TYPICAL: Readonly<Record<EngineVersion, Typical>> = {
@@ -24,6 +30,7 @@ const TYPICAL: Readonly<Record<EngineVersion, Typical>> = {
     belt: [9.1 / 1.96, 6.8 / 1.96],
     'belt+thigh': [5.5 / 1.96, 3.9 / 1.96],
   },
+  3: { bare: now('bare'), belt: now('belt'), 'belt+thigh': now('belt+thigh') },
 };
 
 /** With so many marked frames a foot that never leaves the floor is a clip without quiet stance. */

@@ -1,5 +1,6 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import { readingInputOf, TRIAL_SETS } from '#shared/evaluate/trial.ts';
+import { ACHIEVED } from '#shared/measures/achieved.ts';
 import { deriveReading } from '#shared/reading/derive.ts';
 import { atMost } from './binomial.ts';
 import { clipsOf } from './clip.ts';
@@ -75,6 +76,20 @@ describe.each(TRIAL_SETS)('200 trials read with %s', (set) => {
       const larger = table.power.filter((each) => each.reps === reps && each.size >= size);
       expect(larger.length).toBeGreaterThan(0);
       for (const { found } of larger) expect(notBelow(FOUND, found)).toBe(true);
+    }
+  });
+
+  it('tell from none the changes that pages name', () => {
+    const { toldFromNone } = ACHIEVED[set === 'belt+prior' ? 'belt+assumption' : set];
+    for (const [reps, named] of [
+      [1, toldFromNone.one],
+      [3, toldFromNone.three],
+    ] as const) {
+      const widths = table.power.flatMap((each) =>
+        each.reps === reps ? (each.smallestChange ?? []) : [],
+      );
+      const mean = widths.reduce((sum, width) => sum + width / widths.length, 0);
+      expect(Math.abs(mean / named - 1)).toBeLessThan(0.1);
     }
   });
 

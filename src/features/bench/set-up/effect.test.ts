@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { framePoint } from '#shared/geometry/points.ts';
 import { degrees } from '#shared/geometry/units.ts';
+import { ACHIEVED } from '#shared/measures/achieved.ts';
 import {
   distanceEffect,
   floorEffect,
@@ -36,9 +37,9 @@ describe('what the set-up makes measurable', () => {
   it('pointers', () => {
     const text = (belt: number | null, thigh: number | null) =>
       pointersEffect({ beltPointerMm: belt, thighPointerMm: thigh }).text;
-    expect(text(null, 120)).toContain('16°');
-    expect(text(140, null)).toContain('13.5°');
-    expect(text(140, 120)).toContain('5.5°');
+    expect(text(null, 120)).toContain(`${ACHIEVED.bare.toldFromNone.one}°`);
+    expect(text(140, null)).toContain(`${ACHIEVED.belt.toldFromNone.one}°`);
+    expect(text(140, 120)).toContain(`${ACHIEVED['belt+thigh'].toldFromNone.one}°`);
   });
 
   it('plumb line', () => {

@@ -1,6 +1,7 @@
 import type { ClipGeometry, Scale, Shutter } from '#shared/contracts/clips.ts';
 import { distance, plumbTilt } from '#shared/geometry/points.ts';
-import { FILMING_LIMITS as LIMITS, SMALLEST_IN_ONE_REP } from '#shared/measures/filming-limits.ts';
+import { ACHIEVED } from '#shared/measures/achieved.ts';
+import { FILMING_LIMITS as LIMITS } from '#shared/measures/filming-limits.ts';
 import type { OffFront } from '#shared/measures/off-front.ts';
 import { mmPerPxOf } from '#shared/records/scale.ts';
 import { decimal, degrees, metres, plusMinus } from '#src/ui/figures.ts';
@@ -56,16 +57,16 @@ export const pointersEffect = ({
 }: Pick<ClipGeometry, 'beltPointerMm' | 'thighPointerMm'>): Effect => {
   if (belt === null)
     return {
-      text: `Bare landmarks: only a change of turn of ${SMALLEST_IN_ONE_REP.bare}° or more can be told from none.`,
+      text: `Bare landmarks: one rep tells a change of turn from none only beyond ${ACHIEVED.bare.toldFromNone.one}°.`,
       kind: 'wait',
     };
   return thigh === null
     ? {
-        text: `Belt pointer: a change of turn of ${SMALLEST_IN_ONE_REP.belt}° can be told from none.`,
+        text: `Belt pointer: one rep tells a change of turn from none beyond ${ACHIEVED.belt.toldFromNone.one}°, three beyond ${ACHIEVED.belt.toldFromNone.three}°.`,
         kind: 'wait',
       }
     : {
-        text: `Both pointers: a change of turn of ${SMALLEST_IN_ONE_REP['belt+thigh']}° can be told from none.`,
+        text: `Both pointers: one rep tells a change of turn from none beyond ${ACHIEVED['belt+thigh'].toldFromNone.one}°, three beyond ${ACHIEVED['belt+thigh'].toldFromNone.three}°.`,
         kind: 'done',
       };
 };

@@ -1,4 +1,5 @@
 import type { Visit } from '#shared/contracts/visits.ts';
+import { ACHIEVED } from '#shared/measures/achieved.ts';
 import { metres } from '#src/ui/figures.ts';
 
 export type FilmingKey = keyof Visit['filming'];
@@ -47,7 +48,7 @@ export const FILMING: readonly Figure[] = [
     label: 'Thigh pointer',
     unit: 'mm',
     hint: 'From the skin to its tip.',
-    without: 'three reps show a turn of 8.8° instead of 3.9°',
+    without: `three reps tell a change of turn from none beyond ${ACHIEVED.belt.toldFromNone.three}° instead of ${ACHIEVED['belt+thigh'].toldFromNone.three}°`,
   },
 ];
 

@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import type { Visit } from '#shared/contracts/visits.ts';
+import { ACHIEVED } from '#shared/measures/achieved.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { capital, inWords } from '#src/ui/figures.ts';
 import { lengthWords } from '../filming/filming-words.ts';
@@ -53,8 +54,11 @@ export function FilmingGuide({
         Measure from the line between both corners to the tip.
       </Step>
       <Step drawing={<ThighDrawing length={mm(thighPointerMm)} />} title="Thigh pointer">
-        On a strap all around the standing thigh, just above the kneecap. With both pointers three
-        reps show a turn of 3.9°; with the belt alone 8.8°.
+        On a strap all around the standing thigh, just above the kneecap. Three reps tell a change
+        of turn from none beyond {ACHIEVED['belt+thigh'].toldFromNone.three}° with both pointers,
+        beyond {ACHIEVED.belt.toldFromNone.three}° with the belt alone. An early turn has to be
+        larger to be found: {ACHIEVED['belt+thigh'].foundFrom}° and {ACHIEVED.belt.foundFrom}° nine
+        times in ten.
       </Step>
       <Step
         drawing={<LiftDrawing gates={{ from: gateFrom, to: gateTo }} />}

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { ACHIEVED } from '#shared/measures/achieved.ts';
 import { FILMING_LIMITS as LIMITS } from '#shared/measures/filming-limits.ts';
 import type { Warning } from '#shared/reading/reasons.ts';
 import { seconds } from '#shared/timing/units.ts';
@@ -125,7 +126,7 @@ describe('the way of filming', () => {
       bodyHeightMm: null,
     });
     expect(filmingAdvice(bare).map(plain)).toEqual([
-      'The set-up lacks the distance (no lift and no turn without it), the lens height (lift is known to ± 7° instead of ± 2°), a rod or the body height (15 % off the scale makes the turn 20 % wrong) and pointer lengths (one rep shows a turn of 16° without pointers, of 5.5° with both). Write down what you know under “3 Film” before you send: clips take it along.',
+      `The set-up lacks the distance (no lift and no turn without it), the lens height (lift is known to ± 7° instead of ± 2°), a rod or the body height (15 % off the scale makes the turn 20 % wrong) and pointer lengths (one rep tells a change of turn from none beyond ${ACHIEVED.bare.toldFromNone.one}° without pointers, beyond ${ACHIEVED['belt+thigh'].toldFromNone.one}° with both). Write down what you know under “3 Film” before you send: clips take it along.`,
     ]);
   });
 

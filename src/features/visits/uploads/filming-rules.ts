@@ -1,10 +1,10 @@
 import type { Visit } from '#shared/contracts/visits.ts';
+import { ACHIEVED } from '#shared/measures/achieved.ts';
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import {
   FILMING_LIMITS as LIMITS,
   isSlow,
   shownAlongLongEdge,
-  SMALLEST_IN_ONE_REP,
 } from '#shared/measures/filming-limits.ts';
 import type { Warning } from '#shared/reading/reasons.ts';
 import type { LookedAtClip } from '#src/video/look-at-file.ts';
@@ -98,7 +98,7 @@ const percent = (share: number): string => `${decimal(100 * share, 0)}\u00a0%`;
 /** What the set-up does not say, each with its price. */
 const lacksOf = (chosen: Chosen): string[] => {
   const { details, filming, bodyHeightMm } = chosen;
-  const { bare, 'belt+thigh': both } = SMALLEST_IN_ONE_REP;
+  const { bare, 'belt+thigh': both } = ACHIEVED;
   const lacks = [
     filming.distanceMm === null ? 'the distance (no lift and no turn without it)' : null,
     BEFORE_SENDING['lens-height-missing'](chosen),
@@ -106,7 +106,7 @@ const lacksOf = (chosen: Chosen): string[] => {
       ? `a rod or the body height (${percent(LIMITS.scaleError.value)} off the scale makes the turn ${percent(LIMITS.turnErrorByScale.value)} wrong)`
       : null,
     details.view === 'front' && filming.beltPointerMm === null
-      ? `pointer lengths (one rep shows a turn of ${bare}° without pointers, of ${both}° with both)`
+      ? `pointer lengths (one rep tells a change of turn from none beyond ${bare.toldFromNone.one}° without pointers, beyond ${both.toldFromNone.one}° with both)`
       : null,
   ];
   return lacks.filter((lack) => lack !== null);
