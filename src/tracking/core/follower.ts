@@ -3,6 +3,24 @@ import { align, type Aligned, compare } from './align.ts';
 import { confidenceOf, isItself, isUnmistakable, spreadOf, stateOf } from './certainty.ts';
 import { coveredShare } from './covered.ts';
 import { flow, type Place } from './flow.ts';
+import {
+  BACK,
+  DISTINCT,
+  DOUBTFUL,
+  EXPECTED,
+  FORESEEN,
+  FOUND_AGAIN,
+  HOME_REACH,
+  JERK,
+  LEVELS,
+  NEAR,
+  ON_ITS_WAY,
+  REACH,
+  REFINE_REACH,
+  RETURNED,
+  SEARCH_LEVEL,
+  SEARCH_RADIUS,
+} from './follower-bounds.ts';
 import type { Plane } from './plane.ts';
 import { pyramidAround, type Pyramid, toLevelX, toLevelY } from './pyramid.ts';
 import { search } from './search.ts';
@@ -26,32 +44,6 @@ export interface Seen {
   readonly state: TrackState;
 }
 
-const LEVELS = 4;
-/** The level on which a lost point is looked for. */
-const SEARCH_LEVEL = 2;
-const SEARCH_RADIUS = 8;
-/** Half the side of what is looked at about a point, pixels. */
-const REACH = 128;
-/** How far refining may move what stepping found, pixels. */
-const REFINE_REACH = 7;
-/** How far it may lie from where its velocity brings it, to be just as expected, pixels. */
-const EXPECTED = 5;
-/** Below this likeness other ways of finding the point are tried. */
-const DOUBTFUL = 0.8;
-/** A lost point is believed to be back from this likeness on … */
-const BACK = 0.86;
-/** … if nothing else nearby is nearly as much like it. */
-const DISTINCT = 0.06;
-
-/** What is found again within this of where it is expected is most likely the same, pixels. */
-const NEAR = 6;
-/** Forth and back again within this, the step itself can be believed, pixels. */
-const RETURNED = 2;
-/** Half of that already is a jerk, unless the point looks exactly as it did. */
-const JERK = 0.5;
-/** What is found elsewhere may be another dot that looks the same: a person has to look at it. */
-const FOUND_AGAIN = 0.4;
-
 interface Candidate extends Aligned {
   readonly template: Template;
   readonly roundTrip: number | null;
@@ -60,6 +52,7 @@ interface Candidate extends Aligned {
 /** Follows one point away from its keyframe, picture by picture, in either direction of time. */
 export class Follower {
   readonly #settings: FollowSettings;
+  readonly #home: Place;
   /** Of the keyframe: never replaced. */
   readonly #first: Template;
   readonly #searched: Template;
@@ -83,6 +76,7 @@ export class Follower {
 
   constructor(picture: Plane, at: Place, settings: FollowSettings = SETTINGS) {
     this.#settings = settings;
+    this.#home = at;
     this.#warp = atPlace(at.x, at.y);
     this.#newestWarp = this.#warp;
     this.#picture = picture;
@@ -127,7 +121,7 @@ export class Follower {
       fall,
       covered,
       ...middle,
-      roundTrip: best.roundTrip,
+      roundTrip: this.#velocityKnown && astray && leap < FORESEEN ? null : best.roundTrip,
       spread: spreadOf(best.template, best.correlation),
       scale: scaleOf(best.warp),
     };
@@ -135,7 +129,9 @@ export class Follower {
     const state = stateOf(confidence);
     if (state === 'lost') return this.#lose();
     this.#take(best, picture, from);
-    if (this.#trust > FOUND_AGAIN) this.#trust = Math.min(1, this.#trust + 0.05);
+    // where a hand has placed it, and as it looked there: no other dot
+    const atHome = this.#fromHome(best) < NEAR && isItself(best.correlation, middle.core);
+    if (this.#trust > FOUND_AGAIN || atHome) this.#trust = Math.min(1, this.#trust + 0.05);
     if (state === 'sure' && fall < 0.03 && covered === 0) this.#refresh(picture, best);
     return { place: { x: best.warp.tx, y: best.warp.ty }, confidence, state };
   }
@@ -189,10 +185,15 @@ export class Follower {
     return this.#refine(after, there, roundTrip);
   }
 
-  #refine(after: Pyramid, at: Place, roundTrip: number | null): Candidate | null {
+  #refine(
+    after: Pyramid,
+    at: Place,
+    roundTrip: number | null,
+    shape = this.#warp,
+  ): Candidate | null {
     const plane = after[0]?.plane;
     if (!plane) return null;
-    const first = align(plane, this.#first, movedTo(this.#warp, at.x, at.y), REFINE_REACH);
+    const first = align(plane, this.#first, movedTo(shape, at.x, at.y), REFINE_REACH);
     const byFirst = first && { ...first, template: this.#first, roundTrip };
     if (this.#newest === this.#first) return byFirst;
     const newest = align(plane, this.#newest, movedTo(this.#newestWarp, at.x, at.y), REFINE_REACH);
@@ -203,24 +204,27 @@ export class Follower {
   }
 
   /** A wide look on a coarse level for what the keyframe showed, then refined. */
-  #fetch(after: Pyramid, about: Place, reach: number): Candidate | null {
+  #fetch(after: Pyramid, about: Place, reach: number, shape = this.#warp): Candidate | null {
     const level = after[SEARCH_LEVEL];
     if (!level) return null;
-    const start = movedTo(this.#warp, toLevelX(level, about.x), toLevelY(level, about.y));
+    const start = movedTo(shape, toLevelX(level, about.x), toLevelY(level, about.y));
     const found = search(level.plane, this.#searched, start, reach);
     if (!found || found.second > found.correlation - DISTINCT) return null;
     const at = {
       x: level.x0 + found.warp.tx * level.scale,
       y: level.y0 + found.warp.ty * level.scale,
     };
-    return this.#refine(after, at, null);
+    return this.#refine(after, at, null, shape);
   }
 
+  /** Along its way, where it was placed, and at last all around where it was seen. */
   #lookFor(picture: Plane): Seen {
     const about = { x: this.#warp.tx, y: this.#warp.ty };
-    const after = pyramidAround(picture, about.x, about.y, REACH, LEVELS);
-    const found = this.#fetch(after, about, Math.min(18, 8 + this.#lostFor));
-    if (!found || found.correlation < BACK) return this.#lose();
+    const found =
+      this.#lookOn(picture, about) ??
+      this.#lookNear(picture, this.#home, HOME_REACH, atPlace(this.#home.x, this.#home.y)) ??
+      this.#lookNear(picture, about, Math.min(18, 8 + this.#lostFor));
+    if (!found) return this.#lose();
     const leap = Math.hypot(found.warp.tx - about.x, found.warp.ty - about.y);
     this.#trust = leap > this.#near() ? FOUND_AGAIN : Math.min(this.#trust, 0.45);
     this.#take(found, picture, about);
@@ -232,6 +236,27 @@ export class Follower {
       confidence,
       state: stateOf(confidence),
     };
+  }
+
+  /** Where its velocity would have brought it by now, for a short while. */
+  #lookOn(picture: Plane, { x, y }: Place): Candidate | null {
+    if (this.#lostFor > ON_ITS_WAY || !this.#velocityKnown) return null;
+    const pictures = this.#lostFor + 1;
+    const guess = { x: x + pictures * this.#velocity.x, y: y + pictures * this.#velocity.y };
+    const warp = movedTo(this.#warp, guess.x, guess.y);
+    const found = align(picture, this.#first, warp, EXPECTED * pictures);
+    return found && found.correlation >= BACK
+      ? { ...found, template: this.#first, roundTrip: null }
+      : null;
+  }
+
+  #lookNear(picture: Plane, at: Place, reach: number, shape?: Warp): Candidate | null {
+    const found = this.#fetch(pyramidAround(picture, at.x, at.y, REACH, LEVELS), at, reach, shape);
+    return found && found.correlation >= BACK ? found : null;
+  }
+
+  #fromHome({ warp }: Candidate): number {
+    return Math.hypot(warp.tx - this.#home.x, warp.ty - this.#home.y);
   }
 
   /** The faster it went, the less is known of where it is now. */
