@@ -95,7 +95,7 @@ const ATHLETES: readonly AthleteStory[] = [
               rendered: 'bare-still',
               supportSide: 'right',
               named: [0, 1, 2],
-              marked: [0, 1],
+              marked: [0],
               seed: 753,
               spreadPx: 3,
             },
