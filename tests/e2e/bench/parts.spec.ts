@@ -27,7 +27,7 @@ test('without a rep the Bench says what to do, and a rep is named by its span', 
   page,
 }) => {
   await openBench(page, made.clipId);
-  await expect(page.getByRole('heading', { name: 'No rep yet' })).toBeVisible();
+  await expect(page.getByRole('heading', { name: 'No rep yet', exact: true })).toBeVisible();
   // each landmark can be touched once for the marks to follow, or the rep is named by hand
   await expect(page.getByRole('heading', { name: /^Next: front corner/ })).toBeVisible();
   await page.getByRole('button', { name: 'Name the reps by hand' }).click();
