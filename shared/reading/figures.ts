@@ -66,13 +66,13 @@ const believe = ({ d, uR, nuR }: Pooled, { variance: u02, q }: Uncertain, gates:
   return { uC0, uS2, uC2, nu, m, sM, above: (x: number) => studentAbove((x - m) / sM, nu) };
 };
 
-/** Change from which on an early turn is called, with these errors, where `needed` is probable enough. */
-const calledFrom = (pEarlyOf: (d: number) => number, needed: number): number => {
+/** Change from which on an early turn is called, with these errors. */
+const calledFrom = (pEarlyOf: (d: number) => number): number => {
   let low = CLEAR;
   let high = 2 * CONSTANTS.prior.value;
   for (let i = 0; i < 40; i += 1) {
     const middle = (low + high) / 2;
-    if (pEarlyOf(middle) < needed) low = middle;
+    if (pEarlyOf(middle) < EARLY) low = middle;
     else high = middle;
   }
   return high;
@@ -94,23 +94,20 @@ export const figuresOf = (
   { thighTurnsLittle, gates, alternative }: Assumed,
 ): ReadingFigures => {
   const { d, uR } = pooled;
-  const u02 = uncertain.variance;
-  const { uC0, uS2, uC2, nu, m, sM, above: aboveAssumed } = believe(pooled, uncertain, gates);
-  const uPre = Math.sqrt(pooled.uPre ** 2 + u02);
-  const chance = alternative?.chance ?? 0;
-  const mixed = (assumed: number, other: (alternative: Alternative) => number): number =>
-    alternative ? (1 - chance) * assumed + chance * other(alternative) : assumed;
-  const aboveOther = alternative && believe(alternative.pooled, alternative.uncertain, gates).above;
-  const above = (x: number): number => mixed(aboveAssumed(x), () => aboveOther?.(x) ?? NaN);
-  const earlyAt = (change: number): number => {
-    const at = (of: Pooled, errors: Uncertain): number =>
-      believe({ ...of, d: degrees(change) }, errors, gates).above(CLEAR);
-    return mixed(at(pooled, uncertain), (other) => at(other.pooled, other.uncertain));
-  };
-  const smallestFound = (): number =>
-    alternative
-      ? calledFrom(earlyAt, EARLY) + NINE_IN_TEN * uC0
-      : CLEAR + (studentQuantile(EARLY, nu) + NINE_IN_TEN) * uC0;
+  const { uC0, uS2, uC2, nu, m, sM } = believe(pooled, uncertain, gates);
+  const before = ({ uPre }: Pooled, { variance }: Uncertain): number =>
+    Math.sqrt(uPre ** 2 + variance);
+  const beliefs: readonly Alternative[] = alternative
+    ? [{ pooled, uncertain, chance: 1 - alternative.chance }, alternative]
+    : [{ pooled, uncertain, chance: 1 }];
+  const mixed = (of: (pooled: Pooled, uncertain: Uncertain) => number): number =>
+    beliefs.reduce((sum, each) => sum + each.chance * of(each.pooled, each.uncertain), 0);
+  const above = (x: number): number => mixed((one, errors) => believe(one, errors, gates).above(x));
+  const earlyAt = (change: number): number =>
+    mixed((one, errors) => believe({ ...one, d: degrees(change) }, errors, gates).above(CLEAR));
+  const smallest = alternative
+    ? calledFrom(earlyAt) + NINE_IN_TEN * uC0
+    : CLEAR + (studentQuantile(EARLY, nu) + NINE_IN_TEN) * uC0;
   return {
     d,
     uC: degrees(Math.sqrt(uC2)),
@@ -123,17 +120,12 @@ export const figuresOf = (
     pEarly: above(CLEAR),
     pIn: 1 - above(-CLEAR),
     pFlat: above(-FLAT) - above(FLAT),
-    pBefore60: mixed(studentAbove((BEFORE - pooled.pre) / uPre, nu), (other) =>
-      studentAbove(
-        (BEFORE - other.pooled.pre) / Math.sqrt(other.pooled.uPre ** 2 + other.uncertain.variance),
-        nu,
-      ),
-    ),
+    pBefore60: mixed((one, errors) => studentAbove((BEFORE - one.pre) / before(one, errors), nu)),
     pNotBack: above(0),
-    mdt90: degrees(smallestFound()),
+    mdt90: degrees(smallest),
     pelvis: { value: pooled.dPelvis, u: pooled.uPelvis },
     thigh: { value: pooled.dThigh, u: pooled.uThigh },
-    pre: { value: pooled.pre, u: degrees(uPre) },
+    pre: { value: pooled.pre, u: degrees(before(pooled, uncertain)) },
     lambda: thighTurnsLittle ? pooled.lambda : null,
   };
 };

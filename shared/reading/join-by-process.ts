@@ -1,24 +1,21 @@
 import { CONSTANTS, SYSTEMATIC } from '#shared/measures/constants.ts';
-import type { UsedRep } from './fit-rep.ts';
 import type { Joined, Joining } from './joined.ts';
 import { joinedProcess } from './joined-process.ts';
 import { turnProcess } from './process.ts';
 import { seenLifts } from './process-frames.ts';
-import type { Belief, SegmentBelief } from './process-matrices.ts';
-import { LEAST_FACTOR, riseScatter } from './rise-scatter.ts';
+import { type Belief, type SegmentBelief, slipBelief } from './process-matrices.ts';
+import { riseScatter, scatterOf } from './rise-scatter.ts';
 
 const PRIOR2 = CONSTANTS.prior.value ** 2;
 const THIGH2 = CONSTANTS.thighSpread.value ** 2;
 const REP2 = CONSTANTS.repSpread.value ** 2;
-const PRIOR_FRAMES = 6;
 
 /** A practice's own systematic error scales the assumed slips. */
 const beliefOf = ({ thighTurnsLittle, systematic }: Joining): Belief => {
   const own = thighTurnsLittle ? 1 : systematic.u / SYSTEMATIC.belt.u;
   const segment = (slip: number, variance: number): SegmentBelief => ({
     own: variance,
-    slipShared: CONSTANTS.slipShared.value * (own * slip) ** 2,
-    slipPerRep: (1 - CONSTANTS.slipShared.value) * (own * slip) ** 2,
+    ...slipBelief(own * slip),
     perRep: REP2 / 2,
   });
   const thigh = thighTurnsLittle ? THIGH2 : PRIOR2 / 2;
@@ -33,13 +30,6 @@ const beliefOf = ({ thighTurnsLittle, systematic }: Joining): Belief => {
   };
 };
 
-/** How much larger the frames' scatter is than their marks explain, over all reps together. */
-const scatterFactor = (used: readonly UsedRep[]): { factor: number; nu: number } => {
-  const { squares, free } = riseScatter(used);
-  const nu = PRIOR_FRAMES + free;
-  return { factor: Math.max(LEAST_FACTOR, (PRIOR_FRAMES + squares) / nu), nu };
-};
-
 /**
  * Engine 2 with a belt pointer alone: one Gaussian regression over the frames of all reps, pelvis and
  * femur each with its own error. The pelvis is then seen five times better than the femur, and
@@ -51,16 +41,8 @@ const scatterFactor = (used: readonly UsedRep[]): { factor: number; nu: number }
  */
 export const joinByProcess = (joining: Joining): Joined | null => {
   const { used, gates } = joining;
-  const belief = beliefOf(joining);
-  const { factor, nu } = scatterFactor(used);
-  const zero = (read: (rep: UsedRep) => number | undefined): readonly number[] =>
-    used.map((rep) => (read(rep) ?? 0) * (180 / Math.PI) ** 2 * factor);
+  const { scatter, nu } = scatterOf(used, riseScatter(used));
   const seen = used.flatMap((rep, at) => seenLifts(rep, at));
-  const scatter = {
-    factor,
-    zeroThigh: zero(({ course }) => course.setting.turnZero?.femurVariance),
-    zeroPelvis: zero(({ course }) => course.setting.turnZero?.pelvisVariance),
-  };
-  const process = turnProcess(seen, belief, scatter, gates);
+  const process = turnProcess(seen, beliefOf(joining), scatter, gates);
   return process && joinedProcess(process, seen, joining, nu);
 };

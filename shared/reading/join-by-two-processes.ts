@@ -1,17 +1,15 @@
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
 import { CONSTANTS, SYSTEMATIC } from '#shared/measures/constants.ts';
-import type { UsedRep } from './fit-rep.ts';
 import type { Joined, Joining } from './joined.ts';
 import { joinedProcess } from './joined-process.ts';
 import { turnProcess, type TurnProcess } from './process.ts';
 import { seenLifts } from './process-frames.ts';
-import type { Belief, Scatter, SegmentBelief } from './process-matrices.ts';
+import { type Belief, type SegmentBelief, slipBelief } from './process-matrices.ts';
 import { quietScatter, type Scattered } from './quiet-scatter.ts';
-import { LEAST_FACTOR, riseScatter } from './rise-scatter.ts';
+import { riseScatter, scatterOf } from './rise-scatter.ts';
 
 const PRIOR2 = CONSTANTS.prior.value ** 2;
 const REP2 = CONSTANTS.repSpread.value ** 2;
-const PRIOR_FRAMES = 6;
 const TWICE = 2;
 
 const pelvisSlip = (set: LandmarkSetId): number =>
@@ -23,15 +21,11 @@ const ACROSS = 1 / 6;
 
 /** `size`: of the slips, times what is assumed. */
 const beliefOf = ({ set }: Joining, size: number): Belief => {
-  const segment = (slip: number): SegmentBelief => {
-    const slip2 = (size * slip) ** 2;
-    return {
-      own: PRIOR2 * EACH,
-      slipShared: CONSTANTS.slipShared.value * slip2,
-      slipPerRep: (1 - CONSTANTS.slipShared.value) * slip2,
-      perRep: REP2 * EACH,
-    };
-  };
+  const segment = (slip: number): SegmentBelief => ({
+    own: PRIOR2 * EACH,
+    ...slipBelief(size * slip),
+    perRep: REP2 * EACH,
+  });
   return {
     thigh: segment(CONSTANTS.kneeSlip.value),
     pelvis: segment(pelvisSlip(set)),
@@ -45,25 +39,6 @@ const beliefOf = ({ set }: Joining, size: number): Belief => {
 /** What stands still is easier to mark than what moves, and counts no more. */
 const noMoreThan = (free: number, all: Scattered): Scattered =>
   all.free <= free ? all : { squares: (all.squares * free) / all.free, free };
-
-const scatterOf = (
-  used: readonly UsedRep[],
-): { readonly scatter: Scatter; readonly nu: number } => {
-  const rise = riseScatter(used);
-  const quiet = noMoreThan(rise.free, quietScatter(used));
-  const nu = PRIOR_FRAMES + rise.free + quiet.free;
-  const factor = Math.max(LEAST_FACTOR, (PRIOR_FRAMES + rise.squares + quiet.squares) / nu);
-  const zero = (read: (rep: UsedRep) => number | undefined): readonly number[] =>
-    used.map((rep) => (read(rep) ?? 0) * (180 / Math.PI) ** 2 * factor);
-  return {
-    nu,
-    scatter: {
-      factor,
-      zeroThigh: zero(({ course }) => course.setting.turnZero?.femurVariance),
-      zeroPelvis: zero(({ course }) => course.setting.turnZero?.pelvisVariance),
-    },
-  };
-};
 
 /** Chance of slips twice as large, from a chance of one in three and what the frames show. */
 const chanceOfTwice = (once: TurnProcess, twice: TurnProcess): number => {
@@ -83,7 +58,8 @@ const chanceOfTwice = (once: TurnProcess, twice: TurnProcess): number => {
 export const joinByTwoProcesses = (joining: Joining): Joined | null => {
   const { used, set, systematic, gates } = joining;
   const measuredBy = systematic.u / SYSTEMATIC[set].u;
-  const { scatter, nu } = scatterOf(used);
+  const rise = riseScatter(used);
+  const { scatter, nu } = scatterOf(used, rise, noMoreThan(rise.free, quietScatter(used)));
   const seen = used.flatMap((rep, at) => seenLifts(rep, at));
   const once = turnProcess(seen, beliefOf(joining, measuredBy), scatter, gates);
   const joined = once && joinedProcess(once, seen, joining, nu);

@@ -14,6 +14,12 @@ export interface SegmentBelief {
   readonly perRep: number;
 }
 
+/** Skin that slips by so much (a standard deviation, degrees): a part alike in all reps, a part in each its own. */
+export const slipBelief = (slip: number): Pick<SegmentBelief, 'slipShared' | 'slipPerRep'> => ({
+  slipShared: CONSTANTS.slipShared.value * slip ** 2,
+  slipPerRep: (1 - CONSTANTS.slipShared.value) * slip ** 2,
+});
+
 export interface Belief {
   readonly thigh: SegmentBelief;
   readonly pelvis: SegmentBelief;

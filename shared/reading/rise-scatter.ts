@@ -1,9 +1,10 @@
 import { CONSTANTS } from '#shared/measures/constants.ts';
 import type { UsedRep } from './fit-rep.ts';
+import type { Scatter } from './process-matrices.ts';
 import type { Scattered } from './quiet-scatter.ts';
 
 /** Tracked marks drift: what they err together does not show as scatter, and is at least that of a hand. */
-export const LEAST_FACTOR = 1 / CONSTANTS.trackedFactor.value ** 2;
+const LEAST_FACTOR = 1 / CONSTANTS.trackedFactor.value ** 2;
 
 const PRIOR_FRAMES = 6;
 const TERMS = 4;
@@ -18,4 +19,27 @@ export const riseScatter = (used: readonly UsedRep[]): Scattered => {
     free += frames - TERMS;
   }
   return { squares, free };
+};
+
+/**
+ * How much larger marks scatter than is assumed of them, over all reps together, from what was seen of
+ * it; the assumption counts as six free squares. `nu`: degrees of freedom.
+ */
+export const scatterOf = (
+  used: readonly UsedRep[],
+  ...seen: readonly Scattered[]
+): { readonly scatter: Scatter; readonly nu: number } => {
+  const nu = seen.reduce((sum, { free }) => sum + free, PRIOR_FRAMES);
+  const squares = seen.reduce((sum, each) => sum + each.squares, PRIOR_FRAMES);
+  const factor = Math.max(LEAST_FACTOR, squares / nu);
+  const zero = (read: (rep: UsedRep) => number | undefined): readonly number[] =>
+    used.map((rep) => (read(rep) ?? 0) * (180 / Math.PI) ** 2 * factor);
+  return {
+    nu,
+    scatter: {
+      factor,
+      zeroThigh: zero(({ course }) => course.setting.turnZero?.femurVariance),
+      zeroPelvis: zero(({ course }) => course.setting.turnZero?.pelvisVariance),
+    },
+  };
 };
