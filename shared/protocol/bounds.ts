@@ -52,10 +52,13 @@ const DEGREES: readonly FigureKey[] = [
   'liftShort',
 ];
 
+/** A probability in 100, to a tenth. */
+export const inHundred = (probability: number): number => Math.round(probability * 1000) / 10;
+
 /** A figure of the protocol as people write it: 60°, 95 in 100, 3. */
 export const figureWords = (key: FigureKey, value: number): string => {
   if (DEGREES.includes(key)) return `${value}°`;
-  if (LIMITS.includes(key)) return `${Math.round(value * 1000) / 10} in 100`;
+  if (LIMITS.includes(key)) return `${inHundred(value)} in 100`;
   return `${value}`;
 };
 

@@ -1,3 +1,4 @@
+import { inHundred } from '#shared/protocol/bounds.ts';
 import type { Gates } from '#shared/protocol/protocol.ts';
 
 /** `60° to 90°` */
@@ -7,7 +8,7 @@ export const gateRange = ({ from, to }: Gates): string => `${from}° to ${to}°`
 export const levelWords = (lift: number): string => (lift === 90 ? 'level' : `${lift}°`);
 
 /** `95`, `97.5`: of a probability from 0 to 1. */
-export const outOfHundred = (limit: number): string => `${Math.round(limit * 1000) / 10}`;
+export const outOfHundred = (limit: number): string => `${inHundred(limit)}`;
 
 /** `rose from 60° to level`: what the eye is asked to judge. */
 export const roseWords = ({ from, to }: Gates): string => `rose from ${from}° to ${levelWords(to)}`;

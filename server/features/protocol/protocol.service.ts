@@ -7,6 +7,7 @@ import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../practice/audit.ts';
 import { SetUp } from '../visits/set-up.entity.ts';
+import { currentProtocol } from './current-protocol.ts';
 import { presentProtocol } from './protocol.presenter.ts';
 import { ProtocolVersion } from './protocol-version.entity.ts';
 
@@ -15,23 +16,13 @@ type Of = Unit<UserActor>;
 const ofPractice = ({ practiceId }: UserActor) => ({ kind: 'practice', practiceId }) as const;
 
 /** Every version, newest first; a practice has at least the first. */
-const versionsOf = async ({ em }: Of): Promise<[ProtocolVersion, ...ProtocolVersion[]]> => {
-  const [current, ...before] = await em.find(
-    ProtocolVersion,
-    {},
-    { populate: ['by'], orderBy: { version: 'desc' } },
-  );
+export const protocolPage = async ({ em, actor }: Of): Promise<ProtocolPage> => {
+  need(actor, 'practice.read', ofPractice(actor));
+  const newestFirst = { populate: ['by'], orderBy: { version: 'desc' } } as const;
+  const versions = await em.find(ProtocolVersion, {}, newestFirst);
+  const [current] = versions;
   if (!current) throw new Error('A practice has no protocol.');
-  return [current, ...before];
-};
-
-export const protocolPage = async (unit: Of): Promise<ProtocolPage> => {
-  need(unit.actor, 'practice.read', ofPractice(unit.actor));
-  const versions = await versionsOf(unit);
-  return {
-    current: presentProtocol(versions[0]),
-    history: versions.map(presentProtocol),
-  };
+  return { current: presentProtocol(current), history: versions.map(presentProtocol) };
 };
 
 /**
@@ -46,7 +37,7 @@ export const changeProtocol = async (
   need(actor, 'protocol.change', ofPractice(actor));
   // two who change it at once change it one after the other
   await em.execute('select 1 from practice where id = ? for update', [actor.practiceId]);
-  const [current] = await versionsOf(unit);
+  const current = await currentProtocol(em);
   if (current.version !== after) throw new Problem('edited-meanwhile');
   const { setUpId } = values;
   if (setUpId !== null && !(await em.findOne(SetUp, { id: setUpId })))

@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { protocolBody } from '#shared/contracts/protocol.ts';
 import { degrees } from '#shared/geometry/units.ts';
-import { type FigureKey, protocolFaults } from '#shared/protocol/bounds.ts';
+import { inHundred, type FigureKey, protocolFaults } from '#shared/protocol/bounds.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 
 const figure = z.number('Write a number.');
@@ -28,8 +28,7 @@ const fields = z.object({
 });
 export type ProtocolFields = z.infer<typeof fields>;
 
-const share = (inHundred: number): number => Math.round(inHundred * 10) / 1000;
-const inHundred = (value: number): number => Math.round(value * 1000) / 10;
+const share = (given: number): number => Math.round(given * 10) / 1000;
 
 export const valuesOf = (given: Omit<ProtocolFields, 'note'>): Protocol => ({
   gateFrom: degrees(given.gateFrom),
