@@ -31,6 +31,8 @@ export interface GoldenFile {
   readonly reps: readonly {
     readonly frames: readonly {
       readonly phase: string;
+      /** By the files' own names, px. */
+      readonly marks: Readonly<Record<string, readonly number[]>>;
       readonly truth: { readonly F: number; readonly R: number };
     }[];
     readonly truth: { readonly dR_60_90: number };
