@@ -1,4 +1,4 @@
-import type { Size, Viewport } from './viewport.ts';
+import { longEdgeOf, type Size, type Viewport } from './viewport.ts';
 
 /**
  * The pictures of the frame that is shown: the prepared copy's canvas, and the phone's own picture
@@ -62,4 +62,4 @@ export const paintPicture = (
 
 /** Long edge, px, of the picture that the hand sees: a coarser one costs certainty. */
 export const pictureLongEdge = (board: PictureBoard, frame: Size, copy: Size): number =>
-  board.full() ? Math.max(frame.width, frame.height) : Math.max(copy.width, copy.height);
+  longEdgeOf(board.full() ? frame : copy);

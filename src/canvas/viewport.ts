@@ -23,6 +23,8 @@ export interface Size {
   readonly height: number;
 }
 
+export const longEdgeOf = ({ width, height }: Size): number => Math.max(width, height);
+
 export const toStage = (viewport: Viewport, point: FramePoint): StagePoint =>
   stagePoint(viewport.x + viewport.scale * point.u, viewport.y + viewport.scale * point.v);
 

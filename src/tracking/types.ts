@@ -14,6 +14,9 @@ import type { FrameIndex } from '#shared/timing/units.ts';
  */
 export type TrackState = 'sure' | 'unsure' | 'lost';
 
+/** Confidence from which on a place is sure. */
+export const SURE = 0.5;
+
 /** Where a point is on one frame. */
 export interface Followed {
   readonly frame: FrameIndex;

@@ -1,4 +1,4 @@
-import type { TrackState } from '../types.ts';
+import { SURE, type TrackState } from '../types.ts';
 import { eigenvalues } from './solve.ts';
 import type { Template } from './template.ts';
 
@@ -54,7 +54,6 @@ export const confidenceOf = (seen: Evidence): number => {
   return alike * returned * sharp * steady * bare * same * sized * falling(apart, 1.5, 4);
 };
 
-const SURE = 0.5;
 const UNSURE = 0.15;
 
 export const stateOf = (confidence: number): TrackState =>

@@ -1,3 +1,4 @@
+import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { useMemo, useSyncExternalStore } from 'react';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
@@ -41,7 +42,7 @@ export function useDraw(): (moved: Moved) => readonly Primitive[] {
   const conflicts = useConflicts();
   return useMemo(() => {
     const { current, figures } = model;
-    const longEdge = Math.max(frameSize.width, frameSize.height);
+    const longEdge = longEdgeOf(frameSize);
     const shapes = document.comments.flatMap(({ shape, fromFrame, toFrame, resolved }) =>
       shape && !resolved && fromFrame <= frame && frame <= toFrame ? [shape] : [],
     );

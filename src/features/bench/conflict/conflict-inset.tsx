@@ -1,3 +1,4 @@
+import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { useSyncExternalStore } from 'react';
 import type { FrameMarks, MarkValue } from '#shared/landmarks/commands.ts';
 import { landmark } from '#shared/landmarks/table.ts';
@@ -32,7 +33,7 @@ export function ConflictInset() {
   const theirValue = theirs && valueOf(theirs);
   if (!disputed || !current) return null;
 
-  const longEdge = Math.max(frameSize.width, frameSize.height);
+  const longEdge = longEdgeOf(frameSize);
   /** The turn of this frame, were this the mark. */
   const turnWith = (value: MarkValue | null): string => {
     const time = times[frame];

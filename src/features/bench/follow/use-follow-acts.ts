@@ -1,4 +1,5 @@
-import { useEffect, useMemo, useRef } from 'react';
+import { longEdgeOf } from '#src/canvas/viewport.ts';
+import { useMemo } from 'react';
 import { nextLandmark } from '../model/led.ts';
 import type { Rep } from '#shared/contracts/reps.ts';
 import { emptyHistory } from '#shared/landmarks/commands-history.ts';
@@ -12,6 +13,7 @@ import { commitMany } from '../actions/use-marking.ts';
 import { useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { isDraft, NO_TOUCHES, touchedOnce } from '../model/draft.ts';
 import { goTo } from '../store/bench-store.ts';
+import { useNewest } from '../use-newest.ts';
 import { fillRep, refill } from './fill-rep.ts';
 import { withTracks } from './following.ts';
 import { keyframesOf, keyframesOfTouches, spanAround } from './keyframes.ts';
@@ -46,10 +48,7 @@ export function useFollowActs(): FollowActs {
   const document = useBenchDocument();
   const model = useBenchModel();
   const edits = useEdits();
-  const now = useRef({ document, model });
-  useEffect(() => {
-    now.current = { document, model };
-  });
+  const now = useNewest({ document, model });
   const { current, led } = model;
   const complete =
     isDraft(current) &&
@@ -57,7 +56,7 @@ export function useFollowActs(): FollowActs {
     nextLandmark(led, touchedOnce(current.marks), null) === null;
   return useMemo(() => {
     const { store, follow, times, copySize } = tools;
-    const pictureLongEdge = Math.max(copySize.width, copySize.height);
+    const pictureLongEdge = longEdgeOf(copySize);
     const last = times.length - 1;
     return {
       complete,
@@ -162,5 +161,5 @@ export function useFollowActs(): FollowActs {
         commitMany(tools, open, parts);
       },
     };
-  }, [tools, edits, complete]);
+  }, [tools, edits, complete, now]);
 }

@@ -3,6 +3,7 @@ import type { FramePoint } from '#shared/geometry/points.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { isDraft } from '../model/draft.ts';
+import { useNewest } from '../use-newest.ts';
 import { type FollowActs, useFollowActs } from './use-follow-acts.ts';
 import { useTouched } from './use-touched.ts';
 
@@ -35,10 +36,7 @@ export function useFollowing(): Follow {
   const { touched, keepTouch } = useTouched();
   const touches = useBench((state) => state.touches);
   const resting = useRef<ReturnType<typeof setTimeout>>(undefined);
-  const newest = useRef({ acts, current });
-  useEffect(() => {
-    newest.current = { acts, current };
-  });
+  const newest = useNewest({ acts, current });
 
   // the person who steps goes first
   useEffect(
@@ -55,12 +53,12 @@ export function useFollowing(): Follow {
     if (!complete) return;
     const timer = setTimeout(() => void newest.current.acts.start(), REST_MS);
     return () => clearTimeout(timer);
-  }, [complete, touches]);
+  }, [complete, touches, newest]);
 
   const named = reps.length > 0;
   useEffect(() => {
     if (named) newest.current.acts.adopt();
-  }, [named]);
+  }, [named, newest]);
 
   useEffect(() => {
     const onKeyDown = (event: KeyboardEvent) => {
@@ -89,6 +87,6 @@ export function useFollowing(): Follow {
         );
       },
     }),
-    [acts, keepTouch, touched, store, follow],
+    [acts, keepTouch, touched, store, follow, newest],
   );
 }

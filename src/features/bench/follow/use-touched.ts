@@ -1,4 +1,4 @@
-import { useCallback, useEffect, useRef } from 'react';
+import { useCallback } from 'react';
 import { changing, type MarkingCommand } from '#shared/landmarks/commands.ts';
 import { place } from '#shared/landmarks/commands-make.ts';
 import { record, stepBack } from '#shared/landmarks/commands-history.ts';
@@ -14,6 +14,7 @@ import {
 } from '../bench-context.ts';
 import type { CurrentRep } from '../model/bench-model.ts';
 import { isDraft, touchesAfter } from '../model/draft.ts';
+import { useNewest } from '../use-newest.ts';
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 
 /** A snap of less than this is none, source px. */
@@ -33,10 +34,10 @@ const amend = (
   const back = stepBack(history);
   if (!back) return;
   const [step, before] = back;
+  const kept = { done: before.done, undone: [] };
   if (step.kind === 'touches' && isDraft(current)) {
     const after = touchesAfter(touches, commands, current.rep);
     const gone = commands.every((each) => each.after === null);
-    const kept = { done: before.done, undone: [] };
     store.setState({ touches: after, history: gone ? kept : record(kept, { ...step, after }) });
   }
   if (step.kind === 'marks' && step.repId === current.rep.id) {
@@ -47,7 +48,6 @@ const amend = (
       );
       return newer ? { ...own, after: newer.after } : own;
     });
-    const kept = { done: before.done, undone: [] };
     store.setState({ history: record(kept, { ...step, commands: joined }) });
   }
 };
@@ -60,10 +60,7 @@ export function useTouched() {
   const tools = useBenchTools();
   const document = useBenchDocument();
   const model = useBenchModel();
-  const now = useRef({ document, model });
-  useEffect(() => {
-    now.current = { document, model };
-  });
+  const now = useNewest({ document, model });
 
   const moveTo = useCallback(
     (landmark: LandmarkId, frame: FrameIndex, point: FramePoint | null) => {
@@ -77,7 +74,7 @@ export function useTouched() {
         : changing(current.marks, [{ frame, landmark, after: null }]);
       amend(tools, open, current, commands);
     },
-    [tools],
+    [tools, now],
   );
 
   const touched = useCallback(
@@ -111,7 +108,7 @@ export function useTouched() {
         store.setState({ chosen: landmark });
       }
     },
-    [tools, moveTo],
+    [tools, moveTo, now],
   );
 
   const keepTouch = useCallback(() => {

@@ -1,3 +1,4 @@
+import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { useRef } from 'react';
 import { framePoint } from '#shared/geometry/points.ts';
 import { Magnifier } from '#src/canvas/magnifier.tsx';
@@ -26,8 +27,7 @@ export function GlassPanel({ target }: { target: Target | null }) {
     const next = MAGNIFICATIONS[(MAGNIFICATIONS.findIndex((each) => each === magnify) + 1) % 4];
     store.setState((state) => ({ taste: { ...state.taste, magnify: next ?? magnify } }));
   };
-  const coarser =
-    Math.max(frameSize.width, frameSize.height) / Math.max(copySize.width, copySize.height);
+  const coarser = longEdgeOf(frameSize) / longEdgeOf(copySize);
   if (!target && !resting) return null;
   return (
     <div className="bench-glass">

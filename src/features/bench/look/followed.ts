@@ -1,11 +1,9 @@
 import type { FrameMarks, MarkValue, PointValue } from '#shared/landmarks/commands.ts';
 import { LANDMARK_IDS, type LandmarkId } from '#shared/landmarks/types.ts';
 import type { FrameIndex } from '#shared/timing/units.ts';
+import { SURE } from '#src/tracking/types.ts';
 import type { FollowedCount } from '#src/ui/followed-words.ts';
 import type { BenchRep } from '../model/bench-model.ts';
-
-/** Under this a followed mark is looked at by itself; the tracker calls the rest sure. */
-export const SURE = 0.5;
 
 const isFollowed = (value: MarkValue | undefined): value is PointValue =>
   value?.to === 'point' && value.source === 'tracked';

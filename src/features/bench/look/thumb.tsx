@@ -1,3 +1,4 @@
+import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { useEffect, useRef } from 'react';
 import type { Degrees } from '#shared/geometry/units.ts';
 import { overlay } from '#shared/overlay/overlay.ts';
@@ -58,7 +59,7 @@ export function Thumb({
     const drawn: Primitive[] = overlay({
       view: rep.rep.view,
       supportSide: rep.rep.supportSide,
-      marks: engineMarks(marks, Math.max(frameSize.width, frameSize.height)),
+      marks: engineMarks(marks, longEdgeOf(frameSize)),
       hips: hipsOf(marks, null),
       values: null,
     });

@@ -1,3 +1,4 @@
+import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { useMemo, useSyncExternalStore } from 'react';
 import type { FrameInput } from '#shared/measures/inputs.ts';
 import type { Moved } from '#src/canvas/konva-layer.tsx';
@@ -33,14 +34,10 @@ export function useFrameFigures(): FrameFigures | null {
   const frame = useBench((state) => state.frame);
   const { moved } = useSyncExternalStore(hand.subscribe, hand.get);
   return useMemo(() => {
-    const marks = withMoved(
-      marksOn(current, frame),
-      moved,
-      Math.max(frameSize.width, frameSize.height),
-    );
+    const longEdge = longEdgeOf(frameSize);
+    const marks = withMoved(marksOn(current, frame), moved, longEdge);
     const time = times[frame];
     if (!current || !figures || time === undefined || Object.keys(marks).length === 0) return null;
-    const longEdge = Math.max(frameSize.width, frameSize.height);
     const input: FrameInput = { frame, time, marks: engineMarks(marks, longEdge) };
     return figuresOf(current, input);
   }, [current, figures, frame, moved, times, frameSize]);
