@@ -10,12 +10,10 @@ import type { MarkQueue } from '../queue/mark-queue.ts';
 import { isLandmark } from '#shared/records/stored-marks.ts';
 import { frameIndex } from '#shared/timing/units.ts';
 import { withOutcomes } from './bench-cache.ts';
+import { useSettled } from './use-settled.ts';
 
 /** An own mark whose event comes later than this after the last answer was placed elsewhere. */
 const OWN_ECHO_MS = 5_000;
-
-/** The query cache tells its pages in a task of its own, the one after this: then they show what was set. */
-const nextTask = (): Promise<void> => new Promise((resolve) => setTimeout(resolve));
 
 /**
  * Keeps the document true: answers to the own queue go straight into the cache; changes that this
@@ -27,20 +25,12 @@ export function useLiveBench(document: BenchDocument, queue: MarkQueue): void {
   const clipId = document.clip.id;
   const answered = useRef(0);
 
-  useEffect(
-    () =>
-      queue.onSettled(async (settled) => {
-        const { repId, outcomes, touched, rep } = settled;
-        if (settled.clipId !== clipId || !rep) return;
-        answered.current = performance.now();
-        client.setQueryData(
-          benchOptions(clipId).queryKey,
-          (known) => known && withOutcomes(known, repId, outcomes, touched, rep),
-        );
-        await nextTask();
-      }),
-    [client, queue, clipId],
-  );
+  useSettled(queue, clipId, benchOptions(clipId).queryKey, (known, settled) => {
+    const { repId, outcomes, touched, rep } = settled;
+    if (!rep) return null;
+    answered.current = performance.now();
+    return withOutcomes(known, repId, outcomes, touched, rep);
+  });
 
   useLiveEvents(
     useCallback(

@@ -68,7 +68,7 @@ export function BlindBench({ second, frames, frameSize, copySize }: ReadySecond)
     follow: null,
   }));
   const { model, blind } = useBlindModel(second, document, tools);
-  useBlindLive(second.summary.id, tools.queue);
+  useBlindLive(second.summary.id, second.clip.id, tools.queue);
   return (
     <BenchToolsContext value={tools}>
       <BenchDocumentContext value={document}>

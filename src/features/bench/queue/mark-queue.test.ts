@@ -137,6 +137,17 @@ describe('mark queue', () => {
     expect(await storage.read()).toEqual([]);
   });
 
+  it('remembers, once, that a clip was answered while no page listened', async () => {
+    const { queue } = make(good);
+    await queue.add([mark('a', 1)]);
+    expect(queue.takeMissed('another clip')).toBe(false);
+    expect(queue.takeMissed('clip')).toBe(true);
+    expect(queue.takeMissed('clip')).toBe(false);
+    queue.onSettled(() => Promise.resolve());
+    await queue.add([mark('b', 2)]);
+    expect(queue.takeMissed('clip')).toBe(false);
+  });
+
   it('waits for a sign-in and loses nothing', async () => {
     const { queue, timers } = make(() => ({ is: 'signed-out' }));
     await queue.add([mark('a', 1)]);

@@ -56,6 +56,8 @@ export interface MarkQueue {
   readonly subscribe: (listener: () => void) => () => void;
   /** What waited is dropped only after every listener is done: by then the page shows what is stored. */
   readonly onSettled: (listener: SettledListener) => () => void;
+  /** Whether marks of the clip were answered while no page listened; its page asks once and reads anew. */
+  readonly takeMissed: (clipId: string) => boolean;
   readonly add: (marks: readonly NewMark[]) => Promise<void>;
   readonly keepMine: (id: string) => Promise<void>;
   readonly letGo: (ids: readonly string[]) => Promise<void>;
@@ -82,6 +84,7 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
   let shown: QueueSnapshot = { marks: [], link };
   const listeners = new Set<() => void>();
   const settledListeners = new Set<SettledListener>();
+  const missed = new Set<string>();
   let wait = FIRST_WAIT_MS;
   let callOff: (() => void) | null = null;
   let draining: Promise<void> | null = null;
@@ -111,6 +114,7 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
     show();
   };
   const tell = async (settled: Settled) => {
+    if (settledListeners.size === 0) missed.add(settled.clipId);
     await Promise.all([...settledListeners].map((listener) => listener(settled)));
   };
 
@@ -187,6 +191,7 @@ export const createMarkQueue = (deps: QueueDeps): MarkQueue => {
       settledListeners.add(listener);
       return () => void settledListeners.delete(listener);
     },
+    takeMissed: (clipId) => missed.delete(clipId),
     add: (marks) => act((queue) => enqueueAll(queue, marks)),
     keepMine(id) {
       const fresh = newId();
