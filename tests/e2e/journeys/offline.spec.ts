@@ -142,7 +142,7 @@ test('a clip whose connection is cut goes on where it stopped', async ({
   allowConsole(/ERR_INTERNET_DISCONNECTED|ERR_CONNECTION_RESET/);
   const visitId = await openForClips();
   await page.goto(paths.visit(visitId));
-  const row = await chooseClip(page);
+  const row = await chooseClip(page, 'The set-up lacks the distance');
   const sentFrom: number[] = [];
   page.on('request', (request) => {
     if (request.method() === 'PATCH') sentFrom.push(Number(request.headers()['upload-offset']));
