@@ -1,3 +1,4 @@
+import type { Box } from '#shared/geometry/boxes.ts';
 import type { FramePoint } from '#shared/geometry/points.ts';
 import type { FrameIndex } from '#shared/timing/units.ts';
 
@@ -121,14 +122,6 @@ export interface Tracker {
   giveWay(ms?: number): void;
   /** Rejects what is under way with `closed`. */
   close(): void;
-}
-
-/** Upright rectangle, source pixels. */
-export interface Box {
-  readonly left: number;
-  readonly top: number;
-  readonly width: number;
-  readonly height: number;
 }
 
 /** A box that covers something from the frame it was drawn on, a head. */

@@ -1,8 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import type { Box } from '#shared/geometry/boxes.ts';
 import { framePoint } from '#shared/geometry/points.ts';
 import { type FrameIndex, frameIndex } from '#shared/timing/units.ts';
-import type { Box, Track, TrackState } from '../types.ts';
+import type { Track, TrackState } from '../types.ts';
 import { anchorsOf, followBox } from './follow-box.ts';
 
 // the same cases in every run

@@ -1,6 +1,7 @@
+import { type Box, boxWithin, grown } from '#shared/geometry/boxes.ts';
 import { type FramePoint, framePoint } from '#shared/geometry/points.ts';
 import type { FrameIndex } from '#shared/timing/units.ts';
-import type { Box, FollowedBox, PointToFollow, Track } from '../types.ts';
+import type { FollowedBox, PointToFollow, Track } from '../types.ts';
 
 /** Where in a box its anchors lie, as parts of its width and height. */
 const ANCHORS = [0.2, 0.5, 0.8];
@@ -79,21 +80,9 @@ const movedBox = ({ left, top, width, height }: Box, { du, dv, scale }: Motion):
   height: height * scale,
 });
 
-const grown = ({ left, top, width, height }: Box, by: number): Box => ({
-  ...{ left: left - by, top: top - by },
-  ...{ width: width + 2 * by, height: height + 2 * by },
-});
-
 /** The part of the box within the picture; where that is nothing, the whole picture. */
-const clipped = (box: Box, span: BoxSpan): Box => {
-  const left = Math.max(0, box.left);
-  const top = Math.max(0, box.top);
-  const right = Math.min(span.width, box.left + box.width);
-  const bottom = Math.min(span.height, box.top + box.height);
-  if (!(right > left && bottom > top))
-    return { left: 0, top: 0, width: span.width, height: span.height };
-  return { left, top, width: right - left, height: bottom - top };
-};
+const clipped = (box: Box, span: BoxSpan): Box =>
+  boxWithin(box, span) ?? { left: 0, top: 0, width: span.width, height: span.height };
 
 /**
  * A box drawn once, on every frame of the span, rising. It goes where its anchors surely went. On a
