@@ -26,7 +26,7 @@ export const sessionOf = async (app: App, email: string): Promise<APIRequestCont
   return context;
 };
 
-const picture = async (): Promise<Buffer> => {
+const render = async (): Promise<Buffer> => {
   const folder = await mkdtemp(join(tmpdir(), 'bench-clip-'));
   const file = join(folder, 'clip.mp4');
   try {
@@ -41,6 +41,10 @@ const picture = async (): Promise<Buffer> => {
   }
 };
 
+let rendered: Promise<Buffer> | null = null;
+/** The film of every clip that is made here. */
+const picture = (): Promise<Buffer> => (rendered ??= render());
+
 export interface MadeClip {
   readonly clipId: string;
   readonly visitId: string;
@@ -48,6 +52,8 @@ export interface MadeClip {
 
 /** An athlete with consent, a visit with its safety check, and one clip that is ready. */
 export const makeClip = async (coach: APIRequestContext, name: string): Promise<MadeClip> => {
+  // before any request: the server closes a connection that idles meanwhile
+  await picture();
   const athlete = await ask(coach, routes.addAthlete, {
     body: { givenName: 'Bo', familyName: name, birthDate: '1998-05-04' },
   });

@@ -1,24 +1,14 @@
-import { randomUUID } from 'node:crypto';
 import { type APIRequestContext, type Page } from '@playwright/test';
 import { routes } from '#shared/contracts/routes.ts';
-import type { RepInput } from '#shared/course/types.ts';
-import { madeFront, type MadeMotion, madeSide } from '#shared/evaluate/made-pair.ts';
+import { madeFront, madeSide } from '#shared/evaluate/made-pair.ts';
 import { ask } from '../journeys/steps/ask.ts';
 import { expect, test } from '../support/app.ts';
 import { desk, openBench } from './bench-page.ts';
-import { addRep, COACH, FRAMES, makeClip, PICTURE, sendClip, sessionOf } from './made.ts';
+import { COACH, makeClip, sendClip, sessionOf } from './made.ts';
+import { giveGeometry, markAs, MOTION, STEP } from './made-marks.ts';
 
 test.describe.configure({ mode: 'serial' });
 
-const STEP = 1000 / 30;
-const MOTION: MadeMotion = {
-  side: 'right',
-  stillMs: 300,
-  upMs: 500,
-  holdMs: 100,
-  highest: 106,
-  turnAt: (lift) => Math.max(0, lift - 60) / 3,
-};
 /** The side camera began two frames earlier. */
 const LATER = 2;
 
@@ -27,76 +17,16 @@ let visitId: string;
 let front: { clipId: string; repId: string };
 let side: { clipId: string; repId: string };
 
-/** Marks a rep as the made body says; its picture is narrower than this clip's. */
-const markAs = async (clipId: string, made: RepInput) => {
-  const { id } = await addRep(coach, clipId);
-  const commands = made.frames
-    .filter(({ frame }) => frame < FRAMES)
-    .flatMap(({ frame, marks }) =>
-      Object.entries(marks).flatMap(([landmark, mark]) =>
-        mark.hidden
-          ? []
-          : [
-              {
-                id: randomUUID(),
-                frame,
-                landmark,
-                baseRevision: 0,
-                set: {
-                  to: 'point' as const,
-                  u: mark.point.u + (PICTURE.width - made.camera.width) / 2,
-                  v: mark.point.v,
-                  source: 'hand' as const,
-                  looked: true,
-                  confidence: null,
-                  pictureLongEdge: PICTURE.height,
-                },
-              },
-            ],
-      ),
-    );
-  for (let from = 0; from < commands.length; from += 200)
-    await ask(coach, routes.saveMarks, {
-      params: { id },
-      body: { commands: commands.slice(from, from + 200) },
-    });
-  return id;
-};
-
-const giveGeometry = async (clipId: string) => {
-  const { version, geometry } = await ask(coach, routes.clip, { params: { id: clipId } });
-  const { mmPerPx, distanceMm, lensHeightMm, beltPointerMm } = madeFront(MOTION, {
-    startMs: 0,
-    stepMs: STEP,
-    scatterPx: 0,
-    seed: 1,
-  }).camera;
-  await ask(coach, routes.editClip, {
-    params: { id: clipId },
-    body: {
-      version,
-      geometry: {
-        ...geometry,
-        scale: { from: 'typed', mmPerPx: mmPerPx ?? NaN },
-        distanceMm,
-        lensHeightMm,
-        beltPointerMm,
-        thighPointerMm: 115,
-      },
-    },
-  });
-};
-
 test.beforeAll(async ({ app }) => {
   coach = await sessionOf(app, COACH);
   const made = await makeClip(coach, 'Tie');
   visitId = made.visitId;
   const sideClip = await sendClip(coach, visitId, 'side.mp4', 'lifted-side');
-  for (const id of [made.clipId, sideClip]) await giveGeometry(id);
+  for (const id of [made.clipId, sideClip]) await giveGeometry(coach, id);
   const filming = { stepMs: STEP, scatterPx: 0.5 };
   const frontRep = madeFront(MOTION, { ...filming, startMs: 0, seed: 3 });
   const sideRep = madeSide(MOTION, { ...filming, startMs: LATER * STEP, seed: 4 });
-  front = { clipId: made.clipId, repId: await markAs(made.clipId, frontRep) };
+  front = { clipId: made.clipId, repId: await markAs(coach, made.clipId, frontRep) };
   // standing on the right, filmed from the athlete's left: the toes point to the picture's left
   const mirrored = {
     ...sideRep,
@@ -112,7 +42,7 @@ test.beforeAll(async ({ app }) => {
       ),
     })),
   };
-  side = { clipId: sideClip, repId: await markAs(sideClip, mirrored) };
+  side = { clipId: sideClip, repId: await markAs(coach, sideClip, mirrored) };
 });
 test.afterAll(() => coach.dispose());
 test.beforeEach(async ({ page }) => {
