@@ -19,7 +19,12 @@ export const FILMING_LIMITS = {
   bestToMm: limit(3500, 'mm', 'farthest of the distances to film from at 1080p', MODEL),
   bestTo4kMm: limit(4000, 'mm', 'farthest of the distances to film from at 4K', MODEL),
   coarse: limit(2.5, 'mm', 'of the body in one pixel above which marks are too coarse', MODEL),
-  framesPerSecond: limit(30, 'a second', 'frames under which 60° to 90° has too few', MODEL),
+  framesPerSecond: limit(
+    30,
+    'a second',
+    'frames under which the way from gate to gate has too few',
+    MODEL,
+  ),
   goodFramesPerSecond: limit(60, 'a second', 'frames to film at', MODEL),
   quietFrames: limit(5, 'frames', 'of the quiet stance that make zero firm', MODEL),
   stillSeconds: limit(3, 's', 'of standing still before the lift', PRACTICE),

@@ -1,8 +1,16 @@
 import { inHundred } from '#shared/protocol/bounds.ts';
-import type { Gates } from '#shared/protocol/protocol.ts';
+import { type Gates, sameGates, STANDARD_GATES } from '#shared/protocol/protocol.ts';
 
 /** `60° to 90°` */
 export const gateRange = ({ from, to }: Gates): string => `${from}° to ${to}°`;
+
+/** `from 55° to 90°`; without figures while the practice's gates are not known. */
+export const betweenGates = (gates: Gates | null): string =>
+  gates ? `from ${gateRange(gates)}` : 'from gate to gate';
+
+/** Said beside a figure of the study where a practice has other gates than it was taken with; else nothing. */
+export const studiedBetween = (gates: Gates | null): string =>
+  gates && !sameGates(gates, STANDARD_GATES) ? `, worked out for ${gateRange(STANDARD_GATES)}` : '';
 
 /** The thigh at the upper gate as an eye sees it: `level`, or its lift. */
 export const levelWords = (lift: number): string => (lift === 90 ? 'level' : `${lift}°`);

@@ -9,7 +9,7 @@ export const LIMITS: readonly { readonly says: string; readonly source: string }
     source: 'McGinley 2009, Gait & Posture 29:360–369',
   },
   {
-    says: '60° and 90° are a working model of practitioners, not validated norms. No published study of the standing hip’s rotation against the lifted hip’s flexion was found.',
+    says: 'The gates, 60° and 90° until a practice sets others, are a working model of practitioners, not validated norms. No published study of the standing hip’s rotation against the lifted hip’s flexion was found.',
     source: 'common practice, no source',
   },
   {

@@ -3,7 +3,10 @@ import { beforeEach, describe, expect, it } from 'vitest';
 import type { Role } from '#shared/contracts/accounts.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { SAFETY_QUESTIONS, type Visit } from '#shared/contracts/visits.ts';
+import { degrees } from '#shared/geometry/units.ts';
+import { STANDARD_PROTOCOL } from '#shared/protocol/protocol.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
+import { aProtocol, aProtocolPage } from '#tests/support/protocol.ts';
 import {
   aClip,
   anAthlete,
@@ -89,6 +92,15 @@ describe('the safety check', () => {
     expect(within(safety).getAllByText('Answer yes or no.')).toHaveLength(SAFETY_QUESTIONS.length);
     expect(api.calls(routes.answerSafety)).toHaveLength(0);
     expect(screen.getByText('Closed until consent and safety check are there')).toBeVisible();
+  });
+
+  it('and the guide speak of the practice’s own gates', async () => {
+    const { api } = visitApi();
+    const values = { ...STANDARD_PROTOCOL, gateFrom: degrees(50), gateTo: degrees(80) };
+    api.on(routes.protocol, () => aProtocolPage(aProtocol({ values })));
+    expect(await screen.findByText('The lift passes 80°.')).toBeVisible();
+    expect(screen.getByText(/nine times in ten, worked out for 60° to 90°\./)).toBeInTheDocument();
+    expect(screen.queryByText(/(passes|at) 90°/)).toBeNull();
   });
 
   it('opens the upload once all is answered with no', async () => {

@@ -7,7 +7,7 @@ import { Hatch } from './hatch.tsx';
 const HOLDS_WIDTH = 104;
 
 /**
- * What would be expected between the gates, from this course's own value at 60°. Green is turning
+ * What would be expected between the gates, from this course's own value at the lower one. Green is turning
  * in only; holding still is a neutral hatch, for it is not a pass. It judges the change, not the height.
  */
 export function CourseWedge({ atFrom, scale }: { atFrom: number; scale: CourseScale }) {

@@ -1,4 +1,5 @@
 import type { Visit } from '#shared/contracts/visits.ts';
+import { useProtocol } from '#src/api/use-protocol.ts';
 import { fileSize } from '#src/ui/figures.ts';
 import { Progress } from '#src/ui/progress.tsx';
 import { StateDot, type StateKind } from '#src/ui/state-dot.tsx';
@@ -25,7 +26,9 @@ export function UploadRow({
   only: boolean;
   onFiles: (files: readonly File[]) => void;
 }) {
-  const verdict = item.look === null ? null : judge(item.look, item.bytes, filmedAs(visit, item));
+  const protocol = useProtocol();
+  const verdict =
+    item.look === null ? null : judge(item.look, item.bytes, filmedAs(visit, item, protocol));
   const moving = item.phase === 'sending' || item.phase === 'paused' || item.phase === 'waiting';
   return (
     <RowFrame

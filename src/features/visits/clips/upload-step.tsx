@@ -2,6 +2,7 @@ import { useEffect } from 'react';
 import type { Clip } from '#shared/contracts/clips.ts';
 import type { Visit } from '#shared/contracts/visits.ts';
 import type { May } from '#src/api/use-may.ts';
+import { useProtocol } from '#src/api/use-protocol.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { Empty } from '#src/ui/states.tsx';
@@ -31,6 +32,7 @@ export function UploadStep({
 }) {
   const items = useUploads(visit.id);
   const say = useStatus();
+  const protocol = useProtocol();
   useEffect(() => uploads.forgetSent(new Set(clips.map(({ id }) => id))), [clips]);
   const here = items.filter(({ uploadId }) => !clips.some(({ id }) => id === uploadId));
   // a clip that is better copied or filmed again is sent one by one, never along with the others
@@ -38,7 +40,7 @@ export function UploadStep({
     (item) =>
       item.phase === 'chosen' &&
       item.look !== null &&
-      judge(item.look, item.bytes, filmedAs(visit, item)).grade !== 'again' &&
+      judge(item.look, item.bytes, filmedAs(visit, item, protocol)).grade !== 'again' &&
       detailsComplete(item),
   );
 

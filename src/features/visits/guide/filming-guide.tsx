@@ -1,8 +1,9 @@
 import type { ReactNode } from 'react';
 import type { Visit } from '#shared/contracts/visits.ts';
 import { ACHIEVED } from '#shared/measures/achieved.ts';
-import type { Protocol } from '#shared/protocol/protocol.ts';
+import { gatesOf, type Protocol } from '#shared/protocol/protocol.ts';
 import { capital, inWords } from '#src/ui/figures.ts';
+import { studiedBetween } from '#src/ui/gate-words.ts';
 import { lengthWords } from '../filming/filming-words.ts';
 import { BeltDrawing, DotsDrawing, ThighDrawing } from './body-drawings.tsx';
 import { AboveDrawing, FrameDrawing, LevelDrawing, LightDrawing } from './place-drawings.tsx';
@@ -11,11 +12,13 @@ import { BothSidesDrawing, LiftDrawing } from './time-drawings.tsx';
 /** How to film it, in the order it is done. Where the set-up knows a length, the drawing shows it. */
 export function FilmingGuide({
   filming,
-  protocol: { gateFrom, gateTo, reps, framesPerSecond },
+  protocol,
 }: {
   filming: Visit['filming'];
   protocol: Protocol;
 }) {
+  const { reps, framesPerSecond } = protocol;
+  const gates = gatesOf(protocol);
   const mm = (value: number | null) => (value === null ? null : lengthWords(value, 'mm'));
   const { lensHeightMm, beltPointerMm, thighPointerMm } = filming;
   return (
@@ -58,16 +61,16 @@ export function FilmingGuide({
         of turn from none beyond {ACHIEVED['belt+thigh'].toldFromNone.three}° with both pointers,
         beyond {ACHIEVED.belt.toldFromNone.three}° with the belt alone. An early turn has to be
         larger to be found: {ACHIEVED['belt+thigh'].foundFrom}° and {ACHIEVED.belt.foundFrom}° nine
-        times in ten.
+        times in ten{studiedBetween(gates)}.
+      </Step>
+      <Step drawing={<LiftDrawing gates={gates} />} title="Three still seconds, then slowly">
+        Both feet down and still; then up with a short stop at {gates.from}° and at {gates.to}°,
+        past it, and down. {capital(inWords(reps))} {reps === 1 ? 'rep' : 'reps'}.
       </Step>
       <Step
-        drawing={<LiftDrawing gates={{ from: gateFrom, to: gateTo }} />}
-        title="Three still seconds, then slowly"
+        drawing={<BothSidesDrawing upperGate={gates.to} />}
+        title="Both sides in one take, if you like"
       >
-        Both feet down and still; then up with a short stop at {gateFrom}° and at {gateTo}°, past
-        it, and down. {capital(inWords(reps))} {reps === 1 ? 'rep' : 'reps'}.
-      </Step>
-      <Step drawing={<BothSidesDrawing />} title="Both sides in one take, if you like">
         Then both thighs wear a strap, and the belt stays as it is. Say aloud which leg is stood on.
       </Step>
     </div>

@@ -1,3 +1,4 @@
+import type { Degrees } from '#shared/geometry/units.ts';
 import type { Gates } from '#shared/protocol/protocol.ts';
 import { Drawing, Floor, Sight, Words } from './drawing.tsx';
 
@@ -40,7 +41,7 @@ export function LiftDrawing({ gates: { from, to } }: { gates: Gates }) {
 }
 
 /** One take may hold both sides: three lifts on each leg. */
-export function BothSidesDrawing() {
+export function BothSidesDrawing({ upperGate }: { upperGate: Degrees }) {
   const hills = (start: number, colour: string) => (
     <path
       d={[0, 1, 2].map((n) => `M${start + n * 44} 140c10 0 10-76 20-76s10 76 20 76`).join('')}
@@ -53,7 +54,7 @@ export function BothSidesDrawing() {
       <Floor y={140} />
       <Sight d="M14 76H306" />
       <Words at={[161, 70]} anchor="middle">
-        90°
+        {upperGate}°
       </Words>
       {hills(18, 'stroke-ink')}
       {hills(176, 'stroke-ink')}

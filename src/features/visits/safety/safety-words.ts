@@ -1,13 +1,15 @@
 import type { SafetyQuestion } from '#shared/contracts/visits.ts';
+import type { Protocol } from '#shared/protocol/protocol.ts';
 
-type Words = { question: string; note?: string };
+type Words = { question: string; note?: (protocol: Protocol | null) => string };
 
 /** The questions as they are asked, aloud, before anything else. */
 export const SAFETY_WORDS: Record<SafetyQuestion, Words> = {
   'pain-today': { question: 'Pain in the hip, groin, back or knee, or a limp, today?' },
   'hip-replacement-or-limits': {
     question: 'A hip replacement, or movement limits from a surgeon?',
-    note: 'The lift passes 90°.',
+    note: (protocol) =>
+      protocol ? `The lift passes ${protocol.gateTo}°.` : 'The thigh is lifted high.',
   },
   'weight-bearing-limits': { question: 'Told not to put full weight on a leg?' },
   'recent-surgery-or-fracture': { question: 'Surgery or a fracture in the last six months?' },
@@ -17,7 +19,8 @@ export const SAFETY_WORDS: Record<SafetyQuestion, Words> = {
   'confidential-any': {
     question:
       'Any of these? Ask in private; one answer for all, and which one is not written down.',
-    note: 'Pregnancy; osteoporosis or a medicine for the bones; anything else that speaks against standing on one leg.',
+    note: () =>
+      'Pregnancy; osteoporosis or a medicine for the bones; anything else that speaks against standing on one leg.',
   },
 };
 

@@ -1,6 +1,7 @@
 import { useId } from 'react';
 import { useController } from 'react-hook-form';
 import type { SafetyQuestion } from '#shared/contracts/visits.ts';
+import { useProtocol } from '#src/api/use-protocol.ts';
 import { useLabel } from '#src/ui/form/labels.tsx';
 import { Segmented } from '#src/ui/segmented.tsx';
 import { SAFETY_WORDS } from './safety-words.ts';
@@ -20,12 +21,13 @@ export function YesNo({ question }: { question: SafetyQuestion }) {
   } = useController({ name });
   const value: unknown = field.value;
   const { question: words, note } = SAFETY_WORDS[question];
+  const protocol = useProtocol();
   useLabel(name, words);
   return (
     <div className="flex items-center justify-between gap-4 border-b border-rule py-2">
       <p id={id}>
         {words}
-        {note !== undefined && <span className="block text-note text-soft">{note}</span>}
+        {note && <span className="block text-note text-soft">{note(protocol)}</span>}
       </p>
       <div className="flex-none">
         <Segmented

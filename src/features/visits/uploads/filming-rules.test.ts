@@ -1,7 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import { ACHIEVED } from '#shared/measures/achieved.ts';
 import { FILMING_LIMITS as LIMITS } from '#shared/measures/filming-limits.ts';
+import { STANDARD_PROTOCOL } from '#shared/protocol/protocol.ts';
 import type { Warning } from '#shared/reading/reasons.ts';
+import { degrees } from '#shared/geometry/units.ts';
 import { seconds } from '#shared/timing/units.ts';
 import type { LookedAtClip } from '#src/video/look-at-file.ts';
 import { BEFORE_SENDING, type Chosen, filmingAdvice } from './filming-rules.ts';
@@ -13,6 +15,7 @@ type Change = {
   details?: Partial<Chosen['details']>;
   filming?: Partial<Chosen['filming']>;
   bodyHeightMm?: number | null;
+  protocol?: Chosen['protocol'];
 };
 const chosen = (change: Change = {}): Chosen => ({
   look: {
@@ -40,6 +43,7 @@ const chosen = (change: Change = {}): Chosen => ({
     ...change.filming,
   },
   bodyHeightMm: change.bodyHeightMm === undefined ? 1740 : change.bodyHeightMm,
+  protocol: change.protocol === undefined ? STANDARD_PROTOCOL : change.protocol,
 });
 
 /** Beyond the limit, just within it, and what is said; null: nothing before the clip is sent. */
@@ -106,6 +110,35 @@ describe('what of a reading’s warnings is said before a clip is sent', () => {
   it('does not send someone nearer than the nearest distance for the sake of pixels', () => {
     const small = chosen({ look: { width: 540, height: 960 } });
     expect(BEFORE_SENDING['too-coarse'](small)).toMatch(/too coarse\. Film with more pixels/);
+  });
+});
+
+describe('the practice’s protocol', () => {
+  const slow = { frameRate: constant(24) };
+  const own = {
+    ...STANDARD_PROTOCOL,
+    gateFrom: degrees(50),
+    gateTo: degrees(95),
+    framesPerSecond: 120,
+  };
+
+  it('gives the gates, the frames between them and the frame rate that is asked for', () => {
+    expect(BEFORE_SENDING['slow-frame-rate'](chosen({ look: slow, protocol: own }))).toBe(
+      '24 frames per second; below 30 a quick lift passes from 50° to 95° in 5 frames. Film at 120.',
+    );
+  });
+
+  it('is not guessed while it is not known', () => {
+    expect(BEFORE_SENDING['slow-frame-rate'](chosen({ look: slow, protocol: null }))).toBe(
+      '24 frames per second; below 30 a quick lift passes from gate to gate in 3 frames. Film at 60.',
+    );
+  });
+
+  it('says of the study’s figures that they hold for other gates', () => {
+    const filming = { beltPointerMm: null };
+    const [lacks] = filmingAdvice(chosen({ filming, protocol: own }));
+    expect(lacks).toContain('° with both, worked out for 60° to 90°).');
+    expect(filmingAdvice(chosen({ filming }))[0]).toContain('° with both).');
   });
 });
 

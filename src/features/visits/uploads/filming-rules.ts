@@ -6,9 +6,11 @@ import {
   isSlow,
   shownAlongLongEdge,
 } from '#shared/measures/filming-limits.ts';
+import { type Gates, gatesOf, type Protocol, STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import type { Warning } from '#shared/reading/reasons.ts';
 import type { LookedAtClip } from '#src/video/look-at-file.ts';
 import { decimal, metres } from '#src/ui/figures.ts';
+import { betweenGates, studiedBetween } from '#src/ui/gate-words.ts';
 import type { ClipDetails } from './upload-item.ts';
 
 /** What is known of a clip before it is sent: its file, how it was filmed, and the person. */
@@ -17,6 +19,8 @@ export interface Chosen {
   readonly details: ClipDetails;
   readonly filming: Visit['filming'];
   readonly bodyHeightMm: number | null;
+  /** The practice's; null until it is known. */
+  readonly protocol: Protocol | null;
 }
 
 /** A sentence with its figure, its limit and what to do; null where nothing is wrong or nothing can be told. */
@@ -24,6 +28,20 @@ type Rule = (chosen: Chosen) => string | null;
 
 export const perSecond = ({ frameRate }: LookedAtClip): number | null =>
   frameRate === null ? null : frameRate.kind === 'constant' ? frameRate.fps : frameRate.averageFps;
+
+export const gatesOfPractice = ({ protocol }: Pick<Chosen, 'protocol'>): Gates | null =>
+  protocol && gatesOf(protocol);
+
+/** What the practice asks for. */
+export const rateAskedFor = ({ protocol }: Pick<Chosen, 'protocol'>): number =>
+  protocol?.framesPerSecond ?? LIMITS.goodFramesPerSecond.value;
+
+/** Whole frames while a quick lift passes the gates; a wider window takes it longer in proportion. */
+const framesBetween = (fps: number, { from, to }: Gates): number =>
+  Math.floor(
+    (fps * LIMITS.quickestPassSeconds.value * (to - from)) /
+      (STANDARD_GATES.to - STANDARD_GATES.from),
+  );
 
 const distances = ({ width, height }: LookedAtClip): string => {
   const to = Math.max(width, height) >= 3840 ? LIMITS.bestTo4kMm : LIMITS.bestToMm;
@@ -47,10 +65,11 @@ const tooCoarse: Rule = ({ look, filming: { distanceMm } }) => {
   return `At ${metres(distanceMm)} one pixel is about ${decimal(mmPerPx)} mm of the body ${LENS}; above ${decimal(LIMITS.coarse.value)} mm marks are too coarse. Film ${nearer}with more pixels (1080p or 4K).`;
 };
 
-const slow: Rule = ({ look }) => {
-  const fps = perSecond(look);
+const slow: Rule = (chosen) => {
+  const fps = perSecond(chosen.look);
+  const gates = gatesOfPractice(chosen);
   return fps !== null && isSlow(fps)
-    ? `${decimal(fps, 0)} frames per second; below ${LIMITS.framesPerSecond.value} a quick lift passes from 60° to 90° in ${Math.floor(fps * LIMITS.quickestPassSeconds.value)} frames. Film at ${LIMITS.goodFramesPerSecond.value}.`
+    ? `${decimal(fps, 0)} frames per second; below ${LIMITS.framesPerSecond.value} a quick lift passes ${betweenGates(gates)} in ${framesBetween(fps, gates ?? STANDARD_GATES)} frames. Film at ${rateAskedFor(chosen)}.`
     : null;
 };
 
@@ -106,7 +125,7 @@ const lacksOf = (chosen: Chosen): string[] => {
       ? `a rod or the body height (${percent(LIMITS.scaleError.value)} off the scale makes the turn ${percent(LIMITS.turnErrorByScale.value)} wrong)`
       : null,
     details.view === 'front' && filming.beltPointerMm === null
-      ? `pointer lengths (one rep tells a change of turn from none beyond ${bare.toldFromNone.one}° without pointers, beyond ${both.toldFromNone.one}° with both)`
+      ? `pointer lengths (one rep tells a change of turn from none beyond ${bare.toldFromNone.one}° without pointers, beyond ${both.toldFromNone.one}° with both${studiedBetween(gatesOfPractice(chosen))})`
       : null,
   ];
   return lacks.filter((lack) => lack !== null);

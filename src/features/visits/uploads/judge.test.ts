@@ -1,4 +1,6 @@
 import { describe, expect, it } from 'vitest';
+import { degrees } from '#shared/geometry/units.ts';
+import { STANDARD_PROTOCOL } from '#shared/protocol/protocol.ts';
 import { seconds } from '#shared/timing/units.ts';
 import type { LookedAtClip } from '#src/video/look-at-file.ts';
 import { type Filmed, judge as judgeFilmed, LARGEST_BYTES } from './judge.ts';
@@ -28,6 +30,7 @@ const filmed: Filmed = {
     thighPointerMm: 125,
   },
   bodyHeightMm: 1740,
+  protocol: STANDARD_PROTOCOL,
 };
 const judge = (of: Parameters<typeof judgeFilmed>[0], bytes: number) =>
   judgeFilmed(of, bytes, filmed);
@@ -66,6 +69,18 @@ describe('judge', () => {
     expect(verdict.grade).toBe(grade);
     expect(verdict.advice.join(' ')).toMatch(words);
     expect(verdict.sendable).toBe(true);
+  });
+
+  it('names the gates of the practice, or none while they are not known', () => {
+    const usable = look({ frameRate: constant(30) });
+    const adviceWith = (protocol: Filmed['protocol']) =>
+      judgeFilmed(usable, 48e6, { ...filmed, protocol }).advice;
+    expect(
+      adviceWith({ ...STANDARD_PROTOCOL, gateFrom: degrees(55), framesPerSecond: 120 }),
+    ).toEqual(['Usable; at 120 frames per second 55° and 90° are found more exactly.']);
+    expect(adviceWith(null)).toEqual([
+      'Usable; at 60 frames per second the gates are found more exactly.',
+    ]);
   });
 
   it('names what is weak about the way of filming after what is wrong with the file', () => {

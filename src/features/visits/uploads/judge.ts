@@ -1,7 +1,15 @@
 import type { Visit } from '#shared/contracts/visits.ts';
 import { FILMING_LIMITS as LIMITS, isSlow } from '#shared/measures/filming-limits.ts';
+import type { Protocol } from '#shared/protocol/protocol.ts';
 import type { LocalLook, LookedAtClip } from '#src/video/look-at-file.ts';
-import { BEFORE_SENDING, type Chosen, filmingAdvice, perSecond } from './filming-rules.ts';
+import {
+  BEFORE_SENDING,
+  type Chosen,
+  filmingAdvice,
+  gatesOfPractice,
+  perSecond,
+  rateAskedFor,
+} from './filming-rules.ts';
 import type { ClipDetails } from './upload-item.ts';
 
 /**
@@ -18,13 +26,18 @@ export type Verdict = {
   sendable: boolean;
 };
 
-/** How it was filmed, and the person. */
+/** How it was filmed, the person, and how the practice reads. */
 export type Filmed = Omit<Chosen, 'look'>;
 
-export const filmedAs = ({ filming, athlete }: Visit, details: ClipDetails): Filmed => ({
+export const filmedAs = (
+  { filming, athlete }: Visit,
+  details: ClipDetails,
+  protocol: Protocol | null,
+): Filmed => ({
   details,
   filming,
   bodyHeightMm: athlete.heightMm,
+  protocol,
 });
 
 type Fault = { grade: 'weak' | 'again'; words: string };
@@ -64,6 +77,7 @@ function faultsOf(look: LookedAtClip, bytes: number, filmed: Filmed): Fault[] {
   const fps = perSecond(look);
   const shortEdge = Math.min(look.width, look.height);
   const length = Number(look.length);
+  const gates = gatesOfPractice(filmed);
 
   if (bytes > LARGEST_BYTES)
     again('The file is larger than 2 GB: cut it on the phone to the part that matters.');
@@ -77,7 +91,7 @@ function faultsOf(look: LookedAtClip, bytes: number, filmed: Filmed): Fault[] {
   for (const words of filmingAdvice({ look, ...filmed })) weak(words);
   if (fps !== null && !isSlow(fps) && fps < GOOD_FPS)
     weak(
-      `Usable; at ${LIMITS.goodFramesPerSecond.value} frames per second 60° and 90° are found more exactly.`,
+      `Usable; at ${rateAskedFor(filmed)} frames per second ${gates ? `${gates.from}° and ${gates.to}°` : 'the gates'} are found more exactly.`,
     );
   if (shortEdge >= LEAST_SHORT_EDGE && shortEdge < GOOD_SHORT_EDGE)
     weak('Usable; at 1080p marks sit more exactly.');
