@@ -4,6 +4,8 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { degrees } from '#shared/geometry/units.ts';
+import { type ReadingRules, STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { deriveReading } from '#shared/reading/derive.ts';
 import { goldenFiles } from './golden-files.ts';
 import { linesOf } from './lines.ts';
@@ -123,6 +125,16 @@ describe('the lines', () => {
     expect(line?.pEarly).toBeLessThan(0.03);
   });
 
+  it('are read with the gates that are given', () => {
+    const g05 = JSON.stringify(goldenFiles().find(({ id }) => id.startsWith('g05')));
+    const changeOf = (rules?: ReadingRules) =>
+      linesOf(g05, 1, rules).lines.find(({ set }) => set === 'belt+thigh')?.d ?? NaN;
+    const narrower = changeOf({ ...STANDARD_RULES, gateFrom: degrees(65) });
+    // it turns in all the way: over less lift by less
+    expect(narrower).toBeLessThan(-5);
+    expect(narrower).toBeGreaterThan(changeOf() + 0.5);
+  });
+
   it('name what is not JSON', () => {
     expect(linesOf('{"id":').error).toMatch(/not JSON/);
     expect(linesOf('3').error).toMatch(/must be an object/);
@@ -180,5 +192,23 @@ describe('the command', () => {
     const absent = await run(join(folder, 'absent.jsonl'));
     expect(absent.status).toBe(2);
     expect(absent.err).toMatch(/Cannot read the file/);
+  }, 60_000);
+
+  it('reads with a protocol’s file, and says what is wrong with one', async () => {
+    const file = join(folder, 'one.jsonl');
+    await writeFile(file, JSON.stringify(plain));
+    const protocol = join(folder, 'own.json');
+    // the trial stops at 80°: short of 90°, but not of 75°
+    await writeFile(protocol, '{"gateFrom": 50, "gateTo": 75, "liftShort": 70}');
+    const { status, out } = await run('--protocol', protocol, file);
+    expect(status).toBe(0);
+    expect(out).not.toContain('lift-stops-short');
+    await writeFile(protocol, '{"gateFrom": 20}');
+    const bad = await run('--protocol', protocol, file);
+    expect(bad).toMatchObject({ status: 2, out: '' });
+    expect(bad.err).toBe(`The protocol ${protocol}: gateFrom: Choose 45° to 80°.\n`);
+    const absent = await run('--protocol', join(folder, 'absent.json'), file);
+    expect(absent).toMatchObject({ status: 2, out: '' });
+    expect(absent.err).toMatch(/^The protocol .*absent\.json: /);
   }, 60_000);
 });

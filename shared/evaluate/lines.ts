@@ -1,6 +1,7 @@
 import { deriveReading } from '#shared/reading/derive.ts';
 import { CURRENT_ENGINE, type EngineVersion } from '#shared/reading/engine.ts';
 import type { ReadingCode } from '#shared/reading/types.ts';
+import { type ReadingRules, STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { TrialError } from './trial-error.ts';
 import { readingInputOf, TRIAL_SETS, trialOf, type TrialSet } from './trial.ts';
 
@@ -9,7 +10,7 @@ export interface EvaluatedLine {
   readonly id: string;
   readonly set: TrialSet;
   readonly reading: ReadingCode;
-  /** Change of turn from 60° to 90°, its total standard uncertainty, P(early), MDT90: degrees. */
+  /** Change of turn from the lower gate to the upper, its total standard uncertainty, P(early), MDT90: degrees. */
   readonly d: number | null;
   readonly u: number | null;
   readonly pEarly: number | null;
@@ -28,11 +29,12 @@ const parse = (line: string): unknown => {
 export const linesOf = (
   line: string,
   engine: EngineVersion = CURRENT_ENGINE,
+  rules: ReadingRules = STANDARD_RULES,
 ): { readonly lines: readonly EvaluatedLine[]; readonly error: string | null } => {
   try {
     const trial = trialOf(parse(line));
     const lines = TRIAL_SETS.map((set): EvaluatedLine => {
-      const { code, figures } = deriveReading(readingInputOf(trial, set, engine));
+      const { code, figures } = deriveReading(readingInputOf(trial, set, engine, rules));
       return {
         id: trial.id,
         set,

@@ -7,13 +7,24 @@ describe('the command line of evaluate', () => {
     expect(evaluateOptions(['trials.jsonl'])).toEqual({
       file: 'trials.jsonl',
       engine: CURRENT_ENGINE,
+      protocol: null,
     });
-    expect(evaluateOptions(['-'])).toEqual({ file: '-', engine: CURRENT_ENGINE });
+    expect(evaluateOptions(['-'])).toMatchObject({ file: '-', engine: CURRENT_ENGINE });
   });
 
   it('takes an engine before or after the file', () => {
-    expect(evaluateOptions(['--engine', '1', 'a.jsonl'])).toEqual({ file: 'a.jsonl', engine: 1 });
-    expect(evaluateOptions(['a.jsonl', '--engine', '1'])).toEqual({ file: 'a.jsonl', engine: 1 });
+    const asked = { file: 'a.jsonl', engine: 1, protocol: null };
+    expect(evaluateOptions(['--engine', '1', 'a.jsonl'])).toEqual(asked);
+    expect(evaluateOptions(['a.jsonl', '--engine', '1'])).toEqual(asked);
+  });
+
+  it('takes a protocol’s file, with or without an engine', () => {
+    const asked = { file: 'a.jsonl', protocol: 'own.json' };
+    expect(evaluateOptions(['--protocol', 'own.json', 'a.jsonl'])).toMatchObject(asked);
+    expect(evaluateOptions(['a.jsonl', '--protocol', 'own.json', '--engine', '2'])).toEqual({
+      ...asked,
+      engine: 2,
+    });
   });
 
   it.each([
@@ -23,6 +34,9 @@ describe('the command line of evaluate', () => {
     [['--engine', '99', 'a.jsonl']],
     [['--engine']],
     [['a.jsonl', '--engine']],
+    [['a.jsonl', '--protocol']],
+    [['--protocol', '--engine', '1', 'a.jsonl']],
+    [['--protocol', '-', 'a.jsonl']],
   ])('does not guess at %j', (args) => {
     expect(evaluateOptions(args)).toBeNull();
   });

@@ -3,15 +3,33 @@ import { CURRENT_ENGINE, type EngineVersion, engineOf, ENGINES } from '#shared/r
 export interface EvaluateOptions {
   readonly file: string;
   readonly engine: EngineVersion;
+  /** File with the gates and limits to read with; null: the standard. */
+  readonly protocol: string | null;
 }
 
-export const USAGE = `npm run --silent evaluate -- [--engine ${ENGINES.join('|')}] FILE.jsonl   (one trial per line)`;
+export const USAGE = `npm run --silent evaluate -- [--engine ${ENGINES.join('|')}] [--protocol FILE.json] FILE.jsonl
+  FILE.jsonl  one trial per line; - reads standard input
+  --protocol  gates and limits to read with, such as {"gateFrom": 55, "gateTo": 90}; what it leaves out is the standard's`;
+
+const isFile = (word: string): boolean => !word.startsWith('-');
 
 /** What the command line asks for; null where it is not understood. */
 export const evaluateOptions = (args: readonly string[]): EvaluateOptions | null => {
-  const at = args.indexOf('--engine');
-  const engine = at < 0 ? CURRENT_ENGINE : engineOf(args[at + 1]);
-  const [file, ...more] = at < 0 ? args : [...args.slice(0, at), ...args.slice(at + 2)];
+  const files: string[] = [];
+  let engine: EngineVersion | null = CURRENT_ENGINE;
+  let protocol: string | null = null;
+  for (let at = 0; at < args.length; at += 1) {
+    const word = args[at] ?? '';
+    if (word === '--engine') {
+      at += 1;
+      engine = engineOf(args[at]);
+    } else if (word === '--protocol') {
+      at += 1;
+      protocol = args[at] ?? '-';
+    } else files.push(word);
+  }
+  const [file, ...more] = files;
   if (engine === null || file === undefined || more.length > 0) return null;
-  return file === '-' || !file.startsWith('-') ? { file, engine } : null;
+  if (protocol !== null && !isFile(protocol)) return null;
+  return file === '-' || isFile(file) ? { file, engine, protocol } : null;
 };

@@ -5,7 +5,7 @@ import { ASSUMED_MARK_ERROR, type CameraInput } from '#shared/measures/inputs.ts
 import { CURRENT_ENGINE, type EngineVersion } from '#shared/reading/engine.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
 import { frameIndex, milliseconds } from '#shared/timing/units.ts';
-import { STANDARD_RULES } from '#shared/protocol/protocol.ts';
+import { type ReadingRules, STANDARD_RULES } from '#shared/protocol/protocol.ts';
 import { TrialError } from './trial-error.ts';
 import {
   field,
@@ -162,6 +162,7 @@ export const readingInputOf = (
   trial: Trial,
   set: TrialSet,
   engine: EngineVersion = CURRENT_ENGINE,
+  rules: ReadingRules = STANDARD_RULES,
 ): ReadingInput => ({
   engine,
   supportSide: trial.supportSide,
@@ -169,6 +170,6 @@ export const readingInputOf = (
   thighTurnsLittle: set === 'belt+prior',
   markError: ASSUMED_MARK_ERROR,
   ownSystematic: null,
-  rules: STANDARD_RULES,
+  rules,
   reps: trial.reps,
 });
