@@ -97,9 +97,15 @@ const oursShows = async (wanted: number, intent: FrameIntent): Promise<Shown | n
   return numberShown() === wanted ? { presented, ready } : null;
 };
 
-/** Requests come at any moment of the screen's rhythm, as a key press does. */
+/**
+ * Composing what was shown goes on after it was presented, without a graphics card for longer than
+ * the next request takes: requests on each other's heels would time that. A person's come later.
+ */
+const REST_MS = 120;
+
+/** Requests come at any moment of the screen's rhythm, as a key press does, to a screen at rest. */
 const anyMoment = (k: number): Promise<void> =>
-  new Promise((resolve) => setTimeout(resolve, (k * 7) % 17));
+  new Promise((resolve) => setTimeout(resolve, REST_MS + ((k * 7) % 17)));
 
 const nothingYet = (): Timings => ({ presented: [], ready: [], wrong: 0 });
 
