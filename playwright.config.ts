@@ -21,7 +21,8 @@ export default defineConfig({
     viewport: { width: 1440, height: 900 },
     locale: 'en-GB',
     timezoneId: 'UTC',
-    trace: 'retain-on-failure',
+    // what was done and asked for; pictures of every step would cost each key press two of the page
+    trace: { mode: 'retain-on-failure', screenshots: false, snapshots: false, sources: false },
     screenshot: 'only-on-failure',
   },
   projects: [

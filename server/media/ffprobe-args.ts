@@ -41,16 +41,3 @@ export const headerArgs = (path: string, demuxer: Demuxer): string[] =>
  */
 export const fileArgs = (path: string, demuxer: Demuxer): string[] =>
   entries(path, demuxer, `packet=codec_type,stream_index,pts,duration,flags:${headerEntries}`);
-
-/** Of a copy that was made here: its packets, size and clock in one run. */
-export const copyArgs = (path: string): string[] => [
-  '-v',
-  'error',
-  ...guard('mov'),
-  '-show_entries',
-  'packet=pts,flags:stream=width,height,time_base',
-  '-of',
-  'csv',
-  '-i',
-  path,
-];

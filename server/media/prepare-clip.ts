@@ -42,7 +42,7 @@ export async function prepareClip(request: PrepareRequest): Promise<PreparedClip
       meter.copied(frames, valid.expected.length),
     );
     meter.finishing();
-    const frames = await readFrames(clip, temporary, copies, outcome, signal);
+    const frames = await readFrames(clip, temporary, copies, outcome);
     const { corruptFrames } = outcome;
     const accept = request.acceptRemains ?? false;
     const match = settle(clip, valid, { frames, corruptFrames }, accept);
