@@ -1,6 +1,8 @@
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import type { Rep } from '#shared/contracts/reps.ts';
+import { carriesWeight } from '#shared/course/carries-weight.ts';
 import { courseOfRep, isCourse } from '#shared/course/course-of-rep.ts';
+import type { CourseFrame } from '#shared/course/types.ts';
 import { worthKeeping } from '#shared/course/worth-keeping.ts';
 import {
   changing,
@@ -71,6 +73,18 @@ const denseMarks = (filling: Filling): MarksByFrame => {
   return dense;
 };
 
+/** Frames on which a place that can change the reading is not sure. */
+const doubtfulOf = (filling: Filling, frames: readonly CourseFrame[]): ReadonlySet<FrameIndex> =>
+  new Set(
+    frames
+      .filter((own) =>
+        followedOn(filling, own.frame).some(
+          ([id, { state }]) => state !== 'sure' && carriesWeight(id, own),
+        ),
+      )
+      .map(({ frame }) => frame),
+  );
+
 /** Frames whose marks carry the reading, and those that carry marks already. */
 export const framesToFill = (filling: Filling): readonly FrameIndex[] => {
   const { rep, document, times, set, marks } = filling;
@@ -78,14 +92,9 @@ export const framesToFill = (filling: Filling): readonly FrameIndex[] => {
   const dense = denseMarks(filling);
   const input = repInputOf({ rep, clip, times, marks: dense, bodyHeightMm: athlete.heightMm });
   const course = input && courseOfRep(input, set, ASSUMED_MARK_ERROR, { halfWidths: false });
-  const doubtful = new Set(
-    [...dense.keys()].filter((frame) =>
-      followedOn(filling, frame).some(([, { state }]) => state !== 'sure'),
-    ),
-  );
   const chosen =
     course && isCourse(course)
-      ? worthKeeping(course.frames, doubtful)
+      ? worthKeeping(course.frames, doubtfulOf(filling, course.frames))
       : evenly([...dense.keys()], WITHOUT_COURSE);
   return [...new Set([...chosen, ...marks.keys()])].sort((a, b) => a - b);
 };

@@ -1,3 +1,5 @@
+import { carriesWeight } from '#shared/course/carries-weight.ts';
+import type { CourseFrame } from '#shared/course/types.ts';
 import type { FrameMarks, MarkValue, PointValue } from '#shared/landmarks/commands.ts';
 import { LANDMARK_IDS, type LandmarkId } from '#shared/landmarks/types.ts';
 import type { FrameIndex } from '#shared/timing/units.ts';
@@ -20,25 +22,37 @@ export interface HollowFrame {
   readonly rep: BenchRep;
   readonly frame: FrameIndex;
   readonly marks: FrameMarks;
-  /** Landmarks that the tracker was not sure of. */
+  /** Landmarks that the tracker was not sure of, and that can change the reading. */
   readonly unsure: readonly LandmarkId[];
+  /** Landmarks that it was not sure of either, but that carry no weight on this frame. */
+  readonly slight: readonly LandmarkId[];
 }
 
+/** By rep, what is known of its frames. */
+export type Courses = ReadonlyMap<string, ReadonlyMap<FrameIndex, CourseFrame>>;
+
 /** Every frame that waits to be looked at, rep by rep. */
-export const framesToLookAt = (reps: readonly BenchRep[]): readonly HollowFrame[] =>
-  reps.flatMap((rep) =>
-    [...rep.marks]
+export const framesToLookAt = (
+  reps: readonly BenchRep[],
+  courses: Courses = new Map(),
+): readonly HollowFrame[] =>
+  reps.flatMap((rep) => {
+    const known = courses.get(rep.rep.id);
+    return [...rep.marks]
       .sort(([a], [b]) => a - b)
       .flatMap(([frame, marks]) => {
         const hollow = LANDMARK_IDS.filter((id) => isHollow(marks[id]));
         if (hollow.length === 0) return [];
-        const unsure = hollow.filter((id) => {
+        const doubted = hollow.filter((id) => {
           const mark = marks[id];
           return mark?.to === 'point' && (mark.confidence ?? 0) < SURE;
         });
-        return [{ rep, frame, marks, unsure }];
-      }),
-  );
+        const [unsure, slight] = [true, false].map((counts) =>
+          doubted.filter((id) => carriesWeight(id, known?.get(frame)) === counts),
+        );
+        return [{ rep, frame, marks, unsure: unsure ?? [], slight: slight ?? [] }];
+      });
+  });
 
 export const hollowFrames = (reps: readonly BenchRep[]): number => framesToLookAt(reps).length;
 

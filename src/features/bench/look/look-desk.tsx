@@ -1,5 +1,5 @@
 import { group } from 'd3-array';
-import { type ReactNode, useEffect, useMemo, useState } from 'react';
+import { type ReactNode, useCallback, useEffect, useMemo, useState } from 'react';
 import type { FrameSource } from '#src/video/types.ts';
 import { Button } from '#src/ui/button.tsx';
 import { capital, inWords } from '#src/ui/figures.ts';
@@ -43,6 +43,11 @@ function Sheet({ look, words, source }: { look: Look; words: string; source: Fra
   /** What the hand has turned over: sure frames are chosen by themselves, unsure ones are not. */
   const [turned, setTurned] = useState<ReadonlySet<string>>(new Set());
   const painter = useThumbPainter(source);
+  const [painted, setPainted] = useState<ReadonlySet<string>>(new Set());
+  const onPainted = useCallback(
+    (each: HollowFrame) => setPainted((before) => new Set(before).add(keyOf(each))),
+    [],
+  );
   const isChosen = (each: HollowFrame) => (each.unsure.length === 0) !== turned.has(keyOf(each));
   const choose = (frames: readonly HollowFrame[], chosen: boolean) =>
     setTurned((before) => {
@@ -55,7 +60,9 @@ function Sheet({ look, words, source }: { look: Look; words: string; source: Fra
   const chosen = waiting.filter(isChosen);
   const unsure = waiting.filter((each) => each.unsure.length > 0);
   const sure = waiting.filter((each) => each.unsure.length === 0);
-  const common = { look, painter, isChosen, choose };
+  // nobody has seen a frame whose picture is still dark
+  const shown = chosen.filter((each) => painted.has(keyOf(each))).length;
+  const common = { look, painter, isChosen, choose, onPainted };
   return (
     <>
       <p className="mt-1 max-w-[44em]">
@@ -64,12 +71,21 @@ function Sheet({ look, words, source }: { look: Look; words: string; source: Fra
       </p>
       {may.mark && (
         <div className="bench-look-acts">
-          <Button look="primary" disabled={chosen.length === 0} onClick={() => confirm(chosen)}>
+          <Button
+            look="primary"
+            disabled={chosen.length === 0 || shown < chosen.length}
+            onClick={() => confirm(chosen)}
+          >
             {chosen.length === 1
               ? 'This frame is right'
               : `These ${chosen.length} frames are right`}
           </Button>
           {next && <Button onClick={next}>Look where it was unsure</Button>}
+          {shown < chosen.length && (
+            <p className="self-center text-soft">
+              {shown} of {chosen.length} pictures are here.
+            </p>
+          )}
         </div>
       )}
       {unsure.length > 0 && (
@@ -102,6 +118,7 @@ function Group({
   painter,
   isChosen,
   choose,
+  onPainted,
   children,
 }: {
   title: string;
@@ -110,6 +127,7 @@ function Group({
   painter: ThumbPainter | null;
   isChosen: (frame: HollowFrame) => boolean;
   choose: (frames: readonly HollowFrame[], chosen: boolean) => void;
+  onPainted: (frame: HollowFrame) => void;
   children?: ReactNode;
 }) {
   const { current, figures } = useBenchModel();
@@ -131,6 +149,7 @@ function Group({
             painter={painter}
             lift={figures ? (lifts.get(each.frame) ?? null) : null}
             chosen={isChosen(each)}
+            onPainted={onPainted}
             onChoose={(chosen) => choose([each], chosen)}
             onShow={() => look.show(each)}
           />

@@ -11,6 +11,8 @@ export interface ThumbOrder {
   readonly canvas: HTMLCanvasElement;
   readonly viewport: Viewport;
   readonly drawn: readonly Primitive[];
+  /** Called once it is painted, or cannot be. */
+  readonly painted?: () => void;
 }
 
 export interface ThumbPainter {
@@ -67,6 +69,7 @@ export const createThumbPainter = (source: FrameSource, frameSize: Size): ThumbP
       orders.delete(next);
       // a frame that cannot be shown leaves its small picture dark; the clip itself says why
       await paint(next).catch(() => undefined);
+      if (!closed) next.painted?.();
     }
     running = false;
   };

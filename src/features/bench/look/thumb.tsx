@@ -32,6 +32,7 @@ export function Thumb({
   lift,
   chosen,
   onChoose,
+  onPainted,
   onShow,
 }: {
   own: HollowFrame;
@@ -40,12 +41,14 @@ export function Thumb({
   lift: Degrees | null;
   chosen: boolean;
   onChoose: (chosen: boolean) => void;
+  /** The picture is there, or cannot be made. */
+  onPainted: (own: HollowFrame) => void;
   onShow: () => void;
 }) {
   const { frameSize } = useBenchTools();
   const onScreen = useBench((state) => state.frame === own.frame);
   const canvas = useRef<HTMLCanvasElement>(null);
-  const { frame, marks, rep, unsure } = own;
+  const { frame, marks, rep, unsure, slight } = own;
   useEffect(() => {
     const target = canvas.current;
     if (!target || !painter) return;
@@ -63,10 +66,13 @@ export function Thumb({
       hips: hipsOf(marks, null),
       values: null,
     });
-    return painter.order({ frame, canvas: target, viewport, drawn });
-  }, [painter, own, frame, marks, rep, unsure, frameSize]);
+    const painted = () => onPainted(own);
+    return painter.order({ frame, canvas: target, viewport, drawn, painted });
+  }, [painter, own, frame, marks, rep, unsure, frameSize, onPainted]);
   const height = lift === null ? '' : `, lift ${liftText(lift, rep.rep.view === 'front', 0)}`;
-  const doubt = unsure.map((id) => landmark(id).label.toLowerCase()).join('; ');
+  const [doubt, weightless] = [unsure, slight].map((ids) =>
+    ids.map((id) => landmark(id).label.toLowerCase()).join('; '),
+  );
   return (
     <li className="bench-thumb" data-current={onScreen || undefined}>
       <label className="relative block cursor-pointer">
@@ -74,7 +80,7 @@ export function Thumb({
           type="checkbox"
           checked={chosen}
           onChange={(event) => onChoose(event.target.checked)}
-          aria-label={`Frame ${frame}${height}${doubt === '' ? '' : `, unsure: ${doubt}`}: right`}
+          aria-label={`Frame ${frame}${height}${!doubt ? '' : `, unsure: ${doubt}`}: right`}
           className="absolute left-1.5 top-1.5 size-6 accent-ink"
         />
         <canvas
@@ -95,7 +101,12 @@ export function Thumb({
           {lift === null ? '' : liftText(lift, rep.rep.view === 'front', 0)}
         </span>
       </button>
-      {doubt !== '' && <p className="px-1.5 pb-1.5 text-caption leading-4 text-ochre">{doubt}</p>}
+      {doubt && <p className="px-1.5 pb-1.5 text-caption leading-4 text-ochre">{doubt}</p>}
+      {!doubt && weightless && (
+        <p className="px-1.5 pb-1.5 text-caption leading-4 text-soft">
+          unsure, but no part of the reading here: {weightless}
+        </p>
+      )}
     </li>
   );
 }

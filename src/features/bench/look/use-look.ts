@@ -1,9 +1,11 @@
 import { useMemo } from 'react';
 import { lookedAt } from '#shared/landmarks/commands-make.ts';
+import type { LandmarkSetId } from '#shared/landmarks/types.ts';
 import { commitMany } from '../actions/use-marking.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
+import { type BenchRep, withCourse } from '../model/bench-model.ts';
 import { goTo } from '../store/bench-store.ts';
-import { framesToLookAt, type HollowFrame, nextUnsure } from './followed.ts';
+import { type Courses, framesToLookAt, type HollowFrame, nextUnsure } from './followed.ts';
 
 export interface Look {
   /** Frames with marks that nobody has looked at, rep by rep. */
@@ -15,13 +17,21 @@ export interface Look {
   readonly next: (() => void) | null;
 }
 
+const coursesOf = (reps: readonly BenchRep[], set: LandmarkSetId): Courses =>
+  new Map(
+    reps.map((rep) => [
+      rep.rep.id,
+      new Map(withCourse(rep, set).frames.map((frame) => [frame.frame, frame])),
+    ]),
+  );
+
 /** Looking at what was followed. */
 export function useLook(): Look {
   const tools = useBenchTools();
   const document = useBenchDocument();
-  const { reps } = useBenchModel();
+  const { reps, set } = useBenchModel();
   const frame = useBench((state) => state.frame);
-  const waiting = useMemo(() => framesToLookAt(reps), [reps]);
+  const waiting = useMemo(() => framesToLookAt(reps, coursesOf(reps, set)), [reps, set]);
   return useMemo(() => {
     const { store, follow } = tools;
     const show = ({ rep, frame: at }: HollowFrame) => {
