@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import type { FramePoint } from '#shared/geometry/points.ts';
 import type { MarkingCommand, MarksByFrame } from '#shared/landmarks/commands.ts';
 import { hide, lookedAt, place, remove, removeFrame } from '#shared/landmarks/commands-make.ts';
-import { record } from '#shared/landmarks/commands-history.ts';
+import { type History, record } from '#shared/landmarks/commands-history.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { FrameIndex } from '#shared/timing/units.ts';
 import { pictureLongEdge } from '#src/canvas/picture-board.ts';
@@ -18,7 +18,7 @@ import type { NewMark } from '../queue/queue-core.ts';
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import type { Rep } from '#shared/contracts/reps.ts';
 import { isDraft, touchesAfter } from '../model/draft.ts';
-import type { RepMarks } from '../store/bench-store.ts';
+import type { BenchStep, RepMarks } from '../store/bench-store.ts';
 
 export interface Marking {
   /** Puts the landmark at a point of the frame on show; leading goes on. */
@@ -63,18 +63,21 @@ export const commit = (
   }));
 };
 
-/** Marks of several reps as one step of undo. */
+/**
+ * Marks of several reps as one step of undo.
+ * @param step the history with them; without it a step of their own
+ */
 export const commitMany = (
   tools: BenchTools,
   document: BenchDocument,
   parts: readonly RepMarks[],
+  step = (history: History<BenchStep>, real: readonly RepMarks[]) =>
+    record(history, { kind: 'many-marks', parts: real }),
 ): void => {
   const real = parts.filter(({ commands }) => commands.length > 0);
   if (real.length === 0) return;
   void tools.queue.add(real.flatMap(({ repId, commands }) => newMarks(document, repId, commands)));
-  tools.store.setState((state) => ({
-    history: record(state.history, { kind: 'many-marks', parts: real }),
-  }));
+  tools.store.setState((state) => ({ history: step(state.history, real) }));
 };
 
 /** Marks before there is a rep are kept in the page, and are a step of undo all the same. */

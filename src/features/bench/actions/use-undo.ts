@@ -54,7 +54,8 @@ export function useUndo(): Undo {
         void queue.add(parts.flatMap(({ repId, commands }) => newMarks(document, repId, commands)));
         // what changes must be seen to change
         const first = parts[0]?.commands[0];
-        if (first) goTo(store, first.frame);
+        const shown = step.kind === 'many-marks' ? step.shown : undefined;
+        if (first) goTo(store, shown ?? first.frame);
         return true;
       }
       const work =

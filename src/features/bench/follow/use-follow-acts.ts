@@ -2,6 +2,7 @@ import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { useMemo } from 'react';
 import { nextLandmark } from '../model/led.ts';
 import type { Rep } from '#shared/contracts/reps.ts';
+import { markAt } from '#shared/landmarks/commands.ts';
 import { emptyHistory } from '#shared/landmarks/commands-history.ts';
 import type { FoundRep } from '#shared/course/find-reps.ts';
 import { type SpotId, spotOf } from '#shared/landmarks/spots.ts';
@@ -16,6 +17,7 @@ import { goTo } from '../store/bench-store.ts';
 import { useNewest } from '../use-newest.ts';
 import { fillRep, refill } from './fill-rep.ts';
 import { withTracks } from './following.ts';
+import { withFollowed } from './join-step.ts';
 import { keyframesOf, keyframesOfTouches, spanAround } from './keyframes.ts';
 import { repsFromTracks } from './reps-from-tracks.ts';
 import {
@@ -137,7 +139,13 @@ export function useFollowActs(): FollowActs {
         commitMany(
           tools,
           open,
-          fresh.reps.map(({ rep }) => ({ repId: rep.id, commands: touchedMarks(rep, touches) })),
+          fresh.reps.map(({ rep, marks }) => ({
+            repId: rep.id,
+            // a touch kept from earlier is older than a mark that stands there by now
+            commands: touchedMarks(rep, touches).filter(
+              ({ frame, landmark }) => markAt(marks, frame, landmark) === null,
+            ),
+          })),
         );
       },
       async again(repId, landmark, frame) {
@@ -158,7 +166,9 @@ export function useFollowActs(): FollowActs {
           repId: each.id,
           commands: refill({ rep: each, marks, tracks, pictureLongEdge }, landmark, [from, to]),
         }));
-        commitMany(tools, open, parts);
+        commitMany(tools, open, parts, (history, real) =>
+          withFollowed(history, { repId, landmark, frame }, real),
+        );
       },
     };
   }, [tools, edits, complete, now]);

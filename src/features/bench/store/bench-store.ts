@@ -7,6 +7,7 @@ import type { FrameIndex } from '#shared/timing/units.ts';
 import type { Viewport } from '#src/canvas/viewport.ts';
 import { NO_TOUCHES, type StandsOn, type Touches } from '../model/draft.ts';
 import type { RepChange } from '../actions/rep-change.ts';
+import type { KeptTouches } from './kept-touches.ts';
 import { loadTaste, saveTaste, type Taste } from './taste.ts';
 import { LOOK, MARK, type Tool } from './tools.ts';
 
@@ -19,7 +20,12 @@ export interface RepMarks {
 export type BenchStep =
   | ({ readonly kind: 'marks' } & RepMarks)
   /** Marks of several reps that came at once: carried by the computer, or confirmed together. */
-  | { readonly kind: 'many-marks'; readonly parts: readonly RepMarks[] }
+  | {
+      readonly kind: 'many-marks';
+      readonly parts: readonly RepMarks[];
+      /** The frame on which a hand began it; absent: the first of the marks. */
+      readonly shown?: FrameIndex;
+    }
   /** Marks placed before there is a rep. */
   | { readonly kind: 'touches'; readonly before: Touches; readonly after: Touches }
   | {
@@ -47,6 +53,8 @@ export interface BenchState {
   readonly playing: boolean;
   /** Only while the clip has no rep. */
   readonly touches: Touches;
+  /** False where this device keeps no touches: a reload loses them. */
+  readonly touchesKept: boolean;
   readonly standsOn: StandsOn;
   /** The list of keys is open. */
   readonly keysOpen: boolean;
@@ -56,20 +64,24 @@ export interface BenchState {
 
 export type BenchStore = StoreApi<BenchState>;
 
-/** Tool, selection, zoom and undo of one open clip. Nothing in it outlives the page but the taste. */
+/** Tool, selection, zoom and undo of one open clip. Only the taste and the touches outlive the page. */
 export const createBenchStore = (
   start: Pick<BenchState, 'frame' | 'repId' | 'desk'> & {
     readonly mayMark: boolean;
     /** What the clip is said to hold. */
     readonly standsOn?: StandsOn;
+    readonly kept?: KeptTouches;
   },
 ): BenchStore => {
+  const { kept } = start;
+  const earlier = kept?.load();
   const store = createStore<BenchState>(() => ({
     frame: start.frame,
     repId: start.repId,
     desk: start.desk,
-    standsOn: start.standsOn ?? 'both',
-    touches: NO_TOUCHES,
+    standsOn: earlier?.standsOn ?? start.standsOn ?? 'both',
+    touches: earlier?.touches ?? NO_TOUCHES,
+    touchesKept: true,
     viewport: null,
     tool: start.mayMark ? MARK : LOOK,
     chosen: null,
@@ -81,6 +93,10 @@ export const createBenchStore = (
   }));
   store.subscribe((state, before) => {
     if (state.taste !== before.taste) saveTaste(state.taste);
+    const { touches, standsOn } = state;
+    if (!kept || (touches === before.touches && standsOn === before.standsOn)) return;
+    const touchesKept = kept.save({ touches, standsOn });
+    if (touchesKept !== state.touchesKept) store.setState({ touchesKept });
   });
   return store;
 };
