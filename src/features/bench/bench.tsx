@@ -40,6 +40,7 @@ import { RepsPanel } from './reps/reps-panel.tsx';
 import { WaitingLine } from './save-state.tsx';
 import { SetUpPanel } from './set-up/set-up-panel.tsx';
 import { createBenchStore } from './store/bench-store.ts';
+import { touchesOf } from './store/open-touches.ts';
 import { LiftStrip } from './strip/lift-strip.tsx';
 import { Transport } from './strip/transport.tsx';
 import './bench.css';
@@ -70,6 +71,7 @@ export function Bench({ document, frames, frameSize, copySize }: ReadyClip) {
         desk: comment ? 'comments' : search.has('again') ? 'reps' : 'course',
         mayMark: document.may.mark,
         standsOn: document.clip.supportSide ?? 'both',
+        kept: touchesOf(user.id, document.clip.id),
       }),
       hand: createHand(),
       board: createPictureBoard(),

@@ -2,7 +2,8 @@ import { useSyncExternalStore } from 'react';
 import { frameIndex } from '#shared/timing/units.ts';
 import { Button } from '#src/ui/button.tsx';
 import { StateDot } from '#src/ui/state-dot.tsx';
-import { useBenchTools } from './bench-context.ts';
+import { useBench, useBenchTools } from './bench-context.ts';
+import { countTouches } from './model/draft.ts';
 import { countOf, type QueuedMark } from './queue/queue-core.ts';
 import type { QueueLink } from './queue/mark-queue.ts';
 import { goTo } from './store/bench-store.ts';
@@ -23,6 +24,8 @@ export function SaveState() {
   const { queue, store, clipId } = useBenchTools();
   const { marks, link } = useSyncExternalStore(queue.subscribe, queue.snapshot);
   const { waiting, disputed, refused } = countOf(marks);
+  const touched = useBench((state) => countTouches(state.touches));
+  const kept = useBench((state) => state.touchesKept);
   const here = (state: QueuedMark['state']['is']) =>
     marks.find((each) => each.state.is === state && each.clipId === clipId);
   const show = (mark: QueuedMark | undefined) => {
@@ -57,6 +60,10 @@ export function SaveState() {
       )}
       {waiting > 0 ? (
         <StateDot kind="wait">{waitingWords(waiting, link)}</StateDot>
+      ) : touched > 0 ? (
+        <StateDot kind="wait">
+          {marksWords(touched)} on this {kept ? 'device' : 'page'} only
+        </StateDot>
       ) : (
         disputed + refused === 0 && <StateDot kind="done">all saved</StateDot>
       )}

@@ -8,6 +8,7 @@ import type { Following } from './following.ts';
 import { foundWords, noRepsWords, runWords, saidWords } from './follow-words.ts';
 import { keyframesOf } from './keyframes.ts';
 import { useFollow } from './use-follow.ts';
+import { useFollowState } from './use-follow-state.ts';
 
 /** What the computer does with the marks: how a touch was taken, how far following is, what was found. */
 export function FollowPanel() {
@@ -104,7 +105,9 @@ function Collecting() {
   const { store } = useBenchTools();
   const { current } = useBenchModel();
   const standsOn = useBench((state) => state.standsOn);
+  const kept = useBench((state) => state.touchesKept);
   const { start } = useFollow();
+  const again = useFollowState() === 'found';
   const id = useId();
   const touched = current ? Object.values(touchedOnce(current.marks)) : [];
   const points = touched.filter((mark) => mark.to === 'point').length;
@@ -128,9 +131,17 @@ function Collecting() {
         </div>
       </fieldset>
       {points > 0 && (
-        <DuskButton className="mt-2 w-full" onClick={() => void start()}>
-          {points === 1 ? 'Follow this mark' : `Follow these ${points} marks`}
-        </DuskButton>
+        <>
+          <p className="text-dusk-soft">
+            {kept
+              ? 'What you touch is kept on this device, also over a reload, until the clip has a rep.'
+              : 'This browser keeps nothing: what you touch is lost if the page is closed before the clip has a rep.'}
+          </p>
+          <DuskButton className="mt-2 w-full" onClick={() => void start()}>
+            {points === 1 ? 'Follow this mark' : `Follow these ${points} marks`}
+            {again && ' again'}
+          </DuskButton>
+        </>
       )}
     </>
   );

@@ -1,7 +1,14 @@
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { DuskButton } from '../dusk-button.tsx';
+import { type FollowingState, useFollowState } from '../follow/use-follow-state.ts';
 import { isDraft } from '../model/draft.ts';
 import { MARK } from '../store/tools.ts';
+
+const TOUCHED_WORDS: Record<FollowingState, string> = {
+  following: 'Their marks are followed through the clip, and the reps are looked for.',
+  found: 'Their marks were followed. Take the reps that were found, then look at the marks.',
+  none: 'Their marks can be followed through the clip, and the reps are looked for.',
+};
 
 /** Why nothing is asked for on this frame, and what to do. */
 export function NothingAsked() {
@@ -9,6 +16,7 @@ export function NothingAsked() {
   const { current, led } = useBenchModel();
   const { may } = useBenchDocument();
   const frame = useBench((state) => state.frame);
+  const state = useFollowState();
   const looking = useBench((state) => state.tool.kind === 'look');
   const openReps = (
     <DuskButton primary className="mt-3" onClick={() => store.setState({ desk: 'reps' })}>
@@ -45,11 +53,7 @@ export function NothingAsked() {
           : led.length === 0
             ? ['Nothing is marked in this view', 'Film from the front to see the turn.', null]
             : isDraft(current)
-              ? [
-                  'Every landmark is touched',
-                  'Their marks are followed through the clip, and the reps are looked for.',
-                  null,
-                ]
+              ? ['Every landmark is touched', TOUCHED_WORDS[state], null]
               : [
                   'This frame is done',
                   `All ${led.length} landmarks are placed or marked as hidden. Press a mark to place it again.`,

@@ -8,11 +8,13 @@ import { viewOf } from '#shared/records/views.ts';
 import type { FrameIndex, Milliseconds } from '#shared/timing/units.ts';
 
 /**
- * Marks placed before the clip has a rep, by frame and by place on the body. They are kept in the page
- * until reps are found that can take them.
+ * Marks placed before the clip has a rep, by frame and by place on the body. They are kept on the
+ * device until reps are found that can take them.
  */
 export type Touches = ReadonlyMap<FrameIndex, ReadonlyMap<SpotId, MarkValue>>;
 export const NO_TOUCHES: Touches = new Map();
+export const countTouches = (touches: Touches): number =>
+  [...touches.values()].reduce((sum, spots) => sum + spots.size, 0);
 
 /** The leg stood on in a clip without reps, as far as the coach says. */
 export type StandsOn = Side | 'both';
