@@ -12,20 +12,29 @@ export const handle = (page: Page, landmark: string): Locator =>
 /** The cross for the landmark that is asked for. */
 export const cross = (page: Page): Locator => page.locator('[data-asked]');
 
-/** Opens the Bench and waits until the pixels of its frame are on the canvas. */
-export const openBench = async (page: Page, clipId: string, search = ''): Promise<void> => {
+/**
+ * Opens the Bench and waits until the pixels of its frame are on the canvas.
+ * @param timeout ms, for a long clip on a busy machine
+ */
+export const openBench = async (
+  page: Page,
+  clipId: string,
+  search = '',
+  timeout?: number,
+): Promise<void> => {
   await page.goto(`/clips/${clipId}${search}`);
-  await showsFrame(page, Number(new URLSearchParams(search).get('frame') ?? 0));
+  await showsFrame(page, Number(new URLSearchParams(search).get('frame') ?? 0), timeout);
   // the stage over the picture is fetched on its own
   await expect(page.locator('.bench-clip .konvajs-content')).toBeVisible();
 };
 
 /** The slider says it and the canvas shows it. */
-export const showsFrame = async (page: Page, frame: number): Promise<void> => {
-  await expect(slider(page)).toHaveAttribute('aria-valuenow', String(frame));
+export const showsFrame = async (page: Page, frame: number, timeout?: number): Promise<void> => {
+  await expect(slider(page)).toHaveAttribute('aria-valuenow', String(frame), { timeout });
   await expect(page.locator('canvas[data-picture="copy"]')).toHaveAttribute(
     'data-frame',
     String(frame),
+    { timeout },
   );
 };
 

@@ -9,6 +9,7 @@ import { routes } from '#shared/contracts/routes.ts';
 import type { View } from '#shared/contracts/primitives.ts';
 import type { MarkCommand, Rep } from '#shared/contracts/reps.ts';
 import { SAFETY_QUESTIONS } from '#shared/contracts/visits.ts';
+import type { Side } from '#shared/landmarks/types.ts';
 import type { App } from '../support/app.ts';
 import { ask } from '../journeys/steps/ask.ts';
 
@@ -50,10 +51,20 @@ export interface MadeClip {
   readonly visitId: string;
 }
 
+/** A clip to send: a film of its own, and the leg stood on in it. */
+export interface Footage {
+  readonly film: Buffer;
+  readonly supportSide: Side;
+}
+
 /** An athlete with consent, a visit with its safety check, and one clip that is ready. */
-export const makeClip = async (coach: APIRequestContext, name: string): Promise<MadeClip> => {
+export const makeClip = async (
+  coach: APIRequestContext,
+  name: string,
+  footage?: Footage,
+): Promise<MadeClip> => {
   // before any request: the server closes a connection that idles meanwhile
-  await picture();
+  if (!footage) await picture();
   const athlete = await ask(coach, routes.addAthlete, {
     body: { givenName: 'Bo', familyName: name, birthDate: '1998-05-04' },
   });
@@ -73,21 +84,26 @@ export const makeClip = async (coach: APIRequestContext, name: string): Promise<
       knowsWhenToStop: true,
     },
   });
-  return { visitId: visit.id, clipId: await sendClip(coach, visit.id, 'clip.mp4', 'front') };
+  return {
+    visitId: visit.id,
+    clipId: await sendClip(coach, visit.id, 'clip.mp4', 'front', footage),
+  };
 };
 
-/** A further clip of a visit, standing on the right leg; answers its id once it is ready. */
+/** A further clip of a visit, standing on the right leg unless told; answers its id once it is ready. */
 export const sendClip = async (
   coach: APIRequestContext,
   visitId: string,
   name: string,
   view: View,
+  footage?: Footage,
 ): Promise<string> => {
+  const { film, supportSide } = footage ?? { film: await picture(), supportSide: 'right' };
   const sent = await coach.post(`/api/visits/${visitId}/clips`, {
     multipart: {
       view,
-      supportSide: 'right',
-      clip: { name, mimeType: 'video/mp4', buffer: await picture() },
+      supportSide,
+      clip: { name, mimeType: 'video/mp4', buffer: film },
     },
   });
   if (!sent.ok()) throw new Error(`the clip was not taken: ${await sent.text()}`);
