@@ -43,6 +43,7 @@ describe('a whole rep', () => {
     expect(byFrame.slice(0, 12).every((phase) => phase === 'quiet')).toBe(true);
     expect(boundaries.quietFrom).toBe(0);
     expect(boundaries.quietTo).toBeLessThan(boundaries.footOff ?? NaN);
+    expect(boundaries.quietTo).toBe(rep.frames[byFrame.lastIndexOf('quiet')]?.time);
   });
 
   it('finds foot off between the marks around 25 mm, ± half their gap', () => {
@@ -158,6 +159,25 @@ describe('phases known from elsewhere', () => {
     expect(course.phases.byFrame).toEqual(labels);
     expect(course.setting.reference.frames).toHaveLength(5);
     expect(course.phases.boundaries.lowerFrom).toBe(29 * MADE_GAP_MS);
+  });
+
+  it('have their quiet stance and their top where the labels and the marks put them', () => {
+    const last = MADE_LIFTS.indexOf(90);
+    const labels = rep.frames.map((_, i) => (i < 5 ? 'quiet' : i <= last ? 'rise' : 'lower'));
+    const { boundaries } = phasesOf({ ...rep, labels });
+    expect(boundaries.quietTo).toBe(4 * MADE_GAP_MS);
+    // 90° stands alone: a highest lift needs a second frame
+    expect(boundaries.top).toBe(at(85));
+  });
+
+  it('have their top in the first frame where nothing is higher', () => {
+    const top = rep.frames.slice(MADE_LIFTS.indexOf(112), MADE_LIFTS.indexOf(112) + 8);
+    const frames = [...top, ...rep.frames.slice(0, 5)].map((frame, i) => ({
+      ...frame,
+      time: milliseconds(i * MADE_GAP_MS),
+    }));
+    const labels = frames.map((_, i) => (i < top.length ? 'rise' : 'quiet'));
+    expect(phasesOf({ ...rep, frames, labels }).boundaries.top).toBe(0);
   });
 });
 
