@@ -102,6 +102,7 @@ export const CLIPS: readonly ClipPlan[] = [
     name: 'right-side',
     file: 'right-side.mp4',
     container: 'h264',
+    crf: 27,
     fps: 30,
     body: 'woman',
     view: 'lifted-side',
@@ -110,7 +111,8 @@ export const CLIPS: readonly ClipPlan[] = [
     shapes: { left: 'early', right: 'early' },
     habits: USUAL_HABITS,
     posterLift: null,
-    script: { ...THREE_RIGHT, seed: 41, reps: ['right', 'right'] },
+    // the same take as right-early, by a second phone
+    script: THREE_RIGHT,
   },
   {
     name: 'bare-still',

@@ -25,7 +25,7 @@ describe.each([
   ['the standing foot covered all the time', () => true],
   ['the standing foot covered in quiet stance', (index: number) => index < 6],
 ] as const)('a clip from the lifted side, %s', (_name, covered) => {
-  it.each([0, 1])('shows the lift of rep %i and when the foot leaves the floor', (index) => {
+  it.each([0, 1, 2])('shows the lift of rep %i and when the foot leaves the floor', (index) => {
     const known = truth.reps[index];
     const course = courseOf(coveredIn(markedRep(truth, index, 1, 7), covered));
     const { boundaries, byFrame } = course.phases;

@@ -50,8 +50,8 @@ const prepareByTruth = handles({
               frameCount: count,
               frames: ref({
                 count,
-                timeBase: { num: 1, den: 60 },
-                ticks: Array.from({ length: count }, (_, frame) => frame),
+                timeBase: { num: 1, den: 1_000_000 },
+                ticks: truth.frames.tMs.map((ms) => Math.round(1000 * ms)),
               }),
             }
           : { state: 'refused', refusalCode: 'not-a-video', refusalFigures: {} },
@@ -127,6 +127,27 @@ describe('the demo', () => {
     expect(lifts.length).toBeGreaterThan(10);
     expect(lifts).not.toContain(null);
     expect(Math.max(...lifts.map((lift) => lift ?? 0))).toBeGreaterThan(100);
+  });
+
+  it('takes the lift of one reading from the clip from the side, its turn from the front', async () => {
+    const row = await api.ground.inPractice(product(GREYWATER), ({ em }) =>
+      em.findOneOrFail(
+        Reading,
+        { code: 'early-turn-out', provisional: false },
+        { populate: ['result'] },
+      ),
+    );
+    const clips = await api.ground.inPractice(product(GREYWATER), ({ em }) =>
+      em.find(Clip, { visit: row.visit.id }),
+    );
+    expect(clips.map(({ view }) => view).toSorted()).toEqual(['front', 'lifted-side']);
+    const reps = row.result.unwrap()?.reps ?? [];
+    const aside = reps.filter(({ used }) => !used);
+    expect(reps.flatMap(({ used, liftFrom }) => (used ? [liftFrom] : []))).toEqual(
+      aside.map(({ id }) => id),
+    );
+    expect(aside).toHaveLength(3);
+    expect(aside.map(({ phases }) => phases?.boundaries.footOff ?? 0)).not.toContain(0);
   });
 
   it('gives each of its people something to do', async () => {

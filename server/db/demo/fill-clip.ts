@@ -5,7 +5,7 @@ import { writeMarks } from '../../features/marks/mark-store.ts';
 import { Rep } from '../../features/reps/rep.entity.ts';
 import { marksOfRep } from './marks-of-rep.ts';
 import { hourOf } from './seed-athlete.ts';
-import type { PlacedClip, RenderedSource, ThreadStory } from './story.ts';
+import { clipPlaceOf, type PlacedClip, type RenderedSource, type ThreadStory } from './story.ts';
 import { storyId } from './story-id.ts';
 import type { DemoTruth } from './truth.ts';
 
@@ -35,7 +35,7 @@ const geometryOf = ({ setUp, rod }: DemoTruth): ClipGeometry => ({
 
 export const demoRepId = (
   { practiceId }: Hands,
-  { clipPlace }: PlacedClip,
+  { clipPlace }: Pick<PlacedClip, 'clipPlace'>,
   index: number,
 ): string => storyId(practiceId, 'rep', ...clipPlace, index);
 
@@ -123,7 +123,22 @@ const addReps = async (
   }
 };
 
-/** Gives a clip its scale, reps, marks and comments; does nothing where they are there. */
+/** Ties the reps of the visit's front clip to those of this one, which shows the same lifts from the side. */
+const tieLifts = async (
+  em: EntityManager,
+  hands: Hands,
+  placed: PlacedClip,
+  { liftFor, named }: RenderedSource,
+): Promise<void> => {
+  if (liftFor === undefined) return;
+  const front = { clipPlace: clipPlaceOf(placed.visitPlace, liftFor) };
+  for (const index of named) {
+    const rep = await em.findOneOrFail(Rep, { id: demoRepId(hands, front, index) });
+    rep.liftFrom = demoRepId(hands, placed, index);
+  }
+};
+
+/** Gives a clip its scale, reps, marks, ties and comments; does nothing where they are there. */
 export const fillClip = async (
   em: EntityManager,
   hands: Hands,
@@ -140,5 +155,6 @@ export const fillClip = async (
   if (!truth || !('rendered' in source)) return;
   if ((await em.count(Rep, { clip: clip.id })) > 0) return;
   await addReps(em, hands, placed, truth, source);
+  await tieLifts(em, hands, placed, source);
   for (const thread of source.threads ?? []) addThread(em, hands, placed, truth, thread);
 };

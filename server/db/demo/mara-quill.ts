@@ -11,7 +11,7 @@ export const MARA_QUILL: AthleteStory = {
   visits: [
     {
       daysAgo: 6,
-      note: 'First test after the winter.',
+      note: 'First test after the winter. A second phone stood at the side.',
       clips: [
         {
           name: 'IMG_0412.MOV',
@@ -58,6 +58,18 @@ export const MARA_QUILL: AthleteStory = {
                 shared: true,
               },
             ],
+          },
+        },
+        {
+          name: 'IMG_0413.MP4',
+          source: {
+            rendered: 'right-side',
+            supportSide: 'right',
+            named: [0, 1, 2],
+            marked: [0, 1, 2],
+            seed: 421,
+            spreadPx: 2,
+            liftFor: 'IMG_0412.MOV',
           },
         },
       ],

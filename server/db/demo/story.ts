@@ -41,6 +41,8 @@ export interface RenderedSource {
   /** Some marks came from tracking and nobody has looked at them. */
   readonly hollow?: boolean;
   readonly excluded?: Readonly<Record<number, Exclusion>>;
+  /** An earlier clip of the visit, of the same lifts: its reps take their lift from this one's, by number. */
+  readonly liftFor?: string;
   readonly threads?: readonly ThreadStory[];
 }
 
@@ -102,12 +104,15 @@ export interface PlacedClip {
 export const placesOf = ({ givenName, familyName }: AthleteStory, { daysAgo }: VisitStory) =>
   ['visit', givenName, familyName, daysAgo] as const;
 
+export const clipPlaceOf = (visitPlace: PlacedClip['visitPlace'], name: string) =>
+  ['clip', ...visitPlace, name] as const;
+
 export const clipsOf = (story: PracticeStory): PlacedClip[] =>
   story.athletes.flatMap((athlete) =>
     athlete.visits.flatMap((visit) =>
       visit.clips.map((clip) => {
         const visitPlace = placesOf(athlete, visit);
-        return { athlete, visit, clip, visitPlace, clipPlace: ['clip', ...visitPlace, clip.name] };
+        return { athlete, visit, clip, visitPlace, clipPlace: clipPlaceOf(visitPlace, clip.name) };
       }),
     ),
   );

@@ -31,6 +31,8 @@ const truthFile = z.object({
     }),
   ),
   frames: z.object({
+    /** From the first frame on. */
+    tMs: z.array(z.number()),
     values: z.object({ lift: z.array(z.number()) }),
     /** u, v, u, v … pixels of the upright picture, frame by frame. */
     marks: z.record(z.string(), z.array(z.number())),

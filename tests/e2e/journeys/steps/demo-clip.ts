@@ -9,6 +9,8 @@ export async function demoClip(
   request: APIRequestContext,
   familyName: string,
   view: ClipRow['view'] = 'front',
+  /** What its phone called it, where the athlete has several of a view. */
+  name?: string,
 ): Promise<ClipRow> {
   const found = await ask(request, routes.listAthletes, { query: { q: familyName } });
   const athleteId = found.items[0]?.id ?? '';
@@ -17,7 +19,10 @@ export async function demoClip(
     .poll(
       async () => {
         const { items } = await ask(request, routes.listClips, { query: { athleteId } });
-        clip = items.find((each) => each.view === view && each.markedFrames > 0);
+        clip = items.find(
+          (each) =>
+            each.view === view && each.markedFrames > 0 && (name ?? each.name) === each.name,
+        );
         return clip?.state;
       },
       { timeout: PREPARED_WITHIN, intervals: [500] },

@@ -15,7 +15,7 @@ export interface ShownVisit {
 export interface Shown {
   /** Turns out early, filmed from the front; has a call, comments and links. */
   readonly quill: ShownVisit;
-  /** Filmed from the lifted side. */
+  /** Filmed from the lifted side alone. */
   readonly quillAside: ShownVisit;
   readonly lindgren: ShownVisit;
   /** Both sides in one clip, the left without a call. */
@@ -34,7 +34,7 @@ export interface Shown {
 
 async function shownVisit(
   coach: APIRequestContext,
-  ...of: [familyName: string, view?: 'lifted-side']
+  ...of: [familyName: string, view?: 'lifted-side', name?: string]
 ): Promise<ShownVisit> {
   const { athlete, visitId, id } = await demoClip(coach, ...of);
   return { athleteId: athlete.id, visitId, clipId: id };
@@ -89,7 +89,7 @@ export async function prepareShown(coach: APIRequestContext): Promise<Shown> {
   });
   return {
     quill,
-    quillAside: await shownVisit(coach, 'Quill', 'lifted-side'),
+    quillAside: await shownVisit(coach, 'Quill', 'lifted-side', 'IMG_0431.MP4'),
     lindgren: await shownVisit(coach, 'Lindgren'),
     brook: await shownVisit(coach, 'Brook'),
     weir: await shownVisit(coach, 'Weir'),
