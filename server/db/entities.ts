@@ -7,6 +7,7 @@ import { Call } from '../features/calls/call.entity.ts';
 import { Clip } from '../features/clips/clip.entity.ts';
 import { Upload } from '../features/clips/upload.entity.ts';
 import { Comment } from '../features/comments/comment.entity.ts';
+import { Head } from '../features/heads/head.entity.ts';
 import { MarkCommand } from '../features/marks/mark-command.entity.ts';
 import { Mark } from '../features/marks/mark.entity.ts';
 import { AuditEntry } from '../features/practice/audit-entry.entity.ts';
@@ -47,6 +48,7 @@ export const entities = [
   Reading,
   SideSetting,
   Comment,
+  Head,
   Replay,
   JobOutbox,
 ];

@@ -10,6 +10,7 @@ import { Migration20261201170000_second_markings } from '../../migrations/Migrat
 import { Migration20261201173000_two_clips } from '../../migrations/Migration20261201173000_two_clips.ts';
 import { Migration20261201181500_filming_lines } from '../../migrations/Migration20261201181500_filming_lines.ts';
 import { Migration20261201194000_protocol } from '../../migrations/Migration20261201194000_protocol.ts';
+import { Migration20261201235500_heads } from '../../migrations/Migration20261201235500_heads.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -47,6 +48,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261201194000_protocol',
     class: Migration20261201194000_protocol,
+  },
+  {
+    name: 'Migration20261201235500_heads',
+    class: Migration20261201235500_heads,
   },
 ];
 

@@ -8,6 +8,7 @@ import { formUploadFeature } from '../features/clips/form-upload.ts';
 import { resumableUploadFeature } from '../features/clips/resumable-upload.ts';
 import { commentsFeature } from '../features/comments/comments.routes.ts';
 import { exportsFeature } from '../features/exports/exports.routes.ts';
+import { headsFeature } from '../features/heads/heads.routes.ts';
 import { protocolFeature } from '../features/protocol/protocol.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { replaysFeature } from '../features/replays/replays.routes.ts';
@@ -33,6 +34,7 @@ export const features: readonly Feature[] = [
   protocolFeature,
   readingsFeature,
   secondMarkingsFeature,
+  headsFeature,
   replaysFeature,
   commentsFeature,
   exportsFeature,

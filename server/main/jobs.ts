@@ -1,7 +1,13 @@
 import { prepareClipJob } from '../features/clips/jobs/prepare-clip.ts';
 import { fillDemoJob } from '../db/demo/fill-demo.job.ts';
+import { hideHeadJob } from '../features/replays/jobs/hide-head.ts';
 import { deriveReadingJob } from '../features/readings/jobs/derive-reading.ts';
 import type { AnyJobHandler } from '../jobs/job.ts';
 
 /** Every kind of job that a worker does. */
-export const jobs: readonly AnyJobHandler[] = [prepareClipJob, deriveReadingJob, fillDemoJob];
+export const jobs: readonly AnyJobHandler[] = [
+  prepareClipJob,
+  deriveReadingJob,
+  hideHeadJob,
+  fillDemoJob,
+];

@@ -1,5 +1,6 @@
 import { inputArgs, type FfmpegJob, type PictureSource } from './ffmpeg-job.ts';
-import { colourTags, type PictureTraits, toPixels } from './picture-filters.ts';
+import { pictureArgs, replayArgs, videoArgs } from './encode-args.ts';
+import { type PictureTraits, toPixels } from './picture-filters.ts';
 import type { CopyPlan } from './plan-copies.ts';
 import { seekArgs, type TickSpan, trim } from './tick-span.ts';
 import type { Rational } from './types.ts';
@@ -35,8 +36,14 @@ export function preparationJob(plan: PreparationPlan): FfmpegJob {
       ...pictureChains(copies),
     ].join(';'),
     outputs: [
-      { path: paths.bench, args: ['-map', '[bench]', ...video(plan), ...bench(copies.bench.gop)] },
-      { path: paths.replay, args: ['-map', '[replay]', ...video(plan), ...replay(copies)] },
+      {
+        path: paths.bench,
+        args: ['-map', '[bench]', ...videoArgs(plan), ...bench(copies.bench.gop)],
+      },
+      {
+        path: paths.replay,
+        args: ['-map', '[replay]', ...videoArgs(plan), ...replayArgs(copies.replay.gop)],
+      },
       ...pictureOutputs(paths),
     ],
   };
@@ -81,39 +88,9 @@ const row = (tiles: number) =>
   tiles === 1 ? [] : [`tile=${tiles}x1:overlap=${tiles - 1}:init_padding=${tiles - 1}`];
 
 const pictureOutputs = (paths: CopyPaths) => [
-  { path: paths.poster, args: ['-map', '[poster]', ...picture(3)] },
-  { path: paths.strip, args: ['-map', '[strip]', ...picture(4)] },
+  { path: paths.poster, args: ['-map', '[poster]', ...pictureArgs(3)] },
+  { path: paths.strip, args: ['-map', '[strip]', ...pictureArgs(4)] },
 ];
-
-/**
- * `passthrough` keeps every frame with its own time; the encoder counts in the original's ticks, or
- * times would be rounded to the frame rate (up to 12 ms off). The time base is spelled out because
- * ffmpeg 5.1 cannot find the source's behind a filter graph (`-1`).
- */
-const video = ({ timeBase, threads, traits }: PreparationPlan): string[] => [
-  '-an',
-  '-sn',
-  '-dn',
-  ...clean,
-  '-fps_mode',
-  'passthrough',
-  '-enc_time_base',
-  `${timeBase.num}:${timeBase.den}`,
-  ...colourTags(traits),
-  '-c:v',
-  'libx264',
-  '-threads',
-  `${threads}`,
-  '-bf',
-  '0',
-  '-movflags',
-  '+faststart',
-  '-f',
-  'mp4',
-];
-
-/** No place, date, device or chapter name goes into a copy. */
-const clean = ['-map_metadata', '-1', '-map_chapters', '-1'];
 
 /**
  * Without B-frames a decoder gives one picture per packet; a short distance of key frames makes a
@@ -126,39 +103,6 @@ const bench = (gop: 1 | 5): string[] => [
     : ['-preset', 'veryfast', '-crf', '20', '-g', '5', '-keyint_min', '5', '-sc_threshold', '0']),
   '-x264-params',
   'sliced-threads=1:slices=4',
-];
-
-/**
- * Blocks whole, motion to whole pixels, no search for fades and cuts, of which a take has none: a
- * quarter less time than the preset alone, at about its size and likeness (rendered and noisy clips,
- * 960 px).
- */
-const replay = ({ replay: { gop } }: CopyPlan): string[] => [
-  '-preset',
-  'superfast',
-  '-x264-params',
-  'partitions=none:8x8dct=0:subme=0:weightp=0:scenecut=0',
-  '-crf',
-  '24',
-  '-g',
-  `${gop}`,
-];
-
-/** One JPEG; a later picture replaces an earlier one. Quality by ffmpeg's scale, 2 best to 31. */
-const picture = (quality: number): string[] => [
-  ...clean,
-  '-fps_mode',
-  'passthrough',
-  '-c:v',
-  'mjpeg',
-  '-threads',
-  '1',
-  '-q:v',
-  `${quality}`,
-  '-update',
-  '1',
-  '-f',
-  'image2',
 ];
 
 const chain = (from: string, filters: readonly string[]) => `${from}${filters.join(',')}`;

@@ -33,10 +33,10 @@ export async function readFrames(
 }
 
 /**
- * Null where there is no picture in it. Read by the library that the browser reads it with, without
+ * Size and frame table of a copy; null where there is no picture in it. Read by the library that the browser reads it with, without
  * decoding: to start ffprobe once more costs a short clip a tenth of its preparation.
  */
-async function readCopy(path: string) {
+export async function readCopy(path: string) {
   const input = new Input({ source: new FilePathSource(path), formats: [MP4] });
   try {
     const track = (await input.canRead()) ? await input.getPrimaryVideoTrack() : null;

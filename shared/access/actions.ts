@@ -37,6 +37,8 @@ export const ACTIONS = {
   'reading.assume': 'caseload',
   'reading.renew': 'caseload',
   'comment.add': 'caseload',
+  'head.save': 'caseload',
+  'head.look': 'caseload',
   'replay.make': 'caseload',
   'replay.revoke': 'caseload',
   'comment.read': 'comment',

@@ -69,6 +69,8 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'reading.assume': WORKS,
   'reading.renew': WORKS,
   'comment.add': SEES,
+  'head.save': WORKS,
+  'head.look': WORKS,
   'replay.make': WORKS,
   'replay.revoke': WORKS,
   'comment.read': SEES,

@@ -62,6 +62,8 @@ export const PROBLEMS = {
   ],
   'not-asked-here': [422, 'This landmark is not asked for on this frame.'],
   // replays
+  'head-not-covered': [409, 'The head is not covered on every frame that would be shown.'],
+  'head-not-looked-at': [409, 'Nobody has looked yet whether the head is covered.'],
   'pass-phrase-needed': [401, 'This replay asks for a pass phrase.'],
   // the house
   'storage-full': [507, 'There is no room left to keep this. Tell the owner of the practice.'],

@@ -19,6 +19,8 @@ export const replayBody = z
     toFrame: frameIndex.optional(),
     showReading: z.boolean().default(true),
     showCall: z.boolean().default(true),
+    /** Serve only a copy on which the head is hidden. Refused until a box covers every frame and a person looked. */
+    hideHead: z.boolean().default(false),
     /** A sentence of the coach's own to the athlete. */
     message: text(1000, 0).default(''),
     days: z.int().min(1).max(180).default(30),
@@ -36,6 +38,8 @@ export const replay = z
     toFrame: frameIndex,
     showReading: z.boolean(),
     showCall: z.boolean(),
+    /** `to-be-looked-at`: the box was changed, and nothing is shown until somebody has looked at it. */
+    head: z.enum(['shown', 'hidden', 'being-prepared', 'to-be-looked-at']),
     message: z.string(),
     passPhrase: z.boolean(),
     state: z.enum(['live', 'lapsed', 'revoked']),
@@ -63,6 +67,8 @@ export const publicReplay = z
     frames: frameTable,
     fromFrame: frameIndex,
     toFrame: frameIndex,
+    /** While the film is being prepared, there is no picture at all. */
+    head: z.enum(['shown', 'hidden', 'being-prepared']),
     /** Lifts between which the hip was looked at. */
     gates,
     /** Frames to stop at; null where the rep has no such moment. */
@@ -133,6 +139,8 @@ export const replayRoutes = {
       'call-first',
       'clip-not-ready',
       'frame-out-of-range',
+      'head-not-covered',
+      'head-not-looked-at',
     ],
   }),
   revokeReplay: route({
@@ -175,7 +183,7 @@ export const replayRoutes = {
     params: linkParams,
     status: 200,
     answer: bytes(['video/mp4'], true),
-    problems: ['not-found', 'pass-phrase-needed', 'range-not-satisfiable'],
+    problems: ['not-found', 'pass-phrase-needed', 'clip-not-ready', 'range-not-satisfiable'],
   }),
   replayPoster: route({
     method: 'get',
@@ -185,6 +193,6 @@ export const replayRoutes = {
     params: linkParams,
     status: 200,
     answer: bytes(['image/jpeg']),
-    problems: ['not-found', 'pass-phrase-needed'],
+    problems: ['not-found', 'pass-phrase-needed', 'clip-not-ready'],
   }),
 };

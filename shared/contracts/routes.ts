@@ -6,6 +6,7 @@ import { clipRoutes } from './clip-routes.ts';
 import { commentRoutes } from './comments.ts';
 import { eventRoutes } from './events.ts';
 import { exportRoutes } from './exports.ts';
+import { headRoutes } from './heads.ts';
 import { protocolRoutes } from './protocol.ts';
 import { readingRoutes } from './readings.ts';
 import { reliabilityRoutes } from './reliability.ts';
@@ -33,6 +34,7 @@ export const routes = {
   ...readingRoutes,
   ...commentRoutes,
   ...exportRoutes,
+  ...headRoutes,
   ...replayRoutes,
   ...eventRoutes,
 };

@@ -56,6 +56,9 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   repAnnotations: 'rep',
   visitAnnotations: 'visit',
   clipComments: 'clip',
+  head: 'clip',
+  saveHead: 'clip',
+  lookedAtHead: 'clip',
 };
 export type RouteNameWithId = {
   [N in RouteName]: (typeof routes)[N] extends { path: `${string}:id${string}` } ? N : never;
@@ -111,6 +114,14 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   addComment: { body: 'x', fromFrame: 0, toFrame: 0 },
   editComment: { body: 'x' },
   sayHere: { here: true },
+  saveHead: {
+    after: 0,
+    fromFrame: 0,
+    toFrame: 10,
+    drawn: [{ frame: 1, box: { left: 10, top: 10, width: 100, height: 100 } }],
+    followed: [],
+  },
+  lookedAtHead: { version: 1 },
 };
 
 /** A thing of each kind that a route can name. */

@@ -36,6 +36,7 @@ export const aPublicReplay = (change: Partial<PublicReplay> = {}): PublicReplay 
     timeBase: { num: 1, den: 50 },
     ticks: Array.from({ length: 100 }, (_, n) => n),
   },
+  head: 'shown',
   fromFrame: 5,
   toFrame: 95,
   gates: STANDARD_GATES,

@@ -15,6 +15,17 @@ export const clipFiles = (practiceId: string, clipId: string) => {
   } as const satisfies ClipFiles;
 };
 
+/** What a replay whose head is hidden shows: by the replay, for its span, and by the version of the box. */
+export const hiddenFiles = (
+  practiceId: string,
+  clipId: string,
+  replayId: string,
+  headId: string,
+) => {
+  const path = `${clipPrefix(practiceId, clipId)}/hidden/${replayId}-${headId}`;
+  return { replay: `${path}.mp4`, poster: `${path}.jpg` } as const;
+};
+
 /** Pictures that are made when first asked for, and kept. */
 export const frameKey = (practiceId: string, clipId: string, index: number): string =>
   `${clipPrefix(practiceId, clipId)}/frames/${index}.jpg`;

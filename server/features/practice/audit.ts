@@ -26,6 +26,8 @@ export type AuditedAction =
   | 'second-marking.finish'
   | 'second-marking.discard'
   | 'comment.delete'
+  | 'head.save'
+  | 'head.look'
   | 'replay.make'
   | 'replay.revoke'
   | 'replay.open';

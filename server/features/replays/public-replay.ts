@@ -20,6 +20,7 @@ import type { Reading } from '../readings/reading.entity.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { storedReps } from '../reps/stored-reps.ts';
+import { headStateOf, servedHidden } from './hidden-copies.ts';
 import { Replay } from './replay.entity.ts';
 import { spanOf } from './span.ts';
 
@@ -41,6 +42,18 @@ export const replayOfLink = async ({ em, actor }: Of) => {
   );
   const rep = replay.rep.unwrap() as Rep;
   return { replay, rep, clip: rep.clip.unwrap() as Clip };
+};
+
+/**
+ * Where a picture of this link lies; null where it is not there.
+ * @throws Problem 'clip-not-ready' until there is a copy on which the head is hidden as the link promises
+ */
+export const mediaOfLink = async (unit: Of, which: 'replay' | 'poster'): Promise<string | null> => {
+  const { replay, clip } = await replayOfLink(unit);
+  if (!replay.hideHead) return clip.files[which];
+  const files = await servedHidden(unit.em, replay, clip);
+  if (!files) throw new Problem('clip-not-ready', 'The film is being prepared.');
+  return files[which];
 };
 
 /** Reps whose own change goes the way of the reading. */
@@ -129,6 +142,8 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
   // the clip's other reps too: it may take the quiet stance of one
   const reps = await storedReps(em, [clip], athlete);
   const stored = found(reps.find((each) => each.rep.id === rep.id));
+  const state = await headStateOf(em, replay, clip);
+  const head = state === 'to-be-looked-at' ? 'being-prepared' : state;
   const span = { from: replay.fromFrame, to: replay.toFrame };
   const shown = spanOf(stored, span, { figures: replay.showReading, gates });
   await em.execute(
@@ -146,6 +161,7 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
     width,
     height,
     frames,
+    head,
     fromFrame: replay.fromFrame,
     toFrame: replay.toFrame,
     gates,

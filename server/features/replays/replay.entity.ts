@@ -2,6 +2,7 @@ import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
 import { side } from '#shared/contracts/primitives.ts';
 import { madeAt, moment, ownedRow } from '#server/db/columns.ts';
 import { User } from '../accounts/user.entity.ts';
+import { Head } from '../heads/head.entity.ts';
 import { Rep } from '../reps/rep.entity.ts';
 import { Visit } from '../visits/visit.entity.ts';
 
@@ -18,6 +19,10 @@ export const Replay = defineEntity({
     toFrame: p.integer(),
     showReading: p.boolean(),
     showCall: p.boolean(),
+    /** Only a copy on which the head is hidden leaves by this link. */
+    hideHead: p.boolean().default(false),
+    /** The version of the box that the copy which lies there was made by; null: there is none. */
+    hiddenHead: p.manyToOne(Head).ref().nullable(),
     message: p.text(),
     /** SHA-256 of the token, hex. */
     tokenHash: p.text().unique(),

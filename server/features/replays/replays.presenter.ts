@@ -7,8 +7,11 @@ const stateOf = ({ revokedAt, expiresAt }: Replay): ReplayShape['state'] => {
   return expiresAt.getTime() <= Date.now() ? 'lapsed' : 'live';
 };
 
-/** @param replay with `by` and the lazy `passPhraseHash` loaded; the hash itself never leaves */
-export const presentReplay = (replay: Replay): ReplayShape => ({
+/**
+ * @param replay with `by` and the lazy `passPhraseHash` loaded; the hash itself never leaves
+ * @param head how its head stands
+ */
+export const presentReplay = (replay: Replay, head: ReplayShape['head']): ReplayShape => ({
   id: replay.id,
   visitId: replay.visit.id,
   side: replay.side,
@@ -17,6 +20,7 @@ export const presentReplay = (replay: Replay): ReplayShape => ({
   toFrame: replay.toFrame,
   showReading: replay.showReading,
   showCall: replay.showCall,
+  head,
   message: replay.message,
   passPhrase: Boolean(replay.passPhraseHash?.unwrap()),
   state: stateOf(replay),

@@ -6,33 +6,47 @@ import type { Feature } from '../../main/feature.ts';
 import { passwordFits } from '../accounts/password.ts';
 import { sendStored } from '../clips/send-stored.ts';
 import { liveLink, needUnlocked, unlock } from './link.ts';
-import { openReplay, replayOfLink } from './public-replay.ts';
+import { hiddenFilesOf } from './hidden-copies.ts';
+import { mediaOfLink, openReplay } from './public-replay.ts';
 import { presentReplay } from './replays.presenter.ts';
-import { hashOf, listReplays, makeReplay, revokeReplay } from './replays.service.ts';
+import { hashOf, headOfLink, listReplays, makeReplay, revokeReplay } from './replays.service.ts';
 
 const MEDIA = {
   replayVideo: ['replay', 'video/mp4'],
   replayPoster: ['poster', 'image/jpeg'],
 } as const;
 
+const presented = async (...[unit, replay]: Parameters<typeof headOfLink>) =>
+  presentReplay(replay, await headOfLink(unit, replay));
+
 export const replaysFeature: Feature = ({ serve, ground }) => {
   const { inPractice, storage, config } = ground;
 
   serve(routes.listReplays, ({ query, work }) =>
-    work(async (unit) => ({
-      items: (await listReplays(unit, query)).map(presentReplay),
-    })),
+    work(async (unit) => {
+      const items = [];
+      for (const replay of await listReplays(unit, query))
+        items.push(await presented(unit, replay));
+      return { items };
+    }),
   );
 
   serve(routes.makeReplay, async ({ body, work }) => {
     const passPhraseHash = await hashOf(body.passPhrase);
-    const { replay, token } = await work((unit) => makeReplay(unit, body, passPhraseHash));
-    return { replay: presentReplay(replay), url: `${config.publicUrl}/r/${token}` };
+    return work(async (unit) => {
+      const { replay, token } = await makeReplay(unit, body, passPhraseHash);
+      return { replay: await presented(unit, replay), url: `${config.publicUrl}/r/${token}` };
+    });
   });
 
-  serve(routes.revokeReplay, ({ params, work }) =>
-    work(async (unit) => presentReplay(await revokeReplay(unit, params.id))),
-  );
+  serve(routes.revokeReplay, async ({ params, work }) => {
+    const { ended, files } = await work(async (unit) => {
+      const replay = await revokeReplay(unit, params.id);
+      return { ended: await presented(unit, replay), files: hiddenFilesOf(replay) };
+    });
+    for (const key of files) await storage.delete(key);
+    return ended;
+  });
 
   /** The link's actor, where it is live and unlocked on this device. */
   const actorOf = async (req: Request, token: string) => {
@@ -60,8 +74,9 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
   for (const name of ['replayVideo', 'replayPoster'] as const) {
     const [copy, type] = MEDIA[name];
     serve(routes[name], async ({ params, req, res }) => {
-      const { clip } = await inPractice(await actorOf(req, params.token), replayOfLink);
-      const key = clip.files[copy];
+      const key = await inPractice(await actorOf(req, params.token), (unit) =>
+        mediaOfLink(unit, copy),
+      );
       if (!key) throw new Problem('not-found');
       await sendStored(req, res, storage, key, type, 'link');
     });

@@ -4,16 +4,21 @@ import type { replayBody } from '#shared/contracts/replays.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { found, needCaseload } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
+import { enqueue } from '../../jobs/job.ts';
 import { tokenHash } from '../../http/token-hash.ts';
 import { hashPassword } from '../accounts/password.ts';
 import { User } from '../accounts/user.entity.ts';
 import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 import { needConsent } from '../athletes/consent-check.ts';
 import { Call } from '../calls/call.entity.ts';
+import type { Clip } from '../clips/clip.entity.ts';
 import { needFrames } from '../clips/clip-in-sight.ts';
 import { audit } from '../practice/audit.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
+import type { Rep } from '../reps/rep.entity.ts';
 import { visitInSight } from '../visits/visit-in-sight.ts';
+import { headStateOf, needHiddenHead } from './hidden-copies.ts';
+import { HIDE_HEAD } from './jobs/hide-head-type.ts';
 import { newToken } from './link.ts';
 import { Replay } from './replay.entity.ts';
 
@@ -30,7 +35,7 @@ export const listReplays = async (
   return unit.em.find(
     Replay,
     visitId === undefined ? { visit: { athlete: athleteId } } : { visit: visitId },
-    { populate: ['by', 'passPhraseHash'], orderBy: { at: 'desc', id: 'desc' } },
+    { populate: ['by', 'passPhraseHash', 'rep.clip'], orderBy: { at: 'desc', id: 'desc' } },
   );
 };
 
@@ -63,6 +68,7 @@ export const makeReplay = async (
     throw new Problem('invalid-input', undefined, [
       { path: 'body.toFrame', message: 'The span ends after it starts.' },
     ]);
+  if (body.hideHead) await needHiddenHead(em, clip, { from: fromFrame, to: toFrame });
   const token = newToken();
   const replay = em.create(Replay, {
     visit,
@@ -72,6 +78,7 @@ export const makeReplay = async (
     toFrame,
     showReading: body.showReading,
     showCall: body.showCall,
+    hideHead: body.hideHead,
     message: body.message,
     tokenHash: tokenHash(token),
     passPhraseHash,
@@ -79,14 +86,26 @@ export const makeReplay = async (
     by: await em.findOneOrFail(User, { id: actor.id }),
   });
   audit(unit, 'replay.make', replay.id, { visit: visit.id, side: body.side });
+  if (body.hideHead) await enqueue(unit, HIDE_HEAD, { replayId: replay.id });
   await em.flush();
   return { replay, token };
 };
 
+/**
+ * How the head of a link stands, as its coach is told.
+ * @param replay with `rep.clip` loaded
+ */
+export const headOfLink = ({ em }: Of, replay: Replay) =>
+  headStateOf(em, replay, (replay.rep.unwrap() as Rep).clip.unwrap() as Clip);
+
 /** Kills a link at once; doing it twice is fine. */
 export const revokeReplay = async (unit: Of, id: string): Promise<Replay> => {
   const replay = found(
-    await unit.em.findOne(Replay, { id }, { populate: ['visit.athlete', 'by', 'passPhraseHash'] }),
+    await unit.em.findOne(
+      Replay,
+      { id },
+      { populate: ['visit.athlete', 'by', 'passPhraseHash', 'rep.clip'] },
+    ),
   );
   needCaseload(unit.actor, 'replay.revoke', replay.visit.unwrap().athlete.unwrap());
   if (!replay.revokedAt) {

@@ -191,6 +191,7 @@ const aLink: Replay = {
   toFrame: 300,
   showReading: true,
   showCall: true,
+  head: 'shown',
   message: '',
   passPhrase: true,
   state: 'live',

@@ -38,6 +38,7 @@ const aLink: Replay = {
   toFrame: 300,
   showReading: true,
   showCall: true,
+  head: 'shown',
   message: '',
   passPhrase: false,
   state: 'live',

@@ -1,0 +1,105 @@
+import type { EntityManager } from '@mikro-orm/postgresql';
+import type { Replay as ReplayShape } from '#shared/contracts/replays.ts';
+import { type Stretch, uncovered } from '#shared/head/heads.ts';
+import { Problem } from '../../http/problem.ts';
+import { enqueue } from '../../jobs/job.ts';
+import type { Clip } from '../clips/clip.entity.ts';
+import { hiddenFiles } from '../clips/clip-files.ts';
+import { currentHead, headTrack } from '../heads/current-head.ts';
+import type { Head } from '../heads/head.entity.ts';
+import type { Rep } from '../reps/rep.entity.ts';
+import { HIDE_HEAD } from './jobs/hide-head-type.ts';
+import { Replay } from './replay.entity.ts';
+
+const named = (stretches: readonly Stretch[]): string =>
+  stretches.map(({ from, to }) => (from === to ? `${from}` : `${from} to ${to}`)).join(', ');
+
+const WHERE = 'Open the clip on the Bench and choose ‘Hide the head’';
+
+/**
+ * What a replay may be made by: a box on every frame of the span, and a person who has looked.
+ * @throws Problem 'head-not-covered' or 'head-not-looked-at'
+ */
+export const needHiddenHead = async (
+  em: EntityManager,
+  clip: Clip,
+  span: Stretch,
+): Promise<Head> => {
+  const head = await currentHead(em, clip.id);
+  if (!head)
+    throw new Problem(
+      'head-not-covered',
+      `No box is drawn around the head in this clip yet. ${WHERE}, then draw it on one frame.`,
+    );
+  const bare = uncovered(headTrack(head, clip), span);
+  if (bare.length > 0)
+    throw new Problem(
+      'head-not-covered',
+      `The head is not covered on frames ${named(bare)}. ${WHERE}, then follow the box through the whole clip, or choose other frames.`,
+    );
+  if (!head.lookedAt)
+    throw new Problem(
+      'head-not-looked-at',
+      `Nobody has looked yet whether the box covers the head. ${WHERE}, look through it and confirm.`,
+    );
+  return head;
+};
+
+/** The same for a replay that is there: null while nothing may be shown by it. */
+export const headOfReplay = async (
+  em: EntityManager,
+  { fromFrame, toFrame }: Replay,
+  clip: Clip,
+): Promise<Head | null> => {
+  const head = await currentHead(em, clip.id);
+  if (!head?.lookedAt) return null;
+  const span = { from: fromFrame, to: toFrame };
+  return uncovered(headTrack(head, clip), span).length === 0 ? head : null;
+};
+
+/** How the head of a replay stands. A copy that was made by another version of the box counts for nothing. */
+export const headStateOf = async (
+  em: EntityManager,
+  replay: Replay,
+  clip: Clip,
+): Promise<ReplayShape['head']> => {
+  if (!replay.hideHead) return 'shown';
+  const head = await headOfReplay(em, replay, clip);
+  if (!head) return 'to-be-looked-at';
+  return replay.hiddenHead?.id === head.id ? 'hidden' : 'being-prepared';
+};
+
+/** Where the copy that may be served lies; null until there is one. */
+export const servedHidden = async (
+  em: EntityManager,
+  replay: Replay,
+  clip: Clip,
+): Promise<ReturnType<typeof hiddenFiles> | null> => {
+  const { hiddenHead } = replay;
+  if (!hiddenHead || (await headStateOf(em, replay, clip)) !== 'hidden') return null;
+  return hiddenFiles(replay.practiceId, clip.id, replay.id, hiddenHead.id);
+};
+
+/**
+ * What lies there for this replay alone.
+ * @param replay with its rep loaded
+ */
+export const hiddenFilesOf = ({ id, practiceId, rep, hiddenHead }: Replay): string[] => {
+  if (!hiddenHead) return [];
+  const { clip } = rep.unwrap() as Rep;
+  return Object.values(hiddenFiles(practiceId, clip.id, id, hiddenHead.id));
+};
+
+/** Makes the copies of a clip's replays anew, after somebody looked at another box. */
+export const hiddenReplaysAreStale = async (
+  unit: { readonly em: EntityManager },
+  clipId: string,
+): Promise<void> => {
+  const replays = await unit.em.find(Replay, {
+    rep: { clip: clipId },
+    hideHead: true,
+    revokedAt: null,
+    expiresAt: { $gt: new Date() },
+  });
+  for (const { id } of replays) await enqueue(unit, HIDE_HEAD, { replayId: id });
+};

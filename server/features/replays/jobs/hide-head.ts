@@ -1,0 +1,107 @@
+import { headsOf } from '#shared/head/heads.ts';
+import { hideHead } from '#server/media/hide-head.ts';
+import { product } from '../../../db/in-practice.ts';
+import { handles, type JobContext } from '../../../jobs/job.ts';
+import type { Ground } from '../../../main/ground.ts';
+import type { Clip } from '../../clips/clip.entity.ts';
+import { hiddenFiles } from '../../clips/clip-files.ts';
+import { lockClip } from '../../clips/jobs/lock-clip.ts';
+import { headTrack } from '../../heads/current-head.ts';
+import type { Rep } from '../../reps/rep.entity.ts';
+import { headOfReplay } from '../hidden-copies.ts';
+import { Replay } from '../replay.entity.ts';
+import { HIDE_HEAD } from './hide-head-type.ts';
+
+/** The replay and the box to make it by; null where nothing is to be made. */
+const wanted = (ground: Ground, practiceId: string, replayId: string) =>
+  ground.inPractice(product(practiceId), async ({ em }) => {
+    const replay = await em.findOne(
+      Replay,
+      { id: replayId },
+      { populate: ['rep.clip', 'rep.clip.frames'] },
+    );
+    if (!replay?.hideHead || replay.revokedAt) return null;
+    const clip = (replay.rep.unwrap() as Rep).clip.unwrap() as Clip;
+    await lockClip(em, clip.id);
+    const head = await headOfReplay(em, replay, clip);
+    return head && replay.hiddenHead?.id !== head.id ? { replay, clip, head } : null;
+  });
+
+type Wanted = NonNullable<Awaited<ReturnType<typeof wanted>>>;
+
+const requestOf = ({ replay, clip, head }: Wanted) => {
+  const frames = clip.frames.unwrap();
+  const { width, height, copies, frameRate } = clip;
+  const { bench } = clip.files;
+  if (!frames || !width || !height || !copies || !bench)
+    throw new Error('A clip that has a box was prepared.');
+  const { timeBase, ticks } = frames;
+  return {
+    bench,
+    source: { width, height },
+    size: { width: copies.replay.width, height: copies.replay.height },
+    perSecond: frameRate?.perSecond ?? 30,
+    frames: { timeBase, ticks, us: [] },
+    from: replay.fromFrame,
+    to: replay.toFrame,
+    heads: headsOf(headTrack(head, clip)),
+  };
+};
+
+/** Says that the copy is there, unless the box was changed or the replay ended meanwhile. */
+const keep = (ground: Ground, { replay: { id, practiceId }, clip, head }: Wanted) =>
+  ground.inPractice(product(practiceId), async ({ em }) => {
+    await lockClip(em, clip.id);
+    const replay = await em.findOne(Replay, { id });
+    if (!replay || replay.revokedAt) return { kept: false, before: null };
+    if ((await headOfReplay(em, replay, clip))?.id !== head.id)
+      return { kept: false, before: null };
+    const before = replay.hiddenHead?.id ?? null;
+    em.assign(replay, { hiddenHead: head.id });
+    return { kept: true, before };
+  });
+
+/** Killed at any instant it leaves at most a file that no row names; run again it makes the copy anew. */
+const run = async ({
+  ground,
+  practiceId,
+  payload: { replayId },
+  signal,
+}: JobContext<{ replayId: string }>): Promise<void> => {
+  const { storage } = ground;
+  const asked = await wanted(ground, practiceId, replayId);
+  if (!asked) return;
+  const { bench, ...request } = requestOf(asked);
+  const filesBy = (headId: string) => hiddenFiles(practiceId, asked.clip.id, replayId, headId);
+  const remove = async ({ replay, poster }: ReturnType<typeof filesBy>) => {
+    await storage.delete(replay);
+    await storage.delete(poster);
+  };
+  const files = filesBy(asked.head.id);
+  await storage.withTempDir(async (folder) => {
+    const made = await storage.withLocalFile(bench, (benchCopy) =>
+      hideHead({ ...request, benchCopy, folder, signal }),
+    );
+    await storage.putFile(files.replay, made.video, 'video/mp4');
+    await storage.putFile(files.poster, made.poster, 'image/jpeg');
+  });
+  const { kept, before } = await keep(ground, asked);
+  if (!kept) await remove(files);
+  else if (before !== null) await remove(filesBy(before));
+};
+
+export const hideHeadJob = handles({
+  type: HIDE_HEAD,
+  lockKey: ({ replayId }) => replayId,
+  run,
+  expireInMinutes: 60,
+  retryLimit: 5,
+  retryDelaySeconds: 30,
+  unfinished: {
+    sql: 'select replay_id, practice_id from heads_to_hide()',
+    read: (row) => ({
+      practiceId: String(row.practice_id),
+      payload: { replayId: String(row.replay_id) },
+    }),
+  },
+});
