@@ -19,9 +19,16 @@ export const callsOptions = (visitId: string, side: Side) =>
     queryFn: ({ signal }) => call(routes.listCalls, { params: { id: visitId, side }, signal }),
   });
 
+/** How often the links are asked for while a film with a hidden head is being prepared, ms. */
+const PREPARING_MS = 5000;
+
 /** The replay links of a visit. */
 export const replaysOptions = (visitId: string) =>
   queryOptions({
     queryKey: ['visits', visitId, 'replays'],
     queryFn: ({ signal }) => call(routes.listReplays, { query: { visitId }, signal }),
+    refetchInterval: ({ state }) =>
+      state.data?.items.some(({ head, state: is }) => is === 'live' && head === 'being-prepared')
+        ? PREPARING_MS
+        : false,
   });

@@ -11,6 +11,15 @@ const STATES: Record<Replay['state'], readonly [kind: StateKind, words: string]>
   revoked: ['bad', 'ended'],
 };
 
+const HEADS: Record<Replay['head'], string | null> = {
+  shown: null,
+  hidden: 'The head is hidden.',
+  'being-prepared':
+    'The film with the hidden head is being prepared; until then the link shows none.',
+  'to-be-looked-at':
+    'The box around the head was changed. The link shows no film until somebody has looked at it on the Bench.',
+};
+
 const openings = ({ openings: count, lastOpenedAt }: Replay): string => {
   if (count === 0 || lastOpenedAt === null) return 'not opened yet';
   const times = count === 1 ? 'once' : count === 2 ? 'twice' : `${inWords(count)} times`;
@@ -47,7 +56,8 @@ export function ReplayLinks({
               <p className="text-note text-soft">
                 Made {moment(link.at)} by {link.by.name}
                 {link.passPhrase && ', with a pass phrase'};{' '}
-                {link.state === 'live' ? 'ends' : 'until'} {moment(link.expiresAt)}.
+                {link.state === 'live' ? 'ends' : 'until'} {moment(link.expiresAt)}.{' '}
+                {link.state === 'live' && HEADS[link.head]}
               </p>
             </div>
             {link.state === 'live' && onEnd && (

@@ -10,7 +10,7 @@ export const currentHead = (em: EntityManager, clipId: string): Promise<Head | n
     Head,
     { clip: clipId },
     { populate: ['by', 'lookedBy'], orderBy: { version: 'desc' } },
-  ) as Promise<Head | null>;
+  );
 
 /** @throws Problem 'clip-not-ready' */
 export const headTrack = (head: Head, { width, height }: Clip): HeadTrack => {

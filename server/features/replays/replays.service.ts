@@ -11,7 +11,6 @@ import { User } from '../accounts/user.entity.ts';
 import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 import { needConsent } from '../athletes/consent-check.ts';
 import { Call } from '../calls/call.entity.ts';
-import type { Clip } from '../clips/clip.entity.ts';
 import { needFrames } from '../clips/clip-in-sight.ts';
 import { audit } from '../practice/audit.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
@@ -96,7 +95,7 @@ export const makeReplay = async (
  * @param replay with `rep.clip` loaded
  */
 export const headOfLink = ({ em }: Of, replay: Replay) =>
-  headStateOf(em, replay, (replay.rep.unwrap() as Rep).clip.unwrap() as Clip);
+  headStateOf(em, replay, (replay.rep.unwrap() as Rep).clip.unwrap());
 
 /** Kills a link at once; doing it twice is fine. */
 export const revokeReplay = async (unit: Of, id: string): Promise<Replay> => {

@@ -307,6 +307,7 @@ describe('the replay link', () => {
       toFrame: aRep(1).endFrame,
       showReading: true,
       showCall: true,
+      hideHead: false,
       message: '',
       days: 30,
       passPhrase: null,

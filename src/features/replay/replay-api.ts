@@ -61,6 +61,14 @@ export const asksStillLive = async (token: string, signal: AbortSignal): Promise
   return response.status !== 404;
 };
 
+/** Whether there is a film to play. Throws only where `signal` says stop. */
+export const filmIsThere = async (token: string, signal: AbortSignal): Promise<boolean> => {
+  const response = await ask(videoAddress(token), { signal, headers: { range: 'bytes=0-0' } });
+  if (response === 'offline') return false;
+  await response.body?.cancel();
+  return response.ok;
+};
+
 export const unlockReplay = async (token: string, passPhrase: string): Promise<Unlocking> => {
   const response = await ask(`/api/r/${token}/unlock`, {
     method: 'POST',

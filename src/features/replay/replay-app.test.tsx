@@ -3,6 +3,7 @@ import userEvent from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { aPublicReplay, replayToken } from '#tests/support/public-replay.ts';
+import { ASK_FILM_EVERY } from './being-prepared.tsx';
 import { tokenOf } from './replay-api.ts';
 import { ReplayApp } from './replay-app.tsx';
 import { ASK_EVERY } from './use-still-live.ts';
@@ -76,6 +77,29 @@ describe('a replay', () => {
     expect(screen.getByRole('button', { name: /^90°/ })).toHaveAttribute('aria-pressed', 'true');
     await user.click(screen.getByRole('button', { name: 'Half the speed' }));
     expect(video.playbackRate).toBe(0.5);
+  });
+
+  it('shows no film while the head is being hidden, and the film once it is there', async () => {
+    vi.useFakeTimers({ toFake: ['setInterval', 'clearInterval'] });
+    let head: PublicReplay['head'] = 'being-prepared';
+    const asked = server({
+      [OPEN]: () => Response.json(aPublicReplay({ head })),
+      [`${OPEN}/video`]: () => new Response(null, { status: head === 'hidden' ? 206 : 409 }),
+    });
+    render(<ReplayApp token={replayToken} />);
+    expect(await screen.findByText('The film is being prepared.')).toBeVisible();
+    expect(screen.queryByLabelText(/^Your lift/)).toBeNull();
+    expect(screen.getByText(/clothes, room, tattoos and the way of moving/)).toBeVisible();
+    vi.advanceTimersByTime(ASK_FILM_EVERY);
+    await waitFor(() => expect(asked).toContain(`${OPEN}/video`));
+    expect(screen.getByText('The film is being prepared.')).toBeVisible();
+    head = 'hidden';
+    vi.advanceTimersByTime(ASK_FILM_EVERY);
+    expect(await screen.findByLabelText(/^Your lift/)).toHaveAttribute(
+      'src',
+      `/api/r/${replayToken}/video`,
+    );
+    vi.useRealTimers();
   });
 
   it('stands still where motion is to be reduced', async () => {

@@ -1,4 +1,4 @@
-import { useEffect, useState } from 'react';
+import { useCallback, useEffect, useState } from 'react';
 import { Notice } from './notice.tsx';
 import { PassPhrase } from './pass-phrase.tsx';
 import { openReplay, type Opening } from './replay-api.ts';
@@ -18,10 +18,10 @@ export function ReplayApp({ token }: { token: string | null }) {
     return () => stop.abort();
   }, [token, attempt]);
 
-  const again = () => {
+  const again = useCallback(() => {
     setOpening(null);
     setAttempt((n) => n + 1);
-  };
+  }, []);
   if (opening === null || token === null)
     return opening === null ? <OpeningNow /> : <Notice opening={{ is: 'gone' }} onAgain={again} />;
   if (opening.is === 'open')
@@ -30,6 +30,7 @@ export function ReplayApp({ token }: { token: string | null }) {
         token={token}
         replay={opening.replay}
         onEnded={() => setOpening({ is: 'ended' })}
+        onReady={again}
       />
     );
   if (opening.is === 'phrase')

@@ -2,6 +2,7 @@ import { useEffect, useMemo, useRef, useState } from 'react';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { longDay, shortDay } from '#src/ui/days.ts';
 import { frameTimes } from '#src/video/frame-times.ts';
+import { BeingPrepared } from './being-prepared.tsx';
 import { Comments } from './comments.tsx';
 import { Player } from './player/player.tsx';
 import { useLoop } from './player/use-loop.ts';
@@ -14,11 +15,14 @@ export function ReplayPage({
   token,
   replay,
   onEnded,
+  onReady,
 }: {
   token: string;
   replay: PublicReplay;
   /** The link opens nothing any more. */
   onEnded: () => void;
+  /** A film that was being prepared is there. */
+  onReady: () => void;
 }) {
   const times = useMemo(() => frameTimes(replay.frames), [replay.frames]);
   const loop = useLoop(replay, times);
@@ -45,14 +49,18 @@ export function ReplayPage({
       </header>
       <main className="tablet:mx-auto tablet:grid tablet:max-w-[1120px] tablet:grid-cols-[minmax(0,460px)_minmax(0,1fr)] tablet:items-start tablet:gap-x-12 tablet:px-8 tablet:pt-8">
         <div ref={film} className="tablet:sticky tablet:top-4">
-          <Player
-            token={token}
-            replay={replay}
-            times={times}
-            loop={loop}
-            comment={comment}
-            onFailed={check}
-          />
+          {replay.head === 'being-prepared' ? (
+            <BeingPrepared token={token} onReady={onReady} />
+          ) : (
+            <Player
+              token={token}
+              replay={replay}
+              times={times}
+              loop={loop}
+              comment={comment}
+              onFailed={check}
+            />
+          )}
         </div>
         <div className="px-4 text-sub leading-7 tablet:px-0">
           <Result replay={replay} />
@@ -67,8 +75,10 @@ export function ReplayPage({
           <footer className="border-t border-rule py-6 text-note text-soft">
             <p>
               Whoever has this link can open it until {longDay(expiresAt.slice(0, 10))}. It shows
-              this replay and nothing else. To have it ended earlier or your film deleted, ask{' '}
-              {practice.name}.
+              this replay and nothing else.{' '}
+              {replay.head !== 'shown' &&
+                'The head is hidden on the film; clothes, room, tattoos and the way of moving can still tell who it is. '}{' '}
+              To have it ended earlier or your film deleted, ask {practice.name}.
             </p>
           </footer>
         </div>
