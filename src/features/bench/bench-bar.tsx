@@ -6,7 +6,7 @@ import { useBench, useBenchDocument, useBenchModel, useBenchTools } from './benc
 import { OthersLine } from './others/others-line.tsx';
 import type { Desk } from './store/bench-store.ts';
 import { isDraft } from './model/draft.ts';
-import { MARK } from './store/tools.ts';
+import { LOOK, MARK, type Tool } from './store/tools.ts';
 import { useNarrow } from './use-media.ts';
 
 const DESKS: readonly { desk: Desk; label: string }[] = [
@@ -14,6 +14,7 @@ const DESKS: readonly { desk: Desk; label: string }[] = [
   { desk: 'reps', label: 'Reps' },
   { desk: 'look', label: 'Look' },
   { desk: 'set-up', label: 'Set-up' },
+  { desk: 'head', label: 'Head' },
   { desk: 'comments', label: 'Comments' },
 ];
 
@@ -39,10 +40,17 @@ export function BenchBar() {
   );
 }
 
+/** No landmark is placed beside the head's box; a shape or a line that was begun belongs to the desk that is left. */
+const toolAt = (next: Desk, before: Desk, tool: Tool, mayMark: boolean): Tool => {
+  if (next === 'head') return LOOK;
+  if (before === 'head') return mayMark ? MARK : LOOK;
+  return tool.kind === 'line' || tool.kind === 'shape' ? MARK : tool;
+};
+
 /** What the right side shows. */
 export function DeskTabs() {
   const { store } = useBenchTools();
-  const { comments } = useBenchDocument();
+  const { comments, may } = useBenchDocument();
   const { reps, current } = useBenchModel();
   const desk = useBench((state) => state.desk);
   const open = comments.filter((each) => each.answerTo === null && !each.resolved).length;
@@ -64,8 +72,7 @@ export function DeskTabs() {
           onClick={() =>
             store.setState(({ tool }) => ({
               desk: each,
-              // a shape or a line that was begun belongs to the desk that is left
-              tool: tool.kind === 'line' || tool.kind === 'shape' ? MARK : tool,
+              tool: toolAt(each, desk, tool, may.mark),
             }))
           }
           className={`-mb-px min-h-[44px] border-b-2 ${

@@ -27,6 +27,8 @@ import { CourseDesk } from './course/course-desk.tsx';
 import { createFollowing } from './follow/following.ts';
 import { openTrackerOf } from './follow/open-tracker.ts';
 import { FollowContext, useFollowing } from './follow/use-follow.ts';
+import { HeadDesk } from './head/head-desk.tsx';
+import { HeadContext, useHiddenHead } from './head/use-hidden-head.ts';
 import { LookDesk } from './look/look-desk.tsx';
 import { isDraft } from './model/draft.ts';
 import { KeysDialog } from './keys/keys-dialog.tsx';
@@ -97,7 +99,9 @@ export function Bench({ document, frames, frameSize, copySize }: ReadyClip) {
         <BenchModelContext value={model}>
           <ReadingContext value={reading}>
             <FollowBench>
-              <BenchLayout tools={tools} />
+              <HeadBench>
+                <BenchLayout tools={tools} />
+              </HeadBench>
             </FollowBench>
           </ReadingContext>
         </BenchModelContext>
@@ -147,10 +151,16 @@ function FollowBench({ children }: { children: ReactNode }) {
   return <FollowContext value={useFollowing()}>{children}</FollowContext>;
 }
 
+/** The box around the head, for the picture and its desk. */
+function HeadBench({ children }: { children: ReactNode }) {
+  return <HeadContext value={useHiddenHead()}>{children}</HeadContext>;
+}
+
 function DeskView({ pictures }: { pictures: Pictures }) {
   const desk = useBench((state) => state.desk);
   if (desk === 'reps') return <RepsPanel />;
   if (desk === 'look') return <LookDesk source={pictures.source} />;
+  if (desk === 'head') return <HeadDesk />;
   if (desk === 'set-up') return <SetUpPanel />;
   if (desk === 'comments') return <CommentsPanel />;
   return <CourseDesk />;

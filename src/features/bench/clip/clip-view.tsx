@@ -9,6 +9,7 @@ import { useMarking } from '../actions/use-marking.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { useFollow } from '../follow/use-follow.ts';
 import { marksOn } from '../model/bench-model.ts';
+import { HeadBox } from '../head/head-box.tsx';
 import { MARK, withPoint } from '../store/tools.ts';
 import { useNarrow } from '../use-media.ts';
 import { fullFrameUrl } from './clip-source.ts';
@@ -144,6 +145,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
               onRemove={marking.remove}
               onLeave={() => slider.current?.focus({ preventScroll: true })}
             />
+            <HeadBox viewport={view.viewport} />
             {narrow && <CornerGlass draw={draw} target={target} />}
             <ZoomButtons />
             <PictureState pictures={pictures} />

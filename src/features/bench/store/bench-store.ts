@@ -37,7 +37,7 @@ export type BenchStep =
   | { readonly kind: 'clip'; readonly before: ClipGeometry; readonly after: ClipGeometry };
 
 /** What the right side of the Bench shows. */
-export type Desk = 'course' | 'reps' | 'look' | 'set-up' | 'comments';
+export type Desk = 'course' | 'reps' | 'look' | 'set-up' | 'head' | 'comments';
 
 export interface BenchState {
   readonly frame: FrameIndex;

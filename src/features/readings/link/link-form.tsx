@@ -46,6 +46,7 @@ export function LinkForm({
     passPhrase: null,
     showReading: measured,
     showCall: true,
+    hideHead: false,
   });
   const send = async (body: z.output<typeof formBody>) => {
     const made = await call(routes.makeReplay, {
@@ -97,6 +98,11 @@ export function LinkForm({
           name="showCall"
           label="Show the call by eye"
           note="Labelled: seen by your coach, not measured."
+        />
+        <CheckboxField
+          name="hideHead"
+          label="Hide the head"
+          note="The film that leaves has a mosaic over the head. Draw a box around the head on the Bench and look through it first. This does not make the film anonymous: clothes, room, tattoos and the way of moving remain."
         />
       </div>
       <Button type="submit" busy={form.formState.isSubmitting} busyLabel="Making the link…">
