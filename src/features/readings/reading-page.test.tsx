@@ -165,6 +165,22 @@ describe('a measured reading', () => {
     expect(course.getByText(/lift from its own clip, not from rep 3: a front and/)).toBeVisible();
   });
 
+  it('tells reps of the same number in two clips apart where they can be marked again', async () => {
+    const reading = aReading(resultOf('g02_early_mid_3rep'));
+    const reps = reading.reps.map((rep, at) =>
+      at === 0 ? rep : { ...rep, number: at, clipId: visitId, clipName: 'IMG_2292.MOV' },
+    );
+    readingApi(aSidePage({ ...reading, reps }));
+    renderAt(address);
+    const section = within(await region('Marking error'));
+    expect(
+      section.getByRole('link', { name: 'Mark rep 1 of IMG_2291.MOV again, blind' }),
+    ).toHaveAttribute('href', expect.stringContaining(`/clips/${clipId}`));
+    expect(
+      section.getByRole('link', { name: 'Mark rep 1 of IMG_2292.MOV again, blind' }),
+    ).toBeVisible();
+  });
+
   it('that rests on tracked marks is provisional', async () => {
     const result = { ...resultOf('g02_early_mid_3rep'), provisional: true };
     readingApi(aSidePage(aReading(result)));

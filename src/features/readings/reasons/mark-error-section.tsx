@@ -5,6 +5,7 @@ import { capital } from '#src/ui/figures.ts';
 import { markErrorWords } from '#src/ui/mark-error-words.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
+import { repName } from '../words/rep-names.ts';
 import { ReadAgain } from './read-again.tsx';
 
 /** The marking error that this reading was made with, and another that it could be made with now. */
@@ -39,7 +40,7 @@ export function MarkErrorSection({ page, reading }: { page: SidePage; reading: R
               to={paths.bench(rep.clipId, { again: rep.number })}
               className="inline-block py-2.5"
             >
-              Mark rep {rep.number} again, blind
+              Mark {repName(reading, rep.id)} again, blind
             </Link>
           </li>
         ))}
