@@ -19,6 +19,8 @@ export interface ClipPlan {
   readonly view: 'front' | 'lifted-side';
   readonly camera: CameraPlan;
   readonly pointers: Pointers;
+  /** False: none are worn */
+  readonly stickers?: boolean;
   /** how the hip turns when this side supports */
   readonly shapes: Readonly<Record<Side, TurnShapeName>>;
   readonly habits: Habits;

@@ -8,7 +8,7 @@ import { filmClip, writeTruth } from './film/film-clip.ts';
 import { writeStill } from './film/still.ts';
 import { BODIES, type BodyName } from './model/bodies.ts';
 
-const USAGE = `npm run demo:render -- [--only NAME] [--seed N] [--body NAME] [--out DIR] [--still LIFT] [--truth-only]
+const USAGE = `npm run demo:render -- [--only NAME] [--seed N] [--body NAME] [--out DIR] [--still LIFT] [--no-stickers] [--truth-only]
   clips:  ${CLIPS.map((clip) => clip.name).join(', ')}
   bodies: ${Object.keys(BODIES).join(', ')}`;
 
@@ -19,6 +19,7 @@ const { values } = parseArgs({
     body: { type: 'string' },
     out: { type: 'string' },
     still: { type: 'string' },
+    'no-stickers': { type: 'boolean', default: false },
     'truth-only': { type: 'boolean', default: false },
     help: { type: 'boolean', default: false },
   },
@@ -36,7 +37,8 @@ const wanted = (clip: ClipPlan): ClipPlan => {
   const seed = values.seed === undefined ? clip.script.seed : wholeNumber('seed', values.seed);
   const body = values.body ?? clip.body;
   if (!isBody(body)) throw new Error(`no body is called '${body}'\n${USAGE}`);
-  return { ...clip, body, script: { ...clip.script, seed } };
+  const stickers = !values['no-stickers'];
+  return { ...clip, body, stickers, script: { ...clip.script, seed } };
 };
 
 const render = async (clips: readonly ClipPlan[], folder: string): Promise<void> => {

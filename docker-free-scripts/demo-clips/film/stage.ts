@@ -27,6 +27,7 @@ export const painterPlan = (clip: ClipPlan, room: RoomPicture): PainterPlan => (
     arms: clip.view === 'front' ? 'hanging' : 'before-waist',
   },
   room,
+  stickers: clip.stickers ?? true,
   seed: clip.script.seed,
   grain: 0.9,
 });

@@ -46,6 +46,7 @@ export interface PainterPlan {
   readonly person: Person;
   readonly worn: Worn;
   readonly room: RoomPicture;
+  readonly stickers: boolean;
   readonly seed: number;
   /** the sensor's noise, display values; 0 for a still */
   readonly grain: number;
@@ -126,6 +127,7 @@ export class Painter {
     intoRoom(this.plan.camera.plan.facing)(point);
 
   private dots(bones: Skeleton): readonly Dot[] {
+    if (!this.plan.stickers) return [];
     return dotsOf(bones, this.plan.camera, this.plan.worn.pointers, this.intoRoom);
   }
 

@@ -7,6 +7,9 @@ export function useHashTarget(): void {
   useEffect(() => {
     if (hash === '') return;
     const target = document.getElementById(hash.slice(1));
+    // what is folded away opens
+    for (let fold = target?.closest('details'); fold; fold = fold.parentElement?.closest('details'))
+      fold.open = true;
     target?.scrollIntoView();
     target?.focus({ preventScroll: true });
   }, [hash, key]);

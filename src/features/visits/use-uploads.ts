@@ -5,6 +5,7 @@ import { useMe } from '#src/api/me.ts';
 import { visitOptions } from '#src/api/visits.queries.ts';
 import { keptUploads } from './uploads/kept-uploads.ts';
 import type { UploadItem } from './uploads/upload-item.ts';
+import { takeOfClip, takeOfFile } from './uploads/take.queries.ts';
 import { uploads } from './uploads/uploads.ts';
 
 /** The uploads of one visit on this device, those from before a reload included. */
@@ -16,6 +17,10 @@ export function useUploads(visitId: string): UploadItem[] {
   useEffect(
     () =>
       uploads.onSent((item) => {
+        const look = client.getQueryData(takeOfFile(item).queryKey);
+        // what was seen of the file is not looked for in its copy again
+        if (look && item.uploadId !== null)
+          client.setQueryData(takeOfClip(item.uploadId).queryKey, look);
         void client.invalidateQueries({
           queryKey: visitOptions(item.visitId).queryKey,
           exact: true,

@@ -38,7 +38,7 @@ const ringAt = (plane: Plane, x: number, y: number, radius: number): Spread => {
 };
 
 /** Difference of inside and outside less their own unevenness; 0 where that is nothing. */
-const standsOut = (plane: Plane, x: number, y: number, radius: number): number => {
+export const standsOut = (plane: Plane, x: number, y: number, radius: number): number => {
   const outside = ringAt(plane, x, y, OUTSIDE * radius);
   const inside = ringAt(plane, x, y, INSIDE * radius);
   const difference = inside.mean - outside.mean;

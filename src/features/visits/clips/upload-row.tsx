@@ -5,12 +5,13 @@ import { Progress } from '#src/ui/progress.tsx';
 import { StateDot, type StateKind } from '#src/ui/state-dot.tsx';
 import { Skeleton } from '#src/ui/states.tsx';
 import { clipWords } from '#src/ui/words.ts';
-import { filmedAs, judge, type Verdict } from '../uploads/judge.ts';
+import { asksPointers, filmedAs, judge, type Verdict } from '../uploads/judge.ts';
 import { detailsComplete, percentOf, type UploadItem } from '../uploads/upload-item.ts';
 import { uploads } from '../uploads/uploads.ts';
 import { DetailsChoice } from './details-choice.tsx';
 import { LocalPicture } from './local-picture.tsx';
 import { RowFrame } from './row-frame.tsx';
+import { TakeOfFile } from './take-of-file.tsx';
 import { UploadActions } from './upload-actions.tsx';
 
 /** A clip that is not on the server yet. */
@@ -40,6 +41,7 @@ export function UploadRow({
       state={<UploadActions item={item} verdict={verdict} primary={only} onFiles={onFiles} />}
     >
       <Look item={item} verdict={verdict} />
+      <TakeOfFile item={item} asksPointers={asksPointers(visit, item)} />
       {asksDetails(item) && (
         <DetailsChoice item={item} onChange={(details) => uploads.describe(item.key, details)} />
       )}

@@ -85,7 +85,7 @@ export function UploadStep({
             />
           ))}
           {clips.map((clip) => (
-            <ClipRow key={clip.id} clip={clip} may={may} />
+            <ClipRow key={clip.id} visit={visit} clip={clip} may={may} />
           ))}
         </ul>
       )}

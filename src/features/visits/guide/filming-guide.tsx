@@ -39,6 +39,7 @@ export function FilmingGuide({
         athlete, at their own distance; without a rod, body height gives the scale.
       </Step>
       <Step
+        id="guide-frame"
         drawing={<FrameDrawing framesPerSecond={framesPerSecond} />}
         title={`Whole body, upright, ${framesPerSecond} frames per second`}
       >
@@ -48,7 +49,7 @@ export function FilmingGuide({
       <Step drawing={<LightDrawing />} title="Light from behind the phone">
         With the back camera: a selfie camera mirrors the picture and swaps the sides.
       </Step>
-      <Step drawing={<DotsDrawing />} title="Dots where you will mark">
+      <Step id="guide-dots" drawing={<DotsDrawing />} title="Dots where you will mark">
         Follow the hip bone forward to its front corner. The athlete may place the dots; ask before
         you touch.
       </Step>
@@ -63,7 +64,11 @@ export function FilmingGuide({
         larger to be found: {ACHIEVED['belt+thigh'].foundFrom}° and {ACHIEVED.belt.foundFrom}° nine
         times in ten{studiedBetween(gates)}.
       </Step>
-      <Step drawing={<LiftDrawing gates={gates} />} title="Three still seconds, then slowly">
+      <Step
+        id="guide-lift"
+        drawing={<LiftDrawing gates={gates} />}
+        title="Three still seconds, then slowly"
+      >
         Both feet down and still; then up with a short stop at {gates.from}° and at {gates.to}°,
         past it, and down. {capital(inWords(reps))} {reps === 1 ? 'rep' : 'reps'}.
       </Step>
@@ -78,16 +83,24 @@ export function FilmingGuide({
 }
 
 function Step({
+  id,
   drawing,
   title,
   children,
 }: {
+  /** What a sentence about a take leads to. */
+  id?: string;
   drawing: ReactNode;
   title: string;
   children: ReactNode;
 }) {
   return (
-    <figure>
+    <figure
+      id={id}
+      tabIndex={id === undefined ? undefined : -1}
+      data-quiet-focus
+      className="scroll-mt-4"
+    >
       {drawing}
       <figcaption className="pt-2.5 text-note leading-[21px] text-soft">
         <b className="block text-body text-ink">{title}</b>

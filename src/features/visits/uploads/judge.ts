@@ -40,6 +40,13 @@ export const filmedAs = (
   protocol,
 });
 
+/** The set-up names pointers, and the view shows them. */
+export const asksPointers = (
+  { filming }: Pick<Visit, 'filming'>,
+  { view }: Pick<ClipDetails, 'view'>,
+): boolean =>
+  view === 'front' && (filming.beltPointerMm !== null || filming.thighPointerMm !== null);
+
 type Fault = { grade: 'weak' | 'again'; words: string };
 
 /** The largest upload that is taken, bytes. */

@@ -43,6 +43,13 @@ export const uploads = createUploader({
   },
 });
 
+const sentHere = new Set<string>();
+uploads.onSent(({ uploadId }) => {
+  if (uploadId !== null) sentHere.add(uploadId);
+});
+/** Sent from this tab: whoever sent it may still have the athlete before them. */
+export const wasSentHere = (clipId: string): boolean => sentHere.has(clipId);
+
 const underWay = () => uploads.store.getState().items.filter(isUnderWay);
 
 guardLeaving({
