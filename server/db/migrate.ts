@@ -11,6 +11,7 @@ import { Migration20261201173000_two_clips } from '../../migrations/Migration202
 import { Migration20261201181500_filming_lines } from '../../migrations/Migration20261201181500_filming_lines.ts';
 import { Migration20261201194000_protocol } from '../../migrations/Migration20261201194000_protocol.ts';
 import { Migration20261201235500_heads } from '../../migrations/Migration20261201235500_heads.ts';
+import { Migration20261202001000_prepared_seconds } from '../../migrations/Migration20261202001000_prepared_seconds.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -52,6 +53,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261201235500_heads',
     class: Migration20261201235500_heads,
+  },
+  {
+    name: 'Migration20261202001000_prepared_seconds',
+    class: Migration20261202001000_prepared_seconds,
   },
 ];
 

@@ -113,6 +113,8 @@ export const clip = z
     /** 0–100 while preparing; null where it is not known. */
     progress: z.number().nullable(),
     secondsLeft: z.number().nullable(),
+    /** How long the machine worked until it was ready; null before, and where nobody took the time. */
+    preparedSeconds: z.number().nullable(),
     refusal: refusal.nullable(),
     /** Only while waiting. */
     trouble: trouble.nullable(),

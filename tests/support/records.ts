@@ -124,6 +124,7 @@ export const aClip = (change: Partial<Clip> = {}): Clip => ({
   state: 'ready',
   progress: null,
   secondsLeft: null,
+  preparedSeconds: null,
   refusal: null,
   trouble: null,
   view: 'front',

@@ -78,6 +78,8 @@ export const Clip = defineEntity({
     /** 0–100 while preparing. */
     progress: real().$type<number>().nullable(),
     secondsLeft: real().$type<number>().nullable(),
+    /** How long the preparation took that made it ready; null before, and for clips made ready before this was noted. */
+    preparedSeconds: real().$type<number>().nullable(),
     uploadedBy: p.manyToOne(User).ref(),
     uploadedAt: madeAt(),
     version: p.integer().version(),

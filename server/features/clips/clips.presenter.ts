@@ -13,6 +13,7 @@ export const presentClip = (clip: Clip, repCount: number): ClipShape => ({
   state: clip.state,
   progress: clip.progress ?? null,
   secondsLeft: clip.secondsLeft ?? null,
+  preparedSeconds: clip.preparedSeconds ?? null,
   refusal: presentRefusal(clip.refusalCode ?? null, clip.refusalFigures ?? null),
   trouble: presentTrouble(clip),
   view: clip.view,

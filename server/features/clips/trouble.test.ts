@@ -90,11 +90,13 @@ describe('a clip that the machine could not prepare', () => {
     expect((await clipOf(id)).trouble).toMatchObject({ code: 'no-space', nextTryAt: null });
     // a job that was left over does nothing: the clip waits for a person
     await prepare(id);
-    expect((await clipOf(id)).state).toBe('waiting');
+    expect(await clipOf(id)).toMatchObject({ state: 'waiting', preparedSeconds: null });
     const asked = await coach.post(`/api/clips/${id}/prepare-again`).expect(202);
     expect(asked.body).toMatchObject({ state: 'waiting', trouble: null });
     await prepare(id);
-    expect((await clipOf(id)).state).toBe('ready');
+    const ready = await clipOf(id);
+    expect(ready.state).toBe('ready');
+    expect(ready.preparedSeconds).toBeGreaterThan(0);
   });
 
   it('is not asked for again where nothing is wrong', async () => {

@@ -26,6 +26,7 @@ export const keepPrepared = (
   practiceId: string,
   clipId: string,
   made: PreparedClip,
+  preparedSeconds: number,
 ): Promise<void> =>
   inPractice(product(practiceId), async (unit) => {
     await lockClip(unit.em, clipId);
@@ -41,6 +42,7 @@ export const keepPrepared = (
       state: 'ready',
       progress: null,
       secondsLeft: null,
+      preparedSeconds,
       refusalCode: null,
       refusalFigures: null,
       files: clipFiles(practiceId, clipId),

@@ -58,6 +58,7 @@ const prepare = async (
   { original, ...options }: NonNullable<Awaited<ReturnType<typeof begin>>>,
 ): Promise<void> => {
   const { storage } = ground;
+  const began = performance.now();
   await storage.withTempDir(async (folder) => {
     const made = await storage.withLocalFile(original, async (path) => {
       await scrubLocation(path);
@@ -70,7 +71,8 @@ const prepare = async (
       });
     });
     await store(ground, practiceId, clipId, made);
-    await keepPrepared(ground, practiceId, clipId, made);
+    const seconds = (performance.now() - began) / 1000;
+    await keepPrepared(ground, practiceId, clipId, made, seconds);
   });
 };
 

@@ -1,6 +1,6 @@
 import { useStore } from 'zustand';
 import { decimal } from '#src/ui/figures.ts';
-import { useBenchTools } from '../bench-context.ts';
+import { useBenchDocument, useBenchTools } from '../bench-context.ts';
 import { useReading } from '../reading/use-reading.ts';
 import type { Clock, Following } from './following.ts';
 
@@ -15,9 +15,11 @@ export const spell = (ms: number): string => {
 export const timeWords = (
   { firstTouch, lastTouch, followed, looked }: Clock,
   readingMs: number | null,
+  preparedSeconds: number | null,
 ): string | null => {
   if (firstTouch === null || lastTouch === null || followed === null) return null;
   const parts = [
+    preparedSeconds === null ? null : `preparing the clip ${spell(1000 * preparedSeconds)}`,
     `marking ${spell(lastTouch - firstTouch)}`,
     `following ${spell(followed - lastTouch)}`,
     looked === null || looked < followed ? null : `looking ${spell(looked - followed)}`,
@@ -34,6 +36,7 @@ export function TimeTaken() {
 function Taken({ follow }: { follow: Following }) {
   const clock = useStore(follow.store, (state) => state.clock);
   const { tookMs } = useReading();
-  const words = timeWords(clock, tookMs);
+  const { clip } = useBenchDocument();
+  const words = timeWords(clock, tookMs, clip.preparedSeconds);
   return words === null ? null : <p className="mt-2 text-soft">{words}</p>;
 }
