@@ -11,7 +11,7 @@ const root = createRoot(document.querySelector('main') ?? document.body);
 const show = (query: { data: TakeLook | undefined; isError: boolean }): void =>
   root.render(
     <MemoryRouter>
-      <TakeLookState name="film" query={query as never} asksPointers={false} />
+      <TakeLookState name="film" query={query} asksPointers={false} />
     </MemoryRouter>,
   );
 
