@@ -5,6 +5,8 @@ export default defineConfig({
   test: {
     // a promise rejected without a handler fails the run
     dangerouslyIgnoreUnhandledErrors: false,
+    // left to itself it keeps one processor free, of two
+    maxWorkers: '100%',
     projects: [
       {
         test: {
