@@ -1,9 +1,8 @@
 import { describe, expect, it } from 'vitest';
-import type { UsedRep } from './fit-rep.ts';
-import { riseScatter, scatterOf } from './rise-scatter.ts';
+import { riseScatter, type ScatteringRep, scatterOf } from './rise-scatter.ts';
 
 /** A rep of which only the scatter around its fit is known: 6 + Σ w r² = sFit² ν, ν = 6 + frames − 4. */
-const repOf = (squares: number, frames: number, zero?: number): UsedRep => {
+const repOf = (squares: number, frames: number, zero?: number): ScatteringRep => {
   const nu = 6 + frames - 4;
   return {
     fitted: { fit: { sFit: Math.sqrt((6 + squares) / nu), nu, used: frames } },
@@ -12,7 +11,7 @@ const repOf = (squares: number, frames: number, zero?: number): UsedRep => {
         turnZero: zero === undefined ? null : { femurVariance: zero, pelvisVariance: 2 * zero },
       },
     },
-  } as unknown as UsedRep;
+  };
 };
 
 describe('the scatter of the rises', () => {

@@ -9,8 +9,20 @@ const LEAST_FACTOR = 1 / CONSTANTS.trackedFactor.value ** 2;
 const PRIOR_FRAMES = 6;
 const TERMS = 4;
 
+type TurnZero = NonNullable<UsedRep['course']['setting']['turnZero']>;
+
+/** What of a rep tells of its scatter. */
+export interface ScatteringRep {
+  readonly fitted: { readonly fit: Pick<UsedRep['fitted']['fit'], 'sFit' | 'nu' | 'used'> };
+  readonly course: {
+    readonly setting: {
+      readonly turnZero: Pick<TurnZero, 'femurVariance' | 'pelvisVariance'> | null;
+    };
+  };
+}
+
 /** What the frames of all rises scatter around their fits. */
-export const riseScatter = (used: readonly UsedRep[]): Scattered => {
+export const riseScatter = (used: readonly ScatteringRep[]): Scattered => {
   let squares = 0;
   let free = 0;
   for (const { fitted } of used) {
@@ -26,13 +38,13 @@ export const riseScatter = (used: readonly UsedRep[]): Scattered => {
  * it; the assumption counts as six free squares. `nu`: degrees of freedom.
  */
 export const scatterOf = (
-  used: readonly UsedRep[],
+  used: readonly ScatteringRep[],
   ...seen: readonly Scattered[]
 ): { readonly scatter: Scatter; readonly nu: number } => {
   const nu = seen.reduce((sum, { free }) => sum + free, PRIOR_FRAMES);
   const squares = seen.reduce((sum, each) => sum + each.squares, PRIOR_FRAMES);
   const factor = Math.max(LEAST_FACTOR, squares / nu);
-  const zero = (read: (rep: UsedRep) => number | undefined): readonly number[] =>
+  const zero = (read: (rep: ScatteringRep) => number | undefined): readonly number[] =>
     used.map((rep) => (read(rep) ?? 0) * (180 / Math.PI) ** 2 * factor);
   return {
     nu,

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { loadTruth } from '../../../tests/fixtures/clips/truth.ts';
+import { CLIP_NAMES, loadTruth } from '../../../tests/fixtures/clips/truth.ts';
 import { stillOf, takeOf } from '../../../tests/fixtures/takes/film.ts';
 import { dotsOn } from './dots.ts';
 import { seeTake } from './judge-take.ts';
@@ -9,18 +9,8 @@ const PATIENCE_MS = 300_000;
 /** Trusts that a picture lies up to a tenth of a second off on each side. */
 const PICTURE_S = 0.1;
 
-const GOOD = [
-  'right-early',
-  'left-expected',
-  'both-sides',
-  'right-side',
-  'bare-still',
-  'short-lift',
-  'right-still',
-] as const;
-
 describe('every demo film will do', { timeout: PATIENCE_MS }, () => {
-  it.each(GOOD)('%s: body, floor, still stance, rise and dots', async (name) => {
+  it.each(CLIP_NAMES)('%s: body, floor, still stance, rise and dots', async (name) => {
     const truth = loadTruth(name);
     const { judged, movement } = seeTake(await takeOf(truth.file));
     const { head, feet, still, rise } = judged;

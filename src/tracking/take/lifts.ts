@@ -40,8 +40,8 @@ const stillSpans = (movement: Movement): Span[] => {
   const spans: Span[] = [];
   let from: number | null = null;
   for (let n = 0; n <= movement.grids.length; n += 1) {
-    const still =
-      n < movement.grids.length && (n === 0 ? stillAt(movement, 1) : stillAt(movement, n));
+    // the first picture has none before it: it is as still as the second
+    const still = n < movement.grids.length && stillAt(movement, Math.max(n, 1));
     if (still) from ??= n;
     else if (from !== null) {
       spans.push({ from, to: n - 1 });
