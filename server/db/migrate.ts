@@ -12,6 +12,7 @@ import { Migration20261201181500_filming_lines } from '../../migrations/Migratio
 import { Migration20261201194000_protocol } from '../../migrations/Migration20261201194000_protocol.ts';
 import { Migration20261201235500_heads } from '../../migrations/Migration20261201235500_heads.ts';
 import { Migration20261202001000_prepared_seconds } from '../../migrations/Migration20261202001000_prepared_seconds.ts';
+import { Migration20261202033000_hidden_copies } from '../../migrations/Migration20261202033000_hidden_copies.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -57,6 +58,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202001000_prepared_seconds',
     class: Migration20261202001000_prepared_seconds,
+  },
+  {
+    name: 'Migration20261202033000_hidden_copies',
+    class: Migration20261202033000_hidden_copies,
   },
 ];
 

@@ -1,6 +1,7 @@
 import { prepareClipJob } from '../features/clips/jobs/prepare-clip.ts';
 import { fillDemoJob } from '../db/demo/fill-demo.job.ts';
 import { hideHeadJob } from '../features/replays/jobs/hide-head.ts';
+import { removeHiddenJob } from '../features/replays/jobs/remove-hidden.ts';
 import { deriveReadingJob } from '../features/readings/jobs/derive-reading.ts';
 import type { AnyJobHandler } from '../jobs/job.ts';
 
@@ -9,5 +10,6 @@ export const jobs: readonly AnyJobHandler[] = [
   prepareClipJob,
   deriveReadingJob,
   hideHeadJob,
+  removeHiddenJob,
   fillDemoJob,
 ];

@@ -38,8 +38,11 @@ export const replay = z
     toFrame: frameIndex,
     showReading: z.boolean(),
     showCall: z.boolean(),
-    /** `to-be-looked-at`: the box was changed, and nothing is shown until somebody has looked at it. */
-    head: z.enum(['shown', 'hidden', 'being-prepared', 'to-be-looked-at']),
+    /**
+     * `to-be-looked-at`: the box was changed, and nothing is shown until somebody has looked at it.
+     * `failed`: the copy could not be made, and nothing is shown until a person asks for it again.
+     */
+    head: z.enum(['shown', 'hidden', 'being-prepared', 'failed', 'to-be-looked-at']),
     message: z.string(),
     passPhrase: z.boolean(),
     state: z.enum(['live', 'lapsed', 'revoked']),
@@ -67,8 +70,8 @@ export const publicReplay = z
     frames: frameTable,
     fromFrame: frameIndex,
     toFrame: frameIndex,
-    /** While the film is being prepared, there is no picture at all. */
-    head: z.enum(['shown', 'hidden', 'being-prepared']),
+    /** While the film is being prepared, or where that failed, there is no picture at all. */
+    head: z.enum(['shown', 'hidden', 'being-prepared', 'failed']),
     /** Lifts between which the hip was looked at. */
     gates,
     /** Frames to stop at; null where the rep has no such moment. */
@@ -153,6 +156,17 @@ export const replayRoutes = {
     answer: json(replay),
     problems: ['not-found', 'not-allowed'],
   }),
+  hideHeadAgain: route({
+    method: 'post',
+    path: '/api/replays/:id/hide-head',
+    summary:
+      'Make the copy with the hidden head again, after that failed. Otherwise nothing changes.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: json(replay),
+    problems: ['not-found', 'not-allowed'],
+  }),
   openReplay: route({
     method: 'get',
     path: '/api/r/:token',
@@ -174,6 +188,17 @@ export const replayRoutes = {
     status: 204,
     answer: none,
     problems: ['not-found', 'pass-phrase-needed', 'too-many-tries'],
+  }),
+  replayFilm: route({
+    method: 'get',
+    path: '/api/r/:token/film',
+    summary:
+      'Whether the link still opens, and whether there is a film to play. Opens nothing by itself.',
+    audience: 'link',
+    params: linkParams,
+    status: 200,
+    answer: json(z.object({ head: publicReplay.shape.head }).meta({ id: 'ReplayFilm' })),
+    problems: ['not-found', 'pass-phrase-needed'],
   }),
   replayVideo: route({
     method: 'get',

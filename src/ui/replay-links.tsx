@@ -3,21 +3,13 @@ import type { Replay } from '#shared/contracts/replays.ts';
 import { ConfirmButton } from './confirm.tsx';
 import { moment } from './days.ts';
 import { inWords } from './figures.ts';
+import { LinkHead } from './link-head.tsx';
 import { StateDot, type StateKind } from './state-dot.tsx';
 
 const STATES: Record<Replay['state'], readonly [kind: StateKind, words: string]> = {
   live: ['done', 'open'],
   lapsed: ['none', 'lapsed'],
   revoked: ['bad', 'ended'],
-};
-
-const HEADS: Record<Replay['head'], string | null> = {
-  shown: null,
-  hidden: 'The head is hidden.',
-  'being-prepared':
-    'The film with the hidden head is being prepared; until then the link shows none.',
-  'to-be-looked-at':
-    'The box around the head was changed. The link shows no film until somebody has looked at it on the Bench.',
 };
 
 const openings = ({ openings: count, lastOpenedAt }: Replay): string => {
@@ -31,12 +23,15 @@ export function ReplayLinks({
   links,
   nameOf,
   onEnd,
+  onHideAgain,
 }: {
   links: readonly Replay[];
   /** What a link plays, said before how often it was opened. */
   nameOf: (link: Replay) => ReactNode;
   /** Left out where this person may not end them. */
   onEnd?: (link: Replay) => Promise<void>;
+  /** Left out where this person may not make links. */
+  onHideAgain?: (link: Replay) => Promise<void>;
 }) {
   return (
     <ul>
@@ -56,9 +51,11 @@ export function ReplayLinks({
               <p className="text-note text-soft">
                 Made {moment(link.at)} by {link.by.name}
                 {link.passPhrase && ', with a pass phrase'};{' '}
-                {link.state === 'live' ? 'ends' : 'until'} {moment(link.expiresAt)}.{' '}
-                {link.state === 'live' && HEADS[link.head]}
+                {link.state === 'live' ? 'ends' : 'until'} {moment(link.expiresAt)}.
               </p>
+              {link.state === 'live' && link.head !== 'shown' && (
+                <LinkHead head={link.head} onAgain={onHideAgain && (() => onHideAgain(link))} />
+              )}
             </div>
             {link.state === 'live' && onEnd && (
               <ConfirmButton

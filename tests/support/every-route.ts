@@ -51,6 +51,7 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   editComment: 'comment',
   deleteComment: 'comment',
   revokeReplay: 'replay',
+  hideHeadAgain: 'replay',
   repFrames: 'rep',
   visitFrames: 'visit',
   repAnnotations: 'rep',

@@ -1,12 +1,12 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import type { Replay as ReplayShape } from '#shared/contracts/replays.ts';
+import type { PublicReplay, Replay as ReplayShape } from '#shared/contracts/replays.ts';
 import { type Stretch, uncovered } from '#shared/head/heads.ts';
 import { Problem } from '../../http/problem.ts';
 import { enqueue } from '../../jobs/job.ts';
 import type { Clip } from '../clips/clip.entity.ts';
 import { hiddenFiles } from '../clips/clip-files.ts';
 import { currentHead, headTrack } from '../heads/current-head.ts';
-import type { Head } from '../heads/head.entity.ts';
+import { Head } from '../heads/head.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { HIDE_HEAD } from './jobs/hide-head-type.ts';
 import { Replay } from './replay.entity.ts';
@@ -66,8 +66,21 @@ export const headStateOf = async (
   if (!replay.hideHead) return 'shown';
   const head = await headOfReplay(em, replay, clip);
   if (!head) return 'to-be-looked-at';
-  return replay.hiddenHead?.id === head.id ? 'hidden' : 'being-prepared';
+  if (replay.hiddenHead?.id === head.id) return 'hidden';
+  return replay.hideFailed ? 'failed' : 'being-prepared';
 };
+
+/** The same for who holds the link: why there is no film yet is the practice's affair. */
+export const publicHeadState = async (
+  ...[em, replay, clip]: Parameters<typeof headStateOf>
+): Promise<PublicReplay['head']> => {
+  const state = await headStateOf(em, replay, clip);
+  return state === 'to-be-looked-at' ? 'being-prepared' : state;
+};
+
+/** It opens nothing any more, for good. */
+export const hasEnded = ({ revokedAt, expiresAt }: Replay): boolean =>
+  Boolean(revokedAt) || expiresAt.getTime() <= Date.now();
 
 /** Where the copy that may be served lies; null until there is one. */
 export const servedHidden = async (
@@ -81,13 +94,27 @@ export const servedHidden = async (
 };
 
 /**
- * What lies there for this replay alone.
+ * What may lie there for this replay alone, by whichever version of the box: a worker that was killed leaves what
+ * no row names.
  * @param replay with its rep loaded
  */
-export const hiddenFilesOf = ({ id, practiceId, rep, hiddenHead }: Replay): string[] => {
-  if (!hiddenHead) return [];
+export const hiddenFilesOf = async (
+  em: EntityManager,
+  { id, practiceId, rep, hideHead }: Replay,
+): Promise<string[]> => {
+  if (!hideHead) return [];
   const { clip } = rep.unwrap() as Rep;
-  return Object.values(hiddenFiles(practiceId, clip.id, id, hiddenHead.id));
+  const heads = await em.find(Head, { clip: clip.id }, { fields: ['id'] });
+  return heads.flatMap((head) => Object.values(hiddenFiles(practiceId, clip.id, id, head.id)));
+};
+
+/** Asks for the copy, as if it had never been tried. */
+export const askForCopy = async (
+  unit: { readonly em: EntityManager },
+  replay: Replay,
+): Promise<void> => {
+  unit.em.assign(replay, { hideTries: 0, hideFailed: false });
+  await enqueue(unit, HIDE_HEAD, { replayId: replay.id });
 };
 
 /** Makes the copies of a clip's replays anew, after somebody looked at another box. */
@@ -101,5 +128,5 @@ export const hiddenReplaysAreStale = async (
     revokedAt: null,
     expiresAt: { $gt: new Date() },
   });
-  for (const { id } of replays) await enqueue(unit, HIDE_HEAD, { replayId: id });
+  for (const replay of replays) await askForCopy(unit, replay);
 };

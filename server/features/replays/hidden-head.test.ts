@@ -1,4 +1,4 @@
-import { mkdtemp, rm } from 'node:fs/promises';
+import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
@@ -11,6 +11,8 @@ import { clipFiles, clipPrefix, hiddenFiles } from '../clips/clip-files.ts';
 import { Head } from '../heads/head.entity.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
 import { hideHeadJob } from './jobs/hide-head.ts';
+import { MOST_TRIES } from './jobs/hide-head-tries.ts';
+import { removeHiddenJob } from './jobs/remove-hidden.ts';
 import { Replay } from './replay.entity.ts';
 
 // real tools at low priority beside whatever else the machine does
@@ -38,13 +40,33 @@ const newReplay = async () => {
 };
 const media = (token: string, which: 'video' | 'poster') =>
   api.nobody.get(`/api/r/${token}/${which}`);
-const work = (replayId: string) =>
-  hideHeadJob.run({
-    ground: api.ground,
-    practiceId: api.world.practiceId,
-    payload: { replayId },
-    signal: new AbortController().signal,
-  });
+const contextOf = (replayId: string, signal = new AbortController().signal) => ({
+  ground: api.ground,
+  practiceId: api.world.practiceId,
+  payload: { replayId },
+  signal,
+});
+const work = (replayId: string) => hideHeadJob.run(contextOf(replayId));
+const change = (id: string, to: object) =>
+  api.ground.inPractice(api.world.coach, ({ em }) => em.nativeUpdate(Replay, { id }, to));
+const rowOf = async (id: string) => {
+  const { body } = await coach.get(`/api/replays?visitId=${made.visitId}`).expect(200);
+  return body.items.find((row: { id: string }) => row.id === id);
+};
+const headBy = async (token: string) =>
+  (await api.nobody.get(`/api/r/${token}/film`).expect(200)).body;
+/** What the queue would be given at the start of a worker. */
+const waiting = async (sql: string | undefined): Promise<string[]> => {
+  const { Client } = await import('pg');
+  const client = new Client({ connectionString: api.ground.config.database.jobs });
+  await client.connect();
+  try {
+    const { rows } = await client.query<{ replay_id: string }>(sql ?? '');
+    return rows.map((row) => row.replay_id);
+  } finally {
+    await client.end();
+  }
+};
 const keysBy = (replayId: string, version: number) =>
   api.ground.inPractice(api.world.coach, async ({ em }) => {
     const { id } = await em.findOneOrFail(Head, { clip: clipId, version });
@@ -158,9 +180,7 @@ describe('a replay that promises a hidden head', () => {
     await drawHead(2);
     await media(token, 'video').expect(409);
     await media(token, 'poster').expect(409);
-    const listed = await coach.get(`/api/replays?visitId=${made.visitId}`);
-    const state = listed.body.items.find((row: { id: string }) => row.id === id).head;
-    expect(state).toBe('to-be-looked-at');
+    expect((await rowOf(id)).head).toBe('to-be-looked-at');
     // a copy is not made by a box that nobody has looked at
     await work(id);
     await media(token, 'video').expect(409);
@@ -188,23 +208,99 @@ describe('a replay that promises a hidden head', () => {
 
   it('is taken up again by a worker that starts, as long as its copy is missing', async () => {
     const { id } = await newReplay();
-    const { Client } = await import('pg');
-    const client = new Client({ connectionString: api.ground.config.database.jobs });
-    await client.connect();
-    const waiting = async () =>
-      (await client.query<{ replay_id: string }>('select replay_id from heads_to_hide()')).rows.map(
-        (row) => row.replay_id,
-      );
-    expect(await waiting()).toContain(id);
+    const missing = () => waiting(hideHeadJob.unfinished?.sql);
+    expect(await missing()).toContain(id);
     await work(id);
-    expect(await waiting()).not.toContain(id);
-    await client.end();
+    expect(await missing()).not.toContain(id);
+  });
+
+  it('says so where its copy cannot be made, until a person asks for it again', async () => {
+    const { id, token } = await newReplay();
+    const { storage } = api.ground;
+    const { bench } = clipFiles(api.world.practiceId, clipId);
+    const kept = join(folder, 'bench.mp4');
+    await writeFile(kept, await storage.read(bench));
+    await storage.delete(bench);
+    for (let nth = 1; nth < MOST_TRIES; nth += 1) {
+      await expect(work(id)).rejects.toThrow();
+      expect(await headBy(token)).toEqual({ head: 'being-prepared' });
+    }
+    await work(id);
+    expect(await headBy(token)).toEqual({ head: 'failed' });
+    expect(await rowOf(id)).toMatchObject({ head: 'failed', state: 'live' });
+    expect(await waiting(hideHeadJob.unfinished?.sql)).not.toContain(id);
+    await media(token, 'video').expect(409);
+    // the file comes back; nothing is tried until somebody asks
+    await storage.putFile(bench, kept, 'video/mp4');
+    await work(id);
+    expect((await rowOf(id)).head).toBe('failed');
+    const before = (await queued()).length;
+    const { body } = await coach.post(`/api/replays/${id}/hide-head`).expect(200);
+    expect(body).toMatchObject({ id, head: 'being-prepared' });
+    await coach.post(`/api/replays/${id}/hide-head`).expect(200);
+    expect((await queued()).length).toBe(before + 1);
+    await work(id);
+    expect(await headBy(token)).toEqual({ head: 'hidden' });
+    await media(token, 'video').expect(200);
+  });
+
+  it('gives up on a copy that took every worker along, not on one that a stop cut short', async () => {
+    const { id } = await newReplay();
+    await expect(hideHeadJob.run(contextOf(id, AbortSignal.abort()))).rejects.toThrow();
+    const triesOf = () =>
+      api.ground.inPractice(api.world.coach, ({ em }) => em.findOneOrFail(Replay, { id }));
+    expect((await triesOf()).hideTries).toBe(0);
+    await change(id, { hideTries: MOST_TRIES });
+    await work(id);
+    expect((await rowOf(id)).head).toBe('failed');
+    // another box is another chance
+    await drawHead(3);
+    await look(4);
+    expect((await rowOf(id)).head).toBe('being-prepared');
+  });
+
+  it('loses its copy once it has lapsed or was ended, and keeps it until then', async () => {
+    const { storage } = api.ground;
+    const remove = (id: string) => removeHiddenJob.run(contextOf(id));
+    const ended = () => waiting(removeHiddenJob.unfinished?.sql);
+    for (const end of [{ expiresAt: new Date(Date.now() - 1000) }, { revokedAt: new Date() }]) {
+      const { id, token } = await newReplay();
+      await work(id);
+      const keys = await keysBy(id, 4);
+      await remove(id);
+      await media(token, 'video').expect(200);
+      expect(await ended()).not.toContain(id);
+      await change(id, end);
+      await media(token, 'video').expect(404);
+      expect(await storage.exists(keys.replay)).toBe(true);
+      expect(await ended()).toContain(id);
+      await remove(id);
+      expect(await storage.exists(keys.replay)).toBe(false);
+      expect(await storage.exists(keys.poster)).toBe(false);
+      expect(await ended()).not.toContain(id);
+      // a copy that was still being made is not kept either
+      await work(id);
+      expect(await storage.exists(keys.replay)).toBe(false);
+    }
+  });
+
+  it('has its end put down as a job when it is made', async () => {
+    const { id } = await newReplay();
+    const rows = await api.ground.inPractice(api.world.coach, ({ em }) =>
+      em.execute<{ start_after: string; expires_at: string }[]>(
+        `select o.start_after, r.expires_at from job_outbox o join replay r on r.id = ?
+         where o.queue = 'remove-hidden' and o.payload ->> 'replayId' = r.id::text`,
+        [id],
+      ),
+    );
+    expect(rows).toHaveLength(1);
+    expect(new Date(rows[0]?.start_after ?? NaN)).toEqual(new Date(rows[0]?.expires_at ?? NaN));
   });
 
   it('goes with its clip, files and all', async () => {
     const { id, token } = await newReplay();
     await work(id);
-    const keys = await keysBy(id, 3);
+    const keys = await keysBy(id, 4);
     expect(keys.replay.startsWith(clipPrefix(api.world.practiceId, clipId))).toBe(true);
     await coach.delete(`/api/clips/${clipId}`).expect(204);
     await media(token, 'video').expect(404);

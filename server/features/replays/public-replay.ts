@@ -20,7 +20,7 @@ import type { Reading } from '../readings/reading.entity.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { storedReps } from '../reps/stored-reps.ts';
-import { headStateOf, servedHidden } from './hidden-copies.ts';
+import { publicHeadState, servedHidden } from './hidden-copies.ts';
 import { Replay } from './replay.entity.ts';
 import { spanOf } from './span.ts';
 
@@ -54,6 +54,12 @@ export const mediaOfLink = async (unit: Of, which: 'replay' | 'poster'): Promise
   const files = await servedHidden(unit.em, replay, clip);
   if (!files) throw new Problem('clip-not-ready', 'The film is being prepared.');
   return files[which];
+};
+
+/** Whether there is a film to play; opens nothing and is not counted. */
+export const filmOfLink = async (unit: Of): Promise<Pick<PublicReplay, 'head'>> => {
+  const { replay, clip } = await replayOfLink(unit);
+  return { head: await publicHeadState(unit.em, replay, clip) };
 };
 
 /** Reps whose own change goes the way of the reading. */
@@ -142,8 +148,7 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
   // the clip's other reps too: it may take the quiet stance of one
   const reps = await storedReps(em, [clip], athlete);
   const stored = found(reps.find((each) => each.rep.id === rep.id));
-  const state = await headStateOf(em, replay, clip);
-  const head = state === 'to-be-looked-at' ? 'being-prepared' : state;
+  const head = await publicHeadState(em, replay, clip);
   const span = { from: replay.fromFrame, to: replay.toFrame };
   const shown = spanOf(stored, span, { figures: replay.showReading, gates });
   await em.execute(

@@ -23,6 +23,10 @@ export const Replay = defineEntity({
     hideHead: p.boolean().default(false),
     /** The version of the box that the copy which lies there was made by; null: there is none. */
     hiddenHead: p.manyToOne(Head).ref().nullable(),
+    /** How often making that copy was begun since a person last asked for it. */
+    hideTries: p.integer().default(0),
+    /** It was given up; a person can ask again. */
+    hideFailed: p.boolean().default(false),
     message: p.text(),
     /** SHA-256 of the token, hex. */
     tokenHash: p.text().unique(),

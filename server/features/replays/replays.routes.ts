@@ -7,9 +7,16 @@ import { passwordFits } from '../accounts/password.ts';
 import { sendStored } from '../clips/send-stored.ts';
 import { liveLink, needUnlocked, unlock } from './link.ts';
 import { hiddenFilesOf } from './hidden-copies.ts';
-import { mediaOfLink, openReplay } from './public-replay.ts';
+import { filmOfLink, mediaOfLink, openReplay } from './public-replay.ts';
 import { presentReplay } from './replays.presenter.ts';
-import { hashOf, headOfLink, listReplays, makeReplay, revokeReplay } from './replays.service.ts';
+import {
+  hashOf,
+  headOfLink,
+  hideHeadAgain,
+  listReplays,
+  makeReplay,
+  revokeReplay,
+} from './replays.service.ts';
 
 const MEDIA = {
   replayVideo: ['replay', 'video/mp4'],
@@ -42,11 +49,15 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
   serve(routes.revokeReplay, async ({ params, work }) => {
     const { ended, files } = await work(async (unit) => {
       const replay = await revokeReplay(unit, params.id);
-      return { ended: await presented(unit, replay), files: hiddenFilesOf(replay) };
+      return { ended: await presented(unit, replay), files: await hiddenFilesOf(unit.em, replay) };
     });
     for (const key of files) await storage.delete(key);
     return ended;
   });
+
+  serve(routes.hideHeadAgain, ({ params, work }) =>
+    work(async (unit) => presented(unit, await hideHeadAgain(unit, params.id))),
+  );
 
   /** The link's actor, where it is live and unlocked on this device. */
   const actorOf = async (req: Request, token: string) => {
@@ -69,6 +80,10 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
       unlock(res, params.token, passPhraseHash, config.publicUrl.startsWith('https:'));
     },
     ...passPhraseLimits(),
+  );
+
+  serve(routes.replayFilm, async ({ params, req }) =>
+    inPractice(await actorOf(req, params.token), filmOfLink),
   );
 
   for (const name of ['replayVideo', 'replayPoster'] as const) {

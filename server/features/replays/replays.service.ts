@@ -16,8 +16,8 @@ import { audit } from '../practice/audit.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { visitInSight } from '../visits/visit-in-sight.ts';
-import { headStateOf, needHiddenHead } from './hidden-copies.ts';
-import { HIDE_HEAD } from './jobs/hide-head-type.ts';
+import { askForCopy, hasEnded, headStateOf, needHiddenHead } from './hidden-copies.ts';
+import { REMOVE_HIDDEN } from './jobs/remove-hidden-type.ts';
 import { newToken } from './link.ts';
 import { Replay } from './replay.entity.ts';
 
@@ -85,7 +85,11 @@ export const makeReplay = async (
     by: await em.findOneOrFail(User, { id: actor.id }),
   });
   audit(unit, 'replay.make', replay.id, { visit: visit.id, side: body.side });
-  if (body.hideHead) await enqueue(unit, HIDE_HEAD, { replayId: replay.id });
+  if (body.hideHead) {
+    await askForCopy(unit, replay);
+    const { id: replayId, expiresAt } = replay;
+    await enqueue(unit, REMOVE_HIDDEN, { replayId }, { startAfter: expiresAt });
+  }
   await em.flush();
   return { replay, token };
 };
@@ -97,20 +101,40 @@ export const makeReplay = async (
 export const headOfLink = ({ em }: Of, replay: Replay) =>
   headStateOf(em, replay, (replay.rep.unwrap() as Rep).clip.unwrap());
 
-/** Kills a link at once; doing it twice is fine. */
-export const revokeReplay = async (unit: Of, id: string): Promise<Replay> => {
+/** The link of this id, for a coach who may act on it. */
+const linkInSight = async (
+  { em, actor }: Of,
+  id: string,
+  action: 'replay.make' | 'replay.revoke',
+) => {
   const replay = found(
-    await unit.em.findOne(
+    await em.findOne(
       Replay,
       { id },
       { populate: ['visit.athlete', 'by', 'passPhraseHash', 'rep.clip'] },
     ),
   );
-  needCaseload(unit.actor, 'replay.revoke', replay.visit.unwrap().athlete.unwrap());
+  needCaseload(actor, action, replay.visit.unwrap().athlete.unwrap());
+  return replay;
+};
+
+/** Kills a link at once; doing it twice is fine. */
+export const revokeReplay = async (unit: Of, id: string): Promise<Replay> => {
+  const replay = await linkInSight(unit, id, 'replay.revoke');
   if (!replay.revokedAt) {
     replay.revokedAt = new Date();
     audit(unit, 'replay.revoke', id);
+    if (replay.hideHead) await enqueue(unit, REMOVE_HIDDEN, { replayId: id });
   }
+  await unit.em.flush();
+  return replay;
+};
+
+/** Makes the copy with the hidden head again where that was given up; doing it twice is fine. */
+export const hideHeadAgain = async (unit: Of, id: string): Promise<Replay> => {
+  const replay = await linkInSight(unit, id, 'replay.make');
+  if (!hasEnded(replay) && (await headOfLink(unit, replay)) === 'failed')
+    await askForCopy(unit, replay);
   await unit.em.flush();
   return replay;
 };

@@ -2,7 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router-dom';
 import type { Athlete } from '#shared/contracts/athletes.ts';
 import { athleteLinksOptions, athleteVisitsOptions } from '#src/api/athletes.queries.ts';
-import { useEndLink } from '#src/api/use-end-link.ts';
+import { useLinkActs } from '#src/api/use-link-acts.ts';
 import { useMay } from '#src/api/use-may.ts';
 import { shortDay } from '#src/ui/days.ts';
 import { Section } from '#src/ui/page.tsx';
@@ -15,7 +15,7 @@ export function LinksSection({ athlete }: { athlete: Athlete }) {
   const links = useQuery(athleteLinksOptions(athlete.id));
   const visits = useQuery(athleteVisitsOptions(athlete.id));
   const may = useMay(athlete.coach.id);
-  const end = useEndLink();
+  const { end, hideAgain } = useLinkActs();
   const shared = athlete.consentedTo.includes('sharing-by-link');
   const open = links.data?.items.some(({ state }) => state === 'live') ?? false;
   return (
@@ -59,6 +59,7 @@ export function LinksSection({ athlete }: { athlete: Athlete }) {
             );
           }}
           onEnd={may('replay.revoke') ? end : undefined}
+          onHideAgain={may('replay.make') ? hideAgain : undefined}
         />
       )}
     </Section>

@@ -50,23 +50,20 @@ export const openReplay = async (token: string, signal?: AbortSignal): Promise<O
   return isReplay(value) ? { is: 'open', replay: value } : { is: 'broken' };
 };
 
-/**
- * False once the link opens nothing any more. Asks for one byte of the film, past every cache: the same that the
- * player would ask for next. Throws only where `signal` says stop.
- */
-export const asksStillLive = async (token: string, signal: AbortSignal): Promise<boolean> => {
-  const response = await ask(videoAddress(token), { signal, headers: { range: 'bytes=0-0' } });
-  if (response === 'offline') return true;
-  await response.body?.cancel();
-  return response.status !== 404;
-};
+/** How a link stands that was open: what of its film there is, `gone`, or null where nobody could be asked. */
+export type FilmState = PublicReplay['head'] | 'gone' | null;
 
-/** Whether there is a film to play. Throws only where `signal` says stop. */
-export const filmIsThere = async (token: string, signal: AbortSignal): Promise<boolean> => {
-  const response = await ask(videoAddress(token), { signal, headers: { range: 'bytes=0-0' } });
-  if (response === 'offline') return false;
-  await response.body?.cancel();
-  return response.ok;
+const isFilm = (value: unknown): value is Pick<PublicReplay, 'head'> =>
+  typeof value === 'object' && value !== null && 'head' in value;
+
+/** Asked past every cache. Throws only where `signal` says stop. */
+export const filmState = async (token: string, signal: AbortSignal): Promise<FilmState> => {
+  const response = await ask(`/api/r/${token}/film`, { signal });
+  if (response === 'offline') return null;
+  if (!response.ok) return response.status === 404 ? 'gone' : null;
+  const value: unknown = await response.json().catch(() => null);
+  if (signal.aborted) throw signal.reason;
+  return isFilm(value) ? value.head : null;
 };
 
 export const unlockReplay = async (token: string, passPhrase: string): Promise<Unlocking> => {

@@ -3,7 +3,7 @@ import userEvent from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { aPublicReplay, replayToken } from '#tests/support/public-replay.ts';
-import { ASK_FILM_EVERY } from './being-prepared.tsx';
+import { ASK_FILM_EVERY } from './no-film-yet.tsx';
 import { tokenOf } from './replay-api.ts';
 import { ReplayApp } from './replay-app.tsx';
 import { ASK_EVERY } from './use-still-live.ts';
@@ -84,21 +84,26 @@ describe('a replay', () => {
     let head: PublicReplay['head'] = 'being-prepared';
     const asked = server({
       [OPEN]: () => Response.json(aPublicReplay({ head })),
-      [`${OPEN}/video`]: () => new Response(null, { status: head === 'hidden' ? 206 : 409 }),
+      [`${OPEN}/film`]: () => Response.json({ head }),
     });
     render(<ReplayApp token={replayToken} />);
     expect(await screen.findByText('The film is being prepared.')).toBeVisible();
     expect(screen.queryByLabelText(/^Your lift/)).toBeNull();
     expect(screen.getByText(/clothes, room, tattoos and the way of moving/)).toBeVisible();
     vi.advanceTimersByTime(ASK_FILM_EVERY);
-    await waitFor(() => expect(asked).toContain(`${OPEN}/video`));
+    await waitFor(() => expect(asked).toContain(`${OPEN}/film`));
     expect(screen.getByText('The film is being prepared.')).toBeVisible();
+    head = 'failed';
+    vi.advanceTimersByTime(ASK_FILM_EVERY);
+    expect(await screen.findByText('The film is not here yet.')).toBeVisible();
+    expect(screen.getByText(/Maren Okafor can see that and make it again/)).toBeVisible();
     head = 'hidden';
     vi.advanceTimersByTime(ASK_FILM_EVERY);
     expect(await screen.findByLabelText(/^Your lift/)).toHaveAttribute(
       'src',
       `/api/r/${replayToken}/video`,
     );
+    expect(asked).not.toContain(`${OPEN}/video`);
     vi.useRealTimers();
   });
 
@@ -146,10 +151,10 @@ describe('a replay', () => {
 });
 
 describe('a link that ends while its page is open', () => {
-  const VIDEO = `GET /api/r/${replayToken}/video`;
-  /** Opens; the film answers as the link stands. */
-  const living = (video: () => Response) =>
-    server({ [OPEN]: () => Response.json(aPublicReplay()), [VIDEO]: video });
+  const FILM = `GET /api/r/${replayToken}/film`;
+  /** Opens; what is asked of the film answers as the link stands. */
+  const living = (film: () => Response) =>
+    server({ [OPEN]: () => Response.json(aPublicReplay()), [FILM]: film });
   const over = () => new Response('{}', { status: 404 });
 
   it('stops and says so as soon as the film is asked for again', async () => {
@@ -165,11 +170,11 @@ describe('a link that ends while its page is open', () => {
   it('is asked now and then, and plays on while it lives or nobody can be asked', async () => {
     vi.useFakeTimers({ shouldAdvanceTime: true });
     try {
-      let answer: () => Response = () => new Response('x', { status: 206 });
+      let answer: () => Response = () => Response.json({ head: 'shown' });
       const asked = living(() => answer());
       render(<ReplayApp token={replayToken} />);
       await heading(/turns out early/);
-      const times = () => asked.filter((path) => path === VIDEO).length;
+      const times = () => asked.filter((path) => path === FILM).length;
       expect(times()).toBe(0);
       await vi.advanceTimersByTimeAsync(ASK_EVERY);
       expect(times()).toBe(1);

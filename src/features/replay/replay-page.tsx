@@ -2,8 +2,8 @@ import { useEffect, useMemo, useRef, useState } from 'react';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { longDay, shortDay } from '#src/ui/days.ts';
 import { frameTimes } from '#src/video/frame-times.ts';
-import { BeingPrepared } from './being-prepared.tsx';
 import { Comments } from './comments.tsx';
+import { NoFilmYet } from './no-film-yet.tsx';
 import { Player } from './player/player.tsx';
 import { useLoop } from './player/use-loop.ts';
 import { Result } from './result.tsx';
@@ -49,8 +49,8 @@ export function ReplayPage({
       </header>
       <main className="tablet:mx-auto tablet:grid tablet:max-w-[1120px] tablet:grid-cols-[minmax(0,460px)_minmax(0,1fr)] tablet:items-start tablet:gap-x-12 tablet:px-8 tablet:pt-8">
         <div ref={film} className="tablet:sticky tablet:top-4">
-          {replay.head === 'being-prepared' ? (
-            <BeingPrepared token={token} onReady={onReady} />
+          {replay.head === 'being-prepared' || replay.head === 'failed' ? (
+            <NoFilmYet token={token} head={replay.head} coach={coachName} onReady={onReady} />
           ) : (
             <Player
               token={token}

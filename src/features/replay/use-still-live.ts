@@ -1,5 +1,5 @@
 import { useEffect, useState } from 'react';
-import { asksStillLive } from './replay-api.ts';
+import { filmState } from './replay-api.ts';
 
 /** How often an open page asks whether its link still lives, ms. */
 export const ASK_EVERY = 15_000;
@@ -21,9 +21,9 @@ export function useStillLive(
     const stop = new AbortController();
     const ask = () => {
       if (document.visibilityState === 'hidden') return;
-      asksStillLive(token, stop.signal).then(
-        (live) => {
-          if (!live) setEnded(true);
+      filmState(token, stop.signal).then(
+        (state) => {
+          if (state === 'gone') setEnded(true);
         },
         (error: unknown) => {
           // left while it was on its way

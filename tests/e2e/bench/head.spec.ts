@@ -17,10 +17,7 @@ test.afterAll(() => coach.dispose());
 test('a box is drawn by keyboard, followed and looked at; then a link hides the head', async ({
   page,
   browser,
-  allowConsole,
 }) => {
-  // the page asks for the film until it is there
-  allowConsole(/409/);
   const { cookies } = await coach.storageState();
   await page.context().addCookies(cookies);
   const rep = await addRep(coach, made.clipId);

@@ -8,9 +8,10 @@ import { hiddenFiles } from '../../clips/clip-files.ts';
 import { lockClip } from '../../clips/jobs/lock-clip.ts';
 import { headTrack } from '../../heads/current-head.ts';
 import type { Rep } from '../../reps/rep.entity.ts';
-import { headOfReplay } from '../hidden-copies.ts';
+import { hasEnded, headOfReplay } from '../hidden-copies.ts';
 import { Replay } from '../replay.entity.ts';
 import { HIDE_HEAD } from './hide-head-type.ts';
+import { beginTry, endedBadly } from './hide-head-tries.ts';
 
 /** The replay and the box to make it by; null where nothing is to be made. */
 const wanted = (ground: Ground, practiceId: string, replayId: string) =>
@@ -20,11 +21,12 @@ const wanted = (ground: Ground, practiceId: string, replayId: string) =>
       { id: replayId },
       { populate: ['rep.clip', 'rep.clip.frames'] },
     );
-    if (!replay?.hideHead || replay.revokedAt) return null;
+    if (!replay?.hideHead || hasEnded(replay)) return null;
     const clip = (replay.rep.unwrap() as Rep).clip.unwrap() as Clip;
     await lockClip(em, clip.id);
     const head = await headOfReplay(em, replay, clip);
-    return head && replay.hiddenHead?.id !== head.id ? { replay, clip, head } : null;
+    if (!head || replay.hiddenHead?.id === head.id) return null;
+    return beginTry(replay) ? { replay, clip, head } : null;
   });
 
 type Wanted = NonNullable<Awaited<ReturnType<typeof wanted>>>;
@@ -53,7 +55,7 @@ const keep = (ground: Ground, { replay: { id, practiceId }, clip, head }: Wanted
   ground.inPractice(product(practiceId), async ({ em }) => {
     await lockClip(em, clip.id);
     const replay = await em.findOne(Replay, { id });
-    if (!replay || replay.revokedAt) return { kept: false, before: null };
+    if (!replay || hasEnded(replay)) return { kept: false, before: null };
     if ((await headOfReplay(em, replay, clip))?.id !== head.id)
       return { kept: false, before: null };
     const before = replay.hiddenHead?.id ?? null;
@@ -61,22 +63,15 @@ const keep = (ground: Ground, { replay: { id, practiceId }, clip, head }: Wanted
     return { kept: true, before };
   });
 
-/** Killed at any instant it leaves at most a file that no row names; run again it makes the copy anew. */
-const run = async ({
-  ground,
-  practiceId,
-  payload: { replayId },
-  signal,
-}: JobContext<{ replayId: string }>): Promise<void> => {
+/** Makes the copy and puts it where it is served from. */
+const make = async (
+  ground: Ground,
+  asked: Wanted,
+  filesBy: (headId: string) => ReturnType<typeof hiddenFiles>,
+  signal: AbortSignal,
+): Promise<void> => {
   const { storage } = ground;
-  const asked = await wanted(ground, practiceId, replayId);
-  if (!asked) return;
   const { bench, ...request } = requestOf(asked);
-  const filesBy = (headId: string) => hiddenFiles(practiceId, asked.clip.id, replayId, headId);
-  const remove = async ({ replay, poster }: ReturnType<typeof filesBy>) => {
-    await storage.delete(replay);
-    await storage.delete(poster);
-  };
   const files = filesBy(asked.head.id);
   await storage.withTempDir(async (folder) => {
     const made = await storage.withLocalFile(bench, (benchCopy) =>
@@ -86,8 +81,33 @@ const run = async ({
     await storage.putFile(files.poster, made.poster, 'image/jpeg');
   });
   const { kept, before } = await keep(ground, asked);
-  if (!kept) await remove(files);
-  else if (before !== null) await remove(filesBy(before));
+  const old = kept ? before : asked.head.id;
+  if (old === null) return;
+  for (const key of Object.values(filesBy(old))) await storage.delete(key);
+};
+
+/**
+ * Killed at any instant it leaves at most a file that no row names; run again it makes the copy anew. What fails
+ * again and again is given up, and the link says so.
+ */
+const run = async ({
+  ground,
+  practiceId,
+  payload: { replayId },
+  signal,
+}: JobContext<{ replayId: string }>): Promise<void> => {
+  const asked = await wanted(ground, practiceId, replayId);
+  if (!asked) return;
+  const filesBy = (headId: string) => hiddenFiles(practiceId, asked.clip.id, replayId, headId);
+  try {
+    await make(ground, asked, filesBy, signal);
+  } catch (error) {
+    if (await endedBadly(ground, asked.replay, signal)) {
+      ground.log.error({ err: error, replayId }, 'a head could not be hidden');
+      return;
+    }
+    throw error;
+  }
 };
 
 export const hideHeadJob = handles({

@@ -4,7 +4,7 @@ import type { SidePage } from '#shared/contracts/readings.ts';
 import type { Replay } from '#shared/contracts/replays.ts';
 import { athleteOptions } from '#src/api/athletes.queries.ts';
 import { replaysOptions } from '#src/api/readings.queries.ts';
-import { useEndLink } from '#src/api/use-end-link.ts';
+import { useLinkActs } from '#src/api/use-link-acts.ts';
 import { useMay } from '#src/api/use-may.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
 import { Section } from '#src/ui/page.tsx';
@@ -25,7 +25,7 @@ export function ReplaySection({ page }: { page: SidePage }) {
   const own = links.data?.items.filter((link) => link.side === side) ?? [];
   const failed = [person, links].find(({ isError, data }) => isError && !data);
   const may = useMay(person.data?.coach.id);
-  const endLink = useEndLink();
+  const { end, hideAgain } = useLinkActs();
   const nameOf = ({ repId }: Replay) => {
     const rep = reps.find((named) => named.rep.id === repId)?.rep;
     return rep ? `rep ${rep.number}, ` : '';
@@ -79,7 +79,8 @@ export function ReplaySection({ page }: { page: SidePage }) {
               <ReplayLinks
                 links={own}
                 nameOf={nameOf}
-                onEnd={may('replay.revoke') ? endLink : undefined}
+                onEnd={may('replay.revoke') ? end : undefined}
+                onHideAgain={may('replay.make') ? hideAgain : undefined}
               />
             </div>
           )}

@@ -38,6 +38,7 @@ const WITHOUT_ID: Record<RouteNameWithoutId, Kind> = {
   makeReplay: 'asks',
   openReplay: 'link',
   unlockReplay: 'link',
+  replayFilm: 'link',
   replayVideo: 'link',
   replayPoster: 'link',
   events: 'bare',
