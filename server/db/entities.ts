@@ -10,7 +10,7 @@ import { Comment } from '../features/comments/comment.entity.ts';
 import { Head } from '../features/heads/head.entity.ts';
 import { MarkCommand } from '../features/marks/mark-command.entity.ts';
 import { Mark } from '../features/marks/mark.entity.ts';
-import { AuditEntry } from '../features/practice/audit-entry.entity.ts';
+import { AuditEntry } from '../features/audit/audit-entry.entity.ts';
 import { Practice } from '../features/practice/practice.entity.ts';
 import { ProtocolVersion } from '../features/protocol/protocol-version.entity.ts';
 import { Reading } from '../features/readings/reading.entity.ts';

@@ -13,6 +13,7 @@ import { Migration20261201194000_protocol } from '../../migrations/Migration2026
 import { Migration20261201235500_heads } from '../../migrations/Migration20261201235500_heads.ts';
 import { Migration20261202001000_prepared_seconds } from '../../migrations/Migration20261202001000_prepared_seconds.ts';
 import { Migration20261202033000_hidden_copies } from '../../migrations/Migration20261202033000_hidden_copies.ts';
+import { Migration20261202034100_audit_trail } from '../../migrations/Migration20261202034100_audit_trail.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -62,6 +63,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202033000_hidden_copies',
     class: Migration20261202033000_hidden_copies,
+  },
+  {
+    name: 'Migration20261202034100_audit_trail',
+    class: Migration20261202034100_audit_trail,
   },
 ];
 

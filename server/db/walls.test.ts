@@ -1,9 +1,10 @@
+import { Client } from 'pg';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { asAdmin } from '#tests/support/admin.ts';
 import { Athlete } from '../features/athletes/athlete.entity.ts';
 import { Visit } from '../features/visits/visit.entity.ts';
-import { AuditEntry } from '../features/practice/audit-entry.entity.ts';
+import { AuditEntry } from '../features/audit/audit-entry.entity.ts';
 import { PRACTICE_FILTER } from './columns.ts';
 import { product } from './in-practice.ts';
 
@@ -118,26 +119,41 @@ describe('the audit trail', () => {
     return made.id;
   };
 
-  it('is neither changed nor deleted by the product', async () => {
-    const id = await entry();
-    for (const sql of [
-      `update audit_entry set action = 'x' where id = ?`,
-      `delete from audit_entry where id = ?`,
-    ]) {
+  const CHANGES = [
+    `update audit_entry set action = 'x'`,
+    `update audit_entry set action = 'x' where false`,
+    'delete from audit_entry',
+    'truncate audit_entry',
+    'truncate practice cascade',
+  ];
+
+  it('is neither changed, deleted nor emptied by the product', async () => {
+    await entry();
+    for (const sql of CHANGES) {
       await expect(
-        api.ground.inPractice(product(api.world.practiceId), ({ em }) => em.execute(sql, [id])),
+        api.ground.inPractice(product(api.world.practiceId), ({ em }) => em.execute(sql)),
       ).rejects.toThrow(/permission denied/);
     }
   });
 
-  it('is neither changed, deleted nor emptied by the superuser', async () => {
+  it.each([
+    ['jobs', /permission denied/],
+    ['owner', /only added to/],
+  ] as const)('nor by the role for %s', async (role, refusal) => {
+    await entry();
+    const client = new Client({ connectionString: api.ground.config.database[role] });
+    await client.connect();
+    try {
+      for (const sql of CHANGES) await expect(client.query(sql)).rejects.toThrow(refusal);
+    } finally {
+      await client.end();
+    }
+  });
+
+  it('nor by the superuser', async () => {
     await entry();
     const database = new URL(api.ground.config.database.app).pathname.slice(1);
-    for (const sql of [
-      `update audit_entry set action = 'x'`,
-      'delete from audit_entry',
-      'truncate audit_entry',
-    ]) {
+    for (const sql of CHANGES) {
       await expect(asAdmin((client) => client.query(sql), database)).rejects.toThrow(
         /only added to/,
       );

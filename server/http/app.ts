@@ -1,7 +1,9 @@
 import express, { type Express, Router } from 'express';
 import type { Route } from '#shared/contracts/route.ts';
+import { noteRefusals } from '../features/audit/refusals.ts';
 import type { Feature } from '../main/feature.ts';
 import type { Ground } from '../main/ground.ts';
+import { rememberAsker } from './asker.ts';
 import { logRequests } from './logging.ts';
 import { servePages } from './pages.ts';
 import { Problem } from './problem.ts';
@@ -30,7 +32,7 @@ export const makeApp = (
   app.disable('x-powered-by');
   app.disable('etag');
   app.set('trust proxy', config.trustProxy);
-  app.use(requestIds);
+  app.use(requestIds, rememberAsker);
   app.use(logRequests(log, (res) => String(res.getHeader('X-Request-Id'))));
   app.use((_req, res, next) => {
     if (!isClosing?.()) return next();
@@ -47,6 +49,7 @@ export const makeApp = (
     whoIs: sessions.whoIs,
     checkAnswers: config.environment === 'test' || config.environment === 'development',
     ...(onRoute ? { onRoute } : {}),
+    onRefusal: noteRefusals(ground),
   });
   for (const feature of features) feature({ serve, router, ground });
   app.use(router);

@@ -4,6 +4,7 @@ import type { UserActor } from '#shared/access/actors.ts';
 import type { Route } from '#shared/contracts/route.ts';
 import type { InPractice, Unit } from '../db/in-practice.ts';
 import { checkAnswer } from './check-answer.ts';
+import { Refusal } from './need.ts';
 import { parseParams, parseParts } from './parse.ts';
 import { Problem } from './problem.ts';
 import type { OpenSession } from './session.ts';
@@ -54,12 +55,33 @@ export interface ServeOptions {
   readonly checkAnswers: boolean;
   /** Told of every route that is served. */
   readonly onRoute?: (route: Route) => void;
+  /** Told of what somebody asked for that is not theirs, with the id in the address. */
+  readonly onRefusal?: (actor: UserActor, refusal: Refusal, id: string | null) => Promise<void>;
 }
 
 /** Makes the helper by which a feature serves a route of the contracts: who asks, parse, handle, answer. */
-export const makeServe =
-  ({ router, inPractice, whoIs, checkAnswers, onRoute }: ServeOptions): Serve =>
-  (route, handler, ...before) => {
+export const makeServe = ({
+  router,
+  inPractice,
+  whoIs,
+  checkAnswers,
+  onRoute,
+  onRefusal,
+}: ServeOptions): Serve => {
+  /** Passes a refusal on after it was told. */
+  const handled = async <T>(
+    handle: () => T,
+    { actor }: Partial<StaffPart>,
+    params: unknown,
+  ): Promise<Awaited<T>> => {
+    try {
+      return await handle();
+    } catch (error) {
+      if (error instanceof Refusal && actor) await onRefusal?.(actor, error, idOf(params));
+      throw error;
+    }
+  };
+  return (route, handler, ...before) => {
     onRoute?.(route);
     const steps: RequestHandler[] = [];
     if (route.audience === 'staff') steps.push(whoIs);
@@ -76,9 +98,8 @@ export const makeServe =
         },
       ]);
       const staff = route.audience === 'staff' ? staffPart(res, inPractice) : {};
-      const answer = await handler({ params, query, body, req, res, ...staff } as Asked<
-        typeof route
-      >);
+      const asked = { params, query, body, req, res, ...staff } as Asked<typeof route>;
+      const answer = await handled(() => handler(asked), staff, params);
       if (route.answer.kind === 'json') {
         if (checkAnswers) checkAnswer(route, answer);
         res.status(route.status).json(answer);
@@ -86,6 +107,13 @@ export const makeServe =
     });
     router[route.method](route.path, ...steps);
   };
+};
+
+/** Of the thing that a path names; null where it names none. */
+const idOf = (params: unknown): string | null => {
+  const { id } = params as { readonly id?: unknown };
+  return typeof id === 'string' ? id : null;
+};
 
 /** No body at all is a fault of fields, not of content. */
 const jsonOnly: RequestHandler = (req, _res, next) => {

@@ -4,6 +4,7 @@ import type { Request, RequestHandler, Response } from 'express';
 import jwt from 'jsonwebtoken';
 import * as z from 'zod';
 import type { Role, UserActor } from '#shared/access/actors.ts';
+import { askerNow } from './asker.ts';
 import { Problem } from './problem.ts';
 
 const COOKIE = 'redshank_session';
@@ -103,6 +104,8 @@ export const keepSessions = (options: {
     if (!named) return null;
     const session = await findById(named.sid);
     // Half of its time is left for the requests that are already under way.
+    const asker = askerNow();
+    if (session && asker) asker.sessionId = session.id;
     if (session && named.exp - Date.now() / 1000 < (TOKEN_MINUTES * 60) / 2)
       setCookie(res, session.id);
     return session;

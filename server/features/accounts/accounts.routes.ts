@@ -2,7 +2,13 @@ import { routes } from '#shared/contracts/routes.ts';
 import { signInLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
 import { presentMe, presentSession } from './accounts.presenter.ts';
-import { endSession, openSessions, signIn, signOutEverywhere } from './accounts.service.ts';
+import {
+  endSession,
+  openSessions,
+  signIn,
+  signOut,
+  signOutEverywhere,
+} from './accounts.service.ts';
 
 export const accountsFeature: Feature = ({ serve, ground }) => {
   const { sessions, inPractice } = ground;
@@ -19,7 +25,7 @@ export const accountsFeature: Feature = ({ serve, ground }) => {
 
   serve(routes.signOut, async ({ req, res }) => {
     const session = await sessions.find(req, res);
-    if (session) await inPractice(session.actor, (unit) => endSession(unit, session.id));
+    if (session) await inPractice(session.actor, (unit) => signOut(unit, session.id));
     sessions.clearCookie(res);
   });
 

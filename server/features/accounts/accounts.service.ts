@@ -5,7 +5,7 @@ import { found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import type { OpenSession } from '../../http/session.ts';
 import type { Ground } from '../../main/ground.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { deviceName } from './device.ts';
 import { passwordFits } from './password.ts';
 import { Session } from './session.entity.ts';
@@ -22,42 +22,63 @@ type SignInRow = { user_id: string; practice_id: string; password_hash: string }
  * @throws Problem 'sign-in-refused'
  */
 export const signIn = async (
-  { orm, inPractice, sessions }: Pick<Ground, 'orm' | 'inPractice' | 'sessions'>,
+  { orm, inPractice, sessions, log }: Pick<Ground, 'orm' | 'inPractice' | 'sessions' | 'log'>,
   { email, password }: { email: string; password: string },
   userAgent: string | undefined,
 ): Promise<OpenSession> => {
   const [row] = await orm.em.fork().execute<SignInRow[]>('select * from find_sign_in(?)', [email]);
   const fits = await passwordFits(password, row?.password_hash);
+  if (row && !fits) {
+    // not waited for: the answer must take as long for an address that nobody has
+    inPractice({ practiceId: row.practice_id }, ({ em }) => {
+      audit({ em, actor: { kind: 'nobody' } }, 'account.sign-in-refused', row.user_id);
+      return Promise.resolve();
+    }).catch((error: unknown) => {
+      log.error({ err: error }, 'a refused sign-in was not written down');
+    });
+  }
   if (!row || !fits) throw new Problem('sign-in-refused');
   const id = await inPractice({ practiceId: row.practice_id }, async ({ em }) => {
+    const user = await em.findOneOrFail(User, { id: row.user_id });
     const session = em.create(Session, {
-      user: em.getReference(User, row.user_id),
+      user,
       device: deviceName(userAgent),
       expiresAt: new Date(Date.now() + SESSION_DAYS * 86_400_000),
     });
-    audit({ em, actor: { kind: 'user', id: row.user_id } }, 'account.sign-in', row.user_id, {
-      session: session.id,
-    });
+    const actor = { kind: 'user', id: user.id, role: user.role } as const;
+    audit({ em, actor }, 'account.sign-in', user.id, { session: session.id });
     await em.flush();
     return session.id;
   });
   return found(await sessions.findById(id));
 };
 
+/** Ends the session that asks. */
+export const signOut = async (unit: Unit<UserActor>, id: string): Promise<void> => {
+  if (await endOwn(unit, id)) audit(unit, 'account.sign-out', unit.actor.id);
+};
+
 /** Ends one session of the actor's own; fine where it has ended already. */
 export const endSession = async (unit: Unit<UserActor>, id: string): Promise<void> => {
+  if (await endOwn(unit, id)) audit(unit, 'session.end', id);
+};
+
+const endOwn = async (unit: Unit<UserActor>, id: string): Promise<boolean> => {
   const ended = await unit.em.nativeUpdate(
     Session,
     { id, user: unit.actor.id, revokedAt: null },
     { revokedAt: new Date() },
   );
   if (ended > 0) await tell(unit, { sessionId: id }, { type: 'signed-out' });
+  return ended > 0;
 };
 
 /** Ends every session of the actor. */
 export const signOutEverywhere = async (unit: Unit<UserActor>): Promise<void> => {
   const { em, actor } = unit;
-  await em.nativeUpdate(Session, { user: actor.id, revokedAt: null }, { revokedAt: new Date() });
+  const open = { user: actor.id, revokedAt: null };
+  const sessions = await em.nativeUpdate(Session, open, { revokedAt: new Date() });
+  audit(unit, 'account.sign-out-everywhere', actor.id, { sessions });
   await tell(unit, { userId: actor.id }, { type: 'signed-out' });
 };
 

@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { product } from '../../db/in-practice.ts';
-import { AuditEntry } from '../practice/audit-entry.entity.ts';
+import { AuditEntry } from '../audit/audit-entry.entity.ts';
 import { TEST_PASSWORD } from './user.factory.ts';
 
 let api: Api;

@@ -5,7 +5,7 @@ import type { athleteBody, athleteEdit } from '#shared/contracts/athletes.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { found, need } from '../../http/need.ts';
 import { User } from '../accounts/user.entity.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { athleteInSight } from './athlete-in-sight.ts';
 import { type AthleteRow, readAthletes } from './athlete-rows.ts';
 import { Athlete } from './athlete.entity.ts';
@@ -29,7 +29,7 @@ export const addAthlete = async (
   const { em, actor } = unit;
   need(actor, 'athlete.add', { kind: 'practice', practiceId: actor.practiceId });
   const athlete = em.create(Athlete, { ...given, coach: em.getReference(User, actor.id) });
-  audit(unit, 'athlete.add', athlete.id);
+  audit(unit, 'athlete.add', athlete.id, { athlete: athlete.id });
   await em.flush();
   return rowOf(unit, athlete.id);
 };
@@ -43,7 +43,7 @@ export const editAthlete = async (
   const athlete = await athleteInSight(unit, id, 'athlete.edit');
   await unit.em.lock(athlete, LockMode.OPTIMISTIC, version);
   unit.em.assign(athlete, changes);
-  audit(unit, 'athlete.edit', id, { fields: Object.keys(changes).sort().join(' ') });
+  audit(unit, 'athlete.edit', id, { athlete: id, fields: Object.keys(changes).sort().join(' ') });
   await unit.em.flush();
   return rowOf(unit, id);
 };

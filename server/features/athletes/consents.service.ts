@@ -5,7 +5,7 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { found, needCaseload } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { athleteInSight } from './athlete-in-sight.ts';
 import type { Athlete } from './athlete.entity.ts';
 import { hasConsent } from './consent-check.ts';

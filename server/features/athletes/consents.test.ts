@@ -3,7 +3,7 @@ import { type Api, startApi } from '#tests/support/api.ts';
 import { product } from '../../db/in-practice.ts';
 import { tokenHash } from '../../http/token-hash.ts';
 import { makeClip } from '../clips/clip.factory.ts';
-import { AuditEntry } from '../practice/audit-entry.entity.ts';
+import { AuditEntry } from '../audit/audit-entry.entity.ts';
 import { Replay } from '../replays/replay.entity.ts';
 import { makeRep } from '../reps/rep.factory.ts';
 import { makeVisit } from '../visits/visit.factory.ts';

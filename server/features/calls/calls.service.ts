@@ -4,7 +4,7 @@ import type { callBody } from '#shared/contracts/calls.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { User } from '../accounts/user.entity.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import { readingIsStale } from '../readings/stale.ts';
@@ -33,7 +33,7 @@ export const recordCall = async (
   given: z.infer<typeof callBody>,
 ): Promise<Call> => {
   const { em, actor } = unit;
-  const { visit } = await visitInSight(unit, visitId, 'call.record');
+  const { visit, athlete } = await visitInSight(unit, visitId, 'call.record');
   const setting = await em.findOne(SideSetting, { visit: visitId, side });
   const { gateFrom, gateTo } = (await currentProtocol(em)).values;
   const call = em.create(Call, {
@@ -46,7 +46,7 @@ export const recordCall = async (
     by: await em.findOneOrFail(User, { id: actor.id }),
     beforeFigures: !setting?.figuresShownAt,
   });
-  audit(unit, 'call.record', call.id, { visit: visitId, side });
+  audit(unit, 'call.record', call.id, { athlete: athlete.id, visit: visitId, side });
   await em.flush();
   await readingIsStale(unit, visitId, side);
   return call;

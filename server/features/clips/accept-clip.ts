@@ -6,7 +6,7 @@ import type { Storage } from '#server/storage/storage.ts';
 import { tell } from '../../events/tell.ts';
 import { enqueue, type JobOrder } from '../../jobs/job.ts';
 import { User } from '../accounts/user.entity.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { Clip } from './clip.entity.ts';
 import { clipFiles, clipPrefix } from './clip-files.ts';
 import { PREPARE_CLIP } from './jobs/prepare-clip-type.ts';
@@ -72,7 +72,11 @@ export const acceptClip = async (
         uploadedBy: em.getReference(User, actor.id),
       });
       await em.nativeDelete(Upload, { id });
-      audit(unit, 'clip.upload', id, { visit: visitId, bytes: file.bytes });
+      audit(unit, 'clip.upload', id, {
+        athlete: athlete.id,
+        visit: visitId,
+        bytes: file.bytes,
+      });
       await enqueue(unit, PREPARE_CLIP, { clipId: id }, order);
       await tell(
         unit,

@@ -5,7 +5,14 @@ import { clipPrefix } from './clip-files.ts';
 import { listClips } from './clip-list.ts';
 import { fullFrame, sheet } from './clip-pictures.ts';
 import { presentClip, presentClipWithFrames } from './clips.presenter.ts';
-import { countReps, deleteClip, editClip, prepareAgain, usePart } from './clips.service.ts';
+import {
+  countReps,
+  deleteClip,
+  editClip,
+  lookAtClip,
+  prepareAgain,
+  usePart,
+} from './clips.service.ts';
 import { Problem } from '../../http/problem.ts';
 import { sendStored } from './send-stored.ts';
 
@@ -49,7 +56,12 @@ export const clipsFeature: Feature = ({ serve, ground: { storage } }) => {
   for (const name of ['clipVideo', 'clipPoster', 'clipStrip'] as const) {
     const [copy, type] = COPIES[name];
     serve(routes[name], async ({ params, work, req, res }) => {
-      const { clip } = await work((unit) => clipInSight(unit, params.id, 'athlete.read'));
+      // posters and strips stand in lists and beside the clip: they are no look at it
+      const clip = await work(async (unit) =>
+        name === 'clipVideo'
+          ? lookAtClip(unit, params.id)
+          : (await clipInSight(unit, params.id, 'athlete.read')).clip,
+      );
       frameCountOf(clip);
       const key = clip.files[copy];
       if (!key) throw new Problem('clip-not-ready');
@@ -62,9 +74,7 @@ export const clipsFeature: Feature = ({ serve, ground: { storage } }) => {
     ['clipSheet', sheet],
   ] as const) {
     serve(routes[name], async ({ params, work, req, res }) => {
-      const { clip } = await work((unit) =>
-        clipInSight(unit, params.id, 'athlete.read', { frames: true }),
-      );
+      const clip = await work((unit) => lookAtClip(unit, params.id, { frames: true }));
       const key = await make(storage, clip, params.index);
       await sendStored(req, res, storage, key, 'image/jpeg');
     });

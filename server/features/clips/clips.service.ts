@@ -7,10 +7,10 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { tell } from '../../events/tell.ts';
 import { Problem } from '../../http/problem.ts';
 import { enqueue } from '../../jobs/job.ts';
-import { audit } from '../practice/audit.ts';
+import { audit, auditOnce } from '../audit/audit.ts';
 import { readingsAreStale } from '../readings/stale.ts';
 import { Rep } from '../reps/rep.entity.ts';
-import { type ClipInSight, clipInSight } from './clip-in-sight.ts';
+import { type ClipInSight, clipInSight, frameCountOf } from './clip-in-sight.ts';
 import { PREPARE_CLIP } from './jobs/prepare-clip-type.ts';
 import type { Clip } from './clip.entity.ts';
 
@@ -52,16 +52,30 @@ export const editClip = async (
     if (stood === null) throw new Problem('support-side-needed');
     clip.cameraStood = stood;
   }
+  const fields = Object.keys(edit).filter((name) => name !== 'version');
+  audit(unit, 'clip.edit', id, { athlete: sight.athlete.id, fields: fields.sort().join(' ') });
   await readingsAreStale(unit, clip.visit.id);
   await unit.em.flush();
   await tellClip(unit, sight);
   return clip;
 };
 
+/** The clip for whoever looks at its pictures; the first look of a session is written down. */
+export const lookAtClip = async (
+  unit: Of,
+  id: string,
+  options: { readonly frames?: boolean } = {},
+): Promise<Clip> => {
+  const { clip, athlete } = await clipInSight(unit, id, 'athlete.read', options);
+  frameCountOf(clip);
+  await auditOnce(unit, 'clip.open', id, { athlete: athlete.id });
+  return clip;
+};
+
 /** Deletes the clip's rows; whoever asked then deletes its files. */
 export const deleteClip = async (unit: Of, id: string): Promise<void> => {
-  const { clip } = await clipInSight(unit, id, 'clip.delete');
-  audit(unit, 'clip.delete', id, { visit: clip.visit.id });
+  const { clip, athlete } = await clipInSight(unit, id, 'clip.delete');
+  audit(unit, 'clip.delete', id, { athlete: athlete.id, visit: clip.visit.id });
   unit.em.remove(clip);
   await readingsAreStale(unit, clip.visit.id);
 };

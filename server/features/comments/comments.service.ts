@@ -8,6 +8,7 @@ import { found, need } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
+import { audit } from '../audit/audit.ts';
 import { clipInSight, needFrames } from '../clips/clip-in-sight.ts';
 import { Comment } from './comment.entity.ts';
 import { COMMENT_ORDER } from './comments.presenter.ts';
@@ -59,6 +60,7 @@ export const addComment = async (
     shared: body.shared,
     by: em.getReference(User, actor.id),
   });
+  audit(unit, 'comment.add', comment.id, { athlete: athlete.id, clip: clipId });
   await em.flush();
   await em.populate(comment, ['by']);
   await tellComments(unit, athlete, clipId);
@@ -74,12 +76,13 @@ const commentInSight = async (
     await em.findOne(Comment, { id }, { populate: ['clip.visit.athlete', 'by', 'resolvedBy'] }),
   );
   const athlete = comment.clip.unwrap().visit.unwrap().athlete.unwrap() as Athlete;
-  need(actor, action, {
+  const resource = {
     kind: 'comment',
     practiceId: comment.practiceId,
     coachId: athlete.coach.id,
     byUserId: comment.by.id,
-  });
+  } as const;
+  need(actor, action, resource, athlete.id);
   return { comment: comment, athlete };
 };
 
@@ -101,9 +104,12 @@ export const editComment = async (
     comment.editedAt = new Date();
   }
   if (shared !== undefined) comment.shared = shared;
+  const about = { athlete: athlete.id, clip: comment.clip.id };
+  if (words) audit(unit, 'comment.edit', id, about);
   if (resolved !== undefined && resolved !== Boolean(comment.resolvedAt)) {
     comment.resolvedBy = resolved ? em.getReference(User, actor.id, { wrapped: true }) : null;
     comment.resolvedAt = resolved ? new Date() : null;
+    audit(unit, 'comment.resolve', id, { ...about, resolved });
   }
   await em.flush();
   await em.populate(comment, ['resolvedBy']);
@@ -117,6 +123,7 @@ export const deleteComment = async (unit: Of, id: string): Promise<void> => {
   const answers = await unit.em.count(Comment, { answerTo: id });
   if (answers > 0)
     throw new Problem('not-allowed', 'Somebody has answered this comment: resolve it instead.');
+  audit(unit, 'comment.delete', id, { athlete: athlete.id, clip: comment.clip.id });
   unit.em.remove(comment);
   await unit.em.flush();
   await tellComments(unit, athlete, comment.clip.id);

@@ -7,7 +7,7 @@ import { Clip } from '../clips/clip.entity.ts';
 import { clipInSight, frameCountOf } from '../clips/clip-in-sight.ts';
 import { Comment } from '../comments/comment.entity.ts';
 import { COMMENT_ORDER } from '../comments/comments.presenter.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
 import { timesOfClip } from '../reps/reps.presenter.ts';
 import { type NumberedRep, storedReps } from '../reps/stored-reps.ts';
@@ -44,26 +44,26 @@ const visitToExport = async (unit: Of, visitId: string) => {
   const { visit, athlete } = await visitInSight(unit, visitId, 'athlete.read');
   const clips = await readyClips(unit.em, visitId);
   const reps = await storedReps(unit.em, clips, athlete);
-  return { day: visit.day, clips, reps };
+  return { athlete, day: visit.day, clips, reps };
 };
 
 const sidesOf = (reps: readonly NumberedRep[]) => new Set(reps.map(({ rep }) => rep.supportSide));
 
 /** @throws Problem 'call-first' until somebody has said what they saw on that side */
 export const framesOfRep = async (unit: Of, repId: string): Promise<ExportedFile> => {
-  const { stored, visitId, day, name } = await repToExport(unit, repId);
+  const { athlete, stored, visitId, day, name } = await repToExport(unit, repId);
   await needCalled(unit.em, visitId, sidesOf([stored]));
-  audit(unit, 'rep.export', repId, { as: 'csv' });
+  audit(unit, 'rep.export', repId, { athlete: athlete.id, as: 'csv' });
   await unit.em.flush();
   return { name: `${name}.csv`, text: framesCsv([stored], day) };
 };
 
 /** @throws Problem 'call-first' until somebody has said what they saw on each side that has marks */
 export const framesOfVisit = async (unit: Of, visitId: string): Promise<ExportedFile> => {
-  const { day, reps } = await visitToExport(unit, visitId);
+  const { athlete, day, reps } = await visitToExport(unit, visitId);
   const marked = reps.filter(({ marks }) => marks.length > 0);
   await needCalled(unit.em, visitId, sidesOf(marked));
-  audit(unit, 'visit.export', visitId, { as: 'csv' });
+  audit(unit, 'visit.export', visitId, { athlete: athlete.id, as: 'csv' });
   await unit.em.flush();
   return { name: `${day}-visit.csv`, text: framesCsv(marked, day) };
 };
@@ -84,7 +84,7 @@ export const annotationsOfRep = async (
   repId: string,
   to: Addresses,
 ): Promise<ExportedFile> => {
-  const { stored, rep, clip, name } = await repToExport(unit, repId);
+  const { athlete, stored, rep, clip, name } = await repToExport(unit, repId);
   const times = timesOfClip(clip);
   const comments = (await commentsOf(unit.em, [clip])).filter(
     ({ fromFrame, toFrame }) => fromFrame <= rep.endFrame && toFrame >= rep.startFrame,
@@ -93,7 +93,7 @@ export const annotationsOfRep = async (
     ...annotatedRep(stored, to),
     ...comments.flatMap((comment) => annotatedComment(comment, times, to)),
   ];
-  audit(unit, 'rep.export', repId, { as: 'web-annotation' });
+  audit(unit, 'rep.export', repId, { athlete: athlete.id, as: 'web-annotation' });
   await unit.em.flush();
   return { name: `${name}.jsonld`, text: jsonLd(repId, `Rep ${stored.number}`, items) };
 };
@@ -104,7 +104,7 @@ export const annotationsOfVisit = async (
   visitId: string,
   to: Addresses,
 ): Promise<ExportedFile> => {
-  const { day, clips, reps } = await visitToExport(unit, visitId);
+  const { athlete, day, clips, reps } = await visitToExport(unit, visitId);
   const comments = await commentsOf(unit.em, clips);
   const items = clips.flatMap((clip) => [
     ...reps.filter(({ rep }) => rep.clip.id === clip.id).flatMap((each) => annotatedRep(each, to)),
@@ -112,14 +112,14 @@ export const annotationsOfVisit = async (
       .filter((comment) => comment.clip.id === clip.id)
       .flatMap((comment) => annotatedComment(comment, timesOfClip(clip), to)),
   ]);
-  audit(unit, 'visit.export', visitId, { as: 'web-annotation' });
+  audit(unit, 'visit.export', visitId, { athlete: athlete.id, as: 'web-annotation' });
   await unit.em.flush();
   return { name: `${day}-visit.jsonld`, text: jsonLd(visitId, `Visit of ${day}`, items) };
 };
 
 /** The comments of a clip as a track that players show. */
 export const commentTrack = async (unit: Of, clipId: string): Promise<ExportedFile> => {
-  const { clip } = await clipInSight(unit, clipId, 'athlete.read', { frames: true });
+  const { clip, athlete } = await clipInSight(unit, clipId, 'athlete.read', { frames: true });
   frameCountOf(clip);
   const times = timesOfClip(clip);
   const cues = (await commentsOf(unit.em, [clip])).flatMap((comment) => {
@@ -127,7 +127,7 @@ export const commentTrack = async (unit: Of, clipId: string): Promise<ExportedFi
     const speaker = comment.by.unwrap().name;
     return span ? [{ id: comment.id, span, speaker, text: comment.body }] : [];
   });
-  audit(unit, 'clip.export', clipId, { as: 'webvtt' });
+  audit(unit, 'clip.export', clipId, { athlete: athlete.id, as: 'webvtt' });
   await unit.em.flush();
   return { name: `${clip.visit.unwrap().day}-comments.vtt`, text: webVtt(cues) };
 };

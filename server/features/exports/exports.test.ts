@@ -3,7 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { goldenClip } from '#tests/support/golden.ts';
 import { markedTrial } from '#tests/support/marked-trial.ts';
-import { AuditEntry } from '../practice/audit-entry.entity.ts';
+import { AuditEntry } from '../audit/audit-entry.entity.ts';
 import { csvText } from './csv.ts';
 
 describe('a CSV file', () => {

@@ -9,7 +9,7 @@ import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { type ClipInSight, clipInSight, needFrames } from '../clips/clip-in-sight.ts';
 import { lockClip } from '../clips/jobs/lock-clip.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { hiddenReplaysAreStale } from '../replays/hidden-copies.ts';
 import { currentHead } from './current-head.ts';
 import { Head } from './head.entity.ts';
@@ -41,7 +41,7 @@ export const saveHead = async (
 ): Promise<HeadPage> => {
   const { em, actor } = unit;
   const sight = await clipInSight(unit, clipId, 'head.save');
-  const { clip } = sight;
+  const { clip, athlete } = sight;
   const frames = [...body.drawn, ...body.followed].map(({ frame }) => frame);
   needFrames(clip, body.fromFrame, body.toFrame, ...frames);
   // two who change it at once change it one after the other
@@ -56,7 +56,11 @@ export const saveHead = async (
     growth: headGrowth(clip.frameRate?.minPerSecond ?? null),
     by: em.getReference(User, actor.id),
   });
-  audit(unit, 'head.save', head.id, { clip: clipId, version: head.version });
+  audit(unit, 'head.save', head.id, {
+    athlete: athlete.id,
+    clip: clipId,
+    version: head.version,
+  });
   await em.flush();
   return pageOf(unit, sight);
 };
@@ -78,7 +82,7 @@ export const lookedAtHead = async (
   if (!head.lookedAt) {
     const lookedBy = await em.findOneOrFail(User, { id: actor.id });
     em.assign(head, { lookedBy, lookedAt: new Date() });
-    audit(unit, 'head.look', head.id, { clip: clipId, version });
+    audit(unit, 'head.look', head.id, { athlete: sight.athlete.id, clip: clipId, version });
     await em.flush();
     await hiddenReplaysAreStale(unit, clipId);
   }

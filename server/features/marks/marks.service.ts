@@ -7,6 +7,7 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { tell } from '../../events/tell.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
+import { auditOnce } from '../audit/audit.ts';
 import { needFrames } from '../clips/clip-in-sight.ts';
 import { readingIsStale } from '../readings/stale.ts';
 import { type RepInSight, repInSight } from '../reps/rep-in-sight.ts';
@@ -83,6 +84,10 @@ export const saveMarks = async (
   await writeMarks(em, actor.practiceId, rows);
   await rememberCommands(unit, repId, outcomes);
   if (rows.length > 0) {
+    await auditOnce(unit, 'rep.mark', repId, {
+      athlete: sight.athlete.id,
+      clip: sight.clip.id,
+    });
     await readingIsStale(unit, sight.clip.visit.id, sight.rep.supportSide);
     await tell(
       unit,

@@ -5,7 +5,7 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { need } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { SetUp } from '../visits/set-up.entity.ts';
 import { currentProtocol } from './current-protocol.ts';
 import { presentProtocol } from './protocol.presenter.ts';

@@ -8,7 +8,7 @@ import { Problem } from '../../http/problem.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { Call } from '../calls/call.entity.ts';
 import { presentCall } from '../calls/calls.presenter.ts';
-import { audit } from '../practice/audit.ts';
+import { audit, auditOnce } from '../audit/audit.ts';
 import { presentProtocolRef } from '../protocol/protocol.presenter.ts';
 import type { NumberedRep } from '../reps/stored-reps.ts';
 import { type VisitInSight, visitInSight } from '../visits/visit-in-sight.ts';
@@ -104,8 +104,12 @@ const pageOf = async (
  * What the reps of one side say together.
  * @throws Problem 'call-first' until somebody has said what they saw on that side
  */
-export const sideReading = async (unit: Of, visitId: string, side: Side): Promise<SidePage> =>
-  pageOf(unit, await visitInSight(unit, visitId, 'athlete.read'), side);
+export const sideReading = async (unit: Of, visitId: string, side: Side): Promise<SidePage> => {
+  const sight = await visitInSight(unit, visitId, 'athlete.read');
+  const page = await pageOf(unit, sight, side);
+  await auditOnce(unit, 'reading.open', visitId, { athlete: sight.athlete.id });
+  return page;
+};
 
 /** Takes the planted thigh as turning little on this side, or stops doing so. */
 export const setAssumption = async (
@@ -117,7 +121,7 @@ export const setAssumption = async (
   const sight = await visitInSight(unit, visitId, 'reading.assume');
   const setting = await sideSetting(unit.em, visitId, side);
   setting.assumption = on;
-  audit(unit, 'reading.assume', visitId, { side, on });
+  audit(unit, 'reading.assume', visitId, { athlete: sight.athlete.id, side, on });
   await unit.em.flush();
   await tell(unit, { coachId: sight.athlete.coach.id }, { type: 'reading', visitId, side });
   return pageOf(unit, sight, side);
@@ -128,6 +132,7 @@ export const renewReading = async (unit: Of, visitId: string, side: Side): Promi
   const sight = await visitInSight(unit, visitId, 'reading.renew');
   const page = await pageOf(unit, sight, side, { anew: true });
   audit(unit, 'reading.renew', visitId, {
+    athlete: sight.athlete.id,
     side,
     px: page.reading?.markError.px ?? null,
     protocol: page.reading?.protocol.version ?? null,

@@ -12,7 +12,7 @@ import { Call } from '../calls/call.entity.ts';
 import type { Clip } from '../clips/clip.entity.ts';
 import { Comment } from '../comments/comment.entity.ts';
 import { COMMENT_ORDER } from '../comments/comments.presenter.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { Practice } from '../practice/practice.entity.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
 import { resultOf } from '../readings/result-of.ts';
@@ -155,7 +155,7 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
     'update replay set openings = openings + 1, last_opened_at = now() where id = ?',
     [replay.id],
   );
-  audit(unit, 'replay.open', replay.id);
+  audit(unit, 'replay.open', replay.id, { athlete: athlete.id });
   return {
     athleteGivenName: athlete.givenName,
     practice: { name: practice.name, contact: practice.contact },
@@ -177,4 +177,11 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
     comments: await sharedComments(unit, clip, replay),
     expiresAt: replay.expiresAt.toISOString(),
   };
+};
+
+/** Writes down that somebody who has the link does not have its pass phrase. */
+export const passPhraseWasWrong = async (unit: Of): Promise<void> => {
+  const { em, actor } = unit;
+  const replay = await em.findOneOrFail(Replay, { id: actor.replayId }, { populate: ['visit'] });
+  audit(unit, 'replay.refused', replay.id, { athlete: replay.visit.unwrap().athlete.id });
 };

@@ -7,7 +7,7 @@ import { passwordFits } from '../accounts/password.ts';
 import { sendStored } from '../clips/send-stored.ts';
 import { liveLink, needUnlocked, unlock } from './link.ts';
 import { hiddenFilesOf } from './hidden-copies.ts';
-import { filmOfLink, mediaOfLink, openReplay } from './public-replay.ts';
+import { filmOfLink, mediaOfLink, openReplay, passPhraseWasWrong } from './public-replay.ts';
 import { presentReplay } from './replays.presenter.ts';
 import {
   hashOf,
@@ -73,10 +73,12 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
   serve(
     routes.unlockReplay,
     async ({ params, body, res }) => {
-      const { passPhraseHash } = await liveLink(ground, params.token);
+      const { actor, passPhraseHash } = await liveLink(ground, params.token);
       if (passPhraseHash === null) return;
-      if (!(await passwordFits(body.passPhrase, passPhraseHash)))
+      if (!(await passwordFits(body.passPhrase, passPhraseHash))) {
+        await inPractice(actor, passPhraseWasWrong);
         throw new Problem('pass-phrase-needed', 'This is not the pass phrase.');
+      }
       unlock(res, params.token, passPhraseHash, config.publicUrl.startsWith('https:'));
     },
     ...passPhraseLimits(),

@@ -12,7 +12,7 @@ import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 import { needConsent } from '../athletes/consent-check.ts';
 import { Call } from '../calls/call.entity.ts';
 import { needFrames } from '../clips/clip-in-sight.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { visitInSight } from '../visits/visit-in-sight.ts';
@@ -84,7 +84,11 @@ export const makeReplay = async (
     expiresAt: new Date(Date.now() + body.days * DAY_MS),
     by: await em.findOneOrFail(User, { id: actor.id }),
   });
-  audit(unit, 'replay.make', replay.id, { visit: visit.id, side: body.side });
+  audit(unit, 'replay.make', replay.id, {
+    athlete: athlete.id,
+    visit: visit.id,
+    side: body.side,
+  });
   if (body.hideHead) {
     await askForCopy(unit, replay);
     const { id: replayId, expiresAt } = replay;
@@ -123,7 +127,7 @@ export const revokeReplay = async (unit: Of, id: string): Promise<Replay> => {
   const replay = await linkInSight(unit, id, 'replay.revoke');
   if (!replay.revokedAt) {
     replay.revokedAt = new Date();
-    audit(unit, 'replay.revoke', id);
+    audit(unit, 'replay.revoke', id, { athlete: replay.visit.unwrap().athlete.id });
     if (replay.hideHead) await enqueue(unit, REMOVE_HIDDEN, { replayId: id });
   }
   await unit.em.flush();

@@ -8,6 +8,7 @@ import { tell } from '../../events/tell.ts';
 import { found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
+import { audit } from '../audit/audit.ts';
 import type { Clip } from '../clips/clip.entity.ts';
 import { type ClipInSight, clipInSight, needFrames } from '../clips/clip-in-sight.ts';
 import { readingsAreStale } from '../readings/stale.ts';
@@ -64,6 +65,7 @@ export const addRep = async (
     handBoundaries: {},
     createdBy: em.getReference(User, actor.id),
   });
+  audit(unit, 'rep.add', rep.id, { athlete: sight.athlete.id, clip: clipId });
   await em.flush();
   await tellClip(unit, sight, rep.id);
   return presentStored(unit, sight, rep.id);
@@ -150,6 +152,12 @@ export const editRep = async (
   if (edit.boundaries) rep.handBoundaries = movedAfter(rep.handBoundaries, edit.boundaries);
   needFrames(clip, rep.startFrame, rep.endFrame);
   needOrder(rep, rep.handBoundaries);
+  const fields = Object.keys(edit).filter((name) => name !== 'version');
+  audit(unit, 'rep.edit', id, {
+    athlete: sight.athlete.id,
+    clip: clip.id,
+    fields: fields.sort().join(' '),
+  });
   await unit.em.flush();
   await tellClip(unit, sight, id);
   return presentStored(unit, sight, id);
@@ -158,6 +166,7 @@ export const editRep = async (
 /** Deletes a rep with its marks; a replay link that plays it dies with it, and who took its quiet stance or its lift has its own again. */
 export const deleteRep = async (unit: Unit<UserActor>, id: string): Promise<void> => {
   const sight = await repInSight(unit, id, 'rep.edit');
+  audit(unit, 'rep.delete', id, { athlete: sight.athlete.id, clip: sight.clip.id });
   unit.em.remove(sight.rep);
   await unit.em.flush();
   await tellClip(unit, sight, id);

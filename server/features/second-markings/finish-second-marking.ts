@@ -18,7 +18,7 @@ import { type ReadingRules, rulesOf } from '#shared/protocol/protocol.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { Problem } from '../../http/problem.ts';
 import type { MarkRow } from '../marks/mark-store.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
 import { deriveApart } from '../readings/derive-apart.ts';
 import { measuredClip, timesOfClip } from '../reps/reps.presenter.ts';
@@ -108,7 +108,10 @@ export const finishSecondMarking = async (
   await unit.em.populate(marking, ['first', 'phases']);
   marking.result = await resultOf(sight, marks, rulesOf((await currentProtocol(unit.em)).values));
   marking.finishedAt = new Date();
-  audit(unit, 'second-marking.finish', id, { frames: marking.frames.length });
+  audit(unit, 'second-marking.finish', id, {
+    athlete: sight.athlete.id,
+    frames: marking.frames.length,
+  });
   await unit.em.flush();
   return sight;
 };

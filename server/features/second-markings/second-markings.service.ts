@@ -11,7 +11,7 @@ import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { User } from '../accounts/user.entity.ts';
 import { applyCommands, changedRows, type Outcome, placeOf } from '../marks/apply-commands.ts';
 import { readMarks } from '../marks/mark-store.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
 import { presentRules } from '../protocol/protocol.presenter.ts';
 import { Rep } from '../reps/rep.entity.ts';
@@ -163,11 +163,14 @@ export const saveSecondMarks = async (
  * @throws Problem 'not-allowed' or 'second-marking-finished'
  */
 export const discardSecondMarking = async (unit: Of, id: string): Promise<void> => {
-  const { marking } = await secondInSight(unit, id, 'marks.second');
+  const { marking, athlete } = await secondInSight(unit, id, 'marks.second');
   if (marking.marker.id !== unit.actor.id && marking.askedBy.id !== unit.actor.id)
     throw new Problem('not-allowed', 'Only who asked or who was asked can give it up.');
   if (marking.finishedAt) throw new Problem('second-marking-finished');
-  audit(unit, 'second-marking.discard', id, { frames: marking.frames.length });
+  audit(unit, 'second-marking.discard', id, {
+    athlete: athlete.id,
+    frames: marking.frames.length,
+  });
   unit.em.remove(marking);
   await unit.em.flush();
 };

@@ -10,7 +10,7 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
 import { storedReps } from '../reps/stored-reps.ts';
@@ -67,8 +67,9 @@ export const startSecondMarking = async (
     phases: phasesOf(markable.filter(({ frame }) => places.has(frame))),
   });
   audit(unit, 'second-marking.start', marking.id, {
-    repId,
-    markerId: marker.id,
+    athlete: athlete.id,
+    rep: repId,
+    marker: marker.id,
     frames: places.size,
   });
   await em.flush();

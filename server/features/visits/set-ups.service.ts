@@ -4,7 +4,7 @@ import type { setUpBody } from '#shared/contracts/visits.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { found, need } from '../../http/need.ts';
 import { User } from '../accounts/user.entity.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { SetUp } from './set-up.entity.ts';
 import type { Filming } from './visit.entity.ts';
 

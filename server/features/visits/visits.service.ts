@@ -9,7 +9,7 @@ import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 import { isMinor, today } from '../athletes/days.ts';
-import { audit } from '../practice/audit.ts';
+import { audit } from '../audit/audit.ts';
 import { filmingOf } from './set-ups.service.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
 import { SetUp } from './set-up.entity.ts';
@@ -72,6 +72,11 @@ export const editVisit = async (
     if (!isDeepStrictEqual(filming, visit.filming)) visit.setUpName = null;
     visit.filming = filming;
   }
+  const fields = Object.entries({ note, filming, setUpId }).filter(([, v]) => v !== undefined);
+  audit(unit, 'visit.edit', id, {
+    athlete: seen.athlete.id,
+    fields: fields.map(([name]) => name).join(' '),
+  });
   await em.flush();
   return seen;
 };
@@ -102,6 +107,7 @@ export const answerSafety = async (
     askedAt: new Date().toISOString(),
   };
   audit(unit, 'visit.safety', id, {
+    athlete: seen.athlete.id,
     yes: Object.values(given.answers).filter(Boolean).length,
     cleared: given.clearedBy !== null,
   });
