@@ -1,3 +1,4 @@
+import { RecoveryCode } from '../features/accounts/recovery-code.entity.ts';
 import { Session } from '../features/accounts/session.entity.ts';
 import { Supervision } from '../features/accounts/supervision.entity.ts';
 import { User } from '../features/accounts/user.entity.ts';
@@ -8,6 +9,7 @@ import { Clip } from '../features/clips/clip.entity.ts';
 import { Upload } from '../features/clips/upload.entity.ts';
 import { Comment } from '../features/comments/comment.entity.ts';
 import { Head } from '../features/heads/head.entity.ts';
+import { MailLink } from '../features/mail-links/mail-link.entity.ts';
 import { MarkCommand } from '../features/marks/mark-command.entity.ts';
 import { Mark } from '../features/marks/mark.entity.ts';
 import { AuditEntry } from '../features/audit/audit-entry.entity.ts';
@@ -31,6 +33,8 @@ export const entities = [
   User,
   Supervision,
   Session,
+  RecoveryCode,
+  MailLink,
   Athlete,
   Consent,
   SetUp,

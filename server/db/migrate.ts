@@ -14,6 +14,7 @@ import { Migration20261201235500_heads } from '../../migrations/Migration2026120
 import { Migration20261202001000_prepared_seconds } from '../../migrations/Migration20261202001000_prepared_seconds.ts';
 import { Migration20261202033000_hidden_copies } from '../../migrations/Migration20261202033000_hidden_copies.ts';
 import { Migration20261202034100_audit_trail } from '../../migrations/Migration20261202034100_audit_trail.ts';
+import { Migration20261202035900_people } from '../../migrations/Migration20261202035900_people.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -67,6 +68,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202034100_audit_trail',
     class: Migration20261202034100_audit_trail,
+  },
+  {
+    name: 'Migration20261202035900_people',
+    class: Migration20261202035900_people,
   },
 ];
 

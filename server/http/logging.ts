@@ -4,7 +4,7 @@ import { pinoHttp } from 'pino-http';
 import type { RequestHandler } from 'express';
 
 /** Replay tokens, and tokens of invitations and new passwords, stand in the path. */
-const TOKEN_IN_PATH = /^(\/(?:api\/)?(?:r|join|reset)\/)[^/]+/;
+const TOKEN_IN_PATH = /^(\/(?:api\/)?(?:r|join|reset|confirm-email)\/)[^/]+/;
 
 /** The address as it may be kept: without its query, which can hold names, and without tokens. */
 export const loggedPath = (url: string): string =>

@@ -7,12 +7,17 @@ import { Problem } from './problem.ts';
  * Counts failed tries and refuses further ones with 'too-many-tries'. Counted in memory: with several web
  * processes each counts for itself, which multiplies the limit by their number and no more.
  */
-const limit = (tries: number, minutes: number, keyOf: (req: Request) => string): RequestHandler =>
+const limit = (
+  tries: number,
+  minutes: number,
+  keyOf: (req: Request) => string,
+  failedOnly = true,
+): RequestHandler =>
   rateLimit({
     windowMs: minutes * 60_000,
     limit: tries,
     keyGenerator: keyOf,
-    skipSuccessfulRequests: true,
+    skipSuccessfulRequests: failedOnly,
     standardHeaders: 'draft-7',
     legacyHeaders: false,
     handler: (_req, _res, next) => {
@@ -42,3 +47,12 @@ export const passPhraseLimits = (): RequestHandler[] => [
   limit(40, 15, (req) => digest(String(req.params.token))),
   limit(8, 15, (req) => `${digest(String(req.params.token))} ${addressOf(req)}`),
 ];
+
+/** Letters: 5 in an hour to one address, known or not, and 30 asked for from one place. */
+export const letterLimits = (): RequestHandler[] => [
+  limit(30, 60, addressOf, false),
+  limit(5, 60, emailOf, false),
+];
+
+/** Links that open nothing: 50 in a quarter of an hour from one place; a token cannot be guessed anyway. */
+export const mailLinkLimits = (): RequestHandler[] => [limit(50, 15, addressOf)];

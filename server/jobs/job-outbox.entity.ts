@@ -1,5 +1,5 @@
 import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
-import { madeAt, moment, ownedRow } from '#server/db/columns.ts';
+import { madeAt, moment, ownedRow, ownPractice } from '#server/db/columns.ts';
 
 /** A job that is committed with the state it belongs to and relayed to the queue under the same id. */
 export const JobOutbox = defineEntity({
@@ -7,6 +7,8 @@ export const JobOutbox = defineEntity({
   indexes: [{ properties: ['sentAt', 'createdAt'] }],
   properties: {
     ...ownedRow(),
+    /** Null for what belongs to no practice, such as the letter to who forgot a password. */
+    practiceId: ownPractice().nullable(),
     queue: p.text(),
     payload: p.json<Record<string, unknown>>(),
     /** Larger comes first among the jobs of one queue. */

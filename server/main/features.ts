@@ -9,6 +9,8 @@ import { resumableUploadFeature } from '../features/clips/resumable-upload.ts';
 import { commentsFeature } from '../features/comments/comments.routes.ts';
 import { exportsFeature } from '../features/exports/exports.routes.ts';
 import { headsFeature } from '../features/heads/heads.routes.ts';
+import { mailLinksFeature } from '../features/mail-links/mail-links.routes.ts';
+import { peopleFeature } from '../features/people/people.routes.ts';
 import { protocolFeature } from '../features/protocol/protocol.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { replaysFeature } from '../features/replays/replays.routes.ts';
@@ -23,6 +25,8 @@ import type { Feature } from './feature.ts';
 export const features: readonly Feature[] = [
   systemFeature,
   accountsFeature,
+  mailLinksFeature,
+  peopleFeature,
   todayFeature,
   athletesFeature,
   visitsFeature,

@@ -1,5 +1,6 @@
 import { prepareClipJob } from '../features/clips/jobs/prepare-clip.ts';
 import { fillDemoJob } from '../db/demo/fill-demo.job.ts';
+import { sendMailLinkJob } from '../features/mail-links/jobs/send-mail-link.ts';
 import { hideHeadJob } from '../features/replays/jobs/hide-head.ts';
 import { removeHiddenJob } from '../features/replays/jobs/remove-hidden.ts';
 import { deriveReadingJob } from '../features/readings/jobs/derive-reading.ts';
@@ -11,5 +12,6 @@ export const jobs: readonly AnyJobHandler[] = [
   deriveReadingJob,
   hideHeadJob,
   removeHiddenJob,
+  sendMailLinkJob,
   fillDemoJob,
 ];

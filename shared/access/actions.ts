@@ -20,6 +20,7 @@ export const ACTIONS = {
   'set-up.save': 'practice',
   'set-up.delete': 'practice',
   'protocol.change': 'practice',
+  'people.manage': 'practice',
   'athlete.read': 'caseload',
   'athlete.edit': 'caseload',
   'consent.record': 'caseload',

@@ -52,6 +52,7 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'set-up.save': COACHES_AND_OWNER,
   'set-up.delete': COACHES_AND_OWNER,
   'protocol.change': ['owner'],
+  'people.manage': ['owner'],
   'athlete.read': SEES,
   'athlete.edit': WORKS,
   'consent.record': WORKS,

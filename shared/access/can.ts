@@ -22,8 +22,8 @@ const ASSIGNED: ReadonlySet<Action> = new Set<Action>([
   'reliability.read',
 ]);
 
-/** What changes how the whole practice reads. */
-const OWNERS: ReadonlySet<Action> = new Set<Action>(['protocol.change']);
+/** What changes how the whole practice reads, and who works in it. */
+const OWNERS: ReadonlySet<Action> = new Set<Action>(['protocol.change', 'people.manage']);
 
 const onPractice = (actor: UserActor, action: Action): boolean =>
   action === 'practice.read' ||

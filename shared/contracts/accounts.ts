@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { email, id, moment } from './primitives.ts';
+import { email, id, moment, text } from './primitives.ts';
 import { json, none, route } from './route.ts';
 
 export const role = z.enum(['owner', 'supervisor', 'coach']).meta({ id: 'Role' });
@@ -8,6 +8,14 @@ export type Role = z.infer<typeof role>;
 export const signInBody = z
   .object({ email, password: z.string().min(1, 'Write your password.').max(200) })
   .meta({ id: 'SignIn' });
+
+const utf8 = new TextEncoder();
+/** Long rather than odd; bcrypt reads 72 bytes and no more. The least length is common practice, no source. */
+export const newPassword = z
+  .string()
+  .min(12, 'At least 12 characters. A few words in a row are good.')
+  .refine((given) => utf8.encode(given).length <= 72, 'At most 72 characters, fewer with accents.');
+export const personName = text(120);
 
 /** The person signed in and the practice they work in. */
 export const me = z

@@ -8,6 +8,12 @@ export const PROBLEMS = {
   'sign-in-refused': [401, 'This e-mail address and password do not belong together.'],
   'foreign-origin': [403, 'This request came from another site.'],
   'not-allowed': [403, 'Your role does not include this.'],
+  'link-gone': [
+    410,
+    'This link does not work any more: it was used, it is too old, or it is not whole. Ask for a new one.',
+  ],
+  'address-taken': [409, 'There is an account with this e-mail address already. Sign in with it.'],
+  'last-owner': [409, 'A practice needs an owner. Make somebody else an owner first.'],
   'too-many-tries': [429, 'Too many tries. Wait a little, then try again.'],
   // what you asked for
   'not-found': [404, 'There is nothing here, or nothing that you may see.'],

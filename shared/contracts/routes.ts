@@ -7,6 +7,8 @@ import { commentRoutes } from './comments.ts';
 import { eventRoutes } from './events.ts';
 import { exportRoutes } from './exports.ts';
 import { headRoutes } from './heads.ts';
+import { mailLinkRoutes } from './mail-links.ts';
+import { peopleRoutes } from './people.ts';
 import { protocolRoutes } from './protocol.ts';
 import { readingRoutes } from './readings.ts';
 import { reliabilityRoutes } from './reliability.ts';
@@ -21,6 +23,8 @@ import { visitRoutes } from './visits.ts';
 export const routes = {
   ...systemRoutes,
   ...accountRoutes,
+  ...mailLinkRoutes,
+  ...peopleRoutes,
   ...todayRoutes,
   ...athleteRoutes,
   ...visitRoutes,

@@ -13,3 +13,12 @@ export const sessionsQuery = queryOptions({
   queryKey: ['sessions'],
   queryFn: ({ signal }) => call(routes.sessions, { signal }),
 });
+
+/** What the link of a letter is for; asking does not use it. A dead one stays dead. */
+export const mailLinkOptions = (token: string) =>
+  queryOptions({
+    queryKey: ['mail-link', token],
+    queryFn: ({ signal }) => call(routes.lookAtMailLink, { body: { token }, signal }),
+    retry: false,
+    staleTime: Infinity,
+  });

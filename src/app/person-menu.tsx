@@ -6,6 +6,7 @@ import { call } from '#src/api/client.ts';
 import { discardAll, whatWouldBeLost } from '#src/api/leaving.ts';
 import { useMe } from '#src/api/me.ts';
 import { Button } from '#src/ui/button.tsx';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { Dialog } from '#src/ui/dialog.tsx';
 import { Disclosure } from '#src/ui/disclosure.tsx';
 import { initials } from '#src/ui/initials.ts';
@@ -56,6 +57,11 @@ export function PersonMenu() {
           {user.role}, {practice.name}
         </p>
         <div className="mt-3 flex flex-col items-start border-t border-rule pt-2">
+          {user.role === 'owner' && (
+            <ButtonLink look="plain" to={paths.people()}>
+              People of the practice
+            </ButtonLink>
+          )}
           <Button look="plain" onClick={() => void ask('here')}>
             Sign out
           </Button>

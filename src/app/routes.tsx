@@ -25,6 +25,30 @@ export const pages: RouteObject[] = [
         ),
       },
       {
+        path: 'forgot',
+        lazy: lazily(() =>
+          import('#src/features/accounts/forgot-page.tsx').then((page) => page.ForgotPage),
+        ),
+      },
+      {
+        path: 'reset/:token',
+        lazy: lazily(() =>
+          import('#src/features/accounts/reset-page.tsx').then((page) => page.ResetPage),
+        ),
+      },
+      {
+        path: 'join/:token',
+        lazy: lazily(() =>
+          import('#src/features/accounts/join-page.tsx').then((page) => page.JoinPage),
+        ),
+      },
+      {
+        path: 'start',
+        lazy: lazily(() =>
+          import('#src/features/accounts/start-page.tsx').then((page) => page.StartPage),
+        ),
+      },
+      {
         Component: StaffFrame,
         children: [
           {
@@ -122,6 +146,14 @@ export const pages: RouteObject[] = [
                 lazy: lazily(() =>
                   import('#src/features/practice/reliability/reliability-page.tsx').then(
                     (page) => page.ReliabilityPage,
+                  ),
+                ),
+              },
+              {
+                path: 'practice/people',
+                lazy: lazily(() =>
+                  import('#src/features/practice/people/people-page.tsx').then(
+                    (page) => page.PeoplePage,
                   ),
                 ),
               },

@@ -4,6 +4,10 @@ import type { Side } from '#shared/contracts/primitives.ts';
 export const paths = {
   today: () => '/',
   signIn: () => '/sign-in',
+  forgot: () => '/forgot',
+  reset: (token: string) => `/reset/${token}`,
+  join: (token: string) => `/join/${token}`,
+  start: () => '/start',
   athletes: () => '/athletes',
   newAthlete: () => '/athletes/new',
   athlete: (id: string) => `/athletes/${id}`,
@@ -29,6 +33,7 @@ export const paths = {
   secondMarking: (id: string) => `/second-markings/${id}`,
   reliability: () => '/practice/reliability',
   protocol: () => '/practice/protocol',
+  people: () => '/practice/people',
   setUps: () => '/practice/set-ups',
   method: () => '/method',
 } as const;

@@ -3,6 +3,7 @@ import { type RouteName, routes } from '#shared/contracts/routes.ts';
 /** What the `:id` of a route names. A route that is missing here fails the type check. */
 export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   endSession: 'session',
+  withdrawInvitation: 'invitation',
   athlete: 'athlete',
   editAthlete: 'athlete',
   listConsents: 'athlete',
@@ -128,6 +129,7 @@ export const BODIES: Partial<Record<RouteName, object>> = {
 /** A thing of each kind that a route can name. */
 export type Ids = Record<
   | 'session'
+  | 'invitation'
   | 'athlete'
   | 'consent'
   | 'visit'

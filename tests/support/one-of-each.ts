@@ -4,6 +4,7 @@ import { makeClip } from '#server/features/clips/clip.factory.ts';
 import { Upload } from '#server/features/clips/upload.entity.ts';
 import { Comment } from '#server/features/comments/comment.entity.ts';
 import { Consent } from '#server/features/athletes/consent.entity.ts';
+import { MailLink } from '#server/features/mail-links/mail-link.entity.ts';
 import { Replay } from '#server/features/replays/replay.entity.ts';
 import { makeRep } from '#server/features/reps/rep.factory.ts';
 import { SecondMarking } from '#server/features/second-markings/second-marking.entity.ts';
@@ -72,10 +73,18 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
       by: coach,
       beforeFigures: true,
     });
+    const invitation = em.create(MailLink, {
+      kind: 'invitation',
+      email: 'new@test.example',
+      role: 'coach',
+      by: coach,
+      expiresAt: new Date(Date.now() + 1e8),
+    });
     const consent = await em.findOneOrFail(Consent, { athlete: athlete.id });
     await em.flush();
     return {
       session: session.id,
+      invitation: invitation.id,
       athlete: athlete.id,
       consent: consent.id,
       visit: visit.id,

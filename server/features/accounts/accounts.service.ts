@@ -1,18 +1,13 @@
 import type { UserActor } from '#shared/access/actors.ts';
 import type { Unit } from '../../db/in-practice.ts';
 import { tell } from '../../events/tell.ts';
-import { found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import type { OpenSession } from '../../http/session.ts';
 import type { Ground } from '../../main/ground.ts';
 import { audit } from '../audit/audit.ts';
-import { deviceName } from './device.ts';
+import { openSession } from './open-session.ts';
 import { passwordFits } from './password.ts';
 import { Session } from './session.entity.ts';
-import { User } from './user.entity.ts';
-
-/** The last day of a session, however much it is used. */
-const SESSION_DAYS = 30;
 
 type SignInRow = { user_id: string; practice_id: string; password_hash: string };
 
@@ -38,19 +33,9 @@ export const signIn = async (
     });
   }
   if (!row || !fits) throw new Problem('sign-in-refused');
-  const id = await inPractice({ practiceId: row.practice_id }, async ({ em }) => {
-    const user = await em.findOneOrFail(User, { id: row.user_id });
-    const session = em.create(Session, {
-      user,
-      device: deviceName(userAgent),
-      expiresAt: new Date(Date.now() + SESSION_DAYS * 86_400_000),
-    });
-    const actor = { kind: 'user', id: user.id, role: user.role } as const;
-    audit({ em, actor }, 'account.sign-in', user.id, { session: session.id });
-    await em.flush();
-    return session.id;
-  });
-  return found(await sessions.findById(id));
+  return openSession({ inPractice, sessions }, row.practice_id, userAgent, () =>
+    Promise.resolve(row.user_id),
+  );
 };
 
 /** Ends the session that asks. */

@@ -15,6 +15,12 @@ export const User = defineEntity({
     /** bcrypt. */
     passwordHash: p.text().lazy(),
     disabledAt: moment().nullable(),
+    /** The secret of one-time codes, sealed; there from its set-up on. */
+    codeSecret: p.text().nullable().lazy().default(null),
+    /** Since when a sign-in asks for a code; null: it asks for none. */
+    codesSince: moment().nullable(),
+    /** The last time step whose code was taken: no code is taken twice. */
+    lastCodeStep: p.integer().nullable(),
     createdAt: madeAt(),
   },
 });

@@ -9,6 +9,8 @@ export const Practice = defineEntity({
     name: p.text(),
     /** How an athlete reaches the practice; shown on the replay. */
     contact: p.text().default(''),
+    /** Owners do nothing before they have set up one-time codes. */
+    ownersNeedCode: p.boolean().default(false),
     createdAt: madeAt(),
   },
 });

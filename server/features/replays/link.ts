@@ -1,4 +1,4 @@
-import { createHash, randomBytes, timingSafeEqual } from 'node:crypto';
+import { createHash, timingSafeEqual } from 'node:crypto';
 import { parseCookie, stringifySetCookie } from 'cookie';
 import type { Request, Response } from 'express';
 import type { LinkActor } from '#shared/access/actors.ts';
@@ -9,9 +9,6 @@ import type { Ground } from '../../main/ground.ts';
 const COOKIE = 'redshank_replay';
 /** How long a pass phrase that was given once is not asked for again on that device. */
 const UNLOCKED_HOURS = 12;
-
-/** 256 random bits, base64url. Kept nowhere but in the address that is handed out. */
-export const newToken = (): string => randomBytes(32).toString('base64url');
 
 interface LinkRow {
   readonly replay_id: string;

@@ -5,7 +5,7 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { found, needCaseload } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { enqueue } from '../../jobs/job.ts';
-import { tokenHash } from '../../http/token-hash.ts';
+import { newToken, tokenHash } from '../../http/token-hash.ts';
 import { hashPassword } from '../accounts/password.ts';
 import { User } from '../accounts/user.entity.ts';
 import { athleteInSight } from '../athletes/athlete-in-sight.ts';
@@ -18,7 +18,6 @@ import type { Rep } from '../reps/rep.entity.ts';
 import { visitInSight } from '../visits/visit-in-sight.ts';
 import { askForCopy, hasEnded, headStateOf, needHiddenHead } from './hidden-copies.ts';
 import { REMOVE_HIDDEN } from './jobs/remove-hidden-type.ts';
-import { newToken } from './link.ts';
 import { Replay } from './replay.entity.ts';
 
 type Of = Unit<UserActor>;

@@ -28,6 +28,31 @@ const FRONT: readonly PageOfProduct[] = [
     stands: heading('Sign in'),
   },
   {
+    name: 'a forgotten password',
+    who: null,
+    address: () => paths.forgot(),
+    stands: heading('Forgotten password'),
+  },
+  {
+    name: 'a link in a letter that opens nothing',
+    who: null,
+    address: () => paths.reset('gone'),
+    stands: heading('This link opens nothing'),
+    says: /410/,
+  },
+  {
+    name: 'a new practice',
+    who: null,
+    address: () => paths.start(),
+    stands: heading('Start a practice'),
+  },
+  {
+    name: 'the people of a practice',
+    who: OWNER,
+    address: () => paths.people(),
+    stands: text('In the practice'),
+  },
+  {
     name: 'Today of a coach',
     who: COACH,
     address: () => paths.today(),

@@ -1,0 +1,74 @@
+import * as z from 'zod';
+import { role } from './accounts.ts';
+import { email, id, moment } from './primitives.ts';
+import { json, none, route } from './route.ts';
+
+export const person = z
+  .object({
+    id,
+    name: z.string(),
+    email: z.string(),
+    role,
+    /** Null while the account is open. */
+    deactivatedAt: moment.nullable(),
+    /** Null where nobody ever signed in. */
+    lastSeenAt: moment.nullable(),
+    athletes: z.int(),
+    /** Whose athletes a supervisor sees. */
+    coachIds: z.array(id),
+    oneTimeCodes: z.boolean(),
+  })
+  .meta({ id: 'Person' });
+export type Person = z.infer<typeof person>;
+
+export const invitation = z
+  .object({
+    id,
+    email: z.string(),
+    role,
+    invitedBy: z.string(),
+    /** Null until a mail server has taken the letter. */
+    sentAt: moment.nullable(),
+    expiresAt: moment,
+  })
+  .meta({ id: 'Invitation' });
+export type Invitation = z.infer<typeof invitation>;
+
+export const peoplePage = z
+  .object({ people: z.array(person), invitations: z.array(invitation) })
+  .meta({ id: 'PeoplePage' });
+export type PeoplePage = z.infer<typeof peoplePage>;
+
+export const inviteBody = z.object({ email, role }).meta({ id: 'Invite' });
+
+export const peopleRoutes = {
+  people: route({
+    method: 'get',
+    path: '/api/practice/people',
+    summary: 'The people of the practice and the invitations that are open.',
+    audience: 'staff',
+    status: 200,
+    answer: json(peoplePage),
+    problems: ['not-allowed'],
+  }),
+  invite: route({
+    method: 'post',
+    path: '/api/practice/invitations',
+    summary: 'Invite somebody by e-mail. An earlier invitation of the same address ends.',
+    audience: 'staff',
+    body: inviteBody,
+    status: 201,
+    answer: json(peoplePage),
+    problems: ['not-allowed', 'invalid-input'],
+  }),
+  withdrawInvitation: route({
+    method: 'delete',
+    path: '/api/practice/invitations/:id',
+    summary: 'End an invitation: its link opens nothing any more.',
+    audience: 'staff',
+    params: z.object({ id }),
+    status: 204,
+    answer: none,
+    problems: ['not-allowed', 'not-found'],
+  }),
+};
