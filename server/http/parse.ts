@@ -1,5 +1,6 @@
 import type * as z from 'zod';
 import type { Fault } from '#shared/contracts/problems.ts';
+import { plainFault } from './plain-fault.ts';
 import { Problem } from './problem.ts';
 
 type Part = {
@@ -22,7 +23,7 @@ export const parseParts = (parts: readonly Part[]): unknown[] => {
   const faults: Fault[] = [];
   const values = parts.map(({ name, schema, value }) => {
     if (!schema) return {};
-    const result = schema.safeParse(value);
+    const result = schema.safeParse(value, { error: plainFault });
     if (result.success) return result.data;
     faults.push(...faultsOf(name, result.error));
     return undefined;

@@ -68,6 +68,7 @@ export type RouteNameWithId = {
 
 /** Bodies that would do something if the thing could be seen. */
 export const BODIES: Partial<Record<RouteName, object>> = {
+  addAthlete: { givenName: 'Wren', familyName: 'Alder', birthDate: '1999-04-01' },
   editAthlete: { version: 1, sport: 'x' },
   recordConsent: { givenBy: 'athlete', purposes: ['assessment'], validUntil: '2999-01-01' },
   editVisit: { version: 1, note: 'x' },
