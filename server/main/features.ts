@@ -1,6 +1,7 @@
 import { eventsFeature } from '../events/events.routes.ts';
 import { accountsFeature } from '../features/accounts/accounts.routes.ts';
 import { athletesFeature } from '../features/athletes/athletes.routes.ts';
+import { auditFeature } from '../features/audit/audit.routes.ts';
 import { benchFeature } from '../features/bench/bench.routes.ts';
 import { callsFeature } from '../features/calls/calls.routes.ts';
 import { clipsFeature } from '../features/clips/clips.routes.ts';
@@ -11,6 +12,7 @@ import { exportsFeature } from '../features/exports/exports.routes.ts';
 import { headsFeature } from '../features/heads/heads.routes.ts';
 import { mailLinksFeature } from '../features/mail-links/mail-links.routes.ts';
 import { peopleFeature } from '../features/people/people.routes.ts';
+import { practiceFeature } from '../features/practice/practice.routes.ts';
 import { protocolFeature } from '../features/protocol/protocol.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { replaysFeature } from '../features/replays/replays.routes.ts';
@@ -35,7 +37,9 @@ export const features: readonly Feature[] = [
   resumableUploadFeature,
   callsFeature,
   repsFeature,
+  practiceFeature,
   protocolFeature,
+  auditFeature,
   readingsFeature,
   secondMarkingsFeature,
   headsFeature,

@@ -21,6 +21,8 @@ export const ACTIONS = {
   'set-up.delete': 'practice',
   'protocol.change': 'practice',
   'people.manage': 'practice',
+  'practice.edit': 'practice',
+  'audit.read': 'practice',
   'athlete.read': 'caseload',
   'athlete.edit': 'caseload',
   'consent.record': 'caseload',

@@ -53,6 +53,8 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'set-up.delete': COACHES_AND_OWNER,
   'protocol.change': ['owner'],
   'people.manage': ['owner'],
+  'practice.edit': ['owner'],
+  'audit.read': ['owner'],
   'athlete.read': SEES,
   'athlete.edit': WORKS,
   'consent.record': WORKS,

@@ -22,8 +22,13 @@ const ASSIGNED: ReadonlySet<Action> = new Set<Action>([
   'reliability.read',
 ]);
 
-/** What changes how the whole practice reads, and who works in it. */
-const OWNERS: ReadonlySet<Action> = new Set<Action>(['protocol.change', 'people.manage']);
+/** What changes the practice as a whole, who works in it, and who did what. */
+const OWNERS: ReadonlySet<Action> = new Set<Action>([
+  'protocol.change',
+  'practice.edit',
+  'audit.read',
+  'people.manage',
+]);
 
 const onPractice = (actor: UserActor, action: Action): boolean =>
   action === 'practice.read' ||

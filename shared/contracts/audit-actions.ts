@@ -52,6 +52,7 @@ export const AUDIT_ACTIONS = {
   'set-up.save': ['practice', 'Saved a set-up'],
   'set-up.delete': ['practice', 'Deleted a set-up'],
   'protocol.change': ['practice', 'Changed the protocol'],
+  'practice.edit': ['practice', 'Changed the practice’s name or contact'],
   'audit.export': ['practice', 'Exported the audit trail'],
   'access.refuse': ['practice', 'Refused: not theirs to see or do'],
 } as const satisfies Record<string, readonly ['athlete' | 'practice', string]>;

@@ -1,5 +1,6 @@
 import { accountRoutes } from './accounts.ts';
 import { athleteRoutes } from './athletes.ts';
+import { auditRoutes } from './audit.ts';
 import { benchRoutes } from './bench.ts';
 import { callRoutes } from './calls.ts';
 import { clipRoutes } from './clip-routes.ts';
@@ -9,6 +10,7 @@ import { exportRoutes } from './exports.ts';
 import { headRoutes } from './heads.ts';
 import { mailLinkRoutes } from './mail-links.ts';
 import { peopleRoutes } from './people.ts';
+import { practiceRoutes } from './practice.ts';
 import { protocolRoutes } from './protocol.ts';
 import { readingRoutes } from './readings.ts';
 import { reliabilityRoutes } from './reliability.ts';
@@ -34,7 +36,9 @@ export const routes = {
   ...reliabilityRoutes,
   ...benchRoutes,
   ...callRoutes,
+  ...practiceRoutes,
   ...protocolRoutes,
+  ...auditRoutes,
   ...readingRoutes,
   ...commentRoutes,
   ...exportRoutes,

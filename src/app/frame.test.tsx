@@ -12,7 +12,7 @@ describe('the frame', () => {
     expect(await screen.findByText('Room 2, floor mark')).toBeVisible();
     expect(screen.getByText('Greywater Row')).toBeInTheDocument();
     expect(screen.getByRole('link', { name: 'To the page' })).toHaveAttribute('href', '#main');
-    const here = screen.getAllByRole('link', { name: 'Set-ups' });
+    const here = screen.getAllByRole('link', { name: 'Practice' });
     expect(here[0]).toHaveAttribute('aria-current', 'page');
   });
 
@@ -24,10 +24,10 @@ describe('the frame', () => {
   });
 
   it('puts the focus at the heading of the page one comes to', async () => {
-    signedInApi().on(routes.listSetUps, () => ({ items: [] }));
-    const { user } = renderAt('/nowhere');
-    await user.click((await screen.findAllByRole('link', { name: 'Set-ups' }))[0] as HTMLElement);
-    const heading = await screen.findByRole('heading', { name: 'Set-ups' });
+    signedInApi();
+    const { user } = renderAt('/practice/audit');
+    await user.click((await screen.findAllByRole('link', { name: 'Method' }))[0] as HTMLElement);
+    const heading = await screen.findByRole('heading', { level: 1, name: 'Method' });
     await waitFor(() => expect(heading).toHaveFocus());
   });
 

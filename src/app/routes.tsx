@@ -142,6 +142,22 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'practice',
+                lazy: lazily(() =>
+                  import('#src/features/practice/home/practice-page.tsx').then(
+                    (page) => page.PracticePage,
+                  ),
+                ),
+              },
+              {
+                path: 'practice/audit',
+                lazy: lazily(() =>
+                  import('#src/features/practice/audit/audit-page.tsx').then(
+                    (page) => page.AuditPage,
+                  ),
+                ),
+              },
+              {
                 path: 'practice/reliability',
                 lazy: lazily(() =>
                   import('#src/features/practice/reliability/reliability-page.tsx').then(

@@ -31,9 +31,13 @@ export const paths = {
   },
   /** Frames marked again without sight of the first marks. */
   secondMarking: (id: string) => `/second-markings/${id}`,
+  practice: () => '/practice',
+  people: () => '/practice/people',
+  consentWording: () => '/practice/consent',
+  retention: () => '/practice/retention',
+  audit: () => '/practice/audit',
   reliability: () => '/practice/reliability',
   protocol: () => '/practice/protocol',
-  people: () => '/practice/people',
   setUps: () => '/practice/set-ups',
   method: () => '/method',
 } as const;

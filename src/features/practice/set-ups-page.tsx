@@ -19,6 +19,7 @@ export function SetUpsPage() {
   return (
     <Page
       title="Set-ups"
+      crumbs={[{ label: 'Practice', to: paths.practice() }, { label: 'set-ups' }]}
       lead="Saved ways of filming. One touch in a visit fills distance, lens height, rod and pointers."
     >
       {setUps.isPending && <Loading label="Loading set-ups" />}

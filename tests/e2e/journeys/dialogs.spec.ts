@@ -109,7 +109,7 @@ test('the menus are opened and left by keyboard', async ({ page }) => {
   await page.setViewportSize({ width: 390, height: 844 });
   await page.goto(paths.today());
   for (const [name, within] of [
-    ['Menu', page.getByRole('link', { name: 'Set-ups' })],
+    ['Menu', page.getByRole('link', { name: 'Practice' })],
     [/your account$/, page.getByRole('button', { name: 'Sign out', exact: true })],
   ] as const) {
     const menu = page.getByRole('button', { name });

@@ -5,6 +5,7 @@ import { protocolQuery } from '#src/api/protocol.queries.ts';
 import { useMayInPractice } from '#src/api/use-may.ts';
 import { dayOf } from '#src/ui/days.ts';
 import { Page } from '#src/ui/page.tsx';
+import { paths } from '#src/ui/paths.ts';
 import { ErrorState, Loading, SkeletonLines } from '#src/ui/states.tsx';
 import { ProtocolForm } from './protocol-form.tsx';
 import { ProtocolHistory } from './protocol-history.tsx';
@@ -17,6 +18,7 @@ export function ProtocolPage() {
   return (
     <Page
       title="Protocol"
+      crumbs={[{ label: 'Practice', to: paths.practice() }, { label: 'protocol' }]}
       lead={
         protocols.data
           ? `Protocol ${protocols.data.current.version} of ${practice.name}, ${dayOf(protocols.data.current.at)}. Each reading names the version it was made with.`

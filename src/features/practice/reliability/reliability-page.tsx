@@ -22,7 +22,11 @@ export function ReliabilityPage() {
   const { user } = useMe();
   const query = useQuery(reliabilityOptions());
   return (
-    <Page title="Reliability" lead={LEAD[user.role]}>
+    <Page
+      title="Reliability"
+      crumbs={[{ label: 'Practice', to: paths.practice() }, { label: 'reliability' }]}
+      lead={LEAD[user.role]}
+    >
       {query.isPending && <Loading label="Loading reliability" />}
       {query.isError && !query.data && (
         <ErrorState error={query.error} onRetry={() => void query.refetch()} />

@@ -77,6 +77,30 @@ const FRONT: readonly PageOfProduct[] = [
     stands: heading(/./),
   },
   {
+    name: 'the practice, to read',
+    who: COACH,
+    address: () => paths.practice(),
+    stands: text('Saved ways of filming'),
+  },
+  {
+    name: 'the practice, to change',
+    who: OWNER,
+    address: () => paths.practice(),
+    stands: (page) => page.getByLabel(/^How athletes reach you/),
+  },
+  {
+    name: 'the audit trail',
+    who: OWNER,
+    address: () => paths.audit(),
+    stands: text(/^\d+ entries$/),
+  },
+  {
+    name: 'the audit trail, where nothing fits',
+    who: OWNER,
+    address: () => `${paths.audit()}?to=2020-01-01`,
+    stands: text('No entry fits'),
+  },
+  {
     name: 'the reliability of a practice',
     who: SUPERVISOR,
     address: () => paths.reliability(),

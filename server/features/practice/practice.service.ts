@@ -1,0 +1,33 @@
+import type * as z from 'zod';
+import type { UserActor } from '#shared/access/actors.ts';
+import type { practiceBody, PracticeSettings } from '#shared/contracts/practice.ts';
+import type { Unit } from '#server/db/in-practice.ts';
+import { need } from '../../http/need.ts';
+import { audit } from '../audit/audit.ts';
+import { Practice } from './practice.entity.ts';
+
+type Of = Unit<UserActor>;
+
+const ofPractice = ({ practiceId }: UserActor) => ({ kind: 'practice', practiceId }) as const;
+
+const presentSettings = ({ name, contact }: Practice): PracticeSettings => ({ name, contact });
+
+export const readPractice = async ({ em, actor }: Of): Promise<PracticeSettings> => {
+  need(actor, 'practice.read', ofPractice(actor));
+  return presentSettings(await em.findOneOrFail(Practice, { id: actor.practiceId }));
+};
+
+export const changePractice = async (
+  unit: Of,
+  given: z.output<typeof practiceBody>,
+): Promise<PracticeSettings> => {
+  const { em, actor } = unit;
+  need(actor, 'practice.edit', ofPractice(actor));
+  const practice = await em.findOneOrFail(Practice, { id: actor.practiceId });
+  const fields = (['name', 'contact'] as const).filter((field) => practice[field] !== given[field]);
+  em.assign(practice, given);
+  if (fields.length > 0)
+    audit(unit, 'practice.edit', actor.practiceId, { fields: fields.join(' ') });
+  await em.flush();
+  return presentSettings(practice);
+};
