@@ -4,6 +4,7 @@ import { Supervision } from '../features/accounts/supervision.entity.ts';
 import { User } from '../features/accounts/user.entity.ts';
 import { Athlete } from '../features/athletes/athlete.entity.ts';
 import { Consent } from '../features/athletes/consent.entity.ts';
+import { ConsentWording } from '../features/consents/consent-wording.entity.ts';
 import { Call } from '../features/calls/call.entity.ts';
 import { Clip } from '../features/clips/clip.entity.ts';
 import { Upload } from '../features/clips/upload.entity.ts';
@@ -36,6 +37,7 @@ export const entities = [
   RecoveryCode,
   MailLink,
   Athlete,
+  ConsentWording,
   Consent,
   SetUp,
   Visit,

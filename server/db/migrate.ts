@@ -15,6 +15,7 @@ import { Migration20261202001000_prepared_seconds } from '../../migrations/Migra
 import { Migration20261202033000_hidden_copies } from '../../migrations/Migration20261202033000_hidden_copies.ts';
 import { Migration20261202034100_audit_trail } from '../../migrations/Migration20261202034100_audit_trail.ts';
 import { Migration20261202035900_people } from '../../migrations/Migration20261202035900_people.ts';
+import { Migration20261202041200_consent_life } from '../../migrations/Migration20261202041200_consent_life.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -72,6 +73,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202035900_people',
     class: Migration20261202035900_people,
+  },
+  {
+    name: 'Migration20261202041200_consent_life',
+    class: Migration20261202041200_consent_life,
   },
 ];
 

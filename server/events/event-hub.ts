@@ -17,6 +17,8 @@ type Ear = Pick<Listener, 'actor' | 'sessionId'>;
 const mayHear = ({ actor, sessionId }: Ear, { practiceId, scope }: ToldEvent): boolean => {
   if ('sessionId' in scope) return scope.sessionId === sessionId;
   if ('userId' in scope) return scope.userId === actor.id;
+  const assigned = actor.role === 'supervisor' && scope.coachId !== actor.id;
+  if (assigned && scope.supervised === false) return false;
   return can(actor, 'athlete.read', { kind: 'caseload', practiceId, coachId: scope.coachId });
 };
 
@@ -30,6 +32,8 @@ export class EventHub {
 
   /** Takes in an event, from whichever process it came. */
   publish(event: ToldEvent): void {
+    // what came before a withdrawal is told to nobody who comes back after it
+    if (event.event.type === 'consent') this.#past = [];
     if (!isFleeting(event.event)) this.#past = [...this.#past.slice(-(REMEMBERED - 1)), event];
     for (const listener of this.#listeners) {
       if (!mayHear(listener, event)) continue;

@@ -98,11 +98,11 @@ describe('the stream of events', () => {
     if (!coach || !supervisor || !otherCoach || !foreigner) throw new Error('four streams');
     expect(coach.response.headers.get('content-type')).toContain('text/event-stream');
     expect(coach.response.headers.get('cache-control')).toContain('no-transform');
-    await publish();
-    await hears(coach, '"type":"comments"');
-    await hears(supervisor, '"type":"comments"');
-    expect(otherCoach.text).not.toContain('comments');
-    expect(foreigner.text).not.toContain('comments');
+    await publish({ type: 'reading', visitId: api.world.visit.id, side: 'left' });
+    await hears(coach, '"type":"reading"');
+    await hears(supervisor, '"type":"reading"');
+    expect(otherCoach.text).not.toContain('reading');
+    expect(foreigner.text).not.toContain('reading');
   });
 
   it('says who has a clip open to those who may see it, and keeps it from the rest', async () => {

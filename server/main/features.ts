@@ -2,6 +2,7 @@ import { eventsFeature } from '../events/events.routes.ts';
 import { accountsFeature } from '../features/accounts/accounts.routes.ts';
 import { athletesFeature } from '../features/athletes/athletes.routes.ts';
 import { auditFeature } from '../features/audit/audit.routes.ts';
+import { consentsFeature } from '../features/consents/consents.routes.ts';
 import { benchFeature } from '../features/bench/bench.routes.ts';
 import { callsFeature } from '../features/calls/calls.routes.ts';
 import { clipsFeature } from '../features/clips/clips.routes.ts';
@@ -31,6 +32,7 @@ export const features: readonly Feature[] = [
   peopleFeature,
   todayFeature,
   athletesFeature,
+  consentsFeature,
   visitsFeature,
   clipsFeature,
   formUploadFeature,

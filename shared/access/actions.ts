@@ -23,6 +23,7 @@ export const ACTIONS = {
   'people.manage': 'practice',
   'practice.edit': 'practice',
   'audit.read': 'practice',
+  'consent-wording.change': 'practice',
   'athlete.read': 'caseload',
   'athlete.edit': 'caseload',
   'consent.record': 'caseload',

@@ -55,6 +55,7 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'people.manage': ['owner'],
   'practice.edit': ['owner'],
   'audit.read': ['owner'],
+  'consent-wording.change': ['owner'],
   'athlete.read': SEES,
   'athlete.edit': WORKS,
   'consent.record': WORKS,

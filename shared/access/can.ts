@@ -28,6 +28,7 @@ const OWNERS: ReadonlySet<Action> = new Set<Action>([
   'practice.edit',
   'audit.read',
   'people.manage',
+  'consent-wording.change',
 ]);
 
 const onPractice = (actor: UserActor, action: Action): boolean =>

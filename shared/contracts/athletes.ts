@@ -11,7 +11,8 @@ import {
   text,
   version,
 } from './primitives.ts';
-import { json, route } from './route.ts';
+import { consentScan, purpose, wordingRef } from './consents.ts';
+import { bytes, json, route } from './route.ts';
 
 const athleteFields = {
   givenName: text(80),
@@ -44,11 +45,6 @@ export const athleteEdit = z
   .required({ version: true })
   .meta({ id: 'AthleteEdit' });
 
-export const purpose = z
-  .enum(['assessment', 'supervision', 'teaching', 'sharing-by-link'])
-  .meta({ id: 'ConsentPurpose' });
-export type Purpose = z.infer<typeof purpose>;
-
 export const consentBody = z
   .object({
     givenBy: z.enum(['athlete', 'guardian']),
@@ -59,6 +55,8 @@ export const consentBody = z
     assent: z.boolean().default(false),
     purposes: z.array(purpose).min(1, 'Choose at least one purpose.').max(4),
     validUntil: day,
+    /** The wording that was read out or shown; null: not known. */
+    wordingId: id.nullable().default(null),
     /** How it was given, for a later reader: on paper, on the tablet … */
     how: text(200, 0).default(''),
   })
@@ -85,6 +83,11 @@ export const consent = z
     guardianRelation: z.string().nullable(),
     assent: z.boolean(),
     purposes: z.array(purpose),
+    /** What of it still holds. */
+    held: z.array(purpose),
+    withdrawals: z.array(z.object({ purpose, at: moment })),
+    wording: wordingRef.nullable(),
+    scan: consentScan.nullable(),
     validFrom: day,
     validUntil: day,
     how: z.string(),
@@ -113,6 +116,8 @@ export const athlete = z
     consentUntil: day.nullable(),
     /** A minor's own yes is all that their consent to filming lacks. */
     assentMissing: z.boolean(),
+    /** The consent to filming was withdrawn: clips are closed, and all is deleted on this day. */
+    deletionDue: day.nullable(),
     lastVisit: day.nullable(),
     visitCount: z.int(),
     version,
@@ -196,12 +201,64 @@ export const athleteRoutes = {
     body: consentBody,
     status: 201,
     answer: json(consent),
-    problems: ['not-found', 'not-allowed'],
+    problems: ['not-found', 'not-allowed', 'edited-meanwhile'],
   }),
   withdrawConsent: route({
     method: 'post',
     path: '/api/consents/:id/withdraw',
-    summary: 'Withdraw a consent; what rested on it stops at once.',
+    summary: 'Withdraw a whole consent; what rested on it stops at once.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: json(consent),
+    problems: ['not-found', 'not-allowed'],
+  }),
+  withdrawPurposes: route({
+    method: 'post',
+    path: '/api/athletes/:id/withdrawals',
+    summary:
+      'Withdraw purposes from every consent that holds them. Filming takes all others with it, closes what was filmed and schedules its deletion.',
+    audience: 'staff',
+    params,
+    body: z.object({ purposes: z.array(purpose).min(1).max(4) }).meta({ id: 'WithdrawalBody' }),
+    status: 200,
+    answer: json(athlete),
+    problems: ['not-found', 'not-allowed'],
+  }),
+  addConsentScan: route({
+    method: 'post',
+    path: '/api/consents/:id/scan',
+    summary:
+      'Put the scan of the paper beside a consent: PDF, JPEG or PNG, up to 10 MB. It takes the place of one that is there.',
+    audience: 'staff',
+    params,
+    body: z.object({}).meta({ id: 'ConsentScanFields' }),
+    multipart: { file: 'scan' },
+    status: 201,
+    answer: json(consent),
+    problems: [
+      'not-found',
+      'not-allowed',
+      'body-too-large',
+      'unsupported-media-type',
+      'upload-incomplete',
+      'storage-full',
+    ],
+  }),
+  consentScan: route({
+    method: 'get',
+    path: '/api/consents/:id/scan',
+    summary: 'The scan of the paper, as a file to save.',
+    audience: 'staff',
+    params,
+    status: 200,
+    answer: bytes(['application/pdf', 'image/jpeg', 'image/png']),
+    problems: ['not-found', 'clip-missing-in-storage'],
+  }),
+  deleteConsentScan: route({
+    method: 'delete',
+    path: '/api/consents/:id/scan',
+    summary: 'Take the scan away from a consent.',
     audience: 'staff',
     params,
     status: 200,

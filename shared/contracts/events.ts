@@ -22,6 +22,8 @@ export const liveEvent = z
     z.object({ type: z.literal('reading'), visitId: id, side }),
     /** Somebody has this clip open, or has left it. Said anew while it lasts, and kept nowhere. */
     z.object({ type: z.literal('here'), clipId: id, by: personRef, here: z.boolean() }),
+    /** A consent was given or withdrawn: what is open of this athlete may be closed by now. */
+    z.object({ type: z.literal('consent'), athleteId: id }),
     z.object({ type: z.literal('signed-out') }),
     /** Told after a gap: events may have been missed, so ask again for all that is shown. */
     z.object({ type: z.literal('missed') }),

@@ -31,6 +31,14 @@ export const PROBLEMS = {
     409,
     'There is no valid consent for filming. Record it on the athlete’s page first.',
   ],
+  'consent-withdrawn': [
+    403,
+    'The consent to filming was withdrawn. What was filmed is closed, and is deleted on the day that the athlete’s page names.',
+  ],
+  'supervision-not-agreed': [
+    403,
+    'The athlete has not agreed that a supervisor looks at this, or has withdrawn it.',
+  ],
   'safety-check-missing': [409, 'Ask the safety questions of this visit first.'],
   'safety-check-stops': [
     409,

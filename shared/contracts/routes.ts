@@ -5,6 +5,7 @@ import { benchRoutes } from './bench.ts';
 import { callRoutes } from './calls.ts';
 import { clipRoutes } from './clip-routes.ts';
 import { commentRoutes } from './comments.ts';
+import { consentWordingRoutes } from './consents.ts';
 import { eventRoutes } from './events.ts';
 import { exportRoutes } from './exports.ts';
 import { headRoutes } from './heads.ts';
@@ -29,6 +30,7 @@ export const routes = {
   ...peopleRoutes,
   ...todayRoutes,
   ...athleteRoutes,
+  ...consentWordingRoutes,
   ...visitRoutes,
   ...clipRoutes,
   ...repRoutes,

@@ -54,6 +54,8 @@ export const waiting = z
       /** Asked for by the one who marks. */
       mine: z.boolean(),
     }),
+    /** Filming was withdrawn: all of the athlete goes on this day, unless they consent anew. */
+    z.object({ kind: z.literal('deletion-due'), due: z.iso.date() }),
     z.object({ kind: z.literal('consent-lapses'), until: z.iso.date() }),
     z.object({ kind: z.literal('link-lapses'), visitId: id, replayId: id, expiresAt: moment }),
   ])

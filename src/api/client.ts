@@ -1,5 +1,5 @@
 import type * as z from 'zod';
-import type { Route } from '#shared/contracts/route.ts';
+import type { Answer, Route } from '#shared/contracts/route.ts';
 import { fillPath, queryString } from './address.ts';
 import { ApiProblem, problemOf } from './problem.ts';
 
@@ -65,6 +65,23 @@ export async function call(route: Route, input: Parts): Promise<unknown> {
   if (!response.ok) throw await problemOf(response);
   if (route.answer.kind !== 'json') return undefined;
   return readAnswer(route.answer.schema, response, signal);
+}
+
+/**
+ * Sends a file to a route that takes a form.
+ * @throws ApiProblem as `call` does
+ */
+export async function send<R extends Route & { multipart: { file: string } }>(
+  route: R,
+  { params, file }: { params: Record<string, string>; file: File },
+): Promise<CallAnswer<R>> {
+  const body = new FormData();
+  body.set(route.multipart.file, file);
+  const init = { method: route.method.toUpperCase(), credentials: 'same-origin', body } as const;
+  const response = await reach(fillPath(route.path, params), init);
+  if (!response.ok) throw await problemOf(response);
+  const schema = (route.answer as Extract<Answer, { kind: 'json' }>).schema;
+  return (await readAnswer(schema, response)) as CallAnswer<R>;
 }
 
 /** A file as the server made it, with the name that the server gave it. */

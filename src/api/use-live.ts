@@ -53,6 +53,10 @@ export function refresh(client: QueryClient, event: Exclude<LiveEvent, { type: '
       if (event.byUserId !== me?.user.id) invalidate(benchOptions(event.clipId).queryKey);
       invalidate(todayQuery.queryKey);
       break;
+    case 'consent':
+      // whatever is open of the athlete is asked for again, and refused where it is closed
+      void client.invalidateQueries();
+      break;
     case 'here':
       // for the Bench alone, which hears it itself
       break;

@@ -182,6 +182,14 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'practice/consent',
+                lazy: lazily(() =>
+                  import('#src/features/practice/consent/consent-wording-page.tsx').then(
+                    (page) => page.ConsentWordingPage,
+                  ),
+                ),
+              },
+              {
                 path: 'practice/set-ups',
                 lazy: lazily(() =>
                   import('#src/features/practice/set-ups-page.tsx').then((page) => page.SetUpsPage),

@@ -1,4 +1,4 @@
-import type { Purpose } from '#shared/contracts/athletes.ts';
+import type { Purpose } from '#shared/contracts/consents.ts';
 import type { Seen } from '#shared/contracts/calls.ts';
 import type { Side, View } from '#shared/contracts/primitives.ts';
 
@@ -24,7 +24,7 @@ export const SEEN_WORDS = {
 
 export const PURPOSE_WORDS = {
   assessment: 'Filming and marking in this practice',
-  supervision: 'Review by a supervisor outside this practice',
+  supervision: 'Review by a supervisor',
   teaching: 'Use in teaching, face covered',
   'sharing-by-link': 'A replay behind a link, for the athlete',
 } as const satisfies Record<Purpose, string>;

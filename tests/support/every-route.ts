@@ -9,6 +9,10 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   listConsents: 'athlete',
   recordConsent: 'athlete',
   withdrawConsent: 'consent',
+  withdrawPurposes: 'athlete',
+  addConsentScan: 'consent',
+  consentScan: 'consent',
+  deleteConsentScan: 'consent',
   listVisits: 'athlete',
   addVisit: 'athlete',
   visit: 'visit',
@@ -71,6 +75,7 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   addAthlete: { givenName: 'Wren', familyName: 'Alder', birthDate: '1999-04-01' },
   editAthlete: { version: 1, sport: 'x' },
   recordConsent: { givenBy: 'athlete', purposes: ['assessment'], validUntil: '2999-01-01' },
+  withdrawPurposes: { purposes: ['teaching'] },
   editVisit: { version: 1, note: 'x' },
   answerSafety: {
     answers: {

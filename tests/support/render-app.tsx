@@ -11,6 +11,7 @@ import { signInAddress } from '#src/app/sign-in-address.ts';
 import { StatusProvider } from '#src/ui/status.tsx';
 import { fakeApi } from './fake-api.ts';
 import { aProtocolPage } from './protocol.ts';
+import { aWordingPage } from './consent-wording.ts';
 import { aMe } from './records.ts';
 
 /** A stream that stays silent: live events have tests of their own. */
@@ -25,7 +26,8 @@ export function signedInApi(role: Role = 'coach') {
   vi.stubGlobal('EventSource', SilentEvents);
   return fakeApi()
     .on(routes.me, () => aMe(role))
-    .on(routes.protocol, () => aProtocolPage());
+    .on(routes.protocol, () => aProtocolPage())
+    .on(routes.consentWording, () => aWordingPage());
 }
 
 /** The whole product at an address, as main.tsx puts it together. */

@@ -89,6 +89,7 @@ export const seedAthlete = (
       guardianRelation: consent.guardian?.relation ?? null,
       assent: consent.guardian !== undefined,
       purposes: [...consent.purposes],
+      held: [...consent.purposes],
       validFrom: daysLater(today(), -60),
       validUntil: daysLater(today(), consent.daysLeft),
       how: 'On paper, kept at reception.',

@@ -1,4 +1,4 @@
-import type { Purpose } from '#shared/contracts/athletes.ts';
+import type { Purpose } from '#shared/contracts/consents.ts';
 import type { Seen, SeenSubstitution } from '#shared/contracts/calls.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { Exclusion } from '#shared/contracts/reps.ts';

@@ -37,7 +37,7 @@ const consentedOn = (on: string): Where => {
   const { sql, params } = counting(on);
   return {
     sql: `exists (
-      select from consent x where x.athlete_id = a.id and ${sql} and 'assessment' = any (x.purposes)
+      select from consent x where x.athlete_id = a.id and ${sql} and 'assessment' = any (x.held)
     )`,
     params,
   };

@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import type { Purpose } from '#shared/contracts/athletes.ts';
+import type { Purpose } from '#shared/contracts/consents.ts';
 import { counting } from './consent-check.ts';
 
 /** An athlete with what is known about them at a glance. */
@@ -20,6 +20,8 @@ export type AthleteRow = {
   consent_until: string | null;
   /** A consent to filming would be valid, had the child's own yes been recorded. */
   assent_missing: boolean;
+  /** Since the consent to filming was withdrawn: the day of the deletion. */
+  deletion_due: string | null;
   last_visit: string | null;
   visit_count: number;
 };
@@ -32,19 +34,19 @@ export interface Where {
 /** One athlete can have several consents at once. @param counts that a consent counts today */
 const select = (counts: string): string => `
   select a.id, a.given_name, a.family_name, a.birth_date::text, a.height_mm, a.sport, a.cautions, a.contact_email,
-    a.coach_id, coach.name as coach_name, a.version, a.created_at,
+    a.coach_id, coach.name as coach_name, a.version, a.created_at, a.deletion_due::text,
     c.consented_to, c.consent_until::text, m.assent_missing, v.last_visit::text, v.visit_count
   from athlete a
   join account coach on coach.id = a.coach_id
   left join lateral (
     select array_agg(distinct purpose) as consented_to, max(valid_until) as consent_until
-    from consent x cross join unnest(x.purposes) as purpose
+    from consent x cross join unnest(x.held) as purpose
     where x.athlete_id = a.id and ${counts}
   ) c on true
   left join lateral (
     select exists (
       select from consent x where x.athlete_id = a.id and x.withdrawn_at is null and not x.assent
-        and ?::date between x.valid_from and x.valid_until and 'assessment' = any (x.purposes)
+        and ?::date between x.valid_from and x.valid_until and 'assessment' = any (x.held)
     ) as assent_missing
   ) m on true
   left join lateral (

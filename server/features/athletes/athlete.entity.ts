@@ -16,6 +16,11 @@ export const Athlete = defineEntity({
     sport: p.text().default(''),
     cautions: p.text().default(''),
     contactEmail: p.text().nullable(),
+    /**
+     * Set by the withdrawal of the consent to filming: what was filmed is closed, and goes on this day. A new consent
+     * takes it back.
+     */
+    deletionDue: p.date().nullable(),
     createdAt: madeAt(),
     version: p.integer().version(),
   },

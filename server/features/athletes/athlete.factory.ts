@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import type { Purpose } from '#shared/contracts/athletes.ts';
+import type { Purpose } from '#shared/contracts/consents.ts';
 import type { User } from '../accounts/user.entity.ts';
 import { Athlete } from './athlete.entity.ts';
 import { Consent } from './consent.entity.ts';
@@ -43,6 +43,7 @@ export const makeConsent = (
     givenBy: 'athlete',
     assent: false,
     purposes: ['assessment', 'supervision', 'sharing-by-link'],
+    held: given.purposes ?? ['assessment', 'supervision', 'sharing-by-link'],
     validFrom: new Date().toISOString().slice(0, 10),
     validUntil: new Date(Date.now() + 365 * 86_400_000).toISOString().slice(0, 10),
     how: 'On paper.',

@@ -1,4 +1,5 @@
 import type { Athlete, Consent as ConsentShape } from '#shared/contracts/athletes.ts';
+import { presentWordingRef } from '../consents/wording.presenter.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import type { Page } from './athlete-list.ts';
 import type { AthleteRow, CoachRow } from './athlete-rows.ts';
@@ -22,6 +23,7 @@ export const presentAthlete = (row: AthleteRow): Athlete => ({
     row.assent_missing &&
     isMinor(row.birth_date) &&
     !(row.consented_to ?? []).includes('assessment'),
+  deletionDue: row.deletion_due,
   lastVisit: row.last_visit,
   visitCount: row.visit_count,
   version: row.version,
@@ -44,7 +46,7 @@ const stateOf = (consent: Consent): ConsentShape['state'] => {
     : 'valid';
 };
 
-/** @param consent with `recordedBy` and `athlete` loaded */
+/** @param consent with `recordedBy`, `wording` and `athlete` loaded */
 export const presentConsent = (consent: Consent): ConsentShape => ({
   id: consent.id,
   givenBy: consent.givenBy,
@@ -52,6 +54,12 @@ export const presentConsent = (consent: Consent): ConsentShape => ({
   guardianRelation: consent.guardianRelation ?? null,
   assent: consent.assent,
   purposes: consent.purposes,
+  held: consent.held,
+  withdrawals: consent.withdrawals.map(({ purpose, at }) => ({ purpose, at })),
+  wording: consent.wording ? presentWordingRef(consent.wording.unwrap()) : null,
+  scan: consent.scan
+    ? { type: consent.scan.type, bytes: consent.scan.bytes, at: consent.scan.at }
+    : null,
   validFrom: consent.validFrom,
   validUntil: consent.validUntil,
   how: consent.how,

@@ -3,7 +3,8 @@ import type { Feature } from '../../main/feature.ts';
 import { listAthletes } from './athlete-list.ts';
 import { presentAthlete, presentAthletes, presentConsent } from './athletes.presenter.ts';
 import { addAthlete, editAthlete, readAthlete } from './athletes.service.ts';
-import { listConsents, recordConsent, withdrawConsent } from './consents.service.ts';
+import { listConsents, recordConsent } from './consents.service.ts';
+import { withdrawConsent, withdrawPurposes } from './withdraw.ts';
 
 export const athletesFeature: Feature = ({ serve }) => {
   serve(routes.listAthletes, async ({ work, query }) =>
@@ -26,5 +27,8 @@ export const athletesFeature: Feature = ({ serve }) => {
   );
   serve(routes.withdrawConsent, async ({ work, params }) =>
     presentConsent(await work((unit) => withdrawConsent(unit, params.id))),
+  );
+  serve(routes.withdrawPurposes, async ({ work, params, body }) =>
+    presentAthlete(await work((unit) => withdrawPurposes(unit, params.id, body.purposes))),
   );
 };

@@ -11,7 +11,7 @@ import { type AthleteRow, readAthletes } from './athlete-rows.ts';
 import { Athlete } from './athlete.entity.ts';
 import { today } from './days.ts';
 
-const rowOf = async ({ em }: Unit<UserActor>, id: string): Promise<AthleteRow> => {
+export const rowOf = async ({ em }: Unit<UserActor>, id: string): Promise<AthleteRow> => {
   const [row] = await readAthletes(em, today(), { sql: 'a.id = ?', params: [id] });
   return found(row);
 };

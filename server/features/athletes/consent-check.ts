@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import type { Purpose } from '#shared/contracts/athletes.ts';
+import type { Purpose } from '#shared/contracts/consents.ts';
 import { Problem } from '../../http/problem.ts';
 import { adultIfBornBy, today } from './days.ts';
 
@@ -23,7 +23,7 @@ export const hasConsent = async (
   const counts = counting(today());
   const rows = await em.execute<unknown[]>(
     `select 1 from consent x join athlete a on a.id = x.athlete_id
-     where a.id = ? and ${counts.sql} and ? = any (x.purposes) limit 1`,
+     where a.id = ? and ${counts.sql} and ? = any (x.held) limit 1`,
     [athleteId, ...counts.params, purpose],
   );
   return rows.length > 0;

@@ -2,13 +2,13 @@ import type * as z from 'zod';
 import type { UserActor } from '#shared/access/actors.ts';
 import type { consentBody } from '#shared/contracts/athletes.ts';
 import type { Unit } from '#server/db/in-practice.ts';
-import { found, needCaseload } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../audit/audit.ts';
 import { athleteInSight } from './athlete-in-sight.ts';
 import type { Athlete } from './athlete.entity.ts';
-import { hasConsent } from './consent-check.ts';
+import { takeBackDeletion, tellConsent } from './deletion-due.ts';
+import { currentWording } from '../consents/wording.service.ts';
 import { Consent } from './consent.entity.ts';
 import { isMinor, today } from './days.ts';
 
@@ -21,7 +21,7 @@ export const listConsents = async (
   return unit.em.find(
     Consent,
     { athlete: athleteId },
-    { orderBy: { recordedAt: 'desc', id: 'desc' }, populate: ['recordedBy', 'athlete'] },
+    { orderBy: { recordedAt: 'desc', id: 'desc' }, populate: ['recordedBy', 'athlete', 'wording'] },
   );
 };
 
@@ -58,34 +58,26 @@ export const recordConsent = async (
   const { em, actor } = unit;
   const athlete = await athleteInSight(unit, athleteId, 'consent.record');
   needUsable(athlete, given);
+  const { wordingId, ...said } = given;
+  const wording = wordingId === null ? null : await currentWording(em);
+  if (wording && wording.id !== wordingId)
+    throw new Problem(
+      'edited-meanwhile',
+      'The wording was changed meanwhile. Read out the new one, then record the consent.',
+    );
+  const purposes = [...new Set(given.purposes)];
   const consent = em.create(Consent, {
-    ...given,
-    purposes: [...new Set(given.purposes)],
+    ...said,
+    purposes,
+    held: purposes,
+    wording,
     athlete,
     validFrom: today(),
     recordedBy: await em.findOneOrFail(User, { id: actor.id }),
   });
   audit(unit, 'consent.record', consent.id, { athlete: athleteId });
   await em.flush();
-  return consent;
-};
-
-/** Withdraws a consent. Links to replays die with the last consent to sharing. */
-export const withdrawConsent = async (unit: Unit<UserActor>, id: string): Promise<Consent> => {
-  const { em, actor } = unit;
-  const consent = found(await em.findOne(Consent, { id }, { populate: ['athlete', 'recordedBy'] }));
-  const athlete = consent.athlete.unwrap();
-  needCaseload(actor, 'consent.withdraw', athlete);
-  if (consent.withdrawnAt) return consent;
-  em.assign(consent, { withdrawnAt: new Date(), withdrawnBy: em.getReference(User, actor.id) });
-  audit(unit, 'consent.withdraw', id, { athlete: athlete.id });
-  await em.flush();
-  if (!(await hasConsent(em, athlete.id, 'sharing-by-link'))) {
-    await em.execute(
-      `update replay set revoked_at = now() from visit
-       where visit.id = replay.visit_id and visit.athlete_id = ? and replay.revoked_at is null`,
-      [athlete.id],
-    );
-  }
+  await takeBackDeletion(unit, athlete);
+  await tellConsent(unit, athlete);
   return consent;
 };

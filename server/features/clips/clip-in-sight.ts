@@ -4,6 +4,7 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { found, needCaseload } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
+import { needOpen } from '../athletes/consent-gate.ts';
 import { Clip } from './clip.entity.ts';
 
 /** A clip with the person filmed and who sent it. */
@@ -15,7 +16,7 @@ export interface ClipInSight {
 /**
  * The clip, if this actor may do this with it.
  * @param frames load the frame table too: thousands of numbers
- * @throws Problem 'not-found' or 'not-allowed'
+ * @throws Problem 'not-found', 'not-allowed', 'consent-withdrawn' or 'supervision-not-agreed'
  */
 export const clipInSight = async (
   { em, actor }: Unit<UserActor>,
@@ -32,6 +33,7 @@ export const clipInSight = async (
   );
   const athlete = clip.visit.unwrap().athlete.unwrap() as Athlete;
   needCaseload(actor, action, athlete);
+  await needOpen({ em, actor }, athlete, action);
   return { clip: clip, athlete };
 };
 

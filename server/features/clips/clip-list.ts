@@ -4,7 +4,7 @@ import type { clipRoutes } from '#shared/contracts/clip-routes.ts';
 import type { ClipRow } from '#shared/contracts/clips.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { need } from '../../http/need.ts';
-import { inSightSql } from '../athletes/caseload.ts';
+import { openInSightSql } from '../athletes/consent-gate.ts';
 
 export type ClipListQuery = z.output<(typeof clipRoutes)['listClips']['query']>;
 
@@ -37,7 +37,7 @@ export const listClips = async (
   { state, athleteId, page, pageSize }: ClipListQuery,
 ): Promise<{ items: ClipRow[]; total: number; page: number; pageSize: number }> => {
   need(actor, 'practice.read', { kind: 'practice', practiceId: actor.practiceId });
-  const sight = inSightSql(actor, 'a.coach_id');
+  const sight = openInSightSql(actor);
   const parts = [sight.sql];
   const params: (string | number)[] = [...sight.params];
   if (state !== undefined) {

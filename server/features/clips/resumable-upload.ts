@@ -13,6 +13,8 @@ import { Problem } from '../../http/problem.ts';
 import { staffOf } from '../../http/session.ts';
 import type { Feature } from '../../main/feature.ts';
 import { User } from '../accounts/user.entity.ts';
+import type { Athlete } from '../athletes/athlete.entity.ts';
+import { needOpen } from '../athletes/consent-gate.ts';
 import { acceptClip, shownName } from './accept-clip.ts';
 import { Clip } from './clip.entity.ts';
 import { cameraOf, needSize, needUploadAllowed } from './upload-gate.ts';
@@ -23,11 +25,13 @@ const UUID = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/;
 
 /**
  * An upload that is under way.
- * @throws Problem 'not-found'
+ * @throws Problem 'not-found' or 'consent-withdrawn'
  */
-const uploadInSight = async ({ em, actor }: Unit<UserActor>, id: string): Promise<Upload> => {
-  const upload = found(await em.findOne(Upload, { id }, { populate: ['visit.athlete'] }));
-  needCaseload(actor, 'clip.upload', upload.visit.unwrap().athlete.unwrap());
+const uploadInSight = async (unit: Unit<UserActor>, id: string): Promise<Upload> => {
+  const upload = found(await unit.em.findOne(Upload, { id }, { populate: ['visit.athlete'] }));
+  const athlete = upload.visit.unwrap().athlete.unwrap() as Athlete;
+  needCaseload(unit.actor, 'clip.upload', athlete);
+  await needOpen(unit, athlete, 'clip.upload');
   return upload;
 };
 

@@ -3,12 +3,11 @@ import type { Request, Response } from 'express';
 import { MissingFile, type Storage } from '#server/storage/storage.ts';
 import { Problem } from '../../http/problem.ts';
 
-/** Health data: kept by the browser that may see it, by nothing between. */
-const PRIVATE = {
-  staff: 'private, max-age=3600',
-  /** Asked for again each time (304 while the link lives), so that an ended link plays nothing from the cache. */
-  link: 'private, no-cache',
-};
+/**
+ * Health data: kept by the browser that may see it, by nothing between, and asked for again each time (304 while it
+ * may be seen), so that an ended link or a withdrawn consent plays nothing from the cache.
+ */
+const PRIVATE = 'private, no-cache';
 
 const cutShort = (error: unknown): boolean =>
   error instanceof Error && 'code' in error && error.code === 'ERR_STREAM_PREMATURE_CLOSE';
@@ -23,7 +22,6 @@ export const sendStored = async (
   storage: Storage,
   key: string,
   type: string,
-  reader: keyof typeof PRIVATE = 'staff',
 ): Promise<void> => {
   const { bytes, modified } = await storage.stat(key).catch((error: unknown) => {
     throw error instanceof MissingFile ? new Problem('clip-missing-in-storage') : error;
@@ -32,7 +30,7 @@ export const sendStored = async (
   res.set({
     'Content-Type': type,
     'Accept-Ranges': 'bytes',
-    'Cache-Control': PRIVATE[reader],
+    'Cache-Control': PRIVATE,
     ETag: etag,
     'Last-Modified': modified.toUTCString(),
   });

@@ -9,6 +9,7 @@ import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
 import { audit } from '../audit/audit.ts';
+import { needOpen } from '../athletes/consent-gate.ts';
 import { clipInSight, needFrames } from '../clips/clip-in-sight.ts';
 import { Comment } from './comment.entity.ts';
 import { COMMENT_ORDER } from './comments.presenter.ts';
@@ -83,6 +84,7 @@ const commentInSight = async (
     byUserId: comment.by.id,
   } as const;
   need(actor, action, resource, athlete.id);
+  await needOpen({ em, actor }, athlete, action);
   return { comment: comment, athlete };
 };
 

@@ -11,6 +11,10 @@ export const Practice = defineEntity({
     contact: p.text().default(''),
     /** Owners do nothing before they have set up one-time codes. */
     ownersNeedCode: p.boolean().default(false),
+    /** An athlete is deleted so long after their last visit; null: nothing is deleted by itself. */
+    keepMonths: p.integer().nullable(),
+    /** So many days lie between the withdrawal of a consent to filming and the deletion. */
+    withdrawalDays: p.integer().default(30),
     createdAt: madeAt(),
   },
 });

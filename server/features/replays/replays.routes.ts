@@ -95,7 +95,7 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
         mediaOfLink(unit, copy),
       );
       if (!key) throw new Problem('not-found');
-      await sendStored(req, res, storage, key, type, 'link');
+      await sendStored(req, res, storage, key, type);
     });
   }
 };

@@ -3,6 +3,7 @@ import type { UserActor } from '#shared/access/actors.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { found, needCaseload } from '../../http/need.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
+import { needOpen } from '../athletes/consent-gate.ts';
 import type { Clip } from '../clips/clip.entity.ts';
 import { Rep } from './rep.entity.ts';
 
@@ -15,7 +16,7 @@ export interface RepInSight {
 
 /**
  * The rep, if this actor may do this with it.
- * @throws Problem 'not-found' or 'not-allowed'
+ * @throws Problem 'not-found', 'not-allowed', 'consent-withdrawn' or 'supervision-not-agreed'
  */
 export const repInSight = async (
   { em, actor }: Unit<UserActor>,
@@ -28,5 +29,6 @@ export const repInSight = async (
   const clip = rep.clip.unwrap() as Clip;
   const athlete = clip.visit.unwrap().athlete.unwrap() as Athlete;
   needCaseload(actor, action, athlete);
+  await needOpen({ em, actor }, athlete, action);
   return { rep, clip, athlete };
 };

@@ -4,6 +4,7 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { found, needCaseload } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
+import { needOpen } from '../athletes/consent-gate.ts';
 import type { Clip } from '../clips/clip.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { SecondMarking } from './second-marking.entity.ts';
@@ -44,6 +45,7 @@ export const secondInSight = async (
   const clip = rep.clip.unwrap() as Clip;
   const athlete = clip.visit.unwrap().athlete.unwrap() as Athlete;
   needCaseload(actor, action, athlete);
+  await needOpen({ em, actor }, athlete, action);
   return { marking, rep, clip, athlete };
 };
 

@@ -7,7 +7,7 @@ import {
   AT_MOST,
   ATHLETE,
   type Named,
-  ownAthletes,
+  ownOpenAthletes,
   type WaitingItem,
   whoAndWhen,
 } from './scope.ts';
@@ -26,7 +26,7 @@ type ClipRow = Named & {
 
 /** Clips that are on their way, those the machine gave up on, and those that have to be sent or filmed again. */
 export const clipTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
-  const own = ownAthletes(actor);
+  const own = ownOpenAthletes(actor);
   const rows = await em.execute<ClipRow[]>(
     `select ${ATHLETE}, c.uploaded_at as at, c.id as clip_id, c.visit_id, c.name, c.state, c.progress,
        c.refusal_code, c.refusal_figures, c.trouble, c.next_try_at

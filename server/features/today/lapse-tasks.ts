@@ -17,13 +17,28 @@ const LINK_DAYS = 3;
 type ConsentRow = Named & { until: string };
 type LinkRow = Named & { visit_id: string; replay_id: string; expires_at: Date | string };
 
+type DeletionRow = Named & { due: string };
+
+/** Athletes who go on a day that is named, because their consent to filming was withdrawn; soonest first. */
+export const deletionTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
+  const scope = answeredFor(actor);
+  const rows = await em.execute<DeletionRow[]>(
+    `select ${ATHLETE}, coalesce(max(x.withdrawn_at), now()) as at, a.deletion_due::text as due
+     from athlete a left join consent x on x.athlete_id = a.id
+     where ${scope.sql} and a.deletion_due is not null
+     group by a.id order by a.deletion_due, a.id limit ${AT_MOST}`,
+    [...scope.params],
+  );
+  return rows.map((row) => ({ kind: 'deletion-due', due: row.due, ...whoAndWhen(row) }));
+};
+
 /** Athletes whose last valid consent to filming ends soon. */
 export const consentTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
   const scope = answeredFor(actor);
   const rows = await em.execute<ConsentRow[]>(
     `select ${ATHLETE}, max(x.recorded_at) as at, max(x.valid_until)::text as until
      from consent x join athlete a on a.id = x.athlete_id
-     where ${scope.sql} and x.withdrawn_at is null and 'assessment' = any (x.purposes)
+     where ${scope.sql} and x.withdrawn_at is null and 'assessment' = any (x.held)
        and x.valid_from <= ?::date
      group by a.id having max(x.valid_until) between ?::date and ?::date
      order by until, a.id limit ${AT_MOST}`,

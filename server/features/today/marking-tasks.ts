@@ -5,7 +5,7 @@ import {
   AT_MOST,
   ATHLETE,
   type Named,
-  ownAthletes,
+  ownOpenAthletes,
   type WaitingItem,
   whoAndWhen,
 } from './scope.ts';
@@ -15,7 +15,7 @@ type RepRow = Named & { clip_id: string; number: number | null; side: Side | nul
 
 /** Sides that were filmed and that nobody has called by eye yet, longest waiting first. */
 export const callTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
-  const own = ownAthletes(actor);
+  const own = ownOpenAthletes(actor);
   const rows = await em.execute<CallRow[]>(
     `select ${ATHLETE}, min(c.uploaded_at) as at, v.id as visit_id, filmed.side
      from visit v
@@ -40,7 +40,7 @@ export const callTasks = async ({ em, actor }: Unit<UserActor>): Promise<Waiting
 
 /** Reps on which no frame is marked, and clips in which no rep is named, longest waiting first. */
 export const repTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
-  const own = ownAthletes(actor);
+  const own = ownOpenAthletes(actor);
   const rows = await em.execute<RepRow[]>(
     `select ${ATHLETE}, c.uploaded_at as at, c.id as clip_id, r.number, coalesce(r.support_side, c.support_side) as side
      from clip c

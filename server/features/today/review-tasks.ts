@@ -2,7 +2,7 @@ import type { UserActor } from '#shared/access/actors.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import { readingLabel, type ReadingCode } from '#shared/contracts/readings.ts';
 import type { Unit } from '#server/db/in-practice.ts';
-import { inSightSql } from '../athletes/caseload.ts';
+import { openInSightSql } from '../athletes/consent-gate.ts';
 import { AT_MOST, ATHLETE, type Named, type WaitingItem, whoAndWhen } from './scope.ts';
 
 /** Older readings are history, not work. */
@@ -29,7 +29,7 @@ type CommentRow = Named & {
  * else's until that person has commented on the visit since. A side without a call by eye shows no reading.
  */
 export const readingTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
-  const inSight = inSightSql(actor, 'a.coach_id');
+  const inSight = openInSightSql(actor);
   const rows = await em.execute<ReadingRow[]>(
     `select ${ATHLETE}, r.at, r.visit_id, r.side, r.code, r.before60, r.gate_from
      from side_setting s
@@ -58,7 +58,7 @@ export const readingTasks = async ({ em, actor }: Unit<UserActor>): Promise<Wait
 
 /** Open threads whose last word is somebody else's: on one's own athletes, or begun or joined by oneself. */
 export const commentTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
-  const inSight = inSightSql(actor, 'a.coach_id');
+  const inSight = openInSightSql(actor);
   const rows = await em.execute<CommentRow[]>(
     `select ${ATHLETE}, last.at, m.clip_id, m.id as comment_id, m.from_frame as frame, last.body, u.id as by_id,
        u.name as by_name

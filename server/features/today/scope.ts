@@ -21,6 +21,10 @@ export const whoAndWhen = ({ athlete_id, athlete_name, at }: Named) => ({
 export const ownAthletes = (actor: UserActor) =>
   ({ sql: 'a.coach_id = ?', params: [actor.id] }) as const;
 
+/** Those of them whose clips may be opened. */
+export const ownOpenAthletes = (actor: UserActor) =>
+  ({ sql: 'a.coach_id = ? and a.deletion_due is null', params: [actor.id] }) as const;
+
 /** An owner answers for the whole practice where consents and links are concerned. */
 export const answeredFor = (actor: UserActor) =>
   actor.role === 'owner' ? ({ sql: 'true', params: [] } as const) : ownAthletes(actor);

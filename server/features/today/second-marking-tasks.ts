@@ -1,7 +1,7 @@
 import type { UserActor } from '#shared/access/actors.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { Unit } from '#server/db/in-practice.ts';
-import { inSightSql } from '../athletes/caseload.ts';
+import { openInSightSql } from '../athletes/consent-gate.ts';
 import { AT_MOST, ATHLETE, type Named, type WaitingItem, whoAndWhen } from './scope.ts';
 
 type SecondRow = Named & {
@@ -18,7 +18,7 @@ export const secondMarkingTasks = async ({
   em,
   actor,
 }: Unit<UserActor>): Promise<WaitingItem[]> => {
-  const inSight = inSightSql(actor, 'a.coach_id');
+  const inSight = openInSightSql(actor);
   const rows = await em.execute<SecondRow[]>(
     `select ${ATHLETE}, s.asked_at as at, s.id as second_marking_id, r.number, r.support_side as side,
        jsonb_array_length(s.frames) as frames, u.id as by_id, u.name as by_name

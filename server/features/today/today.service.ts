@@ -5,7 +5,7 @@ import { need } from '../../http/need.ts';
 import { inSightSql } from '../athletes/caseload.ts';
 import { daysLater, today } from '../athletes/days.ts';
 import { clipTasks } from './clip-tasks.ts';
-import { consentTasks, linkTasks } from './lapse-tasks.ts';
+import { consentTasks, deletionTasks, linkTasks } from './lapse-tasks.ts';
 import { callTasks, repTasks } from './marking-tasks.ts';
 import { commentTasks, readingTasks } from './review-tasks.ts';
 import type { WaitingItem } from './scope.ts';
@@ -19,6 +19,7 @@ const KINDS: readonly ((unit: Unit<UserActor>) => Promise<WaitingItem[]>)[] = [
   callTasks,
   repTasks,
   clipTasks,
+  deletionTasks,
   consentTasks,
   linkTasks,
 ];

@@ -10,7 +10,6 @@ import {
   athleteId,
   aVisitRow,
   coachId,
-  consentId,
   otherId,
   visitId,
 } from '#tests/support/records.ts';
@@ -170,15 +169,58 @@ describe('consent', () => {
     });
   });
 
-  it('is withdrawn only after a question', async () => {
+  it('is withdrawn purpose by purpose, after a question that says what stops', async () => {
     const api = athleteApi()
-      .on(routes.listConsents, () => ({ items: [aConsent()] }))
-      .on(routes.withdrawConsent, () => aConsent({ state: 'withdrawn' }));
+      .on(routes.listConsents, () => ({
+        items: [
+          aConsent({
+            purposes: ['assessment', 'teaching'],
+            held: ['assessment', 'teaching'],
+          }),
+        ],
+      }))
+      .on(routes.withdrawPurposes, () => anAthlete());
     const { user } = renderAt(`/athletes/${athleteId}`);
-    await user.click(await screen.findByRole('button', { name: 'Withdraw' }));
-    expect(api.calls(routes.withdrawConsent)).toHaveLength(0);
+    await user.click(await screen.findByRole('button', { name: /^Withdraw: Use in teaching/ }));
+    expect(api.calls(routes.withdrawPurposes)).toHaveLength(0);
+    expect(screen.getByText(/no clip of Ines may be shown to learners/)).toBeVisible();
     await user.click(screen.getByRole('button', { name: 'Withdraw it' }));
-    await waitFor(() => expect(api.calls(routes.withdrawConsent)[0]?.params.id).toBe(consentId));
+    await waitFor(() => expect(api.calls(routes.withdrawPurposes)).toHaveLength(1));
+    expect(api.calls(routes.withdrawPurposes)[0]).toMatchObject({
+      params: { id: athleteId },
+      body: { purposes: ['teaching'] },
+    });
+    await user.click(await screen.findByRole('button', { name: /^Withdraw: Filming/ }));
+    expect(screen.getByText(/deleted after the days that the practice has\s+set/)).toBeVisible();
+  });
+
+  it('that was withdrawn says on which day everything goes, and what is no longer held', async () => {
+    athleteApi(anAthlete({ consentedTo: [], deletionDue: '2099-02-03' })).on(
+      routes.listConsents,
+      () => ({
+        items: [aConsent({ state: 'withdrawn', held: [], withdrawnAt: '2026-03-03T16:20:00Z' })],
+      }),
+    );
+    renderAt(`/athletes/${athleteId}`);
+    expect(await screen.findByText(/everything about/)).toHaveTextContent(/3 February 2099/);
+    expect(await screen.findByText('Earlier consents (1)')).toBeVisible();
+  });
+
+  it('takes a scan of the paper, and says what is wrong with one', async () => {
+    const scan = { type: 'application/pdf', bytes: 10, at: '2026-03-03T16:20:00Z' } as const;
+    let kept = aConsent();
+    const api = athleteApi()
+      .on(routes.listConsents, () => ({ items: [kept] }))
+      .on(routes.addConsentScan, () => new Refuse('unsupported-media-type', { detail: 'No.' }));
+    const { user } = renderAt(`/athletes/${athleteId}`);
+    const input = await screen.findByLabelText('Scan of the paper');
+    const paper = new File(['%PDF-'], 'paper.pdf', { type: 'application/pdf' });
+    await user.upload(input, paper);
+    expect(await screen.findByText('No.')).toBeVisible();
+    api.on(routes.addConsentScan, () => (kept = aConsent({ scan })));
+    await user.upload(input, paper);
+    expect(await screen.findByRole('button', { name: /^Save the scan \(PDF/ })).toBeVisible();
+    expect(screen.getByRole('button', { name: 'Replace the scan' })).toBeVisible();
   });
 });
 
@@ -228,7 +270,7 @@ describe('the athlete’s links', () => {
     const links = within(await screen.findByRole('region', { name: 'Links' }));
     expect(await links.findByText(/opened twice/)).toBeVisible();
     expect(await screen.findByText(/Recorded by/)).toBeVisible();
-    for (const name of ['End it', 'Withdraw'])
+    for (const name of ['End it', /^Withdraw/])
       expect(screen.queryByRole('button', { name })).toBeNull();
     for (const name of ['Change details', 'New visit', 'Record another consent'])
       expect(screen.queryByRole('link', { name })).toBeNull();

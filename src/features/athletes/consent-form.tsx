@@ -2,7 +2,8 @@ import { useQueryClient } from '@tanstack/react-query';
 import { useWatch } from 'react-hook-form';
 import { useNavigate } from 'react-router-dom';
 import type * as z from 'zod';
-import { consentBody, type Athlete, type Purpose } from '#shared/contracts/athletes.ts';
+import { consentBody, type Athlete } from '#shared/contracts/athletes.ts';
+import type { ConsentWording, Purpose } from '#shared/contracts/consents.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { athletesKey } from '#src/api/athletes.queries.ts';
 import { call } from '#src/api/client.ts';
@@ -21,15 +22,20 @@ import { PURPOSES, PURPOSE_WORDS } from '#src/ui/words.ts';
 
 type Typed = z.input<typeof consentBody>;
 
-const PURPOSE_NOTES: Record<Purpose, string> = {
-  assessment:
-    'Clips are kept in this practice and seen by its coach and supervisor. Nothing works without this.',
-  supervision: 'An experienced colleague elsewhere looks at clips and marks.',
-  teaching: 'Shown to others who learn; never with the face.',
-  'sharing-by-link': 'A link opens one replay and nothing else. It can be ended at any time.',
-};
+/** Nothing of the wording is repeated here; it is read out above each box. */
+const noteOf = (purpose: Purpose, { texts }: ConsentWording): string =>
+  purpose === 'assessment' ? `${texts[purpose]} Nothing works without this.` : texts[purpose];
 
-export function ConsentForm({ athlete, next }: { athlete: Athlete; next: string }) {
+/** Who agreed to what, to these words. */
+export function ConsentForm({
+  athlete,
+  wording,
+  next,
+}: {
+  athlete: Athlete;
+  wording: ConsentWording;
+  next: string;
+}) {
   const client = useQueryClient();
   const navigate = useNavigate();
   const say = useStatus();
@@ -41,6 +47,7 @@ export function ConsentForm({ athlete, next }: { athlete: Athlete; next: string 
     assent: false,
     purposes: [],
     validUntil: yearsOn(today(), 1),
+    wordingId: wording.id,
     how: '',
   });
   const byGuardian = useWatch({ control: form.control, name: 'givenBy' }) === 'guardian';
@@ -62,6 +69,14 @@ export function ConsentForm({ athlete, next }: { athlete: Athlete; next: string 
   };
   return (
     <Form form={form} send={send} className="max-w-form space-y-7">
+      <div className="space-y-2 border-l-[3px] border-rule pl-3.5">
+        <p className="whitespace-pre-line">{wording.texts.intro}</p>
+        {athlete.minor && <p className="whitespace-pre-line">{wording.texts.minors}</p>}
+        <p className="whitespace-pre-line">{wording.texts.withdrawal}</p>
+        <p className="text-note text-soft">
+          Wording {wording.version} of the practice, read out or shown before anything is ticked.
+        </p>
+      </div>
       {athlete.minor ? (
         <p>
           {athlete.givenName} is under 18: a guardian gives the consent, and {athlete.givenName} is
@@ -92,7 +107,7 @@ export function ConsentForm({ athlete, next }: { athlete: Athlete; next: string 
             name="purposes"
             value={purpose}
             label={PURPOSE_WORDS[purpose]}
-            note={PURPOSE_NOTES[purpose]}
+            note={noteOf(purpose, wording)}
             quiet
           />
         ))}
@@ -108,13 +123,13 @@ export function ConsentForm({ athlete, next }: { athlete: Athlete; next: string 
         name="validUntil"
         type="date"
         label="Valid until"
-        hint="You are reminded before it lapses."
+        hint="You are reminded before it lapses. After that day nothing new is filmed and no link opens; what is there stays until its term ends."
       />
       <TextField<Typed>
         name="how"
         label="How it was given"
         optional
-        hint="On paper, kept in the file; on the tablet; by letter …"
+        hint="On paper, kept in the file; on the tablet; by letter … A scan of the paper can be added afterwards."
       />
       <div className="flex flex-wrap gap-3">
         <Button

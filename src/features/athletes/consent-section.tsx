@@ -1,30 +1,29 @@
-import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { useQuery } from '@tanstack/react-query';
 import type { Athlete, Consent } from '#shared/contracts/athletes.ts';
-import { routes } from '#shared/contracts/routes.ts';
-import { athletesKey, consentsOptions } from '#src/api/athletes.queries.ts';
-import { call } from '#src/api/client.ts';
+import { consentsOptions } from '#src/api/athletes.queries.ts';
 import { useMay } from '#src/api/use-may.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
-import { ConfirmButton } from '#src/ui/confirm.tsx';
 import { longDay, moment } from '#src/ui/days.ts';
 import { Fold } from '#src/ui/fold.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
-import { StateDot } from '#src/ui/state-dot.tsx';
-import { Empty, ErrorState, Loading } from '#src/ui/states.tsx';
-import { useStatus } from '#src/ui/status.tsx';
-import { PURPOSES, PURPOSE_WORDS } from '#src/ui/words.ts';
+import { Caution, Empty, ErrorState, Loading } from '#src/ui/states.tsx';
+import { PURPOSE_WORDS } from '#src/ui/words.ts';
+import { GivenConsent } from './given-consent.tsx';
+import { HeldPurposes } from './held-purposes.tsx';
 
 /** What was agreed to, by whom and until when; each purpose stands by itself. */
 export function ConsentSection({ athlete }: { athlete: Athlete }) {
   const may = useMay(athlete.coach.id);
   const consents = useQuery(consentsOptions(athlete.id));
-  const valid = consents.data?.items.filter(({ state }) => state === 'valid') ?? [];
-  const unasked = consents.data?.items.filter(({ state }) => state === 'assent-missing') ?? [];
-  const past =
-    consents.data?.items.filter(({ state }) => state === 'lapsed' || state === 'withdrawn') ?? [];
+  const of = (...states: Consent['state'][]) =>
+    consents.data?.items.filter(({ state }) => states.includes(state)) ?? [];
+  const valid = of('valid');
+  const unasked = of('assent-missing');
+  const past = of('lapsed', 'withdrawn');
   return (
     <Section
+      id="consent"
       title="Consent"
       margin={
         <>
@@ -33,6 +32,15 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
         </>
       }
     >
+      {athlete.deletionDue !== null && (
+        <div className="mb-5">
+          <Caution title="Withdrawn.">
+            What was filmed of {athlete.givenName} is closed, and everything about{' '}
+            {athlete.givenName} is deleted on {longDay(athlete.deletionDue)}. Only a new consent
+            takes that back.
+          </Caution>
+        </div>
+      )}
       {consents.isPending && <Loading label="Loading consents" />}
       {consents.isError && !consents.data && (
         <ErrorState error={consents.error} onRetry={() => void consents.refetch()} />
@@ -57,35 +65,14 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
       )}
       {valid.length > 0 && (
         <>
-          <ul>
-            {PURPOSES.map((purpose) => {
-              const until = valid
-                .filter(({ purposes }) => purposes.includes(purpose))
-                .map(({ validUntil }) => validUntil)
-                .sort()
-                .at(-1);
-              return (
-                <li
-                  key={purpose}
-                  className="flex flex-wrap justify-between gap-x-6 border-b border-rule py-2.5 first:pt-0"
-                >
-                  {PURPOSE_WORDS[purpose]}
-                  {until === undefined ? (
-                    <span className="text-soft">no</span>
-                  ) : (
-                    <StateDot kind="done">yes, until {longDay(until)}</StateDot>
-                  )}
-                </li>
-              );
-            })}
-          </ul>
-          <ul className="mt-4">
+          <HeldPurposes athlete={athlete} consents={valid} />
+          <ul className="mt-5">
             {valid.map((consent) => (
               <GivenConsent key={consent.id} athlete={athlete} consent={consent} />
             ))}
           </ul>
           {may('consent.record') && (
-            <ButtonLink to={paths.newConsent(athlete.id)} className="mt-2">
+            <ButtonLink to={paths.newConsent(athlete.id)} className="mt-4">
               Record another consent
             </ButtonLink>
           )}
@@ -98,72 +85,32 @@ export function ConsentSection({ athlete }: { athlete: Athlete }) {
           ))}
         </ul>
       )}
-      {past.length > 0 && <PastConsents consents={past} />}
+      {past.length > 0 && (
+        <div className="mt-2 text-note text-soft">
+          <Fold title={`Earlier consents (${past.length})`}>
+            <ul>
+              {past.map((consent) => (
+                <PastConsent key={consent.id} consent={consent} />
+              ))}
+            </ul>
+          </Fold>
+        </div>
+      )}
     </Section>
   );
 }
 
-const giver = (consent: Consent, athlete: Athlete): string => {
-  if (consent.givenBy === 'athlete') return `${athlete.givenName} ${athlete.familyName}`;
-  const relation = consent.guardianRelation ? ` (${consent.guardianRelation})` : '';
-  return `${consent.guardianName ?? 'a guardian'}${relation}`;
-};
+const purposesOf = ({ purposes }: Consent): string =>
+  purposes.map((purpose) => PURPOSE_WORDS[purpose].toLowerCase()).join('; ');
 
-function GivenConsent({ athlete, consent }: { athlete: Athlete; consent: Consent }) {
-  const client = useQueryClient();
-  const say = useStatus();
-  const may = useMay(athlete.coach.id);
-  const withdraw = async () => {
-    await call(routes.withdrawConsent, { params: { id: consent.id } });
-    await client.invalidateQueries({ queryKey: athletesKey });
-    say('The consent is withdrawn.');
-  };
+function PastConsent({ consent }: { consent: Consent }) {
   return (
-    <li className="flex flex-wrap items-center justify-between gap-x-6 text-note text-soft">
-      <p>
-        Given by {giver(consent, athlete)} on {longDay(consent.validFrom)}
-        {consent.assent && `; ${athlete.givenName} agreed too`}.{' '}
-        {consent.how !== '' && `${consent.how.replace(/\.$/, '')}. `}
-        Recorded by {consent.recordedBy.name}.
-        {consent.state === 'assent-missing' &&
-          ` It does not count: ${athlete.givenName}’s own yes was not recorded.`}
-      </p>
-      {may('consent.withdraw') && (
-        <ConfirmButton
-          look="plain"
-          className="!text-alarm text-note"
-          label="Withdraw"
-          title="Withdraw this consent?"
-          confirm="Withdraw it"
-          onConfirm={withdraw}
-        >
-          <p>
-            From this moment no clip of {athlete.givenName} can be filmed, sent or shown by link
-            under it. Clips that are here stay until they are deleted.
-          </p>
-        </ConfirmButton>
-      )}
+    <li className="border-b border-rule py-2 last:border-0">
+      From {longDay(consent.validFrom)} to {longDay(consent.validUntil)}
+      {consent.state === 'withdrawn' && consent.withdrawnAt !== null
+        ? `, withdrawn ${moment(consent.withdrawnAt)}`
+        : ', lapsed'}
+      : {purposesOf(consent)}.
     </li>
-  );
-}
-
-function PastConsents({ consents }: { consents: readonly Consent[] }) {
-  return (
-    <div className="mt-2 text-note text-soft">
-      <Fold title={`Earlier consents (${consents.length})`}>
-        <ul>
-          {consents.map((consent) => (
-            <li key={consent.id} className="border-b border-rule py-2 last:border-0">
-              From {longDay(consent.validFrom)} to {longDay(consent.validUntil)}
-              {consent.state === 'withdrawn' && consent.withdrawnAt !== null
-                ? `, withdrawn ${moment(consent.withdrawnAt)}`
-                : ', lapsed'}
-              : {consent.purposes.map((purpose) => PURPOSE_WORDS[purpose].toLowerCase()).join('; ')}
-              .
-            </li>
-          ))}
-        </ul>
-      </Fold>
-    </div>
   );
 }

@@ -113,6 +113,15 @@ export function taskOf(item: Waiting): Task {
         action: { label: 'Mark again', to: paths.secondMarking(item.secondMarkingId) },
       };
     }
+    case 'deletion-due':
+      return {
+        key: `delete ${item.athlete.id}`,
+        group: 'lapse',
+        title: `Deletion of ${who}`,
+        detail: 'Filming was withdrawn: clips are closed. Only a new consent takes it back.',
+        when: distance(item.due),
+        action: { label: 'Open the consent', to: `${paths.athlete(item.athlete.id)}#consent` },
+      };
     case 'consent-lapses':
       return {
         key: `lapse ${item.athlete.id}`,

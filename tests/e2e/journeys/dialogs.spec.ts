@@ -39,9 +39,9 @@ const DIALOGS: readonly Asked[] = [
     opener: (page) => page.getByRole('row', { name: /Hall/ }).getByRole('button').first(),
   },
   {
-    title: 'Withdraw this consent?',
+    title: 'Withdraw the consent to filming?',
     address: ({ quill }) => paths.athlete(quill.athleteId),
-    opener: button('Withdraw'),
+    opener: (page) => page.getByRole('button', { name: /^Withdraw: Filming/ }),
   },
   {
     title: 'How was it filmed?',

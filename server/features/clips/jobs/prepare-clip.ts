@@ -20,6 +20,8 @@ const begin = (ground: Ground, practiceId: string, clipId: string) =>
   ground.inPractice(product(practiceId), async (unit) => {
     await lockClip(unit.em, clipId);
     const clip = await unit.em.findOne(Clip, { id: clipId }, { populate: ['visit.athlete'] });
+    // withdrawn: it waits for a new consent, or goes
+    if (clip?.visit.unwrap().athlete.unwrap().deletionDue) return null;
     if (!clip || clip.state === 'ready' || clip.state === 'refused' || isHeld(clip)) return null;
     // still 'preparing': the try before ended with its worker, and might end the next one as well
     if (clip.state === 'preparing' && clip.tries >= MOST_TRIES) {

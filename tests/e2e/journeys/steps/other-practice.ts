@@ -46,6 +46,8 @@ const WITHOUT_ID: Record<RouteNameWithoutId, Kind> = {
   audit: 'bare',
   auditNames: 'bare',
   auditFile: 'bare',
+  consentWording: 'lists',
+  changeConsentWording: 'bare',
   listReplays: 'asks',
   makeReplay: 'asks',
   openReplay: 'link',

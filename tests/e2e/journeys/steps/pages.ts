@@ -119,6 +119,12 @@ const FRONT: readonly PageOfProduct[] = [
     stands: (page) => page.getByLabel('Lower gate', { exact: true }),
   },
   {
+    name: 'the consent wording, to change',
+    who: OWNER,
+    address: () => paths.consentWording(),
+    stands: (page) => page.getByLabel('To everybody', { exact: true }),
+  },
+  {
     name: 'the set-ups',
     who: COACH,
     address: () => paths.setUps(),

@@ -37,7 +37,7 @@ export async function addAthlete(
 export async function recordConsent(page: Page): Promise<void> {
   await page.getByRole('link', { name: 'Record the consent' }).first().click();
   await page.getByLabel('Filming and marking in this practice').check();
-  await page.getByLabel('Review by a supervisor outside this practice').check();
+  await page.getByLabel('Review by a supervisor').check();
   await page.getByLabel('A replay behind a link, for the athlete').check();
   await page.getByLabel('How it was given').fill('On the tablet');
   await page.getByRole('button', { name: 'Record the consent' }).click();

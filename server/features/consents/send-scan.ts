@@ -1,0 +1,31 @@
+import { pipeline } from 'node:stream/promises';
+import type { Response } from 'express';
+import type { ScanType } from '#shared/contracts/consents.ts';
+import { MissingFile, type Storage } from '#server/storage/storage.ts';
+import { Problem } from '../../http/problem.ts';
+
+const ENDINGS: Record<ScanType, string> = {
+  'application/pdf': 'pdf',
+  'image/jpeg': 'jpg',
+  'image/png': 'png',
+};
+
+/** Sent to be saved, never to be shown inside our pages: what a file from outside does is its own affair. */
+export const sendScan = async (
+  res: Response,
+  storage: Storage,
+  { key, type, at }: { readonly key: string; readonly type: ScanType; readonly at: string },
+): Promise<void> => {
+  const { bytes } = await storage.stat(key).catch((error: unknown) => {
+    throw error instanceof MissingFile ? new Problem('clip-missing-in-storage') : error;
+  });
+  res.attachment(`consent-${at.slice(0, 10)}.${ENDINGS[type]}`);
+  res.set({
+    'Content-Type': type,
+    'Content-Length': String(bytes),
+    'Cache-Control': 'private, no-store',
+    'Content-Security-Policy': "default-src 'none'; sandbox",
+    'X-Content-Type-Options': 'nosniff',
+  });
+  await pipeline(await storage.read(key), res);
+};
