@@ -41,6 +41,7 @@ export default ts.config(
       'tests/bench/**',
       'tests/study/cli.ts',
       'tests/mutation/cli.ts',
+      'tests/hostile/cli.ts',
       'tests/branches/cli.ts',
       'shared/evaluate/cli.ts',
     ],

@@ -19,6 +19,7 @@ export default defineConfig({
             'tests/study/**/*.test.ts',
             'tests/reference/**/*.test.ts',
             'tests/mutation/**/*.test.ts',
+            'tests/hostile/**/*.test.ts',
             'tests/branches/**/*.test.ts',
             'docker-free-scripts/**/*.test.ts',
             'src/video/**/*.test.ts',

@@ -1,4 +1,3 @@
-import { MediaFailure } from './failures.ts';
 import { type FrameMatch, matchFrames } from './match-frames.ts';
 import type { ProbedClip } from './probe.ts';
 import { MediaRefusal } from './refusals.ts';
@@ -17,7 +16,8 @@ const corruptBeforePart = 16;
 
 /**
  * Compares decoded with promised frames; the tools' exit code says nothing about it.
- * @throws MediaRefusal truncated, damaged, only-header where frames are lost and that was not accepted
+ * @throws MediaRefusal truncated, damaged, only-header where frames are lost and that was not accepted;
+ * no-timestamps where a frame came out at an instant that was not promised
  */
 export function settle(
   clip: ProbedClip,
@@ -26,7 +26,8 @@ export function settle(
   acceptRemains: boolean,
 ): FrameMatch {
   const match = matchFrames(expected, clip.picture.timeBase, decoded.frames);
-  if (!match) throw new MediaFailure('tool-failed', 'a copied frame has a time of its own');
+  // its own frames contradict its list of them
+  if (!match) throw new MediaRefusal('no-timestamps', {});
   const tolerated = clip.discarded + (span ? corruptBeforePart : 0);
   const corrupt = Math.max(0, decoded.corruptFrames - tolerated);
   if (decoded.frames.ticks.length < 2) throw new MediaRefusal('only-header', {});
