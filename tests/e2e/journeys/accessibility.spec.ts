@@ -29,7 +29,7 @@ test.afterAll(async () => {
   for (const session of people.values()) await session.dispose();
 });
 
-for (const { name, who, address, stands, says } of PAGES)
+for (const { name, who, address, stands, then, says } of PAGES)
   test(`${name}: nothing for axe to find, and a way round by keyboard`, async ({
     page,
     allowConsole,
@@ -37,6 +37,7 @@ for (const { name, who, address, stands, says } of PAGES)
     if (says) allowConsole(says);
     if (who !== null) await carryOn(page, sessionFor(who));
     await page.goto(address(shown));
+    await then?.(page);
     for (const viewport of WIDTHS) {
       await page.setViewportSize(viewport);
       await expect(stands(page)).toBeVisible();

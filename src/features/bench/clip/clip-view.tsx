@@ -4,7 +4,7 @@ import { landmark as landmarkOf } from '#shared/landmarks/table.ts';
 import { LANDMARK_IDS, type LandmarkId } from '#shared/landmarks/types.ts';
 import { ClipStage, type Shown } from '#src/canvas/clip-stage.tsx';
 import { type MarkHandle, MarkHandles, type PlacedHandle } from '#src/canvas/mark-handles.tsx';
-import { type Size, toFrame } from '#src/canvas/viewport.ts';
+import { fit, type Size, toFrame } from '#src/canvas/viewport.ts';
 import { useMarking } from '../actions/use-marking.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { useFollow } from '../follow/use-follow.ts';
@@ -30,6 +30,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   const frame = useBench((state) => state.frame);
   const viewport = useBench((state) => state.viewport);
   const tool = useBench((state) => state.tool);
+  const hidesHead = useBench((state) => state.desk === 'head');
   const marking = useMarking();
   const follow = useFollow();
   const moveTo = (id: LandmarkId, point: FramePoint) => {
@@ -50,12 +51,14 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   // on a phone the picture goes to what is to be seen; a finger may move it until the next one
   const marks = marksOn(current, frame);
   const place = useEffectEvent((size: Size) =>
-    store.setState({ viewport: narrowView(expected, marks, frameSize, size) }),
+    store.setState({
+      viewport: hidesHead ? fit(frameSize, size) : narrowView(expected, marks, frameSize, size),
+    }),
   );
   useEffect(() => {
     const size = shown.current?.size;
     if (narrow && size) place(size);
-  }, [narrow, expected, frame, width]);
+  }, [narrow, expected, frame, width, hidesHead]);
 
   const placeAt = (point: FramePoint) => {
     if (tool.kind === 'line' || tool.kind === 'shape')

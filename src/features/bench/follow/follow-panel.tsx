@@ -115,7 +115,7 @@ function Collecting() {
     <>
       <fieldset className="mt-2">
         <legend className="text-dusk-soft">Stands on</legend>
-        <div className="flex flex-wrap gap-x-4">
+        <div className="grid grid-cols-2 gap-x-4">
           {STANDS.map(({ value, label }) => (
             <label key={value} className="flex min-h-[44px] items-center gap-2">
               <input

@@ -122,6 +122,7 @@ function Shown({
     <>
       <button
         type="button"
+        data-head-box
         aria-label="Box around the head. Arrows move it, with Shift by ten pixels."
         className={`absolute cursor-move touch-none border-2 ${LOOKS[state]}`}
         style={{

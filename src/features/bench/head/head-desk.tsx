@@ -1,4 +1,4 @@
-import { useContext } from 'react';
+import { useContext, useEffect, useRef } from 'react';
 import { lostStretches, type Stretch } from '#shared/head/heads.ts';
 import { frameIndex } from '#shared/timing/units.ts';
 import { Button } from '#src/ui/button.tsx';
@@ -7,6 +7,7 @@ import { Progress } from '#src/ui/progress.tsx';
 import { ErrorState, Loading } from '#src/ui/states.tsx';
 import { useBench, useBenchTools } from '../bench-context.ts';
 import { goTo } from '../store/bench-store.ts';
+import { useGoesOnHere } from '../use-goes-on-here.ts';
 import { HeadContext, type HiddenHead } from './use-hidden-head.ts';
 
 const named = ({ from, to }: Stretch): string =>
@@ -15,10 +16,15 @@ const named = ({ from, to }: Stretch): string =>
 /** A box around the head: drawn once, followed, looked at; then a replay can be made that hides it. */
 export function HeadDesk() {
   const head = useContext(HeadContext);
+  const heading = useGoesOnHere<HTMLHeadingElement>(
+    head && [head.run.is, head.heads.length > 0, head.changed, head.saved?.looked?.at].join(),
+  );
   if (!head) return null;
   return (
     <div className="max-w-[44em] py-2">
-      <h3 className="text-sub font-bold">Hide the head</h3>
+      <h3 ref={heading} tabIndex={-1} className="text-sub font-bold">
+        Hide the head
+      </h3>
       <p className="mt-1">
         Draw a box around the head on one frame; it is followed through the clip. A replay that
         hides the head shows a mosaic there.
@@ -41,6 +47,13 @@ function Steps({ head, may }: { head: HiddenHead; may: boolean }) {
   const { frameSize } = useBenchTools();
   const frame = useBench((state) => state.frame);
   const { run, heads, changed, saved } = head;
+  const put = useRef(false);
+  const boxed = heads.length > 0;
+  // the first box is where the work goes on, and it may lie off the screen
+  useEffect(() => {
+    if (boxed && put.current) document.querySelector<HTMLElement>('[data-head-box]')?.focus();
+    put.current = false;
+  }, [boxed]);
   if (run.is === 'following')
     return (
       <div className="mt-4" role="status">
@@ -54,6 +67,7 @@ function Steps({ head, may }: { head: HiddenHead; may: boolean }) {
     // about a head of a person who fills the picture, at its upper middle
     const edge = Math.round(Math.max(frameSize.width, frameSize.height) / 9);
     const left = (frameSize.width - edge) / 2;
+    put.current = true;
     head.draw(frame, { left, top: frameSize.height / 10, width: edge, height: edge });
   };
   return (
@@ -63,7 +77,7 @@ function Steps({ head, may }: { head: HiddenHead; may: boolean }) {
           {run.message}
         </p>
       )}
-      {heads.length === 0 ? (
+      {!boxed ? (
         may ? (
           <>
             <p className="mt-3">

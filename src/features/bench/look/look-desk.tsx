@@ -7,6 +7,7 @@ import { followedWords } from '#src/ui/followed-words.ts';
 import { supportWords } from '#src/ui/words.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { TimeTaken } from '../follow/time-taken.tsx';
+import { useGoesOnHere } from '../use-goes-on-here.ts';
 import { FollowPlace } from './follow-place.tsx';
 import { countFollowed, type HollowFrame } from './followed.ts';
 import { Thumb } from './thumb.tsx';
@@ -20,12 +21,16 @@ export function LookDesk({ source }: { source: FrameSource | null }) {
   const { reps } = useBenchModel();
   const look = useLook();
   const words = followedWords(countFollowed(reps));
+  const done = look.waiting.length === 0;
+  const heading = useGoesOnHere<HTMLHeadingElement>(done);
   return (
     <div className="py-2">
-      <h3 className="text-sub font-bold">Look at what was followed</h3>
+      <h3 ref={heading} tabIndex={-1} className="text-sub font-bold">
+        Look at what was followed
+      </h3>
       {words === null ? (
         <FollowPlace />
-      ) : look.waiting.length === 0 ? (
+      ) : done ? (
         <>
           <p className="mt-1">{words} The reading rests on marks that a person has seen.</p>
           <TimeTaken />
@@ -141,6 +146,11 @@ function Group({
         {title}
         {children}
       </h4>
+      {frames.some(({ unsure, slight }) => unsure.length === 0 && slight.length > 0) && (
+        <p className="max-w-[44em] text-note text-soft">
+          What stands under a frame was unsure too, but the reading does not rest on it there.
+        </p>
+      )}
       <ul className="bench-thumbs">
         {frames.map((each) => (
           <Thumb

@@ -25,6 +25,14 @@ const pointsOf = ({ marks }: HollowFrame, ids: readonly (typeof LANDMARK_IDS)[nu
     return mark?.to === 'point' ? [mark.point] : [];
   });
 
+/** For those who do not see that one is ochre and the other grey. */
+const doubtWords = (doubt = '', weightless = ''): string =>
+  doubt !== ''
+    ? `, unsure: ${doubt}`
+    : weightless !== ''
+      ? `, unsure but without weight: ${weightless}`
+      : '';
+
 /** One frame: the person with the marks, or what the tracker was not sure of; pressed, it is right. */
 export function Thumb({
   own,
@@ -80,7 +88,7 @@ export function Thumb({
           type="checkbox"
           checked={chosen}
           onChange={(event) => onChoose(event.target.checked)}
-          aria-label={`Frame ${frame}${height}${!doubt ? '' : `, unsure: ${doubt}`}: right`}
+          aria-label={`Frame ${frame}${height}${doubtWords(doubt, weightless)}: right`}
           className="absolute left-1.5 top-1.5 size-6 accent-ink"
         />
         <canvas
@@ -103,9 +111,7 @@ export function Thumb({
       </button>
       {doubt && <p className="px-1.5 pb-1.5 text-caption leading-4 text-ochre">{doubt}</p>}
       {!doubt && weightless && (
-        <p className="px-1.5 pb-1.5 text-caption leading-4 text-soft">
-          unsure, but no part of the reading here: {weightless}
-        </p>
+        <p className="px-1.5 pb-1.5 text-caption leading-4 text-soft">{weightless}</p>
       )}
     </li>
   );

@@ -10,6 +10,8 @@ export interface PageOfProduct {
   readonly who: string | null;
   readonly address: (shown: Shown) => string;
   readonly stands: (page: Page) => Locator;
+  /** What is pressed once it is open, where no address leads to this state. */
+  readonly then?: (page: Page) => Promise<void>;
   /** Lines of the browser's console that belong to it. */
   readonly says?: RegExp;
 }
@@ -213,6 +215,16 @@ const VISITS: readonly PageOfProduct[] = [
     who: COACH,
     address: ({ quill }) => paths.bench(quill.clipId),
     stands: clip,
+  },
+  {
+    name: 'the Bench with a box around the head',
+    who: COACH,
+    address: ({ quill }) => paths.bench(quill.clipId),
+    stands: (page) => page.getByRole('button', { name: /^Box around the head/ }),
+    then: async (page) => {
+      await page.getByRole('button', { name: 'Head', exact: true }).click();
+      await page.getByRole('button', { name: /^Put a box on frame/ }).click();
+    },
   },
   {
     name: 'the Bench before the call by eye',

@@ -1,0 +1,13 @@
+import { type RefObject, useEffect, useRef } from 'react';
+
+/**
+ * A heading at which the keyboard goes on once `step` is another: where the control that had the focus went with
+ * the step before. Give the heading a `tabIndex` of −1.
+ */
+export function useGoesOnHere<E extends HTMLElement>(step: unknown): RefObject<E | null> {
+  const here = useRef<E>(null);
+  useEffect(() => {
+    if (document.activeElement === document.body) here.current?.focus();
+  }, [step]);
+  return here;
+}
