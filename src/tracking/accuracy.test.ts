@@ -132,12 +132,17 @@ describe('after a phone’s and the server’s compression', { timeout: PATIENCE
 
 describe('while the lifted leg passes over them', { timeout: PATIENCE_MS }, () => {
   it.each([
-    ['stickers', { cloth: 'plain', sticker: DARK_STICKER }],
-    ['patterned cloth', { cloth: 'patterned' }],
-    ['plain cloth', { cloth: 'plain' }],
-  ] as const)('no point on %s is called sure and lies more than 5 px off', async (_, choice) => {
-    const { most, sure } = await judge(await film({ ...choice, topDegrees: -70 }), 0);
-    expect(most).toBeLessThanOrEqual(5);
-    expect(sure).toBeGreaterThan(0.4);
+    // marked before the lift, and while the leg passes: then a patch holds a piece of it too
+    ['stickers', { cloth: 'plain', sticker: DARK_STICKER }, [0, 45]],
+    ['patterned cloth', { cloth: 'patterned' }, [0, 45]],
+    ['plain cloth', { cloth: 'plain' }, [0]],
+  ] as const)('no point on %s is called sure and lies more than 5 px off', async (...trial) => {
+    const [, choice, starts] = trial;
+    const covering = await film({ ...choice, topDegrees: -70 });
+    for (const start of starts) {
+      const { most, sure } = await judge(covering, start);
+      expect(most, `from ${start}`).toBeLessThanOrEqual(5);
+      expect(sure, `from ${start}`).toBeGreaterThan(0.4);
+    }
   });
 });

@@ -14,6 +14,8 @@ export interface Evidence {
   readonly apart: number;
   /** The share of the patch that shows something else, 0 to 1. */
   readonly covered: number;
+  /** Likeness of the half of the patch that is least alike, −1 to 1. */
+  readonly half: number;
   /** Forth and back again, how far from where it began, pixels. Null where that was not tried. */
   readonly roundTrip: number | null;
   /** What the template's error says of the place, one standard deviation, pixels. */
@@ -35,12 +37,19 @@ export const isItself = (correlation: number, core: number): boolean =>
   correlation > 0.95 && core > 0.92;
 
 /**
+ * All of it is there, or its middle leaves no doubt: what was lost proves itself by that, and not by its edge with
+ * what covers it.
+ */
+export const isBack = ({ covered, half, core }: Pick<Evidence, 'covered' | 'half' | 'core'>) =>
+  core > 0.96 || (covered < 0.08 && half > 0.7);
+
+/**
  * 0 to 1; each piece of evidence can only lower it. A fall of likeness counts only where likeness
  * is no longer good: blur makes it fall as well, but not as deep as something that covers the point.
  * The bounds were set on rendered clips of known truth; no other source.
  */
 export const confidenceOf = (seen: Evidence): number => {
-  const { correlation, fall, core, apart, covered, roundTrip, spread, scale } = seen;
+  const { correlation, fall, core, apart, covered, half, roundTrip, spread, scale } = seen;
   const alike = falling(1 - correlation, 0.12, 0.5);
   // on coarse levels the way back may go astray in what is behind a limb: likeness outweighs it
   const back = roundTrip === null ? 0.8 : falling(roundTrip, 0.6, 3.5);
@@ -50,8 +59,10 @@ export const confidenceOf = (seen: Evidence): number => {
   const bare = falling(covered, 0.08, 0.35);
   // a patch that shrinks or swells has fitted itself to what covers the point
   const sized = falling(Math.abs(Math.log(scale)), 0.16, 0.3);
+  // behind a limb's edge the picture may change as it likes, as long as the middle is beyond doubt
+  const joined = core > 0.92 ? 1 : falling(1 - half, 0.25, 0.45);
   const same = falling(1 - core, 0.5, 0.85);
-  return alike * returned * sharp * steady * bare * same * sized * falling(apart, 1.5, 4);
+  return alike * returned * sharp * steady * bare * joined * same * sized * falling(apart, 1.5, 4);
 };
 
 const UNSURE = 0.15;

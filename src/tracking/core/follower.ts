@@ -1,7 +1,8 @@
 import type { TrackState } from '../types.ts';
 import { align, type Aligned, compare } from './align.ts';
-import { confidenceOf, isItself, isUnmistakable, spreadOf, stateOf } from './certainty.ts';
+import { confidenceOf, isBack, isItself, isUnmistakable, spreadOf, stateOf } from './certainty.ts';
 import { coveredShare } from './covered.ts';
+import { leastAlikeHalf } from './halves.ts';
 import { flow, type Place } from './flow.ts';
 import {
   BACK,
@@ -110,6 +111,7 @@ export class Follower {
     if (!best) return this.#lose();
     const fall = this.#correlation - best.correlation;
     const covered = coveredShare(picture, best.template, best);
+    const half = leastAlikeHalf(picture, best.template, best);
     const leap = Math.hypot(best.warp.tx - guess.x, best.warp.ty - guess.y);
     const middle = this.#middleOf(picture, best);
     // what slides over a point takes it along with a jerk that no limb makes
@@ -120,6 +122,7 @@ export class Follower {
       correlation: best.correlation,
       fall,
       covered,
+      half,
       ...middle,
       roundTrip: this.#velocityKnown && astray && leap < FORESEEN ? null : best.roundTrip,
       spread: spreadOf(best.template, best.correlation),
@@ -131,7 +134,8 @@ export class Follower {
     this.#take(best, picture, from);
     // where a hand has placed it, and as it looked there: no other dot
     const atHome = this.#fromHome(best) < NEAR && isItself(best.correlation, middle.core);
-    if (this.#trust > FOUND_AGAIN || atHome) this.#trust = Math.min(1, this.#trust + 0.05);
+    const proved = this.#trust > FOUND_AGAIN && isBack(evidence);
+    if (proved || atHome) this.#trust = Math.min(1, this.#trust + 0.05);
     if (state === 'sure' && fall < 0.03 && covered === 0) this.#refresh(picture, best);
     return { place: { x: best.warp.tx, y: best.warp.ty }, confidence, state };
   }

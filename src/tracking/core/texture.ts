@@ -89,6 +89,10 @@ export const textureAt = (
 /** The loosest hold that is followed, pixels; set on rendered cloth of known truth. */
 const LOOSEST = 0.35;
 
+/** Held so much worse one way than the other, and no better than this there, pixels: it slides along an edge. */
+const ONE_WAY = 7;
+const SLIDES_FROM = 0.1;
+
 /** Why a place cannot be followed; null where it can. */
 export const refusalAt = (
   plane: Plane,
@@ -102,6 +106,8 @@ export const refusalAt = (
   if (x < border || y < border || x > plane.width - 1 - border || y > plane.height - 1 - border)
     return 'at-the-border';
   const { worst, best } = textureAt(plane, x, y, radius, noiseAround(plane, x, y));
-  if (worst <= LOOSEST) return null;
+  const slides = worst > SLIDES_FROM && worst > ONE_WAY * best && Number.isFinite(best);
+  if (worst <= LOOSEST && !slides) return null;
+  if (slides) return 'only-an-edge';
   return best <= LOOSEST / 3 ? 'only-an-edge' : 'nothing-to-hold-on-to';
 };
