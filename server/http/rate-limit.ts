@@ -1,7 +1,8 @@
 import { createHash } from 'node:crypto';
-import type { Request, RequestHandler } from 'express';
+import type { Request, RequestHandler, Response } from 'express';
 import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
 import { Problem } from './problem.ts';
+import { staffOf } from './session.ts';
 
 /**
  * Counts failed tries and refuses further ones with 'too-many-tries'. Counted in memory: with several web
@@ -10,7 +11,7 @@ import { Problem } from './problem.ts';
 const limit = (
   tries: number,
   minutes: number,
-  keyOf: (req: Request) => string,
+  keyOf: (req: Request, res: Response) => string,
   failedOnly = true,
 ): RequestHandler =>
   rateLimit({
@@ -56,3 +57,8 @@ export const letterLimits = (): RequestHandler[] => [
 
 /** Links that open nothing: 50 in a quarter of an hour from one place; a token cannot be guessed anyway. */
 export const mailLinkLimits = (): RequestHandler[] => [limit(50, 15, addressOf)];
+
+/** Wrong passwords of who is signed in: 10 in a quarter of an hour, so that a borrowed session guesses nothing. */
+export const ownPasswordLimits = (): RequestHandler[] => [
+  limit(10, 15, (_req, res) => staffOf(res).user.id),
+];

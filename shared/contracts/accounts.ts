@@ -38,7 +38,77 @@ export const sessionRow = z
   .meta({ id: 'Session' });
 export type SessionRow = z.infer<typeof sessionRow>;
 
+/** One's own account, as nobody else sees it. */
+export const account = z
+  .object({
+    name: z.string(),
+    email: z.string(),
+    /** A change that waits for the two confirmations. */
+    emailChange: z
+      .object({
+        to: z.string(),
+        confirmedFromOld: z.boolean(),
+        confirmedFromNew: z.boolean(),
+        until: moment,
+      })
+      .nullable(),
+  })
+  .meta({ id: 'Account' });
+export type Account = z.infer<typeof account>;
+
+const presentPassword = z.string().min(1, 'Write your present password.').max(200);
+export const nameBody = z.object({ name: personName }).meta({ id: 'NameChange' });
+export const passwordBody = z
+  .object({ current: presentPassword, next: newPassword })
+  .meta({ id: 'PasswordChange' });
+export const emailBody = z.object({ email, password: presentPassword }).meta({ id: 'EmailChange' });
+
 export const accountRoutes = {
+  account: route({
+    method: 'get',
+    path: '/api/account',
+    summary: 'One’s own account.',
+    audience: 'staff',
+    status: 200,
+    answer: json(account),
+  }),
+  changeName: route({
+    method: 'patch',
+    path: '/api/account',
+    summary: 'Change one’s own name.',
+    audience: 'staff',
+    body: nameBody,
+    status: 200,
+    answer: json(account),
+  }),
+  changePassword: route({
+    method: 'post',
+    path: '/api/account/password',
+    summary: 'Change one’s own password. Every other session of the account ends.',
+    audience: 'staff',
+    body: passwordBody,
+    status: 204,
+    answer: none,
+    problems: ['password-wrong', 'too-many-tries'],
+  }),
+  changeEmail: route({
+    method: 'post',
+    path: '/api/account/email',
+    summary: 'Ask for another e-mail address. It holds once it is confirmed from both addresses.',
+    audience: 'staff',
+    body: emailBody,
+    status: 200,
+    answer: json(account),
+    problems: ['password-wrong', 'too-many-tries'],
+  }),
+  dropEmailChange: route({
+    method: 'delete',
+    path: '/api/account/email',
+    summary: 'Give up a change of address that is not confirmed yet.',
+    audience: 'staff',
+    status: 200,
+    answer: json(account),
+  }),
   signIn: route({
     method: 'post',
     path: '/api/sign-in',

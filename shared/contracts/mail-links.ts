@@ -83,4 +83,14 @@ export const mailLinkRoutes = {
     answer: none,
     problems: ['link-gone', 'too-many-tries'],
   }),
+  confirmEmail: route({
+    method: 'post',
+    path: '/api/confirm-email',
+    summary: 'Confirm a new e-mail address from the old one or from itself.',
+    audience: 'anyone',
+    body: z.object({ token }),
+    status: 200,
+    answer: json(z.object({ /** Both have confirmed. */ done: z.boolean() })),
+    problems: ['link-gone', 'address-taken', 'too-many-tries'],
+  }),
 };

@@ -39,6 +39,14 @@ export const peoplePage = z
   .meta({ id: 'PeoplePage' });
 export type PeoplePage = z.infer<typeof peoplePage>;
 
+/** What is left out stays. */
+export const personBody = z
+  .object({ role: role.optional(), coachIds: z.array(id).max(500).optional() })
+  .meta({ id: 'PersonChange' });
+export const handOverBody = z
+  .object({ to: z.uuid('Choose who takes the athletes over.') })
+  .meta({ id: 'HandOver' });
+
 export const inviteBody = z.object({ email, role }).meta({ id: 'Invite' });
 
 export const peopleRoutes = {
@@ -70,5 +78,48 @@ export const peopleRoutes = {
     status: 204,
     answer: none,
     problems: ['not-allowed', 'not-found'],
+  }),
+  changePerson: route({
+    method: 'patch',
+    path: '/api/practice/people/:id',
+    summary: 'Change a person’s role, or whose athletes a supervisor sees. It holds at once.',
+    audience: 'staff',
+    params: z.object({ id }),
+    body: personBody,
+    status: 200,
+    answer: json(peoplePage),
+    problems: ['not-allowed', 'not-found', 'invalid-input', 'last-owner'],
+  }),
+  deactivatePerson: route({
+    method: 'post',
+    path: '/api/practice/people/:id/deactivate',
+    summary:
+      'Close an account: its sessions end at once. Athletes stay until they are handed over.',
+    audience: 'staff',
+    params: z.object({ id }),
+    status: 200,
+    answer: json(peoplePage),
+    problems: ['not-allowed', 'not-found', 'last-owner'],
+  }),
+  reactivatePerson: route({
+    method: 'post',
+    path: '/api/practice/people/:id/reactivate',
+    summary: 'Open a closed account again.',
+    audience: 'staff',
+    params: z.object({ id }),
+    status: 200,
+    answer: json(peoplePage),
+    problems: ['not-allowed', 'not-found'],
+  }),
+  handOver: route({
+    method: 'post',
+    path: '/api/practice/people/:id/hand-over',
+    summary: 'Hand all athletes of a person to another coach or owner, all or none.',
+    audience: 'staff',
+    params: z.object({ id }),
+    body: handOverBody,
+    status: 200,
+    answer: json(peoplePage),
+    problems: ['not-allowed', 'not-found', 'invalid-input'],
   }),
 };

@@ -13,6 +13,7 @@ export const PROBLEMS = {
     'This link does not work any more: it was used, it is too old, or it is not whole. Ask for a new one.',
   ],
   'address-taken': [409, 'There is an account with this e-mail address already. Sign in with it.'],
+  'password-wrong': [403, 'This is not your present password.'],
   'last-owner': [409, 'A practice needs an owner. Make somebody else an owner first.'],
   'too-many-tries': [429, 'Too many tries. Wait a little, then try again.'],
   // what you asked for

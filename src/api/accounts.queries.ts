@@ -9,6 +9,12 @@ export const meQuery = queryOptions({
   staleTime: 5 * 60_000,
 });
 
+/** One's own account. */
+export const accountQuery = queryOptions({
+  queryKey: ['account'],
+  queryFn: ({ signal }) => call(routes.account, { signal }),
+});
+
 export const sessionsQuery = queryOptions({
   queryKey: ['sessions'],
   queryFn: ({ signal }) => call(routes.sessions, { signal }),

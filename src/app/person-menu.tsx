@@ -57,6 +57,9 @@ export function PersonMenu() {
           {user.role}, {practice.name}
         </p>
         <div className="mt-3 flex flex-col items-start border-t border-rule pt-2">
+          <ButtonLink look="plain" to={paths.account()}>
+            Your account
+          </ButtonLink>
           {user.role === 'owner' && (
             <ButtonLink look="plain" to={paths.people()}>
               People of the practice

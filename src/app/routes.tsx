@@ -43,6 +43,14 @@ export const pages: RouteObject[] = [
         ),
       },
       {
+        path: 'confirm-email/:token',
+        lazy: lazily(() =>
+          import('#src/features/accounts/confirm-email-page.tsx').then(
+            (page) => page.ConfirmEmailPage,
+          ),
+        ),
+      },
+      {
         path: 'start',
         lazy: lazily(() =>
           import('#src/features/accounts/start-page.tsx').then((page) => page.StartPage),
@@ -162,6 +170,14 @@ export const pages: RouteObject[] = [
                 lazy: lazily(() =>
                   import('#src/features/practice/reliability/reliability-page.tsx').then(
                     (page) => page.ReliabilityPage,
+                  ),
+                ),
+              },
+              {
+                path: 'account',
+                lazy: lazily(() =>
+                  import('#src/features/accounts/account/account-page.tsx').then(
+                    (page) => page.AccountPage,
                   ),
                 ),
               },

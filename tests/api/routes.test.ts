@@ -26,7 +26,13 @@ afterAll(() => api.close());
 const withId = Object.keys(NAMES) as RouteNameWithId[];
 
 /** Of the owner alone: who may not is told so, whatever it names. */
-const OWNERS: readonly string[] = ['withdrawInvitation'];
+const OWNERS: readonly string[] = [
+  'withdrawInvitation',
+  'changePerson',
+  'deactivatePerson',
+  'reactivatePerson',
+  'handOver',
+];
 
 const knock = async (name: RouteNameWithId, user: User | null) => {
   const { method } = routes[name];

@@ -4,6 +4,10 @@ import { type RouteName, routes } from '#shared/contracts/routes.ts';
 export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   endSession: 'session',
   withdrawInvitation: 'invitation',
+  changePerson: 'person',
+  deactivatePerson: 'person',
+  reactivatePerson: 'person',
+  handOver: 'person',
   athlete: 'athlete',
   editAthlete: 'athlete',
   listConsents: 'athlete',
@@ -76,6 +80,8 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   editAthlete: { version: 1, sport: 'x' },
   recordConsent: { givenBy: 'athlete', purposes: ['assessment'], validUntil: '2999-01-01' },
   withdrawPurposes: { purposes: ['teaching'] },
+  changePerson: { role: 'coach' },
+  handOver: { to: '6f1d2a0e-5c1b-4c57-9d55-0a3f1e2b7c01' },
   editVisit: { version: 1, note: 'x' },
   answerSafety: {
     answers: {
@@ -136,6 +142,7 @@ export const BODIES: Partial<Record<RouteName, object>> = {
 export type Ids = Record<
   | 'session'
   | 'invitation'
+  | 'person'
   | 'athlete'
   | 'consent'
   | 'visit'

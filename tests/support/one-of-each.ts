@@ -85,6 +85,7 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
     return {
       session: session.id,
       invitation: invitation.id,
+      person: coach.id,
       athlete: athlete.id,
       consent: consent.id,
       visit: visit.id,

@@ -1,6 +1,8 @@
 import { routes } from '#shared/contracts/routes.ts';
-import { signInLimits } from '../../http/rate-limit.ts';
+import { ownPasswordLimits, signInLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
+import { changeEmail, dropEmailChange } from './change-email.ts';
+import { changeName, changePassword, ownAccount } from './own-account.ts';
 import { presentMe, presentSession } from './accounts.presenter.ts';
 import {
   endSession,
@@ -41,4 +43,20 @@ export const accountsFeature: Feature = ({ serve, ground }) => {
   }));
 
   serve(routes.endSession, ({ params, work }) => work((unit) => endSession(unit, params.id)));
+
+  const tries = ownPasswordLimits();
+
+  serve(routes.account, ({ work }) => work(ownAccount));
+
+  serve(routes.changeName, ({ body, work }) => work((unit) => changeName(unit, body)));
+
+  serve(
+    routes.changePassword,
+    ({ body, work, session }) => changePassword(work, body, session.id),
+    ...tries,
+  );
+
+  serve(routes.changeEmail, ({ body, work }) => changeEmail(work, body), ...tries);
+
+  serve(routes.dropEmailChange, ({ work }) => work(dropEmailChange));
 };

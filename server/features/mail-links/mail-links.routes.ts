@@ -3,6 +3,7 @@ import { letterLimits, mailLinkLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
 import { presentMe } from '../accounts/accounts.presenter.ts';
 import { askMailLink } from './ask-mail-link.ts';
+import { confirmEmail } from './confirm-email.ts';
 import { liveMailLink } from './live-mail-link.ts';
 import { presentMailLink } from './mail-links.presenter.ts';
 import { join, resetPassword } from './mail-links.service.ts';
@@ -37,4 +38,6 @@ export const mailLinksFeature: Feature = ({ serve, ground }) => {
   );
 
   serve(routes.resetPassword, ({ body }) => resetPassword(ground, body), ...tries);
+
+  serve(routes.confirmEmail, ({ body }) => confirmEmail(ground, body.token), ...tries);
 };

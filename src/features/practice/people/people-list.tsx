@@ -1,6 +1,7 @@
 import type { Person } from '#shared/contracts/people.ts';
 import { dayOf } from '#src/ui/days.ts';
 import { Table, type Column } from '#src/ui/table.tsx';
+import { PersonActs } from './person-acts.tsx';
 import { roleLabel } from './role-words.ts';
 
 export function PeopleList({ people }: { people: readonly Person[] }) {
@@ -50,6 +51,13 @@ export function PeopleList({ people }: { people: readonly Person[] }) {
       label: 'Last here',
       cell: ({ lastSeenAt }) =>
         lastSeenAt === null ? <span className="text-soft">never</span> : dayOf(lastSeenAt),
+    },
+    {
+      key: 'acts',
+      label: 'Change',
+      heading: <span className="sr-only">Change</span>,
+      end: true,
+      cell: (person) => <PersonActs person={person} people={people} />,
     },
   ];
   return <Table caption="People" columns={columns} rows={people} rowKey={({ id }) => id} />;

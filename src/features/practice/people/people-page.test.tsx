@@ -2,7 +2,8 @@ import { screen, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
-import { aPeoplePage, anInvitation } from '#tests/support/people.ts';
+import { aPeoplePage, anInvitation, supervisorId } from '#tests/support/people.ts';
+import { coachId, otherId } from '#tests/support/records.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
 
 describe('the people of a practice', () => {
@@ -80,5 +81,51 @@ describe('the people of a practice', () => {
     down = false;
     await user.click(screen.getByRole('button', { name: 'Try again' }));
     expect(await screen.findByRole('table', { name: 'People' })).toBeVisible();
+  });
+
+  it('lets a supervisor see the athletes of further coaches', async () => {
+    const api = signedInApi('owner')
+      .on(routes.people, () => aPeoplePage())
+      .on(routes.changePerson, () => aPeoplePage());
+    const { user } = renderAt('/practice/people');
+    await user.click(await screen.findByRole('button', { name: 'Change Ines Falk' }));
+    const dialog = screen.getByRole('dialog', { name: 'Ines Falk' });
+    expect(within(dialog).getByLabelText('Maren Okafor')).toBeChecked();
+    await user.click(within(dialog).getByLabelText('Tilda Marsh'));
+    await user.click(within(dialog).getByRole('button', { name: 'Save' }));
+    expect(api.calls(routes.changePerson)[0]).toMatchObject({
+      params: { id: supervisorId },
+      body: { role: 'supervisor', coachIds: [coachId, otherId] },
+    });
+  });
+
+  it('hands a caseload to another coach, not to a supervisor', async () => {
+    const api = signedInApi('owner')
+      .on(routes.people, () => aPeoplePage())
+      .on(routes.handOver, () => aPeoplePage());
+    const { user } = renderAt('/practice/people');
+    const name = 'Hand over the athletes of Maren Okafor';
+    await user.click(await screen.findByRole('button', { name }));
+    const select = screen.getByLabelText('Who takes them over');
+    expect(within(select).queryByRole('option', { name: 'Ines Falk' })).toBeNull();
+    await user.click(screen.getByRole('button', { name: 'Hand them over' }));
+    expect(await screen.findByRole('alert')).toHaveTextContent('Choose who takes the athletes');
+    await user.selectOptions(select, 'Tilda Marsh');
+    await user.click(screen.getByRole('button', { name: 'Hand them over' }));
+    expect(await screen.findByText('4 athletes went to Tilda Marsh.')).toBeVisible();
+    expect(api.calls(routes.handOver)[0]).toMatchObject({
+      params: { id: coachId },
+      body: { to: otherId },
+    });
+  });
+
+  it('says why the last owner stays', async () => {
+    signedInApi('owner')
+      .on(routes.people, () => aPeoplePage())
+      .on(routes.deactivatePerson, () => new Refuse('last-owner'));
+    const { user } = renderAt('/practice/people');
+    await user.click(await screen.findByRole('button', { name: 'Deactivate Maren Holt' }));
+    await user.click(screen.getByRole('button', { name: 'Deactivate' }));
+    expect(await screen.findByRole('alert')).toHaveTextContent('A practice needs an owner');
   });
 });

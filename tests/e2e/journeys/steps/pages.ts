@@ -49,6 +49,12 @@ const FRONT: readonly PageOfProduct[] = [
     stands: heading('Start a practice'),
   },
   {
+    name: 'one’s own account',
+    who: COACH,
+    address: () => paths.account(),
+    stands: text('this one'),
+  },
+  {
     name: 'the people of a practice',
     who: OWNER,
     address: () => paths.people(),

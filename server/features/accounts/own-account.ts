@@ -1,0 +1,59 @@
+import type * as z from 'zod';
+import type { UserActor } from '#shared/access/actors.ts';
+import type { Account, nameBody, passwordBody } from '#shared/contracts/accounts.ts';
+import type { Unit } from '../../db/in-practice.ts';
+import { Problem } from '../../http/problem.ts';
+import { audit } from '../audit/audit.ts';
+import { endSessionsOf } from './open-session.ts';
+import { openEmailChange } from './open-email-change.ts';
+import { hashPassword, passwordFits } from './password.ts';
+import { User } from './user.entity.ts';
+
+type Of = Unit<UserActor>;
+/** Opens units of work of this actor, see `serve`. */
+export type Work = <T>(work: (unit: Of) => Promise<T>) => Promise<T>;
+
+export const ownAccount = async (unit: Of): Promise<Account> => {
+  const { name, email } = await unit.em.findOneOrFail(User, { id: unit.actor.id });
+  return { name, email, emailChange: await openEmailChange(unit) };
+};
+
+export const changeName = async (
+  unit: Of,
+  { name }: z.output<typeof nameBody>,
+): Promise<Account> => {
+  const user = await unit.em.findOneOrFail(User, { id: unit.actor.id });
+  unit.em.assign(user, { name });
+  audit(unit, 'account.rename', user.id);
+  await unit.em.flush();
+  return ownAccount(unit);
+};
+
+/**
+ * Asked before anything by which an account could be taken away. It takes a third of a second, outside of any
+ * transaction.
+ * @throws Problem 'password-wrong'
+ */
+export const needPassword = async (work: Work, password: string): Promise<void> => {
+  const hash = await work(async ({ em, actor }) => {
+    const user = await em.findOneOrFail(User, { id: actor.id }, { populate: ['passwordHash'] });
+    return user.passwordHash.unwrap();
+  });
+  if (!(await passwordFits(password, hash))) throw new Problem('password-wrong');
+};
+
+/** @param sessionId the session that goes on; every other ends */
+export const changePassword = async (
+  work: Work,
+  { current, next }: z.output<typeof passwordBody>,
+  sessionId: string,
+): Promise<void> => {
+  await needPassword(work, current);
+  const passwordHash = await hashPassword(next);
+  await work(async (unit) => {
+    const { id } = unit.actor;
+    await unit.em.nativeUpdate(User, { id }, { passwordHash });
+    await endSessionsOf(unit, id, sessionId);
+    audit(unit, 'account.password', id);
+  });
+};

@@ -1,0 +1,42 @@
+import { useQuery } from '@tanstack/react-query';
+import { accountQuery } from '#src/api/accounts.queries.ts';
+import { Page, Section } from '#src/ui/page.tsx';
+import { ErrorState, Loading, SkeletonLines } from '#src/ui/states.tsx';
+import { EmailSection } from './email-section.tsx';
+import { NameForm } from './name-form.tsx';
+import { PasswordForm } from './password-form.tsx';
+import { Sessions } from './sessions.tsx';
+
+/** One's own account: what others see of one, and how one signs in. */
+export function AccountPage() {
+  const account = useQuery(accountQuery);
+  return (
+    <Page title="Your account" lead="Your name, how you sign in, and where you are signed in.">
+      {account.data ? (
+        <>
+          <Section title="Name" note="Others of the practice see it." first>
+            <NameForm name={account.data.name} />
+          </Section>
+          <Section title="E-mail" note="You sign in with it.">
+            <EmailSection account={account.data} />
+          </Section>
+          <Section title="Password" note="You are then signed out everywhere but here.">
+            <PasswordForm />
+          </Section>
+          <Section
+            title="Signed in"
+            note="A device that you do not know? Sign out there, then change your password."
+          >
+            <Sessions />
+          </Section>
+        </>
+      ) : account.isError ? (
+        <ErrorState error={account.error} onRetry={() => void account.refetch()} />
+      ) : (
+        <Loading label="Loading your account">
+          <SkeletonLines count={8} />
+        </Loading>
+      )}
+    </Page>
+  );
+}

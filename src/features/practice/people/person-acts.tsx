@@ -1,0 +1,82 @@
+import { useQueryClient } from '@tanstack/react-query';
+import type { Person } from '#shared/contracts/people.ts';
+import { routes } from '#shared/contracts/routes.ts';
+import { call } from '#src/api/client.ts';
+import { useMe } from '#src/api/me.ts';
+import { peopleQuery } from '#src/api/people.queries.ts';
+import { Button } from '#src/ui/button.tsx';
+import { ConfirmButton } from '#src/ui/confirm.tsx';
+import { useStatus } from '#src/ui/status.tsx';
+import { athletesOf, HandOver } from './hand-over.tsx';
+import { ChangePerson } from './person-dialog.tsx';
+
+/** What an owner can do with a person. */
+export function PersonActs({ person, people }: { person: Person; people: readonly Person[] }) {
+  return (
+    <span className="flex flex-wrap gap-x-5 gap-y-3 tablet:justify-end">
+      {person.deactivatedAt === null && <ChangePerson person={person} people={people} />}
+      {person.athletes > 0 && <HandOver person={person} people={people} />}
+      {person.deactivatedAt === null ? (
+        <Deactivate person={person} />
+      ) : (
+        <Reactivate person={person} />
+      )}
+    </span>
+  );
+}
+
+function Deactivate({ person: { id, name, athletes } }: { person: Person }) {
+  const client = useQueryClient();
+  const say = useStatus();
+  const isMe = useMe().user.id === id;
+  return (
+    <ConfirmButton
+      look="plain"
+      className="-my-2.5 !text-alarm"
+      label={
+        <>
+          Deactivate <span className="sr-only">{name}</span>
+        </>
+      }
+      title={isMe ? 'Deactivate your own account?' : `Deactivate ${name}?`}
+      confirm="Deactivate"
+      onConfirm={async () => {
+        const page = await call(routes.deactivatePerson, { params: { id } });
+        client.setQueryData(peopleQuery.queryKey, page);
+        say(`${name} is deactivated and signed out everywhere.`);
+      }}
+    >
+      <p>
+        {isMe ? 'You are' : `${name} is`} signed out everywhere at once and cannot sign in. What was
+        done stays.
+      </p>
+      {athletes > 0 && (
+        <p className="mt-2">
+          {athletesOf(athletes)} will have no coach who can film or mark them until you hand them
+          over.
+        </p>
+      )}
+    </ConfirmButton>
+  );
+}
+
+function Reactivate({ person: { id, name } }: { person: Person }) {
+  const client = useQueryClient();
+  const say = useStatus();
+  const act = async () => {
+    try {
+      client.setQueryData(
+        peopleQuery.queryKey,
+        await call(routes.reactivatePerson, { params: { id } }),
+      );
+      say(`${name} can sign in again.`);
+    } catch (error) {
+      say(error instanceof Error ? error.message : 'That did not work.');
+    }
+  };
+  return (
+    <Button look="plain" className="-my-2.5" onClick={() => void act()}>
+      Reactivate <span className="sr-only">{name}</span>
+    </Button>
+  );
+}
