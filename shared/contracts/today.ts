@@ -57,14 +57,39 @@ export const waiting = z
     /** Filming was withdrawn: all of the athlete goes on this day, unless they consent anew. */
     z.object({ kind: z.literal('deletion-due'), due: z.iso.date() }),
     z.object({ kind: z.literal('consent-lapses'), until: z.iso.date() }),
-    z.object({ kind: z.literal('link-lapses'), visitId: id, replayId: id, expiresAt: moment }),
+    z.object({
+      kind: z.literal('link-lapses'),
+      visitId: id,
+      side,
+      replayId: id,
+      expiresAt: moment,
+    }),
   ])
   .and(z.object({ athlete: personRef, at: moment }))
   .meta({ id: 'Waiting' });
 export type Waiting = z.infer<typeof waiting>;
 
+/** What of a beginning is done, of the athletes in this person's sight. */
+export const firstSteps = z
+  .object({
+    /** The practice says how athletes reach it. */
+    contact: z.boolean(),
+    consent: z.boolean(),
+    clip: z.boolean(),
+    call: z.boolean(),
+    /** The first athlete; null where there is none. */
+    athleteId: id.nullable(),
+  })
+  .meta({ id: 'FirstSteps' });
+export type FirstSteps = z.infer<typeof firstSteps>;
+
 export const today = z
-  .object({ items: z.array(waiting), athletes: z.int(), visitsThisWeek: z.int() })
+  .object({
+    items: z.array(waiting),
+    athletes: z.int(),
+    visitsThisWeek: z.int(),
+    steps: firstSteps,
+  })
   .meta({ id: 'Today' });
 export type Today = z.infer<typeof today>;
 

@@ -7,7 +7,7 @@ import { sideReadingOptions } from './readings.queries.ts';
 import { todayQuery } from './today.queries.ts';
 import { refresh } from './use-live.ts';
 import { visitOptions } from './visits.queries.ts';
-import { aClip, aMe, aVisit, clipId, otherId, visitId } from '#tests/support/records.ts';
+import { aClip, aMe, aVisit, clipId, noSteps, otherId, visitId } from '#tests/support/records.ts';
 
 function clientWith(clip: Partial<Clip>) {
   const client = new QueryClient();
@@ -16,7 +16,12 @@ function clientWith(clip: Partial<Clip>) {
     visit: aVisit(),
     clips: [aClip(clip)],
   });
-  client.setQueryData(todayQuery.queryKey, { items: [], athletes: 1, visitsThisWeek: 1 });
+  client.setQueryData(todayQuery.queryKey, {
+    items: [],
+    athletes: 1,
+    visitsThisWeek: 1,
+    steps: noSteps,
+  });
   return client;
 }
 /** Something was asked for before; what does not matter here. */

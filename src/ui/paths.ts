@@ -41,5 +41,6 @@ export const paths = {
   reliability: () => '/practice/reliability',
   protocol: () => '/practice/protocol',
   setUps: () => '/practice/set-ups',
-  method: () => '/method',
+  /** How numbers are made, at a measure or a section where it is given. */
+  method: (at?: string) => (at === undefined ? '/method' : `/method#${at}`),
 } as const;

@@ -1,5 +1,6 @@
 import type { Me } from '#shared/contracts/accounts.ts';
 import type { Athlete, Consent } from '#shared/contracts/athletes.ts';
+import type { FirstSteps } from '#shared/contracts/today.ts';
 import type { Clip } from '#shared/contracts/clips.ts';
 import {
   SAFETY_QUESTIONS,
@@ -26,6 +27,15 @@ export const aMe = (role: Me['user']['role'] = 'coach'): Me => ({
   practice: { id: uuid(3), name: 'Greywater Row' },
   session: { id: uuid(4), expiresAt: '2026-04-03T16:20:00Z' },
 });
+
+/** A practice in which nothing was done yet. */
+export const noSteps: FirstSteps = {
+  contact: false,
+  consent: false,
+  clip: false,
+  call: false,
+  athleteId: null,
+};
 
 export const anAthlete = (change: Partial<Athlete> = {}): Athlete => ({
   id: athleteId,

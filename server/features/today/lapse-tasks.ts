@@ -1,4 +1,5 @@
 import type { UserActor } from '#shared/access/actors.ts';
+import type { Side } from '#shared/contracts/primitives.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { daysLater, today } from '../athletes/days.ts';
 import {
@@ -15,7 +16,12 @@ const CONSENT_DAYS = 14;
 const LINK_DAYS = 3;
 
 type ConsentRow = Named & { until: string };
-type LinkRow = Named & { visit_id: string; replay_id: string; expires_at: Date | string };
+type LinkRow = Named & {
+  visit_id: string;
+  side: Side;
+  replay_id: string;
+  expires_at: Date | string;
+};
 
 type DeletionRow = Named & { due: string };
 
@@ -51,7 +57,7 @@ export const consentTasks = async ({ em, actor }: Unit<UserActor>): Promise<Wait
 export const linkTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
   const scope = answeredFor(actor);
   const rows = await em.execute<LinkRow[]>(
-    `select ${ATHLETE}, p.at, p.visit_id, p.id as replay_id, p.expires_at
+    `select ${ATHLETE}, p.at, p.visit_id, p.side, p.id as replay_id, p.expires_at
      from replay p join visit v on v.id = p.visit_id join athlete a on a.id = v.athlete_id
      where ${scope.sql} and p.revoked_at is null
        and p.expires_at between now() and now() + interval '${LINK_DAYS} days'
@@ -61,6 +67,7 @@ export const linkTasks = async ({ em, actor }: Unit<UserActor>): Promise<Waiting
   return rows.map((row) => ({
     kind: 'link-lapses',
     visitId: row.visit_id,
+    side: row.side,
     replayId: row.replay_id,
     expiresAt: new Date(row.expires_at).toISOString(),
     ...whoAndWhen(row),

@@ -8,6 +8,8 @@ import { clipTasks } from './clip-tasks.ts';
 import { consentTasks, deletionTasks, linkTasks } from './lapse-tasks.ts';
 import { callTasks, repTasks } from './marking-tasks.ts';
 import { commentTasks, readingTasks } from './review-tasks.ts';
+import { firstSteps } from './first-steps.ts';
+import { heldClipTasks } from './held-clips.ts';
 import type { WaitingItem } from './scope.ts';
 import { secondMarkingTasks } from './second-marking-tasks.ts';
 
@@ -19,6 +21,7 @@ const KINDS: readonly ((unit: Unit<UserActor>) => Promise<WaitingItem[]>)[] = [
   callTasks,
   repTasks,
   clipTasks,
+  heldClipTasks,
   deletionTasks,
   consentTasks,
   linkTasks,
@@ -44,5 +47,10 @@ export const readToday = async (unit: Unit<UserActor>): Promise<Today> => {
      where ${inSight.sql}`,
     [monday, daysLater(monday, 6), ...inSight.params],
   );
-  return { items, athletes: counts?.athletes ?? 0, visitsThisWeek: counts?.visits ?? 0 };
+  return {
+    items,
+    athletes: counts?.athletes ?? 0,
+    visitsThisWeek: counts?.visits ?? 0,
+    steps: await firstSteps(unit),
+  };
 };

@@ -230,6 +230,7 @@ describe('today', () => {
     expect(await kindsOf(api.world.owner)).toEqual(
       expect.arrayContaining(['consent-lapses', 'link-lapses']),
     );
+    expect(await kindsOf(api.world.owner)).toContain('clip-held');
     expect(await itemsOf(api.world.otherCoach)).toEqual([]);
     expect(await itemsOf(api.world.foreignOwner)).toEqual([]);
   });
@@ -241,6 +242,33 @@ describe('today', () => {
     expect(body.visitsThisWeek).toBe(3);
     const other = await api.as(api.world.otherCoach);
     expect((await other.get('/api/today')).body).toMatchObject({ athletes: 0, visitsThisWeek: 0 });
+  });
+});
+
+describe('the first steps', () => {
+  const stepsOf = async (user: User) => (await (await api.as(user)).get('/api/today')).body.steps;
+
+  it('are ticked by what is there, for each in their own sight', async () => {
+    const { coach, otherCoach, foreignOwner, athlete, foreignAthlete } = api.world;
+    expect(await stepsOf(coach)).toEqual({
+      ...{ contact: false, consent: true, clip: true, call: true },
+      athleteId: athlete.id,
+    });
+    expect(await stepsOf(otherCoach)).toEqual({
+      ...{ contact: false, consent: false, clip: false, call: false },
+      athleteId: null,
+    });
+    expect(await stepsOf(foreignOwner)).toEqual({
+      ...{ contact: false, consent: true, clip: false, call: false },
+      athleteId: foreignAthlete.id,
+    });
+  });
+
+  it('are ticked at once, and a practice that says how it is reached says so to all', async () => {
+    const { owner, coach } = api.world;
+    const asOwner = await api.as(owner);
+    await asOwner.put('/api/practice').send({ name: 'Test Practice', contact: '1' }).expect(200);
+    expect((await stepsOf(coach)).contact).toBe(true);
   });
 });
 

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import type { MailLinkLook } from '#shared/contracts/mail-links.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
-import { aMe } from '#tests/support/records.ts';
+import { aMe, noSteps } from '#tests/support/records.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
 
 const look = (change: Partial<MailLinkLook> = {}): MailLinkLook => ({
@@ -70,7 +70,7 @@ describe('joining', () => {
   it('says where to and as what, makes the account and leads to Today', async () => {
     const api = signedInApi()
       .on(routes.lookAtMailLink, () => look())
-      .on(routes.today, () => ({ items: [], athletes: 0, visitsThisWeek: 0 }))
+      .on(routes.today, () => ({ items: [], athletes: 0, visitsThisWeek: 0, steps: noSteps }))
       .on(routes.join, () => aMe());
     const { user, place } = renderAt('/join/a-token');
     expect(await screen.findByRole('heading', { name: 'Join Greywater Row' })).toBeVisible();

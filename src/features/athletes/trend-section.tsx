@@ -2,6 +2,7 @@ import type { Side } from '#shared/contracts/primitives.ts';
 import type { VisitRow } from '#shared/contracts/visits.ts';
 import { shortDay } from '#src/ui/days.ts';
 import { plusMinus, turn } from '#src/ui/figures.ts';
+import { MethodLink } from '#src/ui/method-link.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { gateRange } from '#src/ui/gate-words.ts';
 import type { Gates } from '#shared/protocol/protocol.ts';
@@ -31,6 +32,9 @@ export function TrendSection({ visits }: { visits: readonly VisitRow[] }) {
           <p>
             The bars are 95 % errors under our error model. Two visits differ only where they are
             further apart than both errors together.
+          </p>
+          <p>
+            <MethodLink to="reading">How a reading is computed</MethodLink>
           </p>
         </>
       }

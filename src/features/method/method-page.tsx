@@ -13,6 +13,7 @@ import { gateRange, outOfHundred } from '#src/ui/gate-words.ts';
 import { paths } from '#src/ui/paths.ts';
 import { gatesOf, type ReadingRules } from '#shared/protocol/protocol.ts';
 import { useProtocol } from '#src/api/use-protocol.ts';
+import { useHashTarget } from '#src/ui/use-hash-target.ts';
 import { LIMITS } from './limits.ts';
 
 const UNITS: Record<Measure['unit'], string> = { degrees: '°', millimetres: ' mm' };
@@ -21,12 +22,12 @@ const MEASURE_COLUMNS: Column<Measure>[] = [
   {
     key: 'label',
     label: 'Measure',
-    cell: ({ label, sign }) => (
-      <>
+    cell: ({ id, label, sign }) => (
+      <span id={id} tabIndex={-1} data-quiet-focus className="scroll-mt-4">
         <b>{label}</b>
         <br />
         <span className="text-soft">plus: {sign}</span>
-      </>
+      </span>
     ),
   },
   { key: 'zero', label: 'Counted from', cell: ({ zero }) => zero },
@@ -70,12 +71,13 @@ const neededWords = ({ early, turnIn, flat }: ReadingRules): string =>
 /** How each number is made and what it cannot say, written from the same tables that the engine reads. */
 export function MethodPage() {
   const protocol = useProtocol();
+  useHashTarget();
   return (
     <Page
       title="Method"
       lead="How each number is made, its error, where it comes from, and what a phone cannot see."
     >
-      <Section title="What is measured" wide first>
+      <Section id="measures" title="What is measured" wide first>
         <Table
           caption="Measures"
           columns={MEASURE_COLUMNS}
@@ -84,6 +86,7 @@ export function MethodPage() {
         />
       </Section>
       <Section
+        id="landmark-sets"
         title="Landmark sets"
         note="A reading uses the richest set that has a usable rep."
         wide
@@ -103,7 +106,7 @@ export function MethodPage() {
           ))}
         </dl>
       </Section>
-      <Section title="A reading">
+      <Section id="reading" title="A reading">
         <p className="max-w-lead">
           What counts is the change of turn{' '}
           {protocol ? `from ${gateRange(gatesOf(protocol))}` : 'between the gates'} of lift, over
@@ -120,13 +123,14 @@ export function MethodPage() {
         </p>
       </Section>
       <Section
+        id="how-often-right"
         title="How often a reading is right"
         note="From made people of known truth, read by this engine; from our model, no source. A change told from none and an early turn found are not the same: what is found nine times in ten is larger."
         wide
       >
         <AchievedTable />
       </Section>
-      <Section title="Two clips of one rep">
+      <Section id="two-clips" title="Two clips of one rep">
         <p className="max-w-lead">
           A front and a lifted-side clip of the same moment can be tied: lift is then taken from the
           side, turn from the front. Their clocks are tied by what both show: foot off, reaching the
@@ -156,6 +160,7 @@ export function MethodPage() {
         />
       </Section>
       <Section
+        id="filming"
         title="Limits of filming"
         note="Beyond them a clip is warned of before it is sent, and its reading afterwards."
         wide

@@ -10,6 +10,7 @@ import { longDay, shortDay } from '#src/ui/days.ts';
 import { Page } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { Empty, ErrorState, Loading, Skeleton, SkeletonLines } from '#src/ui/states.tsx';
+import { useHashTarget } from '#src/ui/use-hash-target.ts';
 import { CallOnly } from './call/call-only.tsx';
 import { Measured } from './measured.tsx';
 
@@ -71,6 +72,7 @@ function CallFirst({ visitId, side }: { visitId: string; side: Side }) {
 function Opened({ page }: { page: SidePage }) {
   const { athlete, visit, side, reading } = page;
   const call = page.calls[0];
+  useHashTarget();
   return (
     <div className="mx-auto max-w-page px-4 pb-16 tablet:px-12 tablet:pb-24">
       <title>{`${athlete.name}, ${side} side, ${longDay(visit.day)} · Redshank`}</title>

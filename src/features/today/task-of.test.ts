@@ -49,13 +49,20 @@ const items: Waiting[] = [
     mine: false,
   },
   { ...common, kind: 'consent-lapses', until: '2026-03-09' },
-  { ...common, kind: 'link-lapses', visitId, replayId: otherId, expiresAt: '2026-03-12T00:00:00Z' },
+  {
+    ...common,
+    kind: 'link-lapses',
+    visitId,
+    side: 'left',
+    replayId: otherId,
+    expiresAt: '2026-03-12T00:00:00Z',
+  },
 ];
 
 describe('taskOf', () => {
   it('opens the exact place of each kind', () => {
     expect(items.map((item) => [item.kind, taskOf(item).action.to])).toEqual([
-      ['clip-preparing', `/visits/${visitId}`],
+      ['clip-preparing', `/visits/${visitId}#clip-${clipId}`],
       ['clip-refused', `/visits/${visitId}#clip-${clipId}`],
       ['clip-held', `/visits/${visitId}#clip-${otherId}`],
       ['call-missing', `/visits/${visitId}/sides/right/call`],
@@ -64,7 +71,7 @@ describe('taskOf', () => {
       ['comment-open', `/clips/${clipId}?frame=4&comment=${otherId}`],
       ['second-marking-asked', `/second-markings/${otherId}`],
       ['consent-lapses', `/athletes/${athleteId}/consents/new`],
-      ['link-lapses', `/visits/${visitId}`],
+      ['link-lapses', `/visits/${visitId}/sides/left#replay`],
     ]);
   });
 

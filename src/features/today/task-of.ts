@@ -58,7 +58,7 @@ export function taskOf(item: Waiting): Task {
             ? 'Waits for its turn.'
             : `Being prepared, ${Math.round(item.progress)} %.`,
         when: `sent ${moment(item.at)}`,
-        action: { label: 'Open the visit', to: paths.visit(item.visitId) },
+        action: { label: 'Open the visit', to: `${paths.visit(item.visitId)}#clip-${item.clipId}` },
         progress: item.progress,
       };
     case 'clip-refused':
@@ -138,7 +138,10 @@ export function taskOf(item: Waiting): Task {
         title: `Replay link of ${who}`,
         detail: 'Make a new one, or let it lapse.',
         when: distance(item.expiresAt.slice(0, 10)),
-        action: { label: 'Open the visit', to: paths.visit(item.visitId) },
+        action: {
+          label: 'Open the links',
+          to: `${paths.reading(item.visitId, item.side)}#replay`,
+        },
       };
   }
 }

@@ -2,12 +2,14 @@ import { useQuery } from '@tanstack/react-query';
 import type { Today } from '#shared/contracts/today.ts';
 import { useMe } from '#src/api/me.ts';
 import { todayQuery } from '#src/api/today.queries.ts';
+import { useMayInPractice } from '#src/api/use-may.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
 import { weekday } from '#src/ui/days.ts';
 import { capital, inWords } from '#src/ui/figures.ts';
 import { Page, Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { Empty, ErrorState, Loading, Skeleton } from '#src/ui/states.tsx';
+import { FirstSteps, isBeginning } from './first-steps.tsx';
 import { groupTasks, isWork } from './groups.ts';
 import { TaskRow } from './task-row.tsx';
 import { taskOf } from './task-of.ts';
@@ -15,6 +17,7 @@ import { taskOf } from './task-of.ts';
 /** What waits for the person signed in; each row opens the exact place. */
 export function TodayPage() {
   const { user } = useMe();
+  const mayAdd = useMayInPractice()('athlete.add');
   const today = useQuery(todayQuery);
   const given = user.name.split(' ')[0] ?? user.name;
   return (
@@ -22,12 +25,16 @@ export function TodayPage() {
       title={weekday()}
       documentTitle="Today"
       lead={
-        today.data ? leadOf(today.data, given) : <Skeleton className="h-[30px] w-80 max-w-full" />
+        today.data ? (
+          leadOf(today.data, given, mayAdd)
+        ) : (
+          <Skeleton className="h-[30px] w-80 max-w-full" />
+        )
       }
       actions={
         <>
-          <ButtonLink to={paths.newAthlete()}>Add an athlete</ButtonLink>
-          {today.data !== undefined && today.data.athletes > 0 && (
+          {mayAdd && <ButtonLink to={paths.newAthlete()}>Add an athlete</ButtonLink>}
+          {mayAdd && today.data !== undefined && today.data.athletes > 0 && (
             <ButtonLink to={paths.athletes()}>New visit</ButtonLink>
           )}
         </>
@@ -46,9 +53,9 @@ export function TodayPage() {
   );
 }
 
-function leadOf(today: Today, given: string): string {
+function leadOf(today: Today, given: string, mayAdd: boolean): string {
   const count = today.items.map(taskOf).filter(isWork).length;
-  if (today.athletes === 0) return `Welcome, ${given}. It starts with an athlete.`;
+  if (today.athletes === 0 && mayAdd) return `Welcome, ${given}. It starts with an athlete.`;
   if (count === 0) return `Nothing waits for you, ${given}.`;
   return count === 1
     ? `One thing waits for you, ${given}.`
@@ -57,10 +64,22 @@ function leadOf(today: Today, given: string): string {
 
 function Tasks({ today }: { today: Today }) {
   const { user } = useMe();
-  if (today.athletes === 0) return <FirstAthlete />;
+  const mayAdd = useMayInPractice()('athlete.add');
+  if (today.athletes === 0 && !mayAdd)
+    return (
+      <Section title="Next" wide>
+        <Empty title="No athlete in your sight yet">
+          Clips, readings and comments of the coaches you look after appear here as they come. The
+          owner of the practice says who they are.
+        </Empty>
+      </Section>
+    );
+  const beginning = mayAdd && isBeginning(today, user.role);
   const groups = groupTasks(today.items.map(taskOf), user.role);
   if (groups.length === 0)
-    return (
+    return beginning ? (
+      <FirstSteps today={today} />
+    ) : (
       <Section title="Next" wide>
         <Empty
           title={today.visitsThisWeek === 0 ? 'No visit yet this week' : 'All done for now'}
@@ -71,51 +90,27 @@ function Tasks({ today }: { today: Today }) {
       </Section>
     );
   const first = groups.flatMap(({ tasks }) => tasks).find(isWork);
-  return groups.map(({ group, name, tasks }) => (
-    <Section
-      key={group}
-      title={name}
-      wide
-      note={
-        <span className="mt-1 block text-value font-light leading-10 tracking-[-0.015em] text-ink">
-          {tasks.length}
-        </span>
-      }
-    >
-      <ul>
-        {tasks.map((task) => (
-          <TaskRow key={task.key} task={task} pressing={task === first} />
-        ))}
-      </ul>
-    </Section>
-  ));
-}
-
-function FirstAthlete() {
   return (
-    <Section title="To begin" wide>
-      <ol className="max-w-lead">
-        {[
-          ['Add an athlete', 'Name, date of birth, body height, and what to be careful with.'],
-          [
-            'Record their consent',
-            'For a minor, from a guardian. Without it nothing can be filmed.',
-          ],
-          ['Film and send a clip', 'The visit leads through the safety questions and the filming.'],
-          ['Say what you saw', 'Your call by eye comes first; then mark, and read the course.'],
-        ].map(([step, words], n) => (
-          <li key={step} className="flex gap-4 border-b border-rule py-3 first:pt-0 last:border-0">
-            <span className="text-soft">{n + 1}</span>
-            <span>
-              <b>{step}</b>
-              <span className="block text-soft">{words}</span>
+    <>
+      {beginning && <FirstSteps today={today} />}
+      {groups.map(({ group, name, tasks }) => (
+        <Section
+          key={group}
+          title={name}
+          wide
+          note={
+            <span className="mt-1 block text-value font-light leading-10 tracking-[-0.015em] text-ink">
+              {tasks.length}
             </span>
-          </li>
-        ))}
-      </ol>
-      <ButtonLink look="primary" to={paths.newAthlete()} className="mt-5">
-        Add the first athlete
-      </ButtonLink>
-    </Section>
+          }
+        >
+          <ul>
+            {tasks.map((task) => (
+              <TaskRow key={task.key} task={task} pressing={task === first} />
+            ))}
+          </ul>
+        </Section>
+      ))}
+    </>
   );
 }

@@ -3,6 +3,7 @@ import type { Clip } from '#shared/contracts/clips.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { download, type Download } from '#src/api/client.ts';
 import { Button } from '#src/ui/button.tsx';
+import { MethodLink } from '#src/ui/method-link.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { saveAs } from '#src/ui/save-as.ts';
 import { clipWords } from '#src/ui/words.ts';
@@ -17,10 +18,15 @@ export function TakeAway({ visitId, clips }: { visitId: string; clips: readonly 
       id="files"
       title="Take it away"
       margin={
-        <p>
-          The files hold no name of the athlete. They leave Redshank’s care: keep them where health
-          data is kept.
-        </p>
+        <>
+          <p>
+            The files hold no name of the athlete. They leave Redshank’s care: keep them where
+            health data is kept.
+          </p>
+          <p>
+            <MethodLink to="measures">How each value is computed</MethodLink>
+          </p>
+        </>
       }
     >
       <p className="max-w-lead">For a spreadsheet, a statistics package or another player.</p>

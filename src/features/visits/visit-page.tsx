@@ -15,7 +15,7 @@ import { ConsentStep } from './consent-step.tsx';
 import { FilmStep } from './filming/film-step.tsx';
 import { SafetyStep } from './safety/safety-step.tsx';
 import { TakeAway } from './take-away.tsx';
-import { useHashTarget } from './use-hash-target.ts';
+import { useHashTarget } from '#src/ui/use-hash-target.ts';
 import { VisitSteps } from './visit-steps.tsx';
 
 /** One day's testing of one athlete, from the consent to the call by eye. */

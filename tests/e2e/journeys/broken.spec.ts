@@ -92,7 +92,7 @@ for (const [name, wanted] of Object.entries(NEEDS))
   });
 
 const EMPTY = [
-  { path: '/api/today', address: paths.today(), says: 'Add the first athlete' },
+  { path: '/api/today', address: paths.today(), says: 'It starts with an athlete.' },
   { path: '/api/athletes', address: paths.athletes(), says: 'No athletes yet' },
   { path: '/api/set-ups', address: paths.setUps(), says: 'No set-up yet' },
 ];

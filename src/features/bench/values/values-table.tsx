@@ -3,6 +3,7 @@ import type { FrameValue } from '#shared/measures/frame-values.ts';
 import type { Measure } from '#shared/measures/measure.ts';
 import { MEASURES } from '#shared/measures/registry.ts';
 import { cx } from '#src/ui/class-names.ts';
+import { paths } from '#src/ui/paths.ts';
 import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { EXTRAS, type Extra } from '../model/led.ts';
 import { type FrameFigures } from './frame-figures.ts';
@@ -77,8 +78,7 @@ function Values({
         {measures.map((measure) => (
           <ValueRow
             key={measure.id}
-            label={measure.label}
-            sign={measure.sign}
+            measure={measure}
             part={PARTS.has(measure.id)}
             value={figures?.values.find((each) => each.measure.id === measure.id) ?? null}
             figures={figures}
@@ -90,14 +90,12 @@ function Values({
 }
 
 function ValueRow({
-  label,
-  sign,
+  measure,
   part,
   value,
   figures,
 }: {
-  label: string;
-  sign: string;
+  measure: Measure;
   part: boolean;
   value: FrameValue | null;
   figures: FrameFigures | null;
@@ -107,8 +105,16 @@ function ValueRow({
   const provisional = value?.measure.id === 'turn' && figures?.shown?.provisional;
   return (
     <tr>
-      <th scope="row" title={sign} className={cx(part && 'pl-4 text-soft')}>
-        {label}
+      <th scope="row" title={measure.sign} className={cx(part && 'pl-4 text-soft')}>
+        <a
+          href={paths.method(measure.id)}
+          target="_blank"
+          rel="noopener"
+          title={`${measure.sign}; how it is computed, in a new tab`}
+          className="text-inherit decoration-rule hover:decoration-current"
+        >
+          {measure.label}
+        </a>
         {provisional && <span className="ml-1 text-caption text-ochre">provisional</span>}
       </th>
       {value && value.value.missing === null ? (

@@ -34,9 +34,12 @@ export function AuditFilters({
     ['action', 'What', 'Anything', ACTIONS],
   ] as const;
   return (
-    <search className="grid gap-4 phone:grid-cols-2 desk:grid-cols-[1fr_1fr_1.4fr_170px_170px]">
+    <search className="grid grid-cols-2 gap-4 desk:grid-cols-[1fr_1fr_1.4fr_170px_170px]">
       {lists.map(([field, label, any, options]) => (
-        <div key={field} className={field === 'action' ? 'phone:col-span-2 desk:col-span-1' : ''}>
+        <div
+          key={field}
+          className={`col-span-2 desk:col-span-1 ${field === 'action' ? '' : 'phone:col-span-1'}`}
+        >
           <label htmlFor={`${id}-${field}`} className="font-bold">
             {label}
           </label>

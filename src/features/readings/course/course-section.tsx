@@ -1,5 +1,6 @@
 import type { Reading } from '#shared/contracts/readings.ts';
 import { degrees, inWords, turn } from '#src/ui/figures.ts';
+import { MethodLink } from '#src/ui/method-link.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { coursePoints } from './course-data.ts';
 import { ReadingCourse } from './reading-course.tsx';
@@ -36,6 +37,9 @@ export function CourseSection({ reading }: { reading: Reading }) {
             </p>
           )}
           <RepKey reading={reading} />
+          <p>
+            <MethodLink to="turn">How turn is computed</MethodLink>
+          </p>
           {reading.provisional && <p>Hollow points rest on marks nobody has looked at.</p>}
           {returnPast90 && (
             <p>

@@ -1,5 +1,6 @@
 import type { Reading } from '#shared/contracts/readings.ts';
 import { capital, degrees, plusMinus } from '#src/ui/figures.ts';
+import { MethodLink } from '#src/ui/method-link.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { repSymbol } from '#src/ui/plots/course-points.tsx';
 import { LiftPlot } from '#src/ui/plots/lift-plot.tsx';
@@ -47,6 +48,9 @@ export function LiftSection({ reading }: { reading: Reading }) {
               </li>
             ))}
           </ul>
+          <p>
+            <MethodLink to="lift">How lift is computed</MethodLink>
+          </p>
           {curves.some(({ points }) => points.some(({ hollow }) => hollow)) && (
             <p>Hollow points rest on marks nobody has looked at.</p>
           )}

@@ -4,6 +4,7 @@ import type { ReadingFigures } from '#shared/reading/types.ts';
 import { turnDial } from '#shared/overlay/dials.ts';
 import { OverlaySvg } from '#src/canvas/overlay-svg.tsx';
 import { degrees, plusMinus, turn } from '#src/ui/figures.ts';
+import { MethodLink } from '#src/ui/method-link.tsx';
 import { Section } from '#src/ui/page.tsx';
 import { SideMark } from '#src/ui/side-mark.tsx';
 import { gateRange } from '#src/ui/gate-words.ts';
@@ -29,6 +30,9 @@ export function PartsSection({ reading }: { reading: Reading }) {
           </p>
           <p className="flex items-center gap-2">
             <SideMark kind="support" /> support thigh
+          </p>
+          <p>
+            <MethodLink to="pelvis-part">How the parts are computed</MethodLink>
           </p>
           <p>Dashed: the athlete’s own quiet stance. It is zero here, not an anatomical zero.</p>
         </>

@@ -23,7 +23,7 @@ export function ReasonsSection({ reading }: { reading: Reading }) {
             from it, not an absolute angle.
           </p>
           <p>
-            <Link to={paths.method()} className="inline-block py-2">
+            <Link to={paths.method('reading')} className="inline-block py-2">
               How each number is computed
             </Link>
           </p>

@@ -24,7 +24,9 @@ const COLUMNS: readonly Column<ChangeRow>[] = [
     label: 'Change from quiet stance to the top',
     cell: (row) => (
       <>
-        <b>{row.label}</b>{' '}
+        <Link to={paths.method(row.id)} className="tap font-bold">
+          {row.label}
+        </Link>{' '}
         <span className="text-soft">
           {row.change === null ? '' : directionWords(row.id, row.change)}
         </span>
