@@ -28,7 +28,8 @@ export function InviteForm() {
       <SelectField
         name="role"
         label="Role"
-        options={ROLES.map(({ value, label, note }) => ({ value, label: `${label}: ${note}` }))}
+        hint="A coach films and marks their own athletes. A supervisor sees those of the coaches you name. An owner sees and manages all."
+        options={ROLES}
       />
       <Button
         type="submit"

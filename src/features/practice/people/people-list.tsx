@@ -50,7 +50,14 @@ export function PeopleList({ people }: { people: readonly Person[] }) {
       key: 'seen',
       label: 'Last here',
       cell: ({ lastSeenAt }) =>
-        lastSeenAt === null ? <span className="text-soft">never</span> : dayOf(lastSeenAt),
+        lastSeenAt === null ? (
+          <span className="text-soft">never here</span>
+        ) : (
+          <>
+            <span className="text-soft tablet:hidden">last here </span>
+            {dayOf(lastSeenAt)}
+          </>
+        ),
     },
     {
       key: 'acts',
