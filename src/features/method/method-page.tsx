@@ -26,7 +26,7 @@ const MEASURE_COLUMNS: Column<Measure>[] = [
       <span id={id} tabIndex={-1} data-quiet-focus className="scroll-mt-4">
         <b>{label}</b>
         <br />
-        <span className="text-soft">plus: {sign}</span>
+        <span className="text-soft">{sign}</span>
       </span>
     ),
   },
