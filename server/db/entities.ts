@@ -20,6 +20,7 @@ import { Reading } from '../features/readings/reading.entity.ts';
 import { SideSetting } from '../features/readings/side-setting.entity.ts';
 import { Replay } from '../features/replays/replay.entity.ts';
 import { Rep } from '../features/reps/rep.entity.ts';
+import { Erasure } from '../features/retention/erasure.entity.ts';
 import { SecondMarkCommand } from '../features/second-markings/second-mark-command.entity.ts';
 import { SecondMark } from '../features/second-markings/second-mark.entity.ts';
 import { SecondMarking } from '../features/second-markings/second-marking.entity.ts';
@@ -56,5 +57,6 @@ export const entities = [
   Comment,
   Head,
   Replay,
+  Erasure,
   JobOutbox,
 ];

@@ -16,6 +16,7 @@ import { Migration20261202033000_hidden_copies } from '../../migrations/Migratio
 import { Migration20261202034100_audit_trail } from '../../migrations/Migration20261202034100_audit_trail.ts';
 import { Migration20261202035900_people } from '../../migrations/Migration20261202035900_people.ts';
 import { Migration20261202041200_consent_life } from '../../migrations/Migration20261202041200_consent_life.ts';
+import { Migration20261202043400_erasures } from '../../migrations/Migration20261202043400_erasures.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -77,6 +78,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202041200_consent_life',
     class: Migration20261202041200_consent_life,
+  },
+  {
+    name: 'Migration20261202043400_erasures',
+    class: Migration20261202043400_erasures,
   },
 ];
 

@@ -44,6 +44,8 @@ export interface JobHandler<P> {
     readonly sql: string;
     readonly read: (row: Record<string, unknown>) => { practiceId: string; payload: P };
   };
+  /** Asks that again so often while a worker lives: for what falls due with the day. Only at the start where left out. */
+  readonly lookAgainMinutes?: number;
 }
 
 /** A handler of any kind of job, for lists. */
@@ -58,6 +60,7 @@ export interface AnyJobHandler {
     readonly sql: string;
     readonly read: (row: Record<string, unknown>) => { practiceId: string; payload: unknown };
   };
+  readonly lookAgainMinutes?: number;
 }
 
 /** Makes a handler listable: what comes from the queue is parsed before it is used. */
@@ -71,6 +74,7 @@ export const handles = <P>(handler: JobHandler<P>): AnyJobHandler => {
     lockKey: (payload) => `${handler.type.queue} ${handler.lockKey(parse(payload))}`,
     run: (context) => handler.run({ ...context, payload: parse(context.payload) }),
     ...(handler.unfinished ? { unfinished: handler.unfinished } : {}),
+    ...(handler.lookAgainMinutes ? { lookAgainMinutes: handler.lookAgainMinutes } : {}),
   };
 };
 

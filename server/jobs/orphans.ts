@@ -27,6 +27,22 @@ export const queueOrphans = async (
   }
 };
 
+/** Queues what has fallen due by the rows' own state since the start. */
+export const queueDue = async (
+  jobsUrl: string,
+  boss: PgBoss,
+  locks: Locks,
+  handler: AnyJobHandler,
+): Promise<void> => {
+  const client = new Client({ connectionString: jobsUrl });
+  await client.connect();
+  try {
+    await queueUnfinished(client, boss, locks, handler);
+  } finally {
+    await client.end();
+  }
+};
+
 const retryActive = async (
   client: Client,
   boss: PgBoss,

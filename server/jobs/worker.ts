@@ -2,7 +2,7 @@ import PgBoss from 'pg-boss';
 import type { Ground } from '../main/ground.ts';
 import type { AnyJobHandler, Carried } from './job.ts';
 import { Locks } from './locks.ts';
-import { queueOrphans } from './orphans.ts';
+import { queueDue, queueOrphans } from './orphans.ts';
 import { Relay } from './relay.ts';
 
 const BUSY_RETRY_SECONDS = 10;
@@ -54,6 +54,16 @@ export const startWorker = async (
     });
     await queueOrphans(jobsUrl, boss, locks, handler);
   }
+  const looks = handlers.flatMap((handler) => {
+    const minutes = handler.lookAgainMinutes;
+    if (minutes === undefined) return [];
+    const look = () => {
+      queueDue(jobsUrl, boss, locks, handler).catch((error: unknown) => {
+        if (!stopping.signal.aborted) log.error({ err: error }, 'what is due was not looked for');
+      });
+    };
+    return [setInterval(look, minutes * 60_000)];
+  });
   const relay = await Relay.start(jobsUrl, boss, log, onLost);
   for (const handler of handlers) {
     await boss.work<Carried>(
@@ -87,6 +97,7 @@ export const startWorker = async (
   return {
     stop: async () => {
       stopping.abort();
+      looks.forEach(clearInterval);
       await relay.stop();
       await boss.stop({ graceful: true, wait: true, timeout: 10_000 });
       await locks.close();

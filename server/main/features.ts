@@ -18,6 +18,7 @@ import { protocolFeature } from '../features/protocol/protocol.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { replaysFeature } from '../features/replays/replays.routes.ts';
 import { repsFeature } from '../features/reps/reps.routes.ts';
+import { retentionFeature } from '../features/retention/retention.routes.ts';
 import { secondMarkingsFeature } from '../features/second-markings/second-markings.routes.ts';
 import { systemFeature } from '../features/system/system.routes.ts';
 import { todayFeature } from '../features/today/today.routes.ts';
@@ -33,6 +34,7 @@ export const features: readonly Feature[] = [
   todayFeature,
   athletesFeature,
   consentsFeature,
+  retentionFeature,
   visitsFeature,
   clipsFeature,
   formUploadFeature,

@@ -4,6 +4,8 @@ import { sendMailLinkJob } from '../features/mail-links/jobs/send-mail-link.ts';
 import { hideHeadJob } from '../features/replays/jobs/hide-head.ts';
 import { removeHiddenJob } from '../features/replays/jobs/remove-hidden.ts';
 import { deriveReadingJob } from '../features/readings/jobs/derive-reading.ts';
+import { eraseFilesJob } from '../features/retention/jobs/erase-files.ts';
+import { tidyJob } from '../features/retention/jobs/tidy.ts';
 import type { AnyJobHandler } from '../jobs/job.ts';
 
 /** Every kind of job that a worker does. */
@@ -13,5 +15,7 @@ export const jobs: readonly AnyJobHandler[] = [
   hideHeadJob,
   removeHiddenJob,
   sendMailLinkJob,
+  tidyJob,
+  eraseFilesJob,
   fillDemoJob,
 ];

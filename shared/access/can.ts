@@ -22,13 +22,17 @@ const ASSIGNED: ReadonlySet<Action> = new Set<Action>([
   'reliability.read',
 ]);
 
-/** What changes the practice as a whole, who works in it, and who did what. */
+/** What changes the practice as a whole, who works in it, who did what, and what answers for all that it holds of one person. */
 const OWNERS: ReadonlySet<Action> = new Set<Action>([
   'protocol.change',
   'practice.edit',
   'audit.read',
   'people.manage',
   'consent-wording.change',
+  'retention.read',
+  'retention.change',
+  'athlete.erase',
+  'athlete.export',
 ]);
 
 const onPractice = (actor: UserActor, action: Action): boolean =>
@@ -37,6 +41,7 @@ const onPractice = (actor: UserActor, action: Action): boolean =>
   (actor.role === 'coach' && !OWNERS.has(action));
 
 const onCaseload = (actor: UserActor, action: Action, coachId: string): boolean => {
+  if (OWNERS.has(action)) return actor.role === 'owner';
   const held = reach(actor, coachId);
   return held === 'assigned' ? ASSIGNED.has(action) : held !== null;
 };

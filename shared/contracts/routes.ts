@@ -17,6 +17,7 @@ import { readingRoutes } from './readings.ts';
 import { reliabilityRoutes } from './reliability.ts';
 import { repRoutes } from './reps.ts';
 import { replayRoutes } from './replays.ts';
+import { retentionRoutes } from './retention.ts';
 import { secondMarkingRoutes } from './second-markings.ts';
 import { systemRoutes } from './system.ts';
 import { todayRoutes } from './today.ts';
@@ -31,6 +32,7 @@ export const routes = {
   ...todayRoutes,
   ...athleteRoutes,
   ...consentWordingRoutes,
+  ...retentionRoutes,
   ...visitRoutes,
   ...clipRoutes,
   ...repRoutes,

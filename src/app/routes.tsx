@@ -206,6 +206,14 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'practice/retention',
+                lazy: lazily(() =>
+                  import('#src/features/practice/retention/retention-page.tsx').then(
+                    (page) => page.RetentionPage,
+                  ),
+                ),
+              },
+              {
                 path: 'practice/set-ups',
                 lazy: lazily(() =>
                   import('#src/features/practice/set-ups-page.tsx').then((page) => page.SetUpsPage),

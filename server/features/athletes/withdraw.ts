@@ -2,8 +2,10 @@ import type { UserActor } from '#shared/access/actors.ts';
 import type { Purpose } from '#shared/contracts/consents.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { found, needCaseload } from '../../http/need.ts';
+import { enqueue } from '../../jobs/job.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../audit/audit.ts';
+import { REMOVE_HIDDEN } from '../replays/jobs/remove-hidden-type.ts';
 import { athleteInSight } from './athlete-in-sight.ts';
 import type { AthleteRow } from './athlete-rows.ts';
 import type { Athlete } from './athlete.entity.ts';
@@ -31,16 +33,24 @@ const take = ({ em, actor }: Of, consent: Consent, purposes: readonly Purpose[])
   return taken;
 };
 
+/** Links end for good, and copies that were made for them go. */
+const endLinks = async ({ em }: Of, athleteId: string): Promise<void> => {
+  const ended = await em.execute<{ id: string; hide_head: boolean }[]>(
+    `update replay set revoked_at = now() from visit
+     where visit.id = replay.visit_id and visit.athlete_id = ? and replay.revoked_at is null
+     returning replay.id, replay.hide_head`,
+    [athleteId],
+  );
+  for (const { id, hide_head: hidden } of ended)
+    if (hidden) await enqueue({ em }, REMOVE_HIDDEN, { replayId: id });
+};
+
 /** What rested on the purposes stops in the same unit of work: links die, what was filmed is closed. */
 const stopWhatRested = async (unit: Of, athlete: Athlete): Promise<void> => {
   const { em } = unit;
   await em.flush();
   if (!(await hasConsent(em, athlete.id, 'sharing-by-link')))
-    await em.execute(
-      `update replay set revoked_at = now() from visit
-       where visit.id = replay.visit_id and visit.athlete_id = ? and replay.revoked_at is null`,
-      [athlete.id],
-    );
+    await endLinks(unit, athlete.id);
   if (!(await hasConsent(em, athlete.id, 'assessment'))) await scheduleDeletion(unit, athlete);
   await tellConsent(unit, athlete);
 };

@@ -28,7 +28,7 @@ export const consentInSight = async (
 };
 
 /** One file a version, so that a scan that replaces another never mixes with it. */
-const scanKey = (consent: Consent, { at }: Pick<Scan, 'at'>): string =>
+export const scanKey = (consent: Consent, { at }: Pick<Scan, 'at'>): string =>
   `${athletePrefix(consent.practiceId, (consent.athlete.unwrap() as Athlete).id)}/consents/${consent.id}-${Date.parse(at)}`;
 
 /** Where the scan lies, for whoever may see the athlete. */

@@ -11,12 +11,17 @@ const readNumber = (typed: unknown): number =>
       ? Number(typed.trim().replace(',', '.'))
       : NaN;
 
+/** The same where nothing typed means that there is none. */
+const readNumberOrNone = (typed: unknown): number | null =>
+  typed === null || (typeof typed === 'string' && typed.trim() === '') ? null : readNumber(typed);
+
 /** A number with its unit beside it. */
 export function NumberField<F extends FieldValues = FieldValues>({
   name,
   unit,
+  emptyIsNull = false,
   ...words
-}: FieldWords & { name: FieldPath<F>; unit: string }) {
+}: FieldWords & { name: FieldPath<F>; unit: string; emptyIsNull?: boolean }) {
   const { register } = useFormContext();
   const error = useFault(name);
   const ids = useFieldIds(words.hint, error);
@@ -25,7 +30,7 @@ export function NumberField<F extends FieldValues = FieldValues>({
     <FieldFrame ids={ids} error={error} {...words}>
       <span className="mt-1 flex items-center gap-2">
         <input
-          {...register(name, { setValueAs: readNumber })}
+          {...register(name, { setValueAs: emptyIsNull ? readNumberOrNone : readNumber })}
           id={ids.id}
           inputMode="decimal"
           autoComplete="off"

@@ -133,6 +133,12 @@ const FRONT: readonly PageOfProduct[] = [
     stands: (page) => page.getByLabel('To everybody', { exact: true }),
   },
   {
+    name: 'the retention',
+    who: OWNER,
+    address: () => paths.retention(),
+    stands: text('Nobody was erased yet.'),
+  },
+  {
     name: 'the set-ups',
     who: COACH,
     address: () => paths.setUps(),
