@@ -12,6 +12,9 @@ import { everythingIn } from '#tests/support/everything-in.ts';
 
 const RUNS = { numRuns: 30, seed: 20261202, endOnFailure: true } as const;
 
+/** What is right for these names somebody who is not known before: the new coach, the athlete by name. */
+const NAMING: ReadonlySet<RouteName> = new Set<RouteName>(['handOver', 'eraseAthlete']);
+
 let api: Api;
 let ids: Ids;
 beforeAll(async () => {
@@ -67,7 +70,7 @@ describe('whatever is sent', () => {
       else taken += 1;
     });
     await fc.assert(property, { ...RUNS, examples: known ? [[known, 0]] : [] });
-    if (known) expect(taken, 'what is right is taken').toBeGreaterThan(0);
+    if (known && !NAMING.has(name)) expect(taken, 'what is right is taken').toBeGreaterThan(0);
   });
 
   const withQuery = all.filter(([, { query }]) => query);
@@ -78,7 +81,7 @@ describe('whatever is sent', () => {
     const property = fc.asyncProperty(fc.oneof(inputs, spoiled(inputs)), async (input) => {
       const pairs = Object.entries(input ?? {}).map(([key, value]) => [
         key,
-        String(value).slice(0, 2000),
+        (typeof value === 'object' ? JSON.stringify(value) : String(value)).slice(0, 2000),
       ]);
       const answer = await agent[route.method](
         `${address(name)}?${new URLSearchParams(pairs).toString()}`,
