@@ -5,6 +5,7 @@ import { coveredShare } from './covered.ts';
 import { leastAlikeHalf } from './halves.ts';
 import { flow, type Place } from './flow.ts';
 import {
+  ALONG_AN_EDGE,
   BACK,
   DISTINCT,
   DOUBTFUL,
@@ -26,6 +27,7 @@ import type { Plane } from './plane.ts';
 import { pyramidAround, type Pyramid, toLevelX, toLevelY } from './pyramid.ts';
 import { search } from './search.ts';
 import { makeTemplate, type Template } from './template.ts';
+import { slidesAt } from './texture.ts';
 import { atPlace, movedTo, scaleOf, type Warp } from './warp.ts';
 
 /** Radii of the patches, pixels of the picture looked at. */
@@ -72,6 +74,8 @@ export class Follower {
   #correlation = 1;
   /** Pictures since the point was last seen; 0 while it is. */
   #lostFor = 0;
+  /** Along an edge nothing proves where it is: then no place is called sure. */
+  readonly #most: number;
   /** How sure it may be called: less where it was found again, until it has proved itself. */
   #trust = 1;
 
@@ -85,6 +89,7 @@ export class Follower {
     this.#newest = this.#first;
     this.#core = makeTemplate(picture, this.#warp, Math.ceil(settings.templateRadius / 2), 'move');
     this.#searched = this.#searchTemplate(at);
+    this.#most = slidesAt(picture, at.x, at.y, settings.templateRadius) ? ALONG_AN_EDGE : 1;
   }
 
   /** The next picture in the direction that is being followed. */
@@ -128,7 +133,8 @@ export class Follower {
       spread: spreadOf(best.template, best.correlation),
       scale: scaleOf(best.warp),
     };
-    const confidence = Math.min(this.#trust, confidenceOf(evidence) * best.within);
+    const free = Math.min(this.#trust, confidenceOf(evidence) * best.within);
+    const confidence = Math.min(this.#most, free);
     const state = stateOf(confidence);
     if (state === 'lost') return this.#lose();
     this.#take(best, picture, from);
@@ -136,7 +142,7 @@ export class Follower {
     const atHome = this.#fromHome(best) < NEAR && isItself(best.correlation, middle.core);
     const proved = this.#trust > FOUND_AGAIN && isBack(evidence);
     if (proved || atHome) this.#trust = Math.min(1, this.#trust + 0.05);
-    if (state === 'sure' && fall < 0.03 && covered === 0) this.#refresh(picture, best);
+    if (stateOf(free) === 'sure' && fall < 0.03 && covered === 0) this.#refresh(picture, best);
     return { place: { x: best.warp.tx, y: best.warp.ty }, confidence, state };
   }
 

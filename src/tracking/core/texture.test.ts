@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { planeOf } from './plane.ts';
-import { noiseAround, refusalAt, textureAt } from './texture.ts';
+import { noiseAround, refusalAt, slidesAt, textureAt } from './texture.ts';
 
 const SIZE = 121;
 const AT = 60;
@@ -12,6 +12,8 @@ const pictureOf = (grey: (x: number, y: number) => number) =>
   );
 const refusalOf = (grey: (x: number, y: number) => number, x = AT, y = AT) =>
   refusalAt(pictureOf(grey), x, y, 17);
+
+const slides = (grey: (x: number, y: number) => number) => slidesAt(pictureOf(grey), AT, AT, 17);
 
 const edge = (x: number) => (x < AT ? 60 : 160);
 const dot = (x: number, y: number) => (Math.hypot(x - AT, y - AT) < 7 ? 40 : 180);
@@ -69,14 +71,17 @@ describe('a place that cannot be followed', () => {
     expect(refusalOf(dot, 8, 60)).toBe('at-the-border');
   });
 
-  it('is an edge whose faint shading would let it slide', () => {
-    // the outline of a bare limb: one grey value of shading in eight pixels along it
-    const limb = (x: number, y: number) => edge(x) + (x < AT ? Math.round(2 * Math.sin(y / 8)) : 0);
-    expect(refusalOf(limb)).toBe('only-an-edge');
+  it('is not an edge with faint shading, but a mark would slide along it', () => {
+    // the outline of a bare limb: a grey value or two of shading in eight pixels along it
+    const limb = (x: number, y: number) => edge(x) + (x < AT ? Math.round(6 * Math.sin(y / 8)) : 0);
+    expect(refusalOf(limb)).toBeNull();
+    expect(slides(limb)).toBe(true);
   });
 
   it('is not an edge along which a print holds it', () => {
     const print = (x: number, y: number) => edge(x) + 25 * Math.round(Math.sin(y / 3));
     expect(refusalOf(print)).toBeNull();
+    expect(slides(print)).toBe(false);
+    expect(slides(dot)).toBe(false);
   });
 });

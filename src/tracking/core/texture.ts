@@ -93,6 +93,15 @@ const LOOSEST = 0.35;
 const ONE_WAY = 7;
 const SLIDES_FROM = 0.1;
 
+/**
+ * Whether a mark here would slide along an edge, such as the outline of a bare limb: it can be followed, and what is
+ * found has to be looked at.
+ */
+export const slidesAt = (plane: Plane, x: number, y: number, radius: number): boolean => {
+  const { worst, best } = textureAt(plane, x, y, radius, noiseAround(plane, x, y));
+  return worst > SLIDES_FROM && worst > ONE_WAY * best && Number.isFinite(best);
+};
+
 /** Why a place cannot be followed; null where it can. */
 export const refusalAt = (
   plane: Plane,
@@ -106,8 +115,6 @@ export const refusalAt = (
   if (x < border || y < border || x > plane.width - 1 - border || y > plane.height - 1 - border)
     return 'at-the-border';
   const { worst, best } = textureAt(plane, x, y, radius, noiseAround(plane, x, y));
-  const slides = worst > SLIDES_FROM && worst > ONE_WAY * best && Number.isFinite(best);
-  if (worst <= LOOSEST && !slides) return null;
-  if (slides) return 'only-an-edge';
+  if (worst <= LOOSEST) return null;
   return best <= LOOSEST / 3 ? 'only-an-edge' : 'nothing-to-hold-on-to';
 };
