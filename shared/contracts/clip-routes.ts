@@ -124,7 +124,7 @@ export const clipRoutes = {
       .meta({ id: 'UsePart' }),
     status: 202,
     answer: json(clip),
-    problems: ['not-found', 'not-allowed'],
+    problems: ['not-found', 'not-allowed', 'not-as-it-stands'],
   }),
   prepareAgain: route({
     method: 'post',
@@ -134,7 +134,7 @@ export const clipRoutes = {
     params,
     status: 202,
     answer: json(clip),
-    problems: ['not-found', 'not-allowed'],
+    problems: ['not-found', 'not-allowed', 'not-as-it-stands'],
   }),
   clipVideo: route({
     method: 'get',

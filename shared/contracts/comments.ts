@@ -101,6 +101,6 @@ export const commentRoutes = {
     params,
     status: 204,
     answer: none,
-    problems: ['not-found', 'not-allowed'],
+    problems: ['not-found', 'not-allowed', 'not-as-it-stands'],
   }),
 };

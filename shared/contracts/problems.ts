@@ -46,6 +46,7 @@ export const PROBLEMS = {
     'A safety answer speaks against filming. Speak with the person who treats this athlete.',
   ],
   // clips
+  'not-as-it-stands': [409, 'This cannot be done to it as it stands.'],
   'clip-not-ready': [409, 'The clip is still being prepared.'],
   'clip-refused': [409, 'This clip was refused and has no pictures to show.'],
   'clip-missing-in-storage': [503, 'The clip’s file cannot be reached right now.'],

@@ -1,3 +1,4 @@
+import { STANDARD_PROTOCOL } from '#shared/protocol/protocol.ts';
 import { type RouteName, routes } from '#shared/contracts/routes.ts';
 
 /** What the `:id` of a route names. A route that is missing here fails the type check. */
@@ -78,6 +79,31 @@ export type RouteNameWithId = {
 
 /** Bodies that would do something if the thing could be seen. */
 export const BODIES: Partial<Record<RouteName, object>> = {
+  invite: { email: 'new@test.example', role: 'coach' },
+  setRetention: { keepMonths: 24, withdrawalDays: 30 },
+  changePractice: { name: 'Test Practice', contact: '' },
+  changeProtocol: { after: 1, values: STANDARD_PROTOCOL, note: 'As it is.' },
+  changeConsentWording: {
+    after: 1,
+    texts: {
+      intro: 'What this is about.',
+      assessment: 'What is filmed.',
+      supervision: 'Who looks at it.',
+      teaching: 'Who learns from it.',
+      'sharing-by-link': 'Who gets a link.',
+      minors: 'Who signs for a child.',
+      withdrawal: 'How to end it.',
+    },
+    note: 'As it is.',
+  },
+  addSetUp: {
+    name: 'The hall',
+    distanceMm: 3000,
+    lensHeightMm: 1000,
+    rodMm: null,
+    beltPointerMm: null,
+    thighPointerMm: null,
+  },
   addAthlete: { givenName: 'Wren', familyName: 'Alder', birthDate: '1999-04-01' },
   editAthlete: { version: 1, sport: 'x' },
   recordConsent: { givenBy: 'athlete', purposes: ['assessment'], validUntil: '2999-01-01' },

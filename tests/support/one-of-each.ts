@@ -1,9 +1,12 @@
+import { randomUUID } from 'node:crypto';
 import { product } from '#server/db/in-practice.ts';
 import { Call } from '#server/features/calls/call.entity.ts';
 import { makeClip } from '#server/features/clips/clip.factory.ts';
 import { Upload } from '#server/features/clips/upload.entity.ts';
 import { Comment } from '#server/features/comments/comment.entity.ts';
-import { Consent } from '#server/features/athletes/consent.entity.ts';
+import { makeAthlete, makeConsent } from '#server/features/athletes/athlete.factory.ts';
+import { makeUser } from '#server/features/accounts/user.factory.ts';
+import { makeVisit } from '#server/features/visits/visit.factory.ts';
 import { MailLink } from '#server/features/mail-links/mail-link.entity.ts';
 import { Replay } from '#server/features/replays/replay.entity.ts';
 import { makeRep } from '#server/features/reps/rep.factory.ts';
@@ -13,10 +16,14 @@ import { Session } from '#server/features/accounts/session.entity.ts';
 import type { Api } from './api.ts';
 import type { Ids } from './every-route.ts';
 
-/** A thing of each kind that a route can name, all of the world's first coach. */
+/** A new thing of each kind that a route can name, all of the world's first coach. */
 export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
-  const { coach, athlete, visit, practiceId } = world;
+  const { coach, practiceId } = world;
   return ground.inPractice(product(practiceId), async ({ em }) => {
+    const athlete = makeAthlete(em, { coach, givenName: 'Wren' });
+    const consent = makeConsent(em, { athlete, recordedBy: coach });
+    const visit = makeVisit(em, { athlete, coach });
+    const person = makeUser(em, { role: 'coach' });
     const clip = makeClip(em, { visit, uploadedBy: coach });
     const rep = makeRep(em, { clip, createdBy: coach });
     const comment = em.create(Comment, {
@@ -36,7 +43,7 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
       showReading: true,
       showCall: true,
       message: '',
-      tokenHash: 'x',
+      tokenHash: randomUUID(),
       passPhraseHash: null,
       expiresAt: new Date(Date.now() + 1e8),
       by: coach,
@@ -57,7 +64,11 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
       mirrored: false,
       openedBy: coach,
     });
-    const setUp = em.create(SetUp, { name: 'Hall', distanceMm: 3000, savedBy: coach });
+    const setUp = em.create(SetUp, {
+      name: `Hall ${randomUUID()}`,
+      distanceMm: 3000,
+      savedBy: coach,
+    });
     const session = em.create(Session, {
       user: coach,
       device: 'A test',
@@ -75,17 +86,16 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
     });
     const invitation = em.create(MailLink, {
       kind: 'invitation',
-      email: 'new@test.example',
+      email: `${randomUUID()}@test.example`,
       role: 'coach',
       by: coach,
       expiresAt: new Date(Date.now() + 1e8),
     });
-    const consent = await em.findOneOrFail(Consent, { athlete: athlete.id });
     await em.flush();
     return {
       session: session.id,
       invitation: invitation.id,
-      person: coach.id,
+      person: person.id,
       athlete: athlete.id,
       consent: consent.id,
       visit: visit.id,

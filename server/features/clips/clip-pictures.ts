@@ -2,7 +2,7 @@ import { join } from 'node:path';
 import { exactFrame, frameSheet, originalTimestamp } from '#server/media/exact-frame.ts';
 import { sheetColumns, sheetRows } from '#server/media/limits.ts';
 import type { FrameTable } from '#server/media/types.ts';
-import type { Storage } from '#server/storage/storage.ts';
+import { MissingFile, type Storage } from '#server/storage/storage.ts';
 import { Problem } from '../../http/problem.ts';
 import type { Clip } from './clip.entity.ts';
 import { frameCountOf, needFrames } from './clip-in-sight.ts';
@@ -16,7 +16,10 @@ const tableOf = (clip: Clip): FrameTable => {
   return { timeBase, ticks, us: [] };
 };
 
-/** Makes a picture in a temporary folder and moves it to its key; does nothing where it lies there. */
+/**
+ * Makes a picture in a temporary folder and moves it to its key; does nothing where it lies there.
+ * @throws Problem 'clip-missing-in-storage'
+ */
 const kept = async (
   storage: Storage,
   key: string,
@@ -26,7 +29,9 @@ const kept = async (
     await madeOnce(key, () =>
       storage.withTempDir(async (folder) => {
         const path = join(folder, 'picture.jpg');
-        await make(path);
+        await make(path).catch((error: unknown) => {
+          throw error instanceof MissingFile ? new Problem('clip-missing-in-storage') : error;
+        });
         await storage.putFile(key, path, 'image/jpeg');
       }),
     );

@@ -88,7 +88,7 @@ export const usePart = async (
 ): Promise<Clip> => {
   const sight = await clipInSight(unit, id, 'clip.edit');
   const { clip } = sight;
-  if (clip.state !== 'refused') throw new Problem('not-allowed', 'This clip was not refused.');
+  if (clip.state !== 'refused') throw new Problem('not-as-it-stands', 'This clip was not refused.');
   if (toSeconds !== null && toSeconds <= fromSeconds)
     throw new Problem('invalid-input', undefined, [
       { path: 'body.toSeconds', message: 'A part ends after it starts.' },
@@ -110,7 +110,7 @@ export const prepareAgain = async (unit: Of, id: string): Promise<Clip> => {
   const sight = await clipInSight(unit, id, 'clip.edit');
   const { clip } = sight;
   if (clip.state !== 'waiting' || !clip.trouble)
-    throw new Problem('not-allowed', 'This clip is not waiting for another try.');
+    throw new Problem('not-as-it-stands', 'This clip is not waiting for another try.');
   unit.em.assign(clip, { trouble: null, nextTryAt: null, tries: 0 });
   await enqueue(unit, PREPARE_CLIP, { clipId: id });
   await unit.em.flush();

@@ -101,8 +101,8 @@ describe('a clip that the machine could not prepare', () => {
 
   it('is not asked for again where nothing is wrong', async () => {
     const id = await send();
-    const answer = await coach.post(`/api/clips/${id}/prepare-again`).expect(403);
-    expect(answer.body).toMatchObject({ code: 'not-allowed' });
+    const answer = await coach.post(`/api/clips/${id}/prepare-again`).expect(409);
+    expect(answer.body).toMatchObject({ code: 'not-as-it-stands' });
     expect(await jobsOf(id)).toHaveLength(1);
   });
 });
