@@ -49,8 +49,7 @@ const endLinks = async ({ em }: Of, athleteId: string): Promise<void> => {
 const stopWhatRested = async (unit: Of, athlete: Athlete): Promise<void> => {
   const { em } = unit;
   await em.flush();
-  if (!(await hasConsent(em, athlete.id, 'sharing-by-link')))
-    await endLinks(unit, athlete.id);
+  if (!(await hasConsent(em, athlete.id, 'sharing-by-link'))) await endLinks(unit, athlete.id);
   if (!(await hasConsent(em, athlete.id, 'assessment'))) await scheduleDeletion(unit, athlete);
   await tellConsent(unit, athlete);
 };

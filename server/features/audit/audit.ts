@@ -1,11 +1,7 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Role } from '#shared/access/actors.ts';
-import type {
-  AUDIT_ACTIONS} from '#shared/contracts/audit-actions.ts';
-import {
-  type AuditDetail,
-  type AuditedAction,
-} from '#shared/contracts/audit-actions.ts';
+import type { AUDIT_ACTIONS } from '#shared/contracts/audit-actions.ts';
+import { type AuditDetail, type AuditedAction } from '#shared/contracts/audit-actions.ts';
 import { askerNow } from '../../http/asker.ts';
 import { AuditEntry } from './audit-entry.entity.ts';
 

@@ -31,9 +31,7 @@ export function queryOf(search: URLSearchParams): AuditQuery {
     to: to && beginOf(to, 1),
     page: given('page'),
   };
-  return Object.fromEntries(
-    Object.entries(entries).filter(([, value]) => value !== undefined),
-  );
+  return Object.fromEntries(Object.entries(entries).filter(([, value]) => value !== undefined));
 }
 
 /** The address after one change: an empty value is left out, and any change but of the page starts at page 1. */
