@@ -124,7 +124,10 @@ export const deleteComment = async (unit: Of, id: string): Promise<void> => {
   const { comment, athlete } = await commentInSight(unit, id, 'comment.delete');
   const answers = await unit.em.count(Comment, { answerTo: id });
   if (answers > 0)
-    throw new Problem('not-as-it-stands', 'Somebody has answered this comment: resolve it instead.');
+    throw new Problem(
+      'not-as-it-stands',
+      'Somebody has answered this comment: resolve it instead.',
+    );
   audit(unit, 'comment.delete', id, { athlete: athlete.id, clip: comment.clip.id });
   unit.em.remove(comment);
   await unit.em.flush();

@@ -4,6 +4,7 @@ import { useStatus } from '#src/ui/status.tsx';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { DuskButton } from '../dusk-button.tsx';
 import { isDraft, type StandsOn, touchedOnce } from '../model/draft.ts';
+import { useGoesOnHere } from '../use-goes-on-here.ts';
 import type { Following } from './following.ts';
 import { foundWords, noRepsWords, runWords, saidWords } from './follow-words.ts';
 import { keyframesOf } from './keyframes.ts';
@@ -21,9 +22,16 @@ function Panel({ follow }: { follow: Following }) {
   const { current } = useBenchModel();
   const { run, said, found } = useStore(follow.store);
   const { keepTouch } = useFollow();
+  // following begins and ends with the button that did it gone
+  const here = useGoesOnHere<HTMLElement>(`${run.is} ${Array.isArray(found) ? found.length : 0}`);
   if (!may.mark) return null;
   return (
-    <section aria-label="Marks that follow" className="text-note leading-[21px]">
+    <section
+      ref={here}
+      tabIndex={-1}
+      aria-label="Marks that follow"
+      className="text-note leading-[21px]"
+    >
       <div role="status">
         {said && (
           <p className={said.is === 'refused' ? 'text-ochre-pale' : ''}>{saidWords(said)}</p>

@@ -81,6 +81,14 @@ describe('TakeLookState', () => {
     expect(said).toHaveTextContent(/The whole picture moves; put the phone on a stand\. Look at/);
   });
 
+  it('a look that was cut short says so where it found nothing', () => {
+    const why = { told: 'cannot-tell', why: 'no-lift' } as const;
+    const nothing = { head: why, feet: why, still: why, rise: why, dots: why };
+    const said = show({ ...good, ...nothing, lookedAt: seconds(4) });
+    expect(said).toHaveTextContent(/could not be told:/);
+    expect(said).toHaveTextContent(/Only the first 4\.0 s of 15\.0 s were looked at/);
+  });
+
   it('one thing that could not be told speaks against nothing', () => {
     const said = show({ ...good, dots: { told: 'cannot-tell', why: 'few-round' } });
     expect(said).toHaveTextContent(

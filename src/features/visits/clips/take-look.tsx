@@ -1,4 +1,5 @@
 import type { UseQueryResult } from '@tanstack/react-query';
+import { useEffect, useRef } from 'react';
 import { Link } from 'react-router-dom';
 import type { TakeLook } from '#src/tracking/take/look-at-take.ts';
 import { StateDot, type StateKind } from '#src/ui/state-dot.tsx';
@@ -17,10 +18,17 @@ export function TakeLookState(props: {
   name: string;
   query: Pick<UseQueryResult<TakeLook>, 'data' | 'isError'>;
   asksPointers: boolean;
+  /** A person pressed for it just now. */
+  asked?: boolean;
 }) {
+  const here = useRef<HTMLDivElement>(null);
+  // the button that asked is gone: the keyboard goes on at the answer
+  useEffect(() => {
+    if (props.asked && document.activeElement === document.body) here.current?.focus();
+  }, [props.asked]);
   // one element from looking to told, so that a screen reader hears the change
   return (
-    <div className="mt-1 text-note" role="status">
+    <div ref={here} tabIndex={-1} className="mt-1 text-note" role="status">
       <Content {...props} />
     </div>
   );

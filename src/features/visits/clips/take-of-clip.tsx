@@ -10,13 +10,18 @@ import { TakeLookState } from './take-look.tsx';
 /** Of a clip that was sent from this tab its pictures are looked at by themselves; of others when asked to. */
 export function TakeOfClip({ clip, asksPointers }: { clip: Clip; asksPointers: boolean }) {
   const [asked, setAsked] = useState(() => wasSentHere(clip.id));
+  const [pressed, setPressed] = useState(false);
   const query = useQuery({ ...takeOfClip(clip.id), enabled: asked });
+  const press = () => {
+    setAsked(true);
+    setPressed(true);
+  };
   if (!asked && !query.data)
     return (
-      <Button look="plain" className="text-note" onClick={() => setAsked(true)}>
+      <Button look="plain" className="text-note" onClick={press}>
         Will this take do?{clip.copy !== null && ` (loads ${fileSize(clip.copy.bytes)})`}
         <span className="sr-only">: {clip.name}</span>
       </Button>
     );
-  return <TakeLookState name={clip.name} query={query} asksPointers={asksPointers} />;
+  return <TakeLookState {...{ query, asksPointers }} name={clip.name} asked={pressed} />;
 }

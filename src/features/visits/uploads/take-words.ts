@@ -131,17 +131,6 @@ const POINTERS =
   'Whether the pointers are worn could not be told from the picture: look at the athlete.';
 
 export const takeVerdict = (look: TakeLook, asksPointers: boolean): TakeVerdict => {
-  const nothing = nothingTold(look);
-  if (nothing !== null) {
-    const words = `${capital(WHY[nothing])}. Look at the take yourself before the athlete leaves.`;
-    return {
-      grade: 'open',
-      summary: 'Whether this take will do could not be told:',
-      lines: [{ grade: 'open', words, step: nothing === 'no-lift' ? 'lift' : 'frame' }],
-    };
-  }
-  const lines = linesOf(look).sort((a, b) => ORDER[a.grade] - ORDER[b.grade]);
-  const grade = lines[0]?.grade ?? 'good';
   const part: TakeLine[] =
     look.lookedAt < look.length - 0.5
       ? [
@@ -152,6 +141,17 @@ export const takeVerdict = (look: TakeLook, asksPointers: boolean): TakeVerdict 
           },
         ]
       : [];
+  const nothing = nothingTold(look);
+  if (nothing !== null) {
+    const words = `${capital(WHY[nothing])}. Look at the take yourself before the athlete leaves.`;
+    return {
+      grade: 'open',
+      summary: 'Whether this take will do could not be told:',
+      lines: [{ grade: 'open', words, step: nothing === 'no-lift' ? 'lift' : 'frame' }, ...part],
+    };
+  }
+  const lines = linesOf(look).sort((a, b) => ORDER[a.grade] - ORDER[b.grade]);
+  const grade = lines[0]?.grade ?? 'good';
   const pointers: TakeLine[] = asksPointers
     ? [{ grade: 'open', words: POINTERS, step: 'dots' }]
     : [];
