@@ -11,6 +11,10 @@ const ALWAYS: Record<Audience, readonly ProblemCode[]> = {
   link: ['unexpected'],
 };
 
+/** What a route that names something filmed can answer too. */
+const FILMED = /^\/api\/(clips|reps|visits)\/:id/;
+const CLOSED: readonly ProblemCode[] = ['consent-withdrawn', 'supervision-not-agreed'];
+
 /** Collects schemas that carry an id as components and points to them. */
 class Components {
   readonly schemas: Json = {};
@@ -90,7 +94,11 @@ const answerContent = (components: Components, { answer }: Route): Json | undefi
 
 /** Problems by status, because a document has one answer per status. */
 const problemAnswers = (route: Route): Json => {
-  const codes = new Set<ProblemCode>([...ALWAYS[route.audience], ...(route.problems ?? [])]);
+  const codes = new Set<ProblemCode>([
+    ...ALWAYS[route.audience],
+    ...(FILMED.test(route.path) ? CLOSED : []),
+    ...(route.problems ?? []),
+  ]);
   if (route.params) codes.add('not-found');
   if (route.query || route.body) codes.add('invalid-input');
   if (route.method !== 'get') codes.add('foreign-origin');

@@ -139,6 +139,7 @@ export const replayRoutes = {
       'not-found',
       'not-allowed',
       'consent-missing',
+      'consent-withdrawn',
       'call-first',
       'clip-not-ready',
       'frame-out-of-range',

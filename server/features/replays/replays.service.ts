@@ -43,7 +43,7 @@ export const hashOf = (passPhrase: string | null): Promise<string | null> =>
 
 /**
  * Makes a link. Its token is returned once and kept nowhere.
- * @throws Problem 'consent-missing' without consent to sharing by link, 'call-first' without a call by eye
+ * @throws Problem 'consent-withdrawn', 'consent-missing' without consent to sharing by link, 'call-first' without a call by eye
  */
 export const makeReplay = async (
   unit: Of,

@@ -260,6 +260,6 @@ describe('making one', () => {
       if (state === 'valid') await coach.post(`/api/consents/${id}/withdraw`).expect(200);
     await open(token).expect(404);
     const refused = await coach.post('/api/replays').send(made);
-    expect(refused.body).toMatchObject({ status: 409, code: 'consent-missing' });
+    expect(refused.body).toMatchObject({ code: 'consent-withdrawn' });
   });
 });
