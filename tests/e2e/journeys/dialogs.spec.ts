@@ -41,7 +41,7 @@ const DIALOGS: readonly Asked[] = [
   {
     title: 'Withdraw the consent to filming?',
     address: ({ quill }) => paths.athlete(quill.athleteId),
-    opener: (page) => page.getByRole('button', { name: /^Withdraw: Filming/ }),
+    opener: (page) => page.getByRole('button', { name: /^Withdraw ?: Filming/ }),
   },
   {
     title: 'How was it filmed?',
