@@ -7,10 +7,11 @@ import { carryOn, COACH, OWNER, sessionOf, SUPERVISOR } from './steps/people.ts'
 import { prepareShown, type Shown, tidyShown } from './steps/shown.ts';
 import { PREPARED_WITHIN } from './steps/visit.ts';
 
-const WIDTHS = [
-  { width: 1440, height: 900 },
-  { width: 390, height: 844 },
-];
+const WIDE = { width: 1440, height: 900 };
+const WIDTHS = [WIDE, { width: 390, height: 844 }];
+
+/** These stand in another order there, or in other parts; the rest only becomes narrower. */
+const differsOnThePhone = /Bench|Today|reading|replay|athlete with|people/i;
 
 const people = new Map<string, APIRequestContext>();
 const sessionFor = (email: string): APIRequestContext => {
@@ -43,6 +44,6 @@ for (const { name, who, address, stands, then, says } of PAGES)
       await expect(stands(page)).toBeVisible();
       await expect(page.locator('[aria-busy=true]')).toHaveCount(0);
       await expectAccessible(page, `${viewport.width} px`);
-      await expectKeyboardWay(page);
+      if (viewport === WIDE || differsOnThePhone.test(name)) await expectKeyboardWay(page);
     }
   });
