@@ -36,6 +36,10 @@ export const isUnmistakable = (correlation: number, core: number): boolean =>
 export const isItself = (correlation: number, core: number): boolean =>
   correlation > 0.95 && core > 0.92;
 
+/** One half shows something else, and the middle is not beyond doubt: it has to prove itself again. */
+export const isTorn = ({ half, core }: Pick<Evidence, 'half' | 'core'>): boolean =>
+  core <= 0.92 && half < 0.6;
+
 /**
  * All of it is there, or its middle leaves no doubt: what was lost proves itself by that, and not by its edge with
  * what covers it.
@@ -62,10 +66,13 @@ export const confidenceOf = (seen: Evidence): number => {
   // behind a limb's edge the picture may change as it likes, as long as the middle is beyond doubt
   const joined = core > 0.92 ? 1 : falling(1 - half, 0.25, 0.45);
   const same = falling(1 - core, 0.5, 0.85);
-  return alike * returned * sharp * steady * bare * joined * same * sized * falling(apart, 1.5, 4);
+  const rest = alike * returned * sharp * steady * bare * same * sized * falling(apart, 1.5, 4);
+  // that alone is a reason to look, not to lose the point
+  return Math.max(rest * joined, Math.min(rest, WORTH_A_LOOK));
 };
 
 const UNSURE = 0.15;
+const WORTH_A_LOOK = 0.3;
 
 export const stateOf = (confidence: number): TrackState =>
   confidence >= SURE ? 'sure' : confidence >= UNSURE ? 'unsure' : 'lost';

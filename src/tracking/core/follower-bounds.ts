@@ -31,5 +31,7 @@ export const ON_ITS_WAY = 4;
 export const JERK = 0.5;
 /** What is found elsewhere may be another dot that looks the same: a person has to look at it. */
 export const FOUND_AGAIN = 0.4;
+/** So sure is what was lost or torn and seems to be back, until it has proved itself. */
+export const UNPROVED = 0.45;
 /** A mark that would slide along an edge is never surer than this, below what is called sure. */
 export const ALONG_AN_EDGE = 0.45;

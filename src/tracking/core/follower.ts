@@ -1,6 +1,14 @@
 import type { TrackState } from '../types.ts';
 import { align, type Aligned, compare } from './align.ts';
-import { confidenceOf, isBack, isItself, isUnmistakable, spreadOf, stateOf } from './certainty.ts';
+import {
+  confidenceOf,
+  isBack,
+  isItself,
+  isTorn,
+  isUnmistakable,
+  spreadOf,
+  stateOf,
+} from './certainty.ts';
 import { coveredShare } from './covered.ts';
 import { leastAlikeHalf } from './halves.ts';
 import { flow, type Place } from './flow.ts';
@@ -22,6 +30,7 @@ import {
   RETURNED,
   SEARCH_LEVEL,
   SEARCH_RADIUS,
+  UNPROVED,
 } from './follower-bounds.ts';
 import type { Plane } from './plane.ts';
 import { pyramidAround, type Pyramid, toLevelX, toLevelY } from './pyramid.ts';
@@ -133,6 +142,7 @@ export class Follower {
       spread: spreadOf(best.template, best.correlation),
       scale: scaleOf(best.warp),
     };
+    if (isTorn(evidence)) this.#trust = Math.min(this.#trust, UNPROVED);
     const free = Math.min(this.#trust, confidenceOf(evidence) * best.within);
     const confidence = Math.min(this.#most, free);
     const state = stateOf(confidence);
@@ -236,7 +246,7 @@ export class Follower {
       this.#lookNear(picture, about, Math.min(18, 8 + this.#lostFor));
     if (!found) return this.#lose();
     const leap = Math.hypot(found.warp.tx - about.x, found.warp.ty - about.y);
-    this.#trust = leap > this.#near() ? FOUND_AGAIN : Math.min(this.#trust, 0.45);
+    this.#trust = leap > this.#near() ? FOUND_AGAIN : Math.min(this.#trust, UNPROVED);
     this.#take(found, picture, about);
     this.#velocity = { x: 0, y: 0 };
     this.#velocityKnown = false;
