@@ -2,6 +2,7 @@ import { OptimisticLockError } from '@mikro-orm/core';
 import type { ErrorRequestHandler, RequestHandler, Response } from 'express';
 import type { Logger } from 'pino';
 import { type ProblemBody, type ProblemCode, PROBLEMS } from '#shared/contracts/problems.ts';
+import { MissingFile } from '#server/storage/storage.ts';
 import { loggedError } from './logging.ts';
 import { Problem } from './problem.ts';
 import { requestIdOf } from './request-id.ts';
@@ -21,6 +22,7 @@ const CODE_OF_TYPE: Record<string, ProblemCode> = {
 
 const problemOf = (error: unknown): Problem => {
   if (error instanceof Problem) return error;
+  if (error instanceof MissingFile) return new Problem('clip-missing-in-storage');
   if (error instanceof OptimisticLockError) return new Problem('edited-meanwhile');
   if (error instanceof URIError) return new Problem('not-found');
   if (error instanceof Error) {

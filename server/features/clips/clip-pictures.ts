@@ -2,7 +2,7 @@ import { join } from 'node:path';
 import { exactFrame, frameSheet, originalTimestamp } from '#server/media/exact-frame.ts';
 import { sheetColumns, sheetRows } from '#server/media/limits.ts';
 import type { FrameTable } from '#server/media/types.ts';
-import { MissingFile, type Storage } from '#server/storage/storage.ts';
+import type { Storage } from '#server/storage/storage.ts';
 import { Problem } from '../../http/problem.ts';
 import type { Clip } from './clip.entity.ts';
 import { frameCountOf, needFrames } from './clip-in-sight.ts';
@@ -18,7 +18,7 @@ const tableOf = (clip: Clip): FrameTable => {
 
 /**
  * Makes a picture in a temporary folder and moves it to its key; does nothing where it lies there.
- * @throws Problem 'clip-missing-in-storage'
+ * @throws MissingFile
  */
 const kept = async (
   storage: Storage,
@@ -29,9 +29,7 @@ const kept = async (
     await madeOnce(key, () =>
       storage.withTempDir(async (folder) => {
         const path = join(folder, 'picture.jpg');
-        await make(path).catch((error: unknown) => {
-          throw error instanceof MissingFile ? new Problem('clip-missing-in-storage') : error;
-        });
+        await make(path);
         await storage.putFile(key, path, 'image/jpeg');
       }),
     );

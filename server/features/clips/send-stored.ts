@@ -1,6 +1,6 @@
 import { pipeline } from 'node:stream/promises';
 import type { Request, Response } from 'express';
-import { MissingFile, type Storage } from '#server/storage/storage.ts';
+import type { Storage } from '#server/storage/storage.ts';
 import { Problem } from '../../http/problem.ts';
 
 /**
@@ -14,7 +14,7 @@ const cutShort = (error: unknown): boolean =>
 
 /**
  * Sends a stored file, or the one range of it that was asked for (206, or 416 with the size).
- * @throws Problem 'clip-missing-in-storage' or 'range-not-satisfiable'
+ * @throws MissingFile, Problem 'range-not-satisfiable'
  */
 export const sendStored = async (
   req: Request,
@@ -23,9 +23,7 @@ export const sendStored = async (
   key: string,
   type: string,
 ): Promise<void> => {
-  const { bytes, modified } = await storage.stat(key).catch((error: unknown) => {
-    throw error instanceof MissingFile ? new Problem('clip-missing-in-storage') : error;
-  });
+  const { bytes, modified } = await storage.stat(key);
   const etag = `"${bytes.toString(36)}-${modified.getTime().toString(36)}"`;
   res.set({
     'Content-Type': type,

@@ -1,10 +1,10 @@
 import { pipeline } from 'node:stream/promises';
 import type { Response } from 'express';
 import type { ScanType } from '#shared/contracts/consents.ts';
-import { MissingFile, type Storage } from '#server/storage/storage.ts';
-import { Problem } from '../../http/problem.ts';
+import type { Storage } from '#server/storage/storage.ts';
 
-const ENDINGS: Record<ScanType, string> = {
+/** How the file of a scan ends. */
+export const SCAN_ENDINGS: Record<ScanType, string> = {
   'application/pdf': 'pdf',
   'image/jpeg': 'jpg',
   'image/png': 'png',
@@ -16,10 +16,8 @@ export const sendScan = async (
   storage: Storage,
   { key, type, at }: { readonly key: string; readonly type: ScanType; readonly at: string },
 ): Promise<void> => {
-  const { bytes } = await storage.stat(key).catch((error: unknown) => {
-    throw error instanceof MissingFile ? new Problem('clip-missing-in-storage') : error;
-  });
-  res.attachment(`consent-${at.slice(0, 10)}.${ENDINGS[type]}`);
+  const { bytes } = await storage.stat(key);
+  res.attachment(`consent-${at.slice(0, 10)}.${SCAN_ENDINGS[type]}`);
   res.set({
     'Content-Type': type,
     'Content-Length': String(bytes),

@@ -10,6 +10,7 @@ import { audit } from '../../audit/audit.ts';
 import { Clip } from '../../clips/clip.entity.ts';
 import { Comment } from '../../comments/comment.entity.ts';
 import { COMMENT_ORDER } from '../../comments/comments.presenter.ts';
+import { SCAN_ENDINGS } from '../../consents/send-scan.ts';
 import { scanKey } from '../../consents/scans.service.ts';
 import { type Addresses, annotatedComment, annotatedRep } from '../../exports/annotated.ts';
 import { framesCsv } from '../../exports/exported-reps.ts';
@@ -120,15 +121,13 @@ const trail = async (em: Of['em'], athleteId: string): Promise<HeldFile[]> => {
   ];
 };
 
-const ENDINGS = { 'application/pdf': 'pdf', 'image/jpeg': 'jpg', 'image/png': 'png' } as const;
-
 const scans = async (em: Of['em'], athleteId: string): Promise<HeldFile[]> => {
   const consents = await em.find(Consent, { athlete: athleteId }, { populate: ['athlete'] });
   return (consents as Consent[]).flatMap((consent) =>
     consent.scan
       ? [
           {
-            name: `consents/${consent.id}.${ENDINGS[consent.scan.type]}`,
+            name: `consents/${consent.id}.${SCAN_ENDINGS[consent.scan.type]}`,
             key: scanKey(consent, consent.scan),
           },
         ]
