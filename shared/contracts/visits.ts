@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { SAFETY_ANSWERS } from '#shared/plan/cautions.ts';
 import { clip } from './clips.ts';
 import { day, id, millimetres, moment, personRef, text, version } from './primitives.ts';
 import { gates } from './protocol.ts';
@@ -23,16 +24,7 @@ export const setUp = z
 export type SetUp = z.infer<typeof setUp>;
 
 /** The questions before filming. Starting unanswered is deliberate: nobody is assumed to be well. */
-export const SAFETY_QUESTIONS = [
-  'pain-today',
-  'hip-replacement-or-limits',
-  'weight-bearing-limits',
-  'recent-surgery-or-fracture',
-  'falls-or-poor-balance',
-  'vertigo-or-dizziness',
-  'nerve-symptoms',
-  'confidential-any',
-] as const;
+export const SAFETY_QUESTIONS = SAFETY_ANSWERS;
 export const safetyQuestion = z.enum(SAFETY_QUESTIONS).meta({ id: 'SafetyQuestion' });
 export type SafetyQuestion = z.infer<typeof safetyQuestion>;
 

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { SAFETY_QUESTIONS } from '../contracts/visits.ts';
-import { READING_CODES } from '../reading/types.ts';
+import { SAFETY_QUESTIONS } from '#shared/contracts/visits.ts';
+import { READING_CODES } from '#shared/reading/types.ts';
 import { ALWAYS_STOP, SAFETY_ANSWERS } from './cautions.ts';
 import type { Exercise } from './exercise.ts';
 import { heldBackBy } from './held-back.ts';

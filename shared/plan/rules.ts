@@ -1,16 +1,11 @@
+import type { ReadingCode } from '#shared/reading/types.ts';
 import type { ExerciseId } from './library.ts';
 
 /** What a plan starts from: what the marks said, or what the coach saw. */
 export type PlanBasis =
   | {
       readonly kind: 'reading';
-      readonly code:
-        | 'early-turn-out'
-        | 'expected-turn-in'
-        | 'holds-still'
-        | 'cannot-tell'
-        | 'lift-stops-short'
-        | 'not-measurable';
+      readonly code: ReadingCode;
       /**
        * Which part of the turn is the larger one beyond doubt; null where that is not known, as without both
        * pointers it never is.

@@ -1,12 +1,9 @@
+import { otherSide, type Side } from '#shared/landmarks/types.ts';
 import type { Limb, SideRule } from './exercise.ts';
-
-type Side = 'left' | 'right';
-
-const opposite = (side: Side): Side => (side === 'left' ? 'right' : 'left');
 
 /** Which side a limb is on for a person who was tested standing on `supportSide`. */
 export const sideOf = (limb: Limb, supportSide: Side): Side =>
-  limb === 'support' ? supportSide : opposite(supportSide);
+  limb === 'support' ? supportSide : otherSide(supportSide);
 
 const OTHER: Record<SideRule['other'], (side: Side) => string> = {
   lifted: (side) => `The ${side} foot is off the floor.`,
@@ -23,7 +20,7 @@ export const sideLines = (rule: SideRule, supportSide: Side): string[] => {
   const stands = sideOf(rule.stands, supportSide);
   return [
     rule.other === 'alternates' ? `Begin on the ${stands} leg.` : `Stand on the ${stands} leg.`,
-    OTHER[rule.other](opposite(stands)),
+    OTHER[rule.other](otherSide(stands)),
     ...(rule.load === null
       ? []
       : [hands(rule.load, 'Weight in both hands.', (side) => `Weight in the ${side} hand.`)]),
