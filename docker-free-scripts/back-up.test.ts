@@ -16,6 +16,7 @@ import { fileURLToPath } from 'node:url';
 import { Client } from 'pg';
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import { migrate } from '#server/db/migrate.ts';
+import { onInstance } from './postgres/instance-shell.ts';
 
 vi.setConfig({ testTimeout: 180_000, hookTimeout: 180_000 });
 
@@ -25,25 +26,14 @@ const TEXT = 'Ångström, “quoted”, and a\nsecond line';
 let parent: string;
 const of = (name: string) => join(parent, name);
 
-/** Runs a line of bash with the scripts' functions on a data folder; returns its standard output. */
-const bash = (data: string, line: string): string => {
-  const sources = ['lib.sh', 'data-folder.sh', 'postgres/server.sh', 'postgres/instance.sh']
-    .map((name) => `source '${scripts}${name}'`)
-    .join('; ');
-  return execFileSync('bash', ['-c', `${sources}; use_data_folder; ${line}`], {
-    encoding: 'utf8',
-    env: { ...process.env, REDSHANK_DATA: data },
-    stdio: ['ignore', 'pipe', 'pipe'],
-  });
-};
 const up = (data: string): string[] =>
-  bash(
+  onInstance(
     data,
     'instance_up redshank; printf "%s\\n" "$DATABASE_OWNER_URL" "$(secret_of database-admin)"',
   )
     .trim()
     .split('\n');
-const down = (data: string) => bash(data, 'choose_instance_dir; pg_stop "$instance_dir"');
+const down = (data: string) => onInstance(data, 'choose_instance_dir; pg_stop "$instance_dir"');
 
 const run = (script: string, data: string, file: string) =>
   spawnSync('bash', [join(scripts, script), file], {

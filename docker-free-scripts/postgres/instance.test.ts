@@ -1,4 +1,3 @@
-import { execFileSync } from 'node:child_process';
 import {
   chmodSync,
   existsSync,
@@ -11,11 +10,10 @@ import {
 } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { fileURLToPath } from 'node:url';
 import { Client } from 'pg';
 import { afterAll, beforeAll, expect, it } from 'vitest';
+import { onInstance } from './instance-shell.ts';
 
-const scripts = fileURLToPath(new URL('..', import.meta.url));
 const MINUTE = 60_000;
 
 let parent: string;
@@ -31,17 +29,7 @@ afterAll(() => {
   rmSync(parent, { recursive: true });
 }, MINUTE);
 
-/** Runs a line of bash with the scripts' functions on this test's data folder; returns its standard output. */
-function bash(line: string): string {
-  const sources = ['lib.sh', 'data-folder.sh', 'postgres/server.sh', 'postgres/instance.sh']
-    .map((name) => `source '${scripts}${name}'`)
-    .join('; ');
-  return execFileSync('bash', ['-c', `${sources}; use_data_folder; ${line}`], {
-    encoding: 'utf8',
-    env: { ...process.env, REDSHANK_DATA: data },
-    stdio: ['ignore', 'pipe', 'pipe'],
-  });
-}
+const bash = (line: string) => onInstance(data, line);
 
 const up = () =>
   bash(
