@@ -37,8 +37,8 @@ describe('lookAtFile', { timeout: 60_000 }, () => {
       width: 1280,
       height: 720,
       rotation: 0,
-      length: expect.closeTo(4, 2) as number,
-      frames: 120,
+      length: expect.closeTo(3, 2) as number,
+      frames: 90,
       frameRate: { kind: 'constant', fps: expect.closeTo(30, 3) as number, gaps: 0 },
       hdr: false,
     });

@@ -60,7 +60,7 @@ describe('comments', () => {
     expect(edited.body.editedAt).not.toBeNull();
     await say(supervisor, { answerTo: mine.id });
     const late = await coach.delete(`/api/comments/${mine.id}`);
-    expect(late.status).toBe(403);
+    expect(late.status).toBe(409);
     expect(late.body.detail).toContain('resolve it');
   });
 
