@@ -47,6 +47,7 @@ export const makeApp = (
     router,
     inPractice,
     whoIs: sessions.whoIs,
+    whoIsBeforeCodes: sessions.whoIsBeforeCodes,
     checkAnswers: config.environment === 'test' || config.environment === 'development',
     ...(onRoute ? { onRoute } : {}),
     onRefusal: noteRefusals(ground),

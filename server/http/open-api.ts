@@ -7,7 +7,7 @@ type Json = { [key: string]: unknown };
 /** What every route of an audience can answer beside its own problems. */
 const ALWAYS: Record<Audience, readonly ProblemCode[]> = {
   anyone: ['unexpected'],
-  staff: ['sign-in-needed', 'unexpected'],
+  staff: ['sign-in-needed', 'codes-needed', 'unexpected'],
   link: ['unexpected'],
 };
 
@@ -99,6 +99,7 @@ const problemAnswers = (route: Route): Json => {
     ...(FILMED.test(route.path) ? CLOSED : []),
     ...(route.problems ?? []),
   ]);
+  if (route.beforeCodes) codes.delete('codes-needed');
   if (route.params) codes.add('not-found');
   if (route.query || route.body) codes.add('invalid-input');
   if (route.method !== 'get') codes.add('foreign-origin');

@@ -58,6 +58,16 @@ export const letterLimits = (): RequestHandler[] => [
 /** Links that open nothing: 50 in a quarter of an hour from one place; a token cannot be guessed anyway. */
 export const mailLinkLimits = (): RequestHandler[] => [limit(50, 15, addressOf)];
 
+/**
+ * Wrong one-time codes after a right password: 5 in a quarter of an hour per account, 50 per address. Of the million
+ * codes three fit at a time.
+ * @param accountOf null where no password was given
+ */
+export const secondStepLimits = (accountOf: (req: Request) => string | null): RequestHandler[] => [
+  limit(50, 15, addressOf),
+  limit(5, 15, (req) => accountOf(req) ?? addressOf(req)),
+];
+
 /** Wrong passwords of who is signed in: 10 in a quarter of an hour, so that a borrowed session guesses nothing. */
 export const ownPasswordLimits = (): RequestHandler[] => [
   limit(10, 15, (_req, res) => staffOf(res).user.id),

@@ -51,6 +51,7 @@ export interface ServeOptions {
   readonly router: Router;
   readonly inPractice: InPractice;
   readonly whoIs: RequestHandler;
+  readonly whoIsBeforeCodes: RequestHandler;
   /** Check every answer against its contract: on in tests and development. */
   readonly checkAnswers: boolean;
   /** Told of every route that is served. */
@@ -64,6 +65,7 @@ export const makeServe = ({
   router,
   inPractice,
   whoIs,
+  whoIsBeforeCodes,
   checkAnswers,
   onRoute,
   onRefusal,
@@ -84,7 +86,7 @@ export const makeServe = ({
   return (route, handler, ...before) => {
     onRoute?.(route);
     const steps: RequestHandler[] = [];
-    if (route.audience === 'staff') steps.push(whoIs);
+    if (route.audience === 'staff') steps.push(route.beforeCodes ? whoIsBeforeCodes : whoIs);
     if (route.body && !route.multipart)
       steps.push(jsonOnly, express.json({ limit: BODY_LIMIT[route.audience] }));
     steps.push(...before, async (req, res) => {

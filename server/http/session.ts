@@ -25,6 +25,8 @@ export interface OpenSession {
     readonly role: Role;
   };
   readonly practice: { readonly id: string; readonly name: string };
+  /** An owner whose practice asks its owners for one-time codes, and who has none yet. */
+  readonly codeMissing: boolean;
 }
 
 const claims = z.object({ sid: z.uuid(), exp: z.int() });
@@ -40,11 +42,17 @@ type SessionRow = {
   practice_id: string;
   practice_name: string;
   coach_ids: string[];
+  code_missing: boolean;
 };
 
 export interface SessionKeeper {
-  /** Refuses with 'sign-in-needed' where no session is open; otherwise `staffOf` tells who it is. */
+  /**
+   * Refuses with 'sign-in-needed' where no session is open, and with 'codes-needed' where it may only set up
+   * one-time codes; otherwise `staffOf` tells who it is.
+   */
   readonly whoIs: RequestHandler;
+  /** The same, for what is open before codes are set up. */
+  readonly whoIsBeforeCodes: RequestHandler;
   /** The session of this request's cookie, or null. */
   readonly find: (req: Request, res: Response) => Promise<OpenSession | null>;
   readonly findById: (id: string) => Promise<OpenSession | null>;
@@ -111,14 +119,20 @@ export const keepSessions = (options: {
     return session;
   };
 
-  const whoIs: RequestHandler = async (req, res, next) => {
+  const whoIsBeforeCodes: RequestHandler = async (req, res, next) => {
     const session = await find(req, res);
     if (!session) throw new Problem('sign-in-needed');
     (res.locals as { session?: OpenSession }).session = session;
     next();
   };
+  const whoIs: RequestHandler = (req, res, next) =>
+    whoIsBeforeCodes(req, res, (error?: unknown) => {
+      if (error !== undefined) return next(error);
+      if (staffOf(res).codeMissing) throw new Problem('codes-needed');
+      next();
+    });
 
-  return { whoIs, find, findById, cookieFor, setCookie, clearCookie };
+  return { whoIs, whoIsBeforeCodes, find, findById, cookieFor, setCookie, clearCookie };
 };
 
 const readToken = (token: string, key: string): z.infer<typeof claims> | null => {
@@ -135,6 +149,7 @@ const sessionOf = (row: SessionRow): OpenSession => ({
   expiresAt: new Date(row.expires_at),
   user: { id: row.user_id, name: row.user_name, email: row.email, role: row.role },
   practice: { id: row.practice_id, name: row.practice_name },
+  codeMissing: row.code_missing,
   actor: {
     kind: 'user',
     id: row.user_id,

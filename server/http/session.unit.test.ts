@@ -11,7 +11,7 @@ const MINUTE = 60_000;
 const KEY = 'a key for tests';
 
 /** A session's row as the look-up function gives it; null once it is revoked or over. */
-let row: { last_seen_at: string } | null;
+let row: { last_seen_at: string; code_missing?: boolean } | null;
 let touched: number;
 
 const db = () =>
@@ -36,6 +36,7 @@ const db = () =>
                 practice_id: 'p',
                 practice_name: 'Practice',
                 coach_ids: [],
+                code_missing: row.code_missing ?? false,
               },
             ]
           : [],
@@ -48,10 +49,13 @@ const app = express();
 app.get('/', keeper().whoIs, (_req, res) => {
   res.json({ who: staffOf(res).user.name });
 });
+app.get('/before-codes', keeper().whoIsBeforeCodes, (_req, res) => {
+  res.json({ who: staffOf(res).user.name });
+});
 app.use(problemHandler(pino({ level: 'silent' })));
 
 const cookie = (given = keeper().cookieFor(ID)): string => given.split(';')[0] ?? '';
-const get = (sent: string) => supertest(app).get('/').set('Cookie', sent);
+const get = (sent: string, path = '/') => supertest(app).get(path).set('Cookie', sent);
 
 beforeEach(() => {
   vi.useFakeTimers({ toFake: ['Date'] });
@@ -91,6 +95,15 @@ describe('the session cookie', () => {
     later(12 * 60 + 1);
     await get(sent).expect(401);
     expect(touched).toBe(0);
+  });
+
+  it('of who has to set up codes first opens that alone', async () => {
+    const sent = cookie();
+    if (row) row.code_missing = true;
+    expect((await get(sent).expect(403)).body).toMatchObject({ code: 'codes-needed' });
+    await get(sent, '/before-codes').expect(200);
+    row = null;
+    await get(sent, '/before-codes').expect(401);
   });
 
   it('marks the session as seen once a minute at most', async () => {

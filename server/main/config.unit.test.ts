@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { ConfigError, readConfig } from './config.ts';
-import { cookieIsSecure } from './make-ground.ts';
+import { cookieIsSecure } from '../http/cookie-is-secure.ts';
 
 const DATABASES = {
   DATABASE_URL: 'postgres://a@127.0.0.1/x',

@@ -12,6 +12,7 @@ import { commentsFeature } from '../features/comments/comments.routes.ts';
 import { exportsFeature } from '../features/exports/exports.routes.ts';
 import { headsFeature } from '../features/heads/heads.routes.ts';
 import { mailLinksFeature } from '../features/mail-links/mail-links.routes.ts';
+import { oneTimeCodesFeature } from '../features/one-time-codes/one-time-codes.routes.ts';
 import { peopleFeature } from '../features/people/people.routes.ts';
 import { practiceFeature } from '../features/practice/practice.routes.ts';
 import { protocolFeature } from '../features/protocol/protocol.routes.ts';
@@ -29,6 +30,7 @@ import type { Feature } from './feature.ts';
 export const features: readonly Feature[] = [
   systemFeature,
   accountsFeature,
+  oneTimeCodesFeature,
   mailLinksFeature,
   peopleFeature,
   todayFeature,

@@ -6,6 +6,7 @@ import type { SessionKeeper } from '../http/session.ts';
 import type { Mailer } from '../mail/mailer.ts';
 import type { Storage } from '../storage/storage.ts';
 import type { Config } from './config.ts';
+import type { Sealer } from './sealer.ts';
 
 /** What every feature stands on. Made once at the start, or once per test file. */
 export interface Ground {
@@ -14,6 +15,8 @@ export interface Ground {
   readonly orm: MikroORM;
   readonly inPractice: InPractice;
   readonly sessions: SessionKeeper;
+  /** Seals what is kept and must be read again, under a key that is not in the database. */
+  readonly sealer: Sealer;
   readonly storage: Storage;
   readonly mail: Mailer;
   readonly events: EventHub;

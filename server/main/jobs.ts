@@ -1,5 +1,6 @@
 import { prepareClipJob } from '../features/clips/jobs/prepare-clip.ts';
 import { fillDemoJob } from '../db/demo/fill-demo.job.ts';
+import { sendNoticeJob } from '../features/accounts/jobs/send-notice.ts';
 import { sendMailLinkJob } from '../features/mail-links/jobs/send-mail-link.ts';
 import { hideHeadJob } from '../features/replays/jobs/hide-head.ts';
 import { removeHiddenJob } from '../features/replays/jobs/remove-hidden.ts';
@@ -15,6 +16,7 @@ export const jobs: readonly AnyJobHandler[] = [
   hideHeadJob,
   removeHiddenJob,
   sendMailLinkJob,
+  sendNoticeJob,
   tidyJob,
   eraseFilesJob,
   fillDemoJob,

@@ -4,6 +4,7 @@ import type { Logger } from 'pino';
 import { connect } from '../db/connect.ts';
 import { makeInPractice } from '../db/in-practice.ts';
 import { EventHub } from '../events/event-hub.ts';
+import { cookieIsSecure } from '../http/cookie-is-secure.ts';
 import { keepSessions } from '../http/session.ts';
 import { WORKER_LIVES_SQL } from '../jobs/locks.ts';
 import { openMailer } from '../mail/open-mailer.ts';
@@ -11,15 +12,8 @@ import { openStorage } from '../storage/open-storage.ts';
 import type { Config } from './config.ts';
 import type { Ground } from './ground.ts';
 import { repoRoot } from './root.ts';
+import { sealWith } from './sealer.ts';
 import { SecretFile } from './secrets.ts';
-
-const LOOPBACK = /^(localhost|127(\.\d+){3}|\[::1\])$/;
-
-/** A cookie over plain http is bearable on the machine itself and nowhere else. */
-export const cookieIsSecure = (publicUrl: string): boolean => {
-  const { protocol, hostname } = new URL(publicUrl);
-  return protocol === 'https:' || !LOOPBACK.test(hostname);
-};
 
 const readVersion = async (): Promise<string> => {
   const { version } = JSON.parse(await readFile(join(repoRoot(), 'package.json'), 'utf8')) as {
@@ -42,6 +36,7 @@ export const makeGround = async (config: Config, log: Logger): Promise<Ground> =
       key: await new SecretFile(config.secrets, 'session-key').readOrMake(32),
       secure: cookieIsSecure(config.publicUrl),
     }),
+    sealer: sealWith(await new SecretFile(config.secrets, 'sealing-key').readOrMake(32)),
     storage: await openStorage(config),
     mail: openMailer(config),
     events: new EventHub(),

@@ -23,9 +23,14 @@ export const me = z
     user: z.object({ id, name: z.string(), email: z.string(), role }),
     practice: z.object({ id, name: z.string() }),
     session: z.object({ id, expiresAt: moment }),
+    /** One-time codes have to be set up before anything else. */
+    codeMissing: z.boolean(),
   })
   .meta({ id: 'Me' });
 export type Me = z.infer<typeof me>;
+
+/** The password was right; the second step asks for a code. */
+export const codeNeeded = z.object({ codeNeeded: z.literal(true) }).meta({ id: 'CodeNeeded' });
 
 export const sessionRow = z
   .object({
@@ -52,6 +57,8 @@ export const account = z
         until: moment,
       })
       .nullable(),
+    /** One-time codes at the sign-in: since when, null while they are off; how many recovery codes are unused. */
+    codes: z.object({ since: moment.nullable(), recoveryLeft: z.int() }),
   })
   .meta({ id: 'Account' });
 export type Account = z.infer<typeof account>;
@@ -112,11 +119,12 @@ export const accountRoutes = {
   signIn: route({
     method: 'post',
     path: '/api/sign-in',
-    summary: 'Open a session; the answer sets an httpOnly cookie.',
+    summary:
+      'Open a session; the answer sets an httpOnly cookie. An account with one-time codes goes on to the second step.',
     audience: 'anyone',
     body: signInBody,
     status: 200,
-    answer: json(me),
+    answer: json(z.union([me, codeNeeded])),
     problems: ['sign-in-refused', 'too-many-tries'],
   }),
   signOut: route({
@@ -132,6 +140,7 @@ export const accountRoutes = {
     path: '/api/sign-out-everywhere',
     summary: 'End every session of this account, this one included.',
     audience: 'staff',
+    beforeCodes: true,
     status: 204,
     answer: none,
   }),
@@ -140,6 +149,7 @@ export const accountRoutes = {
     path: '/api/me',
     summary: 'Who is signed in.',
     audience: 'staff',
+    beforeCodes: true,
     status: 200,
     answer: json(me),
   }),

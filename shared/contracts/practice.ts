@@ -7,6 +7,8 @@ export const practiceSettings = z
     name: z.string(),
     /** How an athlete reaches the practice; shown on replays and in mails. */
     contact: z.string(),
+    /** Owners do nothing before they have set up one-time codes. */
+    ownersNeedCode: z.boolean(),
   })
   .meta({ id: 'PracticeSettings' });
 export type PracticeSettings = z.infer<typeof practiceSettings>;
@@ -23,7 +25,7 @@ export const practiceRoutes = {
   practice: route({
     method: 'get',
     path: '/api/practice',
-    summary: 'What athletes are told of the practice.',
+    summary: 'What athletes are told of the practice, and what it asks of its owners.',
     audience: 'staff',
     status: 200,
     answer: json(practiceSettings),
@@ -37,5 +39,15 @@ export const practiceRoutes = {
     status: 200,
     answer: json(practiceSettings),
     problems: ['not-allowed'],
+  }),
+  setOwnersCode: route({
+    method: 'put',
+    path: '/api/practice/owners-code',
+    summary: 'Say whether owners need one-time codes. The owner’s, who has them on already.',
+    audience: 'staff',
+    body: z.object({ needed: z.boolean() }).meta({ id: 'OwnersCode' }),
+    status: 200,
+    answer: json(practiceSettings),
+    problems: ['not-allowed', 'codes-first'],
   }),
 };

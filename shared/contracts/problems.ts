@@ -14,6 +14,19 @@ export const PROBLEMS = {
   ],
   'address-taken': [409, 'There is an account with this e-mail address already. Sign in with it.'],
   'password-wrong': [403, 'This is not your present password.'],
+  // the second step of a sign-in
+  'code-wrong': [
+    401,
+    'This code does not fit. Each works once and for about a minute: take the next one.',
+  ],
+  'half-gone': [401, 'This took too long, or your password was changed. Start the sign-in again.'],
+  'codes-on': [409, 'One-time codes are on already.'],
+  'codes-off': [409, 'One-time codes are not on.'],
+  'codes-needed': [
+    403,
+    'Your practice asks its owners for one-time codes. Set them up first, and leave them on.',
+  ],
+  'codes-first': [409, 'Turn on one-time codes for your own account first.'],
   'last-owner': [409, 'A practice needs an owner. Make somebody else an owner first.'],
   'too-many-tries': [429, 'Too many tries. Wait a little, then try again.'],
   // what you asked for

@@ -28,6 +28,8 @@ export type Route = {
   path: string;
   summary: string;
   audience: Audience;
+  /** Staff routes: open to an owner who still has to set up one-time codes. */
+  beforeCodes?: true;
   params?: z.ZodObject;
   query?: z.ZodObject;
   body?: z.ZodType;

@@ -10,6 +10,7 @@ import { eventRoutes } from './events.ts';
 import { exportRoutes } from './exports.ts';
 import { headRoutes } from './heads.ts';
 import { mailLinkRoutes } from './mail-links.ts';
+import { oneTimeCodeRoutes } from './one-time-codes.ts';
 import { peopleRoutes } from './people.ts';
 import { practiceRoutes } from './practice.ts';
 import { protocolRoutes } from './protocol.ts';
@@ -27,6 +28,7 @@ import { visitRoutes } from './visits.ts';
 export const routes = {
   ...systemRoutes,
   ...accountRoutes,
+  ...oneTimeCodeRoutes,
   ...mailLinkRoutes,
   ...peopleRoutes,
   ...todayRoutes,

@@ -8,6 +8,7 @@ const me = {
   user: { id, name: 'Maren Okafor', email: 'coach@greywater-row.example', role: 'coach' },
   practice: { id, name: 'Greywater Row' },
   session: { id, expiresAt: '2026-03-04T08:00:00Z' },
+  codeMissing: false,
 };
 const answering = (response: () => Response) => {
   const fetched = vi.fn<typeof fetch>(() => Promise.resolve(response()));

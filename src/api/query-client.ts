@@ -1,4 +1,5 @@
 import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query';
+import { meQuery } from './accounts.queries.ts';
 import { isProblem } from './problem.ts';
 
 /** A connection that comes back, or a server that restarts, is worth asking again; a no is not. */
@@ -10,8 +11,11 @@ const worthAgain = (error: unknown) => isProblem(error, 'offline', 'shutting-dow
 export function makeQueryClient(onSignInNeeded: () => void): QueryClient {
   const onError = (error: unknown) => {
     if (isProblem(error, 'sign-in-needed')) onSignInNeeded();
+    // the practice has begun to ask for codes: the frame then leads to them
+    if (isProblem(error, 'codes-needed'))
+      void client.invalidateQueries({ queryKey: meQuery.queryKey });
   };
-  return new QueryClient({
+  const client = new QueryClient({
     queryCache: new QueryCache({ onError }),
     mutationCache: new MutationCache({ onError }),
     defaultOptions: {
@@ -30,4 +34,5 @@ export function makeQueryClient(onSignInNeeded: () => void): QueryClient {
       mutations: { retry: false, networkMode: 'always' },
     },
   });
+  return client;
 }

@@ -21,7 +21,7 @@ export const pages: RouteObject[] = [
       {
         path: 'sign-in',
         lazy: lazily(() =>
-          import('#src/features/accounts/sign-in-page.tsx').then((page) => page.SignInPage),
+          import('#src/features/accounts/sign-in/sign-in-page.tsx').then((page) => page.SignInPage),
         ),
       },
       {

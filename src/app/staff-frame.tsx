@@ -1,10 +1,11 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { useCallback } from 'react';
+import { useCallback, useState } from 'react';
 import { Outlet, useLocation, useNavigate, useNavigation } from 'react-router-dom';
 import { meQuery } from '#src/api/accounts.queries.ts';
 import { MeContext, useMe } from '#src/api/me.ts';
 import { isProblem } from '#src/api/problem.ts';
 import { useLiveConnection } from '#src/api/use-live.ts';
+import { CodesFirstPage } from '#src/features/accounts/codes/codes-first-page.tsx';
 import { Page } from '#src/ui/page.tsx';
 import { ErrorState } from '#src/ui/states.tsx';
 import { ConnectionBar } from './connection-bar.tsx';
@@ -16,6 +17,23 @@ import { useWaitingMarks } from './use-waiting-marks.ts';
 /** The frame of every page that wants a sign-in: who it is, where to go, and the tab's stream of events. */
 export function StaffFrame() {
   const me = useQuery(meQuery);
+  const client = useQueryClient();
+  const signedOut = useSignedOut();
+  const [codesFirst, setCodesFirst] = useState(false);
+  // held until the recovery codes were seen: they are shown once
+  if (me.data?.codeMissing && !codesFirst) setCodesFirst(true);
+  if (me.data !== undefined && codesFirst)
+    return (
+      <CodesFirstPage
+        me={me.data}
+        onDone={() =>
+          void client
+            .invalidateQueries({ queryKey: meQuery.queryKey })
+            .then(() => setCodesFirst(false))
+        }
+        onOut={signedOut}
+      />
+    );
   if (me.data !== undefined)
     return (
       <MeContext value={me.data}>
@@ -33,17 +51,21 @@ export function StaffFrame() {
   );
 }
 
-function SignedIn() {
+/** Leads to the sign-in, which leads back here. */
+function useSignedOut(): () => void {
   const client = useQueryClient();
   const navigate = useNavigate();
-  const { pathname } = useLocation();
-  const going = useNavigation().state !== 'idle';
-  const onSignedOut = useCallback(() => {
+  return useCallback(() => {
     const place = window.location.pathname + window.location.search;
     void navigate(signInAddress(place), { replace: true });
     client.clear();
   }, [client, navigate]);
-  useLiveConnection(onSignedOut);
+}
+
+function SignedIn() {
+  const { pathname } = useLocation();
+  const going = useNavigation().state !== 'idle';
+  useLiveConnection(useSignedOut());
   useWaitingMarks(useMe().user.id);
   return (
     <>

@@ -16,6 +16,7 @@ import type { Mail } from '#server/mail/mailer.ts';
 import { readConfig } from '#server/main/config.ts';
 import { features } from '#server/main/features.ts';
 import type { Ground } from '#server/main/ground.ts';
+import { sealWith } from '#server/main/sealer.ts';
 import { LocalStorage } from '#server/storage/local-storage.ts';
 import { freshDatabase } from './database.ts';
 import { makeWorld, type World } from './world.ts';
@@ -69,6 +70,7 @@ export const startApi = async (env: NodeJS.ProcessEnv = {}): Promise<Api> => {
     orm,
     inPractice: makeInPractice(orm),
     sessions: keepSessions({ db: () => orm.em.fork(), key: 'a key for tests', secure: false }),
+    sealer: sealWith('a key for tests'),
     storage: await LocalStorage.open(config.uploads),
     mail: {
       send: (mail) => {

@@ -82,6 +82,7 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   invite: { email: 'new@test.example', role: 'coach' },
   setRetention: { keepMonths: 24, withdrawalDays: 30 },
   changePractice: { name: 'Test Practice', contact: '' },
+  setOwnersCode: { needed: false },
   changeProtocol: { after: 1, values: STANDARD_PROTOCOL, note: 'As it is.' },
   changeConsentWording: {
     after: 1,

@@ -1,5 +1,9 @@
 import { Client } from 'pg';
+import { product } from '#server/db/in-practice.ts';
+import { SEND_NOTICE } from '#server/features/accounts/jobs/send-notice-type.ts';
+import { sendNoticeJob } from '#server/features/accounts/jobs/send-notice.ts';
 import { sendMailLinkJob } from '#server/features/mail-links/jobs/send-mail-link.ts';
+import { JobOutbox } from '#server/jobs/job-outbox.entity.ts';
 import type { Api } from './api.ts';
 
 /** Writes every letter that was asked for, as the worker does. */
@@ -29,4 +33,16 @@ export const tokenTo = async (api: Api, email: string): Promise<string> => {
   const token = /\/(?:join|reset|confirm-email)\/([\w-]+)/.exec(letter?.text ?? '')?.[1];
   if (token === undefined) throw new Error(`no link was sent to ${email}`);
   return token;
+};
+
+/** Sends the notices that were asked for since the last time, as the worker does. */
+export const sendNotices = async ({ ground, world }: Api): Promise<void> => {
+  const { practiceId } = world;
+  const asked = await ground.inPractice(product(practiceId), async ({ em }) => {
+    const rows = await em.find(JobOutbox, { queue: SEND_NOTICE.queue });
+    em.remove(rows);
+    return rows.map(({ payload }) => payload);
+  });
+  const { signal } = new AbortController();
+  for (const payload of asked) await sendNoticeJob.run({ ground, practiceId, payload, signal });
 };

@@ -26,6 +26,7 @@ export const aMe = (role: Me['user']['role'] = 'coach'): Me => ({
   user: { ...coach, email: 'coach@greywater-row.example', role },
   practice: { id: uuid(3), name: 'Greywater Row' },
   session: { id: uuid(4), expiresAt: '2026-04-03T16:20:00Z' },
+  codeMissing: false,
 });
 
 /** A practice in which nothing was done yet. */

@@ -1,6 +1,7 @@
 import { routes } from '#shared/contracts/routes.ts';
 import { ownPasswordLimits, signInLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
+import { setHalfSession } from '../one-time-codes/half-session.ts';
 import { changeEmail, dropEmailChange } from './change-email.ts';
 import { changeName, changePassword, ownAccount } from './own-account.ts';
 import { presentMe, presentSession } from './accounts.presenter.ts';
@@ -18,9 +19,13 @@ export const accountsFeature: Feature = ({ serve, ground }) => {
   serve(
     routes.signIn,
     async ({ body, req, res }) => {
-      const session = await signIn(ground, body, req.get('user-agent'));
-      sessions.setCookie(res, session.id);
-      return presentMe(session);
+      const signedIn = await signIn(ground, body, req.get('user-agent'));
+      if ('half' in signedIn) {
+        setHalfSession(res, ground, signedIn.half);
+        return { codeNeeded: true } as const;
+      }
+      sessions.setCookie(res, signedIn.session.id);
+      return presentMe(signedIn.session);
     },
     ...signInLimits(),
   );

@@ -5,14 +5,24 @@ import { Problem } from '../../http/problem.ts';
 import type { OpenSession } from '../../http/session.ts';
 import type { Ground } from '../../main/ground.ts';
 import { audit } from '../audit/audit.ts';
+import { type HalfSession, markOf } from '../one-time-codes/half-session.ts';
 import { openSession } from './open-session.ts';
 import { passwordFits } from './password.ts';
 import { Session } from './session.entity.ts';
 
-type SignInRow = { user_id: string; practice_id: string; password_hash: string };
+type SignInRow = {
+  user_id: string;
+  practice_id: string;
+  password_hash: string;
+  asks_code: boolean;
+};
+
+/** Signed in, or only half: the account asks for a code too. */
+export type SignedIn =
+  { readonly session: OpenSession } | { readonly half: Omit<HalfSession, 'until'> };
 
 /**
- * Opens a session. An unknown address, a closed account and a wrong password give the same answer after the same
+ * Opens a session, or the second step of a sign-in. An unknown address, a closed account and a wrong password give the same answer after the same
  * time.
  * @throws Problem 'sign-in-refused'
  */
@@ -20,7 +30,7 @@ export const signIn = async (
   { orm, inPractice, sessions, log }: Pick<Ground, 'orm' | 'inPractice' | 'sessions' | 'log'>,
   { email, password }: { email: string; password: string },
   userAgent: string | undefined,
-): Promise<OpenSession> => {
+): Promise<SignedIn> => {
   const [row] = await orm.em.fork().execute<SignInRow[]>('select * from find_sign_in(?)', [email]);
   const fits = await passwordFits(password, row?.password_hash);
   if (row && !fits) {
@@ -33,9 +43,12 @@ export const signIn = async (
     });
   }
   if (!row || !fits) throw new Problem('sign-in-refused');
-  return openSession({ inPractice, sessions }, row.practice_id, userAgent, () =>
-    Promise.resolve(row.user_id),
+  const { user_id: userId, practice_id: practiceId } = row;
+  if (row.asks_code) return { half: { userId, practiceId, mark: markOf(row.password_hash) } };
+  const session = await openSession({ inPractice, sessions }, practiceId, userAgent, () =>
+    Promise.resolve(userId),
   );
+  return { session };
 };
 
 /** Ends the session that asks. */

@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
-import { tokenTo, writeLetters } from '#tests/support/letters.ts';
+import { sendNotices, tokenTo, writeLetters } from '#tests/support/letters.ts';
 import type { User } from './user.entity.ts';
 import { makeUser, TEST_PASSWORD } from './user.factory.ts';
 
@@ -24,7 +24,12 @@ describe('one’s own account', () => {
     const user = await newUser();
     const agent = await api.as(user);
     const { body } = await agent.get('/api/account').expect(200);
-    expect(body).toEqual({ name: user.name, email: user.email, emailChange: null });
+    expect(body).toEqual({
+      name: user.name,
+      email: user.email,
+      emailChange: null,
+      codes: { since: null, recoveryLeft: 0 },
+    });
     await agent.patch('/api/account').send({ name: ' ' }).expect(422);
     await agent.patch('/api/account').send({ name: 'Wren Alder' }).expect(200);
     expect((await agent.get('/api/me')).body.user.name).toBe('Wren Alder');
@@ -46,6 +51,24 @@ describe('a new password', () => {
     await there.get('/api/me').expect(401);
     await signIn(user.email, TEST_PASSWORD).expect(401);
     await signIn(user.email, NEXT).expect(200);
+  });
+
+  it('is told to the address of the account, and a refused one to nobody', async () => {
+    const user = await newUser();
+    const agent = await api.as(user);
+    const letters = async () => {
+      await sendNotices(api);
+      return api.mailbox.filter(({ to }) => to === user.email);
+    };
+    const change = (current: string) =>
+      agent.post('/api/account/password').send({ current, next: NEXT });
+    await change('not the word').expect(403);
+    expect(await letters()).toEqual([]);
+    await change(TEST_PASSWORD).expect(204);
+    const [letter] = await letters();
+    expect(letter?.subject).toBe('Your Redshank password was changed');
+    expect(letter?.text).toContain('http://redshank.test/forgot');
+    expect(letter?.text).not.toContain(NEXT);
   });
 
   it('is not guessed at with a borrowed session: ten wrong tries are all', async () => {

@@ -7,6 +7,8 @@ import { audit } from '../audit/audit.ts';
 import { endSessionsOf } from './open-session.ts';
 import { openEmailChange } from './open-email-change.ts';
 import { hashPassword, passwordFits } from './password.ts';
+import { notify } from './notices.ts';
+import { RecoveryCode } from './recovery-code.entity.ts';
 import { User } from './user.entity.ts';
 
 type Of = Unit<UserActor>;
@@ -14,8 +16,18 @@ type Of = Unit<UserActor>;
 export type Work = <T>(work: (unit: Of) => Promise<T>) => Promise<T>;
 
 export const ownAccount = async (unit: Of): Promise<Account> => {
-  const { name, email } = await unit.em.findOneOrFail(User, { id: unit.actor.id });
-  return { name, email, emailChange: await openEmailChange(unit) };
+  const { id, name, email, codesSince } = await unit.em.findOneOrFail(User, {
+    id: unit.actor.id,
+  });
+  return {
+    name,
+    email,
+    emailChange: await openEmailChange(unit),
+    codes: {
+      since: codesSince?.toISOString() ?? null,
+      recoveryLeft: await unit.em.count(RecoveryCode, { user: id, usedAt: null }),
+    },
+  };
 };
 
 export const changeName = async (
@@ -55,5 +67,6 @@ export const changePassword = async (
     await unit.em.nativeUpdate(User, { id }, { passwordHash });
     await endSessionsOf(unit, id, sessionId);
     audit(unit, 'account.password', id);
+    await notify(unit, id, 'password-changed');
   });
 };

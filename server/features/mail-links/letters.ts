@@ -1,6 +1,6 @@
 import type { Role } from '#shared/access/actors.ts';
 import type { MailLinkKind } from '#shared/contracts/mail-links.ts';
-import type { Mail } from '../../mail/mailer.ts';
+import { type Letter, momentInWords, written } from '../../mail/letter.ts';
 
 /** A link whose token was just made, with what its letter says. */
 export type ArmedLink = {
@@ -15,25 +15,12 @@ export type ArmedLink = {
   /** An account that is open has this address already. */
   readonly address_known: boolean;
 };
-type Letter = Omit<Mail, 'to'>;
 
 const ROLE_WORDS: Record<Role, string> = {
   owner: 'an owner',
   supervisor: 'a supervisor',
   coach: 'a coach',
 };
-
-const until = (moment: string | Date): string =>
-  new Intl.DateTimeFormat('en-GB', {
-    dateStyle: 'long',
-    timeStyle: 'short',
-    timeZone: 'UTC',
-  }).format(new Date(moment));
-
-const written = (subject: string, ...paragraphs: readonly string[]): Letter => ({
-  subject,
-  text: `${paragraphs.join('\n\n')}\n`,
-});
 
 const UNASKED = 'If you did not ask for this, leave this letter alone: nothing happens.';
 
@@ -50,7 +37,7 @@ const known = (reason: string, home: string): Letter =>
 /** Every letter of the product that carries a link, in one place. Null: nothing is to be sent. */
 export const letterOf = (link: ArmedLink, home: string, token: string): Letter | null => {
   const { practice_name: practice, by_name: by, address_known: isKnown } = link;
-  const lasts = `The link works once, until ${until(link.expires_at)} (UTC).`;
+  const lasts = `The link works once, until ${momentInWords(link.expires_at)}.`;
   switch (link.kind) {
     case 'invitation': {
       const invited = `${by ?? 'An owner'} invites you to ${practice} as ${ROLE_WORDS[link.role ?? 'coach']}.`;

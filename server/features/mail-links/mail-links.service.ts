@@ -7,6 +7,7 @@ import { Problem } from '../../http/problem.ts';
 import type { OpenSession } from '../../http/session.ts';
 import type { Ground } from '../../main/ground.ts';
 import { endSessionsOf, openSession } from '../accounts/open-session.ts';
+import { notify } from '../accounts/notices.ts';
 import { hashPassword } from '../accounts/password.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../audit/audit.ts';
@@ -64,5 +65,6 @@ export const resetPassword = async (
     await unit.em.nativeUpdate(User, { id: userId }, { passwordHash });
     await endSessionsOf(unit, userId);
     audit({ em: unit.em, actor: { kind: 'nobody' } }, 'account.reset-password', userId);
+    await notify(unit, userId, 'password-changed');
   });
 };

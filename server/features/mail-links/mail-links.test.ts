@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { asAdmin } from '#tests/support/admin.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
-import { tokenTo, writeLetters } from '#tests/support/letters.ts';
+import { sendNotices, tokenTo, writeLetters } from '#tests/support/letters.ts';
 import { newToken } from '../../http/token-hash.ts';
 import { TEST_PASSWORD } from '../accounts/user.factory.ts';
 
@@ -43,6 +43,11 @@ describe('a forgotten password', () => {
     await before.get('/api/me').expect(401);
     await signIn(coach.email, TEST_PASSWORD).expect(401);
     await signIn(coach.email, NEW_PASSWORD).expect(200);
+    await sendNotices(api);
+    expect(api.mailbox.at(-1)).toMatchObject({
+      to: coach.email,
+      subject: 'Your Redshank password was changed',
+    });
   });
 
   it('of nobody is asked for with the same answer and the same rows, and no letter goes out', async () => {

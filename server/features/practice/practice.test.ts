@@ -5,6 +5,7 @@ import { AuditEntry } from '../audit/audit-entry.entity.ts';
 
 const PATH = '/api/practice';
 const given = { name: 'Quiet Harbour', contact: 'desk@quiet-harbour.example' };
+const settings = { ...given, ownersNeedCode: false };
 
 let api: Api;
 beforeAll(async () => {
@@ -15,10 +16,10 @@ afterAll(() => api.close());
 describe('what athletes are told of the practice', () => {
   it('is read by all staff and changed by the owner, who sees it at once everywhere', async () => {
     const owner = await api.as(api.world.owner);
-    expect((await owner.put(PATH).send(given).expect(200)).body).toEqual(given);
+    expect((await owner.put(PATH).send(given).expect(200)).body).toEqual(settings);
     for (const user of [api.world.coach, api.world.supervisor, api.world.owner]) {
       const who = await api.as(user);
-      expect((await who.get(PATH).expect(200)).body).toEqual(given);
+      expect((await who.get(PATH).expect(200)).body).toEqual(settings);
       expect((await who.get('/api/me')).body.practice.name).toBe(given.name);
     }
     const trail = await api.ground.inPractice(product(api.world.practiceId), ({ em }) =>

@@ -39,7 +39,7 @@ export function TextField<F extends FieldValues = FieldValues>({
   ...field
 }: Common<F> & {
   type?: 'text' | 'email' | 'password' | 'date';
-  inputMode?: 'text' | 'email';
+  inputMode?: 'text' | 'email' | 'numeric';
   max?: string;
 }) {
   const { ids, error, control } = useBound(field);

@@ -9,6 +9,7 @@ const anAccount = (change: Partial<Account> = {}): Account => ({
   name: 'Maren Okafor',
   email: 'coach@greywater-row.example',
   emailChange: null,
+  codes: { since: null, recoveryLeft: 0 },
   ...change,
 });
 const at = '2026-03-03T16:20:00Z';

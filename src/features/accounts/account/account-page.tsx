@@ -2,6 +2,8 @@ import { useQuery } from '@tanstack/react-query';
 import { accountQuery } from '#src/api/accounts.queries.ts';
 import { Page, Section } from '#src/ui/page.tsx';
 import { ErrorState, Loading, SkeletonLines } from '#src/ui/states.tsx';
+import { useHashTarget } from '#src/ui/use-hash-target.ts';
+import { CodesSection } from '../codes/codes-section.tsx';
 import { EmailSection } from './email-section.tsx';
 import { NameForm } from './name-form.tsx';
 import { PasswordForm } from './password-form.tsx';
@@ -14,6 +16,7 @@ export function AccountPage() {
     <Page title="Your account" lead="Your name, how you sign in, and where you are signed in.">
       {account.data ? (
         <>
+          <HashTarget />
           <Section title="Name" note="Others of the practice see it." first>
             <NameForm name={account.data.name} />
           </Section>
@@ -22,6 +25,13 @@ export function AccountPage() {
           </Section>
           <Section title="Password" note="You are then signed out everywhere but here.">
             <PasswordForm />
+          </Section>
+          <Section
+            id="codes"
+            title="One-time codes"
+            note="Six digits from your phone, asked for besides the password."
+          >
+            <CodesSection codes={account.data.codes} />
           </Section>
           <Section
             title="Signed in"
@@ -39,4 +49,10 @@ export function AccountPage() {
       )}
     </Page>
   );
+}
+
+/** Only once the sections are there. */
+function HashTarget() {
+  useHashTarget();
+  return null;
 }

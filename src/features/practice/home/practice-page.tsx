@@ -6,6 +6,7 @@ import { practiceQuery } from '#src/api/practice.queries.ts';
 import { useMayInPractice } from '#src/api/use-may.ts';
 import { Page, Section } from '#src/ui/page.tsx';
 import { Caution, ErrorState, Loading } from '#src/ui/states.tsx';
+import { OwnersCode } from './owners-code.tsx';
 import { PracticeForm } from './practice-form.tsx';
 import { placesFor } from './practice-places.ts';
 
@@ -37,6 +38,7 @@ export function PracticePage() {
         </ul>
       </Section>
       <ShownToAthletes />
+      {user.role === 'owner' && <SignInOfOwners />}
     </Page>
   );
 }
@@ -59,6 +61,16 @@ function ShownToAthletes() {
       )}
     </Section>
   );
+}
+
+function SignInOfOwners() {
+  const settings = useQuery(practiceQuery);
+  // what fails is said once, above
+  return settings.data ? (
+    <Section title="Sign-in of owners" note="they see every athlete">
+      <OwnersCode settings={settings.data} />
+    </Section>
+  ) : null;
 }
 
 function Read({ settings: { name, contact } }: { settings: PracticeSettings }) {

@@ -1,20 +1,9 @@
-import type { Locator, Page } from '@playwright/test';
+import type { Page } from '@playwright/test';
 import { paths } from '#src/ui/paths.ts';
+import { CODES } from './code-pages.ts';
+import type { PageOfProduct } from './page-of-product.ts';
 import { COACH, OWNER, SUPERVISOR } from './people.ts';
 import type { Shown } from './shown.ts';
-
-/** A page in one of its states, and what it says once it stands. */
-export interface PageOfProduct {
-  readonly name: string;
-  /** Who opens it; null: nobody is signed in. */
-  readonly who: string | null;
-  readonly address: (shown: Shown) => string;
-  readonly stands: (page: Page) => Locator;
-  /** What is pressed once it is open, where no address leads to this state. */
-  readonly then?: (page: Page) => Promise<void>;
-  /** Lines of the browser's console that belong to it. */
-  readonly says?: RegExp;
-}
 
 const heading = (name: string | RegExp) => (page: Page) =>
   page.getByRole('heading', { level: 1, name });
@@ -306,6 +295,7 @@ const REPLAYS: readonly PageOfProduct[] = [
 /** Every page of the product, in the order of the job. */
 export const PAGES: readonly PageOfProduct[] = [
   ...FRONT,
+  ...CODES,
   ...ATHLETES,
   ...VISITS,
   ...READINGS,

@@ -1,0 +1,59 @@
+import type { EntityManager } from '@mikro-orm/postgresql';
+import { enqueue } from '../../jobs/job.ts';
+import { type Letter, momentInWords, written } from '../../mail/letter.ts';
+import { type Notice, SEND_NOTICE } from './jobs/send-notice-type.ts';
+
+/** Asks for the letter in the transaction of what it tells of. */
+export const notify = async (
+  unit: { readonly em: EntityManager },
+  userId: string,
+  notice: Notice,
+): Promise<void> => {
+  await enqueue(unit, SEND_NOTICE, { userId, notice, at: new Date().toISOString() });
+};
+
+/** @param left recovery codes that are still unused */
+export const noticeLetter = (
+  notice: Notice,
+  { at, home, left }: { readonly at: string; readonly home: string; readonly left: number },
+): Letter => {
+  const when = momentInWords(at);
+  const notYou = `If it was not you, choose a new password now:\n${home}/forgot`;
+  switch (notice) {
+    case 'password-changed':
+      return written(
+        'Your Redshank password was changed',
+        `The password of your account was changed on ${when}. If that was you, there is nothing to do.`,
+        `${notYou}\nThen tell the owner of your practice.`,
+      );
+    case 'codes-on':
+      return written(
+        'One-time codes are on',
+        `Since ${when} your account asks for a one-time code at the sign-in, besides the password. Keep your recovery codes where you find them without your phone.`,
+        `${notYou}\nThen tell the owner of your practice.`,
+      );
+    case 'codes-off':
+      return written(
+        'One-time codes are off',
+        `Since ${when} your account asks for its password alone.`,
+        `${notYou}\nThen turn the codes on again:\n${home}/account`,
+      );
+    case 'recovery-used':
+      return written(
+        'A recovery code was used',
+        `On ${when} a recovery code was used in place of a one-time code of your account. ${leftInWords(left)}`,
+        `${notYou}\nThen make new recovery codes:\n${home}/account`,
+      );
+    case 'recovery-renewed':
+      return written(
+        'New recovery codes were made',
+        `On ${when} new recovery codes were made for your account. The ones before open nothing any more.`,
+        notYou,
+      );
+  }
+};
+
+const leftInWords = (left: number): string => {
+  if (left === 0) return 'None is left: make new ones on the page of your account.';
+  return left === 1 ? 'One is left.' : `${left} are left.`;
+};
