@@ -4,6 +4,11 @@ import { folderMailer } from './folder-mailer.ts';
 import type { Mailer } from './mailer.ts';
 import { smtpMailer } from './smtp-mailer.ts';
 
+/** Where letters are kept that no server takes. */
+export const mailFolder = ({ data }: Pick<Config, 'data'>): string => join(data, 'mail');
+
 /** The mail server where one is set, otherwise a folder of the instance. */
-export const openMailer = ({ mail, data }: Pick<Config, 'mail' | 'data'>): Mailer =>
-  mail.smtpUrl ? smtpMailer(mail.smtpUrl, mail.from) : folderMailer(join(data, 'mail'), mail.from);
+export const openMailer = (config: Pick<Config, 'mail' | 'data'>): Mailer => {
+  const { smtpUrl, from } = config.mail;
+  return smtpUrl ? smtpMailer(smtpUrl, from) : folderMailer(mailFolder(config), from);
+};

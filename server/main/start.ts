@@ -2,9 +2,11 @@ import { seedDemo } from '../db/demo/seed-demo.ts';
 import { migrate } from '../db/migrate.ts';
 import { makeLog } from '../http/logging.ts';
 import { keepWorker } from '../jobs/keep-worker.ts';
+import { inboxIsFor, openInbox } from '../mail/inbox.ts';
 import { type Config, ConfigError, readConfig } from './config.ts';
 import { jobs } from './jobs.ts';
 import { makeGround } from './make-ground.ts';
+import { SecretFile } from './secrets.ts';
 import { explainStartError } from './start-errors.ts';
 import { startWeb } from './web.ts';
 
@@ -46,6 +48,12 @@ const run = async (config: Config, parts: readonly Part[]): Promise<void> => {
     if (parts.includes('web')) {
       stops.push((await startWeb(ground)).stop);
       say(`\nRedshank serves ${config.publicUrl}`);
+      if (inboxIsFor(config)) {
+        const secret = await new SecretFile(config.secrets, 'inbox-address').readOrMake(16);
+        const inbox = await openInbox(config, secret);
+        stops.push(inbox.close);
+        say(`No mail server is set: letters are kept, and read at ${inbox.url}`);
+      }
       if (demo) demo.lines.forEach(say);
     } else say('Redshank’s worker is at work.');
     await asked;

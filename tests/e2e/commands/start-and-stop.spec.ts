@@ -37,6 +37,8 @@ test('npm start serves, stops cleanly when asked, and keeps what it has', async 
   await first.untilItSays('coach@pennywort-mill.example');
   const health = await request.get(`http://127.0.0.1:${here.port}/api/health`);
   expect(health.ok()).toBe(true);
+  const [, inbox = ''] = /letters are kept, and read at (\S+)/.exec(first.said()) ?? [];
+  expect(await (await request.get(inbox)).text()).toContain('None yet.');
   const password = passwordIn(first.said());
   expect(password).toBeDefined();
 
