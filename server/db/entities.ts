@@ -21,6 +21,8 @@ import { SideSetting } from '../features/readings/side-setting.entity.ts';
 import { Replay } from '../features/replays/replay.entity.ts';
 import { Rep } from '../features/reps/rep.entity.ts';
 import { Erasure } from '../features/retention/erasure.entity.ts';
+import { Review } from '../features/reviews/review.entity.ts';
+import { SideReview } from '../features/reviews/side-review.entity.ts';
 import { SecondMarkCommand } from '../features/second-markings/second-mark-command.entity.ts';
 import { SecondMark } from '../features/second-markings/second-mark.entity.ts';
 import { SecondMarking } from '../features/second-markings/second-marking.entity.ts';
@@ -54,6 +56,8 @@ export const entities = [
   ProtocolVersion,
   Reading,
   SideSetting,
+  Review,
+  SideReview,
   Comment,
   Head,
   Replay,

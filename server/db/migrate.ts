@@ -17,6 +17,7 @@ import { Migration20261202034100_audit_trail } from '../../migrations/Migration2
 import { Migration20261202035900_people } from '../../migrations/Migration20261202035900_people.ts';
 import { Migration20261202041200_consent_life } from '../../migrations/Migration20261202041200_consent_life.ts';
 import { Migration20261202043400_erasures } from '../../migrations/Migration20261202043400_erasures.ts';
+import { Migration20261202071000_reviews } from '../../migrations/Migration20261202071000_reviews.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -82,6 +83,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202043400_erasures',
     class: Migration20261202043400_erasures,
+  },
+  {
+    name: 'Migration20261202071000_reviews',
+    class: Migration20261202071000_reviews,
   },
 ];
 

@@ -20,6 +20,7 @@ import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { replaysFeature } from '../features/replays/replays.routes.ts';
 import { repsFeature } from '../features/reps/reps.routes.ts';
 import { retentionFeature } from '../features/retention/retention.routes.ts';
+import { reviewsFeature } from '../features/reviews/reviews.routes.ts';
 import { secondMarkingsFeature } from '../features/second-markings/second-markings.routes.ts';
 import { systemFeature } from '../features/system/system.routes.ts';
 import { todayFeature } from '../features/today/today.routes.ts';
@@ -47,6 +48,7 @@ export const features: readonly Feature[] = [
   protocolFeature,
   auditFeature,
   readingsFeature,
+  reviewsFeature,
   secondMarkingsFeature,
   headsFeature,
   replaysFeature,

@@ -44,6 +44,8 @@ export const ACTIONS = {
   'call.record': 'caseload',
   'reading.assume': 'caseload',
   'reading.renew': 'caseload',
+  'review.hand-in': 'caseload',
+  'review.decide': 'caseload',
   'comment.add': 'caseload',
   'head.save': 'caseload',
   'head.look': 'caseload',

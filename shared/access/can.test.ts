@@ -76,6 +76,8 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'call.record': WORKS,
   'reading.assume': WORKS,
   'reading.renew': WORKS,
+  'review.hand-in': WORKS,
+  'review.decide': ['herSupervisor', 'owner'],
   'comment.add': SEES,
   'head.save': WORKS,
   'head.look': WORKS,
@@ -113,6 +115,21 @@ describe('can', () => {
   it('lets a supervisor work on athletes of their own', () => {
     const own: Resource = { kind: 'caseload', practiceId: 'here', coachId: 'curlew' };
     expect(can(ACTORS.herSupervisor, 'marks.save', own)).toBe(true);
+  });
+
+  it('lets nobody sign off what their own athlete’s reading says, whatever their role', () => {
+    for (const [role, id] of [
+      ['owner', 'heron'],
+      ['supervisor', 'curlew'],
+      ['coach', 'wren'],
+    ] as const)
+      expect(
+        can(user(role, id, 'here', [id]), 'review.decide', {
+          kind: 'caseload',
+          practiceId: 'here',
+          coachId: id,
+        }),
+      ).toBe(false);
   });
 
   it('does not read the list of assigned coaches for anyone but a supervisor', () => {

@@ -43,6 +43,8 @@ const onPractice = (actor: UserActor, action: Action): boolean =>
 const onCaseload = (actor: UserActor, action: Action, coachId: string): boolean => {
   if (OWNERS.has(action)) return actor.role === 'owner';
   const held = reach(actor, coachId);
+  // a second pair of eyes: nobody signs off what their own athlete's reading says
+  if (action === 'review.decide') return held === 'assigned' || held === 'practice';
   return held === 'assigned' ? ASSIGNED.has(action) : held !== null;
 };
 

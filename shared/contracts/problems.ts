@@ -71,6 +71,10 @@ export const PROBLEMS = {
   'boundaries-out-of-order': [422, 'The moments of a rep must follow each other.'],
   'landmark-not-in-view': [422, 'This landmark is not marked in this view.'],
   'call-first': [409, 'Record your call by eye first. Figures are shown after it.'],
+  'reading-provisional': [
+    409,
+    'It rests on marks that the computer followed and nobody has looked at. Look at them on the Bench first.',
+  ],
   // second markings
   'nothing-to-mark-again': [
     409,

@@ -19,6 +19,7 @@ import { reliabilityRoutes } from './reliability.ts';
 import { repRoutes } from './reps.ts';
 import { replayRoutes } from './replays.ts';
 import { retentionRoutes } from './retention.ts';
+import { reviewRoutes } from './reviews.ts';
 import { secondMarkingRoutes } from './second-markings.ts';
 import { systemRoutes } from './system.ts';
 import { todayRoutes } from './today.ts';
@@ -46,6 +47,7 @@ export const routes = {
   ...protocolRoutes,
   ...auditRoutes,
   ...readingRoutes,
+  ...reviewRoutes,
   ...commentRoutes,
   ...exportRoutes,
   ...headRoutes,

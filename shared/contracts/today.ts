@@ -1,5 +1,6 @@
 import * as z from 'zod';
 import { id, moment, personRef, side } from './primitives.ts';
+import { reviewItem } from './reviews.ts';
 import { json, route } from './route.ts';
 
 /** One thing that waits for this person. Each kind opens one exact place. */
@@ -34,7 +35,23 @@ export const waiting = z
       repNumber: z.int().nullable(),
       side: side.nullable(),
     }),
-    z.object({ kind: z.literal('reading-ready'), visitId: id, side, label: z.string() }),
+    z.object({
+      kind: z.literal('reading-ready'),
+      visitId: id,
+      side,
+      label: z.string(),
+      /** By a reviewer, as it stands. */
+      signedOff: z.boolean(),
+    }),
+    /** Handed in, and waiting for this person’s word. */
+    reviewItem.extend({ kind: z.literal('to-review') }),
+    z.object({
+      kind: z.literal('sent-back'),
+      visitId: id,
+      side,
+      reason: z.string(),
+      by: personRef,
+    }),
     z.object({
       kind: z.literal('comment-open'),
       clipId: id,

@@ -3,6 +3,7 @@ import { SAFETY_ANSWERS } from '#shared/plan/cautions.ts';
 import { clip } from './clips.ts';
 import { day, id, millimetres, moment, personRef, text, version } from './primitives.ts';
 import { gates } from './protocol.ts';
+import { reviewState } from './reviews.ts';
 import { json, route } from './route.ts';
 
 /**
@@ -107,6 +108,8 @@ export const visitRow = z
       z.object({
         side: z.enum(['left', 'right']),
         call: z.enum(['early', 'on-time', 'still', 'unsure']).nullable(),
+        /** Where its review stands. */
+        review: reviewState,
         /** Null while no call was recorded, or nothing was measured. */
         reading: z
           .object({

@@ -6,6 +6,7 @@ import { athletesKey } from './athletes.queries.ts';
 import { benchOptions, clipOptions, commentsOptions } from './bench.queries.ts';
 import { openLiveEvents } from './live-events.ts';
 import { sidesKey } from './readings.queries.ts';
+import { reviewQueueQuery } from './reviews.queries.ts';
 import { todayQuery } from './today.queries.ts';
 import { visitOptions } from './visits.queries.ts';
 
@@ -52,6 +53,7 @@ export function refresh(client: QueryClient, event: Exclude<LiveEvent, { type: '
       invalidate(commentsOptions(event.clipId).queryKey);
       if (event.byUserId !== me?.user.id) invalidate(benchOptions(event.clipId).queryKey);
       invalidate(todayQuery.queryKey);
+      invalidate(reviewQueueQuery.queryKey);
       break;
     case 'consent':
       // whatever is open of the athlete is asked for again, and refused where it is closed
@@ -63,6 +65,7 @@ export function refresh(client: QueryClient, event: Exclude<LiveEvent, { type: '
     case 'reading':
       invalidate(sidesKey(event.visitId));
       invalidate(todayQuery.queryKey);
+      invalidate(reviewQueueQuery.queryKey);
       invalidate(athletesKey);
       break;
   }

@@ -10,6 +10,7 @@ import { SendingChip } from './sending-chip.tsx';
 const PLACES: readonly { to: string; label: string; end?: boolean }[] = [
   { to: paths.today(), label: 'Today', end: true },
   { to: paths.athletes(), label: 'Athletes' },
+  { to: paths.review(), label: 'Review' },
   { to: paths.practice(), label: 'Practice' },
   { to: paths.method(), label: 'Method' },
 ];

@@ -150,6 +150,12 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'review',
+                lazy: lazily(() =>
+                  import('#src/features/reviews/review-page.tsx').then((page) => page.ReviewPage),
+                ),
+              },
+              {
                 path: 'practice',
                 lazy: lazily(() =>
                   import('#src/features/practice/home/practice-page.tsx').then(

@@ -20,10 +20,15 @@ export const paths = {
   call: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}/call`,
   reading: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}`,
   /** The Bench, at a frame (from 0) and a comment where they are given. */
-  bench: (clipId: string, at: { frame?: number; comment?: string; again?: number } = {}) => {
+  bench: (
+    clipId: string,
+    at: { frame?: number; comment?: string; comments?: boolean; again?: number } = {},
+  ) => {
     const search = new URLSearchParams();
     if (at.frame !== undefined) search.set('frame', String(at.frame));
     if (at.comment !== undefined) search.set('comment', at.comment);
+    // all of them, beside the clip
+    if (at.comments) search.set('comment', 'all');
     // the number of a rep that is to be marked again
     if (at.again !== undefined) {
       search.set('rep', String(at.again));
@@ -33,6 +38,8 @@ export const paths = {
   },
   /** Frames marked again without sight of the first marks. */
   secondMarking: (id: string) => `/second-markings/${id}`,
+  /** What waits for a reviewer's word. */
+  review: () => '/review',
   practice: () => '/practice',
   people: () => '/practice/people',
   consentWording: () => '/practice/consent',

@@ -55,6 +55,7 @@ const EXPECTED: Record<Exclude<Access, 'link'>, Record<Knocker, Answer>> = {
   work: { owner: 'in', supervisor: 403, coach: 'in', ...UNSEEN },
   'own-words': { owner: 403, supervisor: 403, coach: 'in', ...UNSEEN },
   'see-owner-acts': { owner: 'in', supervisor: 403, coach: 403, ...UNSEEN },
+  'see-reviewers-act': { owner: 'in', supervisor: 'in', coach: 403, ...UNSEEN },
   'own-marking': { owner: 403, supervisor: 403, coach: 'in', ...UNSEEN },
 };
 

@@ -12,8 +12,13 @@ import { everythingIn } from '#tests/support/everything-in.ts';
 
 const RUNS = { numRuns: 30, seed: 20261202, endOnFailure: true } as const;
 
-/** What is right for these names somebody who is not known before: the new coach, the athlete by name. */
-const NAMING: ReadonlySet<RouteName> = new Set<RouteName>(['handOver', 'eraseAthlete']);
+/** What is right for these names what is not known before: the new coach, the athlete by name, the reading or the call. */
+const NAMING: ReadonlySet<RouteName> = new Set<RouteName>([
+  'handOver',
+  'eraseAthlete',
+  'handIn',
+  'decideReview',
+]);
 
 let api: Api;
 let ids: Ids;

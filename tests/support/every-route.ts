@@ -56,6 +56,9 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   listCalls: 'visit',
   recordCall: 'visit',
   sideReading: 'visit',
+  sideReview: 'visit',
+  handIn: 'visit',
+  decideReview: 'visit',
   setAssumption: 'visit',
   renewReading: 'visit',
   listComments: 'clip',
@@ -76,6 +79,9 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
 export type RouteNameWithId = {
   [N in RouteName]: (typeof routes)[N] extends { path: `${string}:id${string}` } ? N : never;
 }[RouteName];
+
+/** Of nobody. */
+const NO_CALL = '00000000-0000-4000-8000-000000000000';
 
 /** Bodies that would do something if the thing could be seen. */
 export const BODIES: Partial<Record<RouteName, object>> = {
@@ -157,6 +163,8 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   setAssumption: { on: true },
   addComment: { body: 'x', fromFrame: 0, toFrame: 0 },
   editComment: { body: 'x' },
+  handIn: { about: { kind: 'call', id: NO_CALL } },
+  decideReview: { verdict: 'sign-off', about: { kind: 'call', id: NO_CALL } },
   sayHere: { here: true },
   saveHead: {
     after: 0,

@@ -5,7 +5,7 @@ import type { RouteName } from '#shared/contracts/routes.ts';
  * `anyone` needs no sign-in; `self` is about whoever asks; `practice` any staff; `owner` the owner alone;
  * `coaching` owner and coaches; `see` who has the athlete in sight: owner, their coach, the coach's supervisor;
  * `work` the same without the supervisor, who is told 'not allowed'; `see-owner-acts` the owner, while others are told 'not allowed' where
- * they see the athlete; `own-words` who wrote them; `own-marking` whose
+ * they see the athlete; `see-reviewers-act` owner and supervisor, while the athlete's coach is told 'not allowed'; `own-words` who wrote them; `own-marking` whose
  * second marking it is; `link` whoever holds a link's token.
  */
 export type Access =
@@ -17,6 +17,7 @@ export type Access =
   | 'see'
   | 'work'
   | 'see-owner-acts'
+  | 'see-reviewers-act'
   | 'own-words'
   | 'own-marking'
   | 'link';
@@ -106,6 +107,11 @@ export const ACCESS: Record<RouteName, Access> = {
   clipComments: 'see',
   head: 'see',
   listReplays: 'practice',
+  reviewQueue: 'practice',
+  eyeAgreement: 'practice',
+  sideReview: 'see',
+  handIn: 'work',
+  decideReview: 'see-reviewers-act',
   editAthlete: 'work',
   recordConsent: 'work',
   withdrawConsent: 'work',

@@ -165,7 +165,7 @@ describe('the demo', () => {
     ]) {
       expect(coach).toContain(kind);
     }
-    expect(await kinds(DEMO_ACCOUNTS.supervisor)).toContain('reading-ready');
+    expect(await kinds(DEMO_ACCOUNTS.supervisor)).toContain('to-review');
     expect(await kinds(DEMO_ACCOUNTS.owner)).toContain('consent-lapses');
   });
 

@@ -1,11 +1,14 @@
 import { stat } from 'node:fs/promises';
 import { setTimeout as pause } from 'node:timers/promises';
 import type { UserActor } from '#shared/access/actors.ts';
+import type { Side } from '#shared/contracts/primitives.ts';
 import { User } from '../../features/accounts/user.entity.ts';
 import { acceptClip } from '../../features/clips/accept-clip.ts';
 import { Clip } from '../../features/clips/clip.entity.ts';
 import { HELD } from '../../features/clips/trouble.ts';
 import { sideReading } from '../../features/readings/readings.service.ts';
+import { Review } from '../../features/reviews/review.entity.ts';
+import { handIn } from '../../features/reviews/reviews.service.ts';
 import { handles, IN_THE_BACKGROUND, type JobContext } from '../../jobs/job.ts';
 import type { Ground } from '../../main/ground.ts';
 import { product } from '../in-practice.ts';
@@ -83,6 +86,18 @@ const waitUntilPrepared = async (
   }
 };
 
+const handInOnce = (
+  { inPractice }: Ground,
+  hands: Hands,
+  visitId: string,
+  side: Side,
+  id: string,
+): Promise<unknown> =>
+  inPractice(coachOf(hands), async (unit) => {
+    if ((await unit.em.count(Review, { visit: visitId, side })) > 0) return;
+    await handIn(unit, visitId, side, { about: { kind: 'reading', id }, note: '' });
+  });
+
 /** Derives the readings as opening their page would. */
 const deriveReadings = async (
   ground: Ground,
@@ -92,8 +107,11 @@ const deriveReadings = async (
   for (const athlete of story.athletes) {
     for (const visit of athlete.visits) {
       const visitId = storyId(story.id, ...placesOf(athlete, visit));
-      for (const { side } of visit.calls) {
-        await ground.inPractice(coachOf(hands), (unit) => sideReading(unit, visitId, side));
+      for (const { side, handedIn } of visit.calls) {
+        const { reading } = await ground.inPractice(coachOf(hands), (unit) =>
+          sideReading(unit, visitId, side),
+        );
+        if (handedIn && reading) await handInOnce(ground, hands, visitId, side, reading.id);
       }
     }
   }

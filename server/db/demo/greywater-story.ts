@@ -37,7 +37,7 @@ const ATHLETES: readonly AthleteStory[] = [
             },
           },
         ],
-        calls: [{ side: 'left', seen: 'on-time', confidence: 'sure' }],
+        calls: [{ side: 'left', seen: 'on-time', confidence: 'sure', handedIn: true }],
       },
     ],
   },

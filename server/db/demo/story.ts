@@ -14,6 +14,8 @@ export interface CallStory {
   readonly substitutions?: readonly SeenSubstitution[];
   readonly confidence: 'guess' | 'fairly-sure' | 'sure';
   readonly handsFelt?: string;
+  /** The coach has handed the side in for review. */
+  readonly handedIn?: boolean;
 }
 
 /** Words at a moment of one rep, first to last of a thread. */

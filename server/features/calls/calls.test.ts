@@ -90,6 +90,7 @@ describe('a call by eye', () => {
       {
         side: 'right',
         call: 'early',
+        review: 'none',
         reading: {
           code: 'early-turn-out',
           label: 'Turns out early, before 60°',

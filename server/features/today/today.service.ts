@@ -7,7 +7,7 @@ import { daysLater, today } from '../athletes/days.ts';
 import { clipTasks } from './clip-tasks.ts';
 import { consentTasks, deletionTasks, linkTasks } from './lapse-tasks.ts';
 import { callTasks, repTasks } from './marking-tasks.ts';
-import { commentTasks, readingTasks } from './review-tasks.ts';
+import { commentTasks, readingTasks, sentBackTasks, toReviewTasks } from './review-tasks.ts';
 import { firstSteps } from './first-steps.ts';
 import { heldClipTasks } from './held-clips.ts';
 import type { WaitingItem } from './scope.ts';
@@ -15,6 +15,8 @@ import { secondMarkingTasks } from './second-marking-tasks.ts';
 
 /** Somebody who waits comes before something that waits, and what ends by itself comes last. */
 const KINDS: readonly ((unit: Unit<UserActor>) => Promise<WaitingItem[]>)[] = [
+  toReviewTasks,
+  sentBackTasks,
   commentTasks,
   readingTasks,
   secondMarkingTasks,

@@ -167,9 +167,9 @@ describe('today', () => {
     expect(calls).toMatchObject([{ visitId, side: 'left' }]);
   });
 
-  it('tells a supervisor of readings until they have commented, and of answers', async () => {
+  it('tells a supervisor of what was handed in alone, and of answers', async () => {
     const { supervisor, coach, practiceId } = api.world;
-    expect(await kindsOf(supervisor)).toEqual(['reading-ready']);
+    expect(await kindsOf(supervisor)).toEqual([]);
     await api.ground.inPractice(product(practiceId), ({ em }) => {
       const words = { clip: clipId, fromFrame: 12, toFrame: 12, shared: false };
       em.create(Comment, { ...words, answerTo: commentId, body: 'It turned out.', by: coach.id });

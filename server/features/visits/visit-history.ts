@@ -2,13 +2,23 @@ import type { UserActor } from '#shared/access/actors.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { Seen } from '#shared/contracts/calls.ts';
 import type { ReadingCode } from '#shared/contracts/readings.ts';
+import type { ReviewStep } from '#shared/contracts/reviews.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 
 /** One side of one visit: the first call by eye and, once there is one, the reading of the marks as they stand. */
-export type HistorySide = { side: Side; call: Seen | null } & (
+export type HistorySide = { side: Side; call: Seen | null; review: HistoryReview | null } & (
   Measured | { [K in keyof Measured]: null }
 );
+
+/** The latest step of its review, and what stands there now. */
+type HistoryReview = {
+  step: ReviewStep['step'];
+  reading: string | null;
+  call: string | null;
+  readingNow: string | null;
+  callNow: string;
+};
 
 type Measured = {
   code: ReadingCode;
@@ -36,13 +46,20 @@ const HISTORY = `
     coalesce((
       select json_agg(json_build_object(
         'side', c.side, 'call', c.seen, 'code', r.code, 'before60', r.before60,
-        'gateFrom', r.gate_from, 'gateTo', r.gate_to, 'change', r.change, 'u', r.u, 'provisional', r.provisional
+        'gateFrom', r.gate_from, 'gateTo', r.gate_to, 'change', r.change, 'u', r.u, 'provisional', r.provisional,
+        'review', case when w.id is not null then json_build_object(
+          'step', w.step, 'reading', w.reading_id, 'call', w.call_id, 'readingNow', s.reading_id, 'callNow', c.latest
+        ) end
       ) order by c.side)
       from (
-        select distinct on (side) side, seen from call where call.visit_id = v.id order by side, at
+        select distinct on (side) side, seen,
+          last_value(id) over (partition by side order by at, id rows between unbounded preceding and unbounded following) as latest
+        from call where call.visit_id = v.id order by side, at, id
       ) c
       left join side_setting s on s.visit_id = v.id and s.side = c.side
       left join reading r on r.id = s.reading_id
+      left join side_review h on h.visit_id = v.id and h.side = c.side
+      left join review w on w.id = h.last_id
     ), '[]') as sides
   from visit v
   join account coach on coach.id = v.coach_id

@@ -7,6 +7,7 @@ import type {
 import { degrees } from '#shared/geometry/units.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { isMinor } from '../athletes/days.ts';
+import { reviewStateOf } from '../reviews/reviews.presenter.ts';
 import { mayFilm } from './safety.ts';
 import type { SetUp } from './set-up.entity.ts';
 import { filmingOf } from './set-ups.service.ts';
@@ -39,6 +40,9 @@ export const presentVisit = ({ visit, athlete, coach }: VisitInSight): VisitShap
 const presentSide = (row: HistorySide): VisitRow['sides'][number] => ({
   side: row.side,
   call: row.call,
+  review: row.review
+    ? reviewStateOf(row.review, { reading: row.review.readingNow, call: row.review.callNow })
+    : 'none',
   reading:
     row.code === null
       ? null

@@ -286,6 +286,7 @@ describe('the athlete’s page', () => {
             {
               side: 'right',
               call: 'unsure',
+              review: 'signed-off',
               reading: {
                 code: 'early-turn-out',
                 label: 'Turns out early',
@@ -296,7 +297,7 @@ describe('the athlete’s page', () => {
                 provisional: true,
               },
             },
-            { side: 'left', call: 'on-time', reading: null },
+            { side: 'left', call: 'on-time', review: 'waits', reading: null },
           ],
         }),
       ],

@@ -29,11 +29,13 @@ const point = (change: number, u: number): TrendPoint => ({
 describe('trendOf', () => {
   it('takes measured visits only, oldest first, each side by itself', () => {
     const trend = trendOf([
-      visit('2026-03-03', [{ side: 'right', call: 'early', reading: measured(6.8, 1.8) }]),
-      visit('2026-02-20', [{ side: 'right', call: 'early', reading: null }]),
+      visit('2026-03-03', [
+        { side: 'right', call: 'early', review: 'none', reading: measured(6.8, 1.8) },
+      ]),
+      visit('2026-02-20', [{ side: 'right', call: 'early', review: 'none', reading: null }]),
       visit('2026-02-09', [
-        { side: 'right', call: null, reading: measured(7.4, 1.9) },
-        { side: 'left', call: null, reading: measured(null, null) },
+        { side: 'right', call: null, review: 'none', reading: measured(7.4, 1.9) },
+        { side: 'left', call: null, review: 'none', reading: measured(null, null) },
       ]),
     ]);
     expect(trend.right.map(({ day }) => day)).toEqual(['2026-02-09', '2026-03-03']);

@@ -4,6 +4,7 @@ import type { Side } from '#shared/contracts/primitives.ts';
 import { longDay } from '#src/ui/days.ts';
 import { plusMinus, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
+import { REVIEW_STATES } from '#src/ui/review-words.ts';
 import { StateDot } from '#src/ui/state-dot.tsx';
 import { Table, type Column } from '#src/ui/table.tsx';
 import { SEEN_WORDS } from '#src/ui/words.ts';
@@ -56,6 +57,7 @@ function SideCell({ visit, side, own }: { visit: VisitRow; side: Side; own?: Sid
           {own.call && SEEN_WORDS[own.call]}
         </Link>
         <span className="block text-note text-soft">seen by the coach, not measured</span>
+        <Reviewed own={own} />
       </>
     );
   const { label, change, plusMinus: error, provisional } = own.reading;
@@ -70,6 +72,12 @@ function SideCell({ visit, side, own }: { visit: VisitRow; side: Side; own?: Sid
         {own.call === null ? 'no call by eye' : `by eye: ${SEEN_WORDS[own.call].toLowerCase()}`}
       </span>
       {provisional && <StateDot kind="wait">provisional</StateDot>}
+      <Reviewed own={own} />
     </>
   );
+}
+
+function Reviewed({ own }: { own: SideRow }) {
+  const state = REVIEW_STATES[own.review];
+  return state && <StateDot kind={state.kind}>{state.words}</StateDot>;
 }

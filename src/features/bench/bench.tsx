@@ -70,7 +70,12 @@ export function Bench({ document, frames, frameSize, copySize }: ReadyClip) {
       store: createBenchStore({
         frame,
         repId: rep?.rep.id ?? null,
-        desk: comment ? 'comments' : search.has('again') ? 'reps' : 'course',
+        desk:
+          comment || search.get('comment') === 'all'
+            ? 'comments'
+            : search.has('again')
+              ? 'reps'
+              : 'course',
         mayMark: document.may.mark,
         standsOn: document.clip.supportSide ?? 'both',
         kept: touchesOf(user.id, document.clip.id),

@@ -11,6 +11,7 @@ import { ProtocolSection } from './reasons/protocol-section.tsx';
 import { ReasonsSection } from './reasons/reasons-section.tsx';
 import { SettleSection } from './reasons/settle-section.tsx';
 import { BothSides } from './sides/both-sides.tsx';
+import { SignOffSection } from './sign-off/sign-off-section.tsx';
 import { SubstitutionsSection } from './substitutions/substitutions-section.tsx';
 
 /** The page of a side that has marks, whatever they add up to. */
@@ -28,6 +29,7 @@ export function Measured({ page, reading }: { page: SidePage; reading: Reading }
       <AssumptionSection page={page} />
       <MarkErrorSection page={page} reading={reading} />
       <ProtocolSection page={page} reading={reading} />
+      <SignOffSection page={page} />
       <ReplaySection page={page} />
       <HistorySection page={page} />
     </>

@@ -8,6 +8,7 @@ import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
 import { aClip, anAthlete, aVisit, clipId, visitId } from '#tests/support/records.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
+import { aSideReview } from '#tests/support/review.ts';
 import { aCall, aReading, aSidePage, repId, resultOf } from '#tests/support/side-page.ts';
 
 const aRep = (n: number): Rep => ({
@@ -54,6 +55,7 @@ function readingApi(page: SidePage | Refuse, athlete: Partial<Athlete> = {}) {
   let links: Replay[] = [];
   return signedInApi()
     .on(routes.sideReading, () => shown)
+    .on(routes.sideReview, () => aSideReview())
     .on(routes.setAssumption, ({ body }) => {
       if (!(shown instanceof Refuse))
         shown = { ...shown, assumption: (body as { on: boolean }).on };

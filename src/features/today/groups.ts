@@ -2,6 +2,8 @@ import type { Role } from '#shared/contracts/accounts.ts';
 import type { Task, TaskGroup } from './task-of.ts';
 
 const NAMES: Record<TaskGroup, string> = {
+  sides: 'To review',
+  back: 'Sent back to you',
   review: 'Readings',
   call: 'To call by eye',
   mark: 'To mark',
@@ -15,9 +17,45 @@ const NAMES: Record<TaskGroup, string> = {
 
 /** A coach works from the clip to the reading; a supervisor starts with what others brought. */
 const ORDER: Record<Role, readonly TaskGroup[]> = {
-  coach: ['call', 'mark', 'again', 'answer', 'film', 'retry', 'review', 'prepare', 'lapse'],
-  supervisor: ['review', 'answer', 'again', 'call', 'mark', 'film', 'retry', 'prepare', 'lapse'],
-  owner: ['lapse', 'review', 'answer', 'again', 'call', 'mark', 'film', 'retry', 'prepare'],
+  coach: [
+    'back',
+    'call',
+    'mark',
+    'again',
+    'answer',
+    'film',
+    'retry',
+    'review',
+    'sides',
+    'prepare',
+    'lapse',
+  ],
+  supervisor: [
+    'sides',
+    'back',
+    'review',
+    'answer',
+    'again',
+    'call',
+    'mark',
+    'film',
+    'retry',
+    'prepare',
+    'lapse',
+  ],
+  owner: [
+    'lapse',
+    'sides',
+    'back',
+    'review',
+    'answer',
+    'again',
+    'call',
+    'mark',
+    'film',
+    'retry',
+    'prepare',
+  ],
 };
 
 export type Group = { group: TaskGroup; name: string; tasks: Task[] };

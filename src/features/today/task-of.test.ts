@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { Waiting } from '#shared/contracts/today.ts';
+import { aWaitingReview } from '#tests/support/review.ts';
 import { athleteId, clipId, otherId, visitId } from '#tests/support/records.ts';
 import { groupTasks, isWork } from './groups.ts';
 import { taskOf } from './task-of.ts';
@@ -28,7 +29,23 @@ const items: Waiting[] = [
   },
   { ...common, kind: 'call-missing', visitId, side: 'right' },
   { ...common, kind: 'rep-unmarked', clipId, repNumber: 2, side: 'left' },
-  { ...common, kind: 'reading-ready', visitId, side: 'left', label: 'Turns out early' },
+  {
+    ...common,
+    kind: 'reading-ready',
+    visitId,
+    side: 'left',
+    label: 'Turns out early',
+    signedOff: false,
+  },
+  aWaitingReview({ kind: 'to-review', ...common }),
+  {
+    ...common,
+    kind: 'sent-back',
+    visitId,
+    side: 'right',
+    reason: 'The lifted knee is marked too high.',
+    by: { id: otherId, name: 'Tobias Lindqvist' },
+  },
   {
     ...common,
     kind: 'comment-open',
@@ -68,6 +85,8 @@ describe('taskOf', () => {
       ['call-missing', `/visits/${visitId}/sides/right/call`],
       ['rep-unmarked', `/clips/${clipId}`],
       ['reading-ready', `/visits/${visitId}/sides/left`],
+      ['to-review', `/clips/${clipId}?frame=96&comment=${otherId}`],
+      ['sent-back', `/visits/${visitId}/sides/right#sign-off`],
       ['comment-open', `/clips/${clipId}?frame=4&comment=${otherId}`],
       ['second-marking-asked', `/second-markings/${otherId}`],
       ['consent-lapses', `/athletes/${athleteId}/consents/new`],
@@ -95,6 +114,27 @@ describe('taskOf', () => {
     );
   });
 
+  it('says what waits for a reviewer: figures, the eye, the moment that opens', () => {
+    expect(taskOf(aWaitingReview({ kind: 'to-review' }))).toMatchObject({
+      title: 'Ines Marlow, right support: “Turns out early”',
+      detail:
+        '+6.8° ±\u00a03.6, by eye: turned out early. Opens at frame 96, your open comment and 1 more is open.',
+    });
+    const seenOnly = aWaitingReview({
+      kind: 'to-review',
+      about: 'call',
+      again: true,
+      label: null,
+      opens: null,
+    });
+    expect(taskOf(seenOnly)).toMatchObject({
+      title: 'Ines Marlow, right support: turned out early, by eye',
+      detail:
+        'Handed in again by Maren Okafor after it was sent back. Seen, not measured. No clip of this side.',
+      action: { to: `/visits/${visitId}/sides/right#sign-off` },
+    });
+  });
+
   it('does not let a long comment fill the page', () => {
     const [comment] = items.filter((item) => item.kind === 'comment-open');
     if (comment === undefined) throw new Error('no comment among the items');
@@ -108,8 +148,8 @@ describe('groupTasks', () => {
   const order = (role: 'coach' | 'supervisor') =>
     groupTasks(items.map(taskOf), role).map(({ group }) => group);
   it('lets a coach start with the call, a supervisor with what others brought', () => {
-    expect(order('coach')[0]).toBe('call');
-    expect(order('supervisor').slice(0, 2)).toEqual(['review', 'answer']);
+    expect(order('coach').slice(0, 2)).toEqual(['back', 'call']);
+    expect(order('supervisor').slice(0, 2)).toEqual(['sides', 'back']);
   });
   it('keeps every task in some group for every role', () => {
     for (const role of ['coach', 'supervisor', 'owner'] as const)

@@ -2,10 +2,21 @@ import type { Waiting } from '#shared/contracts/today.ts';
 import { distance, moment } from '#src/ui/days.ts';
 import { inWords } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
+import { reviewDetail, reviewTitle } from '#src/ui/review-words.ts';
 import { supportWords } from '#src/ui/words.ts';
 
 export type TaskGroup =
-  'review' | 'call' | 'mark' | 'again' | 'answer' | 'film' | 'retry' | 'prepare' | 'lapse';
+  | 'review'
+  | 'back'
+  | 'sides'
+  | 'call'
+  | 'mark'
+  | 'again'
+  | 'answer'
+  | 'film'
+  | 'retry'
+  | 'prepare'
+  | 'lapse';
 
 /** One row of Today: what waits, when it came or ends, and the exact place that opens. */
 export type Task = {
@@ -84,9 +95,40 @@ export function taskOf(item: Waiting): Task {
         key: `review ${item.visitId} ${item.side}`,
         group: 'review',
         title: `${who}, ${sideOf(item.side)}`,
-        detail: `“${item.label}”`,
+        detail: `“${item.label}”${item.signedOff ? ', signed off: make the replay or the plan.' : ''}`,
         when: moment(item.at),
         action: { label: 'Open the reading', to: paths.reading(item.visitId, item.side) },
+      };
+    case 'to-review': {
+      const { visitId, side, opens } = item;
+      return {
+        key: `to-review ${visitId} ${side}`,
+        group: 'sides',
+        title: reviewTitle(item),
+        detail: reviewDetail(item),
+        when: `since ${moment(item.at)}`,
+        action: {
+          label: 'Review',
+          to: opens
+            ? paths.bench(opens.clipId, {
+                frame: opens.frame,
+                ...(opens.commentId === null ? {} : { comment: opens.commentId }),
+              })
+            : `${paths.reading(visitId, side)}#sign-off`,
+        },
+      };
+    }
+    case 'sent-back':
+      return {
+        key: `back ${item.visitId} ${item.side}`,
+        group: 'back',
+        title: `${who}, ${sideOf(item.side)}`,
+        detail: `${item.by.name}: “${opening(item.reason)}”`,
+        when: moment(item.at),
+        action: {
+          label: 'Mend it',
+          to: `${paths.reading(item.visitId, item.side)}#sign-off`,
+        },
       };
     case 'comment-open':
       return {

@@ -13,7 +13,15 @@ const full: Today = {
   visitsThisWeek: 1,
   steps: { contact: true, consent: true, clip: true, call: true, athleteId },
   items: [
-    { kind: 'reading-ready', visitId, side: 'left', label: 'Turns out early', athlete, at },
+    {
+      kind: 'reading-ready',
+      visitId,
+      side: 'left',
+      label: 'Turns out early',
+      signedOff: false,
+      athlete,
+      at,
+    },
     { kind: 'call-missing', visitId, side: 'right', athlete, at },
   ],
 };

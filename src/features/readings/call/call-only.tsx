@@ -16,6 +16,7 @@ import { ErrorState, Loading, Skeleton } from '#src/ui/states.tsx';
 import { SEEN_WORDS } from '#src/ui/words.ts';
 import { SeenTag } from '../head/seen-tag.tsx';
 import { ReplaySection } from '../link/replay-section.tsx';
+import { SignOffSection } from '../sign-off/sign-off-section.tsx';
 import { clipsOfSide } from '../side-clips.ts';
 import { callSentence } from '../words/call-sentence.ts';
 import { CONFIDENCE_WORDS, SEEN_SUBSTITUTIONS, SUBSTITUTION_WORDS } from '../words/seen-words.ts';
@@ -68,11 +69,8 @@ export function CallOnly({ page, call }: { page: SidePage; call: Call }) {
         <p className="pt-3">
           <b>No:</b> an angle, a probability, a comparison of sides, or a change at the retest.
         </p>
-        <p className="mt-6 border-l-[3px] border-ochre py-0.5 pl-3.5">
-          <b className="text-ochre">An aid to trained judgement, not a diagnosis.</b> Local codes
-          and licensed practice come first.
-        </p>
       </Section>
+      <SignOffSection page={page} />
       <ReplaySection page={page} />
     </>
   );

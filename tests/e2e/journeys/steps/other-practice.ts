@@ -63,6 +63,8 @@ const WITHOUT_ID: Record<RouteNameWithoutId, Kind> = {
   retention: 'bare',
   setRetention: 'bare',
   previewRetention: 'bare',
+  reviewQueue: 'lists',
+  eyeAgreement: 'lists',
   listReplays: 'asks',
   makeReplay: 'asks',
   openReplay: 'link',
