@@ -2,6 +2,7 @@ import { readdirSync } from 'node:fs';
 import tailwindcss from '@tailwindcss/vite';
 import react from '@vitejs/plugin-react';
 import { defineConfig, type Plugin } from 'vite';
+import { licenceFiles } from './docker-free-scripts/licences/licence-files.ts';
 
 /** In development the athlete's address opens its own small page, as the server does it when built. */
 const replayPage: Plugin = {
@@ -14,8 +15,27 @@ const replayPage: Plugin = {
   },
 };
 
+/** The packages' licences as files beside the pages; in development made anew for each start. */
+const licences: Plugin = {
+  name: 'licences',
+  generateBundle() {
+    for (const { name, text } of licenceFiles('.'))
+      this.emitFile({ type: 'asset', fileName: name, source: text });
+  },
+  configureServer(server) {
+    const files = new Map(licenceFiles('.').map(({ name, text }) => [`/${name}`, text]));
+    server.middlewares.use((request, response, next) => {
+      const text = files.get(request.url ?? '');
+      if (text === undefined) return next();
+      const type = request.url?.endsWith('.json') ? 'application/json' : 'text/plain';
+      response.setHeader('Content-Type', `${type}; charset=utf-8`);
+      response.end(text);
+    });
+  },
+};
+
 export default defineConfig({
-  plugins: [react(), tailwindcss(), replayPage],
+  plugins: [react(), tailwindcss(), replayPage, licences],
   build: {
     outDir: 'dist/web',
     emptyOutDir: true,

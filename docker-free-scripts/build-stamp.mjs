@@ -29,6 +29,7 @@ const SOURCES = [
   'package-lock.json',
   'tsconfig.json',
   'docker-free-scripts/build-server.mjs',
+  'docker-free-scripts/licences',
 ];
 const AT_THE_ROOT = /^(vite|tailwind|postcss|mikro-orm)\.config\.[a-z]+$|\.html$/;
 const TEST = /\.(test|spec)\.tsx?$/;

@@ -231,6 +231,14 @@ export const pages: RouteObject[] = [
                   import('#src/features/method/method-page.tsx').then((page) => page.MethodPage),
                 ),
               },
+              {
+                path: 'licences',
+                lazy: lazily(() =>
+                  import('#src/features/licences/licences-page.tsx').then(
+                    (page) => page.LicencesPage,
+                  ),
+                ),
+              },
               { path: '*', Component: NotFoundPage },
             ],
           },

@@ -48,6 +48,7 @@ export const paths = {
   reliability: () => '/practice/reliability',
   protocol: () => '/practice/protocol',
   setUps: () => '/practice/set-ups',
+  licences: () => '/licences',
   /** How numbers are made, at a measure or a section where it is given. */
   method: (at?: string) => (at === undefined ? '/method' : `/method#${at}`),
 } as const;

@@ -172,6 +172,10 @@ export function MethodPage() {
           rowKey={({ meaning }) => meaning}
         />
       </Section>
+      <p className="pt-6 text-note text-soft">
+        <Link to={paths.licences()}>Licences</Link> of the programs and letters that Redshank stands
+        on.
+      </p>
     </Page>
   );
 }

@@ -74,6 +74,12 @@ const FRONT: readonly PageOfProduct[] = [
     stands: heading(/./),
   },
   {
+    name: 'the licences',
+    who: COACH,
+    address: () => paths.licences(),
+    stands: heading('Licences'),
+  },
+  {
     name: 'the practice, to read',
     who: COACH,
     address: () => paths.practice(),
