@@ -19,6 +19,7 @@ it('lists the packages in the browser and on the server, each with its licence a
       packages: [
         aPackage({}),
         aPackage({ name: 'whimbrel', version: null, licence: 'ISC', browser: false, text: null }),
+        aPackage({ name: 'curlew', version: null, browser: false, text: null }),
       ],
     }));
     return renderAt('/method');
@@ -31,7 +32,7 @@ it('lists the packages in the browser and on the server, each with its licence a
     'href',
     '/licence-texts/0123456789ab.txt',
   );
-  await user.click(screen.getByText('1 packages'));
+  await user.click(screen.getByText('2 packages'));
   const kept = screen.getByRole('table', { name: 'Packages on the server' });
   expect(within(kept).getByRole('row', { name: /whimbrel/ })).toHaveTextContent('ISC');
   expect(within(kept).queryByRole('link')).toBeNull();
