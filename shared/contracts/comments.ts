@@ -1,6 +1,9 @@
 import * as z from 'zod';
-import { coordinate, frameIndex, id, moment, personRef, text } from './primitives.ts';
+import { coordinate, frameIndex, framePoint, id, moment, personRef, text } from './primitives.ts';
 import { json, none, route } from './route.ts';
+
+/** Corners that a stroke may have. */
+export const LONGEST_STROKE = 200;
 
 /** What a comment points at, in pixels of the upright source frame. */
 export const shape = z
@@ -11,6 +14,11 @@ export const shape = z
       u: coordinate,
       v: coordinate,
       radius: z.number().min(2).max(5000),
+    }),
+    /** Drawn by hand, corner to corner. */
+    z.object({
+      kind: z.literal('stroke'),
+      points: z.array(framePoint).min(2).max(LONGEST_STROKE),
     }),
   ])
   .meta({ id: 'Shape' });
@@ -74,7 +82,8 @@ export const commentRoutes = {
   addComment: route({
     method: 'post',
     path: '/api/clips/:id/comments',
-    summary: 'Comment at a frame or a span, with a point or a ring on the picture, or answer.',
+    summary:
+      'Comment at a frame or a span, with a point, a ring or a stroke on the picture, or answer.',
     audience: 'staff',
     params,
     body: commentBody,

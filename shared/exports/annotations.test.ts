@@ -105,6 +105,16 @@ describe('reps, marks and comments as web annotations', () => {
     expect(quads).toContain('circle cx=\\"320\\" cy=\\"240\\" r=\\"120\\"');
   });
 
+  it('points at a stroke by the pixels that hold it and by the line itself', async () => {
+    const points = [
+      { u: 10.5, v: 20 },
+      { u: 40, v: 60.25 },
+    ];
+    const quads = await expanded([{ ...comment, shape: { kind: 'stroke', points } }]);
+    expect(quads).toContain('"t=3,7&xywh=10,20,30,41"');
+    expect(quads).toContain('points=\\"10.5,20 40,60.25\\"');
+  });
+
   it('leaves out when a comment was changed where it never was', async () => {
     expect(await expanded([comment])).toContain('2026-07-18T09:31:00.000Z');
     expect(await expanded([{ ...comment, editedAt: null }])).not.toContain(`${DCTERMS}modified`);

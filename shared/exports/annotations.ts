@@ -1,6 +1,12 @@
 import type { Shape } from '#shared/contracts/comments.ts';
 import { framePoint } from '#shared/geometry/points.ts';
-import { type ClipSpan, regionFragment, timeFragment } from './media-fragment.ts';
+import {
+  boxFragment,
+  type Corner,
+  type ClipSpan,
+  regionFragment,
+  timeFragment,
+} from './media-fragment.ts';
 
 export interface AnnotatedPerson {
   /** IRI. */
@@ -55,29 +61,43 @@ export const urn = (id: string): string => `urn:uuid:${id}`;
 /** A mark is a point; a region must have a size. */
 const POINT_RADIUS = 1;
 
-const circle = (u: number, v: number, radius: number): Json => ({
+const svg = (inside: string): Json => ({
   type: 'SvgSelector',
   conformsTo: SVG,
-  value: `<svg xmlns="http://www.w3.org/2000/svg"><circle cx="${u}" cy="${v}" r="${radius}"/></svg>`,
+  value: `<svg xmlns="http://www.w3.org/2000/svg">${inside}</svg>`,
 });
 
-/** Whole pixels for every reader, and the circle itself, to a fraction of a pixel, for those who can. */
-const selector = (span: ClipSpan, at: { u: number; v: number; radius: number } | null): Json => {
+const circle = (u: number, v: number, radius: number): Json =>
+  svg(`<circle cx="${u}" cy="${v}" r="${radius}"/>`);
+
+const polyline = (points: readonly Corner[]): Json =>
+  svg(`<polyline fill="none" points="${points.map(({ u, v }) => `${u},${v}`).join(' ')}"/>`);
+
+interface Region {
+  readonly pixels: string;
+  readonly drawn: Json;
+}
+
+/** Whole pixels for every reader, and what was drawn, to a fraction of a pixel, for those who can. */
+const selector = (span: ClipSpan, at: Region | null): Json => {
   const time = timeFragment(span);
   const fragment = { type: 'FragmentSelector', conformsTo: MEDIA_FRAGMENTS };
   if (!at) return { ...fragment, value: time };
-  return {
-    ...fragment,
-    value: `${time}&${regionFragment(framePoint(at.u, at.v), at.radius)}`,
-    refinedBy: circle(at.u, at.v, at.radius),
-  };
+  return { ...fragment, value: `${time}&${at.pixels}`, refinedBy: at.drawn };
 };
 
-const circleOf = (item: Annotated): { u: number; v: number; radius: number } | null => {
-  if (item.kind === 'mark') return { u: item.u, v: item.v, radius: POINT_RADIUS };
+const round = (u: number, v: number, radius: number): Region => ({
+  pixels: regionFragment(framePoint(u, v), radius),
+  drawn: circle(u, v, radius),
+});
+
+const regionOf = (item: Annotated): Region | null => {
+  if (item.kind === 'mark') return round(item.u, item.v, POINT_RADIUS);
   if (item.kind === 'rep' || !item.shape) return null;
-  const { u, v } = item.shape;
-  return { u, v, radius: item.shape.kind === 'ring' ? item.shape.radius : POINT_RADIUS };
+  const { shape } = item;
+  if (shape.kind === 'stroke')
+    return { pixels: boxFragment(shape.points), drawn: polyline(shape.points) };
+  return round(shape.u, shape.v, shape.kind === 'ring' ? shape.radius : POINT_RADIUS);
 };
 
 const textBody = (value: string, purpose: string): Json => ({
@@ -103,7 +123,7 @@ const about = (item: Annotated): Json => {
 };
 
 const annotation = (item: Annotated): Json => {
-  const place = { source: item.source, selector: selector(item.span, circleOf(item)) };
+  const place = { source: item.source, selector: selector(item.span, regionOf(item)) };
   const answered = item.kind === 'comment' ? item.answerTo : null;
   return {
     id: item.id,

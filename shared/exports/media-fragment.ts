@@ -29,14 +29,33 @@ const seconds = (time: Milliseconds): string => String(Number(toSeconds(time).to
 export const timeFragment = ({ from, to }: ClipSpan): string =>
   to === null ? `t=${seconds(from)}` : `t=${seconds(from)},${seconds(to)}`;
 
+/** A corner of something drawn, pixels of the source. */
+export interface Corner {
+  readonly u: number;
+  readonly v: number;
+}
+
+const pixels = (from: Corner, to: Corner): string => {
+  const left = Math.max(0, Math.floor(from.u));
+  const top = Math.max(0, Math.floor(from.v));
+  const width = Math.max(1, Math.ceil(to.u) - left);
+  const height = Math.max(1, Math.ceil(to.v) - top);
+  return `xywh=${left},${top},${width},${height}`;
+};
+
+/** The whole pixels that hold all these corners. */
+export const boxFragment = (points: readonly Corner[]): string => {
+  const us = points.map(({ u }) => u);
+  const vs = points.map(({ v }) => v);
+  return pixels(
+    { u: Math.min(...us), v: Math.min(...vs) },
+    { u: Math.max(...us), v: Math.max(...vs) },
+  );
+};
+
 /**
  * `xywh=160,120,320,240`: the whole pixels that hold a circle, 4.2.2. Pixels left of or above the
  * picture do not exist.
  */
-export const regionFragment = (centre: FramePoint, radius: number): string => {
-  const left = Math.max(0, Math.floor(centre.u - radius));
-  const top = Math.max(0, Math.floor(centre.v - radius));
-  const width = Math.max(1, Math.ceil(centre.u + radius) - left);
-  const height = Math.max(1, Math.ceil(centre.v + radius) - top);
-  return `xywh=${left},${top},${width},${height}`;
-};
+export const regionFragment = ({ u, v }: FramePoint, radius: number): string =>
+  pixels({ u: u - radius, v: v - radius }, { u: u + radius, v: v + radius });

@@ -11,7 +11,7 @@ it('draws what a comment points at, a ring with its own radius', () => {
     role: 'note',
     state: 'placed',
   });
-  expect(noteShape({ kind: 'point', u: 3, v: 4 }).radius).toBeNull();
+  expect(noteShape({ kind: 'point', u: 3, v: 4 })).toMatchObject({ kind: 'ring', radius: null });
 });
 
 it('draws a rod as a line with its two ends', () => {
@@ -20,4 +20,18 @@ it('draws a rod as a line with its two ends', () => {
     'ring',
     'ring',
   ]);
+});
+
+it('draws a stroke corner to corner', () => {
+  const points = [
+    { u: 1, v: 2 },
+    { u: 5, v: 2 },
+    { u: 5, v: 9 },
+  ];
+  expect(noteShape({ kind: 'stroke', points })).toEqual({
+    kind: 'stroke',
+    points,
+    role: 'note',
+    state: 'placed',
+  });
 });

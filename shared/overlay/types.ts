@@ -46,6 +46,12 @@ export interface Ring extends Drawn {
   readonly landmark: LandmarkId | null;
 }
 
+/** A line drawn by hand, corner to corner; two corners or more. */
+export interface Stroke extends Drawn {
+  readonly kind: 'stroke';
+  readonly points: readonly FramePoint[];
+}
+
 /** Lifted side: a diamond. */
 export interface Diamond extends Drawn {
   readonly kind: 'diamond';
@@ -69,6 +75,6 @@ export interface Label extends Drawn {
   readonly towards: 'left' | 'right' | 'centre';
 }
 
-export type Primitive = Line | Arc | Ring | Diamond | Bracket | Label;
+export type Primitive = Line | Arc | Stroke | Ring | Diamond | Bracket | Label;
 /** Shapes that stand for one landmark. */
 export type MarkShape = Ring | Diamond | Bracket;

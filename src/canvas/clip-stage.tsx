@@ -36,6 +36,8 @@ export interface ClipStageProps {
   asked: Asked<FramePoint> | null;
   movable: boolean;
   onPlace: (point: FramePoint) => void;
+  /** Every place that a held pointer passes. */
+  onPass?: (point: FramePoint) => void;
   onMove: (landmark: LandmarkId, point: FramePoint) => void;
   onSelect: (landmark: LandmarkId) => void;
   /** A press anywhere on the stage, so that the page can take the focus there. */
@@ -70,6 +72,7 @@ export function ClipStage({ children, className, shownRef, ...props }: ClipStage
     pressedRef,
     onViewport,
     onPlace,
+    onPass: props.onPass,
     onPress,
   });
   const width = size?.width ?? null;

@@ -121,6 +121,22 @@ describe('paintOverlay', () => {
     expect(paint([{ ...drawn, radius: null }], 2).find(([name]) => name === 'arc')?.[3]).toBe(6.25);
   });
 
+  it('draws a stroke as one line through all its corners, so that its halo has no seams', () => {
+    const drawn: Primitive = {
+      kind: 'stroke',
+      points: [framePoint(0, 0), framePoint(10, 0), framePoint(10, 20)],
+      role: 'note',
+      state: 'placed',
+    };
+    const log = paint([drawn], 2);
+    expect(log.filter(([name]) => name === 'lineTo')).toEqual([
+      ['lineTo', 20, 0],
+      ['lineTo', 20, 40],
+    ]);
+    // the halo, then the line
+    expect(log.filter(([name]) => name === 'stroke')).toHaveLength(2);
+  });
+
   it('keeps words inside the picture', () => {
     const label: Primitive = {
       kind: 'label',

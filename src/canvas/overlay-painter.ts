@@ -6,7 +6,7 @@ import {
   OVERLAY_HALO,
   OVERLAY_SIZES,
 } from '#shared/overlay/style.ts';
-import type { Arc, Label, Line, Primitive, Ring } from '#shared/overlay/types.ts';
+import type { Arc, Label, Line, Primitive, Ring, Stroke } from '#shared/overlay/types.ts';
 import { paintMark, type PaintContext, strokeWithHalo } from './paint-marks.ts';
 import { type Size, toStage, type Viewport } from './viewport.ts';
 
@@ -18,10 +18,10 @@ export interface PaintOptions {
   readonly unit?: number;
 }
 
-const dashOf = (drawn: Line | Arc | Ring, unit: number): number[] =>
+const dashOf = (drawn: Line | Arc | Ring | Stroke, unit: number): number[] =>
   drawn.state === 'tracked' ? OVERLAY_DASHES.tracked.map((length) => length * unit) : [];
 
-const stroke = (context: PaintContext, drawn: Line | Arc | Ring, unit: number): void => {
+const stroke = (context: PaintContext, drawn: Line | Arc | Ring | Stroke, unit: number): void => {
   context.setLineDash(dashOf(drawn, unit));
   context.lineCap = 'round';
   strokeWithHalo(
@@ -93,6 +93,14 @@ export const paintOverlay = (
         stroke(context, drawn, unit);
         break;
       }
+      case 'stroke':
+        context.beginPath();
+        drawn.points.map(place).forEach(({ x, y }, n) => {
+          if (n === 0) context.moveTo(x, y);
+          else context.lineTo(x, y);
+        });
+        stroke(context, drawn, unit);
+        break;
       case 'arc':
         paintArc(context, drawn, place(drawn.centre), drawn.radius * viewport.scale);
         stroke(context, drawn, unit);

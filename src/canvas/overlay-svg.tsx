@@ -72,6 +72,15 @@ export function OverlaySvg({
             const { from, to } = drawn;
             return <path key={n} d={`M${from.u} ${from.v}L${to.u} ${to.v}`} {...common} />;
           }
+          case 'stroke':
+            return (
+              <path
+                key={n}
+                d={`M${drawn.points.map(({ u, v }) => `${u} ${v}`).join('L')}`}
+                strokeLinejoin="round"
+                {...common}
+              />
+            );
           case 'arc':
             return <path key={n} d={arcPath(drawn)} {...common} />;
           case 'label':

@@ -21,6 +21,8 @@ export interface GestureOptions {
   pressedRef: RefObject<boolean>;
   onViewport: (viewport: Viewport) => void;
   onPlace: (point: FramePoint) => void;
+  /** Every place that a held pointer passes; for what is drawn by hand. */
+  onPass?: (point: FramePoint) => void;
   onPress: () => void;
 }
 
@@ -52,6 +54,7 @@ export function useGestures(options: GestureOptions) {
     switch (each.do) {
       case 'aim':
         hand.set({ aim: toFrame(view.current, each.at), holding: true });
+        latest.current.onPass?.(toFrame(view.current, each.at));
         break;
       case 'stop-aiming':
         hand.set({ holding: false });

@@ -77,6 +77,24 @@ describe('comments', () => {
     }
   });
 
+  it('point at what was drawn by hand, corner by corner', async () => {
+    const points = [
+      { u: 10, v: 20.5 },
+      { u: 400, v: 900 },
+      { u: 410.25, v: 1200 },
+    ];
+    await say(supervisor, { body: 'This line.', shape: { kind: 'stroke', points } });
+    const { body } = await coach.get(`/api/clips/${clip.id}/comments`).expect(200);
+    expect(body.items).toMatchObject([{ shape: { kind: 'stroke', points } }]);
+    const short = { kind: 'stroke', points: points.slice(0, 1) };
+    const long = { kind: 'stroke', points: Array.from({ length: 201 }, () => points[0]) };
+    for (const shape of [short, long])
+      await coach
+        .post(`/api/clips/${clip.id}/comments`)
+        .send({ body: 'x', fromFrame: 0, toFrame: 0, shape })
+        .expect(422);
+  });
+
   it('lie inside the clip', async () => {
     const answer = await coach
       .post(`/api/clips/${clip.id}/comments`)

@@ -29,7 +29,6 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   const { current } = useBenchModel();
   const frame = useBench((state) => state.frame);
   const viewport = useBench((state) => state.viewport);
-  const tool = useBench((state) => state.tool);
   const hidesHead = useBench((state) => state.desk === 'head');
   const marking = useMarking();
   const follow = useFollow();
@@ -61,13 +60,20 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   }, [narrow, expected, frame, width, hidesHead]);
 
   const placeAt = (point: FramePoint) => {
-    if (tool.kind === 'line' || tool.kind === 'shape')
-      store.setState({ tool: withPoint(tool, point) });
+    // as it stands now: a stroke has grown since this was painted
+    const { tool: now } = store.getState();
+    if (now.kind === 'line' || now.kind === 'shape')
+      store.setState({ tool: withPoint(now, point) });
     else if (target?.landmark) {
       marking.place(target.landmark, point);
       follow.placed(target.landmark, point, false);
     }
   };
+  /** A stroke follows a held pointer; several moves can come before the page shows the first. */
+  const pass = (point: FramePoint) =>
+    store.setState(({ tool: now }) =>
+      now.kind === 'shape' && now.of === 'stroke' ? { tool: withPoint(now, point) } : {},
+    );
   /** Without a pointer: the keyboard's cross, else the expected place, else the middle of what is shown. */
   const enter = () => {
     const { aim, cross } = hand.get();
@@ -118,6 +124,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
       asked={target}
       movable={document.may.mark}
       onPlace={placeAt}
+      onPass={pass}
       onMove={moveTo}
       onSelect={select}
       shownRef={shown}

@@ -1,4 +1,5 @@
 import { useId, useState } from 'react';
+import type { Shape } from '#shared/contracts/comments.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Checkbox } from '#src/ui/checkbox.tsx';
 import { FIELD_BOX } from '#src/ui/form/field-frame.tsx';
@@ -6,6 +7,12 @@ import { ErrorState } from '#src/ui/states.tsx';
 import { useBench, useBenchTools } from '../bench-context.ts';
 import { MARK, shapeOf, toolAsks } from '../store/tools.ts';
 import { useComments } from './use-comments.ts';
+
+const SHAPES: readonly { of: Shape['kind']; label: string }[] = [
+  { of: 'point', label: 'Point' },
+  { of: 'ring', label: 'Ring' },
+  { of: 'stroke', label: 'Stroke' },
+];
 
 /** A comment at the frame on show, or from a frame on to the one on show, with a shape if wished. */
 export function CommentForm() {
@@ -24,7 +31,7 @@ export function CommentForm() {
   const [fromFrame, toFrame] =
     from === null ? [frame, frame] : from <= frame ? [from, frame] : [frame, from];
 
-  const draw = (of: 'point' | 'ring') =>
+  const draw = (of: Shape['kind']) =>
     store.setState({
       tool: drawing?.of === of ? MARK : { kind: 'shape', of, points: [] },
     });
@@ -71,24 +78,24 @@ export function CommentForm() {
         >
           {from === null ? 'A stretch from here' : `From ${from}: step to its end`}
         </Button>
-        <Button
-          className="!px-3 text-note"
-          aria-pressed={drawing?.of === 'point'}
-          onClick={() => draw('point')}
-        >
-          Point
-        </Button>
-        <Button
-          className="!px-3 text-note"
-          aria-pressed={drawing?.of === 'ring'}
-          onClick={() => draw('ring')}
-        >
-          Ring
-        </Button>
+        {SHAPES.map(({ of, label }) => (
+          <Button
+            key={of}
+            className="!px-3 text-note"
+            aria-pressed={drawing?.of === of}
+            onClick={() => draw(of)}
+          >
+            {label}
+          </Button>
+        ))}
       </div>
       {drawing && (
         <p role="status" className="mt-2 text-note">
-          {asks === null ? 'Drawn on the picture.' : `Press on the picture: ${asks.toLowerCase()}.`}
+          {asks === null
+            ? 'Drawn on the picture.'
+            : drawing.of === 'stroke'
+              ? `${asks} on the picture.`
+              : `Press on the picture: ${asks.toLowerCase()}.`}
         </p>
       )}
       <Checkbox

@@ -1,14 +1,14 @@
-import { useId, useState } from 'react';
+import { useState } from 'react';
 import type { Comment } from '#shared/contracts/comments.ts';
 import { frameIndex } from '#shared/timing/units.ts';
 import { Button } from '#src/ui/button.tsx';
 import { moment } from '#src/ui/days.ts';
-import { FIELD_BOX } from '#src/ui/form/field-frame.tsx';
 import { StateDot } from '#src/ui/state-dot.tsx';
 import { useStatus } from '#src/ui/status.tsx';
 import { useBench, useBenchDocument, useBenchTools } from '../bench-context.ts';
 import { goTo } from '../store/bench-store.ts';
 import { useComments } from './use-comments.ts';
+import { WordsForm } from './words-form.tsx';
 
 const where = ({ fromFrame, toFrame }: Comment) =>
   fromFrame === toFrame ? `frame ${fromFrame}` : `frames ${fromFrame} to ${toFrame}`;
@@ -17,7 +17,7 @@ const where = ({ fromFrame, toFrame }: Comment) =>
 export function CommentThread({ head, answers }: { head: Comment; answers: readonly Comment[] }) {
   const { store } = useBenchTools();
   const { may } = useBenchDocument();
-  const { edit, remove } = useComments();
+  const { add, edit, remove } = useComments();
   const say = useStatus();
   const frame = useBench((state) => state.frame);
   const [answering, setAnswering] = useState(false);
@@ -43,12 +43,12 @@ export function CommentThread({ head, answers }: { head: Comment; answers: reado
           <StateDot kind="wait">open</StateDot>
         )}
       </div>
-      <Words comment={head} />
+      <OwnWords comment={head} mayComment={may.comment} />
       {answers.length > 0 && (
         <ul className="ml-4 border-l border-rule pl-4">
           {answers.map((answer) => (
             <li key={answer.id} className="pt-2">
-              <Words comment={answer} />
+              <OwnWords comment={answer} mayComment={may.comment} />
             </li>
           ))}
         </ul>
@@ -78,7 +78,17 @@ export function CommentThread({ head, answers }: { head: Comment; answers: reado
           )}
         </div>
       )}
-      {answering && <AnswerForm head={head} onDone={() => setAnswering(false)} />}
+      {answering && (
+        <WordsForm
+          label="Answer"
+          act="Send"
+          onSend={(body) => {
+            const { fromFrame, toFrame, id } = head;
+            return add({ body, fromFrame, toFrame, answerTo: id });
+          }}
+          onDone={() => setAnswering(false)}
+        />
+      )}
     </li>
   );
 }
@@ -97,44 +107,28 @@ function Words({ comment }: { comment: Comment }) {
   );
 }
 
-function AnswerForm({ head, onDone }: { head: Comment; onDone: () => void }) {
-  const { add } = useComments();
-  const say = useStatus();
-  const [body, setBody] = useState('');
-  const [busy, setBusy] = useState(false);
-  const id = useId();
-  const send = async () => {
-    setBusy(true);
-    try {
-      const { fromFrame, toFrame } = head;
-      await add({ body, fromFrame, toFrame, answerTo: head.id });
-      onDone();
-    } catch (error) {
-      say(error instanceof Error ? error.message : 'The answer was not sent.');
-      setBusy(false);
-    }
-  };
-  return (
-    <div className="mt-1">
-      <label htmlFor={id} className="font-bold">
-        Answer
-      </label>
-      <textarea
-        id={id}
-        rows={2}
-        maxLength={2000}
-        className={FIELD_BOX}
-        value={body}
-        onChange={(event) => setBody(event.target.value)}
+/** One's own words can be changed; that they were is shown. */
+function OwnWords({ comment, mayComment }: { comment: Comment; mayComment: boolean }) {
+  const { edit } = useComments();
+  const [changing, setChanging] = useState(false);
+  if (changing)
+    return (
+      <WordsForm
+        label="Your comment"
+        start={comment.body}
+        act="Save"
+        onSend={(body) => edit(comment.id, { body })}
+        onDone={() => setChanging(false)}
       />
-      <div className="mt-2 flex gap-3">
-        <Button busy={busy} disabled={body.trim() === ''} onClick={() => void send()}>
-          Send
+    );
+  return (
+    <>
+      <Words comment={comment} />
+      {comment.mine && mayComment && (
+        <Button look="plain" onClick={() => setChanging(true)}>
+          Change the words
         </Button>
-        <Button look="plain" onClick={onDone}>
-          Not now
-        </Button>
-      </div>
-    </div>
+      )}
+    </>
   );
 }

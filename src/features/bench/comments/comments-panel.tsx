@@ -24,8 +24,8 @@ export function CommentsPanel() {
       {may.comment && <CommentForm />}
       {threads.length === 0 ? (
         <p className="border-t border-rule py-4 text-soft">
-          No comments yet. One stands at a frame or a stretch of frames, with a point or a ring on
-          the picture if you wish.
+          No comments yet. One stands at a frame or a stretch of frames, with a point, a ring or a
+          stroke on the picture if you wish.
         </p>
       ) : (
         <ul>

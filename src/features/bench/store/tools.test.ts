@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { framePoint } from '#shared/geometry/points.ts';
+import { framePoint, type FramePoint } from '#shared/geometry/points.ts';
 import { draftShape, shapeOf, toolAsks, withPoint } from './tools.ts';
 
 describe('a line on the picture', () => {
@@ -27,6 +27,26 @@ describe('what a comment points at', () => {
   it('a point is whole at once', () => {
     const tool = { kind: 'shape' as const, of: 'point' as const, points: [framePoint(3, 4)] };
     expect(shapeOf(tool)).toEqual({ kind: 'point', u: 3, v: 4 });
+  });
+
+  it('a stroke takes corner after corner, none twice and no more than it may have', () => {
+    const start = { kind: 'shape' as const, of: 'stroke' as const, points: [] as FramePoint[] };
+    expect(toolAsks(start)).toBe('Draw, or press from corner to corner');
+    const one = withPoint(start, framePoint(0, 0));
+    expect(shapeOf(one)).toBeNull();
+    expect(withPoint(one, framePoint(1, 1)).points).toHaveLength(1);
+    const two = withPoint(one, framePoint(30, 40));
+    expect(toolAsks(two)).toBeNull();
+    expect(shapeOf(two)).toEqual({
+      kind: 'stroke',
+      points: [
+        { u: 0, v: 0 },
+        { u: 30, v: 40 },
+      ],
+    });
+    let long = two;
+    for (let n = 1; n < 300; n += 1) long = withPoint(long, framePoint(30 + n * 9, 40));
+    expect(long.points).toHaveLength(200);
   });
 
   it('a ring needs its edge, and is never too small to see', () => {

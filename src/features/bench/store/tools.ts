@@ -1,7 +1,10 @@
 import { distance, type FramePoint } from '#shared/geometry/points.ts';
 import type { Scale } from '#shared/contracts/clips.ts';
-import type { Shape } from '#shared/contracts/comments.ts';
+import { LONGEST_STROKE, type Shape } from '#shared/contracts/comments.ts';
 import type { NoteShape } from '#shared/overlay/notes.ts';
+
+/** Corners of a stroke are never closer than this, source px. */
+const LEAST_STEP = 5;
 
 /** What a press on the picture does. */
 export type Tool =
@@ -11,10 +14,10 @@ export type Tool =
   | { readonly kind: 'look' }
   /** Two points: on a thing of known length, a plumb line, the floor line, or a smeared dot. */
   | { readonly kind: 'line'; readonly of: LineOf; readonly points: readonly FramePoint[] }
-  /** What a comment points at: a point, or a ring by its middle and its edge. */
+  /** What a comment points at: a point, a ring by its middle and its edge, or a stroke corner by corner. */
   | {
       readonly kind: 'shape';
-      readonly of: 'point' | 'ring';
+      readonly of: Shape['kind'];
       readonly points: readonly FramePoint[];
     };
 export type LineOf = Extract<Scale['from'], 'rod' | 'body-height'> | 'plumb' | 'floor' | 'smear';
@@ -35,6 +38,8 @@ const LINE_ASKS: Record<LineOf, readonly [string, string]> = {
 export const toolAsks = (tool: Tool): string | null => {
   if (tool.kind === 'line') return LINE_ASKS[tool.of][tool.points.length] ?? null;
   if (tool.kind === 'shape') {
+    if (tool.of === 'stroke')
+      return tool.points.length < 2 ? 'Draw, or press from corner to corner' : null;
     if (tool.of === 'point') return tool.points.length === 0 ? 'What you mean' : null;
     if (tool.points.length >= 2) return null;
     return tool.points.length === 0 ? 'The middle of the ring' : 'The edge of the ring';
@@ -42,11 +47,20 @@ export const toolAsks = (tool: Tool): string | null => {
   return null;
 };
 
+/** A stroke takes every corner until it is as long as one may be. */
+const withCorner = (points: readonly FramePoint[], point: FramePoint): readonly FramePoint[] => {
+  const last = points.at(-1);
+  const same = last !== undefined && distance(last, point) < LEAST_STEP;
+  return same || points.length >= LONGEST_STROKE ? points : [...points, point];
+};
+
 /** The tool with one more point; a full one begins anew. */
 export const withPoint = <T extends Extract<Tool, { points: readonly FramePoint[] }>>(
   tool: T,
   point: FramePoint,
 ): T => {
+  if (tool.kind === 'shape' && tool.of === 'stroke')
+    return { ...tool, points: withCorner(tool.points, point) };
   const full = toolAsks(tool) === null;
   return { ...tool, points: full ? [point] : [...tool.points, point] };
 };
@@ -59,6 +73,10 @@ export const shapeOf = (tool: Tool): Shape | null => {
   if (tool.kind !== 'shape') return null;
   const [middle, edge] = tool.points;
   if (!middle) return null;
+  if (tool.of === 'stroke')
+    return tool.points.length < 2
+      ? null
+      : { kind: 'stroke', points: tool.points.map(({ u, v }) => ({ u, v })) };
   if (tool.of === 'point') return { kind: 'point', u: middle.u, v: middle.v };
   if (!edge) return null;
   const radius = Math.min(5000, Math.max(LEAST_RADIUS, distance(middle, edge)));
