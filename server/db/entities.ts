@@ -14,6 +14,10 @@ import { MailLink } from '../features/mail-links/mail-link.entity.ts';
 import { MarkCommand } from '../features/marks/mark-command.entity.ts';
 import { Mark } from '../features/marks/mark.entity.ts';
 import { AuditEntry } from '../features/audit/audit-entry.entity.ts';
+import { GivenPlan } from '../features/plans/given-plan.entity.ts';
+import { PlanPain, PlanTick } from '../features/plans/plan-answers.entity.ts';
+import { PlanItem } from '../features/plans/plan-item.entity.ts';
+import { Plan } from '../features/plans/plan.entity.ts';
 import { Practice } from '../features/practice/practice.entity.ts';
 import { ProtocolVersion } from '../features/protocol/protocol-version.entity.ts';
 import { Reading } from '../features/readings/reading.entity.ts';
@@ -58,6 +62,11 @@ export const entities = [
   SideSetting,
   Review,
   SideReview,
+  Plan,
+  PlanItem,
+  GivenPlan,
+  PlanTick,
+  PlanPain,
   Comment,
   Head,
   Replay,

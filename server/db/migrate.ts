@@ -18,6 +18,7 @@ import { Migration20261202035900_people } from '../../migrations/Migration202612
 import { Migration20261202041200_consent_life } from '../../migrations/Migration20261202041200_consent_life.ts';
 import { Migration20261202043400_erasures } from '../../migrations/Migration20261202043400_erasures.ts';
 import { Migration20261202071000_reviews } from '../../migrations/Migration20261202071000_reviews.ts';
+import { Migration20261202071700_plans } from '../../migrations/Migration20261202071700_plans.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -87,6 +88,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202071000_reviews',
     class: Migration20261202071000_reviews,
+  },
+  {
+    name: 'Migration20261202071700_plans',
+    class: Migration20261202071700_plans,
   },
 ];
 

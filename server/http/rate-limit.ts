@@ -49,6 +49,12 @@ export const passPhraseLimits = (): RequestHandler[] => [
   limit(8, 15, (req) => `${digest(String(req.params.token))} ${addressOf(req)}`),
 ];
 
+/** What a link adds: 60 answers in a quarter of an hour per link, 120 from one place. */
+export const linkAnswerLimits = (): RequestHandler[] => [
+  limit(120, 15, addressOf, false),
+  limit(60, 15, (req) => digest(String(req.params.token)), false),
+];
+
 /** Letters: 5 in an hour to one address, known or not, and 30 asked for from one place. */
 export const letterLimits = (): RequestHandler[] => [
   limit(30, 60, addressOf, false),

@@ -14,6 +14,7 @@ import { headsFeature } from '../features/heads/heads.routes.ts';
 import { mailLinksFeature } from '../features/mail-links/mail-links.routes.ts';
 import { oneTimeCodesFeature } from '../features/one-time-codes/one-time-codes.routes.ts';
 import { peopleFeature } from '../features/people/people.routes.ts';
+import { plansFeature } from '../features/plans/plans.routes.ts';
 import { practiceFeature } from '../features/practice/practice.routes.ts';
 import { protocolFeature } from '../features/protocol/protocol.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
@@ -51,6 +52,7 @@ export const features: readonly Feature[] = [
   reviewsFeature,
   secondMarkingsFeature,
   headsFeature,
+  plansFeature,
   replaysFeature,
   commentsFeature,
   exportsFeature,

@@ -49,6 +49,7 @@ export const ACTIONS = {
   'comment.add': 'caseload',
   'head.save': 'caseload',
   'head.look': 'caseload',
+  'plan.edit': 'caseload',
   'replay.make': 'caseload',
   'replay.revoke': 'caseload',
   'comment.read': 'comment',
@@ -56,6 +57,7 @@ export const ACTIONS = {
   'comment.edit': 'comment',
   'comment.delete': 'comment',
   'replay.open': 'replay',
+  'replay.answer': 'replay',
 } as const satisfies Record<string, Resource['kind']>;
 
 export type Action = keyof typeof ACTIONS;

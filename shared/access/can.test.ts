@@ -81,6 +81,7 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'comment.add': SEES,
   'head.save': WORKS,
   'head.look': WORKS,
+  'plan.edit': WORKS,
   'replay.make': WORKS,
   'replay.revoke': WORKS,
   'comment.read': SEES,
@@ -88,6 +89,7 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'comment.edit': ['herSupervisor'],
   'comment.delete': ['herSupervisor'],
   'replay.open': ['link'],
+  'replay.answer': ['link'],
 };
 
 const cases = (Object.keys(ACTIONS) as Action[]).flatMap((action) =>

@@ -94,6 +94,16 @@ export const PROBLEMS = {
     'This person may not mark this athlete. Ask their coach, or a supervisor assigned to that coach.',
   ],
   'not-asked-here': [422, 'This landmark is not asked for on this frame.'],
+  // plans
+  'reading-not-final': [
+    409,
+    'This reading still rests on marks that nobody has looked at, or is being made anew. Finish it first.',
+  ],
+  'plan-there-already': [409, 'This side of the visit has a plan already. Open it and change it.'],
+  'retest-first': [409, 'What was found leads to a retest, not to exercises.'],
+  'held-back': [409, 'This exercise is held back for this athlete.'],
+  'plan-not-ready': [409, 'This plan cannot be given to the athlete yet.'],
+  'plan-not-running': [409, 'There is no plan running on this link.'],
   // replays
   'head-not-covered': [409, 'The head is not covered on every frame that would be shown.'],
   'head-not-looked-at': [409, 'Nobody has looked yet whether the head is covered.'],

@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { athletePlan } from './athlete-plan.ts';
 import { call } from './calls.ts';
 import { comment } from './comments.ts';
 import { frameTable } from './clips.ts';
@@ -97,6 +98,8 @@ export const publicReplay = z
       .nullable(),
     call: call.pick({ seen: true, confidence: true }).nullable(),
     message: z.string(),
+    /** What to do until the retest; null where none was given. */
+    plan: athletePlan.nullable(),
     comments: z.array(
       comment
         .pick({ body: true, fromFrame: true, toFrame: true, shape: true })

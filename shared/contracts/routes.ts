@@ -11,7 +11,9 @@ import { exportRoutes } from './exports.ts';
 import { headRoutes } from './heads.ts';
 import { mailLinkRoutes } from './mail-links.ts';
 import { oneTimeCodeRoutes } from './one-time-codes.ts';
+import { athletePlanRoutes } from './athlete-plan.ts';
 import { peopleRoutes } from './people.ts';
+import { planRoutes } from './plans.ts';
 import { practiceRoutes } from './practice.ts';
 import { protocolRoutes } from './protocol.ts';
 import { readingRoutes } from './readings.ts';
@@ -51,7 +53,9 @@ export const routes = {
   ...commentRoutes,
   ...exportRoutes,
   ...headRoutes,
+  ...planRoutes,
   ...replayRoutes,
+  ...athletePlanRoutes,
   ...eventRoutes,
 };
 export type RouteName = keyof typeof routes;

@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { painPlace } from './athlete-plan.ts';
 import { id, moment, personRef, side } from './primitives.ts';
 import { reviewItem } from './reviews.ts';
 import { json, route } from './route.ts';
@@ -71,6 +72,16 @@ export const waiting = z
       /** Asked for by the one who marks. */
       mine: z.boolean(),
     }),
+    /** An athlete answered by their link that something hurts, and nobody has looked at it. */
+    z.object({
+      kind: z.literal('pain-reported'),
+      planId: id,
+      side,
+      /** The worst of what was not looked at yet, 1 to 10, and where that was. */
+      level: z.int(),
+      places: z.array(painPlace),
+    }),
+    z.object({ kind: z.literal('retest-due'), planId: id, side, due: z.iso.date() }),
     /** Filming was withdrawn: all of the athlete goes on this day, unless they consent anew. */
     z.object({ kind: z.literal('deletion-due'), due: z.iso.date() }),
     z.object({ kind: z.literal('consent-lapses'), until: z.iso.date() }),

@@ -1,3 +1,4 @@
+import type { Exercise } from './exercise.ts';
 import { footTripod } from './exercises/foot-tripod.ts';
 import { halfKneelingShift } from './exercises/half-kneeling-shift.ts';
 import { holdTo60 } from './exercises/hold-to-60.ts';
@@ -30,3 +31,10 @@ export const EXERCISES = [
 ] as const;
 
 export type ExerciseId = (typeof EXERCISES)[number]['id'];
+
+/** The exercise of this id. */
+export const exerciseOf = (id: ExerciseId): Exercise<ExerciseId> => {
+  const known = EXERCISES.find((each) => each.id === id);
+  if (!known) throw new Error(`There is no exercise ${id}.`);
+  return known;
+};

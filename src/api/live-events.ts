@@ -11,6 +11,7 @@ const TYPES = [
   'marks',
   'comments',
   'reading',
+  'plan',
   'consent',
   'signed-out',
 ] as const satisfies readonly LiveEvent['type'][];

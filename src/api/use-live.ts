@@ -5,6 +5,7 @@ import { meQuery } from './accounts.queries.ts';
 import { athletesKey } from './athletes.queries.ts';
 import { benchOptions, clipOptions, commentsOptions } from './bench.queries.ts';
 import { openLiveEvents } from './live-events.ts';
+import { plansKey } from './plans.queries.ts';
 import { sidesKey } from './readings.queries.ts';
 import { reviewQueueQuery } from './reviews.queries.ts';
 import { todayQuery } from './today.queries.ts';
@@ -62,7 +63,12 @@ export function refresh(client: QueryClient, event: Exclude<LiveEvent, { type: '
     case 'here':
       // for the Bench alone, which hears it itself
       break;
+    case 'plan':
+      invalidate(plansKey);
+      invalidate(todayQuery.queryKey);
+      break;
     case 'reading':
+      invalidate(plansKey);
       invalidate(sidesKey(event.visitId));
       invalidate(todayQuery.queryKey);
       invalidate(reviewQueueQuery.queryKey);

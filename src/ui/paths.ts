@@ -19,6 +19,11 @@ export const paths = {
   visit: (id: string) => `/visits/${id}`,
   call: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}/call`,
   reading: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}`,
+  /** What a plan of this side could start from. */
+  planStart: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}/plan`,
+  plan: (id: string) => `/plans/${id}`,
+  /** The exercises, at one of them where it is given. */
+  exercises: (at?: string) => `/practice/exercises${at === undefined ? '' : `#${at}`}`,
   /** The Bench, at a frame (from 0) and a comment where they are given. */
   bench: (
     clipId: string,

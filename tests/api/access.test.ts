@@ -6,7 +6,7 @@ import { product } from '#server/db/in-practice.ts';
 import type { User } from '#server/features/accounts/user.entity.ts';
 import { makeUser } from '#server/features/accounts/user.factory.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
-import { addressOf, BODIES, type Ids, NAMES } from '#tests/support/every-route.ts';
+import { addressOf, BODIES, type Ids, LINK_BODIES, NAMES } from '#tests/support/every-route.ts';
 import { makeOneOfEach } from '#tests/support/one-of-each.ts';
 import { type Access, ACCESS } from '#tests/support/route-access.ts';
 
@@ -148,7 +148,7 @@ describe('without a token that opens something', () => {
     for (const who of KNOCKERS) {
       const agent = await agentOf(who, 'link');
       const answer = await agent[method](path.replace(':token', 'a'.repeat(43))).send(
-        method === 'get' ? undefined : { passPhrase: 'heron reed' },
+        method === 'get' ? undefined : LINK_BODIES[name],
       );
       expect(answer.status, who).toBe(404);
       expect((answer.body as ProblemBody).code, who).toBe('not-found');

@@ -61,6 +61,15 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   decideReview: 'visit',
   setAssumption: 'visit',
   renewReading: 'visit',
+  planStart: 'visit',
+  makePlan: 'visit',
+  listPlans: 'athlete',
+  plan: 'plan',
+  givePlan: 'plan',
+  stopPlan: 'plan',
+  seePain: 'plan',
+  editPlan: 'plan',
+  planAgain: 'planToChange',
   listComments: 'clip',
   addComment: 'clip',
   editComment: 'comment',
@@ -161,6 +170,10 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   },
   recordCall: { seen: 'early', confidence: 'sure' },
   setAssumption: { on: true },
+  makePlan: { from: 'call' },
+  givePlan: { version: 1 },
+  editPlan: { version: 1, note: 'x' },
+  planAgain: { version: 1, from: 'call' },
   addComment: { body: 'x', fromFrame: 0, toFrame: 0 },
   editComment: { body: 'x' },
   handIn: { about: { kind: 'call', id: NO_CALL } },
@@ -190,6 +203,8 @@ export type Ids = Record<
   | 'rep'
   | 'secondMarking'
   | 'comment'
+  | 'plan'
+  | 'planToChange'
   | 'replay',
   string
 >;
@@ -203,3 +218,17 @@ export const addressOf = (name: RouteNameWithId, ids: Ids): string =>
     .replace(':id', ids[NAMES[name]])
     .replace(':side', 'right')
     .replace(':index', '0');
+
+/** What a link may add; of a link that opens nothing it is not even looked at. */
+export const LINK_BODIES: Partial<Record<RouteName, object>> = {
+  unlockReplay: { passPhrase: 'heron reed' },
+  tickExercise: { exercise: 'foot-tripod', day: '2026-03-03', done: true },
+  answerPain: {
+    day: '2026-03-03',
+    level: 4,
+    places: ['knee'],
+    which: 'left',
+    time: null,
+    exercise: null,
+  },
+};

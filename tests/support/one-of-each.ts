@@ -8,6 +8,9 @@ import { makeAthlete, makeConsent } from '#server/features/athletes/athlete.fact
 import { makeUser } from '#server/features/accounts/user.factory.ts';
 import { makeVisit } from '#server/features/visits/visit.factory.ts';
 import { MailLink } from '#server/features/mail-links/mail-link.entity.ts';
+import { PlanItem } from '#server/features/plans/plan-item.entity.ts';
+import { Plan } from '#server/features/plans/plan.entity.ts';
+import { exerciseOf } from '#shared/plan/library.ts';
 import { Replay } from '#server/features/replays/replay.entity.ts';
 import { makeRep } from '#server/features/reps/rep.factory.ts';
 import { SecondMarking } from '#server/features/second-markings/second-marking.entity.ts';
@@ -74,16 +77,43 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
       device: 'A test',
       expiresAt: new Date(Date.now() + 1e8),
     });
-    em.create(Call, {
-      visit,
-      side: 'right',
-      seen: 'early',
-      substitutions: [],
-      confidence: 'sure',
-      handsFelt: '',
-      by: coach,
-      beforeFigures: true,
+    const callOn = (of: typeof visit, side: 'left' | 'right') =>
+      em.create(Call, {
+        visit: of,
+        side,
+        seen: 'early',
+        substitutions: [],
+        confidence: 'sure',
+        handsFelt: '',
+        by: coach,
+        beforeFigures: true,
+      });
+    callOn(visit, 'right');
+    // two plans that could be given, of visits of their own
+    const [plan, planToChange] = [0, 1].map(() => {
+      const of = makeVisit(em, { athlete, coach });
+      callOn(of, 'left');
+      const made = em.create(Plan, {
+        visit: of,
+        side: 'left',
+        basis: { kind: 'call', seen: 'early' },
+        rule: 'early',
+        because: 'It turns out early.',
+        retestOn: '2999-01-01',
+        madeBy: coach,
+      });
+      em.create(PlanItem, {
+        plan: made,
+        exercise: 'foot-tripod',
+        position: 0,
+        stage: 1,
+        side: 'left',
+        sideConfirmed: true,
+        dose: exerciseOf('foot-tripod').dose,
+      });
+      return made;
     });
+    if (!plan || !planToChange) throw new Error('Two plans are made.');
     const invitation = em.create(MailLink, {
       kind: 'invitation',
       email: `${randomUUID()}@test.example`,
@@ -105,6 +135,8 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
       rep: rep.id,
       secondMarking: secondMarking.id,
       comment: comment.id,
+      plan: plan.id,
+      planToChange: planToChange.id,
       replay: replay.id,
     };
   });

@@ -60,6 +60,7 @@ export const aPublicReplay = (change: Partial<PublicReplay> = {}): PublicReplay 
   },
   call: { seen: 'early', confidence: 'fairly-sure' },
   message: 'Watch the stick on your belt.',
+  plan: null,
   comments: [
     {
       body: 'Here it begins to drift.',

@@ -61,8 +61,19 @@ export const unlock = (
 };
 
 /** @throws Problem 'pass-phrase-needed' */
-export const needUnlocked = (req: Request, token: string, { passPhraseHash }: LiveLink): void => {
+const needUnlocked = (req: Request, token: string, { passPhraseHash }: LiveLink): void => {
   if (passPhraseHash === null) return;
   const given = parseCookie(req.headers.cookie ?? '')[COOKIE] ?? '';
   if (!same(given, proof(token, passPhraseHash))) throw new Problem('pass-phrase-needed');
+};
+
+/** The link's actor, where it is live and unlocked on this device. */
+export const linkActor = async (
+  ground: Pick<Ground, 'orm'>,
+  req: Request,
+  token: string,
+): Promise<LinkActor> => {
+  const link = await liveLink(ground, token);
+  needUnlocked(req, token, link);
+  return link.actor;
 };

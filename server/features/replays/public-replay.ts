@@ -13,6 +13,7 @@ import type { Clip } from '../clips/clip.entity.ts';
 import { Comment } from '../comments/comment.entity.ts';
 import { COMMENT_ORDER } from '../comments/comments.presenter.ts';
 import { audit } from '../audit/audit.ts';
+import { athletePlanOf } from '../plans/athlete-answers.ts';
 import { Practice } from '../practice/practice.entity.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
 import { resultOf } from '../readings/result-of.ts';
@@ -174,6 +175,7 @@ export const openReplay = async (unit: Of): Promise<PublicReplay> => {
     reading: readingOf(reading, replay),
     call: replay.showCall && call ? { seen: call.seen, confidence: call.confidence } : null,
     message: replay.message,
+    plan: await athletePlanOf(em, visit.id, replay.side),
     comments: await sharedComments(unit, clip, replay),
     expiresAt: replay.expiresAt.toISOString(),
   };

@@ -1,11 +1,10 @@
-import type { Request } from 'express';
 import { routes } from '#shared/contracts/routes.ts';
 import { passPhraseLimits } from '../../http/rate-limit.ts';
 import { Problem } from '../../http/problem.ts';
 import type { Feature } from '../../main/feature.ts';
 import { passwordFits } from '../accounts/password.ts';
 import { sendStored } from '../clips/send-stored.ts';
-import { liveLink, needUnlocked, unlock } from './link.ts';
+import { linkActor, liveLink, unlock } from './link.ts';
 import { hiddenFilesOf } from './hidden-copies.ts';
 import { filmOfLink, mediaOfLink, openReplay, passPhraseWasWrong } from './public-replay.ts';
 import { presentReplay } from './replays.presenter.ts';
@@ -59,15 +58,8 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
     work(async (unit) => presented(unit, await hideHeadAgain(unit, params.id))),
   );
 
-  /** The link's actor, where it is live and unlocked on this device. */
-  const actorOf = async (req: Request, token: string) => {
-    const link = await liveLink(ground, token);
-    needUnlocked(req, token, link);
-    return link.actor;
-  };
-
   serve(routes.openReplay, async ({ params, req }) =>
-    inPractice(await actorOf(req, params.token), openReplay),
+    inPractice(await linkActor(ground, req, params.token), openReplay),
   );
 
   serve(
@@ -85,13 +77,13 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
   );
 
   serve(routes.replayFilm, async ({ params, req }) =>
-    inPractice(await actorOf(req, params.token), filmOfLink),
+    inPractice(await linkActor(ground, req, params.token), filmOfLink),
   );
 
   for (const name of ['replayVideo', 'replayPoster'] as const) {
     const [copy, type] = MEDIA[name];
     serve(routes[name], async ({ params, req, res }) => {
-      const key = await inPractice(await actorOf(req, params.token), (unit) =>
+      const key = await inPractice(await linkActor(ground, req, params.token), (unit) =>
         mediaOfLink(unit, copy),
       );
       if (!key) throw new Problem('not-found');

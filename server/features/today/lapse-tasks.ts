@@ -7,6 +7,7 @@ import {
   AT_MOST,
   ATHLETE,
   type Named,
+  ownOpenAthletes,
   type WaitingItem,
   whoAndWhen,
 } from './scope.ts';
@@ -14,6 +15,8 @@ import {
 /** Long enough before to ask at the next visit. */
 const CONSENT_DAYS = 14;
 const LINK_DAYS = 3;
+/** Long enough before to ask the athlete in. */
+const RETEST_DAYS = 7;
 
 type ConsentRow = Named & { until: string };
 type LinkRow = Named & {
@@ -22,6 +25,8 @@ type LinkRow = Named & {
   replay_id: string;
   expires_at: Date | string;
 };
+
+type RetestRow = Named & { plan_id: string; side: Side; due: string };
 
 type DeletionRow = Named & { due: string };
 
@@ -51,6 +56,26 @@ export const consentTasks = async ({ em, actor }: Unit<UserActor>): Promise<Wait
     [...scope.params, today(), today(), daysLater(today(), CONSENT_DAYS)],
   );
   return rows.map((row) => ({ kind: 'consent-lapses', until: row.until, ...whoAndWhen(row) }));
+};
+
+/** Retests that are due, as long as the athlete has not been filmed since; soonest first. */
+export const retestTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
+  const own = ownOpenAthletes(actor);
+  const rows = await em.execute<RetestRow[]>(
+    `select ${ATHLETE}, p.made_at as at, p.id as plan_id, p.side, p.retest_on::text as due
+     from plan p join visit v on v.id = p.visit_id join athlete a on a.id = v.athlete_id
+     where ${own.sql} and p.retest_on <= ?::date
+       and not exists (select from visit w where w.athlete_id = a.id and w.day > v.day)
+     order by p.retest_on, p.id limit ${AT_MOST}`,
+    [...own.params, daysLater(today(), RETEST_DAYS)],
+  );
+  return rows.map((row) => ({
+    kind: 'retest-due',
+    planId: row.plan_id,
+    side: row.side,
+    due: row.due,
+    ...whoAndWhen(row),
+  }));
 };
 
 /** Replay links that end soon. */

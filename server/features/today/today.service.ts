@@ -5,7 +5,8 @@ import { need } from '../../http/need.ts';
 import { inSightSql } from '../athletes/caseload.ts';
 import { daysLater, today } from '../athletes/days.ts';
 import { clipTasks } from './clip-tasks.ts';
-import { consentTasks, deletionTasks, linkTasks } from './lapse-tasks.ts';
+import { consentTasks, deletionTasks, linkTasks, retestTasks } from './lapse-tasks.ts';
+import { painTasks } from './pain-tasks.ts';
 import { callTasks, repTasks } from './marking-tasks.ts';
 import { commentTasks, readingTasks, sentBackTasks, toReviewTasks } from './review-tasks.ts';
 import { firstSteps } from './first-steps.ts';
@@ -13,8 +14,9 @@ import { heldClipTasks } from './held-clips.ts';
 import type { WaitingItem } from './scope.ts';
 import { secondMarkingTasks } from './second-marking-tasks.ts';
 
-/** Somebody who waits comes before something that waits, and what ends by itself comes last. */
+/** Pain comes first. Somebody who waits comes before something that waits, and what ends by itself comes last. */
 const KINDS: readonly ((unit: Unit<UserActor>) => Promise<WaitingItem[]>)[] = [
+  painTasks,
   toReviewTasks,
   sentBackTasks,
   commentTasks,
@@ -24,6 +26,7 @@ const KINDS: readonly ((unit: Unit<UserActor>) => Promise<WaitingItem[]>)[] = [
   repTasks,
   clipTasks,
   heldClipTasks,
+  retestTasks,
   deletionTasks,
   consentTasks,
   linkTasks,

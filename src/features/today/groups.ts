@@ -2,6 +2,8 @@ import type { Role } from '#shared/contracts/accounts.ts';
 import type { Task, TaskGroup } from './task-of.ts';
 
 const NAMES: Record<TaskGroup, string> = {
+  pain: 'Something hurts',
+  retest: 'Retests due',
   sides: 'To review',
   back: 'Sent back to you',
   review: 'Readings',
@@ -18,6 +20,7 @@ const NAMES: Record<TaskGroup, string> = {
 /** A coach works from the clip to the reading; a supervisor starts with what others brought. */
 const ORDER: Record<Role, readonly TaskGroup[]> = {
   coach: [
+    'pain',
     'back',
     'call',
     'mark',
@@ -26,11 +29,13 @@ const ORDER: Record<Role, readonly TaskGroup[]> = {
     'film',
     'retry',
     'review',
+    'retest',
     'sides',
     'prepare',
     'lapse',
   ],
   supervisor: [
+    'pain',
     'sides',
     'back',
     'review',
@@ -40,10 +45,12 @@ const ORDER: Record<Role, readonly TaskGroup[]> = {
     'mark',
     'film',
     'retry',
+    'retest',
     'prepare',
     'lapse',
   ],
   owner: [
+    'pain',
     'lapse',
     'sides',
     'back',
@@ -54,6 +61,7 @@ const ORDER: Record<Role, readonly TaskGroup[]> = {
     'mark',
     'film',
     'retry',
+    'retest',
     'prepare',
   ],
 };

@@ -65,6 +65,15 @@ const items: Waiting[] = [
     askedBy: { id: otherId, name: 'Tobias Lindqvist' },
     mine: false,
   },
+  {
+    ...common,
+    kind: 'pain-reported',
+    planId: otherId,
+    side: 'right',
+    level: 6,
+    places: ['knee', 'hip-front'],
+  },
+  { ...common, kind: 'retest-due', planId: otherId, side: 'left', due: '2026-03-09' },
   { ...common, kind: 'consent-lapses', until: '2026-03-09' },
   {
     ...common,
@@ -89,6 +98,8 @@ describe('taskOf', () => {
       ['sent-back', `/visits/${visitId}/sides/right#sign-off`],
       ['comment-open', `/clips/${clipId}?frame=4&comment=${otherId}`],
       ['second-marking-asked', `/second-markings/${otherId}`],
+      ['pain-reported', `/plans/${otherId}#pain`],
+      ['retest-due', `/plans/${otherId}`],
       ['consent-lapses', `/athletes/${athleteId}/consents/new`],
       ['link-lapses', `/visits/${visitId}/sides/left#replay`],
     ]);
@@ -135,6 +146,12 @@ describe('taskOf', () => {
     });
   });
 
+  it('says how much it hurts and where', () => {
+    const [pain] = items.filter((item) => item.kind === 'pain-reported');
+    if (pain === undefined) throw new Error('no pain among the items');
+    expect(taskOf(pain).detail).toBe('It hurts, 6 of 10: knee, front of the hip.');
+  });
+
   it('does not let a long comment fill the page', () => {
     const [comment] = items.filter((item) => item.kind === 'comment-open');
     if (comment === undefined) throw new Error('no comment among the items');
@@ -148,8 +165,8 @@ describe('groupTasks', () => {
   const order = (role: 'coach' | 'supervisor') =>
     groupTasks(items.map(taskOf), role).map(({ group }) => group);
   it('lets a coach start with the call, a supervisor with what others brought', () => {
-    expect(order('coach').slice(0, 2)).toEqual(['back', 'call']);
-    expect(order('supervisor').slice(0, 2)).toEqual(['sides', 'back']);
+    expect(order('coach').slice(0, 3)).toEqual(['pain', 'back', 'call']);
+    expect(order('supervisor').slice(0, 3)).toEqual(['pain', 'sides', 'back']);
   });
   it('keeps every task in some group for every role', () => {
     for (const role of ['coach', 'supervisor', 'owner'] as const)

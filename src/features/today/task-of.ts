@@ -2,10 +2,13 @@ import type { Waiting } from '#shared/contracts/today.ts';
 import { distance, moment } from '#src/ui/days.ts';
 import { inWords } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
+import { PAIN_PLACE_WORDS } from '#src/ui/pain-words.ts';
 import { reviewDetail, reviewTitle } from '#src/ui/review-words.ts';
 import { supportWords } from '#src/ui/words.ts';
 
 export type TaskGroup =
+  | 'pain'
+  | 'retest'
   | 'review'
   | 'back'
   | 'sides'
@@ -155,6 +158,24 @@ export function taskOf(item: Waiting): Task {
         action: { label: 'Mark again', to: paths.secondMarking(item.secondMarkingId) },
       };
     }
+    case 'pain-reported':
+      return {
+        key: `pain ${item.planId}`,
+        group: 'pain',
+        title: `${who}, ${sideOf(item.side)}`,
+        detail: `It hurts, ${item.level} of 10: ${item.places.map((place) => PAIN_PLACE_WORDS[place]).join(', ')}.`,
+        when: `said ${moment(item.at)}`,
+        action: { label: 'Look at it', to: `${paths.plan(item.planId)}#pain` },
+      };
+    case 'retest-due':
+      return {
+        key: `retest ${item.planId}`,
+        group: 'retest',
+        title: `${who}, ${sideOf(item.side)}`,
+        detail: 'Film again with the same set-up.',
+        when: distance(item.due),
+        action: { label: 'Open the plan', to: paths.plan(item.planId) },
+      };
     case 'deletion-due':
       return {
         key: `delete ${item.athlete.id}`,

@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import type { Point } from './taper.ts';
+import type { Point } from '#shared/geometry/taper.ts';
 
 /** Every drawing of the guide: 320 × 200 units, about one to a pixel, on its own line of ground. */
 export function Drawing({

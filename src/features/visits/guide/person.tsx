@@ -1,4 +1,4 @@
-import { taper, type Point } from './taper.ts';
+import { taper, type Point } from '#shared/geometry/taper.ts';
 
 /** Support leg in vermilion, lifted leg in teal, the rest in ink on white. */
 const LOOKS = {

@@ -6,6 +6,7 @@ import {
   addressOf,
   BODIES,
   type Ids,
+  LINK_BODIES,
   NAMES,
   type RouteNameWithId,
   SILENT,
@@ -70,6 +71,8 @@ const WITHOUT_ID: Record<RouteNameWithoutId, Kind> = {
   openReplay: 'link',
   unlockReplay: 'link',
   replayFilm: 'link',
+  tickExercise: 'link',
+  answerPain: 'link',
   replayVideo: 'link',
   replayPoster: 'link',
   events: 'bare',
@@ -110,6 +113,10 @@ export async function everythingOf(request: APIRequestContext, run: Run): Promis
     params: { id: rep },
     body: { markerId: null, frames: null },
   });
+  const side = { id: visitId, side: 'right' } as const;
+  const { planId } = await ask(request, routes.planStart, { params: side });
+  const plan =
+    planId ?? (await ask(request, routes.makePlan, { params: side, body: { from: 'call' } })).id;
   const first = <T extends { id: string }>(items: readonly T[]): string => items[0]?.id ?? '';
   return {
     session: session.id,
@@ -125,6 +132,8 @@ export async function everythingOf(request: APIRequestContext, run: Run): Promis
     rep,
     secondMarking: second.id,
     comment: first(bench.comments),
+    plan,
+    planToChange: plan,
     replay: first(replays.items),
   };
 }
@@ -164,7 +173,7 @@ export async function expectNothingBehindRoutes(
     }
     if (kind === 'link')
       expect
-        .soft((await request.fetch(address, bodied(name, { passPhrase: 'x' }))).status(), name)
+        .soft((await request.fetch(address, bodied(name, LINK_BODIES[name]))).status(), name)
         .toBe(404);
     if (kind === 'lists') {
       const answer = await request.get(address);
