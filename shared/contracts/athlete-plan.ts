@@ -121,6 +121,8 @@ export const tickBody = z
   .object({ exercise: exerciseId, day, done: z.boolean() })
   .meta({ id: 'TickBody' });
 
+export type TickBody = z.infer<typeof tickBody>;
+
 /** 256 random bits, base64url. */
 const params = z.object({ token: z.string().regex(/^[A-Za-z0-9_-]{43}$/) });
 

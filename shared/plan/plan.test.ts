@@ -3,8 +3,8 @@ import { SAFETY_QUESTIONS } from '#shared/contracts/visits.ts';
 import { READING_CODES } from '#shared/reading/types.ts';
 import { ALWAYS_STOP, SAFETY_ANSWERS } from './cautions.ts';
 import type { Exercise } from './exercise.ts';
-import { heldBackBy } from './held-back.ts';
-import { EXERCISES } from './library.ts';
+import { heldBackBy, isCovered, SET_BY_OTHERS, whyNotAllTheSame } from './held-back.ts';
+import { EXERCISES, exerciseOf } from './library.ts';
 import { type PlanBasis, STANDARD_RULES } from './rules.ts';
 import { isMirrored, sideLines } from './sides.ts';
 import { carrierOf, suggest } from './suggest.ts';
@@ -188,5 +188,35 @@ describe('what holds an exercise back', () => {
   it('is what was not answered too', () => {
     expect(heldBackBy(known('supported-hinge'), null)).toEqual(['hip-replacement-or-limits']);
     expect(heldBackBy(known('foot-tripod'), null)).toEqual([]);
+  });
+
+  it('is passed over by a reason where no limit was set by others, and nothing is unanswered', () => {
+    const yes = (...questions: (typeof SAFETY_ANSWERS)[number][]) => ({
+      ...no,
+      ...Object.fromEntries(questions.map((question) => [question, true])),
+    });
+    const state = (answers: object | null, clearedBy: string | null = null) => ({
+      answers,
+      clearedBy,
+    });
+    expect(whyNotAllTheSame(['pain-today'], state(yes('pain-today')))).toBeNull();
+    expect(whyNotAllTheSame(['pain-today'], state(null))).toBe('ask-first');
+    expect(whyNotAllTheSame(['pain-today'], state({}))).toBe('ask-first');
+    for (const limit of SET_BY_OTHERS) {
+      expect(whyNotAllTheSame([limit], state(yes(limit)))).toBe('needs-clearance');
+      expect(whyNotAllTheSame([limit], state(yes(limit), 'Dr Alder'))).toBeNull();
+    }
+  });
+
+  it('is covered by a decision as long as nothing else stands against it', () => {
+    expect(isCovered([], null)).toBe(true);
+    expect(isCovered(['pain-today'], null)).toBe(false);
+    expect(isCovered(['pain-today'], ['pain-today', 'nerve-symptoms'])).toBe(true);
+    expect(isCovered(['pain-today', 'nerve-symptoms'], ['pain-today'])).toBe(false);
+  });
+
+  it('is looked up by the id of an exercise that there is', () => {
+    expect(exerciseOf('step-up').name).toBe('Step-up');
+    expect(() => exerciseOf('cartwheel' as 'step-up')).toThrow('There is no exercise cartwheel.');
   });
 });

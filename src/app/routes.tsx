@@ -138,6 +138,20 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'visits/:id/sides/:side/plan',
+                lazy: lazily(() =>
+                  import('#src/features/plans/plan-start-page.tsx').then(
+                    (page) => page.PlanStartPage,
+                  ),
+                ),
+              },
+              {
+                path: 'plans/:id',
+                lazy: lazily(() =>
+                  import('#src/features/plans/plan-page.tsx').then((page) => page.PlanPage),
+                ),
+              },
+              {
                 path: 'clips/:id',
                 lazy: lazily(() =>
                   import('#src/features/bench/bench-page.tsx').then((page) => page.BenchPage),
@@ -216,6 +230,14 @@ export const pages: RouteObject[] = [
                 lazy: lazily(() =>
                   import('#src/features/practice/retention/retention-page.tsx').then(
                     (page) => page.RetentionPage,
+                  ),
+                ),
+              },
+              {
+                path: 'practice/exercises',
+                lazy: lazily(() =>
+                  import('#src/features/practice/exercises/exercises-page.tsx').then(
+                    (page) => page.ExercisesPage,
                   ),
                 ),
               },

@@ -27,6 +27,7 @@ export function signedInApi(role: Role = 'coach') {
   return fakeApi()
     .on(routes.me, () => aMe(role))
     .on(routes.protocol, () => aProtocolPage())
+    .on(routes.listPlans, () => ({ items: [] }))
     .on(routes.consentWording, () => aWordingPage());
 }
 

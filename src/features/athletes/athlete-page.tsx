@@ -11,6 +11,7 @@ import { Caution, Empty, ErrorState, Loading, Skeleton, SkeletonLines } from '#s
 import { aboutAthlete, fullName } from './athlete-words.ts';
 import { ConsentSection } from './consent-section.tsx';
 import { LinksSection } from './links-section.tsx';
+import { PlansSection } from './plans-section.tsx';
 import { TrendSection } from './trend-section.tsx';
 import { VisitTable } from './visit-table.tsx';
 
@@ -77,6 +78,7 @@ function Known({ athlete, crumbs }: { athlete: Athlete; crumbs: { label: string;
         </div>
       )}
       <Visits athlete={athlete} />
+      <PlansSection athlete={athlete} />
       <ConsentSection athlete={athlete} />
       <LinksSection athlete={athlete} />
     </Page>

@@ -3,6 +3,7 @@ import { CourseSection } from './course/course-section.tsx';
 import { ReadingHead } from './head/reading-head.tsx';
 import { LiftSection } from './lift/lift-section.tsx';
 import { HistorySection } from './history/history-section.tsx';
+import { PlanSection } from './plan-section.tsx';
 import { ReplaySection } from './link/replay-section.tsx';
 import { PartsSection } from './parts/parts-section.tsx';
 import { AssumptionSection } from './reasons/assumption-section.tsx';
@@ -30,6 +31,7 @@ export function Measured({ page, reading }: { page: SidePage; reading: Reading }
       <MarkErrorSection page={page} reading={reading} />
       <ProtocolSection page={page} reading={reading} />
       <SignOffSection page={page} />
+      <PlanSection page={page} />
       <ReplaySection page={page} />
       <HistorySection page={page} />
     </>

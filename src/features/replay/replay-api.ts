@@ -1,3 +1,4 @@
+import type { PainBody, Tick, TickBody } from '#shared/contracts/athlete-plan.ts';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 
 /** What asking for a replay can come to. */
@@ -75,4 +76,38 @@ export const unlockReplay = async (token: string, passPhrase: string): Promise<U
   if (response === 'offline') return 'offline';
   if (response.ok) return 'unlocked';
   return response.status === 401 ? 'wrong' : refusal(response.status);
+};
+
+/** What became of an answer of the athlete; `changed`: the plan is not the one on this page any more. */
+export type Answered = 'kept' | 'changed' | 'gone' | 'too-many-tries' | 'offline' | 'broken';
+
+const add = async (path: string, body: object): Promise<Response | Exclude<Answered, 'kept'>> => {
+  const response = await ask(path, {
+    method: 'POST',
+    headers: { 'content-type': 'application/json' },
+    body: JSON.stringify(body),
+  });
+  if (response === 'offline' || response.ok) return response;
+  // locked again is over for this page; it asks for the phrase when it is opened anew
+  if (response.status === 401) return 'gone';
+  return response.status === 409 || response.status === 422 ? 'changed' : refusal(response.status);
+};
+
+const isTicks = (value: unknown): value is { ticks: Tick[] } =>
+  typeof value === 'object' && value !== null && 'ticks' in value;
+
+/** Says that an exercise was done on a day, or that this was a slip. */
+export const sendTick = async (
+  token: string,
+  tick: TickBody,
+): Promise<readonly Tick[] | Exclude<Answered, 'kept'>> => {
+  const answer = await add(`/api/r/${token}/ticks`, tick);
+  if (typeof answer === 'string') return answer;
+  const value: unknown = await answer.json().catch(() => null);
+  return isTicks(value) ? value.ticks : 'broken';
+};
+
+export const sendPain = async (token: string, pain: PainBody): Promise<Answered> => {
+  const answer = await add(`/api/r/${token}/pain`, pain);
+  return typeof answer === 'string' ? answer : 'kept';
 };

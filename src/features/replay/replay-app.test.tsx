@@ -2,6 +2,7 @@ import { render, screen, waitFor } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
+import { anAthletePlan } from '#tests/support/plans.ts';
 import { aPublicReplay, replayToken } from '#tests/support/public-replay.ts';
 import { ASK_FILM_EVERY } from './no-film-yet.tsx';
 import { tokenOf } from './replay-api.ts';
@@ -57,6 +58,13 @@ describe('a replay', () => {
     );
     expect(screen.getByText(/until 2 April 2026/)).toBeVisible();
     expect(asked.every((path) => path.startsWith(`GET /api/r/${replayToken}`))).toBe(true);
+  });
+
+  it('brings the plan until the retest, where one was given', async () => {
+    open({ plan: anAthletePlan() });
+    render(<ReplayApp token={replayToken} />);
+    expect(await screen.findByRole('region', { name: 'Your plan' })).toBeVisible();
+    expect(screen.getByText('Supported hinge', { selector: 'h3' })).toBeVisible();
   });
 
   it('plays slowly by itself, stops at a moment, and shows its angles', async () => {

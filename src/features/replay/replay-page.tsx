@@ -1,14 +1,19 @@
-import { useEffect, useMemo, useRef, useState } from 'react';
+import { lazy, Suspense, useEffect, useMemo, useRef, useState } from 'react';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { longDay, shortDay } from '#src/ui/days.ts';
 import { frameTimes } from '#src/video/frame-times.ts';
+import { Contact } from './contact.tsx';
 import { Comments } from './comments.tsx';
 import { NoFilmYet } from './no-film-yet.tsx';
 import { Player } from './player/player.tsx';
 import { useLoop } from './player/use-loop.ts';
 import { Result } from './result.tsx';
 import { useStillLive } from './use-still-live.ts';
-import { contactParts } from './words/contact.ts';
+
+/** Drawings and all: fetched only where there is a plan. */
+const AthletePlan = lazy(() =>
+  import('./plan/athlete-plan.tsx').then((part) => ({ default: part.AthletePlan })),
+);
 
 /** One replay, as the athlete sees it: the film first, then what it says, in plain words. */
 export function ReplayPage({
@@ -21,7 +26,7 @@ export function ReplayPage({
   replay: PublicReplay;
   /** The link opens nothing any more. */
   onEnded: () => void;
-  /** A film that was being prepared is there. */
+  /** Something that it shows is another by now: a film is ready, a plan was stopped. */
   onReady: () => void;
 }) {
   const times = useMemo(() => frameTimes(replay.frames), [replay.frames]);
@@ -71,6 +76,24 @@ export function ReplayPage({
               <p className="mt-1 whitespace-pre-line">“{message}”</p>
             </section>
           )}
+          {replay.plan && (
+            <Suspense
+              fallback={
+                <p role="status" className="border-t border-rule py-6 text-soft">
+                  Loading your plan…
+                </p>
+              }
+            >
+              <AthletePlan
+                token={token}
+                given={replay.plan}
+                coach={coachName}
+                contact={practice.contact}
+                onEnded={onEnded}
+                onChanged={onReady}
+              />
+            </Suspense>
+          )}
           <Comments comments={replay.comments} shown={comment} onShow={showComment} />
           <footer className="border-t border-rule py-6 text-note text-soft">
             <p>
@@ -88,24 +111,11 @@ export function ReplayPage({
 }
 
 function StopIfItHurts({ contact, coach }: { contact: string; coach: string }) {
-  const parts = contactParts(contact);
   return (
     <aside className="mb-6 border-l-[3px] border-ochre py-1 pl-4">
       <b className="text-ochre">Stop if it hurts.</b> Pain, pinching or dizziness: stop, and call{' '}
       {coach} before you go on.
-      {parts.length > 0 && (
-        <span className="block">
-          {parts.map(({ text, to }) =>
-            to === null ? (
-              text
-            ) : (
-              <a key={text} href={to} className="inline-block min-h-[44px] leading-[44px]">
-                {text}
-              </a>
-            ),
-          )}
-        </span>
-      )}
+      <Contact contact={contact} className="block" />
     </aside>
   );
 }

@@ -37,6 +37,7 @@ describe('the practice', () => {
       '/practice/consent',
       '/practice/retention',
       '/practice/set-ups',
+      '/practice/exercises',
       '/practice/protocol',
       '/practice/reliability',
       '/practice/audit',
@@ -47,6 +48,7 @@ describe('the practice', () => {
     open(role);
     expect(await places()).toEqual([
       '/practice/set-ups',
+      '/practice/exercises',
       '/practice/protocol',
       '/practice/reliability',
     ]);

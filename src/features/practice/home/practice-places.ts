@@ -36,6 +36,11 @@ const PLACES: readonly Place[] = [
     says: 'Saved ways of filming: one touch in a visit fills the figures.',
   },
   {
+    to: paths.exercises(),
+    name: 'Exercises',
+    says: 'What plans are made of, with drawings, and the rules that suggest them.',
+  },
+  {
     to: paths.protocol(),
     name: 'Protocol',
     says: 'The gates and limits that readings go by, in versions.',

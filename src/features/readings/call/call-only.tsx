@@ -16,6 +16,7 @@ import { ErrorState, Loading, Skeleton } from '#src/ui/states.tsx';
 import { SEEN_WORDS } from '#src/ui/words.ts';
 import { SeenTag } from '../head/seen-tag.tsx';
 import { ReplaySection } from '../link/replay-section.tsx';
+import { PlanSection } from '../plan-section.tsx';
 import { SignOffSection } from '../sign-off/sign-off-section.tsx';
 import { clipsOfSide } from '../side-clips.ts';
 import { callSentence } from '../words/call-sentence.ts';
@@ -71,6 +72,7 @@ export function CallOnly({ page, call }: { page: SidePage; call: Call }) {
         </p>
       </Section>
       <SignOffSection page={page} />
+      <PlanSection page={page} />
       <ReplaySection page={page} />
     </>
   );
