@@ -11,6 +11,7 @@ const PLACES: readonly { to: string; label: string; end?: boolean }[] = [
   { to: paths.today(), label: 'Today', end: true },
   { to: paths.athletes(), label: 'Athletes' },
   { to: paths.review(), label: 'Review' },
+  { to: paths.compare(), label: 'Compare' },
   { to: paths.practice(), label: 'Practice' },
   { to: paths.method(), label: 'Method' },
 ];

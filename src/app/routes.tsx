@@ -164,6 +164,12 @@ export const pages: RouteObject[] = [
                 ),
               },
               {
+                path: 'compare',
+                lazy: lazily(() =>
+                  import('#src/features/compare/compare-page.tsx').then((page) => page.ComparePage),
+                ),
+              },
+              {
                 path: 'review',
                 lazy: lazily(() =>
                   import('#src/features/reviews/review-page.tsx').then((page) => page.ReviewPage),

@@ -45,6 +45,13 @@ export const paths = {
   secondMarking: (id: string) => `/second-markings/${id}`,
   /** What waits for a reviewer's word. */
   review: () => '/review',
+  /** Two reps, sides or visits of one athlete beside each other; each end as `visit.side` or `visit.side.rep`. */
+  compare: (at: { athlete?: string; first?: string; second?: string } = {}) => {
+    const search = new URLSearchParams(
+      Object.entries(at).filter((entry): entry is [string, string] => entry[1] !== undefined),
+    );
+    return `/compare${search.size === 0 ? '' : `?${search}`}`;
+  },
   practice: () => '/practice',
   people: () => '/practice/people',
   consentWording: () => '/practice/consent',

@@ -54,20 +54,25 @@ function Known({ athlete, crumbs }: { athlete: Athlete; crumbs: { label: string;
         </p>
       }
       actions={
-        may('athlete.edit') ? (
-          <>
-            <ButtonLink to={paths.editAthlete(athlete.id)}>Change details</ButtonLink>
-            {mayFilm ? (
-              <ButtonLink look="primary" to={paths.newVisit(athlete.id)}>
-                New visit
-              </ButtonLink>
-            ) : (
-              <ButtonLink look="primary" to={paths.newConsent(athlete.id)}>
-                Record the consent
-              </ButtonLink>
-            )}
-          </>
-        ) : undefined
+        <>
+          {visitCount > 0 && (
+            <ButtonLink to={paths.compare({ athlete: athlete.id })}>Compare</ButtonLink>
+          )}
+          {may('athlete.edit') && (
+            <>
+              <ButtonLink to={paths.editAthlete(athlete.id)}>Change details</ButtonLink>
+              {mayFilm ? (
+                <ButtonLink look="primary" to={paths.newVisit(athlete.id)}>
+                  New visit
+                </ButtonLink>
+              ) : (
+                <ButtonLink look="primary" to={paths.newConsent(athlete.id)}>
+                  Record the consent
+                </ButtonLink>
+              )}
+            </>
+          )}
+        </>
       }
     >
       {athlete.cautions !== '' && (

@@ -5,6 +5,7 @@ import type { Visit } from '#shared/contracts/visits.ts';
 import { athleteOptions } from '#src/api/athletes.queries.ts';
 import { useMay } from '#src/api/use-may.ts';
 import { visitOptions } from '#src/api/visits.queries.ts';
+import { ButtonLink } from '#src/ui/button-link.tsx';
 import { longDay, shortDay } from '#src/ui/days.ts';
 import { Page } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
@@ -60,6 +61,11 @@ function Opened({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
           <VisitSteps consented={consented === true} visit={visit} clips={clips} />
           {visit.note !== '' && <p className="mt-3 text-body text-soft">{visit.note}</p>}
         </>
+      }
+      actions={
+        clips.length > 0 && (
+          <ButtonLink to={paths.compare({ athlete: visit.athlete.id })}>Compare</ButtonLink>
+        )
       }
     >
       <ConsentStep athlete={athlete} visit={visit} may={may} />

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { courseScale, turnRange } from './course-scale.ts';
-import { runsOf, turnAt, wedgePath } from './course-shapes.ts';
+import { runsOf, wedgePath } from './course-shapes.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 
@@ -53,15 +53,6 @@ describe('runsOf', () => {
   });
   it('has none for fewer than two points', () => {
     expect(runsOf([point(60, 0)])).toEqual([]);
-  });
-});
-
-describe('turnAt', () => {
-  it('reads between points, and nothing beyond them', () => {
-    const curve = [point(60, 2), point(70, 4)];
-    expect(turnAt(curve, 60)).toBe(2);
-    expect(turnAt(curve, 65)).toBe(3);
-    expect(turnAt(curve, 71)).toBeNull();
   });
 });
 

@@ -1,10 +1,11 @@
 import { useRef, type ReactNode } from 'react';
 import type { Gates } from '#shared/protocol/protocol.ts';
+import { turnAt } from '#shared/reading/at-lift.ts';
 import { CourseAxes } from './course-axes.tsx';
 import { CourseLine, CourseRepLine } from './course-line.tsx';
 import { CoursePoints, type CoursePoint } from './course-points.tsx';
 import { courseScale, type CourseScale } from './course-scale.ts';
-import { type CourseCurve, turnAt } from './course-shapes.ts';
+import type { CourseCurve } from './course-shapes.ts';
 import { CourseWedge } from './course-wedge.tsx';
 import { useWidth } from './use-width.ts';
 

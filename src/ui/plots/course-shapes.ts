@@ -46,19 +46,6 @@ export const bandPath = (points: CourseCurve, scale: CourseScale): string =>
     (point) => scale.y(point.high),
   )([...points]) ?? '';
 
-/** Turn of a curve at a lift, between its points; null outside them. */
-export const turnAt = (curve: CourseCurve, lift: number): number | null => {
-  for (const [n, point] of curve.entries()) {
-    if (point.lift === lift) return point.turn;
-    const before = curve[n - 1];
-    if (before && before.lift < lift && lift < point.lift) {
-      const share = (lift - before.lift) / (point.lift - before.lift);
-      return before.turn + share * (point.turn - before.turn);
-    }
-  }
-  return null;
-};
-
 /**
  * Where the change from gate to gate ends for each judgement, degrees: the expected turn-in from −1°
  * to −12°, holding still from −1° to +1°. From our model, no source; drawing only.

@@ -12,7 +12,7 @@ import { marksOn } from '../model/bench-model.ts';
 import { HeadBox } from '../head/head-box.tsx';
 import { MARK, withPoint } from '../store/tools.ts';
 import { useNarrow } from '../use-media.ts';
-import { fullFrameUrl } from './clip-source.ts';
+import { fullFrameUrl } from '#src/api/clip-source.ts';
 import { CornerGlass } from './corner-glass.tsx';
 import { narrowView } from './narrow-view.ts';
 import { FrameSlider } from './frame-slider.tsx';

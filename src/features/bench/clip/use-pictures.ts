@@ -7,7 +7,7 @@ import { openClip } from '#src/video/open-clip.ts';
 import { createScrubScheduler } from '#src/video/scrub-scheduler.ts';
 import type { FrameSource } from '#src/video/types.ts';
 import type { BenchTools } from '../bench-context.ts';
-import { clipSourceOf } from './clip-source.ts';
+import { clipSourceOf } from '#src/api/clip-source.ts';
 
 export interface Pictures {
   /** Null until the first picture can come. */

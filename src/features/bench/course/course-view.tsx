@@ -1,7 +1,7 @@
 import { liftText } from '#shared/overlay/figures.ts';
 import { CourseCurrent, CourseNext } from '#src/ui/plots/course-markers.tsx';
 import { CoursePlot } from '#src/ui/plots/course-plot.tsx';
-import { turnAt } from '#src/ui/plots/course-shapes.ts';
+import { turnAt } from '#shared/reading/at-lift.ts';
 import { gatesOf } from '#shared/protocol/protocol.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { gainWords } from '../lead/next-frame-offer.tsx';

@@ -3,7 +3,7 @@ import type { Milliseconds } from '#shared/timing/units.ts';
 import type { Size } from '#src/canvas/viewport.ts';
 import type { Tracker } from '#src/tracking/types.ts';
 import { openTracker } from '#src/tracking/worker/open-tracker.ts';
-import { clipSourceOf } from '../clip/clip-source.ts';
+import { clipSourceOf } from '#src/api/clip-source.ts';
 
 /** Opens the tracker of a clip, when it is first needed. */
 export const openTrackerOf =

@@ -1,4 +1,4 @@
-import { stripFrames, stripUrl } from '../clip/clip-source.ts';
+import { stripFrames, stripUrl } from '#src/api/clip-source.ts';
 import { useBenchTools } from '../bench-context.ts';
 import type { StripLayout } from './strip-layout.ts';
 

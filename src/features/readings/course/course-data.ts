@@ -1,6 +1,4 @@
-import type { Degrees } from '#shared/geometry/units.ts';
 import type { RepResult } from '#shared/reading/types.ts';
-import { turnAt } from '#src/ui/plots/course-shapes.ts';
 import { LIFT_RANGE } from '#src/ui/plots/course-scale.ts';
 import type { CoursePoint } from '#src/ui/plots/course-points.tsx';
 
@@ -31,13 +29,3 @@ export const coursePoints = (reps: readonly RepResult[]): CoursePoint[] =>
         : [],
     ),
   );
-
-/** ± (95 %) of one rep's change, degrees: what its band says at the upper gate. */
-export const repHalfWidth = ({ curve, fit }: RepResult, gateTo: Degrees): number => {
-  const upper = turnAt(
-    curve.map((point) => ({ ...point, turn: point.high })),
-    gateTo,
-  );
-  const line = turnAt(curve, gateTo);
-  return upper === null || line === null ? 1.96 * (fit?.change.u ?? 0) : upper - line;
-};

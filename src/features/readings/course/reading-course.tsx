@@ -3,7 +3,7 @@ import type { ReadingResult } from '#shared/reading/types.ts';
 import { degrees, inWords, plusMinus, turn } from '#src/ui/figures.ts';
 import { CourseBracket, CourseOnset } from '#src/ui/plots/course-markers.tsx';
 import { CoursePlot } from '#src/ui/plots/course-plot.tsx';
-import { turnAt } from '#src/ui/plots/course-shapes.ts';
+import { turnAt } from '#shared/reading/at-lift.ts';
 import { gatesOf } from '#shared/protocol/protocol.ts';
 import { coursePoints } from './course-data.ts';
 

@@ -1,12 +1,13 @@
 import { Link } from 'react-router-dom';
 import type { Reading } from '#shared/contracts/readings.ts';
+import { repHalfWidth } from '#shared/reading/at-lift.ts';
 import type { RepResult } from '#shared/reading/types.ts';
 import { capital, degrees, plusMinus, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import { tieFaultWords } from '#src/ui/tie-words.ts';
 import { repSymbol } from '#src/ui/plots/course-points.tsx';
 import { faultsToSay, repFaultWords } from '../words/rep-fault-words.ts';
-import { drawnReps, repHalfWidth } from './course-data.ts';
+import { drawnReps } from './course-data.ts';
 import { repName } from '../words/rep-names.ts';
 
 /** Each rep with its symbol and its own change; what is left out says why and stays open to be looked at. */
@@ -46,9 +47,21 @@ export function RepKey({ reading }: { reading: Reading }) {
           </span>
         </li>
       ))}
+      {drawn.length > 1 && (
+        <li>
+          <Link
+            to={paths.compare({ first: ofSide(reading), second: ofSide(reading) })}
+            className="inline-block py-1"
+          >
+            Play two reps together
+          </Link>
+        </li>
+      )}
     </ul>
   );
 }
+
+const ofSide = ({ visitId, side }: Reading): string => `${visitId}.${side}`;
 
 /** Which clip its lift comes from, where a hand has named a side clip of the same moment. */
 function LiftFrom({ reading, rep }: { reading: Reading; rep: RepResult }) {

@@ -1,6 +1,6 @@
 import type { Change, ReadingFigures, RepResult } from '#shared/reading/types.ts';
 import type { Degrees } from '#shared/geometry/units.ts';
-import { repHalfWidth } from '../course/course-data.ts';
+import { repHalfWidth } from '#shared/reading/at-lift.ts';
 
 /**
  * ± (95 %) of the pelvis or the thigh part, degrees. The engine gives a part only its random error; the

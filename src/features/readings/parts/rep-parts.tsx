@@ -5,7 +5,8 @@ import { type Column, Table } from '#src/ui/table.tsx';
 import { gateRange } from '#src/ui/gate-words.ts';
 import { type Gates, gatesOf } from '#shared/protocol/protocol.ts';
 import type { Degrees } from '#shared/geometry/units.ts';
-import { drawnReps, repHalfWidth } from '../course/course-data.ts';
+import { repHalfWidth } from '#shared/reading/at-lift.ts';
+import { drawnReps } from '../course/course-data.ts';
 import { repName } from '../words/rep-names.ts';
 import { repPartHalfWidth } from './part-half-width.ts';
 

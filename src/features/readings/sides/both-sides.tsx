@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { Reading, SidePage } from '#shared/contracts/readings.ts';
+import type { Side } from '#shared/contracts/primitives.ts';
 import type { Call } from '#shared/contracts/calls.ts';
 import { otherSide } from '#shared/landmarks/types.ts';
 import { degrees, inWords, plusMinus, turn } from '#src/ui/figures.ts';
@@ -36,6 +37,14 @@ export function BothSides({ page, reading }: { page: SidePage; reading: Reading 
             )}{' '}
             <Link to={paths.reading(page.visit.id, other)}>Open the {other} side</Link>
           </p>
+          <p>
+            <Link
+              to={comparePath(page, { visitId: page.visit.id, side: other })}
+              className="inline-block py-2.5"
+            >
+              Play both sides together, matched by lift
+            </Link>
+          </p>
         </>
       ) : there ? (
         <p className="max-w-lead">
@@ -51,6 +60,13 @@ export function BothSides({ page, reading }: { page: SidePage; reading: Reading 
     </Section>
   );
 }
+
+const comparePath = (page: SidePage, second: { visitId: string; side: Side }): string =>
+  paths.compare({
+    athlete: page.athlete.id,
+    first: `${page.visit.id}.${page.side}`,
+    second: `${second.visitId}.${second.side}`,
+  });
 
 /** Left less right. */
 export const differenceWords = ({

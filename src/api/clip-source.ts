@@ -1,7 +1,7 @@
 import type { ClipWithFrames } from '#shared/contracts/clips.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import type { Milliseconds } from '#shared/timing/units.ts';
-import { addressOf } from '#src/api/client.ts';
+import { addressOf } from './client.ts';
 import type { Size } from '#src/canvas/viewport.ts';
 import type { ClipSource, SheetLayout } from '#src/video/types.ts';
 

@@ -1,0 +1,29 @@
+import type { CourseScale } from './course-scale.ts';
+import { bandPath, type CourseCurve, linePath, runsOf } from './course-shapes.ts';
+
+/** A course laid over another one: dashed and in ink, its band by its edges alone. */
+export function SecondCourse({ curve, scale }: { curve: CourseCurve; scale: CourseScale }) {
+  if (curve.length < 2) return null;
+  return (
+    <g>
+      <path
+        d={bandPath(curve, scale)}
+        className="fill-ink/[.07] stroke-ink/50"
+        strokeWidth="1"
+        strokeDasharray="2 3"
+      />
+      {runsOf(curve).map((run, n) => (
+        <path
+          key={n}
+          d={linePath(run.points, scale)}
+          fill="none"
+          strokeWidth="2.5"
+          strokeLinecap="butt"
+          strokeLinejoin="round"
+          strokeDasharray={run.carried ? '9 5' : '1 6'}
+          className="stroke-ink"
+        />
+      ))}
+    </g>
+  );
+}
