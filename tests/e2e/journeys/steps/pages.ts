@@ -62,6 +62,25 @@ const FRONT: readonly PageOfProduct[] = [
     stands: text(/wait/),
   },
   {
+    name: 'the review queue',
+    who: SUPERVISOR,
+    address: () => paths.review(),
+    stands: text('Reading and sign-off'),
+  },
+  {
+    name: 'a comparison of two reps',
+    who: COACH,
+    address: ({ quill }) =>
+      paths.compare({ first: `${quill.visitId}.right`, second: `${quill.visitId}.right` }),
+    stands: clip,
+  },
+  {
+    name: 'a comparison of nobody yet',
+    who: COACH,
+    address: () => paths.compare(),
+    stands: text('Choose an athlete first'),
+  },
+  {
     name: 'a page that does not exist',
     who: COACH,
     address: () => '/nowhere',
