@@ -31,6 +31,7 @@ import { SecondMarkCommand } from '../features/second-markings/second-mark-comma
 import { SecondMark } from '../features/second-markings/second-mark.entity.ts';
 import { SecondMarking } from '../features/second-markings/second-marking.entity.ts';
 import { SetUp } from '../features/visits/set-up.entity.ts';
+import { MailChoice } from '../features/waiting-mail/mail-choice.entity.ts';
 import { Visit } from '../features/visits/visit.entity.ts';
 import { JobOutbox } from '../jobs/job-outbox.entity.ts';
 
@@ -43,6 +44,7 @@ export const entities = [
   Session,
   RecoveryCode,
   MailLink,
+  MailChoice,
   Athlete,
   ConsentWording,
   Consent,

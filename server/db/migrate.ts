@@ -19,6 +19,7 @@ import { Migration20261202041200_consent_life } from '../../migrations/Migration
 import { Migration20261202043400_erasures } from '../../migrations/Migration20261202043400_erasures.ts';
 import { Migration20261202071000_reviews } from '../../migrations/Migration20261202071000_reviews.ts';
 import { Migration20261202071700_plans } from '../../migrations/Migration20261202071700_plans.ts';
+import { Migration20261202081600_waiting_mail } from '../../migrations/Migration20261202081600_waiting_mail.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -92,6 +93,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202071700_plans',
     class: Migration20261202071700_plans,
+  },
+  {
+    name: 'Migration20261202081600_waiting_mail',
+    class: Migration20261202081600_waiting_mail,
   },
 ];
 

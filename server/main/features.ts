@@ -26,6 +26,7 @@ import { secondMarkingsFeature } from '../features/second-markings/second-markin
 import { systemFeature } from '../features/system/system.routes.ts';
 import { todayFeature } from '../features/today/today.routes.ts';
 import { visitsFeature } from '../features/visits/visits.routes.ts';
+import { waitingMailFeature } from '../features/waiting-mail/waiting-mail.routes.ts';
 import type { Feature } from './feature.ts';
 
 /** Every feature that is served. */
@@ -34,6 +35,7 @@ export const features: readonly Feature[] = [
   accountsFeature,
   oneTimeCodesFeature,
   mailLinksFeature,
+  waitingMailFeature,
   peopleFeature,
   todayFeature,
   athletesFeature,

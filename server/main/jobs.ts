@@ -7,6 +7,7 @@ import { removeHiddenJob } from '../features/replays/jobs/remove-hidden.ts';
 import { deriveReadingJob } from '../features/readings/jobs/derive-reading.ts';
 import { eraseFilesJob } from '../features/retention/jobs/erase-files.ts';
 import { tidyJob } from '../features/retention/jobs/tidy.ts';
+import { sendWaitingMailJob } from '../features/waiting-mail/jobs/send-waiting-mail.ts';
 import type { AnyJobHandler } from '../jobs/job.ts';
 
 /** Every kind of job that a worker does. */
@@ -16,6 +17,7 @@ export const jobs: readonly AnyJobHandler[] = [
   hideHeadJob,
   removeHiddenJob,
   sendMailLinkJob,
+  sendWaitingMailJob,
   sendNoticeJob,
   tidyJob,
   eraseFilesJob,

@@ -25,6 +25,7 @@ import { reviewRoutes } from './reviews.ts';
 import { secondMarkingRoutes } from './second-markings.ts';
 import { systemRoutes } from './system.ts';
 import { todayRoutes } from './today.ts';
+import { waitingMailRoutes } from './waiting-mail.ts';
 import { visitRoutes } from './visits.ts';
 
 /** Every route of the product by name. A route that is not here is not served. */
@@ -33,6 +34,7 @@ export const routes = {
   ...accountRoutes,
   ...oneTimeCodeRoutes,
   ...mailLinkRoutes,
+  ...waitingMailRoutes,
   ...peopleRoutes,
   ...todayRoutes,
   ...athleteRoutes,

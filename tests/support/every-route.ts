@@ -176,6 +176,7 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   planAgain: { version: 1, from: 'call' },
   addComment: { body: 'x', fromFrame: 0, toFrame: 0 },
   editComment: { body: 'x' },
+  setWaitingMail: { kind: 'comment', on: false },
   handIn: { about: { kind: 'call', id: NO_CALL } },
   decideReview: { verdict: 'sign-off', about: { kind: 'call', id: NO_CALL } },
   sayHere: { here: true },

@@ -26,6 +26,7 @@ export function signedInApi(role: Role = 'coach') {
   vi.stubGlobal('EventSource', SilentEvents);
   return fakeApi()
     .on(routes.me, () => aMe(role))
+    .on(routes.waitingMail, () => ({ items: [] }))
     .on(routes.protocol, () => aProtocolPage())
     .on(routes.listPlans, () => ({ items: [] }))
     .on(routes.consentWording, () => aWordingPage());

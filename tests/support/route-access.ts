@@ -45,6 +45,8 @@ export const ACCESS: Record<RouteName, Access> = {
   changePassword: 'self',
   changeEmail: 'self',
   dropEmailChange: 'self',
+  waitingMail: 'self',
+  setWaitingMail: 'self',
   startCodes: 'self',
   confirmCodes: 'self',
   renewRecoveryCodes: 'self',

@@ -11,6 +11,8 @@ import type { Athlete } from '../athletes/athlete.entity.ts';
 import { audit } from '../audit/audit.ts';
 import { needOpen } from '../athletes/consent-gate.ts';
 import { clipInSight, needFrames } from '../clips/clip-in-sight.ts';
+import { peopleFor } from '../people/people-for.ts';
+import { writeOf } from '../waiting-mail/mail-choices.ts';
 import { Comment } from './comment.entity.ts';
 import { COMMENT_ORDER } from './comments.presenter.ts';
 
@@ -65,7 +67,26 @@ export const addComment = async (
   await em.flush();
   await em.populate(comment, ['by']);
   await tellComments(unit, athlete, clipId);
+  await writeToThread(unit, athlete, comment);
   return comment;
+};
+
+/** The athlete's coach, and whoever has written in the thread, as far as they may still see it. */
+const writeToThread = async (unit: Of, athlete: Athlete, comment: Comment): Promise<void> => {
+  const { em } = unit;
+  const head = comment.answerTo ?? comment.id;
+  const thread = await em.find(Comment, { $or: [{ id: head }, { answerTo: head }] });
+  const may = (await peopleFor(em, athlete, 'comment.add')).map(({ id }) => id);
+  const wanted = new Set([athlete.coach.id, ...thread.map(({ by }) => by.id)]);
+  await writeOf(
+    unit,
+    may.filter((id) => wanted.has(id)),
+    {
+      kind: 'comment',
+      aboutId: comment.clip.id,
+      path: `/clips/${comment.clip.id}?frame=${comment.fromFrame}&comment=${head}`,
+    },
+  );
 };
 
 const commentInSight = async (

@@ -15,6 +15,7 @@ import { User } from '../accounts/user.entity.ts';
 import { audit } from '../audit/audit.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import { type VisitInSight, visitInSight } from '../visits/visit-in-sight.ts';
+import { writeOf } from '../waiting-mail/mail-choices.ts';
 import { openThreads } from './open-threads.ts';
 import { Review } from './review.entity.ts';
 import { latestCall, type Subject, subjectAsItStands } from './review-subject.ts';
@@ -134,6 +135,13 @@ export const handIn = async (
     throw new Problem('not-as-it-stands', 'It has been handed in and waits for a reviewer.');
   const subject = await subjectAsItStands(unit, visitId, side, sight.athlete, body.about);
   await take(unit, sight, side, subject, before, { step: 'handed-in', reason: body.note });
+  const reviewers = await reviewersOf(unit.em, sight.athlete);
+  const supervisors = reviewers.filter(({ role }) => role === 'supervisor');
+  await writeOf(
+    unit,
+    (supervisors.length > 0 ? supervisors : reviewers).map(({ id }) => id),
+    { kind: 'to-review', aboutId: visitId, path: '/review' },
+  );
   audit(unit, 'review.hand-in', body.about.id, about(sight, side));
   await unit.em.flush();
   return presented(unit, sight, side);
@@ -159,6 +167,12 @@ export const decideReview = async (
     );
   const reason = body.verdict === 'send-back' ? body.reason : '';
   await take(unit, sight, side, subject, before, { step, reason });
+  if (step === 'sent-back')
+    await writeOf(unit, [sight.athlete.coach.id], {
+      kind: 'sent-back',
+      aboutId: visitId,
+      path: `/visits/${visitId}/sides/${side}#sign-off`,
+    });
   audit(
     unit,
     step === 'signed-off' ? 'review.sign-off' : 'review.send-back',

@@ -12,8 +12,10 @@ import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../audit/audit.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
+import { peopleFor } from '../people/people-for.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
 import { storedReps } from '../reps/stored-reps.ts';
+import { writeOf } from '../waiting-mail/mail-choices.ts';
 import { firstMarksOn, handFrames, markableFrames, phasesOf } from './first-marks.ts';
 import { possibleMarkers } from './marker.ts';
 import { SecondMarking } from './second-marking.entity.ts';
@@ -73,6 +75,16 @@ export const startSecondMarking = async (
     frames: places.size,
   });
   await em.flush();
+  const may = await peopleFor(em, athlete, 'marks.second');
+  await writeOf(
+    unit,
+    may.flatMap(({ id }) => (id === marker.id ? [id] : [])),
+    {
+      kind: 'second-marking',
+      aboutId: marking.id,
+      path: `/second-markings/${marking.id}`,
+    },
+  );
   await em.populate(marking, ['askedBy', 'marker']);
   return presentSecondSummary(marking, [], actor.id);
 };

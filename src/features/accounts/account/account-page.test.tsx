@@ -1,6 +1,7 @@
 import { screen, waitFor, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import type { Account, SessionRow } from '#shared/contracts/accounts.ts';
+import { type WaitingMail, waitingMailKind } from '#shared/contracts/waiting-mail.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
@@ -26,8 +27,19 @@ const aSession = (change: Partial<SessionRow> = {}): SessionRow => ({
 
 const open = (account = anAccount()) => {
   let items = [aSession(), aSession({ id: THERE, device: 'Safari on iPhone', current: false })];
+  let letters: WaitingMail = {
+    items: waitingMailKind.options.map((kind) => ({ kind, on: kind !== 'comment' })),
+  };
   const api = signedInApi()
     .on(routes.account, () => account)
+    .on(routes.waitingMail, () => letters)
+    .on(routes.setWaitingMail, ({ body }) => {
+      const { kind, on } = body as { kind: string; on: boolean };
+      letters = {
+        items: letters.items.map((each) => (each.kind === kind ? { ...each, on } : each)),
+      };
+      return letters;
+    })
     .on(routes.sessions, () => ({ items }))
     .on(routes.endSession, ({ params }) => {
       items = items.filter(({ id }) => id !== params.id);
@@ -49,6 +61,26 @@ describe('one’s own account', () => {
     await user.click(screen.getByRole('button', { name: 'Change the password' }));
     expect(await screen.findByText(/Your new password holds/)).toBeVisible();
     expect(screen.getByLabelText('New password')).toHaveValue('');
+  });
+
+  it('turns the letters of each kind on and off by themselves', async () => {
+    const { api, user } = open();
+    const section = within(await screen.findByRole('region', { name: 'Letters' }));
+    const boxes = await section.findAllByRole('checkbox');
+    expect(boxes.map((box) => (box as HTMLInputElement).checked)).toEqual([
+      true,
+      true,
+      false,
+      true,
+    ]);
+    await user.click(section.getByRole('checkbox', { name: 'A side of mine was sent back' }));
+    await waitFor(() =>
+      expect(
+        section.getByRole('checkbox', { name: 'A side of mine was sent back' }),
+      ).not.toBeChecked(),
+    );
+    expect(api.calls(routes.setWaitingMail)[0]?.body).toEqual({ kind: 'sent-back', on: false });
+    expect(section.getByRole('checkbox', { name: 'A side waits for my review' })).toBeChecked();
   });
 
   it('lists where one is signed in, and signs out there', async () => {

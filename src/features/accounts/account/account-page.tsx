@@ -4,6 +4,7 @@ import { Page, Section } from '#src/ui/page.tsx';
 import { ErrorState, Loading, SkeletonLines } from '#src/ui/states.tsx';
 import { useHashTarget } from '#src/ui/use-hash-target.ts';
 import { CodesSection } from '../codes/codes-section.tsx';
+import { LettersSection } from '../letters/letters-section.tsx';
 import { EmailSection } from './email-section.tsx';
 import { NameForm } from './name-form.tsx';
 import { PasswordForm } from './password-form.tsx';
@@ -32,6 +33,13 @@ export function AccountPage() {
             note="Six digits from your phone, asked for besides the password."
           >
             <CodesSection codes={account.data.codes} />
+          </Section>
+          <Section
+            id="letters"
+            title="Letters"
+            note="When something waits for you. They name nobody who was filmed."
+          >
+            <LettersSection />
           </Section>
           <Section
             title="Signed in"

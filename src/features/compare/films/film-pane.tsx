@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { type CSSProperties, useMemo } from 'react';
 import { Link } from 'react-router-dom';
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import type { LiftFrame } from '#shared/course/match-lifts.ts';
@@ -57,8 +57,9 @@ export function FilmPane({
     <figure className="rounded bg-dusk p-3 text-dusk-ink">
       <figcaption className="pb-2">{name}</figcaption>
       <div
-        className="relative mx-auto overflow-hidden bg-[#000]"
-        style={{ aspectRatio: shape, maxWidth: `calc(58dvh * ${shape})` }}
+        // on a phone both films and the slider fit one screen
+        className="relative mx-auto max-w-[calc(30dvh*var(--shape))] overflow-hidden bg-[#000] tablet:max-w-[calc(58dvh*var(--shape))]"
+        style={{ aspectRatio: shape, '--shape': shape } as CSSProperties}
       >
         <canvas
           ref={attach}

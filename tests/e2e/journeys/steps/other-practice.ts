@@ -36,6 +36,8 @@ const WITHOUT_ID: Record<RouteNameWithoutId, Kind> = {
   changePassword: 'bare',
   changeEmail: 'bare',
   dropEmailChange: 'bare',
+  waitingMail: 'bare',
+  setWaitingMail: 'bare',
   startCodes: 'bare',
   confirmCodes: 'bare',
   renewRecoveryCodes: 'bare',
