@@ -65,7 +65,12 @@ export const filming = z
   .meta({ id: 'Filming' });
 
 export const visitBody = z
-  .object({ day: day.optional(), note: text(2000, 0).default('') })
+  .object({
+    day: day.optional(),
+    note: text(2000, 0).default(''),
+    /** A retest: filmed as that earlier visit of this athlete was. */
+    likeVisitId: id.nullable().default(null),
+  })
   .meta({ id: 'VisitBody' });
 
 export const visitEdit = z

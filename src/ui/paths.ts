@@ -15,7 +15,9 @@ export const paths = {
   athlete: (id: string) => `/athletes/${id}`,
   editAthlete: (id: string) => `/athletes/${id}/edit`,
   newConsent: (athleteId: string) => `/athletes/${athleteId}/consents/new`,
-  newVisit: (athleteId: string) => `/athletes/${athleteId}/visits/new`,
+  /** A retest is filmed like an earlier visit. */
+  newVisit: (athleteId: string, like?: string) =>
+    `/athletes/${athleteId}/visits/new${like === undefined ? '' : `?like=${like}`}`,
   visit: (id: string) => `/visits/${id}`,
   call: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}/call`,
   reading: (visitId: string, side: Side) => `/visits/${visitId}/sides/${side}`,

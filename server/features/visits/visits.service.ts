@@ -30,21 +30,22 @@ export const readVisit = (unit: Unit<UserActor>, id: string): Promise<VisitInSig
 export const addVisit = async (
   unit: Unit<UserActor>,
   athleteId: string,
-  { day, note }: z.infer<typeof visitBody>,
+  { day, note, likeVisitId }: z.infer<typeof visitBody>,
 ): Promise<VisitInSight> => {
   const { em, actor } = unit;
   const athlete = await athleteInSight(unit, athleteId, 'visit.add');
   const coach = await em.findOneOrFail(User, { id: actor.id });
+  const like = likeVisitId && found(await em.findOne(Visit, { id: likeVisitId, athlete }));
   const { setUpId } = (await currentProtocol(em)).values;
   // one that was deleted since is no set-up any more
-  const setUp = setUpId === null ? null : await em.findOne(SetUp, { id: setUpId });
+  const setUp = setUpId === null || like ? null : await em.findOne(SetUp, { id: setUpId });
   const visit = em.create(Visit, {
     athlete,
     coach,
     day: day ?? today(),
     note,
-    filming: setUp ? filmingOf(setUp) : NOT_KNOWN_YET,
-    setUpName: setUp?.name ?? null,
+    filming: like ? { ...like.filming } : setUp ? filmingOf(setUp) : NOT_KNOWN_YET,
+    setUpName: like ? like.setUpName : (setUp?.name ?? null),
   });
   audit(unit, 'visit.add', visit.id, { athlete: athleteId });
   await em.flush();

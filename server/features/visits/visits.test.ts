@@ -122,6 +122,39 @@ describe('the safety check', () => {
   });
 });
 
+describe('a retest', () => {
+  it('is filmed as the earlier visit of the athlete was, and like nobody else’s', async () => {
+    const { athlete, coach: user, practiceId } = api.world;
+    const agent = await api.as(user);
+    const filming = {
+      distanceMm: 2950,
+      lensHeightMm: 1040,
+      rodMm: 1000,
+      beltPointerMm: 140,
+      thighPointerMm: 120,
+    };
+    const path = `/api/athletes/${athlete.id}/visits`;
+    const first = (await agent.post(path).send({}).expect(201)).body as { id: string };
+    await agent.patch(`/api/visits/${first.id}`).send({ version: 1, filming }).expect(200);
+    const again = await agent.post(path).send({ likeVisitId: first.id }).expect(201);
+    expect(again.body.filming).toEqual(filming);
+    // changed later by itself alone
+    await agent
+      .patch(`/api/visits/${again.body.id}`)
+      .send({ version: 1, filming: { ...filming, distanceMm: 3100 } })
+      .expect(200);
+    const kept = await agent.get(`/api/visits/${first.id}`).expect(200);
+    expect(kept.body.visit.filming).toEqual(filming);
+    const others = await api.ground.inPractice(product(practiceId), async ({ em }) => {
+      const somebody = makeAthlete(em, { coach: user, givenName: 'Sedge' });
+      const visit = makeVisit(em, { athlete: somebody, coach: user });
+      await em.flush();
+      return visit.id;
+    });
+    await agent.post(path).send({ likeVisitId: others }).expect(404);
+  });
+});
+
 describe('a set-up', () => {
   const SET_UP = {
     name: 'Hall, blue line',

@@ -122,7 +122,14 @@ function Visits({ athlete }: { athlete: Athlete }) {
     );
   return (
     <>
-      <TrendSection visits={items} />
+      <TrendSection
+        visits={items}
+        retest={
+          may('visit.add') && athlete.consentedTo.includes('assessment')
+            ? (visitId) => paths.newVisit(athlete.id, visitId)
+            : null
+        }
+      />
       <Section title="Visits" wide>
         <VisitTable visits={items} />
       </Section>

@@ -4,6 +4,7 @@ import type { Athlete } from '#shared/contracts/athletes.ts';
 import type { PlanRow } from '#shared/contracts/plans.ts';
 import { athletePlansOptions } from '#src/api/plans.queries.ts';
 import { isProblem } from '#src/api/problem.ts';
+import { useMay } from '#src/api/use-may.ts';
 import { distance, shortDay } from '#src/ui/days.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
@@ -20,6 +21,7 @@ const STATES: Record<PlanRow['state'], [StateKind, string]> = {
 /** Every plan of this athlete, what was answered to it, and when the retest is. */
 export function PlansSection({ athlete }: { athlete: Athlete }) {
   const plans = useQuery(athletePlansOptions(athlete.id));
+  const may = useMay(athlete.coach.id);
   // what was filmed is closed: the page says so elsewhere
   if (isProblem(plans.error, 'consent-withdrawn', 'supervision-not-agreed')) return null;
   return (
@@ -39,14 +41,27 @@ export function PlansSection({ athlete }: { athlete: Athlete }) {
       )}
       <ul>
         {plans.data?.items.map((plan) => (
-          <OnePlan key={plan.id} plan={plan} />
+          <OnePlan
+            key={plan.id}
+            plan={plan}
+            athleteId={athlete.id}
+            mayFilm={may('visit.add') && athlete.consentedTo.includes('assessment')}
+          />
         ))}
       </ul>
     </Section>
   );
 }
 
-function OnePlan({ plan }: { plan: PlanRow }) {
+function OnePlan({
+  plan,
+  athleteId,
+  mayFilm,
+}: {
+  plan: PlanRow;
+  athleteId: string;
+  mayFilm: boolean;
+}) {
   const { id, visit, side, state, exercises, retest, retestOn, painUnseen, ticksThisWeek } = plan;
   const [kind, words] = STATES[state];
   return (
@@ -66,6 +81,14 @@ function OnePlan({ plan }: { plan: PlanRow }) {
         {retest ? 'a retest alone' : `${exercises} exercise${exercises === 1 ? '' : 's'}`}
         {retestOn !== null && `, retest ${distance(retestOn)}`}
         {ticksThisWeek > 0 && `, ticked off ${ticksThisWeek} times this week`}
+        {retestOn !== null && mayFilm && (
+          <>
+            .{' '}
+            <Link to={paths.newVisit(athleteId, visit.id)} className="tap">
+              Prepare the retest
+            </Link>
+          </>
+        )}
       </p>
     </li>
   );

@@ -1,3 +1,4 @@
+import { Link } from 'react-router-dom';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { VisitRow } from '#shared/contracts/visits.ts';
 import { shortDay } from '#src/ui/days.ts';
@@ -10,10 +11,20 @@ import { comparable, since, trendOf, type Trend, type TrendPoint } from './trend
 import { TrendPlot } from './trend-plot.tsx';
 
 /** How the readings of both sides went over the visits. Nothing is shown before something was measured. */
-export function TrendSection({ visits }: { visits: readonly VisitRow[] }) {
+export function TrendSection({
+  visits,
+  retest,
+}: {
+  visits: readonly VisitRow[];
+  /** Where a visit like an earlier one is opened; null where this person opens none. */
+  retest: ((visitId: string) => string) | null;
+}) {
   const whole = trendOf(visits);
   const { trend, gates, leftOut } = comparable(whole);
   if (!gates) return null;
+  const latest = visits.find(({ id }) =>
+    [...trend.left, ...trend.right].some((point) => point.visitId === id),
+  );
   const unmeasured = visits.filter(({ id }) =>
     [...whole.left, ...whole.right].every((point) => point.visitId !== id),
   ).length;
@@ -33,6 +44,13 @@ export function TrendSection({ visits }: { visits: readonly VisitRow[] }) {
             The bars are 95 % errors under our error model. Two visits differ only where they are
             further apart than both errors together.
           </p>
+          {latest && retest && (
+            <p>
+              <Link to={retest(latest.id)} className="inline-block py-1">
+                Prepare a retest, filmed as on {shortDay(latest.day)}
+              </Link>
+            </p>
+          )}
           <p>
             <MethodLink to="reading">How a reading is computed</MethodLink>
           </p>

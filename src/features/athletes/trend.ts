@@ -1,5 +1,7 @@
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { VisitRow } from '#shared/contracts/visits.ts';
+import { degrees } from '#shared/geometry/units.ts';
+import { retestChange } from '#shared/reading/compare.ts';
 import { type Gates, sameGates } from '#shared/protocol/protocol.ts';
 
 /** One measured visit of one side; angles in degrees, external positive. */
@@ -58,9 +60,15 @@ export type Since = {
 
 /** How the latest visit of a side stands against an earlier one: changed only beyond the joint error. */
 export function since(earlier: TrendPoint, latest: TrendPoint): Since {
-  const difference = latest.change - earlier.change;
-  const plusMinus = 1.96 * Math.hypot(earlier.u, latest.u);
-  return { day: earlier.day, difference, plusMinus, changed: Math.abs(difference) > plusMinus };
+  const as = ({ change, u }: TrendPoint) => ({ d: degrees(change), uC: degrees(u) });
+  const change = retestChange(as(earlier), as(latest));
+  if (!change) throw new RangeError('A trend holds finite figures.');
+  return {
+    day: earlier.day,
+    difference: change.value,
+    plusMinus: change.halfWidth,
+    changed: change.shown,
+  };
 }
 
 /** Bounds of the turn axis, degrees, in steps of ten around every error bar and zero. */

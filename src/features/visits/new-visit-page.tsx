@@ -1,10 +1,11 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { useNavigate, useParams } from 'react-router-dom';
+import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import type * as z from 'zod';
 import type { Athlete } from '#shared/contracts/athletes.ts';
+import { id } from '#shared/contracts/primitives.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { visitBody } from '#shared/contracts/visits.ts';
-import { athleteOptions, athletesKey } from '#src/api/athletes.queries.ts';
+import { athleteOptions, athletesKey, athleteVisitsOptions } from '#src/api/athletes.queries.ts';
 import { call } from '#src/api/client.ts';
 import { Button } from '#src/ui/button.tsx';
 import { ButtonLink } from '#src/ui/button-link.tsx';
@@ -12,6 +13,7 @@ import { today } from '#src/ui/days.ts';
 import { Form } from '#src/ui/form/form.tsx';
 import { TextArea, TextField } from '#src/ui/form/text-field.tsx';
 import { useZodForm } from '#src/ui/form/use-zod-form.ts';
+import { FilmedLike } from './filmed-like.tsx';
 import { Page, Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { Caution, Empty, ErrorState, Loading } from '#src/ui/states.tsx';
@@ -58,10 +60,17 @@ export function NewVisitPage() {
 
 type Typed = z.input<typeof visitBody>;
 
+/** So many earlier visits are offered. */
+const SHOWN = 6;
+
 function OpenVisit({ athlete }: { athlete: Athlete }) {
   const client = useQueryClient();
   const navigate = useNavigate();
-  const form = useZodForm(visitBody, { day: today(), note: '' });
+  const [search] = useSearchParams();
+  const asked = id.safeParse(search.get('like')).data ?? null;
+  const form = useZodForm(visitBody, { day: today(), note: '', likeVisitId: asked });
+  const visits = useQuery(athleteVisitsOptions(athlete.id));
+  const earlier = (visits.data?.items ?? []).slice(0, SHOWN);
   return (
     <Form
       form={form}
@@ -79,6 +88,7 @@ function OpenVisit({ athlete }: { athlete: Athlete }) {
         </Caution>
       )}
       <TextField<Typed> name="day" type="date" max={today()} label="Day" />
+      {earlier.length > 0 && <FilmedLike earlier={earlier} form={form} />}
       <TextArea<Typed>
         name="note"
         label="Note"
