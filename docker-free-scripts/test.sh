@@ -24,11 +24,11 @@ cd "$repo" || exit
 report=$repo/tests/.out/report
 summed=''
 REDSHANK_TEST_PG=''
-second=''
+beside=''
 
 finish() {
   stop_step
-  [[ -z $second ]] || kill -TERM "$second" 2>/dev/null || true
+  [[ -z $beside ]] || kill -TERM "$beside" 2>/dev/null || true
   [[ -z $REDSHANK_TEST_PG ]] || "$BASH" "$scripts/postgres/throwaway.sh" stop "$REDSHANK_TEST_PG"
   # The set-up failed or was stopped: that is a failed run too.
   [[ -n $summed ]] || printf '\n0 passed, 1 failed\n'
@@ -55,7 +55,7 @@ export REDSHANK_TEST_PG
 run() {
   local id=$1 label=$2 kind=$3 minutes=$4 status=0 started=$SECONDS
   shift 4
-  step_every=120 step_lines=300 step "$label" timeout --kill-after=20 "${minutes}m" "${behind[@]}" "$@" || status=$?
+  step_every=120 step_lines=300 step "$label" timeout --kill-after=20 "${minutes}m" "$@" || status=$?
   printf '%s\t%s\t%s\t%s\t%s\n' "$id" "$label" "$kind" "$status" $((SECONDS - started)) >>"$report/steps.tsv"
 }
 
@@ -69,11 +69,20 @@ vitest() {
 # What needs no browser.
 without_browser() {
   if wanted static; then
+    # each keeps one processor busy: lint beside the rest
+    (
+      trap stop_step EXIT
+      trap 'exit 130' INT TERM HUP
+      run lint 'lint' check 20 npm run --silent lint
+    ) &
+    beside=$!
     run types 'type check' check 20 npm run --silent typecheck
-    run lint 'lint' check 20 npm run --silent lint
     run format 'format' check 10 npm run --silent format:check
     run rules 'dependency rules' check 10 npm run --silent depcruise
     run drift 'migration drift' check 10 node --import tsx docker-free-scripts/drift.ts
+    # ended before its time: what it had still to do has not been seen to work
+    wait "$beside" || printf 'beside\tlint, cut short\tcheck\t1\t0\n' >>"$report/steps.tsv"
+    beside=''
   fi
   if wanted api; then
     vitest api 'API tests' 30 api
@@ -89,23 +98,8 @@ with_browser() {
     node_modules/.bin/playwright test --reporter=line,json
 }
 
-behind=()
-if wanted e2e; then
-  # A browser test waits a good part of its time. The rest of the run uses what it leaves, and gives way to it.
-  (
-    trap stop_step EXIT
-    trap 'exit 130' INT TERM HUP
-    behind=(nice -n 15)
-    without_browser
-  ) &
-  second=$!
-  with_browser
-  # ended before its time: what it had still to do has not been seen to work
-  wait "$second" || printf 'second\tthe run beside the browser tests\tcheck\t1\t0\n' >>"$report/steps.tsv"
-  second=''
-else
-  without_browser
-fi
+without_browser
+if wanted e2e; then with_browser; fi
 
 summed=yes
 node "$scripts/sum-reports.mjs" "$report"
