@@ -7,10 +7,12 @@ import type { PlanActs } from './use-plan-acts.ts';
 /** What is found otherwise, or was found since: the plan can be based on that instead. */
 export function OtherFindings({ plan, again }: { plan: Plan; again: PlanActs['again'] | null }) {
   if (plan.findings.length === 0) return null;
-  const measuredSince = plan.findings.some(({ basis }) => basis.kind === 'reading');
+  const measured = plan.findings.some(({ basis }) => basis.kind === 'reading');
+  const since =
+    plan.basis.kind === 'reading' ? 'The reading now says something else' : 'What was measured';
   return (
     <div className="mt-3">
-      <Fold title={measuredSince ? 'The reading now says something else' : 'What was seen by eye'}>
+      <Fold title={measured ? since : 'What was seen by eye'}>
         <ul className="mt-2">
           {plan.findings.map((finding) => (
             <FindingCard

@@ -5,7 +5,7 @@ import { planOptions } from '#src/api/plans.queries.ts';
 import { isProblem } from '#src/api/problem.ts';
 import { useMay } from '#src/api/use-may.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
-import { distance, longDay, shortDay } from '#src/ui/days.ts';
+import { distance, shortDay } from '#src/ui/days.ts';
 import { Page, Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { StateDot } from '#src/ui/state-dot.tsx';
@@ -59,11 +59,7 @@ function Opened({ plan }: { plan: Plan }) {
         <p className="flex flex-wrap items-center gap-x-4 text-body">
           <span>Standing on the {side} leg.</span>
           <StateDot kind={STATE_WORDS[state].kind}>{STATE_WORDS[state].words}</StateDot>
-          {retestOn !== null && (
-            <span className="text-soft">
-              Retest {longDay(retestOn)}, {distance(retestOn)}
-            </span>
-          )}
+          {retestOn !== null && <span className="text-soft">Retest {distance(retestOn)}</span>}
         </p>
       }
       actions={mayEdit && <ButtonLink to={paths.newVisit(athlete.id)}>New visit</ButtonLink>}
