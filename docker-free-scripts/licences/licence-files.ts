@@ -15,9 +15,13 @@ export const shippedPackages = (root: string) => {
   const locked = lockedPackages(root);
   const browser = withAllTheyNeed(locked, browserImports(root));
   const production = [...locked.values()].filter((one) => one.installed && isForProduction(one));
-  return [...new Set([...browser, ...production])]
-    .map((one) => ({ one, browser: browser.has(one) }))
-    .sort((a, b) => (a.one.name < b.one.name ? -1 : 1));
+  return (
+    [...new Set([...browser, ...production])]
+      // what only the compiler reads goes nowhere
+      .filter(({ name }) => !name.startsWith('@types/'))
+      .map((one) => ({ one, browser: browser.has(one) }))
+      .sort((a, b) => (a.one.name < b.one.name ? -1 : 1))
+  );
 };
 
 /**

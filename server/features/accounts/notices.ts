@@ -12,10 +12,9 @@ export const notify = async (
   await enqueue(unit, SEND_NOTICE, { userId, notice, at: new Date().toISOString() });
 };
 
-/** @param left recovery codes that are still unused */
 export const noticeLetter = (
   notice: Notice,
-  { at, home, left }: { readonly at: string; readonly home: string; readonly left: number },
+  { at, home }: { readonly at: string; readonly home: string },
 ): Letter => {
   const when = momentInWords(at);
   const notYou = `If it was not you, choose a new password now:\n${home}/forgot`;
@@ -41,7 +40,7 @@ export const noticeLetter = (
     case 'recovery-used':
       return written(
         'A recovery code was used',
-        `On ${when} a recovery code was used in place of a one-time code of your account. ${leftInWords(left)}`,
+        `On ${when} a recovery code was used in place of a one-time code of your account. How many are left stands on the page of your account.`,
         `${notYou}\nThen make new recovery codes:\n${home}/account`,
       );
     case 'recovery-renewed':
@@ -51,9 +50,4 @@ export const noticeLetter = (
         notYou,
       );
   }
-};
-
-const leftInWords = (left: number): string => {
-  if (left === 0) return 'None is left: make new ones on the page of your account.';
-  return left === 1 ? 'One is left.' : `${left} are left.`;
 };

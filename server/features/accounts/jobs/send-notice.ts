@@ -1,7 +1,6 @@
 import { product } from '../../../db/in-practice.ts';
 import { handles } from '../../../jobs/job.ts';
 import { noticeLetter } from '../notices.ts';
-import { RecoveryCode } from '../recovery-code.entity.ts';
 import { User } from '../user.entity.ts';
 import { SEND_NOTICE } from './send-notice-type.ts';
 
@@ -10,13 +9,12 @@ export const sendNoticeJob = handles({
   type: SEND_NOTICE,
   lockKey: ({ userId, notice }) => `${userId} ${notice}`,
   run: async ({ ground, practiceId, payload: { userId, notice, at } }) => {
-    const found = await ground.inPractice(product(practiceId), async ({ em }) => ({
-      user: await em.findOne(User, { id: userId }),
-      left: await em.count(RecoveryCode, { user: userId, usedAt: null }),
-    }));
-    if (!found.user) return;
-    const letter = noticeLetter(notice, { at, home: ground.config.publicUrl, left: found.left });
-    await ground.mail.send({ to: found.user.email, ...letter });
+    const user = await ground.inPractice(product(practiceId), ({ em }) =>
+      em.findOne(User, { id: userId }),
+    );
+    if (!user) return;
+    const letter = noticeLetter(notice, { at, home: ground.config.publicUrl });
+    await ground.mail.send({ to: user.email, ...letter });
   },
   expireInMinutes: 5,
   retryLimit: 12,

@@ -35,7 +35,7 @@ export function RecoveryCodes({
         Each signs you in to Redshank once, without your phone. Keep them where you find them if the
         phone is lost, and nobody else does.
       </p>
-      <ul className="grid gap-x-8 gap-y-1 border-y border-rule py-3 font-bold tabular-nums tracking-wide mobile:grid-cols-2">
+      <ul className="grid gap-x-8 gap-y-1 border-y border-rule py-3 font-bold tabular-nums tracking-wide tablet:grid-cols-2">
         {codes.map((code) => (
           <li key={code} className="select-all whitespace-nowrap">
             {code}

@@ -94,8 +94,8 @@ function DeviceStep({
         On your phone
       </h3>
       <p>
-        Point an app that makes one-time codes (an authenticator) at this picture. On this phone?{' '}
-        <a href={uri}>Open the app</a>.
+        Point an app that makes one-time codes (an authenticator) at this picture. Reading this on
+        the phone itself? <a href={uri}>Open the app</a>.
       </p>
       <QrCode text={uri} label="QR code with the secret of your one-time codes" />
       <p>

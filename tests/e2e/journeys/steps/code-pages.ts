@@ -1,4 +1,4 @@
-import type { Page } from '@playwright/test';
+import { expect, type Page } from '@playwright/test';
 import { paths } from '#src/ui/paths.ts';
 import type { PageOfProduct } from './page-of-product.ts';
 import { OWNER } from './people.ts';
@@ -52,6 +52,12 @@ export const CODES: readonly PageOfProduct[] = [
       await answer(page, '/api/account/codes/confirm', { recoveryCodes: RECOVERY });
       await page.getByLabel('The code that the app shows').fill('123456');
       await page.getByRole('button', { name: 'Turn on one-time codes' }).click();
+      // on paper they stand alone
+      await expect(page.getByText(RECOVERY[0] ?? '')).toBeVisible();
+      await page.emulateMedia({ media: 'print' });
+      await expect(page.getByText(RECOVERY[0] ?? '')).toBeVisible();
+      await expect(page.getByRole('heading', { level: 1 })).toBeHidden();
+      await page.emulateMedia({ media: null });
     },
     stands: (page) => page.getByRole('heading', { name: 'Your recovery codes' }),
   },
