@@ -74,7 +74,9 @@ describe('comparing', () => {
 
   it('of two visits says by how much they differ at the gates and between, and whether that counts', async () => {
     open(`?first=${visitId}.right&second=${otherId}.right`);
-    expect(await screen.findByText(/^Changed by more than the error\. Second less first:/)).toBeVisible();
+    expect(
+      await screen.findByText(/^Changed by more than the error\. Second less first:/),
+    ).toBeVisible();
     const courses = await matter('Courses');
     const rows = courses.getAllByRole('row').slice(1);
     expect(rows.map((row) => row.textContent)).toEqual([

@@ -158,6 +158,12 @@ const FRONT: readonly PageOfProduct[] = [
     address: () => paths.setUps(),
     stands: text('not used yet'),
   },
+  {
+    name: 'the exercises',
+    who: COACH,
+    address: () => paths.exercises(),
+    stands: heading('Exercises'),
+  },
 ];
 
 const ATHLETES: readonly PageOfProduct[] = [
@@ -292,6 +298,29 @@ const READINGS: readonly PageOfProduct[] = [
     stands: text('The call by eye comes before the figures'),
     says: /409/,
   },
+  {
+    name: 'what a plan could start from',
+    who: COACH,
+    address: ({ lindgren }) => paths.planStart(lindgren.visitId, 'right'),
+    stands: text('What was found'),
+  },
+  {
+    name: 'a plan that was given',
+    who: COACH,
+    address: ({ planId }) => paths.plan(planId),
+    stands: text('given to the athlete'),
+  },
+  {
+    name: 'a plan, an exercise being changed',
+    who: COACH,
+    address: ({ planId }) => paths.plan(planId),
+    then: (page) =>
+      page
+        .getByRole('button', { name: /^Change / })
+        .first()
+        .click(),
+    stands: text('Your own cue'),
+  },
 ];
 
 const REPLAYS: readonly PageOfProduct[] = [
@@ -300,6 +329,16 @@ const REPLAYS: readonly PageOfProduct[] = [
     who: null,
     address: ({ links }) => pathOf(links.open),
     stands: heading('Your right hip turns out early'),
+  },
+  {
+    name: 'a replay with a plan, the answer about pain open',
+    who: null,
+    address: ({ links }) => pathOf(links.open),
+    then: async (page) => {
+      await page.getByRole('button', { name: 'Say how it feels' }).click();
+      await page.getByRole('button', { name: '6', exact: true }).click();
+    },
+    stands: text('Where? Tap all that hurt.'),
   },
   {
     name: 'a replay behind a pass phrase',

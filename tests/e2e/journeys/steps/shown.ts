@@ -29,6 +29,8 @@ export interface Shown {
   /** Consent, and a visit in which nothing was done yet. */
   readonly beginner: Pick<ShownVisit, 'athleteId' | 'visitId'>;
   readonly setUpId: string;
+  /** Of Quill’s right side, given, with a day ticked off. */
+  readonly planId: string;
   readonly links: { readonly open: string; readonly locked: string; readonly ended: string };
 }
 
@@ -62,6 +64,44 @@ async function linksOf(coach: APIRequestContext, { visitId, clipId }: ShownVisit
   return { open: open.url, locked: locked.url, ended: ended.url };
 }
 
+/** The plan of the side that the links show: what nobody has to decide about, given, and answered once. */
+async function givenPlan(
+  coach: APIRequestContext,
+  { visitId }: ShownVisit,
+  link: string,
+): Promise<string> {
+  const params = { id: visitId, side: 'right' } as const;
+  const { planId } = await ask(coach, routes.planStart, { params });
+  const plan = planId
+    ? await ask(coach, routes.plan, { params: { id: planId } })
+    : await ask(coach, routes.makePlan, { params, body: { from: 'call' } });
+  const items = plan.items
+    .filter(({ undecided }) => !undecided)
+    .map(({ exercise, stage, side, dose, cue }) => ({
+      ...{ exercise, stage, side, dose, cue },
+      sideConfirmed: true,
+    }));
+  const edited = await ask(coach, routes.editPlan, {
+    params: { id: plan.id },
+    body: { version: plan.version, items, retestOn: '2999-01-01', note: 'Slowly.' },
+  });
+  await ask(coach, routes.givePlan, {
+    params: { id: plan.id },
+    body: { version: edited.version },
+  });
+  const token = new URL(link).pathname.slice('/r/'.length);
+  const day = new Date().toISOString().slice(0, 10);
+  await ask(coach, routes.tickExercise, {
+    params: { token },
+    body: { exercise: items[0]?.exercise ?? 'foot-tripod', day, done: true },
+  });
+  await ask(coach, routes.answerPain, {
+    params: { token },
+    body: { day, level: 0, places: [], which: null, time: null, exercise: null },
+  });
+  return plan.id;
+}
+
 const addAthlete = (coach: APIRequestContext, givenName: string, familyName: string) =>
   ask(coach, routes.addAthlete, { body: { givenName, familyName, birthDate: '1999-02-03' } });
 
@@ -87,8 +127,10 @@ export async function prepareShown(coach: APIRequestContext): Promise<Shown> {
       thighPointerMm: null,
     },
   });
+  const links = await linksOf(coach, quill);
   return {
     quill,
+    planId: await givenPlan(coach, quill, links.open),
     quillAside: await shownVisit(coach, 'Quill', 'lifted-side', 'IMG_0431.MP4'),
     lindgren: await shownVisit(coach, 'Lindgren'),
     brook: await shownVisit(coach, 'Brook'),
@@ -98,7 +140,7 @@ export async function prepareShown(coach: APIRequestContext): Promise<Shown> {
     newcomerId: newcomer.id,
     beginner: { athleteId: beginner.id, visitId: visit.id },
     setUpId: setUp.id,
-    links: await linksOf(coach, quill),
+    links,
   };
 }
 
