@@ -1,4 +1,4 @@
-import { useQueries } from '@tanstack/react-query';
+import { useQuery } from '@tanstack/react-query';
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import { benchOptions } from '#src/api/bench.queries.ts';
 import { Section } from '#src/ui/page.tsx';
@@ -12,10 +12,10 @@ const isReady = ({ clip }: BenchDocument): boolean =>
 
 /** Both reps playing together. */
 export function Together({ pair }: { pair: readonly [Measured, Measured] }) {
-  const [first, second] = useQueries({
-    queries: pair.map(({ rep }) => benchOptions(rep.clipId)),
-  });
-  const failed = [first, second].find((each) => each?.isError && !each.data);
+  // one request where both are of one clip
+  const first = useQuery(benchOptions(pair[0].rep.clipId));
+  const second = useQuery(benchOptions(pair[1].rep.clipId));
+  const failed = [first, second].find((each) => each.isError && !each.data);
   return (
     <Section
       title="Together"
@@ -24,7 +24,7 @@ export function Together({ pair }: { pair: readonly [Measured, Measured] }) {
     >
       {failed ? (
         <ErrorState error={failed.error} onRetry={() => void failed.refetch()} />
-      ) : !first?.data || !second?.data ? (
+      ) : !first.data || !second.data ? (
         <Loading label="Loading both clips">
           <div className="grid gap-4 tablet:grid-cols-2">
             <Skeleton className="h-80 w-full" />
