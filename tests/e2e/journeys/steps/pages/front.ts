@@ -65,7 +65,7 @@ export const FRONT: readonly PageOfProduct[] = [
     who: COACH,
     address: ({ quill }) =>
       paths.compare({ first: `${quill.visitId}.right`, second: `${quill.visitId}.right` }),
-    stands: clip,
+    stands: (page) => clip(page).first(),
   },
   {
     name: 'a comparison of nobody yet',
