@@ -34,7 +34,7 @@ export const READINGS: readonly PageOfProduct[] = [
   {
     name: 'what a plan could start from',
     who: COACH,
-    address: ({ lindgren }) => paths.planStart(lindgren.visitId, 'right'),
+    address: ({ lindgren }) => paths.planStart(lindgren.visitId, 'left'),
     stands: text('What was found'),
   },
   {
