@@ -1,14 +1,20 @@
 import type { IncomingMessage, ServerResponse } from 'node:http';
-import { pino, type Logger } from 'pino';
+import { type DestinationStream, type Logger, pino } from 'pino';
 import { pinoHttp } from 'pino-http';
 import type { RequestHandler } from 'express';
 
 /** Replay tokens, and tokens of invitations and new passwords, stand in the path. */
-const TOKEN_IN_PATH = /^(\/(?:api\/)?(?:r|join|reset|confirm-email)\/)[^/]+/;
+const TOKEN_IN_PATH = /^(\/(?:api\/)?(?:r|join|reset|confirm-email)\/)[^/]+/i;
+/** What no address needs, and a terminal that shows the log could take for a command. */
+const UNPRINTED = /[^\x21-\x7e]/g;
+const LONGEST = 300;
 
 /** The address as it may be kept: without its query, which can hold names, and without tokens. */
 export const loggedPath = (url: string): string =>
-  (url.split('?')[0] ?? '').replace(TOKEN_IN_PATH, '$1[token]');
+  (url.split('?')[0] ?? '')
+    .replace(TOKEN_IN_PATH, '$1[token]')
+    .replaceAll(UNPRINTED, '?')
+    .slice(0, LONGEST);
 
 /** Only frames: the first lines of a database error hold the values of its query. */
 const framesOf = (stack: string | undefined): string[] =>
@@ -35,13 +41,16 @@ export const loggedError = (error: unknown): Record<string, unknown> => {
   };
 };
 
-export const makeLog = (level: string): Logger =>
-  pino({
-    level,
-    base: null,
-    timestamp: pino.stdTimeFunctions.isoTime,
-    serializers: { err: loggedError },
-  });
+export const makeLog = (level: string, to: DestinationStream = pino.destination(1)): Logger =>
+  pino(
+    {
+      level,
+      base: null,
+      timestamp: pino.stdTimeFunctions.isoTime,
+      serializers: { err: loggedError },
+    },
+    to,
+  );
 
 /** One line per request: who is left out, what and how long stays in. */
 export const logRequests = (log: Logger, idOf: (res: ServerResponse) => string): RequestHandler =>
@@ -49,7 +58,7 @@ export const logRequests = (log: Logger, idOf: (res: ServerResponse) => string):
     logger: log,
     genReqId: (_req: IncomingMessage, res: ServerResponse) => idOf(res),
     quietReqLogger: true,
-    autoLogging: { ignore: (req) => !(req.url ?? '').startsWith('/api/') },
+    autoLogging: { ignore: (req) => !/^\/api\//i.test(req.url ?? '') },
     customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? 'error' : 'info'),
     serializers: {
       req: (req: { method: string; url: string }) => ({

@@ -9,6 +9,8 @@ describe('a logged address', () => {
     ['/api/athletes?q=Robin+Marsh', '/api/athletes'],
     ['/api/r/abc-DEF_123/video', '/api/r/[token]/video'],
     ['/r/abc-DEF_123', '/r/[token]'],
+    ['/API/R/abc/video', '/API/R/[token]/video'],
+    ['/api/\u009b2J\u2028x', '/api/?2J?x'],
     ['/join/abc?x=1', '/join/[token]'],
     ['/reset/abc', '/reset/[token]'],
     ['/api/clips/1/bench', '/api/clips/1/bench'],

@@ -67,7 +67,7 @@ export const problemHandler =
       res.destroy();
       return;
     }
-    res.removeHeader('Cache-Control');
+    res.setHeader('Cache-Control', 'no-store');
     res.removeHeader('ETag');
     sendProblem(res, problem);
   };

@@ -3,6 +3,7 @@ import type * as z from 'zod';
 import type { UserActor } from '#shared/access/actors.ts';
 import type { Route } from '#shared/contracts/route.ts';
 import type { InPractice, Unit } from '../db/in-practice.ts';
+import { bodyWithin } from './body-within.ts';
 import { checkAnswer } from './check-answer.ts';
 import { Refusal } from './need.ts';
 import { parseParams, parseParts } from './parse.ts';
@@ -44,8 +45,12 @@ export type Serve = <const R extends Route>(
   ...before: readonly RequestHandler[]
 ) => void;
 
-/** Enough for 5,000 marks at once from staff; a sign-in or a pass phrase needs little. */
-const BODY_LIMIT = { staff: '4mb', anyone: '32kb', link: '32kb' } as const;
+/** Enough for 5,000 marks at once from staff, over a poor line too; a sign-in or a pass phrase needs little. */
+const BODY = {
+  staff: { limit: '4mb', withinMs: 300_000 },
+  anyone: { limit: '32kb', withinMs: 30_000 },
+  link: { limit: '32kb', withinMs: 30_000 },
+} as const;
 
 export interface ServeOptions {
   readonly router: Router;
@@ -87,8 +92,10 @@ export const makeServe = ({
     onRoute?.(route);
     const steps: RequestHandler[] = [];
     if (route.audience === 'staff') steps.push(route.beforeCodes ? whoIsBeforeCodes : whoIs);
-    if (route.body && !route.multipart)
-      steps.push(jsonOnly, express.json({ limit: BODY_LIMIT[route.audience] }));
+    if (route.body && !route.multipart) {
+      const { limit, withinMs } = BODY[route.audience];
+      steps.push(jsonOnly, bodyWithin(withinMs), express.json({ limit }));
+    }
     steps.push(...before, async (req, res) => {
       const params = parseParams(route.params, req.params);
       const [query, body] = parseParts([

@@ -1,13 +1,12 @@
-import { createServer, type Server } from 'node:http';
+import type { Server } from 'node:http';
 import { join } from 'node:path';
 import { listenForEvents } from '../events/listen.ts';
 import { makeApp } from '../http/app.ts';
+import { makeHttpServer } from '../http/http-server.ts';
 import { features } from './features.ts';
 import type { Ground } from './ground.ts';
 import { repoRoot } from './root.ts';
 
-/** A connection on which nothing moves for this long is cut; live streams send a heartbeat every 20 s. */
-const IDLE_MS = 60_000;
 /** Requests under way get this long to end when the server stops. */
 const GRACE_MS = 5000;
 
@@ -43,9 +42,7 @@ export const startWeb = async (ground: Ground): Promise<Web> => {
     pages: join(repoRoot(), 'dist', 'web'),
     isClosing: () => closing,
   });
-  // A long upload is fine as long as it moves.
-  const server = createServer({ requestTimeout: 0 }, app);
-  server.setTimeout(IDLE_MS);
+  const server = makeHttpServer(app);
   await listen(server, config.port, config.host).catch(async (error: unknown) => {
     await stopListening();
     throw error;

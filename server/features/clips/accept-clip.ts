@@ -19,11 +19,14 @@ export interface ReceivedFile extends ClipFacts {
   readonly bytes: number;
 }
 
+/** Control characters, and those that turn the direction of writing around: with them `4pm.exe` reads as `exe.mp4`. */
+const UNSHOWN =
+  // eslint-disable-next-line no-control-regex -- control characters are what is taken out
+  /[\u0000-\u001f\u007f-\u009f\u061c\u200e\u200f\u2028-\u202e\u2066-\u2069]/g;
+
 /** The last part of a name as the sender's device had it; no path, nothing that cannot be shown. */
 export const shownName = (name: string): string =>
-  // eslint-disable-next-line no-control-regex -- control characters are what is taken out
-  basename(name.replaceAll('\\', '/').replaceAll(/[\u0000-\u001f\u007f]/g, '')).slice(0, 255) ||
-  'clip';
+  basename(name.replaceAll('\\', '/').replaceAll(UNSHOWN, '')).slice(0, 255) || 'clip';
 
 /**
  * Takes a complete file in: it moves to its place, then the clip and the job that prepares it are committed

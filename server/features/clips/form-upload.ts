@@ -6,6 +6,7 @@ import { clipUploadFields } from '#shared/contracts/clips.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { maxBytes } from '#server/media/limits.ts';
 import type { Feature } from '../../main/feature.ts';
+import { formFault } from '../../http/form-fault.ts';
 import { parseFields } from '../../http/parse.ts';
 import { Problem } from '../../http/problem.ts';
 import { staffOf } from '../../http/session.ts';
@@ -25,11 +26,7 @@ const ownFolder =
   };
 
 const problemOf = (error: unknown): unknown => {
-  if (!(error instanceof multer.MulterError)) {
-    // what busboy says of a form that ends too early
-    const ended = error instanceof Error && /unexpected end of form|aborted/i.test(error.message);
-    return ended ? new Problem('upload-incomplete') : error;
-  }
+  if (!(error instanceof multer.MulterError)) return formFault(error);
   if (error.code === 'LIMIT_FILE_SIZE') return new Problem('body-too-large');
   return new Problem('invalid-input', undefined, [
     { path: `body.${error.field ?? 'clip'}`, message: 'Send one file, in the field ‘clip’.' },

@@ -2,6 +2,7 @@ import type { Request, RequestHandler } from 'express';
 import multer from 'multer';
 import { MAX_SCAN_BYTES } from '#shared/contracts/consents.ts';
 import type { Ground } from '../../main/ground.ts';
+import { formFault } from '../../http/form-fault.ts';
 import { Problem } from '../../http/problem.ts';
 import { staffOf } from '../../http/session.ts';
 import { consentInSight } from './scans.service.ts';
@@ -9,11 +10,7 @@ import { consentInSight } from './scans.service.ts';
 const TOO_LARGE = 'A scan may weigh up to 10 MB. Scan it in grey at 300 dpi, or photograph it.';
 
 const problemOf = (error: unknown): unknown => {
-  if (!(error instanceof multer.MulterError)) {
-    // what busboy says of a form that ends too early
-    const ended = error instanceof Error && /unexpected end of form|aborted/i.test(error.message);
-    return ended ? new Problem('upload-incomplete') : error;
-  }
+  if (!(error instanceof multer.MulterError)) return formFault(error);
   if (error.code === 'LIMIT_FILE_SIZE') return new Problem('body-too-large', TOO_LARGE);
   return new Problem('invalid-input', undefined, [
     { path: `body.${error.field ?? 'scan'}`, message: 'Send one file, in the field ‘scan’.' },
