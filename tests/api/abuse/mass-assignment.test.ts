@@ -7,6 +7,7 @@ import { type Api, startApi } from '#tests/support/api.ts';
 import { foundInDatabase, query } from '#tests/support/whole-database.ts';
 import { addressOf, BODIES, NAMES } from '#tests/support/every-route.ts';
 import { tokenTo } from '#tests/support/letters.ts';
+import { jsonSchemaOf } from '#tests/support/json-schema-of.ts';
 import { makeOneOfEach } from '#tests/support/one-of-each.ts';
 import { ACCESS } from '#tests/support/route-access.ts';
 
@@ -69,16 +70,15 @@ const bodies = (Object.entries(routes) as [RouteName, Route][]).filter(([, { bod
 describe('a body', () => {
   it.each(bodies)('of %s keeps no field that its contract does not name', (_name, { body }) => {
     if (!body) throw new Error('a body was expected');
-    const schema = z.toJSONSchema(body, { io: 'output', unrepresentable: 'any' });
+    const schema = jsonSchemaOf(body, 'output');
     expect(openPlaces(schema, '')).toEqual([]);
   });
 
   it('names no practice, no token and nothing that only the product decides', () => {
     const never = /^(practice|practiceId|.*Hash|createdAt|signedOff.*|revokedAt|disabledAt|files)$/;
     for (const [name, { body }] of bodies) {
-      const text = JSON.stringify(
-        z.toJSONSchema(body ?? z.object({}), { io: 'input', unrepresentable: 'any' }),
-        (key, value: unknown) => (key === 'properties' ? Object.keys(value as object) : value),
+      const text = JSON.stringify(jsonSchemaOf(body ?? z.object({})), (key, value: unknown) =>
+        key === 'properties' ? Object.keys(value as object) : value,
       );
       const fields = [...text.matchAll(/"properties":\[([^\]]*)\]/g)].flatMap(([, list]) =>
         (list ?? '').split(',').map((field) => field.replaceAll('"', '')),
@@ -92,10 +92,7 @@ describe('a body', () => {
 });
 
 const fieldsOf = ({ body }: Route): string[] =>
-  Object.keys(
-    (z.toJSONSchema(body ?? z.object({}), { io: 'input', unrepresentable: 'any' }) as Schema)
-      .properties ?? {},
-  );
+  Object.keys((jsonSchemaOf(body ?? z.object({})) as Schema).properties ?? {});
 
 const foreign = async (): Promise<string> =>
   JSON.stringify(

@@ -6,7 +6,7 @@ import { query } from '#tests/support/whole-database.ts';
 
 // every password is wrong, and that costs nothing
 vi.mock('bcryptjs', async (actual) => ({
-  ...(await actual<typeof import('bcryptjs')>()),
+  ...(await actual<typeof bcrypt>()),
   compare: vi.fn(() => Promise.resolve(false)),
 }));
 const compare = vi.mocked(bcrypt.compare);
