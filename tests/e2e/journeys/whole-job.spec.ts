@@ -12,7 +12,9 @@ import {
   setScale,
 } from './steps/bench.ts';
 import { addMarkedRep, markRest } from './steps/marks-by-api.ts';
+import { expectPainTold, givePlan, tickAndTell } from './steps/plan.ts';
 import { drawnPixels, expectPlaying } from './steps/replay.ts';
+import { handIn, sendBack, signOff } from './steps/review.ts';
 import {
   everythingOf,
   expectNothingBehindRoutes,
@@ -39,6 +41,7 @@ const made = loadedRun();
 
 const MOMENT = framesOf(0)[26] ?? NaN;
 const COMMENT = 'Here the belt pointer swings out while the thigh comes to level.';
+const REASON = 'Look at the belt tip of rep 1 once more.';
 const MESSAGE = 'Watch the stick on your belt while your knee goes up.';
 
 /** Frames of the first rep that are marked on the page itself: stance, either side of 60° and of 90°, the top. */
@@ -162,6 +165,40 @@ test('the coach finds the comment on the strip, answers and resolves it', async 
   await expect(page.getByRole('button', { name: 'Open again' })).toBeVisible();
 });
 
+test('the side is handed in, sent back with a stroke and a reason, mended and signed off', async ({
+  app,
+  page,
+}) => {
+  await signIn(page, app, COACH);
+  await handIn(page, made);
+
+  await signIn(page, app, SUPERVISOR);
+  const { u, v } = placeOn(placesOf(0), MOMENT, 'belt-tip');
+  await sendBack(page, made, {
+    frame: MOMENT,
+    words: 'The tip of the belt stick lies a little further out.',
+    reason: REASON,
+    along: [
+      { u, v },
+      { u: u + 60, v: v + 20 },
+      { u: u + 90, v: v + 60 },
+    ],
+  });
+
+  await signIn(page, app, COACH);
+  await page.goto('/');
+  await expect(page.getByText(REASON)).toBeVisible();
+  await handIn(page, made);
+
+  await signIn(page, app, SUPERVISOR);
+  await signOff(page, made);
+});
+
+test('the coach makes the plan from the reading and gives it', async ({ app, page }) => {
+  await signIn(page, app, COACH);
+  await givePlan(page, made, '2031-05-04');
+});
+
 test('the coach makes a replay link, which is shown once', async ({ app, page }) => {
   await signIn(page, app, COACH);
   await page.goto(`/visits/${made.visitId}/sides/right`);
@@ -203,7 +240,13 @@ test('the athlete opens the link on a phone, without an account', async ({ brows
   expect(await phone.cookies()).toEqual([]);
   for (const route of [routes.clip, routes.clipVideo, routes.bench])
     expect((await send(page.request, route, { params: { id: made.clipId } })).status()).toBe(401);
+  await tickAndTell(page);
   await phone.close();
+});
+
+test('what hurts is the first thing in the coach’s Today', async ({ app, page }) => {
+  await signIn(page, app, COACH);
+  await expectPainTold(page, made);
 });
 
 test('none of it is there for a coach of another practice', async ({
