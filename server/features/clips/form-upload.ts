@@ -21,7 +21,13 @@ const ownFolder =
   async (_req, res, next) => {
     const folder = await mkdtemp(join(incoming, 'form-'));
     res.locals.folder = folder;
-    res.once('close', () => void rm(folder, { recursive: true, force: true }));
+    const remove = () => rm(folder, { recursive: true, force: true, maxRetries: 3 });
+    // cut while the gate was asked: nobody is there to answer, and nothing would remove the folder later
+    if (res.closed) {
+      await remove();
+      return;
+    }
+    res.once('close', () => void remove());
     next();
   };
 

@@ -144,7 +144,7 @@ describe('an upload', () => {
     const socket = await start(1_000_000);
     socket.write('x'.repeat(1000));
     await ended(socket);
-    await expect.poll(incoming).toEqual([]);
+    await expect.poll(incoming, { timeout: 10_000 }).toEqual([]);
   });
 
   it('that moves is waited for, longer than headers are', async () => {
