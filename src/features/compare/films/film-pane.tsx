@@ -6,12 +6,12 @@ import { overlay } from '#shared/overlay/overlay.ts';
 import { turnAt } from '#shared/reading/at-lift.ts';
 import { engineMarks } from '#shared/records/engine-input.ts';
 import { marksWith } from '#shared/records/stored-marks.ts';
+import { OverlayCanvas } from '#src/canvas/overlay-canvas.tsx';
 import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { Button } from '#src/ui/button.tsx';
 import { degrees, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import type { Measured } from '../measured.ts';
-import { OverlayCanvas } from './overlay-canvas.tsx';
 import type { Film } from './use-film.ts';
 
 /** One of the two films with its marks, and where it stands. */
@@ -32,7 +32,7 @@ export function FilmPane({
   const { attach, ready, error, retry } = film;
   const { clip, reps } = document;
   const size = useMemo(
-    () => ({ width: clip.width ?? 9, height: clip.height ?? 16 }),
+    () => ({ u: 0, v: 0, width: clip.width ?? 9, height: clip.height ?? 16 }),
     [clip.width, clip.height],
   );
   const stored = reps.find((each) => each.rep.id === rep.id);
@@ -67,7 +67,7 @@ export function FilmPane({
           aria-label={`${name}, frame ${shown.frame}`}
           className="absolute inset-0 h-full w-full"
         />
-        <OverlayCanvas primitives={primitives} size={size} />
+        <OverlayCanvas primitives={primitives} part={size} />
         {error ? (
           <div role="alert" className="absolute inset-x-3 top-1/3 rounded bg-mud p-4 text-ink">
             <p className="mb-3">{error.message}</p>

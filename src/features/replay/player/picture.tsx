@@ -1,6 +1,6 @@
-import { useEffect, useRef, type RefObject } from 'react';
+import type { RefObject } from 'react';
 import type { Primitive } from '#shared/overlay/types.ts';
-import { paintOverlay } from '#src/canvas/overlay-painter.ts';
+import { OverlayCanvas } from '#src/canvas/overlay-canvas.tsx';
 import type { Crop } from './crop.ts';
 
 /** The video with the overlay over it, both showing the same part of the source frame. */
@@ -24,29 +24,6 @@ export function Picture({
   primitives: readonly Primitive[];
   onFailed: () => void;
 }) {
-  const canvas = useRef<HTMLCanvasElement>(null);
-  useEffect(() => {
-    const element = canvas.current;
-    if (!element) return;
-    const paint = () => {
-      const { width, height } = element.getBoundingClientRect();
-      const unit = window.devicePixelRatio || 1;
-      element.width = Math.round(width * unit);
-      element.height = Math.round(height * unit);
-      const context = element.getContext('2d');
-      if (!context || element.width === 0) return;
-      const scale = element.width / crop.width;
-      paintOverlay(context, primitives, {
-        viewport: { scale, x: -crop.u * scale, y: -crop.v * scale },
-        bounds: { width: element.width, height: element.height },
-        unit,
-      });
-    };
-    paint();
-    const observer = new ResizeObserver(paint);
-    observer.observe(element);
-    return () => observer.disconnect();
-  }, [primitives, crop]);
   return (
     <div
       className="relative mx-auto w-full overflow-hidden print:hidden"
@@ -72,7 +49,7 @@ export function Picture({
           top: `${(-100 * crop.v) / crop.height}%`,
         }}
       />
-      <canvas ref={canvas} aria-hidden="true" className="absolute inset-0 h-full w-full" />
+      <OverlayCanvas primitives={primitives} part={crop} />
     </div>
   );
 }

@@ -1,16 +1,22 @@
 import { useEffect, useRef } from 'react';
 import type { Primitive } from '#shared/overlay/types.ts';
-import { paintOverlay } from '#src/canvas/overlay-painter.ts';
-import type { Size } from '#src/canvas/viewport.ts';
+import { paintOverlay } from './overlay-painter.ts';
 
-/** The overlay over a picture that fills the same box. */
+/** A rectangle of the source frame, px; `u` and `v` of its upper left corner. */
+export interface ShownPart {
+  readonly u: number;
+  readonly v: number;
+  readonly width: number;
+  readonly height: number;
+}
+
+/** The overlay over a picture that fills the same box and shows the same part of the source frame. */
 export function OverlayCanvas({
   primitives,
-  size,
+  part,
 }: {
   primitives: readonly Primitive[];
-  /** Of the source frame, px. */
-  size: Size;
+  part: ShownPart;
 }) {
   const canvas = useRef<HTMLCanvasElement>(null);
   useEffect(() => {
@@ -23,8 +29,9 @@ export function OverlayCanvas({
       element.height = Math.round(height * unit);
       const context = element.getContext('2d');
       if (!context || element.width === 0) return;
+      const scale = element.width / part.width;
       paintOverlay(context, primitives, {
-        viewport: { scale: element.width / size.width, x: 0, y: 0 },
+        viewport: { scale, x: -part.u * scale, y: -part.v * scale },
         bounds: { width: element.width, height: element.height },
         unit,
       });
@@ -33,7 +40,7 @@ export function OverlayCanvas({
     const observer = new ResizeObserver(paint);
     observer.observe(element);
     return () => observer.disconnect();
-  }, [primitives, size]);
+  }, [primitives, part]);
   return (
     <canvas
       ref={canvas}
