@@ -31,19 +31,22 @@ export const need = (
   throw new Refusal(seen ? 'not-allowed' : 'not-found', action, athleteId);
 };
 
+/** An athlete, as far as it matters to who may do what. */
+interface OfCoach {
+  readonly practiceId: string;
+  readonly coach: { readonly id: string };
+}
+
+/** The caseload that an athlete belongs to, for `can`. */
+export const caseloadOf = ({ practiceId, coach }: OfCoach) =>
+  ({ kind: 'caseload', practiceId, coachId: coach.id }) as const satisfies Resource;
+
 /** The same, said of an athlete by their coach; works for every entity that knows its athlete. */
 export const needCaseload = (
   actor: Actor,
   action: Action,
-  athlete: {
-    readonly id: string;
-    readonly practiceId: string;
-    readonly coach: { readonly id: string };
-  },
-): void => {
-  const { practiceId, coach } = athlete;
-  need(actor, action, { kind: 'caseload', practiceId, coachId: coach.id }, athlete.id);
-};
+  athlete: OfCoach & { readonly id: string },
+): void => need(actor, action, caseloadOf(athlete), athlete.id);
 
 /** What was looked for, or `not-found`. */
 export const found = <T>(thing: T | null | undefined): T => {

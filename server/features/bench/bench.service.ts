@@ -3,6 +3,7 @@ import { can } from '#shared/access/can.ts';
 import type { BenchDocument } from '#shared/contracts/bench.ts';
 import { side } from '#shared/contracts/primitives.ts';
 import type { Unit } from '#server/db/in-practice.ts';
+import { caseloadOf } from '../../http/need.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
 import { Call } from '../calls/call.entity.ts';
 import { presentCall } from '../calls/calls.presenter.ts';
@@ -26,11 +27,7 @@ const withMarks = (stored: NumberedRep) => ({
 });
 
 const mayOn = (actor: UserActor, athlete: Athlete): BenchDocument['may'] => {
-  const caseload = {
-    kind: 'caseload',
-    practiceId: athlete.practiceId,
-    coachId: athlete.coach.id,
-  } as const;
+  const caseload = caseloadOf(athlete);
   return {
     mark: can(actor, 'marks.save', caseload),
     comment: can(actor, 'comment.add', caseload),

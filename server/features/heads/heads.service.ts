@@ -4,7 +4,7 @@ import { can } from '#shared/access/can.ts';
 import type { headBody, HeadPage } from '#shared/contracts/heads.ts';
 import { headGrowth } from '#shared/head/head-track.ts';
 import type { Unit } from '#server/db/in-practice.ts';
-import { found } from '../../http/need.ts';
+import { caseloadOf, found } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
 import { type ClipInSight, clipInSight, needFrames } from '../clips/clip-in-sight.ts';
@@ -19,11 +19,9 @@ type Of = Unit<UserActor>;
 
 const pageOf = async ({ em, actor }: Of, { clip, athlete }: ClipInSight): Promise<HeadPage> => {
   const head = await currentHead(em, clip.id);
-  const { practiceId, coach } = athlete;
-  const caseload = { kind: 'caseload', practiceId, coachId: coach.id } as const;
   return {
     head: head && presentHead(head, clip),
-    may: { save: can(actor, 'head.save', caseload) },
+    may: { save: can(actor, 'head.save', caseloadOf(athlete)) },
   };
 };
 

@@ -1,6 +1,7 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Action } from '#shared/access/actions.ts';
 import { can } from '#shared/access/can.ts';
+import { caseloadOf } from '../../http/need.ts';
 import type { User } from '../accounts/user.entity.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
 import { hasConsent } from '../athletes/consent-check.ts';
@@ -17,11 +18,7 @@ export const peopleFor = async (
 ): Promise<User[]> => {
   if (athlete.deletionDue) return [];
   const supervised = await hasConsent(em, athlete.id, 'supervision');
-  const resource = {
-    kind: 'caseload',
-    practiceId: athlete.practiceId,
-    coachId: athlete.coach.id,
-  } as const;
+  const resource = caseloadOf(athlete);
   return (await actorsOfAthlete(em, athlete))
     .filter(
       ({ actor }) =>

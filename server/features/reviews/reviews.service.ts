@@ -9,6 +9,7 @@ import type {
 } from '#shared/contracts/reviews.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { tell } from '../../events/tell.ts';
+import { caseloadOf } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { User } from '../accounts/user.entity.ts';
@@ -42,11 +43,7 @@ const presented = async (
   const setting = await em.findOne(SideSetting, { visit: visit.id, side });
   const call = await latestCall(unit, visit.id, side);
   const [last] = steps;
-  const resource = {
-    kind: 'caseload',
-    practiceId: athlete.practiceId,
-    coachId: athlete.coach.id,
-  } as const;
+  const resource = caseloadOf(athlete);
   return {
     state: reviewStateOf(
       last
