@@ -9,13 +9,9 @@ import { sidesDifference } from '#shared/reading/compare.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { presentProtocolRef } from '../protocol/protocol.presenter.ts';
 import type { NumberedRep } from '../reps/stored-reps.ts';
+import { plusMinus } from './plus-minus.ts';
 import type { Reading } from './reading.entity.ts';
 import { resultOf } from './result-of.ts';
-
-/** 95 % of true values lie within this many standard uncertainties. */
-const COVERAGE = 1.96;
-
-const plusMinus = (u: number | null): number | null => (u === null ? null : COVERAGE * u);
 
 export const presentMarkError = ({ anatomicalPx, doublyMarkedFrames }: MarkError) => ({
   px: anatomicalPx,
@@ -28,7 +24,7 @@ export const presentSummary = (reading: Reading): SidePage['history'][number] =>
   code: reading.code,
   label: readingLabel(reading.code, reading.before60, reading.gateFrom),
   change: reading.change ?? null,
-  plusMinus: plusMinus(reading.u ?? null),
+  plusMinus: plusMinus(reading.u),
   by: presentPerson(reading.by.unwrap()),
   markError: presentMarkError({
     anatomicalPx: reading.markErrorPx,

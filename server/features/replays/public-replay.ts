@@ -16,6 +16,7 @@ import { audit } from '../audit/audit.ts';
 import { athletePlanOf } from '../plans/athlete-answers.ts';
 import { Practice } from '../practice/practice.entity.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
+import { plusMinus } from '../readings/plus-minus.ts';
 import { resultOf } from '../readings/result-of.ts';
 import type { Reading } from '../readings/reading.entity.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
@@ -99,7 +100,7 @@ const readingOf = (reading: Reading | null, replay: Replay): PublicReplay['readi
     code: reading.code,
     label: readingLabel(reading.code, reading.before60, reading.gateFrom),
     change: reading.change ?? null,
-    plusMinus: reading.u === null || reading.u === undefined ? null : 1.96 * reading.u,
+    plusMinus: plusMinus(reading.u),
     probability: probabilityOf(result),
     repsUsed: result.reps.filter(({ used }) => used).length,
     repsAgreeing: agreeing(result),

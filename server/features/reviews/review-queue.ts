@@ -6,12 +6,11 @@ import type { ReviewItem } from '#shared/contracts/reviews.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { need } from '../../http/need.ts';
 import { openInSightSql } from '../athletes/consent-gate.ts';
+import { plusMinus } from '../readings/plus-minus.ts';
 import { CLIPS_OF_SIDE } from './open-threads.ts';
 
 /** A list that nobody reads to its end. */
 const AT_MOST = 100;
-/** 95 % of true values lie within this many standard uncertainties. */
-const COVERAGE = 1.96;
 
 type Row = {
   visit_id: string;
@@ -93,7 +92,7 @@ const presentItem = (row: Row): ReviewItem => ({
       ? null
       : readingLabel(row.code, row.before60 === true, row.gate_from ?? Number.NaN),
   change: row.change,
-  plusMinus: row.u === null ? null : COVERAGE * row.u,
+  plusMinus: plusMinus(row.u),
   seen: row.seen,
   again: row.again,
   openComments: row.open_comments,

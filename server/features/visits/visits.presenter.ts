@@ -7,15 +7,13 @@ import type {
 import { degrees } from '#shared/geometry/units.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
 import { isMinor } from '../athletes/days.ts';
+import { plusMinus } from '../readings/plus-minus.ts';
 import { reviewStateOf } from '../reviews/reviews.presenter.ts';
 import { mayFilm } from './safety.ts';
 import type { SetUp } from './set-up.entity.ts';
 import { filmingOf } from './set-ups.service.ts';
 import type { HistoryRow, HistorySide } from './visit-history.ts';
 import type { VisitInSight } from './visit-in-sight.ts';
-
-/** 95 % of a normal distribution lie within this many standard uncertainties. */
-const COVERAGE = 1.96;
 
 export const presentVisit = ({ visit, athlete, coach }: VisitInSight): VisitShape => {
   const minor = isMinor(athlete.birthDate);
@@ -51,7 +49,7 @@ const presentSide = (row: HistorySide): VisitRow['sides'][number] => ({
           label: readingLabel(row.code, row.before60, row.gateFrom),
           gates: { from: degrees(row.gateFrom), to: degrees(row.gateTo) },
           change: row.change,
-          plusMinus: row.u === null ? null : COVERAGE * row.u,
+          plusMinus: plusMinus(row.u),
           u: row.u,
           provisional: row.provisional,
         },
