@@ -13,6 +13,13 @@ export function today(now = new Date()): string {
   return `${now.getFullYear()}-${two(now.getMonth() + 1)}-${two(now.getDate())}`;
 }
 
+/** The calendar day so many days ago, here. */
+export function dayBack(count: number): string {
+  const day = new Date();
+  day.setDate(day.getDate() - count);
+  return today(day);
+}
+
 /** `3 March 2026` */
 export const longDay = (day: string): string =>
   format(atNoon(day), { day: 'numeric', month: 'long', year: 'numeric' });

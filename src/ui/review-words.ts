@@ -1,5 +1,6 @@
 import type { ReviewItem, ReviewState } from '#shared/contracts/reviews.ts';
 import { plusMinus, turn } from './figures.ts';
+import { paths } from './paths.ts';
 import type { StateKind } from './state-dot.tsx';
 import { SEEN_WORDS, supportWords } from './words.ts';
 
@@ -33,6 +34,14 @@ const opening = ({ opens, openComments }: ReviewItem): string => {
   const more = others === 0 ? '' : ` and ${others} more ${others === 1 ? 'is' : 'are'} open`;
   return `Opens at frame ${opens.frame}, ${opens.mine ? 'your open comment' : 'an open comment'}${more}.`;
 };
+
+/** Where its clip opens; null without one. */
+export const reviewClipPath = ({ opens }: ReviewItem): string | null =>
+  opens &&
+  paths.bench(opens.clipId, {
+    frame: opens.frame,
+    ...(opens.commentId === null ? {} : { comment: opens.commentId }),
+  });
 
 /** What is known before it is opened, in two or three short sentences. */
 export const reviewDetail = (item: ReviewItem): string =>

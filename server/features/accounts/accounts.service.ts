@@ -22,8 +22,8 @@ export type SignedIn =
   { readonly session: OpenSession } | { readonly half: Omit<HalfSession, 'until'> };
 
 /**
- * Opens a session, or the second step of a sign-in. An unknown address, a closed account and a wrong password give the same answer after the same
- * time.
+ * Opens a session, or the second step of a sign-in. An unknown address, a closed account and a wrong password give
+ * the same answer after the same time.
  * @throws Problem 'sign-in-refused'
  */
 export const signIn = async (

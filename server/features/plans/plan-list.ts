@@ -4,6 +4,7 @@ import type { Side } from '#shared/contracts/primitives.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 import { needOpen } from '../athletes/consent-gate.ts';
+import { planStateOf } from './plans.presenter.ts';
 
 type Row = {
   id: string;
@@ -12,7 +13,9 @@ type Row = {
   side: Side;
   retest_on: string | null;
   rule: string | null;
-  state: PlanRow['state'];
+  version: number;
+  given_version: number | null;
+  stopped: boolean;
   exercises: number;
   pain: number;
   ticks: number;
@@ -20,8 +23,7 @@ type Row = {
 
 const LIST = `
   select p.id, v.id as visit_id, v.day::text, p.side, p.retest_on::text, p.rule,
-    case when g.id is null then 'draft' when g.content is null then 'stopped'
-      when g.plan_version = p.version then 'given' else 'changed-since' end as state,
+    p.version, g.plan_version as given_version, g.content is null as stopped,
     (select count(*)::int from plan_item i where i.plan_id = p.id) as exercises,
     (select count(*)::int from plan_pain n where n.plan_id = p.id and n.level > 0 and n.seen_at is null) as pain,
     (select count(*)::int from (
@@ -31,7 +33,7 @@ const LIST = `
   from plan p
   join visit v on v.id = p.visit_id
   left join lateral (
-    select id, content, plan_version from given_plan where plan_id = p.id order by number desc limit 1
+    select content, plan_version from given_plan where plan_id = p.id order by number desc limit 1
   ) g on true
   where v.athlete_id = ?
   order by v.day desc, v.created_at desc, p.side`;
@@ -45,7 +47,10 @@ export const listPlans = async (unit: Unit<UserActor>, athleteId: string): Promi
     id: row.id,
     visit: { id: row.visit_id, day: row.day },
     side: row.side,
-    state: row.state,
+    state: planStateOf(
+      row.version,
+      row.given_version === null ? null : { planVersion: row.given_version, stopped: row.stopped },
+    ),
     exercises: row.exercises,
     retest: row.rule === null,
     retestOn: row.retest_on,

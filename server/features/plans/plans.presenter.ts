@@ -42,9 +42,13 @@ const presentItem = (item: PlanItem, safety: SafetyState): PlanItemShape => {
   };
 };
 
-const stateOfPlan = ({ version }: Plan, [last]: readonly GivenPlan[]): PlanState => {
+/** @param last what the athlete got last; null where nothing was given yet */
+export const planStateOf = (
+  version: number,
+  last: { readonly planVersion: number; readonly stopped: boolean } | null,
+): PlanState => {
   if (!last) return 'draft';
-  if (!last.content) return 'stopped';
+  if (last.stopped) return 'stopped';
   return last.planVersion === version ? 'given' : 'changed-since';
 };
 
@@ -85,6 +89,7 @@ export const presentPlan = ({
   readonly findings: readonly FindingOfSide[];
 }): PlanShape => {
   const safety = stateOf(ofVisit.safety);
+  const [last] = given;
   return {
     id: plan.id,
     ...ofVisit,
@@ -94,7 +99,10 @@ export const presentPlan = ({
     items: items.map((item) => presentItem(item, safety)),
     note: plan.note,
     retestOn: plan.retestOn ?? null,
-    state: stateOfPlan(plan, given),
+    state: planStateOf(
+      plan.version,
+      last ? { planVersion: last.planVersion, stopped: !last.content } : null,
+    ),
     missing: missingOf(plan, items, safety),
     given: given.map(({ number, content, by, at }) => ({
       number,

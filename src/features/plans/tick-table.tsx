@@ -1,20 +1,14 @@
 import type { Plan } from '#shared/contracts/plans.ts';
-import { shortDay, today } from '#src/ui/days.ts';
+import { dayBack, shortDay } from '#src/ui/days.ts';
 
 const DAYS = 14;
-
-const daysBack = (count: number): string => {
-  const day = new Date();
-  day.setDate(day.getDate() - count);
-  return today(day);
-};
 
 /** The last two weeks, a dot for each day on which an exercise was ticked off, beside what was asked. */
 export function TickTable({ plan: { given, ticks } }: { plan: Plan }) {
   const running = given.find(({ plan }) => plan !== null)?.plan;
   const items = running?.items ?? [];
   if (items.length === 0) return <p className="text-soft">No exercise was given.</p>;
-  const days = Array.from({ length: DAYS }, (_, n) => daysBack(DAYS - 1 - n));
+  const days = Array.from({ length: DAYS }, (_, n) => dayBack(DAYS - 1 - n));
   return (
     <ul>
       {items.map(({ exercise, name, dose }) => {

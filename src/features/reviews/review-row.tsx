@@ -3,19 +3,14 @@ import type { ReviewItem } from '#shared/contracts/reviews.ts';
 import { ButtonLink } from '#src/ui/button-link.tsx';
 import { moment } from '#src/ui/days.ts';
 import { paths } from '#src/ui/paths.ts';
-import { reviewDetail, reviewTitle } from '#src/ui/review-words.ts';
+import { reviewClipPath, reviewDetail, reviewTitle } from '#src/ui/review-words.ts';
 
 /** One side that waits: its clip at the moment that matters, and the page where the word is said. */
 export function ReviewRow({ item, pressing }: { item: ReviewItem; pressing: boolean }) {
-  const { visitId, side, opens } = item;
+  const { visitId, side } = item;
   const title = reviewTitle(item);
   const signOff = `${paths.reading(visitId, side)}#sign-off`;
-  const clip =
-    opens &&
-    paths.bench(opens.clipId, {
-      frame: opens.frame,
-      ...(opens.commentId === null ? {} : { comment: opens.commentId }),
-    });
+  const clip = reviewClipPath(item);
   return (
     <li className="grid gap-x-6 border-b border-rule py-3 first:pt-0 last:border-0 tablet:grid-cols-[minmax(0,1fr)_auto]">
       <div>

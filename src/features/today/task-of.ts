@@ -3,7 +3,7 @@ import { distance, moment } from '#src/ui/days.ts';
 import { inWords } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import { PAIN_PLACE_WORDS } from '#src/ui/pain-words.ts';
-import { reviewDetail, reviewTitle } from '#src/ui/review-words.ts';
+import { reviewClipPath, reviewDetail, reviewTitle } from '#src/ui/review-words.ts';
 import { supportWords } from '#src/ui/words.ts';
 
 export type TaskGroup =
@@ -103,7 +103,7 @@ export function taskOf(item: Waiting): Task {
         action: { label: 'Open the reading', to: paths.reading(item.visitId, item.side) },
       };
     case 'to-review': {
-      const { visitId, side, opens } = item;
+      const { visitId, side } = item;
       return {
         key: `to-review ${visitId} ${side}`,
         group: 'sides',
@@ -112,12 +112,7 @@ export function taskOf(item: Waiting): Task {
         when: `since ${moment(item.at)}`,
         action: {
           label: 'Review',
-          to: opens
-            ? paths.bench(opens.clipId, {
-                frame: opens.frame,
-                ...(opens.commentId === null ? {} : { comment: opens.commentId }),
-              })
-            : `${paths.reading(visitId, side)}#sign-off`,
+          to: reviewClipPath(item) ?? `${paths.reading(visitId, side)}#sign-off`,
         },
       };
     }

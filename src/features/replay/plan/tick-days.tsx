@@ -1,13 +1,8 @@
 import { useState } from 'react';
-import { longDay, today } from '#src/ui/days.ts';
+import { dayBack, longDay } from '#src/ui/days.ts';
 
 const DAYS = 7;
 
-const dayBack = (count: number): string => {
-  const day = new Date();
-  day.setDate(day.getDate() - count);
-  return today(day);
-};
 const weekday = (day: string) =>
   new Intl.DateTimeFormat('en-GB', { weekday: 'short' }).format(new Date(`${day}T12:00:00`));
 
