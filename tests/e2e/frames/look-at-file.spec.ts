@@ -1,5 +1,5 @@
 import { expect, test } from '@playwright/test';
-import { truncate, writeFile } from 'node:fs/promises';
+import { stat, truncate, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { runTool } from '../../fixtures/video/run-tool.ts';
 import { filmSource } from '../../fixtures/video/source-clips.ts';
@@ -30,16 +30,19 @@ test('an upright HEVC film of a phone: its numbers, and that this browser cannot
 });
 
 test('H.264 can be decoded here; a cut file is told by its index', async ({ page }) => {
-  const { path } = await filmSource('constant-30', server.folder);
+  const { path, frames } = await filmSource('constant-30', server.folder);
+  const cutPath = join(server.folder, 'cut.mp4');
   await runTool('ffmpeg', [
     ...['-nostdin', '-y', '-v', 'error', '-i', path, '-c', 'copy', '-movflags', '+faststart'],
-    join(server.folder, 'cut.mp4'),
+    cutPath,
   ]);
   const whole = await page.evaluate(() => window.harness.look('/clips/cut.mp4', 'a.mp4'));
-  expect(whole).toMatchObject({ outcome: 'clip', decodableHere: true, cutShort: false });
-  await truncate(join(server.folder, 'cut.mp4'), 400_000);
+  expect(whole).toMatchObject({ outcome: 'clip', frames, decodableHere: true, cutShort: false });
+  // the index stands in front: it still tells of every frame
+  const { size } = await stat(cutPath);
+  await truncate(cutPath, Math.floor(size / 2));
   const cut = await page.evaluate(() => window.harness.look('/clips/cut.mp4', 'a.mp4'));
-  expect(cut).toMatchObject({ outcome: 'clip', frames: 120, cutShort: true });
+  expect(cut).toMatchObject({ outcome: 'clip', frames, cutShort: true });
 });
 
 test('a text with the wrong name is no video', async ({ page }) => {
