@@ -34,8 +34,8 @@ describe('lookAtFile', { timeout: 60_000 }, () => {
       outcome: 'clip',
       container: 'mp4',
       codec: 'avc',
-      width: 1280,
-      height: 720,
+      width: 640,
+      height: 360,
       rotation: 0,
       length: expect.closeTo(3, 2) as number,
       frames: 90,
@@ -51,7 +51,7 @@ describe('lookAtFile', { timeout: 60_000 }, () => {
 
   it('gives the size as displayed, after rotation', async () => {
     expect(await film('rotated')).toMatchObject({
-      ...{ outcome: 'clip', container: 'mov', width: 720, height: 1280, rotation: 90 },
+      ...{ outcome: 'clip', container: 'mov', width: 360, height: 640, rotation: 90 },
     });
   });
 
