@@ -1,5 +1,5 @@
 import type { TrackState } from '../types.ts';
-import { align, type Aligned, compare } from './align.ts';
+import { align } from './align.ts';
 import {
   confidenceOf,
   isBack,
@@ -15,7 +15,6 @@ import { flow, type Place } from './flow.ts';
 import {
   ALONG_AN_EDGE,
   BACK,
-  DISTINCT,
   DOUBTFUL,
   EXPECTED,
   FORESEEN,
@@ -26,16 +25,12 @@ import {
   NEAR,
   ON_ITS_WAY,
   REACH,
-  REFINE_REACH,
   RETURNED,
-  SEARCH_LEVEL,
-  SEARCH_RADIUS,
   UNPROVED,
 } from './follower-bounds.ts';
+import { type Candidate, Likeness } from './likeness.ts';
 import type { Plane } from './plane.ts';
-import { pyramidAround, type Pyramid, toLevelX, toLevelY } from './pyramid.ts';
-import { search } from './search.ts';
-import { makeTemplate, type Template } from './template.ts';
+import { pyramidAround, type Pyramid } from './pyramid.ts';
 import { slidesAt } from './texture.ts';
 import { atPlace, movedTo, scaleOf, type Warp } from './warp.ts';
 
@@ -56,24 +51,12 @@ export interface Seen {
   readonly state: TrackState;
 }
 
-interface Candidate extends Aligned {
-  readonly template: Template;
-  readonly roundTrip: number | null;
-}
-
 /** Follows one point away from its keyframe, picture by picture, in either direction of time. */
 export class Follower {
   readonly #settings: FollowSettings;
   readonly #home: Place;
-  /** Of the keyframe: never replaced. */
-  readonly #first: Template;
-  readonly #searched: Template;
-  /** Its middle alone: what slides over the point's surroundings covers this at last. */
-  readonly #core: Template;
-  /** The newest: as the point looks now, where that has slowly changed. */
-  #newest: Template;
+  readonly #likeness: Likeness;
   #warp: Warp;
-  #newestWarp: Warp;
   #velocity: Place = { x: 0, y: 0 };
   /** False until two pictures have told the velocity: a keyframe may lie in the middle of a lift. */
   #velocityKnown = false;
@@ -92,12 +75,8 @@ export class Follower {
     this.#settings = settings;
     this.#home = at;
     this.#warp = atPlace(at.x, at.y);
-    this.#newestWarp = this.#warp;
     this.#picture = picture;
-    this.#first = makeTemplate(picture, this.#warp, settings.templateRadius, 'similar');
-    this.#newest = this.#first;
-    this.#core = makeTemplate(picture, this.#warp, Math.ceil(settings.templateRadius / 2), 'move');
-    this.#searched = this.#searchTemplate(at);
+    this.#likeness = new Likeness(picture, this.#pyramidBefore(at), at, settings.templateRadius);
     this.#most = slidesAt(picture, at.x, at.y, settings.templateRadius) ? ALONG_AN_EDGE : 1;
   }
 
@@ -111,13 +90,6 @@ export class Follower {
     return this.#before;
   }
 
-  #searchTemplate(at: Place): Template {
-    const level = this.#pyramidBefore(at)[SEARCH_LEVEL];
-    if (!level) throw new RangeError('The pyramid is too low to search on.');
-    const warp = atPlace(toLevelX(level, at.x), toLevelY(level, at.y));
-    return makeTemplate(level.plane, warp, SEARCH_RADIUS, 'move');
-  }
-
   #followOn(picture: Plane): Seen {
     const from = { x: this.#warp.tx, y: this.#warp.ty };
     const guess = { x: from.x + this.#velocity.x, y: from.y + this.#velocity.y };
@@ -127,7 +99,7 @@ export class Follower {
     const covered = coveredShare(picture, best.template, best);
     const half = leastAlikeHalf(picture, best.template, best);
     const leap = Math.hypot(best.warp.tx - guess.x, best.warp.ty - guess.y);
-    const middle = this.#middleOf(picture, best);
+    const middle = this.#likeness.middleOf(picture, best, this.#warp);
     // what slides over a point takes it along with a jerk that no limb makes
     const jerk = leap > JERK * this.#near() && !isItself(best.correlation, middle.core);
     const astray = best.roundTrip === null || best.roundTrip > RETURNED;
@@ -152,18 +124,24 @@ export class Follower {
     const atHome = this.#fromHome(best) < NEAR && isItself(best.correlation, middle.core);
     const proved = this.#trust > FOUND_AGAIN && isBack(evidence);
     if (proved || atHome) this.#trust = Math.min(1, this.#trust + 0.05);
-    if (stateOf(free) === 'sure' && fall < 0.03 && covered === 0) this.#refresh(picture, best);
+    if (stateOf(free) === 'sure' && fall < 0.03 && covered === 0)
+      this.#likeness.refresh(picture, best);
     return { place: { x: best.warp.tx, y: best.warp.ty }, confidence, state };
   }
 
   /** Most often it is just where its velocity brings it: then nothing else need be tried. */
   #asExpected(picture: Plane, guess: Place): Candidate | null {
     if (!this.#velocityKnown) return null;
-    const found = align(picture, this.#first, movedTo(this.#warp, guess.x, guess.y), EXPECTED);
+    const found = align(
+      picture,
+      this.#likeness.first,
+      movedTo(this.#warp, guess.x, guess.y),
+      EXPECTED,
+    );
     if (!found) return null;
-    const { core } = this.#middleOf(picture, found);
+    const { core } = this.#likeness.middleOf(picture, found, this.#warp);
     return isUnmistakable(found.correlation, core)
-      ? { ...found, template: this.#first, roundTrip: null }
+      ? { ...found, template: this.#likeness.first, roundTrip: null }
       : null;
   }
 
@@ -176,21 +154,10 @@ export class Follower {
       if (still && still.correlation > (best?.correlation ?? 0)) best = still;
     }
     if (!best || best.correlation < DOUBTFUL) {
-      const fetched = this.#fetch(after, guess, this.#velocityKnown ? 6 : 12);
+      const fetched = this.#likeness.fetch(after, guess, this.#velocityKnown ? 6 : 12, this.#warp);
       if (fetched && fetched.correlation > (best?.correlation ?? 0) + 0.05) best = fetched;
     }
     return best;
-  }
-
-  /** What the middle alone says: is it there, and would it rather be elsewhere? */
-  #middleOf(picture: Plane, { warp: { tx, ty } }: Aligned): { core: number; apart: number } {
-    const here = compare(picture, this.#core, movedTo(this.#warp, tx, ty));
-    const own = align(picture, this.#core, here.warp, REFINE_REACH, 6);
-    const better = own && own.correlation > here.correlation + 0.03;
-    return {
-      core: here.correlation,
-      apart: better ? Math.hypot(own.warp.tx - tx, own.warp.ty - ty) : 0,
-    };
   }
 
   /** Steps there, goes back to see whether that leads home, and refines against the templates. */
@@ -202,39 +169,7 @@ export class Follower {
     const back = { x: there.x - (guess.x - from.x), y: there.y - (guess.y - from.y) };
     const home = flow(after, before, there, back, stepRadius, 2);
     const roundTrip = home ? Math.hypot(home.x - from.x, home.y - from.y) : Infinity;
-    return this.#refine(after, there, roundTrip);
-  }
-
-  #refine(
-    after: Pyramid,
-    at: Place,
-    roundTrip: number | null,
-    shape = this.#warp,
-  ): Candidate | null {
-    const plane = after[0]?.plane;
-    if (!plane) return null;
-    const first = align(plane, this.#first, movedTo(shape, at.x, at.y), REFINE_REACH);
-    const byFirst = first && { ...first, template: this.#first, roundTrip };
-    if (this.#newest === this.#first) return byFirst;
-    const newest = align(plane, this.#newest, movedTo(this.#newestWarp, at.x, at.y), REFINE_REACH);
-    if (!newest) return byFirst;
-    // what was never refreshed does not drift: it wins unless it fits clearly worse
-    if (byFirst && byFirst.correlation > newest.correlation - 0.06) return byFirst;
-    return { ...newest, template: this.#newest, roundTrip };
-  }
-
-  /** A wide look on a coarse level for what the keyframe showed, then refined. */
-  #fetch(after: Pyramid, about: Place, reach: number, shape = this.#warp): Candidate | null {
-    const level = after[SEARCH_LEVEL];
-    if (!level) return null;
-    const start = movedTo(shape, toLevelX(level, about.x), toLevelY(level, about.y));
-    const found = search(level.plane, this.#searched, start, reach);
-    if (!found || found.second > found.correlation - DISTINCT) return null;
-    const at = {
-      x: level.x0 + found.warp.tx * level.scale,
-      y: level.y0 + found.warp.ty * level.scale,
-    };
-    return this.#refine(after, at, null, shape);
+    return this.#likeness.refine(after, there, roundTrip, this.#warp);
   }
 
   /** Along its way, where it was placed, and at last all around where it was seen. */
@@ -264,14 +199,15 @@ export class Follower {
     const pictures = this.#lostFor + 1;
     const guess = { x: x + pictures * this.#velocity.x, y: y + pictures * this.#velocity.y };
     const warp = movedTo(this.#warp, guess.x, guess.y);
-    const found = align(picture, this.#first, warp, EXPECTED * pictures);
+    const found = align(picture, this.#likeness.first, warp, EXPECTED * pictures);
     return found && found.correlation >= BACK
-      ? { ...found, template: this.#first, roundTrip: null }
+      ? { ...found, template: this.#likeness.first, roundTrip: null }
       : null;
   }
 
-  #lookNear(picture: Plane, at: Place, reach: number, shape?: Warp): Candidate | null {
-    const found = this.#fetch(pyramidAround(picture, at.x, at.y, REACH, LEVELS), at, reach, shape);
+  #lookNear(picture: Plane, at: Place, reach: number, shape = this.#warp): Candidate | null {
+    const around = pyramidAround(picture, at.x, at.y, REACH, LEVELS);
+    const found = this.#likeness.fetch(around, at, reach, shape);
     return found && found.correlation >= BACK ? found : null;
   }
 
@@ -285,12 +221,9 @@ export class Follower {
   }
 
   #take(best: Candidate, picture: Plane, from: Place): void {
-    if (best.template === this.#first) this.#warp = best.warp;
+    if (best.template === this.#likeness.first) this.#warp = best.warp;
     else this.#warp = movedTo(this.#warp, best.warp.tx, best.warp.ty);
-    this.#newestWarp =
-      best.template === this.#newest
-        ? best.warp
-        : movedTo(this.#newestWarp, best.warp.tx, best.warp.ty);
+    this.#likeness.moveTo(best);
     this.#velocity = { x: best.warp.tx - from.x, y: best.warp.ty - from.y };
     this.#velocityKnown = true;
     this.#picture = picture;
@@ -302,12 +235,5 @@ export class Follower {
   #lose(): Seen {
     this.#lostFor += 1;
     return { place: null, confidence: 0, state: 'lost' };
-  }
-
-  #refresh(picture: Plane, best: Candidate): void {
-    if (best.correlation > 0.82 || best.correlation < 0.7) return;
-    const plain = atPlace(best.warp.tx, best.warp.ty);
-    this.#newest = makeTemplate(picture, plain, this.#settings.templateRadius, 'similar');
-    this.#newestWarp = plain;
   }
 }
