@@ -6,7 +6,8 @@ import { ffmpeg } from '#tests/fixtures/media/make-clips.ts';
 import type { BenchResult } from '../entry.ts';
 import { median } from '../median.ts';
 
-const FRAMES = 300;
+/** Of the original's film. */
+const RATE = 60;
 const ROUNDS = 5;
 
 /** Computing seconds so far of this process and of the children it has waited for. */
@@ -24,13 +25,13 @@ async function costOf(work: () => Promise<unknown>): Promise<number> {
 }
 
 /** As a phone films: 60 frames a second, B-frames, sensor noise. */
-const makeOriginal = (size: string, to: string) =>
+const makeOriginal = (size: string, frames: number, to: string) =>
   ffmpeg(
     ...[
       '-f',
       'lavfi',
       '-i',
-      `testsrc2=s=${size}:r=60,trim=end_frame=${FRAMES},noise=alls=6:allf=t`,
+      `testsrc2=s=${size}:r=${RATE},trim=end_frame=${frames},noise=alls=6:allf=t`,
     ],
     ...['-c:v', 'libx264', '-preset', 'veryfast', '-bf', '2', '-pix_fmt', 'yuv420p', to],
   );
@@ -45,12 +46,14 @@ const bareEncode = (from: string, to: string) =>
 /**
  * CPU seconds of all copies, checks included, beside those of one bare encode of the bench copy.
  * @param size of the original, '1920x1080'
+ * @param seconds of the original: to start the tools costs a short clip a larger share
  */
-export const comparePreparation = async (size: string): Promise<BenchResult> => {
+export const comparePreparation = async (size: string, seconds: number): Promise<BenchResult> => {
+  const frames = seconds * RATE;
   const folder = await mkdtemp(join(tmpdir(), 'bench-preparation-'));
   try {
     const original = join(folder, 'original.mp4');
-    await makeOriginal(size, original);
+    await makeOriginal(size, frames, original);
     const prepare = () => prepareClip({ original, outDir: join(folder, 'copies') });
     // asks the tools once per process what they can: a worker does that at its first clip
     await prepare();
@@ -61,7 +64,7 @@ export const comparePreparation = async (size: string): Promise<BenchResult> => 
       bare.push(await costOf(() => bareEncode(original, join(folder, 'bare.mp4'))));
     }
     const [a, b] = [median(ours), median(bare)];
-    return { ratio: a / b, a, b, info: { unit: 'CPU s', size, frames: FRAMES, rounds: ROUNDS } };
+    return { ratio: a / b, a, b, info: { unit: 'CPU s', size, frames, rounds: ROUNDS } };
   } finally {
     await rm(folder, { recursive: true, force: true });
   }
