@@ -61,6 +61,12 @@ export const letterLimits = (): RequestHandler[] => [
   limit(5, 60, emailOf, false),
 ];
 
+/** Replay links by letter: 10 in an hour to one address, 60 from one person. */
+export const linkLetterLimits = (): RequestHandler[] => [
+  limit(60, 60, (_req, res) => staffOf(res).user.id, false),
+  limit(10, 60, emailOf, false),
+];
+
 /** Links that open nothing: 50 in a quarter of an hour from one place; a token cannot be guessed anyway. */
 export const mailLinkLimits = (): RequestHandler[] => [limit(50, 15, addressOf)];
 

@@ -75,6 +75,7 @@ export const AUDIT_ACTIONS = {
   'plan.pain': ['athlete', 'Answered about pain'],
   'plan.see-pain': ['athlete', 'Looked at answers about pain'],
   'replay.make': ['athlete', 'Made a replay link'],
+  'replay.send': ['athlete', 'Asked to send a replay link by e-mail'],
   'replay.revoke': ['athlete', 'Revoked a replay link'],
   'replay.open': ['athlete', 'Opened a replay'],
   'replay.refused': ['athlete', 'Replay refused: wrong pass phrase'],

@@ -107,6 +107,10 @@ export const PROBLEMS = {
   // replays
   'head-not-covered': [409, 'The head is not covered on every frame that would be shown.'],
   'head-not-looked-at': [409, 'Nobody has looked yet whether the head is covered.'],
+  'letter-not-sent': [
+    503,
+    'The letter could not be sent. Copy the address instead, or try again in a moment.',
+  ],
   'pass-phrase-needed': [401, 'This replay asks for a pass phrase.'],
   // the house
   'storage-full': [507, 'There is no room left to keep this. Tell the owner of the practice.'],

@@ -3,7 +3,7 @@ import { athletePlan } from './athlete-plan.ts';
 import { call } from './calls.ts';
 import { comment } from './comments.ts';
 import { frameTable } from './clips.ts';
-import { frameIndex, id, moment, personRef, side, text, view } from './primitives.ts';
+import { email, frameIndex, id, moment, personRef, side, text, view } from './primitives.ts';
 import { gates } from './protocol.ts';
 import { bytes, json, none, route } from './route.ts';
 import { readingCode } from './readings.ts';
@@ -113,6 +113,15 @@ export type PublicReplay = z.infer<typeof publicReplay>;
 const params = z.object({ id });
 /** 256 random bits, base64url. */
 const token = z.string().regex(/^[A-Za-z0-9_-]{43}$/);
+
+export const sendReplayBody = z
+  .object({
+    /** The end of the address, which only whoever made the link still has. */
+    token,
+    /** Where it goes; not kept. */
+    email,
+  })
+  .meta({ id: 'SendReplay' });
 const linkParams = z.object({ token });
 
 export const replayRoutes = {
@@ -148,6 +157,26 @@ export const replayRoutes = {
       'frame-out-of-range',
       'head-not-covered',
       'head-not-looked-at',
+    ],
+  }),
+  sendReplay: route({
+    method: 'post',
+    path: '/api/replays/:id/letter',
+    summary:
+      'Send the address of a link that was just made by e-mail. Neither address is kept. The answer comes once the mail server has taken the letter.',
+    audience: 'staff',
+    params,
+    body: sendReplayBody,
+    status: 204,
+    answer: none,
+    problems: [
+      'not-found',
+      'not-allowed',
+      'consent-missing',
+      'consent-withdrawn',
+      'link-gone',
+      'letter-not-sent',
+      'too-many-tries',
     ],
   }),
   revokeReplay: route({

@@ -29,8 +29,8 @@ export interface Api {
   readonly mailbox: readonly Mail[];
   /** Requests without a session. */
   readonly nobody: ReturnType<typeof supertest>;
-  /** Requests with an open session of this user. */
-  readonly as: (user: User) => Promise<ReturnType<typeof supertest.agent>>;
+  /** Requests with an open session of this user; to another app over the same ground where one is given. */
+  readonly as: (user: User, to?: Express) => Promise<ReturnType<typeof supertest.agent>>;
   /** Two practices with their people, see world.ts. */
   readonly world: World;
   readonly close: () => Promise<void>;
@@ -85,7 +85,7 @@ export const startApi = async (env: NodeJS.ProcessEnv = {}): Promise<Api> => {
   };
   const app = makeApp(ground, { features });
 
-  const as = async (user: User): Promise<ReturnType<typeof supertest.agent>> => {
+  const as = async (user: User, to = app): Promise<ReturnType<typeof supertest.agent>> => {
     const session = await ground.inPractice(user, ({ em }) =>
       Promise.resolve(
         em.create(Session, {
@@ -96,7 +96,7 @@ export const startApi = async (env: NodeJS.ProcessEnv = {}): Promise<Api> => {
       ),
     );
     const cookie = ground.sessions.cookieFor(session.id).split(';')[0] ?? '';
-    return supertest.agent(app).set('Cookie', cookie);
+    return supertest.agent(to).set('Cookie', cookie);
   };
 
   return {

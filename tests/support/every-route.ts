@@ -74,6 +74,7 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   addComment: 'clip',
   editComment: 'comment',
   deleteComment: 'comment',
+  sendReplay: 'replay',
   revokeReplay: 'replay',
   hideHeadAgain: 'replay',
   repFrames: 'rep',
@@ -179,6 +180,7 @@ export const BODIES: Partial<Record<RouteName, object>> = {
   setWaitingMail: { kind: 'comment', on: false },
   handIn: { about: { kind: 'call', id: NO_CALL } },
   decideReview: { verdict: 'sign-off', about: { kind: 'call', id: NO_CALL } },
+  sendReplay: { token: 'a'.repeat(43), email: 'wren@test.example' },
   sayHere: { here: true },
   saveHead: {
     after: 0,

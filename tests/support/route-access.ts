@@ -149,6 +149,7 @@ export const ACCESS: Record<RouteName, Access> = {
   stopPlan: 'work',
   seePain: 'work',
   makeReplay: 'work',
+  sendReplay: 'work',
   revokeReplay: 'work',
   hideHeadAgain: 'work',
   editComment: 'own-words',

@@ -1,5 +1,5 @@
 import { routes } from '#shared/contracts/routes.ts';
-import { passPhraseLimits } from '../../http/rate-limit.ts';
+import { linkLetterLimits, passPhraseLimits } from '../../http/rate-limit.ts';
 import { Problem } from '../../http/problem.ts';
 import type { Feature } from '../../main/feature.ts';
 import { passwordFits } from '../accounts/password.ts';
@@ -16,6 +16,7 @@ import {
   makeReplay,
   revokeReplay,
 } from './replays.service.ts';
+import { sendNow, writeReplayLetter } from './send-replay.ts';
 
 const MEDIA = {
   replayVideo: ['replay', 'video/mp4'],
@@ -44,6 +45,16 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
       return { replay: await presented(unit, replay), url: `${config.publicUrl}/r/${token}` };
     });
   });
+
+  serve(
+    routes.sendReplay,
+    async ({ params, body: { token, email }, work }) => {
+      const home = config.publicUrl;
+      const letter = await work((unit) => writeReplayLetter(unit, params.id, { token, home }));
+      await sendNow(ground, email, letter);
+    },
+    ...linkLetterLimits(),
+  );
 
   serve(routes.revokeReplay, async ({ params, work }) => {
     const { ended, files } = await work(async (unit) => {

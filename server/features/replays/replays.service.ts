@@ -105,7 +105,7 @@ export const headOfLink = ({ em }: Of, replay: Replay) =>
   headStateOf(em, replay, (replay.rep.unwrap() as Rep).clip.unwrap());
 
 /** The link of this id, for a coach who may act on it. */
-const linkInSight = async (
+export const linkInSight = async (
   { em, actor }: Of,
   id: string,
   action: 'replay.make' | 'replay.revoke',

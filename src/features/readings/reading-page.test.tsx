@@ -7,6 +7,7 @@ import { NO_BOUNDARIES, type Rep } from '#shared/contracts/reps.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
 import { aClip, anAthlete, aVisit, clipId, visitId } from '#tests/support/records.ts';
+import { aReplayLink } from '#tests/support/replay-link.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
 import { aSideReview } from '#tests/support/review.ts';
 import { aCall, aReading, aSidePage, repId, resultOf } from '#tests/support/side-page.ts';
@@ -30,25 +31,7 @@ const aRep = (n: number): Rep => ({
   version: 1,
 });
 
-const aLink: Replay = {
-  id: '00000000-0000-4000-8000-000000000950',
-  visitId,
-  side: 'right',
-  repId: repId(1),
-  fromFrame: 0,
-  toFrame: 300,
-  showReading: true,
-  showCall: true,
-  head: 'shown',
-  message: '',
-  passPhrase: false,
-  state: 'live',
-  openings: 2,
-  lastOpenedAt: '2026-03-04T10:00:00Z',
-  expiresAt: '2026-04-03T10:00:00Z',
-  by: { id: '00000000-0000-4000-8000-000000000001', name: 'Maren Okafor' },
-  at: '2026-03-03T17:00:00Z',
-};
+const aLink = aReplayLink();
 
 function readingApi(page: SidePage | Refuse, athlete: Partial<Athlete> = {}) {
   let shown = page;

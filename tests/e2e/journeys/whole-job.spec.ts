@@ -199,7 +199,7 @@ test('the coach makes the plan from the reading and gives it', async ({ app, pag
   await givePlan(page, made, '2031-05-04');
 });
 
-test('the coach makes a replay link, which is shown once', async ({ app, page }) => {
+test('the coach makes a replay link, shown once, which comes by e-mail and by a code', async ({ app, page }) => {
   await signIn(page, app, COACH);
   await page.goto(`/visits/${made.visitId}/sides/right`);
   const replay = page.getByRole('region', { name: 'Replay for the athlete' });
@@ -208,19 +208,27 @@ test('the coach makes a replay link, which is shown once', async ({ app, page })
   const address = replay.getByLabel(/^The link is ready/);
   made.link = await address.inputValue();
   expect(made.link).toMatch(/\/r\/[A-Za-z0-9_-]{43}$/);
+  await expect(replay.getByRole('img', { name: 'QR code of the link' })).toBeVisible();
+  const wren = `wren.${process.pid}@mail.example`;
+  await replay.getByLabel(/^Send it by e-mail to/).fill(wren);
+  await replay.getByRole('button', { name: 'Send the link' }).click();
+  await expect(replay.getByText(`Sent to ${wren}.`)).toBeVisible();
+  const letter = await app.mailbox.newestTo(wren);
+  made.letterLink = /https?:\S+\/r\/\S+/.exec(letter.text)?.[0] ?? '';
+  expect(made.letterLink).toBe(made.link);
   await page.reload();
   await expect(replay.getByText('not opened yet')).toBeVisible();
   await expect(page.getByText(made.link)).toHaveCount(0);
 });
 
-test('the athlete opens the link on a phone, without an account', async ({ browser }) => {
+test('the athlete opens the link of the letter on a phone, without an account', async ({ browser }) => {
   const phone = await browser.newContext({
     viewport: { width: 390, height: 844 },
     isMobile: true,
     hasTouch: true,
   });
   const page = await phone.newPage();
-  await page.goto(made.link);
+  await page.goto(made.letterLink);
   await expect(
     page.getByRole('heading', { level: 1, name: 'Your right hip turns out early' }),
   ).toBeVisible();

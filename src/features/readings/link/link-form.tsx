@@ -12,6 +12,7 @@ import { SelectField, TextArea, TextField } from '#src/ui/form/text-field.tsx';
 import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import type { NamedRep } from '../side-clips.ts';
 import { DaysField } from './days-field.tsx';
+import type { MadeLink } from './link-address.tsx';
 import { repChoice } from './rep-choice.ts';
 import { SpanFields } from './span-fields.tsx';
 
@@ -24,7 +25,7 @@ const formBody = replayBody
     message: 'The last frame comes after the first.',
   });
 
-/** `onMade` gets the address; it is in no later answer. */
+/** `onMade` gets the address too; it is in no later answer. */
 export function LinkForm({
   page,
   reps,
@@ -32,7 +33,7 @@ export function LinkForm({
 }: {
   page: SidePage;
   reps: readonly NamedRep[];
-  onMade: (address: string) => void;
+  onMade: (made: MadeLink) => void;
 }) {
   const client = useQueryClient();
   const measured = page.reading !== null;
@@ -53,7 +54,7 @@ export function LinkForm({
       body: { ...body, visitId: page.visit.id, side: page.side },
     });
     void client.invalidateQueries({ queryKey: replaysOptions(page.visit.id).queryKey });
-    onMade(made.url);
+    onMade(made);
   };
   return (
     <Form form={form} send={send} className="max-w-form space-y-5">

@@ -12,7 +12,7 @@ import { paths } from '#src/ui/paths.ts';
 import { ReplayLinks } from '#src/ui/replay-links.tsx';
 import { Empty, ErrorState, Loading } from '#src/ui/states.tsx';
 import { useSideReps } from '../side-clips.ts';
-import { LinkAddress } from './link-address.tsx';
+import { LinkAddress, type MadeLink } from './link-address.tsx';
 import { LinkForm } from './link-form.tsx';
 
 /** The athlete's replay: make a link, hand its address over once, see whether it was opened, end it. */
@@ -21,7 +21,7 @@ export function ReplaySection({ page }: { page: SidePage }) {
   const person = useQuery(athleteOptions(athlete.id));
   const links = useQuery(replaysOptions(visit.id));
   const { reps, pending, error, retry } = useSideReps(visit.id, side);
-  const [address, setAddress] = useState<string | null>(null);
+  const [made, setMade] = useState<MadeLink | null>(null);
   const own = links.data?.items.filter((link) => link.side === side) ?? [];
   const failed = [person, links].find(({ isError, data }) => isError && !data);
   const may = useMay(person.data?.coach.id);
@@ -55,7 +55,13 @@ export function ReplaySection({ page }: { page: SidePage }) {
         <Loading label="Loading the links" />
       ) : (
         <>
-          {address !== null && <LinkAddress address={address} onDone={() => setAddress(null)} />}
+          {made && (
+            <LinkAddress
+              made={made}
+              athlete={{ name: athlete.name, contactEmail: person.data.contactEmail }}
+              onDone={() => setMade(null)}
+            />
+          )}
           {!may('replay.make') ? (
             own.length === 0 && <p className="text-soft">No link was made. The coach makes them.</p>
           ) : !consented ? (
@@ -71,7 +77,7 @@ export function ReplaySection({ page }: { page: SidePage }) {
               A replay plays one rep. Open a clip on the Bench and name its reps first.
             </Empty>
           ) : (
-            address === null && <LinkForm page={page} reps={reps} onMade={setAddress} />
+            !made && <LinkForm page={page} reps={reps} onMade={setMade} />
           )}
           {own.length > 0 && (
             <div className="mt-8">

@@ -6,6 +6,8 @@ export interface Run {
   clipId: string;
   /** The replay's address, as it was shown once. */
   link: string;
+  /** The same, as it came by e-mail. */
+  letterLink: string;
 }
 
 export const loadedRun = (): Run => ({
@@ -14,4 +16,5 @@ export const loadedRun = (): Run => ({
   visitId: '',
   clipId: '',
   link: '',
+  letterLink: '',
 });
