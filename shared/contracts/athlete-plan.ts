@@ -68,7 +68,13 @@ export type Tick = z.infer<typeof tick>;
 
 /** The plan on a replay; `plan` is null once it was stopped: nothing of it is to be done any more. */
 export const athletePlan = z
-  .object({ givenAt: moment, plan: givenPlan.nullable(), ticks: z.array(tick) })
+  .object({
+    givenAt: moment,
+    plan: givenPlan.nullable(),
+    ticks: z.array(tick),
+    /** When another plan for this leg was given, after another visit; null where this is the newest. */
+    newerGivenAt: moment.nullable(),
+  })
   .meta({ id: 'AthletePlan' });
 export type AthletePlan = z.infer<typeof athletePlan>;
 

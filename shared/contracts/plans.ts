@@ -34,6 +34,10 @@ const suggestion = z
   .meta({ id: 'Suggestion' });
 export type Suggestion = z.infer<typeof suggestion>;
 
+/** A reviewer's word on what a plan stands on. */
+const signedOff = z.object({ by: personRef, at: moment }).meta({ id: 'SignedOff' });
+export type SignedOff = z.infer<typeof signedOff>;
+
 /** One thing that a plan could start from, with what the rules make of it. */
 export const finding = z
   .object({
@@ -41,6 +45,7 @@ export const finding = z
     suggestion,
     /** Why no plan can start from it now; null where one can. */
     hindrance: z.enum(['provisional', 'being-made-anew']).nullable(),
+    signedOff: signedOff.nullable(),
   })
   .meta({ id: 'Finding' });
 export type Finding = z.infer<typeof finding>;
@@ -110,6 +115,8 @@ export const plan = z
     id,
     ...ofVisit,
     basis: planBasis,
+    /** Null: nobody has signed off what it stands on. */
+    signedOff: signedOff.nullable(),
     /** The rule that made it; null where what was found leads to a retest and no exercise. */
     rule: z.string().nullable(),
     because: z.string(),

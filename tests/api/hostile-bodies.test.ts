@@ -13,12 +13,13 @@ import { thinPlaces } from '#tests/support/thin-places.ts';
 
 const RUNS = { numRuns: 30, seed: 20261202, endOnFailure: true } as const;
 
-/** What is right for these names what is not known before: the new coach, the athlete by name, the reading or the call. */
+/** What is right for these names what is not known before: the new coach, the athlete by name, the reading or the call, a link’s own token. */
 const NAMING: ReadonlySet<RouteName> = new Set<RouteName>([
   'handOver',
   'eraseAthlete',
   'handIn',
   'decideReview',
+  'sendReplay',
 ]);
 
 /** Rules between its numbers that no schema says; what is right comes from the known body alone. */

@@ -39,6 +39,7 @@ export const aPlan = (change: Partial<Plan> = {}): Plan => ({
   id: planId,
   ...ofVisit,
   basis: { kind: 'reading', code: 'early-turn-out', label: 'Turns out early', carrier: null },
+  signedOff: null,
   rule: 'early',
   because: 'The standing hip turns out early.',
   items: [aPlanItem('foot-tripod'), aPlanItem('supported-hinge', { stage: 2 })],
@@ -65,6 +66,7 @@ export const aPlanStart = (change: Partial<PlanStart> = {}): PlanStart => ({
       basis: { kind: 'reading', code: 'cannot-tell', label: 'Can’t tell yet', carrier: null },
       suggestion: { kind: 'retest', because: 'The reading does not tell yet.' },
       hindrance: null,
+      signedOff: null,
     },
     {
       basis: { kind: 'call', seen: 'early' },
@@ -75,6 +77,7 @@ export const aPlanStart = (change: Partial<PlanStart> = {}): PlanStart => ({
         exercises: [{ exercise: 'foot-tripod', stage: 1 }],
       },
       hindrance: null,
+      signedOff: null,
     },
   ],
   ...change,
@@ -108,5 +111,6 @@ export const anAthletePlan = (change: Partial<AthletePlan> = {}): AthletePlan =>
   givenAt: at,
   plan: aGivenPlan(),
   ticks: [],
+  newerGivenAt: null,
   ...change,
 });

@@ -59,6 +59,36 @@ const pain = (token: string, body: object = {}) =>
 const planNow = async ({ id }: Plan): Promise<Plan> =>
   (await coach.get(`/api/plans/${id}`).expect(200)).body;
 
+describe('an old link', () => {
+  it('keeps the plan of its own visit, and says once another runs for the same leg', async () => {
+    const old = await running();
+    expect((await shown(old.token))?.newerGivenAt).toBeNull();
+    const { body: visit } = await coach
+      .post(`/api/athletes/${old.athleteId}/visits`)
+      .send({})
+      .expect(201);
+    const path = `/api/visits/${visit.id}/sides/${old.side}`;
+    await coach.post(`${path}/call`).send({ seen: 'early', confidence: 'sure' }).expect(201);
+    const { body: made } = await coach.post(`${path}/plan`).send({ from: 'call' }).expect(201);
+    const items = (made as Plan).items.slice(0, 1).map((item) => ({
+      ...{ exercise: item.exercise, stage: item.stage, side: item.side, dose: item.dose },
+      sideConfirmed: true,
+    }));
+    const { body: next } = await coach
+      .patch(`/api/plans/${made.id}`)
+      .send({ version: made.version, items, retestOn: RETEST })
+      .expect(200);
+    expect((await shown(old.token))?.newerGivenAt).toBeNull();
+    await give(next as Plan);
+    const then = await shown(old.token);
+    expect(then?.plan?.items).toHaveLength(2);
+    expect(then?.newerGivenAt).toMatch(/^\d{4}-\d\d-\d\dT/);
+    // what was stopped is not to be done in its place
+    await coach.post(`/api/plans/${made.id}/stop`).expect(201);
+    expect((await shown(old.token))?.newerGivenAt).toBeNull();
+  });
+});
+
 describe('a plan on a link', () => {
   it('is there once it was given, as it was given, until it is given anew or stopped', async () => {
     const { token, plan } = await ready();

@@ -25,7 +25,24 @@ const DAYS_BACK = 7;
 const TICKS_A_DAY = 200;
 const PAINS_A_DAY = 20;
 
-/** The plan that the links of this side show; null where none was given yet. */
+/** When this athlete was given another plan for this side after that one, which still runs. */
+const newerGivenAt = async (em: EntityManager, planId: string, than: Date) => {
+  const rows = await em.execute<{ at: string | null }[]>(
+    `select max(last.at) as at from plan own
+     join visit v on v.id = own.visit_id
+     join visit w on w.athlete_id = v.athlete_id and w.id <> v.id
+     join plan other on other.visit_id = w.id and other.side = own.side
+     join lateral (
+       select g.at, g.content from given_plan g where g.plan_id = other.id order by g.number desc limit 1
+     ) last on last.content is not null
+     where own.id = ? and last.at > ?`,
+    [planId, than],
+  );
+  const at = rows[0]?.at;
+  return at ? new Date(at).toISOString() : null;
+};
+
+/** The plan that the links of this side show: that of their own visit. Null where none was given yet. */
 export const athletePlanOf = async (
   em: EntityManager,
   visitId: string,
@@ -38,6 +55,7 @@ export const athletePlanOf = async (
     givenAt: given.at.toISOString(),
     plan: given.content ?? null,
     ticks: given.content ? await ticksOf({ em }, plan.id) : [],
+    newerGivenAt: await newerGivenAt(em, plan.id, given.at),
   };
 };
 

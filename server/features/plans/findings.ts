@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import type { Finding } from '#shared/contracts/plans.ts';
+import type { Finding, SignedOff } from '#shared/contracts/plans.ts';
 import type { Side } from '#shared/contracts/primitives.ts';
 import { readingLabel } from '#shared/contracts/readings.ts';
 import { STANDARD_RULES } from '#shared/plan/rules.ts';
@@ -10,6 +10,7 @@ import { Call } from '../calls/call.entity.ts';
 import { resultOf } from '../readings/result-of.ts';
 import type { Reading } from '../readings/reading.entity.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
+import { signOffsOf } from './signed-off.ts';
 
 /** A finding as the page gets it, and the reading that it is. */
 export interface FindingOfSide extends Omit<Finding, 'suggestion'> {
@@ -28,7 +29,11 @@ const carrier = ({ set, figures }: ReadingResult) =>
       : null,
   );
 
-const ofReading = (reading: Reading, stale: boolean): FindingOfSide[] => {
+const ofReading = (
+  reading: Reading,
+  stale: boolean,
+  signedOff: SignedOff | null,
+): FindingOfSide[] => {
   const stored = reading.result.unwrap();
   if (!stored) return [];
   const basis = {
@@ -38,7 +43,7 @@ const ofReading = (reading: Reading, stale: boolean): FindingOfSide[] => {
     carrier: carrier(resultOf(stored)),
   } as const;
   const hindrance = stale ? 'being-made-anew' : reading.provisional ? 'provisional' : null;
-  return [{ basis, suggestion: suggest(basis, STANDARD_RULES), hindrance, reading }];
+  return [{ basis, suggestion: suggest(basis, STANDARD_RULES), hindrance, signedOff, reading }];
 };
 
 /**
@@ -55,13 +60,15 @@ export const findingsOf = async (
   if (!call) throw new Problem('call-first');
   const setting = await em.findOne(SideSetting, which, { populate: ['reading.result'] });
   const reading = setting?.reading?.unwrap();
+  const signedOff = await signOffsOf(em, visitId, side);
   const seen = { kind: 'call', seen: call.seen } as const;
   return [
-    ...(reading ? ofReading(reading, setting?.stale ?? false) : []),
+    ...(reading ? ofReading(reading, setting?.stale ?? false, signedOff(reading.id)) : []),
     {
       basis: seen,
       suggestion: suggest(seen, STANDARD_RULES),
       hindrance: null,
+      signedOff: signedOff(call.id),
       reading: null,
     },
   ];

@@ -7,7 +7,7 @@ import type { Athlete } from '../athletes/athlete.entity.ts';
 import { Replay } from '../replays/replay.entity.ts';
 import type { Visit } from '../visits/visit.entity.ts';
 import { visitInSight } from '../visits/visit-in-sight.ts';
-import { findingsOf } from './findings.ts';
+import { findingsOf, type FindingOfSide } from './findings.ts';
 import { GivenPlan } from './given-plan.entity.ts';
 import { lastSafetyOf } from './last-safety.ts';
 import { PlanPain } from './plan-answers.entity.ts';
@@ -15,6 +15,7 @@ import { PlanItem } from './plan-item.entity.ts';
 import { Plan } from './plan.entity.ts';
 import { planInSight } from './plan-in-sight.ts';
 import { presentFinding, presentPlan } from './plans.presenter.ts';
+import { signOffsOf } from './signed-off.ts';
 
 type Of = Unit<UserActor>;
 
@@ -78,11 +79,15 @@ export const planPage = async (unit: Of, id: string): Promise<PlanShape> => {
     expiresAt: { $gt: new Date() },
   });
   // another finding than the one that it was made from
-  const findings = (await findingsOf(em, visit.id, plan.side)).filter(({ basis, reading }) =>
+  const found = await findingsOf(em, visit.id, plan.side);
+  const isItsOwn = ({ basis, reading }: FindingOfSide) =>
     basis.kind === 'reading'
-      ? reading?.id !== plan.reading?.id
-      : plan.basis.kind !== 'call' || plan.basis.seen !== basis.seen,
-  );
+      ? reading?.id === plan.reading?.id
+      : plan.basis.kind === 'call' && plan.basis.seen === basis.seen;
+  // the reading that it stands on may have been signed off before marks changed and made another
+  const signedOff = plan.reading
+    ? (await signOffsOf(em, visit.id, plan.side))(plan.reading.id)
+    : (found.find(isItsOwn)?.signedOff ?? null);
   return presentPlan({
     plan,
     ofVisit: await ofVisit(unit, visit, athlete, plan.side),
@@ -91,6 +96,7 @@ export const planPage = async (unit: Of, id: string): Promise<PlanShape> => {
     pain,
     ticks: await ticksOf(unit, id),
     liveLinks,
-    findings,
+    signedOff,
+    findings: found.filter((finding) => !isItsOwn(finding)),
   });
 };

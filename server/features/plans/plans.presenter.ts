@@ -16,13 +16,19 @@ import type { PlanPain } from './plan-answers.entity.ts';
 import type { PlanItem } from './plan-item.entity.ts';
 import type { Plan } from './plan.entity.ts';
 
-export const presentFinding = ({ basis, suggestion, hindrance }: FindingOfSide): Finding => ({
+export const presentFinding = ({
+  basis,
+  suggestion,
+  hindrance,
+  signedOff,
+}: FindingOfSide): Finding => ({
   basis,
   suggestion:
     suggestion.kind === 'retest'
       ? suggestion
       : { ...suggestion, exercises: [...suggestion.exercises] },
   hindrance,
+  signedOff,
 });
 
 const presentItem = (item: PlanItem, safety: SafetyState): PlanItemShape => {
@@ -77,6 +83,7 @@ export const presentPlan = ({
   pain,
   ticks,
   liveLinks,
+  signedOff,
   findings,
 }: {
   readonly plan: Plan;
@@ -86,6 +93,8 @@ export const presentPlan = ({
   readonly pain: readonly PlanPain[];
   readonly ticks: Tick[];
   readonly liveLinks: number;
+  readonly signedOff: PlanShape['signedOff'];
+  /** What is found now, where that is something else. */
   readonly findings: readonly FindingOfSide[];
 }): PlanShape => {
   const safety = stateOf(ofVisit.safety);
@@ -94,6 +103,7 @@ export const presentPlan = ({
     id: plan.id,
     ...ofVisit,
     basis: plan.basis,
+    signedOff,
     rule: plan.rule ?? null,
     because: plan.because,
     items: items.map((item) => presentItem(item, safety)),

@@ -1,7 +1,11 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import type { Plan, PlanItem } from '#shared/contracts/plans.ts';
+import type { Plan, PlanItem, PlanStart } from '#shared/contracts/plans.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { type CaseOf, makePlanCase, type PlanCase } from '#tests/support/plan-cases.ts';
+import { Call } from '../calls/call.entity.ts';
+import { Reading } from '../readings/reading.entity.ts';
+import { Review } from '../reviews/review.entity.ts';
+import { SideReview } from '../reviews/side-review.entity.ts';
 
 type Agent = Awaited<ReturnType<Api['as']>>;
 let api: Api;
@@ -74,6 +78,38 @@ describe('what a plan starts from', () => {
       const refused = await coach.post(startPath(of)).send({ from: 'reading' }).expect(409);
       expect(refused.body.code).toBe('reading-not-final');
     }
+  });
+});
+
+describe('whether what it starts from is signed off', () => {
+  const signOff = ({ visitId: visit, side }: PlanCase, kind: 'reading' | 'call') =>
+    api.ground.inPractice(api.world.supervisor, async ({ em }) => {
+      const about =
+        kind === 'reading'
+          ? { reading: await em.findOneOrFail(Reading, { visit }) }
+          : { call: await em.findOneOrFail(Call, { visit }) };
+      const by = api.world.supervisor.id;
+      const last = em.create(Review, { visit, side, step: 'signed-off', reason: '', by, ...about });
+      em.create(SideReview, { visit, side, last });
+    });
+
+  it('is said of the reading that was signed, and not of the call beside it', async () => {
+    const made = await planned({ reading: { code: 'early-turn-out' } }, 'reading');
+    expect(made.plan.signedOff).toBeNull();
+    await signOff(made, 'reading');
+    const { body } = await coach.get(`/api/plans/${made.plan.id}`).expect(200);
+    expect(body.signedOff.by.id).toBe(api.world.supervisor.id);
+    const start = await coach.get(startPath(made)).expect(200);
+    const [reading, call] = (start.body as PlanStart).findings;
+    expect(reading?.signedOff?.by.id).toBe(api.world.supervisor.id);
+    expect(call?.signedOff).toBeNull();
+  });
+
+  it('is said of a call by eye where nothing was measured', async () => {
+    const made = await planned();
+    await signOff(made, 'call');
+    const { body } = await coach.get(`/api/plans/${made.plan.id}`).expect(200);
+    expect(body.signedOff.by.id).toBe(api.world.supervisor.id);
   });
 });
 

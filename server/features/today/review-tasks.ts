@@ -42,7 +42,7 @@ type CommentRow = Named & {
 
 /**
  * Recent readings of one's own athletes that wait for the next hand: until they are handed in, and once signed off
- * until a replay shows them to the athlete. A side without a call by eye shows no reading.
+ * until a plan is made from them or a replay shows them to the athlete. A side without a call by eye shows no reading.
  */
 export const readingTasks = async ({ em, actor }: Unit<UserActor>): Promise<WaitingItem[]> => {
   const own = ownOpenAthletes(actor);
@@ -58,6 +58,7 @@ export const readingTasks = async ({ em, actor }: Unit<UserActor>): Promise<Wait
      where ${own.sql} and r.at > now() - interval '${READING_DAYS} days'
        and exists (select from call where call.visit_id = s.visit_id and call.side = s.side)
        and not exists (select from replay p where p.visit_id = s.visit_id and p.side = s.side)
+       and not exists (select from plan q where q.visit_id = s.visit_id and q.side = s.side)
        and w.step is distinct from 'handed-in' and w.step is distinct from 'sent-back'
      order by r.at limit ${AT_MOST}`,
     [...own.params],

@@ -2,11 +2,12 @@ import type { ReactNode } from 'react';
 import type { Finding } from '#shared/contracts/plans.ts';
 import { exerciseOf } from '#shared/plan/library.ts';
 import { StateDot } from '#src/ui/state-dot.tsx';
-import { basisWords, HINDRANCE_WORDS } from './plan-words.ts';
+import { basisWords, HINDRANCE_WORDS, signedOffWords } from './plan-words.ts';
 
 /** One thing that a plan could start from, and what the rules make of it. */
 export function FindingCard({ finding, action }: { finding: Finding; action?: ReactNode }) {
   const { basis, suggestion, hindrance } = finding;
+  const signedOff = signedOffWords(finding.signedOff);
   const { title, from } = basisWords(basis);
   const stages =
     suggestion.kind === 'plan'
@@ -20,7 +21,10 @@ export function FindingCard({ finding, action }: { finding: Finding; action?: Re
   return (
     <li className="border-b border-rule py-5 first:pt-0 last:border-0">
       <h3 className="text-filled font-bold">“{title}”</h3>
-      <p className="text-soft">{from}</p>
+      <p className="flex flex-wrap gap-x-4">
+        <span className="text-soft">{from}</span>
+        <StateDot kind={signedOff.kind}>{signedOff.words}</StateDot>
+      </p>
       <p className="mt-2 max-w-lead">{suggestion.because}</p>
       {stages.length > 0 && (
         <ol className="mt-2">

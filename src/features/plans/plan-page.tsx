@@ -18,7 +18,7 @@ import { GivenSection } from './given-section.tsx';
 import { GiveSection } from './give-section.tsx';
 import { NoteForm } from './note-form.tsx';
 import { OtherFindings } from './other-findings.tsx';
-import { basisWords, STATE_WORDS } from './plan-words.ts';
+import { basisWords, signedOffWords, STATE_WORDS } from './plan-words.ts';
 import { usePlanActs } from './use-plan-acts.ts';
 
 /** `/plans/:id`: what to do until the retest, and what the athlete answers. */
@@ -45,6 +45,7 @@ function Opened({ plan }: { plan: Plan }) {
   const mayEdit = useMay(plan.coachId)('plan.edit');
   useHashTarget();
   const { title, from } = basisWords(basis);
+  const signedOff = signedOffWords(plan.signedOff);
   const retestAlone = rule === null;
   return (
     <Page
@@ -79,6 +80,9 @@ function Opened({ plan }: { plan: Plan }) {
         }
       >
         <p className="text-filled font-bold">“{title}”</p>
+        <p>
+          <StateDot kind={signedOff.kind}>{signedOff.words}</StateDot>
+        </p>
         <p className="mt-1 max-w-lead">{because}</p>
         <OtherFindings plan={plan} again={mayEdit ? acts.again : null} />
       </Section>

@@ -1,6 +1,14 @@
-import type { Finding, Plan, PlanBasis, PlanItem, PlanState } from '#shared/contracts/plans.ts';
+import type {
+  Finding,
+  Plan,
+  PlanBasis,
+  PlanItem,
+  PlanState,
+  SignedOff,
+} from '#shared/contracts/plans.ts';
 import { exerciseOf } from '#shared/plan/library.ts';
 import type { StateKind } from '#src/ui/state-dot.tsx';
+import { moment } from '#src/ui/days.ts';
 import { SAFETY_SHORT } from '#src/ui/exercise-words.ts';
 import { SEEN_WORDS } from '#src/ui/words.ts';
 
@@ -15,6 +23,12 @@ export const basisWords = (basis: PlanBasis): { title: string; from: string } =>
             : `the measured reading, mostly by the ${basis.carrier}`,
       }
     : { title: SEEN_WORDS[basis.seen], from: 'seen by the coach, not measured' };
+
+/** Whether a reviewer stands behind what a plan starts from. */
+export const signedOffWords = (signedOff: SignedOff | null): { kind: StateKind; words: string } =>
+  signedOff
+    ? { kind: 'done', words: `signed off by ${signedOff.by.name}, ${moment(signedOff.at)}` }
+    : { kind: 'wait', words: 'not signed off' };
 
 export const HINDRANCE_WORDS: Record<NonNullable<Finding['hindrance']>, string> = {
   provisional:

@@ -84,6 +84,30 @@ describe('a plan', () => {
     expect(screen.getByText('2 sets of 30 s held, 30 s rest, 6 days a week')).toBeVisible();
   });
 
+  it('says who signed off what it stands on', async () => {
+    const by = { id: coachId, name: 'Theo Brandt' };
+    await open({ signedOff: { by, at: '2026-03-04T10:00:00Z' } });
+    expect(screen.getByText(/^signed off by Theo Brandt, 4 March/)).toBeVisible();
+    expect(screen.queryByText('not signed off')).toBeNull();
+  });
+
+  it('has all sides confirmed at one press, each of which can still be turned', async () => {
+    const unconfirmed = { sideConfirmed: false };
+    const { user, sent } = await open({
+      items: [aPlanItem('foot-tripod', unconfirmed), aPlanItem('supported-hinge', unconfirmed)],
+    });
+    expect(screen.getByText('not signed off')).toBeVisible();
+    await user.click(screen.getByRole('button', { name: 'Confirm all two sides' }));
+    expect(sent().items).toMatchObject([
+      { exercise: 'foot-tripod', side: 'right', sideConfirmed: true },
+      { exercise: 'supported-hinge', side: 'right', sideConfirmed: true },
+    ]);
+    expect(await screen.findAllByText('side confirmed')).toHaveLength(2);
+    expect(screen.queryByRole('button', { name: /^Confirm/ })).toBeNull();
+    await user.click(screen.getByRole('button', { name: /^Turn Supported hinge to the left/ }));
+    expect(sent().items[1]).toMatchObject({ side: 'left', sideConfirmed: false });
+  });
+
   it('puts an exercise earlier, takes one out, adds one', async () => {
     const { user, sent } = await open();
     await user.click(screen.getByRole('button', { name: 'Supported hinge earlier' }));

@@ -199,7 +199,10 @@ test('the coach makes the plan from the reading and gives it', async ({ app, pag
   await givePlan(page, made, '2031-05-04');
 });
 
-test('the coach makes a replay link, shown once, which comes by e-mail and by a code', async ({ app, page }) => {
+test('the coach makes a replay link, shown once, which comes by e-mail and by a code', async ({
+  app,
+  page,
+}) => {
   await signIn(page, app, COACH);
   await page.goto(`/visits/${made.visitId}/sides/right`);
   const replay = page.getByRole('region', { name: 'Replay for the athlete' });
@@ -221,7 +224,9 @@ test('the coach makes a replay link, shown once, which comes by e-mail and by a 
   await expect(page.getByText(made.link)).toHaveCount(0);
 });
 
-test('the athlete opens the link of the letter on a phone, without an account', async ({ browser }) => {
+test('the athlete opens the link of the letter on a phone, without an account', async ({
+  browser,
+}) => {
   const phone = await browser.newContext({
     viewport: { width: 390, height: 844 },
     isMobile: true,

@@ -46,6 +46,15 @@ describe('the plan on a replay', () => {
     expect(screen.getAllByText('Toes long.')[0]).toBeVisible();
   });
 
+  it('says that a newer one was given, above its own exercises', () => {
+    open(() => Response.json({}), anAthletePlan({ newerGivenAt: '2026-05-02T09:00:00Z' }));
+    const words = screen.getByRole('region', { name: 'Your plan' }).textContent ?? '';
+    expect(words).toMatch(
+      /There is a newer plan\. It was given to you on 2 May 2026, .+ Ask Maren Okafor for its link/,
+    );
+    expect(words.indexOf('newer plan')).toBeLessThan(words.indexOf('Standing foot tripod'));
+  });
+
   it('ticks a day off, and takes a slip back', async () => {
     const tick = { exercise: 'foot-tripod', day: today() };
     let ticks = [tick];

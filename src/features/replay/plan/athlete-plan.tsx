@@ -26,9 +26,17 @@ export function AthletePlan({
   const { plan } = given;
   const [ticks, setTicks] = useState(given.ticks);
   const [fault, setFault] = useState<string | null>(null);
+  const newer = given.newerGivenAt !== null && (
+    <p className="mb-4 border-l-[3px] border-ochre py-1 pl-4">
+      <b className="text-ochre">There is a newer plan.</b> It was given to you on{' '}
+      {longDay(given.newerGivenAt.slice(0, 10))}, after a later test, and takes the place of this
+      one. Ask {coach} for its link.
+    </p>
+  );
   if (plan === null)
     return (
       <section aria-label="Your plan" className="border-t border-rule py-6">
+        {newer}
         <h2 className="text-lead font-bold">Your plan is stopped</h2>
         <p className="mt-1">Do none of its exercises any more. {coach} tells you how to go on.</p>
       </section>
@@ -46,6 +54,7 @@ export function AthletePlan({
   };
   return (
     <section aria-label="Your plan" className="border-t border-rule py-6">
+      {newer}
       <h2 className="text-filled font-bold">
         {plan.items.length === 0 ? 'Your next test' : 'Your plan'}
       </h2>
