@@ -42,6 +42,7 @@ export default ts.config(
       'tests/study/cli.ts',
       'tests/mutation/cli.ts',
       'tests/hostile/cli.ts',
+      'tests/faults/cli.ts',
       'tests/branches/cli.ts',
       'shared/evaluate/cli.ts',
     ],

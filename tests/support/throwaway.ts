@@ -1,4 +1,5 @@
-import { execFileSync } from 'node:child_process';
+import { execFile, execFileSync } from 'node:child_process';
+import { promisify } from 'node:util';
 import { fileURLToPath } from 'node:url';
 
 const script = fileURLToPath(
@@ -22,4 +23,24 @@ export interface Throwaway {
 export function startThrowaway(): Throwaway {
   const adminUrl = run('start', String(process.pid)).trim();
   return { adminUrl, stop: () => void run('stop', adminUrl) };
+}
+
+/** One that can be killed and started again, and then has what it had committed. */
+export interface Lasting extends Throwaway {
+  kill(): Promise<void>;
+  again(): Promise<void>;
+}
+
+const beside = async (...args: string[]): Promise<void> => {
+  await promisify(execFile)('bash', [script, ...args]);
+};
+
+export function startLasting(): Lasting {
+  const adminUrl = run('start', String(process.pid), 'lasting').trim();
+  return {
+    adminUrl,
+    stop: () => void run('stop', adminUrl),
+    kill: () => beside('kill', adminUrl),
+    again: () => beside('again', adminUrl),
+  };
 }

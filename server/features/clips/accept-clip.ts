@@ -1,9 +1,11 @@
 import { randomUUID } from 'node:crypto';
+import { access } from 'node:fs/promises';
 import { basename } from 'node:path';
 import type { UserActor } from '#shared/access/actors.ts';
 import type { InPractice } from '#server/db/in-practice.ts';
 import type { Storage } from '#server/storage/storage.ts';
 import { tell } from '../../events/tell.ts';
+import { Problem } from '../../http/problem.ts';
 import { enqueue, type JobOrder } from '../../jobs/job.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../audit/audit.ts';
@@ -28,9 +30,25 @@ const UNSHOWN =
 export const shownName = (name: string): string =>
   basename(name.replaceAll('\\', '/').replaceAll(UNSHOWN, '')).slice(0, 255) || 'clip';
 
+const isHere = (path: string): Promise<boolean> =>
+  access(path).then(
+    () => true,
+    () => false,
+  );
+
+/**
+ * After an error of the machine nobody knows whether the commit came through: a clip that is there keeps its file, and
+ * so does a sender who comes back for it. Where that cannot be asked, a stray file is better than a clip without film.
+ */
+const isWanted = (inPractice: InPractice, actor: UserActor, id: string): Promise<boolean> =>
+  inPractice(
+    actor,
+    async ({ em }) => (await em.count(Clip, { id })) + (await em.count(Upload, { id })) > 0,
+  ).catch(() => true);
+
 /**
  * Takes a complete file in: it moves to its place, then the clip and the job that prepares it are committed
- * together. Refused or failed, the file is gone. A clip of this id that is there already is left as it is.
+ * together. Refused, the file is gone; cut short, it lies in its place already when it is asked for again.
  */
 export const acceptClip = async (
   ground: { readonly inPractice: InPractice; readonly storage: Storage },
@@ -43,7 +61,8 @@ export const acceptClip = async (
   const { inPractice, storage } = ground;
   const { practiceId } = actor;
   const files = clipFiles(practiceId, id);
-  await storage.putFile(files.original, file.path, 'application/octet-stream');
+  if ((await isHere(file.path)) || !(await storage.exists(files.original)))
+    await storage.putFile(files.original, file.path, 'application/octet-stream');
   try {
     await inPractice(actor, async (unit) => {
       const { em } = unit;
@@ -95,7 +114,8 @@ export const acceptClip = async (
       );
     });
   } catch (error) {
-    await storage.deleteAll(clipPrefix(practiceId, id));
+    if (error instanceof Problem || !(await isWanted(inPractice, actor, id)))
+      await storage.deleteAll(clipPrefix(practiceId, id));
     throw error;
   }
   return id;

@@ -17,6 +17,7 @@ import type { Athlete } from '../athletes/athlete.entity.ts';
 import { needOpen } from '../athletes/consent-gate.ts';
 import { acceptClip, shownName } from './accept-clip.ts';
 import { Clip } from './clip.entity.ts';
+import { clipFiles, clipPrefix } from './clip-files.ts';
 import { cameraOf, needSize, needUploadAllowed } from './upload-gate.ts';
 import { Upload } from './upload.entity.ts';
 
@@ -50,8 +51,9 @@ export const resumableUploadFeature: Feature = ({ serve, router, ground }) => {
     if (!upload) return;
     const { name, view, supportSide = null, mirrored, bytes } = upload;
     const file = { path: pathOf(id), name, view, supportSide, mirrored, bytes };
-    await acceptClip(ground, actor, upload.visit.id, file, id);
+    // first: killed afterwards, nobody would come back for it
     await rm(`${pathOf(id)}.json`, { force: true });
+    await acceptClip(ground, actor, upload.visit.id, file, id);
   };
 
   /** Who sends which upload: the protocol's own hooks do not know of sessions. */
@@ -85,7 +87,10 @@ export const resumableUploadFeature: Feature = ({ serve, router, ground }) => {
     );
     if (!upload) return false;
     const received = await stat(pathOf(id)).catch(() => null);
-    if (received?.size !== upload.bytes) return true;
+    const isWhole = received
+      ? received.size === upload.bytes
+      : await storage.exists(clipFiles(actor.practiceId, id).original);
+    if (!isWhole) return true;
     await finish(actor, id);
     return false;
   };
@@ -142,10 +147,12 @@ export const resumableUploadFeature: Feature = ({ serve, router, ground }) => {
   });
 
   serve(routes.cancelUpload, async ({ params, work }) => {
-    await work(async (unit) => {
-      unit.em.remove(await uploadInSight(unit, params.id));
-    });
-    await rm(pathOf(params.id), { force: true });
-    await rm(`${pathOf(params.id)}.json`, { force: true });
+    const { id, practiceId } = await work((unit) => uploadInSight(unit, params.id));
+    // files first: killed in between, the row still names them
+    await rm(pathOf(id), { force: true });
+    await rm(`${pathOf(id)}.json`, { force: true });
+    const isTakenIn = await work(({ em }) => em.count(Clip, { id }));
+    if (!isTakenIn) await storage.deleteAll(clipPrefix(practiceId, id));
+    await work(({ em }) => em.nativeDelete(Upload, { id }));
   });
 };
