@@ -17,9 +17,12 @@ module.exports = {
     ),
     room(
       'shared-is-pure',
-      { path: '^shared/', pathNot: '\\.test\\.ts$|^shared/contracts/|^shared/evaluate/' },
+      {
+        path: '^shared/',
+        pathNot: '\\.test\\.ts$|^shared/contracts/|^shared/evaluate/|^shared/plots/',
+      },
       { dependencyTypes: ['npm', 'npm-dev', 'core'], pathNot: 'node_modules/@types' },
-      'Only shared/contracts may use a package (zod).',
+      'Only shared/contracts (zod) and shared/plots (d3) may use a package.',
     ),
     room(
       'only-contracts-use-zod',
@@ -122,6 +125,18 @@ module.exports = {
       { path: '^server/', pathNot: '^server/mail/|\\.test\\.ts$' },
       { path: 'node_modules/nodemailer' },
       'Mail only through server/mail.',
+    ),
+    room(
+      'pdf-behind-its-adapter',
+      { path: '^server/', pathNot: '^server/pdf/|\\.test\\.ts$' },
+      { path: 'node_modules/pdfkit' },
+      'Documents are written only through server/pdf.',
+    ),
+    room(
+      'plots-use-d3-alone',
+      { path: '^shared/plots/', pathNot: '\\.test\\.ts$' },
+      { dependencyTypes: ['npm', 'npm-dev', 'core'], pathNot: 'node_modules/(@types/)?d3-' },
+      'Geometry of plots, for pages and paper.',
     ),
   ],
   options: {

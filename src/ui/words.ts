@@ -1,5 +1,4 @@
 import type { Purpose } from '#shared/contracts/consents.ts';
-import type { Seen } from '#shared/contracts/calls.ts';
 import type { Side, View } from '#shared/contracts/primitives.ts';
 
 /** The trade's words for the contract's codes, the same on every page. */
@@ -14,13 +13,7 @@ export const VIEW_WORDS = {
   'support-side': 'from the support side',
 } as const satisfies Record<View, string>;
 
-/** What was seen by eye: a call, never a reading. */
-export const SEEN_WORDS = {
-  early: 'Turned out early',
-  'on-time': 'Turned in on time',
-  still: 'Held still',
-  unsure: 'Unsure',
-} as const satisfies Record<Seen, string>;
+export { SEEN_WORDS } from '#shared/exports/call-words.ts';
 
 export const PURPOSE_WORDS = {
   assessment: 'Filming and marking in this practice',

@@ -14,7 +14,7 @@ import { paths } from '#src/ui/paths.ts';
 import { gatesOf, type ReadingRules } from '#shared/protocol/protocol.ts';
 import { useProtocol } from '#src/api/use-protocol.ts';
 import { useHashTarget } from '#src/ui/use-hash-target.ts';
-import { LIMITS } from './limits.ts';
+import { LIMITS } from '#shared/measures/method-limits.ts';
 
 const UNITS: Record<Measure['unit'], string> = { degrees: '°', millimetres: ' mm' };
 

@@ -1,5 +1,5 @@
 import { decimal } from '../figures.ts';
-import type { CourseScale } from './course-scale.ts';
+import type { CourseScale } from '#shared/plots/course-scale.ts';
 
 const signed = (value: number) => `${value > 0 ? '+' : ''}${decimal(value, 0)}`;
 

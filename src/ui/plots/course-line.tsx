@@ -1,5 +1,5 @@
-import type { CourseScale } from './course-scale.ts';
-import { bandPath, type CourseCurve, linePath, runsOf } from './course-shapes.ts';
+import type { CourseScale } from '#shared/plots/course-scale.ts';
+import { bandPath, type CourseCurve, linePath, runsOf } from '#shared/plots/course-shapes.ts';
 
 /** The fit with its 95 % band; dotted where no marked frame carries it. */
 export function CourseLine({

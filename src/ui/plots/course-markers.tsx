@@ -1,5 +1,5 @@
 import { turn as turnText } from '../figures.ts';
-import type { CourseScale } from './course-scale.ts';
+import type { CourseScale } from '#shared/plots/course-scale.ts';
 
 /** The frame that is shown: cross lines, tags on both axes, a ring where its turn is known. */
 export function CourseCurrent({

@@ -4,8 +4,8 @@ import { turnAt } from '#shared/reading/at-lift.ts';
 import { CourseAxes } from './course-axes.tsx';
 import { CourseLine, CourseRepLine } from './course-line.tsx';
 import { CoursePoints, type CoursePoint } from './course-points.tsx';
-import { courseScale, type CourseScale } from './course-scale.ts';
-import type { CourseCurve } from './course-shapes.ts';
+import { courseScale, type CourseScale } from '#shared/plots/course-scale.ts';
+import type { CourseCurve } from '#shared/plots/course-shapes.ts';
 import { CourseWedge } from './course-wedge.tsx';
 import { useWidth } from './use-width.ts';
 

@@ -1,6 +1,6 @@
 import { symbol, symbolCircle, symbolSquare, symbolTriangle } from 'd3-shape';
 import { cx } from '../class-names.ts';
-import type { CourseScale } from './course-scale.ts';
+import type { CourseScale } from '#shared/plots/course-scale.ts';
 
 export interface CoursePoint {
   readonly lift: number;

@@ -1,6 +1,6 @@
 import { useId } from 'react';
-import type { CourseScale } from './course-scale.ts';
-import { WEDGE, wedgePath } from './course-shapes.ts';
+import type { CourseScale } from '#shared/plots/course-scale.ts';
+import { WEDGE, wedgePath } from '#shared/plots/course-shapes.ts';
 import { Hatch } from './hatch.tsx';
 
 /** Of the words 'holds: not a pass', px. */

@@ -1,5 +1,5 @@
-import type { CourseScale } from './course-scale.ts';
-import { bandPath, type CourseCurve, linePath, runsOf } from './course-shapes.ts';
+import type { CourseScale } from '#shared/plots/course-scale.ts';
+import { bandPath, type CourseCurve, linePath, runsOf } from '#shared/plots/course-shapes.ts';
 
 /** A course laid over another one: dashed and in ink, its band by its edges alone. */
 export function SecondCourse({ curve, scale }: { curve: CourseCurve; scale: CourseScale }) {

@@ -1,8 +1,8 @@
 import { useRef, type KeyboardEvent, type PointerEvent, type ReactNode } from 'react';
 import { type Degrees, degrees } from '#shared/geometry/units.ts';
 import { liftText } from '#shared/overlay/figures.ts';
-import { courseScale } from '#src/ui/plots/course-scale.ts';
-import { LIFT_RANGE } from '#src/ui/plots/course-scale.ts';
+import { courseScale } from '#shared/plots/course-scale.ts';
+import { LIFT_RANGE } from '#shared/plots/course-scale.ts';
 import { gatesOf } from '#shared/protocol/protocol.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { frameAtLift, liftAt } from '../model/hill.ts';

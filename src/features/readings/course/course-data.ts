@@ -1,5 +1,5 @@
 import type { RepResult } from '#shared/reading/types.ts';
-import { LIFT_RANGE } from '#src/ui/plots/course-scale.ts';
+import { LIFT_RANGE } from '#shared/plots/course-scale.ts';
 import type { CoursePoint } from '#src/ui/plots/course-points.tsx';
 
 /**

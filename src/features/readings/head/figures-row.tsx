@@ -4,7 +4,7 @@ import type { Onset, ReadingFigures } from '#shared/reading/types.ts';
 import { degrees, plusMinus, turn } from '#src/ui/figures.ts';
 import { gateRange } from '#src/ui/gate-words.ts';
 import { type Gates, gatesOf } from '#shared/protocol/protocol.ts';
-import { isTold, partHalfWidth } from '../parts/part-half-width.ts';
+import { isTold, partHalfWidth } from '#shared/reading/part-half-width.ts';
 import { inHundred } from '../words/probability-words.ts';
 
 /** The figures of the reps together, each with its ± and what it means. */

@@ -9,7 +9,7 @@ import { Section } from '#src/ui/page.tsx';
 import { SideMark } from '#src/ui/side-mark.tsx';
 import { gateRange } from '#src/ui/gate-words.ts';
 import { type Gates, gatesOf } from '#shared/protocol/protocol.ts';
-import { isTold, partHalfWidth } from './part-half-width.ts';
+import { isTold, partHalfWidth } from '#shared/reading/part-half-width.ts';
 import { partsAtGates, type Parts } from './parts-at-gates.ts';
 import { RepParts } from './rep-parts.tsx';
 

@@ -8,7 +8,7 @@ import type { Degrees } from '#shared/geometry/units.ts';
 import { repHalfWidth } from '#shared/reading/at-lift.ts';
 import { drawnReps } from '../course/course-data.ts';
 import { repName } from '../words/rep-names.ts';
-import { repPartHalfWidth } from './part-half-width.ts';
+import { repPartHalfWidth } from '#shared/reading/part-half-width.ts';
 
 interface Row {
   readonly name: string;

@@ -2,7 +2,7 @@ import type { Reading } from '#shared/contracts/readings.ts';
 import { capital, decimal, degrees, inWords, turn } from '#src/ui/figures.ts';
 import { gateRange } from '#src/ui/gate-words.ts';
 import { gatesOf } from '#shared/protocol/protocol.ts';
-import { changeRows } from '../substitutions/changes.ts';
+import { changeRows } from '#shared/reading/changes.ts';
 import { reasonWords } from '../words/reason-words.ts';
 import { directionWords, meaningOf } from '../words/substitution-words.ts';
 

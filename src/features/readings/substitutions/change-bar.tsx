@@ -1,4 +1,4 @@
-import type { ChangeRow } from './changes.ts';
+import type { ChangeRow } from '#shared/reading/changes.ts';
 
 /** Degrees or millimetres from zero to an end of the bar. */
 const REACH = { degrees: 10, millimetres: 20 } as const;

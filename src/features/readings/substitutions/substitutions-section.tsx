@@ -9,7 +9,7 @@ import { type Column, Table } from '#src/ui/table.tsx';
 import { missingWords } from '../words/missing-words.ts';
 import { directionWords } from '../words/substitution-words.ts';
 import { ChangeBar } from './change-bar.tsx';
-import { type ChangeRow, changeRows } from './changes.ts';
+import { type ChangeRow, changeRows } from '#shared/reading/changes.ts';
 
 const changeText = ({ change, unit }: ChangeRow): string => {
   if (change === null) return '';

@@ -1,4 +1,5 @@
-import type { Call, Seen, SeenSubstitution } from '#shared/contracts/calls.ts';
+import type { Seen, SeenSubstitution } from '#shared/contracts/calls.ts';
+import { CONFIDENCE_WORDS, SUBSTITUTION_WORDS } from '#shared/exports/call-words.ts';
 import type { Gates } from '#shared/protocol/protocol.ts';
 import { levelWords } from '#src/ui/gate-words.ts';
 
@@ -12,24 +13,6 @@ export const seenNotes = (gates: Gates | null): Record<Seen, string> => ({
   unsure: 'could not tell',
 });
 
-export const CONFIDENCE_WORDS = {
-  guess: 'A guess',
-  'fairly-sure': 'Fairly sure',
-  sure: 'Sure',
-} as const satisfies Record<Call['confidence'], string>;
-
-/** Substitutions an eye can see, in pairs of opposites where there are any. */
-export const SUBSTITUTION_WORDS = {
-  'side-bend-to-support': 'Trunk bends to the support side',
-  'side-bend-away': 'Trunk bends away',
-  'pelvis-hikes': 'Pelvis hikes',
-  'pelvis-drops': 'Pelvis drops',
-  'knee-falls-in': 'Support knee falls in',
-  'foot-turns-out': 'Support foot turns out',
-  'heel-rises': 'Heel rises',
-  'leans-back': 'Trunk leans back',
-  'lifted-knee-drifts': 'Lifted knee drifts across or away',
-  'lifted-foot-swings-in': 'Lifted foot swings to the midline',
-} as const satisfies Record<SeenSubstitution, string>;
+export { CONFIDENCE_WORDS, SUBSTITUTION_WORDS };
 
 export const SEEN_SUBSTITUTIONS = Object.keys(SUBSTITUTION_WORDS) as SeenSubstitution[];
