@@ -6,6 +6,9 @@ const TEXT_FILE = /^(licen[sc]e|copying)([-.]\w+)*$/i;
 const README = /^readme(\.(md|txt|markdown))?$/i;
 /** Under its heading nothing but the licence's name. */
 const IN_README = /^#+[ \t]*licen[sc]e[ \t]*\n+[ \t]*([\w.-]+)[ \t]*\n*$/im;
+/** The words themselves, where nothing else names them: its heading, and the sentence that no other licence begins with. */
+const MIT_WORDS =
+  /^\s*(?:The )?MIT License\b[\s\S]*?\n\s*Permission is hereby granted, free of charge, to any person/;
 
 interface Described {
   readonly license?: string | { readonly type: string };
@@ -24,13 +27,11 @@ const described = ({ license, licenses }: Described): string | undefined => {
 };
 
 /**
- * An SPDX expression: of the lock, else of the package's own description, else of its readme. Null where none of
- * them says.
+ * An SPDX expression: of the lock, else of the package's own description, else of its readme, else of the words it
+ * brings. Null where none of them says.
  */
-export const licenceOf = (
-  root: string,
-  { entry, place, installed }: LockedPackage,
-): string | null => {
+export const licenceOf = (root: string, one: LockedPackage): string | null => {
+  const { entry, place, installed } = one;
   if (entry.license !== undefined) return entry.license;
   if (!installed) return null;
   const folder = join(root, place);
@@ -40,7 +41,9 @@ export const licenceOf = (
   if (own !== undefined) return own;
   const [readme] = filesOf(folder, README);
   const text = readme === undefined ? '' : readFileSync(join(folder, readme), 'utf8');
-  return IN_README.exec(text.replaceAll('\r\n', '\n'))?.[1] ?? null;
+  const named = IN_README.exec(text.replaceAll('\r\n', '\n'))?.[1];
+  if (named !== undefined) return named;
+  return MIT_WORDS.test(licenceTextOf(root, one) ?? '') ? 'MIT' : null;
 };
 
 /** The licence's words as the package brings them, or null. */

@@ -59,6 +59,8 @@ describe('licences', () => {
     });
     expect(by('scheduler')).toMatchObject({ browser: true });
     expect(by('express')).toMatchObject({ licence: 'MIT', browser: false, version: null });
+    // says it by its words alone
+    expect(by('png-js')).toMatchObject({ licence: 'MIT', browser: false });
     expect(by('vitest')).toBeUndefined();
     const font = by('@fontsource/source-sans-3');
     expect(font).toMatchObject({ licence: 'OFL-1.1', browser: true });

@@ -24,6 +24,7 @@ import { Reading } from '../features/readings/reading.entity.ts';
 import { SideSetting } from '../features/readings/side-setting.entity.ts';
 import { Replay } from '../features/replays/replay.entity.ts';
 import { Rep } from '../features/reps/rep.entity.ts';
+import { Report } from '../features/reports/report.entity.ts';
 import { Erasure } from '../features/retention/erasure.entity.ts';
 import { Review } from '../features/reviews/review.entity.ts';
 import { SideReview } from '../features/reviews/side-review.entity.ts';
@@ -72,6 +73,7 @@ export const entities = [
   Comment,
   Head,
   Replay,
+  Report,
   Erasure,
   JobOutbox,
 ];

@@ -20,6 +20,7 @@ import { Migration20261202043400_erasures } from '../../migrations/Migration2026
 import { Migration20261202071000_reviews } from '../../migrations/Migration20261202071000_reviews.ts';
 import { Migration20261202071700_plans } from '../../migrations/Migration20261202071700_plans.ts';
 import { Migration20261202081600_waiting_mail } from '../../migrations/Migration20261202081600_waiting_mail.ts';
+import { Migration20261202090100_reports } from '../../migrations/Migration20261202090100_reports.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -97,6 +98,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202081600_waiting_mail',
     class: Migration20261202081600_waiting_mail,
+  },
+  {
+    name: 'Migration20261202090100_reports',
+    class: Migration20261202090100_reports,
   },
 ];
 

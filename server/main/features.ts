@@ -20,6 +20,7 @@ import { protocolFeature } from '../features/protocol/protocol.routes.ts';
 import { readingsFeature } from '../features/readings/readings.routes.ts';
 import { replaysFeature } from '../features/replays/replays.routes.ts';
 import { repsFeature } from '../features/reps/reps.routes.ts';
+import { reportsFeature } from '../features/reports/reports.routes.ts';
 import { retentionFeature } from '../features/retention/retention.routes.ts';
 import { reviewsFeature } from '../features/reviews/reviews.routes.ts';
 import { secondMarkingsFeature } from '../features/second-markings/second-markings.routes.ts';
@@ -58,6 +59,7 @@ export const features: readonly Feature[] = [
   replaysFeature,
   commentsFeature,
   exportsFeature,
+  reportsFeature,
   benchFeature,
   eventsFeature,
 ];

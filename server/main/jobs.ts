@@ -4,6 +4,7 @@ import { sendNoticeJob } from '../features/accounts/jobs/send-notice.ts';
 import { sendMailLinkJob } from '../features/mail-links/jobs/send-mail-link.ts';
 import { hideHeadJob } from '../features/replays/jobs/hide-head.ts';
 import { removeHiddenJob } from '../features/replays/jobs/remove-hidden.ts';
+import { makeReportJob } from '../features/reports/jobs/make-report.ts';
 import { deriveReadingJob } from '../features/readings/jobs/derive-reading.ts';
 import { eraseFilesJob } from '../features/retention/jobs/erase-files.ts';
 import { tidyJob } from '../features/retention/jobs/tidy.ts';
@@ -16,6 +17,7 @@ export const jobs: readonly AnyJobHandler[] = [
   deriveReadingJob,
   hideHeadJob,
   removeHiddenJob,
+  makeReportJob,
   sendMailLinkJob,
   sendWaitingMailJob,
   sendNoticeJob,

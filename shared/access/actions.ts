@@ -50,6 +50,7 @@ export const ACTIONS = {
   'head.save': 'caseload',
   'head.look': 'caseload',
   'plan.edit': 'caseload',
+  'report.make': 'caseload',
   'replay.make': 'caseload',
   'replay.revoke': 'caseload',
   'comment.read': 'comment',

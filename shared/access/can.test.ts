@@ -82,6 +82,7 @@ const EXPECTED: Record<Action, readonly ActorName[]> = {
   'head.save': WORKS,
   'head.look': WORKS,
   'plan.edit': WORKS,
+  'report.make': WORKS,
   'replay.make': WORKS,
   'replay.revoke': WORKS,
   'comment.read': SEES,

@@ -74,6 +74,8 @@ export const AUDIT_ACTIONS = {
   'plan.stop': ['athlete', 'Stopped a plan'],
   'plan.pain': ['athlete', 'Answered about pain'],
   'plan.see-pain': ['athlete', 'Looked at answers about pain'],
+  'report.make': ['athlete', 'Asked for a report'],
+  'report.open': ['athlete', 'Opened a report'],
   'replay.make': ['athlete', 'Made a replay link'],
   'replay.send': ['athlete', 'Asked to send a replay link by e-mail'],
   'replay.revoke': ['athlete', 'Revoked a replay link'],

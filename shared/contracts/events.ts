@@ -21,6 +21,7 @@ export const liveEvent = z
     z.object({ type: z.literal('comments'), clipId: id, byUserId: id }),
     z.object({ type: z.literal('reading'), visitId: id, side }),
     z.object({ type: z.literal('plan'), planId: id, visitId: id }),
+    z.object({ type: z.literal('report'), visitId: id }),
     /** Somebody has this clip open, or has left it. Said anew while it lasts, and kept nowhere. */
     z.object({ type: z.literal('here'), clipId: id, by: personRef, here: z.boolean() }),
     /** A consent was given or withdrawn: what is open of this athlete may be closed by now. */

@@ -104,6 +104,12 @@ export const PROBLEMS = {
   'held-back': [409, 'This exercise is held back for this athlete.'],
   'plan-not-ready': [409, 'This plan cannot be given to the athlete yet.'],
   'plan-not-running': [409, 'There is no plan running on this link.'],
+  // reports
+  'report-being-made': [
+    409,
+    'A report of this visit is being made. Wait until it is ready, then ask for the next.',
+  ],
+  'report-missing-in-storage': [503, 'The report’s file cannot be reached right now.'],
   // replays
   'head-not-covered': [409, 'The head is not covered on every frame that would be shown.'],
   'head-not-looked-at': [409, 'Nobody has looked yet whether the head is covered.'],

@@ -20,6 +20,7 @@ import { readingRoutes } from './readings.ts';
 import { reliabilityRoutes } from './reliability.ts';
 import { repRoutes } from './reps.ts';
 import { replayRoutes } from './replays.ts';
+import { reportRoutes } from './reports.ts';
 import { retentionRoutes } from './retention.ts';
 import { reviewRoutes } from './reviews.ts';
 import { secondMarkingRoutes } from './second-markings.ts';
@@ -54,6 +55,7 @@ export const routes = {
   ...reviewRoutes,
   ...commentRoutes,
   ...exportRoutes,
+  ...reportRoutes,
   ...headRoutes,
   ...planRoutes,
   ...replayRoutes,

@@ -12,6 +12,7 @@ const TYPES = [
   'comments',
   'reading',
   'plan',
+  'report',
   'consent',
   'signed-out',
 ] as const satisfies readonly LiveEvent['type'][];

@@ -7,6 +7,7 @@ import { benchOptions, clipOptions, commentsOptions } from './bench.queries.ts';
 import { openLiveEvents } from './live-events.ts';
 import { plansKey } from './plans.queries.ts';
 import { sidesKey } from './readings.queries.ts';
+import { reportsOptions } from './reports.queries.ts';
 import { reviewQueueQuery } from './reviews.queries.ts';
 import { todayQuery } from './today.queries.ts';
 import { visitOptions } from './visits.queries.ts';
@@ -66,6 +67,9 @@ export function refresh(client: QueryClient, event: Exclude<LiveEvent, { type: '
     case 'plan':
       invalidate(plansKey);
       invalidate(todayQuery.queryKey);
+      break;
+    case 'report':
+      invalidate(reportsOptions(event.visitId).queryKey);
       break;
     case 'reading':
       invalidate(plansKey);

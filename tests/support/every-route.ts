@@ -77,6 +77,10 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   sendReplay: 'replay',
   revokeReplay: 'replay',
   hideHeadAgain: 'replay',
+  listReports: 'visit',
+  makeReport: 'visit',
+  makeReportAgain: 'failedReport',
+  reportFile: 'report',
   repFrames: 'rep',
   visitFrames: 'visit',
   repAnnotations: 'rep',
@@ -208,6 +212,8 @@ export type Ids = Record<
   | 'comment'
   | 'plan'
   | 'planToChange'
+  | 'report'
+  | 'failedReport'
   | 'replay',
   string
 >;

@@ -12,12 +12,36 @@ import { PlanItem } from '#server/features/plans/plan-item.entity.ts';
 import { Plan } from '#server/features/plans/plan.entity.ts';
 import { exerciseOf } from '#shared/plan/library.ts';
 import { Replay } from '#server/features/replays/replay.entity.ts';
+import type { ReportContent } from '#server/features/reports/report-content.ts';
+import { Report } from '#server/features/reports/report.entity.ts';
 import { makeRep } from '#server/features/reps/rep.factory.ts';
 import { SecondMarking } from '#server/features/second-markings/second-marking.entity.ts';
 import { SetUp } from '#server/features/visits/set-up.entity.ts';
 import { Session } from '#server/features/accounts/session.entity.ts';
 import type { Api } from './api.ts';
 import type { Ids } from './every-route.ts';
+
+/** A report that says nothing. */
+export const emptyReport = (name = 'Wren Marsh'): ReportContent => ({
+  practice: { name: 'Test Practice', contact: '' },
+  athlete: { name, birthDate: '1999-04-01' },
+  visit: {
+    day: '2026-03-03',
+    coach: 'A coach',
+    filming: {
+      distanceMm: null,
+      lensHeightMm: null,
+      rodMm: null,
+      beltPointerMm: null,
+      thighPointerMm: null,
+    },
+    views: [],
+    clips: 0,
+  },
+  sides: [],
+  compared: null,
+  plans: [],
+});
 
 /** A new thing of each kind that a route can name, all of the world's first coach. */
 export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
@@ -58,6 +82,22 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
       frames: [{ frame: 1, landmarks: ['asis-support'] }],
       first: [],
       phases: {},
+    });
+    const report = em.create(Report, {
+      visit,
+      number: 1,
+      state: 'ready',
+      content: emptyReport(),
+      pages: 1,
+      bytes: 1,
+      by: coach,
+    });
+    const failedReport = em.create(Report, {
+      visit,
+      number: 2,
+      state: 'failed',
+      content: emptyReport(),
+      by: coach,
     });
     const upload = em.create(Upload, {
       visit,
@@ -138,6 +178,8 @@ export const makeOneOfEach = ({ ground, world }: Api): Promise<Ids> => {
       plan: plan.id,
       planToChange: planToChange.id,
       replay: replay.id,
+      report: report.id,
+      failedReport: failedReport.id,
     };
   });
 };

@@ -28,6 +28,7 @@ export function signedInApi(role: Role = 'coach') {
     .on(routes.me, () => aMe(role))
     .on(routes.waitingMail, () => ({ items: [] }))
     .on(routes.protocol, () => aProtocolPage())
+    .on(routes.listReports, () => ({ items: [] }))
     .on(routes.listPlans, () => ({ items: [] }))
     .on(routes.consentWording, () => aWordingPage());
 }

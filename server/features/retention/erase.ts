@@ -34,6 +34,7 @@ const heldOf = async (em: EntityManager, athleteId: string): Promise<Held> => {
        (select array_agg(id::text) from (
          select id from v union select id from rep where clip_id in (select id from c)
          union select id from replay where visit_id in (select id from v)
+         union select id from report where visit_id in (select id from v)
          union select m.id from second_marking m join rep r on r.id = m.rep_id where r.clip_id in (select id from c)
        ) o) as others,
        (select coalesce(sum(bytes), 0)::text from c) as bytes`,

@@ -14,6 +14,9 @@ import { makeClip } from '../clips/clip.factory.ts';
 import { Upload } from '../clips/upload.entity.ts';
 import { Comment } from '../comments/comment.entity.ts';
 import { Replay } from '../replays/replay.entity.ts';
+import { emptyReport } from '#tests/support/one-of-each.ts';
+import { reportKey } from '../reports/report-files.ts';
+import { Report } from '../reports/report.entity.ts';
 import { makeRep } from '../reps/rep.factory.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
 import { Erasure } from './erasure.entity.ts';
@@ -79,6 +82,10 @@ beforeEach(async () => {
       tokenHash: tokenHash(token),
       expiresAt: new Date(Date.now() + 1e9),
     });
+    const report = em.create(Report, {
+      ...{ visit, number: 1, state: 'ready', content: emptyReport(secret), pages: 1, bytes: 1 },
+      by: coach,
+    });
     const upload = em.create(Upload, {
       ...{ visit, name: `${secret}.mov`, bytes: 100, view: 'front', supportSide: 'right' },
       ...{ mirrored: false, openedBy: coach },
@@ -89,6 +96,7 @@ beforeEach(async () => {
       ...Object.values(hiddenFiles(practiceId, id, replay.id, randomUUID())),
       frameKey(practiceId, id, 3),
       sheetKey(practiceId, id, 1),
+      reportKey(practiceId, athlete.id, report.id),
     ];
     for (const key of keys)
       await storage.putStream(key, Readable.from([secret]), 'application/octet-stream');
@@ -178,7 +186,7 @@ describe('an athlete who is erased', () => {
   it('leaves nothing in any table and in no file, but a tombstone without a name', async () => {
     const ids = await idsOf();
     expect(ids.length).toBeGreaterThan(6);
-    expect(await filesWith(secret)).toHaveLength(12);
+    expect(await filesWith(secret)).toHaveLength(13);
     const answer = await erase();
     expect(answer.status).toBe(202);
     expect(answer.body).toMatchObject({ why: 'asked', visits: 1, clips: 1, doneAt: null });

@@ -14,6 +14,7 @@ import { CallStep } from './call-step.tsx';
 import { UploadStep } from './clips/upload-step.tsx';
 import { ConsentStep } from './consent-step.tsx';
 import { FilmStep } from './filming/film-step.tsx';
+import { ReportsSection } from './reports-section.tsx';
 import { SafetyStep } from './safety/safety-step.tsx';
 import { TakeAway } from './take-away.tsx';
 import { useHashTarget } from '#src/ui/use-hash-target.ts';
@@ -73,6 +74,7 @@ function Opened({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
       <FilmStep visit={visit} may={may} unfold={clips.length === 0} />
       <UploadStep visit={visit} clips={clips} may={may} open={open} />
       <CallStep visit={visit} clips={clips} may={may} />
+      <ReportsSection visitId={visit.id} clips={clips} may={may} />
       <TakeAway visitId={visit.id} clips={clips} />
     </Page>
   );

@@ -15,6 +15,8 @@ import { scanKey } from '../../consents/scans.service.ts';
 import { type Addresses, annotatedComment, annotatedRep } from '../../exports/annotated.ts';
 import { framesCsv } from '../../exports/exported-reps.ts';
 import { timesOfClip } from '../../reps/reps.presenter.ts';
+import { reportKey } from '../../reports/report-files.ts';
+import { Report } from '../../reports/report.entity.ts';
 import { storedReps } from '../../reps/stored-reps.ts';
 import { Visit } from '../../visits/visit.entity.ts';
 import type { HeldFile } from './held-file.ts';
@@ -57,6 +59,23 @@ const trackOf = (clip: Clip, comments: readonly Comment[]): string =>
       return span ? [{ id: comment.id, span, speaker, text: comment.body }] : [];
     }),
   );
+
+const reportsOf = async (
+  em: Of['em'],
+  visit: Visit,
+  folder: string,
+  athlete: Athlete,
+): Promise<HeldFile[]> => {
+  const reports = await em.find(
+    Report,
+    { visit: visit.id, state: 'ready' },
+    { orderBy: { number: 'asc' } },
+  );
+  return reports.map(({ id, number, practiceId }) => ({
+    name: `${folder}/report-${number}.pdf`,
+    key: reportKey(practiceId, athlete.id, id),
+  }));
+};
 
 /** What was filmed on one day: clips as they were sent, and what was said about them in open formats. */
 const visitFiles = async (
@@ -102,6 +121,7 @@ const visitFiles = async (
         annotationCollection(urn(visit.id), `Visit of ${visit.day}`, said),
       ),
     );
+  files.push(...(await reportsOf(em, visit, folder, athlete)));
   return files;
 };
 

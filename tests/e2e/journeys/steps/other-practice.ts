@@ -119,6 +119,8 @@ export async function everythingOf(request: APIRequestContext, run: Run): Promis
   const { planId } = await ask(request, routes.planStart, { params: side });
   const plan =
     planId ?? (await ask(request, routes.makePlan, { params: side, body: { from: 'call' } })).id;
+  const { items: reports } = await ask(request, routes.listReports, { params: { id: visitId } });
+  const report = reports[0] ?? (await ask(request, routes.makeReport, { params: { id: visitId } }));
   const first = <T extends { id: string }>(items: readonly T[]): string => items[0]?.id ?? '';
   return {
     session: session.id,
@@ -137,6 +139,8 @@ export async function everythingOf(request: APIRequestContext, run: Run): Promis
     plan,
     planToChange: plan,
     replay: first(replays.items),
+    report: report.id,
+    failedReport: report.id,
   };
 }
 
