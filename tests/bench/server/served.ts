@@ -8,6 +8,8 @@ export interface Served {
   readonly api: Api;
   /** Asks as the coach of the test world. */
   readonly ask: (path: string, init?: RequestInit) => Promise<unknown>;
+  /** The same as somebody else. */
+  readonly asking: (user: User) => Promise<Served['ask']>;
   readonly stop: () => Promise<void>;
 }
 
@@ -30,17 +32,21 @@ export const serve = async (): Promise<Served> => {
   const server = api.app.listen(0, '127.0.0.1');
   await new Promise((resolve) => server.once('listening', resolve));
   const { port } = server.address() as AddressInfo;
-  const cookie = await cookieOf(api, api.world.coach);
-  return {
-    api,
-    ask: async (path, init = {}) => {
+  const asking = async (user: User) => {
+    const cookie = await cookieOf(api, user);
+    return async (path: string, init: RequestInit = {}): Promise<unknown> => {
       const answer = await fetch(`http://127.0.0.1:${port}${path}`, {
         ...init,
         headers: { cookie, 'content-type': 'application/json' },
       });
       if (!answer.ok) throw new Error(`${path} answered ${answer.status}`);
       return answer.json();
-    },
+    };
+  };
+  return {
+    api,
+    asking,
+    ask: await asking(api.world.coach),
     stop: async () => {
       await new Promise((resolve) => server.close(resolve));
       await api.close();
