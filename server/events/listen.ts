@@ -17,22 +17,33 @@ export const listenForEvents = async (options: {
 }): Promise<() => Promise<void>> => {
   const { url, log, onEvent, onGap } = options;
   let stopped = false;
-  let client: Client;
+  let client: Client | undefined;
   let timer: NodeJS.Timeout | undefined;
 
   const open = async (): Promise<void> => {
-    client = new Client({ connectionString: url, keepAlive: true });
-    client.on('notification', ({ payload }) => {
+    const opened = new Client({ connectionString: url, keepAlive: true });
+    client = opened;
+    let listening = false;
+    opened.on('notification', ({ payload }) => {
       if (payload) onEvent(JSON.parse(payload) as ToldEvent);
     });
-    client.on('error', () => undefined);
-    client.on('end', () => {
-      if (!stopped) reopen();
+    opened.on('error', () => undefined);
+    opened.on('end', () => {
+      // one that never came to listen ends too: whoever opened it tries again, or each failure would count twice
+      if (listening && !stopped) reopen();
     });
-    await client.connect();
-    await client.query(`listen ${EVENT_CHANNEL}`);
+    try {
+      await opened.connect();
+      await opened.query(`listen ${EVENT_CHANNEL}`);
+      listening = true;
+    } catch (error) {
+      void opened.end().catch(() => undefined);
+      throw error;
+    }
+    if (stopped) await opened.end();
   };
   const reopen = (): void => {
+    if (stopped) return;
     log.warn('the connection for live events was lost and is opened again');
     timer = setTimeout(() => {
       open().then(onGap, reopen);
@@ -43,6 +54,6 @@ export const listenForEvents = async (options: {
   return async () => {
     stopped = true;
     clearTimeout(timer);
-    await client.end().catch(() => undefined);
+    await client?.end().catch(() => undefined);
   };
 };
