@@ -30,7 +30,7 @@ export const listenForEvents = async (options: {
     opened.on('error', () => undefined);
     opened.on('end', () => {
       // one that never came to listen ends too: whoever opened it tries again, or each failure would count twice
-      if (listening && !stopped) reopen();
+      if (listening) reopen();
     });
     try {
       await opened.connect();
