@@ -3,33 +3,13 @@ import { describe, expect, it } from 'vitest';
 import type { Athlete } from '#shared/contracts/athletes.ts';
 import type { SidePage } from '#shared/contracts/readings.ts';
 import type { Replay } from '#shared/contracts/replays.ts';
-import { NO_BOUNDARIES, type Rep } from '#shared/contracts/reps.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
 import { aClip, anAthlete, aVisit, clipId, visitId } from '#tests/support/records.ts';
 import { aReplayLink } from '#tests/support/replay-link.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
 import { aSideReview } from '#tests/support/review.ts';
-import { aCall, aReading, aSidePage, repId, resultOf } from '#tests/support/side-page.ts';
-
-const aRep = (n: number): Rep => ({
-  id: repId(n),
-  clipId,
-  number: n,
-  supportSide: 'right',
-  view: 'front',
-  startFrame: (n - 1) * 301,
-  endFrame: n * 301 - 1,
-  boundaries: NO_BOUNDARIES,
-  excluded: null,
-  excludedNote: '',
-  quietFrom: null,
-  liftFrom: null,
-  clapFrame: null,
-  tieFault: null,
-  markedFrames: 30,
-  version: 1,
-});
+import { aCall, aReading, aRep, aSidePage, repId, resultOf } from '#tests/support/side-page.ts';
 
 const aLink = aReplayLink();
 
@@ -48,7 +28,7 @@ function readingApi(page: SidePage | Refuse, athlete: Partial<Athlete> = {}) {
       anAthlete({ consentedTo: ['assessment', 'sharing-by-link'], ...athlete }),
     )
     .on(routes.visit, () => ({ visit: aVisit(), clips: [aClip()] }))
-    .on(routes.listReps, () => ({ items: [1, 2, 3].map(aRep) }))
+    .on(routes.listReps, () => ({ items: [1, 2, 3].map((n) => aRep(n)) }))
     .on(routes.listReplays, () => ({ items: links }))
     .on(routes.makeReplay, () => {
       links = [aLink];

@@ -92,7 +92,7 @@ test('the set-up says what each length makes measurable, and undo brings it back
 
   await page.getByRole('button', { name: 'Undo' }).click();
   await expect(page.getByText(/^Bare landmarks:/).last()).toBeVisible();
-  expect((await bench()).clip.geometry.beltPointerMm).toBeNull();
+  await expect.poll(async () => (await bench()).clip.geometry.beltPointerMm).toBeNull();
 });
 
 test('a moment is moved on the strip by keyboard, and given back to the marks', async ({
@@ -115,7 +115,9 @@ test('a moment is moved on the strip by keyboard, and given back to the marks', 
     .toEqual({ frame: 13, by: 'hand' });
   await page.keyboard.press('Delete');
   await expect(footOff).not.toBeAttached();
-  expect((await bench()).reps[0]?.rep.boundaries.footOff?.by ?? 'found').toBe('found');
+  await expect
+    .poll(async () => (await bench()).reps[0]?.rep.boundaries.footOff?.by ?? 'found')
+    .toBe('found');
 });
 
 test('a comment with a ring stands on the strip, is answered and resolved', async ({ page }) => {

@@ -23,7 +23,8 @@ export interface Edits {
 
 /**
  * Edits of reps and of the set-up. They need the server's answer: unlike marks they are rare, and two
- * people's edits of one rep are told apart by its version.
+ * people's edits of one rep are told apart by its version. One person's run one after another, so
+ * that each knows the version which the one before has left.
  */
 export function useEdits(): Edits {
   const client = useQueryClient();
@@ -39,6 +40,14 @@ export function useEdits(): Edits {
       client.setQueryData(queryKey, (known) => known && change(known));
       void client.invalidateQueries({ queryKey: sidesKey(document().visit.id) });
     };
+    const inTurn = <T>(work: () => Promise<T>): Promise<T> =>
+      client
+        .getMutationCache()
+        .build<T, Error, void, unknown>(client, {
+          mutationFn: work,
+          scope: { id: `edits of ${clipId}` },
+        })
+        .execute();
     /** What was edited meanwhile is shown before the person tries again. */
     const orRefresh = async <T>(work: Promise<T>): Promise<T> => {
       try {
@@ -55,36 +64,39 @@ export function useEdits(): Edits {
         store.setState({ repId: rep.id });
         return rep;
       },
-      async editRep(repId, change, { undoable } = { undoable: true }) {
-        const before = document().reps.find((each) => each.rep.id === repId)?.rep;
-        if (!before) return;
-        const body = { ...change, version: before.version };
-        const rep = await orRefresh(call(routes.editRep, { params: { id: repId }, body }));
-        put((known) => withRep(known, rep));
-        if (!undoable) return;
-        const inverse = inverseOfChange(before, change);
-        store.setState((state) => ({
-          history: record(state.history, { kind: 'rep', repId, before: inverse, after: change }),
-        }));
-      },
-      async deleteRep(repId) {
-        await call(routes.deleteRep, { params: { id: repId } });
-        put((known) => withoutRep(known, repId));
-      },
-      async editGeometry(geometry, { undoable } = { undoable: true }) {
-        const { clip } = document();
-        const body = { geometry, version: clip.version };
-        const answer = await orRefresh(call(routes.editClip, { params: { id: clipId }, body }));
-        put((known) => withClip(known, answer));
-        if (!undoable) return;
-        store.setState((state) => ({
-          history: record(state.history, {
-            kind: 'clip',
-            before: clip.geometry,
-            after: geometry,
-          }),
-        }));
-      },
+      editRep: (repId, change, { undoable } = { undoable: true }) =>
+        inTurn(async () => {
+          const before = document().reps.find((each) => each.rep.id === repId)?.rep;
+          if (!before) return;
+          const body = { ...change, version: before.version };
+          const rep = await orRefresh(call(routes.editRep, { params: { id: repId }, body }));
+          put((known) => withRep(known, rep));
+          if (!undoable) return;
+          const inverse = inverseOfChange(before, change);
+          store.setState((state) => ({
+            history: record(state.history, { kind: 'rep', repId, before: inverse, after: change }),
+          }));
+        }),
+      deleteRep: (repId) =>
+        inTurn(async () => {
+          await call(routes.deleteRep, { params: { id: repId } });
+          put((known) => withoutRep(known, repId));
+        }),
+      editGeometry: (geometry, { undoable } = { undoable: true }) =>
+        inTurn(async () => {
+          const { clip } = document();
+          const body = { geometry, version: clip.version };
+          const answer = await orRefresh(call(routes.editClip, { params: { id: clipId }, body }));
+          put((known) => withClip(known, answer));
+          if (!undoable) return;
+          store.setState((state) => ({
+            history: record(state.history, {
+              kind: 'clip',
+              before: clip.geometry,
+              after: geometry,
+            }),
+          }));
+        }),
     };
   }, [client, clipId, store]);
 }

@@ -46,7 +46,8 @@ export function StripMoments({
     } catch (error) {
       say(error instanceof Error ? error.message : 'The moment was not moved.');
     } finally {
-      setDraft(null);
+      // another gesture that has begun meanwhile goes on
+      setDraft((now) => (now?.moment === moment && now.frame === frame ? null : now));
     }
   };
   const draftTo = (placed: PlacedMoment, frame: number) => {
