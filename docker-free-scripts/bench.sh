@@ -17,7 +17,7 @@ need_node
 running=''
 trap 'stop_step; [[ -z $running ]] || kill -TERM "$running" 2>/dev/null; exit 130' INT TERM HUP
 
-need_packages postgresql ffmpeg chromium
+need_packages postgresql ffmpeg chromium-headless-shell
 need_node_modules
 need_build
 

@@ -6,7 +6,7 @@ has_package() {
   case $1 in
     postgresql) pg_bin >/dev/null ;;
     ffmpeg) command -v ffmpeg >/dev/null && command -v ffprobe >/dev/null ;;
-    chromium) [[ -x /usr/bin/chromium ]] ;;
+    chromium-headless-shell) [[ -x /usr/bin/$1 ]] ;;
     *) command -v "$1" >/dev/null ;;
   esac
 }
@@ -24,7 +24,7 @@ need_packages() {
   command="apt-get update && apt-get install -y --no-install-recommends ${missing[*]}"
 
   command -v apt-get >/dev/null || fail "Missing: ${missing[*]}, and this machine has no apt-get to install them." \
-    'Install PostgreSQL 15 or newer (server programs) and ffmpeg by hand, for tests also Chromium as /usr/bin/chromium; then start again.'
+    'Install PostgreSQL 15 or newer (server programs) and ffmpeg by hand, for tests also Chromium as /usr/bin/chromium-headless-shell; then start again.'
   if ! is_root; then
     can_sudo "${missing[*]}" || fail "Missing: ${missing[*]}. Installing them needs root." \
       'Type this once, then start again:' "sudo sh -c '$command'"

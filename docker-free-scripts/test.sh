@@ -42,7 +42,7 @@ for stray in "${!REDSHANK_@}"; do [[ $stray == REDSHANK_TEST_PG ]] || unset "$st
 [[ -t 2 ]] || export NO_COLOR=1
 
 need_node
-need_packages postgresql ffmpeg chromium
+need_packages postgresql ffmpeg chromium-headless-shell
 need_node_modules
 
 rm -rf -- "$report"

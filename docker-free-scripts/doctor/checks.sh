@@ -45,7 +45,7 @@ check_packages() {
   else
     bad 'ffmpeg or ffprobe is missing' "$(install_words ffmpeg)"
   fi
-  if has_package chromium; then
+  if has_package chromium-headless-shell; then
     good 'Chromium, for the browser tests'
   else
     hint 'Chromium is missing: only npm test and npm run bench need it' 'They install it.'
