@@ -1,6 +1,8 @@
 import * as z from 'zod';
 import { type ProblemCode, PROBLEMS } from '#shared/contracts/problems.ts';
 import type { Audience, Route } from '#shared/contracts/route.ts';
+import { cookieIsSecure } from './cookie-is-secure.ts';
+import { sessionCookieName } from './session.ts';
 
 type Json = { [key: string]: unknown };
 
@@ -188,7 +190,9 @@ export const openApiDocument = (
     paths,
     components: {
       schemas: { Problem: problemSchema, ...components.schemas },
-      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'redshank_session' } },
+      securitySchemes: {
+        session: { type: 'apiKey', in: 'cookie', name: sessionCookieName(cookieIsSecure(url)) },
+      },
     },
   };
 };

@@ -1,13 +1,14 @@
-import { parseCookie, stringifySetCookie } from 'cookie';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Request, RequestHandler, Response } from 'express';
 import jwt from 'jsonwebtoken';
 import * as z from 'zod';
 import type { Role, UserActor } from '#shared/access/actors.ts';
 import { askerNow } from './asker.ts';
+import { cookieHeader, cookieIn, type CookieKind, cookieName } from './cookie.ts';
 import { Problem } from './problem.ts';
 
-const COOKIE = 'redshank_session';
+const COOKIE: CookieKind = { name: 'redshank_session', path: '/', sameSite: 'lax' };
+export const sessionCookieName = (secure: boolean): string => cookieName(COOKIE, secure);
 const TOKEN_MINUTES = 10;
 /** A session that was not used for this long is over, whatever its last day. */
 const IDLE_HOURS = 12;
@@ -80,22 +81,14 @@ export const keepSessions = (options: {
       algorithm: 'HS256',
       expiresIn: TOKEN_MINUTES * 60,
     });
-    return cookie(token, IDLE_HOURS * 3600);
+    return cookieHeader(COOKIE, { value: token, maxAge: IDLE_HOURS * 3600, secure });
   };
   const setCookie = (res: Response, sessionId: string): void => {
     res.append('Set-Cookie', cookieFor(sessionId));
   };
   const clearCookie = (res: Response): void => {
-    res.append('Set-Cookie', cookie('', 0));
+    res.append('Set-Cookie', cookieHeader(COOKIE, { value: '', maxAge: 0, secure }));
   };
-  const cookie = (value: string, maxAge: number): string =>
-    stringifySetCookie(COOKIE, value, {
-      httpOnly: true,
-      sameSite: 'lax',
-      path: '/',
-      secure,
-      maxAge,
-    });
 
   const findById = async (id: string): Promise<OpenSession | null> => {
     const [row] = await db().execute<SessionRow[]>('select * from find_session(?)', [id]);
@@ -107,7 +100,7 @@ export const keepSessions = (options: {
   };
 
   const find = async (req: Request, res: Response): Promise<OpenSession | null> => {
-    const token = parseCookie(req.headers.cookie ?? '')[COOKIE];
+    const token = cookieIn(req, COOKIE, secure);
     const named = token === undefined ? null : readToken(token, key);
     if (!named) return null;
     const session = await findById(named.sid);

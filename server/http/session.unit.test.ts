@@ -129,4 +129,14 @@ describe('the session cookie', () => {
     expect(keeper().cookieFor(ID)).toMatch(/HttpOnly; SameSite=Lax$/);
     expect(keeper(KEY, true).cookieFor(ID)).toMatch(/HttpOnly; Secure; SameSite=Lax$/);
   });
+
+  it('of an encrypted instance is taken only under the name that a neighbouring host cannot plant', async () => {
+    const encrypted = express();
+    encrypted.get('/', keeper(KEY, true).whoIs, (_req, res) => res.sendStatus(204));
+    encrypted.use(problemHandler(pino({ level: 'silent' })));
+    const own = cookie(keeper(KEY, true).cookieFor(ID));
+    expect(own).toMatch(/^__Host-redshank_session=/);
+    await supertest(encrypted).get('/').set('Cookie', own).expect(204);
+    await supertest(encrypted).get('/').set('Cookie', own.replace('__Host-', '')).expect(401);
+  });
 });

@@ -1,13 +1,12 @@
 import { createHash } from 'node:crypto';
-import { parseCookie, stringifySetCookie } from 'cookie';
 import type { Request, Response } from 'express';
 import * as z from 'zod';
 import { cookieIsSecure } from '../../http/cookie-is-secure.ts';
+import { cookieHeader, cookieIn, type CookieKind } from '../../http/cookie.ts';
 import type { Ground } from '../../main/ground.ts';
 
-const COOKIE = 'redshank_half';
-/** The second step's address and nothing else. */
-const PATH = '/api/sign-in/code';
+/** Sent to the second step's address and to no other. */
+const COOKIE: CookieKind = { name: 'redshank_half', path: '/api/sign-in/code', sameSite: 'strict' };
 const LASTS_SECONDS = 5 * 60;
 
 const half = z.object({
@@ -25,14 +24,8 @@ export const markOf = (passwordHash: string): string =>
 type Keys = Pick<Ground, 'config' | 'sealer'>;
 
 const put = (res: Response, { config }: Keys, value: string, maxAge: number): void => {
-  const cookie = stringifySetCookie(COOKIE, value, {
-    httpOnly: true,
-    sameSite: 'strict',
-    path: PATH,
-    secure: cookieIsSecure(config.publicUrl),
-    maxAge,
-  });
-  res.append('Set-Cookie', cookie);
+  const secure = cookieIsSecure(config.publicUrl);
+  res.append('Set-Cookie', cookieHeader(COOKIE, { value, maxAge, secure }));
 };
 
 /** The password was right; for five minutes a code is asked for. It opens nothing else and names no session. */
@@ -42,18 +35,18 @@ export const setHalfSession = (
   given: Omit<HalfSession, 'until'>,
 ): void => {
   const until = Date.now() + LASTS_SECONDS * 1000;
-  const sealed = keys.sealer.seal(Buffer.from(JSON.stringify({ ...given, until })), COOKIE);
+  const sealed = keys.sealer.seal(Buffer.from(JSON.stringify({ ...given, until })), COOKIE.name);
   put(res, keys, sealed, LASTS_SECONDS);
 };
 
 export const clearHalfSession = (res: Response, keys: Keys): void => put(res, keys, '', 0);
 
 /** Null where there is none, it is over, or it was not made here. */
-export const readHalfSession = (req: Request, { sealer }: Keys): HalfSession | null => {
-  const sealed = parseCookie(req.headers.cookie ?? '')[COOKIE];
+export const readHalfSession = (req: Request, { config, sealer }: Keys): HalfSession | null => {
+  const sealed = cookieIn(req, COOKIE, cookieIsSecure(config.publicUrl));
   if (sealed === undefined) return null;
   try {
-    const read = half.parse(JSON.parse(sealer.open(sealed, COOKIE).toString()));
+    const read = half.parse(JSON.parse(sealer.open(sealed, COOKIE.name).toString()));
     return read.until > Date.now() ? read : null;
   } catch {
     return null;

@@ -44,7 +44,7 @@ describe('a sign-in that is half done', () => {
     expect(answer.body).toEqual({ codeNeeded: true });
     expect(cookies).toHaveLength(1);
     expect(cookies[0]).toMatch(
-      /^redshank_half=[\w-]+; Max-Age=300; Path=\/api\/sign-in\/code; HttpOnly; Secure; SameSite=Strict$/,
+      /^__Secure-redshank_half=[\w-]+; Max-Age=300; Path=\/api\/sign-in\/code; HttpOnly; Secure; SameSite=Strict$/,
     );
   });
 
@@ -75,7 +75,11 @@ describe('a sign-in that is half done', () => {
   it('begins anew where it is missing or forged, or after the password or the codes were changed', async () => {
     const { user, secret } = await withCodes(api);
     const next = codeOf(secret, 1);
-    for (const cookie of ['', 'redshank_half=x', `redshank_half=${'A'.repeat(200)}`])
+    for (const cookie of [
+      '',
+      '__Secure-redshank_half=x',
+      `__Secure-redshank_half=${'A'.repeat(200)}`,
+    ])
       expect(await tried(cookie, next)).toEqual(['half-gone']);
     const { cookie } = await firstStep(api, user.email);
     const change = (data: object) =>
@@ -114,7 +118,7 @@ describe('the second step', () => {
     ).expect(200);
     expect(answer.body).toMatchObject({ user: { id: user.id }, codeMissing: false });
     const cookies = answer.get('Set-Cookie') ?? [];
-    expect(cookies[0]).toMatch(/^redshank_half=; Max-Age=0; Path=\/api\/sign-in\/code;/);
+    expect(cookies[0]).toMatch(/^__Secure-redshank_half=; Max-Age=0; Path=\/api\/sign-in\/code;/);
     const session = cookies[1]?.split(';')[0] ?? '';
     expect(session).toMatch(/^redshank_session=.{50}/);
     const { body } = await api.nobody.get('/api/me').set('Cookie', session).expect(200);

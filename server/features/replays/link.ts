@@ -1,12 +1,18 @@
 import { createHash, timingSafeEqual } from 'node:crypto';
-import { parseCookie, stringifySetCookie } from 'cookie';
 import type { Request, Response } from 'express';
 import type { LinkActor } from '#shared/access/actors.ts';
+import { cookieIsSecure } from '../../http/cookie-is-secure.ts';
+import { cookieHeader, cookieIn, type CookieKind } from '../../http/cookie.ts';
 import { Problem } from '../../http/problem.ts';
 import { tokenHash } from '../../http/token-hash.ts';
 import type { Ground } from '../../main/ground.ts';
 
-const COOKIE = 'redshank_replay';
+/** Sent to what belongs to this link and to nothing else. */
+const cookieOf = (token: string): CookieKind => ({
+  name: 'redshank_replay',
+  path: `/api/r/${token}`,
+  sameSite: 'lax',
+});
 /** How long a pass phrase that was given once is not asked for again on that device. */
 const UNLOCKED_HOURS = 12;
 
@@ -44,36 +50,37 @@ const same = (a: string, b: string): boolean =>
 /** Remembers on this device, for this link alone, that the pass phrase was given. */
 export const unlock = (
   res: Response,
+  { config }: Pick<Ground, 'config'>,
   token: string,
   passPhraseHash: string,
-  secure: boolean,
 ): void => {
-  res.append(
-    'Set-Cookie',
-    stringifySetCookie(COOKIE, proof(token, passPhraseHash), {
-      httpOnly: true,
-      sameSite: 'lax',
-      path: `/api/r/${token}`,
-      secure,
-      maxAge: UNLOCKED_HOURS * 3600,
-    }),
-  );
+  const header = cookieHeader(cookieOf(token), {
+    value: proof(token, passPhraseHash),
+    maxAge: UNLOCKED_HOURS * 3600,
+    secure: cookieIsSecure(config.publicUrl),
+  });
+  res.append('Set-Cookie', header);
 };
 
 /** @throws Problem 'pass-phrase-needed' */
-const needUnlocked = (req: Request, token: string, { passPhraseHash }: LiveLink): void => {
+const needUnlocked = (
+  req: Request,
+  { config }: Pick<Ground, 'config'>,
+  token: string,
+  { passPhraseHash }: LiveLink,
+): void => {
   if (passPhraseHash === null) return;
-  const given = parseCookie(req.headers.cookie ?? '')[COOKIE] ?? '';
+  const given = cookieIn(req, cookieOf(token), cookieIsSecure(config.publicUrl)) ?? '';
   if (!same(given, proof(token, passPhraseHash))) throw new Problem('pass-phrase-needed');
 };
 
 /** The link's actor, where it is live and unlocked on this device. */
 export const linkActor = async (
-  ground: Pick<Ground, 'orm'>,
+  ground: Pick<Ground, 'orm' | 'config'>,
   req: Request,
   token: string,
 ): Promise<LinkActor> => {
   const link = await liveLink(ground, token);
-  needUnlocked(req, token, link);
+  needUnlocked(req, ground, token, link);
   return link.actor;
 };

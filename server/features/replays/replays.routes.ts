@@ -82,7 +82,7 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
         await inPractice(actor, passPhraseWasWrong);
         throw new Problem('pass-phrase-needed', 'This is not the pass phrase.');
       }
-      unlock(res, params.token, passPhraseHash, config.publicUrl.startsWith('https:'));
+      unlock(res, ground, params.token, passPhraseHash);
     },
     ...passPhraseLimits(),
   );
