@@ -21,6 +21,7 @@ import { Migration20261202071000_reviews } from '../../migrations/Migration20261
 import { Migration20261202071700_plans } from '../../migrations/Migration20261202071700_plans.ts';
 import { Migration20261202081600_waiting_mail } from '../../migrations/Migration20261202081600_waiting_mail.ts';
 import { Migration20261202090100_reports } from '../../migrations/Migration20261202090100_reports.ts';
+import { Migration20261202231500_pain_letters } from '../../migrations/Migration20261202231500_pain_letters.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -102,6 +103,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202090100_reports',
     class: Migration20261202090100_reports,
+  },
+  {
+    name: 'Migration20261202231500_pain_letters',
+    class: Migration20261202231500_pain_letters,
   },
 ];
 

@@ -3,7 +3,7 @@ import { json, route } from './route.ts';
 
 /** What somebody is written to about, each kind with a switch of its own. */
 export const waitingMailKind = z
-  .enum(['to-review', 'sent-back', 'comment', 'second-marking'])
+  .enum(['to-review', 'sent-back', 'comment', 'second-marking', 'pain'])
   .meta({ id: 'WaitingMailKind' });
 export type WaitingMailKind = z.infer<typeof waitingMailKind>;
 

@@ -1,7 +1,10 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { AthletePlan } from '#shared/contracts/athlete-plan.ts';
 import type { Plan, PlanItem } from '#shared/contracts/plans.ts';
+import { product } from '#server/db/in-practice.ts';
 import { daysLater, today } from '#server/features/athletes/days.ts';
+import { SEND_WAITING_MAIL } from '#server/features/waiting-mail/jobs/send-waiting-mail-type.ts';
+import { JobOutbox } from '#server/jobs/job-outbox.entity.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { makePlanCase } from '#tests/support/plan-cases.ts';
 
@@ -208,6 +211,32 @@ describe('an answer about pain', () => {
     expect(await todayOf(coach, plan)).toEqual([]);
     // the link itself never tells what was said
     expect(JSON.stringify(await shown(token))).not.toContain('groin');
+  });
+
+  /** Letters that were asked for since the last time, and are not written yet. */
+  const lettersAsked = () =>
+    api.ground.inPractice(product(api.world.practiceId), async ({ em }) => {
+      await em.execute('update mail_choice set asked_at = null');
+      const rows = await em.find(JobOutbox, { queue: SEND_WAITING_MAIL.queue });
+      em.remove(rows);
+      return rows.map(({ payload }) => payload);
+    });
+
+  it('is written about to the coach, once in a while, and never where nothing hurts', async () => {
+    const { token, plan } = await running();
+    await lettersAsked();
+    await pain(token, { level: 0, places: [], exercise: null, time: null }).expect(204);
+    expect(await lettersAsked()).toEqual([]);
+    await pain(token).expect(204);
+    await pain(token, { level: 7 }).expect(204);
+    expect(await lettersAsked()).toEqual([
+      {
+        userId: api.world.coach.id,
+        kind: 'pain',
+        aboutId: plan.id,
+        path: `/plans/${plan.id}#pain`,
+      },
+    ]);
   });
 
   it('of none is kept and troubles nobody', async () => {

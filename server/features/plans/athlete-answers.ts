@@ -15,6 +15,7 @@ import { lastGiven } from './give-plan.ts';
 import { PlanPain, PlanTick } from './plan-answers.entity.ts';
 import { Plan } from './plan.entity.ts';
 import { ticksOf } from './plan-page.ts';
+import { writeOf } from '../waiting-mail/mail-choices.ts';
 import { tellPlan } from './tell-plan.ts';
 
 type Of = Unit<LinkActor>;
@@ -109,7 +110,7 @@ export const tickExercise = async (
   return ticksOf(unit, plan.id);
 };
 
-/** Adds how much something hurts; who works with the athlete is told at once. */
+/** Adds how much something hurts; who works with the athlete is told at once, the coach by a letter too. */
 export const answerPain = async (unit: Of, body: z.output<typeof painBody>): Promise<void> => {
   const { em } = unit;
   const { plan, content, athlete } = await runningPlan(unit);
@@ -118,6 +119,12 @@ export const answerPain = async (unit: Of, body: z.output<typeof painBody>): Pro
   needRoom(await em.count(PlanPain, sinceYesterday(plan.id)), PAINS_A_DAY);
   em.create(PlanPain, { plan, ...body, places: [...new Set(body.places)] });
   audit(unit, 'plan.pain', plan.id, { athlete: athlete.id });
+  if (body.level > 0)
+    await writeOf(unit, [athlete.coach.id], {
+      kind: 'pain',
+      aboutId: plan.id,
+      path: `/plans/${plan.id}#pain`,
+    });
   await em.flush();
   await tellPlan(unit, { plan, athlete });
 };

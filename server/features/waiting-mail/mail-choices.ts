@@ -1,5 +1,5 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
-import type { UserActor } from '#shared/access/actors.ts';
+import type { LinkActor, UserActor } from '#shared/access/actors.ts';
 import {
   type WaitingMail,
   waitingMailKind,
@@ -47,12 +47,12 @@ type Told = Omit<WaitingLetter, 'userId'>;
 
 /** Asks for a letter to each of them but the one who acts, in the transaction of what waits. */
 export const writeOf = async (
-  unit: Unit<UserActor>,
+  unit: Unit<UserActor | LinkActor>,
   userIds: readonly string[],
   letter: Told,
 ): Promise<void> => {
   for (const userId of new Set(userIds)) {
-    if (userId === unit.actor.id) continue;
+    if (unit.actor.kind === 'user' && userId === unit.actor.id) continue;
     const due = await unit.em.execute<unknown[]>(
       `insert into mail_choice (user_id, kind, practice_id, asked_at) values (?, ?, current_practice(), now())
         on conflict (user_id, kind) do update set asked_at = now()

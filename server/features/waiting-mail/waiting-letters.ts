@@ -12,6 +12,10 @@ const SAYS = {
     'A second marking waits for you',
     'Somebody asks you to mark some frames again, without sight of the first marks.',
   ],
+  pain: [
+    'An athlete says that something hurts',
+    'It was answered beside a plan of yours. Look at it before the next exercise.',
+  ],
 } as const satisfies Record<WaitingMailKind, readonly [subject: string, sentence: string]>;
 
 /** Names nobody who was filmed and no finding: letters lie about. */

@@ -131,6 +131,7 @@ describe('a letter about what waits', () => {
       { kind: 'sent-back', on: true },
       { kind: 'comment', on: false },
       { kind: 'second-marking', on: true },
+      { kind: 'pain', on: true },
     ]);
     await comment(supervisor);
     expect(await lettersTo(api.world.coach)).toEqual([]);

@@ -6,7 +6,7 @@ import type { JobType } from '../../../jobs/job.ts';
 export type WaitingLetter = {
   readonly userId: string;
   readonly kind: WaitingMailKind;
-  /** The visit, clip or second marking that it is about. */
+  /** The visit, clip, second marking or plan that it is about. */
   readonly aboutId: string;
   readonly path: string;
 };

@@ -72,6 +72,7 @@ describe('one’s own account', () => {
       true,
       false,
       true,
+      true,
     ]);
     await user.click(section.getByRole('checkbox', { name: 'A side of mine was sent back' }));
     await waitFor(() =>

@@ -11,6 +11,7 @@ const KINDS: Record<WaitingMailKind, string> = {
   'sent-back': 'A side of mine was sent back',
   comment: 'Somebody commented on a clip of mine, or answered me',
   'second-marking': 'Somebody asks me for a second marking',
+  pain: 'An athlete of mine says that something hurts',
 };
 
 /** A letter when something waits, each kind with a switch of its own. */
