@@ -257,9 +257,16 @@ test('the athlete opens the link of the letter on a phone, without an account', 
   await phone.close();
 });
 
-test('what hurts is the first thing in the coach’s Today', async ({ app, page }) => {
+test('what hurts is the first thing in the coach’s Today, and comes as a letter', async ({
+  app,
+  page,
+}) => {
   await signIn(page, app, COACH);
   await expectPainTold(page, made);
+  const letters = () => app.mailbox.all().filter(({ to }) => to.includes(COACH));
+  await expect
+    .poll(() => letters().map(({ subject }) => subject))
+    .toContainEqual(expect.stringMatching(/^An athlete says that something hurts/));
 });
 
 test('none of it is there for a coach of another practice', async ({
