@@ -8,11 +8,13 @@ import { cookieHeader, cookieIn, type CookieKind, cookieName } from './cookie.ts
 import { Problem } from './problem.ts';
 
 const COOKIE: CookieKind = { name: 'redshank_session', path: '/', sameSite: 'lax' };
-export const sessionCookieName = (secure: boolean): string => cookieName(COOKIE, secure);
 const TOKEN_MINUTES = 10;
 /** A session that was not used for this long is over, whatever its last day. */
 const IDLE_HOURS = 12;
 const SEEN_EVERY_SECONDS = 60;
+
+/** The name of the session's cookie; `secure` as the instance's address has it. */
+export const sessionCookieName = (secure: boolean): string => cookieName(COOKIE, secure);
 
 /** A session as the database confirms it on every request. */
 export interface OpenSession {

@@ -1,5 +1,6 @@
 import type { Me } from '#shared/contracts/accounts.ts';
 import type { Athlete, Consent } from '#shared/contracts/athletes.ts';
+import { NO_BOUNDARIES, type Rep } from '#shared/contracts/reps.ts';
 import type { FirstSteps } from '#shared/contracts/today.ts';
 import type { Clip } from '#shared/contracts/clips.ts';
 import {
@@ -18,6 +19,7 @@ export const visitId = uuid(200);
 export const clipId = uuid(300);
 export const consentId = uuid(400);
 export const setUpId = uuid(500);
+export const repId = (n: number) => uuid(700 + n);
 
 const coach = { id: coachId, name: 'Maren Okafor' };
 const at = '2026-03-03T16:20:00Z';
@@ -169,4 +171,24 @@ export const aClip = (change: Partial<Clip> = {}): Clip => ({
   uploadedAt: at,
   version: 1,
   ...change,
+});
+
+/** The rep of that number, of the clip. */
+export const aRep = (n: number): Rep => ({
+  id: repId(n),
+  clipId,
+  number: n,
+  supportSide: 'right',
+  view: 'front',
+  startFrame: (n - 1) * 301,
+  endFrame: n * 301 - 1,
+  boundaries: NO_BOUNDARIES,
+  excluded: null,
+  excludedNote: '',
+  quietFrom: null,
+  liftFrom: null,
+  clapFrame: null,
+  tieFault: null,
+  markedFrames: 30,
+  version: 1,
 });

@@ -1,6 +1,5 @@
 import type { Replay } from '#shared/contracts/replays.ts';
-import { coachId, visitId } from './records.ts';
-import { repId } from './side-page.ts';
+import { coachId, visitId, repId } from './records.ts';
 
 /** A link that was made and opened twice. */
 export const aReplayLink = (change: Partial<Replay> = {}): Replay => ({

@@ -2,39 +2,17 @@ import { readFileSync } from 'node:fs';
 import { trialOf } from '#shared/evaluate/trial.ts';
 import type { Call } from '#shared/contracts/calls.ts';
 import { type Reading, readingLabel, type SidePage } from '#shared/contracts/readings.ts';
-import { NO_BOUNDARIES, type Rep } from '#shared/contracts/reps.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
 import { deriveReading } from '#shared/reading/derive.ts';
 import type { ReadingResult } from '#shared/reading/types.ts';
 import { milliseconds } from '#shared/timing/units.ts';
 import { STANDARD_GATES, STANDARD_RULES } from '#shared/protocol/protocol.ts';
-import { athleteId, clipId, coachId, visitId } from './records.ts';
+import { athleteId, clipId, coachId, repId, visitId } from './records.ts';
 
 /** A side's page as the server answers it, from a trial of known truth and the engine itself. */
 const coach = { id: coachId, name: 'Maren Okafor' };
 const at = '2026-03-03T16:20:00Z';
 const uuid = (n: number) => `00000000-0000-4000-8000-${String(n).padStart(12, '0')}`;
-export const repId = (n: number) => uuid(700 + n);
-
-/** The rep of that number, of the side's clip. */
-export const aRep = (n: number): Rep => ({
-  id: repId(n),
-  clipId,
-  number: n,
-  supportSide: 'right',
-  view: 'front',
-  startFrame: (n - 1) * 301,
-  endFrame: n * 301 - 1,
-  boundaries: NO_BOUNDARIES,
-  excluded: null,
-  excludedNote: '',
-  quietFrom: null,
-  liftFrom: null,
-  clapFrame: null,
-  tieFault: null,
-  markedFrames: 30,
-  version: 1,
-});
 
 const derived = new Map<string, ReadingResult>();
 

@@ -10,12 +10,12 @@ import type { Athlete } from '../athletes/athlete.entity.ts';
 import { daysLater, today } from '../athletes/days.ts';
 import { audit } from '../audit/audit.ts';
 import { Replay } from '../replays/replay.entity.ts';
+import { writeOf } from '../waiting-mail/mail-choices.ts';
 import type { GivenPlan } from './given-plan.entity.ts';
 import { lastGiven } from './give-plan.ts';
 import { PlanPain, PlanTick } from './plan-answers.entity.ts';
 import { Plan } from './plan.entity.ts';
 import { ticksOf } from './plan-page.ts';
-import { writeOf } from '../waiting-mail/mail-choices.ts';
 import { tellPlan } from './tell-plan.ts';
 
 type Of = Unit<LinkActor>;

@@ -4,9 +4,16 @@ import type { Reading, SidePage } from '#shared/contracts/readings.ts';
 import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
-import { anAthlete, athleteId, aVisitRow, otherId, visitId } from '#tests/support/records.ts';
+import {
+  anAthlete,
+  athleteId,
+  aVisitRow,
+  otherId,
+  visitId,
+  repId,
+} from '#tests/support/records.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
-import { aReading, aSidePage, repId, resultOf } from '#tests/support/side-page.ts';
+import { aReading, aSidePage, resultOf } from '#tests/support/side-page.ts';
 
 const measured = (trial: string, change: Partial<SidePage> = {}): SidePage => {
   const page = aSidePage(aReading(resultOf(trial)));

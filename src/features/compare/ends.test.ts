@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { otherId, visitId } from '#tests/support/records.ts';
-import { aReading, repId, resultOf } from '#tests/support/side-page.ts';
+import { repId } from '#tests/support/records.ts';
+import { aReading, resultOf } from '#tests/support/side-page.ts';
 import { chosenRep, endOf, endText, playableReps, relationOf } from './ends.ts';
 import { momentText, steppedTo } from './films/moment-slider.tsx';
 import { degrees } from '#shared/geometry/units.ts';

@@ -5,11 +5,11 @@ import type { SidePage } from '#shared/contracts/readings.ts';
 import type { Replay } from '#shared/contracts/replays.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
-import { aClip, anAthlete, aVisit, clipId, visitId } from '#tests/support/records.ts';
+import { aClip, anAthlete, aRep, aVisit, clipId, repId, visitId } from '#tests/support/records.ts';
 import { aReplayLink } from '#tests/support/replay-link.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
 import { aSideReview } from '#tests/support/review.ts';
-import { aCall, aReading, aRep, aSidePage, repId, resultOf } from '#tests/support/side-page.ts';
+import { aCall, aReading, aSidePage, resultOf } from '#tests/support/side-page.ts';
 
 const aLink = aReplayLink();
 
@@ -28,7 +28,7 @@ function readingApi(page: SidePage | Refuse, athlete: Partial<Athlete> = {}) {
       anAthlete({ consentedTo: ['assessment', 'sharing-by-link'], ...athlete }),
     )
     .on(routes.visit, () => ({ visit: aVisit(), clips: [aClip()] }))
-    .on(routes.listReps, () => ({ items: [1, 2, 3].map((n) => aRep(n)) }))
+    .on(routes.listReps, () => ({ items: [1, 2, 3].map(aRep) }))
     .on(routes.listReplays, () => ({ items: links }))
     .on(routes.makeReplay, () => {
       links = [aLink];

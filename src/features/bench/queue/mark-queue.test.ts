@@ -1,29 +1,13 @@
 import { describe, expect, it } from 'vitest';
-import { type MarkOutcome, NO_BOUNDARIES, type Rep } from '#shared/contracts/reps.ts';
+import type { MarkOutcome, Rep } from '#shared/contracts/reps.ts';
 import { framePoint } from '#shared/geometry/points.ts';
 import { frameIndex } from '#shared/timing/units.ts';
+import { aRep } from '#tests/support/records.ts';
 import { createMarkQueue, type QueueDeps, type SendFailure, type Settled } from './mark-queue.ts';
 import type { NewMark, QueuedMark } from './queue-core.ts';
 import { memoryStorage } from './queue-storage.ts';
 
-const REP: Rep = {
-  id: 'rep',
-  clipId: 'clip',
-  number: 1,
-  supportSide: 'right',
-  view: 'front',
-  startFrame: 0,
-  endFrame: 99,
-  boundaries: NO_BOUNDARIES,
-  excluded: null,
-  excludedNote: '',
-  quietFrom: null,
-  liftFrom: null,
-  clapFrame: null,
-  tieFault: null,
-  markedFrames: 0,
-  version: 1,
-};
+const REP: Rep = { ...aRep(1), id: 'rep', clipId: 'clip', endFrame: 99, markedFrames: 0 };
 const mark = (id: string, frame: number): NewMark => ({
   id,
   clipId: 'clip',

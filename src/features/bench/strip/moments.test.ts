@@ -1,15 +1,12 @@
 import { describe, expect, it } from 'vitest';
 import type { Rep } from '#shared/contracts/reps.ts';
 import { frameIndex, milliseconds } from '#shared/timing/units.ts';
+import { aRep } from '#tests/support/records.ts';
 import { momentsOf, roomOf } from './moments.ts';
 
 const TIMES = Array.from({ length: 101 }, (_, n) => milliseconds(n * 20));
 const REP: Rep = {
-  id: 'rep',
-  clipId: 'clip',
-  number: 1,
-  supportSide: 'right',
-  view: 'front',
+  ...aRep(1),
   startFrame: 10,
   endFrame: 90,
   boundaries: {
@@ -21,14 +18,6 @@ const REP: Rep = {
     topEnd: null,
     footDown: null,
   },
-  excluded: null,
-  excludedNote: '',
-  quietFrom: null,
-  liftFrom: null,
-  clapFrame: null,
-  tieFault: null,
-  markedFrames: 0,
-  version: 1,
 };
 const PHASES = {
   boundaries: {
