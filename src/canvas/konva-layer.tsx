@@ -6,8 +6,8 @@ import type { LandmarkId } from '#shared/landmarks/types.ts';
 import type { MarkShape, Primitive } from '#shared/overlay/types.ts';
 import type { Hand } from './hand.ts';
 import { type Asked, hitRadii } from './hit-radius.ts';
-import { paintOverlay } from './overlay-painter.ts';
-import { paintMark } from './paint-marks.ts';
+import { paintOverlay } from '#shared/overlay/paint-overlay.ts';
+import { paintMark } from '#shared/overlay/paint-marks.ts';
 import { type Size, toFrame, toStage, type Viewport } from './viewport.ts';
 
 export type Moved = { readonly landmark: LandmarkId; readonly point: FramePoint } | null;

@@ -3,7 +3,7 @@ import type { FramePoint } from '#shared/geometry/points.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
 import { type Hand, lookedAt } from './hand.ts';
 import type { Moved } from './konva-layer.tsx';
-import { paintOverlay } from './overlay-painter.ts';
+import { paintOverlay } from '#shared/overlay/paint-overlay.ts';
 import { paintPicture, type PictureBoard } from './picture-board.ts';
 import type { Size, Viewport } from './viewport.ts';
 

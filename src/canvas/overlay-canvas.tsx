@@ -1,6 +1,6 @@
 import { useEffect, useRef } from 'react';
 import type { Primitive } from '#shared/overlay/types.ts';
-import { paintOverlay } from './overlay-painter.ts';
+import { paintOverlay } from '#shared/overlay/paint-overlay.ts';
 
 /** A rectangle of the source frame, px; `u` and `v` of its upper left corner. */
 export interface ShownPart {

@@ -5,29 +5,13 @@ import {
   stagePoint,
 } from '#shared/geometry/points.ts';
 import { clamp } from '#shared/geometry/units.ts';
+import { type Size, toStage, type Viewport } from '#shared/overlay/viewport.ts';
 
-/**
- * How the source frame lies on the stage: `stage = offset + scale × frame`. The one place where
- * pixels of the source become pixels of the screen and back.
- */
-export interface Viewport {
-  /** CSS px per source px. */
-  readonly scale: number;
-  /** Where the frame's top left corner lies on the stage, CSS px. */
-  readonly x: number;
-  readonly y: number;
-}
-
-export interface Size {
-  readonly width: number;
-  readonly height: number;
-}
+export { type Size, toStage, type Viewport };
 
 export const longEdgeOf = ({ width, height }: Size): number => Math.max(width, height);
 
-export const toStage = (viewport: Viewport, point: FramePoint): StagePoint =>
-  stagePoint(viewport.x + viewport.scale * point.u, viewport.y + viewport.scale * point.v);
-
+/** The way back from `toStage`; pixels of the source become pixels of the screen there and nowhere else. */
 export const toFrame = (viewport: Viewport, point: StagePoint): FramePoint =>
   framePoint((point.x - viewport.x) / viewport.scale, (point.y - viewport.y) / viewport.scale);
 

@@ -1,6 +1,7 @@
 import { decimal } from '#shared/exports/figures.ts';
 
 export { decimal, degrees, plusMinus, turn } from '#shared/exports/figures.ts';
+export { capital, inWords } from '#shared/exports/running-text.ts';
 
 /** A file's size: `211 MB`, `1.8 GB`. */
 export function fileSize(bytes: number): string {
@@ -20,23 +21,3 @@ export function roughly(seconds: number): string {
 
 /** A body height or a distance in metres: `1.74 m`. */
 export const metres = (mm: number): string => `${(mm / 1000).toFixed(2)} m`;
-
-const SMALL = [
-  'no',
-  'one',
-  'two',
-  'three',
-  'four',
-  'five',
-  'six',
-  'seven',
-  'eight',
-  'nine',
-  'ten',
-  'eleven',
-  'twelve',
-];
-/** Counts up to twelve in words, as in running text. */
-export const inWords = (count: number): string => SMALL[count] ?? String(count);
-
-export const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

@@ -1,5 +1,8 @@
 import { inHundred } from '#shared/protocol/bounds.ts';
+import { levelWords } from '#shared/exports/running-text.ts';
 import { type Gates, sameGates, STANDARD_GATES } from '#shared/protocol/protocol.ts';
+
+export { levelWords };
 
 /** `60° to 90°` */
 export const gateRange = ({ from, to }: Gates): string => `${from}° to ${to}°`;
@@ -11,9 +14,6 @@ export const betweenGates = (gates: Gates | null): string =>
 /** Said beside a figure of the study where a practice has other gates than it was taken with; else nothing. */
 export const studiedBetween = (gates: Gates | null): string =>
   gates && !sameGates(gates, STANDARD_GATES) ? `, worked out for ${gateRange(STANDARD_GATES)}` : '';
-
-/** The thigh at the upper gate as an eye sees it: `level`, or its lift. */
-export const levelWords = (lift: number): string => (lift === 90 ? 'level' : `${lift}°`);
 
 /** `95`, `97.5`: of a probability from 0 to 1. */
 export const outOfHundred = (limit: number): string => `${inHundred(limit)}`;

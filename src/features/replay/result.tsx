@@ -1,5 +1,5 @@
 import type { PublicReplay } from '#shared/contracts/replays.ts';
-import { callWords, NOT_AN_INJURY, readingWords } from './words/athlete-words.ts';
+import { callWords, NOT_AN_INJURY, readingWords } from '#shared/replay/athlete-words.ts';
 
 /** What was measured, and what was seen by eye; never the one as if it were the other. */
 export function Result({ replay }: { replay: PublicReplay }) {

@@ -5,7 +5,7 @@ import { roleIn } from '#shared/landmarks/table.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { shapeAt } from '#shared/overlay/mark-shapes.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
-import { paintOverlay } from '#src/canvas/overlay-painter.ts';
+import { paintOverlay } from '#shared/overlay/paint-overlay.ts';
 import { paintPicture } from '#src/canvas/picture-board.ts';
 import { useSize } from '#src/canvas/use-size.ts';
 import { toStage, type Viewport } from '#src/canvas/viewport.ts';

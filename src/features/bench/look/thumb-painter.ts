@@ -1,6 +1,6 @@
 import type { FrameIndex } from '#shared/timing/units.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
-import { paintOverlay } from '#src/canvas/overlay-painter.ts';
+import { paintOverlay } from '#shared/overlay/paint-overlay.ts';
 import type { Size, Viewport } from '#src/canvas/viewport.ts';
 import { type CanvasPainter, createCanvasPainter } from '#src/video/canvas-painter.ts';
 import type { FrameSource } from '#src/video/types.ts';

@@ -1,10 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { frameTimes } from '#src/video/frame-times.ts';
 import { aPublicReplay } from '#tests/support/public-replay.ts';
-import { calmTurn } from './calm-turn.ts';
+import { calmTurn } from '#shared/replay/calm-turn.ts';
 import { cropFor } from './crop.ts';
-import { drawnOn, quietWidth } from './drawn-on.ts';
-import { frameBetween } from './frame-between.ts';
+import { drawnOn, quietWidth } from '#shared/replay/drawn-on.ts';
+import { frameBetween } from '#shared/replay/frame-between.ts';
 import { momentsOf } from './moments.ts';
 
 const replay = aPublicReplay();

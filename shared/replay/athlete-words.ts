@@ -3,8 +3,7 @@ import type { Side } from '#shared/contracts/primitives.ts';
 import type { Seen } from '#shared/contracts/calls.ts';
 import { READING_LABELS } from '#shared/contracts/readings.ts';
 import { otherSide } from '#shared/landmarks/types.ts';
-import { capital, inWords } from '#src/ui/figures.ts';
-import { levelWords } from '#src/ui/gate-words.ts';
+import { capital, inWords, levelWords } from '#shared/exports/running-text.ts';
 import type { Gates } from '#shared/protocol/protocol.ts';
 
 /** What the athlete reads: a heading and a few sentences without a term of the trade. */

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { framePoint } from '#shared/geometry/points.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
-import { paintOverlay } from './overlay-painter.ts';
+import { paintOverlay } from './paint-overlay.ts';
 import type { PaintContext } from './paint-marks.ts';
 
 /** A context that writes down what it is told. */

@@ -3,7 +3,6 @@ import { READING_LABELS, type ReadingCode } from '#shared/contracts/readings.ts'
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { callWords, howSureWords, readingWords } from './athlete-words.ts';
-import { contactParts } from './contact.ts';
 import { liftReadout, turnReadout } from './readout.ts';
 
 const reading = (
@@ -97,26 +96,5 @@ describe('the line under the film', () => {
     expect(liftReadout(of(90.2, 2.1), true)).toBe('90° ±\u00a03°');
     expect(turnReadout({ turn: -4.4, turnPlusMinus: 5 })).toBe('4° in ±\u00a05°');
     expect(turnReadout({ turn: 0.2, turnPlusMinus: 4.6 })).toBe('0° ±\u00a05°');
-  });
-});
-
-describe('how to reach the practice', () => {
-  it.each([
-    ['01632 960 114', [['01632 960 114', 'tel:01632960114']]],
-    [
-      'Greywater Row, reception: 0555 0142',
-      [
-        ['Greywater Row, reception: ', null],
-        ['0555 0142', 'tel:05550142'],
-      ],
-    ],
-    [
-      'desk@greywater-row.example',
-      [['desk@greywater-row.example', 'mailto:desk@greywater-row.example']],
-    ],
-    ['room 12', [['room 12', null]]],
-    ['', []],
-  ])('%s', (contact, parts) => {
-    expect(contactParts(contact).map(({ text, to }) => [text, to])).toEqual(parts);
   });
 });

@@ -1,4 +1,4 @@
-import { plusMinus } from '#src/ui/figures.ts';
+import { plusMinus } from '#shared/exports/figures.ts';
 
 /** An angle of the frame on show and its ±, degrees. */
 interface Angles {
