@@ -1,6 +1,7 @@
 import { type Box, boxWithin } from '#shared/geometry/boxes.ts';
 import { pictureArgs, replayArgs, videoArgs } from './encode-args.ts';
 import { type FfmpegJob, inputArgs } from './ffmpeg-job.ts';
+import { inGraph } from './in-graph.ts';
 import type { FrameTable, Rational, Size } from './types.ts';
 
 /** A head shows at most so many cells along its larger edge. Chosen, no source. */
@@ -50,10 +51,6 @@ export const boxCommands = (frames: FrameTable, boxes: readonly (Box | null)[]):
     })
     .join('');
 };
-
-/** A path inside a filter graph: once for the filter's own options, once for the graph. */
-const inGraph = (path: string): string =>
-  `'${path.replace(/[\\':]/g, String.raw`\$&`).replaceAll("'", String.raw`'\''`)}'`;
 
 export interface HideHeadPlan {
   readonly benchCopy: string;
