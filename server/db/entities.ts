@@ -22,6 +22,7 @@ import { Practice } from '../features/practice/practice.entity.ts';
 import { ProtocolVersion } from '../features/protocol/protocol-version.entity.ts';
 import { Reading } from '../features/readings/reading.entity.ts';
 import { SideSetting } from '../features/readings/side-setting.entity.ts';
+import { KeptFilm } from '../features/replays/film/kept-film.entity.ts';
 import { Replay } from '../features/replays/replay.entity.ts';
 import { Rep } from '../features/reps/rep.entity.ts';
 import { Report } from '../features/reports/report.entity.ts';
@@ -73,6 +74,7 @@ export const entities = [
   Comment,
   Head,
   Replay,
+  KeptFilm,
   Report,
   Erasure,
   JobOutbox,

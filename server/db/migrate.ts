@@ -22,6 +22,7 @@ import { Migration20261202071700_plans } from '../../migrations/Migration2026120
 import { Migration20261202081600_waiting_mail } from '../../migrations/Migration20261202081600_waiting_mail.ts';
 import { Migration20261202090100_reports } from '../../migrations/Migration20261202090100_reports.ts';
 import { Migration20261202231500_pain_letters } from '../../migrations/Migration20261202231500_pain_letters.ts';
+import { Migration20261203043000_kept_films } from '../../migrations/Migration20261203043000_kept_films.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -107,6 +108,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261202231500_pain_letters',
     class: Migration20261202231500_pain_letters,
+  },
+  {
+    name: 'Migration20261203043000_kept_films',
+    class: Migration20261203043000_kept_films,
   },
 ];
 

@@ -2,6 +2,7 @@ import { prepareClipJob } from '../features/clips/jobs/prepare-clip.ts';
 import { fillDemoJob } from '../db/demo/fill-demo.job.ts';
 import { sendNoticeJob } from '../features/accounts/jobs/send-notice.ts';
 import { sendMailLinkJob } from '../features/mail-links/jobs/send-mail-link.ts';
+import { makeFilmJob } from '../features/replays/film/jobs/make-film.ts';
 import { hideHeadJob } from '../features/replays/jobs/hide-head.ts';
 import { removeHiddenJob } from '../features/replays/jobs/remove-hidden.ts';
 import { makeReportJob } from '../features/reports/jobs/make-report.ts';
@@ -16,6 +17,7 @@ export const jobs: readonly AnyJobHandler[] = [
   prepareClipJob,
   deriveReadingJob,
   hideHeadJob,
+  makeFilmJob,
   removeHiddenJob,
   makeReportJob,
   sendMailLinkJob,

@@ -19,6 +19,8 @@ export const benchLongEdge = 1920;
 export const benchSmallLongEdge = 1280;
 export const replayLongEdge = 960;
 export const posterLongEdge = 640;
+/** Of the picture in a film to keep: larger than the replay's, for it is loaded once. */
+export const keptFilmLongEdge = 1280;
 export const stripTiles = 24;
 export const stripTileHeight = 120;
 

@@ -59,7 +59,9 @@ export const letters = (): Promise<Record<Weight, Letters>> => {
       const laid = (text: string) =>
         face.runs(text, weight).map((run) => {
           const font = fonts.get(run.font) ?? plain;
-          return { font, ...font.layout(run.text) };
+          // its width is a getter, which a copy would lose
+          const { advanceWidth, glyphs, positions } = font.layout(run.text);
+          return { font, advanceWidth, glyphs, positions };
         });
       return {
         width: (text, size) =>

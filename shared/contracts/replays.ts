@@ -7,6 +7,7 @@ import { email, frameIndex, id, moment, personRef, side, text, view } from './pr
 import { gates } from './protocol.ts';
 import { bytes, json, none, route } from './route.ts';
 import { readingCode } from './readings.ts';
+import { filmToKeep, keptFilm } from './kept-film.ts';
 import { overlayMarks, replayCourse } from './replay-parts.ts';
 
 export const replayBody = z
@@ -44,6 +45,8 @@ export const replay = z
      * `failed`: the copy could not be made, and nothing is shown until a person asks for it again.
      */
     head: z.enum(['shown', 'hidden', 'being-prepared', 'failed', 'to-be-looked-at']),
+    /** Null where none was asked for. */
+    film: keptFilm.nullable(),
     message: z.string(),
     passPhrase: z.boolean(),
     state: z.enum(['live', 'lapsed', 'revoked']),
@@ -105,6 +108,8 @@ export const publicReplay = z
         .pick({ body: true, fromFrame: true, toFrame: true, shape: true })
         .extend({ by: z.string() }),
     ),
+    /** To be taken home; null where there is none, or not yet. */
+    film: filmToKeep.nullable(),
     expiresAt: moment,
   })
   .meta({ id: 'PublicReplay' });
@@ -199,6 +204,17 @@ export const replayRoutes = {
     status: 200,
     answer: json(replay),
     problems: ['not-found', 'not-allowed'],
+  }),
+  makeFilm: route({
+    method: 'post',
+    path: '/api/replays/:id/kept-film',
+    summary:
+      'Have the film to keep made, as things stand now; the link hands it to the athlete. An earlier one is replaced.',
+    audience: 'staff',
+    params,
+    status: 202,
+    answer: json(replay),
+    problems: ['not-found', 'not-allowed', 'consent-missing', 'consent-withdrawn', 'link-gone'],
   }),
   openReplay: route({
     method: 'get',

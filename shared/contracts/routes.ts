@@ -9,6 +9,7 @@ import { consentWordingRoutes } from './consents.ts';
 import { eventRoutes } from './events.ts';
 import { exportRoutes } from './exports.ts';
 import { headRoutes } from './heads.ts';
+import { keptFilmRoutes } from './kept-film.ts';
 import { mailLinkRoutes } from './mail-links.ts';
 import { oneTimeCodeRoutes } from './one-time-codes.ts';
 import { athletePlanRoutes } from './athlete-plan.ts';
@@ -57,6 +58,7 @@ export const routes = {
   ...exportRoutes,
   ...reportRoutes,
   ...headRoutes,
+  ...keptFilmRoutes,
   ...planRoutes,
   ...replayRoutes,
   ...athletePlanRoutes,

@@ -63,7 +63,10 @@ const withoutPoorer = (marks: Marks): Marks => {
 };
 
 /** ASIS distance of the quiet stance, px: from it the hip centres are drawn. Null where it is not marked. */
-export const quietWidth = ({ overlay: frames, moments }: PublicReplay): number | null => {
+export const quietWidth = ({
+  overlay: frames,
+  moments,
+}: Pick<PublicReplay, 'overlay' | 'moments'>): number | null => {
   const quiet = frames.find(({ frame }) => frame === moments.quiet) ?? frames[0];
   if (!quiet) return null;
   const marks = marksOf(quiet);
@@ -92,7 +95,7 @@ export interface Shown {
 
 /** What is drawn on a frame, and its angles: the marks, and what the comment on show points at. */
 export const drawnOn = (
-  replay: PublicReplay,
+  replay: Pick<PublicReplay, 'overlay' | 'moments' | 'view' | 'side'>,
   times: readonly Milliseconds[],
   frame: number,
   comment: PublicReplay['comments'][number] | null,

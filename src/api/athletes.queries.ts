@@ -3,6 +3,7 @@ import type * as z from 'zod';
 import type { athleteListQuery } from '#shared/contracts/athletes.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { call } from './client.ts';
+import { isBeingMade, PREPARING_MS } from './readings.queries.ts';
 
 export type AthleteListQuery = z.input<typeof athleteListQuery>;
 
@@ -33,6 +34,7 @@ export const athleteLinksOptions = (athleteId: string) =>
   queryOptions({
     queryKey: [...athletesKey, 'one', athleteId, 'links'],
     queryFn: ({ signal }) => call(routes.listReplays, { query: { athleteId }, signal }),
+    refetchInterval: ({ state }) => (state.data?.items.some(isBeingMade) ? PREPARING_MS : false),
   });
 
 export const athleteVisitsOptions = (athleteId: string) =>

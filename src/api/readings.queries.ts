@@ -1,5 +1,6 @@
 import { queryOptions } from '@tanstack/react-query';
 import type { Side } from '#shared/contracts/primitives.ts';
+import type { Replay } from '#shared/contracts/replays.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { call } from './client.ts';
 
@@ -19,16 +20,17 @@ export const callsOptions = (visitId: string, side: Side) =>
     queryFn: ({ signal }) => call(routes.listCalls, { params: { id: visitId, side }, signal }),
   });
 
-/** How often the links are asked for while a film with a hidden head is being prepared, ms. */
-const PREPARING_MS = 5000;
+/** How often the links are asked for while a film of one is being prepared, ms. */
+export const PREPARING_MS = 5000;
+
+/** Something of this link is made just now, and asked after until it is there. */
+export const isBeingMade = ({ state, head, film }: Replay): boolean =>
+  state === 'live' && (head === 'being-prepared' || film?.state === 'asked');
 
 /** The replay links of a visit. */
 export const replaysOptions = (visitId: string) =>
   queryOptions({
     queryKey: ['visits', visitId, 'replays'],
     queryFn: ({ signal }) => call(routes.listReplays, { query: { visitId }, signal }),
-    refetchInterval: ({ state }) =>
-      state.data?.items.some(({ head, state: is }) => is === 'live' && head === 'being-prepared')
-        ? PREPARING_MS
-        : false,
+    refetchInterval: ({ state }) => (state.data?.items.some(isBeingMade) ? PREPARING_MS : false),
   });

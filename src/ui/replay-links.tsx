@@ -3,6 +3,7 @@ import type { Replay } from '#shared/contracts/replays.ts';
 import { ConfirmButton } from './confirm.tsx';
 import { moment } from './days.ts';
 import { inWords } from './figures.ts';
+import { type FilmActs, LinkFilm } from './link-film.tsx';
 import { LinkHead } from './link-head.tsx';
 import { StateDot, type StateKind } from './state-dot.tsx';
 
@@ -24,6 +25,7 @@ export function ReplayLinks({
   nameOf,
   onEnd,
   onHideAgain,
+  film,
 }: {
   links: readonly Replay[];
   /** What a link plays, said before how often it was opened. */
@@ -32,6 +34,8 @@ export function ReplayLinks({
   onEnd?: (link: Replay) => Promise<void>;
   /** Left out where this person may not make links. */
   onHideAgain?: (link: Replay) => Promise<void>;
+  /** What can be done about the film to keep. */
+  film: FilmActs;
 }) {
   return (
     <ul>
@@ -56,6 +60,7 @@ export function ReplayLinks({
               {link.state === 'live' && link.head !== 'shown' && (
                 <LinkHead head={link.head} onAgain={onHideAgain && (() => onHideAgain(link))} />
               )}
+              {link.state === 'live' && <LinkFilm link={link} {...film} />}
             </div>
             {link.state === 'live' && onEnd && (
               <ConfirmButton

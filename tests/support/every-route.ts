@@ -77,6 +77,8 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   sendReplay: 'replay',
   revokeReplay: 'replay',
   hideHeadAgain: 'replay',
+  makeFilm: 'replay',
+  keptFilm: 'replay',
   listReports: 'visit',
   makeReport: 'visit',
   makeReportAgain: 'failedReport',

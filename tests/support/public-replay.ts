@@ -37,6 +37,7 @@ export const aPublicReplay = (change: Partial<PublicReplay> = {}): PublicReplay 
     ticks: Array.from({ length: 100 }, (_, n) => n),
   },
   head: 'shown',
+  film: null,
   fromFrame: 5,
   toFrame: 95,
   gates: STANDARD_GATES,

@@ -113,6 +113,7 @@ export const ACCESS: Record<RouteName, Access> = {
   visitAnnotations: 'see',
   clipComments: 'see',
   head: 'see',
+  keptFilm: 'see',
   listReplays: 'practice',
   reviewQueue: 'practice',
   eyeAgreement: 'practice',
@@ -156,6 +157,7 @@ export const ACCESS: Record<RouteName, Access> = {
   sendReplay: 'work',
   revokeReplay: 'work',
   hideHeadAgain: 'work',
+  makeFilm: 'work',
   editComment: 'own-words',
   deleteComment: 'own-words',
   secondMarking: 'own-marking',
@@ -168,5 +170,6 @@ export const ACCESS: Record<RouteName, Access> = {
   answerPain: 'link',
   replayFilm: 'link',
   replayVideo: 'link',
+  takeFilm: 'link',
   replayPoster: 'link',
 };

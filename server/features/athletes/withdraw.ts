@@ -35,14 +35,15 @@ const take = ({ em, actor }: Of, consent: Consent, purposes: readonly Purpose[])
 
 /** Links end for good, and copies that were made for them go. */
 const endLinks = async ({ em }: Of, athleteId: string): Promise<void> => {
-  const ended = await em.execute<{ id: string; hide_head: boolean }[]>(
+  const ended = await em.execute<{ id: string; has_files: boolean }[]>(
     `update replay set revoked_at = now() from visit
      where visit.id = replay.visit_id and visit.athlete_id = ? and replay.revoked_at is null
-     returning replay.id, replay.hide_head`,
+     returning replay.id, replay.hide_head or exists (
+       select from kept_film f where f.replay_id = replay.id) as has_files`,
     [athleteId],
   );
-  for (const { id, hide_head: hidden } of ended)
-    if (hidden) await enqueue({ em }, REMOVE_HIDDEN, { replayId: id });
+  for (const { id, has_files: hasFiles } of ended)
+    if (hasFiles) await enqueue({ em }, REMOVE_HIDDEN, { replayId: id });
 };
 
 /** What rested on the purposes stops in the same unit of work: links die, what was filmed is closed. */

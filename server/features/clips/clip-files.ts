@@ -26,6 +26,10 @@ export const hiddenFiles = (
   return { replay: `${path}.mp4`, poster: `${path}.jpg` } as const;
 };
 
+/** The film of a link with drawing and reading in its picture, for the athlete to keep. */
+export const keptFilmKey = (practiceId: string, clipId: string, filmId: string): string =>
+  `${clipPrefix(practiceId, clipId)}/kept/${filmId}.mp4`;
+
 /** Pictures that are made when first asked for, and kept. */
 export const frameKey = (practiceId: string, clipId: string, index: number): string =>
   `${clipPrefix(practiceId, clipId)}/frames/${index}.jpg`;

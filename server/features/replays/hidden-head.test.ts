@@ -2,14 +2,10 @@ import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
-import { prepareClip } from '#server/media/prepare-clip.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
-import { makeClip as makeFile } from '#tests/fixtures/media/make-clips.ts';
-import { makeConsent } from '../athletes/athlete.factory.ts';
-import { makeClip } from '../clips/clip.factory.ts';
+import { playedClip } from '#tests/support/played-clip.ts';
 import { clipFiles, clipPrefix, hiddenFiles } from '../clips/clip-files.ts';
 import { Head } from '../heads/head.entity.ts';
-import { makeVisit } from '../visits/visit.factory.ts';
 import { hideHeadJob } from './jobs/hide-head.ts';
 import { MOST_TRIES } from './jobs/hide-head-tries.ts';
 import { removeHiddenJob } from './jobs/remove-hidden.ts';
@@ -80,46 +76,7 @@ const queued = () =>
 beforeAll(async () => {
   api = await startApi();
   folder = await mkdtemp(join(tmpdir(), 'hidden-head-'));
-  coach = await api.as(api.world.coach);
-  const { coach: user, athlete, practiceId } = api.world;
-  const original = join(folder, 'constant.mp4');
-  await makeFile('constant.mp4', original);
-  const copies = await prepareClip({ original, outDir: join(folder, 'copies') });
-  const { num, den } = copies.frames.timeBase;
-  const { visit, clip } = await api.ground.inPractice(user, ({ em }) => {
-    makeConsent(em, { athlete, recordedBy: user, purposes: ['assessment', 'sharing-by-link'] });
-    const visit = makeVisit(em, { athlete, coach: user });
-    const { width, height } = copies.facts.upright;
-    const count = copies.frames.ticks.length;
-    const clip = makeClip(em, {
-      visit,
-      uploadedBy: user,
-      ...{ width, height, frameCount: count },
-      frames: { count, timeBase: { num, den }, ticks: [...copies.frames.ticks] },
-      copies: {
-        bench: { width, height, allIntra: true, bytes: copies.bench.bytes },
-        replay: { width, height, bytes: copies.replay.bytes },
-        strip: { frames: [0], width: 90, height: 160 },
-      },
-    });
-    clip.files = clipFiles(practiceId, clip.id);
-    return Promise.resolve({ visit, clip });
-  });
-  clipId = clip.id;
-  const files = clipFiles(practiceId, clipId);
-  const { storage } = api.ground;
-  await storage.putFile(files.bench, copies.bench.path, 'video/mp4');
-  await storage.putFile(files.replay, copies.replay.path, 'video/mp4');
-  await storage.putFile(files.poster, copies.poster.path, 'image/jpeg');
-  const rep = await coach
-    .post(`/api/clips/${clipId}/reps`)
-    .send({ supportSide: 'right', startFrame: 2, endFrame: 25 })
-    .expect(201);
-  await coach
-    .post(`/api/visits/${visit.id}/sides/right/call`)
-    .send({ seen: 'early', confidence: 'sure' })
-    .expect(201);
-  made = { visitId: visit.id, repId: rep.body.id, side: 'right' };
+  ({ coach, clipId, of: made } = await playedClip(api, folder));
 });
 afterAll(async () => {
   await api.close();

@@ -1,5 +1,7 @@
 import type { Replay as ReplayShape } from '#shared/contracts/replays.ts';
 import { presentPerson } from '../accounts/accounts.presenter.ts';
+import { presentFilm } from './film/film-state.ts';
+import type { KeptFilm } from './film/kept-film.entity.ts';
 import type { Replay } from './replay.entity.ts';
 
 const stateOf = ({ revokedAt, expiresAt }: Replay): ReplayShape['state'] => {
@@ -10,8 +12,13 @@ const stateOf = ({ revokedAt, expiresAt }: Replay): ReplayShape['state'] => {
 /**
  * @param replay with `by` and the lazy `passPhraseHash` loaded; the hash itself never leaves
  * @param head how its head stands
+ * @param film its film to keep, where one was asked for
  */
-export const presentReplay = (replay: Replay, head: ReplayShape['head']): ReplayShape => ({
+export const presentReplay = (
+  replay: Replay,
+  head: ReplayShape['head'],
+  film: KeptFilm | null,
+): ReplayShape => ({
   id: replay.id,
   visitId: replay.visit.id,
   side: replay.side,
@@ -21,6 +28,7 @@ export const presentReplay = (replay: Replay, head: ReplayShape['head']): Replay
   showReading: replay.showReading,
   showCall: replay.showCall,
   head,
+  film: film && presentFilm(film, replay, head),
   message: replay.message,
   passPhrase: Boolean(replay.passPhraseHash?.unwrap()),
   state: stateOf(replay),

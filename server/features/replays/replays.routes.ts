@@ -5,6 +5,8 @@ import type { Feature } from '../../main/feature.ts';
 import { passwordFits } from '../accounts/password.ts';
 import { sendStored } from '../clips/send-stored.ts';
 import { linkActor, liveLink, unlock } from './link.ts';
+import { filmFilesOf, filmOf } from './film/film-files.ts';
+import { makeFilm, openFilm, takeFilm } from './film/kept-films.service.ts';
 import { hiddenFilesOf } from './hidden-copies.ts';
 import { filmOfLink, mediaOfLink, openReplay, passPhraseWasWrong } from './public-replay.ts';
 import { presentReplay } from './replays.presenter.ts';
@@ -24,7 +26,7 @@ const MEDIA = {
 } as const;
 
 const presented = async (...[unit, replay]: Parameters<typeof headOfLink>) =>
-  presentReplay(replay, await headOfLink(unit, replay));
+  presentReplay(replay, await headOfLink(unit, replay), await filmOf(unit.em, replay));
 
 export const replaysFeature: Feature = ({ serve, ground }) => {
   const { inPractice, storage, config } = ground;
@@ -59,7 +61,10 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
   serve(routes.revokeReplay, async ({ params, work }) => {
     const { ended, files } = await work(async (unit) => {
       const replay = await revokeReplay(unit, params.id);
-      return { ended: await presented(unit, replay), files: await hiddenFilesOf(unit.em, replay) };
+      return {
+        ended: await presented(unit, replay),
+        files: [...(await hiddenFilesOf(unit.em, replay)), ...(await filmFilesOf(unit.em, replay))],
+      };
     });
     for (const key of files) await storage.delete(key);
     return ended;
@@ -68,6 +73,25 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
   serve(routes.hideHeadAgain, ({ params, work }) =>
     work(async (unit) => presented(unit, await hideHeadAgain(unit, params.id))),
   );
+
+  serve(routes.makeFilm, ({ params, work }) =>
+    work(async (unit) => presented(unit, await makeFilm(unit, params.id))),
+  );
+
+  serve(routes.keptFilm, async ({ params, work, req, res }) => {
+    const { key, name } = await work((unit) => openFilm(unit, params.id));
+    res.attachment(name);
+    await sendStored(req, res, storage, key, 'video/mp4');
+  });
+
+  serve(routes.takeFilm, async ({ params, req, res }) => {
+    const actor = await linkActor(ground, req, params.token);
+    // a download that was cut off goes on where it stopped, and is the same download
+    const begins = !/^bytes=[1-9]/.test(req.get('range') ?? '') && req.method !== 'HEAD';
+    const { key, name } = await inPractice(actor, (unit) => takeFilm(unit, begins));
+    res.attachment(name);
+    await sendStored(req, res, storage, key, 'video/mp4');
+  });
 
   serve(routes.openReplay, async ({ params, req }) =>
     inPractice(await linkActor(ground, req, params.token), openReplay),

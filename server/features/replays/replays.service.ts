@@ -127,7 +127,7 @@ export const revokeReplay = async (unit: Of, id: string): Promise<Replay> => {
   if (!replay.revokedAt) {
     replay.revokedAt = new Date();
     audit(unit, 'replay.revoke', id, { athlete: replay.visit.unwrap().athlete.id });
-    if (replay.hideHead) await enqueue(unit, REMOVE_HIDDEN, { replayId: id });
+    await enqueue(unit, REMOVE_HIDDEN, { replayId: id });
   }
   await unit.em.flush();
   return replay;

@@ -9,10 +9,11 @@ import { product } from '../../db/in-practice.ts';
 import { tokenHash } from '../../http/token-hash.ts';
 import { Athlete } from '../athletes/athlete.entity.ts';
 import { makeAthlete, makeConsent } from '../athletes/athlete.factory.ts';
-import { clipFiles, frameKey, hiddenFiles, sheetKey } from '../clips/clip-files.ts';
+import { clipFiles, frameKey, hiddenFiles, keptFilmKey, sheetKey } from '../clips/clip-files.ts';
 import { makeClip } from '../clips/clip.factory.ts';
 import { Upload } from '../clips/upload.entity.ts';
 import { Comment } from '../comments/comment.entity.ts';
+import { KeptFilm } from '../replays/film/kept-film.entity.ts';
 import { Replay } from '../replays/replay.entity.ts';
 import { emptyReport } from '#tests/support/one-of-each.ts';
 import { reportKey } from '../reports/report-files.ts';
@@ -82,6 +83,9 @@ beforeEach(async () => {
       tokenHash: tokenHash(token),
       expiresAt: new Date(Date.now() + 1e9),
     });
+    const film = em.create(KeptFilm, {
+      ...{ replay, state: 'ready', bytes: 1, madeAt: new Date(), by: coach },
+    });
     const report = em.create(Report, {
       ...{ visit, number: 1, state: 'ready', content: emptyReport(secret), pages: 1, bytes: 1 },
       by: coach,
@@ -94,6 +98,7 @@ beforeEach(async () => {
     const keys = [
       ...Object.values(files),
       ...Object.values(hiddenFiles(practiceId, id, replay.id, randomUUID())),
+      keptFilmKey(practiceId, id, film.id),
       frameKey(practiceId, id, 3),
       sheetKey(practiceId, id, 1),
       reportKey(practiceId, athlete.id, report.id),
@@ -186,7 +191,7 @@ describe('an athlete who is erased', () => {
   it('leaves nothing in any table and in no file, but a tombstone without a name', async () => {
     const ids = await idsOf();
     expect(ids.length).toBeGreaterThan(6);
-    expect(await filesWith(secret)).toHaveLength(13);
+    expect(await filesWith(secret)).toHaveLength(14);
     const answer = await erase();
     expect(answer.status).toBe(202);
     expect(answer.body).toMatchObject({ why: 'asked', visits: 1, clips: 1, doneAt: null });

@@ -234,6 +234,7 @@ const aLink: Replay = {
   showReading: true,
   showCall: true,
   head: 'shown',
+  film: null,
   message: '',
   passPhrase: true,
   state: 'live',

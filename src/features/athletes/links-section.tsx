@@ -15,7 +15,7 @@ export function LinksSection({ athlete }: { athlete: Athlete }) {
   const links = useQuery(athleteLinksOptions(athlete.id));
   const visits = useQuery(athleteVisitsOptions(athlete.id));
   const may = useMay(athlete.coach.id);
-  const { end, hideAgain } = useLinkActs();
+  const { end, hideAgain, makeFilm, saveFilm } = useLinkActs();
   const shared = athlete.consentedTo.includes('sharing-by-link');
   const open = links.data?.items.some(({ state }) => state === 'live') ?? false;
   return (
@@ -60,6 +60,7 @@ export function LinksSection({ athlete }: { athlete: Athlete }) {
           }}
           onEnd={may('replay.revoke') ? end : undefined}
           onHideAgain={may('replay.make') ? hideAgain : undefined}
+          film={{ onSave: saveFilm, onMake: shared && may('replay.make') ? makeFilm : undefined }}
         />
       )}
     </Section>

@@ -58,6 +58,16 @@ describe('a replay', () => {
     );
     expect(screen.getByText(/until 2 April 2026/)).toBeVisible();
     expect(asked.every((path) => path.startsWith(`GET /api/r/${replayToken}`))).toBe(true);
+    expect(screen.queryByRole('heading', { name: 'Keep the film' })).toBeNull();
+  });
+
+  it('hands over the film to keep where there is one', async () => {
+    open({ film: { bytes: 2_400_000, madeAt: '2026-03-04T10:00:00Z' } });
+    render(<ReplayApp token={replayToken} />);
+    const save = await screen.findByRole('link', { name: 'Save the film (2.4 MB)' });
+    expect(save).toHaveAttribute('href', `/api/r/${replayToken}/kept-film`);
+    expect(save).toHaveAttribute('download');
+    expect(screen.getByText(/as they stood on 4 March 2026/)).toBeVisible();
   });
 
   it('brings the plan until the retest, where one was given', async () => {

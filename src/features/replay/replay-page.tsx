@@ -4,6 +4,7 @@ import { longDay, shortDay } from '#src/ui/days.ts';
 import { frameTimes } from '#src/video/frame-times.ts';
 import { Contact } from './contact.tsx';
 import { Comments } from './comments.tsx';
+import { KeepFilm } from './keep-film.tsx';
 import { NoFilmYet } from './no-film-yet.tsx';
 import { Player } from './player/player.tsx';
 import { useLoop } from './player/use-loop.ts';
@@ -94,6 +95,7 @@ export function ReplayPage({
               />
             </Suspense>
           )}
+          {replay.film && <KeepFilm token={token} film={replay.film} practice={practice.name} />}
           <Comments comments={replay.comments} shown={comment} onShow={showComment} />
           <footer className="border-t border-rule py-6 text-note text-soft">
             <p>

@@ -8,6 +8,7 @@ import { hiddenFiles } from '../../clips/clip-files.ts';
 import { lockClip } from '../../clips/jobs/lock-clip.ts';
 import { headTrack } from '../../heads/current-head.ts';
 import type { Rep } from '../../reps/rep.entity.ts';
+import { filmIsStale } from '../film/film-state.ts';
 import { hasEnded, headOfReplay } from '../hidden-copies.ts';
 import { Replay } from '../replay.entity.ts';
 import { HIDE_HEAD } from './hide-head-type.ts';
@@ -60,6 +61,7 @@ const keep = (ground: Ground, { replay: { id, practiceId }, clip, head }: Wanted
       return { kept: false, before: null };
     const before = replay.hiddenHead?.id ?? null;
     em.assign(replay, { hiddenHead: head.id });
+    await filmIsStale({ em }, id);
     return { kept: true, before };
   });
 

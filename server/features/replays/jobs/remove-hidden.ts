@@ -1,6 +1,8 @@
 import { product } from '../../../db/in-practice.ts';
 import { handles, type JobContext } from '../../../jobs/job.ts';
 import { hasEnded, hiddenFilesOf } from '../hidden-copies.ts';
+import { filmFilesOf } from '../film/film-files.ts';
+import { KeptFilm } from '../film/kept-film.entity.ts';
 import { Replay } from '../replay.entity.ts';
 import { REMOVE_HIDDEN } from './remove-hidden-type.ts';
 
@@ -12,13 +14,15 @@ const run = async ({
 }: JobContext<{ replayId: string }>): Promise<void> => {
   const files = await inPractice(product(practiceId), async ({ em }) => {
     const replay = await em.findOne(Replay, { id }, { populate: ['rep'] });
-    return replay && hasEnded(replay) ? hiddenFilesOf(em, replay) : null;
+    if (!replay || !hasEnded(replay)) return null;
+    return [...(await hiddenFilesOf(em, replay)), ...(await filmFilesOf(em, replay))];
   });
   if (!files) return;
   for (const key of files) await storage.delete(key);
-  await inPractice(product(practiceId), ({ em }) =>
-    em.nativeUpdate(Replay, { id }, { hiddenHead: null }),
-  );
+  await inPractice(product(practiceId), async ({ em }) => {
+    await em.nativeUpdate(Replay, { id }, { hiddenHead: null });
+    await em.nativeDelete(KeptFilm, { replay: id });
+  });
 };
 
 export const removeHiddenJob = handles({

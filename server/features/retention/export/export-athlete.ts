@@ -8,12 +8,15 @@ import type { Athlete } from '../../athletes/athlete.entity.ts';
 import { Consent } from '../../athletes/consent.entity.ts';
 import { audit } from '../../audit/audit.ts';
 import { Clip } from '../../clips/clip.entity.ts';
+import { keptFilmKey } from '../../clips/clip-files.ts';
 import { Comment } from '../../comments/comment.entity.ts';
 import { COMMENT_ORDER } from '../../comments/comments.presenter.ts';
 import { SCAN_ENDINGS } from '../../consents/send-scan.ts';
 import { scanKey } from '../../consents/scans.service.ts';
 import { type Addresses, annotatedComment, annotatedRep } from '../../exports/annotated.ts';
 import { framesCsv } from '../../exports/exported-reps.ts';
+import { KeptFilm } from '../../replays/film/kept-film.entity.ts';
+import type { Rep } from '../../reps/rep.entity.ts';
 import { timesOfClip } from '../../reps/reps.presenter.ts';
 import { reportKey } from '../../reports/report-files.ts';
 import { Report } from '../../reports/report.entity.ts';
@@ -77,6 +80,19 @@ const reportsOf = async (
   }));
 };
 
+/** Films that were made for the athlete to keep. */
+const filmsOf = async (em: Of['em'], visit: Visit, folder: string): Promise<HeldFile[]> => {
+  const films = await em.find(
+    KeptFilm,
+    { replay: { visit: visit.id }, state: 'ready' },
+    { populate: ['replay.rep'], orderBy: { madeAt: 'asc', id: 'asc' } },
+  );
+  return films.map(({ id, practiceId, replay }, n) => ({
+    name: `${folder}/film-to-keep-${n + 1}.mp4`,
+    key: keptFilmKey(practiceId, (replay.unwrap().rep.unwrap() as Rep).clip.id, id),
+  }));
+};
+
 /** What was filmed on one day: clips as they were sent, and what was said about them in open formats. */
 const visitFiles = async (
   { em }: Of,
@@ -122,6 +138,7 @@ const visitFiles = async (
       ),
     );
   files.push(...(await reportsOf(em, visit, folder, athlete)));
+  files.push(...(await filmsOf(em, visit, folder)));
   return files;
 };
 
@@ -135,7 +152,7 @@ const trail = async (em: Of['em'], athleteId: string): Promise<HeldFile[]> => {
   return [
     json(
       'link-openings.json',
-      rows.filter(({ action }) => action === 'replay.open'),
+      rows.filter(({ action }) => action === 'replay.open' || action === 'replay.film-taken'),
     ),
     json('audit.json', rows),
   ];

@@ -11,6 +11,10 @@ const WHAT: readonly (readonly [RegExp, string])[] = [
   [/^audit\.json$/, 'what was done with this person’s data, by ids and codes'],
   [/^rows\//, 'every other table that holds something of this person, row by row'],
   [/clip-\d+(\.[a-z0-9]+)?$/, 'a clip as it was sent, without its place'],
+  [
+    /film-to-keep-\d+\.mp4$/,
+    'a film with drawing and reading in its picture, as it was made to be kept',
+  ],
   [/report-\d+\.pdf$/, 'a report of the visit for the referring clinician'],
   [/comments\.vtt$/, 'comments on a clip as a track for players (WebVTT)'],
   [/frames\.csv$/, 'marked frames with their figures (CSV, RFC 4180)'],

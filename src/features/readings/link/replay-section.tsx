@@ -25,7 +25,7 @@ export function ReplaySection({ page }: { page: SidePage }) {
   const own = links.data?.items.filter((link) => link.side === side) ?? [];
   const failed = [person, links].find(({ isError, data }) => isError && !data);
   const may = useMay(person.data?.coach.id);
-  const { end, hideAgain } = useLinkActs();
+  const { end, hideAgain, makeFilm, saveFilm } = useLinkActs();
   const nameOf = ({ repId }: Replay) => {
     const rep = reps.find((named) => named.rep.id === repId)?.rep;
     return rep ? `rep ${rep.number}, ` : '';
@@ -87,6 +87,10 @@ export function ReplaySection({ page }: { page: SidePage }) {
                 nameOf={nameOf}
                 onEnd={may('replay.revoke') ? end : undefined}
                 onHideAgain={may('replay.make') ? hideAgain : undefined}
+                film={{
+                  onSave: saveFilm,
+                  onMake: consented && may('replay.make') ? makeFilm : undefined,
+                }}
               />
             </div>
           )}
