@@ -2,6 +2,7 @@ import type { APIRequestContext } from '@playwright/test';
 import { routes } from '#shared/contracts/routes.ts';
 import { expect, test } from '../support/app.ts';
 import { ask } from './steps/ask.ts';
+import { markedClip } from './steps/marked-clip.ts';
 import { COACH, signIn } from './steps/people.ts';
 import { PREPARED_WITHIN } from './steps/visit.ts';
 
@@ -9,29 +10,6 @@ test.use({ viewport: { width: 390, height: 844 } });
 test.beforeEach(() => test.setTimeout(PREPARED_WITHIN + 120_000));
 
 const FILM = 'Your lift, standing on the right leg';
-
-/** The demo's clip of a front lift, once it is prepared and its first rep is marked. */
-async function markedClip(request: APIRequestContext) {
-  const { items } = await ask(request, routes.listAthletes, { query: { q: 'Quill' } });
-  const athlete = items[0];
-  if (athlete === undefined) throw new Error('the demo has no such athlete');
-  const { items: visits } = await ask(request, routes.listVisits, { params: { id: athlete.id } });
-  const find = async () => {
-    for (const { id } of visits) {
-      const { clips } = await ask(request, routes.visit, { params: { id } });
-      const clip = clips.find(({ view, state }) => view === 'front' && state === 'ready');
-      if (clip === undefined) continue;
-      const reps = await ask(request, routes.listReps, { params: { id: clip.id } });
-      const rep = reps.items.find(({ markedFrames }) => markedFrames > 0);
-      if (rep !== undefined) return { clip, rep };
-    }
-    return null;
-  };
-  await expect.poll(async () => (await find()) !== null, { timeout: PREPARED_WITHIN }).toBe(true);
-  const found = await find();
-  if (found === null) throw new Error('the demo clip is gone again');
-  return found;
-}
 
 /** A link to one rep of the demo, between two of its frames. */
 async function aLink(request: APIRequestContext, passPhrase: string | null = null) {
