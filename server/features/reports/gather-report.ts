@@ -6,6 +6,7 @@ import { changeRows } from '#shared/reading/changes.ts';
 import { partHalfWidth } from '#shared/reading/part-half-width.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { Problem } from '../../http/problem.ts';
+import type { Athlete } from '../athletes/athlete.entity.ts';
 import { Call } from '../calls/call.entity.ts';
 import { Clip } from '../clips/clip.entity.ts';
 import { lastGiven } from '../plans/give-plan.ts';
@@ -14,6 +15,7 @@ import { Practice } from '../practice/practice.entity.ts';
 import { sideReading } from '../readings/readings.service.ts';
 import { sideReview } from '../reviews/reviews.service.ts';
 import type { VisitInSight } from '../visits/visit-in-sight.ts';
+import { keyFramesOf } from './key-frames.ts';
 import type { ReportContent, ReportPlan, ReportReading, ReportSide } from './report-content.ts';
 
 type Of = Unit<UserActor>;
@@ -50,7 +52,7 @@ export const readingOf = (reading: Reading): ReportReading => {
   };
 };
 
-const sideOf = async (unit: Of, page: SidePage): Promise<ReportSide> => {
+const sideOf = async (unit: Of, page: SidePage, athlete: Athlete): Promise<ReportSide> => {
   const review = await sideReview(unit, page.visit.id, page.side);
   const [last] = review.steps;
   return {
@@ -60,6 +62,7 @@ const sideOf = async (unit: Of, page: SidePage): Promise<ReportSide> => {
     })),
     calledBy: page.calls.map(({ by }) => by.name),
     reading: page.reading && readingOf(page.reading),
+    keyFrames: page.reading && (await keyFramesOf(unit.em, page.reading, page.side, athlete)),
     review: {
       state: review.state,
       by: last?.by.name ?? null,
@@ -112,7 +115,7 @@ export const gatherReport = async (
   const pages: SidePage[] = [];
   for (const side of called) pages.push(await sideReading(unit, visit.id, side));
   const told: ReportSide[] = [];
-  for (const page of pages) told.push(await sideOf(unit, page));
+  for (const page of pages) told.push(await sideOf(unit, page, athlete));
   const clips = await em.find(Clip, { visit: visit.id, state: 'ready' });
   const { name, contact } = await em.findOneOrFail(Practice, { id: actor.practiceId });
   return {

@@ -2,6 +2,7 @@ import type { Dose } from '#shared/contracts/athlete-plan.ts';
 import type { Call } from '#shared/contracts/calls.ts';
 import type { Side, View } from '#shared/contracts/primitives.ts';
 import type { ReadingCode } from '#shared/contracts/readings.ts';
+import type { PublicReplay } from '#shared/contracts/replays.ts';
 import type { ReviewState } from '#shared/contracts/reviews.ts';
 import type { LandmarkSetId } from '#shared/landmarks/types.ts';
 import type { CourseCurve } from '#shared/plots/course-shapes.ts';
@@ -43,6 +44,16 @@ export interface ReportReading {
   >[];
 }
 
+/** Which frames of which clip are shown of a side, and what is drawn on them. */
+export interface ReportKeyFrames {
+  readonly clip: string;
+  /** The version of the box that hides the head on them; null where they are left out. */
+  readonly head: string | null;
+  /** Why they are left out; null where they are shown. */
+  readonly leftOut: string | null;
+  readonly drawn: Pick<PublicReplay, 'overlay' | 'moments' | 'view' | 'side'>;
+}
+
 export interface ReportSide {
   readonly side: Side;
   readonly calls: readonly Pick<
@@ -52,6 +63,8 @@ export interface ReportSide {
   readonly calledBy: readonly string[];
   /** Null where nothing was marked. */
   readonly reading: ReportReading | null;
+  /** Null where nothing that counts was marked; not there in reports from before there were any. */
+  readonly keyFrames?: ReportKeyFrames | null;
   readonly review: {
     readonly state: ReviewState;
     readonly by: string | null;

@@ -24,8 +24,8 @@ const bright = (of: (channel: number) => number) =>
   0.2126 * of(0) + 0.7152 * of(1) + 0.0722 * of(2);
 
 /** How far drawings are looked for, and in which steps, px of the film. */
-const FARTHEST = 3;
-const STEP = 0.25;
+const FARTHEST = 2;
+const STEP = 0.5;
 /** Half the side of the square that is compared, px of the film. */
 const REACH = 16;
 

@@ -4,6 +4,7 @@ import { tell } from '../../../events/tell.ts';
 import { handles, type JobContext } from '../../../jobs/job.ts';
 import type { Ground } from '../../../main/ground.ts';
 import type { Visit } from '../../visits/visit.entity.ts';
+import { makePictures } from '../make-pictures.ts';
 import { reportKey } from '../report-files.ts';
 import { Report } from '../report.entity.ts';
 import { writeReport } from '../write/write-report.ts';
@@ -63,7 +64,8 @@ const run = async ({
     return;
   }
   try {
-    const { pdf, pages } = await writeReport(content, of);
+    const pictures = await makePictures(ground, practiceId, content, signal);
+    const { pdf, pages } = await writeReport(content, of, pictures);
     signal.throwIfAborted();
     await ground.storage.putStream(key, Readable.from([pdf]), 'application/pdf');
     const kept = await say(ground, practiceId, reportId, {
@@ -106,7 +108,8 @@ export const makeReportJob = handles({
   type: MAKE_REPORT,
   lockKey: ({ reportId }) => reportId,
   run,
-  expireInMinutes: 10,
+  // pictures of a long clip are decoded up to their frame
+  expireInMinutes: 30,
   retryLimit: 5,
   retryDelaySeconds: 10,
   unfinished: {

@@ -133,7 +133,7 @@ const writeChanges = (paper: Paper, { changes }: ReportReading): void => {
 };
 
 /** One hip: what was seen, what was measured, and who answers for it. */
-export const writeSide = (paper: Paper, side: ReportSide): void => {
+export const writeSide = (paper: Paper, side: ReportSide, pictures: () => void): void => {
   paper.heading(hipWords(side.side), 120);
   paper.subheading('Call by eye');
   for (const line of callWords(side)) paper.says(line);
@@ -142,6 +142,7 @@ export const writeSide = (paper: Paper, side: ReportSide): void => {
     paper.says(
       `Nothing was measured on this side: no rep with the ${otherSide(side.side)} leg lifted carries a mark.`,
     );
+  pictures();
   paper.subheading('Sign-off');
   paper.says(reviewWords(side));
 };

@@ -1,7 +1,10 @@
+import { letters } from '#server/pdf/letters.ts';
 import { Paper } from '#server/pdf/paper.ts';
+import type { Pictures } from '../make-pictures.ts';
 import type { ReportContent } from '../report-content.ts';
 import { writeCompared, writeLimits, writePlans, writeReferences } from './closing-part.ts';
-import { cutShort } from './cut-short.ts';
+import { type Cut, cutShort } from './cut-short.ts';
+import { writeKeyFrames } from './key-frames-part.ts';
 import { counted, dayWords, listed, VIEW_WORDS } from './report-words.ts';
 import { writeSide } from './side-part.ts';
 
@@ -11,6 +14,13 @@ export interface Edition {
   readonly by: string;
 }
 
+interface Way {
+  readonly scale: number;
+  readonly cut: Cut;
+  /** False leaves the key frames out. */
+  readonly pictures?: boolean;
+}
+
 /** Smaller type, then fewer words, where the report would take more pages than a letter should. */
 const WAYS = [
   { scale: 1, cut: 'whole' },
@@ -18,7 +28,8 @@ const WAYS = [
   { scale: 0.78, cut: 'whole' },
   { scale: 0.78, cut: 'short' },
   { scale: 0.78, cut: 'shortest' },
-] as const;
+  { scale: 0.78, cut: 'shortest', pictures: false },
+] as const satisfies readonly Way[];
 export const MOST_PAGES = 3;
 
 const metres = (mm: number): string => `${(mm / 1000).toFixed(2)} m`;
@@ -60,11 +71,15 @@ const writeTest = (paper: Paper, content: ReportContent): void => {
   paper.says(
     `The athlete stands on one leg and lifts the other knee. Looked at is whether the hip stood on turns in, holds still or swings outwards while the lifted thigh passes ${gates ? `${gates.from}° and ${gates.to}°` : 'the gates'} from the vertical. Turn is counted from this person’s own quiet stance, outwards positive. First it was judged by eye; where landmarks were marked on frames of the clip, the turn was worked out from them.`,
   );
-  paper.says(`${filmedWords(content)} This report holds no pictures of the athlete.`);
+  paper.says(filmedWords(content));
 };
 
-const write = async (whole: ReportContent, of: Edition, { scale, cut }: (typeof WAYS)[number]) => {
+const NO_ROOM = 'there is no room for them beside what had to be said';
+
+const write = async (whole: ReportContent, of: Edition, all: Pictures, way: Way) => {
+  const { scale, cut, pictures: shown = true } = way;
   const { content, leftOut } = cutShort(whole, cut);
+  const { strong } = await letters();
   const { athlete, visit, practice } = content;
   const paper = await Paper.open(
     {
@@ -78,7 +93,14 @@ const write = async (whole: ReportContent, of: Edition, { scale, cut }: (typeof 
   if (leftOut.length > 0)
     paper.note(`Shortened to fit on ${MOST_PAGES} pages; left out: ${listed(leftOut)}.`);
   writeTest(paper, content);
-  for (const side of content.sides) writeSide(paper, side);
+  for (const [n, side] of content.sides.entries()) {
+    const stills = all.get(n);
+    const told = typeof stills === 'object' && !shown ? NO_ROOM : stills;
+    writeSide(paper, side, () => {
+      if (side.reading && side.keyFrames && told !== undefined)
+        writeKeyFrames(paper, side.reading, side.keyFrames, told, strong);
+    });
+  }
   writeCompared(paper, content);
   writePlans(paper, content);
   writeReferences(paper);
@@ -96,9 +118,10 @@ const write = async (whole: ReportContent, of: Edition, { scale, cut }: (typeof 
 export const writeReport = async (
   content: ReportContent,
   of: Edition,
+  pictures: Pictures = new Map(),
 ): Promise<{ readonly pdf: Buffer; readonly pages: number }> => {
   for (const way of WAYS) {
-    const made = await write(content, of, way);
+    const made = await write(content, of, pictures, way);
     if (made.pages <= MOST_PAGES) return made;
   }
   throw new Error(`A report takes more than ${MOST_PAGES} pages at its shortest.`);

@@ -85,3 +85,80 @@ describe('a report on paper', () => {
     expect(text).toContain('Limits');
   });
 });
+
+describe('the key frames of a report', () => {
+  const side = {
+    ...aSide('left', 1, 'g04_expected_big'),
+    keyFrames: {
+      clip: '00000000-0000-4000-8000-000000000001',
+      head: '00000000-0000-4000-8000-000000000002',
+      leftOut: null,
+      drawn: {
+        view: 'front' as const,
+        side: 'left' as const,
+        moments: { quiet: 3, from: 9, to: 12, top: 15 },
+        overlay: [3, 9, 12, 15].map((frame, n) => ({
+          frame,
+          marks: [
+            { landmark: 'asis-support' as const, u: 60, v: 40, looked: true },
+            { landmark: 'asis-lifted' as const, u: 40, v: 40, looked: true },
+          ],
+          lift: 30 * n,
+          liftPlusMinus: 2.2,
+          turn: n - 1,
+          turnPlusMinus: 4.6,
+        })),
+      },
+    },
+  };
+  // one grey pixel, JPEG
+  const jpeg = Buffer.from(
+    '/9j/4AAQSkZJRgABAQEASABIAAD/2wBDAP//////////////////////////////////////////////////////////////////////////////////////wAALCAABAAEBAREA/8QAFAABAAAAAAAAAAAAAAAAAAAACf/EABQQAQAAAAAAAAAAAAAAAAAAAAD/2gAIAQEAAD8AVN//2Q==',
+    'base64',
+  );
+  const stills = side.keyFrames.drawn.overlay.map(({ frame }) => ({
+    frame,
+    jpeg,
+    size: { width: 100, height: 160 },
+    from: { u: 0, v: 0 },
+    scale: 1,
+  }));
+  const write = async (pictures: ReadonlyMap<number, typeof stills | string>, more = {}) => {
+    const content = { ...emptyReport(), sides: [side], ...more };
+    const { pdf } = await writeReport(content, OF, pictures);
+    return { pdf, text: pdfPages(pdf).join(' ') };
+  };
+
+  it('stand beside each other with their words, and are told to those who cannot see them', async () => {
+    const { pdf, text } = await write(new Map([[0, stills]]));
+    for (const words of ['Quiet stance', '60° of lift', '90° of lift', 'Top of the lift'])
+      expect(text).toContain(words);
+    expect(text).toContain('lift under 20°');
+    expect(text).toMatch(/lift 60°\s?±\s?3°/);
+    expect(text).toContain('The head is hidden in the pictures.');
+    const raw = pdf.toString('latin1');
+    expect(raw.match(/\/Subtype \/Image/g)).toHaveLength(4);
+    // each with words of its own
+    expect(raw.match(/\/S \/Figure/g)).toHaveLength(5);
+  });
+
+  it('are left out with the reason where there are none', async () => {
+    const { pdf, text } = await write(new Map([[0, 'nobody has looked yet']]));
+    expect(text).toContain('There are none in this report: nobody has looked yet.');
+    expect(pdf.toString('latin1')).not.toContain('/Subtype /Image');
+  });
+
+  it('give way where there is more to say than three pages hold', async () => {
+    const cue = 'Let the weight come over the whole foot first, then lift. '.repeat(6);
+    const { pdf, text } = await write(new Map([[0, stills]]), {
+      sides: [
+        { ...aSide('left', 30, 'g04_expected_big'), keyFrames: side.keyFrames },
+        aSide('right', 30, 'g02_early_mid_3rep'),
+      ],
+      plans: [aPlan('left', 20, cue), aPlan('right', 20, cue)],
+    });
+    expect(pdfPages(pdf).length).toBeLessThanOrEqual(MOST_PAGES);
+    expect(text).toContain('There are none in this report: there is no room for them');
+    expect(pdf.toString('latin1')).not.toContain('/Subtype /Image');
+  });
+});
