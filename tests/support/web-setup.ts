@@ -1,6 +1,6 @@
 import '@testing-library/jest-dom/vitest';
 import { cleanup, configure } from '@testing-library/react';
-import { afterEach } from 'vitest';
+import { afterAll, afterEach, vi } from 'vitest';
 
 // how long a page may take to come on a busy machine; nothing waits so long that goes right
 configure({ asyncUtilTimeout: 10_000 });
@@ -10,6 +10,9 @@ afterEach(() => {
   sessionStorage.clear();
   localStorage.clear();
 });
+
+// a page loads what it does not need at once: none of it may come when the file is done
+afterAll(() => vi.dynamicImportSettled());
 
 // jsdom draws nothing and has no modal dialogs: the least that the pages lean on
 HTMLDialogElement.prototype.showModal ??= function showModal(this: HTMLDialogElement) {
