@@ -26,6 +26,9 @@ export interface Column {
   readonly align?: 'left' | 'right';
 }
 
+/** Between the words of two columns. */
+const COLUMN_GAP = 6;
+
 /** Draws into a figure; its corner is 0, 0. */
 export interface Pen {
   readonly doc: Doc;
@@ -84,8 +87,11 @@ export class Paper {
 
   /** On to the next page unless so much fits on this one. */
   room(height: number): void {
-    const { page } = this.#doc;
-    if (this.#doc.y + height > page.height - MARGIN.bottom) this.#doc.addPage();
+    if (!this.#fits(height)) this.#doc.addPage();
+  }
+
+  #fits(height: number): boolean {
+    return this.#doc.y + height <= this.#doc.page.height - MARGIN.bottom;
   }
 
   space(height: number): void {
@@ -182,50 +188,67 @@ export class Paper {
   table(columns: readonly Column[], rows: readonly (readonly string[])[], size = 8.5): void {
     const table = this.#doc.struct('Table');
     this.#root.add(table);
-    this.#row(
-      table,
-      columns,
-      columns.map(({ title }) => title),
-      { size, weight: 'strong' },
-      'TH',
-    );
-    for (const row of rows) this.#row(table, columns, row, { size }, 'TD');
+    const head = columns.map(({ title }) => title);
+    const strong: Type = { size, weight: 'strong' };
+    const headHeight = this.#rowHeight(columns, head, strong);
+    // a head is never parted from the first row under it
+    this.room(headHeight + this.#rowHeight(columns, rows[0] ?? [], { size }));
+    this.#row(table, columns, head, strong, 'TH');
+    for (const row of rows) {
+      if (!this.#fits(this.#rowHeight(columns, row, { size }))) {
+        this.#doc.addPage();
+        // the table goes on: to those who hear it, its head has been said
+        this.#row(null, columns, head, strong, 'TH');
+      }
+      this.#row(table, columns, row, { size }, 'TD');
+    }
     table.end();
     this.space(5);
   }
 
+  /** What each column's words may take of the width. */
+  #columnWidths(columns: readonly Column[]): number[] {
+    const whole = columns.reduce((sum, { share }) => sum + share, 0);
+    return columns.map(({ share }) => (share / whole) * this.#width);
+  }
+
+  /** With its rule below. */
+  #rowHeight(columns: readonly Column[], cells: readonly string[], type: Type): number {
+    const widths = this.#columnWidths(columns);
+    const heights = cells.map((cell, n) => this.#height(cell, type, (widths[n] ?? 0) - COLUMN_GAP));
+    return Math.max(0, ...heights) + 4;
+  }
+
+  /** @param table null: drawn once more, and no part of what is read out */
   #row(
-    table: Struct,
+    table: Struct | null,
     columns: readonly Column[],
     cells: readonly string[],
     type: Type,
     tag: 'TH' | 'TD',
   ) {
     const doc = this.#doc;
-    const whole = columns.reduce((sum, { share }) => sum + share, 0);
-    const gap = 6;
-    const widths = columns.map(({ share }) => (share / whole) * this.#width);
-    const height = Math.max(
-      ...cells.map((cell, n) => this.#height(cell, type, (widths[n] ?? 0) - gap)),
-    );
-    this.room(height + 4);
+    const widths = this.#columnWidths(columns);
+    const height = this.#rowHeight(columns, cells, type);
+    this.room(height);
     const y = doc.y;
-    const row = doc.struct('TR');
-    table.add(row);
+    const row = table && doc.struct('TR');
+    if (row) table.add(row);
+    else doc.markContent('Artifact', { type: 'Pagination' });
     let x = this.#left;
     for (const [n, cell] of cells.entries()) {
       const at = x;
       const width = widths[n] ?? 0;
       const align = columns[n]?.align ?? 'left';
-      row.add(
-        doc.struct(tag, {}, () =>
-          this.#words(cell === '' ? ' ' : cell, { ...type, align }, at, y + 1.5, width - gap),
-        ),
-      );
+      const write = () =>
+        this.#words(cell === '' ? ' ' : cell, { ...type, align }, at, y + 1.5, width - COLUMN_GAP);
+      if (row) row.add(doc.struct(tag, {}, write));
+      else write();
       x += width;
     }
-    row.end();
-    const end = y + height + 3;
+    if (row) row.end();
+    else doc.endMarkedContent();
+    const end = y + height - 1;
     doc.markContent('Artifact', { type: 'Layout' });
     doc
       .moveTo(this.#left, end)
