@@ -18,6 +18,15 @@ export const MOMENT_WORDS: Readonly<Record<Moment, string>> = {
   topEnd: 'lower',
   footDown: 'foot down',
 };
+/** Whose word stands where not all have room, the weightiest first. */
+export const MOMENT_WEIGHT: readonly Moment[] = [
+  'footOff',
+  'top',
+  'quietStart',
+  'footDown',
+  'topEnd',
+  'quietEnd',
+];
 export const MOMENT_NAMES: Readonly<Record<Moment, string>> = {
   quietStart: 'First quiet frame',
   quietEnd: 'Last quiet frame',

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { frameIndex, milliseconds } from '#shared/timing/units.ts';
-import { pinRow, spacedLabels, stripLayout } from './strip-layout.ts';
+import { pinRow, spacedLabels, spreadTargets, stripLayout } from './strip-layout.ts';
 
 // a variable rate: frame 2 stays three times as long
 const TIMES = [0, 20, 40, 100, 120, 140].map(milliseconds);
@@ -35,13 +35,33 @@ describe('strip', () => {
 });
 
 describe('labels and pins', () => {
-  it('leaves out what would run into its neighbour', () => {
+  it('leaves out what would run into a weightier neighbour, before it or behind it', () => {
     const labels = [
-      { x: 0, text: 'quiet' },
-      { x: 20, text: 'foot off' },
-      { x: 200, text: 'top' },
+      { text: 'top', from: 200, to: 225 },
+      { text: 'lower', from: 215, to: 254 },
+      { text: 'foot down', from: 140, to: 195 },
+      { text: 'quiet', from: 0, to: 39 },
+      { text: 'foot off', from: 47, to: 107 },
+      { text: 'quiet ends', from: 40, to: 114 },
     ];
-    expect(spacedLabels(labels).map((each) => each.text)).toEqual(['quiet', 'top']);
+    expect(spacedLabels(labels).map((each) => each.text)).toEqual(['top', 'quiet', 'foot off']);
+  });
+
+  it('gives each moment a place to press that no other lies on', () => {
+    const wanted = [
+      { from: -12, to: 12 },
+      { from: 100, to: 160 },
+      { from: 110, to: 134 },
+      { from: 370, to: 394 },
+      { from: 372, to: 396 },
+    ];
+    expect(spreadTargets(wanted, 400)).toEqual([
+      { from: 0, to: 24 },
+      { from: 100, to: 160 },
+      { from: 160, to: 184 },
+      { from: 352, to: 376 },
+      { from: 376, to: 400 },
+    ]);
   });
 
   it('shows words only where there is room for them', () => {

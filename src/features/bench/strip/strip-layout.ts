@@ -80,20 +80,39 @@ export const stripLayout = (
   };
 };
 
-/** Labels that would run into the one before them are left out; the ends come first. */
-export const spacedLabels = <T extends { readonly x: number; readonly text: string }>(
-  labels: readonly T[],
-  pxPerLetter = 7,
-  gap = 10,
-): T[] => {
-  const shown: T[] = [];
-  let free = -Infinity;
-  for (const label of [...labels].sort((a, b) => a.x - b.x)) {
-    if (label.x < free) continue;
-    shown.push(label);
-    free = label.x + label.text.length * pxPerLetter + gap;
-  }
-  return shown;
+/** Room that a word on the strip takes. */
+export interface LabelRoom {
+  readonly from: number;
+  readonly to: number;
+}
+
+/** Those that keep `gap` px from all that came before them; the weightiest come first. */
+export const spacedLabels = <T extends LabelRoom>(labels: readonly T[], gap = 8): T[] =>
+  labels.reduce<T[]>(
+    (shown, label) =>
+      shown.some(({ from, to }) => label.from < to + gap && from < label.to + gap)
+        ? shown
+        : [...shown, label],
+    [],
+  );
+
+/** The same widths, pushed apart within `width` so that each can be pressed; in order of place. */
+export const spreadTargets = (wanted: readonly LabelRoom[], width: number): LabelRoom[] => {
+  let free = 0;
+  const fromLeft = wanted.map(({ from, to }) => {
+    const start = Math.max(from, free);
+    free = start + to - from;
+    return { from: start, to: free };
+  });
+  let end = width;
+  return fromLeft
+    .reverse()
+    .map(({ from, to }) => {
+      const room = { from: Math.min(to, end) - (to - from), to: Math.min(to, end) };
+      end = room.from;
+      return room;
+    })
+    .reverse();
 };
 
 export interface Pin<T> {

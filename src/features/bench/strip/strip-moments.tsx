@@ -1,13 +1,24 @@
-import { useState, type KeyboardEvent } from 'react';
+import { type KeyboardEvent, type PointerEvent, useRef, useState } from 'react';
 import type { Rep } from '#shared/contracts/reps.ts';
 import type { Moment } from '#shared/records/engine-input.ts';
 import { frameIndex } from '#shared/timing/units.ts';
+import { cx } from '#src/ui/class-names.ts';
 import { useStatus } from '#src/ui/status.tsx';
 import { useEdits } from '../actions/use-edits.ts';
 import { useBenchTools } from '../bench-context.ts';
 import { goTo } from '../store/bench-store.ts';
-import { MOMENT_NAMES, MOMENT_WORDS, type PlacedMoment, roomOf } from './moments.ts';
-import { spacedLabels, type StripLayout } from './strip-layout.ts';
+import { MOMENT_NAMES, MOMENT_WEIGHT, MOMENT_WORDS, type PlacedMoment, roomOf } from './moments.ts';
+import { spacedLabels, spreadTargets, type StripLayout } from './strip-layout.ts';
+
+/** Of the words under the line, roomy enough for the bold ones. */
+const PX_PER_LETTER = 7;
+
+/** What a thumb can press (WCAG 2.2, 2.5.8). */
+const LEAST_TARGET = 24;
+
+/** Where on the strip a pointer is, px. */
+const placeOf = ({ clientX, currentTarget }: PointerEvent): number =>
+  clientX - (currentTarget.parentElement?.getBoundingClientRect().left ?? 0);
 
 /**
  * The moments of the rep in the foot of the strip. Each is a slider: drag it, or arrows move it one
@@ -29,16 +40,29 @@ export function StripMoments({
   const say = useStatus();
   // a gesture that is not finished: it changes nothing until the pointer or the key comes up
   const [draft, setDraft] = useState<{ moment: Moment; frame: number } | null>(null);
+  /** How far beside its line a moment was taken hold of, so that it does not jump to the pointer. */
+  const grip = useRef(0);
   const frameOf = (placed: PlacedMoment) =>
     draft?.moment === placed.moment ? draft.frame : placed.frame;
-  const shown = moments.map((placed) => ({
-    ...placed,
-    x: layout.x(frameOf(placed)) + 4,
-    text: MOMENT_WORDS[placed.moment],
-  }));
-  const atEdge = ({ x, text }: { x: number; text: string }) =>
-    x + text.length * 7 + 8 > layout.width;
-  const labelled = new Set(spacedLabels(shown).map((each) => each.moment));
+  const lines = moments.map((placed) => {
+    const x = layout.x(frameOf(placed));
+    const wide = MOMENT_WORDS[placed.moment].length * PX_PER_LETTER + 8;
+    // at the right edge the words stand before their line
+    const atEdge = x + wide > layout.width;
+    return { ...placed, x, atEdge, from: atEdge ? x - wide : x, to: atEdge ? x : x + wide };
+  });
+  const byWeight = MOMENT_WEIGHT.flatMap((moment) =>
+    lines.filter((each) => each.moment === moment),
+  );
+  const labelled = new Set(spacedLabels(byWeight).map((each) => each.moment));
+  const targets = spreadTargets(
+    lines.map(({ moment, x, atEdge, from, to }) => ({
+      from: labelled.has(moment) && atEdge ? from : x - LEAST_TARGET / 2,
+      to: labelled.has(moment) && !atEdge ? to : x + LEAST_TARGET / 2,
+    })),
+    layout.width,
+  );
+  const shown = lines.map((line, n) => ({ ...line, target: targets[n] ?? line }));
 
   const send = async (moment: Moment, frame: number | null) => {
     try {
@@ -95,15 +119,15 @@ export function StripMoments({
           aria-valuenow={movable ? frameOf(placed) : undefined}
           aria-valuetext={movable ? `frame ${frameOf(placed)}` : undefined}
           title={MOMENT_NAMES[placed.moment]}
-          className={`absolute h-8 min-w-6 touch-none select-none whitespace-nowrap text-caption ${
-            atEdge(placed) ? 'border-r pr-1 text-right' : '-translate-x-1 border-l pl-1'
-          } ${
-            movable ? 'cursor-ew-resize' : ''
-          } ${placed.byHand ? '!border-x-2 border-y-0 border-ink font-bold text-ink' : 'border-ink/60 text-soft'}`}
+          className={cx(
+            'absolute h-8 touch-none select-none text-caption',
+            movable && 'cursor-ew-resize',
+            placed.byHand ? 'font-bold text-ink' : 'text-soft',
+          )}
           style={{
             top: layout.base + 1,
-            // at the right edge the words stand before their line
-            ...(atEdge(placed) ? { right: layout.width - placed.x + 4 } : { left: placed.x }),
+            left: placed.target.from,
+            width: placed.target.to - placed.target.from,
           }}
           onKeyDown={movable ? onKeyDown(placed) : undefined}
           onKeyUp={() => finish(placed)}
@@ -112,16 +136,39 @@ export function StripMoments({
             if (!movable || event.button !== 0) return;
             event.stopPropagation();
             event.currentTarget.setPointerCapture(event.pointerId);
+            grip.current = placeOf(event) - placed.x;
           }}
           onPointerMove={(event) => {
             if (!event.currentTarget.hasPointerCapture(event.pointerId)) return;
-            const bounds = event.currentTarget.parentElement?.getBoundingClientRect();
-            if (bounds) draftTo(placed, layout.frameAtX(event.clientX - bounds.left));
+            draftTo(placed, layout.frameAtX(placeOf(event) - grip.current));
           }}
           onPointerUp={() => finish(placed)}
           onPointerCancel={() => setDraft(null)}
         >
-          {labelled.has(placed.moment) && placed.text}
+          <span
+            aria-hidden="true"
+            className="pointer-events-none absolute"
+            style={{ left: placed.x - placed.target.from }}
+          >
+            {/* without its word the line ends above the words of others */}
+            <span
+              className={cx(
+                'absolute border-l',
+                labelled.has(placed.moment) ? 'h-8' : 'h-2',
+                placed.byHand ? '!border-l-[3px] border-ink' : 'border-ink/60',
+              )}
+            />
+            {labelled.has(placed.moment) && (
+              <span
+                className={cx(
+                  'absolute top-2 whitespace-nowrap',
+                  placed.atEdge ? 'right-0 pr-1' : 'left-0 pl-1',
+                )}
+              >
+                {MOMENT_WORDS[placed.moment]}
+              </span>
+            )}
+          </span>
         </div>
       ))}
     </>
