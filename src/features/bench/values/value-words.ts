@@ -9,7 +9,10 @@ import { decimal, degrees, plusMinus, turn } from '#src/ui/figures.ts';
 const names = (ids: readonly LandmarkId[]): string => {
   const [first] = ids;
   if (first === undefined) return '';
-  const label = landmark(first).label.toLowerCase();
+  // the measure beside it names the foot
+  const label = landmark(first)
+    .label.toLowerCase()
+    .replace(/ of the support foot$/, '');
   return ids.length === 1 ? label : `${label} and ${ids.length - 1} more`;
 };
 
@@ -39,7 +42,7 @@ export const missingWords = (missing: Missing): string => {
     case 'only-between-lifts':
       return `from ${missing.from}° to ${missing.to}° of lift`;
     case 'not-in-side-clip':
-      return 'not marked in the side clip';
+      return 'side clip not marked';
     case 'marks-coincide':
       return 'marks lie on each other';
   }
