@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { framePoint } from '#shared/geometry/points.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import { ACHIEVED } from '#shared/measures/achieved.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import {
   distanceEffect,
   floorEffect,
@@ -36,10 +37,21 @@ describe('what the set-up makes measurable', () => {
 
   it('pointers', () => {
     const text = (belt: number | null, thigh: number | null) =>
-      pointersEffect({ beltPointerMm: belt, thighPointerMm: thigh }).text;
+      pointersEffect({ beltPointerMm: belt, thighPointerMm: thigh }, STANDARD_GATES).text;
     expect(text(null, 120)).toContain(`${ACHIEVED.bare.toldFromNone.one}°`);
     expect(text(140, null)).toContain(`${ACHIEVED.belt.toldFromNone.one}°`);
     expect(text(140, 120)).toContain(`${ACHIEVED['belt+thigh'].toldFromNone.one}°`);
+  });
+
+  it('pointers in a practice with other gates: between which the figures were worked out', () => {
+    const of = (belt: number | null, thigh: number | null, from = 55) =>
+      pointersEffect(
+        { beltPointerMm: belt, thighPointerMm: thigh },
+        { from: degrees(from), to: degrees(90) },
+      ).text;
+    for (const text of [of(null, null), of(140, null), of(140, 120)])
+      expect(text).toMatch(/°, worked out for 60° to 90°\.$/);
+    expect(of(140, 120, 60)).not.toContain('worked out');
   });
 
   it('plumb line', () => {

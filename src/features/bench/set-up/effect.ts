@@ -3,8 +3,10 @@ import { distance, plumbTilt } from '#shared/geometry/points.ts';
 import { ACHIEVED } from '#shared/measures/achieved.ts';
 import { FILMING_LIMITS as LIMITS } from '#shared/measures/filming-limits.ts';
 import type { OffFront } from '#shared/measures/off-front.ts';
+import type { Gates } from '#shared/protocol/protocol.ts';
 import { mmPerPxOf } from '#shared/records/scale.ts';
 import { decimal, degrees, metres, plusMinus } from '#src/ui/figures.ts';
+import { studiedBetween } from '#src/ui/gate-words.ts';
 
 /** What is known of the set-up and what it makes measurable, in words. */
 export interface Effect {
@@ -51,22 +53,27 @@ export const lensEffect = (lensHeightMm: number | null): Effect =>
     ? { text: 'Lift is known to ± 7° only; with the lens height to ± 2°.', kind: 'wait' }
     : { text: 'Lift is known to ± 2°.', kind: 'done' };
 
-export const pointersEffect = ({
-  beltPointerMm: belt,
-  thighPointerMm: thigh,
-}: Pick<ClipGeometry, 'beltPointerMm' | 'thighPointerMm'>): Effect => {
+/** @param gates the practice's; the figures say between which they were worked out where that is not there */
+export const pointersEffect = (
+  {
+    beltPointerMm: belt,
+    thighPointerMm: thigh,
+  }: Pick<ClipGeometry, 'beltPointerMm' | 'thighPointerMm'>,
+  gates: Gates,
+): Effect => {
+  const studied = studiedBetween(gates);
   if (belt === null)
     return {
-      text: `Bare landmarks: one rep tells a change of turn from none only beyond ${ACHIEVED.bare.toldFromNone.one}°.`,
+      text: `Bare landmarks: one rep tells a change of turn from none only beyond ${ACHIEVED.bare.toldFromNone.one}°${studied}.`,
       kind: 'wait',
     };
   return thigh === null
     ? {
-        text: `Belt pointer: one rep tells a change of turn from none beyond ${ACHIEVED.belt.toldFromNone.one}°, three beyond ${ACHIEVED.belt.toldFromNone.three}°.`,
+        text: `Belt pointer: one rep tells a change of turn from none beyond ${ACHIEVED.belt.toldFromNone.one}°, three beyond ${ACHIEVED.belt.toldFromNone.three}°${studied}.`,
         kind: 'wait',
       }
     : {
-        text: `Both pointers: one rep tells a change of turn from none beyond ${ACHIEVED['belt+thigh'].toldFromNone.one}°, three beyond ${ACHIEVED['belt+thigh'].toldFromNone.three}°.`,
+        text: `Both pointers: one rep tells a change of turn from none beyond ${ACHIEVED['belt+thigh'].toldFromNone.one}°, three beyond ${ACHIEVED['belt+thigh'].toldFromNone.three}°${studied}.`,
         kind: 'done',
       };
 };

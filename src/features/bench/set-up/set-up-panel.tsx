@@ -1,4 +1,5 @@
 import type { ClipGeometry } from '#shared/contracts/clips.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
 import { offFrontOfClip } from '#shared/records/engine-input.ts';
 import { useStatus } from '#src/ui/status.tsx';
 import { useEdits } from '../actions/use-edits.ts';
@@ -12,7 +13,7 @@ import { ShutterSection } from './shutter-section.tsx';
 
 /** How the clip was filmed, and what each part of it makes measurable. */
 export function SetUpPanel() {
-  const { clip, may } = useBenchDocument();
+  const { clip, may, protocol } = useBenchDocument();
   const edits = useEdits();
   const say = useStatus();
   const { geometry } = clip;
@@ -74,7 +75,7 @@ export function SetUpPanel() {
             onSave={(thighPointerMm) => save({ thighPointerMm })}
           />
         </div>
-        <EffectLine effect={pointersEffect(geometry)} />
+        <EffectLine effect={pointersEffect(geometry, gatesOf(protocol.rules))} />
       </section>
       <LineSection
         of="plumb"

@@ -1,9 +1,11 @@
 import { useState } from 'react';
 import type { Visit } from '#shared/contracts/visits.ts';
+import { gatesOf } from '#shared/protocol/protocol.ts';
 import { type May, useMayInPractice } from '#src/api/use-may.ts';
 import { useProtocol } from '#src/api/use-protocol.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Fold } from '#src/ui/fold.tsx';
+import { studiedBetween } from '#src/ui/gate-words.ts';
 import { Section } from '#src/ui/page.tsx';
 import { FilmingGuide } from '../guide/filming-guide.tsx';
 import { FilmingForm } from './filming-form.tsx';
@@ -40,14 +42,18 @@ export function FilmStep({
       ) : (
         <>
           <dl className="mt-5 grid grid-cols-2 gap-x-8 gap-y-3 phone:grid-cols-3 desk:grid-cols-5">
-            {FILMING.map(({ key, label, unit, without }) => {
+            {FILMING.map(({ key, label, unit, without, studied }) => {
               const value = filming[key];
               return (
                 <div key={key}>
                   <dt className="text-note leading-5 text-soft">{label}</dt>
                   {value === null ? (
                     <dd className="text-note leading-5">
-                      not known<span className="text-soft">: {without}</span>
+                      not known
+                      <span className="text-soft">
+                        : {without}
+                        {studied && protocol && studiedBetween(gatesOf(protocol))}
+                      </span>
                     </dd>
                   ) : (
                     <dd className="text-filled font-light tracking-[-0.01em]">

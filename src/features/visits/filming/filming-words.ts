@@ -11,6 +11,8 @@ type Figure = {
   hint: string;
   /** What is lost while it is not known. */
   without: string;
+  /** Its figures were worked out between gates, which a practice may have changed. */
+  studied?: true;
 };
 
 /** The figures of a way of filming, in the order they are taken. */
@@ -49,6 +51,7 @@ export const FILMING: readonly Figure[] = [
     unit: 'mm',
     hint: 'From the skin to its tip.',
     without: `three reps tell a change of turn from none beyond ${ACHIEVED.belt.toldFromNone.three}° instead of ${ACHIEVED['belt+thigh'].toldFromNone.three}°`,
+    studied: true,
   },
 ];
 
