@@ -9,6 +9,7 @@ import { marksWith } from '#shared/records/stored-marks.ts';
 import { OverlayCanvas } from '#src/canvas/overlay-canvas.tsx';
 import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { Button } from '#src/ui/button.tsx';
+import { cx } from '#src/ui/class-names.ts';
 import { degrees, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import type { Measured } from '../measured.ts';
@@ -21,12 +22,15 @@ export function FilmPane({
   document,
   film,
   shown,
+  beside,
 }: {
   name: string;
   measured: Measured;
   document: BenchDocument;
   film: Film;
   shown: LiftFrame;
+  /** Both stand beside each other on a phone too. */
+  beside: boolean;
 }) {
   const { rep } = measured;
   const { attach, ready, error, retry } = film;
@@ -54,11 +58,15 @@ export function FilmPane({
   const shape = size.width / size.height;
   const turned = turnAt(rep.result.curve, shown.lift);
   return (
-    <figure className="rounded bg-dusk p-3 text-dusk-ink">
-      <figcaption className="pb-2">{name}</figcaption>
+    // names, pictures and figures of the two stand in three rows, however long the names are
+    <figure className="row-span-3 grid min-w-0 grid-rows-subgrid rounded bg-dusk p-2 text-note text-dusk-ink tablet:p-3 tablet:text-body">
+      <figcaption>{name}</figcaption>
       <div
         // on a phone both films and the slider fit one screen
-        className="relative mx-auto max-w-[calc(30dvh*var(--shape))] overflow-hidden bg-[#000] tablet:max-w-[calc(58dvh*var(--shape))]"
+        className={cx(
+          'relative mx-auto w-full self-start overflow-hidden bg-[#000] tablet:max-w-[calc(58dvh*var(--shape))]',
+          beside ? 'max-w-[calc(45dvh*var(--shape))]' : 'max-w-[calc(30dvh*var(--shape))]',
+        )}
         style={{ aspectRatio: shape, '--shape': shape } as CSSProperties}
       >
         <canvas
@@ -81,20 +89,27 @@ export function FilmPane({
           )
         )}
       </div>
-      <p className="mt-2 flex flex-wrap justify-between gap-x-4 tabular-nums">
-        <span>
+      {/* the same lines at every moment, so that nothing moves under the thumb on the slider */}
+      <div className="grid content-start justify-items-start gap-x-4 tabular-nums tablet:grid-cols-[1fr_auto]">
+        <p className="min-h-[2lh] tablet:min-h-0">
           Lift {degrees(shown.lift)}
-          {turned !== null && `, turn ${turn(turned)}`}
-          {!here && <span className="text-dusk-soft">, between two marked frames</span>}
-        </span>
+          {turned !== null && (
+            <>
+              , <span className="inline-block">turn {turn(turned)}</span>
+            </>
+          )}
+        </p>
+        <p className="text-caption text-dusk-soft tablet:col-start-1 tablet:text-body">
+          {here ? 'on a marked frame' : 'between two marks'}
+        </p>
         <Link
           to={paths.bench(clip.id, { frame: shown.frame })}
-          className="text-dusk-ink"
+          className="tap text-dusk-ink tablet:col-start-2 tablet:row-start-1"
           aria-label={`Open frame ${shown.frame} on the Bench: ${name}`}
         >
           Frame {shown.frame} on the Bench
         </Link>
-      </p>
+      </div>
     </figure>
   );
 }

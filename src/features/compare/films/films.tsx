@@ -3,6 +3,7 @@ import type { BenchDocument } from '#shared/contracts/bench.ts';
 import { liftWay, matchLifts } from '#shared/course/match-lifts.ts';
 import { timesOf } from '#shared/records/engine-input.ts';
 import { Button } from '#src/ui/button.tsx';
+import { cx } from '#src/ui/class-names.ts';
 import { degrees } from '#src/ui/figures.ts';
 import { Empty } from '#src/ui/states.tsx';
 import { type Measured, nameOf } from '../measured.ts';
@@ -13,6 +14,10 @@ import { useFilm } from './use-film.ts';
 import { useMoments } from './use-moments.ts';
 
 const timesOfClip = ({ clip }: BenchDocument) => (clip.frames ? timesOf(clip.frames) : []);
+
+/** Two such clips have room beside each other on a phone; wide ones would become too small to see anything. */
+const isUpright = ({ clip: { width, height } }: BenchDocument): boolean =>
+  width !== null && height !== null && width < height;
 
 /** Two panes, one slider: every place of it is a moment at which both lifts are the same. */
 export function Films({
@@ -40,6 +45,7 @@ export function Films({
         One rep’s lift ends before the other’s begins, so no moment of them is the same.
       </Empty>
     );
+  const beside = documents.every(isUpright);
   const highest = moments.reduce((most, { first }) => Math.max(most, first.lift), 0);
   return (
     <div
@@ -50,7 +56,12 @@ export function Films({
         toggle();
       }}
     >
-      <div className="grid gap-4 tablet:grid-cols-2">
+      <div
+        className={cx(
+          'grid gap-x-2 gap-y-2 tablet:grid-cols-2 tablet:gap-x-4',
+          beside && 'grid-cols-2',
+        )}
+      >
         {([0, 1] as const).map((n) => (
           <FilmPane
             key={n}
@@ -59,6 +70,7 @@ export function Films({
             document={documents[n]}
             film={films[n]}
             shown={n === 0 ? now.first : now.second}
+            beside={beside}
           />
         ))}
       </div>

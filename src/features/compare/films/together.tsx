@@ -26,7 +26,7 @@ export function Together({ pair }: { pair: readonly [Measured, Measured] }) {
         <ErrorState error={failed.error} onRetry={() => void failed.refetch()} />
       ) : !first.data || !second.data ? (
         <Loading label="Loading both clips">
-          <div className="grid gap-4 tablet:grid-cols-2">
+          <div className="grid grid-cols-2 gap-2 tablet:gap-4">
             <Skeleton className="h-80 w-full" />
             <Skeleton className="h-80 w-full" />
           </div>
