@@ -1,4 +1,4 @@
-import type { HTMLInputAutoCompleteAttribute } from 'react';
+import type { CSSProperties, HTMLInputAutoCompleteAttribute } from 'react';
 import { useFormContext, type FieldPath, type FieldValues } from 'react-hook-form';
 import { FIELD_BOX, FieldFrame, useFieldIds, type FieldWords } from './field-frame.tsx';
 import { useLabel } from './labels.tsx';
@@ -65,7 +65,12 @@ export function TextArea<F extends FieldValues = FieldValues>({
   const { ids, error, control } = useBound(field);
   return (
     <FieldFrame ids={ids} error={error} {...field}>
-      <textarea {...control} rows={rows} className={FIELD_BOX} />
+      <textarea
+        {...control}
+        rows={rows}
+        style={{ '--rows': rows } as CSSProperties}
+        className={FIELD_BOX}
+      />
     </FieldFrame>
   );
 }
