@@ -4,6 +4,7 @@ import {
   decimal,
   degrees,
   fileSize,
+  howOften,
   inWords,
   metres,
   plusMinus,
@@ -16,6 +17,9 @@ describe('figures', () => {
     expect(decimal(-1.25)).toBe('−1.3');
     expect(decimal(-0.04)).toBe('0.0');
     expect(degrees(62)).toBe('62.0°');
+  });
+  it('counts how often in words', () => {
+    expect([1, 2, 3].map(howOften)).toEqual(['once', 'twice', 'three times']);
   });
   it('gives turn its sign, external positive', () => {
     expect([turn(6.84), turn(-9), turn(0.04), turn(-0.04)]).toEqual([

@@ -1,7 +1,12 @@
 import { decimal } from '#shared/exports/figures.ts';
+import { capital, inWords } from '#shared/exports/running-text.ts';
 
 export { decimal, degrees, plusMinus, turn } from '#shared/exports/figures.ts';
-export { capital, inWords } from '#shared/exports/running-text.ts';
+export { capital, inWords };
+
+/** `once`, `twice`, `three times`, `14 times` */
+export const howOften = (count: number): string =>
+  count === 1 ? 'once' : count === 2 ? 'twice' : `${inWords(count)} times`;
 
 /** A file's size: `211 MB`, `1.8 GB`. */
 export function fileSize(bytes: number): string {

@@ -3,7 +3,7 @@ import type { KeptFilm } from '#shared/contracts/kept-film.ts';
 import type { Replay } from '#shared/contracts/replays.ts';
 import { Button } from './button.tsx';
 import { moment } from './days.ts';
-import { fileSize, inWords } from './figures.ts';
+import { fileSize, howOften } from './figures.ts';
 import { ErrorState } from './states.tsx';
 import { StateDot, type StateKind } from './state-dot.tsx';
 
@@ -16,8 +16,7 @@ const KINDS: Record<KeptFilm['state'], StateKind> = {
 
 const takenWords = ({ taken, lastTakenAt }: KeptFilm): string => {
   if (taken === 0 || lastTakenAt === null) return 'not taken yet';
-  const times = taken === 1 ? 'once' : taken === 2 ? 'twice' : `${inWords(taken)} times`;
-  return `taken ${times}, last ${moment(lastTakenAt)}`;
+  return `taken ${howOften(taken)}, last ${moment(lastTakenAt)}`;
 };
 
 const filmWords = (film: KeptFilm): string => {

@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import type { Replay } from '#shared/contracts/replays.ts';
 import { ConfirmButton } from './confirm.tsx';
 import { moment } from './days.ts';
-import { inWords } from './figures.ts';
+import { howOften } from './figures.ts';
 import { type FilmActs, LinkFilm } from './link-film.tsx';
 import { LinkHead } from './link-head.tsx';
 import { StateDot, type StateKind } from './state-dot.tsx';
@@ -15,8 +15,7 @@ const STATES: Record<Replay['state'], readonly [kind: StateKind, words: string]>
 
 const openings = ({ openings: count, lastOpenedAt }: Replay): string => {
   if (count === 0 || lastOpenedAt === null) return 'not opened yet';
-  const times = count === 1 ? 'once' : count === 2 ? 'twice' : `${inWords(count)} times`;
-  return `opened ${times}, last ${moment(lastOpenedAt)}`;
+  return `opened ${howOften(count)}, last ${moment(lastOpenedAt)}`;
 };
 
 /** Replay links: whether each still opens, whether it was opened, and the way to end it. */

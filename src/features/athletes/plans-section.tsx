@@ -6,6 +6,7 @@ import { athletePlansOptions } from '#src/api/plans.queries.ts';
 import { isProblem } from '#src/api/problem.ts';
 import { useMay } from '#src/api/use-may.ts';
 import { distance, shortDay } from '#src/ui/days.ts';
+import { howOften } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { StateDot, type StateKind } from '#src/ui/state-dot.tsx';
@@ -80,7 +81,7 @@ function OnePlan({
       <p className="text-note text-soft">
         {retest ? 'a retest alone' : `${exercises} exercise${exercises === 1 ? '' : 's'}`}
         {retestOn !== null && `, retest ${distance(retestOn)}`}
-        {ticksThisWeek > 0 && `, ticked off ${ticksThisWeek} times this week`}
+        {ticksThisWeek > 0 && `, ticked off ${howOften(ticksThisWeek)} this week`}
         {retestOn !== null && mayFilm && (
           <>
             .{' '}
