@@ -3,6 +3,7 @@ import { useMe } from '#src/api/me.ts';
 import { peopleQuery } from '#src/api/people.queries.ts';
 import { useMayInPractice } from '#src/api/use-may.ts';
 import { Page, Section } from '#src/ui/page.tsx';
+import { paths } from '#src/ui/paths.ts';
 import { ErrorState, Loading, SkeletonLines } from '#src/ui/states.tsx';
 import { Invitations } from './invitations.tsx';
 import { InviteForm } from './invite-form.tsx';
@@ -14,6 +15,7 @@ export function PeoplePage() {
   const mayManage = useMayInPractice()('people.manage');
   return (
     <Page
+      crumbs={[{ label: 'Practice', to: paths.practice() }, { label: 'people' }]}
       title="People"
       lead={
         mayManage
