@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { courseScale, turnRange } from './course-scale.ts';
-import { runsOf, wedgePath } from './course-shapes.ts';
+import { runsOf, turnsToHold, wedgePath } from './course-shapes.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 
@@ -62,5 +62,18 @@ describe('wedgePath', () => {
     const path = wedgePath(3, [-1, -12], scale);
     expect(path.startsWith(`M${scale.x(60)},${scale.y(3)}L`)).toBe(true);
     expect(path.endsWith(`${scale.x(90)},${scale.y(-9)}Z`)).toBe(true);
+  });
+});
+
+describe('turnsToHold', () => {
+  const wide = { ...point(30, -1), low: -45, high: 43 };
+  it('holds the line, and its band from gate to gate alone', () => {
+    const curve = [wide, point(60, 1), point(90, 8), { ...point(105, 10), low: -9, high: 29 }];
+    const held = [...turnsToHold(curve, STANDARD_GATES)];
+    expect(held).toEqual([-1, 1, 0, 2, 8, 7, 9, 10, -11]);
+    expect(turnRange(held)).toEqual([-15, 20]);
+  });
+  it('asks for no wedge where the course does not reach the lower gate', () => {
+    expect([...turnsToHold([wide], STANDARD_GATES)]).toEqual([-1]);
   });
 });

@@ -1,4 +1,6 @@
 import { area, line } from 'd3-shape';
+import type { Gates } from '#shared/protocol/protocol.ts';
+import { turnAt } from '#shared/reading/at-lift.ts';
 import type { CourseScale } from './course-scale.ts';
 
 /** One point of a drawn course; the reading's `CurvePoint` fits in. Degrees. */
@@ -62,3 +64,17 @@ export const wedgePath = (
   const end = x(gates.to);
   return `M${x(gates.from)},${y(atFrom)}L${end},${y(atFrom + from)}L${end},${y(atFrom + to)}Z`;
 };
+
+/**
+ * Turns that a plot of this course has to hold: the line wherever it goes, its band and the wedge from gate
+ * to gate. Elsewhere nothing is read from the band, and it may be so wide that it would flatten the course:
+ * there it runs out of the plot.
+ */
+export function* turnsToHold(curve: CourseCurve, { from, to }: Gates): Generator<number> {
+  for (const { lift, turn, low, high } of curve) {
+    yield turn;
+    if (lift >= from && lift <= to) yield* [low, high];
+  }
+  const atFrom = turnAt(curve, from);
+  if (atFrom !== null) yield atFrom + WEDGE.in[1];
+}

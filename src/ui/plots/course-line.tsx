@@ -1,5 +1,6 @@
 import type { CourseScale } from '#shared/plots/course-scale.ts';
 import { bandPath, type CourseCurve, linePath, runsOf } from '#shared/plots/course-shapes.ts';
+import { PlotWindow } from './plot-window.tsx';
 
 /** The fit with its 95 % band; dotted where no marked frame carries it. */
 export function CourseLine({
@@ -13,7 +14,11 @@ export function CourseLine({
 }) {
   return (
     <g>
-      {band && <path d={bandPath(curve, scale)} className="fill-shank/[.13]" />}
+      {band && (
+        <PlotWindow scale={scale}>
+          <path d={bandPath(curve, scale)} className="fill-shank/[.13]" />
+        </PlotWindow>
+      )}
       {runsOf(curve).map((run, n) => (
         <path
           key={n}

@@ -1,7 +1,7 @@
 import { turn as turnText } from '../figures.ts';
 import type { CourseScale } from '#shared/plots/course-scale.ts';
 
-/** The frame that is shown: cross lines, tags on both axes, a ring where its turn is known. */
+/** The frame that is shown: cross lines, tags on both axes, a ring where its turn is known and lies in the plot. */
 export function CourseCurrent({
   lift,
   liftWords,
@@ -15,30 +15,32 @@ export function CourseCurrent({
   scale: CourseScale;
 }) {
   const { x, y, left, bottom, top } = scale;
+  const [least = 0, most = 0] = y.domain();
+  const within = turn !== null && turn >= least && turn <= most;
+  const height = y(Math.min(Math.max(turn ?? most, least), most));
   return (
     <g>
-      <path
-        d={`M${x(lift)} ${turn === null ? top : y(turn)}V${bottom}`}
-        className="stroke-ink/45"
-      />
-      {turn !== null && (
+      <path d={`M${x(lift)} ${within ? height : top}V${bottom}`} className="stroke-ink/45" />
+      {within && (
         <>
-          <path d={`M${left} ${y(turn)}H${x(lift)}`} className="stroke-ink/45" />
+          <path d={`M${left} ${height}H${x(lift)}`} className="stroke-ink/45" />
           <circle
             cx={x(lift)}
-            cy={y(turn)}
+            cy={height}
             r="8.5"
             fill="none"
             strokeWidth="2"
             className="stroke-ink"
           />
-          <g transform={`translate(${left - 2} ${y(turn)})`}>
-            <rect x="-42" y="-12" width="42" height="24" rx="2" className="fill-ink" />
-            <text x="-21" y="5" textAnchor="middle" className="fill-mud font-bold">
-              {turnText(turn).replace('°', '')}
-            </text>
-          </g>
         </>
+      )}
+      {turn !== null && (
+        <g transform={`translate(${left - 2} ${height})`}>
+          <rect x="-42" y="-12" width="42" height="24" rx="2" className="fill-ink" />
+          <text x="-21" y="5" textAnchor="middle" className="fill-mud font-bold">
+            {turnText(turn).replace('°', '')}
+          </text>
+        </g>
       )}
       <g transform={`translate(${x(lift)} ${bottom + 17})`}>
         <rect x="-22" y="-13" width="44" height="26" rx="2" className="fill-ink" />

@@ -5,7 +5,7 @@ import { CourseAxes } from './course-axes.tsx';
 import { CourseLine, CourseRepLine } from './course-line.tsx';
 import { CoursePoints, type CoursePoint } from './course-points.tsx';
 import { courseScale, type CourseScale } from '#shared/plots/course-scale.ts';
-import type { CourseCurve } from '#shared/plots/course-shapes.ts';
+import { type CourseCurve, turnsToHold } from '#shared/plots/course-shapes.ts';
 import { CourseWedge } from './course-wedge.tsx';
 import { useWidth } from './use-width.ts';
 
@@ -50,22 +50,20 @@ export function CoursePlot({
       {width !== null && width > 0 && (
         <CourseDrawing
           {...{ label, curve, repCurves, points, empty, children }}
-          scale={courseScale(width, drawn, [...turnsOf(curve, points, gates), ...reach], gates)}
+          scale={courseScale(
+            width,
+            drawn,
+            [
+              ...[points, ...repCurves].flat().map(({ turn }) => turn),
+              ...turnsToHold(curve, gates),
+              ...reach,
+            ],
+            gates,
+          )}
         />
       )}
     </div>
   );
-}
-
-function* turnsOf(curve: CourseCurve, points: readonly CoursePoint[], { from }: Gates) {
-  for (const { turn } of points) yield turn;
-  for (const { low, high } of curve) {
-    yield low;
-    yield high;
-  }
-  // the lower end of the wedge
-  const atFrom = turnAt(curve, from);
-  if (atFrom !== null) yield atFrom - 12;
 }
 
 function CourseDrawing({

@@ -1,6 +1,13 @@
 import { turn } from '#shared/exports/figures.ts';
 import { courseScale, type CourseScale } from '#shared/plots/course-scale.ts';
-import { bandPath, linePath, runsOf, WEDGE, wedgePath } from '#shared/plots/course-shapes.ts';
+import {
+  bandPath,
+  linePath,
+  runsOf,
+  turnsToHold,
+  WEDGE,
+  wedgePath,
+} from '#shared/plots/course-shapes.ts';
 import { turnAt } from '#shared/reading/at-lift.ts';
 import { INK, type Pen, RULE, SOFT } from '#server/pdf/paper.ts';
 import type { ReportReading } from '../report-content.ts';
@@ -51,18 +58,11 @@ export const drawCourse = (
 ): void => {
   const { doc } = pen;
   const atFrom = turnAt(course, gates.from);
-  const turns = course.flatMap(({ low, high }) => [low, high]);
-  const scale = courseScale(
-    width,
-    height,
-    atFrom === null ? turns : [...turns, atFrom - 12],
-    gates,
-  );
+  const turns = [...repCourses.flat().map(({ turn }) => turn), ...turnsToHold(course, gates)];
+  const scale = courseScale(width, height, turns, gates);
   if (atFrom !== null) wedge(pen, atFrom, scale);
   axes(pen, scale);
-  doc
-    .rect(scale.left, scale.top - 8, scale.right - scale.left, scale.bottom - scale.top + 16)
-    .clip();
+  doc.rect(scale.left, scale.top, scale.right - scale.left, scale.bottom - scale.top).clip();
   doc.path(bandPath(course, scale)).fillOpacity(0.16).fill(SHANK).fillOpacity(1);
   for (const each of repCourses)
     doc.path(linePath(each, scale)).lineWidth(0.5).strokeOpacity(0.6).strokeColor(SHANK).stroke();

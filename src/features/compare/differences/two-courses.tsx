@@ -1,4 +1,5 @@
 import type { ComparedCourse } from '#shared/reading/compare-courses.ts';
+import { turnsToHold } from '#shared/plots/course-shapes.ts';
 import { turnAt } from '#shared/reading/at-lift.ts';
 import { turn } from '#src/ui/figures.ts';
 import { SecondCourse } from '#src/ui/plots/second-course.tsx';
@@ -27,7 +28,7 @@ export function TwoCourses({
         gates={first.gates}
         curve={first.curve}
         points={[]}
-        reach={second.curve.flatMap(({ low, high }) => [low, high])}
+        reach={[...turnsToHold(second.curve, second.gates)]}
       >
         {(scale) => <SecondCourse curve={second.curve} scale={scale} />}
       </CoursePlot>

@@ -7,12 +7,12 @@ import { degrees, inWords, plusMinus, turn } from '#src/ui/figures.ts';
 import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { SEEN_WORDS } from '#src/ui/words.ts';
+import { turnsToHold } from '#shared/plots/course-shapes.ts';
 import { gatesOf, sameGates } from '#shared/protocol/protocol.ts';
 import { ReadingCourse } from '../course/reading-course.tsx';
 
-const reachOf = ({ course, figures }: Reading['result']): number[] => [
-  ...course.flatMap(({ low, high }) => [low, high]),
-  ...(figures ? [-12] : []),
+const reachOf = ({ course, rules }: Reading['result']): number[] => [
+  ...turnsToHold(course, gatesOf(rules)),
 ];
 
 /** Both support sides of the visit, each with its own reading; never averaged. */
