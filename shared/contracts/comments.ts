@@ -5,24 +5,48 @@ import { json, none, route } from './route.ts';
 /** Corners that a stroke may have. */
 export const LONGEST_STROKE = 200;
 
-/** What a comment points at, in pixels of the upright source frame. */
+/** Drawn on the picture by hand, in pixels of the upright source frame. */
+const drawnShapes = [
+  z.object({ kind: z.literal('point'), u: coordinate, v: coordinate }),
+  z.object({
+    kind: z.literal('ring'),
+    u: coordinate,
+    v: coordinate,
+    radius: z.number().min(2).max(5000),
+  }),
+  /** Corner to corner. */
+  z.object({
+    kind: z.literal('stroke'),
+    points: z.array(framePoint).min(2).max(LONGEST_STROKE),
+  }),
+] as const;
+
+/**
+ * What a comment points at. An angle is never laid freely: it is a measure of the registry by its id, worked out
+ * with its ± from the marks of the comment's frame whenever it is shown.
+ */
 export const shape = z
   .discriminatedUnion('kind', [
-    z.object({ kind: z.literal('point'), u: coordinate, v: coordinate }),
-    z.object({
-      kind: z.literal('ring'),
-      u: coordinate,
-      v: coordinate,
-      radius: z.number().min(2).max(5000),
-    }),
-    /** Drawn by hand, corner to corner. */
-    z.object({
-      kind: z.literal('stroke'),
-      points: z.array(framePoint).min(2).max(LONGEST_STROKE),
-    }),
+    ...drawnShapes,
+    z.object({ kind: z.literal('measure'), measure: z.string().min(1).max(60) }),
   ])
   .meta({ id: 'Shape' });
 export type Shape = z.infer<typeof shape>;
+
+/** The same as the athlete's link shows it: a measure comes worked out. */
+export const shownShape = z
+  .discriminatedUnion('kind', [
+    ...drawnShapes,
+    z.object({
+      kind: z.literal('measured'),
+      u: coordinate,
+      v: coordinate,
+      label: z.string(),
+      text: z.string(),
+    }),
+  ])
+  .meta({ id: 'ShownShape' });
+export type ShownShape = z.infer<typeof shownShape>;
 
 export const commentBody = z
   .object({
@@ -39,6 +63,10 @@ export const commentBody = z
   .refine((value) => value.toFrame >= value.fromFrame, {
     path: ['toFrame'],
     message: 'A span ends where it starts, or later.',
+  })
+  .refine(({ shape, fromFrame, toFrame }) => shape?.kind !== 'measure' || fromFrame === toFrame, {
+    path: ['shape'],
+    message: 'A measure is taken on one frame.',
   })
   .meta({ id: 'CommentBody' });
 
@@ -83,7 +111,7 @@ export const commentRoutes = {
     method: 'post',
     path: '/api/clips/:id/comments',
     summary:
-      'Comment at a frame or a span, with a point, a ring or a stroke on the picture, or answer.',
+      'Comment at a frame or a span, with a point, a ring or a stroke on the picture or a measure of its frame, or answer.',
     audience: 'staff',
     params,
     body: commentBody,

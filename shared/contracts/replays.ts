@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { athletePlan } from './athlete-plan.ts';
 import { call } from './calls.ts';
-import { comment } from './comments.ts';
+import { comment, shownShape } from './comments.ts';
 import { frameTable } from './clips.ts';
 import { email, frameIndex, id, moment, personRef, side, text, view } from './primitives.ts';
 import { gates } from './protocol.ts';
@@ -105,8 +105,8 @@ export const publicReplay = z
     plan: athletePlan.nullable(),
     comments: z.array(
       comment
-        .pick({ body: true, fromFrame: true, toFrame: true, shape: true })
-        .extend({ by: z.string() }),
+        .pick({ body: true, fromFrame: true, toFrame: true })
+        .extend({ by: z.string(), shape: shownShape.nullable() }),
     ),
     /** To be taken home; null where there is none, or not yet. */
     film: filmToKeep.nullable(),

@@ -26,7 +26,10 @@ const ANNO: jsonld.ContextDefinition = {
   AnnotationCollection: `${AS}OrderedCollection`,
   AnnotationPage: `${AS}OrderedCollectionPage`,
   ...Object.fromEntries(
-    ['commenting', 'replying', 'describing', 'identifying'].map((each) => [each, `${OA}${each}`]),
+    ['commenting', 'replying', 'describing', 'identifying', 'tagging'].map((each) => [
+      each,
+      `${OA}${each}`,
+    ]),
   ),
   motivation: word(`${OA}motivatedBy`),
   purpose: word(`${OA}hasPurpose`),
@@ -113,6 +116,17 @@ describe('reps, marks and comments as web annotations', () => {
     const quads = await expanded([{ ...comment, shape: { kind: 'stroke', points } }]);
     expect(quads).toContain('"t=3,7&xywh=10,20,30,41"');
     expect(quads).toContain('points=\\"10.5,20 40,60.25\\"');
+  });
+
+  it('names the measure that a comment shows, at its moment, without a region', async () => {
+    const shape = { kind: 'measure', measure: 'lift' } as const;
+    const quads = await expanded([{ ...comment, shape }]);
+    expect(quads).toContain('"Lift of the thigh"');
+    expect(quads).toContain(`<${OA}tagging>`);
+    expect(quads).toContain('"t=3,7"');
+    expect(await expanded([{ ...comment, shape: { ...shape, measure: 'gone' } }])).not.toContain(
+      `<${OA}tagging>`,
+    );
   });
 
   it('leaves out when a comment was changed where it never was', async () => {

@@ -1,5 +1,6 @@
 import type { Shape } from '#shared/contracts/comments.ts';
 import { framePoint } from '#shared/geometry/points.ts';
+import { measureById } from '#shared/measures/registry.ts';
 import {
   boxFragment,
   type Corner,
@@ -95,6 +96,8 @@ const regionOf = (item: Annotated): Region | null => {
   if (item.kind === 'mark') return round(item.u, item.v, POINT_RADIUS);
   if (item.kind === 'rep' || !item.shape) return null;
   const { shape } = item;
+  // taken from the marks of its frame, which are listed by themselves
+  if (shape.kind === 'measure') return null;
   if (shape.kind === 'stroke')
     return { pixels: boxFragment(shape.points), drawn: polyline(shape.points) };
   return round(shape.u, shape.v, shape.kind === 'ring' ? shape.radius : POINT_RADIUS);
@@ -113,12 +116,14 @@ const about = (item: Annotated): Json => {
   if (item.kind === 'mark')
     return { motivation: 'identifying', body: textBody(item.label, 'identifying') };
   const motivation = item.answerTo === null ? 'commenting' : 'replying';
+  const text = textBody(item.text, motivation);
+  const measured = item.shape?.kind === 'measure' ? measureById(item.shape.measure) : null;
   return {
     motivation,
     creator: { id: item.by.id, type: 'Person', name: item.by.name },
     created: item.at,
     ...(item.editedAt === null ? {} : { modified: item.editedAt }),
-    body: textBody(item.text, motivation),
+    body: measured === null ? text : [text, textBody(measured.label, 'tagging')],
   };
 };
 

@@ -35,3 +35,13 @@ it('draws a stroke corner to corner', () => {
     state: 'placed',
   });
 });
+
+it('writes a measure in the middle of what it is taken from', () => {
+  const shape = { kind: 'measured', u: 3, v: 4, label: 'Heel rise', text: '+12 mm ± 6' } as const;
+  expect(noteShape(shape)).toMatchObject({
+    kind: 'label',
+    at: { u: 3, v: 4 },
+    text: 'Heel rise +12 mm ± 6',
+    towards: 'centre',
+  });
+});

@@ -1,7 +1,8 @@
 import type * as z from 'zod';
 import type { Action } from '#shared/access/actions.ts';
 import type { UserActor } from '#shared/access/actors.ts';
-import type { commentBody, commentEdit } from '#shared/contracts/comments.ts';
+import type { commentBody, commentEdit, Shape } from '#shared/contracts/comments.ts';
+import { measureById } from '#shared/measures/registry.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { tell } from '../../events/tell.ts';
 import { found, need } from '../../http/need.ts';
@@ -39,6 +40,14 @@ export const commentsOfClip = async (unit: Of, clipId: string): Promise<Comment[
   );
 };
 
+/** An angle is a measure that is listed, or it is not shown at all. */
+const needMeasure = (shape: Shape | null): void => {
+  if (shape?.kind === 'measure' && !measureById(shape.measure))
+    throw new Problem('invalid-input', undefined, [
+      { path: 'body.shape.measure', message: 'Choose one of the measures.' },
+    ]);
+};
+
 /** Comments at a frame or a span; an answer stands where the comment it answers stands. */
 export const addComment = async (
   unit: Of,
@@ -52,6 +61,7 @@ export const addComment = async (
     : null;
   const place = answered ?? body;
   needFrames(clip, place.fromFrame, place.toFrame);
+  needMeasure(body.shape);
   const comment = em.create(Comment, {
     clip,
     // an answer to an answer joins the same thread

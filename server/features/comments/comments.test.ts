@@ -95,6 +95,20 @@ describe('comments', () => {
         .expect(422);
   });
 
+  it('show an angle only as a listed measure of one frame', async () => {
+    const shape = { kind: 'measure', measure: 'pelvic-obliquity' };
+    await say(supervisor, { fromFrame: 100, toFrame: 100, shape });
+    const { body } = await coach.get(`/api/clips/${clip.id}/comments`).expect(200);
+    expect(body.items).toMatchObject([{ shape }]);
+    const at = { body: 'x', fromFrame: 100, toFrame: 100 };
+    for (const refused of [
+      { ...at, shape, toFrame: 130 },
+      { ...at, shape: { kind: 'measure', measure: 'knee-to-nose' } },
+      { ...at, shape: { kind: 'measured', u: 1, v: 2, label: 'Lift', text: '74°' } },
+    ])
+      await coach.post(`/api/clips/${clip.id}/comments`).send(refused).expect(422);
+  });
+
   it('lie inside the clip', async () => {
     const answer = await coach
       .post(`/api/clips/${clip.id}/comments`)

@@ -22,7 +22,7 @@ import type { Rep } from '../reps/rep.entity.ts';
 import { storedReps } from '../reps/stored-reps.ts';
 import { publicHeadState } from './hidden-copies.ts';
 import type { Replay } from './replay.entity.ts';
-import { spanOf } from './span.ts';
+import { type Span, spanOf } from './span.ts';
 
 interface Held {
   readonly em: EntityManager;
@@ -85,6 +85,7 @@ const sharedComments = async (
   { em }: Held,
   clip: Clip,
   { fromFrame, toFrame }: Replay,
+  measured: Span['measured'],
 ): Promise<PublicReplay['comments']> => {
   const comments = await em.find(
     Comment,
@@ -95,7 +96,10 @@ const sharedComments = async (
     body: comment.body,
     fromFrame: comment.fromFrame,
     toFrame: comment.toFrame,
-    shape: comment.shape ?? null,
+    shape:
+      comment.shape?.kind === 'measure'
+        ? measured(comment.shape.measure, comment.fromFrame)
+        : (comment.shape ?? null),
     by: comment.by.unwrap().name,
   }));
 };
@@ -123,11 +127,12 @@ export const contentOf = async (
   const athlete = visit.athlete.unwrap() as Athlete;
   const practice = await em.findOneOrFail(Practice, { id: replay.practiceId });
   const { reading, call, gates } = await saidOf(unit, replay);
+  const told = readingOf(reading, replay);
   // the clip's other reps too: it may take the quiet stance of one
   const reps = await storedReps(em, [clip], athlete);
   const stored = found(reps.find((each) => each.rep.id === rep.id));
   const span = { from: replay.fromFrame, to: replay.toFrame };
-  const shown = spanOf(stored, span, { figures: replay.showReading, gates });
+  const { measured, ...shown } = spanOf(stored, span, { figures: replay.showReading, gates });
   return {
     athleteGivenName: athlete.givenName,
     practice: { name: practice.name, contact: practice.contact },
@@ -143,11 +148,11 @@ export const contentOf = async (
     toFrame: replay.toFrame,
     gates,
     ...shown,
-    reading: readingOf(reading, replay),
+    reading: told,
     call: replay.showCall && call ? { seen: call.seen, confidence: call.confidence } : null,
     message: replay.message,
     plan: await athletePlanOf(em, visit.id, replay.side),
-    comments: await sharedComments(unit, clip, replay),
+    comments: await sharedComments(unit, clip, replay, told ? measured : () => null),
     expiresAt: replay.expiresAt.toISOString(),
   };
 };

@@ -127,6 +127,28 @@ describe('a replay link', () => {
     expect((await open(token).expect(200)).body.reading).toMatchObject({ code: 'early-turn-out' });
   });
 
+  it('tells a measure in a shared comment with its ±, and only beside a reading', async () => {
+    const { body: before } = await open(token).expect(200);
+    const at = before.overlay.find(
+      ({ lift }: { lift: number | null }) => lift !== null && lift > 60,
+    );
+    const words = { body: 'Look here.', fromFrame: at.frame, toFrame: at.frame, shared: true };
+    const said = await coach
+      .post(`/api/clips/${made.clipId}/comments`)
+      .send({ ...words, shape: { kind: 'measure', measure: 'turn' } })
+      .expect(201);
+    const { body } = await open(token).expect(200);
+    const [comment] = body.comments;
+    expect(comment.shape).toMatchObject({ kind: 'measured', label: 'Turn of the support hip' });
+    const [value, within] = comment.shape.text.replace('−', '-').split('±').map(parseFloat);
+    expect(value).toBeCloseTo(at.turn, 1);
+    expect(within).toBeCloseTo(at.turnPlusMinus, 1);
+    const bare = await make({ showReading: false });
+    const { body: called } = await open(bare.token).expect(200);
+    expect(called.comments).toMatchObject([{ body: 'Look here.', shape: null }]);
+    await coach.delete(`/api/comments/${said.body.id}`).expect(204);
+  });
+
   it('lets out nothing else of the practice', async () => {
     const { body } = await open(token).expect(200);
     const said = JSON.stringify(body);

@@ -3,6 +3,8 @@ import { courseOfRep, isCourse, type RepCourse } from '#shared/course/course-of-
 import type { CourseFrame } from '#shared/course/types.ts';
 import type { Degrees } from '#shared/geometry/units.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
+import { measuredNote } from '#shared/overlay/measured-note.ts';
+import type { MeasuredShape } from '#shared/overlay/notes.ts';
 import { shownSet } from '#shared/records/shared-quiet.ts';
 import { frameAt } from '#shared/timing/timestamps.ts';
 import type { Milliseconds } from '#shared/timing/units.ts';
@@ -40,6 +42,8 @@ const momentsOf = (
 
 /** What the marks of the played span show, with the same code as the Bench. */
 export interface Span {
+  /** A measure of the registry on one frame, as far as it may be told. */
+  readonly measured: (id: string, frame: number) => MeasuredShape | null;
   readonly moments: PublicReplay['moments'];
   readonly overlay: PublicReplay['overlay'];
   readonly course: PublicReplay['course'];
@@ -75,7 +79,13 @@ export const spanOf = (
     turn: angle(values.get(frame)?.turn),
     turnPlusMinus: angle(values.get(frame)?.turnHalfWidth),
   }));
+  const measured: Span['measured'] = (id, frame) => {
+    const on = figures ? input?.frames.find((each) => Number(each.frame) === frame) : undefined;
+    const note = on && known && measuredNote(id, on, known.setting, ASSUMED_MARK_ERROR);
+    return note && !note.provisional ? note.shape : null;
+  };
   return {
+    measured,
     moments: known ? momentsOf(known, times, gates) : NO_MOMENTS,
     overlay,
     course:

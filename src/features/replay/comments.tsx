@@ -21,6 +21,11 @@ export function Comments({
         {comments.map((comment, n) => (
           <li key={n} className="border-b border-rule py-3 last:border-0">
             <p className="whitespace-pre-line">“{comment.body}”</p>
+            {comment.shape?.kind === 'measured' && (
+              <p>
+                {comment.shape.label}: <b>{comment.shape.text}</b>
+              </p>
+            )}
             <p className="flex flex-wrap items-center gap-x-4 text-note text-soft">
               {comment.by}
               <Button

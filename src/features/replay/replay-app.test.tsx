@@ -146,6 +146,16 @@ describe('a replay', () => {
     expect(screen.getByRole('button', { name: 'Show me' })).toHaveAttribute('aria-pressed', 'true');
   });
 
+  it('reads out the measure of a comment', async () => {
+    const measured = { kind: 'measured', u: 500, v: 900, label: 'Pelvic obliquity' } as const;
+    const at = { fromFrame: 50, toFrame: 50, by: 'Tomas Ferreira' };
+    const shape = { ...measured, text: '+6.1° ± 4.0' };
+    open({ comments: [{ body: 'Your pelvis hikes.', ...at, shape }] });
+    render(<ReplayApp token={replayToken} />);
+    expect(await screen.findByText('+6.1° ± 4.0')).toBeVisible();
+    expect(screen.getByText(/^Pelvic obliquity:/)).toBeVisible();
+  });
+
   it('of a call alone says who saw it, and no angle', async () => {
     open({ reading: null });
     render(<ReplayApp token={replayToken} />);

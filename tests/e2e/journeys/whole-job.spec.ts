@@ -40,7 +40,9 @@ test.describe.configure({ mode: 'serial' });
 const made = loadedRun();
 
 const MOMENT = framesOf(0)[26] ?? NaN;
+const HIGH = framesOf(0)[30] ?? NaN;
 const COMMENT = 'Here the belt pointer swings out while the thigh comes to level.';
+const MEASURED = 'So far out already, and the thigh is hardly level.';
 const REASON = 'Look at the belt tip of rep 1 once more.';
 const MESSAGE = 'Watch the stick on your belt while your knee goes up.';
 
@@ -152,16 +154,38 @@ test('the supervisor comments at a moment, with a ring', async ({ app, page }) =
   await expect(page.getByText(/with a ring, shown to the athlete$/)).toBeVisible();
 });
 
+test('the supervisor comments with an angle, which is a measure of that frame with its ±', async ({
+  app,
+  page,
+}) => {
+  await signIn(page, app, SUPERVISOR);
+  await openBench(page, made.clipId, `?frame=${HIGH}`);
+  await page.getByRole('button', { name: 'Comments' }).click();
+  await page.getByLabel(`Comment at frame ${HIGH}`).fill(MEASURED);
+  const measure = page.getByLabel('With a measure of this frame');
+  const offered = await measure.getByRole('option').allTextContents();
+  const turned = offered.find((each) => each.startsWith('Turn of the support hip: ')) ?? '';
+  expect(turned).toMatch(/: [+−]?\d+\.\d° ±\s\d+\.\d$/);
+  // what is not marked cannot be chosen
+  expect(offered.join()).not.toContain('Turn-out of the support foot');
+  await measure.selectOption({ label: turned });
+  await page.getByLabel('Show it to the athlete on a replay').check();
+  await page.getByRole('button', { name: 'Comment', exact: true }).click();
+  await expect(page.getByText(MEASURED, { exact: true })).toBeVisible();
+  await expect(page.getByRole('listitem').getByText(turned)).toBeVisible();
+});
+
 test('the coach finds the comment on the strip, answers and resolves it', async ({ app, page }) => {
   await signIn(page, app, COACH);
   await openBench(page, made.clipId);
   await page.getByRole('button', { name: `at frame ${MOMENT}: ${COMMENT}` }).click();
   await expect(frameSlider(page)).toHaveAttribute('aria-valuenow', String(MOMENT));
-  await page.getByRole('button', { name: 'Answer' }).click();
+  const thread = page.getByRole('listitem').filter({ hasText: COMMENT });
+  await thread.getByRole('button', { name: 'Answer' }).click();
   await page.getByLabel('Answer').fill('Seen. The rest of the rep shows the same.');
   await page.getByRole('button', { name: 'Send' }).click();
   await expect(page.getByText('Seen. The rest of the rep shows the same.')).toBeVisible();
-  await page.getByRole('button', { name: 'Resolve' }).click();
+  await thread.getByRole('button', { name: 'Resolve' }).click();
   await expect(page.getByRole('button', { name: 'Open again' })).toBeVisible();
 });
 
@@ -242,6 +266,8 @@ test('the athlete opens the link of the letter on a phone, without an account', 
   await expect(page.getByText('seen by your coach, not measured')).toBeVisible();
   await expect(page.getByText(`“${MESSAGE}”`)).toBeVisible();
   await expect(page.getByText(`“${COMMENT}”`)).toBeVisible();
+  await expect(page.getByText(`“${MEASURED}”`)).toBeVisible();
+  await expect(page.getByText(/^Turn of the support hip: [+−]?\d+\.\d° ±\s\d+\.\d$/)).toBeVisible();
   await expect(page.getByText('Stop if it hurts.')).toBeVisible();
 
   await expectPlaying(page.getByLabel('Your lift, standing on the right leg'));

@@ -1,7 +1,7 @@
 import type { FrameMarks } from '#shared/landmarks/commands.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
 import { hipCentre } from '#shared/measures/hip-centre.ts';
-import { noteLine, noteShape } from '#shared/overlay/notes.ts';
+import { noteLine, type NoteShape, noteShape } from '#shared/overlay/notes.ts';
 import { overlay } from '#shared/overlay/overlay.ts';
 import type { HipCentres } from '#shared/overlay/segments.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
@@ -9,7 +9,6 @@ import type { FrameValues } from '#shared/overlay/value-labels.ts';
 import { engineMarks } from '#shared/records/engine-input.ts';
 import type { BenchModel } from '../model/bench-model.ts';
 import { draftShape, type Tool } from '../store/tools.ts';
-import type { Shape } from '#shared/contracts/comments.ts';
 import type { ClipGeometry } from '#shared/contracts/clips.ts';
 
 /** Hip centres of a frame, by the ASIS distance of the rep's quiet stance. */
@@ -32,7 +31,7 @@ export interface Drawn {
   readonly values: FrameValues | null;
   readonly conflicts: ReadonlySet<LandmarkId>;
   /** What the comments at this frame point at. */
-  readonly shapes: readonly Shape[];
+  readonly shapes: readonly NoteShape[];
   readonly tool: Tool;
   readonly geometry: ClipGeometry;
   /** Rod, plumb line and floor line are drawn while the set-up is open. */

@@ -1,12 +1,14 @@
 import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { useMemo, useSyncExternalStore } from 'react';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
+import type { NoteShape } from '#shared/overlay/notes.ts';
 import type { Primitive } from '#shared/overlay/types.ts';
 import type { Moved } from '#src/canvas/konva-layer.tsx';
 import { engineMarks } from '#shared/records/engine-input.ts';
 import { useBench, useBenchDocument, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { marksOn } from '../model/bench-model.ts';
 import { figuresOf } from '../values/frame-figures.ts';
+import { noteOn } from '../values/measured-on.ts';
 import { withMoved } from '../values/use-frame-figures.ts';
 import { lastOnly } from './last-only.ts';
 import { drawnOn } from './overlay-of.ts';
@@ -49,17 +51,25 @@ export function useDraw(): (moved: Moved) => readonly Primitive[] {
     return lastOnly((moved: Moved): readonly Primitive[] => {
       const marks = withMoved(marksOn(current, frame), moved, longEdge);
       const time = times[frame];
-      const values =
+      const known =
         current && figures && time !== undefined && Object.keys(marks).length > 0
-          ? figuresOf(current, { frame, time, marks: engineMarks(marks, longEdge) }).shown
+          ? { current, input: { frame, time, marks: engineMarks(marks, longEdge) } }
           : null;
+      const values = known && figuresOf(known.current, known.input).shown;
+      const pointedAt = shapes.flatMap((shape): NoteShape[] => {
+        if (shape.kind !== 'measure') return [shape];
+        // lift and turn stand on the picture as it is
+        if (!known || shape.measure === 'lift' || shape.measure === 'turn') return [];
+        const note = noteOn(known.current, known.input, shape.measure);
+        return note ? [note.shape] : [];
+      });
       return drawnOn({
         model,
         marks,
         sourceLongEdge: longEdge,
         values,
         conflicts,
-        shapes,
+        shapes: pointedAt,
         tool,
         geometry: document.clip.geometry,
         setUp,

@@ -1,14 +1,14 @@
 import { useId, useState } from 'react';
-import type { Shape } from '#shared/contracts/comments.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Checkbox } from '#src/ui/checkbox.tsx';
 import { FIELD_BOX } from '#src/ui/form/field-frame.tsx';
 import { ErrorState } from '#src/ui/states.tsx';
 import { useBench, useBenchTools } from '../bench-context.ts';
-import { MARK, shapeOf, toolAsks } from '../store/tools.ts';
+import { type DrawnKind, MARK, shapeOf, toolAsks } from '../store/tools.ts';
 import { useComments } from './use-comments.ts';
+import { useMeasuresHere } from './use-measured.ts';
 
-const SHAPES: readonly { of: Shape['kind']; label: string }[] = [
+const SHAPES: readonly { of: DrawnKind; label: string }[] = [
   { of: 'point', label: 'Point' },
   { of: 'ring', label: 'Ring' },
   { of: 'stroke', label: 'Stroke' },
@@ -23,25 +23,38 @@ export function CommentForm() {
   const [body, setBody] = useState('');
   const [from, setFrom] = useState<number | null>(null);
   const [shared, setShared] = useState(false);
+  const [measure, setMeasure] = useState('');
+  const measures = useMeasuresHere();
   const [busy, setBusy] = useState(false);
   const [error, setError] = useState<unknown>(null);
   const id = useId();
+  const measureId = useId();
   const drawing = tool.kind === 'shape' ? tool : null;
   const asks = drawing && toolAsks(drawing);
   const [fromFrame, toFrame] =
     from === null ? [frame, frame] : from <= frame ? [from, frame] : [frame, from];
 
-  const draw = (of: Shape['kind']) =>
+  // one thing is pointed at; a measure is taken on one frame
+  const measured = fromFrame === toFrame && measures.some(({ id }) => id === measure);
+  const draw = (of: DrawnKind) => {
+    setMeasure('');
     store.setState({
       tool: drawing?.of === of ? MARK : { kind: 'shape', of, points: [] },
     });
+  };
+  const choose = (id: string) => {
+    setMeasure(id);
+    if (drawing) store.setState({ tool: MARK });
+  };
   const send = async () => {
     if (body.trim() === '') return;
     setBusy(true);
     setError(null);
     try {
-      await add({ body, fromFrame, toFrame, shape: shapeOf(tool), shared });
+      const shape = measured ? ({ kind: 'measure', measure } as const) : shapeOf(tool);
+      await add({ body, fromFrame, toFrame, shape, shared });
       setBody('');
+      setMeasure('');
       setFrom(null);
       setShared(false);
       if (drawing) store.setState({ tool: MARK });
@@ -97,6 +110,26 @@ export function CommentForm() {
               ? `${asks} on the picture.`
               : `Press on the picture: ${asks.toLowerCase()}.`}
         </p>
+      )}
+      {measures.length > 0 && fromFrame === toFrame && (
+        <div className="mt-3">
+          <label htmlFor={measureId} className="text-note">
+            With a measure of this frame
+          </label>
+          <select
+            id={measureId}
+            className={FIELD_BOX}
+            value={measured ? measure : ''}
+            onChange={(event) => choose(event.target.value)}
+          >
+            <option value="">none</option>
+            {measures.map(({ id: of, label }) => (
+              <option key={of} value={of}>
+                {label}
+              </option>
+            ))}
+          </select>
+        </div>
       )}
       <Checkbox
         label="Show it to the athlete on a replay"

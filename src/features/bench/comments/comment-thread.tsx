@@ -8,6 +8,7 @@ import { useStatus } from '#src/ui/status.tsx';
 import { useBench, useBenchDocument, useBenchTools } from '../bench-context.ts';
 import { goTo } from '../store/bench-store.ts';
 import { useComments } from './use-comments.ts';
+import { useMeasuredWords } from './use-measured.ts';
 import { WordsForm } from './words-form.tsx';
 
 const where = ({ fromFrame, toFrame }: Comment) =>
@@ -94,13 +95,16 @@ export function CommentThread({ head, answers }: { head: Comment; answers: reado
 }
 
 function Words({ comment }: { comment: Comment }) {
+  const measured = useMeasuredWords(comment);
+  const { shape } = comment;
   return (
     <>
       <p className="whitespace-pre-wrap break-words">{comment.body}</p>
+      {measured !== null && <p className="border-l-2 border-ink pl-3 font-bold">{measured}</p>}
       <p className="text-caption text-soft">
         {comment.by.name}, {moment(comment.at)}
         {comment.editedAt !== null && ', changed'}
-        {comment.shape !== null && `, with a ${comment.shape.kind}`}
+        {shape !== null && shape.kind !== 'measure' && `, with a ${shape.kind}`}
         {comment.shared && ', shown to the athlete'}
       </p>
     </>

@@ -25,7 +25,7 @@ export function CommentsPanel() {
       {threads.length === 0 ? (
         <p className="border-t border-rule py-4 text-soft">
           No comments yet. One stands at a frame or a stretch of frames, with a point, a ring or a
-          stroke on the picture if you wish.
+          stroke on the picture, or a measure of its frame, if you wish.
         </p>
       ) : (
         <ul>

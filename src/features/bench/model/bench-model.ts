@@ -69,7 +69,7 @@ export const repsOf = (
   return own.map((each) => withTiedLift(each, all));
 };
 
-const holds = ({ rep }: BenchRep, frame: FrameIndex): boolean =>
+export const holds = ({ rep }: BenchRep, frame: number): boolean =>
   rep.startFrame <= frame && frame <= rep.endFrame;
 
 /** The rep that is worked on: the chosen one, until the frame on show lies in another. */

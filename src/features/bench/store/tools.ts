@@ -17,10 +17,13 @@ export type Tool =
   /** What a comment points at: a point, a ring by its middle and its edge, or a stroke corner by corner. */
   | {
       readonly kind: 'shape';
-      readonly of: Shape['kind'];
+      readonly of: DrawnKind;
       readonly points: readonly FramePoint[];
     };
 export type LineOf = Extract<Scale['from'], 'rod' | 'body-height'> | 'plumb' | 'floor' | 'smear';
+
+/** What a hand draws; a measure is chosen instead. */
+export type DrawnKind = Exclude<Shape['kind'], 'measure'>;
 
 export const MARK: Tool = { kind: 'mark' };
 export const LOOK: Tool = { kind: 'look' };
@@ -69,7 +72,7 @@ export const withPoint = <T extends Extract<Tool, { points: readonly FramePoint[
 const LEAST_RADIUS = 6;
 
 /** The shape drawn so far; null until it is whole. */
-export const shapeOf = (tool: Tool): Shape | null => {
+export const shapeOf = (tool: Tool): Extract<Shape, { kind: DrawnKind }> | null => {
   if (tool.kind !== 'shape') return null;
   const [middle, edge] = tool.points;
   if (!middle) return null;

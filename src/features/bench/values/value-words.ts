@@ -1,10 +1,6 @@
 import { landmark } from '#shared/landmarks/table.ts';
 import type { LandmarkId } from '#shared/landmarks/types.ts';
-import type { FrameValue } from '#shared/measures/frame-values.ts';
-import type { Measure } from '#shared/measures/measure.ts';
 import type { Missing } from '#shared/measures/missing.ts';
-import { LEAST_SHOWN_LIFT } from '#shared/overlay/figures.ts';
-import { decimal, degrees, plusMinus, turn } from '#src/ui/figures.ts';
 
 const names = (ids: readonly LandmarkId[]): string => {
   const [first] = ids;
@@ -54,21 +50,3 @@ export const isSetUp = ({ code }: Missing): boolean =>
   code === 'distance-missing' ||
   code === 'belt-pointer-length-missing' ||
   code === 'thigh-pointer-length-missing';
-
-/** Values that carry a sign of their own direction; lift does not. */
-const UNSIGNED: ReadonlySet<string> = new Set(['lift', 'thigh-against-trunk']);
-
-export const valueText = ({ id, unit }: Measure, value: number, fromFront: boolean): string => {
-  if (unit === 'millimetres') return `${value > 0 ? '+' : ''}${decimal(value, 0)} mm`;
-  if (id === 'lift' && fromFront && value < LEAST_SHOWN_LIFT) return `< ${LEAST_SHOWN_LIFT}°`;
-  return UNSIGNED.has(id) ? degrees(value) : turn(value);
-};
-
-export const halfWidthText = (
-  { measure, value }: FrameValue,
-  fromFront: boolean,
-): string | null => {
-  if (value.halfWidth === null) return null;
-  const blind = measure.id === 'lift' && fromFront && value.value < LEAST_SHOWN_LIFT;
-  return blind ? null : plusMinus(value.halfWidth, measure.unit === 'millimetres' ? 0 : 1);
-};

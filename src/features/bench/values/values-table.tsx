@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { halfWidthText, valueText } from '#shared/exports/value-text.ts';
 import type { FrameValue } from '#shared/measures/frame-values.ts';
 import type { Measure } from '#shared/measures/measure.ts';
 import { MEASURES } from '#shared/measures/registry.ts';
@@ -8,7 +9,7 @@ import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { EXTRAS, type Extra } from '../model/led.ts';
 import { type FrameFigures } from './frame-figures.ts';
 import { useFrameFigures } from './use-frame-figures.ts';
-import { halfWidthText, isSetUp, missingWords, valueText } from './value-words.ts';
+import { isSetUp, missingWords } from './value-words.ts';
 
 /** Parts of the turn stand under it. */
 const PARTS: ReadonlySet<string> = new Set(['pelvis-part', 'thigh-part']);
