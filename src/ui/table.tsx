@@ -7,6 +7,8 @@ export type Column<Row> = {
   cell: (row: Row) => ReactNode;
   /** Stands at the right edge on a wide page. */
   end?: boolean;
+  /** A narrow page has no headings: there it is a line of its own that begins with its label. */
+  named?: boolean;
   /** For a heading that sorts: its state, and what stands in place of the plain label. */
   sort?: 'ascending' | 'descending' | 'none';
   heading?: ReactNode;
@@ -49,13 +51,22 @@ export function Table<Row>({
       <tbody role="rowgroup">
         {rows.map((row) => (
           <tr key={rowKey(row)} role="row">
-            {columns.map(({ key, cell, end }, n) =>
+            {columns.map(({ key, label, cell, end, named }, n) =>
               n === 0 ? (
                 <th key={key} scope="row" role="rowheader">
                   {cell(row)}
                 </th>
               ) : (
-                <td key={key} role="cell" className={cx(end && 'table-end')}>
+                <td
+                  key={key}
+                  role="cell"
+                  className={cx(end && 'table-end', named && 'table-named')}
+                >
+                  {named && (
+                    <span aria-hidden="true" className="text-soft tablet:hidden">
+                      {label}:{' '}
+                    </span>
+                  )}
                   {cell(row)}
                 </td>
               ),

@@ -21,27 +21,32 @@ const COLUMNS: Column<Row>[] = [
   { key: 'name', label: 'Landmarks', cell: ({ name }) => <b>{name}</b> },
   {
     key: 'assumed',
+    named: true,
     label: 'No turn called early',
     cell: ({ falseEarly }) => share(falseEarly.assumed),
   },
   {
     key: 'harder',
+    named: true,
     label: 'The same, with drifting marks or twice the slip',
     cell: ({ falseEarly }) => share(falseEarly.harder),
   },
   {
     key: 'told',
+    named: true,
     label: 'Change told from none beyond, one rep and three',
     cell: ({ toldFromNone: { one, three } }) => `${decimal(one)}° and ${decimal(three)}°`,
   },
   {
     key: 'found',
+    named: true,
     label: 'Early turn found nine times in ten, three reps',
     cell: ({ foundFrom }) =>
       foundFrom === null ? 'none up to 16°' : `from ${decimal(foundFrom)}°`,
   },
   {
     key: 'found62',
+    named: true,
     label: 'Early turn of 6.2° found, three reps',
     cell: ({ found62 }) => share(found62),
   },

@@ -30,10 +30,16 @@ const MEASURE_COLUMNS: Column<Measure>[] = [
       </span>
     ),
   },
-  { key: 'zero', label: 'Counted from', cell: ({ zero }) => zero },
-  { key: 'views', label: 'Seen from', cell: ({ views }) => views.join(', ').replaceAll('-', ' ') },
+  { key: 'zero', label: 'Counted from', named: true, cell: ({ zero }) => zero },
+  {
+    key: 'views',
+    label: 'Seen from',
+    named: true,
+    cell: ({ views }) => views.join(', ').replaceAll('-', ' '),
+  },
   {
     key: 'smallest',
+    named: true,
     label: 'Can be told from none beyond',
     cell: ({ smallestChange, unit }) =>
       smallestChange === null ? 'follows from the marks' : `${smallestChange}${UNITS[unit]}`,
