@@ -20,7 +20,7 @@ export function ReviewRow({ item, pressing }: { item: ReviewItem; pressing: bool
           {item.coach.name}, since {moment(item.at)}
         </p>
       </div>
-      <p className="flex flex-wrap items-center gap-x-5 gap-y-1 tablet:items-start">
+      <p className="mt-2 flex flex-wrap items-center gap-x-5 gap-y-1 tablet:mt-0 tablet:items-start">
         <Link to={signOff} aria-label={`Reading and sign-off: ${title}`} className="py-2.5">
           Reading and sign-off
         </Link>

@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import { ButtonLink } from '#src/ui/button-link.tsx';
+import { cx } from '#src/ui/class-names.ts';
 import { Progress } from '#src/ui/progress.tsx';
 import type { Task } from './task-of.ts';
 
@@ -14,10 +15,12 @@ export function TaskRow({ task, pressing }: { task: Task; pressing: boolean }) {
         <p className="text-soft">{detail}</p>
         {progress !== undefined && <Progress percent={progress} label={title} />}
       </div>
-      <p className="self-center text-soft tablet:self-start">{when}</p>
+      <p className={cx('self-center text-soft tablet:mt-0 tablet:self-start', pressing && 'mt-2')}>
+        {when}
+      </p>
       <p className="text-right">
         {pressing ? (
-          <ButtonLink look="primary" to={action.to} aria-label={name} className="tablet:-mt-1">
+          <ButtonLink look="primary" to={action.to} aria-label={name} className="mt-2 tablet:-mt-1">
             {action.label}
           </ButtonLink>
         ) : (
