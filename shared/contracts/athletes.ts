@@ -69,6 +69,12 @@ export const consentBody = z
     message: 'Without consent to filming and assessment there is nothing to record.',
   })
   .meta({ id: 'ConsentBody' });
+export const NO_ASSENT = 'Without the athlete’s own yes nothing is recorded and nothing is filmed.';
+/** What the form of a minor asks for beside the rest; whether the athlete is one the server looks up itself. */
+export const minorsConsentBody = consentBody.refine(({ assent }) => assent, {
+  path: ['assent'],
+  message: NO_ASSENT,
+});
 
 export const consentState = z.enum(['valid', 'lapsed', 'withdrawn', 'assent-missing']).meta({
   id: 'ConsentState',

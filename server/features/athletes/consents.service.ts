@@ -1,6 +1,6 @@
 import type * as z from 'zod';
 import type { UserActor } from '#shared/access/actors.ts';
-import type { consentBody } from '#shared/contracts/athletes.ts';
+import { NO_ASSENT, type consentBody } from '#shared/contracts/athletes.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { Problem } from '../../http/problem.ts';
 import { User } from '../accounts/user.entity.ts';
@@ -40,7 +40,7 @@ const needUsable = (athlete: Athlete, given: ConsentGiven): void => {
   if (isMinor(athlete.birthDate) && !given.assent) {
     faults.push({
       path: 'body.assent',
-      message: 'Without the athlete’s own yes nothing is recorded and nothing is filmed.',
+      message: NO_ASSENT,
     });
   }
   if (given.validUntil < today()) {

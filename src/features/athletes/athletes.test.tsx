@@ -156,6 +156,8 @@ describe('consent', () => {
     await user.click(screen.getByRole('checkbox', { name: /^Filming and marking/ }));
     await user.click(save);
     expect(await screen.findByRole('alert')).toHaveTextContent('Write who gave the consent.');
+    // the child's own yes is asked for at once, not only after the guardian's
+    expect(screen.getByRole('alert')).toHaveTextContent(/Without the athlete’s own yes/);
     expect(api.calls(routes.recordConsent)).toHaveLength(0);
     await user.type(screen.getByLabelText('Guardian’s name'), 'Anita Marlow');
     await user.click(screen.getByRole('checkbox', { name: /was asked in words/ }));

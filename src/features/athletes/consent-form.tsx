@@ -2,7 +2,7 @@ import { useQueryClient } from '@tanstack/react-query';
 import { useWatch } from 'react-hook-form';
 import { useNavigate } from 'react-router-dom';
 import type * as z from 'zod';
-import { consentBody, type Athlete } from '#shared/contracts/athletes.ts';
+import { type Athlete, consentBody, minorsConsentBody } from '#shared/contracts/athletes.ts';
 import type { ConsentWording, Purpose } from '#shared/contracts/consents.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { athletesKey } from '#src/api/athletes.queries.ts';
@@ -39,7 +39,7 @@ export function ConsentForm({
   const client = useQueryClient();
   const navigate = useNavigate();
   const say = useStatus();
-  const form = useZodForm(consentBody, {
+  const form = useZodForm(athlete.minor ? minorsConsentBody : consentBody, {
     // a minor cannot give it alone; nothing else is chosen beforehand
     givenBy: athlete.minor ? 'guardian' : 'athlete',
     guardianName: null,
