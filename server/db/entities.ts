@@ -23,6 +23,7 @@ import { ProtocolVersion } from '../features/protocol/protocol-version.entity.ts
 import { Reading } from '../features/readings/reading.entity.ts';
 import { SideSetting } from '../features/readings/side-setting.entity.ts';
 import { KeptFilm } from '../features/replays/film/kept-film.entity.ts';
+import { ReplayBefore } from '../features/replays/before/replay-before.entity.ts';
 import { Replay } from '../features/replays/replay.entity.ts';
 import { Rep } from '../features/reps/rep.entity.ts';
 import { Report } from '../features/reports/report.entity.ts';
@@ -74,6 +75,7 @@ export const entities = [
   Comment,
   Head,
   Replay,
+  ReplayBefore,
   KeptFilm,
   Report,
   Erasure,

@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import { landmarkId } from './reps.ts';
-import { frameIndex } from './primitives.ts';
+import { frameTable } from './clips.ts';
+import { frameIndex, view } from './primitives.ts';
 
 /** Marks to draw, by frame: only where they stand, not who placed them. Hidden landmarks are left out. */
 export const overlayMarks = z
@@ -28,3 +29,49 @@ export const replayCourse = z
     turn: z.array(z.number().nullable()),
   })
   .meta({ id: 'ReplayCourse' });
+
+/** Frames to stop at; null where the rep has no such moment. */
+export const replayMoments = z
+  .object({
+    quiet: frameIndex.nullable(),
+    /** Where the thigh passes either gate. */
+    from: frameIndex.nullable(),
+    to: frameIndex.nullable(),
+    top: frameIndex.nullable(),
+  })
+  .meta({ id: 'ReplayMoments' });
+
+/** While a film is being prepared, or where that failed, there is no picture at all. */
+export const publicHead = z
+  .enum(['shown', 'hidden', 'being-prepared', 'failed'])
+  .meta({ id: 'PublicHead' });
+
+/** Moments of two lifts at which the thigh is as high in both, to one frame's step: first rising, then lowering. */
+export const matchedFrames = z
+  .object({
+    before: z.array(frameIndex),
+    now: z.array(frameIndex),
+    /** Degrees; null where the link tells no angle. */
+    lift: z.array(z.number().nullable()),
+    /** How many of them belong to the rise. */
+    rising: z.int(),
+  })
+  .meta({ id: 'MatchedFrames' });
+export type MatchedFrames = z.infer<typeof matchedFrames>;
+
+/** An earlier lift of the same side. */
+export const earlierLift = z
+  .object({
+    visitDay: z.iso.date(),
+    view,
+    /** Size of the upright source frame, px. */
+    width: z.int(),
+    height: z.int(),
+    frames: frameTable,
+    head: publicHead,
+    moments: replayMoments,
+    overlay: overlayMarks,
+    matched: matchedFrames,
+  })
+  .meta({ id: 'EarlierLift' });
+export type EarlierLift = z.infer<typeof earlierLift>;

@@ -8,7 +8,13 @@ import { gates } from './protocol.ts';
 import { bytes, json, none, route } from './route.ts';
 import { readingCode } from './readings.ts';
 import { filmToKeep, keptFilm } from './kept-film.ts';
-import { overlayMarks, replayCourse } from './replay-parts.ts';
+import {
+  earlierLift,
+  overlayMarks,
+  publicHead,
+  replayCourse,
+  replayMoments,
+} from './replay-parts.ts';
 
 export const replayBody = z
   .object({
@@ -16,6 +22,8 @@ export const replayBody = z
     side,
     /** The rep that is played. */
     repId: id,
+    /** An earlier visit whose lift of the same side is shown beside this one; null: none. */
+    beforeVisitId: id.nullable().default(null),
     /** The marked span, both inclusive; the whole rep where left out. */
     fromFrame: frameIndex.optional(),
     toFrame: frameIndex.optional(),
@@ -30,6 +38,12 @@ export const replayBody = z
   })
   .meta({ id: 'ReplayBody' });
 
+/**
+ * `to-be-looked-at`: the box was changed, and nothing is shown until somebody has looked at it.
+ * `failed`: the copy could not be made, and nothing is shown until a person asks for it again.
+ */
+const headState = z.enum(['shown', 'hidden', 'being-prepared', 'failed', 'to-be-looked-at']);
+
 export const replay = z
   .object({
     id,
@@ -40,11 +54,9 @@ export const replay = z
     toFrame: frameIndex,
     showReading: z.boolean(),
     showCall: z.boolean(),
-    /**
-     * `to-be-looked-at`: the box was changed, and nothing is shown until somebody has looked at it.
-     * `failed`: the copy could not be made, and nothing is shown until a person asks for it again.
-     */
-    head: z.enum(['shown', 'hidden', 'being-prepared', 'failed', 'to-be-looked-at']),
+    head: headState,
+    /** The earlier lift beside it; null where there is none, or its clip is gone. */
+    before: z.object({ visitId: id, visitDay: z.iso.date(), head: headState }).nullable(),
     /** Null where none was asked for. */
     film: keptFilm.nullable(),
     message: z.string(),
@@ -74,20 +86,14 @@ export const publicReplay = z
     frames: frameTable,
     fromFrame: frameIndex,
     toFrame: frameIndex,
-    /** While the film is being prepared, or where that failed, there is no picture at all. */
-    head: z.enum(['shown', 'hidden', 'being-prepared', 'failed']),
+    head: publicHead,
     /** Lifts between which the hip was looked at. */
     gates,
-    /** Frames to stop at; null where the rep has no such moment. */
-    moments: z.object({
-      quiet: frameIndex.nullable(),
-      /** Where the thigh passes either gate. */
-      from: frameIndex.nullable(),
-      to: frameIndex.nullable(),
-      top: frameIndex.nullable(),
-    }),
+    moments: replayMoments,
     overlay: overlayMarks,
     course: replayCourse.nullable(),
+    /** The lift of an earlier visit, to be shown beside this one. */
+    before: earlierLift.nullable(),
     reading: z
       .object({
         code: readingCode,
@@ -253,6 +259,16 @@ export const replayRoutes = {
     method: 'get',
     path: '/api/r/:token/video',
     summary: 'The small copy that the replay plays; answers ranges.',
+    audience: 'link',
+    params: linkParams,
+    status: 200,
+    answer: bytes(['video/mp4'], true),
+    problems: ['not-found', 'pass-phrase-needed', 'clip-not-ready', 'range-not-satisfiable'],
+  }),
+  replayBeforeVideo: route({
+    method: 'get',
+    path: '/api/r/:token/before/video',
+    summary: 'The small copy of the earlier lift beside it; answers ranges.',
     audience: 'link',
     params: linkParams,
     status: 200,

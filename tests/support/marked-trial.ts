@@ -9,11 +9,13 @@ export const markedTrial = async (
   api: Api,
   coach: Awaited<ReturnType<Api['as']>>,
   golden: GoldenClip,
+  /** Of the visit; today where left out. */
+  day?: string,
 ) => {
   const { coach: user, athlete } = api.world;
   const { width, height, geometry, frames, trial } = golden;
   const { visit, clip } = await api.ground.inPractice(user, ({ em }) => {
-    const made = makeVisit(em, { athlete, coach: user });
+    const made = makeVisit(em, { athlete, coach: user, ...(day !== undefined && { day }) });
     return Promise.resolve({
       visit: made,
       clip: makeClip(em, {

@@ -50,6 +50,7 @@ export const aPublicReplay = (change: Partial<PublicReplay> = {}): PublicReplay 
     { frame: 80, marks: marks(350), lift: 100, liftPlusMinus: 3, turn: 10, turnPlusMinus: 5 },
   ],
   course: null,
+  before: null,
   reading: {
     code: 'early-turn-out',
     label: 'Turns out early',

@@ -12,6 +12,7 @@ export const aReplayLink = (change: Partial<Replay> = {}): Replay => ({
   showReading: true,
   showCall: true,
   head: 'shown',
+  before: null,
   film: null,
   message: '',
   passPhrase: false,

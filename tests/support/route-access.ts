@@ -170,6 +170,7 @@ export const ACCESS: Record<RouteName, Access> = {
   answerPain: 'link',
   replayFilm: 'link',
   replayVideo: 'link',
+  replayBeforeVideo: 'link',
   takeFilm: 'link',
   replayPoster: 'link',
 };

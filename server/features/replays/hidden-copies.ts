@@ -8,8 +8,12 @@ import { hiddenFiles } from '../clips/clip-files.ts';
 import { currentHead, headTrack } from '../heads/current-head.ts';
 import { Head } from '../heads/head.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
+import { ReplayBefore } from './before/replay-before.entity.ts';
 import { HIDE_HEAD } from './jobs/hide-head-type.ts';
 import { Replay } from './replay.entity.ts';
+
+/** One film of a link: that of its own rep, or the earlier one beside it. */
+export type LinkFilm = Replay | ReplayBefore;
 
 const named = (stretches: readonly Stretch[]): string =>
   stretches.map(({ from, to }) => (from === to ? `${from}` : `${from} to ${to}`)).join(', ');
@@ -45,10 +49,10 @@ export const needHiddenHead = async (
   return head;
 };
 
-/** The same for a replay that is there: null while nothing may be shown by it. */
+/** The same for a film that is there: null while nothing may be shown by it. */
 export const headOfReplay = async (
   em: EntityManager,
-  { fromFrame, toFrame }: Replay,
+  { fromFrame, toFrame }: LinkFilm,
   clip: Clip,
 ): Promise<Head | null> => {
   const head = await currentHead(em, clip.id);
@@ -57,24 +61,24 @@ export const headOfReplay = async (
   return uncovered(headTrack(head, clip), span).length === 0 ? head : null;
 };
 
-/** How the head of a replay stands. A copy that was made by another version of the box counts for nothing. */
+/** How the head of a film stands. A copy that was made by another version of the box counts for nothing. */
 export const headStateOf = async (
   em: EntityManager,
-  replay: Replay,
+  film: LinkFilm,
   clip: Clip,
 ): Promise<ReplayShape['head']> => {
-  if (!replay.hideHead) return 'shown';
-  const head = await headOfReplay(em, replay, clip);
+  if (!film.hideHead) return 'shown';
+  const head = await headOfReplay(em, film, clip);
   if (!head) return 'to-be-looked-at';
-  if (replay.hiddenHead?.id === head.id) return 'hidden';
-  return replay.hideFailed ? 'failed' : 'being-prepared';
+  if (film.hiddenHead?.id === head.id) return 'hidden';
+  return film.hideFailed ? 'failed' : 'being-prepared';
 };
 
 /** The same for who holds the link: why there is no film yet is the practice's affair. */
 export const publicHeadState = async (
-  ...[em, replay, clip]: Parameters<typeof headStateOf>
+  ...[em, film, clip]: Parameters<typeof headStateOf>
 ): Promise<PublicReplay['head']> => {
-  const state = await headStateOf(em, replay, clip);
+  const state = await headStateOf(em, film, clip);
   return state === 'to-be-looked-at' ? 'being-prepared' : state;
 };
 
@@ -85,22 +89,22 @@ export const hasEnded = ({ revokedAt, expiresAt }: Replay): boolean =>
 /** Where the copy that may be served lies; null until there is one. */
 export const servedHidden = async (
   em: EntityManager,
-  replay: Replay,
+  film: LinkFilm,
   clip: Clip,
 ): Promise<ReturnType<typeof hiddenFiles> | null> => {
-  const { hiddenHead } = replay;
-  if (!hiddenHead || (await headStateOf(em, replay, clip)) !== 'hidden') return null;
-  return hiddenFiles(replay.practiceId, clip.id, replay.id, hiddenHead.id);
+  const { hiddenHead } = film;
+  if (!hiddenHead || (await headStateOf(em, film, clip)) !== 'hidden') return null;
+  return hiddenFiles(film.practiceId, clip.id, film.id, hiddenHead.id);
 };
 
 /**
- * What may lie there for this replay alone, by whichever version of the box: a worker that was killed leaves what
+ * What may lie there for this film alone, by whichever version of the box: a worker that was killed leaves what
  * no row names.
- * @param replay with its rep loaded
+ * @param film with its rep loaded
  */
 export const hiddenFilesOf = async (
   em: EntityManager,
-  { id, practiceId, rep, hideHead }: Replay,
+  { id, practiceId, rep, hideHead }: LinkFilm,
 ): Promise<string[]> => {
   if (!hideHead) return [];
   const { clip } = rep.unwrap() as Rep;
@@ -111,22 +115,23 @@ export const hiddenFilesOf = async (
 /** Asks for the copy, as if it had never been tried. */
 export const askForCopy = async (
   unit: { readonly em: EntityManager },
-  replay: Replay,
+  film: LinkFilm,
 ): Promise<void> => {
-  unit.em.assign(replay, { hideTries: 0, hideFailed: false });
-  await enqueue(unit, HIDE_HEAD, { replayId: replay.id });
+  film.hideTries = 0;
+  film.hideFailed = false;
+  await enqueue(unit, HIDE_HEAD, { replayId: film.id });
 };
 
-/** Makes the copies of a clip's replays anew, after somebody looked at another box. */
+/** Makes the copies of a clip that links show anew, after somebody looked at another box. */
 export const hiddenReplaysAreStale = async (
   unit: { readonly em: EntityManager },
   clipId: string,
 ): Promise<void> => {
-  const replays = await unit.em.find(Replay, {
-    rep: { clip: clipId },
-    hideHead: true,
-    revokedAt: null,
-    expiresAt: { $gt: new Date() },
-  });
-  for (const replay of replays) await askForCopy(unit, replay);
+  const live = { revokedAt: null, expiresAt: { $gt: new Date() } };
+  const hidden = { rep: { clip: clipId }, hideHead: true };
+  const films: LinkFilm[] = [
+    ...(await unit.em.find(Replay, { ...hidden, ...live })),
+    ...(await unit.em.find(ReplayBefore, { ...hidden, replay: live })),
+  ];
+  for (const film of films) await askForCopy(unit, film);
 };

@@ -9,6 +9,7 @@ import { Head } from '../heads/head.entity.ts';
 import { hideHeadJob } from './jobs/hide-head.ts';
 import { MOST_TRIES } from './jobs/hide-head-tries.ts';
 import { removeHiddenJob } from './jobs/remove-hidden.ts';
+import { ReplayBefore } from './before/replay-before.entity.ts';
 import { Replay } from './replay.entity.ts';
 
 // real tools at low priority beside whatever else the machine does
@@ -239,6 +240,47 @@ describe('a replay that promises a hidden head', () => {
       await work(id);
       expect(await storage.exists(keys.replay)).toBe(false);
     }
+  });
+
+  it('hides the head of the earlier film beside it as well, in a copy that goes with the link', async () => {
+    const other = await playedClip(api, await mkdtemp(join(folder, 'earlier-')));
+    await coach
+      .post(`/api/clips/${other.clipId}/head`)
+      .send({ after: 0, fromFrame: 0, toFrame: 29, drawn: [{ frame: 0, box }], followed: [] })
+      .expect(201);
+    await coach.post(`/api/clips/${other.clipId}/head/looked`).send({ version: 1 }).expect(200);
+    const { id, token } = await newReplay();
+    const { before, keys } = await api.ground.inPractice(api.world.coach, async ({ em }) => {
+      const row = em.create(ReplayBefore, {
+        replay: id,
+        rep: other.of.repId,
+        fromFrame: 2,
+        toFrame: 25,
+        hideHead: true,
+      });
+      const head = await em.findOneOrFail(Head, { clip: other.clipId });
+      const { practiceId } = api.world;
+      return {
+        before: row.id,
+        keys: hiddenFiles(practiceId, other.clipId, row.id, head.id),
+      };
+    });
+    const film = () => api.nobody.get(`/api/r/${token}/before/video`);
+    expect(await waiting(hideHeadJob.unfinished?.sql)).toContain(before);
+    await film().expect(409);
+    await work(before);
+    const served = Buffer.from((await film().buffer(true).expect(200)).body as Buffer);
+    const read = async (stored: string) =>
+      Buffer.concat(await (await api.ground.storage.read(stored)).toArray());
+    expect(served.equals(await read(keys.replay))).toBe(true);
+    const clear = clipFiles(api.world.practiceId, other.clipId);
+    expect(served.equals(await read(clear.replay))).toBe(false);
+    expect(await waiting(hideHeadJob.unfinished?.sql)).not.toContain(before);
+    await change(id, { revokedAt: new Date() });
+    expect(await waiting(removeHiddenJob.unfinished?.sql)).toContain(id);
+    await removeHiddenJob.run(contextOf(id));
+    expect(await api.ground.storage.exists(keys.replay)).toBe(false);
+    expect(await waiting(removeHiddenJob.unfinished?.sql)).not.toContain(id);
   });
 
   it('has its end put down as a job when it is made', async () => {

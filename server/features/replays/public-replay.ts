@@ -4,9 +4,11 @@ import type { Unit } from '#server/db/in-practice.ts';
 import { found, need } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { audit } from '../audit/audit.ts';
+import type { Clip } from '../clips/clip.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { filmToKeepOf } from './film/film-state.ts';
 import { publicHeadState, servedHidden } from './hidden-copies.ts';
+import { beforeOfLink } from './link-files.ts';
 import { contentOf, PLAYED, type Played } from './replay-content.ts';
 import { Replay } from './replay.entity.ts';
 
@@ -28,12 +30,27 @@ export const replayOfLink = async ({ em, actor }: Of): Promise<Played> => {
  * Where a picture of this link lies; null where it is not there.
  * @throws Problem 'clip-not-ready' until there is a copy on which the head is hidden as the link promises
  */
-export const mediaOfLink = async (unit: Of, which: 'replay' | 'poster'): Promise<string | null> => {
+export const mediaOfLink = async (
+  unit: Of,
+  which: 'replay' | 'poster' | 'before',
+): Promise<string | null> => {
   const { replay, clip } = await replayOfLink(unit);
+  if (which === 'before') return earlierFilmOf(unit, replay);
   if (!replay.hideHead) return clip.files[which];
   const files = await servedHidden(unit.em, replay, clip);
   if (!files) throw new Problem('clip-not-ready', 'The film is being prepared.');
   return files[which];
+};
+
+/** The same of the earlier lift beside it; a link that hides the head hides it there as well. */
+const earlierFilmOf = async ({ em }: Of, replay: Replay): Promise<string | null> => {
+  const before = await beforeOfLink(em, replay);
+  if (!before) return null;
+  const clip = (before.rep.unwrap() as Rep).clip.unwrap() as Clip;
+  if (!replay.hideHead && !before.hideHead) return clip.files.replay;
+  const files = await servedHidden(em, before, clip);
+  if (!files) throw new Problem('clip-not-ready', 'The earlier film is being prepared.');
+  return files.replay;
 };
 
 /** Whether there is a film to play; opens nothing and is not counted. */

@@ -20,6 +20,7 @@ import type { Reading } from '../readings/reading.entity.ts';
 import { SideSetting } from '../readings/side-setting.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { storedReps } from '../reps/stored-reps.ts';
+import { earlierLiftOf } from './before/earlier-lift.ts';
 import { publicHeadState } from './hidden-copies.ts';
 import type { Replay } from './replay.entity.ts';
 import { type Span, spanOf } from './span.ts';
@@ -132,7 +133,7 @@ export const contentOf = async (
   const reps = await storedReps(em, [clip], athlete);
   const stored = found(reps.find((each) => each.rep.id === rep.id));
   const span = { from: replay.fromFrame, to: replay.toFrame };
-  const { measured, ...shown } = spanOf(stored, span, { figures: replay.showReading, gates });
+  const { measured, way, ...shown } = spanOf(stored, span, { figures: replay.showReading, gates });
   return {
     athleteGivenName: athlete.givenName,
     practice: { name: practice.name, contact: practice.contact },
@@ -148,6 +149,7 @@ export const contentOf = async (
     toFrame: replay.toFrame,
     gates,
     ...shown,
+    before: await earlierLiftOf(em, replay, { athlete, way, gates, figures: told !== null }),
     reading: told,
     call: replay.showCall && call ? { seen: call.seen, confidence: call.confidence } : null,
     message: replay.message,

@@ -12,12 +12,12 @@ const stateOf = ({ revokedAt, expiresAt }: Replay): ReplayShape['state'] => {
 /**
  * @param replay with `by` and the lazy `passPhraseHash` loaded; the hash itself never leaves
  * @param head how its head stands
+ * @param before the earlier lift beside it
  * @param film its film to keep, where one was asked for
  */
 export const presentReplay = (
   replay: Replay,
-  head: ReplayShape['head'],
-  film: KeptFilm | null,
+  { head, before, film }: Pick<ReplayShape, 'head' | 'before'> & { readonly film: KeptFilm | null },
 ): ReplayShape => ({
   id: replay.id,
   visitId: replay.visit.id,
@@ -28,6 +28,7 @@ export const presentReplay = (
   showReading: replay.showReading,
   showCall: replay.showCall,
   head,
+  before,
   film: film && presentFilm(film, replay, head),
   message: replay.message,
   passPhrase: Boolean(replay.passPhraseHash?.unwrap()),

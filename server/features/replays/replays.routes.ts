@@ -5,12 +5,13 @@ import type { Feature } from '../../main/feature.ts';
 import { passwordFits } from '../accounts/password.ts';
 import { sendStored } from '../clips/send-stored.ts';
 import { linkActor, liveLink, unlock } from './link.ts';
-import { filmFilesOf, filmOf } from './film/film-files.ts';
+import { filmOf } from './film/film-files.ts';
 import { makeFilm, openFilm, takeFilm } from './film/kept-films.service.ts';
-import { hiddenFilesOf } from './hidden-copies.ts';
+import { filesOfLink } from './link-files.ts';
 import { filmOfLink, mediaOfLink, openReplay, passPhraseWasWrong } from './public-replay.ts';
 import { presentReplay } from './replays.presenter.ts';
 import {
+  earlierOfLink,
   hashOf,
   headOfLink,
   hideHeadAgain,
@@ -21,12 +22,17 @@ import {
 import { sendNow, writeReplayLetter } from './send-replay.ts';
 
 const MEDIA = {
+  replayBeforeVideo: ['before', 'video/mp4'],
   replayVideo: ['replay', 'video/mp4'],
   replayPoster: ['poster', 'image/jpeg'],
 } as const;
 
 const presented = async (...[unit, replay]: Parameters<typeof headOfLink>) =>
-  presentReplay(replay, await headOfLink(unit, replay), await filmOf(unit.em, replay));
+  presentReplay(replay, {
+    head: await headOfLink(unit, replay),
+    before: await earlierOfLink(unit, replay),
+    film: await filmOf(unit.em, replay),
+  });
 
 export const replaysFeature: Feature = ({ serve, ground }) => {
   const { inPractice, storage, config } = ground;
@@ -63,7 +69,7 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
       const replay = await revokeReplay(unit, params.id);
       return {
         ended: await presented(unit, replay),
-        files: [...(await hiddenFilesOf(unit.em, replay)), ...(await filmFilesOf(unit.em, replay))],
+        files: await filesOfLink(unit.em, replay),
       };
     });
     for (const key of files) await storage.delete(key);
@@ -115,7 +121,7 @@ export const replaysFeature: Feature = ({ serve, ground }) => {
     inPractice(await linkActor(ground, req, params.token), filmOfLink),
   );
 
-  for (const name of ['replayVideo', 'replayPoster'] as const) {
+  for (const name of ['replayVideo', 'replayPoster', 'replayBeforeVideo'] as const) {
     const [copy, type] = MEDIA[name];
     serve(routes[name], async ({ params, req, res }) => {
       const key = await inPractice(await linkActor(ground, req, params.token), (unit) =>

@@ -1,6 +1,6 @@
 import type * as z from 'zod';
 import type { UserActor } from '#shared/access/actors.ts';
-import type { replayBody } from '#shared/contracts/replays.ts';
+import type { Replay as ReplayShape, replayBody } from '#shared/contracts/replays.ts';
 import type { Unit } from '#server/db/in-practice.ts';
 import { found, needCaseload } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
@@ -12,12 +12,17 @@ import { athleteInSight } from '../athletes/athlete-in-sight.ts';
 import { needConsent } from '../athletes/consent-check.ts';
 import { Call } from '../calls/call.entity.ts';
 import { needFrames } from '../clips/clip-in-sight.ts';
+import type { Clip } from '../clips/clip.entity.ts';
 import { audit } from '../audit/audit.ts';
 import { repInSight } from '../reps/rep-in-sight.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { visitInSight } from '../visits/visit-in-sight.ts';
+import type { Visit } from '../visits/visit.entity.ts';
+import { chooseBefore, needBeforeHidden } from './before/choose-before.ts';
+import { ReplayBefore } from './before/replay-before.entity.ts';
 import { askForCopy, hasEnded, headStateOf, needHiddenHead } from './hidden-copies.ts';
 import { REMOVE_HIDDEN } from './jobs/remove-hidden-type.ts';
+import { beforeOfLink } from './link-files.ts';
 import { Replay } from './replay.entity.ts';
 
 type Of = Unit<UserActor>;
@@ -66,7 +71,13 @@ export const makeReplay = async (
     throw new Problem('invalid-input', undefined, [
       { path: 'body.toFrame', message: 'The span ends after it starts.' },
     ]);
-  if (body.hideHead) await needHiddenHead(em, clip, { from: fromFrame, to: toFrame });
+  const span = { from: fromFrame, to: toFrame };
+  if (body.hideHead) await needHiddenHead(em, clip, span);
+  const earlier =
+    body.beforeVisitId === null
+      ? null
+      : await chooseBefore(unit, body.beforeVisitId, { athlete, visit, rep, clip, span });
+  if (earlier && body.hideHead) await needBeforeHidden(unit, earlier);
   const token = newToken();
   const replay = em.create(Replay, {
     visit,
@@ -83,13 +94,24 @@ export const makeReplay = async (
     expiresAt: new Date(Date.now() + body.days * DAY_MS),
     by: await em.findOneOrFail(User, { id: actor.id }),
   });
+  const before =
+    earlier &&
+    em.create(ReplayBefore, {
+      replay,
+      rep: earlier.rep,
+      fromFrame: earlier.rep.startFrame,
+      toFrame: earlier.rep.endFrame,
+      hideHead: body.hideHead,
+    });
   audit(unit, 'replay.make', replay.id, {
     athlete: athlete.id,
     visit: visit.id,
     side: body.side,
+    ...(body.beforeVisitId !== null && { before: body.beforeVisitId }),
   });
   if (body.hideHead) {
     await askForCopy(unit, replay);
+    if (before) await askForCopy(unit, before);
     const { id: replayId, expiresAt } = replay;
     await enqueue(unit, REMOVE_HIDDEN, { replayId }, { startAfter: expiresAt });
   }
@@ -103,6 +125,15 @@ export const makeReplay = async (
  */
 export const headOfLink = ({ em }: Of, replay: Replay) =>
   headStateOf(em, replay, (replay.rep.unwrap() as Rep).clip.unwrap());
+
+/** The earlier lift beside it, as its coach is told. */
+export const earlierOfLink = async ({ em }: Of, replay: Replay): Promise<ReplayShape['before']> => {
+  const before = await beforeOfLink(em, replay);
+  if (!before) return null;
+  const clip = (before.rep.unwrap() as Rep).clip.unwrap() as Clip;
+  const { id, day } = clip.visit.unwrap() as Visit;
+  return { visitId: id, visitDay: day, head: await headStateOf(em, before, clip) };
+};
 
 /** The link of this id, for a coach who may act on it. */
 export const linkInSight = async (
@@ -133,11 +164,14 @@ export const revokeReplay = async (unit: Of, id: string): Promise<Replay> => {
   return replay;
 };
 
-/** Makes the copy with the hidden head again where that was given up; doing it twice is fine. */
+/** Makes the copies with a hidden head again where that was given up; doing it twice is fine. */
 export const hideHeadAgain = async (unit: Of, id: string): Promise<Replay> => {
   const replay = await linkInSight(unit, id, 'replay.make');
-  if (!hasEnded(replay) && (await headOfLink(unit, replay)) === 'failed')
-    await askForCopy(unit, replay);
+  if (!hasEnded(replay)) {
+    if ((await headOfLink(unit, replay)) === 'failed') await askForCopy(unit, replay);
+    const before = await beforeOfLink(unit.em, replay);
+    if (before?.hideFailed) await askForCopy(unit, before);
+  }
   await unit.em.flush();
   return replay;
 };

@@ -1,5 +1,6 @@
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import { courseOfRep, isCourse, type RepCourse } from '#shared/course/course-of-rep.ts';
+import { type LiftWay, liftWay } from '#shared/course/match-lifts.ts';
 import type { CourseFrame } from '#shared/course/types.ts';
 import type { Degrees } from '#shared/geometry/units.ts';
 import { ASSUMED_MARK_ERROR } from '#shared/measures/inputs.ts';
@@ -42,6 +43,8 @@ const momentsOf = (
 
 /** What the marks of the played span show, with the same code as the Bench. */
 export interface Span {
+  /** By what it is shown beside another. */
+  readonly way: LiftWay;
   /** A measure of the registry on one frame, as far as it may be told. */
   readonly measured: (id: string, frame: number) => MeasuredShape | null;
   readonly moments: PublicReplay['moments'];
@@ -86,6 +89,7 @@ export const spanOf = (
   };
   return {
     measured,
+    way: liftWay(known?.frames.filter(({ frame }) => inside(frame)) ?? []),
     moments: known ? momentsOf(known, times, gates) : NO_MOMENTS,
     overlay,
     course:

@@ -34,6 +34,8 @@ const heldOf = async (em: EntityManager, athleteId: string): Promise<Held> => {
        (select array_agg(id::text) from (
          select id from v union select id from rep where clip_id in (select id from c)
          union select id from replay where visit_id in (select id from v)
+         union select b.id from replay_before b join replay r on r.id = b.replay_id
+           where r.visit_id in (select id from v)
          union select id from report where visit_id in (select id from v)
          union select m.id from second_marking m join rep r on r.id = m.rep_id where r.clip_id in (select id from c)
        ) o) as others,

@@ -236,6 +236,7 @@ const aLink: Replay = {
   showReading: true,
   showCall: true,
   head: 'shown',
+  before: null,
   film: null,
   message: '',
   passPhrase: true,

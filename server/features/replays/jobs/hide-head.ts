@@ -7,32 +7,30 @@ import type { Clip } from '../../clips/clip.entity.ts';
 import { hiddenFiles } from '../../clips/clip-files.ts';
 import { lockClip } from '../../clips/jobs/lock-clip.ts';
 import { headTrack } from '../../heads/current-head.ts';
+import { Head } from '../../heads/head.entity.ts';
 import type { Rep } from '../../reps/rep.entity.ts';
 import { filmIsStale } from '../film/film-state.ts';
 import { hasEnded, headOfReplay } from '../hidden-copies.ts';
-import { Replay } from '../replay.entity.ts';
+import { filmById } from './film-by-id.ts';
 import { HIDE_HEAD } from './hide-head-type.ts';
 import { beginTry, endedBadly } from './hide-head-tries.ts';
 
-/** The replay and the box to make it by; null where nothing is to be made. */
+/** The film and the box to make it by; null where nothing is to be made. */
 const wanted = (ground: Ground, practiceId: string, replayId: string) =>
   ground.inPractice(product(practiceId), async ({ em }) => {
-    const replay = await em.findOne(
-      Replay,
-      { id: replayId },
-      { populate: ['rep.clip', 'rep.clip.frames'] },
-    );
-    if (!replay?.hideHead || hasEnded(replay)) return null;
-    const clip = (replay.rep.unwrap() as Rep).clip.unwrap() as Clip;
+    const found = await filmById(em, replayId);
+    if (!found?.film.hideHead || hasEnded(found.link)) return null;
+    const { film } = found;
+    const clip = (film.rep.unwrap() as Rep).clip.unwrap() as Clip;
     await lockClip(em, clip.id);
-    const head = await headOfReplay(em, replay, clip);
-    if (!head || replay.hiddenHead?.id === head.id) return null;
-    return beginTry(replay) ? { replay, clip, head } : null;
+    const head = await headOfReplay(em, film, clip);
+    if (!head || film.hiddenHead?.id === head.id) return null;
+    return beginTry(film) ? { film, clip, head } : null;
   });
 
 type Wanted = NonNullable<Awaited<ReturnType<typeof wanted>>>;
 
-const requestOf = ({ replay, clip, head }: Wanted) => {
+const requestOf = ({ film, clip, head }: Wanted) => {
   const frames = clip.frames.unwrap();
   const { width, height, copies, frameRate } = clip;
   const { bench } = clip.files;
@@ -45,22 +43,22 @@ const requestOf = ({ replay, clip, head }: Wanted) => {
     size: { width: copies.replay.width, height: copies.replay.height },
     perSecond: frameRate?.perSecond ?? 30,
     frames: { timeBase, ticks, us: [] },
-    from: replay.fromFrame,
-    to: replay.toFrame,
+    from: film.fromFrame,
+    to: film.toFrame,
     heads: headsOf(headTrack(head, clip)),
   };
 };
 
-/** Says that the copy is there, unless the box was changed or the replay ended meanwhile. */
-const keep = (ground: Ground, { replay: { id, practiceId }, clip, head }: Wanted) =>
+/** Says that the copy is there, unless the box was changed or the link ended meanwhile. */
+const keep = (ground: Ground, { film: { id, practiceId }, clip, head }: Wanted) =>
   ground.inPractice(product(practiceId), async ({ em }) => {
     await lockClip(em, clip.id);
-    const replay = await em.findOne(Replay, { id });
-    if (!replay || hasEnded(replay)) return { kept: false, before: null };
-    if ((await headOfReplay(em, replay, clip))?.id !== head.id)
-      return { kept: false, before: null };
-    const before = replay.hiddenHead?.id ?? null;
-    em.assign(replay, { hiddenHead: head.id });
+    const found = await filmById(em, id);
+    if (!found || hasEnded(found.link)) return { kept: false, before: null };
+    const { film } = found;
+    if ((await headOfReplay(em, film, clip))?.id !== head.id) return { kept: false, before: null };
+    const before = film.hiddenHead?.id ?? null;
+    film.hiddenHead = em.getReference(Head, head.id, { wrapped: true });
     await filmIsStale({ em }, id);
     return { kept: true, before };
   });
@@ -104,7 +102,7 @@ const run = async ({
   try {
     await make(ground, asked, filesBy, signal);
   } catch (error) {
-    if (await endedBadly(ground, asked.replay, signal)) {
+    if (await endedBadly(ground, asked.film, signal)) {
       ground.log.error({ err: error, replayId }, 'a head could not be hidden');
       return;
     }

@@ -1,7 +1,8 @@
 import { product } from '../../../db/in-practice.ts';
 import { handles, type JobContext } from '../../../jobs/job.ts';
-import { hasEnded, hiddenFilesOf } from '../hidden-copies.ts';
-import { filmFilesOf } from '../film/film-files.ts';
+import { ReplayBefore } from '../before/replay-before.entity.ts';
+import { hasEnded } from '../hidden-copies.ts';
+import { filesOfLink } from '../link-files.ts';
 import { KeptFilm } from '../film/kept-film.entity.ts';
 import { Replay } from '../replay.entity.ts';
 import { REMOVE_HIDDEN } from './remove-hidden-type.ts';
@@ -15,12 +16,13 @@ const run = async ({
   const files = await inPractice(product(practiceId), async ({ em }) => {
     const replay = await em.findOne(Replay, { id }, { populate: ['rep'] });
     if (!replay || !hasEnded(replay)) return null;
-    return [...(await hiddenFilesOf(em, replay)), ...(await filmFilesOf(em, replay))];
+    return filesOfLink(em, replay);
   });
   if (!files) return;
   for (const key of files) await storage.delete(key);
   await inPractice(product(practiceId), async ({ em }) => {
     await em.nativeUpdate(Replay, { id }, { hiddenHead: null });
+    await em.nativeUpdate(ReplayBefore, { replay: id }, { hiddenHead: null });
     await em.nativeDelete(KeptFilm, { replay: id });
   });
 };

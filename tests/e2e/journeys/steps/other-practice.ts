@@ -76,6 +76,7 @@ const WITHOUT_ID: Record<RouteNameWithoutId, Kind> = {
   tickExercise: 'link',
   answerPain: 'link',
   replayVideo: 'link',
+  replayBeforeVideo: 'link',
   takeFilm: 'link',
   replayPoster: 'link',
   events: 'bare',
