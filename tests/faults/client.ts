@@ -11,12 +11,13 @@ export type Ask = (method: string, path: string, given?: Given) => Promise<Answe
 interface Given {
   readonly json?: unknown;
   readonly bytes?: Buffer;
+  readonly form?: FormData;
   readonly headers?: Record<string, string>;
 }
 
 export const asker =
   (url: string, cookie: string): Ask =>
-  async (method, path, { json, bytes, headers = {} } = {}) => {
+  async (method, path, { json, bytes, form, headers = {} } = {}) => {
     try {
       const answer = await fetch(`${url}${path}`, {
         method,
@@ -28,6 +29,7 @@ export const asker =
         },
         ...(json === undefined ? {} : { body: JSON.stringify(json) }),
         ...(bytes ? { body: new Uint8Array(bytes) } : {}),
+        ...(form ? { body: form } : {}),
       });
       const text = await answer.text();
       const isJson = answer.headers.get('content-type')?.includes('json') === true;

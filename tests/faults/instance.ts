@@ -1,7 +1,6 @@
 import { execFileSync, spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
-import { mkdtemp, open, readFile, rm } from 'node:fs/promises';
-import { tmpdir } from 'node:os';
+import { open, readFile, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { setTimeout as pause } from 'node:timers/promises';
@@ -9,20 +8,35 @@ import { build } from 'esbuild';
 import type { DatabaseUrls } from '#tests/support/admin.ts';
 import { freshDatabase } from '#tests/support/database.ts';
 import { startLasting } from '#tests/support/throwaway.ts';
+import { mountDisk } from './disk.ts';
+import { dataIn, ownFolder } from './folder.ts';
+import { openLine } from './line.ts';
 
 const root = fileURLToPath(new URL('../../', import.meta.url));
 
-export const VICTIMS = ['server', 'worker', 'database'] as const;
-export type Victim = (typeof VICTIMS)[number];
+/** What can go wrong with an instance, and how that is said. */
+export const FAULTS = {
+  server: 'the server killed',
+  worker: 'the worker killed',
+  database: 'the database killed',
+  network: 'the network cut',
+  line: 'the line to the database cut',
+  disk: 'the disk full',
+} as const;
+export type Fault = keyof typeof FAULTS;
 
-/** A whole instance, its parts each in a process of their own, that can be killed and started again. */
+/** A whole instance, its parts each in a process of their own, that things can go wrong with. */
 export interface Instance {
+  /** Where people reach it: over the network that can be cut. */
   readonly url: string;
   readonly data: string;
   readonly urls: DatabaseUrls;
-  /** SIGKILL: nothing is said, nothing tidied up. */
-  readonly kill: (victim: Victim) => Promise<void>;
-  readonly again: (victim: Victim) => Promise<void>;
+  /** Has a disk of its own: where this person may mount none, it cannot be full. */
+  readonly canBeFull: boolean;
+  /** Kills with SIGKILL, cuts in the middle: nothing is said, nothing tidied up. */
+  readonly begin: (fault: Fault) => Promise<void>;
+  /** Puts it right, as whoever runs it would. */
+  readonly end: (fault: Fault) => Promise<void>;
   /** The log of all parts. */
   readonly said: () => Promise<string>;
   readonly close: () => Promise<void>;
@@ -59,16 +73,25 @@ export const startInstance = async (): Promise<Instance> => {
   const cluster = startLasting();
   process.env.REDSHANK_TEST_PG = cluster.adminUrl;
   const database = await freshDatabase();
-  const data = await mkdtemp(join(tmpdir(), 'redshank-faults-'));
+  const folder = await ownFolder();
+  const data = dataIn(folder);
+  const disk = mountDisk(data);
+  const line = await openLine(Number(new URL(database.appUrl).port));
+  const overLine = (address: string): string => {
+    const url = new URL(address);
+    url.port = String(line.port);
+    return url.href;
+  };
   const program = join(root, 'tests/.out', `faults-${process.pid}`);
   await bundle(program);
-  const log = await open(join(data, 'log'), 'w');
+  const log = await open(join(folder, 'log'), 'w');
   const port = execFileSync('node', ['docker-free-scripts/port.mjs', 'free'], {
     cwd: root,
     encoding: 'utf8',
   }).trim();
-  const url = `http://127.0.0.1:${port}`;
-  const children = new Map<Victim, ChildProcess>();
+  const network = await openLine(Number(port));
+  const url = `http://127.0.0.1:${network.port}`;
+  const children = new Map<'server' | 'worker', ChildProcess>();
 
   const start = (part: 'server' | 'worker'): ChildProcess => {
     const child = spawn(
@@ -87,9 +110,9 @@ export const startInstance = async (): Promise<Instance> => {
           REDSHANK_DATA: data,
           REDSHANK_DEMO: '0',
           REDSHANK_LOG: 'info',
-          DATABASE_URL: database.appUrl,
-          DATABASE_OWNER_URL: database.ownerUrl,
-          DATABASE_JOBS_URL: database.jobsUrl,
+          DATABASE_URL: overLine(database.appUrl),
+          DATABASE_OWNER_URL: overLine(database.ownerUrl),
+          DATABASE_JOBS_URL: overLine(database.jobsUrl),
         },
       },
     );
@@ -101,8 +124,9 @@ export const startInstance = async (): Promise<Instance> => {
     const said = health?.ok ? ((await health.json()) as { status: string; worker: boolean }) : null;
     return said?.status === 'ok' && said.worker;
   };
+  let isClosing = false;
   const up = async (): Promise<void> => {
-    for (let tries = 0; !(await isUp());) {
+    for (let tries = 0; !isClosing && !(await isUp());) {
       for (const part of ['server', 'worker'] as const) {
         const child = children.get(part);
         if (child && child.exitCode === null && child.signalCode === null) continue;
@@ -113,29 +137,43 @@ export const startInstance = async (): Promise<Instance> => {
     }
   };
 
+  const killed = async (part: 'server' | 'worker'): Promise<void> => {
+    const child = children.get(part);
+    if (child) await ended(child);
+  };
+
   start('server');
   await up();
+  const ends: Readonly<Record<Fault, readonly [begin: () => unknown, end: () => unknown]>> = {
+    server: [() => killed('server'), () => undefined],
+    worker: [() => killed('worker'), () => undefined],
+    database: [() => cluster.kill(), () => cluster.again()],
+    network: [network.cut, network.mend],
+    line: [line.cut, line.mend],
+    disk: [() => disk?.fill(), () => disk?.free()],
+  };
   return {
     url,
     data,
     urls: database,
-    kill: async (victim) => {
-      if (victim === 'database') await cluster.kill();
-      else {
-        const child = children.get(victim);
-        if (child) await ended(child);
-      }
+    canBeFull: disk !== null,
+    begin: async (fault) => {
+      await ends[fault][0]();
     },
-    again: async (victim) => {
-      if (victim === 'database') await cluster.again();
+    end: async (fault) => {
+      await ends[fault][1]();
       await up();
     },
-    said: () => readFile(join(data, 'log'), 'utf8'),
+    said: () => readFile(join(folder, 'log'), 'utf8'),
     close: async () => {
+      isClosing = true;
       for (const child of children.values()) await ended(child);
+      await network.close();
+      await line.close();
       await log.close();
       cluster.stop();
-      await rm(data, { recursive: true, force: true });
+      disk?.unmount();
+      await rm(folder, { recursive: true, force: true });
       await rm(program, { recursive: true, force: true });
       if (before === undefined) delete process.env.REDSHANK_TEST_PG;
       else process.env.REDSHANK_TEST_PG = before;

@@ -6,6 +6,7 @@ import { clipFiles } from '#server/features/clips/clip-files.ts';
 import { makeRep } from '#server/features/reps/rep.factory.ts';
 import { goldenClip } from '#tests/support/golden.ts';
 import { patiently } from './client.ts';
+import { call } from './post.ts';
 import type { Task } from './task.ts';
 
 const BATCH = 40;
@@ -32,15 +33,7 @@ export const marking: Task = {
       );
     });
     const marks = `/api/reps/${rep.id}/marks`;
-    // what was seen, before any figure is shown
-    const seen = await place.ask(
-      'POST',
-      `/api/visits/${visit.id}/sides/${trial.supportSide}/call`,
-      {
-        json: { seen: 'early', confidence: 'sure' },
-      },
-    );
-    assert.equal(seen?.status, 201);
+    await call(place, visit.id, trial.supportSide);
     return {
       act: async () => {
         for (let at = 0; at < golden.commands.length; at += BATCH) {

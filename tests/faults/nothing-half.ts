@@ -3,10 +3,14 @@ import { readdir } from 'node:fs/promises';
 import { join } from 'node:path';
 import { product } from '#server/db/in-practice.ts';
 import { Clip } from '#server/features/clips/clip.entity.ts';
-import { hiddenFiles } from '#server/features/clips/clip-files.ts';
+import { hiddenFiles, keptFilmKey } from '#server/features/clips/clip-files.ts';
 import { Upload } from '#server/features/clips/upload.entity.ts';
+import { KeptFilm } from '#server/features/replays/film/kept-film.entity.ts';
 import { Replay } from '#server/features/replays/replay.entity.ts';
+import { reportKey } from '#server/features/reports/report-files.ts';
+import { Report } from '#server/features/reports/report.entity.ts';
 import type { Rep } from '#server/features/reps/rep.entity.ts';
+import type { Visit } from '#server/features/visits/visit.entity.ts';
 import type { Place } from './place.ts';
 
 const filesUnder = async (root: string): Promise<string[]> => {
@@ -26,6 +30,8 @@ export const expectNothingHalf = async ({
   const { files, incoming } = await inPractice(product(practiceId), async ({ em }) => {
     const clips = await em.find(Clip, {});
     const replays = await em.find(Replay, { hiddenHead: { $ne: null } }, { populate: ['rep'] });
+    const films = await em.find(KeptFilm, { state: 'ready' }, { populate: ['replay.rep'] });
+    const reports = await em.find(Report, { state: 'ready' }, { populate: ['visit'] });
     const underWay = await em.find(Upload, {});
     return {
       files: [
@@ -34,6 +40,13 @@ export const expectNothingHalf = async ({
           const clipId = (rep.unwrap() as Rep).clip.id;
           return Object.values(hiddenFiles(practiceId, clipId, id, hiddenHead?.id ?? ''));
         }),
+        ...films.map(({ id, replay }) => {
+          const { rep } = replay.unwrap() as Replay;
+          return keptFilmKey(practiceId, (rep.unwrap() as Rep).clip.id, id);
+        }),
+        ...reports.map(({ id, visit }) =>
+          reportKey(practiceId, (visit.unwrap() as Visit).athlete.id, id),
+        ),
       ],
       incoming: new Set(underWay.flatMap(({ id }) => [id, `${id}.json`])),
     };

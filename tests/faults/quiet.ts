@@ -8,6 +8,8 @@ const TRIES = 1200;
 const OPEN = `
   select 'clip ' || state as what from clip where state in ('waiting', 'preparing')
   union all select 'reading' from side_setting where stale
+  union all select 'report' from report where state = 'asked'
+  union all select 'film' from kept_film where state = 'asked'
   union all select 'erasure' from erasure where done_at is null
   union all select 'outbox ' || queue from job_outbox where sent_at is null
   union all select 'job ' || name || ' ' || state::text from pgboss.job
