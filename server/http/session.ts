@@ -58,6 +58,8 @@ export interface SessionKeeper {
   readonly whoIsBeforeCodes: RequestHandler;
   /** The session of this request's cookie, or null. */
   readonly find: (req: Request, res: Response) => Promise<OpenSession | null>;
+  /** The same without giving it more time. */
+  readonly findAsItIs: (req: Request) => Promise<OpenSession | null>;
   readonly findById: (id: string) => Promise<OpenSession | null>;
   /** The value of a `Set-Cookie` header that carries this session. */
   readonly cookieFor: (sessionId: string) => string;
@@ -101,9 +103,16 @@ export const keepSessions = (options: {
     return sessionOf(row);
   };
 
-  const find = async (req: Request, res: Response): Promise<OpenSession | null> => {
+  const namedBy = (req: Request): z.infer<typeof claims> | null => {
     const token = cookieIn(req, COOKIE, secure);
-    const named = token === undefined ? null : readToken(token, key);
+    return token === undefined ? null : readToken(token, key);
+  };
+  const findAsItIs = async (req: Request): Promise<OpenSession | null> => {
+    const named = namedBy(req);
+    return named && findById(named.sid);
+  };
+  const find = async (req: Request, res: Response): Promise<OpenSession | null> => {
+    const named = namedBy(req);
     if (!named) return null;
     const session = await findById(named.sid);
     // Half of its time is left for the requests that are already under way.
@@ -127,7 +136,7 @@ export const keepSessions = (options: {
       next();
     });
 
-  return { whoIs, whoIsBeforeCodes, find, findById, cookieFor, setCookie, clearCookie };
+  return { whoIs, whoIsBeforeCodes, find, findAsItIs, findById, cookieFor, setCookie, clearCookie };
 };
 
 const readToken = (token: string, key: string): z.infer<typeof claims> | null => {

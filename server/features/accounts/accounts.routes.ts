@@ -5,6 +5,7 @@ import { setHalfSession } from '../one-time-codes/half-session.ts';
 import { changeEmail, dropEmailChange } from './change-email.ts';
 import { changeName, changePassword, ownAccount } from './own-account.ts';
 import { presentMe, presentSession } from './accounts.presenter.ts';
+import { enter } from './enter.ts';
 import {
   endSession,
   openSessions,
@@ -24,7 +25,7 @@ export const accountsFeature: Feature = ({ serve, ground }) => {
         setHalfSession(res, ground, signedIn.half);
         return { codeNeeded: true } as const;
       }
-      sessions.setCookie(res, signedIn.session.id);
+      await enter(ground, req, res, signedIn.session);
       return presentMe(signedIn.session);
     },
     ...signInLimits(),

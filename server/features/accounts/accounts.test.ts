@@ -31,6 +31,25 @@ describe('signing in', () => {
     expect(me.body).toEqual(answer.body);
   });
 
+  it('ends the session that this browser had until then, whoever it was of', async () => {
+    const { coach, supervisor } = api.world;
+    const cookieOf = (answer: { headers: Record<string, unknown> }) =>
+      String(answer.headers['set-cookie']).split(';')[0] ?? '';
+    const mine = cookieOf(await signIn(coach.email).expect(200));
+    const elsewhere = cookieOf(await signIn(coach.email).expect(200));
+    const me = (cookie: string) => api.nobody.get('/api/me').set('Cookie', cookie);
+
+    const refused = signIn(coach.email, 'not the word').set('Cookie', mine);
+    await refused.expect(401);
+    await me(mine).expect(200);
+
+    const next = await signIn(supervisor.email).set('Cookie', mine).expect(200);
+    expect([next.headers['set-cookie']].flat()).toHaveLength(1);
+    await me(mine).expect(401);
+    await me(elsewhere).expect(200);
+    expect((await me(cookieOf(next)).expect(200)).body.user.id).toBe(supervisor.id);
+  });
+
   it('stands in the audit trail', async () => {
     const { owner, practiceId } = api.world;
     await signIn(owner.email).expect(200);

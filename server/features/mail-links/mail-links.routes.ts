@@ -2,6 +2,7 @@ import { routes } from '#shared/contracts/routes.ts';
 import { letterLimits, mailLinkLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
 import { presentMe } from '../accounts/accounts.presenter.ts';
+import { enter } from '../accounts/enter.ts';
 import { askMailLink } from './ask-mail-link.ts';
 import { confirmEmail } from './confirm-email.ts';
 import { liveMailLink } from './live-mail-link.ts';
@@ -9,7 +10,6 @@ import { presentMailLink } from './mail-links.presenter.ts';
 import { join, resetPassword } from './mail-links.service.ts';
 
 export const mailLinksFeature: Feature = ({ serve, ground }) => {
-  const { sessions } = ground;
   const tries = mailLinkLimits();
 
   serve(routes.forgot, ({ body }) => askMailLink(ground, 'reset', body), ...letterLimits());
@@ -31,7 +31,7 @@ export const mailLinksFeature: Feature = ({ serve, ground }) => {
     routes.join,
     async ({ body, req, res }) => {
       const session = await join(ground, body, req.get('user-agent'));
-      sessions.setCookie(res, session.id);
+      await enter(ground, req, res, session);
       return presentMe(session);
     },
     ...tries,

@@ -2,6 +2,7 @@ import { routes } from '#shared/contracts/routes.ts';
 import { ownPasswordLimits, secondStepLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
 import { presentMe } from '../accounts/accounts.presenter.ts';
+import { enter } from '../accounts/enter.ts';
 import { clearHalfSession, readHalfSession } from './half-session.ts';
 import {
   confirmCodes,
@@ -12,7 +13,7 @@ import {
 import { signInWithCode } from './sign-in-code.ts';
 
 export const oneTimeCodesFeature: Feature = ({ serve, ground }) => {
-  const { sessions, sealer } = ground;
+  const { sealer } = ground;
   const tries = ownPasswordLimits();
 
   serve(
@@ -21,7 +22,7 @@ export const oneTimeCodesFeature: Feature = ({ serve, ground }) => {
       const half = readHalfSession(req, ground);
       const session = await signInWithCode(ground, half, body.code, req.get('user-agent'));
       clearHalfSession(res, ground);
-      sessions.setCookie(res, session.id);
+      await enter(ground, req, res, session);
       return presentMe(session);
     },
     ...secondStepLimits((req) => readHalfSession(req, ground)?.userId ?? null),
