@@ -6,7 +6,11 @@ import { type RefObject, useEffect, useRef } from 'react';
  */
 export function useGoesOnHere<E extends HTMLElement>(step: unknown): RefObject<E | null> {
   const here = useRef<E>(null);
+  const before = useRef(step);
   useEffect(() => {
+    // a page that has just been opened is no step
+    if (before.current === step) return;
+    before.current = step;
     if (document.activeElement === document.body) here.current?.focus();
   }, [step]);
   return here;

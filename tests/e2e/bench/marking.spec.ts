@@ -31,9 +31,11 @@ test.beforeEach(async ({ page }) => {
 
 test('the clip is a slider over its frames, and the address keeps the frame', async ({ page }) => {
   await openBench(page, made.clipId);
-  await slider(page).focus();
+  // nothing was pressed yet, and nothing has taken the focus: the first arrow is the clip's
+  await expect(page.locator('body')).toBeFocused();
   await page.keyboard.press('ArrowRight');
   await showsFrame(page, 1);
+  await expect(slider(page)).toBeFocused();
   await page.keyboard.press('PageUp');
   await showsFrame(page, 11);
   await page.keyboard.press('End');

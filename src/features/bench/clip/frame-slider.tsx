@@ -1,4 +1,4 @@
-import type { KeyboardEvent, Ref } from 'react';
+import { type KeyboardEvent, type RefObject, useEffect, useEffectEvent } from 'react';
 import { liftText } from '#shared/overlay/figures.ts';
 import { frameIndex, type FrameIndex } from '#shared/timing/units.ts';
 import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
@@ -6,6 +6,20 @@ import { liftAt } from '../model/hill.ts';
 import { goTo } from '../store/bench-store.ts';
 
 const TEN = 10;
+
+const withModifier = ({
+  altKey,
+  ctrlKey,
+  metaKey,
+}: Pick<KeyboardEvent, 'altKey' | 'ctrlKey' | 'metaKey'>) => altKey || ctrlKey || metaKey;
+
+/** Where the focus is when a page has just been opened. */
+const isNowhere = (target: EventTarget | null): boolean =>
+  target instanceof HTMLElement && target.matches('body, main');
+
+/** The other keys move a page that is taller than its window. */
+const SIDEWAYS = ['ArrowLeft', 'ArrowRight'];
+const pageScrolls = () => document.documentElement.scrollHeight > window.innerHeight;
 
 /** Where a key of the slider pattern leads; null for other keys. */
 export const steppedTo = (
@@ -30,9 +44,15 @@ export const steppedTo = (
 /**
  * The clip as a slider over its frames (WAI-ARIA pattern): arrows one frame, Page Up and Page Down
  * ten, Home and End the rep's bounds; Enter places the landmark asked for. It lies over the picture
- * and leaves the pointer to the stage.
+ * and leaves the pointer to the stage. It takes the first such key also where nothing has the focus yet.
  */
-export function FrameSlider({ ref, onEnter }: { ref: Ref<HTMLDivElement>; onEnter: () => void }) {
+export function FrameSlider({
+  ref,
+  onEnter,
+}: {
+  ref: RefObject<HTMLDivElement | null>;
+  onEnter: () => void;
+}) {
   const { store, times } = useBenchTools();
   const { current, figures } = useBenchModel();
   const frame = useBench((state) => state.frame);
@@ -45,13 +65,7 @@ export function FrameSlider({ ref, onEnter }: { ref: Ref<HTMLDivElement>; onEnte
     start: current?.rep.startFrame ?? 0,
     end: current?.rep.endFrame ?? count - 1,
   };
-  const onKeyDown = (event: KeyboardEvent) => {
-    if (event.altKey || event.ctrlKey || event.metaKey) return;
-    if (event.key === 'Enter') {
-      event.preventDefault();
-      onEnter();
-      return;
-    }
+  const step = (event: Pick<KeyboardEvent, 'key' | 'preventDefault'>) => {
     // keys can come faster than the page is drawn: each counts from where the one before it led
     const to = steppedTo(event.key, store.getState().frame, count, bounds);
     if (to === null) return;
@@ -59,6 +73,27 @@ export function FrameSlider({ ref, onEnter }: { ref: Ref<HTMLDivElement>; onEnte
     store.setState({ playing: false });
     goTo(store, to);
   };
+  const onKeyDown = (event: KeyboardEvent) => {
+    if (withModifier(event)) return;
+    if (event.key === 'Enter') {
+      event.preventDefault();
+      onEnter();
+      return;
+    }
+    step(event);
+  };
+  const fromNowhere = useEffectEvent((event: WindowEventMap['keydown']) => {
+    if (event.defaultPrevented || withModifier(event) || !isNowhere(event.target)) return;
+    if (!SIDEWAYS.includes(event.key) && pageScrolls()) return;
+    if (steppedTo(event.key, store.getState().frame, count, bounds) === null) return;
+    ref.current?.focus({ preventScroll: true });
+    step(event);
+  });
+  useEffect(() => {
+    const onWindowKey = (event: WindowEventMap['keydown']) => fromNowhere(event);
+    window.addEventListener('keydown', onWindowKey);
+    return () => window.removeEventListener('keydown', onWindowKey);
+  }, []);
   return (
     <div
       ref={ref}
