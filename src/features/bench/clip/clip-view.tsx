@@ -121,7 +121,8 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
       onViewport={(next) => store.setState({ viewport: next })}
       hand={hand}
       draw={draw}
-      asked={target}
+      // no ring over nothing, and no press on it: the first picture is still on its way
+      asked={pictures.shown === null ? null : target}
       movable={document.may.mark}
       onPlace={placeAt}
       onPass={pass}
