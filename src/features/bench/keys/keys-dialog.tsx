@@ -25,7 +25,7 @@ const FIXED: readonly { keys: readonly string[]; does: string }[] = [
 ];
 
 const KEY =
-  'inline-block rounded-[3px] border border-edge bg-sheet px-2 text-caption font-bold text-ink';
+  'inline-block rounded-[3px] border border-edge bg-sheet px-2 font-sans text-caption font-bold text-ink';
 
 /** Every key of the Bench. The lower ones can be changed: press the button, then the new key. */
 export function KeysDialog() {
