@@ -4,6 +4,7 @@ import type { Account, nameBody, passwordBody } from '#shared/contracts/accounts
 import type { Unit } from '../../db/in-practice.ts';
 import { Problem } from '../../http/problem.ts';
 import { audit } from '../audit/audit.ts';
+import { needHardToGuess } from './guessable.ts';
 import { endSessionsOf } from './open-session.ts';
 import { openEmailChange } from './open-email-change.ts';
 import { hashPassword, passwordFits } from './password.ts';
@@ -54,13 +55,18 @@ export const needPassword = async (work: Work, password: string): Promise<void> 
   if (!(await passwordFits(password, hash))) throw new Problem('password-wrong');
 };
 
-/** @param sessionId the session that goes on; every other ends */
+/**
+ * @param sessionId the session that goes on; every other ends
+ * @throws Problem 'password-wrong' or 'invalid-input'
+ */
 export const changePassword = async (
   work: Work,
   { current, next }: z.output<typeof passwordBody>,
   sessionId: string,
 ): Promise<void> => {
   await needPassword(work, current);
+  const { name, email } = await work(ownAccount);
+  await needHardToGuess(next, [name, email], 'next');
   const passwordHash = await hashPassword(next);
   await work(async (unit) => {
     const { id } = unit.actor;

@@ -7,6 +7,7 @@ import { Problem } from '../../http/problem.ts';
 import type { OpenSession } from '../../http/session.ts';
 import type { Ground } from '../../main/ground.ts';
 import { endSessionsOf, openSession } from '../accounts/open-session.ts';
+import { needHardToGuess } from '../accounts/guessable.ts';
 import { notify } from '../accounts/notices.ts';
 import { hashPassword } from '../accounts/password.ts';
 import { User } from '../accounts/user.entity.ts';
@@ -18,7 +19,7 @@ type Door = Pick<Ground, 'orm' | 'inPractice' | 'sessions'>;
 
 /**
  * Makes the account that a link invites to, and for a new practice the practice with it.
- * @throws Problem 'link-gone' or 'address-taken'
+ * @throws Problem 'link-gone', 'invalid-input' or 'address-taken'
  */
 export const join = async (
   ground: Door,
@@ -26,6 +27,7 @@ export const join = async (
   userAgent: string | undefined,
 ): Promise<OpenSession> => {
   const link = await liveMailLink(ground, token, ['invitation', 'start']);
+  await needHardToGuess(password, [name, link.email, link.practice_name], 'password');
   const passwordHash = await hashPassword(password);
   const practiceId = link.practice_id ?? randomUUID();
   try {
@@ -51,14 +53,19 @@ export const join = async (
 
 /**
  * Sets a new password and ends every session: whoever had the old one is out.
- * @throws Problem 'link-gone'
+ * @throws Problem 'link-gone' or 'invalid-input'
  */
 export const resetPassword = async (
   ground: Door,
   { token, password }: z.output<typeof resetBody>,
 ): Promise<void> => {
-  const { practice_id: practiceId, user_id: userId } = await liveMailLink(ground, token, ['reset']);
+  const {
+    practice_id: practiceId,
+    user_id: userId,
+    email,
+  } = await liveMailLink(ground, token, ['reset']);
   if (practiceId === null || userId === null) throw new Problem('link-gone');
+  await needHardToGuess(password, [email], 'password');
   const passwordHash = await hashPassword(password);
   await ground.inPractice(product(practiceId), async (unit) => {
     await useUp(unit.em, token);
