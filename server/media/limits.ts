@@ -3,6 +3,11 @@
 /** 2 GiB: what a browser's upload of one phone clip may weigh. */
 export const maxBytes = 2 * 1024 ** 3;
 
+/** 64 GiB: what one person may send within a day, some three hundred clips of 200 MB. */
+export const maxBytesADay = 64 * 1024 ** 3;
+/** Uploads of one person that may be under way. */
+export const maxOpenUploads = 50;
+
 /** Prepared frames of one clip: 30 s at 240 frames per second, 4 min at 30. */
 export const maxFrames = 7200;
 

@@ -29,6 +29,7 @@ export const PROBLEMS = {
   'codes-first': [409, 'Turn on one-time codes for your own account first.'],
   'last-owner': [409, 'A practice needs an owner. Make somebody else an owner first.'],
   'too-many-tries': [429, 'Too many tries. Wait a little, then try again.'],
+  'upload-quota': [429, 'You have sent as much as one person may within a day. Go on tomorrow.'],
   // what you asked for
   'not-found': [404, 'There is nothing here, or nothing that you may see.'],
   'invalid-input': [422, 'Some of what was sent cannot be used.'],

@@ -13,7 +13,7 @@ import { staffOf } from '../../http/session.ts';
 import { acceptClip } from './accept-clip.ts';
 import { clipInSight } from './clip-in-sight.ts';
 import { presentClip } from './clips.presenter.ts';
-import { needSize, needUploadAllowed } from './upload-gate.ts';
+import { needQuota, needSize, needUploadAllowed } from './upload-gate.ts';
 
 /** Where this request's file is written; removed when the request is over, however it ends. */
 const ownFolder =
@@ -63,10 +63,12 @@ const readForm: RequestHandler = (req, res, next) => {
 /** Clips as a form, for scripts. Who asks, consent and safety are settled before the body is read. */
 export const formUploadFeature: Feature = ({ serve, ground }) => {
   const gate: RequestHandler = async (req, res, next) => {
-    needSize(Number(req.headers['content-length'] ?? 0));
-    await ground.inPractice(staffOf(res).actor, (unit) =>
-      needUploadAllowed(unit, String(req.params.id)),
-    );
+    const bytes = Number(req.headers['content-length'] ?? 0);
+    needSize(bytes);
+    await ground.inPractice(staffOf(res).actor, async (unit) => {
+      await needUploadAllowed(unit, String(req.params.id));
+      await needQuota(unit, bytes);
+    });
     next();
   };
 

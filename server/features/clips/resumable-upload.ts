@@ -18,7 +18,7 @@ import { needOpen } from '../athletes/consent-gate.ts';
 import { acceptClip, shownName } from './accept-clip.ts';
 import { Clip } from './clip.entity.ts';
 import { clipFiles, clipPrefix } from './clip-files.ts';
-import { cameraOf, needSize, needUploadAllowed } from './upload-gate.ts';
+import { cameraOf, needQuota, needSize, needUploadAllowed } from './upload-gate.ts';
 import { Upload } from './upload.entity.ts';
 
 const UPLOADS = '/api/uploads';
@@ -132,6 +132,7 @@ export const resumableUploadFeature: Feature = ({ serve, router, ground }) => {
     cameraOf({ name, view, supportSide, mirrored });
     const upload = await work(async (unit) => {
       const { visit } = await needUploadAllowed(unit, params.id);
+      await needQuota(unit, bytes);
       return unit.em.create(Upload, {
         visit,
         name,
