@@ -12,12 +12,12 @@ export function ExerciseFacts({
   cue = '',
 }: {
   exercise: ExerciseWords;
-  /** The coach's own. */
-  cue?: string;
+  /** The coach's own; null where what to think of stands above already. */
+  cue?: string | null;
 }) {
   const { setUp, sideLines, foot, cues, easier, harder, goOnWhen, goBackWhen, notWhen } = exercise;
   return (
-    <dl className="grid gap-x-6 gap-y-3 phone:grid-cols-[112px_minmax(0,1fr)]">
+    <dl className="grid gap-x-6 gap-y-3 phone:grid-cols-[112px_minmax(0,1fr)] print:grid-cols-[96px_minmax(0,1fr)_96px_minmax(0,1fr)] print:gap-x-3 print:gap-y-1">
       <Fact name="Set up">
         <Lines lines={setUp} ordered />
       </Fact>
@@ -25,9 +25,11 @@ export function ExerciseFacts({
         <Lines lines={sideLines} />
       </Fact>
       <Fact name="Foot">{foot}</Fact>
-      <Fact name="Think of">
-        <Lines lines={cue === '' ? cues : [cue, ...cues]} />
-      </Fact>
+      {cue !== null && (
+        <Fact name="Think of">
+          <Lines lines={cue === '' ? cues : [cue, ...cues]} />
+        </Fact>
+      )}
       <Fact name="Easier">{easier}</Fact>
       <Fact name="Harder">{harder}</Fact>
       <Fact name="Go on when">

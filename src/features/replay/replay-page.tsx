@@ -68,7 +68,7 @@ export function ReplayPage({
             />
           )}
         </div>
-        <div className="px-4 text-sub leading-7 tablet:px-0">
+        <div className="px-4 text-sub leading-7 tablet:px-0 print:text-note print:leading-[22px]">
           <Result replay={replay} />
           <StopIfItHurts contact={practice.contact} coach={coachName} />
           {message !== '' && (

@@ -55,7 +55,7 @@ export function AthletePlan({
   return (
     <section aria-label="Your plan" className="border-t border-rule py-6">
       {newer}
-      <h2 className="text-filled font-bold">
+      <h2 className="break-after-avoid text-filled font-bold">
         {plan.items.length === 0 ? 'Your next test' : 'Your plan'}
       </h2>
       <p className="mt-1">

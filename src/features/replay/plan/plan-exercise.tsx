@@ -1,6 +1,7 @@
 import { useId, useState } from 'react';
 import type { AthletePlanItem } from '#shared/contracts/athlete-plan.ts';
 import { Button } from '#src/ui/button.tsx';
+import { cx } from '#src/ui/class-names.ts';
 import { ExerciseDrawing } from '#src/ui/exercise-drawing.tsx';
 import { ExerciseFacts } from '#src/ui/exercise-facts.tsx';
 import { doseWords } from '#src/ui/exercise-words.ts';
@@ -22,7 +23,7 @@ export function PlanExercise({
   const id = useId();
   const { exercise, name, side, dose, cues, cue, stage } = item;
   return (
-    <li className="break-inside-avoid border-t border-rule py-6 first:border-0">
+    <li className="break-inside-avoid border-t border-rule py-6 first:border-0 print:flow-root print:py-4">
       {newStage && (
         <p className="text-note text-soft">
           {stage === 1 ? 'Begin with' : `Step ${stage}, once what comes before is easy`}
@@ -32,7 +33,7 @@ export function PlanExercise({
       <p>
         Standing leg: <b>{side}</b>. {doseWords(dose)}.
       </p>
-      <div className="mt-3 max-w-[480px]">
+      <div className="mt-3 max-w-[480px] print:float-right print:mb-2 print:ml-6 print:mt-0 print:w-[220px]">
         <ExerciseDrawing exercise={exercise} side={side} />
       </div>
       <ul className="mt-3 list-disc pl-5">
@@ -51,8 +52,8 @@ export function PlanExercise({
       >
         How it is done
       </Button>
-      <div id={id} className={open ? 'mt-2' : 'hidden print:mt-2 print:block'}>
-        <ExerciseFacts exercise={item} cue={cue} />
+      <div id={id} className={cx('mt-2 print:clear-both print:block', !open && 'hidden')}>
+        <ExerciseFacts exercise={item} cue={null} />
       </div>
     </li>
   );

@@ -63,7 +63,11 @@ export function Player({
           onFailed();
         }}
       />
-      <img src={posterAddress(token)} alt="" className="hidden max-h-[60vh] w-auto print:block" />
+      <img
+        src={posterAddress(token)}
+        alt=""
+        className="ml-4 hidden max-h-[34vh] w-auto print:block"
+      />
       {failed ? (
         <div role="alert" className="px-4 py-3">
           <p>The film could not be loaded. Check the connection, then try again.</p>
