@@ -24,7 +24,7 @@ const linkClass = ({ isActive }: { isActive: boolean }) =>
 export function Header() {
   const { practice } = useMe();
   return (
-    <header className="flex h-14 items-center gap-4 border-b border-rule bg-mud px-4 tablet:gap-8 tablet:px-12">
+    <header className="flex h-14 items-center gap-4 border-b border-rule bg-mud px-4 tablet:gap-8 tablet:px-12 print:hidden">
       <Link
         to={paths.today()}
         className="flex min-h-[44px] items-center gap-2 text-sub font-bold no-underline"

@@ -41,7 +41,7 @@ export function PlanItemRow({
     <li className="border-b border-rule py-6 first:pt-0">
       {newStage && <p className="mb-3 text-note text-soft">Step {item.stage}</p>}
       <div className="grid gap-x-8 gap-y-4 tablet:grid-cols-[minmax(0,360px)_minmax(0,1fr)]">
-        <div>
+        <div className="print:max-w-[300px]">
           <ExerciseDrawing exercise={item.exercise} side={item.side} />
         </div>
         <div>

@@ -89,7 +89,7 @@ function GateDial({
   });
   return (
     <figure>
-      <div className="rounded bg-dusk p-2 pb-3">
+      <div className="rounded bg-dusk p-2 pb-3 [print-color-adjust:exact]">
         <OverlaySvg
           primitives={primitives}
           width={width}
