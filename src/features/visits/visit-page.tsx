@@ -71,7 +71,7 @@ function Opened({ visit, clips }: { visit: Visit; clips: readonly Clip[] }) {
     >
       <ConsentStep athlete={athlete} visit={visit} may={may} />
       <SafetyStep visit={visit} may={may} />
-      <FilmStep visit={visit} may={may} unfold={clips.length === 0} />
+      <FilmStep visit={visit} may={may} beforeClips={clips.length === 0} />
       <UploadStep visit={visit} clips={clips} may={may} open={open} />
       <CallStep visit={visit} clips={clips} may={may} />
       <ReportsSection visitId={visit.id} clips={clips} may={may} />

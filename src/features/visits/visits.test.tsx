@@ -171,6 +171,12 @@ describe('filming', () => {
     expect(await screen.findByText('Phone at pelvis height, level')).toBeVisible();
     expect(screen.getAllByRole('figure')).toHaveLength(9);
     expect(screen.getByText(/lift is known to ± 7° instead of ± 2°/)).toBeVisible();
+    expect(screen.queryByText(/^For clips that are still to be sent/)).toBeNull();
+  });
+
+  it('says whose figures these are once a clip with its own is there', async () => {
+    visitApi({ visit: { safety: aSafety() }, clips: [aClip()] });
+    expect(await screen.findByText(/^For clips that are still to be sent/)).toBeVisible();
   });
 });
 

@@ -17,12 +17,12 @@ import { SetUpChips } from './set-up-chips.tsx';
 export function FilmStep({
   visit,
   may,
-  unfold,
+  beforeClips,
 }: {
   visit: Visit;
   may: May;
   /** Before the first clip the guide stands open. */
-  unfold: boolean;
+  beforeClips: boolean;
 }) {
   const mayInPractice = useMayInPractice();
   const protocol = useProtocol();
@@ -41,6 +41,12 @@ export function FilmStep({
         <FilmingForm key={visit.version} visit={visit} onDone={() => setEditing(false)} />
       ) : (
         <>
+          {!beforeClips && (
+            <p className="mt-4 max-w-lead text-note text-soft">
+              For clips that are still to be sent. Each clip that is here has its own figures: on
+              the Bench, under Set-up.
+            </p>
+          )}
           <dl className="mt-5 grid grid-cols-2 gap-x-8 gap-y-3 phone:grid-cols-3 desk:grid-cols-5">
             {FILMING.map(({ key, label, unit, without, studied }) => {
               const value = filming[key];
@@ -77,7 +83,7 @@ export function FilmStep({
         </>
       )}
       <div className="mt-6">
-        <Fold title="How to film it" open={unfold}>
+        <Fold title="How to film it" open={beforeClips}>
           {protocol && <FilmingGuide filming={filming} protocol={protocol} />}
         </Fold>
       </div>
