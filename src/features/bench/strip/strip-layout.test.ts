@@ -70,4 +70,13 @@ describe('labels and pins', () => {
     const [late] = pinRow([7], () => 7, { x: () => 390, right: 400 });
     expect(late).toMatchObject({ x: 390, room: 34, left: 366 });
   });
+
+  it('puts pins of one moment beside each other, each with its line at its own moment', () => {
+    const at = [100, 107, 110, 390];
+    const pins = pinRow(at, (frame) => frame, { x: (frame) => frame, right: 400 });
+    expect(pins.map(({ x }) => x)).toEqual(at);
+    expect(pins.slice(0, 3).map(({ left }) => left)).toEqual([100, 136, 172]);
+    const end = pinRow([380, 385, 390], (frame) => frame, { x: (frame) => frame, right: 400 });
+    expect(end.map(({ left }) => left)).toEqual([294, 330, 366]);
+  });
 });

@@ -127,6 +127,7 @@ export interface Pin<T> {
 const LEAST_ROOM = 84;
 const MOST_ROOM = 190;
 const INITIALS = 34;
+const PIN_GAP = 2;
 
 /** Pins in one row: each gets the room up to the next one. */
 export const pinRow = <T>(
@@ -135,10 +136,22 @@ export const pinRow = <T>(
   { x, right }: Pick<StripLayout, 'x' | 'right'>,
 ): Pin<T>[] => {
   const sorted = items.map((item) => ({ item, x: x(frameOf(item)) })).sort((a, b) => a.x - b.x);
-  return sorted.map((pin, n) => {
-    const next = sorted[n + 1]?.x ?? right;
-    const free = next - pin.x - 6;
+  const pins: Pin<T>[] = [];
+  for (const [n, pin] of sorted.entries()) {
+    const before = pins.at(-1);
+    const left = Math.max(pin.x, before ? before.left + before.room + PIN_GAP : pin.x);
+    const free = (sorted[n + 1]?.x ?? right) - left - 6;
     const room = free < LEAST_ROOM ? INITIALS : Math.min(MOST_ROOM, free);
-    return { ...pin, room, left: Math.min(pin.x, right - room) };
-  });
+    pins.push({ ...pin, room, left });
+  }
+  // what ran over the end is pushed back, and with it those before it
+  let end = right;
+  return pins
+    .reverse()
+    .map((pin) => {
+      const left = Math.min(pin.left, end - pin.room);
+      end = left - PIN_GAP;
+      return { ...pin, left };
+    })
+    .reverse();
 };
