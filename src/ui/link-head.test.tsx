@@ -40,4 +40,11 @@ describe('the hidden head of a link', () => {
     render(<LinkHead head="failed" />);
     expect(screen.queryByRole('button')).toBeNull();
   });
+
+  it('names the earlier lift that is meant', () => {
+    const { rerender } = render(<LinkHead head="shown" besideOf="2026-03-03" />);
+    expect(screen.getByText('Beside it 3 March: it is shown.')).toBeVisible();
+    rerender(<LinkHead head="to-be-looked-at" besideOf="2026-03-03" />);
+    expect(screen.getByText(/^Beside it 3 March: the box .* is not shown until/)).toBeVisible();
+  });
 });

@@ -59,6 +59,13 @@ export function ReplayLinks({
               {link.state === 'live' && link.head !== 'shown' && (
                 <LinkHead head={link.head} onAgain={onHideAgain && (() => onHideAgain(link))} />
               )}
+              {link.state === 'live' && link.before && (
+                <LinkHead
+                  head={link.before.head}
+                  besideOf={link.before.visitDay}
+                  onAgain={onHideAgain && (() => onHideAgain(link))}
+                />
+              )}
               {link.state === 'live' && <LinkFilm link={link} {...film} />}
             </div>
             {link.state === 'live' && onEnd && (

@@ -3,7 +3,8 @@ import { otherId, visitId } from '#tests/support/records.ts';
 import { repId } from '#tests/support/records.ts';
 import { aReading, resultOf } from '#tests/support/side-page.ts';
 import { chosenRep, endOf, endText, playableReps, relationOf } from './ends.ts';
-import { momentText, steppedTo } from './films/moment-slider.tsx';
+import { momentText } from './films/moment-slider.tsx';
+import { steppedTo } from '#src/ui/stepped-to.ts';
 import { degrees } from '#shared/geometry/units.ts';
 import { frameIndex } from '#shared/timing/units.ts';
 

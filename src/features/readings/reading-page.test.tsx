@@ -4,8 +4,19 @@ import type { Athlete } from '#shared/contracts/athletes.ts';
 import type { SidePage } from '#shared/contracts/readings.ts';
 import type { Replay } from '#shared/contracts/replays.ts';
 import { routes } from '#shared/contracts/routes.ts';
+import { STANDARD_GATES } from '#shared/protocol/protocol.ts';
 import { Refuse } from '#tests/support/fake-api.ts';
-import { aClip, anAthlete, aRep, aVisit, clipId, repId, visitId } from '#tests/support/records.ts';
+import {
+  aClip,
+  anAthlete,
+  aRep,
+  aVisit,
+  aVisitRow,
+  clipId,
+  otherId,
+  repId,
+  visitId,
+} from '#tests/support/records.ts';
 import { aReplayLink } from '#tests/support/replay-link.ts';
 import { renderAt, signedInApi } from '#tests/support/render-app.tsx';
 import { aSideReview } from '#tests/support/review.ts';
@@ -29,6 +40,7 @@ function readingApi(page: SidePage | Refuse, athlete: Partial<Athlete> = {}) {
     )
     .on(routes.visit, () => ({ visit: aVisit(), clips: [aClip()] }))
     .on(routes.listReps, () => ({ items: [1, 2, 3].map(aRep) }))
+    .on(routes.listVisits, () => ({ items: [] }))
     .on(routes.listReplays, () => ({ items: links }))
     .on(routes.makeReplay, () => {
       links = [aLink];
@@ -274,6 +286,38 @@ describe('a side without a reading', () => {
 });
 
 describe('the replay link', () => {
+  it('shows an earlier lift of the same side beside it, where one is chosen', async () => {
+    const right = { side: 'right', call: 'early', review: 'none' } as const;
+    const reading = {
+      code: 'early-turn-out',
+      label: 'Turns out early',
+      gates: STANDARD_GATES,
+      ...{ change: 6, plusMinus: 3, u: 1.5, provisional: false },
+    };
+    const row = (id: string, day: string, measured: boolean) =>
+      aVisitRow({ id, day, sides: [{ ...right, reading: measured ? reading : null }] });
+    const api = readingApi(aSidePage(aReading(resultOf('g02_early_mid_3rep')))).on(
+      routes.listVisits,
+      () => ({
+        items: [
+          row(repId(8), '2027-01-05', true),
+          row(visitId, '2026-03-03', true),
+          row(otherId, '2026-01-20', true),
+          row(repId(9), '2026-01-06', false),
+        ],
+      }),
+    );
+    const { user } = renderAt(address);
+    const replay = within(await region('Replay for the athlete'));
+    const choice = await replay.findByLabelText(/^Beside an earlier lift/);
+    // later visits, this one and unmeasured ones are none
+    expect(within(choice).getAllByRole('option')).toHaveLength(2);
+    await user.selectOptions(choice, '20 January 2026');
+    await user.click(replay.getByRole('button', { name: 'Make a link' }));
+    expect(await replay.findByDisplayValue('http://localhost/r/abc')).toBeVisible();
+    expect(api.calls(routes.makeReplay)[0]?.body).toMatchObject({ beforeVisitId: otherId });
+  });
+
   it('is made, its address shown once, counted, and ended', async () => {
     const api = readingApi(aSidePage(aReading(resultOf('g02_early_mid_3rep'))));
     const { user } = renderAt(address);
@@ -286,6 +330,7 @@ describe('the replay link', () => {
       repId: repId(1),
       fromFrame: aRep(1).startFrame,
       toFrame: aRep(1).endFrame,
+      beforeVisitId: null,
       showReading: true,
       showCall: true,
       hideHead: false,

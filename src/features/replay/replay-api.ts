@@ -20,6 +20,7 @@ export const tokenOf = (pathname: string): string | null =>
   /^\/r\/([A-Za-z0-9_-]{43})\/?$/.exec(pathname)?.[1] ?? null;
 
 export const videoAddress = (token: string): string => `/api/r/${token}/video`;
+export const beforeVideoAddress = (token: string): string => `/api/r/${token}/before/video`;
 export const filmAddress = (token: string): string => `/api/r/${token}/kept-film`;
 export const posterAddress = (token: string): string => `/api/r/${token}/poster`;
 

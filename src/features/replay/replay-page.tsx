@@ -1,7 +1,9 @@
 import { lazy, Suspense, useEffect, useMemo, useRef, useState } from 'react';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
+import { cx } from '#src/ui/class-names.ts';
 import { longDay, shortDay } from '#src/ui/days.ts';
 import { frameTimes } from '#src/video/frame-times.ts';
+import { WhichFilm } from './beside/which-film.tsx';
 import { Contact } from './contact.tsx';
 import { Comments } from './comments.tsx';
 import { KeepFilm } from './keep-film.tsx';
@@ -15,6 +17,9 @@ import { useStillLive } from './use-still-live.ts';
 const AthletePlan = lazy(() =>
   import('./plan/athlete-plan.tsx').then((part) => ({ default: part.AthletePlan })),
 );
+
+/** Exact frames of two films: fetched only where the athlete asks for them. */
+const Beside = lazy(() => import('./beside/beside.tsx'));
 
 /** One replay, as the athlete sees it: the film first, then what it says, in plain words. */
 export function ReplayPage({
@@ -38,7 +43,14 @@ export function ReplayPage({
   }, [ended, onEnded]);
   const film = useRef<HTMLDivElement>(null);
   const [comment, setComment] = useState<PublicReplay['comments'][number] | null>(null);
+  const { before } = replay;
+  const [beside, setBeside] = useState(false);
+  const choose = (both: boolean) => {
+    if (both) loop.pause();
+    setBeside(both);
+  };
   const showComment = (each: PublicReplay['comments'][number]) => {
+    setBeside(false);
     setComment(each);
     loop.show(each.fromFrame);
     film.current?.scrollIntoView({ block: 'start' });
@@ -53,19 +65,42 @@ export function ReplayPage({
           {practice.name}, {shortDay(visitDay)}
         </span>
       </header>
-      <main className="tablet:mx-auto tablet:grid tablet:max-w-[1120px] tablet:grid-cols-[minmax(0,460px)_minmax(0,1fr)] tablet:items-start tablet:gap-x-12 tablet:px-8 tablet:pt-8">
+      <main
+        className={cx(
+          'tablet:mx-auto tablet:grid tablet:max-w-[1120px] tablet:items-start tablet:gap-x-12 tablet:px-8 tablet:pt-8',
+          beside
+            ? 'tablet:grid-cols-[minmax(0,620px)_minmax(0,1fr)]'
+            : 'tablet:grid-cols-[minmax(0,460px)_minmax(0,1fr)]',
+        )}
+      >
         <div ref={film} className="tablet:sticky tablet:top-4">
           {replay.head === 'being-prepared' || replay.head === 'failed' ? (
             <NoFilmYet token={token} head={replay.head} coach={coachName} onReady={onReady} />
           ) : (
-            <Player
-              token={token}
-              replay={replay}
-              times={times}
-              loop={loop}
-              comment={comment}
-              onFailed={check}
-            />
+            <>
+              {before && <WhichFilm before={before} beside={beside} onChoose={choose} />}
+              <div className={beside ? 'hidden print:block' : undefined}>
+                <Player
+                  token={token}
+                  replay={replay}
+                  times={times}
+                  loop={loop}
+                  comment={comment}
+                  onFailed={check}
+                />
+              </div>
+              {before && beside && (
+                <Suspense
+                  fallback={
+                    <p role="status" className="bg-dusk px-4 py-6 text-dusk-soft">
+                      Loading both films…
+                    </p>
+                  }
+                >
+                  <Beside token={token} replay={replay} before={before} times={times} />
+                </Suspense>
+              )}
+            </>
           )}
         </div>
         <div className="px-4 text-sub leading-7 tablet:px-0 print:text-note print:leading-[22px]">

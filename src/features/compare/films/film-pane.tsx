@@ -7,13 +7,13 @@ import { turnAt } from '#shared/reading/at-lift.ts';
 import { engineMarks } from '#shared/records/engine-input.ts';
 import { marksWith } from '#shared/records/stored-marks.ts';
 import { OverlayCanvas } from '#src/canvas/overlay-canvas.tsx';
+import type { Film } from '#src/canvas/matched/use-film.ts';
 import { longEdgeOf } from '#src/canvas/viewport.ts';
 import { Button } from '#src/ui/button.tsx';
 import { cx } from '#src/ui/class-names.ts';
 import { degrees, turn } from '#src/ui/figures.ts';
 import { paths } from '#src/ui/paths.ts';
 import type { Measured } from '../measured.ts';
-import type { Film } from './use-film.ts';
 
 /** One of the two films with its marks, and where it stands. */
 export function FilmPane({

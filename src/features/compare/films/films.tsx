@@ -4,14 +4,14 @@ import { liftWay, matchLifts } from '#shared/course/match-lifts.ts';
 import { timesOf } from '#shared/records/engine-input.ts';
 import { Button } from '#src/ui/button.tsx';
 import { cx } from '#src/ui/class-names.ts';
+import { scheduleOf } from '#src/canvas/matched/schedule.ts';
+import { useMoments } from '#src/canvas/matched/use-moments.ts';
 import { degrees } from '#src/ui/figures.ts';
 import { Empty } from '#src/ui/states.tsx';
 import { type Measured, nameOf } from '../measured.ts';
 import { FilmPane } from './film-pane.tsx';
 import { MomentSlider } from './moment-slider.tsx';
-import { scheduleOf } from './schedule.ts';
-import { useFilm } from './use-film.ts';
-import { useMoments } from './use-moments.ts';
+import { useClipFilm } from './use-clip-film.ts';
 
 const timesOfClip = ({ clip }: BenchDocument) => (clip.frames ? timesOf(clip.frames) : []);
 
@@ -36,7 +36,7 @@ export function Films({
     () => scheduleOf(moments, timesOfClip(documents[0]), timesOfClip(documents[1])),
     [moments, documents],
   );
-  const films = [useFilm(documents[0].clip), useFilm(documents[1].clip)] as const;
+  const films = [useClipFilm(documents[0].clip), useClipFilm(documents[1].clip)] as const;
   const { at, playing, goTo, toggle, failed } = useMoments(moments, schedule, films);
   const now = moments[at];
   if (!now)

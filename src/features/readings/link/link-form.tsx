@@ -1,14 +1,17 @@
-import { useQueryClient } from '@tanstack/react-query';
+import { useQuery, useQueryClient } from '@tanstack/react-query';
 import * as z from 'zod';
 import type { SidePage } from '#shared/contracts/readings.ts';
 import { replayBody } from '#shared/contracts/replays.ts';
 import { routes } from '#shared/contracts/routes.ts';
+import type { VisitRow } from '#shared/contracts/visits.ts';
+import { athleteVisitsOptions } from '#src/api/athletes.queries.ts';
 import { call } from '#src/api/client.ts';
 import { replaysOptions } from '#src/api/readings.queries.ts';
 import { Button } from '#src/ui/button.tsx';
+import { longDay } from '#src/ui/days.ts';
 import { CheckboxField } from '#src/ui/form/choice-fields.tsx';
 import { Form } from '#src/ui/form/form.tsx';
-import { SelectField, TextArea, TextField } from '#src/ui/form/text-field.tsx';
+import { type Option, SelectField, TextArea, TextField } from '#src/ui/form/text-field.tsx';
 import { useZodForm } from '#src/ui/form/use-zod-form.ts';
 import type { NamedRep } from '../side-clips.ts';
 import { DaysField } from './days-field.tsx';
@@ -19,7 +22,8 @@ import { SpanFields } from './span-fields.tsx';
 const frame = z.int('Write the number of a frame.').min(0, 'The first frame is 0.');
 const formBody = replayBody
   .omit({ visitId: true, side: true })
-  .extend({ fromFrame: frame, toFrame: frame })
+  // the empty choice of the list is none
+  .extend({ fromFrame: frame, toFrame: frame, beforeVisitId: z.string() })
   .refine(({ fromFrame, toFrame }) => toFrame > fromFrame, {
     path: ['toFrame'],
     message: 'The last frame comes after the first.',
@@ -36,12 +40,16 @@ export function LinkForm({
   onMade: (made: MadeLink) => void;
 }) {
   const client = useQueryClient();
+  // without the list the link is made all the same
+  const visits = useQuery({ ...athleteVisitsOptions(page.athlete.id), throwOnError: false });
+  const earlier = earlierVisits(page, visits.data?.items ?? []);
   const measured = page.reading !== null;
   const first = preferred(page, reps);
   const form = useZodForm(formBody, {
     repId: first?.rep.id ?? '',
     fromFrame: first?.rep.startFrame ?? 0,
     toFrame: first?.rep.endFrame ?? 0,
+    beforeVisitId: '',
     message: '',
     days: 30,
     passPhrase: null,
@@ -51,7 +59,12 @@ export function LinkForm({
   });
   const send = async (body: z.output<typeof formBody>) => {
     const made = await call(routes.makeReplay, {
-      body: { ...body, visitId: page.visit.id, side: page.side },
+      body: {
+        ...body,
+        beforeVisitId: body.beforeVisitId === '' ? null : body.beforeVisitId,
+        visitId: page.visit.id,
+        side: page.side,
+      },
     });
     void client.invalidateQueries({ queryKey: replaysOptions(page.visit.id).queryKey });
     onMade(made);
@@ -70,6 +83,14 @@ export function LinkForm({
         <DaysField />
       </div>
       <SpanFields reps={reps} />
+      {earlier.length > 0 && (
+        <SelectField
+          name="beforeVisitId"
+          label="Beside an earlier lift"
+          hint={`Standing on the ${page.side} too; both stand still at the same height of the thigh.`}
+          options={[{ value: '', label: 'none' }, ...earlier]}
+        />
+      )}
       <TextArea
         name="message"
         label={`A sentence of your own to ${page.athlete.name}`}
@@ -112,6 +133,14 @@ export function LinkForm({
     </Form>
   );
 }
+
+/** Visits before this one at which the same side was measured. */
+const earlierVisits = ({ visit, side }: SidePage, visits: readonly VisitRow[]): Option[] =>
+  visits.flatMap(({ id, day, sides }) =>
+    day < visit.day && sides.some((each) => each.side === side && each.reading !== null)
+      ? [{ value: id, label: longDay(day) }]
+      : [],
+  );
 
 /** A rep that counts in the reading rather than one that was left out. */
 const preferred = ({ reading }: SidePage, reps: readonly NamedRep[]): NamedRep | undefined => {

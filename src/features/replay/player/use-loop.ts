@@ -47,6 +47,7 @@ export function useLoop(replay: PublicReplay, times: readonly Milliseconds[]) {
       player.current?.setRate(next);
       setRate(next);
     }, []),
+    pause: useCallback(() => player.current?.pause(), []),
     show: useCallback((at: number) => player.current?.show(at), []),
   };
 }

@@ -1,12 +1,9 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
-import type { ClipWithFrames } from '#shared/contracts/clips.ts';
-import { timesOf } from '#shared/records/engine-input.ts';
 import type { FrameIndex } from '#shared/timing/units.ts';
-import { clipSourceOf } from '#src/api/clip-source.ts';
 import { type CanvasPainter, createCanvasPainter } from '#src/video/canvas-painter.ts';
 import { VideoError } from '#src/video/errors.ts';
 import { openClip } from '#src/video/open-clip.ts';
-import type { FrameSource } from '#src/video/types.ts';
+import type { ClipSource, FrameSource } from '#src/video/types.ts';
 
 /** Two films at once: each gets half of the usual memory. */
 const CACHE_BYTES = 96 * 1024 * 1024;
@@ -21,25 +18,29 @@ export interface Film {
   readonly prepare: (frame: FrameIndex, signal: AbortSignal) => Promise<() => Promise<void>>;
 }
 
-/** The prepared copy of one clip, frame by frame on a canvas. */
-export function useFilm(clip: ClipWithFrames): Film {
+/**
+ * A prepared copy, frame by frame on a canvas.
+ * @param name opened anew when it changes
+ * @param sourceOf what is opened; null where there is nothing yet
+ */
+export function useFilm(name: string, sourceOf: () => ClipSource | null): Film {
   const canvas = useRef<HTMLCanvasElement | null>(null);
   const source = useRef<FrameSource | null>(null);
   const painter = useRef<CanvasPainter | null>(null);
   const [ready, setReady] = useState(false);
   const [error, setError] = useState<VideoError | null>(null);
   const [attempt, setAttempt] = useState(0);
-  const latest = useRef(clip);
+  const latest = useRef(sourceOf);
   useEffect(() => {
-    latest.current = clip;
+    latest.current = sourceOf;
   });
 
   useEffect(() => {
     const stopper = new AbortController();
-    const { copy, frames } = latest.current;
+    const clip = latest.current();
     const open = async () => {
-      if (!copy || !frames) throw new VideoError('damaged');
-      const opened = await openClip(clipSourceOf(latest.current, copy, timesOf(frames)), {
+      if (!clip) throw new VideoError('damaged');
+      const opened = await openClip(clip, {
         signal: stopper.signal,
         cacheBytes: CACHE_BYTES,
       });
@@ -60,7 +61,7 @@ export function useFilm(clip: ClipWithFrames): Film {
       source.current = null;
       setReady(false);
     };
-  }, [clip.id, attempt]);
+  }, [name, attempt]);
 
   const attach = useCallback((element: HTMLCanvasElement | null) => {
     if (element === canvas.current) return;

@@ -1,8 +1,8 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
-import type { Matched } from '#shared/course/match-lifts.ts';
 import { type FrameIndex, frameIndex, type Milliseconds } from '#shared/timing/units.ts';
 import { createScrubScheduler, type ScrubScheduler } from '#src/video/scrub-scheduler.ts';
 import { playSlowly } from '#src/video/slow-play.ts';
+import type { FramePair } from './types.ts';
 import type { Film } from './use-film.ts';
 
 type Show = (moment: FrameIndex, signal: AbortSignal) => Promise<void>;
@@ -12,7 +12,7 @@ const RATE = 0.25;
 
 /** The moment on show in both films, and playing through all of them. */
 export function useMoments(
-  moments: readonly Matched[],
+  moments: readonly FramePair[],
   schedule: readonly Milliseconds[],
   films: readonly [Film, Film],
 ) {
