@@ -38,6 +38,8 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
   };
   const draw = useDraw();
   const target = useTarget();
+  // nothing is asked for, and no ring stands there, while the first picture is still on its way
+  const asked = pictures.shown === null ? null : target;
   const narrow = useNarrow();
   const [width, setWidth] = useState(0);
   const slider = useRef<HTMLDivElement>(null);
@@ -121,8 +123,7 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
       onViewport={(next) => store.setState({ viewport: next })}
       hand={hand}
       draw={draw}
-      // no ring over nothing, and no press on it: the first picture is still on its way
-      asked={pictures.shown === null ? null : target}
+      asked={asked}
       movable={document.may.mark}
       onPlace={placeAt}
       onPass={pass}
@@ -138,9 +139,9 @@ export function ClipView({ pictures }: { pictures: Pictures }) {
           stagePoint(view.size.width / 2, view.size.height / 2),
         );
         const all: MarkHandle[] = [...handles];
-        if (target)
+        if (asked)
           all.push({
-            label: `Place here with Enter: ${target.words}. Arrows move the cross.`,
+            label: `Place here with Enter: ${asked.words}. Arrows move the cross.`,
             at: expected ?? middle,
             asked: true,
           });
