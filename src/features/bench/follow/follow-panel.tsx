@@ -103,8 +103,8 @@ function Found({ found }: { found: Parameters<typeof foundWords>[0] }) {
 }
 
 const STANDS: readonly { value: StandsOn; label: string }[] = [
-  { value: 'left', label: 'left leg' },
-  { value: 'right', label: 'right leg' },
+  { value: 'left', label: 'left' },
+  { value: 'right', label: 'right' },
   { value: 'both', label: 'both in turn' },
 ];
 
@@ -123,7 +123,7 @@ function Collecting() {
     <>
       <fieldset className="mt-2">
         <legend className="text-dusk-soft">Stands on</legend>
-        <div className="grid grid-cols-2 gap-x-4">
+        <div className="flex flex-wrap gap-x-4">
           {STANDS.map(({ value, label }) => (
             <label key={value} className="flex min-h-[44px] items-center gap-2">
               <input
