@@ -11,6 +11,9 @@ const GAP = 9;
 
 type Row = OverlayMarks[number];
 
+/** Of a picture, pt: what stands after them then mostly fits on the same page. */
+const TALLEST = 158;
+
 const nameOf = ({ moments }: ReportKeyFrames['drawn'], { gates }: ReportReading, frame: number) => {
   switch (frame) {
     case moments.quiet:
@@ -91,7 +94,9 @@ export const writeKeyFrames = (
     return;
   }
   const { drawn } = keyFrames;
-  const width = (paper.width - 3 * GAP) / 4;
+  const column = (paper.width - 3 * GAP) / 4;
+  const tallest = Math.max(...stills.map(({ size }) => size.height / size.width));
+  const width = Math.min(column, TALLEST / tallest);
   const sizes = stills.map(({ size }) => (width * size.height) / size.width);
   const height = Math.max(...sizes) + 36;
   // the heading stays with them
@@ -104,7 +109,7 @@ export const writeKeyFrames = (
     const name = nameOf(drawn, reading, still.frame);
     const values = valuesOf(row, drawn.view === 'front');
     paper.y = top;
-    paper.within(n * (width + GAP), width, () =>
+    paper.within(n * (column + GAP), column, () =>
       paper.figure(
         `${name}: frame ${still.frame} of the clip with the marks on it, the head hidden. ${values.join(', ')}.`,
         width,
