@@ -2,9 +2,17 @@ import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import type { Route } from '#shared/contracts/route.ts';
 import { routes } from '#shared/contracts/routes.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
-import { codeOf, firstStep, secondStep, withCodes } from '#tests/support/one-time-codes.ts';
+import {
+  bytesOf,
+  codeOf,
+  firstStep,
+  secondStep,
+  withCodes,
+} from '#tests/support/one-time-codes.ts';
 import { product } from '../../db/in-practice.ts';
+import { sealWith } from '../../main/sealer.ts';
 import { User } from '../accounts/user.entity.ts';
+import { TEST_PASSWORD } from '../accounts/user.factory.ts';
 import { AuditEntry } from '../audit/audit-entry.entity.ts';
 
 const MINUTE = 60_000;
@@ -192,5 +200,27 @@ describe('the second step', () => {
     const other = await withCodes(api);
     const half = await firstStep(api, other.user.email);
     expect(await tried(half.cookie, codeOf(other.secret, 1))).toEqual(['in']);
+  });
+});
+
+describe('after the sealing key was changed', () => {
+  it('no device fits any more, a recovery code lets in, and codes are set up anew', async () => {
+    const { user, secret, recoveryCodes } = await withCodes(api);
+    const [first = '', second = ''] = recoveryCodes;
+    const codeSecret = sealWith('the key of before').seal(bytesOf(secret), user.id);
+    await api.ground.inPractice(product(api.world.practiceId), ({ em }) =>
+      em.nativeUpdate(User, { id: user.id }, { codeSecret }),
+    );
+    const { cookie } = await firstStep(api, user.email);
+    expect(await tried(cookie, codeOf(secret, 1), first)).toEqual(['code-wrong', 'in']);
+
+    const here = await api.as(user);
+    await here
+      .post('/api/account/codes/stop')
+      .send({ password: TEST_PASSWORD, code: second })
+      .expect(204);
+    const anew = await withCodes(api, { user, agent: here });
+    const next = await firstStep(api, user.email);
+    expect(await tried(next.cookie, codeOf(anew.secret, 1))).toEqual(['in']);
   });
 });

@@ -20,6 +20,15 @@ export const lockedUser = (em: EntityManager, id: string): Promise<User | null> 
     { populate: ['codeSecret', 'passwordHash'], lockMode: LockMode.PESSIMISTIC_WRITE },
   );
 
+/** Null where the instance has another key by now: no device fits any more, recovery codes do. */
+const opened = (sealer: Sealer, sealed: string, of: string): Buffer | null => {
+  try {
+    return sealer.open(sealed, of);
+  } catch {
+    return null;
+  }
+};
+
 /**
  * Takes a code of the device, which is then used up with all before it.
  * @throws Problem 'code-wrong'
@@ -32,7 +41,8 @@ export const takeDeviceCode = async (
 ): Promise<void> => {
   const sealed = user.codeSecret.unwrap();
   if (!sealed) throw new Problem('code-wrong');
-  const secret = sealer.open(sealed, user.id);
+  const secret = opened(sealer, sealed, user.id);
+  if (!secret) throw new Problem('code-wrong');
   const step = stepOfCode(secret, plainCode(typed), Date.now() / 1000, user.lastCodeStep ?? null);
   if (step === null) throw new Problem('code-wrong');
   await em.nativeUpdate(User, { id: user.id }, { lastCodeStep: step });
