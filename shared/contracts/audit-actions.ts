@@ -9,6 +9,7 @@ export const AUDIT_ACTIONS = {
   'account.code-refused': ['practice', 'Sign-in refused: wrong one-time code'],
   'account.codes-on': ['practice', 'Turned on one-time codes'],
   'account.codes-off': ['practice', 'Turned off one-time codes'],
+  'account.codes-reset': ['practice', 'Turned off one-time codes for somebody'],
   'account.recovery': ['practice', 'Used a recovery code'],
   'account.recovery-renew': ['practice', 'Made new recovery codes'],
   'account.sign-out': ['practice', 'Signed out'],

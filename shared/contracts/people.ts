@@ -101,6 +101,17 @@ export const peopleRoutes = {
     answer: json(peoplePage),
     problems: ['not-allowed', 'not-found', 'last-owner'],
   }),
+  resetCodes: route({
+    method: 'post',
+    path: '/api/practice/people/:id/codes/reset',
+    summary:
+      'Turn off the one-time codes of somebody who lost phone and recovery codes. They are told by letter, and signed out.',
+    audience: 'staff',
+    params: z.object({ id }),
+    status: 200,
+    answer: json(peoplePage),
+    problems: ['not-allowed', 'not-found', 'codes-off', 'not-as-it-stands'],
+  }),
   reactivatePerson: route({
     method: 'post',
     path: '/api/practice/people/:id/reactivate',

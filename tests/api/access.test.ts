@@ -66,6 +66,7 @@ const NOT_THERE: Partial<Record<RouteName, Answer>> = {
   changePerson: 404,
   deactivatePerson: 404,
   reactivatePerson: 404,
+  resetCodes: 404,
   handOver: 404,
   eraseAthlete: 404,
   exportAthlete: 404,

@@ -31,6 +31,7 @@ const OWNERS: readonly string[] = [
   'changePerson',
   'deactivatePerson',
   'reactivatePerson',
+  'resetCodes',
   'handOver',
 ];
 

@@ -8,6 +8,7 @@ export const NAMES: Record<RouteNameWithId, keyof Ids> = {
   changePerson: 'person',
   deactivatePerson: 'person',
   reactivatePerson: 'person',
+  resetCodes: 'person',
   handOver: 'person',
   athlete: 'athlete',
   editAthlete: 'athlete',

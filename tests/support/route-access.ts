@@ -69,6 +69,7 @@ export const ACCESS: Record<RouteName, Access> = {
   changePerson: 'owner',
   deactivatePerson: 'owner',
   reactivatePerson: 'owner',
+  resetCodes: 'owner',
   handOver: 'owner',
   retention: 'owner',
   setRetention: 'owner',

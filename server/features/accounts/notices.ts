@@ -37,6 +37,12 @@ export const noticeLetter = (
         `Since ${when} your account asks for its password alone.`,
         `${notYou}\nThen turn the codes on again:\n${home}/account`,
       );
+    case 'codes-reset':
+      return written(
+        'Your one-time codes were turned off',
+        `On ${when} an owner of your practice turned off the one-time codes of your account, so that you can sign in without the phone that you lost. You are signed out everywhere. Turn the codes on again with your new phone:\n${home}/account`,
+        'If you did not ask for that, tell the owner of your practice.',
+      );
     case 'recovery-used':
       return written(
         'A recovery code was used',

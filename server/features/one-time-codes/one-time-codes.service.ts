@@ -7,11 +7,11 @@ import type { Sealer } from '../../main/sealer.ts';
 import { notify } from '../accounts/notices.ts';
 import { endSessionsOf } from '../accounts/open-session.ts';
 import { needPassword, type Work } from '../accounts/own-account.ts';
-import { RecoveryCode } from '../accounts/recovery-code.entity.ts';
 import { User } from '../accounts/user.entity.ts';
 import { audit } from '../audit/audit.ts';
 import { Practice } from '../practice/practice.entity.ts';
 import { base32 } from './base32.ts';
+import { dropCodes } from './drop-codes.ts';
 import { makeRecoveryCodes } from './recovery-codes.ts';
 import { lockedUser, takeCode, takeDeviceCode } from './take-code.ts';
 
@@ -104,9 +104,7 @@ export const stopCodes = async (
     const { ownersNeedCode } = await em.findOneOrFail(Practice, { id: actor.practiceId });
     if (user.role === 'owner' && ownersNeedCode) throw new Problem('codes-needed');
     await takeCode(em, user, sealer, code);
-    const off = { codesSince: null, codeSecret: null, lastCodeStep: null };
-    await em.nativeUpdate(User, { id: user.id }, off);
-    await em.nativeDelete(RecoveryCode, { user: user.id });
+    await dropCodes(em, user.id);
     audit(unit, 'account.codes-off', user.id);
     await notify(unit, user.id, 'codes-off');
   });

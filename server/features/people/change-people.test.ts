@@ -1,6 +1,8 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { asAdmin } from '#tests/support/admin.ts';
+import { firstStep, secondStep, withCodes } from '#tests/support/one-time-codes.ts';
+import { JobOutbox } from '../../jobs/job-outbox.entity.ts';
 import type { User } from '../accounts/user.entity.ts';
 import { makeUser } from '../accounts/user.factory.ts';
 import { makeAthlete } from '../athletes/athlete.factory.ts';
@@ -87,6 +89,42 @@ describe('deactivating', () => {
     );
     await owner.post(at(dunlin, '/deactivate')).expect(200);
     await owner.get(`/api/athletes/${athlete.id}`).expect(200);
+  });
+});
+
+describe('somebody who lost phone and recovery codes', () => {
+  const reset = (user: User) => owner.post(at(user, '/codes/reset'));
+
+  it('is let in by the password alone, signed out everywhere and told by letter', async () => {
+    const { user, here, recoveryCodes } = await withCodes(api);
+    const { cookie } = await firstStep(api, user.email);
+    const { body } = await reset(user).expect(200);
+    expect(body.people).toContainEqual(
+      expect.objectContaining({ id: user.id, oneTimeCodes: false }),
+    );
+    await here.get('/api/me').expect(401);
+    // half a sign-in of before is worth nothing
+    expect((await secondStep(api, cookie, recoveryCodes[0] ?? '')).status).toBe(401);
+    const { answer } = await firstStep(api, user.email);
+    expect(answer.body.user.id).toBe(user.id);
+    const jobs = await api.ground.inPractice(api.world.owner, ({ em }) =>
+      em.find(JobOutbox, { queue: 'send-notice' }),
+    );
+    expect(jobs.map(({ payload }) => payload)).toContainEqual(
+      expect.objectContaining({ userId: user.id, notice: 'codes-reset' }),
+    );
+  });
+
+  it('is somebody else, with codes: one’s own are turned off where one proves to have them', async () => {
+    expect((await reset(api.world.owner).expect(409)).body.code).toBe('not-as-it-stands');
+    expect((await reset(await newUser('coach')).expect(409)).body.code).toBe('codes-off');
+  });
+
+  it('is let in by an owner alone', async () => {
+    const { user, here } = await withCodes(api);
+    for (const one of [api.world.coach, api.world.supervisor])
+      await (await api.as(one)).post(at(user, '/codes/reset')).expect(403);
+    await here.get('/api/me').expect(200);
   });
 });
 

@@ -4,6 +4,7 @@ import { changePerson } from './change-person.ts';
 import { deactivate, reactivate } from './deactivate.ts';
 import { handOver } from './hand-over.ts';
 import { invite, peoplePage, withdrawInvitation } from './people.service.ts';
+import { resetCodes } from './reset-codes.ts';
 
 export const peopleFeature: Feature = ({ serve }) => {
   serve(routes.people, ({ work }) => work(peoplePage));
@@ -19,6 +20,8 @@ export const peopleFeature: Feature = ({ serve }) => {
   );
 
   serve(routes.deactivatePerson, ({ params, work }) => work((unit) => deactivate(unit, params.id)));
+
+  serve(routes.resetCodes, ({ params, work }) => work((unit) => resetCodes(unit, params.id)));
 
   serve(routes.reactivatePerson, ({ params, work }) => work((unit) => reactivate(unit, params.id)));
 

@@ -6,6 +6,7 @@ export const notice = z.enum([
   'password-changed',
   'codes-on',
   'codes-off',
+  'codes-reset',
   'recovery-used',
   'recovery-renewed',
 ]);

@@ -119,6 +119,28 @@ describe('the people of a practice', () => {
     });
   });
 
+  it('lets somebody in who lost phone and recovery codes, after a question', async () => {
+    const page = aPeoplePage();
+    const withCodes = {
+      ...page,
+      people: page.people.map((one) => ({ ...one, oneTimeCodes: one.id === supervisorId })),
+    };
+    const api = signedInApi('owner')
+      .on(routes.people, () => withCodes)
+      .on(routes.resetCodes, () => page);
+    const { user } = renderAt('/practice/people');
+    await user.click(await screen.findByRole('button', { name: 'Turn off codes of Ines Falk' }));
+    const dialog = screen.getByRole('dialog', {
+      name: 'Turn off the one-time codes of Ines Falk?',
+    });
+    await user.click(within(dialog).getByRole('button', { name: 'Turn off' }));
+    expect(
+      await screen.findByText(/Ines Falk signs in with the password alone/),
+    ).toBeInTheDocument();
+    expect(api.calls(routes.resetCodes)).toMatchObject([{ params: { id: supervisorId } }]);
+    expect(screen.queryByRole('button', { name: /Turn off codes/ })).not.toBeInTheDocument();
+  });
+
   it('says why the last owner stays', async () => {
     signedInApi('owner')
       .on(routes.people, () => aPeoplePage())

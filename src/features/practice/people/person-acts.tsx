@@ -16,6 +16,7 @@ export function PersonActs({ person, people }: { person: Person; people: readonl
     <span className="flex flex-wrap gap-x-5 gap-y-3 tablet:justify-end">
       {person.deactivatedAt === null && <ChangePerson person={person} people={people} />}
       {person.athletes > 0 && <HandOver person={person} people={people} />}
+      {person.oneTimeCodes && <ResetCodes person={person} />}
       {person.deactivatedAt === null ? (
         <Deactivate person={person} />
       ) : (
@@ -56,6 +57,36 @@ function Deactivate({ person: { id, name, athletes } }: { person: Person }) {
           over.
         </p>
       )}
+    </ConfirmButton>
+  );
+}
+
+/** One's own codes are turned off on the page of one's account. */
+function ResetCodes({ person: { id, name } }: { person: Person }) {
+  const client = useQueryClient();
+  const say = useStatus();
+  if (useMe().user.id === id) return null;
+  return (
+    <ConfirmButton
+      look="plain"
+      className="-my-2.5"
+      label={
+        <>
+          Turn off codes <span className="sr-only">of {name}</span>
+        </>
+      }
+      title={`Turn off the one-time codes of ${name}?`}
+      confirm="Turn off"
+      onConfirm={async () => {
+        const page = await call(routes.resetCodes, { params: { id } });
+        client.setQueryData(peopleQuery.queryKey, page);
+        say(`${name} signs in with the password alone until the codes are on again.`);
+      }}
+    >
+      <p>
+        For somebody who lost phone and recovery codes. Make sure that it is {name} who asks you.
+        They are signed out everywhere and told by letter; then the password alone signs them in.
+      </p>
     </ConfirmButton>
   );
 }
