@@ -24,6 +24,7 @@ import { Migration20261202090100_reports } from '../../migrations/Migration20261
 import { Migration20261202231500_pain_letters } from '../../migrations/Migration20261202231500_pain_letters.ts';
 import { Migration20261203043000_kept_films } from '../../migrations/Migration20261203043000_kept_films.ts';
 import { Migration20261203070500_replay_befores } from '../../migrations/Migration20261203070500_replay_befores.ts';
+import { Migration20261203082300_abandoned_uploads } from '../../migrations/Migration20261203082300_abandoned_uploads.ts';
 import { ormOptions } from './orm-options.ts';
 
 /** Every migration in order; imported, so that the bundle carries them. */
@@ -117,6 +118,10 @@ const migrationsList: { name: string; class: Constructor<Migration> }[] = [
   {
     name: 'Migration20261203070500_replay_befores',
     class: Migration20261203070500_replay_befores,
+  },
+  {
+    name: 'Migration20261203082300_abandoned_uploads',
+    class: Migration20261203082300_abandoned_uploads,
   },
 ];
 

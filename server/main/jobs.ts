@@ -1,3 +1,4 @@
+import { giveUpUploadsJob } from '../features/clips/jobs/give-up-uploads.ts';
 import { prepareClipJob } from '../features/clips/jobs/prepare-clip.ts';
 import { fillDemoJob } from '../db/demo/fill-demo.job.ts';
 import { sendNoticeJob } from '../features/accounts/jobs/send-notice.ts';
@@ -15,6 +16,7 @@ import type { AnyJobHandler } from '../jobs/job.ts';
 /** Every kind of job that a worker does. */
 export const jobs: readonly AnyJobHandler[] = [
   prepareClipJob,
+  giveUpUploadsJob,
   deriveReadingJob,
   hideHeadJob,
   makeFilmJob,

@@ -1,4 +1,3 @@
-import { randomUUID } from 'node:crypto';
 import { access } from 'node:fs/promises';
 import { basename } from 'node:path';
 import type { UserActor } from '#shared/access/actors.ts';
@@ -55,7 +54,7 @@ export const acceptClip = async (
   actor: UserActor,
   visitId: string,
   file: ReceivedFile,
-  id: string = randomUUID(),
+  id: string,
   order: JobOrder = {},
 ): Promise<string> => {
   const { inPractice, storage } = ground;

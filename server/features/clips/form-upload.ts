@@ -10,10 +10,12 @@ import { formFault } from '../../http/form-fault.ts';
 import { parseFields } from '../../http/parse.ts';
 import { Problem } from '../../http/problem.ts';
 import { staffOf } from '../../http/session.ts';
-import { acceptClip } from './accept-clip.ts';
+import { acceptClip, shownName } from './accept-clip.ts';
 import { clipInSight } from './clip-in-sight.ts';
 import { presentClip } from './clips.presenter.ts';
-import { needQuota, needSize, needUploadAllowed } from './upload-gate.ts';
+import { giveUpUpload } from './give-up-upload.ts';
+import { openUpload } from './open-upload.ts';
+import { cameraOf, needQuota, needSize, needUploadAllowed } from './upload-gate.ts';
 
 /** Where this request's file is written; removed when the request is over, however it ends. */
 const ownFolder =
@@ -81,14 +83,27 @@ export const formUploadFeature: Feature = ({ serve, ground }) => {
         throw new Problem('invalid-input', undefined, [
           { path: 'body.clip', message: 'Send the clip in the field ‘clip’.' },
         ]);
-      const id = await acceptClip(ground, actor, params.id, {
-        path: file.path,
+      const facts = {
+        name: shownName(file.originalname),
         bytes: file.size,
-        name: file.originalname,
         view: fields.view,
         supportSide: fields.supportSide ?? null,
         mirrored: fields.mirrored,
+      };
+      cameraOf(facts);
+      // a file that is in its place while nobody knows whether its clip was committed is still named by a row
+      const { id } = await work(async (unit) => {
+        const { visit } = await needUploadAllowed(unit, params.id);
+        return openUpload(unit, visit, facts);
       });
+      await acceptClip(ground, actor, params.id, { ...facts, path: file.path }, id).catch(
+        async (error: unknown) => {
+          await giveUpUpload(ground, actor.practiceId, id).catch((left: unknown) => {
+            ground.log.warn({ err: left }, 'what is left of an upload is removed later');
+          });
+          throw error;
+        },
+      );
       return work(async (unit) =>
         presentClip((await clipInSight(unit, id, 'athlete.read')).clip, 0),
       );

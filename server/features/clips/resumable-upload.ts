@@ -12,12 +12,13 @@ import { found, needCaseload } from '../../http/need.ts';
 import { Problem } from '../../http/problem.ts';
 import { staffOf } from '../../http/session.ts';
 import type { Feature } from '../../main/feature.ts';
-import { User } from '../accounts/user.entity.ts';
 import type { Athlete } from '../athletes/athlete.entity.ts';
 import { needOpen } from '../athletes/consent-gate.ts';
 import { acceptClip, shownName } from './accept-clip.ts';
 import { Clip } from './clip.entity.ts';
-import { clipFiles, clipPrefix } from './clip-files.ts';
+import { clipFiles } from './clip-files.ts';
+import { giveUpUpload } from './give-up-upload.ts';
+import { openUpload } from './open-upload.ts';
 import { cameraOf, needQuota, needSize, needUploadAllowed } from './upload-gate.ts';
 import { Upload } from './upload.entity.ts';
 
@@ -125,7 +126,7 @@ export const resumableUploadFeature: Feature = ({ serve, router, ground }) => {
   router.head(`${UPLOADS}/:id`, sessions.whoIs, receive);
   router.patch(`${UPLOADS}/:id`, sessions.whoIs, receive);
 
-  serve(routes.openUpload, async ({ params, body, work, actor }) => {
+  serve(routes.openUpload, async ({ params, body, work }) => {
     needSize(body.bytes);
     const { bytes, view, supportSide, mirrored } = body;
     const name = shownName(body.name);
@@ -133,15 +134,7 @@ export const resumableUploadFeature: Feature = ({ serve, router, ground }) => {
     const upload = await work(async (unit) => {
       const { visit } = await needUploadAllowed(unit, params.id);
       await needQuota(unit, bytes);
-      return unit.em.create(Upload, {
-        visit,
-        name,
-        bytes,
-        view,
-        supportSide,
-        mirrored,
-        openedBy: unit.em.getReference(User, actor.id),
-      });
+      return openUpload(unit, visit, { name, bytes, view, supportSide, mirrored });
     });
     await store.create(new TusUpload({ id: upload.id, size: bytes, offset: 0 }));
     return { id: upload.id, uploadUrl: `${UPLOADS}/${upload.id}`, bytes, received: 0 };
@@ -149,11 +142,6 @@ export const resumableUploadFeature: Feature = ({ serve, router, ground }) => {
 
   serve(routes.cancelUpload, async ({ params, work }) => {
     const { id, practiceId } = await work((unit) => uploadInSight(unit, params.id));
-    // files first: killed in between, the row still names them
-    await rm(pathOf(id), { force: true });
-    await rm(`${pathOf(id)}.json`, { force: true });
-    const isTakenIn = await work(({ em }) => em.count(Clip, { id }));
-    if (!isTakenIn) await storage.deleteAll(clipPrefix(practiceId, id));
-    await work(({ em }) => em.nativeDelete(Upload, { id }));
+    await giveUpUpload(ground, practiceId, id);
   });
 };
