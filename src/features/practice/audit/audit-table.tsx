@@ -4,7 +4,7 @@ import type { AuditEntry } from '#shared/contracts/audit.ts';
 import { moment } from '#src/ui/days.ts';
 import { paths } from '#src/ui/paths.ts';
 import { type Column, Table } from '#src/ui/table.tsx';
-import { detailWords, placeOf, whoWords } from './audit-words.ts';
+import { detailWords, nameWords, placeOf, whoWords } from './audit-words.ts';
 
 export function AuditTable({ entries }: { entries: readonly AuditEntry[] }) {
   return (
@@ -20,8 +20,8 @@ export function AuditTable({ entries }: { entries: readonly AuditEntry[] }) {
 /** What it was done to, as long as it is there, and the details that say something. */
 function DoneTo({ entry }: { entry: AuditEntry }) {
   const to = placeOf(entry);
-  const { name, kind } = entry.subject;
-  const shown = kind === 'account' && entry.subject.id === entry.by?.id ? null : name;
+  const { id, kind } = entry.subject;
+  const shown = kind === 'account' && id === entry.by?.id ? null : nameWords(entry);
   const details = detailWords(entry);
   if (shown === null && details === '') return null;
   return (

@@ -1,4 +1,5 @@
 import type { AuditEntry } from '#shared/contracts/audit.ts';
+import { shortDay } from '#src/ui/days.ts';
 import { paths } from '#src/ui/paths.ts';
 
 /** `family name` of `familyName` */
@@ -14,12 +15,36 @@ const OTHERS = {
 export const whoWords = ({ actor, by }: AuditEntry): string =>
   actor === 'user' ? (by?.name ?? 'An account that is gone') : OTHERS[actor];
 
+/** Parts of a record whose names in the file say too little. */
+const PARTS: Readonly<Record<string, string>> = {
+  items: 'exercises',
+  retestOn: 'day of the retest',
+  filming: 'how it was filmed',
+  setUpId: 'set-up',
+  geometry: 'figures of the filming',
+  coachId: 'coach',
+};
+
+/** What something was made by or as, where that is no role. */
+const AS: Readonly<Record<string, string>> = {
+  reading: 'by the measured reading',
+  call: 'by what was seen',
+  csv: 'as CSV',
+  pdf: 'as PDF',
+  webvtt: 'as captions',
+  'web-annotation': 'as annotations',
+};
+
 /** What details say to a person; ids and sizes are for the file. */
 const DETAILS: Partial<Record<keyof NonNullable<AuditEntry['detail']>, (value: string) => string>> =
   {
-    as: (as) => `as ${as}`,
+    as: (as) => AS[as] ?? `as ${as}`,
     cleared: (cleared) => (cleared === 'true' ? 'cleared by a colleague' : ''),
-    fields: (fields) => fields.split(' ').map(spaced).join(', '),
+    fields: (fields) =>
+      fields
+        .split(' ')
+        .map((field) => PARTS[field] ?? spaced(field))
+        .join(', '),
     frames: (frames) => (frames === '1' ? '1 frame' : `${frames} frames`),
     on: (on) => (on === 'true' ? 'on' : 'off'),
     resolved: (resolved) => (resolved === 'true' ? 'resolved' : 'reopened'),
@@ -40,6 +65,10 @@ export const detailWords = ({ detail }: AuditEntry): string =>
       return words === '' || value === null ? [] : [words];
     })
     .join('; ');
+
+/** What the thing is called; a visit by its day. */
+export const nameWords = ({ subject: { name } }: AuditEntry): string | null =>
+  name !== null && /^\d{4}-\d\d-\d\d$/.test(name) ? shortDay(name) : name;
 
 /** Where the thing is shown, as long as it is there. */
 export const placeOf = ({ subject: { kind, id, name } }: AuditEntry): string | null => {
