@@ -42,7 +42,7 @@ const MEASURE_COLUMNS: Column<Measure>[] = [
     named: true,
     label: 'Can be told from none beyond',
     cell: ({ smallestChange, unit }) =>
-      smallestChange === null ? 'follows from the marks' : `${smallestChange}${UNITS[unit]}`,
+      smallestChange === null ? 'differs from rep to rep; it stands beside the value' : `${smallestChange}${UNITS[unit]}`,
   },
   {
     key: 'source',
