@@ -42,7 +42,9 @@ const MEASURE_COLUMNS: Column<Measure>[] = [
     named: true,
     label: 'Can be told from none beyond',
     cell: ({ smallestChange, unit }) =>
-      smallestChange === null ? 'differs from rep to rep; it stands beside the value' : `${smallestChange}${UNITS[unit]}`,
+      smallestChange === null
+        ? 'differs from rep to rep; it stands beside the value'
+        : `${smallestChange}${UNITS[unit]}`,
   },
   {
     key: 'source',
