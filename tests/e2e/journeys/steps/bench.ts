@@ -14,6 +14,7 @@ export async function openBench(page: Page, clipId: string, search = ''): Promis
   await page.goto(`/clips/${clipId}${search}`);
   await expect(frameSlider(page)).toBeVisible();
   await expect(page.locator('.bench-clip canvas').first()).toBeVisible();
+  await expect(page.getByText(/^Loading the clip/)).toHaveCount(0);
 }
 
 /** Steps to a frame by keyboard: tens, then ones. */
