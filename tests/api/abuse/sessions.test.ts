@@ -35,6 +35,7 @@ describe('a session', () => {
   it('is new at every sign-in, whatever the browser brings along', async () => {
     const { coach, owner } = api.world;
     const attackers = sent(cookiesOf(await signIn(owner.email)));
+    expect(await who(attackers)).toBe(owner.id);
     const forged = [
       attackers,
       'redshank_session=chosen',
@@ -50,8 +51,8 @@ describe('a session', () => {
       seen.add(sidOf(own));
       expect(await who(own)).toBe(coach.id);
     }
-    // what the attacker knew has become nobody else’s
-    expect(await who(attackers)).toBe(owner.id);
+    // what the attacker knew has become nobody else’s: it ended when it was brought along
+    await api.nobody.get('/api/me').set('Cookie', attackers).expect(401);
   });
 
   it('is not named in an address or a body: only the cookie opens it', async () => {
