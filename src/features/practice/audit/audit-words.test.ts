@@ -31,9 +31,12 @@ it('says by what or as what', () => {
 });
 
 it('calls a visit by its day as people write it', () => {
-  const named = (name: string | null) =>
-    nameWords(entry({ subject: { kind: 'visit', id: '3', name } }));
+  const named = (name: string | null, kind: AuditEntry['subject']['kind'] = 'visit') =>
+    nameWords(entry({ subject: { kind, id: '3', name } }));
   expect(named('2025-05-04')).toBe('4 May 2025');
-  expect(named('right-early.mov')).toBe('right-early.mov');
+  expect(named('2025-05-04', 'reading')).toBe('4 May 2025');
   expect(named(null)).toBeNull();
+  // what a sender’s device called a clip stays as it is
+  expect(named('right-early.mov', 'clip')).toBe('right-early.mov');
+  expect(named('2025-05-04', 'clip')).toBe('2025-05-04');
 });

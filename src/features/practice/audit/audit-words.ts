@@ -66,13 +66,16 @@ export const detailWords = ({ detail }: AuditEntry): string =>
     })
     .join('; ');
 
-/** What the thing is called; a visit by its day. */
-export const nameWords = ({ subject: { name } }: AuditEntry): string | null =>
-  name !== null && /^\d{4}-\d\d-\d\d$/.test(name) ? shortDay(name) : name;
+const isOfVisit = (kind: AuditEntry['subject']['kind']): boolean =>
+  kind === 'visit' || kind === 'reading';
+
+/** What the thing is called; a visit, and what was read at it, by its day. */
+export const nameWords = ({ subject: { kind, name } }: AuditEntry): string | null =>
+  name !== null && isOfVisit(kind) ? shortDay(name) : name;
 
 /** Where the thing is shown, as long as it is there. */
 export const placeOf = ({ subject: { kind, id, name } }: AuditEntry): string | null => {
   if (name === null) return null;
   if (kind === 'clip') return paths.bench(id);
-  return kind === 'visit' || kind === 'reading' ? paths.visit(id) : null;
+  return isOfVisit(kind) ? paths.visit(id) : null;
 };
