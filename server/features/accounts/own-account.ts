@@ -43,16 +43,17 @@ export const changeName = async (
 };
 
 /**
- * Asked before anything by which an account could be taken away. It takes a third of a second, outside of any
- * transaction.
+ * Asked before anything by which an account could be taken away; whose it is. It takes a third of a second, outside
+ * of any transaction.
  * @throws Problem 'password-wrong'
  */
-export const needPassword = async (work: Work, password: string): Promise<void> => {
-  const hash = await work(async ({ em, actor }) => {
-    const user = await em.findOneOrFail(User, { id: actor.id }, { populate: ['passwordHash'] });
-    return user.passwordHash.unwrap();
-  });
-  if (!(await passwordFits(password, hash))) throw new Problem('password-wrong');
+export const needPassword = async (work: Work, password: string): Promise<User> => {
+  const user = await work(({ em, actor }) =>
+    em.findOneOrFail(User, { id: actor.id }, { populate: ['passwordHash'] }),
+  );
+  if (!(await passwordFits(password, user.passwordHash.unwrap())))
+    throw new Problem('password-wrong');
+  return user;
 };
 
 /**
@@ -64,8 +65,7 @@ export const changePassword = async (
   { current, next }: z.output<typeof passwordBody>,
   sessionId: string,
 ): Promise<void> => {
-  await needPassword(work, current);
-  const { name, email } = await work(ownAccount);
+  const { name, email } = await needPassword(work, current);
   await needHardToGuess(next, [name, email], 'next');
   const passwordHash = await hashPassword(next);
   await work(async (unit) => {
