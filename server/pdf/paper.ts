@@ -191,16 +191,20 @@ export class Paper {
     const head = columns.map(({ title }) => title);
     const strong: Type = { size, weight: 'strong' };
     const headHeight = this.#rowHeight(columns, head, strong);
+    const heights = rows.map((row) => this.#rowHeight(columns, row, { size }));
+    const writeHead = (into: Struct | null) =>
+      this.#row(into, columns, head, { type: strong, tag: 'TH', height: headHeight });
     // a head is never parted from the first row under it
-    this.room(headHeight + this.#rowHeight(columns, rows[0] ?? [], { size }));
-    this.#row(table, columns, head, strong, 'TH');
-    for (const row of rows) {
-      if (!this.#fits(this.#rowHeight(columns, row, { size }))) {
+    this.room(headHeight + (heights[0] ?? 0));
+    writeHead(table);
+    for (const [n, row] of rows.entries()) {
+      const height = heights[n] ?? 0;
+      if (!this.#fits(height)) {
         this.#doc.addPage();
         // the table goes on: to those who hear it, its head has been said
-        this.#row(null, columns, head, strong, 'TH');
+        writeHead(null);
       }
-      this.#row(table, columns, row, { size }, 'TD');
+      this.#row(table, columns, row, { type: { size }, tag: 'TD', height });
     }
     table.end();
     this.space(5);
@@ -224,12 +228,10 @@ export class Paper {
     table: Struct | null,
     columns: readonly Column[],
     cells: readonly string[],
-    type: Type,
-    tag: 'TH' | 'TD',
+    { type, tag, height }: { type: Type; tag: 'TH' | 'TD'; height: number },
   ) {
     const doc = this.#doc;
     const widths = this.#columnWidths(columns);
-    const height = this.#rowHeight(columns, cells, type);
     this.room(height);
     const y = doc.y;
     const row = table && doc.struct('TR');
