@@ -1,11 +1,10 @@
 import { type KeyboardEvent, type RefObject, useEffect, useEffectEvent } from 'react';
 import { liftText } from '#shared/overlay/figures.ts';
-import { frameIndex, type FrameIndex } from '#shared/timing/units.ts';
+import { frameIndex } from '#shared/timing/units.ts';
+import { steppedTo } from '#src/ui/stepped-to.ts';
 import { useBench, useBenchModel, useBenchTools } from '../bench-context.ts';
 import { liftAt } from '../model/hill.ts';
 import { goTo } from '../store/bench-store.ts';
-
-const TEN = 10;
 
 const withModifier = ({
   altKey,
@@ -20,26 +19,6 @@ const isNowhere = (target: EventTarget | null): boolean =>
 /** The other keys move a page that is taller than its window. */
 const SIDEWAYS = ['ArrowLeft', 'ArrowRight'];
 const pageScrolls = () => document.documentElement.scrollHeight > window.innerHeight;
-
-/** Where a key of the slider pattern leads; null for other keys. */
-export const steppedTo = (
-  key: string,
-  frame: number,
-  count: number,
-  bounds: { readonly start: number; readonly end: number },
-): FrameIndex | null => {
-  const to = {
-    ArrowLeft: frame - 1,
-    ArrowDown: frame - 1,
-    ArrowRight: frame + 1,
-    ArrowUp: frame + 1,
-    PageUp: frame + TEN,
-    PageDown: frame - TEN,
-    Home: bounds.start,
-    End: bounds.end,
-  }[key];
-  return to === undefined ? null : frameIndex(Math.max(0, Math.min(count - 1, to)));
-};
 
 /**
  * The clip as a slider over its frames (WAI-ARIA pattern): arrows one frame, Page Up and Page Down
@@ -71,7 +50,7 @@ export function FrameSlider({
     if (to === null) return;
     event.preventDefault();
     store.setState({ playing: false });
-    goTo(store, to);
+    goTo(store, frameIndex(to));
   };
   const onKeyDown = (event: KeyboardEvent) => {
     if (withModifier(event)) return;
