@@ -8,7 +8,7 @@ const STRANGER_MS = 24 * 3_600_000;
 /** A machine's name as a part of a folder's name. */
 const HERE = hostname().replaceAll(/[^A-Za-z0-9]/g, '') || 'here';
 
-const isAlive = (pid: number): boolean => {
+export const isAlive = (pid: number): boolean => {
   try {
     process.kill(pid, 0);
     return true;

@@ -1,18 +1,10 @@
 import { mkdtemp, readdir, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { isAlive } from '#server/storage/temp-dirs.ts';
 import { unmount } from './disk.ts';
 
 const NAME = 'redshank-faults-';
-
-const isAlive = (pid: number): boolean => {
-  try {
-    process.kill(pid, 0);
-    return true;
-  } catch {
-    return false;
-  }
-};
 
 /** Removes what runs that were killed have left behind. */
 const sweep = async (): Promise<void> => {

@@ -14,16 +14,17 @@ import { openLine } from './line.ts';
 
 const root = fileURLToPath(new URL('../../', import.meta.url));
 
-/** What can go wrong with an instance, and how that is said. */
-export const FAULTS = {
+/** What can go wrong with an instance. */
+export const FAULTS = ['server', 'worker', 'database', 'network', 'line', 'disk'] as const;
+export type Fault = (typeof FAULTS)[number];
+export const FAULT_WORDS: Readonly<Record<Fault, string>> = {
   server: 'the server killed',
   worker: 'the worker killed',
   database: 'the database killed',
   network: 'the network cut',
   line: 'the line to the database cut',
   disk: 'the disk full',
-} as const;
-export type Fault = keyof typeof FAULTS;
+};
 
 /** A whole instance, its parts each in a process of their own, that things can go wrong with. */
 export interface Instance {

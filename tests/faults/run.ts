@@ -4,7 +4,7 @@ import { erasure } from './erasure.ts';
 import { film } from './film.ts';
 import { formUpload } from './form.ts';
 import { hiddenHead } from './hidden-head.ts';
-import { type Fault, FAULTS } from './instance.ts';
+import { FAULT_WORDS, FAULTS } from './instance.ts';
 import { letter } from './letters.ts';
 import { marking } from './marks.ts';
 import { expectNothingHalf } from './nothing-half.ts';
@@ -25,20 +25,12 @@ const TASKS: readonly [Task, ...Task[]] = [
   report,
   letter,
 ];
-const EACH_FAULT: readonly [Fault, ...Fault[]] = [
-  'server',
-  'worker',
-  'database',
-  'network',
-  'line',
-  'disk',
-];
 
 /** What a seed says: the same task, fault and moment each time; the machine decides what that moment hits. */
 export const faultOf = (seed: number) => {
   const chance = chanceOf(seed);
   const task = chance.pick(TASKS);
-  const fault = chance.pick(EACH_FAULT);
+  const fault = chance.pick(FAULTS);
   const after = Math.round(chance.between(0, task.within));
   const lasts = Math.round(chance.between(0, 400));
   return { task, fault, after, lasts };
@@ -46,7 +38,7 @@ export const faultOf = (seed: number) => {
 
 export const saidOf = (seed: number): string => {
   const { task, fault, after, lasts } = faultOf(seed);
-  return `seed ${seed}: ${FAULTS[fault]} ${after} ms into ${task.name}, for ${lasts} ms`;
+  return `seed ${seed}: ${FAULT_WORDS[fault]} ${after} ms into ${task.name}, for ${lasts} ms`;
 };
 
 /** Where nobody may mount a disk, none can be full. */
