@@ -57,6 +57,23 @@ export interface Footage {
   readonly supportSide: Side;
 }
 
+/** A visit of an athlete with consent, its safety check answered with no throughout; today unless told. */
+export const safeVisit = async (coach: APIRequestContext, athleteId: string, day?: string) => {
+  const visit = await ask(coach, routes.addVisit, {
+    params: { id: athleteId },
+    body: day === undefined ? {} : { day },
+  });
+  const answers = Object.fromEntries(SAFETY_QUESTIONS.map((question) => [question, false]));
+  return ask(coach, routes.answerSafety, {
+    params: { id: visit.id },
+    body: {
+      answers: answers as Record<(typeof SAFETY_QUESTIONS)[number], boolean>,
+      supportWithinReach: true,
+      knowsWhenToStop: true,
+    },
+  });
+};
+
 /** An athlete with consent, a visit with its safety check, and one clip that is ready. */
 export const makeClip = async (
   coach: APIRequestContext,
@@ -74,16 +91,7 @@ export const makeClip = async (
     params,
     body: { givenBy: 'athlete', purposes: ['assessment', 'supervision'], validUntil },
   });
-  const visit = await ask(coach, routes.addVisit, { params, body: {} });
-  const answers = Object.fromEntries(SAFETY_QUESTIONS.map((question) => [question, false]));
-  await ask(coach, routes.answerSafety, {
-    params: { id: visit.id },
-    body: {
-      answers: answers as Record<(typeof SAFETY_QUESTIONS)[number], boolean>,
-      supportWithinReach: true,
-      knowsWhenToStop: true,
-    },
-  });
+  const visit = await safeVisit(coach, athlete.id);
   return {
     visitId: visit.id,
     clipId: await sendClip(coach, visit.id, 'clip.mp4', 'front', footage),

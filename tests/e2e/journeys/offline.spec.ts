@@ -1,8 +1,8 @@
 import { readFile } from 'node:fs/promises';
 import type { APIRequestContext, Page } from '@playwright/test';
 import { routes } from '#shared/contracts/routes.ts';
-import { SAFETY_QUESTIONS } from '#shared/contracts/visits.ts';
 import { paths } from '#src/ui/paths.ts';
+import { safeVisit } from '../bench/made.ts';
 import { expect, test } from '../support/app.ts';
 import { ask } from './steps/ask.ts';
 import { frameSlider, openBench, pressOnClip } from './steps/bench.ts';
@@ -97,17 +97,7 @@ async function openForClips(): Promise<string> {
     params,
     body: { givenBy: 'athlete', purposes: ['assessment'], validUntil },
   });
-  const visit = await ask(coach, routes.addVisit, { params, body: {} });
-  const answers = Object.fromEntries(SAFETY_QUESTIONS.map((question) => [question, false]));
-  await ask(coach, routes.answerSafety, {
-    params: { id: visit.id },
-    body: {
-      answers: answers as Record<(typeof SAFETY_QUESTIONS)[number], boolean>,
-      supportWithinReach: true,
-      knowsWhenToStop: true,
-    },
-  });
-  return visit.id;
+  return (await safeVisit(coach, athlete.id)).id;
 }
 
 /** Lets half of the clip arrive, then cuts the connection, and all others with it. */

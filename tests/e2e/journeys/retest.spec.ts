@@ -1,9 +1,8 @@
 import type { APIRequestContext, Page } from '@playwright/test';
 import { routes } from '#shared/contracts/routes.ts';
-import { SAFETY_QUESTIONS } from '#shared/contracts/visits.ts';
 import { madeFront } from '#shared/evaluate/made-pair.ts';
 import { longDay } from '#src/ui/days.ts';
-import { COACH, makeClip, sendClip, sessionOf } from '../bench/made.ts';
+import { COACH, makeClip, safeVisit, sendClip, sessionOf } from '../bench/made.ts';
 import { giveGeometry, markAs, MOTION, STEP } from '../bench/made-marks.ts';
 import { expect, test } from '../support/app.ts';
 import { ask } from './steps/ask.ts';
@@ -41,17 +40,8 @@ const read = async (
 };
 
 const visitOf = async (day: string): Promise<typeof today> => {
-  const visit = await ask(coach, routes.addVisit, { params: { id: athleteId }, body: { day } });
-  const answers = Object.fromEntries(SAFETY_QUESTIONS.map((question) => [question, false]));
-  await ask(coach, routes.answerSafety, {
-    params: { id: visit.id },
-    body: {
-      answers: answers as Record<(typeof SAFETY_QUESTIONS)[number], boolean>,
-      supportWithinReach: true,
-      knowsWhenToStop: true,
-    },
-  });
-  return { visitId: visit.id, clipId: await sendClip(coach, visit.id, `${day}.mp4`, 'front') };
+  const { id } = await safeVisit(coach, athleteId, day);
+  return { visitId: id, clipId: await sendClip(coach, id, `${day}.mp4`, 'front') };
 };
 
 const seen = async (page: Page): Promise<void> => {
