@@ -1,9 +1,9 @@
 import { utimes, writeFile } from 'node:fs/promises';
 import { Readable } from 'node:stream';
 import { join } from 'node:path';
-import pg from 'pg';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { product } from '#server/db/in-practice.ts';
+import { asJobs } from '#tests/support/as-jobs.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { clipFiles } from './clip-files.ts';
 import { giveUpUploadsJob } from './jobs/give-up-uploads.ts';
@@ -36,18 +36,10 @@ const broken = async (opened: number, lastByte: number): Promise<string> => {
   );
   return id;
 };
-const due = async (): Promise<string[]> => {
-  const client = new pg.Client({ connectionString: api.ground.config.database.jobs });
-  await client.connect();
-  try {
-    const { rows } = await client.query<{ upload_id: string }>(
-      giveUpUploadsJob.unfinished?.sql ?? '',
-    );
-    return rows.map((row) => row.upload_id);
-  } finally {
-    await client.end();
-  }
-};
+const due = async (): Promise<string[]> =>
+  (await asJobs<{ upload_id: string }>(api, giveUpUploadsJob.unfinished?.sql)).map(
+    (row) => row.upload_id,
+  );
 const run = (uploadId: string) =>
   giveUpUploadsJob.run({
     ground: api.ground,

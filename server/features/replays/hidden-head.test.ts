@@ -2,6 +2,7 @@ import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
+import { asJobs } from '#tests/support/as-jobs.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { playedClip } from '#tests/support/played-clip.ts';
 import { clipFiles, clipPrefix, hiddenFiles } from '../clips/clip-files.ts';
@@ -53,17 +54,8 @@ const rowOf = async (id: string) => {
 const headBy = async (token: string) =>
   (await api.nobody.get(`/api/r/${token}/film`).expect(200)).body;
 /** What the queue would be given at the start of a worker. */
-const waiting = async (sql: string | undefined): Promise<string[]> => {
-  const { Client } = await import('pg');
-  const client = new Client({ connectionString: api.ground.config.database.jobs });
-  await client.connect();
-  try {
-    const { rows } = await client.query<{ replay_id: string }>(sql ?? '');
-    return rows.map((row) => row.replay_id);
-  } finally {
-    await client.end();
-  }
-};
+const waiting = async (sql: string | undefined): Promise<string[]> =>
+  (await asJobs<{ replay_id: string }>(api, sql)).map((row) => row.replay_id);
 const keysBy = (replayId: string, version: number) =>
   api.ground.inPractice(api.world.coach, async ({ em }) => {
     const { id } = await em.findOneOrFail(Head, { clip: clipId, version });

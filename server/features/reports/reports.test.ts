@@ -2,6 +2,7 @@ import { buffer } from 'node:stream/consumers';
 import { Readable } from 'node:stream';
 import pg from 'pg';
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
+import { asJobs } from '#tests/support/as-jobs.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { goldenClip } from '#tests/support/golden.ts';
 import { markedTrial } from '#tests/support/marked-trial.ts';
@@ -62,18 +63,10 @@ const file = async (id: string): Promise<Buffer> => {
     .expect('content-disposition', /report-\d+\.pdf/);
   return body as Buffer;
 };
-const waiting = async (): Promise<string[]> => {
-  const client = new pg.Client({ connectionString: api.ground.config.database.jobs });
-  await client.connect();
-  try {
-    const { rows } = await client.query<{ report_id: string }>(
-      'select report_id from reports_to_make()',
-    );
-    return rows.map((row) => row.report_id);
-  } finally {
-    await client.end();
-  }
-};
+const waiting = async (): Promise<string[]> =>
+  (await asJobs<{ report_id: string }>(api, 'select report_id from reports_to_make()')).map(
+    (row) => row.report_id,
+  );
 
 describe('a report', () => {
   it('waits for a call by eye, which is never made up', async () => {

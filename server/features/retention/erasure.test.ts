@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { Readable } from 'node:stream';
 import pg from 'pg';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { asJobs } from '#tests/support/as-jobs.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { product } from '../../db/in-practice.ts';
 import { tokenHash } from '../../http/token-hash.ts';
@@ -259,10 +260,7 @@ describe('an athlete who is erased', () => {
       );
     expect((await rows()).doneAt ?? null).toBeNull();
     // what a new worker finds unfinished
-    const jobs = new pg.Client({ connectionString: api.ground.config.database.jobs });
-    await jobs.connect();
-    const { rows: unfinished } = await jobs.query('select erasure_id from erasures_unfinished()');
-    await jobs.end();
+    const unfinished = await asJobs(api, 'select erasure_id from erasures_unfinished()');
     expect(unfinished).toContainEqual({ erasure_id: body.id });
     await runJob(body.id);
     expect(await filesWith(made.clipId, made.uploadId)).toEqual([]);

@@ -1,5 +1,5 @@
-import pg from 'pg';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { asJobs } from '#tests/support/as-jobs.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { product } from '../../db/in-practice.ts';
 import { Athlete } from '../athletes/athlete.entity.ts';
@@ -37,13 +37,10 @@ const run = () =>
     payload: { practice: api.world.practiceId },
     signal: new AbortController().signal,
   });
-const practicesToTidy = async (): Promise<string[]> => {
-  const client = new pg.Client({ connectionString: api.ground.config.database.jobs });
-  await client.connect();
-  const { rows } = await client.query<{ practice_id: string }>('select * from practices_to_tidy()');
-  await client.end();
-  return rows.map(({ practice_id: id }) => id);
-};
+const practicesToTidy = async (): Promise<string[]> =>
+  (await asJobs<{ practice_id: string }>(api, 'select * from practices_to_tidy()')).map(
+    ({ practice_id: id }) => id,
+  );
 
 /** Of the last visit, or of the adding where there is none. */
 const added = (daysAgo: number, { visit = true, withdrawnFor = null as number | null } = {}) =>
