@@ -1,3 +1,4 @@
+import type { EntityManager } from '@mikro-orm/postgresql';
 import type { LinkActor } from '#shared/access/actors.ts';
 import type { PublicReplay } from '#shared/contracts/replays.ts';
 import type { Unit } from '#server/db/in-practice.ts';
@@ -7,7 +8,7 @@ import { audit } from '../audit/audit.ts';
 import type { Clip } from '../clips/clip.entity.ts';
 import type { Rep } from '../reps/rep.entity.ts';
 import { filmToKeepOf } from './film/film-state.ts';
-import { publicHeadState, servedHidden } from './hidden-copies.ts';
+import { type LinkFilm, publicHeadState, servedHidden } from './hidden-copies.ts';
 import { beforeOfLink } from './link-files.ts';
 import { contentOf, PLAYED, type Played } from './replay-content.ts';
 import { Replay } from './replay.entity.ts';
@@ -27,30 +28,37 @@ export const replayOfLink = async ({ em, actor }: Of): Promise<Played> => {
 };
 
 /**
- * Where a picture of this link lies; null where it is not there.
+ * Where a picture of one of a link's films lies. A link that hides the head hides it on both.
  * @throws Problem 'clip-not-ready' until there is a copy on which the head is hidden as the link promises
+ */
+const pictureOf = async (
+  em: EntityManager,
+  { film, clip, hideHead, name }: { film: LinkFilm; clip: Clip; hideHead: boolean; name: string },
+  which: 'replay' | 'poster',
+): Promise<string | null> => {
+  if (!hideHead && !film.hideHead) return clip.files[which];
+  const files = await servedHidden(em, film, clip);
+  if (!files) throw new Problem('clip-not-ready', `${name} is being prepared.`);
+  return files[which];
+};
+
+/**
+ * Where a picture of this link lies, `before` that of the earlier lift beside it; null where it is not there.
+ * @throws Problem 'clip-not-ready'
  */
 export const mediaOfLink = async (
   unit: Of,
   which: 'replay' | 'poster' | 'before',
 ): Promise<string | null> => {
+  const { em } = unit;
   const { replay, clip } = await replayOfLink(unit);
-  if (which === 'before') return earlierFilmOf(unit, replay);
-  if (!replay.hideHead) return clip.files[which];
-  const files = await servedHidden(unit.em, replay, clip);
-  if (!files) throw new Problem('clip-not-ready', 'The film is being prepared.');
-  return files[which];
-};
-
-/** The same of the earlier lift beside it; a link that hides the head hides it there as well. */
-const earlierFilmOf = async ({ em }: Of, replay: Replay): Promise<string | null> => {
-  const before = await beforeOfLink(em, replay);
-  if (!before) return null;
-  const clip = (before.rep.unwrap() as Rep).clip.unwrap() as Clip;
-  if (!replay.hideHead && !before.hideHead) return clip.files.replay;
-  const files = await servedHidden(em, before, clip);
-  if (!files) throw new Problem('clip-not-ready', 'The earlier film is being prepared.');
-  return files.replay;
+  const { hideHead } = replay;
+  if (which !== 'before')
+    return pictureOf(em, { film: replay, clip, hideHead, name: 'The film' }, which);
+  const film = await beforeOfLink(em, replay);
+  if (!film) return null;
+  const earlier = (film.rep.unwrap() as Rep).clip.unwrap() as Clip;
+  return pictureOf(em, { film, clip: earlier, hideHead, name: 'The earlier film' }, 'replay');
 };
 
 /** Whether there is a film to play; opens nothing and is not counted. */
