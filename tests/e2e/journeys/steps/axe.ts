@@ -4,27 +4,8 @@ import { expect, type Page } from '@playwright/test';
 /** WCAG 2.2 up to AA, with all that it builds on. */
 const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
 
-/** Waits until nothing moves any more: a plot is drawn anew once it has seen its new width. */
-async function expectStill(page: Page): Promise<void> {
-  const boxes = () =>
-    page.evaluate(() =>
-      [...document.querySelectorAll('a, button, input, select, svg, canvas')]
-        .map((one) => one.getBoundingClientRect())
-        .map(({ x, y, width, height }) => [x, y, width, height].map(Math.round).join())
-        .join(' '),
-    );
-  let before = '';
-  await expect(async () => {
-    const now = await boxes();
-    const isStill = now === before;
-    before = now;
-    expect(isStill, 'the page stands still').toBe(true);
-  }).toPass({ intervals: [100], timeout: 10_000 });
-}
-
 /** Nothing for axe to find on the page as it stands, and nothing wider than the screen. */
 export async function expectAccessible(page: Page, state: string): Promise<void> {
-  await expectStill(page);
   // at the second width it is on the page already: to load it takes as long as to look
   const there = await page.evaluate(() => 'axe' in globalThis);
   const { violations } = await new AxeBuilder({ page, ...(there && { axeSource: ';' }) })
