@@ -26,9 +26,20 @@ export function PersonActs({ person, people }: { person: Person; people: readonl
   );
 }
 
-function Deactivate({ person: { id, name, athletes } }: { person: Person }) {
+type Act = (typeof routes)['deactivatePerson' | 'reactivatePerson' | 'resetCodes'];
+
+/** Does something with a person, shows how the people stand then, and says what was done. */
+const useAct = (id: string) => {
   const client = useQueryClient();
   const say = useStatus();
+  return async (route: Act, done: string): Promise<void> => {
+    client.setQueryData(peopleQuery.queryKey, await call(route, { params: { id } }));
+    say(done);
+  };
+};
+
+function Deactivate({ person: { id, name, athletes } }: { person: Person }) {
+  const act = useAct(id);
   const isMe = useMe().user.id === id;
   return (
     <ConfirmButton
@@ -41,11 +52,9 @@ function Deactivate({ person: { id, name, athletes } }: { person: Person }) {
       }
       title={isMe ? 'Deactivate your own account?' : `Deactivate ${name}?`}
       confirm="Deactivate"
-      onConfirm={async () => {
-        const page = await call(routes.deactivatePerson, { params: { id } });
-        client.setQueryData(peopleQuery.queryKey, page);
-        say(`${name} is deactivated and signed out everywhere.`);
-      }}
+      onConfirm={() =>
+        act(routes.deactivatePerson, `${name} is deactivated and signed out everywhere.`)
+      }
     >
       <p>
         {isMe ? 'You are' : `${name} is`} signed out everywhere at once and cannot sign in. What was
@@ -63,8 +72,7 @@ function Deactivate({ person: { id, name, athletes } }: { person: Person }) {
 
 /** One's own codes are turned off on the page of one's account. */
 function ResetCodes({ person: { id, name } }: { person: Person }) {
-  const client = useQueryClient();
-  const say = useStatus();
+  const act = useAct(id);
   if (useMe().user.id === id) return null;
   return (
     <ConfirmButton
@@ -77,11 +85,12 @@ function ResetCodes({ person: { id, name } }: { person: Person }) {
       }
       title={`Turn off the one-time codes of ${name}?`}
       confirm="Turn off"
-      onConfirm={async () => {
-        const page = await call(routes.resetCodes, { params: { id } });
-        client.setQueryData(peopleQuery.queryKey, page);
-        say(`${name} signs in with the password alone until the codes are on again.`);
-      }}
+      onConfirm={() =>
+        act(
+          routes.resetCodes,
+          `${name} signs in with the password alone until the codes are on again.`,
+        )
+      }
     >
       <p>
         For somebody who lost phone and recovery codes. Make sure that it is {name} who asks you.
@@ -92,21 +101,17 @@ function ResetCodes({ person: { id, name } }: { person: Person }) {
 }
 
 function Reactivate({ person: { id, name } }: { person: Person }) {
-  const client = useQueryClient();
+  const act = useAct(id);
   const say = useStatus();
-  const act = async () => {
+  const reactivate = async () => {
     try {
-      client.setQueryData(
-        peopleQuery.queryKey,
-        await call(routes.reactivatePerson, { params: { id } }),
-      );
-      say(`${name} can sign in again.`);
+      await act(routes.reactivatePerson, `${name} can sign in again.`);
     } catch (error) {
       say(error instanceof Error ? error.message : 'That did not work.');
     }
   };
   return (
-    <Button look="plain" className="-my-2.5" onClick={() => void act()}>
+    <Button look="plain" className="-my-2.5" onClick={() => void reactivate()}>
       Reactivate <span className="sr-only">{name}</span>
     </Button>
   );
