@@ -100,17 +100,26 @@ export const spacedLabels = <T extends LabelRoom>(labels: readonly T[], gap = 8)
 export const spreadTargets = (wanted: readonly LabelRoom[], width: number): LabelRoom[] => {
   let free = 0;
   const fromLeft = wanted.map(({ from, to }) => {
-    const start = Math.max(from, free);
-    free = start + to - from;
-    return { from: start, to: free };
+    const left = Math.max(from, free);
+    free = left + to - from;
+    return { left, room: to - from };
   });
-  let end = width;
-  return fromLeft
-    .reverse()
-    .map(({ from, to }) => {
-      const room = { from: Math.min(to, end) - (to - from), to: Math.min(to, end) };
-      end = room.from;
-      return room;
+  return pushedBack(fromLeft, width, 0).map(({ left, room }) => ({ from: left, to: left + room }));
+};
+
+/** What runs over the end is pushed back, and with it those before it; in order of place. */
+const pushedBack = <T extends { readonly left: number; readonly room: number }>(
+  placed: readonly T[],
+  end: number,
+  gap: number,
+): T[] => {
+  let free = end;
+  return placed
+    .toReversed()
+    .map((each) => {
+      const left = Math.min(each.left, free - each.room);
+      free = left - gap;
+      return { ...each, left };
     })
     .reverse();
 };
@@ -144,14 +153,5 @@ export const pinRow = <T>(
     const room = free < LEAST_ROOM ? INITIALS : Math.min(MOST_ROOM, free);
     pins.push({ ...pin, room, left });
   }
-  // what ran over the end is pushed back, and with it those before it
-  let end = right;
-  return pins
-    .reverse()
-    .map((pin) => {
-      const left = Math.min(pin.left, end - pin.room);
-      end = left - PIN_GAP;
-      return { ...pin, left };
-    })
-    .reverse();
+  return pushedBack(pins, right, PIN_GAP);
 };
