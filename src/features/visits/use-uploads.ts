@@ -8,6 +8,8 @@ import type { UploadItem } from './uploads/upload-item.ts';
 import { takeOfClip, takeOfFile } from './uploads/take.queries.ts';
 import { uploads } from './uploads/uploads.ts';
 
+const REACHES = ['quick', 'whole'] as const;
+
 /** The uploads of one visit on this device, those from before a reload included. */
 export function useUploads(visitId: string): UploadItem[] {
   const client = useQueryClient();
@@ -17,10 +19,12 @@ export function useUploads(visitId: string): UploadItem[] {
   useEffect(
     () =>
       uploads.onSent((item) => {
-        const look = client.getQueryData(takeOfFile(item).queryKey);
         // what was seen of the file is not looked for in its copy again
-        if (look && item.uploadId !== null)
-          client.setQueryData(takeOfClip(item.uploadId).queryKey, look);
+        for (const reach of REACHES) {
+          const look = client.getQueryData(takeOfFile(item, reach).queryKey);
+          if (look && item.uploadId !== null)
+            client.setQueryData(takeOfClip(item.uploadId, reach).queryKey, look);
+        }
         void client.invalidateQueries({
           queryKey: visitOptions(item.visitId).queryKey,
           exact: true,

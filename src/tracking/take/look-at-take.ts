@@ -11,12 +11,19 @@ export interface TakeLook extends TakeJudged {
   readonly length: Seconds;
 }
 
-/** A person waits beside it: what is not seen by then is left out, and said to be. */
-const PATIENCE_MS = 8000;
+/** How far: as much as is seen while a person waits beside it, or all of it however long that takes. */
+export type Reach = 'quick' | 'whole';
 
-/** Never reads on after `PATIENCE_MS`; rejects with what the source rejects with. */
-export const lookAtTake = async (source: TakeSource, now: () => number): Promise<TakeLook> => {
-  const until = now() + PATIENCE_MS;
+/** What is not seen by then is left out, and said to be. */
+const PATIENCE_MS: Record<Reach, number> = { quick: 8000, whole: Infinity };
+
+/** Rejects with what the source rejects with. */
+export const lookAtTake = async (
+  source: TakeSource,
+  reach: Reach,
+  now: () => number,
+): Promise<TakeLook> => {
+  const until = now() + PATIENCE_MS[reach];
   const pictures: TakePicture[] = [];
   for await (const picture of source.pictures()) {
     pictures.push(picture);

@@ -8,27 +8,34 @@ import { frameTimes, type TickTable } from '#src/video/frame-times.ts';
 
 document.body.innerHTML = '<input type="file" aria-label="Film"><main></main>';
 const root = createRoot(document.querySelector('main') ?? document.body);
-const show = (query: { data: TakeLook | undefined; isError: boolean }): void =>
+const show = (look: TakeLook | undefined, failed = false): void =>
   root.render(
     <MemoryRouter>
-      <TakeLookState name="film" query={query} asksPointers={false} />
+      <TakeLookState
+        name="film"
+        looked={{ look, failed, rest: 'open', lookAtRest: () => undefined }}
+        asksPointers={false}
+      />
     </MemoryRouter>,
   );
 
 const takes = {
   async look(asked: TakeAsked, signal = new AbortController().signal): Promise<void> {
-    show({ data: undefined, isError: false });
+    show(undefined);
     try {
-      show({ data: await lookInWorker(asked, signal), isError: false });
+      show(await lookInWorker(asked, signal));
     } catch {
-      show({ data: undefined, isError: true });
+      show(undefined, true);
     }
   },
   lookAtCopy: (url: string, table: TickTable): Promise<void> =>
-    takes.look({ clip: { url: new URL(url, location.href).href, frameTable: frameTimes(table) } }),
+    takes.look({
+      clip: { url: new URL(url, location.href).href, frameTable: frameTimes(table) },
+      reach: 'quick',
+    }),
   async takenAway(file: File): Promise<string> {
     const away = new AbortController();
-    const looking = lookInWorker({ file }, away.signal);
+    const looking = lookInWorker({ file, reach: 'quick' }, away.signal);
     setTimeout(() => away.abort(), 50);
     return looking.then(
       () => 'told all the same',
@@ -40,7 +47,7 @@ const takes = {
 const input = document.querySelector('input');
 input?.addEventListener('change', () => {
   const [file] = input.files ?? [];
-  if (file) void takes.look({ file });
+  if (file) void takes.look({ file, reach: 'quick' });
 });
 
 declare global {

@@ -1,9 +1,11 @@
-import { render, screen } from '@testing-library/react';
+import { cleanup, render, screen } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
 import { MemoryRouter } from 'react-router-dom';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { seconds } from '#shared/timing/units.ts';
 import type { TakeLook } from '#src/tracking/take/look-at-take.ts';
 import { TakeLookState } from './take-look.tsx';
+import type { TakeLooked } from './use-take-look.ts';
 
 const good: TakeLook = {
   head: { told: 'yes', room: 0.25 },
@@ -15,10 +17,17 @@ const good: TakeLook = {
   length: seconds(15),
 };
 
-const show = (data: TakeLook | undefined, { isError = false, asksPointers = false } = {}) => {
+const lookAtRest = vi.fn();
+
+const show = (
+  look: TakeLook | undefined,
+  more: { failed?: boolean; asksPointers?: boolean; rest?: TakeLooked['rest'] } = {},
+) => {
+  const { failed = false, asksPointers = false, rest = 'open' } = more;
+  const looked = { look, failed, rest, lookAtRest };
   render(
     <MemoryRouter>
-      <TakeLookState name="a.mov" query={{ data, isError }} asksPointers={asksPointers} />
+      <TakeLookState name="a.mov" looked={looked} asksPointers={asksPointers} />
     </MemoryRouter>,
   );
   return screen.getByRole('status');
@@ -104,12 +113,29 @@ describe('TakeLookState', () => {
     expect(said).toHaveTextContent(/^The take is good/);
   });
 
+  it('offers to look at the rest, says that it does, and that it could not', async () => {
+    const part = { ...good, lookedAt: seconds(9) };
+    show(part);
+    await userEvent.click(screen.getByRole('button', { name: 'Look at the rest of a.mov' }));
+    expect(lookAtRest).toHaveBeenCalledOnce();
+    cleanup();
+    show(part, { rest: 'looking' });
+    expect(screen.getByRole('button', { name: 'Looking at the rest …' })).toBeInTheDocument();
+    cleanup();
+    expect(show(part, { rest: 'failed' })).toHaveTextContent(
+      /Only the first 9\.0 s of 15\.0 s were looked at\. The rest cannot be read: look at it yourself/,
+    );
+    cleanup();
+    show(good);
+    expect(screen.queryByRole('button')).toBeNull();
+  });
+
   it('says that it is looking, and that it could not', () => {
     expect(show(undefined)).toHaveTextContent('Looking at the pictures of a.mov: some seconds …');
   });
 
   it('says what to do where the pictures cannot be read', () => {
-    expect(show(undefined, { isError: true })).toHaveTextContent(
+    expect(show(undefined, { failed: true })).toHaveTextContent(
       /cannot be read\. Look at it before the athlete leaves/,
     );
   });

@@ -1,9 +1,9 @@
-import type { UseQueryResult } from '@tanstack/react-query';
 import { useEffect, useRef } from 'react';
 import { Link } from 'react-router-dom';
-import type { TakeLook } from '#src/tracking/take/look-at-take.ts';
+import { Button } from '#src/ui/button.tsx';
 import { StateDot, type StateKind } from '#src/ui/state-dot.tsx';
 import { Skeleton } from '#src/ui/states.tsx';
+import type { TakeLooked } from './use-take-look.ts';
 import { GUIDE_STEPS, takeVerdict, type TakeVerdict } from '../uploads/take-words.ts';
 
 const KIND: Record<TakeVerdict['grade'], StateKind> = {
@@ -16,16 +16,18 @@ const KIND: Record<TakeVerdict['grade'], StateKind> = {
 /** Whether the take will do, said while the athlete still stands there. */
 export function TakeLookState(props: {
   name: string;
-  query: Pick<UseQueryResult<TakeLook>, 'data' | 'isError'>;
+  looked: TakeLooked;
   asksPointers: boolean;
   /** A person pressed for it just now. */
   asked?: boolean;
 }) {
   const here = useRef<HTMLDivElement>(null);
+  const { look, rest } = props.looked;
+  const asked = props.asked || rest !== 'open';
   // the button that asked is gone: the keyboard goes on at the answer
   useEffect(() => {
-    if (props.asked && document.activeElement === document.body) here.current?.focus();
-  }, [props.asked]);
+    if (asked && document.activeElement === document.body) here.current?.focus();
+  }, [asked, look]);
   // one element from looking to told, so that a screen reader hears the change
   return (
     <div ref={here} tabIndex={-1} className="mt-1 text-note" role="status">
@@ -36,17 +38,17 @@ export function TakeLookState(props: {
 
 function Content({
   name,
-  query: { data, isError },
+  looked: { look, failed, rest, lookAtRest },
   asksPointers,
 }: Parameters<typeof TakeLookState>[0]) {
-  if (isError)
+  if (failed)
     return (
       <p className="text-soft">
         Whether the take will do could not be told here: its pictures cannot be read. Look at it
         before the athlete leaves.
       </p>
     );
-  if (!data)
+  if (!look)
     return (
       <>
         <p className="text-soft">
@@ -55,7 +57,7 @@ function Content({
         <Skeleton className="h-5 w-56 max-w-full" />
       </>
     );
-  const { grade, summary, lines } = takeVerdict(data, asksPointers);
+  const { grade, summary, lines, inPart } = takeVerdict(look, asksPointers);
   return (
     <>
       <StateDot kind={KIND[grade]} wrap>
@@ -72,6 +74,24 @@ function Content({
             </li>
           ))}
         </ul>
+      )}
+      {inPart !== null && (
+        <p className="pl-5 text-soft">
+          {inPart}{' '}
+          {rest === 'failed' ? (
+            'The rest cannot be read: look at it yourself.'
+          ) : (
+            <Button
+              look="plain"
+              className="text-note"
+              busy={rest === 'looking'}
+              busyLabel="Looking at the rest …"
+              onClick={lookAtRest}
+            >
+              Look at the rest <span className="sr-only">of {name}</span>
+            </Button>
+          )}
+        </p>
       )}
     </>
   );

@@ -1,13 +1,13 @@
-import { useQuery } from '@tanstack/react-query';
 import { takeOfFile } from '../uploads/take.queries.ts';
 import type { UploadItem } from '../uploads/upload-item.ts';
 import { TakeLookState } from './take-look.tsx';
+import { useTakeLook } from './use-take-look.ts';
 
 /** The pictures of a file on this device are looked at as soon as it is chosen, where the browser can. */
 export function TakeOfFile({ item, asksPointers }: { item: UploadItem; asksPointers: boolean }) {
   const readable = item.file !== null && item.look?.outcome === 'clip';
   const decodable = item.look?.outcome === 'clip' && item.look.decodableHere;
-  const query = useQuery({ ...takeOfFile(item), enabled: readable && decodable });
+  const looked = useTakeLook((reach) => takeOfFile(item, reach), readable && decodable);
   if (!readable) return null;
   if (!decodable)
     return (
@@ -16,5 +16,5 @@ export function TakeOfFile({ item, asksPointers }: { item: UploadItem; asksPoint
         prepared.
       </p>
     );
-  return <TakeLookState name={item.name} query={query} asksPointers={asksPointers} />;
+  return <TakeLookState name={item.name} looked={looked} asksPointers={asksPointers} />;
 }

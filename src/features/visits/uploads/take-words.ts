@@ -25,6 +25,8 @@ export interface TakeVerdict {
   readonly summary: string;
   /** What speaks against it first, then what could be better, then what is left to the eye. */
   readonly lines: readonly TakeLine[];
+  /** Of a take that was looked at up to here only: the rest of it may say something else. */
+  readonly inPart: string | null;
 }
 
 const WHY: Record<Unanswered, string> = {
@@ -131,23 +133,18 @@ const POINTERS =
   'Whether the pointers are worn could not be told from the picture: look at the athlete.';
 
 export const takeVerdict = (look: TakeLook, asksPointers: boolean): TakeVerdict => {
-  const part: TakeLine[] =
+  const inPart =
     look.lookedAt < look.length - 0.5
-      ? [
-          {
-            grade: 'open',
-            words: `Only the first ${s(look.lookedAt)} of ${s(look.length)} were looked at.`,
-            step: 'lift',
-          },
-        ]
-      : [];
+      ? `Only the first ${s(look.lookedAt)} of ${s(look.length)} were looked at.`
+      : null;
   const nothing = nothingTold(look);
   if (nothing !== null) {
     const words = `${capital(WHY[nothing])}. Look at the take yourself before the athlete leaves.`;
     return {
       grade: 'open',
       summary: 'Whether this take will do could not be told:',
-      lines: [{ grade: 'open', words, step: nothing === 'no-lift' ? 'lift' : 'frame' }, ...part],
+      lines: [{ grade: 'open', words, step: nothing === 'no-lift' ? 'lift' : 'frame' }],
+      inPart,
     };
   }
   const lines = linesOf(look).sort((a, b) => ORDER[a.grade] - ORDER[b.grade]);
@@ -155,5 +152,5 @@ export const takeVerdict = (look: TakeLook, asksPointers: boolean): TakeVerdict 
   const pointers: TakeLine[] = asksPointers
     ? [{ grade: 'open', words: POINTERS, step: 'dots' }]
     : [];
-  return { grade, summary: summaryOf(grade, look), lines: [...lines, ...part, ...pointers] };
+  return { grade, summary: summaryOf(grade, look), lines: [...lines, ...pointers], inPart };
 };
