@@ -7,6 +7,7 @@ import { giveGeometry, markAs, MOTION, STEP } from '../bench/made-marks.ts';
 import { expect, test } from '../support/app.ts';
 import { ask } from './steps/ask.ts';
 import { signIn, SUPERVISOR } from './steps/people.ts';
+import { givePlan } from './steps/plan.ts';
 import { PREPARED_WITHIN } from './steps/visit.ts';
 
 test.describe.configure({ mode: 'serial' });
@@ -62,11 +63,7 @@ test('a coach without pointers calls by eye, marks bare landmarks and gets a rea
   await expect(page.getByText('seen, not measured')).toBeVisible();
 });
 
-test('the supervisor signs off, and the athlete is told what was seen, not measured', async ({
-  app,
-  page,
-  browser,
-}) => {
+test('the supervisor signs off, and the plan follows what was seen', async ({ app, page }) => {
   await signIn(page, app, COACH);
   await page.goto(`${side()}#sign-off`);
   const panel = page.getByRole('region', { name: 'Sign-off' });
@@ -78,6 +75,16 @@ test('the supervisor signs off, and the athlete is told what was seen, not measu
   await panel.getByRole('button', { name: 'Sign off' }).click();
   await expect(panel.getByRole('heading', { name: /^Signed off by / })).toBeVisible();
 
+  await signIn(page, app, COACH);
+  await givePlan(page, made, '2031-05-04', SEEN);
+  await expect(page.getByText(SEEN).first()).toBeVisible();
+});
+
+test('the athlete is told what was seen, not measured, and what to do about it', async ({
+  app,
+  page,
+  browser,
+}) => {
   const { visit } = await ask(coach, routes.visit, { params: { id: made.visitId } });
   await ask(coach, routes.recordConsent, {
     params: { id: visit.athlete.id },
@@ -104,5 +111,8 @@ test('the supervisor signs off, and the athlete is told what was seen, not measu
   await expect(athlete.getByText('seen by your coach, not measured')).toBeVisible();
   await expect(athlete.getByText(/standing hip/)).toHaveCount(0);
   await expect(athlete.getByText(/\d°\s*±/)).toHaveCount(0);
+  const plan = athlete.getByRole('region', { name: 'Your plan' });
+  await expect(plan.getByRole('heading', { name: 'Supported hinge' })).toBeVisible();
+  await expect(plan.getByRole('button', { name: /^today, / }).first()).toBeVisible();
   await phone.close();
 });

@@ -1,11 +1,20 @@
 import { expect, type Page } from '@playwright/test';
 import type { Run } from './run.ts';
 
-/** From the reading: the suggested plan, each side confirmed, a day for the retest, given to the athlete. */
-export async function givePlan(page: Page, run: Run, retestOn: string): Promise<void> {
+/** What a plan starts from, as its card says it. */
+export type PlanFrom = 'the measured reading' | 'seen by the coach, not measured';
+
+/** The suggested plan, each side confirmed, a day for the retest, given to the athlete. */
+export async function givePlan(
+  page: Page,
+  run: Pick<Run, 'visitId'>,
+  retestOn: string,
+  from: PlanFrom = 'the measured reading',
+): Promise<void> {
   await page.goto(`/visits/${run.visitId}/sides/right`);
   await page.getByRole('link', { name: 'Open the plan' }).click();
-  await page.getByRole('button', { name: 'Make this plan' }).first().click();
+  const found = page.getByRole('region', { name: 'What was found' }).getByRole('listitem');
+  await found.filter({ hasText: from }).getByRole('button', { name: 'Make this plan' }).click();
   await expect(page).toHaveURL(/\/plans\//);
   const toConfirm = page.getByRole('button', { name: /^Confirm the side of / });
   await expect(toConfirm.first()).toBeVisible();
