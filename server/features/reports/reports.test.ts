@@ -2,6 +2,7 @@ import { buffer } from 'node:stream/consumers';
 import { Readable } from 'node:stream';
 import pg from 'pg';
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
+import { MOST_TRIES } from '#server/jobs/tries.ts';
 import { asJobs } from '#tests/support/as-jobs.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { goldenClip } from '#tests/support/golden.ts';
@@ -9,7 +10,7 @@ import { markedTrial } from '#tests/support/marked-trial.ts';
 import { pdfPages } from '#tests/support/pdf-text.ts';
 import { product } from '#server/db/in-practice.ts';
 import { makeVisit } from '../visits/visit.factory.ts';
-import { makeReportJob, MOST_TRIES } from './jobs/make-report.ts';
+import { makeReportJob } from './jobs/make-report.ts';
 import { reportKey } from './report-files.ts';
 import { Report } from './report.entity.ts';
 

@@ -2,6 +2,7 @@ import { Readable } from 'node:stream';
 import { product } from '../../../db/in-practice.ts';
 import { tell } from '../../../events/tell.ts';
 import { handles, type JobContext } from '../../../jobs/job.ts';
+import { afterError, withNextTry } from '../../../jobs/tries.ts';
 import type { Ground } from '../../../main/ground.ts';
 import type { Visit } from '../../visits/visit.entity.ts';
 import { makePictures } from '../make-pictures.ts';
@@ -9,9 +10,6 @@ import { reportKey } from '../report-files.ts';
 import { Report } from '../report.entity.ts';
 import { writeReport } from '../write/write-report.ts';
 import { MAKE_REPORT } from './make-report-type.ts';
-
-/** After so many a person has to ask for it again. */
-export const MOST_TRIES = 4;
 
 type Outcome = Partial<Pick<Report, 'state' | 'pages' | 'bytes' | 'tries'>>;
 
@@ -29,21 +27,18 @@ const say = ({ inPractice }: Ground, practiceId: string, id: string, outcome: Ou
     return true;
   });
 
-/**
- * Counts a try and hands over what is to be written; null where nothing is. One that was begun as often as may be
- * and neither ended nor failed took its worker along each time, and might take the next one as well.
- */
+/** Counts a try and hands over what is to be written; null where nothing is. */
 const begin = (ground: Ground, practiceId: string, id: string) =>
   ground.inPractice(product(practiceId), async ({ em }) => {
     const report = await em.findOne(Report, { id }, { populate: ['content', 'by', 'visit'] });
     if (report?.state !== 'asked') return null;
-    const givenUp = report.tries >= MOST_TRIES;
-    if (!givenUp) report.tries += 1;
+    const tries = withNextTry(report.tries);
+    report.tries = tries ?? report.tries;
     const { content, number, at } = report;
     const visit = report.visit.unwrap() as Visit;
     return {
       key: reportKey(practiceId, visit.athlete.id, id),
-      givenUp,
+      givenUp: tries === null,
       content: content.unwrap(),
       of: { number, at: at.toISOString(), by: report.by.unwrap().name },
     };
@@ -81,21 +76,22 @@ const run = async ({
   }
 };
 
-/** After an error: true where that was the last try, and the list says so. A worker's stop is no try. */
+/** After an error: true where that was the last try, and the list says so. */
 const endedBadly = async (
   ground: Ground,
   practiceId: string,
   id: string,
-  { aborted }: AbortSignal,
+  signal: AbortSignal,
 ): Promise<boolean> => {
-  const tries = await ground.inPractice(product(practiceId), async ({ em }) => {
+  const wasLast = await ground.inPractice(product(practiceId), async ({ em }) => {
     const report = await em.findOne(Report, { id, state: 'asked' });
-    if (report && aborted) report.tries = Math.max(0, report.tries - 1);
-    return report?.tries ?? MOST_TRIES;
+    if (!report) return true;
+    const after = afterError(report.tries, signal);
+    report.tries = after.tries;
+    return after.wasLast;
   });
-  if (aborted || tries < MOST_TRIES) return false;
-  await say(ground, practiceId, id, { state: 'failed' });
-  return true;
+  if (wasLast) await say(ground, practiceId, id, { state: 'failed' });
+  return wasLast;
 };
 
 const isReady = ({ inPractice }: Ground, practiceId: string, id: string): Promise<boolean> =>

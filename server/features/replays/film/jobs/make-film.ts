@@ -5,6 +5,7 @@ import { fitEven } from '#server/media/picture-filters.ts';
 import { letters } from '#server/pdf/letters.ts';
 import { product } from '../../../../db/in-practice.ts';
 import { handles, type JobContext } from '../../../../jobs/job.ts';
+import { afterError, withNextTry } from '../../../../jobs/tries.ts';
 import type { Ground } from '../../../../main/ground.ts';
 import { hasConsent } from '../../../athletes/consent-check.ts';
 import type { Clip } from '../../../clips/clip.entity.ts';
@@ -19,9 +20,6 @@ import { Replay } from '../../replay.entity.ts';
 import { drawFilm, GROUND } from '../draw-film.ts';
 import { KeptFilm } from '../kept-film.entity.ts';
 import { MAKE_FILM } from './make-film-type.ts';
-
-/** After so many a person has to ask for it again. */
-const MOST_TRIES = 4;
 
 /** A film that is asked for, with what it is of; null where its link has ended. The clip is locked. */
 const askedFilm = async (
@@ -53,10 +51,7 @@ const sourceOf = async (em: EntityManager, { replay, clip }: Played) => {
   return hidden && { copy: hidden.replay, head: replay.hiddenHead?.id ?? null, size };
 };
 
-/**
- * Counts a try and hands over what is to be drawn on what; null where nothing is. One that was begun as often as may
- * be and neither ended nor failed took its worker along each time, and might take the next one as well.
- */
+/** Counts a try and hands over what is to be drawn on what; null where nothing is. */
 const begin = ({ inPractice }: Ground, practiceId: string, id: string) =>
   inPractice(product(practiceId), async (unit) => {
     const { em } = unit;
@@ -67,11 +62,12 @@ const begin = ({ inPractice }: Ground, practiceId: string, id: string) =>
     // it is asked for anew once that copy is there
     if (!source) return null;
     const athlete = (replay.visit.unwrap() as Visit).athlete.id;
-    if (film.tries >= MOST_TRIES || !(await hasConsent(em, athlete, 'sharing-by-link'))) {
+    const tries = withNextTry(film.tries);
+    if (tries === null || !(await hasConsent(em, athlete, 'sharing-by-link'))) {
       film.state = 'failed';
       return null;
     }
-    film.tries += 1;
+    film.tries = tries;
     const content = await contentOf(unit, played);
     return {
       ...source,
@@ -132,21 +128,19 @@ const make = async (
   if (!(await keep(ground, practiceId, id, begun, bytes))) await storage.delete(key);
 };
 
-/** After an error: true where that was the last try, and the link says so from now on. A worker's stop is no try. */
+/** After an error: true where that was the last try, and the link says so from now on. */
 const endedBadly = (
   { inPractice }: Ground,
   practiceId: string,
   id: string,
-  { aborted }: AbortSignal,
+  signal: AbortSignal,
 ): Promise<boolean> =>
-  inPractice(product(practiceId), async (unit) => {
-    const played = await askedFilm(unit.em, id);
-    if (!played) return true;
-    const { film } = played;
-    if (aborted) film.tries = Math.max(0, film.tries - 1);
-    if (aborted || film.tries < MOST_TRIES) return false;
-    film.state = 'failed';
-    return true;
+  inPractice(product(practiceId), async ({ em }) => {
+    const film = (await askedFilm(em, id))?.film;
+    if (!film) return true;
+    const { tries, wasLast } = afterError(film.tries, signal);
+    em.assign(film, { tries, ...(wasLast ? { state: 'failed' } : {}) });
+    return wasLast;
   });
 
 /** Killed at any instant it leaves at most a file that is written over; run again it makes the film anew. */
