@@ -25,11 +25,8 @@ export interface FontFile {
 
 const FOLDER = 'node_modules/@fontsource/source-sans-3/files';
 
-let read: Promise<readonly FontFile[]> | undefined;
-
-/** Every font file that a document may need; read once. */
-export const fontFiles = (): Promise<readonly FontFile[]> => {
-  read ??= Promise.all(
+const readAll = (): Promise<readonly FontFile[]> =>
+  Promise.all(
     SCRIPTS.flatMap((script) =>
       (Object.keys(WEIGHTS) as Weight[]).map(async (weight) => ({
         script,
@@ -40,5 +37,14 @@ export const fontFiles = (): Promise<readonly FontFile[]> => {
       })),
     ),
   );
+
+let read: Promise<readonly FontFile[]> | undefined;
+
+/** Every font file that a document may need; read once, and again after a failure. */
+export const fontFiles = (): Promise<readonly FontFile[]> => {
+  read ??= readAll().catch((error: unknown) => {
+    read = undefined;
+    throw error;
+  });
   return read;
 };
