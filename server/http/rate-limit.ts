@@ -67,6 +67,11 @@ export const linkLetterLimits = (): RequestHandler[] => [
   limit(10, 60, emailOf, false),
 ];
 
+/** Files that carry data away, in an hour for one person: enough for a day of tests, too few to empty a practice. */
+export const exportLimits = (files: number): RequestHandler[] => [
+  limit(files, 60, (_req, res) => staffOf(res).user.id, false),
+];
+
 /** Links that open nothing: 50 in a quarter of an hour from one place; a token cannot be guessed anyway. */
 export const mailLinkLimits = (): RequestHandler[] => [limit(50, 15, addressOf)];
 

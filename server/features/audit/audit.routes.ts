@@ -1,4 +1,5 @@
 import { routes } from '#shared/contracts/routes.ts';
+import { exportLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
 import { exportTrail, namesInTrail, readTrail } from './audit-trail.service.ts';
 
@@ -7,8 +8,12 @@ export const auditFeature: Feature = ({ serve }) => {
 
   serve(routes.auditNames, ({ work }) => work((unit) => namesInTrail(unit)));
 
-  serve(routes.auditFile, async ({ query, work, res }) => {
-    const text = await work((unit) => exportTrail(unit, query));
-    res.attachment('audit-trail.csv').type('text/csv').send(text);
-  });
+  serve(
+    routes.auditFile,
+    async ({ query, work, res }) => {
+      const text = await work((unit) => exportTrail(unit, query));
+      res.attachment('audit-trail.csv').type('text/csv').send(text);
+    },
+    ...exportLimits(30),
+  );
 };

@@ -1,4 +1,5 @@
 import { routes } from '#shared/contracts/routes.ts';
+import { exportLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
 import { exportOfAthlete } from './export/export-athlete.ts';
 import { sendExport } from './export/send-export.ts';
@@ -13,8 +14,12 @@ export const retentionFeature: Feature = ({ serve, ground }) => {
   serve(routes.eraseAthlete, ({ params, body, work }) =>
     work((unit) => eraseAsked(unit, params.id, body.name)),
   );
-  serve(routes.exportAthlete, async ({ params, work, res }) => {
-    const held = await work((unit) => exportOfAthlete(unit, params.id, ground.config));
-    await sendExport(res, ground.storage, held);
-  });
+  serve(
+    routes.exportAthlete,
+    async ({ params, work, res }) => {
+      const held = await work((unit) => exportOfAthlete(unit, params.id, ground.config));
+      await sendExport(res, ground.storage, held);
+    },
+    ...exportLimits(60),
+  );
 };
