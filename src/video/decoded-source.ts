@@ -1,12 +1,11 @@
 import type { FrameIndex } from '#shared/timing/units.ts';
 import type { CopyBytes } from './copy-bytes.ts';
-import { chooseMode, type DecodeMode } from './decoder-config.ts';
+import { chooseConfig } from './decoder-config.ts';
 import { type DemuxedCopy, demuxCopy } from './demux-copy.ts';
 import { abortReason, VideoError } from './errors.ts';
 import { FarthestCache } from './farthest-cache.ts';
 import { FrameDecoder } from './frame-decoder.ts';
 import { checkIndex } from './frame-times.ts';
-import { longestGroup } from './keyframes.ts';
 import { measurePaintMethod } from './paint-method.ts';
 import { type PaintMethod, PixelPicture } from './pixel-picture.ts';
 import { nextToPrefetch, windowWithin } from './prefetch.ts';
@@ -58,7 +57,7 @@ export class DecodedSource implements FrameSource {
     clip: ClipSource,
     bytes: CopyBytes,
     copy: DemuxedCopy,
-    mode: DecodeMode,
+    config: VideoDecoderConfig,
     cacheBytes: number,
   ) {
     this.frameCount = clip.frameTable.length;
@@ -68,7 +67,7 @@ export class DecodedSource implements FrameSource {
     this.#bytes = bytes;
     this.#copy = copy;
     this.#cache = new FarthestCache(cacheBytes);
-    this.#decoder = new FrameDecoder(copy, mode, (index, frame) => this.#keep(index, frame));
+    this.#decoder = new FrameDecoder(copy, config, (index, frame) => this.#keep(index, frame));
   }
 
   /**
@@ -81,8 +80,8 @@ export class DecodedSource implements FrameSource {
     cacheBytes: number,
   ): Promise<DecodedSource> {
     const copy = await demuxCopy(bytes, clip.frameTable);
-    const mode = await chooseMode(copy.config, longestGroup(copy.keys, copy.frameCount));
-    const source = new DecodedSource(clip, bytes, copy, mode, cacheBytes);
+    const config = await chooseConfig(copy.config);
+    const source = new DecodedSource(clip, bytes, copy, config, cacheBytes);
     const first = await source.frame(0 as FrameIndex, { intent: 'scrub' });
     await measurePaintMethod(first, (method) => (source.#method = method));
     void bytes.fill();

@@ -1,8 +1,7 @@
 import type { FrameIndex } from '#shared/timing/units.ts';
-import type { DecodeMode } from './decoder-config.ts';
 import type { DemuxedCopy } from './demux-copy.ts';
 import { VideoError } from './errors.ts';
-import { endOfGroup, planDecode } from './keyframes.ts';
+import { planDecode } from './keyframes.ts';
 
 /** A frame, or a flush, that takes longer means a decoder that hangs: it is made anew. */
 const WATCHDOG_MS = 1500;
@@ -21,7 +20,7 @@ interface Wait<T> {
 /** Makes of a frame what is needed, and owns it from then on. */
 export type KeepFrame<T> = (index: FrameIndex, frame: VideoFrame) => T;
 
-/** `group`: its neighbours will be wanted too, so they are kept, and decoded where that is cheap. */
+/** `group`: its neighbours will be wanted too, so those that are decoded on the way are kept. */
 export type KeepWhich = 'wanted' | 'group';
 
 /**
@@ -31,7 +30,7 @@ export type KeepWhich = 'wanted' | 'group';
  */
 export class FrameDecoder<T> {
   readonly #copy: DemuxedCopy;
-  readonly #mode: DecodeMode;
+  readonly #config: VideoDecoderConfig;
   readonly #keep: KeepFrame<T>;
   #decoder: VideoDecoder | null = null;
   /** The last packet handed over without a gap; null: the next one must be a key frame. */
@@ -43,9 +42,9 @@ export class FrameDecoder<T> {
   #remakes = 0;
   #closed = false;
 
-  constructor(copy: DemuxedCopy, mode: DecodeMode, keep: KeepFrame<T>) {
+  constructor(copy: DemuxedCopy, config: VideoDecoderConfig, keep: KeepFrame<T>) {
     this.#copy = copy;
-    this.#mode = mode;
+    this.#config = config;
     this.#keep = keep;
   }
 
@@ -92,11 +91,8 @@ export class FrameDecoder<T> {
   }
 
   async #load(index: FrameIndex): Promise<EncodedVideoChunk[]> {
-    const { keys, frameCount } = this.#copy;
-    const { from, to } = planDecode(keys, index, this.#fed);
-    const whole = this.#mode.flushEach && this.#which === 'group';
-    const last = whole ? endOfGroup(keys, index, frameCount) : to;
-    const places = Array.from({ length: last - from + 1 }, (_, k) => (from + k) as FrameIndex);
+    const { from, to } = planDecode(this.#copy.keys, index, this.#fed);
+    const places = Array.from({ length: to - from + 1 }, (_, k) => (from + k) as FrameIndex);
     const chunks = await Promise.all(places.map((place) => this.#copy.chunk(place)));
     if (this.#closed) throw new VideoError('closed');
     return chunks;
@@ -113,7 +109,7 @@ export class FrameDecoder<T> {
     try {
       for (const chunk of chunks) decoder.decode(chunk);
       this.#fed = index;
-      if (this.#mode.flushEach || this.#flushesNeeded >= FLUSHES_TO_LEARN) this.#flush(decoder);
+      if (this.#flushesNeeded >= FLUSHES_TO_LEARN) this.#flush(decoder);
       return await arrival;
     } finally {
       clearTimeout(watchdog);
@@ -157,7 +153,7 @@ export class FrameDecoder<T> {
         if (this.#decoder === decoder) this.#wait?.failed(error);
       },
     });
-    decoder.configure(this.#mode.config);
+    decoder.configure(this.#config);
     return decoder;
   }
 

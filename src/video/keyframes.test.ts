@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { FrameIndex } from '#shared/timing/units.ts';
-import { endOfGroup, keyAtOrBefore, longestGroup, planDecode } from './keyframes.ts';
+import { keyAtOrBefore, planDecode } from './keyframes.ts';
 
 // the same cases in every run
 fc.configureGlobal({ seed: 20260718 });
@@ -35,19 +35,6 @@ describe('keyAtOrBefore', () => {
         expect(keyAtOrBefore(list, frame(n))).toBe(list.findLast((key) => key <= n));
       }),
     );
-  });
-});
-
-describe('groups of pictures', () => {
-  it('end before the next key frame, the last one with the clip', () => {
-    const ends = [0, 4, 5, 11, 12, 14].map((n) => endOfGroup(keys, frame(n), 15));
-    expect(ends).toEqual([4, 4, 9, 11, 14, 14]);
-  });
-
-  it('have a longest', () => {
-    expect(longestGroup(keys, 15)).toBe(5);
-    expect(longestGroup(keys, 40)).toBe(28);
-    expect(longestGroup([0, 1, 2].map(frame), 3)).toBe(1);
   });
 });
 

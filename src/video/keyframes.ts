@@ -21,20 +21,6 @@ export const keyAtOrBefore = (keys: readonly FrameIndex[], index: FrameIndex): F
   return key;
 };
 
-/** The last frame before the next key frame. */
-export const endOfGroup = (
-  keys: readonly FrameIndex[],
-  index: FrameIndex,
-  frameCount: number,
-): FrameIndex => {
-  const at = keys.indexOf(keyAtOrBefore(keys, index));
-  return ((keys[at + 1] ?? frameCount) - 1) as FrameIndex;
-};
-
-/** Frames in the longest group from one key frame to the next. */
-export const longestGroup = (keys: readonly FrameIndex[], frameCount: number): number =>
-  keys.reduce((longest, key, at) => Math.max(longest, (keys[at + 1] ?? frameCount) - key), 0);
-
 /**
  * The shortest run of packets that brings `want` out of the decoder. `fed` is the last packet it
  * was given without a gap since, null where its next packet must be a key frame.

@@ -1,10 +1,9 @@
 import type { FrameIndex } from '#shared/timing/units.ts';
 import { CopyBytes } from '#src/video/copy-bytes.ts';
-import { chooseMode } from '#src/video/decoder-config.ts';
+import { chooseConfig } from '#src/video/decoder-config.ts';
 import { type DemuxedCopy, demuxCopy } from '#src/video/demux-copy.ts';
 import { FarthestCache } from '#src/video/farthest-cache.ts';
 import { FrameDecoder } from '#src/video/frame-decoder.ts';
-import { longestGroup } from '#src/video/keyframes.ts';
 import type { Plane } from '../core/plane.ts';
 import { copyLuma } from './copy-luma.ts';
 import type { SentClip } from './messages.ts';
@@ -46,12 +45,12 @@ export class DecodedPictures implements PictureSource {
     const bytes = new CopyBytes(url);
     try {
       const copy = await demuxCopy(bytes, frameTable);
-      const mode = await chooseMode(copy.config, longestGroup(copy.keys, copy.frameCount));
+      const config = await chooseConfig(copy.config);
       return new DecodedPictures(
         bytes,
         copy,
         (pictures) =>
-          new FrameDecoder<Held>(copy, mode, (index, frame) => pictures.#keep(index, frame)),
+          new FrameDecoder<Held>(copy, config, (index, frame) => pictures.#keep(index, frame)),
       );
     } catch (error) {
       bytes.close();
