@@ -19,6 +19,7 @@ import {
   MissingFile,
   type Storage,
   type StoredFile,
+  type UseLocalFile,
 } from './storage.ts';
 import { TempDirs } from './temp-dirs.ts';
 
@@ -68,6 +69,11 @@ export class BucketStorage implements Storage {
   }
 
   async putFile(key: string, localPath: string, contentType: string): Promise<void> {
+    await this.#put(key, localPath, contentType);
+    await rm(localPath, { force: true });
+  }
+
+  async #put(key: string, localPath: string, contentType: string): Promise<void> {
     const { size } = await stat(localPath);
     await this.#client.send(
       new PutObjectCommand({
@@ -77,7 +83,6 @@ export class BucketStorage implements Storage {
         ContentType: contentType,
       }),
     );
-    await rm(localPath, { force: true });
   }
 
   /** By way of a local file: a stream's length, which the store asks for first, is not known. */
@@ -140,12 +145,18 @@ export class BucketStorage implements Storage {
     }
   }
 
-  async withLocalFile<T>(key: string, use: (path: string) => Promise<T>): Promise<T> {
+  async withLocalFile<T>(key: string, use: UseLocalFile<T>): Promise<T> {
     return this.#temp.with(async (folder) => {
       const path = join(folder, key.split('/').at(-1) ?? 'file');
       await pipeline(await this.read(key), createWriteStream(path, { mode: 0o600 }));
-      return use(path);
+      return use(path, () => this.#replace(key, path));
     });
+  }
+
+  /** Another content under the same key and type; the local file stays. */
+  async #replace(key: string, localPath: string): Promise<void> {
+    const { ContentType } = await this.#client.send(new HeadObjectCommand(this.#at(key)));
+    await this.#put(key, localPath, ContentType ?? 'application/octet-stream');
   }
 
   withTempDir<T>(use: (path: string) => Promise<T>): Promise<T> {

@@ -10,6 +10,7 @@ import {
   MissingFile,
   type Storage,
   type StoredFile,
+  type UseLocalFile,
 } from './storage.ts';
 import { TempDirs } from './temp-dirs.ts';
 
@@ -98,9 +99,9 @@ export class LocalStorage implements Storage {
     await rm(this.#path(prefix), { recursive: true, force: true });
   }
 
-  async withLocalFile<T>(key: string, use: (path: string) => Promise<T>): Promise<T> {
+  async withLocalFile<T>(key: string, use: UseLocalFile<T>): Promise<T> {
     await this.stat(key);
-    return use(this.#path(key));
+    return use(this.#path(key), () => Promise.resolve());
   }
 
   withTempDir<T>(use: (path: string) => Promise<T>): Promise<T> {

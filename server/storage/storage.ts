@@ -16,6 +16,8 @@ export class MissingFile extends Error {
   override readonly name = 'MissingFile';
 }
 
+export type UseLocalFile<T> = (path: string, putBack: () => Promise<void>) => Promise<T>;
+
 /**
  * Where files lie, by key: `PRACTICE/clips/CLIP/bench.mp4`. A file appears under its key whole or not at all.
  * Full disks reject with the system's ENOSPC, which the problem handler knows.
@@ -36,9 +38,10 @@ export interface Storage {
   /**
    * Hands over a path under which the file can be read, for programs that seek: the file itself where it is
    * local, a temporary copy otherwise, removed after `use`.
+   * @param use what it changes at the path is under the key once `putBack` has ended
    * @throws MissingFile
    */
-  withLocalFile<T>(key: string, use: (path: string) => Promise<T>): Promise<T>;
+  withLocalFile<T>(key: string, use: UseLocalFile<T>): Promise<T>;
   /** An empty folder on the disk where finished files go, so that moving them in copies nothing; removed after. */
   withTempDir<T>(use: (path: string) => Promise<T>): Promise<T>;
   /** A folder that stays, for uploads that take days; on the same disk. */

@@ -8,7 +8,7 @@ import {
   utimesSync,
   writeFileSync,
 } from 'node:fs';
-import { readFile } from 'node:fs/promises';
+import { open as openFile, readFile } from 'node:fs/promises';
 import { hostname, tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Readable } from 'node:stream';
@@ -108,6 +108,19 @@ describe.each(kinds)('storage in %s', (_kind, open) => {
   it('lends a file to programs that seek', async () => {
     const bytes = await storage.withLocalFile('p/clips/2/original', (path) => readFile(path));
     expect(CONTENT.equals(bytes)).toBe(true);
+  });
+
+  it('keeps what a program changed in a file it was lent, once that is put back', async () => {
+    await storage.putStream('p/clips/4/original', Readable.from([CONTENT]), 'video/mp4');
+    const changed = await storage.withLocalFile('p/clips/4/original', async (path, putBack) => {
+      const handle = await openFile(path, 'r+');
+      await handle.write('gone', 1000);
+      await handle.close();
+      await putBack();
+      return readFile(path);
+    });
+    expect(changed.subarray(1000, 1004).toString()).toBe('gone');
+    expect(changed.equals(await buffer(await storage.read('p/clips/4/original')))).toBe(true);
   });
 
   it('deletes one, and all below a prefix, and not its neighbours', async () => {

@@ -62,8 +62,8 @@ const prepare = async (
   const { storage } = ground;
   const began = performance.now();
   await storage.withTempDir(async (folder) => {
-    const made = await storage.withLocalFile(original, async (path) => {
-      await scrubLocation(path);
+    const made = await storage.withLocalFile(original, async (path, putBack) => {
+      if ((await scrubLocation(path)) > 0) await putBack();
       return prepareClip({
         ...options,
         original: path,
