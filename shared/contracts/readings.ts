@@ -131,6 +131,8 @@ export const sidePage = z
     newerMarkError: markErrorShape.nullable(),
     /** The same of the protocol: the version that would now be taken, where it reads otherwise. */
     newerProtocol: protocolRef.nullable(),
+    /** The same of the engine. */
+    newerEngine: z.int().nullable(),
     history: z.array(readingSummary),
     /** The other side of this visit, once it too has a call; null where there is nothing. */
     otherSide: z.object({ side, reading: reading.nullable(), calls: z.array(call) }).nullable(),

@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { expect } from 'vitest';
 import { makeClip } from '#server/features/clips/clip.factory.ts';
 import { makeVisit } from '#server/features/visits/visit.factory.ts';
@@ -42,4 +43,25 @@ export const markedTrial = async (
   }
   const side = `/api/visits/${visit.id}/sides/${trial.supportSide}`;
   return { visit, clip, side };
+};
+
+/** Moves the trial's first mark by 2 px, as the coach would. */
+export const moveFirstMark = async (
+  coach: Awaited<ReturnType<Api['as']>>,
+  { id: clipId }: { readonly id: string },
+  golden: GoldenClip,
+): Promise<void> => {
+  const [command] = golden.reps[0]?.commands ?? [];
+  if (command?.set.to !== 'point') throw new Error('The trial begins with a point.');
+  const moved = {
+    ...command,
+    id: randomUUID(),
+    baseRevision: 1,
+    set: { ...command.set, u: command.set.u + 2 },
+  };
+  const { items } = (await coach.get(`/api/clips/${clipId}/reps`).expect(200)).body;
+  await coach
+    .post(`/api/reps/${items[0].id}/marks`)
+    .send({ commands: [moved] })
+    .expect(200);
 };

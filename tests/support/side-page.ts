@@ -103,6 +103,7 @@ export const aSidePage = (reading: Reading | null, change: Partial<SidePage> = {
     reading,
     newerMarkError: null,
     newerProtocol: null,
+    newerEngine: null,
     history: reading
       ? [
           {

@@ -2,6 +2,7 @@ import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Side } from '#shared/contracts/primitives.ts';
 import { ASSUMED_MARK_ERROR, type MarkError } from '#shared/measures/inputs.ts';
 import { sameRules } from '#shared/protocol/protocol.ts';
+import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
 import type { MarkRow } from '../marks/mark-store.ts';
 import { finishedMarkings, ownErrorOf } from '../second-markings/finished-markings.ts';
 import { currentProtocol } from '../protocol/current-protocol.ts';
@@ -15,7 +16,7 @@ export interface InputsOfSide {
   readonly newer: { readonly [K in keyof Grounds]: Grounds[K] | null };
 }
 
-const NOTHING_NEWER: InputsOfSide['newer'] = { markError: null, protocol: null };
+const NOTHING_NEWER: InputsOfSide['newer'] = { markError: null, protocol: null, engine: null };
 
 /** Who has placed marks by hand. */
 export const handsOn = (marks: readonly MarkRow[]): string[] => [
@@ -45,8 +46,9 @@ const same = (a: MarkError, b: MarkError): boolean =>
   a.anatomicalPx === b.anatomicalPx && a.doublyMarkedFrames === b.doublyMarkedFrames;
 
 /**
- * A stored reading keeps the marking error and the protocol that it was made with for as long as nothing else that it
- * rests on has changed; a new one takes the error of the hands that placed the marks and the protocol as it stands.
+ * A stored reading keeps the marking error, the protocol and the engine that it was made with for as long as nothing
+ * else that it rests on has changed; a new one takes the error of the hands that placed the marks, the protocol as it
+ * stands and the current engine.
  * @param setting with `reading` and its protocol loaded, if it has one
  * @param anew take the newer ones all the same
  * @returns null where no rep of the side carries a mark
@@ -63,6 +65,7 @@ export const inputsOfSide = async (
   const now: Grounds = {
     markError: await errorOfHands(em, hands),
     protocol: await currentProtocol(em),
+    engine: CURRENT_ENGINE,
   };
   const fresh = sideInputs(reps, side, setting.assumption, now);
   if (!fresh) return null;
@@ -74,12 +77,14 @@ export const inputsOfSide = async (
       doublyMarkedFrames: reading.doublyMarkedFrames,
     },
     protocol: reading.protocol.unwrap(),
+    engine: reading.engine,
   };
   const kept = sideInputs(reps, side, setting.assumption, then);
   if (kept?.hash !== reading.inputHash) return { inputs: fresh, newer: NOTHING_NEWER };
   const newer = {
     markError: same(then.markError, now.markError) ? null : now.markError,
     protocol: sameRules(then.protocol.values, now.protocol.values) ? null : now.protocol,
+    engine: then.engine === now.engine ? null : now.engine,
   };
   return { inputs: kept, newer };
 };

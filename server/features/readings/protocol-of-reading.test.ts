@@ -1,10 +1,9 @@
-import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { degrees } from '#shared/geometry/units.ts';
 import { type Protocol, STANDARD_PROTOCOL } from '#shared/protocol/protocol.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
 import { goldenClip } from '#tests/support/golden.ts';
-import { markedTrial } from '#tests/support/marked-trial.ts';
+import { markedTrial, moveFirstMark } from '#tests/support/marked-trial.ts';
 
 type Agent = Awaited<ReturnType<Api['as']>>;
 
@@ -70,19 +69,7 @@ describe('a reading and the protocol', () => {
 
     // marks that come later are read by the version of their day
     await adopt(3, {});
-    const [command] = golden.reps[0]?.commands ?? [];
-    if (command?.set.to !== 'point') throw new Error('The trial begins with a point.');
-    const moved = {
-      ...command,
-      id: randomUUID(),
-      baseRevision: 1,
-      set: { ...command.set, u: command.set.u + 2 },
-    };
-    const reps = (await coach.get(`/api/clips/${clip.id}/reps`).expect(200)).body.items;
-    await coach
-      .post(`/api/reps/${reps[0].id}/marks`)
-      .send({ commands: [moved] })
-      .expect(200);
+    await moveFirstMark(coach, clip, golden);
     expect((await pageOf(side)).reading.protocol.version).toBe(4);
 
     const visits = (await coach.get(`/api/athletes/${visit.athlete.id}/visits`)).body;

@@ -1,6 +1,7 @@
 import { defineEntity, type InferEntity, p } from '@mikro-orm/core';
 import { side } from '#shared/contracts/primitives.ts';
 import { readingCode } from '#shared/contracts/readings.ts';
+import type { EngineVersion } from '#shared/reading/engine.ts';
 import type { ReadingInput, ReadingResult } from '#shared/reading/types.ts';
 import { madeAt, ownedRow, real } from '#server/db/columns.ts';
 import { User } from '../accounts/user.entity.ts';
@@ -18,7 +19,7 @@ export const Reading = defineEntity({
     ...ownedRow(),
     visit: p.manyToOne(Visit).ref(),
     side: p.enum(side.options),
-    engine: p.integer(),
+    engine: p.integer().$type<EngineVersion>(),
     /** SHA-256 of the canonical inputs, hex; the seed is its first 32 bits. */
     inputHash: p.text(),
     seed: p.bigint('number'),

@@ -42,7 +42,13 @@ const readingOfSide = async (
   const of = await inputsOfSide(em, setting, reps, side, options);
   if (!of) {
     setting.reading = null;
-    return { assumption, reading: null, newerMarkError: null, newerProtocol: null };
+    return {
+      assumption,
+      reading: null,
+      newerMarkError: null,
+      newerProtocol: null,
+      newerEngine: null,
+    };
   }
   const reading = await currentReading(em, setting, of.inputs);
   setting.figuresShownAt ??= new Date();
@@ -51,6 +57,7 @@ const readingOfSide = async (
     reading: presentReading(reading, of.inputs.reps),
     newerMarkError: of.newer.markError && presentMarkError(of.newer.markError),
     newerProtocol: of.newer.protocol && presentProtocolRef(of.newer.protocol),
+    newerEngine: of.newer.engine,
   };
 };
 
@@ -65,13 +72,7 @@ const pageOf = async (
   const callsOn = (which: Side) => calls.filter((call) => call.side === which).map(presentCall);
   if (callsOn(side).length === 0) throw new Problem('call-first');
   const reps = await markedReps(em, visit.id, athlete);
-  const { reading, assumption, newerMarkError, newerProtocol } = await readingOfSide(
-    unit,
-    visit.id,
-    side,
-    reps,
-    options,
-  );
+  const { assumption, ...read } = await readingOfSide(unit, visit.id, side, reps, options);
   const other = otherSide(side);
   const otherCalls = callsOn(other);
   const otherReading =
@@ -88,13 +89,11 @@ const pageOf = async (
     athlete: { id: athlete.id, name: `${athlete.givenName} ${athlete.familyName}` },
     side,
     calls: callsOn(side),
-    reading,
-    newerMarkError,
-    newerProtocol,
+    ...read,
     history: history.map(presentSummary),
     otherSide:
       otherCalls.length === 0 ? null : { side: other, reading: otherReading, calls: otherCalls },
-    compared: compareSides(reading, otherReading),
+    compared: compareSides(read.reading, otherReading),
     agreement: agreement.of === 0 ? null : { coach: presentPerson(coach), ...agreement },
     assumption,
   };

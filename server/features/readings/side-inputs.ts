@@ -2,7 +2,7 @@ import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Side } from '#shared/contracts/primitives.ts';
 import type { MarkError } from '#shared/measures/inputs.ts';
 import { canonicalInputs } from '#shared/reading/canonical-inputs.ts';
-import { CURRENT_ENGINE } from '#shared/reading/engine.ts';
+import type { EngineVersion } from '#shared/reading/engine.ts';
 import { sha256Hex } from '#shared/reading/sha256.ts';
 import type { ReadingInput } from '#shared/reading/types.ts';
 import { rulesOf } from '#shared/protocol/protocol.ts';
@@ -16,6 +16,7 @@ import { type NumberedRep, storedReps } from '../reps/stored-reps.ts';
 export interface Grounds {
   readonly markError: MarkError;
   readonly protocol: ProtocolVersion;
+  readonly engine: EngineVersion;
 }
 
 /** What a side's reading is derived from, with the rows that it came from. */
@@ -56,13 +57,13 @@ export const sideInputs = (
   all: readonly NumberedRep[],
   side: Side,
   thighTurnsLittle: boolean,
-  { markError, protocol }: Grounds,
+  { markError, protocol, engine }: Grounds,
 ): SideInputs | null => {
   const reps = all.filter(({ rep }) => rep.supportSide === side);
   const markedBy = latestHand(reps);
   if (markedBy === null) return null;
   const input: ReadingInput = {
-    engine: CURRENT_ENGINE,
+    engine,
     supportSide: side,
     set: null,
     thighTurnsLittle,

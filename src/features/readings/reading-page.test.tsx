@@ -233,6 +233,22 @@ describe('a measured reading', () => {
     expect(api.calls(routes.renewReading)).toHaveLength(1);
   });
 
+  it('is read again by another engine only when asked, and names all that is new', async () => {
+    const reading = aReading(resultOf('g02_early_mid_3rep'));
+    const api = readingApi(
+      aSidePage(reading, { newerEngine: 9, newerProtocol: { ...reading.protocol, version: 7 } }),
+    );
+    api.on(routes.renewReading, () => aSidePage(reading));
+    const { user } = renderAt(address);
+    const section = within(await region('Protocol'));
+    expect(section.getByText(/New readings are made by engine 9/)).toBeVisible();
+    await user.click(
+      await section.findByRole('button', { name: 'Read again with protocol 7 and engine 9' }),
+    );
+    await waitFor(() => expect(section.queryByText(/engine 9/)).toBeNull());
+    expect(api.calls(routes.renewReading)).toHaveLength(1);
+  });
+
   it('offers the assumption with a belt pointer alone, and stores it', async () => {
     const result = { ...resultOf('g02_early_mid_3rep'), set: 'belt' as const };
     const api = readingApi(aSidePage(aReading(result)));

@@ -8,10 +8,10 @@ import { Section } from '#src/ui/page.tsx';
 import { paths } from '#src/ui/paths.ts';
 import { ReadAgain } from './read-again.tsx';
 
-/** The version of the practice's protocol that this reading was made with, and a newer one that reads otherwise. */
+/** The practice's protocol and the engine that this reading was made with, and newer ones that read otherwise. */
 export function ProtocolSection({ page, reading }: { page: SidePage; reading: Reading }) {
   const { practice } = useMe();
-  const { newerProtocol: newer } = page;
+  const { newerProtocol, newerEngine } = page;
   const { protocol, result } = reading;
   const { early, flat } = result.rules;
   return (
@@ -26,17 +26,21 @@ export function ProtocolSection({ page, reading }: { page: SidePage; reading: Re
       </p>
       <p>
         The turn from {gateRange(gatesOf(result.rules))} of lift; {outOfHundred(early)} in 100 for
-        turning out early, {outOfHundred(flat)} for holding still.
+        turning out early, {outOfHundred(flat)} for holding still. Read by engine {result.engine}.
       </p>
-      {newer && (
-        <>
-          <p className="mt-2">
-            Protocol {newer.version} holds since {dayOf(newer.at)} and reads otherwise. This reading
-            stays as it was made until you ask.
-          </p>
-          {!page.newerMarkError && <ReadAgain page={page} />}
-        </>
+      {newerProtocol && (
+        <p className="mt-2">
+          Protocol {newerProtocol.version} holds since {dayOf(newerProtocol.at)} and reads
+          otherwise. This reading stays as it was made until you ask.
+        </p>
       )}
+      {newerEngine !== null && (
+        <p className="mt-2">
+          New readings are made by engine {newerEngine}. This reading stays as it was made until you
+          ask.
+        </p>
+      )}
+      {(newerProtocol ?? newerEngine) !== null && !page.newerMarkError && <ReadAgain page={page} />}
     </Section>
   );
 }

@@ -7,16 +7,18 @@ import { sideReadingOptions, sidesKey } from '#src/api/readings.queries.ts';
 import { useMay } from '#src/api/use-may.ts';
 import { Button } from '#src/ui/button.tsx';
 import { ErrorState } from '#src/ui/states.tsx';
+import { listed } from '#src/ui/listed.ts';
 import { useStatus } from '#src/ui/status.tsx';
 
 /** Everything that a reading made now would take in the place of what this one was made with. */
-const newerWords = ({ newerMarkError, newerProtocol }: SidePage): string =>
-  [
-    newerMarkError && `${newerMarkError.px.toFixed(1)} px`,
-    newerProtocol && `protocol ${newerProtocol.version}`,
-  ]
-    .filter((each) => each !== null)
-    .join(' and ');
+const newerWords = ({ newerMarkError, newerProtocol, newerEngine }: SidePage): string =>
+  listed(
+    [
+      newerMarkError && `${newerMarkError.px.toFixed(1)} px`,
+      newerProtocol && `protocol ${newerProtocol.version}`,
+      newerEngine !== null && `engine ${newerEngine}`,
+    ].filter((each) => typeof each === 'string'),
+  );
 
 /** Makes the reading anew with what is known now; for whoever may. Both are kept. */
 export function ReadAgain({ page }: { page: SidePage }) {
