@@ -260,4 +260,29 @@ describe('the role of the queue', () => {
       );
     }
   });
+
+  it('leaves nothing at work where it cannot start', async () => {
+    const broken = handles<Payload>({
+      type,
+      lockKey: ({ clipId }) => clipId,
+      run: () => Promise.resolve(),
+      expireInMinutes: 1,
+      retryLimit: 2,
+      unfinished: {
+        sql: 'select nothing',
+        read: () => ({ practiceId: '', payload: { clipId: '' } }),
+      },
+    });
+    await expect(startWorker(api.ground, [broken], () => undefined)).rejects.toThrow('nothing');
+    const open = await asJobs(
+      async (client) =>
+        (
+          await client.query(
+            `select from pg_stat_activity where application_name = 'redshank worker'
+              and datname = current_database()`,
+          )
+        ).rowCount,
+    );
+    expect(open).toBe(0);
+  });
 });

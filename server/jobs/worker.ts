@@ -35,53 +35,27 @@ export const startWorker = async (
   boss.on('error', (error) => {
     log.error({ err: error }, 'the queue reports an error');
   });
-  await boss.start();
-  const locks = await Locks.open(jobsUrl, () => {
-    if (stopping.signal.aborted) return;
-    log.error('the connection that holds the locks was lost; jobs in work are stopped');
+  const looks: NodeJS.Timeout[] = [];
+  let locks: Locks | null = null;
+  let relay: Relay | null = null;
+  const stop = async (): Promise<void> => {
     stopping.abort();
-    onLost();
-  });
+    looks.forEach(clearInterval);
+    await relay?.stop();
+    await boss.stop({ graceful: true, wait: true, timeout: 10_000 });
+    await locks?.close();
+  };
 
-  for (const handler of handlers) {
-    await boss.createQueue(handler.queue, {
-      name: handler.queue,
-      policy: 'standard',
-      retryLimit: handler.retryLimit,
-      retryDelay: handler.retryDelaySeconds,
-      retryBackoff: true,
-      expireInMinutes: handler.expireInMinutes,
-    });
-    await queueOrphans(jobsUrl, boss, locks, handler);
-  }
-  const looks = handlers.flatMap((handler) => {
-    const minutes = handler.lookAgainMinutes;
-    if (minutes === undefined) return [];
-    const look = () => {
-      queueDue(jobsUrl, boss, locks, handler).catch((error: unknown) => {
-        if (!stopping.signal.aborted) log.error({ err: error }, 'what is due was not looked for');
-      });
-    };
-    return [setInterval(look, minutes * 60_000)];
-  });
-  const relay = await Relay.start(jobsUrl, boss, log, onLost);
-  for (const handler of handlers) {
-    await boss.work<Carried>(
-      handler.queue,
-      { batchSize: 1, pollingIntervalSeconds: 0.5 },
-      async ([job]) => {
-        if (!job) return;
-        await runOne(job, handler);
-      },
-    );
-  }
-
-  const runOne = async (job: PgBoss.Job<Carried>, handler: AnyJobHandler): Promise<void> => {
+  const runOne = async (
+    held: Locks,
+    job: PgBoss.Job<Carried>,
+    handler: AnyJobHandler,
+  ): Promise<void> => {
     const { practiceId, payload } = job.data;
     const started = Date.now();
     const names = { job: job.id, queue: handler.queue };
     try {
-      const outcome = await locks.hold(handler.lockKey(payload), () =>
+      const outcome = await held.hold(handler.lockKey(payload), () =>
         handler.run({ ground, practiceId, payload, signal: stopping.signal }),
       );
       if (outcome === 'busy') {
@@ -94,13 +68,55 @@ export const startWorker = async (
     }
   };
 
-  return {
-    stop: async () => {
+  const begin = async (): Promise<void> => {
+    await boss.start();
+    const held = await Locks.open(jobsUrl, () => {
+      if (stopping.signal.aborted) return;
+      log.error('the connection that holds the locks was lost; jobs in work are stopped');
       stopping.abort();
-      looks.forEach(clearInterval);
-      await relay.stop();
-      await boss.stop({ graceful: true, wait: true, timeout: 10_000 });
-      await locks.close();
-    },
+      onLost();
+    });
+    locks = held;
+    for (const handler of handlers) {
+      await boss.createQueue(handler.queue, {
+        name: handler.queue,
+        policy: 'standard',
+        retryLimit: handler.retryLimit,
+        retryDelay: handler.retryDelaySeconds,
+        retryBackoff: true,
+        expireInMinutes: handler.expireInMinutes,
+      });
+      await queueOrphans(jobsUrl, boss, held, handler);
+    }
+    for (const handler of handlers) {
+      const minutes = handler.lookAgainMinutes;
+      if (minutes === undefined) continue;
+      const look = () => {
+        queueDue(jobsUrl, boss, held, handler).catch((error: unknown) => {
+          if (!stopping.signal.aborted) log.error({ err: error }, 'what is due was not looked for');
+        });
+      };
+      looks.push(setInterval(look, minutes * 60_000));
+    }
+    relay = await Relay.start(jobsUrl, boss, log, onLost);
+    for (const handler of handlers) {
+      await boss.work<Carried>(
+        handler.queue,
+        { batchSize: 1, pollingIntervalSeconds: 0.5 },
+        async ([job]) => {
+          if (!job) return;
+          await runOne(held, job, handler);
+        },
+      );
+    }
   };
+
+  try {
+    await begin();
+  } catch (error) {
+    // the parts that have begun would go on by themselves, with a database that is closed behind them
+    await stop().catch(() => undefined);
+    throw error;
+  }
+  return { stop };
 };
