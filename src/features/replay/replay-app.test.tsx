@@ -84,7 +84,7 @@ describe('a replay', () => {
     await heading(/turns out early/);
     await waitFor(() => expect(play).toHaveBeenCalled());
     const video = screen.getByLabelText<HTMLVideoElement>('Your lift, standing on the right leg');
-    expect(video.playbackRate).toBe(0.25);
+    await waitFor(() => expect(video.playbackRate).toBe(0.25));
     expect(video).toHaveAttribute('src', `/api/r/${replayToken}/video`);
     await user.click(screen.getByRole('button', { name: /^90°/ }));
     // the middle of frame 50 at 50 frames a second
