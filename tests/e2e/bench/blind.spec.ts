@@ -54,13 +54,17 @@ test('a rep is marked again by hand without sight of the first marks, then both 
   const handles = page.locator('[data-landmark]:not([data-asked])');
   await expect(handles).toHaveCount(0);
 
+  let former = '';
   for (const n of [1, 2]) {
     const step = page.getByRole('button', { name: new RegExp(`^Frame ${n} of 2`) });
     await step.click();
     await expect(step).toHaveAttribute('aria-current', 'step');
     const canvas = page.locator('canvas[data-picture="copy"]');
+    // the step is current before its picture is there
+    await expect(canvas).not.toHaveAttribute('data-frame', former);
     await expect(canvas).toHaveAttribute('data-frame', /^(2|9)$/);
-    const frame = Number(await canvas.getAttribute('data-frame'));
+    former = (await canvas.getAttribute('data-frame')) ?? '';
+    const frame = Number(former);
     const here = FIRST.filter((mark) => mark.frame === frame);
     expect(here).toHaveLength(2);
     for (const { landmark, u, v } of here) {
