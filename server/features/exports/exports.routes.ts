@@ -1,5 +1,6 @@
-import type { Response } from 'express';
+import type { UserActor } from '#shared/access/actors.ts';
 import { routes } from '#shared/contracts/routes.ts';
+import type { Unit } from '#server/db/in-practice.ts';
 import { exportLimits } from '../../http/rate-limit.ts';
 import type { Feature } from '../../main/feature.ts';
 import {
@@ -11,48 +12,32 @@ import {
   framesOfVisit,
 } from './exports.service.ts';
 
-const save = (res: Response, type: string, { name, text }: ExportedFile): void => {
-  res.attachment(name).type(type).send(text);
-};
+type FileRoute = (typeof routes)[
+  'repFrames' | 'visitFrames' | 'repAnnotations' | 'visitAnnotations' | 'clipComments'];
 
 export const exportsFeature: Feature = ({ serve, ground: { config } }) => {
   const limits = exportLimits(200);
-  serve(
-    routes.repFrames,
-    async ({ params, work, res }) =>
-      save(res, 'text/csv', await work((unit) => framesOfRep(unit, params.id))),
-    ...limits,
+  const offer = (
+    route: FileRoute,
+    type: string,
+    make: (unit: Unit<UserActor>, id: string) => Promise<ExportedFile>,
+  ): void =>
+    serve(
+      route,
+      async ({ params, work, res }) => {
+        const { name, text } = await work((unit) => make(unit, params.id));
+        res.attachment(name).type(type).send(text);
+      },
+      ...limits,
+    );
+
+  offer(routes.repFrames, 'text/csv', framesOfRep);
+  offer(routes.visitFrames, 'text/csv', framesOfVisit);
+  offer(routes.repAnnotations, 'application/ld+json', (unit, id) =>
+    annotationsOfRep(unit, id, config),
   );
-  serve(
-    routes.visitFrames,
-    async ({ params, work, res }) =>
-      save(res, 'text/csv', await work((unit) => framesOfVisit(unit, params.id))),
-    ...limits,
+  offer(routes.visitAnnotations, 'application/ld+json', (unit, id) =>
+    annotationsOfVisit(unit, id, config),
   );
-  serve(
-    routes.repAnnotations,
-    async ({ params, work, res }) =>
-      save(
-        res,
-        'application/ld+json',
-        await work((unit) => annotationsOfRep(unit, params.id, config)),
-      ),
-    ...limits,
-  );
-  serve(
-    routes.visitAnnotations,
-    async ({ params, work, res }) =>
-      save(
-        res,
-        'application/ld+json',
-        await work((unit) => annotationsOfVisit(unit, params.id, config)),
-      ),
-    ...limits,
-  );
-  serve(
-    routes.clipComments,
-    async ({ params, work, res }) =>
-      save(res, 'text/vtt', await work((unit) => commentTrack(unit, params.id))),
-    ...limits,
-  );
+  offer(routes.clipComments, 'text/vtt', commentTrack);
 };
