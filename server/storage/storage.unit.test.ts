@@ -13,24 +13,15 @@ import { hostname, tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Readable } from 'node:stream';
 import { buffer } from 'node:stream/consumers';
-import S3rver from 's3rver';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { BucketStorage } from './bucket-storage.ts';
+import { startBucket } from '#tests/support/bucket.ts';
 import { LocalStorage } from './local-storage.ts';
 import { MissingFile, type Storage } from './storage.ts';
 
 const folder = mkdtempSync(join(tmpdir(), 'redshank-storage-'));
-const s3 = new S3rver({
-  port: 0,
-  address: '127.0.0.1',
-  silent: true,
-  directory: join(folder, 's3'),
-  configureBuckets: [{ name: 'clips', configs: [] }],
-});
-let endpoint: string;
+let s3: Awaited<ReturnType<typeof startBucket>>;
 beforeAll(async () => {
-  const { port } = await s3.run();
-  endpoint = `http://127.0.0.1:${port}`;
+  s3 = await startBucket(folder);
 });
 afterAll(async () => {
   await s3.close();
@@ -48,17 +39,7 @@ const localFile = (): string => {
 
 const kinds: [string, () => Promise<Storage>][] = [
   ['a folder', () => LocalStorage.open(join(folder, 'local'))],
-  [
-    'a bucket',
-    () =>
-      BucketStorage.open({
-        bucket: 'clips',
-        endpoint,
-        region: 'us-east-1',
-        localRoot: join(folder, 'bucket'),
-        credentials: { accessKeyId: 'S3RVER', secretAccessKey: 'S3RVER' },
-      }),
-  ],
+  ['a bucket', () => s3.open()],
 ];
 
 describe.each(kinds)('storage in %s', (_kind, open) => {
@@ -178,13 +159,7 @@ describe('what killed processes left behind', () => {
 
 describe('storage that is out of reach', () => {
   it('says so', async () => {
-    const nowhere = await BucketStorage.open({
-      bucket: 'other',
-      endpoint,
-      region: 'us-east-1',
-      localRoot: join(folder, 'nowhere'),
-      credentials: { accessKeyId: 'S3RVER', secretAccessKey: 'S3RVER' },
-    });
+    const nowhere = await s3.open('other');
     expect(await nowhere.healthy()).toBe(false);
   });
 });

@@ -3,10 +3,10 @@ import { mkdtemp, readFile, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { buffer } from 'node:stream/consumers';
-import S3rver from 's3rver';
 import { afterAll, beforeAll, expect, it } from 'vitest';
-import { BucketStorage } from '#server/storage/bucket-storage.ts';
+import type { BucketStorage } from '#server/storage/bucket-storage.ts';
 import { type Api, startApi } from '#tests/support/api.ts';
+import { startBucket } from '#tests/support/bucket.ts';
 import { clipFiles } from './clip-files.ts';
 import { prepareClipJob } from './jobs/prepare-clip.ts';
 
@@ -14,27 +14,14 @@ const PLACE = '+59.1234+018.5678/';
 
 let api: Api;
 let folder: string;
-let s3: S3rver;
+let s3: Awaited<ReturnType<typeof startBucket>>;
 let bucket: BucketStorage;
 
 beforeAll(async () => {
   api = await startApi();
   folder = await mkdtemp(join(tmpdir(), 'redshank-bucket-'));
-  s3 = new S3rver({
-    port: 0,
-    address: '127.0.0.1',
-    silent: true,
-    directory: join(folder, 's3'),
-    configureBuckets: [{ name: 'clips', configs: [] }],
-  });
-  const { port } = await s3.run();
-  bucket = await BucketStorage.open({
-    bucket: 'clips',
-    endpoint: `http://127.0.0.1:${port}`,
-    region: 'us-east-1',
-    localRoot: join(folder, 'bucket'),
-    credentials: { accessKeyId: 'S3RVER', secretAccessKey: 'S3RVER' },
-  });
+  s3 = await startBucket(folder);
+  bucket = await s3.open();
 });
 afterAll(async () => {
   await s3.close();
