@@ -1,9 +1,10 @@
 import { randomUUID } from 'node:crypto';
 import { setTimeout as pause } from 'node:timers/promises';
-import { Client } from 'pg';
+import type { Client } from 'pg';
 import { afterAll, afterEach, beforeAll, describe, expect, it, vi } from 'vitest';
 import * as z from 'zod';
 import { type Api, startApi } from '#tests/support/api.ts';
+import { withJobs } from '#tests/support/as-jobs.ts';
 import { product } from '../db/in-practice.ts';
 import { makeClip } from '../features/clips/clip.factory.ts';
 import { enqueue, handles, type JobContext, type JobType } from './job.ts';
@@ -50,15 +51,7 @@ const ask = (clipId: string, thenFail = false): Promise<string> =>
     return id;
   });
 
-const asJobs = async <T>(work: (client: Client) => Promise<T>): Promise<T> => {
-  const client = new Client({ connectionString: api.ground.config.database.jobs });
-  await client.connect();
-  try {
-    return await work(client);
-  } finally {
-    await client.end();
-  }
-};
+const asJobs = <T>(work: (client: Client) => Promise<T>): Promise<T> => withJobs(api, work);
 
 const eventually = (check: () => void | Promise<void>): Promise<void> =>
   vi.waitFor(check, { timeout: 25_000, interval: 50 });

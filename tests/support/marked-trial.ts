@@ -45,14 +45,15 @@ export const markedTrial = async (
   return { visit, clip, side };
 };
 
-/** Moves the trial's first mark by 2 px, as the coach would. */
+/** Moves the first mark of one of the trial's reps (from 0) by 2 px, as the coach would. */
 export const moveFirstMark = async (
   coach: Awaited<ReturnType<Api['as']>>,
   { id: clipId }: { readonly id: string },
   golden: GoldenClip,
+  rep = 0,
 ): Promise<void> => {
-  const [command] = golden.reps[0]?.commands ?? [];
-  if (command?.set.to !== 'point') throw new Error('The trial begins with a point.');
+  const [command] = golden.reps[rep]?.commands ?? [];
+  if (command?.set.to !== 'point') throw new Error('The rep begins with a point.');
   const moved = {
     ...command,
     id: randomUUID(),
@@ -61,7 +62,7 @@ export const moveFirstMark = async (
   };
   const { items } = (await coach.get(`/api/clips/${clipId}/reps`).expect(200)).body;
   await coach
-    .post(`/api/reps/${items[0].id}/marks`)
+    .post(`/api/reps/${items[rep].id}/marks`)
     .send({ commands: [moved] })
     .expect(200);
 };

@@ -1,6 +1,6 @@
-import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type Api, startApi } from '#tests/support/api.ts';
+import { moveFirstMark } from '#tests/support/marked-trial.ts';
 import {
   type Agent,
   askAgain,
@@ -55,18 +55,7 @@ describe('the marking error of a reading', () => {
       { px: 3, frames: 0 },
     ]);
     // a mark moved afterwards makes a new reading, which takes the own error by itself
-    const [command] = golden.reps[2]?.commands ?? [];
-    if (command?.set.to !== 'point') throw new Error('The trial begins with a point.');
-    const moved = {
-      ...command,
-      id: randomUUID(),
-      baseRevision: 1,
-      set: { ...command.set, u: command.set.u + 3 },
-    };
-    await coach
-      .post(`/api/reps/${reps[2]?.id}/marks`)
-      .send({ commands: [moved] })
-      .expect(200);
+    await moveFirstMark(coach, clip, golden, 2);
     const after = (await coach.get(`${side}/reading`).expect(200)).body;
     expect(after.reading.markError.frames).toBe(own.fromFrames);
     expect(after.history).toHaveLength(3);
